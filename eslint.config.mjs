@@ -1,0 +1,3 @@
+import withNuxt from './.nuxt/eslint.config.mjs'
+
+export default withNuxt()

@@ -1,0 +1,79 @@
+import { cpSync } from 'node:fs'
+import { join } from 'node:path'
+
+export default defineNuxtConfig({
+  modules: [
+    '@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', 'nuxt-security',
+    '@nuxt/eslint', '@nuxtjs/color-mode', '@nuxt/icon',
+  ],
+  // Our own code is imported by path, so that the import table can be checked; components stay registered.
+  imports: { scan: false },
+  devtools: { enabled: false },
+  app: {
+    head: {
+      htmlAttrs: { lang: 'en' },
+      titleTemplate: '%s · Collarbook',
+      title: 'Collarbook',
+      meta: [{ name: 'viewport', content: 'width=device-width, initial-scale=1, viewport-fit=cover' }],
+      link: [{ rel: 'icon', type: 'image/svg+xml', href: '/logo.svg' }],
+    },
+  },
+  css: [
+    '@fontsource/barlow/latin-400.css', '@fontsource/barlow/latin-600.css', '@fontsource/barlow/latin-700.css',
+    '@fontsource/roboto-mono/latin-500.css', '@fontsource/roboto-mono/latin-700.css',
+  ],
+  colorMode: { classSuffix: '' },
+  srcDir: '.',
+  // Without a shared/ folder, and with utils/ imported by path on both sides.
+  compatibilityDate: '2026-01-01',
+  nitro: {
+    esbuild: { options: { target: 'es2022' } },
+    hooks: {
+      // Nitro traces packages, not our migration files.
+      compiled(nitro) {
+        cpSync('drizzle/migrations', join(nitro.options.output.serverDir, 'drizzle/migrations'), { recursive: true })
+      },
+    },
+  },
+  vite: { optimizeDeps: { include: ['vue-qrcode-reader', 'qrcode'] } },
+  typescript: { strict: true, typeCheck: false },
+  telemetry: false,
+  eslint: { config: { stylistic: true } },
+  icon: {
+    mode: 'svg', provider: 'none', serverBundle: false, fallbackToApi: false,
+    clientBundle: { scan: true, sizeLimitKb: 64 },
+  },
+  security: {
+    removeLoggers: false,
+    corsHandler: false,
+    xssValidator: false,
+    // Bodies are counted and limited by server/middleware; requests are limited by account in the session routes.
+    requestSizeLimiter: false,
+    rateLimiter: false,
+    headers: {
+      contentSecurityPolicy: {
+        'default-src': ['\'self\''],
+        'base-uri': ['\'none\''],
+        'object-src': ['\'none\''],
+        'frame-ancestors': ['\'none\''],
+        'form-action': ['\'self\''],
+        'connect-src': ['\'self\''],
+        'font-src': ['\'self\''],
+        'img-src': ['\'self\'', 'data:', 'blob:'],
+        'manifest-src': ['\'self\''],
+        'worker-src': ['\'self\''],
+        'style-src': ['\'self\'', '\'unsafe-inline\''],
+        'script-src': ['\'self\'', '\'strict-dynamic\'', '\'nonce-{{nonce}}\'', '\'wasm-unsafe-eval\''],
+        'script-src-attr': ['\'none\''],
+        'upgrade-insecure-requests': false,
+      },
+      xFrameOptions: 'DENY',
+      referrerPolicy: 'same-origin',
+      crossOriginOpenerPolicy: 'same-origin',
+      permissionsPolicy: { 'camera': ['self'], 'microphone': [], 'geolocation': [], 'display-capture': [], 'fullscreen': ['self'] },
+      // HSTS is written by server/middleware when PUBLIC_URL is https.
+      strictTransportSecurity: false,
+    },
+  },
+  tailwindcss: { viewer: false, cssPath: '~/assets/css/tailwind.css' },
+})

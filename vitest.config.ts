@@ -1,0 +1,38 @@
+import { fileURLToPath } from 'node:url'
+import { defineVitestProject } from '@nuxt/test-utils/config'
+import { defineConfig } from 'vitest/config'
+
+const root = fileURLToPath(new URL('.', import.meta.url))
+const alias = { '~~': root, '~': root }
+
+/** A project that runs in plain Node on the files of one folder of tests/. */
+function nodeProject(name: string, more: Record<string, unknown> = {}) {
+  return {
+    resolve: { alias },
+    test: { name, include: [`tests/${name}/**/*.test.ts`], environment: 'node' as const, ...more },
+  }
+}
+
+// The built server is started once for these; each file brings its own database.
+const served = { testTimeout: 120_000, hookTimeout: 180_000, fileParallelism: false }
+
+export default defineConfig(async () => ({
+  test: {
+    projects: [
+      nodeProject('architecture'),
+      nodeProject('unit'),
+      nodeProject('reference'),
+      nodeProject('server', served),
+      nodeProject('e2e', served),
+      await defineVitestProject({
+        resolve: { alias },
+        test: {
+          name: 'component',
+          include: ['tests/component/**/*.test.ts'],
+          environment: 'nuxt',
+          environmentOptions: { nuxt: { domEnvironment: 'happy-dom' } },
+        },
+      }),
+    ],
+  },
+}))
