@@ -1,0 +1,83 @@
+import type { MassReading } from '../quantity/mass'
+import type { Month } from '../quantity/month'
+
+/** A rule that sets the most refrigerant a cylinder may hold. */
+export type FillRule
+  = | 'water-weight'
+    | 'liquid-77F'
+    | 'filling-density'
+    | 'hot-ceiling'
+    | 'liquid-130F'
+    | 'un-ratio'
+    | 'oily'
+    | 'hot-pressure'
+
+/** What is known of the refrigerant in a cylinder beside its name. */
+export type Condition = 'clean' | 'suspect' | 'burnt' | 'mixed' | 'unknown'
+
+/** What is stamped on the collar of a cylinder, as entered. */
+export type Stamp = {
+  serial: string | null
+  serialUnreadable?: boolean
+  maker?: string
+  /** Specification without its pressure, 'DOT-4BA'. */
+  spec: string
+  servicePressurePsig: number | null
+  tareWeight: MassReading | null
+  tareIncludesValve?: boolean
+  waterCapacity: MassReading | null
+  madeMonth: Month | null
+  flammableMarked: boolean
+  floatSwitch?: boolean
+  valve?: string
+}
+
+/** The firm's fill rule: its share and its ceiling in thousandths, and which further rules are in force. */
+export type FillPolicy = {
+  shareThousandths: number
+  ceilingThousandths: number
+  options: { liquid130F: boolean, unRatio: boolean }
+}
+
+/** The rule in force until the firm sets a stricter one; neither figure may be raised. */
+export const DEFAULT_FILL_POLICY: FillPolicy = {
+  shareThousandths: 800,
+  ceilingThousandths: 950,
+  options: { liquid130F: false, unRatio: false },
+}
+
+/**
+ * How a rule stands for this cylinder and refrigerant: it counts, it is shown beside the others, its figure lies above
+ * the ceiling, or its figure would leave the cylinder liquid-full at 131 F and is not shown.
+ */
+export type TermStanding = 'in-force' | 'compared' | 'above-margin' | 'unsafe'
+
+/** One rule's figure with the sum behind it. Units: net grams. Rounding: down. */
+export type FillTerm = {
+  rule: FillRule
+  limitGrams: number | null
+  because?: string
+  standing: TermStanding
+  working: string
+  source: string
+}
+
+/** What keeps a figure from being given. */
+export type MissingInput = 'tareWeight' | 'waterCapacity' | 'servicePressure' | 'refrigerant' | 'weight' | 'testDate'
+
+/** The most net weight a cylinder may hold, by the lowest of the rules in force. */
+export type FillLimit = {
+  governingRule: FillRule | null
+  exactLimitGrams: number | null
+  fillLimitGrams: number | null
+  terms: FillTerm[]
+  missing: MissingInput[]
+}
+
+/** Why a cylinder does not suit a refrigerant. */
+export type FitFinding = {
+  code: 'pressure-class' | 'spec-not-for-gas' | 'not-refillable' | 'not-marked-flammable' | 'toxic'
+  severity: 'stop' | 'caution'
+  text: string
+  source: string
+}

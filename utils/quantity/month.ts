@@ -1,0 +1,88 @@
+/** A calendar month as 'YYYY-MM', the way a test date is stamped. */
+export type Month = string
+
+const MONTH_TEXT = /^(\d{4})-(0[1-9]|1[0-2])$/
+const MONTH_NAMES = [
+  'January', 'February', 'March', 'April', 'May', 'June',
+  'July', 'August', 'September', 'October', 'November', 'December',
+] as const
+const MS_PER_DAY = 86_400_000
+
+/** Whether a text is a month. */
+export function isMonth(text: string): text is Month {
+  return MONTH_TEXT.test(text)
+}
+
+/** The month a number of months later (earlier where negative). Errors: RangeError where the text is no month. */
+export function addMonths(month: Month, months: number): Month {
+  return monthOfCount(monthCount(month) + months)
+}
+
+/** Below zero where the first month is the earlier, above where the later, zero where they are the same. */
+export function compareMonths(a: Month, b: Month): number {
+  return monthCount(a) - monthCount(b)
+}
+
+/** The month it is at an instant in a time zone. */
+export function monthOfInstant(ms: number, timeZone: string): Month {
+  const { year, month } = dateIn(dateFormat(timeZone), ms)
+  return monthOfCount(year * 12 + month - 1)
+}
+
+/**
+ * The last millisecond of a month in a time zone: up to it a test that falls due in that month may be done.
+ *
+ * Found by halving, so that a change of the clock at midnight cannot move it.
+ */
+export function lastInstantOfMonth(month: Month, timeZone: string): number {
+  const wanted = monthCount(month)
+  const format = dateFormat(timeZone)
+  const nextMonthInUtc = Date.UTC(Math.floor((wanted + 1) / 12), (wanted + 1) % 12)
+  let within = nextMonthInUtc - MS_PER_DAY
+  let after = nextMonthInUtc + MS_PER_DAY
+  while (after - within > 1) {
+    const middle = Math.floor((within + after) / 2)
+    const date = dateIn(format, middle)
+    if (date.year * 12 + date.month - 1 > wanted) after = middle
+    else within = middle
+  }
+  return within
+}
+
+/** Calendar days from today to the last day of a month in a time zone: 0 on that day, negative after it. */
+export function daysUntilEndOfMonth(month: Month, nowMs: number, timeZone: string): number {
+  const next = monthCount(month) + 1
+  const lastDay = Date.UTC(Math.floor(next / 12), next % 12, 0)
+  const today = dateIn(dateFormat(timeZone), nowMs)
+  return Math.round((lastDay - Date.UTC(today.year, today.month - 1, today.day)) / MS_PER_DAY)
+}
+
+/**
+ * A month as people write it.
+ *
+ * @example formatMonth('2027-03') // 'March 2027'
+ */
+export function formatMonth(month: Month): string {
+  const count = monthCount(month)
+  return `${MONTH_NAMES[count % 12]} ${Math.floor(count / 12)}`
+}
+
+function monthCount(month: Month): number {
+  const parts = MONTH_TEXT.exec(month)
+  if (!parts) throw new RangeError(`Not a month: ${month}`)
+  return Number(parts[1]) * 12 + Number(parts[2]) - 1
+}
+
+function monthOfCount(count: number): Month {
+  return `${String(Math.floor(count / 12)).padStart(4, '0')}-${String(count % 12 + 1).padStart(2, '0')}`
+}
+
+function dateFormat(timeZone: string): Intl.DateTimeFormat {
+  return new Intl.DateTimeFormat('en-US', { timeZone, calendar: 'gregory', year: 'numeric', month: 'numeric', day: 'numeric' })
+}
+
+function dateIn(format: Intl.DateTimeFormat, ms: number): { year: number, month: number, day: number } {
+  const parts = format.formatToParts(ms)
+  const part = (type: 'year' | 'month' | 'day') => Number(parts.find(p => p.type === type)?.value)
+  return { year: part('year'), month: part('month'), day: part('day') }
+}
