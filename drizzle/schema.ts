@@ -1,0 +1,281 @@
+import { sql } from 'drizzle-orm'
+import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+
+// Instants are UTC milliseconds, masses whole grams, flags 0 or 1, months 'YYYY-MM', ids UUIDv7 in lower case.
+
+/** The contractor itself: one row. */
+export const firm = sqliteTable('firm', {
+  id: text('id').primaryKey(),
+  name: text('name').notNull(),
+  telephone: text('telephone').notNull(),
+  timeZone: text('time_zone').notNull(),
+  units: text('units', { enum: ['lb', 'lb-oz', 'kg'] }).notNull(),
+  createdAt: integer('created_at').notNull(),
+})
+
+/** Rules of the firm from a date on; the row in force is the latest that has begun. */
+export const settings = sqliteTable('settings', {
+  id: text('id').primaryKey(),
+  kind: text('kind', { enum: ['fill-policy', 'retest'] }).notNull(),
+  fromAt: integer('from_at').notNull(),
+  value: text('value', { mode: 'json' }).notNull(),
+  reason: text('reason').notNull(),
+  setBy: text('set_by').notNull(),
+  setAt: integer('set_at').notNull(),
+}, table => [index('settings_kind_from').on(table.kind, table.fromAt)])
+
+export const people = sqliteTable('people', {
+  id: text('id').primaryKey(),
+  /** Lower case. */
+  email: text('email').notNull().unique(),
+  name: text('name').notNull(),
+  roles: text('roles', { mode: 'json' }).$type<string[]>().notNull(),
+  trainee: integer('trainee', { mode: 'boolean' }).notNull().default(false),
+  certification: text('certification'),
+  units: text('units', { enum: ['lb', 'lb-oz', 'kg'] }).notNull(),
+  /** null until the invitation is taken up. */
+  passwordHash: text('password_hash'),
+  active: integer('active', { mode: 'boolean' }).notNull().default(true),
+  createdAt: integer('created_at').notNull(),
+})
+
+/** Who is signed in where. The cookie holds a secret; only its hash is here. */
+export const sessions = sqliteTable('sessions', {
+  secretHash: text('secret_hash').primaryKey(),
+  personId: text('person_id').notNull().references(() => people.id),
+  createdAt: integer('created_at').notNull(),
+  lastSeenAt: integer('last_seen_at').notNull(),
+}, table => [index('sessions_person').on(table.personId)])
+
+/** One-time links: the first set-up, an invitation, a new password. Only the token's hash is here. */
+export const oneTimeLinks = sqliteTable('one_time_links', {
+  tokenHash: text('token_hash').primaryKey(),
+  purpose: text('purpose', { enum: ['set-up', 'invitation'] }).notNull(),
+  personId: text('person_id').references(() => people.id),
+  createdAt: integer('created_at').notNull(),
+  expiresAt: integer('expires_at').notNull(),
+  usedAt: integer('used_at'),
+}, table => [index('one_time_links_person').on(table.personId)])
+
+/** Outgoing mail: kept here, sent when a mail server is set. */
+export const mail = sqliteTable('mail', {
+  id: text('id').primaryKey(),
+  recipient: text('recipient').notNull(),
+  subject: text('subject').notNull(),
+  body: text('body').notNull(),
+  createdAt: integer('created_at').notNull(),
+  sentAt: integer('sent_at'),
+  error: text('error'),
+})
+
+/** Sign-ins, refusals and changes of people: who, when, what; never a password. Apart from the custody log. */
+export const securityLog = sqliteTable('security_log', {
+  id: text('id').primaryKey(),
+  at: integer('at').notNull(),
+  personId: text('person_id'),
+  what: text('what').notNull(),
+  subject: text('subject'),
+})
+
+export const firms = sqliteTable('firms', {
+  id: text('id').primaryKey(),
+  name: text('name').notNull(),
+  kind: text('kind', { enum: ['reclaimer', 'requalifier', 'supplier', 'customer', 'carrier'] }).notNull(),
+  telephone: text('telephone'),
+  email: text('email'),
+  address: text('address'),
+  /** A requalifier's identification number, as stamped. */
+  rin: text('rin'),
+  active: integer('active', { mode: 'boolean' }).notNull().default(true),
+  createdAt: integer('created_at').notNull(),
+})
+
+export const places = sqliteTable('places', {
+  id: text('id').primaryKey(),
+  name: text('name').notNull(),
+  kind: text('kind', { enum: ['shop', 'rack', 'van', 'site', 'firm'] }).notNull(),
+  parentId: text('parent_id'),
+  /** The firm whose place it is; each firm has one. */
+  firmId: text('firm_id').references(() => firms.id),
+  /** A van's technician. */
+  technicianId: text('technician_id').references(() => people.id),
+  active: integer('active', { mode: 'boolean' }).notNull().default(true),
+  createdAt: integer('created_at').notNull(),
+}, table => [uniqueIndex('places_firm').on(table.firmId)])
+
+export const scales = sqliteTable('scales', {
+  id: text('id').primaryKey(),
+  name: text('name').notNull(),
+  accuracyGrams: integer('accuracy_grams').notNull(),
+  /** Hundredths of a percent of the reading. */
+  accuracyBasisPoints: integer('accuracy_basis_points').notNull(),
+  /** Calendar day 'YYYY-MM-DD' of the last check, if known. */
+  lastCheckOn: text('last_check_on'),
+  active: integer('active', { mode: 'boolean' }).notNull().default(true),
+})
+
+/**
+ * The custody log. Append-only: triggers refuse UPDATE and DELETE, and an INSERT that would replace a row is ignored.
+ * Nothing references it with a cascade.
+ */
+export const custodyEvents = sqliteTable('custody_events', {
+  /** The order of recording, over all cylinders. */
+  seq: integer('seq').primaryKey({ autoIncrement: true }),
+  id: text('id').notNull().unique(),
+  cylinderId: text('cylinder_id').notNull(),
+  /** 1..n within the cylinder, by arrival. */
+  version: integer('version').notNull(),
+  deviceId: text('device_id').notNull(),
+  deviceSeq: integer('device_seq').notNull(),
+  kind: text('kind').notNull(),
+  /** As the author's clock had it. */
+  occurredAt: integer('occurred_at').notNull(),
+  occurredOffsetMinutes: integer('occurred_offset_minutes').notNull(),
+  clockSkewSeconds: integer('clock_skew_seconds').notNull(),
+  effectiveAt: integer('effective_at').notNull(),
+  recordedAt: integer('recorded_at').notNull(),
+  actorId: text('actor_id').notNull(),
+  postedBy: text('posted_by').notNull(),
+  supervisorId: text('supervisor_id'),
+  trainee: integer('trainee', { mode: 'boolean' }).notNull(),
+  placeId: text('place_id'),
+  /** Canonical JSON (RFC 8785) of the event as received. */
+  body: text('body').notNull(),
+  /** SHA-256 of body, hexadecimal. */
+  contentHash: text('content_hash').notNull(),
+  /** hash of the cylinder's version before this one; '' for the first. */
+  prevHash: text('prev_hash').notNull(),
+  hash: text('hash').notNull(),
+}, table => [uniqueIndex('custody_events_cylinder_version').on(table.cylinderId, table.version)])
+
+/** A cache of the fold: one row a cylinder. Made again from the log by `npm run rebuild`. */
+export const cylinders = sqliteTable('cylinders', {
+  id: text('id').primaryKey(),
+  version: integer('version').notNull(),
+  labelCode: text('label_code'),
+  serial: text('serial'),
+  spec: text('spec'),
+  placeId: text('place_id'),
+  holderId: text('holder_id'),
+  ownerId: text('owner_id'),
+  refrigerant: text('refrigerant'),
+  condition: text('condition').notNull(),
+  lifecycle: text('lifecycle').notNull(),
+  nothingInIt: integer('nothing_in_it', { mode: 'boolean' }).notNull(),
+  netGrams: integer('net_grams'),
+  fillLimitGrams: integer('fill_limit_grams'),
+  governingRule: text('governing_rule'),
+  roomGrams: integer('room_grams'),
+  stopWeightGrams: integer('stop_weight_grams'),
+  /** Not rounded: the screen rounds it down to the scale's division. */
+  exactStopWeight: text('exact_stop_weight'),
+  tareWeightGrams: integer('tare_weight_grams'),
+  waterCapacityGrams: integer('water_capacity_grams'),
+  /** null where no retest is required or none is known; retest_state says which. */
+  dueMonth: text('due_month'),
+  retestState: text('retest_state', { enum: ['dated', 'unknown', 'not-required'] }).notNull(),
+  lastEventAt: integer('last_event_at'),
+  lastEventKind: text('last_event_kind'),
+  /** Last event that saw the cylinder, for "not seen for n days". */
+  lastSeenAt: integer('last_seen_at'),
+  /** Codes of the findings that do not depend on the date, each between spaces: ' overfill wet '. */
+  findingCodes: text('finding_codes').notNull(),
+  /** 2 = a stop stands whatever the date, 1 = a caution, 0 = none. */
+  severity: integer('severity').notNull(),
+  state: text('state').notNull(),
+}, table => [
+  index('cylinders_label').on(table.labelCode),
+  index('cylinders_serial').on(table.serial),
+  index('cylinders_place').on(table.placeId),
+  index('cylinders_holder').on(table.holderId),
+  index('cylinders_refrigerant').on(table.refrigerant),
+  index('cylinders_due').on(table.dueMonth),
+  index('cylinders_last_event').on(table.lastEventAt),
+])
+
+/** A cache of the fold: every change of net, signed. */
+export const movements = sqliteTable('movements', {
+  cylinderId: text('cylinder_id').notNull(),
+  eventId: text('event_id').notNull(),
+  ordinal: integer('ordinal').notNull(),
+  cause: text('cause').notNull(),
+  refrigerant: text('refrigerant'),
+  ownerId: text('owner_id'),
+  grams: integer('grams').notNull(),
+  at: integer('at').notNull(),
+  apart: integer('apart', { mode: 'boolean' }).notNull(),
+}, table => [
+  primaryKey({ columns: [table.cylinderId, table.eventId, table.ordinal] }),
+  index('movements_at').on(table.at),
+])
+
+/** Codes that were minted here. A code may be printed before it is on a cylinder. */
+export const labels = sqliteTable('labels', {
+  code: text('code').primaryKey(),
+  mintedAt: integer('minted_at').notNull(),
+  mintedBy: text('minted_by').notNull(),
+})
+
+/** A cache of the `labelled` events: which cylinders claim a code. The earliest in effect has it. */
+export const labelClaims = sqliteTable('label_claims', {
+  eventId: text('event_id').primaryKey(),
+  code: text('code').notNull(),
+  cylinderId: text('cylinder_id').notNull(),
+  effectiveAt: integer('effective_at').notNull(),
+  deviceId: text('device_id').notNull(),
+  deviceSeq: integer('device_seq').notNull(),
+}, table => [index('label_claims_code').on(table.code), index('label_claims_cylinder').on(table.cylinderId)])
+
+export const shipments = sqliteTable('shipments', {
+  id: text('id').primaryKey(),
+  /** Counts up from 1: what people call it. */
+  number: integer('number').notNull().unique(),
+  toFirmId: text('to_firm_id').notNull().references(() => firms.id),
+  state: text('state', { enum: ['draft', 'dispatched', 'received', 'cancelled'] }).notNull(),
+  note: text('note'),
+  createdAt: integer('created_at').notNull(),
+  createdBy: text('created_by').notNull(),
+  dispatchedAt: integer('dispatched_at'),
+  dispatchedBy: text('dispatched_by'),
+  receivedAt: integer('received_at'),
+})
+
+export const shipmentLines = sqliteTable('shipment_lines', {
+  shipmentId: text('shipment_id').notNull().references(() => shipments.id),
+  cylinderId: text('cylinder_id').notNull(),
+  position: integer('position').notNull(),
+  /** As it left: gross reading, refrigerant, condition, net. null while a draft. */
+  sent: text('sent', { mode: 'json' }),
+}, table => [primaryKey({ columns: [table.shipmentId, table.cylinderId] })])
+
+export const testLots = sqliteTable('test_lots', {
+  id: text('id').primaryKey(),
+  number: integer('number').notNull().unique(),
+  requalifierId: text('requalifier_id').notNull().references(() => firms.id),
+  state: text('state', { enum: ['draft', 'sent', 'back', 'cancelled'] }).notNull(),
+  note: text('note'),
+  createdAt: integer('created_at').notNull(),
+  createdBy: text('created_by').notNull(),
+  sentAt: integer('sent_at'),
+  sentBy: text('sent_by'),
+  backAt: integer('back_at'),
+})
+
+export const testLotLines = sqliteTable('test_lot_lines', {
+  lotId: text('lot_id').notNull().references(() => testLots.id),
+  cylinderId: text('cylinder_id').notNull(),
+  position: integer('position').notNull(),
+}, table => [primaryKey({ columns: [table.lotId, table.cylinderId] })])
+
+/** A cylinder stands on at most one open shipment or lot: this key holds it. */
+export const openLines = sqliteTable('open_lines', {
+  cylinderId: text('cylinder_id').primaryKey(),
+  listKind: text('list_kind', { enum: ['shipment', 'test-lot'] }).notNull(),
+  listId: text('list_id').notNull(),
+}, table => [index('open_lines_list').on(table.listId)])
+
+/** What this database is: whether the demo firm lives in it, and which migration of the caches it has. */
+export const meta = sqliteTable('meta', {
+  key: text('key').primaryKey(),
+  value: text('value').notNull().default(sql`''`),
+})

@@ -1,0 +1,103 @@
+import { mkdirSync } from 'node:fs'
+import { dirname } from 'node:path'
+import { setTimeout as wait } from 'node:timers/promises'
+import { fileURLToPath } from 'node:url'
+import { createClient, type Client, type InStatement, type ResultSet } from '@libsql/client'
+import { drizzle, type LibSQLDatabase } from 'drizzle-orm/libsql'
+import * as schema from '../../../drizzle/schema'
+
+/** The custody database: any number of readers, one writer. */
+export interface Database {
+  /** For reads only. */
+  read: LibSQLDatabase<typeof schema>
+  readClient: Client
+  /**
+   * Runs the statements in one write transaction, after every write that was asked for before.
+   * Resolves only when they are durable; rejects with nothing of them stored.
+   */
+  write: (statements: InStatement[]) => Promise<ResultSet[]>
+  /** Holds the writer's queue while work runs: for a read that a write depends on. */
+  exclusive: <T>(work: (commit: Database['write']) => Promise<T>) => Promise<T>
+  migrate: (folder: string) => Promise<void>
+  close: () => void
+  /** The database file, or null on a server. */
+  file: string | null
+}
+
+/** A busy wait stops the whole process, so it stays short and the retry happens outside the driver. */
+const BUSY_WAIT_MS = 250
+const BUSY_RETRIES = 20
+
+/** A drizzle query as a statement for {@link Database.write}. */
+export function statement(query: { toSQL: () => { sql: string, params: unknown[] } }): InStatement {
+  const { sql, params } = query.toSQL()
+  return { sql, args: params as never[] }
+}
+
+/**
+ * Opens a database by URL: `file:` for a local file, `libsql:` or `http(s):` for a server.
+ *
+ * The local driver acknowledges writes that it then loses when a statement met SQLITE_BUSY before them on the same
+ * connection. So writes go only through one queue, on a client with one connection, as one batch in write mode,
+ * and after any BUSY the connection is thrown away before anything else is done with it.
+ */
+export async function openDatabase(url: string, authToken?: string): Promise<Database> {
+  const file = url.startsWith('file:') ? localPath(url) : null
+  if (file) mkdirSync(dirname(file), { recursive: true })
+  const options = { url, authToken: authToken || undefined }
+  const writer = createClient({ ...options, concurrency: 1, timeout: BUSY_WAIT_MS })
+  const readClient = createClient({ ...options, concurrency: 4, timeout: BUSY_WAIT_MS })
+  if (file) await writer.execute('PRAGMA journal_mode = WAL')
+
+  let tail: Promise<unknown> = Promise.resolve()
+  function enqueue<T>(work: () => Promise<T>): Promise<T> {
+    const next = tail.then(work, work)
+    tail = next.catch(() => undefined)
+    return next
+  }
+
+  async function commit(statements: InStatement[]): Promise<ResultSet[]> {
+    if (statements.length === 0) return []
+    for (let attempt = 1; ; attempt++) {
+      try {
+        return await writer.batch(statements, 'write')
+      }
+      catch (error) {
+        if (!isBusy(error)) throw error
+        await writer.reconnect()
+        if (attempt >= BUSY_RETRIES) throw error
+        await wait(5 * attempt + 10 * (attempt % 3))
+      }
+    }
+  }
+
+  return {
+    read: drizzle(readClient, { schema }),
+    readClient,
+    write: statements => enqueue(() => commit(statements)),
+    exclusive: work => enqueue(() => work(commit)),
+    migrate: folder => enqueue(() => migrateTo(writer, folder)),
+    close() {
+      writer.close()
+      readClient.close()
+    },
+    file,
+  }
+}
+
+async function migrateTo(client: Client, migrationsFolder: string): Promise<void> {
+  const { migrate } = await import('drizzle-orm/libsql/migrator')
+  await migrate(drizzle(client), { migrationsFolder })
+}
+
+function localPath(url: string): string {
+  if (url.startsWith('file://')) return fileURLToPath(url)
+  return url.slice('file:'.length).split('?')[0] ?? ''
+}
+
+/** Whether another holder of the file's write lock was in the way. */
+function isBusy(error: unknown): boolean {
+  const { code, message } = error as { code?: string, message?: string }
+  return code === 'SQLITE_BUSY' || code === 'SQLITE_LOCKED'
+    || /database is locked|statements in progress/.test(message ?? '')
+}

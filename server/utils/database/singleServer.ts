@@ -1,0 +1,44 @@
+import { createHash } from 'node:crypto'
+import { rmSync } from 'node:fs'
+import { connect, createServer, type Server } from 'node:net'
+import { tmpdir } from 'node:os'
+import { join, resolve } from 'node:path'
+
+/** A longer socket path is refused by the system (108 bytes on Linux). */
+const LONGEST_SOCKET_PATH = 100
+
+/**
+ * Makes sure that this is the only process serving a database file, for as long as it lives.
+ * A listening socket is the lock: it ends with its process, so that a killed server leaves no stale one.
+ *
+ * Errors: rejects when another process holds the file.
+ */
+export async function holdDatabaseFile(file: string): Promise<Server> {
+  const path = socketPath(file)
+  if (await answers(path)) throw new Error(`Another process is serving ${file}. Stop it first: a local database file has one server.`)
+  rmSync(path, { force: true })
+  const server = createServer(socket => socket.end())
+  await new Promise<void>((done, failed) => {
+    server.once('error', failed)
+    server.listen(path, done)
+  })
+  server.unref()
+  return server
+}
+
+function socketPath(file: string): string {
+  const beside = `${resolve(file)}.lock`
+  if (Buffer.byteLength(beside) <= LONGEST_SOCKET_PATH) return beside
+  return join(tmpdir(), `collarbook-${createHash('sha256').update(beside).digest('hex').slice(0, 24)}.lock`)
+}
+
+function answers(path: string): Promise<boolean> {
+  return new Promise((done) => {
+    const socket = connect(path)
+    socket.once('connect', () => {
+      socket.destroy()
+      done(true)
+    })
+    socket.once('error', () => done(false))
+  })
+}

@@ -1,0 +1,142 @@
+import type { Month } from '../quantity/month'
+import type { FillTerm, FillRule, Stamp } from '../capacity/types'
+import type { EventKind } from './kinds'
+import type { Finding, FindingCode, Severity } from './finding'
+
+export type Condition = 'clean' | 'suspect' | 'burnt' | 'mixed' | 'unknown'
+export type Lifecycle
+  = 'in-service' | 'quarantined' | 'rejected' | 'at-reclaim' | 'at-test' | 'missing' | 'condemned' | 'retired'
+export type Hold = 'quarantined' | 'rejected' | 'damaged' | 'tare-loss' | 'wet'
+export type Ownership = 'own' | 'rental' | 'deposit' | 'customer'
+export type Missing = 'tareWeight' | 'waterCapacity' | 'servicePressure' | 'refrigerant' | 'weight' | 'testDate'
+
+/** A place, person or firm by its id and the name people know it by. */
+export interface Named { id: string, name: string, kind?: string }
+
+/** One requalification mark, as stamped. */
+export interface RetestMark {
+  month: Month
+  method?: 'volumetric' | 'proof' | 'visual'
+  rin?: string
+  suffix?: string
+}
+
+export interface CapacityView {
+  forRefrigerant: string | null
+  governingRule: FillRule | null
+  fillLimitGrams: number | null
+  stopWeightGrams: number | null
+  /** The unrounded sum of tare and limit, from which a screen rounds down to the scale's division; null with stopWeightGrams. */
+  exactStopWeightGrams: number | null
+  roomGrams: number | null
+  liquidFull: { c: number } | { aboveC: number } | null
+  /** The firm's share, 0.8 by default. */
+  share: number
+  terms: FillTerm[]
+  missing: Missing[]
+  /** Why nothing may be put in now; empty when it may. */
+  refusals: Finding[]
+}
+
+export interface RequalificationView {
+  lastMonth: Month | null
+  intervalMonths: number | null
+  dueMonth: Month | null
+  state: 'in-date' | 'due-soon' | 'overdue' | 'unknown' | 'not-required'
+  /** In words: from which mark and by which rule. */
+  basis: string
+}
+
+/** Everything the application says of one cylinder today, to one person. */
+export interface CylinderView {
+  id: string
+  version: number
+  labelCode: string | null
+  /** Codes that were replaced and still open the cylinder. */
+  oldLabelCodes: string[]
+  stamp: (Stamp & { tareWeightGrams: number | null, waterCapacityGrams: number | null, dedicatedTo: string | null }) | null
+  marks: RetestMark[]
+  lifecycle: Lifecycle
+  holds: Hold[]
+  place: Named | null
+  holder: Named | null
+  /** null = the contractor's own. */
+  owner: Named | null
+  ownership: Ownership
+  contents: {
+    refrigerant: string | null
+    condition: Condition
+    burnt: boolean
+    inStock: boolean
+    netGrams: number | null
+    /** Of the net, from its one gross; null for a reckoned or unknown net. */
+    uncertaintyGrams: number | null
+    basis: 'weighed' | 'reckoned' | 'unknown'
+    evacuated: boolean
+    /** Nothing is in it: evacuated, reclaimed, or wet from a test. Not the same as a net of 0. */
+    nothingInIt: boolean
+    owners: { ownerId: string | null, grams: number }[]
+    /** effectiveAt of the event that set the net, ISO 8601. */
+    asOf: string | null
+  }
+  capacity: CapacityView
+  requalification: RequalificationView
+  findings: Finding[]
+  may: EventKind[]
+  mayNot: { kind: EventKind, because: string }[]
+  lastEventAt: string | null
+}
+
+/** One line of the fleet, from cached columns and today's date. */
+export interface CylinderRow {
+  id: string
+  labelCode: string | null
+  serial: string | null
+  spec: string | null
+  place: Named | null
+  holder: Named | null
+  refrigerant: string | null
+  condition: Condition
+  lifecycle: Lifecycle
+  nothingInIt: boolean
+  netGrams: number | null
+  fillLimitGrams: number | null
+  governingRule: FillRule | null
+  roomGrams: number | null
+  stopWeightGrams: number | null
+  exactStopWeightGrams: number | null
+  tareWeightGrams: number | null
+  waterCapacityGrams: number | null
+  dueMonth: Month | null
+  lastEventAt: string | null
+  lastEventKind: EventKind | null
+  worstFinding: { code: FindingCode, severity: Severity } | null
+  findingCodes: FindingCode[]
+}
+
+/** One line of a cylinder's custody log. */
+export interface LogLine {
+  id: string
+  seq: number
+  version: number
+  kind: EventKind
+  occurredAt: string
+  effectiveAt: string
+  recordedAt: string
+  clockSkewSeconds: number
+  author: Named
+  postedBy: Named
+  supervisor: Named | null
+  place: Named | null
+  note: string | null
+  practice: boolean
+  confirmed: string[]
+  details: unknown
+  /** Names of the ids inside details, by id. */
+  names: Record<string, string>
+  netBeforeGrams: number | null
+  netAfterGrams: number | null
+  findings: Finding[]
+  /** What a correction did to this event; null when it stands as recorded. */
+  correction: { eventId: string, reason: string, takenOut: boolean } | null
+}

@@ -1,0 +1,21 @@
+export type Severity = 'caution' | 'stop'
+
+export type FindingCode
+  = 'overfill' | 'nearly-full' | 'pressure-class' | 'spec-not-for-gas' | 'not-refillable' | 'not-marked-flammable' | 'toxic'
+    | 'second-refrigerant' | 'unknown-onto-known' | 'retest-overdue' | 'retest-soon' | 'retest-unknown'
+    | 'early-test' | 'wet' | 'rejected' | 'condemned' | 'quarantined'
+    | 'weight-not-known' | 'not-registered' | 'registered-twice' | 'old-tare-on-label'
+    | 'code-on-two' | 'unsigned' | 'unsupervised' | 'not-seen' | 'two-owners'
+    | 'weigh-again' | 'clock-doubtful' | 'look-before-fill' | 'found-by-use' | 'away' | 'after-end' | 'tested-full'
+
+/** A rule's word on an event, a state or a plan. */
+export interface Finding {
+  code: FindingCode
+  severity: Severity
+  /** One or two sentences for the person at the cylinder: what is so, and what to do next. */
+  text: string
+  /** The regulation or standard itself, or "common practice, no source". */
+  source: string
+  /** Instant (ISO 8601) since when it stands, where one is known. */
+  since: string | null
+}
