@@ -1,0 +1,84 @@
+import { z } from 'zod'
+import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
+import type { AnyRecordedEvent } from '../custody/event'
+import type { FillPolicy } from '../capacity/types'
+import type { ProblemDetails } from './problem'
+import { page, type Page } from './parts'
+
+/** Most events in one request. */
+export const MOST_EVENTS = 200
+
+/** The envelope of POST /api/events. Each event in it is parsed on its own, so that a bad one refuses only itself. */
+export const eventsBody = z.strictObject({
+  events: z.array(z.looseObject({ id: z.string().min(1).max(100) })).min(1).max(MOST_EVENTS),
+  deviceNow: z.iso.datetime({ offset: true }).optional(),
+})
+
+export interface EventResult {
+  id: string
+  outcome: 'accepted' | 'duplicate' | 'refused'
+  seq?: number
+  version?: number
+  problem?: ProblemDetails
+}
+
+/** What POST /api/events answers: results in the order sent, and each cylinder touched as it now stands. */
+export interface EventsAnswer { results: EventResult[], cylinders: CylinderView[] }
+
+export const SORTS = ['urgency', 'code', 'refrigerant', 'net', 'room', 'due', 'place', 'last-event', 'serial'] as const
+
+/** The query of GET /api/cylinders. */
+export const fleetQuery = z.strictObject({
+  ...page,
+  q: z.string().trim().max(80).optional(),
+  place: z.uuid().optional(),
+  holder: z.uuid().optional(),
+  refrigerant: z.string().max(40).optional(),
+  condition: z.enum(['clean', 'suspect', 'burnt', 'mixed', 'unknown']).optional(),
+  lifecycle: z.enum(['in-service', 'quarantined', 'rejected', 'at-reclaim', 'at-test', 'missing', 'condemned', 'retired']).optional(),
+  dueBefore: z.string().regex(/^\d{4}-(0[1-9]|1[0-2])$/).optional(),
+  finding: z.string().max(40).optional(),
+  owner: z.uuid().optional(),
+  label: z.string().max(20).optional(),
+  sort: z.enum(SORTS).default('urgency'),
+  order: z.enum(['asc', 'desc']).default('asc'),
+})
+
+export type FleetQuery = z.output<typeof fleetQuery>
+export type FleetAnswer = Page<CylinderRow>
+
+/** What GET /api/fleet/summary answers: the figures of the strip above the fleet. */
+export interface FleetSummary {
+  total: number
+  stop: number
+  caution: number
+  overfilled: { count: number, first: CylinderRow | null }
+  full: { count: number, netGrams: number }
+  withoutNumber: { count: number }
+  notSeen: { count: number }
+  late: number
+  /** Twelve months from the present one, with the cylinders that fall due in each. */
+  dueByMonth: { month: string, count: number }[]
+  refrigerants: { refrigerant: string, count: number }[]
+}
+
+/** What GET /api/cylinders/{ref}/events answers. Newest in effect first. */
+export interface CustodyLogAnswer extends Page<LogLine> {
+  cylinder: { id: string, labelCode: string | null, serial: string | null, version: number }
+}
+
+/** What GET /api/cylinders/{ref}/fold answers: what a browser needs to judge a draft event by the same rules. */
+export interface FoldInput {
+  events: AnyRecordedEvent[]
+  codesOnTwo: string[]
+}
+
+/** What GET /api/policy answers: the firm's dated rules. */
+export interface PolicyAnswer {
+  timeZone: string
+  fillPolicies: { fromAt: number, policy: FillPolicy }[]
+  retest: { soonDays: number, notSeenDays: number, missingDays: number, intervalMonths: number | null }
+  scales: { id: string, name: string, accuracyGrams: number, accuracyPercent: number, lastCheck: string | null }[]
+}
+
+export type { CylinderRow, CylinderView, LogLine }

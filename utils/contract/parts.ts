@@ -1,0 +1,27 @@
+import { z } from 'zod'
+
+/** A UUID in lower case. */
+export const id = z.uuid('must be an id (a UUID)').transform(value => value.toLowerCase())
+
+/** A line of text that a person typed: trimmed, without control characters. */
+export function line(longest: number) {
+  return z.string().trim().min(1, 'must not be empty').max(longest, `must be at most ${longest} characters`)
+    // eslint-disable-next-line no-control-regex
+    .regex(/^[^\u0000-\u001F\u007F\u202A-\u202E\u2066-\u2069]*$/, 'must not hold control characters')
+}
+
+/** A page of a list: how many, and where the page before ended. */
+export const page = {
+  limit: z.coerce.number().int().min(1).max(200).default(50),
+  cursor: z.string().max(400).optional(),
+}
+
+/** A list's answer. */
+export interface Page<T> { items: T[], nextCursor: string | null, total?: number }
+
+/** A mass as it was read; the same form as in an event. */
+export const massReading = z.discriminatedUnion('unit', [
+  z.strictObject({ unit: z.literal('lb'), value: z.number().nonnegative().finite().max(100_000) }),
+  z.strictObject({ unit: z.literal('lb-oz'), lb: z.number().int().nonnegative().max(100_000), oz: z.number().nonnegative().lt(16) }),
+  z.strictObject({ unit: z.literal('kg'), value: z.number().nonnegative().finite().max(50_000) }),
+])
