@@ -81,3 +81,16 @@ export type FitFinding = {
   text: string
   source: string
 }
+
+/** One row of the table of filling densities that names a gas. */
+export type FillingDensityRow = {
+  designation: string
+  gas: string
+  /** Percent of the weight of water; null where the row asks only that the liquid does not fill the cylinder at 131 F. */
+  percent: number | null
+  /** Least marks: the same type with a higher service pressure also serves. */
+  specs: readonly string[]
+}
+
+/** Filling density of a band of specific gravity at 60 F. Units: the gravity in thousandths, percent of the weight of water. */
+export type HydrocarbonBand = { fromThousandths: number, toThousandths: number, percent: number }

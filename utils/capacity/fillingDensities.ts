@@ -1,0 +1,63 @@
+import { impliedServicePressurePsig, splitSpec } from '../requalification/specs'
+import { FILLING_DENSITY_ROWS, HYDROCARBON_BANDS, HYDROCARBONS, LIQUEFIED_GAS_SPECS } from './data/fillingDensityRows'
+import type { FillingDensityRow } from './types'
+
+/** How a cylinder stands to a row: its marks suffice, its service pressure is below the row's or unknown, or the row does not name its type. */
+export type RowFit = 'met' | 'mark-below' | 'spec-not-listed'
+
+/** What of a stamp decides about filling densities. */
+export type CylinderMark = { spec: string, servicePressurePsig: number | null }
+
+/** The rows that name a gas; none where only the general rule holds. Source: 49 CFR 173.304a(a)(2). */
+export function fillingDensityRows(designation: string): FillingDensityRow[] {
+  return FILLING_DENSITY_ROWS.filter(row => row.designation === designation)
+}
+
+/** How a cylinder's marks stand to a row. */
+export function rowFit(row: FillingDensityRow, cylinder: CylinderMark): RowFit {
+  const listed = row.specs.map(splitSpec).find(mark => mark?.spec === cylinder.spec)
+  if (!listed) return 'spec-not-listed'
+  // A mark without a figure of its own ("39") asks for none.
+  if (listed.servicePressurePsig === null) return 'met'
+  const marked = markedPressurePsig(cylinder)
+  return marked !== null && marked >= listed.servicePressurePsig ? 'met' : 'mark-below'
+}
+
+/** The row of a gas with the highest filling density among those that a cylinder's marks meet, or null. */
+export function bestRow(designation: string, cylinder: CylinderMark): FillingDensityRow | null {
+  const met = fillingDensityRows(designation).filter(row => rowFit(row, cylinder) === 'met')
+  return met.reduce<FillingDensityRow | null>(
+    (best, row) => best === null || (row.percent ?? 0) > (best.percent ?? 0) ? row : best,
+    null,
+  )
+}
+
+/** The service pressure of a cylinder: as marked, else as its specification implies, else null. */
+export function markedPressurePsig(cylinder: CylinderMark): number | null {
+  return cylinder.servicePressurePsig ?? impliedServicePressurePsig(cylinder.spec)
+}
+
+/** Whether a specification is authorised for liquefied gases that no row names. Source: 49 CFR 173.304a(a)(1). */
+export function isLiquefiedGasSpec(spec: string): boolean {
+  return LIQUEFIED_GAS_SPECS.includes(spec)
+}
+
+/** Whether a refrigerant is filled by its specific gravity. Source: 49 CFR 173.304a(d)(1). */
+export function isHydrocarbon(designation: string): boolean {
+  return HYDROCARBONS.includes(designation)
+}
+
+/**
+ * The filling density of a hydrocarbon in percent of the weight of water, or null outside the table.
+ *
+ * Units: specific gravity of the liquid at 60 F.
+ * Rounding: the specific gravity to three decimals; between two bands the lower one holds.
+ * Source: 49 CFR 173.304a(d)(1).
+ */
+export function hydrocarbonPercent(specificGravity: number): number | null {
+  const thousandths = Math.round(specificGravity * 1000)
+  const first = HYDROCARBON_BANDS[0]
+  const last = HYDROCARBON_BANDS.at(-1)
+  if (!first || !last || thousandths < first.fromThousandths || thousandths > last.toThousandths) return null
+  return HYDROCARBON_BANDS.findLast(band => band.fromThousandths <= thousandths)?.percent ?? null
+}

@@ -1,0 +1,37 @@
+import type { MassReading } from '../../quantity/mass'
+import { exactGrams } from '../../quantity/mass'
+import { celsiusFromFahrenheit } from '../../quantity/temperature'
+import { hasLiquidAt } from '../../refrigerant/saturation'
+import type { Refrigerant, SupercriticalTable } from '../../refrigerant/types'
+import type { CylinderMark } from '../fillingDensities'
+import type { FillPolicy } from '../types'
+
+/** What a rule needs of a cylinder and a refrigerant. Units: litres of volume, grams of water capacity, unrounded. */
+export type RuleInput = {
+  waterCapacity: MassReading
+  waterCapacityGrams: number
+  volumeLitres: number
+  cylinder: CylinderMark
+  refrigerant: Refrigerant
+  supercritical: SupercriticalTable | null
+  policy: FillPolicy
+}
+
+/** What a rule gives: net grams, unrounded, or why it has none; and the sum behind it, without its result. */
+export type RuleFigure = { exactGrams: number, sum: string, source: string } | { exactGrams: null, because: string, source: string }
+
+/** Density of water at 60 F, at which a water capacity is taken (49 CFR 173.304a(a)(2) Note 1). Units: kg/L. */
+export const WATER_DENSITY_60F = 0.99904
+
+/** Reference temperature at which no cylinder may be liquid-full, 131 F (49 CFR 173.304(b)). Units: C. */
+export const HOT_REFERENCE_C = celsiusFromFahrenheit(131)
+
+/** The volume of a cylinder from its water capacity. Units: litres, unrounded. */
+export function volumeLitres(waterCapacity: MassReading): number {
+  return exactGrams(waterCapacity) / 1000 / WATER_DENSITY_60F
+}
+
+/** Whether a refrigerant is still a liquid with a vapour at 131 F, so that its density sets the limit. */
+export function isLiquidWhenHot(refrigerant: Refrigerant): boolean {
+  return hasLiquidAt(refrigerant, HOT_REFERENCE_C)
+}
