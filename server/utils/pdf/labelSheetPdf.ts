@@ -1,0 +1,75 @@
+import PDFDocument from 'pdfkit'
+import type { IdentityLabel, LabelFace, LabelFrame, LabelText } from '~~/utils/label/identityLabel'
+import type { LabelSheet, PlacedLabel } from '~~/utils/label/sheet'
+import type { LabelFonts } from './fonts'
+
+const POINTS_PER_MM = 72 / 25.4
+
+/**
+ * The pages of a label sheet as a PDF, every length exactly as laid out, the symbols as vectors.
+ *
+ * Shape: `compress: false` leaves the drawing readable in the file.
+ * Errors: RangeError for a sheet without a label, of which there is no page to print.
+ */
+export function labelSheetPdf(sheet: LabelSheet, fonts: LabelFonts, options: { compress?: boolean } = {}): Promise<Buffer> {
+  if (sheet.pages.length === 0) throw new RangeError('A sheet without a label')
+  const document = new PDFDocument({
+    autoFirstPage: false,
+    compress: options.compress ?? true,
+    // Without a face here the document begins with a built-in one, whose measures it looks for on the disk.
+    font: fonts.words as unknown as string,
+    info: { Title: 'Cylinder labels', Creator: 'Collarbook', Producer: 'Collarbook' },
+  })
+  for (const face of Object.keys(fonts) as LabelFace[]) document.registerFont(face, fonts[face])
+
+  const finished = collected(document)
+  for (const page of sheet.pages) {
+    document.addPage({ size: [sheet.page.width * POINTS_PER_MM, sheet.page.height * POINTS_PER_MM], margin: 0 })
+    document.scale(POINTS_PER_MM)
+    for (const placed of page) drawLabel(document, placed)
+  }
+  document.end()
+  return finished
+}
+
+function collected(document: PDFKit.PDFDocument): Promise<Buffer> {
+  return new Promise((resolve, reject) => {
+    const chunks: Buffer[] = []
+    document.on('data', (chunk: Buffer) => chunks.push(chunk))
+    document.on('end', () => resolve(Buffer.concat(chunks)))
+    document.on('error', reject)
+  })
+}
+
+function drawLabel(document: PDFKit.PDFDocument, { label, x, y, qrX, qrY }: PlacedLabel): void {
+  drawSymbol(document, label.qr, qrX, qrY)
+  document.save().translate(x, y)
+  drawFrame(document, label.frame)
+  for (const rule of label.rules) document.rect(rule.x, rule.y, rule.width, rule.thickness).fill('black')
+  for (const text of label.texts) drawText(document, text)
+  document.restore()
+}
+
+/** The path is in whole modules, so that its edges fall on dots whatever the place on the page. */
+function drawSymbol(document: PDFKit.PDFDocument, qr: IdentityLabel['qr'], x: number, y: number): void {
+  document.save().translate(x, y).scale(qr.moduleMm).path(qr.path).fill('black').restore()
+}
+
+function drawFrame(document: PDFKit.PDFDocument, frame: LabelFrame): void {
+  const { upperRadius: upper, lowerRadius: lower } = frame
+  const [left, right, top, bottom] = [frame.x, frame.x + frame.width, frame.y, frame.y + frame.height]
+  document
+    .moveTo(left, top + upper).quadraticCurveTo(left, top, left + upper, top)
+    .lineTo(right - upper, top).quadraticCurveTo(right, top, right, top + upper)
+    .lineTo(right, bottom - lower).quadraticCurveTo(right, bottom, right - lower, bottom)
+    .lineTo(left + lower, bottom).quadraticCurveTo(left, bottom, left, bottom - lower)
+    .closePath().lineWidth(frame.thickness).stroke('black')
+}
+
+function drawText(document: PDFKit.PDFDocument, { text, face, size, x, y, align, maxWidth }: LabelText): void {
+  document.font(face, size)
+  const natural = document.widthOfString(text)
+  const fitting = Math.min(1, maxWidth / natural)
+  const start = align === 'right' ? x - natural * fitting : x
+  document.fontSize(size * fitting).fillColor('black').text(text, start, y, { baseline: 'alphabetic', lineBreak: false })
+}

@@ -1,0 +1,33 @@
+import { readFileSync } from 'node:fs'
+import { LABEL_FONT_FILES, type LabelFonts } from '../../server/utils/pdf/fonts'
+import { labelSheetPdf } from '../../server/utils/pdf/labelSheetPdf'
+import { identityLabel, type IdentityLabelContent, type LabelledStamp } from '../../utils/label/identityLabel'
+import { sheet } from '../../utils/label/sheet'
+import { LABEL_STOCKS, type LabelStockId } from '../../utils/label/stock'
+
+/** The faces of the papers, read from the folder that the build takes them from. */
+export const fonts = Object.fromEntries(Object.entries(LABEL_FONT_FILES).map(
+  ([face, file]) => [face, readFileSync(new URL(`../../server/assets/fonts/${file}`, import.meta.url))],
+)) as LabelFonts
+
+/** The collar of an invented cylinder. */
+export const STAMP: LabelledStamp = {
+  serial: 'K48213', spec: 'DOT-4BA', servicePressurePsig: 400, tareWeight: '27.9 lb', waterCapacity: '47.7 lb',
+}
+
+/** What the symbol of a code holds in these tests. */
+export function payloadOf(code: string): string {
+  return `HTTPS://CYLINDERS.EXAMPLE/C/${code}`
+}
+
+/** The printed labels of some codes, all alike but for what `changes` says. */
+export function labelPdf(
+  codes: string[], stockId: LabelStockId,
+  { start, compress, changes }: { start?: number, compress?: boolean, changes?: Partial<IdentityLabelContent> } = {},
+): Promise<Buffer> {
+  const stock = LABEL_STOCKS[stockId]
+  const labels = codes.map(code => identityLabel({
+    code, payload: payloadOf(code), owner: 'Acme Cooling', telephone: '555 0142', copy: 1, stamp: STAMP, ...changes,
+  }, stock))
+  return labelSheetPdf(sheet(labels, stock, start), fonts, { compress })
+}
