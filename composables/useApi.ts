@@ -1,0 +1,80 @@
+import type { ProblemDetails, ProblemError } from '~~/utils/contract/problem'
+
+type Query = Record<string, string | number | boolean | null | undefined>
+type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE'
+
+/** Something that the server refused, or that never reached it. */
+export class ApiError extends Error {
+  override readonly name = 'ApiError'
+  /** As h3 and Nuxt read it; 0 when the server was not reached. */
+  readonly statusCode: number
+  readonly data: ProblemDetails
+
+  constructor(problem: ProblemDetails) {
+    super(problem.detail || problem.title)
+    this.statusCode = problem.status
+    this.data = problem
+  }
+}
+
+const NOT_REACHED: ProblemDetails = {
+  type: 'about:blank', title: 'No connection', status: 0,
+  detail: 'The server was not reached. Nothing was lost; try again when there is signal.',
+}
+
+/** The problem behind any error, in the words of whoever found it. */
+export function problemOf(error: unknown): ProblemDetails {
+  const { data, status, statusCode, message } = Object(error) as
+    { data?: unknown, status?: number, statusCode?: number, message?: string }
+  const said = Object(data) as Partial<ProblemDetails>
+  if (typeof said.title === 'string' && typeof said.status === 'number') {
+    return { type: said.type ?? 'about:blank', title: said.title, status: said.status, detail: said.detail ?? '', errors: said.errors }
+  }
+  const code = statusCode ?? status
+  if (code === undefined) return NOT_REACHED
+  return { type: 'about:blank', title: 'That did not work', status: code, detail: code >= 500 ? 'The server could not answer. Try again.' : message ?? '' }
+}
+
+/** The errors of a problem that belong to one field, as one text; null where there are none. */
+export function errorAt(problem: { errors?: ProblemError[] } | null, path: string): string | null {
+  const found = problem?.errors?.filter(error => error.path === path || error.path.startsWith(`${path}.`)) ?? []
+  return found.length ? found.map(error => error.message).join(' ') : null
+}
+
+/**
+ * The server's routes, with the person's cookies on both sides. Call it in a component's set-up.
+ *
+ * Errors: every failure is an {@link ApiError}; a session that ended leads to the sign-in page and back.
+ */
+export function useApi() {
+  const request = useRequestFetch()
+  const nuxt = useNuxtApp()
+  const route = useRoute()
+
+  async function call<T>(method: Method, path: string, options: { query?: Query, body?: unknown } = {}): Promise<T> {
+    try {
+      return await request<T>(path, {
+        method,
+        query: options.query,
+        ...(options.body === undefined ? {} : { body: options.body as Record<string, unknown> }),
+        // A second sending is the person's to decide: an event is not sent twice behind their back.
+        retry: false,
+      }) as T
+    }
+    catch (error) {
+      const problem = problemOf(error)
+      if (problem.status === 401 && import.meta.client && !path.startsWith('/api/session')) {
+        await nuxt.runWithContext(() => navigateTo({ path: '/sign-in', query: { next: route.fullPath } }))
+      }
+      throw new ApiError(problem)
+    }
+  }
+
+  return {
+    get: <T>(path: string, query?: Query) => call<T>('GET', path, { query }),
+    post: <T>(path: string, body: unknown) => call<T>('POST', path, { body }),
+    put: <T>(path: string, body: unknown) => call<T>('PUT', path, { body }),
+    patch: <T>(path: string, body: unknown) => call<T>('PATCH', path, { body }),
+    del: <T>(path: string) => call<T>('DELETE', path),
+  }
+}

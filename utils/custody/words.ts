@@ -1,0 +1,78 @@
+import type { Condition, Hold, Lifecycle, Missing, Ownership } from './cylinderView'
+import type { EventKind } from './kinds'
+
+/** A kind of event as people say it: what a button does, and what the log says was done. */
+export interface KindWords {
+  /** The verb on a button. */
+  act: string
+  /** The word in the log. */
+  done: string
+}
+
+/** The words of each kind of event. */
+export const KIND_WORDS: Record<EventKind, KindWords> = {
+  'registered': { act: 'Register', done: 'Registered' },
+  'labelled': { act: 'Label', done: 'Labelled' },
+  'received': { act: 'Receive', done: 'Received' },
+  'moved': { act: 'Move', done: 'Moved' },
+  'handed-over': { act: 'Hand over', done: 'Handed over' },
+  'weighed': { act: 'Weigh', done: 'Weighed' },
+  'filled': { act: 'Record a recovery', done: 'Filled' },
+  'drawn': { act: 'Draw', done: 'Drawn' },
+  'emptied': { act: 'Empty', done: 'Emptied' },
+  'lost': { act: 'Loss', done: 'Lost' },
+  'sent-for-reclaim': { act: 'Ship for reclaim', done: 'Sent for reclaim' },
+  'reclaimed': { act: 'Reclaimed', done: 'Reclaimed' },
+  'returned': { act: 'Return', done: 'Returned' },
+  'sent-for-test': { act: 'Send to test', done: 'Sent for test' },
+  'retested': { act: 'Retest', done: 'Retested' },
+  'corrected': { act: 'Correct', done: 'Corrected' },
+}
+
+/** The conditions of what is in a cylinder, best first. */
+export const CONDITION_WORDS: Record<Condition, string> = {
+  clean: 'clean',
+  suspect: 'suspect',
+  unknown: 'not known',
+  burnt: 'burnt (oil, acid)',
+  mixed: 'mixed',
+}
+
+/** Where a cylinder stands in its life. */
+export const LIFECYCLE_WORDS: Record<Lifecycle, string> = {
+  'in-service': 'in service',
+  'quarantined': 'set apart',
+  'rejected': 'rejected at its test',
+  'at-reclaim': 'at the reclaimer',
+  'at-test': 'at the test station',
+  'missing': 'missing',
+  'condemned': 'condemned',
+  'retired': 'retired',
+}
+
+/** What keeps a cylinder from use. */
+export const HOLD_WORDS: Record<Hold, string> = {
+  'quarantined': 'set apart',
+  'rejected': 'rejected at its test',
+  'damaged': 'damaged',
+  'tare-loss': 'lighter than its stamp',
+  'wet': 'wet from its test',
+}
+
+/** Whose cylinder it is. */
+export const OWNERSHIP_WORDS: Record<Ownership, string> = {
+  own: 'our own',
+  rental: 'rented',
+  deposit: 'on deposit',
+  customer: 'a customer’s',
+}
+
+/** What is not known, as the end of "No stop weight: ... not known". */
+export const MISSING_WORDS: Record<Missing, string> = {
+  tareWeight: 'its tare weight (TW)',
+  waterCapacity: 'its water capacity (WC)',
+  servicePressure: 'its marked service pressure',
+  refrigerant: 'the refrigerant',
+  weight: 'its weight',
+  testDate: 'the month of its last test',
+}
