@@ -1,0 +1,58 @@
+import { liquidDensityAt } from '../refrigerant/saturation'
+import type { RuleInput } from './rules/ruleInput'
+import { HOT_REFERENCE_C, isLiquidWhenHot } from './rules/ruleInput'
+import { resultText } from './rules/sumText'
+import type { RuleAnswer } from './rulesInForce'
+import type { FillTerm, TermStanding } from './types'
+
+/** What no figure may pass when a cylinder is hot, and why. Units: net grams, unrounded. */
+export type HotBounds = { ceilingGrams: number, unsafeAboveGrams: number, unsafeBecause: string }
+
+/**
+ * The bounds of a cylinder at 131 F: liquid-full and the ceiling below it for a liquid, 5/4 of the service pressure for a gas.
+ *
+ * Returns null where a row alone decides. Source: 49 CFR 173.304(b), 173.301a(d).
+ */
+export function hotBounds(input: RuleInput, answers: readonly RuleAnswer[]): HotBounds | null {
+  const { designation } = input.refrigerant
+  if (isLiquidWhenHot(input.refrigerant)) {
+    const liquidFullGrams = input.volumeLitres * liquidDensityAt(input.refrigerant, HOT_REFERENCE_C)
+    return {
+      ceilingGrams: liquidFullGrams * input.policy.ceilingThousandths / 1000,
+      unsafeAboveGrams: liquidFullGrams,
+      unsafeBecause: `unsafe for ${designation}: liquid-full below 131 °F`,
+    }
+  }
+  const hotPressure = answers.find(answer => answer.rule === 'hot-pressure')
+  if (!hotPressure) return null
+  const boundGrams = hotPressure.figure.exactGrams ?? 0
+  return {
+    ceilingGrams: boundGrams,
+    unsafeAboveGrams: boundGrams,
+    unsafeBecause: `unsafe for ${designation}: above 5/4 of the service pressure at 131 °F`,
+  }
+}
+
+/** How a rule's figure stands for a cylinder. */
+export function standingOf({ rule, counts, figure }: RuleAnswer, bounds: HotBounds | null): TermStanding {
+  if (bounds && figure.exactGrams !== null && rule !== 'hot-ceiling') {
+    if (figure.exactGrams > bounds.unsafeAboveGrams) return 'unsafe'
+    if (figure.exactGrams > bounds.ceilingGrams) return 'above-margin'
+  }
+  return counts ? 'in-force' : 'compared'
+}
+
+/** A rule's answer as it is shown: with its sum, and without a figure where that would be unsafe. Rounding: down. */
+export function fillTerm(answer: RuleAnswer, bounds: HotBounds | null, input: RuleInput): FillTerm {
+  const { rule, figure } = answer
+  const standing = standingOf(answer, bounds)
+  if (figure.exactGrams === null) {
+    return { rule, limitGrams: null, because: figure.because, standing, working: '', source: figure.source }
+  }
+  if (bounds && standing === 'unsafe') {
+    return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, working: figure.sum, source: figure.source }
+  }
+  const working = `${figure.sum} = ${resultText(figure.exactGrams, input.waterCapacity)}`
+  const because = standing === 'above-margin' ? { because: 'above our margin below liquid-full at 131 °F' } : {}
+  return { rule, limitGrams: Math.floor(figure.exactGrams), ...because, standing, working, source: figure.source }
+}
