@@ -15,5 +15,5 @@ const FLOAT_NOISE_GRAMS = 1e-9
 export function scaleAccuracyGrams(grossGrams: number, scale?: Scale): number {
   const grams = scale?.accuracyGrams ?? exactGrams(DEFAULT_ACCURACY)
   const percent = scale?.accuracyPercent ?? DEFAULT_ACCURACY_PERCENT
-  return Math.ceil(Math.max(grams, Math.abs(grossGrams) * percent / 100) - FLOAT_NOISE_GRAMS)
+  return Math.max(0, Math.ceil(Math.max(grams, Math.abs(grossGrams) * percent / 100) - FLOAT_NOISE_GRAMS))
 }
