@@ -23,6 +23,13 @@ export default defineNuxtConfig({
     '@fontsource/roboto-mono/latin-500.css', '@fontsource/roboto-mono/latin-700.css',
   ],
   colorMode: { classSuffix: '' },
+  runtimeConfig: {
+    // Name and Secure are set at start by PUBLIC_URL. The longest a session lives: 30 days.
+    session: {
+      name: '__Host-collarbook', password: '', maxAge: 2_592_000, sessionHeader: false,
+      cookie: { path: '/', httpOnly: true, sameSite: 'lax', secure: true },
+    },
+  },
   srcDir: '.',
   // Without a shared/ folder, and with utils/ imported by path on both sides.
   compatibilityDate: '2026-01-01',
@@ -38,6 +45,12 @@ export default defineNuxtConfig({
   vite: { optimizeDeps: { include: ['vue-qrcode-reader', 'qrcode'] } },
   typescript: { strict: true, typeCheck: false },
   telemetry: false,
+  // Who is signed in is asked by our own routes; the package's plugins would ask its own at each page.
+  auth: {
+    loadStrategy: 'none',
+    // scrypt, N = 2^17, r = 8, p = 1 (OWASP Password Storage Cheat Sheet); 128 MiB each, and the driver wants more than that.
+    hash: { scrypt: { cost: 131_072, maxMemory: 268_435_456 } },
+  },
   eslint: { config: { stylistic: true } },
   icon: {
     mode: 'svg', provider: 'none', serverBundle: false, fallbackToApi: false,

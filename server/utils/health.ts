@@ -1,0 +1,14 @@
+import { version } from '../../package.json'
+import type { Health } from '../../utils/contract/firm'
+import { useDatabase } from './database/currentDatabase'
+
+/** Whether the database answers. */
+export async function health(): Promise<Health> {
+  try {
+    await useDatabase().readClient.execute('select 1')
+    return { ok: true, version, database: 'ok' }
+  }
+  catch {
+    return { ok: false, version, database: 'unreachable' }
+  }
+}

@@ -1,0 +1,103 @@
+import { defineEventHandler, getRouterParams, setResponseStatus, type EventHandler, type EventHandlerRequest, type H3Event } from 'h3'
+import type { z } from 'zod'
+import type { Access } from '../../../utils/access/roles'
+import { can, type Permission } from '../../../utils/access/permissions'
+import type { User } from '../../../utils/contract/session'
+import { useDatabase } from '../database/currentDatabase'
+import { securityEntry } from '../securityLog'
+import { accessOf, currentUser } from '../session/currentUser'
+import { asProblem } from './asProblem'
+import { readJsonBody } from './jsonBody'
+import { problem, sendProblem } from './problem'
+import { queryOf, validate } from './validate'
+
+/** Who may call a route: anybody, anybody signed in, or who holds a permission. */
+export type RoutePermission = Permission | 'public' | 'signed-in'
+
+export interface RouteOptions<Who extends RoutePermission, P, Q, B> {
+  permission: Who
+  /** Strict schemas. A route without one takes no parameters of that sort: a query is then refused. */
+  params?: P
+  query?: Q
+  body?: B
+  /** Of the answer; 200 unless given. */
+  status?: number
+}
+
+type Parsed<S> = S extends z.ZodType ? z.output<S> : undefined
+
+/** What a route's handler is given. A public route knows nobody: it must work without the database. */
+export interface RouteContext<Who extends RoutePermission, P, Q, B> {
+  event: H3Event
+  access: Who extends 'public' ? null : Access
+  person: Who extends 'public' ? null : User
+  params: Parsed<P>
+  query: Parsed<Q>
+  body: Parsed<B>
+}
+
+/**
+ * A route of the API: signs in (401), checks the permission (403), parses path, query and body (400, 413, 415), in that
+ * order, then calls the handler. Whatever is thrown becomes problem details.
+ *
+ * Example: `export default apiRoute({ permission: 'fleet:read', params }, ({ params }) => cylinderView(params.ref))`
+ */
+export function apiRoute<
+  Who extends RoutePermission, R,
+  P extends z.ZodType | undefined = undefined,
+  Q extends z.ZodType | undefined = undefined,
+  B extends z.ZodType | undefined = undefined,
+>(
+  options: RouteOptions<Who, P, Q, B>,
+  handler: (context: RouteContext<Who, P, Q, B>) => R | Promise<R>,
+): EventHandler<EventHandlerRequest, Promise<R>> {
+  return defineEventHandler(async (event): Promise<R> => {
+    try {
+      const person = options.permission === 'public' ? null : await admit(event, options.permission)
+      const context = {
+        event,
+        person,
+        access: person && accessOf(person),
+        params: options.params && validate(options.params, pathOf(event), 'path'),
+        query: readQuery(event, options.query),
+        body: options.body && validate(options.body, await readJsonBody(event), 'body'),
+      } as RouteContext<Who, P, Q, B>
+      const answer = await handler(context)
+      if (options.status) setResponseStatus(event, options.status)
+      return answer
+    }
+    catch (error) {
+      const told = asProblem(error)
+      if (told.details.status >= 500) console.error(`${event.method} ${event.path.split('?')[0]} failed:`, error)
+      await sendProblem(event, told)
+      return undefined as R
+    }
+  })
+}
+
+async function admit(event: H3Event, permission: Permission | 'signed-in'): Promise<User> {
+  const person = await currentUser(event)
+  if (!person) throw problem(401, 'Not signed in', 'Sign in first.', undefined, { type: 'not-signed-in' })
+  if (permission === 'signed-in' || can(accessOf(person), permission)) return person
+  await useDatabase().write([securityEntry({ what: 'refused', personId: person.id, subject: permission }, Date.now())])
+  throw problem(403, 'Not yours', 'Your role does not include this.', undefined, { type: 'not-permitted' })
+}
+
+function pathOf(event: H3Event): Record<string, string> {
+  try {
+    return getRouterParams(event, { decode: true })
+  }
+  catch {
+    throw problem(400, 'Malformed', 'The path does not fit.')
+  }
+}
+
+function readQuery(event: H3Event, schema: z.ZodType | undefined): unknown {
+  const query = queryOf(event.path)
+  if (schema) return validate(schema, query, 'query')
+  const unknown = Object.keys(query)
+  if (unknown.length > 0) {
+    throw problem(400, 'Malformed', 'The query does not fit.', unknown.map(path => ({ path, message: 'is not known here' })))
+  }
+  return undefined
+}

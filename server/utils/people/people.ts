@@ -1,0 +1,76 @@
+import { and, asc, eq, inArray, sql } from 'drizzle-orm'
+import type { z } from 'zod'
+import { people, sessions } from '../../../drizzle/schema'
+import { can } from '../../../utils/access/permissions'
+import type { Access } from '../../../utils/access/roles'
+import type { PeopleAnswer, PersonLine, personChange } from '../../../utils/contract/people'
+import { useDatabase } from '../database/currentDatabase'
+import { statement } from '../database/database'
+import { problem } from '../http/problem'
+import { securityEntry, type SecurityEvent } from '../securityLog'
+import { rolesOf } from '../session/person'
+import { personLine } from './personLine'
+
+type PersonRow = typeof people.$inferSelect
+type PersonChange = z.output<typeof personChange>
+
+/** The firm's people by name. */
+export async function listPeople(access: Access, active?: boolean): Promise<PeopleAnswer> {
+  const rows = await useDatabase().read.select().from(people)
+    .where(active === undefined ? undefined : eq(people.active, active)).orderBy(asc(people.name), asc(people.id))
+  return { items: rows.map(row => personLine(row, can(access, 'people:read-contact'))) }
+}
+
+/**
+ * One person as stored.
+ *
+ * Errors: 404.
+ */
+export async function personById(id: string): Promise<PersonRow> {
+  const [row] = await useDatabase().read.select().from(people).where(eq(people.id, id)).limit(1)
+  if (!row) throw problem(404, 'Not known', 'There is no such person.')
+  return row
+}
+
+/**
+ * Changes a person. Another role or turning off ends that person's sessions in the same commit.
+ *
+ * Errors: 404; 409 where nobody would be left who can manage people.
+ */
+export async function changePerson(id: string, change: PersonChange, by: Access, now: number): Promise<PersonLine> {
+  const before = await personById(id)
+  const after = { ...before, ...change, roles: change.roles ?? rolesOf(before), certification: change.certification === undefined ? before.certification : change.certification }
+  const { read, write } = useDatabase()
+  const rights = !sameRoles(rolesOf(before), after.roles) || before.active !== after.active
+  const stays = after.active && after.roles.includes('admin')
+  const { name, roles, trainee, certification, active } = after
+  const update = read.update(people).set({ name, roles, trainee, certification, active })
+    .where(stays ? eq(people.id, id) : and(eq(people.id, id), anotherAdminThan(id))).returning({ id: people.id })
+  // Only where the change took hold: the update before it may have been refused.
+  const changed = read.select({ id: people.id }).from(people).where(and(eq(people.id, id), eq(people.roles, roles), eq(people.active, active)))
+  const [updated] = await write([
+    statement(update),
+    ...(rights ? [statement(read.delete(sessions).where(inArray(sessions.personId, changed)))] : []),
+  ])
+  if (updated?.rows.length === 0) {
+    throw problem(409, 'The last administrator', 'Nobody would be left to manage people. Make another person administrator first.', undefined, { type: 'last-admin' })
+  }
+  await write([securityEntry({ what: happened(before, after), personId: by.personId, subject: id }, now)])
+  return personLine(await personById(id), true)
+}
+
+/** Holds where the person is no admin, or another admin can sign in. */
+function anotherAdminThan(id: string) {
+  return sql`(not exists (select 1 from people self, json_each(self.roles) role where self.id = ${id} and role.value = 'admin')
+    or exists (select 1 from people other, json_each(other.roles) role
+      where other.id <> ${id} and other.active = 1 and other.password_hash is not null and role.value = 'admin'))`
+}
+
+function happened(before: PersonRow, after: PersonRow): SecurityEvent {
+  if (before.active === after.active) return 'person-changed'
+  return after.active ? 'person-turned-on' : 'person-turned-off'
+}
+
+function sameRoles(left: readonly string[], right: readonly string[]): boolean {
+  return left.length === right.length && left.every(role => right.includes(role))
+}

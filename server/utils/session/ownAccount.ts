@@ -1,0 +1,40 @@
+import { and, eq } from 'drizzle-orm'
+import { people } from '../../../drizzle/schema'
+import type { Units, User } from '../../../utils/contract/session'
+import { useDatabase } from '../database/currentDatabase'
+import { statement } from '../database/database'
+import { problem } from '../http/problem'
+import { securityEntry } from '../securityLog'
+import { hashNewPassword, passwordMatches } from './password'
+import { refuseWeakPassword } from './passwordRules'
+import { endSessionsOf, newSession } from './sessions'
+
+/**
+ * Changes one's own password. Every session of the person ends; the new one's secret is answered.
+ *
+ * Errors: 403 when the present password is wrong, 422 for a weak new one, 409 when it was changed meanwhile.
+ */
+export async function changePassword(user: User, current: string, next: string, now: number): Promise<string> {
+  const { read, write } = useDatabase()
+  const [row] = await read.select({ passwordHash: people.passwordHash }).from(people).where(eq(people.id, user.id)).limit(1)
+  const stored = row?.passwordHash ?? null
+  if (!stored || !await passwordMatches(stored, current)) {
+    await write([securityEntry({ what: 'password-change-refused', personId: user.id }, now)])
+    throw problem(403, 'Not your password', 'The present password is not right.', [{ path: 'current', message: 'is not right' }], { type: 'wrong-password' })
+  }
+  refuseWeakPassword(next, user.email, 'next')
+  const passwordHash = await hashNewPassword(next)
+  const { sid, store } = newSession(user.id, now)
+  const unchanged = and(eq(people.id, user.id), eq(people.passwordHash, stored))
+  const [updated] = await write([statement(read.update(people).set({ passwordHash }).where(unchanged).returning({ id: people.id }))])
+  if (updated?.rows.length === 0) throw problem(409, 'Changed meanwhile', 'The password was changed meanwhile.')
+  await write([endSessionsOf(user.id), store, securityEntry({ what: 'password-changed', personId: user.id }, now)])
+  return sid
+}
+
+/** Changes the units a person reads weights in. */
+export async function changeUnits(user: User, units: Units): Promise<User> {
+  const { read, write } = useDatabase()
+  await write([statement(read.update(people).set({ units }).where(eq(people.id, user.id)))])
+  return { ...user, units }
+}

@@ -1,0 +1,23 @@
+import type { people } from '../../../drizzle/schema'
+import { ROLES, type Role } from '../../../utils/access/roles'
+import type { User } from '../../../utils/contract/session'
+
+type PersonRow = typeof people.$inferSelect
+
+/** The roles of a stored person; a word that is no role gives no right. */
+export function rolesOf(row: Pick<PersonRow, 'roles'>): Role[] {
+  return ROLES.filter(role => row.roles.includes(role))
+}
+
+/** A stored person as the screens know who is signed in. */
+export function userOf(row: PersonRow): User {
+  return {
+    id: row.id,
+    name: row.name,
+    email: row.email,
+    roles: rolesOf(row),
+    trainee: row.trainee,
+    certification: row.certification,
+    units: row.units,
+  }
+}

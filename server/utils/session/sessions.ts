@@ -1,0 +1,44 @@
+import type { InStatement } from '@libsql/client'
+import { eq } from 'drizzle-orm'
+import { people, sessions } from '../../../drizzle/schema'
+import { useDatabase } from '../database/currentDatabase'
+import { statement } from '../database/database'
+import { SEEN_INTERVAL, sessionStands } from './lifetime'
+import { rolesOf, userOf } from './person'
+import { newSecret, secretHash } from './secret'
+import type { User } from '../../../utils/contract/session'
+
+/** A new session of a person: the secret for the cookie, and the statement that stores its hash. */
+export function newSession(personId: string, now: number): { sid: string, store: InStatement } {
+  const sid = newSecret()
+  const row = { secretHash: secretHash(sid), personId, createdAt: now, lastSeenAt: now }
+  return { sid, store: statement(useDatabase().read.insert(sessions).values(row)) }
+}
+
+/** The statement that ends every session of a person. */
+export function endSessionsOf(personId: string): InStatement {
+  return statement(useDatabase().read.delete(sessions).where(eq(sessions.personId, personId)))
+}
+
+/** The statement that ends one session. */
+export function endSession(sid: string): InStatement {
+  return statement(useDatabase().read.delete(sessions).where(eq(sessions.secretHash, secretHash(sid))))
+}
+
+/** Who is signed in with a secret, or null: unknown, ended, too old, or the person is turned off. */
+export async function personOfSession(sid: string, now: number): Promise<User | null> {
+  const [row] = await useDatabase().read.select({ session: sessions, person: people }).from(sessions)
+    .innerJoin(people, eq(people.id, sessions.personId))
+    .where(eq(sessions.secretHash, secretHash(sid))).limit(1)
+  if (!row?.person.active) return null
+  if (!sessionStands(row.session, rolesOf(row.person), now)) return null
+  if (now - row.session.lastSeenAt >= SEEN_INTERVAL) markSeen(row.session.secretHash, now)
+  return userOf(row.person)
+}
+
+/** Not waited for: reading goes on where the disk is full. */
+function markSeen(hash: string, now: number): void {
+  const { read, write } = useDatabase()
+  write([statement(read.update(sessions).set({ lastSeenAt: now }).where(eq(sessions.secretHash, hash)))])
+    .catch(error => console.error('A session could not be marked as seen:', error))
+}
