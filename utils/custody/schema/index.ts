@@ -1,0 +1,44 @@
+import type { z } from 'zod'
+import type { EventKind } from '../kinds'
+import { details as corrected } from './corrected'
+import { details as drawn } from './drawn'
+import { details as emptied } from './emptied'
+import { details as filled } from './filled'
+import { details as handedOver } from './handedOver'
+import { details as labelled } from './labelled'
+import { details as lost } from './lost'
+import { details as moved } from './moved'
+import { details as received } from './received'
+import { details as reclaimed } from './reclaimed'
+import { details as registered } from './registered'
+import { details as retested } from './retested'
+import { details as returned } from './returned'
+import { details as sentForReclaim } from './sentForReclaim'
+import { details as sentForTest } from './sentForTest'
+import { details as weighed } from './weighed'
+
+/** The schema of each kind's details. */
+export const DETAILS = {
+  'registered': registered,
+  'labelled': labelled,
+  'received': received,
+  'moved': moved,
+  'handed-over': handedOver,
+  'weighed': weighed,
+  'filled': filled,
+  'drawn': drawn,
+  'emptied': emptied,
+  'lost': lost,
+  'sent-for-reclaim': sentForReclaim,
+  'reclaimed': reclaimed,
+  'returned': returned,
+  'sent-for-test': sentForTest,
+  'retested': retested,
+  'corrected': corrected,
+} satisfies Record<EventKind, z.ZodType>
+
+/** What an event of a kind says. */
+export type DetailsOf<K extends EventKind> = z.output<(typeof DETAILS)[K]>
+
+export { parseEvent } from './parseEvent'
+export type { EventParse } from './parseEvent'
