@@ -1,0 +1,46 @@
+import type { FleetQuery } from '../contract/custody'
+import { CONDITION_WORDS, LIFECYCLE_WORDS } from '../custody/words'
+import { addMonths, formatMonth } from '../quantity/month'
+import { FLEET_FILTERS, type FleetFilter } from './fleetAddress'
+
+/** One filter that is set, as the end of "No cylinder is ...". */
+export interface FilterWords { key: FleetFilter, words: string }
+
+const FINDING_FILTER_WORDS: Record<string, string> = {
+  'stop': 'under a stop',
+  'caution': 'in need of attention',
+  'overfill': 'overfilled',
+  'nearly-full': 'full or nearly full',
+  'not-seen': 'unseen lately',
+  'weight-not-known': 'without a known weight',
+  'retest-overdue': 'late for its retest',
+  'retest-soon': 'soon due for its retest',
+}
+
+/** The filters of a fleet question, each in words. */
+export function filtersInWords(query: FleetQuery, places: readonly { id: string, name: string }[]): FilterWords[] {
+  return FLEET_FILTERS.flatMap((key) => {
+    const value = query[key]
+    return value === undefined ? [] : [{ key, words: words(key, value, places) }]
+  })
+}
+
+/** The change that clears one filter. */
+export function withoutFilter(key: FleetFilter): Partial<Record<FleetFilter, null>> {
+  return { [key]: null }
+}
+
+function words(key: FleetFilter, value: string, places: readonly { id: string, name: string }[]): string {
+  switch (key) {
+    case 'q': return `found by “${value}”`
+    case 'place': return `at ${places.find(place => place.id === value)?.name ?? 'that place'}`
+    case 'holder': return 'with that person'
+    case 'refrigerant': return `with ${value} in it`
+    case 'condition': return `of condition ${CONDITION_WORDS[value as keyof typeof CONDITION_WORDS]}`
+    case 'lifecycle': return LIFECYCLE_WORDS[value as keyof typeof LIFECYCLE_WORDS]
+    case 'dueBefore': return `due by the end of ${formatMonth(addMonths(value, -1))}`
+    case 'finding': return FINDING_FILTER_WORDS[value] ?? `marked ${value.replaceAll('-', ' ')}`
+    case 'owner': return 'of that owner'
+    case 'label': return `labelled ${value}`
+  }
+}

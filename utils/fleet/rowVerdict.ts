@@ -1,0 +1,109 @@
+import type { CylinderRow, Lifecycle } from '../custody/cylinderView'
+import type { FindingCode } from '../custody/finding'
+import { scaleAccuracyGrams } from '../quantity/scale'
+
+/** A status of the screen and the word beside its shape. */
+export interface RowVerdict { kind: 'ok' | 'att' | 'stop' | 'unk', text: string }
+
+const DAY_MS = 86_400_000
+
+const LIFECYCLE_VERDICTS: Partial<Record<Lifecycle, RowVerdict>> = {
+  condemned: { kind: 'stop', text: 'Condemned' },
+  rejected: { kind: 'stop', text: 'Rejected at its test' },
+  quarantined: { kind: 'stop', text: 'Set apart' },
+  retired: { kind: 'unk', text: 'Retired' },
+  missing: { kind: 'unk', text: 'Missing' },
+}
+
+const STOP_WORDS: Partial<Record<FindingCode, string>> = {
+  'overfill': 'Overfilled',
+  'pressure-class': 'Pressure too high for it',
+  'spec-not-for-gas': 'Not made for this gas',
+  'not-refillable': 'Never to be refilled',
+  'not-marked-flammable': 'Not marked flammable',
+  'second-refrigerant': 'Two refrigerants in it',
+  'unknown-onto-known': 'Something unknown in it',
+  'retest-overdue': 'Retest overdue',
+  'retest-unknown': 'No test date known',
+  'early-test': 'Test it before use',
+  'wet': 'Wet, evacuate it',
+  'rejected': 'Rejected at its test',
+  'condemned': 'Condemned',
+  'quarantined': 'Set apart',
+  'code-on-two': 'Label on two cylinders',
+  'unsupervised': 'Trainee without supervisor',
+  'away': 'Used while away',
+  'after-end': 'Used after its end',
+}
+
+const CAUTION_WORDS: Partial<Record<FindingCode, string>> = {
+  'retest-overdue': 'Retest overdue',
+  'retest-soon': 'Usable, retest soon',
+  'not-registered': 'Not registered yet',
+  'registered-twice': 'Registered twice',
+  'toxic': 'Toxic refrigerant',
+  'two-owners': 'Two owners in it',
+  'old-tare-on-label': 'Old tare on its label',
+  'unsigned': 'Waits for a signature',
+  'nearly-full': 'Nearly full',
+}
+
+const CAUTION_ORDER = Object.keys(CAUTION_WORDS) as FindingCode[]
+
+/**
+ * The one line that the fleet says of a cylinder: the gravest thing known of it, in words.
+ *
+ * Order: an end of its life, a stop, what is not known, a caution, and only then that it may be used. `now` is the
+ * present instant in milliseconds, from which the days without an event are counted.
+ */
+export function rowVerdict(row: CylinderRow, now: number): RowVerdict {
+  const ended = LIFECYCLE_VERDICTS[row.lifecycle]
+  if (ended) return ended
+  const away = awayWord(row)
+  if (row.worstFinding?.severity === 'stop') {
+    const word = STOP_WORDS[row.worstFinding.code] ?? 'Not to be used'
+    return { kind: 'stop', text: away ? `${away}, ${lowerFirst(word)}` : word }
+  }
+  if (away) return { kind: 'unk', text: away }
+  return notKnown(row, now) ?? caution(row) ?? { kind: 'ok', text: row.nothingInIt ? 'Empty, usable' : 'Usable' }
+}
+
+/** Whether a cylinder is full on the screen: less room in it than the scale can tell. */
+export function isFull(row: CylinderRow): boolean {
+  if (row.roomGrams === null && (row.netGrams === null || row.fillLimitGrams === null)) return false
+  const room = row.roomGrams ?? row.fillLimitGrams! - row.netGrams!
+  if (row.netGrams === null || row.tareWeightGrams === null) return false
+  return room >= 0 && room < scaleAccuracyGrams(row.tareWeightGrams + row.netGrams)
+}
+
+/** Whole days since the last event of a cylinder; null where it has none. */
+export function daysSinceLastEvent(row: CylinderRow, now: number): number | null {
+  return row.lastEventAt === null ? null : Math.max(0, Math.floor((now - Date.parse(row.lastEventAt)) / DAY_MS))
+}
+
+function awayWord(row: CylinderRow): string | null {
+  if (row.lifecycle === 'at-reclaim') return 'At the reclaimer'
+  if (row.lifecycle === 'at-test') return 'At the test station'
+  return null
+}
+
+function notKnown(row: CylinderRow, now: number): RowVerdict | null {
+  if (!row.nothingInIt && row.refrigerant === null) return { kind: 'unk', text: 'Unknown, no limit' }
+  if (row.findingCodes.includes('not-seen')) {
+    const days = daysSinceLastEvent(row, now)
+    return { kind: 'unk', text: days === null ? 'Not seen' : days >= 90 ? `Missing? ${days} days` : `Not seen for ${days} days` }
+  }
+  if (row.tareWeightGrams === null || row.waterCapacityGrams === null) return { kind: 'unk', text: 'Stamp not known, no limit' }
+  if (!row.nothingInIt && row.netGrams === null) return { kind: 'unk', text: 'Not weighed' }
+  return null
+}
+
+function caution(row: CylinderRow): RowVerdict | null {
+  if (row.findingCodes.includes('nearly-full') && isFull(row)) return { kind: 'att', text: 'Full' }
+  const code = CAUTION_ORDER.find(known => row.findingCodes.includes(known))
+  return code ? { kind: 'att', text: CAUTION_WORDS[code]! } : null
+}
+
+function lowerFirst(text: string): string {
+  return text.charAt(0).toLowerCase() + text.slice(1)
+}

@@ -1,0 +1,124 @@
+import type { MassReading } from '../quantity/mass'
+import { readMonthMark } from '../quantity/monthMark'
+import type { Month } from '../quantity/month'
+import type { Condition, Ownership } from '../custody/cylinderView'
+import type { Stamp } from '../capacity/types'
+import { splitSpec } from '../requalification/specs'
+
+/** One test mark as it is typed from the collar. */
+export interface MarkDraft { month: string, rin: string, suffix: string }
+
+/** What a person has typed of a collar stamp and of the cylinder that carries it. */
+export interface RegistrationDraft {
+  serial: string
+  serialUnreadable: boolean
+  maker: string
+  /** As stamped, 'DOT-4BA400'. */
+  spec: string
+  tareWeight: MassReading | null
+  waterCapacity: MassReading | null
+  made: string
+  marks: MarkDraft[]
+  flammableMarked: boolean | null
+  floatSwitch: boolean | null
+  valve: string
+  ownership: Ownership
+  ownerId: string
+  dedicatedTo: string
+  /** No default: what is in it is asked. */
+  contents: 'evacuated' | 'unknown' | 'refrigerant' | null
+  refrigerant: string
+  condition: Condition
+  gross: MassReading | null
+  placeId: string
+}
+
+/** What `registered` says of a cylinder. */
+export interface RegistrationDetails {
+  stamp: Stamp
+  marks?: { month: Month, rin?: string, suffix?: string }[]
+  ownership: Ownership
+  ownerId?: string
+  dedicatedTo?: string
+  contents?: 'evacuated' | 'unknown' | { refrigerant: string, condition: Condition }
+  gross?: MassReading
+}
+
+/** Words beside a field, by its name. */
+export type FieldErrors = Partial<Record<string, string>>
+
+/** A form with nothing typed yet. */
+export function emptyDraft(): RegistrationDraft {
+  return {
+    serial: '', serialUnreadable: false, maker: '', spec: '', tareWeight: null, waterCapacity: null, made: '',
+    marks: [{ month: '', rin: '', suffix: '' }], flammableMarked: null, floatSwitch: null, valve: '',
+    ownership: 'own', ownerId: '', dedicatedTo: '', contents: null, refrigerant: '', condition: 'clean', gross: null, placeId: '',
+  }
+}
+
+/**
+ * What a draft says, or what has to be mended before it can be recorded.
+ *
+ * Errors: only what is missing or cannot be read. What is merely unlikely is for {@link registrationDoubts}.
+ */
+export function readDraft(draft: RegistrationDraft, thisMonth: Month): { details: RegistrationDetails } | { errors: FieldErrors } {
+  const errors: FieldErrors = {}
+  const spec = splitSpec(draft.spec)
+  const made = draft.made.trim() === '' ? null : readMonthMark(draft.made, thisMonth)
+  const typedMarks = draft.marks.filter(mark => mark.month.trim() || mark.rin.trim() || mark.suffix.trim())
+  const marks = typedMarks.map(mark => ({ ...mark, read: readMonthMark(mark.month, thisMonth) }))
+
+  if (draft.serial.trim() === '' && !draft.serialUnreadable) errors.serial = 'Copy the serial, or say that it cannot be read.'
+  if (draft.spec.trim() === '') errors.spec = 'Copy the specification, such as DOT-4BA400.'
+  else if (!spec) errors.spec = 'No specification of the list begins like this. Copy it with its DOT, such as DOT-4BA400.'
+  if (draft.made.trim() !== '' && !made) errors.made = 'Write month and year, such as 03-21.'
+  if (marks.some(mark => !mark.read)) errors.marks = 'Write month and year of each test, such as 04-26.'
+  if (marks.some(mark => mark.rin.trim() !== '' && !isRin(mark.rin))) errors.marks ??= 'A RIN is a letter and three digits, such as A123.'
+  if (draft.contents === null) errors.contents = 'Say what is in it. If nobody knows, choose “unknown”.'
+  if (draft.contents === 'refrigerant' && draft.refrigerant === '') errors.refrigerant = 'Choose the refrigerant.'
+  if (draft.ownership !== 'own' && draft.ownerId === '') errors.ownerId = 'Choose whose it is.'
+  if (draft.placeId === '') errors.placeId = 'Choose where it stands.'
+  if (Object.keys(errors).length > 0 || !spec) return { errors }
+
+  return {
+    details: {
+      stamp: stampOf(draft, spec, made),
+      ...(marks.length ? { marks: marks.map(mark => markOf(mark.read!, mark)) } : {}),
+      ownership: draft.ownership,
+      ...(draft.ownership === 'own' ? {} : { ownerId: draft.ownerId }),
+      ...(draft.dedicatedTo ? { dedicatedTo: draft.dedicatedTo } : {}),
+      contents: draft.contents === 'refrigerant' ? { refrigerant: draft.refrigerant, condition: draft.condition } : draft.contents!,
+      ...(draft.gross ? { gross: draft.gross } : {}),
+    },
+  }
+}
+
+function stampOf(draft: RegistrationDraft, spec: { spec: string, servicePressurePsig: number | null }, made: Month | null): Stamp {
+  return {
+    serial: draft.serialUnreadable ? null : draft.serial.trim(),
+    ...(draft.serialUnreadable ? { serialUnreadable: true } : {}),
+    ...(draft.maker.trim() ? { maker: draft.maker.trim() } : {}),
+    spec: spec.spec,
+    servicePressurePsig: spec.servicePressurePsig,
+    tareWeight: draft.tareWeight,
+    waterCapacity: draft.waterCapacity,
+    madeMonth: made,
+    // Not seen counts as not marked: it only ever refuses, never permits.
+    flammableMarked: draft.flammableMarked === true,
+    ...(draft.floatSwitch === null ? {} : { floatSwitch: draft.floatSwitch }),
+    ...(draft.valve.trim() ? { valve: draft.valve.trim() } : {}),
+  }
+}
+
+function markOf(month: Month, mark: MarkDraft) {
+  return {
+    month,
+    ...(mark.rin.trim() ? { rin: mark.rin.trim().toUpperCase() } : {}),
+    ...(mark.suffix.trim() ? { suffix: mark.suffix.trim().toUpperCase() } : {}),
+  }
+}
+
+/** Whether a text is a requalifier identification number: a letter and three digits. Source: 49 CFR 180.213(d). */
+export function isRin(text: string): boolean {
+  return /^[A-Z]\d{3}$/.test(text.trim().toUpperCase())
+}
