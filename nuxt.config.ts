@@ -35,6 +35,7 @@ export default defineNuxtConfig({
   compatibilityDate: '2026-01-01',
   nitro: {
     esbuild: { options: { target: 'es2022' } },
+    typescript: { tsConfig: { include: ['../types/auth.d.ts'] } },
     hooks: {
       // Nitro traces packages, not our migration files.
       compiled(nitro) {

@@ -1,7 +1,8 @@
-import { hashPassword as hash, passwordNeedsReHash, verifyPassword } from '#imports'
 import { problem } from '../http/problem'
 import { createHashQueue, TooManyHashes } from './hashQueue'
 import { newSecret } from './secret'
+
+// hashPassword, verifyPassword and passwordNeedsReHash are nuxt-auth-utils'; it gives them as auto-imports only.
 
 /** One hash takes 128 MiB and most of a second of one core (scrypt, N = 2^17, r = 8, p = 1). */
 const inTurn = createHashQueue({ atOnce: 2, mostWaiting: 16 })
@@ -10,7 +11,7 @@ let dummy: Promise<string> | null = null
 
 /** The hash of a password, with its salt and cost in it (PHC string). */
 export function hashNewPassword(password: string): Promise<string> {
-  return queued(() => hash(normalised(password)))
+  return queued(() => hashPassword(normalised(password)))
 }
 
 /**
@@ -30,7 +31,7 @@ export function isOutdated(stored: string): boolean {
 
 /** Made at start, so that the first unknown person takes no longer than others. */
 export function dummyHash(): Promise<string> {
-  dummy ??= hash(newSecret())
+  dummy ??= hashPassword(newSecret())
   return dummy
 }
 

@@ -1,6 +1,7 @@
 import { getCookie, type H3Event } from 'h3'
-import { clearUserSession, getUserSession, setUserSession } from '#imports'
 import type { Environment } from '../environment'
+
+// getUserSession, setUserSession and clearUserSession are nuxt-auth-utils'; it gives them as auto-imports only.
 
 /**
  * Tells the session package the cookie's name and whether it is Secure; it reads both from these variables at each
