@@ -22,6 +22,13 @@ describe('a curve through the rows of a table', () => {
     expect(valueOnCurve(square, 1.5)).toBeCloseTo(2.21875, 12)
   })
 
+  it('weighs the slopes by the widths where rows stand unevenly, worked by hand', () => {
+    // Slopes 1, 3, 3 over widths 1, 2, 1; at 1: (5 + 4) / (5/1 + 4/3) = 27/19; at 3: 3; at the middle
+    // (1 + 7)/2 + 2 x (27/19 - 3)/8 = 274/76.
+    const uneven = [{ x: 0, y: 0 }, { x: 1, y: 1 }, { x: 3, y: 7 }, { x: 4, y: 10 }]
+    expect(valueOnCurve(uneven, 2)).toBeCloseTo(274 / 76, 12)
+  })
+
   it('takes three points for the slope at an end, worked by hand', () => {
     // At 0: (3 x 1 - 3) / 2 = 0, held at 0; at 1: 1.5; at the middle 1/2 + (0 - 1.5)/8 = 0.3125.
     const square = [0, 1, 2, 3].map(x => ({ x, y: x * x }))
