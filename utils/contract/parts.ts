@@ -3,6 +3,9 @@ import { z } from 'zod'
 /** A UUID in lower case. */
 export const id = z.uuid('must be an id (a UUID)').transform(value => value.toLowerCase())
 
+/** The path of a thing by its id. */
+export const idParams = z.strictObject({ id })
+
 /** A line of text that a person typed: trimmed, without control characters. */
 export function line(longest: number) {
   return z.string().trim().min(1, 'must not be empty').max(longest, `must be at most ${longest} characters`)
@@ -25,3 +28,8 @@ export const massReading = z.discriminatedUnion('unit', [
   z.strictObject({ unit: z.literal('lb-oz'), lb: z.number().int().nonnegative().max(100_000), oz: z.number().nonnegative().lt(16) }),
   z.strictObject({ unit: z.literal('kg'), value: z.number().nonnegative().finite().max(50_000) }),
 ])
+
+/** Whether no id stands twice in a list. */
+export function eachOnce(ids: readonly string[]): boolean {
+  return new Set(ids).size === ids.length
+}

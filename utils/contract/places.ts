@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { id, line } from './parts'
+import { id, line, type Page } from './parts'
 
 export const PLACE_KINDS = ['shop', 'rack', 'van', 'site', 'firm'] as const
 export const FIRM_KINDS = ['reclaimer', 'requalifier', 'supplier', 'customer', 'carrier'] as const
@@ -12,13 +12,22 @@ export const placeBody = z.strictObject({
   parentId: id.nullish(),
   technicianId: id.nullish(),
 })
-/** PATCH /api/places/{id}. */
+export type NewPlace = z.output<typeof placeBody>
+/** PATCH /api/places/{id}. 409 for turning off a place where cylinders stand, and for a firm's own place. */
 export const placeChange = z.strictObject({
   name: line(80).optional(),
   parentId: id.nullish(),
   technicianId: id.nullish(),
   active: z.boolean().optional(),
 })
+export type PlaceChange = z.output<typeof placeChange>
+
+/** GET /api/places?active=true|false and GET /api/firms?active=&kind= : the whole list, by name. */
+export const placesQuery = z.strictObject({ active: z.enum(['true', 'false']).optional() })
+export const firmsQuery = z.strictObject({ active: z.enum(['true', 'false']).optional(), kind: z.enum(FIRM_KINDS).optional() })
+
+export type PlacesAnswer = Page<Place>
+export type FirmsAnswer = Page<Firm>
 
 export interface Place {
   id: string
@@ -33,7 +42,7 @@ export interface Place {
   cylinders: number
 }
 
-/** POST /api/firms: makes the firm and its place. */
+/** POST /api/firms: makes the firm and its place. A RIN belongs to a requalifier. */
 export const firmBody = z.strictObject({
   id: id.optional(),
   name: line(120),
@@ -45,6 +54,8 @@ export const firmBody = z.strictObject({
 })
 /** PATCH /api/firms/{id}. */
 export const firmChange = firmBody.omit({ id: true, kind: true }).partial().extend({ active: z.boolean().optional() })
+export type NewFirm = z.output<typeof firmBody>
+export type FirmChange = z.output<typeof firmChange>
 
 export interface Firm {
   id: string
@@ -56,4 +67,6 @@ export interface Firm {
   rin: string | null
   placeId: string
   active: boolean
+  /** Cylinders there now. */
+  cylinders: number
 }

@@ -1,0 +1,31 @@
+import { eq } from 'drizzle-orm'
+import { places } from '~~/drizzle/schema'
+import type { Place, PlaceChange } from '~~/utils/contract/places'
+import { statement, type Database } from '../database/database'
+import { directory } from '../directory/directory'
+import { problem } from '../http/problem'
+import { placeErrors } from './placeErrors'
+import { placeById } from './places'
+
+/**
+ * Changes a place of ours.
+ *
+ * Errors: 404; 409 for a firm's own place, and for turning off a place where cylinders stand; 422 for what it names.
+ */
+export async function changePlace(db: Database, id: string, change: PlaceChange): Promise<Place> {
+  // What is checked here must still hold when it is written.
+  await db.exclusive(async (commit) => {
+    const place = await placeById(db, id)
+    if (!place) throw problem(404, 'No such place', 'It may have been written wrongly.')
+    if (place.firmId !== null) throw problem(409, 'This place belongs to a firm', 'Change the firm; its place follows.')
+    if (change.active === false && place.active && place.cylinders > 0) {
+      throw problem(409, 'Cylinders stand there', `Move the ${place.cylinders} away first; then it can be turned off.`)
+    }
+    const { name = place.name, parentId = place.parentId, technicianId = place.technicianId, active = place.active } = change
+    const errors = placeErrors(await directory(db, true), { id, kind: place.kind, parentId, technicianId })
+    if (errors.length > 0) throw problem(422, 'This place cannot be', 'Mend what is named.', errors)
+    await commit([statement(db.read.update(places).set({ name, parentId, technicianId, active }).where(eq(places.id, id)))])
+  })
+  await directory(db, true)
+  return (await placeById(db, id))!
+}

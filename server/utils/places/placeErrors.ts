@@ -1,0 +1,24 @@
+import type { Place } from '~~/utils/contract/places'
+import type { ProblemError } from '~~/utils/contract/problem'
+import type { Directory } from '../directory/directory'
+
+/** Why a place cannot be as told: who or what it names must be there, and no place stands inside itself. */
+export function placeErrors(from: Directory, place: Pick<Place, 'id' | 'kind' | 'parentId' | 'technicianId'>): ProblemError[] {
+  const errors: ProblemError[] = []
+  if (place.parentId !== null && !from.places.has(place.parentId)) errors.push({ path: 'parentId', message: 'no such place' })
+  else if (isInside(from, place.parentId, place.id)) errors.push({ path: 'parentId', message: 'a place cannot stand inside itself' })
+  if (place.technicianId !== null) {
+    if (!from.people.has(place.technicianId)) errors.push({ path: 'technicianId', message: 'no such person' })
+    if (place.kind !== 'van') errors.push({ path: 'technicianId', message: 'only a van has a technician' })
+  }
+  return errors
+}
+
+function isInside(from: Directory, startId: string | null, id: string): boolean {
+  const seen = new Set<string>()
+  for (let at = startId; at !== null && !seen.has(at); at = from.places.get(at)?.parentId ?? null) {
+    if (at === id) return true
+    seen.add(at)
+  }
+  return false
+}
