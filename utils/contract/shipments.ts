@@ -2,9 +2,9 @@ import { z } from 'zod'
 import type { CylinderRow } from '../custody/cylinderView'
 import type { Finding } from '../custody/finding'
 import type { MassReading } from '../quantity/mass'
-import { id, line, massReading } from './parts'
+import { eachOnce, id, line, massReading, page, type Page } from './parts'
 
-const cylinderIds = z.array(id).max(200)
+const cylinderIds = z.array(id).max(200).refine(ids => eachOnce(ids), 'must name each cylinder once')
 
 /** POST /api/shipments: a draft. */
 export const shipmentBody = z.strictObject({ id: id.optional(), toFirmId: id, cylinderIds: cylinderIds.default([]), note: line(500).nullish() })
@@ -15,7 +15,8 @@ export const shipmentLinesBody = z.strictObject({ cylinderIds })
 export const dispatchBody = z.strictObject({
   occurredAt: z.iso.datetime({ offset: true }),
   deviceNow: z.iso.datetime({ offset: true }).optional(),
-  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, expects: z.number().int().nonnegative(), gross: massReading })).min(1).max(200),
+  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, expects: z.number().int().nonnegative(), gross: massReading })).min(1).max(200)
+    .refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
 /** POST /api/shipments/{id}/receipt: the reclaimer has taken it over; its figures stand beside ours. */
@@ -30,10 +31,20 @@ export const receiptBody = z.strictObject({
     acceptedNet: massReading.optional(),
     grade: line(80).optional(),
     price: z.number().nonnegative().finite().optional(),
-  })).min(1).max(200),
+  })).min(1).max(200).refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
-export type ShipmentState = 'draft' | 'dispatched' | 'received' | 'cancelled'
+export const SHIPMENT_STATES = ['draft', 'dispatched', 'received', 'cancelled'] as const
+export type ShipmentState = (typeof SHIPMENT_STATES)[number]
+
+/** GET /api/shipments: the newest first. */
+export const shipmentsQuery = z.strictObject({ ...page, state: z.enum(SHIPMENT_STATES).optional() })
+
+export type NewShipment = z.output<typeof shipmentBody>
+export type ShipmentDispatch = z.output<typeof dispatchBody>
+export type ShipmentReceipt = z.output<typeof receiptBody>
+export type ShipmentsQuery = z.output<typeof shipmentsQuery>
+export type ShipmentsAnswer = Page<Shipment>
 
 export interface ShipmentLine {
   cylinder: CylinderRow

@@ -1,9 +1,9 @@
 import { z } from 'zod'
 import type { CylinderRow } from '../custody/cylinderView'
 import type { Finding } from '../custody/finding'
-import { id, line, massReading } from './parts'
+import { eachOnce, id, line, massReading, page, type Page } from './parts'
 
-const cylinderIds = z.array(id).max(200)
+const cylinderIds = z.array(id).max(200).refine(ids => eachOnce(ids), 'must name each cylinder once')
 
 /** POST /api/test-lots: a draft. */
 export const testLotBody = z.strictObject({ id: id.optional(), requalifierId: id, cylinderIds: cylinderIds.default([]), note: line(500).nullish() })
@@ -14,7 +14,8 @@ export const testLotLinesBody = z.strictObject({ cylinderIds })
 export const testLotDispatchBody = z.strictObject({
   occurredAt: z.iso.datetime({ offset: true }),
   deviceNow: z.iso.datetime({ offset: true }).optional(),
-  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, expects: z.number().int().nonnegative() })).min(1).max(200),
+  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, expects: z.number().int().nonnegative() })).min(1).max(200)
+    .refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
 /** POST /api/test-lots/{id}/return: what the test station found, and the cylinders back at a place of ours. */
@@ -32,10 +33,20 @@ export const testLotReturnBody = z.strictObject({
     suffix: z.string().trim().max(3).optional(),
     newTare: massReading.optional(),
     gross: massReading.optional(),
-  })).min(1).max(200),
+  })).min(1).max(200).refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
-export type TestLotState = 'draft' | 'sent' | 'back' | 'cancelled'
+export const TEST_LOT_STATES = ['draft', 'sent', 'back', 'cancelled'] as const
+export type TestLotState = (typeof TEST_LOT_STATES)[number]
+
+/** GET /api/test-lots: the newest first. */
+export const testLotsQuery = z.strictObject({ ...page, state: z.enum(TEST_LOT_STATES).optional() })
+
+export type NewTestLot = z.output<typeof testLotBody>
+export type TestLotDispatch = z.output<typeof testLotDispatchBody>
+export type TestLotReturn = z.output<typeof testLotReturnBody>
+export type TestLotsQuery = z.output<typeof testLotsQuery>
+export type TestLotsAnswer = Page<TestLot>
 
 export interface TestLot {
   id: string
@@ -49,6 +60,15 @@ export interface TestLot {
   cylinders: number
 }
 
-export interface TestLotWithLines extends TestLot {
-  lines: { cylinder: CylinderRow, version: number, because: Finding[], result: { result: string, month: string } | null }[]
+export interface TestLotLine {
+  cylinder: CylinderRow
+  version: number
+  /** Why it may not go to the test; empty when it may. */
+  because: Finding[]
+  /** Still on the lot: not given back yet. */
+  open: boolean
+  /** Of the `retested` event that this lot brought. */
+  result: { result: string, month: string } | null
 }
+
+export interface TestLotWithLines extends TestLot { lines: TestLotLine[] }

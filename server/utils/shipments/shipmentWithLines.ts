@@ -1,0 +1,40 @@
+import type { Access } from '~~/utils/access/roles'
+import type { ShipmentLine, ShipmentWithLines } from '~~/utils/contract/shipments'
+import { mayShip } from '~~/utils/custody/plan'
+import { cylinderViews } from '../custody/cylinderViews'
+import { cylinderRows } from '../custody/fleet'
+import type { Database } from '../database/database'
+import { receiptsOf } from './receipts'
+import { theShipment } from './shipments'
+
+/** A shipment with its lines: while a draft each with why it may not leave, afterwards each as it left. Errors: 404. */
+export async function shipmentWithLines(db: Database, id: string, access: Access, nowMs: number): Promise<ShipmentWithLines> {
+  const [shipment, stored] = await Promise.all([theShipment(db, id), storedLines(db, id)])
+  const ids = stored.map(line => line.cylinderId)
+  const [rows, views, receipts] = await Promise.all([
+    cylinderRows(db, ids, nowMs),
+    shipment.state === 'draft' ? cylinderViews(db, ids, { access, nowMs }) : [],
+    receiptsOf(db, id),
+  ])
+  const because = new Map(views.map(view => [view.id, mayShip(view).because]))
+  const lines = stored.flatMap(({ cylinderId, sent }): ShipmentLine[] => {
+    const found = rows.get(cylinderId)
+    if (!found) return []
+    return [{
+      cylinder: found.row,
+      version: found.version,
+      because: because.get(cylinderId) ?? [],
+      sent,
+      received: receipts.get(cylinderId) ?? null,
+    }]
+  })
+  return { ...shipment, lines }
+}
+
+/** The lines as stored, in their order. */
+export async function storedLines(db: Database, shipmentId: string): Promise<{ cylinderId: string, sent: ShipmentLine['sent'] }[]> {
+  const { rows } = await db.readClient.execute({
+    sql: 'SELECT cylinder_id, sent FROM shipment_lines WHERE shipment_id = ? ORDER BY position', args: [shipmentId],
+  })
+  return rows.map(row => ({ cylinderId: row[0] as string, sent: row[1] === null ? null : JSON.parse(row[1] as string) as ShipmentLine['sent'] }))
+}

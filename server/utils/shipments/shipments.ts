@@ -1,0 +1,50 @@
+import type { Row } from '@libsql/client'
+import type { Shipment, ShipmentsAnswer, ShipmentsQuery } from '~~/utils/contract/shipments'
+import { instantText, pageByNumber, pageFilter } from '../cylinder-lists/paging'
+import type { Database } from '../database/database'
+import { problem } from '../http/problem'
+
+const NET = `CASE shipments.state WHEN 'draft' THEN cylinders.net_grams ELSE json_extract(line.sent, '$.netGrams') END`
+
+/** A shipment with the count of its lines and the sum of their known nets: as they are while a draft, as they left afterwards. */
+const SELECT_SHIPMENTS = `SELECT shipments.id, shipments.number, shipments.to_firm_id, firms.name AS to_name, shipments.state, shipments.note,
+    shipments.created_at, shipments.dispatched_at, people.name AS dispatched_by_name, shipments.received_at,
+    count(line.cylinder_id) AS line_count, sum(${NET}) AS net_grams
+  FROM shipments
+  JOIN firms ON firms.id = shipments.to_firm_id
+  LEFT JOIN people ON people.id = shipments.dispatched_by
+  LEFT JOIN shipment_lines AS line ON line.shipment_id = shipments.id
+  LEFT JOIN cylinders ON cylinders.id = line.cylinder_id`
+
+/** The shipments, the newest first. Errors: 400 for a cursor that is none of ours. */
+export async function listShipments(db: Database, query: ShipmentsQuery): Promise<ShipmentsAnswer> {
+  const filter = pageFilter('shipment', query)
+  const { rows } = await db.readClient.execute({
+    sql: `${SELECT_SHIPMENTS} WHERE ${filter.sql} GROUP BY shipments.id ORDER BY shipments.number DESC LIMIT ?`,
+    args: [...filter.args, query.limit + 1],
+  })
+  return pageByNumber(rows.map(shipmentOf), query.limit)
+}
+
+/** One shipment. Errors: 404. */
+export async function theShipment(db: Database, id: string): Promise<Shipment> {
+  const { rows } = await db.readClient.execute({ sql: `${SELECT_SHIPMENTS} WHERE shipments.id = ? GROUP BY shipments.id`, args: [id] })
+  if (!rows[0]) throw problem(404, 'No such shipment', 'It may have been written wrongly.')
+  return shipmentOf(rows[0])
+}
+
+function shipmentOf(row: Row): Shipment {
+  return {
+    id: row['id'] as string,
+    number: row['number'] as number,
+    to: { id: row['to_firm_id'] as string, name: row['to_name'] as string },
+    state: row['state'] as Shipment['state'],
+    note: row['note'] as string | null,
+    createdAt: instantText(row['created_at'])!,
+    dispatchedAt: instantText(row['dispatched_at']),
+    dispatchedBy: row['dispatched_by_name'] as string | null,
+    receivedAt: instantText(row['received_at']),
+    cylinders: row['line_count'] as number,
+    netGrams: row['net_grams'] as number | null,
+  }
+}
