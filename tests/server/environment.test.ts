@@ -1,0 +1,64 @@
+import { describe, expect, it } from 'vitest'
+import { EnvironmentError, readEnvironment } from '../../server/utils/environment'
+
+const GOOD = { NUXT_SESSION_PASSWORD: 'b7e1c94a5d20f3886a4e0c17d95f2b63' }
+
+function refusal(variables: Record<string, string>): string {
+  try {
+    readEnvironment({ ...GOOD, ...variables })
+    return ''
+  }
+  catch (error) {
+    expect(error).toBeInstanceOf(EnvironmentError)
+    return (error as Error).message
+  }
+}
+
+describe('the settings of the server', () => {
+  it('are a local file and plain http on this machine where nothing is set', () => {
+    expect(readEnvironment(GOOD)).toMatchObject({
+      databaseUrl: 'file:./data/collarbook.db', publicUrl: 'http://localhost:3000', secure: false, demo: false, proxyHops: 0,
+    })
+  })
+
+  it('count an empty one as not set', () => {
+    expect(readEnvironment({ ...GOOD, DATABASE_URL: '', SMTP_URL: '', COLLARBOOK_DEMO: '' }).databaseUrl).toBe('file:./data/collarbook.db')
+  })
+
+  it('are for https where the public address is, without its slash', () => {
+    expect(readEnvironment({ ...GOOD, PUBLIC_URL: 'https://cylinders.example/' })).toMatchObject({ publicUrl: 'https://cylinders.example', secure: true })
+  })
+
+  it('refuse a session password of 31 characters and take one of 32', () => {
+    const long = 'b7e1c94a5d20f3886a4e0c17d95f2b63'
+    expect(refusal({ NUXT_SESSION_PASSWORD: long.slice(1) })).toMatch(/^NUXT_SESSION_PASSWORD must have at least 32/)
+    expect(refusal({ NUXT_SESSION_PASSWORD: long })).toBe('')
+  })
+
+  it('refuse a missing session password, an example and one that repeats itself, and never print it', () => {
+    expect(refusal({ NUXT_SESSION_PASSWORD: '' })).toMatch(/NUXT_SESSION_PASSWORD must be set/)
+    const example = 'replace-me-with-32-random-characters'
+    expect(refusal({ NUXT_SESSION_PASSWORD: example })).toMatch(/is an example/)
+    expect(refusal({ NUXT_SESSION_PASSWORD: example })).not.toContain(example)
+    expect(refusal({ NUXT_SESSION_PASSWORD: 'abababababababababababababababababab' })).toMatch(/repeats itself/)
+  })
+
+  it.each(['http://db.example:8080', 'ws://db.example', 'postgres://db.example', 'data.db', 'file:', 'http://127.0.0.1.evil.example'])('refuse the database address %s', (url) => {
+    expect(refusal({ DATABASE_URL: url })).toMatch(/^DATABASE_URL must/)
+  })
+
+  it.each(['http://127.0.0.1:8080', 'http://localhost:8080', 'http://[::1]:8080', 'libsql://db.example', 'https://db.example', 'file:/srv/collarbook.db'])('take the database address %s', (url) => {
+    expect(refusal({ DATABASE_URL: url })).toBe('')
+  })
+
+  it('name every wrong one at once', () => {
+    const told = refusal({ PORT: 'http', PUBLIC_URL: 'cylinders.example', COLLARBOOK_DEMO: 'yes', SMTP_URL: 'mail.example' })
+    for (const name of ['PORT', 'PUBLIC_URL', 'COLLARBOOK_DEMO', 'SMTP_URL']) expect(told).toContain(name)
+  })
+
+  it('refuse a public address with a path, and a mail server without a sender', () => {
+    expect(refusal({ PUBLIC_URL: 'https://firm.example/collarbook' })).toMatch(/^PUBLIC_URL/)
+    expect(refusal({ SMTP_URL: 'smtp://mail.example' })).toMatch(/^MAIL_FROM/)
+    expect(refusal({ SMTP_URL: 'smtp://mail.example', MAIL_FROM: 'cylinders@harbor.example' })).toBe('')
+  })
+})
