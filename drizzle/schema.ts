@@ -139,9 +139,9 @@ export const custodyEvents = sqliteTable('custody_events', {
   supervisorId: text('supervisor_id'),
   trainee: integer('trainee', { mode: 'boolean' }).notNull(),
   placeId: text('place_id'),
-  /** Canonical JSON (RFC 8785) of the event as received. */
+  /** Canonical JSON (RFC 8785) of the event as understood: readings as entered, ids in lower case. */
   body: text('body').notNull(),
-  /** SHA-256 of body, hexadecimal. */
+  /** SHA-256 (hexadecimal) of the canonical JSON as received: by it a repetition is known. */
   contentHash: text('content_hash').notNull(),
   /** hash of the cylinder's version before this one; '' for the first. */
   prevHash: text('prev_hash').notNull(),

@@ -1,0 +1,10 @@
+import { foldInput } from '../../../utils/custody/custodyLog'
+import { cylinderParams, theCylinder } from '../../../utils/custody/theCylinder'
+import { useDatabase } from '../../../utils/database/currentDatabase'
+import { apiRoute } from '../../../utils/http/apiRoute'
+
+/** GET /api/cylinders/{ref}/fold: its recorded events, for a browser that judges a draft by the same rules. */
+export default apiRoute({ permission: 'fleet:read', params: cylinderParams }, async ({ params }) => {
+  const db = useDatabase()
+  return foldInput(db, await theCylinder(db, params.ref))
+})

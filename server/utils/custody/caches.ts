@@ -1,0 +1,97 @@
+import type { InStatement, InValue } from '@libsql/client'
+import type { AnyRecordedEvent } from '../../../utils/custody/event'
+import { fold, type FoldContext, type FoldResult } from '../../../utils/custody/fold'
+import type { Movement } from '../../../utils/custody/movement'
+import { cacheRow } from '../../../utils/custody/row'
+import { foldContext } from './foldContext'
+import type { Group } from './group'
+import type { LogRow } from './logRow'
+import type { Guard } from './posting'
+
+const NO_GUARD: Guard = { sql: '1', args: [] }
+
+/**
+ * What the caches must hold after a group of events. Every statement stands under the condition that the last event of
+ * its cylinder was written: the loser of a race changes no cache.
+ */
+export function cacheStatements(group: Group): InStatement[] {
+  const context = foldContext(group.directory)
+  return group.touched().flatMap(({ cylinderId, events, added }) => {
+    const last = added.at(-1)!
+    const guard: Guard = {
+      sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)',
+      args: [last.id, last.cylinder_id, last.version, last.hash],
+    }
+    return cylinderCache(cylinderId, events, added, context, guard)
+  })
+}
+
+/** The caches of one cylinder, made from its whole log and under no condition: for a rebuild. */
+export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], context: FoldContext): InStatement[] {
+  return cylinderCache(cylinderId, events, null, context, NO_GUARD)
+}
+
+function cylinderCache(
+  cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] | null, context: FoldContext, guard: Guard,
+): InStatement[] {
+  const folded = fold([...events], context)
+  return [
+    upsertCylinder(cylinderId, folded, context, guard),
+    ...movementStatements(cylinderId, folded, added, guard),
+    ...claimStatements(cylinderId, folded, added, guard),
+  ]
+}
+
+function upsertCylinder(cylinderId: string, { state }: FoldResult, context: FoldContext, guard: Guard): InStatement {
+  const columns: Record<string, InValue> = { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state) }
+  const names = Object.keys(columns)
+  return {
+    sql: `INSERT INTO cylinders (${names.join(', ')}) SELECT ${names.map(() => '?').join(', ')} WHERE ${guard.sql}
+      ON CONFLICT (id) DO UPDATE SET ${names.filter(name => name !== 'id').map(name => `${name} = excluded.${name}`).join(', ')}`,
+    args: [...Object.values(columns), ...guard.args],
+  }
+}
+
+/** Only the new events' movements where these came last in effect; all of the cylinder's where they changed what came after. */
+function movementStatements(cylinderId: string, folded: FoldResult, added: readonly LogRow[] | null, guard: Guard): InStatement[] {
+  if (added && cameLast(folded, added)) {
+    const ids = new Set(added.map(row => row.id))
+    return folded.movements.filter(one => ids.has(one.eventId)).map(one => insertMovement(cylinderId, one, guard))
+  }
+  return [
+    { sql: `DELETE FROM movements WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
+    ...folded.movements.map(one => insertMovement(cylinderId, one, guard)),
+  ]
+}
+
+function cameLast(folded: FoldResult, added: readonly LogRow[]): boolean {
+  if (added.some(row => row.kind === 'corrected' || row.kind === 'registered')) return false
+  const ids = new Set(added.map(row => row.id))
+  return folded.steps.slice(-added.length).every(step => ids.has(step.eventId))
+}
+
+function insertMovement(cylinderId: string, one: Movement, guard: Guard): InStatement {
+  return {
+    sql: `INSERT INTO movements (cylinder_id, event_id, ordinal, cause, refrigerant, owner_id, grams, at, apart) SELECT ?, ?, ?, ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
+    args: [cylinderId, one.eventId, one.ordinal, one.cause, one.refrigerant, one.ownerId, one.grams, one.at, one.apart ? 1 : 0, ...guard.args],
+  }
+}
+
+/** The codes that the cylinder's `labelled` events claim, where a new event can have changed them. */
+function claimStatements(cylinderId: string, { labelClaims }: FoldResult, added: readonly LogRow[] | null, guard: Guard): InStatement[] {
+  if (added && !added.some(row => row.kind === 'labelled' || row.kind === 'corrected')) return []
+  return [
+    { sql: `DELETE FROM label_claims WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
+    ...labelClaims.map(claim => ({
+      sql: `INSERT INTO label_claims (event_id, code, cylinder_id, effective_at, device_id, device_seq) SELECT ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
+      args: [claim.eventId, claim.code, cylinderId, claim.effectiveAt, claim.deviceId, claim.deviceSeq, ...guard.args],
+    })),
+  ]
+}
+
+function snakeCase(columns: object): Record<string, InValue> {
+  return Object.fromEntries(Object.entries(columns).map(([key, value]) => [
+    key.replace(/[A-Z]/g, letter => `_${letter.toLowerCase()}`),
+    typeof value === 'boolean' ? Number(value) : value as InValue,
+  ]))
+}

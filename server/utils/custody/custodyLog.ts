@@ -1,0 +1,83 @@
+import type { CustodyLogAnswer, FoldInput } from '../../../utils/contract/custody'
+import type { LogLine, Named } from '../../../utils/custody/cylinderView'
+import type { AnyRecordedEvent } from '../../../utils/custody/event'
+import { fold } from '../../../utils/custody/fold'
+import type { Database } from '../database/database'
+import { directory, namesOf } from '../directory/directory'
+import { codesOnTwo } from './findCylinder'
+import { foldContext } from './foldContext'
+import { logRow, recordedEvent, SELECT_LOG } from './logRow'
+
+/** A cylinder's recorded events, in the order of recording. */
+export async function recordedEvents(db: Database, cylinderId: string): Promise<AnyRecordedEvent[]> {
+  const result = await db.readClient.execute({ sql: `${SELECT_LOG} WHERE cylinder_id = ? ORDER BY version`, args: [cylinderId] })
+  return result.rows.map(row => recordedEvent(logRow(row)))
+}
+
+/** A cylinder's custody log for people: in order of effect, newest first, each line numbered by recording. */
+export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }): Promise<CustodyLogAnswer> {
+  const [events, from] = await Promise.all([recordedEvents(db, cylinderId), directory(db)])
+  const { state, steps } = fold(events, foldContext(from))
+  const byId = new Map(events.map(event => [event.id, event]))
+  const names = namesOf(from)
+  const lines = steps.flatMap((step): LogLine[] => {
+    const event = byId.get(step.eventId)
+    if (!event) return []
+    return [{
+      id: event.id,
+      seq: event.seq,
+      version: event.version,
+      kind: event.kind,
+      occurredAt: instantWithOffset(event.occurredAt, event.occurredOffsetMinutes),
+      effectiveAt: new Date(event.effectiveAt).toISOString(),
+      recordedAt: new Date(event.recordedAt).toISOString(),
+      clockSkewSeconds: event.clockSkewSeconds,
+      author: names.person(event.actorId),
+      postedBy: names.person(event.postedBy),
+      supervisor: event.supervisorId ? names.person(event.supervisorId) : null,
+      place: event.placeId ? names.place(event.placeId) : null,
+      note: event.note,
+      practice: event.practice,
+      confirmed: event.confirmed,
+      details: event.details,
+      names: namesInside(event.details as Record<string, unknown>, names),
+      netBeforeGrams: step.before.netGrams,
+      netAfterGrams: step.after.netGrams,
+      findings: step.findings,
+      correction: step.correction,
+    }]
+  }).reverse()
+  const start = page.cursor ? Math.max(0, lines.findIndex(line => line.id === page.cursor) + 1) : 0
+  const items = lines.slice(start, start + page.limit)
+  return {
+    items,
+    nextCursor: start + page.limit < lines.length ? items.at(-1)?.id ?? null : null,
+    total: lines.length,
+    cylinder: { id: cylinderId, labelCode: state.labelCode, serial: state.stamp?.serial ?? null, version: events.at(-1)?.version ?? 0 },
+  }
+}
+
+/** What a browser needs to judge a draft event by the same rules as the server. */
+export async function foldInput(db: Database, cylinderId: string): Promise<FoldInput> {
+  const [events, shared] = await Promise.all([recordedEvents(db, cylinderId), codesOnTwo(db, [cylinderId])])
+  return { events, codesOnTwo: [...shared.get(cylinderId) ?? []] }
+}
+
+/** The instant in the offset in which its author wrote it. */
+function instantWithOffset(ms: number, offsetMinutes: number): string {
+  const sign = offsetMinutes < 0 ? '-' : '+'
+  const size = Math.abs(offsetMinutes)
+  const offset = offsetMinutes === 0 ? 'Z' : `${sign}${String(Math.floor(size / 60)).padStart(2, '0')}:${String(size % 60).padStart(2, '0')}`
+  return new Date(ms + offsetMinutes * 60_000).toISOString().replace('Z', offset)
+}
+
+/** Names of the places, people and firms that an event's details name. */
+function namesInside(details: Record<string, unknown>, names: ReturnType<typeof namesOf>): Record<string, string> {
+  const readers: [RegExp, (id: string) => Named][] = [
+    [/PlaceId$/, names.place], [/HolderId$/, names.person], [/(FirmId|ownerId|OfRefrigerantId|requalifierId)$/, names.firm],
+  ]
+  return Object.fromEntries(Object.entries(details).flatMap(([key, value]) => {
+    const reader = readers.find(([pattern]) => pattern.test(key))
+    return reader && typeof value === 'string' ? [[value, reader[1](value).name]] : []
+  }))
+}

@@ -1,0 +1,43 @@
+import { normaliseLabelCode } from '../../../utils/label/code'
+import type { Database } from '../database/database'
+
+const UUID = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/
+
+/** Which claim of a code counts: the earliest in effect. */
+export const CLAIM_ORDER = 'effective_at, device_id, device_seq, event_id'
+
+/**
+ * The cylinder that a reference names: its id, else its label code in any case and grouping, a replaced one included,
+ * else its stamped serial where only one cylinder has it. null where nothing or more than one answers.
+ */
+export async function findCylinder(db: Database, ref: string): Promise<string | null> {
+  const id = ref.toLowerCase()
+  if (UUID.test(id)) {
+    const result = await db.readClient.execute({ sql: 'SELECT id FROM cylinders WHERE id = ?', args: [id] })
+    return (result.rows[0]?.[0] as string | undefined) ?? null
+  }
+  const code = normaliseLabelCode(ref)
+  if (code) {
+    const result = await db.readClient.execute({ sql: `SELECT cylinder_id FROM label_claims WHERE code = ? ORDER BY ${CLAIM_ORDER} LIMIT 1`, args: [code] })
+    if (result.rows[0]) return result.rows[0][0] as string
+  }
+  const bySerial = await db.readClient.execute({ sql: 'SELECT id FROM cylinders WHERE serial = ? LIMIT 2', args: [ref] })
+  return bySerial.rows.length === 1 ? bySerial.rows[0]![0] as string : null
+}
+
+/** The codes among these cylinders' that more than one cylinder claims, by cylinder. */
+export async function codesOnTwo(db: Database, cylinderIds: readonly string[]): Promise<Map<string, Set<string>>> {
+  const answer = new Map<string, Set<string>>()
+  if (cylinderIds.length === 0) return answer
+  const result = await db.readClient.execute({
+    sql: `SELECT DISTINCT mine.cylinder_id, mine.code FROM label_claims mine
+      JOIN label_claims other ON other.code = mine.code AND other.cylinder_id <> mine.cylinder_id
+      WHERE mine.cylinder_id IN (${cylinderIds.map(() => '?').join(', ')})`,
+    args: [...cylinderIds],
+  })
+  for (const row of result.rows) {
+    const id = row[0] as string
+    answer.set(id, (answer.get(id) ?? new Set()).add(row[1] as string))
+  }
+  return answer
+}

@@ -1,0 +1,143 @@
+import type { InValue, Row } from '@libsql/client'
+import type { FleetAnswer, FleetQuery } from '../../../utils/contract/custody'
+import { rowToday, type CachedRow } from '../../../utils/custody/row'
+import type { Database } from '../database/database'
+import { directory, namesOf, type Directory } from '../directory/directory'
+import { fleetFilter, type FleetFilter } from './fleetFilter'
+import { dateBounds, type DateBounds } from './dateBounds'
+
+/** Columns of the cache in the order in which a row reads them. */
+const COLUMNS = [
+  'id', 'version', 'label_code', 'serial', 'spec', 'place_id', 'holder_id', 'owner_id', 'refrigerant', 'condition', 'lifecycle',
+  'nothing_in_it', 'net_grams', 'fill_limit_grams', 'governing_rule', 'room_grams', 'stop_weight_grams', 'exact_stop_weight',
+  'tare_weight_grams', 'water_capacity_grams', 'due_month', 'retest_state', 'last_event_at', 'last_event_kind', 'last_seen_at',
+  'finding_codes', 'severity',
+] as const
+
+/** What the list sorts by, as SQL; each gives a value that is never null, so that a cursor can stand on it. */
+const SORT_SQL: Record<FleetQuery['sort'], (bounds: DateBounds) => { sql: string, args: InValue[] }> = {
+  'urgency': urgency,
+  'code': () => plain(`coalesce(c.label_code, '~')`),
+  'serial': () => plain(`coalesce(c.serial, '~')`),
+  'refrigerant': () => plain(`coalesce(c.refrigerant, '~')`),
+  'net': () => plain('coalesce(c.net_grams, -1)'),
+  'room': () => plain('coalesce(c.room_grams, -1000000000)'),
+  'due': () => plain(`coalesce(c.due_month, '9999-99')`),
+  'place': () => plain(`coalesce(p.name, '~')`),
+  'last-event': () => plain('coalesce(c.last_event_at, 0)'),
+}
+
+/** The fleet, filtered and sorted by the cache of the fold and today's date. */
+export async function fleet(db: Database, query: FleetQuery, nowMs: number): Promise<FleetAnswer> {
+  const from = await directory(db)
+  const bounds = dateBounds(from, nowMs)
+  const filter = fleetFilter(query, bounds)
+  const sort = SORT_SQL[query.sort](bounds)
+  const down = query.order === 'desc'
+  const after = cursorOf(query.cursor)
+  const seek = after ? `AND (${sort.sql}, c.id) ${down ? '<' : '>'} (?, ?)` : ''
+  const [page, count] = await db.readClient.batch([
+    {
+      sql: `SELECT ${COLUMNS.map(column => `c.${column}`).join(', ')}, ${sort.sql} AS sort_value
+        FROM cylinders c LEFT JOIN places p ON p.id = c.place_id
+        WHERE ${filter.sql} ${seek}
+        ORDER BY sort_value ${down ? 'DESC' : 'ASC'}, c.id ${down ? 'DESC' : 'ASC'} LIMIT ?`,
+      args: [...sort.args, ...filter.args, ...(after ? [...sort.args, after.value, after.id] : []), query.limit + 1],
+    },
+    { sql: `SELECT count(*) FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql}`, args: filter.args },
+  ], 'read')
+  const rows = page?.rows ?? []
+  const shown = rows.slice(0, query.limit)
+  const last = shown.at(-1)
+  return {
+    items: shown.map(row => rowOf(row, from, nowMs).row),
+    nextCursor: rows.length > query.limit && last ? cursorText(last['sort_value'] as InValue, last['id'] as string) : null,
+    total: count?.rows[0]?.[0] as number,
+  }
+}
+
+/** Rows of the fleet by id, with the version of each. */
+export async function cylinderRows(db: Database, ids: readonly string[], nowMs: number) {
+  if (ids.length === 0) return new Map<string, ReturnType<typeof rowOf>>()
+  const from = await directory(db)
+  const result = await db.readClient.execute({
+    sql: `SELECT ${COLUMNS.join(', ')} FROM cylinders WHERE id IN (${ids.map(() => '?').join(', ')})`,
+    args: [...ids],
+  })
+  return new Map(result.rows.map(row => [row['id'] as string, rowOf(row, from, nowMs)]))
+}
+
+/** Rows of the fleet that a filter lets through, at most `limit`, in the order of their ids. */
+export async function cylinderRowsWhere(db: Database, filter: FleetFilter, limit: number, nowMs: number) {
+  const from = await directory(db)
+  const result = await db.readClient.execute({
+    sql: `SELECT ${COLUMNS.map(column => `c.${column}`).join(', ')} FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql} ORDER BY c.id LIMIT ?`,
+    args: [...filter.args, limit],
+  })
+  return result.rows.map(row => rowOf(row, from, nowMs).row)
+}
+
+function rowOf(row: Row, from: Directory, nowMs: number) {
+  const cached: CachedRow = {
+    id: row['id'] as string,
+    version: row['version'] as number,
+    labelCode: row['label_code'] as string | null,
+    serial: row['serial'] as string | null,
+    spec: row['spec'] as string | null,
+    placeId: row['place_id'] as string | null,
+    holderId: row['holder_id'] as string | null,
+    ownerId: row['owner_id'] as string | null,
+    refrigerant: row['refrigerant'] as string | null,
+    condition: row['condition'] as CachedRow['condition'],
+    lifecycle: row['lifecycle'] as CachedRow['lifecycle'],
+    nothingInIt: row['nothing_in_it'] === 1,
+    netGrams: row['net_grams'] as number | null,
+    fillLimitGrams: row['fill_limit_grams'] as number | null,
+    governingRule: row['governing_rule'] as CachedRow['governingRule'],
+    roomGrams: row['room_grams'] as number | null,
+    stopWeightGrams: row['stop_weight_grams'] as number | null,
+    exactStopWeight: row['exact_stop_weight'] as string | null,
+    tareWeightGrams: row['tare_weight_grams'] as number | null,
+    waterCapacityGrams: row['water_capacity_grams'] as number | null,
+    dueMonth: row['due_month'] as CachedRow['dueMonth'],
+    retestState: row['retest_state'] as CachedRow['retestState'],
+    lastEventAt: row['last_event_at'] as number | null,
+    lastEventKind: row['last_event_kind'] as CachedRow['lastEventKind'],
+    lastSeenAt: row['last_seen_at'] as number | null,
+    findingCodes: row['finding_codes'] as string,
+    severity: row['severity'] as number,
+  }
+  const today = { nowMs, timeZone: from.timeZone, retest: from.retest, names: namesOf(from) }
+  return { row: rowToday(cached, today), version: cached.version }
+}
+
+function plain(sql: string) {
+  return { sql, args: [] }
+}
+
+/** 0 a stop, 1 a caution, 2 no number known, 3 nothing to do: by the same dates as a row's worst finding. */
+function urgency(bounds: DateBounds) {
+  return {
+    sql: `(CASE WHEN c.severity = 2 OR (c.retest_state = 'dated' AND c.due_month < ? AND c.nothing_in_it = 1 AND ${IN_USE}) THEN 0
+      WHEN c.severity = 1 OR (c.retest_state = 'dated' AND c.due_month <= ? AND ${IN_USE}) OR (c.last_seen_at < ? AND c.lifecycle NOT IN ('missing', 'at-reclaim', 'at-test', 'condemned', 'retired')) THEN 1
+      WHEN c.net_grams IS NULL THEN 2 ELSE 3 END)`,
+    args: [bounds.thisMonth, bounds.lastSoonMonth, bounds.notSeenBefore] as InValue[],
+  }
+}
+
+const IN_USE = `c.lifecycle NOT IN ('condemned', 'retired')`
+
+function cursorText(value: InValue, id: string): string {
+  return Buffer.from(JSON.stringify([value, id])).toString('base64url')
+}
+
+function cursorOf(text: string | undefined): { value: InValue, id: string } | null {
+  if (!text) return null
+  try {
+    const [value, id] = JSON.parse(Buffer.from(text, 'base64url').toString('utf8')) as [InValue, string]
+    return (typeof value === 'string' || typeof value === 'number') && typeof id === 'string' ? { value, id } : null
+  }
+  catch {
+    return null
+  }
+}

@@ -1,0 +1,34 @@
+import type { FoldContext } from '../../../utils/custody/fold'
+import type { ViewContext } from '../../../utils/custody/view'
+import type { Access } from '../../../utils/access/roles'
+import { CATALOGUE } from '../../../utils/refrigerant/allRefrigerants'
+import { fillPolicyAt, namesOf, type Directory } from '../directory/directory'
+
+/** What the fold takes from outside the log. */
+export function foldContext(from: Directory): FoldContext {
+  return {
+    catalogue: CATALOGUE,
+    scales: from.scales,
+    policyAt: at => fillPolicyAt(from.fillPolicies, at),
+  }
+}
+
+/** What a view takes from outside the log: today, the firm's rules, and who is asking. */
+export function viewContext(from: Directory, more: {
+  nowMs: number
+  access: Access | null
+  codesOnTwo?: ReadonlySet<string>
+  askedRefrigerant?: string | null
+}): ViewContext {
+  return {
+    ...foldContext(from),
+    nowMs: more.nowMs,
+    timeZone: from.timeZone,
+    policyNow: fillPolicyAt(from.fillPolicies, more.nowMs),
+    retest: from.retest,
+    askedRefrigerant: more.askedRefrigerant ?? null,
+    access: more.access,
+    codesOnTwo: more.codesOnTwo ?? new Set(),
+    names: namesOf(from),
+  }
+}

@@ -1,0 +1,92 @@
+import type { InStatement, Row } from '@libsql/client'
+import type { AnyRecordedEvent } from '../../../utils/custody/event'
+
+/** The columns of the custody log, in the order in which they are written and hashed. */
+export const LOG_COLUMNS = [
+  'seq', 'id', 'cylinder_id', 'version', 'device_id', 'device_seq', 'kind', 'occurred_at', 'occurred_offset_minutes',
+  'clock_skew_seconds', 'effective_at', 'recorded_at', 'actor_id', 'posted_by', 'supervisor_id', 'trainee', 'place_id',
+  'body', 'content_hash', 'prev_hash', 'hash',
+] as const
+
+/** One line of the log as stored. */
+export type LogRow = {
+  seq: number
+  id: string
+  cylinder_id: string
+  version: number
+  device_id: string
+  device_seq: number
+  kind: string
+  occurred_at: number
+  occurred_offset_minutes: number
+  clock_skew_seconds: number
+  effective_at: number
+  recorded_at: number
+  actor_id: string
+  posted_by: string
+  supervisor_id: string | null
+  /** 0 or 1. */
+  trainee: number
+  place_id: string | null
+  body: string
+  content_hash: string
+  prev_hash: string
+  hash: string
+}
+
+export const SELECT_LOG = `SELECT ${LOG_COLUMNS.join(', ')} FROM custody_events`
+
+/** A row of {@link SELECT_LOG}, as the driver gives it. */
+export function logRow(row: Row): LogRow {
+  return Object.fromEntries(LOG_COLUMNS.map((column, index) => [column, row[index]])) as LogRow
+}
+
+/**
+ * The event that a line holds.
+ *
+ * Errors: throws where the body is not JSON, which only tampering can cause.
+ */
+export function recordedEvent(row: LogRow): AnyRecordedEvent {
+  const body = JSON.parse(row.body) as {
+    note?: string
+    practice?: boolean
+    confirmed?: string[]
+    details?: Record<string, unknown>
+  }
+  return {
+    seq: row.seq,
+    id: row.id,
+    cylinderId: row.cylinder_id,
+    version: row.version,
+    kind: row.kind,
+    occurredAt: row.occurred_at,
+    occurredOffsetMinutes: row.occurred_offset_minutes,
+    clockSkewSeconds: row.clock_skew_seconds,
+    effectiveAt: row.effective_at,
+    recordedAt: row.recorded_at,
+    deviceId: row.device_id,
+    deviceSeq: row.device_seq,
+    actorId: row.actor_id,
+    postedBy: row.posted_by,
+    supervisorId: row.supervisor_id,
+    trainee: row.trainee === 1,
+    placeId: row.place_id,
+    note: body.note ?? null,
+    practice: body.practice ?? false,
+    confirmed: body.confirmed ?? [],
+    details: body.details ?? {},
+  } as AnyRecordedEvent
+}
+
+/**
+ * Writes a line if, and only if, the log still ends with the line that it was computed after.
+ * Answers a row when it was written and none when another process was first.
+ */
+export function insertLogRow(row: LogRow, newestId: string | null): InStatement {
+  return {
+    sql: `INSERT INTO custody_events (${LOG_COLUMNS.join(', ')}) SELECT ${LOG_COLUMNS.map(() => '?').join(', ')}
+      WHERE (SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1) IS ?
+      ON CONFLICT DO NOTHING RETURNING seq`,
+    args: [...LOG_COLUMNS.map(column => row[column]), newestId],
+  }
+}

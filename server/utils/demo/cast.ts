@@ -1,0 +1,82 @@
+import type { Access, Role } from '../../../utils/access/roles'
+import type { MassUnit } from '../../../utils/quantity/mass'
+import type { Random } from './random'
+
+// Everybody and every firm here is invented.
+
+export const DEMO_PASSWORD = 'demo-cylinders-2026'
+export const DEMO_TIME_ZONE = 'America/Chicago'
+export const DEMO_FIRM = { name: 'Ferrowick Refrigeration', telephone: '(555) 010-0142', timeZone: DEMO_TIME_ZONE, units: 'lb' as MassUnit }
+
+export interface DemoPerson {
+  id: string
+  email: string
+  name: string
+  roles: Role[]
+  trainee: boolean
+  certification: string | null
+  /** How this person reads a scale. */
+  reads: MassUnit
+}
+
+export interface DemoPlace { id: string, name: string, kind: 'shop' | 'rack' | 'van' | 'site' | 'firm', parentId?: string, firmId?: string, technicianId?: string }
+export interface DemoFirm { id: string, name: string, kind: 'reclaimer' | 'requalifier' | 'supplier' | 'customer' | 'carrier', telephone: string, email: string, address: string, rin?: string }
+
+export interface Cast {
+  people: Record<'warehouse' | 'technician' | 'second' | 'third' | 'manager' | 'auditor' | 'admin' | 'trainee', DemoPerson>
+  shops: [DemoPlace, DemoPlace]
+  racks: DemoPlace[]
+  vans: DemoPlace[]
+  sites: DemoPlace[]
+  firms: Record<'reclaimer' | 'otherReclaimer' | 'requalifier' | 'supplier' | 'dairy' | 'store', DemoFirm>
+  placeOf: (firm: DemoFirm) => DemoPlace
+  firmPlaces: DemoPlace[]
+}
+
+/** The people, places and firms of the demo. */
+export function castOf(random: Random, startAt: number): Cast {
+  const id = () => random.uuid(startAt)
+  const person = (email: string, name: string, roles: Role[], certification: string | null, reads: MassUnit, trainee = false): DemoPerson =>
+    ({ id: id(), email: `${email}@demo.example`, name, roles, trainee, certification, reads })
+  const people: Cast['people'] = {
+    warehouse: person('warehouse', 'Walt Hadley', ['warehouse'], null, 'lb'),
+    technician: person('technician', 'Dayo Okafor', ['technician'], 'Universal, 40 CFR 82.161', 'lb-oz'),
+    second: person('technician2', 'Ines Vauclair', ['technician'], 'Type II, 40 CFR 82.161', 'lb'),
+    third: person('technician3', 'Tobias Renn', ['technician'], 'Universal, 40 CFR 82.161', 'kg'),
+    manager: person('manager', 'Maren Sorrel', ['manager'], 'Universal, 40 CFR 82.161', 'lb'),
+    auditor: person('auditor', 'Ruth Amberly', ['auditor'], null, 'lb'),
+    admin: person('admin', 'Kit Osgood', ['admin'], null, 'lb'),
+    trainee: person('trainee', 'Pia Lindmark', ['technician'], null, 'lb', true),
+  }
+  const firm = (name: string, kind: DemoFirm['kind'], address: string, rin?: string): DemoFirm => {
+    const mailbox = name.toLowerCase().replace(/[^a-z]+/g, '-')
+    return { id: id(), name, kind, address, telephone: `(555) 010-0${random.whole(200, 899)}`, email: `dock@${mailbox}.example`, rin }
+  }
+  const firms: Cast['firms'] = {
+    reclaimer: firm('Halvern Reclaim', 'reclaimer', '4 Foundry Row'),
+    otherReclaimer: firm('Brindmoor Gas Recovery', 'reclaimer', '118 Canal Street'),
+    requalifier: firm('Oxbow Cylinder Testing', 'requalifier', '27 Kiln Lane', 'Z987'),
+    supplier: firm('Pellworth Supply', 'supplier', '9 Market Yard'),
+    dairy: firm('Dunmarrow Dairy', 'customer', '1 Creamery Road'),
+    store: firm('Wexley Cold Store', 'customer', '60 Harbour Way'),
+  }
+  const place = (name: string, kind: DemoPlace['kind'], more: Partial<DemoPlace> = {}): DemoPlace => ({ id: id(), name, kind, ...more })
+  const shops: Cast['shops'] = [place('North shop', 'shop'), place('South shop', 'shop')]
+  const racks = [
+    place('North shop, bay 1', 'rack', { parentId: shops[0].id }), place('North shop, bay 2', 'rack', { parentId: shops[0].id }),
+    place('North shop, set-apart rack', 'rack', { parentId: shops[0].id }), place('South shop, cage', 'rack', { parentId: shops[1].id }),
+  ]
+  const drivers = [people.technician, people.second, people.third, people.trainee]
+  const vans = Array.from({ length: 6 }, (_, index) => place(`Van ${String(index * 3 + 2).padStart(2, '0')}`, 'van', { technicianId: drivers[index]?.id }))
+  const firmPlaces = Object.values(firms).map(one => place(one.name, 'firm', { firmId: one.id }))
+  return {
+    people, shops, racks, vans, firms, firmPlaces,
+    sites: [place('Creamery plant room', 'site'), place('Harbour cold store, roof', 'site')],
+    placeOf: one => firmPlaces.find(spot => spot.firmId === one.id)!,
+  }
+}
+
+/** How a person of the cast appears to permissions. */
+export function demoAccess(person: DemoPerson): Access {
+  return { personId: person.id, roles: person.roles, trainee: person.trainee }
+}
