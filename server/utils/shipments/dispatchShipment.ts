@@ -9,7 +9,7 @@ import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { afterWeighing, type WeighedLine } from './afterWeighing'
 import { theShipment } from './shipments'
-import { storedLines } from './shipmentWithLines'
+import { shipmentLines } from './shipmentLines'
 
 /**
  * Sends a draft off: every line leaves with the weight just read, in one commit, or nothing does. The same request sent
@@ -27,7 +27,7 @@ export async function dispatchShipment(db: Database, id: string, body: ShipmentD
   const posting: Posting = { events, access, now, deviceNow: body.deviceNow === undefined ? null : Date.parse(body.deviceNow) }
   if (isRepeated) return refuseRefused(await append(db, { ...posting, dispatch: { alongside: () => [] } }))
 
-  refuseOtherLines(body.lines.map(line => line.cylinderId), (await storedLines(db, id)).map(line => line.cylinderId))
+  refuseOtherLines(body.lines.map(line => line.cylinderId), (await shipmentLines(db, id)).map(line => line.cylinderId))
   const lines = await afterWeighing(db, body.lines, access, now)
   refuseHeldBack(lines.map(line => line.because))
   const dispatchedAt = Math.min(Date.parse(body.occurredAt), now)
@@ -37,7 +37,7 @@ export async function dispatchShipment(db: Database, id: string, body: ShipmentD
   catch (error) {
     // The commit fails where the draft or its lines changed under us; then the reason is told, else the error itself.
     await refuseUnlessDraft(db, { kind: 'shipment', id })
-    refuseOtherLines(body.lines.map(line => line.cylinderId), (await storedLines(db, id)).map(line => line.cylinderId))
+    refuseOtherLines(body.lines.map(line => line.cylinderId), (await shipmentLines(db, id)).map(line => line.cylinderId))
     throw error
   }
 }

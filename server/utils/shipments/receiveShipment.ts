@@ -6,7 +6,7 @@ import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
 import { theShipment } from './shipments'
-import { storedLines } from './shipmentWithLines'
+import { shipmentLines } from './shipmentLines'
 
 /**
  * The reclaimer has taken a shipment over: its figures go into each cylinder's log and the lines are closed, in one
@@ -18,7 +18,7 @@ import { storedLines } from './shipmentWithLines'
 export async function receiveShipment(db: Database, id: string, body: ShipmentReceipt, access: Access, now: number): Promise<void> {
   const isRepeated = await areRecorded(db, body.lines.map(line => line.eventId))
   if (!isRepeated) await refuseUnlessDispatched(db, id)
-  refuseOtherLines(body.lines.map(line => line.cylinderId), (await storedLines(db, id)).map(line => line.cylinderId))
+  refuseOtherLines(body.lines.map(line => line.cylinderId), (await shipmentLines(db, id)).map(line => line.cylinderId))
 
   const events = body.lines.map(({ cylinderId, eventId, expects, ...figures }) => ({
     id: eventId, cylinderId, kind: 'reclaimed', occurredAt: body.occurredAt, expects, details: { shipmentId: id, ...figures },

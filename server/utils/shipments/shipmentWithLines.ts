@@ -5,11 +5,12 @@ import { cylinderViews } from '../custody/cylinderViews'
 import { cylinderRows } from '../custody/fleet'
 import type { Database } from '../database/database'
 import { receiptsOf } from './receipts'
+import { shipmentLines } from './shipmentLines'
 import { theShipment } from './shipments'
 
 /** A shipment with its lines: while a draft each with why it may not leave, afterwards each as it left. Errors: 404. */
 export async function shipmentWithLines(db: Database, id: string, access: Access, nowMs: number): Promise<ShipmentWithLines> {
-  const [shipment, stored] = await Promise.all([theShipment(db, id), storedLines(db, id)])
+  const [shipment, stored] = await Promise.all([theShipment(db, id), shipmentLines(db, id)])
   const ids = stored.map(line => line.cylinderId)
   const [rows, views, receipts] = await Promise.all([
     cylinderRows(db, ids, nowMs),
@@ -29,12 +30,4 @@ export async function shipmentWithLines(db: Database, id: string, access: Access
     }]
   })
   return { ...shipment, lines }
-}
-
-/** The lines as stored, in their order. */
-export async function storedLines(db: Database, shipmentId: string): Promise<{ cylinderId: string, sent: ShipmentLine['sent'] }[]> {
-  const { rows } = await db.readClient.execute({
-    sql: 'SELECT cylinder_id, sent FROM shipment_lines WHERE shipment_id = ? ORDER BY position', args: [shipmentId],
-  })
-  return rows.map(row => ({ cylinderId: row[0] as string, sent: row[1] === null ? null : JSON.parse(row[1] as string) as ShipmentLine['sent'] }))
 }

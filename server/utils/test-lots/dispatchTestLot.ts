@@ -10,7 +10,7 @@ import type { Guard, Posting } from '../custody/posting'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { theTestLot } from './testLots'
-import { storedLines } from './testLotWithLines'
+import { testLotLines } from './testLotLines'
 
 /**
  * Sends a draft off to the test station: every line in one commit, or nothing. The same request sent again changes nothing.
@@ -31,7 +31,7 @@ export async function dispatchTestLot(db: Database, id: string, body: TestLotDis
   if (isRepeated) return refuseRefused(await append(db, { ...posting, dispatch: { alongside: () => [] } }))
 
   const ids = body.lines.map(line => line.cylinderId)
-  refuseOtherLines(ids, (await storedLines(db, id)).map(line => line.cylinderId))
+  refuseOtherLines(ids, (await testLotLines(db, id)).map(line => line.cylinderId))
   refuseHeldBack(await reasonsOf(db, ids, access, now))
   const sentAt = Math.min(Date.parse(body.occurredAt), now)
   try {
@@ -40,7 +40,7 @@ export async function dispatchTestLot(db: Database, id: string, body: TestLotDis
   catch (error) {
     // The commit fails where the draft or its lines changed under us; then the reason is told, else the error itself.
     await refuseUnlessDraft(db, { kind: 'test-lot', id })
-    refuseOtherLines(ids, (await storedLines(db, id)).map(line => line.cylinderId))
+    refuseOtherLines(ids, (await testLotLines(db, id)).map(line => line.cylinderId))
     throw error
   }
 }

@@ -7,7 +7,7 @@ import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { problem } from '../http/problem'
 import { theTestLot } from './testLots'
-import { storedLines } from './testLotWithLines'
+import { testLotLines } from './testLotLines'
 
 const EVENTS_A_LINE = 2
 
@@ -79,7 +79,7 @@ function arrival(id: string, cylinderIds: readonly string[], backAt: number, gua
 async function refuseUnlessOut(db: Database, id: string, body: TestLotReturn): Promise<void> {
   const { state } = await theTestLot(db, id)
   if (state !== 'sent') throw problem(409, 'This lot is not at the test station', `It is ${state}.`)
-  const out = new Set((await storedLines(db, id)).filter(line => line.open).map(line => line.cylinderId))
+  const out = new Set((await testLotLines(db, id)).filter(line => line.open).map(line => line.cylinderId))
   const errors = body.lines.flatMap(({ cylinderId }, index) => out.has(cylinderId)
     ? []
     : [{ path: `lines.${index}.cylinderId`, message: 'does not stand on it, or is back already' }])

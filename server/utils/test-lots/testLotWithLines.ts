@@ -4,12 +4,13 @@ import { mayTest } from '~~/utils/custody/plan'
 import { cylinderViews } from '../custody/cylinderViews'
 import { cylinderRows } from '../custody/fleet'
 import type { Database } from '../database/database'
+import { testLotLines } from './testLotLines'
 import { testResultsOf } from './testResults'
 import { theTestLot } from './testLots'
 
 /** A test lot with its lines: while a draft each with why it may not go, afterwards each with what the test found. Errors: 404. */
 export async function testLotWithLines(db: Database, id: string, access: Access, nowMs: number): Promise<TestLotWithLines> {
-  const [lot, stored] = await Promise.all([theTestLot(db, id), storedLines(db, id)])
+  const [lot, stored] = await Promise.all([theTestLot(db, id), testLotLines(db, id)])
   const ids = stored.map(line => line.cylinderId)
   const [rows, views, results] = await Promise.all([
     cylinderRows(db, ids, nowMs),
@@ -24,15 +25,4 @@ export async function testLotWithLines(db: Database, id: string, access: Access,
     return [{ cylinder: row, version, because: because.get(cylinderId) ?? [], open, result: results.get(cylinderId) ?? null }]
   })
   return { ...lot, lines }
-}
-
-/** The lines as stored, in their order; one that is back is no longer open. */
-export async function storedLines(db: Database, lotId: string): Promise<{ cylinderId: string, open: boolean }[]> {
-  const { rows } = await db.readClient.execute({
-    sql: `SELECT line.cylinder_id, open_lines.list_id IS NOT NULL FROM test_lot_lines AS line
-      LEFT JOIN open_lines ON open_lines.cylinder_id = line.cylinder_id AND open_lines.list_id = line.lot_id
-      WHERE line.lot_id = ? ORDER BY line.position`,
-    args: [lotId],
-  })
-  return rows.map(row => ({ cylinderId: row[0] as string, open: row[1] === 1 }))
 }
