@@ -64,7 +64,7 @@ export default {
         primary: '24px 24px 6px 6px',
         plate: '30px 30px 6px 6px',
       },
-      borderWidth: { DEFAULT: 'var(--hair)', edge: 'max(1.5px, var(--hair))', foot: '4px' },
+      borderWidth: { DEFAULT: 'var(--hair)', thin: 'max(1.5px, var(--hair))', foot: '4px' },
       borderColor: { DEFAULT: 'var(--line)' },
       // Heights of what a hand presses: a row of the field, its main button, a row and a button of the desk.
       spacing: { row: '48px', primary: '64px', deskrow: '38px', desk: '40px' },

@@ -27,6 +27,8 @@ export type Beam = {
   nowLabel: string
   tareLabel: string | null
   stopLabel: string
+  /** The stop's figure stands over the flag where the poise would hide it. */
+  stopLabelAbove: boolean
 }
 
 const STEPS = [1, 2, 5, 10, 20, 50, 100, 200, 500, 1000]
@@ -50,6 +52,10 @@ export function layOutBeam(masses: BeamMasses, unit: MassUnit): Beam {
   const now = place(nowGrams)
   const stop = place(stopGrams)
   const stopLabel = short(stopGrams, unit, 'down')
+  const stopLabelAbove = overlaps(
+    { left: leftOf(stop, stopLabel), right: leftOf(stop, stopLabel) + width(stopLabel) },
+    { left: now - POISE_HALF_WIDTH, right: now + POISE_HALF_WIDTH },
+  )
   const nowLabel = `${short(nowGrams, unit, 'nearest')} now`
   const tareLabel = `${short(tareGrams, unit, 'nearest')} tare`
   return {
@@ -57,10 +63,11 @@ export function layOutBeam(masses: BeamMasses, unit: MassUnit): Beam {
     stop,
     filled: Math.min(now, stop),
     over: Math.max(0, now - stop),
-    ticks: ticks(tareGrams, endGrams, unit, place, label => clear(label, now, stop, stopLabel)),
+    ticks: ticks(tareGrams, endGrams, unit, place, label => clear(label, now, stop, stopLabelAbove ? '' : stopLabel)),
     nowLabel,
     tareLabel: leftOf(now, nowLabel) > width(tareLabel) + GAP ? tareLabel : null,
     stopLabel,
+    stopLabelAbove,
   }
 }
 
@@ -88,14 +95,19 @@ function width(label: string): number {
   return label.length * PERCENT_PER_CHARACTER
 }
 
+type Span = { left: number, right: number }
+
+function overlaps(a: Span, b: Span): boolean {
+  return a.left - GAP <= b.right && b.left - GAP <= a.right
+}
+
 type Label = { at: number, text: string }
 
 function clear(label: Label, now: number, stop: number, stopLabel: string): boolean {
-  const left = leftOf(label.at, label.text)
-  const right = left + width(label.text)
+  const own = { left: leftOf(label.at, label.text), right: leftOf(label.at, label.text) + width(label.text) }
+  const offPoise = !overlaps(own, { left: now - POISE_HALF_WIDTH, right: now + POISE_HALF_WIDTH })
   const stopLeft = leftOf(stop, stopLabel)
-  const offPoise = right + GAP < now - POISE_HALF_WIDTH || left - GAP > now + POISE_HALF_WIDTH
-  const offStop = right + GAP < stopLeft || left - GAP > stopLeft + width(stopLabel)
+  const offStop = !overlaps(own, { left: stopLeft, right: stopLeft + width(stopLabel) })
   return offPoise && offStop && label.at >= width(label.text) / 2 && label.at <= 100 - width(label.text) / 2
 }
 

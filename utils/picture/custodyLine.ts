@@ -1,0 +1,25 @@
+import type { LogLine } from '../custody/cylinderView'
+import { KIND_WORDS } from '../custody/words'
+import { formatMass, type MassUnit } from '../quantity/mass'
+
+/**
+ * One event in a few words: what was done and by how much the weight changed.
+ *
+ * Rounding: to the nearest division. @example 'Filled, +6.2 lb'
+ */
+export function eventInWords(line: LogLine, unit: MassUnit): string {
+  const word = KIND_WORDS[line.kind].done
+  const change = netChangeGrams(line)
+  return change ? `${word}, ${signedMass(change, unit)}` : word
+}
+
+/** By how much an event changed the known net; null where one of the two is not known. */
+export function netChangeGrams({ netBeforeGrams, netAfterGrams }: LogLine): number | null {
+  return netBeforeGrams === null || netAfterGrams === null ? null : netAfterGrams - netBeforeGrams
+}
+
+/** A mass with its sign, a plus as well as a minus. */
+export function signedMass(grams: number, unit: MassUnit): string {
+  const text = formatMass(grams, unit, 'nearest')
+  return grams > 0 ? `+${text}` : text
+}

@@ -1,0 +1,61 @@
+import type { CylinderView } from '../custody/cylinderView'
+import { MISSING_WORDS } from '../custody/words'
+import { formatMass, type MassUnit } from '../quantity/mass'
+import type { StatusKind } from './status'
+
+/** What a screen says of a cylinder first: one line, and where it keeps from filling, why in a sentence. */
+export interface Verdict {
+  kind: StatusKind
+  text: string
+  /** Stands in the place of the stop weight; null where that is given. */
+  reason: string | null
+}
+
+/**
+ * Whether something may go into a cylinder now, and how much, in one line.
+ *
+ * Rounding: the room down, an excess up.
+ */
+export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
+  const { capacity, contents } = view
+  const overfill = view.findings.find(finding => finding.code === 'overfill')
+  if (overfill) return { kind: 'stop', text: excessText(view, unit), reason: overfill.text }
+  if (!view.stamp) return { kind: 'unk', text: 'Not registered yet', reason: 'Its stamp is not in the log, so no weight can be given.' }
+
+  const refusal = capacity.refusals[0]
+  if (refusal) return { kind: 'stop', text: 'Do not fill', reason: refusal.text }
+  if (!contents.nothingInIt && contents.refrigerant === null) {
+    return { kind: 'stop', text: 'Do not fill: contents not known', reason: 'What is in it is not known. Nothing goes in until it is identified or emptied to a deep vacuum.' }
+  }
+
+  const missing = capacity.missing.filter(each => each !== 'weight')
+  if (capacity.stopWeightGrams === null) {
+    if (contents.nothingInIt && capacity.forRefrigerant === null) {
+      return { kind: 'ok', text: 'Nothing in it', reason: 'Choose the refrigerant that is to go in, and the weight to stop at stands here.' }
+    }
+    const what = missing.map(each => MISSING_WORDS[each]).join(' and ')
+    return { kind: 'unk', text: 'No stop weight', reason: what ? `Not known: ${what}.` : 'No rule has a figure for this refrigerant in this cylinder.' }
+  }
+  return roomVerdict(view, unit)
+}
+
+function roomVerdict({ capacity, contents, findings }: CylinderView, unit: MassUnit): Verdict {
+  const { roomGrams, forRefrigerant } = capacity
+  if (roomGrams === null) return { kind: 'att', text: 'Not weighed: the room is not known', reason: null }
+  const isNearlyFull = findings.some(finding => finding.code === 'nearly-full')
+  if (isNearlyFull && roomGrams <= (contents.uncertaintyGrams ?? 0)) return { kind: 'att', text: 'Full', reason: null }
+  const text = `Room for ${formatMass(roomGrams, unit, 'down')} of ${forRefrigerant ?? 'refrigerant'}`
+  return { kind: isNearlyFull ? 'att' : 'ok', text, reason: null }
+}
+
+function excessText({ capacity, contents }: CylinderView, unit: MassUnit): string {
+  const { fillLimitGrams } = capacity
+  if (fillLimitGrams === null || contents.netGrams === null || contents.netGrams <= fillLimitGrams) return 'Overfilled'
+  return `Overfilled by ${formatMass(contents.netGrams - fillLimitGrams, unit, 'up')}`
+}
+
+/** What stands at the right of the stamp plate: the refrigerant, or that there is none, or that it is not known. */
+export function contentsWord({ contents }: CylinderView): string {
+  if (contents.nothingInIt) return 'empty'
+  return contents.refrigerant ?? 'unknown'
+}
