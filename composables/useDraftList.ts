@@ -1,0 +1,76 @@
+import { ApiError, problemOf, useApi } from '~~/composables/useApi'
+import { useLoaded } from '~~/composables/useLoaded'
+import type { CylinderRow, CylinderView } from '~~/utils/contract/custody'
+import type { ProblemDetails } from '~~/utils/contract/problem'
+import { readScannedText } from '~~/utils/label/code'
+import { changedLines } from '~~/utils/shipment/changedLines'
+
+interface List { id: string, state: string, lines: { cylinder: CylinderRow, version: number }[] }
+
+/** A shipment or a test lot with its lines, and what may be done to it while it is a draft. */
+export function useDraftList<L extends List>(kind: 'shipments' | 'test-lots', id: string) {
+  const api = useApi()
+  const path = `/api/${kind}/${id}`
+  const loaded = useLoaded(`${kind}-${id}`, () => api.get<L>(path))
+  const busy = ref(false)
+  const problem = ref<ProblemDetails | null>(null)
+  /** What happened to its cylinders since they were looked at. */
+  const changes = ref<string[]>([])
+
+  /** Does something that answers with the list as it then is; a conflict shows what changed meanwhile. */
+  async function act(work: () => Promise<L>): Promise<boolean> {
+    busy.value = true
+    problem.value = null
+    changes.value = []
+    try {
+      loaded.data.value = await work()
+      return true
+    }
+    catch (error) {
+      problem.value = problemOf(error)
+      if (problem.value.status === 409) await lookAgain()
+      return false
+    }
+    finally {
+      busy.value = false
+    }
+  }
+
+  async function lookAgain() {
+    const before = loaded.data.value?.lines ?? []
+    await loaded.refresh()
+    changes.value = changedLines(before, loaded.data.value?.lines ?? [])
+  }
+
+  function ids(): string[] {
+    return loaded.data.value?.lines.map(line => line.cylinder.id) ?? []
+  }
+
+  /** Adds the cylinder with a code, or a serial, to the draft. */
+  function add(typed: string): Promise<boolean> {
+    return act(async () => {
+      const ref = readScannedText(typed)?.code ?? typed.trim()
+      const view = await api.get<CylinderView>(`/api/cylinders/${encodeURIComponent(ref)}`)
+      if (ids().includes(view.id)) throw new ApiError({ type: 'about:blank', title: 'It is on the list already', status: 422, detail: '' })
+      return api.put<L>(`${path}/lines`, { cylinderIds: [...ids(), view.id] })
+    })
+  }
+
+  function takeOff(cylinderIds: readonly string[]): Promise<boolean> {
+    return act(() => api.put<L>(`${path}/lines`, { cylinderIds: ids().filter(one => !cylinderIds.includes(one)) }))
+  }
+
+  function putBack(cylinderIds: readonly string[]): Promise<boolean> {
+    return act(() => api.put<L>(`${path}/lines`, { cylinderIds: [...new Set([...ids(), ...cylinderIds])] }))
+  }
+
+  function cancel(): Promise<boolean> {
+    return act(() => api.post<L>(`${path}/cancel`, {}))
+  }
+
+  function post(what: 'dispatch' | 'receipt' | 'return', body: unknown): Promise<boolean> {
+    return act(() => api.post<L>(`${path}/${what}`, body))
+  }
+
+  return { ...loaded, busy, actProblem: problem, changes, add, takeOff, putBack, cancel, post }
+}

@@ -1,0 +1,62 @@
+import { problemOf, useApi } from '~~/composables/useApi'
+import { deviceNow, usePostingStore } from '~~/stores/posting'
+import type { CylinderView, EventsAnswer } from '~~/utils/contract/custody'
+import type { MintAnswer } from '~~/utils/contract/labels'
+import type { ProblemDetails } from '~~/utils/contract/problem'
+import type { CustodyEvent } from '~~/utils/custody/event'
+
+/** A cylinder whose label is to be printed. */
+export interface ToLabel { id: string, labelCode: string | null, serial: string | null, placeId: string | null }
+
+/** Makes codes and gives a code to cylinders that have none. */
+export function useLabelling() {
+  const api = useApi()
+  const posting = usePostingStore()
+  const busy = ref(false)
+  const problem = ref<ProblemDetails | null>(null)
+
+  async function cylinders(ids: readonly string[]): Promise<ToLabel[]> {
+    const views = await Promise.all(ids.map(id => api.get<CylinderView>(`/api/cylinders/${id}`)))
+    return views.map(view => ({ id: view.id, labelCode: view.labelCode, serial: view.stamp?.serial ?? null, placeId: view.place?.id ?? null }))
+  }
+
+  /** Codes of blank labels. */
+  function mint(count: number): Promise<string[] | null> {
+    return attempt(async () => (await api.post<MintAnswer>('/api/labels', { count })).codes)
+  }
+
+  /** Gives each cylinder without a label a code of its own and records it; answers them as they then are. */
+  function label(all: readonly ToLabel[]): Promise<ToLabel[] | null> {
+    return attempt(async () => {
+      const bare = all.filter(one => one.labelCode === null)
+      const { codes } = await api.post<MintAnswer>('/api/labels', { count: bare.length })
+      const occurredAt = deviceNow()
+      const events = bare.map((one, index) => posting.seal<'labelled'>({
+        cylinderId: one.id, kind: 'labelled', occurredAt, details: { code: codes[index]! },
+        ...(one.placeId ? { placeId: one.placeId } : {}),
+      }) as CustodyEvent)
+      const { results } = await api.post<EventsAnswer>('/api/events', { events, deviceNow: deviceNow() })
+      const refused = results.find(result => result.outcome === 'refused')
+      if (refused?.problem) problem.value = refused.problem
+      const taken = new Map(events.filter((_, index) => results[index]?.outcome !== 'refused').map(event => [event.cylinderId, (event.details as { code: string }).code]))
+      return all.map(one => ({ ...one, labelCode: one.labelCode ?? taken.get(one.id) ?? null }))
+    })
+  }
+
+  async function attempt<T>(work: () => Promise<T>): Promise<T | null> {
+    busy.value = true
+    problem.value = null
+    try {
+      return await work()
+    }
+    catch (error) {
+      problem.value = problemOf(error)
+      return null
+    }
+    finally {
+      busy.value = false
+    }
+  }
+
+  return { cylinders, mint, label, busy, problem }
+}

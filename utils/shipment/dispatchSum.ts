@@ -1,0 +1,52 @@
+import type { ShipmentLine } from '../contract/shipments'
+import { readingGrams, type MassReading } from '../quantity/mass'
+import { scaleAccuracyGrams } from '../quantity/scale'
+
+/** One line as it is about to leave: what the scale showed, and what follows from it. */
+export interface WeighedLine {
+  line: ShipmentLine
+  gross: MassReading | null
+  grossGrams: number | null
+  /** Gross less tare; null where either is not known. */
+  netGrams: number | null
+  /** How far the net has come from the last known one, where that is beyond both weighings' accuracy. */
+  changedGrams: number | null
+  /** The scale shows more than the cylinder may hold. */
+  over: boolean
+}
+
+/** What all lines come to. */
+export interface DispatchSum { weighed: number, grossGrams: number, netGrams: number | null, nets: number }
+
+/** Puts what the scale showed beside each line of a shipment. */
+export function weighedLines(lines: readonly ShipmentLine[], grossOf: Readonly<Record<string, MassReading | null | undefined>>): WeighedLine[] {
+  return lines.map((line) => {
+    const { cylinder } = line
+    const gross = grossOf[cylinder.id] ?? null
+    const grossGrams = gross === null ? null : readingGrams(gross)
+    const netGrams = grossGrams === null || cylinder.tareWeightGrams === null ? null : grossGrams - cylinder.tareWeightGrams
+    return {
+      line, gross, grossGrams, netGrams,
+      changedGrams: changed(netGrams, grossGrams, cylinder.netGrams, cylinder.tareWeightGrams),
+      over: netGrams !== null && cylinder.fillLimitGrams !== null && netGrams > cylinder.fillLimitGrams,
+    }
+  })
+}
+
+/** Adds up a shipment: what is weighed, and of it what has a net. */
+export function dispatchSum(lines: readonly WeighedLine[]): DispatchSum {
+  const weighed = lines.filter(line => line.grossGrams !== null)
+  const nets = weighed.flatMap(line => line.netGrams ?? [])
+  return {
+    weighed: weighed.length,
+    grossGrams: weighed.reduce((sum, line) => sum + line.grossGrams!, 0),
+    netGrams: nets.length ? nets.reduce((sum, net) => sum + net, 0) : null,
+    nets: nets.length,
+  }
+}
+
+function changed(netGrams: number | null, grossGrams: number | null, knownNet: number | null, tare: number | null): number | null {
+  if (netGrams === null || grossGrams === null || knownNet === null || tare === null) return null
+  const difference = netGrams - knownNet
+  return Math.abs(difference) > scaleAccuracyGrams(grossGrams) + scaleAccuracyGrams(tare + knownNet) ? difference : null
+}
