@@ -37,6 +37,7 @@ const MOST_LABELS = 6
 const PERCENT_PER_CHARACTER = 3.4
 const POISE_HALF_WIDTH = 5
 const GAP = 2
+const TICK_GAP = 4
 
 /**
  * Lays out the straight scale from the empty cylinder to the water-full one.
@@ -98,7 +99,7 @@ function width(label: string): number {
 type Span = { left: number, right: number }
 
 function overlaps(a: Span, b: Span): boolean {
-  return a.left - GAP <= b.right && b.left - GAP <= a.right
+  return a.left - TICK_GAP <= b.right && b.left - TICK_GAP <= a.right
 }
 
 type Label = { at: number, text: string }
