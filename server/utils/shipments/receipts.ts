@@ -1,24 +1,21 @@
 import type { ShipmentLine } from '~~/utils/contract/shipments'
-import type { DetailsOf } from '~~/utils/custody/schema'
 import { readingGrams } from '~~/utils/quantity/mass'
-import { logRow, recordedEvent, SELECT_LOG } from '../custody/logRow'
+import { lineEvents } from '../cylinder-lists/lineEvents'
 import type { Database } from '../database/database'
 
-/** What the reclaimer found on each line of a shipment, by cylinder, as it was recorded. */
+/** What the reclaimer found on each line of a shipment, by cylinder, as corrections have left it. */
 export async function receiptsOf(db: Database, shipmentId: string): Promise<Map<string, NonNullable<ShipmentLine['received']>>> {
-  const { rows } = await db.readClient.execute({
-    sql: `${SELECT_LOG} WHERE kind = 'reclaimed' AND cylinder_id IN (SELECT cylinder_id FROM shipment_lines WHERE shipment_id = ?)
-      AND lower(json_extract(body, '$.details.shipmentId')) = ? ORDER BY seq`,
-    args: [shipmentId, shipmentId],
-  })
-  return new Map(rows.map((row) => {
-    const { cylinderId, details } = recordedEvent(logRow(row))
-    const { theirGross, acceptedNet, grade, price } = details as DetailsOf<'reclaimed'>
-    return [cylinderId, {
+  const events = await lineEvents(db, { kind: 'shipment', id: shipmentId }, ['reclaimed'])
+  const receipts = new Map<string, NonNullable<ShipmentLine['received']>>()
+  for (const event of [...events.values()].flat()) {
+    if (event.kind !== 'reclaimed' || event.details.shipmentId !== shipmentId) continue
+    const { theirGross, acceptedNet, grade, price } = event.details
+    receipts.set(event.cylinderId, {
       theirGrossGrams: theirGross ? readingGrams(theirGross) : null,
       acceptedNetGrams: acceptedNet ? readingGrams(acceptedNet) : null,
       grade: grade ?? null,
       price: price ?? null,
-    }]
-  }))
+    })
+  }
+  return receipts
 }
