@@ -75,7 +75,8 @@ export interface CylinderView {
     evacuated: boolean
     /** Nothing is in it: evacuated, reclaimed, or wet from a test. Not the same as a net of 0. */
     nothingInIt: boolean
-    owners: { ownerId: string | null, grams: number }[]
+    /** null grams where the net is not known: then only whose it is. */
+    owners: { ownerId: string | null, grams: number | null }[]
     /** effectiveAt of the event that set the net, ISO 8601. */
     asOf: string | null
   }

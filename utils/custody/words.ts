@@ -1,4 +1,5 @@
 import type { Condition, Hold, Lifecycle, Missing, Ownership } from './cylinderView'
+import type { FindingCode } from './finding'
 import type { EventKind } from './kinds'
 
 /** A kind of event as people say it: what a button does, and what the log says was done. */
@@ -75,4 +76,42 @@ export const MISSING_WORDS: Record<Missing, string> = {
   refrigerant: 'the refrigerant',
   weight: 'its weight',
   testDate: 'the month of its last test',
+}
+
+/** The findings in two or three words, as in a list. */
+export const FINDING_WORDS: Record<FindingCode, string> = {
+  'overfill': 'overfilled',
+  'nearly-full': 'nearly full',
+  'pressure-class': 'marked pressure too low',
+  'spec-not-for-gas': 'not made for this gas',
+  'not-refillable': 'not refillable',
+  'not-marked-flammable': 'not marked for flammables',
+  'toxic': 'toxic',
+  'second-refrigerant': 'second refrigerant',
+  'unknown-onto-known': 'unknown onto known',
+  'retest-overdue': 'retest overdue',
+  'retest-soon': 'retest soon',
+  'retest-unknown': 'no test date known',
+  'early-test': 'test it early',
+  'wet': 'wet from its test',
+  'rejected': 'rejected',
+  'condemned': 'condemned',
+  'quarantined': 'set apart',
+  'weight-not-known': 'not weighed',
+  'not-registered': 'not registered',
+  'registered-twice': 'registered twice',
+  'old-tare-on-label': 'old tare on label',
+  'code-on-two': 'one code on two',
+  'unsigned': 'not countersigned',
+  'unsupervised': 'no supervisor',
+  'not-seen': 'not seen',
+  'two-owners': 'two owners',
+  'weigh-again': 'weigh again',
+  'clock-doubtful': 'clock doubtful',
+  'look-before-fill': 'not looked at',
+  'found-by-use': 'found by use',
+  'away': 'was away',
+  'after-end': 'after its end',
+  'tested-full': 'tested full',
+  'not-shippable': 'not to be shipped',
 }

@@ -2,7 +2,7 @@ import type { InStatement, InValue } from '@libsql/client'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold, type FoldContext, type FoldResult } from '../../../utils/custody/fold'
 import type { Movement } from '../../../utils/custody/movement'
-import { cacheRow } from '../../../utils/custody/row'
+import { cacheRow, type RowContext } from '../../../utils/custody/row'
 import { foldContext } from './foldContext'
 import type { Group } from './group'
 import type { LogRow } from './logRow'
@@ -27,12 +27,12 @@ export function cacheStatements(group: Group): InStatement[] {
 }
 
 /** The caches of one cylinder, made from its whole log and under no condition: for a rebuild. */
-export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], context: FoldContext): InStatement[] {
+export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], context: FoldContext & RowContext): InStatement[] {
   return cylinderCache(cylinderId, events, null, context, NO_GUARD)
 }
 
 function cylinderCache(
-  cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] | null, context: FoldContext, guard: Guard,
+  cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] | null, context: FoldContext & RowContext, guard: Guard,
 ): InStatement[] {
   const folded = fold([...events], context)
   return [
@@ -42,7 +42,7 @@ function cylinderCache(
   ]
 }
 
-function upsertCylinder(cylinderId: string, { state }: FoldResult, context: FoldContext, guard: Guard): InStatement {
+function upsertCylinder(cylinderId: string, { state }: FoldResult, context: FoldContext & RowContext, guard: Guard): InStatement {
   const columns: Record<string, InValue> = { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state) }
   const names = Object.keys(columns)
   return {

@@ -1,15 +1,19 @@
 import type { FoldContext } from '../../../utils/custody/fold'
+import type { RowContext } from '../../../utils/custody/row'
 import type { ViewContext } from '../../../utils/custody/view'
 import type { Access } from '../../../utils/access/roles'
 import { CATALOGUE } from '../../../utils/refrigerant/allRefrigerants'
 import { fillPolicyAt, namesOf, type Directory } from '../directory/directory'
 
-/** What the fold takes from outside the log. */
-export function foldContext(from: Directory): FoldContext {
+/** What the fold and the cached columns take from outside the log: the firm's rules as they stand now. */
+export function foldContext(from: Directory): FoldContext & RowContext {
   return {
     catalogue: CATALOGUE,
     scales: from.scales,
     policyAt: at => fillPolicyAt(from.fillPolicies, at),
+    policyNow: fillPolicyAt(from.fillPolicies, from.readAt),
+    timeZone: from.timeZone,
+    retest: from.retest,
   }
 }
 
@@ -23,7 +27,6 @@ export function viewContext(from: Directory, more: {
   return {
     ...foldContext(from),
     nowMs: more.nowMs,
-    timeZone: from.timeZone,
     policyNow: fillPolicyAt(from.fillPolicies, more.nowMs),
     retest: from.retest,
     askedRefrigerant: more.askedRefrigerant ?? null,

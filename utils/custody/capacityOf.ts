@@ -1,0 +1,97 @@
+import { fillLimit } from '../capacity/fillLimit'
+import { fitFindings } from '../capacity/fit'
+import { liquidFullTemperature } from '../capacity/liquidFull'
+import { stopWeight } from '../capacity/stopWeight'
+import { DEFAULT_FILL_POLICY, type FillPolicy } from '../capacity/types'
+import { exactGrams } from '../quantity/mass'
+import type { Catalogue } from '../refrigerant/types'
+import type { Requalification } from '../requalification/requalification'
+import type { CapacityView, Missing } from './cylinderView'
+import type { Finding } from './finding'
+import { holdFinding } from './findings/holds'
+import { urgencyOrder } from './findings/order'
+import { afterEnd, away } from './findings/record'
+import { retestOverdue, retestUnknown } from './findings/retest'
+import { standingFinding } from './findings/standing'
+import type { CylinderState } from './state'
+
+/** What a capacity rests on beside the cylinder. */
+export interface CapacityContext {
+  policyNow: FillPolicy
+  catalogue: Catalogue
+  /** The refrigerant somebody asks about, for a cylinder with nothing in it. */
+  askedRefrigerant?: string | null
+}
+
+/**
+ * How much a cylinder may hold and at which weight to stop, or why there is no such number.
+ *
+ * The limit is of what is in it; where nothing is, of the refrigerant it is kept for, else of the one asked about.
+ * While anything speaks against a fill there is no stop weight and no room; a weight that is not known leaves the stop
+ * weight but no room.
+ */
+export function capacityOf(state: CylinderState, retest: Requalification, context: CapacityContext): CapacityView {
+  const { stamp, tare, contents } = state
+  const { policyNow: policy, catalogue } = context
+  const forRefrigerant = contents.nothingInIt ? state.dedicatedTo ?? context.askedRefrigerant ?? null : contents.refrigerant
+  const limit = stamp === null
+    ? NO_STAMP
+    : fillLimit({
+        stamp, refrigerant: forRefrigerant, condition: contents.condition, burnt: contents.burnt, policy, catalogue,
+        tareGrams: tare?.exactGrams ?? null,
+      })
+  const refusals = refusalsOfFill(state, retest, forRefrigerant, catalogue)
+  const missing: Missing[] = [
+    ...limit.missing,
+    ...(contents.netGrams === null ? ['weight' as const] : []),
+    ...(retest.state === 'unknown' ? ['testDate' as const] : []),
+  ]
+  const mayHaveStop = refusals.length === 0 && missing.every(input => input === 'weight')
+  const exact = mayHaveStop && limit.exactLimitGrams !== null && tare !== null ? limit.exactLimitGrams : null
+  const stop = exact === null || tare === null ? null : stopWeight(exact, tare.exactGrams)
+  return {
+    forRefrigerant,
+    governingRule: limit.governingRule,
+    fillLimitGrams: limit.fillLimitGrams,
+    stopWeightGrams: stop?.stopWeightGrams ?? null,
+    exactStopWeightGrams: stop?.exactStopWeightGrams ?? null,
+    roomGrams: exact === null || limit.fillLimitGrams === null || contents.netGrams === null ? null : limit.fillLimitGrams - contents.netGrams,
+    liquidFull: liquidFullOf(state, forRefrigerant, limit.exactLimitGrams, catalogue),
+    share: Math.min(policy.shareThousandths, DEFAULT_FILL_POLICY.shareThousandths) / 1000,
+    terms: limit.terms,
+    missing,
+    refusals,
+  }
+}
+
+const NO_STAMP = {
+  governingRule: null, exactLimitGrams: null, fillLimitGrams: null, terms: [],
+  missing: ['tareWeight', 'waterCapacity', 'servicePressure', 'refrigerant'] as Missing[],
+}
+
+/** Everything that keeps a cylinder from being filled now; an overfill is not among it, for that shows as room. */
+function refusalsOfFill(state: CylinderState, retest: Requalification, refrigerant: string | null, catalogue: Catalogue): Finding[] {
+  const { stamp, away: where, condemnedAt } = state
+  const fit = stamp === null ? [] : fitFindings({ stamp, refrigerant, catalogue })
+  return [
+    ...fit.filter(({ severity }) => severity === 'stop').map(finding => ({ ...finding, since: null })),
+    ...state.standing.filter(({ code }) => code === 'second-refrigerant' || code === 'unknown-onto-known').map(standingFinding),
+    ...state.holds.map(holdFinding),
+    ...(retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, 'stop')] : []),
+    ...(retest.state === 'unknown' ? [retestUnknown()] : []),
+    ...(where ? [away(where.at, where.since)] : []),
+    ...(condemnedAt === null ? [] : [afterEnd(condemnedAt)]),
+  ].sort(urgencyOrder)
+}
+
+function liquidFullOf(state: CylinderState, name: string | null, exactLimitGrams: number | null, catalogue: Catalogue): CapacityView['liquidFull'] {
+  const { stamp, contents } = state
+  const netGrams = contents.nothingInIt ? exactLimitGrams : contents.netGrams
+  const isNameless = name === null || (!contents.nothingInIt && (contents.condition === 'mixed' || contents.condition === 'unknown'))
+  if (netGrams === null || isNameless) return null
+  return liquidFullTemperature({
+    netGrams,
+    waterCapacityGrams: stamp?.waterCapacity ? exactGrams(stamp.waterCapacity) : null,
+    refrigerant: catalogue.refrigerants.get(name) ?? null,
+  })
+}

@@ -1,0 +1,48 @@
+import { daysUntilEndOfMonth, type Month } from '../quantity/month'
+import type { Lifecycle } from './cylinderView'
+import { daysSince } from './daysSince'
+import type { Finding } from './finding'
+import { notSeen } from './findings/record'
+import { retestOverdue, retestSoon } from './findings/retest'
+
+/** A day, and the firm's settings of its reminders. */
+export interface Day {
+  nowMs: number
+  timeZone: string
+  retest: { soonDays: number, notSeenDays: number, missingDays: number }
+}
+
+/** What of a cylinder a date is held against. */
+export interface Dated {
+  lifecycle: Lifecycle
+  nothingInIt: boolean
+  /** null where no retest is required or no date is known. */
+  dueMonth: Month | null
+  lastSeenAt: number | null
+}
+
+const ENDED: readonly Lifecycle[] = ['condemned', 'retired']
+const ELSEWHERE: readonly Lifecycle[] = ['missing', 'at-reclaim', 'at-test']
+
+/** Whether the due month has passed: it is in date through that month's last day. */
+export function isOverdue(dueMonth: Month | null, { nowMs, timeZone }: Pick<Day, 'nowMs' | 'timeZone'>): boolean {
+  return dueMonth !== null && daysUntilEndOfMonth(dueMonth, nowMs, timeZone) < 0
+}
+
+/** The findings that come and go with the date alone: the one place that knows them, for the view and for the list. */
+export function dateFindings(dated: Dated, day: Day): Finding[] {
+  if (ENDED.includes(dated.lifecycle)) return []
+  return [...ofRetest(dated, day), ...ofSight(dated, day)]
+}
+
+function ofRetest({ dueMonth, nothingInIt }: Dated, day: Day): Finding[] {
+  if (dueMonth === null) return []
+  if (isOverdue(dueMonth, day)) return [retestOverdue(dueMonth, nothingInIt ? 'stop' : 'caution')]
+  return daysUntilEndOfMonth(dueMonth, day.nowMs, day.timeZone) <= day.retest.soonDays ? [retestSoon(dueMonth)] : []
+}
+
+function ofSight({ lifecycle, lastSeenAt }: Dated, { nowMs, timeZone, retest }: Day): Finding[] {
+  if (lastSeenAt === null || ELSEWHERE.includes(lifecycle)) return []
+  const days = daysSince(lastSeenAt, nowMs, timeZone)
+  return days >= retest.notSeenDays ? [notSeen(days, lastSeenAt, retest.missingDays)] : []
+}

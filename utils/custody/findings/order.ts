@@ -1,0 +1,16 @@
+import type { Finding, FindingCode } from '../finding'
+
+// What can hurt somebody first, then what keeps a cylinder from use, then what wants doing.
+const URGENCY: readonly FindingCode[] = [
+  'overfill', 'condemned', 'after-end', 'pressure-class', 'not-refillable', 'spec-not-for-gas', 'not-marked-flammable',
+  'second-refrigerant', 'unknown-onto-known', 'tested-full', 'early-test', 'rejected', 'quarantined', 'wet',
+  'retest-overdue', 'retest-unknown', 'code-on-two', 'unsupervised', 'away', 'not-shippable',
+  'not-registered', 'registered-twice', 'weigh-again', 'nearly-full', 'weight-not-known', 'toxic', 'two-owners', 'retest-soon',
+  'old-tare-on-label', 'not-seen', 'unsigned', 'clock-doubtful', 'look-before-fill', 'found-by-use',
+]
+
+/** Which of two findings a person reads first: a stop before a caution, then what can hurt. */
+export function urgencyOrder(a: Pick<Finding, 'code' | 'severity'>, b: Pick<Finding, 'code' | 'severity'>): number {
+  if (a.severity !== b.severity) return a.severity === 'stop' ? -1 : 1
+  return URGENCY.indexOf(a.code) - URGENCY.indexOf(b.code)
+}

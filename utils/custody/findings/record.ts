@@ -1,0 +1,87 @@
+import type { Finding } from '../finding'
+import { COMMON_PRACTICE, OWN_RULE, sinceText } from './words'
+
+/** Nobody has entered the stamp. */
+export function notRegistered(since: number | null): Finding {
+  return {
+    code: 'not-registered', severity: 'caution', source: OWN_RULE, since: sinceText(since),
+    text: 'It has not been registered. Enter what its collar says; until then there is no stop weight.',
+  }
+}
+
+/** Two people registered it. */
+export function registeredTwice(since: number): Finding {
+  return {
+    code: 'registered-twice', severity: 'caution', source: OWN_RULE, since: sinceText(since),
+    text: 'It was registered twice; the first counts. Compare both with the collar and correct the first if it is wrong.',
+  }
+}
+
+/** One code stands on two cylinders. */
+export function codeOnTwo(code: string): Finding {
+  return {
+    code: 'code-on-two', severity: 'stop', source: OWN_RULE, since: null,
+    text: `The label code ${code} is on another cylinder too. Check the serial on the collar, then relabel one of them.`,
+  }
+}
+
+/** A trainee's event waits for its supervisor. */
+export function unsigned(since: number): Finding {
+  return {
+    code: 'unsigned', severity: 'caution', source: OWN_RULE, since: sinceText(since),
+    text: 'A trainee\'s entry waits for the supervisor\'s signature.',
+  }
+}
+
+/** A trainee worked alone. */
+export function unsupervised(since: number): Finding {
+  return {
+    code: 'unsupervised', severity: 'stop', source: '40 CFR 82.161', since: sinceText(since),
+    text: 'A trainee\'s entry names no supervisor. A certified technician must look at this cylinder and answer for it.',
+  }
+}
+
+/** Nobody has recorded anything about it for long. */
+export function notSeen(days: number, lastSeenAt: number, missingDays: number): Finding {
+  const what = days >= missingDays ? `Missing? Nothing was recorded for ${days} days` : `Nothing was recorded for ${days} days`
+  return { code: 'not-seen', severity: 'caution', text: `${what}. Look for it where it was last.`, source: OWN_RULE, since: sinceText(lastSeenAt) }
+}
+
+/** Its time cannot be trusted. */
+export function clockDoubtful(isClamped: boolean): Finding {
+  const what = isClamped ? 'Its time lies after the moment it was recorded' : 'The clock it was written by was more than 5 minutes off'
+  return {
+    code: 'clock-doubtful', severity: 'caution', source: OWN_RULE, since: null,
+    text: `${what}. Both times are kept; compare them with the paper.`,
+  }
+}
+
+/** Nobody said that the outside was looked at. */
+export function lookBeforeFill(): Finding {
+  return {
+    code: 'look-before-fill', severity: 'caution', source: '49 CFR 173.301(a)(2)', since: null,
+    text: 'No look at its outside was recorded before this fill. Look for dents, rust, heat and leaks now.',
+  }
+}
+
+/** Something was recorded while the cylinder should have been elsewhere. */
+export function away(where: 'at-reclaim' | 'at-test', since: number): Finding {
+  const place = where === 'at-reclaim' ? 'at the reclaimer' : 'at its test'
+  return {
+    code: 'away', severity: 'stop', source: OWN_RULE, since: sinceText(since),
+    text: `By the log it is ${place}. Check the serial; if it is back, record its return.`,
+  }
+}
+
+/** Something was recorded of a cylinder that has ended. */
+export function afterEnd(since: number): Finding {
+  return {
+    code: 'after-end', severity: 'stop', source: '49 CFR 180.205(i)', since: sinceText(since),
+    text: 'It was condemned before this. Take it out of use and draw what is in it.',
+  }
+}
+
+/** Why a cylinder may not leave on a shipment. */
+export function notShippable(because: string, source: string = COMMON_PRACTICE): Finding {
+  return { code: 'not-shippable', severity: 'stop', text: because, source, since: null }
+}

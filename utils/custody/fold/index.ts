@@ -1,0 +1,213 @@
+import type { Lifecycle } from '../cylinderView'
+import { applyCorrections, type Correction, type Standing } from '../corrections'
+import type { AnyRecordedEvent, RecordedEvent } from '../event'
+import type { Finding } from '../finding'
+import { overfill } from '../findings/weight'
+import { afterEnd, clockDoubtful } from '../findings/record'
+import { judgedLimitGrams, judgedNetGrams, overfillGrams } from '../judgedLimit'
+import type { EventKind } from '../kinds'
+import { lifecycleOf } from '../lifecycle'
+import type { Movement } from '../movement'
+import { isClamped } from '../order'
+import { standingFinding } from '../findings/standing'
+import { initialState, STANDING_CODES, type CylinderState } from '../state'
+import { corrected } from './corrected'
+import { drawn } from './drawn'
+import { emptied } from './emptied'
+import { filled } from './filled'
+import { handedOver } from './handedOver'
+import { labelled, labelledCode } from './labelled'
+import { lost } from './lost'
+import { moved } from './moved'
+import { received } from './received'
+import { reclaimed } from './reclaimed'
+import { registered, registeredAgain } from './registered'
+import { retested } from './retested'
+import { returned } from './returned'
+import { sentForReclaim } from './sentForReclaim'
+import { sentForTest } from './sentForTest'
+import { stand } from './standing'
+import type { FoldContext, Turn } from './turn'
+import { weighed } from './weighed'
+
+export type { FoldContext } from './turn'
+
+/** How the cylinder stood before or after one event. */
+export interface Snapshot {
+  netGrams: number | null
+  refrigerant: string | null
+  condition: CylinderState['contents']['condition']
+  placeId: string | null
+  holderId: string | null
+  lifecycle: Lifecycle
+}
+
+/** What one event did. */
+export interface FoldStep {
+  eventId: string
+  before: Snapshot
+  after: Snapshot
+  findings: Finding[]
+  movements: Movement[]
+  correction: Correction | null
+}
+
+/** A label code that an event of this cylinder claims. */
+export interface LabelClaim { eventId: string, code: string, effectiveAt: number, deviceId: string, deviceSeq: number }
+
+export interface FoldResult {
+  state: CylinderState
+  movements: Movement[]
+  /** In order of effect. */
+  steps: FoldStep[]
+  labelClaims: LabelClaim[]
+}
+
+/** What each kind does to a cylinder. */
+const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
+  'registered': registered,
+  'labelled': labelled,
+  'received': received,
+  'moved': moved,
+  'handed-over': handedOver,
+  'weighed': weighed,
+  'filled': filled,
+  'drawn': drawn,
+  'emptied': emptied,
+  'lost': lost,
+  'sent-for-reclaim': sentForReclaim,
+  'reclaimed': reclaimed,
+  'returned': returned,
+  'sent-for-test': sentForTest,
+  'retested': retested,
+  'corrected': corrected,
+}
+
+/** Kinds that say nothing of where the cylinder is. */
+const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed']
+/** Kinds that handle no cylinder, so that they need no signature and may follow its end. */
+const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected']
+
+const DOUBTFUL_SKEW_S = 300
+
+/**
+ * One cylinder from its events, in whatever order they arrived.
+ *
+ * Nothing is refused: an event that breaks a rule counts, with a finding. The first registration in effect is the
+ * beginning, whatever its time; an event that a correction took out counts for nothing but its line in the log.
+ * The movements of a step are exactly its change of what is in stock.
+ */
+export function fold(events: readonly AnyRecordedEvent[], context: FoldContext): FoldResult {
+  const standings = applyCorrections(events)
+  const beginning = standings.find(({ event, isOut }) => event.kind === 'registered' && !isOut)
+  const inTurn = beginning ? [beginning, ...standings.filter(standing => standing !== beginning)] : standings
+  let state = initialState(events[0]?.cylinderId ?? '')
+  const stepOf = new Map<string, FoldStep>()
+  const movements: Movement[] = []
+  for (const standing of inTurn) {
+    const turn = takeTurn(state, standing, standing === beginning, context)
+    stepOf.set(standing.event.id, {
+      eventId: standing.event.id,
+      before: snapshot(state),
+      after: snapshot(turn.state),
+      findings: turn.findings,
+      movements: turn.movements,
+      correction: standing.correction,
+    })
+    movements.push(...turn.movements)
+    state = turn.state
+  }
+  return {
+    state: withLastEvent(state, standings),
+    movements,
+    steps: standings.flatMap(({ event }) => stepOf.get(event.id) ?? []),
+    labelClaims: standings.flatMap(labelClaim),
+  }
+}
+
+function takeTurn(before: CylinderState, { event, isOut }: Standing, isBeginning: boolean, context: FoldContext): Turn {
+  const turn: Turn = { event, context, state: copyOf(before), movements: [], findings: [] }
+  turn.state.version = Math.max(before.version, event.version)
+  if (isOut) return turn
+  if (before.condemnedAt !== null && !PAPERWORK.includes(event.kind)) {
+    turn.findings.push(afterEnd(before.condemnedAt))
+    stand(turn, 'after-end')
+  }
+  if (event.kind === 'registered' && !isBeginning) registeredAgain(turn as Turn<'registered'>)
+  else foldByKind(turn)
+  raiseClock(turn)
+  raiseTrainee(turn)
+  raiseOverfill(turn, before)
+  raiseStanding(turn, before)
+  return turn
+}
+
+function foldByKind<K extends EventKind>(turn: Turn<K>): void {
+  // The kind of the event names the fold that takes it, which the compiler cannot follow.
+  const foldKind = FOLDS[turn.event.kind] as ((turn: Turn<K>) => void) | undefined
+  foldKind?.(turn)
+}
+
+function raiseClock({ event, findings }: Turn): void {
+  const clamped = isClamped(event)
+  if (clamped || Math.abs(event.clockSkewSeconds) > DOUBTFUL_SKEW_S) findings.push(clockDoubtful(clamped))
+}
+
+function raiseTrainee(turn: Turn): void {
+  const { event } = turn
+  if (!event.trainee || event.kind === 'corrected') return
+  stand(turn, 'unsigned')
+  if (event.supervisorId === null) stand(turn, 'unsupervised')
+}
+
+function raiseOverfill(turn: Turn, before: CylinderState): void {
+  const { state, context, event, findings } = turn
+  const limit = judgedLimitGrams(state, context.policyAt(event.effectiveAt), context.policyAt, context.catalogue)
+  const excess = overfillGrams(state, limit)
+  if (excess === 0) {
+    state.overfilledAt = null
+    return
+  }
+  state.overfilledAt ??= event.effectiveAt
+  const isWeighedNow = state.contents.asOf === event.effectiveAt && state.contents.netGrams !== before.contents.netGrams
+  if (before.overfilledAt === null || isWeighedNow) {
+    findings.push(overfill(excess, state.contents.netGrams === null && judgedNetGrams(state) !== null, state.overfilledAt))
+  }
+}
+
+/** Findings that begin to stand with this event show on its line too. */
+function raiseStanding({ state, findings }: Turn, before: CylinderState): void {
+  for (const code of STANDING_CODES) {
+    const standing = state.standing.find(one => one.code === code)
+    if (!standing || code === 'after-end' || before.standing.some(one => one.code === code)) continue
+    findings.push(standingFinding(standing))
+  }
+}
+
+function withLastEvent(state: CylinderState, standings: readonly Standing[]): CylinderState {
+  const counting = standings.filter(({ isOut }) => !isOut).map(({ event }) => event)
+  const last = counting.at(-1)
+  const seen = counting.findLast(event => !UNSEEN.includes(event.kind))
+  return {
+    ...state,
+    firstEventAt: counting[0]?.effectiveAt ?? null,
+    lastEventAt: last?.effectiveAt ?? null,
+    lastEventKind: last?.kind ?? null,
+    lastSeenAt: seen?.effectiveAt ?? null,
+  }
+}
+
+function labelClaim({ event, isOut }: Standing): LabelClaim[] {
+  if (event.kind !== 'labelled' || isOut) return []
+  const { id, effectiveAt, deviceId, deviceSeq } = event
+  return [{ eventId: id, code: labelledCode((event as RecordedEvent<'labelled'>).details), effectiveAt, deviceId, deviceSeq }]
+}
+
+function copyOf(state: CylinderState): CylinderState {
+  return JSON.parse(JSON.stringify(state)) as CylinderState
+}
+
+function snapshot(state: CylinderState): Snapshot {
+  const { netGrams, refrigerant, condition } = state.contents
+  return { netGrams, refrigerant, condition, placeId: state.placeId, holderId: state.holderId, lifecycle: lifecycleOf(state) }
+}

@@ -1,0 +1,17 @@
+import { normaliseLabelCode } from '../../label/code'
+import type { Turn } from './turn'
+
+/** A label is stuck on. Whatever code was on before still opens the cylinder. */
+export function labelled({ state, event }: Turn<'labelled'>): void {
+  const code = labelledCode(event.details)
+  const at = event.effectiveAt
+  const known = state.labels.find(label => label.code === code)
+  if (known) known.lastAt = at
+  else state.labels.push({ code, firstAt: at, lastAt: at })
+  state.labelCode = code
+}
+
+/** The code of a `labelled` event as it is stored everywhere else, however its sender wrote it. */
+export function labelledCode(details: { code: string }): string {
+  return normaliseLabelCode(details.code) ?? details.code
+}

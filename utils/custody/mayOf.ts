@@ -1,0 +1,40 @@
+import type { Access } from '../access/roles'
+import type { CylinderView } from './cylinderView'
+import { DISPATCH_KINDS, EVENT_KINDS, type EventKind } from './kinds'
+import { mayDraw, mayFill, mayTake, type PlanAnswer, type Planned } from './plan'
+import { mayPost } from './posting'
+import { MISSING_WORDS } from './words'
+
+/** What this person may do with a cylinder, and what not and why. It advises on plans; a fact is recorded all the same. */
+export function mayOf(view: Planned, access: Access | null): Pick<CylinderView, 'may' | 'mayNot'> {
+  const may: EventKind[] = []
+  const mayNot: CylinderView['mayNot'] = []
+  if (access === null || !EVENT_KINDS.some(kind => mayPost(access, kind))) return { may, mayNot }
+  for (const kind of EVENT_KINDS) {
+    const because = whyNot(view, access, kind)
+    if (because === null) may.push(kind)
+    else mayNot.push({ kind, because })
+  }
+  return { may, mayNot }
+}
+
+function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
+  if (!mayPost(access, kind)) return 'Another role records this.'
+  if ((DISPATCH_KINDS as readonly EventKind[]).includes(kind)) {
+    return kind === 'sent-for-reclaim' ? 'It leaves with a shipment and its papers.' : 'It leaves with a test lot and its list.'
+  }
+  switch (kind) {
+    case 'registered': return view.stamp === null ? null : 'It is registered already; correct that entry instead.'
+    case 'reclaimed': return view.lifecycle === 'at-reclaim' ? null : 'It is not at a reclaimer.'
+    case 'filled': return reason(mayFill(view))
+    case 'drawn': return reason(mayDraw(view))
+    case 'moved':
+    case 'handed-over': return reason(mayTake(view))
+    default: return null
+  }
+}
+
+function reason({ allowed, because, missing }: PlanAnswer): string | null {
+  if (allowed) return null
+  return because[0]?.text ?? `Not known: ${missing.map(input => MISSING_WORDS[input]).join(', ')}.`
+}

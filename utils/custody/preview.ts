@@ -1,0 +1,55 @@
+import type { AnyCustodyEvent, AnyRecordedEvent } from './event'
+import type { CylinderView } from './cylinderView'
+import type { Finding } from './finding'
+import { urgencyOrder } from './findings/order'
+import { fold } from './fold'
+import { view, type ViewContext } from './view'
+
+/** What would be said if an event were recorded now. */
+export interface Preview {
+  view: CylinderView
+  /** What the event itself would be told, and what would stand after it that does not stand now. */
+  findings: Finding[]
+}
+
+/**
+ * Judges a draft as it would be judged once recorded, by the same rules, here or on the server.
+ *
+ * The author's clock is taken as right, for it is only measured when the event is sent.
+ */
+export function preview(events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, context: ViewContext): Preview {
+  const now = view(fold(events, context).state, context)
+  const { state, steps } = fold([...events, recordedNow(events, draft, context)], context)
+  const then = view(state, context)
+  const raised = then.findings.filter(finding => !now.findings.some(({ code, severity }) => code === finding.code && severity === finding.severity))
+  const told = steps.find(({ eventId }) => eventId === draft.id)?.findings ?? []
+  return { view: then, findings: [...told, ...raised.filter(({ code }) => !told.some(other => other.code === code))].sort(urgencyOrder) }
+}
+
+function recordedNow(events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, { access, nowMs }: ViewContext): AnyRecordedEvent {
+  const occurredAt = Date.parse(draft.occurredAt)
+  const authorId = access?.personId ?? ''
+  return {
+    seq: Math.max(0, ...events.map(({ seq }) => seq)) + 1,
+    id: draft.id,
+    cylinderId: draft.cylinderId,
+    version: Math.max(0, ...events.map(({ version }) => version)) + 1,
+    kind: draft.kind,
+    occurredAt,
+    occurredOffsetMinutes: 0,
+    clockSkewSeconds: 0,
+    effectiveAt: Math.min(occurredAt, nowMs),
+    recordedAt: nowMs,
+    deviceId: draft.deviceId,
+    deviceSeq: draft.deviceSeq,
+    actorId: authorId,
+    postedBy: authorId,
+    supervisorId: draft.supervisorId ?? null,
+    trainee: access?.trainee ?? false,
+    placeId: draft.placeId ?? null,
+    note: draft.note ?? null,
+    practice: draft.practice ?? false,
+    confirmed: draft.confirmed ?? [],
+    details: draft.details,
+  } as AnyRecordedEvent
+}

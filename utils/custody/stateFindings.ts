@@ -1,0 +1,75 @@
+import { fitFindings } from '../capacity/fit'
+import type { FillPolicy } from '../capacity/types'
+import type { Catalogue } from '../refrigerant/types'
+import type { Finding } from './finding'
+import { holdFinding } from './findings/holds'
+import { twoOwners } from './findings/mixing'
+import { codeOnTwo, notRegistered } from './findings/record'
+import { condemned, oldTareOnLabel } from './findings/retest'
+import { standingFinding } from './findings/standing'
+import { nearlyFull, overfill, weightNotKnown } from './findings/weight'
+import { judgedLimitGrams, overfillGrams } from './judgedLimit'
+import type { CylinderState, StandingCode } from './state'
+
+/** What the standing findings depend on beside the cylinder; nothing of it is the date. */
+export interface FindingContext {
+  policyNow: FillPolicy
+  policyAt: (ms: number) => FillPolicy
+  catalogue: Catalogue
+  codesOnTwo: ReadonlySet<string>
+}
+
+const OF_CONTENTS: readonly StandingCode[] = ['second-refrigerant', 'unknown-onto-known', 'after-end']
+
+// From this part of the limit on a cylinder is nearly full: common practice, no source.
+const NEARLY_FULL_RATIO = 0.9
+
+/** Every finding of a state that stands whatever the date. A cylinder that has ended keeps only those of its contents. */
+export function stateFindings(state: CylinderState, fillLimitGrams: number | null, context: FindingContext): Finding[] {
+  const ofContents = [
+    ...ofWeight(state, fillLimitGrams, context),
+    ...ofFit(state, context.catalogue),
+    ...state.standing.filter(({ code }) => OF_CONTENTS.includes(code)).map(standingFinding),
+    ...(ownersIn(state) > 1 ? [twoOwners()] : []),
+  ]
+  if (state.condemnedAt !== null) return [condemned(state.condemnedAt), ...ofContents]
+  return [
+    ...ofContents,
+    ...state.holds.map(holdFinding),
+    ...state.standing.filter(({ code }) => !OF_CONTENTS.includes(code)).map(standingFinding),
+    ...ofRecord(state, context.codesOnTwo),
+  ]
+}
+
+function ofWeight(state: CylinderState, fillLimitGrams: number | null, context: FindingContext): Finding[] {
+  const { contents } = state
+  const excess = overfillGrams(state, judgedLimitGrams(state, context.policyNow, context.policyAt, context.catalogue))
+  const notKnown = contents.netGrams === null ? [weightNotKnown(contents.asOf)] : []
+  if (excess !== 0) return [overfill(excess, contents.netGrams === null, state.overfilledAt), ...notKnown]
+  if (contents.nothingInIt || contents.netGrams === null || fillLimitGrams === null) return notKnown
+  return contents.netGrams >= fillLimitGrams * NEARLY_FULL_RATIO ? [nearlyFull(fillLimitGrams - contents.netGrams)] : []
+}
+
+function ofFit({ stamp, contents, filledHere }: CylinderState, catalogue: Catalogue): Finding[] {
+  if (stamp === null || contents.nothingInIt) return []
+  return fitFindings({ stamp, refrigerant: contents.refrigerant, catalogue })
+    .filter(({ code }) => code !== 'not-refillable' || filledHere)
+    .map(finding => ({ ...finding, since: null }))
+}
+
+function ofRecord(state: CylinderState, codesOnTwo: ReadonlySet<string>): Finding[] {
+  const { registeredAt, firstEventAt, labels, labelCode, tare } = state
+  const label = labels.find(({ code }) => code === labelCode)
+  const isLabelOld = tare !== null && tare.isWeighedAnew && label !== undefined && label.lastAt < tare.since
+  return [
+    ...(registeredAt === null ? [notRegistered(firstEventAt)] : []),
+    ...labels.filter(({ code }) => codesOnTwo.has(code)).map(({ code }) => codeOnTwo(code)),
+    ...(isLabelOld ? [oldTareOnLabel(tare.since)] : []),
+  ]
+}
+
+function ownersIn({ contents }: CylinderState): number {
+  if (contents.nothingInIt) return 0
+  const holding = contents.shares.filter(({ grams }) => contents.netGrams === null || grams > 0)
+  return new Set(holding.map(({ ownerId }) => ownerId)).size
+}
