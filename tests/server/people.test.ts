@@ -1,0 +1,155 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import type { InvitedAnswer, PeopleAnswer } from '../../utils/contract/people'
+import type { MailAnswer } from '../../utils/contract/mail'
+import { TestClient } from '../helpers/client'
+import { addMember, ADMIN, invitationToken, PASSWORD, setUpFirm, type Member } from '../helpers/firm'
+import { startServer, type TestServer } from '../helpers/server'
+
+let server: TestServer
+let admin: Member
+let tech: Member
+let auditor: Member
+
+beforeAll(async () => {
+  server = await startServer()
+  admin = await setUpFirm(server)
+  tech = await addMember(admin, 'Tess', ['technician'], { trainee: true })
+  auditor = await addMember(admin, 'Otto', ['auditor'])
+})
+afterAll(() => server?.stop())
+
+function visitor(): TestClient {
+  return new TestClient(server.baseUrl)
+}
+
+describe('the firm\'s people', () => {
+  it('are known to everybody signed in, their addresses only to admin and auditor', async () => {
+    const seen = async (member: Member) => (await member.client.get<PeopleAnswer>('/api/people')).body.items.map(line => [line.name, line.email])
+    expect(await seen(admin)).toEqual([[ADMIN.name, ADMIN.email], ['Otto', 'otto@harbor.example'], ['Tess', 'tess@harbor.example']])
+    expect(await seen(auditor)).toEqual(await seen(admin))
+    expect(await seen(tech)).toEqual([[ADMIN.name, null], ['Otto', null], ['Tess', null]])
+  })
+
+  it('never show a password\'s hash', async () => {
+    const { body } = await admin.client.get('/api/people')
+    expect(JSON.stringify(body)).not.toMatch(/hash|scrypt/i)
+  })
+
+  it('are not known outside', async () => {
+    expect((await visitor().get('/api/people')).status).toBe(401)
+  })
+
+  it('are managed by the admin alone', async () => {
+    for (const { client } of [tech, auditor]) {
+      expect((await client.post('/api/people', { name: 'Eve', email: 'eve@harbor.example', roles: ['admin'] })).status).toBe(403)
+      expect((await client.patch(`/api/people/${tech.id}`, { roles: ['admin'] })).status).toBe(403)
+      expect((await client.post(`/api/people/${tech.id}/invitation`)).status).toBe(403)
+      expect((await client.get('/api/mail')).status).toBe(403)
+    }
+    expect((await visitor().post('/api/people', {})).status).toBe(401)
+  })
+
+  it('are refused to the one without the right before a body is looked at', async () => {
+    expect((await tech.client.post('/api/people', { nonsense: true })).status).toBe(403)
+  })
+
+  it('change by name, certification and trainee, and nothing else', async () => {
+    const change = await admin.client.patch(`/api/people/${tech.id}`, { name: 'Tess Oran', certification: 'Type II 4411', trainee: false })
+    expect(change.body).toMatchObject({ person: { name: 'Tess Oran', certification: 'Type II 4411', trainee: false, roles: ['technician'] } })
+    expect((await tech.client.get('/api/session')).body).toMatchObject({ user: { name: 'Tess Oran', trainee: false } })
+    expect((await admin.client.patch(`/api/people/${tech.id}`, { certification: null })).body).toMatchObject({ person: { certification: null } })
+    for (const bad of [{ passwordHash: 'x' }, { id: auditor.id }, { roles: [] }, { roles: ['owner'] }, { roles: ['admin', 'admin'] }, {}, { name: '' }]) {
+      expect((await admin.client.patch(`/api/people/${tech.id}`, bad)).status).toBe(400)
+    }
+  })
+
+  it('are 404 where unknown and 400 where the id is none', async () => {
+    expect((await admin.client.patch('/api/people/01890000-0000-7000-8000-000000000000', { name: 'Nobody' })).status).toBe(404)
+    expect((await admin.client.patch('/api/people/7', { name: 'Nobody' })).status).toBe(400)
+    expect((await admin.client.patch('/api/people/%E0%A4%A', { name: 'Nobody' })).status).toBe(400)
+  })
+})
+
+describe('an invitation', () => {
+  it('goes by a letter that is kept, shows whose it is, and is taken up once', async () => {
+    const invited = await admin.client.post<InvitedAnswer>('/api/people', { name: 'Ines', email: 'Ines@Harbor.example', roles: ['warehouse'] })
+    expect(invited.status).toBe(201)
+    expect(invited.body).toMatchObject({ mail: 'kept', person: { email: 'ines@harbor.example', invited: true } })
+    const token = await invitationToken(admin, 'ines@harbor.example')
+    const client = visitor()
+    expect((await client.get(`/api/invitations/${token}`)).body).toMatchObject({ name: 'Ines', email: 'ines@harbor.example', firmName: 'Harbor Cooling' })
+    const both = await Promise.all([client, visitor()].map(one => one.post(`/api/invitations/${token}`, { password: PASSWORD })))
+    expect(both.map(({ status }) => status).sort()).toEqual([200, 404])
+    expect((await visitor().get(`/api/invitations/${token}`)).status).toBe(404)
+    expect((await visitor().signIn('ines@harbor.example', PASSWORD)).status).toBe(200)
+  })
+
+  it('is ended by the next one, and by turning the person off', async () => {
+    const { body } = await admin.client.post<InvitedAnswer>('/api/people', { name: 'Leo', email: 'leo@harbor.example', roles: ['technician'] })
+    const first = await invitationToken(admin, 'leo@harbor.example')
+    expect((await admin.client.post(`/api/people/${body.person.id}/invitation`)).status).toBe(200)
+    const second = await invitationToken(admin, 'leo@harbor.example')
+    expect(second).not.toBe(first)
+    expect((await visitor().get(`/api/invitations/${first}`)).status).toBe(404)
+    expect((await visitor().get(`/api/invitations/${second}`)).status).toBe(200)
+    await admin.client.patch(`/api/people/${body.person.id}`, { active: false })
+    expect((await visitor().post(`/api/invitations/${second}`, { password: PASSWORD })).status).toBe(404)
+    expect((await admin.client.post(`/api/people/${body.person.id}/invitation`)).status).toBe(409)
+  })
+
+  it('refuses a weak password and stays good', async () => {
+    await admin.client.post('/api/people', { name: 'Mara', email: 'mara@harbor.example', roles: ['technician'] })
+    const token = await invitationToken(admin, 'mara@harbor.example')
+    expect((await visitor().post(`/api/invitations/${token}`, { password: 'mara@harbor.example' })).status).toBe(422)
+    expect((await visitor().post(`/api/invitations/${token}`, { password: 'eleven-char' })).status).toBe(400)
+    expect((await visitor().post(`/api/invitations/${token}`, { password: 'twelve-chars' })).status).toBe(200)
+  })
+
+  it('to one who has a password is a new password, and ends their sessions', async () => {
+    const nora = await addMember(admin, 'Nora', ['technician'])
+    await admin.client.post(`/api/people/${nora.id}/invitation`)
+    const { body } = await admin.client.get<MailAnswer>('/api/mail?limit=1')
+    expect(body.items[0]?.subject).toContain('new password')
+    expect(body.nextCursor).not.toBeNull()
+    expect((await nora.client.get('/api/session')).status).toBe(200)
+    await visitor().post(`/api/invitations/${await invitationToken(admin, nora.email)}`, { password: 'seven blue valves' })
+    expect((await nora.client.get('/api/session')).status).toBe(401)
+    expect((await visitor().signIn(nora.email, PASSWORD)).status).toBe(401)
+  })
+
+  it('to an address that is taken is a conflict, whatever its case', async () => {
+    expect((await admin.client.post('/api/people', { name: 'Ada Two', email: 'ADA@harbor.example', roles: ['manager'] })).status).toBe(409)
+  })
+
+  it('is unknown for a made-up token', async () => {
+    expect((await visitor().get(`/api/invitations/${'A'.repeat(43)}`)).status).toBe(404)
+    expect((await visitor().post(`/api/invitations/${'A'.repeat(43)}`, { password: PASSWORD })).status).toBe(404)
+  })
+})
+
+describe('the last administrator', () => {
+  it('can neither be turned off nor lose the role, but may have another beside it', async () => {
+    for (const change of [{ active: false }, { roles: ['manager'] }]) {
+      const answer = await admin.client.patch<{ type: string }>(`/api/people/${admin.id}`, change)
+      expect(answer.status).toBe(409)
+      expect(answer.body.type).toBe('last-admin')
+    }
+    expect((await admin.client.get('/api/session')).body).toMatchObject({ user: { roles: ['admin'] } })
+    // One who was only invited cannot sign in yet and does not count.
+    await admin.client.post('/api/people', { name: 'Vera', email: 'vera@harbor.example', roles: ['admin'] })
+    expect((await admin.client.patch(`/api/people/${admin.id}`, { active: false })).status).toBe(409)
+  })
+
+  it('is never taken away by two who turn each other off at once', async () => {
+    const second = await addMember(admin, 'Bela', ['admin'])
+    const answers = await Promise.all([
+      admin.client.patch(`/api/people/${second.id}`, { active: false }),
+      second.client.patch(`/api/people/${admin.id}`, { active: false }),
+    ])
+    // The other finds itself the last (409), or turned off already (401).
+    expect(answers.filter(({ status }) => status === 200)).toHaveLength(1)
+    const left = answers[0]?.status === 200 ? admin : second
+    const { body } = await left.client.get<PeopleAnswer>('/api/people?active=true')
+    expect(body.items.filter(line => line.roles.includes('admin') && !line.invited)).toHaveLength(1)
+  })
+})
