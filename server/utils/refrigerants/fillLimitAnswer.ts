@@ -1,12 +1,12 @@
-import { fillLimit } from '~~/utils/capacity/fillLimit'
-import { fitFindings } from '~~/utils/capacity/fit'
-import { liquidFullTemperature } from '~~/utils/capacity/liquidFull'
-import { roomGrams, stopWeight, tareInForceGrams } from '~~/utils/capacity/stopWeight'
+import { tareInForceGrams } from '~~/utils/capacity/stopWeight'
 import type { FillPolicy, Stamp } from '~~/utils/capacity/types'
 import type { FillLimitAnswer, FillLimitQuery } from '~~/utils/contract/refrigerants'
+import { capacityOf } from '~~/utils/custody/capacityOf'
+import { initialState, type CylinderState } from '~~/utils/custody/state'
 import { readingGrams, type MassReading } from '~~/utils/quantity/mass'
 import { scaleAccuracyGrams } from '~~/utils/quantity/scale'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
+import type { Requalification } from '~~/utils/requalification/requalification'
 import { problem } from '../http/problem'
 
 /**
@@ -16,41 +16,33 @@ import { problem } from '../http/problem'
  * Errors: 422 for a refrigerant that the catalogue does not have, and for two service pressures that differ.
  */
 export function fillLimitAnswer(query: FillLimitQuery, firmPolicy: FillPolicy): FillLimitAnswer {
-  const refrigerant = CATALOGUE.refrigerants.get(query.refrigerant)
-  if (!refrigerant) throw impossible('refrigerant', 'is not in the catalogue')
-  const stamp = stampOf(query)
-  const policy = { ...firmPolicy, shareThousandths: stricterShare(firmPolicy.shareThousandths, query.share) }
-  const limit = fillLimit({
-    stamp, refrigerant: query.refrigerant, condition: query.condition, burnt: query.condition === 'burnt', policy, catalogue: CATALOGUE,
-  })
-  const refusals = fitFindings({ stamp, refrigerant: query.refrigerant, catalogue: CATALOGUE })
-    .filter(finding => finding.severity === 'stop').map(finding => ({ ...finding, since: null }))
+  if (!CATALOGUE.refrigerants.has(query.refrigerant)) throw impossible('refrigerant', 'is not in the catalogue')
   const netGrams = netOf(query.gross, query.tareWeight)
+  const policyNow = { ...firmPolicy, shareThousandths: stricterShare(firmPolicy.shareThousandths, query.share) }
+  const capacity = capacityOf(stateOf(query, netGrams), NO_RETEST, { policyNow, catalogue: CATALOGUE, askedRefrigerant: query.refrigerant })
+  return { ...capacity, netGrams }
+}
 
+/** A stamp alone says nothing of tests. */
+const NO_RETEST: Requalification = { lastMonth: null, intervalMonths: null, dueMonth: null, state: 'not-required', basis: '' }
+
+/** The cylinder that would have this stamp and this weight. */
+function stateOf(query: FillLimitQuery, netGrams: number | null): CylinderState {
+  const stamp = stampOf(query)
   const exactTareGrams = tareInForceGrams(stamp)
-  const mayGiveStop = refusals.length === 0 && limit.missing.length === 0
-  const stop = mayGiveStop && limit.exactLimitGrams !== null && exactTareGrams !== null
-    ? stopWeight(limit.exactLimitGrams, exactTareGrams)
-    : null
-  const gramsWhenHot = netGrams ?? limit.fillLimitGrams
+  const unknown = initialState('')
   return {
-    forRefrigerant: query.refrigerant,
-    governingRule: limit.governingRule,
-    fillLimitGrams: limit.fillLimitGrams,
-    stopWeightGrams: stop?.stopWeightGrams ?? null,
-    exactStopWeightGrams: stop?.exactStopWeightGrams ?? null,
-    roomGrams: stop && limit.fillLimitGrams !== null && netGrams !== null ? roomGrams(limit.fillLimitGrams, netGrams) : null,
-    liquidFull: gramsWhenHot === null || limit.missing.includes('refrigerant')
-      ? null
-      : liquidFullTemperature({
-          netGrams: gramsWhenHot, refrigerant,
-          waterCapacityGrams: query.waterCapacity ? readingGrams(query.waterCapacity) : null,
-        }),
-    share: policy.shareThousandths / 1000,
-    terms: limit.terms,
-    missing: netGrams === null ? [...limit.missing, 'weight'] : limit.missing,
-    refusals,
-    netGrams,
+    ...unknown,
+    stamp,
+    tare: exactTareGrams === null ? null : { exactGrams: exactTareGrams, since: 0, isWeighedAnew: false },
+    contents: {
+      ...unknown.contents,
+      refrigerant: query.refrigerant,
+      condition: query.condition,
+      burnt: query.condition === 'burnt',
+      nothingInIt: netGrams === null,
+      netGrams,
+    },
   }
 }
 

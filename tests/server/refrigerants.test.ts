@@ -1,0 +1,123 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import type { PolicyAnswer } from '../../utils/contract/custody'
+import type { ProblemDetails } from '../../utils/contract/problem'
+import type { FillLimitAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, Saturation } from '../../utils/contract/refrigerants'
+import { TestClient } from '../helpers/client'
+import { setUpFirm, type Member } from '../helpers/firm'
+import { startServer, type TestServer } from '../helpers/server'
+
+let server: TestServer
+let admin: Member
+beforeAll(async () => {
+  server = await startServer()
+  admin = await setUpFirm(server)
+})
+afterAll(() => server.stop())
+
+function fillLimit(query: Record<string, string>) {
+  const stamp = { refrigerant: 'R-22', waterCapacity: '24.0lb', tareWeight: '15.0lb', spec: 'DOT-4BA400' }
+  return admin.client.get<FillLimitAnswer & ProblemDetails>(`/api/fill-limit?${new URLSearchParams({ ...stamp, ...query })}`)
+}
+
+describe('the fill limit of a stamp', () => {
+  it('is 0.80 of the water capacity for R-22, and stops at 34.2 lb', async () => {
+    const { status, body } = await fillLimit({ gross: '34.0lb' })
+    expect(status).toBe(200)
+    // 0.80 x 24.0 = 19.2 lb = 8708.97 g; 15.0 + 19.2 = 34.2 lb = 15512.86 g; 34.0 - 15.0 = 19.0 lb: 15422 - 6804 = 8618 g.
+    expect(body).toMatchObject({
+      forRefrigerant: 'R-22', governingRule: 'water-weight', fillLimitGrams: 8_708, stopWeightGrams: 15_512,
+      netGrams: 8_618, roomGrams: 90, share: 0.8, missing: [], refusals: [],
+    })
+    expect(body.exactStopWeightGrams).toBeCloseTo(15_512.859, 3)
+    expect(body.terms.find(term => term.rule === 'water-weight')).toMatchObject({ limitGrams: 8_708, standing: 'in-force' })
+  })
+
+  it('takes the pressure from the specification or beside it, and refuses two that differ', async () => {
+    const beside = await fillLimit({ spec: 'DOT-4BA', servicePressurePsig: '400' })
+    expect(beside.body.stopWeightGrams).toBe(15_512)
+    expect((await fillLimit({ servicePressurePsig: '350' })).status).toBe(422)
+  })
+
+  it('takes a stricter share than the firm\'s and never a looser one', async () => {
+    // 0.75 x 24.0 = 18.0 lb = 8164.66 g.
+    expect((await fillLimit({ share: '0.75' })).body).toMatchObject({ share: 0.75, fillLimitGrams: 8_164 })
+    expect((await fillLimit({ share: '0.81' })).status).toBe(400)
+  })
+
+  it('gives no stop weight where something is not known, and names it', async () => {
+    const noTare = await admin.client.get<FillLimitAnswer>('/api/fill-limit?refrigerant=R-22&waterCapacity=24.0lb&spec=DOT-4BA400')
+    expect(noTare.body).toMatchObject({ stopWeightGrams: null, roomGrams: null, netGrams: null, missing: ['tareWeight', 'weight'] })
+    const noPressure = await fillLimit({ spec: 'DOT-4BA', gross: '20lb' })
+    expect(noPressure.body).toMatchObject({ stopWeightGrams: null, roomGrams: null, missing: ['servicePressure'] })
+    expect((await fillLimit({ condition: 'mixed' })).body).toMatchObject({ fillLimitGrams: null, stopWeightGrams: null })
+  })
+
+  it('gives no stop weight for a refrigerant that the cylinder is too weak for, and says why', async () => {
+    const { body } = await fillLimit({ refrigerant: 'R-410A', spec: 'DOT-4BA260', gross: '20lb' })
+    expect(body.refusals.map(refusal => refusal.code)).toEqual(['pressure-class'])
+    expect(body).toMatchObject({ stopWeightGrams: null, exactStopWeightGrams: null, roomGrams: null })
+    expect(body.fillLimitGrams).toBeGreaterThan(0)
+  })
+
+  it('has a negative room above the limit, and no net where the weight is below the tare', async () => {
+    // 36.0 - 15.0 = 21.0 lb: 16329 - 6804 = 9525 g; 8708 - 9525.
+    expect((await fillLimit({ gross: '36.0lb' })).body).toMatchObject({ netGrams: 9_525, roomGrams: -817 })
+    expect((await fillLimit({ gross: '14.0lb' })).body).toMatchObject({ netGrams: null, roomGrams: null, stopWeightGrams: 15_512, missing: ['weight'] })
+    // 14.95 lb is 23 g below, within 0.5 % of the reading.
+    expect((await fillLimit({ gross: '14.95lb' })).body).toMatchObject({ netGrams: 0, roomGrams: 8_708 })
+  })
+
+  it.each([
+    [{ waterCapacity: '24' }, 400], [{ waterCapacity: '-24lb' }, 400], [{ tareWeight: '15lb17oz' }, 400], [{ spec: 'DOT-9' }, 400],
+    [{ colour: 'red' }, 400], [{ servicePressurePsig: '0' }, 400], [{ refrigerant: 'R-9999' }, 422],
+  ])('refuses %j with %i', async (query, status) => {
+    expect((await fillLimit(query as unknown as Record<string, string>)).status).toBe(status)
+  })
+})
+
+describe('the catalogue of refrigerants', () => {
+  it('lists 79, each with its safety class', async () => {
+    const { body } = await admin.client.get<RefrigerantsAnswer>('/api/refrigerants')
+    expect(body.items).toHaveLength(79)
+    expect(body.items.find(one => one.designation === 'R-32')).toMatchObject({ safetyClass: 'A2L', flammable: true, toxic: false })
+    expect(body.items.find(one => one.designation === 'R-717')).toMatchObject({ safetyClass: 'B2L', flammable: true, toxic: true })
+  })
+
+  it('says what one is made of and from where it is known, in any case', async () => {
+    const { body } = await admin.client.get<RefrigerantRecordAnswer>('/api/refrigerants/r-410a')
+    expect(body.designation).toBe('R-410A')
+    expect(body.composition).toEqual([{ component: 'R-32', massPercent: 50 }, { component: 'R-125', massPercent: 50 }])
+    expect(body.source).not.toBe('')
+    expect(body).not.toHaveProperty('table')
+    expect((await admin.client.get('/api/refrigerants/R-9999')).status).toBe(404)
+  })
+
+  it('gives the saturation inside the table and refuses outside it', async () => {
+    // R-22 at 25 C: 1044 kPa and 1191 kg/m3 (from memory of published tables).
+    const { body } = await admin.client.get<Saturation>('/api/refrigerants/R-22/saturation?temperatureC=25')
+    expect(Math.abs(body.bubblePressureKPa / 1044 - 1)).toBeLessThan(0.005)
+    expect(Math.abs(body.liquidDensity / 1191 - 1)).toBeLessThan(0.005)
+    const coldest = await admin.client.get('/api/refrigerants/R-22/saturation?temperatureC=-40')
+    const colder = await admin.client.get<ProblemDetails>('/api/refrigerants/R-22/saturation?temperatureC=-40.1')
+    expect([coldest.status, colder.status]).toEqual([200, 422])
+    expect((await admin.client.get('/api/refrigerants/R-744/saturation?temperatureC=54.4')).status).toBe(422)
+    expect((await admin.client.get('/api/refrigerants/R-22/saturation?temperatureC=warm')).status).toBe(400)
+    expect((await admin.client.get('/api/refrigerants/R-22/saturation')).status).toBe(400)
+  })
+
+  it('and the firm\'s rules are for people who are signed in', async () => {
+    const stranger = new TestClient(server.baseUrl)
+    for (const path of ['/api/refrigerants', '/api/refrigerants/R-22', '/api/fill-limit', '/api/policy']) {
+      expect((await stranger.get(path)).status).toBe(401)
+    }
+  })
+})
+
+describe('the firm\'s rules', () => {
+  it('begin with the default fill rule and the days of its reminders', async () => {
+    const { body } = await admin.client.get<PolicyAnswer>('/api/policy')
+    expect(body.timeZone).toBe('America/Chicago')
+    expect(body.fillPolicies).toEqual([{ fromAt: 0, policy: { shareThousandths: 800, ceilingThousandths: 950, options: { liquid130F: false, unRatio: false } } }])
+    expect(body.retest).toEqual({ soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null })
+  })
+})
