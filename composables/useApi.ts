@@ -42,14 +42,14 @@ export function errorAt(problem: { errors?: ProblemError[] } | null, path: strin
 }
 
 /**
- * The server's routes, with the person's cookies on both sides. Call it in a component's set-up.
+ * The server's routes, with the person's cookies on both sides. Call it in the set-up of a component or a store.
  *
  * Errors: every failure is an {@link ApiError}; a session that ended leads to the sign-in page and back.
  */
 export function useApi() {
   const request = useRequestFetch()
   const nuxt = useNuxtApp()
-  const route = useRoute()
+  const router = useRouter()
 
   async function call<T>(method: Method, path: string, options: { query?: Query, body?: unknown } = {}): Promise<T> {
     try {
@@ -64,7 +64,7 @@ export function useApi() {
     catch (error) {
       const problem = problemOf(error)
       if (problem.status === 401 && import.meta.client && !path.startsWith('/api/session')) {
-        await nuxt.runWithContext(() => navigateTo({ path: '/sign-in', query: { next: route.fullPath } }))
+        await nuxt.runWithContext(() => navigateTo({ path: '/sign-in', query: { next: router.currentRoute.value.fullPath } }))
       }
       throw new ApiError(problem)
     }

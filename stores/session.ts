@@ -5,6 +5,7 @@ import { can, type Permission } from '~~/utils/access/permissions'
 
 /** Who is signed in. Asked for once, on the server where the page is drawn there. */
 export const useSessionStore = defineStore('session', () => {
+  const api = useApi()
   const user = ref<User | null>(null)
   const known = ref(false)
 
@@ -22,9 +23,8 @@ export const useSessionStore = defineStore('session', () => {
   /** Errors: any but "not signed in", which is an answer. */
   async function load() {
     if (known.value) return
-    const { get } = useApi()
     try {
-      set((await get<SessionAnswer>('/api/session')).user)
+      set((await api.get<SessionAnswer>('/api/session')).user)
     }
     catch (error) {
       if (problemOf(error).status !== 401) throw error
@@ -33,8 +33,7 @@ export const useSessionStore = defineStore('session', () => {
   }
 
   async function signOut() {
-    const { del } = useApi()
-    await del('/api/session')
+    await api.del('/api/session')
     set(null)
   }
 

@@ -1,0 +1,66 @@
+import type { Component } from 'vue'
+import type { DraftKind } from '~~/utils/custody/draft/draft'
+import { DRAWN } from '~~/utils/custody/draft/drawn'
+import { EMPTIED } from '~~/utils/custody/draft/emptied'
+import { FILLED } from '~~/utils/custody/draft/filled'
+import { HANDED_OVER } from '~~/utils/custody/draft/handedOver'
+import { LABELLED } from '~~/utils/custody/draft/labelled'
+import { LOST } from '~~/utils/custody/draft/lost'
+import { MOVED } from '~~/utils/custody/draft/moved'
+import { REGISTERED } from '~~/utils/custody/draft/registered'
+import { RECEIVED, RETURNED } from '~~/utils/custody/draft/received'
+import { WEIGHED } from '~~/utils/custody/draft/weighed'
+import type { EventKind } from '~~/utils/custody/kinds'
+import type { CautionTopic } from '~~/utils/document/cautions'
+import DrawnForm from './DrawnForm.vue'
+import EmptiedForm from './EmptiedForm.vue'
+import FilledForm from './FilledForm.vue'
+import HandedOverForm from './HandedOverForm.vue'
+import LabelledForm from './LabelledForm.vue'
+import LostForm from './LostForm.vue'
+import MovedForm from './MovedForm.vue'
+import ReceivedForm from './ReceivedForm.vue'
+import RegisteredForm from './RegisteredForm.vue'
+import ReturnedForm from './ReturnedForm.vue'
+import WeighedForm from './WeighedForm.vue'
+
+/** Kinds that have no form of this sort: their own pages write them, or a correction does. */
+type WrittenElsewhere = 'registered' | 'sent-for-reclaim' | 'reclaimed' | 'sent-for-test' | 'retested' | 'corrected'
+
+export type FormKind = Exclude<EventKind, WrittenElsewhere>
+
+export interface ActForm {
+  component: Component
+  // A form and its draft belong together by their line here; the page only carries the draft between them.
+  // eslint-disable-next-line @typescript-eslint/no-explicit-any
+  draft: DraftKind<any, any>
+  /** The heading, as a thing that happened. */
+  title: string
+  /** What the button records. */
+  verb: string
+  cautions: CautionTopic[]
+}
+
+/** The form of each kind of event. */
+export const ACT_FORMS = {
+  'filled': { component: FilledForm, draft: FILLED, title: 'A recovery', verb: 'Record the recovery', cautions: ['filling'] },
+  'weighed': { component: WeighedForm, draft: WEIGHED, title: 'A weighing', verb: 'Record the weight', cautions: [] },
+  'moved': { component: MovedForm, draft: MOVED, title: 'A move', verb: 'Record the move', cautions: ['moving'] },
+  'handed-over': { component: HandedOverForm, draft: HANDED_OVER, title: 'Handed over', verb: 'Record the handover', cautions: [] },
+  'received': { component: ReceivedForm, draft: RECEIVED, title: 'Received', verb: 'Record that it came in', cautions: ['storing'] },
+  'returned': { component: ReturnedForm, draft: RETURNED, title: 'Returned', verb: 'Record that it came back', cautions: ['storing'] },
+  'drawn': { component: DrawnForm, draft: DRAWN, title: 'Drawn', verb: 'Record what was drawn', cautions: ['handling'] },
+  'emptied': { component: EmptiedForm, draft: EMPTIED, title: 'Emptied', verb: 'Record that it is empty', cautions: ['handling'] },
+  'lost': { component: LostForm, draft: LOST, title: 'A loss', verb: 'Record the loss', cautions: ['handling'] },
+  'labelled': { component: LabelledForm, draft: LABELLED, title: 'A label', verb: 'Record the label', cautions: [] },
+} satisfies Record<FormKind, ActForm>
+
+/** The form that mends a recorded event of a kind, or null where it can only be taken out and recorded anew. */
+export function correctionFormOf(kind: EventKind): Pick<ActForm, 'component' | 'draft'> | null {
+  return kind === 'registered' ? { component: RegisteredForm, draft: REGISTERED } : formOf(kind)
+}
+
+/** The form of a kind, or null where it has none of this sort. */
+export function formOf(kind: string): ActForm | null {
+  return Object.hasOwn(ACT_FORMS, kind) ? ACT_FORMS[kind as FormKind] : null
+}

@@ -1,0 +1,97 @@
+import type { DetailsOf } from '~~/utils/custody/schema'
+import type { LogLine } from '~~/utils/custody/cylinderView'
+import type { EventKind } from '~~/utils/custody/kinds'
+import { CONDITION_WORDS, KIND_WORDS } from '~~/utils/custody/words'
+import { formatLabelCode } from '~~/utils/label/code'
+import { formatReading, type MassReading } from '~~/utils/quantity/mass'
+import { formatMonth } from '~~/utils/quantity/month'
+
+/** What a line of the custody log says of one event. */
+export interface LineWords {
+  what: string
+  /** Where to, whom to, or which firm; null where nothing moved. */
+  to: string | null
+  gross: MassReading | null
+}
+
+type Names = Record<string, string>
+type Say<K extends EventKind> = (details: DetailsOf<K>, names: Names) => Partial<LineWords>
+
+const LOSSES = { leak: 'by a leak', relief: 'through the relief device', hose: 'at a hose', accident: 'by an accident', unknown: 'cause not known' }
+const PURPOSES = { 'same-system': 'back into the same system', 'same-owner': 'for the same owner', 'sampling': 'a sample', 'other': 'for something else' }
+
+/** How each kind of event reads. */
+const LINES: { [K in EventKind]: Say<K> } = {
+  'registered': ({ stamp, contents, gross }) => ({
+    what: `stamp read from the collar${contents === undefined ? '' : `, ${contentsInWords(contents)}`}${stamp.serial ? `, SN ${stamp.serial}` : ''}`,
+    gross: gross ?? null,
+  }),
+  'labelled': ({ code, replaces, reason }) => ({
+    what: `${formatLabelCode(code)}${replaces ? ` in place of ${formatLabelCode(replaces)}` : ''}${reason ? `: ${reason}` : ''}`,
+  }),
+  'received': ({ fromFirmId, gross, paper }, names) => ({
+    what: [fromFirmId && `from ${named(fromFirmId, names)}`, paper && `paper ${paper}`].filter(Boolean).join(', ') || 'came in',
+    gross: gross ?? null,
+  }),
+  'moved': ({ toPlaceId, toHolderId }, names) => ({
+    what: `to ${named(toPlaceId, names)}${toHolderId ? `, holder ${named(toHolderId, names)}` : ''}`,
+    to: named(toPlaceId, names),
+  }),
+  'handed-over': ({ toHolderId }, names) => ({ what: `to ${named(toHolderId, names)}` }),
+  'weighed': ({ gross }) => ({ what: 'the change is weighing', gross }),
+  'filled': ({ refrigerant, condition, grossBefore, grossAfter, ownerOfRefrigerantId }, names) => ({
+    what: [
+      `${refrigerant ?? 'refrigerant not known,'} recovered`,
+      condition && CONDITION_WORDS[condition],
+      ownerOfRefrigerantId && `of ${named(ownerOfRefrigerantId, names)}`,
+      grossBefore && `from ${formatReading(grossBefore)}`,
+    ].filter(Boolean).join(', '),
+    gross: grossAfter,
+  }),
+  'drawn': ({ grossAfter, purpose, phase }) => ({
+    what: `${PURPOSES[purpose]}${phase ? `, ${phase === 'vapour' ? 'vapor' : phase}` : ''}`,
+    gross: grossAfter,
+  }),
+  'emptied': ({ grossAfter, vacuum }) => ({ what: vacuum ? vacuumInWords(vacuum) : 'a heel is left', gross: grossAfter ?? null }),
+  'lost': ({ grossAfter, cause, unavoidable }) => ({
+    what: `${LOSSES[cause]}${unavoidable ? ', could not be avoided' : ''}`,
+    gross: grossAfter ?? null,
+  }),
+  'sent-for-reclaim': ({ gross }) => ({ what: 'left with a shipment', gross }),
+  'reclaimed': ({ theirGross, acceptedNet, grade }) => ({
+    what: ['taken over by the reclaimer', acceptedNet && `accepted ${formatReading(acceptedNet)} net`, grade].filter(Boolean).join(', '),
+    gross: theirGross ?? null,
+  }),
+  'returned': ({ fromFirmId, gross }, names) => ({ what: `from ${named(fromFirmId, names)}`, gross: gross ?? null }),
+  'sent-for-test': () => ({ what: 'left with a test lot' }),
+  'retested': ({ month, method, result, requalifierId, newTare }, names) => ({
+    what: `${result}, ${method}, ${formatMonth(month)}, by ${named(requalifierId, names)}${newTare ? `, new tare ${formatReading(newTare)}` : ''}`,
+  }),
+  'corrected': ({ reason, instead }) => ({ what: `${instead ? 'other details' : 'taken out'}: ${reason}` }),
+}
+
+/** What a line says; an event of a kind that this screen does not know yet still shows its name. */
+export function lineWords(line: LogLine): LineWords {
+  const say = LINES[line.kind] as Say<EventKind> | undefined
+  const words = say?.(line.details as DetailsOf<EventKind>, line.names) ?? { what: line.kind }
+  return { what: words.what ?? '', to: words.to ?? line.place?.name ?? null, gross: words.gross ?? null }
+}
+
+/** The word of a line's kind. */
+export function lineVerb(line: LogLine): string {
+  return KIND_WORDS[line.kind]?.done ?? line.kind
+}
+
+function named(id: string, names: Names): string {
+  return names[id] ?? 'not known'
+}
+
+function contentsInWords(contents: NonNullable<DetailsOf<'registered'>['contents']>): string {
+  if (contents === 'evacuated') return 'evacuated'
+  if (contents === 'unknown') return 'contents not known'
+  return `${contents.refrigerant}, ${CONDITION_WORDS[contents.condition]}`
+}
+
+function vacuumInWords(vacuum: NonNullable<DetailsOf<'emptied'>['vacuum']>): string {
+  return 'microns' in vacuum ? `down to ${vacuum.microns} microns` : `down to ${vacuum.inHg} inHg`
+}

@@ -1,0 +1,39 @@
+import { useApi } from '~~/composables/useApi'
+import { usePostingStore } from '~~/stores/posting'
+import type { CylinderView } from '~~/utils/contract/custody'
+import { formatLabelCode, normaliseLabelCode } from '~~/utils/label/code'
+
+/**
+ * The cylinder that this page's address names, as it stands for the refrigerant asked about; asked for again after
+ * each event recorded here.
+ *
+ * Shape: `page` is its own address, by its present label code, else by its id.
+ */
+export function useCylinder(enabled: () => boolean = () => true) {
+  const api = useApi()
+  const route = useRoute('c-ref')
+  const posting = usePostingStore()
+
+  const ref_ = computed(() => String(route.params.ref))
+  const asked = computed(() => typeof route.query.refrigerant === 'string' ? route.query.refrigerant : null)
+  const code = computed(() => normaliseLabelCode(ref_.value))
+
+  const request = useAsyncData(
+    () => `cylinder-${ref_.value}-${asked.value ?? ''}`,
+    async () => enabled()
+      ? await api.get<CylinderView>(`/api/cylinders/${encodeURIComponent(ref_.value)}`, asked.value ? { refrigerant: asked.value } : undefined)
+      : null,
+    { watch: [() => posting.recorded] },
+  )
+
+  const { data: view, error, status, refresh } = request
+  const name = computed(() => {
+    const label = view.value?.labelCode ?? code.value
+    return label ? formatLabelCode(label) : view.value?.stamp?.serial ?? 'Cylinder'
+  })
+  const page = computed(() => `/c/${(view.value?.labelCode ?? view.value?.id ?? ref_.value).toLowerCase()}`)
+  /** The code in the address, where it is one that was replaced. */
+  const oldCode = computed(() => code.value && view.value && code.value !== view.value.labelCode && view.value.oldLabelCodes.includes(code.value) ? code.value : null)
+
+  return { ready: request as PromiseLike<unknown>, view, error, status, refresh, name, page, code, oldCode, asked }
+}

@@ -1,0 +1,116 @@
+import { problemOf } from '~~/composables/useApi'
+import { deviceNow, usePostingStore, type NewEvent, type Posted } from '~~/stores/posting'
+import type { ProblemDetails } from '~~/utils/contract/problem'
+import type { CustodyEvent } from '~~/utils/custody/event'
+
+/** What every form asks beside the details of its kind. */
+export interface Envelope {
+  /** '' = now, else the local time as the browser's field has it. */
+  at: string
+  supervisorId: string
+  note: string
+}
+
+interface Kept<Draft> {
+  draft: Draft
+  envelope: Envelope
+  /** What was sent and may have arrived: the same content goes out again as the same event. */
+  sent: { content: string, event: CustodyEvent } | null
+}
+
+/**
+ * The content of a form, kept until it is recorded: a lost network, a refusal or a closed page loses nothing.
+ *
+ * Shape: `key` names the form, by cylinder and kind.
+ */
+export function useEventForm<Draft extends object>(key: string, empty: () => Draft) {
+  const posting = usePostingStore()
+  const storageKey = `collarbook-form ${key}`
+  const draft = ref(empty()) as Ref<Draft>
+  const envelope = ref<Envelope>({ at: '', supervisorId: '', note: '' })
+  const sent = shallowRef<Kept<Draft>['sent']>(null)
+  const restored = ref(false)
+  const busy = ref(false)
+  const problem = ref<ProblemDetails | null>(null)
+  const posted = shallowRef<Posted | null>(null)
+
+  onMounted(() => {
+    const kept = read<Kept<Draft>>(storageKey)
+    if (kept) {
+      draft.value = { ...empty(), ...kept.draft }
+      envelope.value = kept.envelope
+      sent.value = kept.sent
+      restored.value = true
+    }
+    watch([draft, envelope], keep, { deep: true })
+  })
+
+  function keep() {
+    write(storageKey, { draft: draft.value, envelope: envelope.value, sent: sent.value } satisfies Kept<Draft>)
+  }
+
+  function startOver() {
+    draft.value = empty()
+    envelope.value = { at: '', supervisorId: '', note: '' }
+    sent.value = null
+    restored.value = false
+    problem.value = null
+    nextTick(() => write(storageKey, null))
+  }
+
+  /** Records what the form says; whatever goes wrong, the form stays as it is and says so. */
+  async function send(content: Omit<NewEvent, 'occurredAt'>): Promise<Posted | null> {
+    busy.value = true
+    problem.value = null
+    const event = sealedOnce(content)
+    try {
+      posted.value = await posting.post(event)
+      posting.announce(posted.value)
+      write(storageKey, null)
+      return posted.value
+    }
+    catch (error) {
+      problem.value = problemOf(error)
+      return null
+    }
+    finally {
+      busy.value = false
+    }
+  }
+
+  function sealedOnce(content: Omit<NewEvent, 'occurredAt'>): CustodyEvent {
+    const text = JSON.stringify([content, envelope.value.at])
+    if (sent.value?.content === text) return sent.value.event
+    const { at } = envelope.value
+    const occurredAt = at === '' ? deviceNow() : deviceNow(new Date(at).getTime())
+    const before = sent.value?.event
+    const event = before
+      ? { ...content, occurredAt, id: before.id, deviceId: before.deviceId, deviceSeq: before.deviceSeq }
+      : posting.seal({ ...content, occurredAt })
+    sent.value = { content: text, event: event as CustodyEvent }
+    keep()
+    return event as CustodyEvent
+  }
+
+  return { draft, envelope, restored, busy, problem, posted, send, startOver }
+}
+
+function read<T>(key: string): T | null {
+  try {
+    const text = sessionStorage.getItem(key)
+    return text === null ? null : JSON.parse(text) as T
+  }
+  catch {
+    return null
+  }
+}
+
+function write(key: string, value: object | null) {
+  try {
+    if (value === null) sessionStorage.removeItem(key)
+    else sessionStorage.setItem(key, JSON.stringify(value))
+  }
+  catch {
+    // Without storage the entry is kept as long as the page is open.
+  }
+}

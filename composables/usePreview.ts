@@ -1,0 +1,94 @@
+import { useApi } from '~~/composables/useApi'
+import { useCatalogue } from '~~/composables/useCatalogue'
+import { deviceNow, usePostingStore } from '~~/stores/posting'
+import { useFirmRulesStore } from '~~/stores/firmRules'
+import { useSessionStore } from '~~/stores/session'
+import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
+import type { FoldInput, PolicyAnswer } from '~~/utils/contract/custody'
+import type { AnyCustodyEvent } from '~~/utils/custody/event'
+import type { Finding, FindingCode } from '~~/utils/custody/finding'
+import type { EventKind } from '~~/utils/custody/kinds'
+import type { ViewContext } from '~~/utils/custody/view'
+
+/** An event as far as its form is filled in. */
+export interface PreviewContent { cylinderId: string, kind: EventKind, placeId?: string, supervisorId?: string, details: unknown, expects?: number }
+
+const WAIT_MS = 250
+const DRAFT_ID = '00000000-0000-7000-8000-000000000000'
+// Cautions that mean a slip of the finger as likely as a fact: the form asks once.
+const ASKED: readonly FindingCode[] = ['weigh-again', 'not-registered']
+
+/**
+ * What would be found if the event in a form were recorded now, judged in this browser by the server's own rules.
+ *
+ * Where it cannot be judged here (no network for the log of the cylinder), it is judged after sending as always.
+ */
+export function usePreview(input: { content: () => PreviewContent | null, at: () => string }) {
+  const api = useApi()
+  const session = useSessionStore()
+  const rules = useFirmRulesStore()
+  const posting = usePostingStore()
+  const load = useCatalogue()
+  const findings = shallowRef<Finding[]>([])
+  let known: { cylinderId: string, recorded: number, input: FoldInput } | null = null
+  let timer: ReturnType<typeof setTimeout> | undefined
+  let turn = 0
+
+  async function foldInput(cylinderId: string): Promise<FoldInput> {
+    if (known?.cylinderId !== cylinderId || known.recorded !== posting.recorded) {
+      known = { cylinderId, recorded: posting.recorded, input: await api.get<FoldInput>(`/api/cylinders/${cylinderId}/fold`) }
+    }
+    return known.input
+  }
+
+  async function judge() {
+    const mine = ++turn
+    const content = input.content()
+    if (!content) {
+      findings.value = []
+      return
+    }
+    try {
+      const [{ catalogue, preview }, policy, { events, codesOnTwo }] = await Promise.all([load(), rules.load(), foldInput(content.cylinderId)])
+      if (mine !== turn) return
+      const at = input.at()
+      const draft = {
+        ...content, id: DRAFT_ID, deviceId: '', deviceSeq: Number.MAX_SAFE_INTEGER,
+        occurredAt: at === '' ? deviceNow() : deviceNow(new Date(at).getTime()),
+      } as AnyCustodyEvent
+      findings.value = preview(events, draft, viewContext(policy, catalogue, session.access, codesOnTwo)).findings
+    }
+    catch {
+      if (mine === turn) findings.value = []
+    }
+  }
+
+  // The same content drawn anew is not judged anew.
+  onMounted(() => watch(() => JSON.stringify([input.content(), input.at()]), () => {
+    clearTimeout(timer)
+    timer = setTimeout(judge, WAIT_MS)
+  }, { immediate: true }))
+  onBeforeUnmount(() => clearTimeout(timer))
+
+  const asks = computed(() => findings.value.some(finding => finding.severity === 'stop' || ASKED.includes(finding.code)))
+  return { findings, asks }
+}
+
+function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], access: ViewContext['access'], codesOnTwo: string[]): ViewContext {
+  const nowMs = Date.now()
+  const policyAt = (ms: number) => policy.fillPolicies.findLast(entry => entry.fromAt <= ms)?.policy ?? DEFAULT_FILL_POLICY
+  const itself = (id: string) => ({ id, name: '' })
+  return {
+    nowMs,
+    timeZone: policy.timeZone,
+    policyNow: policyAt(nowMs),
+    policyAt,
+    catalogue,
+    scales: new Map(policy.scales.map(scale => [scale.id, scale])),
+    retest: policy.retest,
+    access,
+    codesOnTwo: new Set(codesOnTwo),
+    // Nobody reads names here: only the findings are shown.
+    names: { place: itself, person: itself, firm: itself },
+  }
+}

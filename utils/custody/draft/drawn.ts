@@ -1,0 +1,18 @@
+import type { MassReading } from '../../quantity/mass'
+import type { DraftKind } from './draft'
+
+export const PURPOSES = ['same-system', 'same-owner', 'sampling', 'other'] as const
+export const PHASES = ['liquid', 'vapour'] as const
+
+export interface DrawnDraft { grossAfter: MassReading | null, purpose: (typeof PURPOSES)[number] | '', phase: (typeof PHASES)[number] | '' }
+
+/** The form of refrigerant taken out for use. */
+export const DRAWN: DraftKind<'drawn', DrawnDraft> = {
+  empty: () => ({ grossAfter: null, purpose: '', phase: '' }),
+  read: ({ grossAfter, purpose, phase }) => {
+    if (purpose === '') return { reason: 'Choose what it was drawn for.' }
+    if (!grossAfter) return { reason: 'Type what the scale shows, hoses off.' }
+    return { details: { grossAfter, purpose, ...(phase && { phase }) } }
+  },
+  of: ({ grossAfter, purpose, phase }) => ({ grossAfter, purpose, phase: phase ?? '' }),
+}

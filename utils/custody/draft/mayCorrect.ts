@@ -1,0 +1,16 @@
+import type { Access } from '../../access/roles'
+import { can } from '../../access/permissions'
+import type { LogLine } from '../cylinderView'
+import { DISPATCH_KINDS, type EventKind } from '../kinds'
+
+const AUTHORS_TIME_MS = 24 * 3_600_000
+
+/** Kinds that their own papers mend. */
+const MENDED_ELSEWHERE: readonly EventKind[] = DISPATCH_KINDS
+
+/** Whether a person may correct a line: whoever may correct any, and its author for a day from its recording. */
+export function mayCorrect(line: LogLine, access: Access | null, nowMs: number): boolean {
+  if (MENDED_ELSEWHERE.includes(line.kind) || line.kind === 'corrected') return false
+  if (can(access, 'events:correct-any')) return true
+  return can(access, 'events:post') && line.author.id === access?.personId && nowMs - Date.parse(line.recordedAt) < AUTHORS_TIME_MS
+}
