@@ -1,0 +1,31 @@
+import { describe, expect, it } from 'vitest'
+import type { Role } from '../../../../utils/access/roles'
+import { firstScreenFor, navigationFor } from '../../../../utils/access/navigation'
+
+const access = (...roles: Role[]) => ({ personId: 'p', roles, trainee: false })
+const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => item.label)
+
+describe('where a person can go', () => {
+  it.each<[Role, string[]]>([
+    ['technician', ['Scan', 'Fleet', 'Places', 'People']],
+    ['warehouse', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Labels', 'Places', 'People']],
+    ['manager', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Labels', 'Places', 'People', 'Log']],
+    ['auditor', ['Fleet', 'Shipments', 'Retests', 'Places', 'People', 'Log']],
+    ['admin', ['Fleet', 'Places', 'People', 'Mail']],
+  ])('as %s', (role, labels) => {
+    expect(words(role)).toEqual(labels)
+  })
+
+  it('is nowhere without signing in', () => {
+    expect(navigationFor(null)).toEqual([])
+  })
+})
+
+describe('where a person begins', () => {
+  it('is the scan for a technician, the fleet for the desk, sign-in for anybody else', () => {
+    expect(firstScreenFor(access('technician'))).toBe('/scan')
+    expect(firstScreenFor(access('auditor'))).toBe('/fleet')
+    expect(firstScreenFor(access('technician', 'manager'))).toBe('/fleet')
+    expect(firstScreenFor(null)).toBe('/sign-in')
+  })
+})

@@ -1,0 +1,23 @@
+import { describe, expect, it } from 'vitest'
+import { nextStep } from '../../../../utils/fleet/nextStep'
+import { cylinderRow } from '../../../helpers/cylinderRow'
+
+describe('what to do with a cylinder next', () => {
+  it('is to draw down one that is overfilled, whatever else it needs', () => {
+    expect(nextStep(cylinderRow({ findingCodes: ['overfill', 'retest-overdue'] }))?.word).toBe('Draw it down')
+  })
+
+  it('is never to test a cylinder with something in it', () => {
+    expect(nextStep(cylinderRow({ findingCodes: ['retest-overdue'] }))).toEqual({ word: 'Empty or ship it', screen: 'shipment' })
+    expect(nextStep(cylinderRow({ findingCodes: ['retest-overdue'], nothingInIt: true, refrigerant: null }))).toEqual({ word: 'Send to test', screen: 'test-lot' })
+  })
+
+  it('is to weigh what was not weighed and to identify what is not known', () => {
+    expect(nextStep(cylinderRow({ netGrams: null }))?.word).toBe('Weigh it')
+    expect(nextStep(cylinderRow({ refrigerant: null }))?.word).toBe('Identify it')
+  })
+
+  it('is nothing where its life has ended', () => {
+    expect(nextStep(cylinderRow({ lifecycle: 'condemned' }))).toBeNull()
+  })
+})

@@ -1,0 +1,45 @@
+import { describe, expect, it } from 'vitest'
+import type { ShipmentLine } from '../../../../utils/contract/shipments'
+import { dispatchSum, weighedLines } from '../../../../utils/shipment/dispatchSum'
+import { settlementDifferenceGrams } from '../../../../utils/shipment/settlementDifference'
+import { cylinderRow } from '../../../helpers/cylinderRow'
+
+function line(id: string, change = {}): ShipmentLine {
+  return { cylinder: cylinderRow({ id, ...change }), version: 7, because: [], sent: null, received: null }
+}
+
+describe('a shipment being weighed', () => {
+  it('takes the tare off what the scale shows, and adds up only what is weighed', () => {
+    const lines = weighedLines([line('a'), line('b')], { a: { unit: 'kg', value: 22.72 } })
+    expect(lines[0]).toMatchObject({ grossGrams: 22_720, netGrams: 10_246 })
+    expect(lines[1]).toMatchObject({ grossGrams: null, netGrams: null })
+    expect(dispatchSum(lines)).toEqual({ weighed: 1, grossGrams: 22_720, netGrams: 10_246, nets: 1 })
+  })
+
+  it('has no net where the tare is not known', () => {
+    const lines = weighedLines([line('a', { tareWeightGrams: null })], { a: { unit: 'kg', value: 22.72 } })
+    expect(dispatchSum(lines)).toEqual({ weighed: 1, grossGrams: 22_720, netGrams: null, nets: 0 })
+  })
+
+  // Known: 12474 + 10251 = 22725 g, off by at most 114 g; a new gross of 22950 g by 115 g: together 229 g.
+  it('tells a change beyond both weighings from one within them', () => {
+    const changed = (kg: number) => weighedLines([line('a')], { a: { unit: 'kg', value: kg } })[0]!.changedGrams
+    expect(changed(22.954)).toBeNull()
+    expect(changed(22.955)).toBe(230)
+  })
+
+  it('sees the first gram above the fill limit', () => {
+    const over = (grams: number) => weighedLines([line('a')], { a: { unit: 'kg', value: grams / 1000 } })[0]!.over
+    expect(over(12_474 + 17_272)).toBe(false)
+    expect(over(12_474 + 17_273)).toBe(true)
+  })
+})
+
+describe('their weight beside ours', () => {
+  // Half a percent of 30 kg is 150 g; both scales together 300 g.
+  it('differs only beyond what both scales may be off', () => {
+    expect(settlementDifferenceGrams(17_000, 17_300, 30_000)).toBeNull()
+    expect(settlementDifferenceGrams(17_000, 16_699, 30_000)).toBe(-301)
+    expect(settlementDifferenceGrams(null, 16_000, 30_000)).toBeNull()
+  })
+})
