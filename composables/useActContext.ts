@@ -1,4 +1,4 @@
-import type { ActLists } from '~~/components/act/lists'
+import type { ActLists } from '~~/utils/contract/actLists'
 import { useApi } from '~~/composables/useApi'
 import { useClock } from '~~/composables/useClock'
 import { useFirmRulesStore } from '~~/stores/firmRules'

@@ -1,7 +1,7 @@
-import type { Firm } from '~~/utils/contract/places'
-import type { PersonLine } from '~~/utils/contract/people'
-import type { PolicyAnswer } from '~~/utils/contract/custody'
-import type { DraftPlace } from '~~/utils/custody/draft/draft'
+import type { Firm } from './places'
+import type { PersonLine } from './people'
+import type { PolicyAnswer } from './custody'
+import type { DraftPlace } from '../custody/draft/draft'
 
 /** What the forms choose from. */
 export interface ActLists {

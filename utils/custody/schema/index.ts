@@ -39,6 +39,3 @@ export const DETAILS = {
 
 /** What an event of a kind says. */
 export type DetailsOf<K extends EventKind> = z.output<(typeof DETAILS)[K]>
-
-export { parseEvent } from './parseEvent'
-export type { EventParse } from './parseEvent'
