@@ -67,7 +67,7 @@ export default {
       borderWidth: { DEFAULT: 'var(--hair)', thin: 'max(1.5px, var(--hair))', foot: '4px' },
       borderColor: { DEFAULT: 'var(--line)' },
       // Heights of what a hand presses: a row of the field, its main button, a row and a button of the desk.
-      spacing: { row: 'var(--key-row)', primary: 'var(--key-primary)', deskrow: '38px', desk: '40px' },
+      spacing: { row: 'var(--key-row)', primary: 'var(--key-primary)', deskrow: '38px', desk: 'var(--press)', chip: 'var(--press-chip)' },
       maxWidth: { phone: '35rem', desk: '90rem', words: '42rem' },
       transitionDuration: { DEFAULT: '120ms' },
     },

@@ -9,7 +9,7 @@ describe('the month strip', () => {
     const cells = allByRole(wrapper.element, 'button')
     expect(cells).toHaveLength(13)
     expect(cells[0]!.getAttribute('aria-label')).toBe('2 late')
-    const march = byRole(wrapper.element, 'button', '1 in March 2027')
+    const march = byRole(wrapper.element, 'button', '1 Mar, due by the end of March 2027')
     expect(march.getAttribute('aria-pressed')).toBe('true')
     march.click()
     byRole(wrapper.element, 'button', '2 late').click()
@@ -18,8 +18,8 @@ describe('the month strip', () => {
 
   it('fills a month within the warning time only', async () => {
     const wrapper = await mountSuspended(CylinderMonthStrip, { props: { from: '2026-12', counts: { '2027-03': 1, '2027-04': 1 }, soonMonths: 4 } })
-    expect(byRole(wrapper.element, 'button', '1 in March 2027').className).toContain('bg-att')
-    expect(byRole(wrapper.element, 'button', '1 in April 2027').className).not.toContain('bg-att')
+    expect(byRole(wrapper.element, 'button', '1 Mar, due by the end of March 2027').className).toContain('bg-att')
+    expect(byRole(wrapper.element, 'button', '1 Apr, due by the end of April 2027').className).not.toContain('bg-att')
   })
 
   it.each([
