@@ -77,8 +77,14 @@ function monthOfCount(count: number): Month {
   return `${String(Math.floor(count / 12)).padStart(4, '0')}-${String(count % 12 + 1).padStart(2, '0')}`
 }
 
+// A format costs a hundred times its use, and every view asks for one; nothing but the time zone goes into it.
+const formats = new Map<string, Intl.DateTimeFormat>()
+
 function dateFormat(timeZone: string): Intl.DateTimeFormat {
-  return new Intl.DateTimeFormat('en-US', { timeZone, calendar: 'gregory', year: 'numeric', month: 'numeric', day: 'numeric' })
+  const format = formats.get(timeZone)
+    ?? new Intl.DateTimeFormat('en-US', { timeZone, calendar: 'gregory', year: 'numeric', month: 'numeric', day: 'numeric' })
+  formats.set(timeZone, format)
+  return format
 }
 
 function dateIn(format: Intl.DateTimeFormat, ms: number): { year: number, month: number, day: number } {

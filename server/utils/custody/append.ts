@@ -10,6 +10,7 @@ import { parsePost, refuse, refusalOf, type ParsedPost, type Refusal } from './j
 import { insertLogRow, recordedEvent, type LogRow } from './logRow'
 import type { Guard, Posting } from './posting'
 import { sealedRow } from './sealedRow'
+import { sharedCodeRows } from './sharedCodeRows'
 
 /** Most events in one commit. */
 const GROUP_EVENTS = 200
@@ -116,7 +117,10 @@ async function commitGroup(db: Database, part: Waiting[], commit: Database['writ
     if (dispatch) statements.push(...dispatch.alongside(everyOf(written)))
     const answers = await commit(statements)
     // The driver answers one row for each line that was written; another process that was first leaves none.
-    if (written.every((_, index) => (answers[index]?.rows.length ?? 0) === 1)) return judged.map(one => one.results)
+    if (!written.every((_, index) => (answers[index]?.rows.length ?? 0) === 1)) continue
+    const relabelled = written.filter(row => row.kind === 'labelled' || row.kind === 'corrected')
+    if (relabelled.length > 0) await commit(await sharedCodeRows(db, [...new Set(relabelled.map(row => row.cylinder_id))], Math.max(...written.map(row => row.recorded_at))))
+    return judged.map(one => one.results)
   }
   throw new StorageUnavailable('The custody log is written by others faster than this process can follow')
 }

@@ -1,9 +1,11 @@
 import type { InStatement, InValue } from '@libsql/client'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
-import { fold, type FoldContext, type FoldResult } from '../../../utils/custody/fold'
+import { fold, type FoldResult } from '../../../utils/custody/fold'
 import type { Movement } from '../../../utils/custody/movement'
 import { cacheRow, type RowContext } from '../../../utils/custody/row'
-import { foldContext } from './foldContext'
+import type { CylinderState } from '../../../utils/custody/state'
+import type { Directory } from '../directory/directory'
+import { foldContext, rowContext } from './foldContext'
 import type { Group } from './group'
 import type { LogRow } from './logRow'
 import type { Guard } from './posting'
@@ -15,34 +17,38 @@ const NO_GUARD: Guard = { sql: '1', args: [] }
  * its cylinder was written: the loser of a race changes no cache.
  */
 export function cacheStatements(group: Group): InStatement[] {
-  const context = foldContext(group.directory)
   return group.touched().flatMap(({ cylinderId, events, added }) => {
     const last = added.at(-1)!
     const guard: Guard = {
       sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)',
       args: [last.id, last.cylinder_id, last.version, last.hash],
     }
-    return cylinderCache(cylinderId, events, added, context, guard)
+    const folded = fold(events, foldContext(group.directory))
+    const context = rowContext(group.directory, last.recorded_at, group.codesOnTwo(cylinderId))
+    return [
+      upsertCylinder(cylinderId, folded.state, context, guard),
+      ...movementStatements(cylinderId, folded, added, guard),
+      ...claimStatements(cylinderId, folded, added, guard),
+    ]
   })
 }
 
 /** The caches of one cylinder, made from its whole log and under no condition: for a rebuild. */
-export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], context: FoldContext & RowContext): InStatement[] {
-  return cylinderCache(cylinderId, events, null, context, NO_GUARD)
-}
-
-function cylinderCache(
-  cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] | null, context: FoldContext & RowContext, guard: Guard,
-): InStatement[] {
-  const folded = fold([...events], context)
+export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], from: Directory, nowMs: number): InStatement[] {
+  const folded = fold(events, foldContext(from))
   return [
-    upsertCylinder(cylinderId, folded, context, guard),
-    ...movementStatements(cylinderId, folded, added, guard),
-    ...claimStatements(cylinderId, folded, added, guard),
+    upsertCylinder(cylinderId, folded.state, rowContext(from, nowMs), NO_GUARD),
+    ...movementStatements(cylinderId, folded, null, NO_GUARD),
+    ...claimStatements(cylinderId, folded, null, NO_GUARD),
   ]
 }
 
-function upsertCylinder(cylinderId: string, { state }: FoldResult, context: FoldContext & RowContext, guard: Guard): InStatement {
+/** The row of a cylinder from its cached state, where something outside its events has changed. */
+export function refreshedRow(cylinderId: string, state: CylinderState, context: RowContext): InStatement {
+  return upsertCylinder(cylinderId, state, context, NO_GUARD)
+}
+
+function upsertCylinder(cylinderId: string, state: CylinderState, context: RowContext, guard: Guard): InStatement {
   const columns: Record<string, InValue> = { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state) }
   const names = Object.keys(columns)
   return {

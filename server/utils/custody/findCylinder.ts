@@ -1,3 +1,4 @@
+import type { Row } from '@libsql/client'
 import { normaliseLabelCode } from '../../../utils/label/code'
 import type { Database } from '../database/database'
 
@@ -25,19 +26,24 @@ export async function findCylinder(db: Database, ref: string): Promise<string | 
   return bySerial.rows.length === 1 ? bySerial.rows[0]![0] as string : null
 }
 
-/** The codes among these cylinders' that more than one cylinder claims, by cylinder. */
-export async function codesOnTwo(db: Database, cylinderIds: readonly string[]): Promise<Map<string, Set<string>>> {
+/** Codes of cylinders that another cylinder claims too; a list of the cylinders' ids follows. */
+export const SHARED_CODES = `SELECT DISTINCT mine.cylinder_id, mine.code FROM label_claims mine
+  JOIN label_claims other ON other.code = mine.code AND other.cylinder_id <> mine.cylinder_id
+  WHERE mine.cylinder_id IN`
+
+/** The answer of {@link SHARED_CODES}, by cylinder. */
+export function sharedCodes(rows: readonly Row[]): Map<string, Set<string>> {
   const answer = new Map<string, Set<string>>()
-  if (cylinderIds.length === 0) return answer
-  const result = await db.readClient.execute({
-    sql: `SELECT DISTINCT mine.cylinder_id, mine.code FROM label_claims mine
-      JOIN label_claims other ON other.code = mine.code AND other.cylinder_id <> mine.cylinder_id
-      WHERE mine.cylinder_id IN (${cylinderIds.map(() => '?').join(', ')})`,
-    args: [...cylinderIds],
-  })
-  for (const row of result.rows) {
+  for (const row of rows) {
     const id = row[0] as string
     answer.set(id, (answer.get(id) ?? new Set()).add(row[1] as string))
   }
   return answer
+}
+
+/** The codes among these cylinders' that more than one cylinder claims, by cylinder. */
+export async function codesOnTwo(db: Database, cylinderIds: readonly string[]): Promise<Map<string, Set<string>>> {
+  if (cylinderIds.length === 0) return new Map()
+  const result = await db.readClient.execute({ sql: `${SHARED_CODES} (${cylinderIds.map(() => '?').join(', ')})`, args: [...cylinderIds] })
+  return sharedCodes(result.rows)
 }

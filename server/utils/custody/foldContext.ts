@@ -35,3 +35,15 @@ export function viewContext(from: Directory, more: {
     names: namesOf(from),
   }
 }
+
+/** What the cached columns take from outside the log: the rule in force, but not the day. */
+export function rowContext(from: Directory, nowMs: number, codesOnTwo: ReadonlySet<string> = new Set()): RowContext {
+  return {
+    policyNow: fillPolicyAt(from.fillPolicies, nowMs),
+    policyAt: at => fillPolicyAt(from.fillPolicies, at),
+    catalogue: CATALOGUE,
+    timeZone: from.timeZone,
+    retest: from.retest,
+    codesOnTwo,
+  }
+}

@@ -2,6 +2,7 @@ import type { InStatement } from '@libsql/client'
 import type { AnyCustodyEvent, AnyRecordedEvent } from '../../../utils/custody/event'
 import { directory, type Directory } from '../directory/directory'
 import type { Database } from '../database/database'
+import { SHARED_CODES, sharedCodes } from './findCylinder'
 import { unknownIds, type KnownIds } from './judge'
 import { logRow, recordedEvent, SELECT_LOG, type LogRow } from './logRow'
 import type { ChainHead } from './sealedRow'
@@ -17,6 +18,8 @@ export interface Group {
   headOf: (cylinderId: string) => ChainHead
   nextSeq: () => number
   add: (row: LogRow, event: AnyRecordedEvent) => void
+  /** Codes of a cylinder that another one claims too. */
+  codesOnTwo: (cylinderId: string) => ReadonlySet<string>
   /** Cylinders that an accepted event has touched, with the lines added to each. */
   touched: () => { cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] }[]
   mark: () => number
@@ -24,17 +27,20 @@ export interface Group {
   backTo: (mark: number) => void
 }
 
+const NONE: ReadonlySet<string> = new Set()
+
 /** Reads what these events are to be judged on, at one instant. */
 export async function group(db: Database, events: readonly AnyCustodyEvent[]): Promise<Group> {
   const ids = [...new Set(events.map(event => event.id))]
   const cylinderIds = [...new Set(events.map(event => event.cylinderId))]
   const named = idsIn(events)
-  const [newestRows, storedRows, logRows, shipmentRows, lotRows] = await db.readClient.batch([
+  const [newestRows, storedRows, logRows, shipmentRows, lotRows, sharedRows] = await db.readClient.batch([
     'SELECT seq, id FROM custody_events ORDER BY seq DESC LIMIT 1',
     inList('SELECT id, content_hash, seq, version FROM custody_events WHERE id IN', ids),
     inList(`${SELECT_LOG} WHERE cylinder_id IN`, cylinderIds, 'ORDER BY cylinder_id, version'),
     inList('SELECT id FROM shipments WHERE id IN', named.shipments),
     inList('SELECT id FROM test_lots WHERE id IN', named.testLots),
+    inList(SHARED_CODES, cylinderIds),
   ], 'read')
 
   const newestRow = newestRows?.rows[0]
@@ -51,6 +57,7 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
   }
   const shipments = new Set((shipmentRows?.rows ?? []).map(row => row[0] as string))
   const testLots = new Set((lotRows?.rows ?? []).map(row => row[0] as string))
+  const shared = sharedCodes(sharedRows?.rows ?? [])
   const { from, known } = await knownIds(db, events, shipments, testLots)
 
   const added: { row: LogRow, event: AnyRecordedEvent }[] = []
@@ -59,6 +66,7 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
     newest,
     directory: from,
     known,
+    codesOnTwo: cylinderId => shared.get(cylinderId) ?? NONE,
     stored(eventId) {
       const now = added.find(one => one.row.id === eventId)
       return now ? { contentHash: now.row.content_hash, seq: now.row.seq, version: now.row.version } : stored.get(eventId)

@@ -3,8 +3,8 @@ import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { rebuiltCache } from './caches'
-import { foldContext } from './foldContext'
 import { logRow, recordedEvent, SELECT_LOG } from './logRow'
+import { sharedCodeRows } from './sharedCodeRows'
 
 const PAGE_ROWS = 1_000
 
@@ -13,8 +13,8 @@ const PAGE_ROWS = 1_000
  *
  * @returns how many cylinders and events it went through.
  */
-export async function rebuildCaches(db: Database): Promise<{ cylinders: number, events: number }> {
-  const context = foldContext(await directory(db, true))
+export async function rebuildCaches(db: Database, nowMs: number): Promise<{ cylinders: number, events: number }> {
+  const from = await directory(db, true)
   await db.write(['DELETE FROM movements', 'DELETE FROM label_claims', 'DELETE FROM cylinders'])
   let cylinders = 0
   let events = 0
@@ -22,7 +22,7 @@ export async function rebuildCaches(db: Database): Promise<{ cylinders: number, 
   let open: AnyRecordedEvent[] = []
   const close = () => {
     if (open.length === 0) return
-    waiting.push(...rebuiltCache(open[0]!.cylinderId, open, context))
+    waiting.push(...rebuiltCache(open[0]!.cylinderId, open, from, nowMs))
     cylinders++
     open = []
   }
@@ -42,6 +42,9 @@ export async function rebuildCaches(db: Database): Promise<{ cylinders: number, 
     if (result.rows.length < PAGE_ROWS) close()
     await db.write(waiting)
     waiting = []
-    if (result.rows.length < PAGE_ROWS) return { cylinders, events }
+    if (result.rows.length < PAGE_ROWS) break
   }
+  const shared = await db.readClient.execute('SELECT DISTINCT a.cylinder_id FROM label_claims a JOIN label_claims b ON a.code = b.code AND a.cylinder_id <> b.cylinder_id')
+  if (shared.rows.length > 0) await db.write(await sharedCodeRows(db, shared.rows.map(row => row[0] as string), nowMs))
+  return { cylinders, events }
 }

@@ -7,7 +7,7 @@ export async function runRebuild(url: string, migrations: string): Promise<void>
   const db = await openDatabase(url, process.env.DATABASE_AUTH_TOKEN)
   if (db.file) await holdDatabaseFile(db.file)
   await db.migrate(migrations)
-  const done = await rebuildCaches(db)
+  const done = await rebuildCaches(db, Date.now())
   console.log(`Rebuilt ${done.cylinders} cylinders from ${done.events} events.`)
   db.close()
 }

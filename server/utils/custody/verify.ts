@@ -1,5 +1,5 @@
 import type { LogVerification } from '../../../utils/contract/log'
-import { hashEvent } from '../../../utils/custody/chain'
+import { verifyStep } from '../../../utils/custody/chain'
 import type { Database } from '../database/database'
 import { logRow, SELECT_LOG, type LogRow } from './logRow'
 import { sha256 } from './sha256'
@@ -43,10 +43,6 @@ async function pageAfter(db: Database, last: LogRow | null): Promise<LogRow[]> {
 
 /** What is wrong with a line, given the line before it in the same cylinder; null when nothing is. */
 function faultOf(row: LogRow, before: LogRow | null): string | null {
-  if (row.version !== (before?.version ?? 0) + 1) return 'a line before it is missing, or its version was changed'
-  if (row.prev_hash !== (before?.hash ?? '')) return 'it does not follow the line before it'
   if (before && row.seq <= before.seq) return 'it was recorded before the line it follows'
-  const { hash, ...open } = row
-  if (hashEvent(open, sha256) !== hash) return 'one of its columns was changed'
-  return null
+  return verifyStep(row, { version: before?.version ?? 0, hash: before?.hash ?? '' }, sha256)
 }

@@ -6,7 +6,7 @@ export const DAY = 24 * HOUR
 
 /** An instant as people of a time zone write it: ISO 8601 with the offset of that day. */
 export function localIso(ms: number, timeZone: string): string {
-  const parts = new Intl.DateTimeFormat('en-US', { timeZone, timeZoneName: 'longOffset' }).formatToParts(ms)
+  const parts = offsetFormat(timeZone).formatToParts(ms)
   const offset = parts.find(part => part.type === 'timeZoneName')?.value.slice('GMT'.length) || '+00:00'
   const minutes = (Number(offset.slice(1, 3)) * 60 + Number(offset.slice(4, 6))) * (offset.startsWith('-') ? -1 : 1)
   return new Date(ms + minutes * MINUTE).toISOString().replace('Z', offset)
@@ -28,4 +28,13 @@ export function monthFrom(ms: number, months: number): string {
   date.setUTCDate(1)
   date.setUTCMonth(date.getUTCMonth() + months)
   return date.toISOString().slice(0, 7)
+}
+
+const formats = new Map<string, Intl.DateTimeFormat>()
+
+/** Costly to make, and asked for at each event. */
+function offsetFormat(timeZone: string): Intl.DateTimeFormat {
+  const format = formats.get(timeZone) ?? new Intl.DateTimeFormat('en-US', { timeZone, timeZoneName: 'longOffset' })
+  formats.set(timeZone, format)
+  return format
 }

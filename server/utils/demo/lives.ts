@@ -26,9 +26,9 @@ export interface Stage {
 }
 
 const MIX: [refrigerant: string, size: SteelSize, count: number][] = [
-  ['R-410A', 'small', 28], ['R-410A', 'middle', 34], ['R-410A', 'large', 5],
-  ['R-22', 'middle', 18], ['R-22', 'low', 10], ['R-22', 'large', 4],
-  ['R-134a', 'small', 14], ['R-134a', 'low', 6], ['R-404A', 'middle', 14], ['R-407C', 'middle', 10],
+  ['R-410A', 'small', 24], ['R-410A', 'middle', 28], ['R-410A', 'large', 4],
+  ['R-22', 'middle', 15], ['R-22', 'low', 9], ['R-22', 'large', 3],
+  ['R-134a', 'small', 12], ['R-134a', 'low', 5], ['R-404A', 'middle', 12], ['R-407C', 'middle', 9],
   ['R-448A', 'small', 4], ['R-32', 'small', 6], ['R-454B', 'small', 5],
 ]
 

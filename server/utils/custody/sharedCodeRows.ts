@@ -1,0 +1,23 @@
+import type { InStatement } from '@libsql/client'
+import type { Database } from '../database/database'
+import { directory } from '../directory/directory'
+import { refreshedRow } from './caches'
+import { cylinderStates } from './cylinderViews'
+import { codesOnTwo } from './findCylinder'
+import { rowContext } from './foldContext'
+
+/**
+ * The rows of every cylinder that shares a code with one of these, as they must read once a label was stuck on or taken
+ * back: one code on two cylinders shows on both.
+ */
+export async function sharedCodeRows(db: Database, cylinderIds: readonly string[], nowMs: number): Promise<InStatement[]> {
+  const others = await db.readClient.execute({
+    sql: `SELECT DISTINCT other.cylinder_id FROM label_claims mine JOIN label_claims other ON other.code = mine.code
+      WHERE mine.cylinder_id IN (${cylinderIds.map(() => '?').join(', ')})
+      UNION SELECT id FROM cylinders WHERE finding_codes LIKE '% code-on-two %'`,
+    args: [...cylinderIds],
+  })
+  const ids = others.rows.map(row => row[0] as string)
+  const [from, shared, states] = await Promise.all([directory(db), codesOnTwo(db, ids), cylinderStates(db, ids)])
+  return [...states].map(([id, state]) => refreshedRow(id, state, rowContext(from, nowMs, shared.get(id))))
+}

@@ -1,0 +1,108 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { mkdtempSync, rmSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { join, resolve } from 'node:path'
+import { cylinderViews } from '../../server/utils/custody/cylinderViews'
+import { custodyLog } from '../../server/utils/custody/custodyLog'
+import { fleet } from '../../server/utils/custody/fleet'
+import { verifyLog } from '../../server/utils/custody/verify'
+import { openDatabase, type Database } from '../../server/utils/database/database'
+import { fillDemo } from '../../server/utils/demo/fillDemo'
+import { fleetQuery } from '../../utils/contract/custody'
+import { EVENT_KINDS } from '../../utils/custody/kinds'
+import type { FindingCode } from '../../utils/custody/finding'
+
+const NOW = Date.parse('2026-12-01T17:00:00Z')
+
+/** Every finding that the present kinds of event can raise. */
+const RAISED: FindingCode[] = [
+  'overfill', 'nearly-full', 'pressure-class', 'spec-not-for-gas', 'not-refillable', 'not-marked-flammable', 'toxic', 'second-refrigerant',
+  'unknown-onto-known', 'retest-overdue', 'retest-soon', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'weight-not-known',
+  'not-registered', 'registered-twice', 'old-tare-on-label', 'code-on-two', 'unsigned', 'unsupervised', 'not-seen', 'two-owners', 'weigh-again',
+  'clock-doubtful', 'look-before-fill', 'away', 'after-end', 'tested-full',
+]
+
+let folder: string
+let db: Database
+beforeAll(async () => {
+  folder = mkdtempSync(join(tmpdir(), 'collarbook-demo-'))
+  db = await openDatabase(`file:${join(folder, 'demo.db')}`)
+  await db.migrate(resolve('drizzle/migrations'))
+  expect(await fillDemo(db, 'no password', NOW)).toBe(true)
+}, 120_000)
+afterAll(() => {
+  db.close()
+  rmSync(folder, { recursive: true, force: true })
+})
+
+async function column(sql: string): Promise<unknown[]> {
+  return (await db.readClient.execute(sql)).rows.map(row => row[0])
+}
+
+describe('the demo firm', () => {
+  it('has about 180 cylinders and a year and a half of history with every kind of event', async () => {
+    const [cylinders] = await column('SELECT count(*) FROM cylinders')
+    expect(cylinders).toBeGreaterThanOrEqual(170)
+    expect(cylinders).toBeLessThanOrEqual(220)
+    expect((await column('SELECT DISTINCT kind FROM custody_events')).sort()).toEqual([...EVENT_KINDS].sort())
+    const [first] = await column('SELECT min(effective_at) FROM custody_events')
+    const [last] = await column('SELECT max(recorded_at) FROM custody_events')
+    expect(first).toBeLessThan(NOW - 500 * 86_400_000)
+    expect(last).toBeLessThanOrEqual(NOW)
+  })
+
+  it('shows every finding that these kinds of event can raise', async () => {
+    const ids = await column('SELECT id FROM cylinders') as string[]
+    const views = await cylinderViews(db, ids, { access: null, nowMs: NOW })
+    const codes = new Set(views.flatMap(view => view.findings.map(finding => finding.code)))
+    for (const id of ids) for (const line of (await custodyLog(db, id, { limit: 200 })).items) for (const finding of line.findings) codes.add(finding.code)
+    expect(RAISED.filter(code => !codes.has(code))).toEqual([])
+  })
+
+  it('keeps every row of the list equal to the view of the same day', async () => {
+    const ids = await column('SELECT id FROM cylinders') as string[]
+    const views = new Map((await cylinderViews(db, ids, { access: null, nowMs: NOW })).map(view => [view.id, view]))
+    const rows = []
+    let cursor: string | undefined
+    do {
+      const page = await fleet(db, fleetQuery.parse({ limit: 200, ...(cursor ? { cursor } : {}) }), NOW)
+      rows.push(...page.items)
+      cursor = page.nextCursor ?? undefined
+    } while (cursor)
+    expect(rows).toHaveLength(ids.length)
+    for (const row of rows) {
+      const view = views.get(row.id)!
+      expect({
+        code: row.labelCode, net: row.netGrams, limit: row.fillLimitGrams, room: row.roomGrams, stop: row.stopWeightGrams, due: row.dueMonth,
+        codes: [...row.findingCodes].sort(), worst: row.worstFinding?.severity ?? null, place: row.place?.name ?? null,
+      }).toEqual({
+        code: view.labelCode, net: view.contents.netGrams, limit: view.capacity.fillLimitGrams, room: view.capacity.roomGrams,
+        stop: view.capacity.stopWeightGrams, due: view.requalification.dueMonth, codes: [...new Set(view.findings.map(finding => finding.code))].sort(),
+        worst: view.findings[0]?.severity ?? null, place: view.place?.name ?? null,
+      })
+    }
+  })
+
+  it.each(['retest-overdue', 'retest-soon', 'not-seen', 'overfill', 'code-on-two', 'stop', 'caution'])('filters by %s as the views do', async (code) => {
+    const page = await fleet(db, fleetQuery.parse({ finding: code, limit: 200 }), NOW)
+    const ids = await column('SELECT id FROM cylinders') as string[]
+    const views = await cylinderViews(db, ids, { access: null, nowMs: NOW })
+    const expected = views.filter(view => view.findings.some(finding => finding.code === code || finding.severity === code || (code === 'caution' && finding.severity === 'stop')))
+    expect(expected.length).toBeGreaterThan(0)
+    expect(page.items.map(row => row.id).sort()).toEqual(expected.map(view => view.id).sort())
+  })
+
+  it('sums each cylinder\'s movements to what is in stock in it', async () => {
+    const sums = new Map((await db.readClient.execute('SELECT cylinder_id, sum(grams) FROM movements GROUP BY cylinder_id')).rows.map(row => [row[0], row[1] as number]))
+    const ids = await column('SELECT id FROM cylinders') as string[]
+    for (const view of await cylinderViews(db, ids, { access: null, nowMs: NOW })) {
+      if (view.contents.netGrams === null) continue
+      expect(sums.get(view.id) ?? 0, view.labelCode ?? view.id).toBe(view.contents.inStock ? view.contents.netGrams : 0)
+    }
+  })
+
+  it('verifies, and is filled once', async () => {
+    expect(await verifyLog(db, NOW)).toMatchObject({ ok: true })
+    expect(await fillDemo(db, 'no password', NOW)).toBe(false)
+  })
+})
