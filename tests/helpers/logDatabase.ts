@@ -53,7 +53,7 @@ export async function openLogDatabase(): Promise<LogDatabase> {
 }
 
 /** An event as a phone would send it. */
-export function sent(cylinderId: string, kind: string, details: object, more: object = {}): Record<string, unknown> {
+export function sent(cylinderId: string, kind: string, details: object, more: object = {}): { id: string, cylinderId: string } & Record<string, unknown> {
   return { id: randomUUID(), cylinderId, kind, occurredAt: new Date().toISOString(), deviceId: 'phone-1', deviceSeq: 1, ...more, details }
 }
 

@@ -62,6 +62,7 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
 
   const added: { row: LogRow, event: AnyRecordedEvent }[] = []
   const addedTo = (cylinderId: string) => added.filter(one => one.row.cylinder_id === cylinderId)
+  const eventsOf = (cylinderId: string) => [...(logs.get(cylinderId) ?? []), ...addedTo(cylinderId).map(one => one.event)]
   return {
     newest,
     directory: from,
@@ -71,7 +72,7 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
       const now = added.find(one => one.row.id === eventId)
       return now ? { contentHash: now.row.content_hash, seq: now.row.seq, version: now.row.version } : stored.get(eventId)
     },
-    eventsOf: cylinderId => [...(logs.get(cylinderId) ?? []), ...addedTo(cylinderId).map(one => one.event)],
+    eventsOf,
     headOf(cylinderId) {
       const last = addedTo(cylinderId).at(-1)
       return last ? { version: last.row.version, hash: last.row.hash } : heads.get(cylinderId) ?? { version: 0, hash: '' }
@@ -82,7 +83,7 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
       const touched = [...new Set(added.map(one => one.row.cylinder_id))]
       return touched.map(cylinderId => ({
         cylinderId,
-        events: this.eventsOf(cylinderId),
+        events: eventsOf(cylinderId),
         added: addedTo(cylinderId).map(one => one.row),
       }))
     },
