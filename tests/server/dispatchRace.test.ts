@@ -1,0 +1,142 @@
+import { randomBytes, randomUUID } from 'node:crypto'
+import { mkdtempSync, rmSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
+import { afterEach, beforeEach, describe, expect, it } from 'vitest'
+import { append } from '../../server/utils/custody/append'
+import { cancelDraft, createDraft, replaceLines } from '../../server/utils/cylinder-lists/drafts'
+import { openDatabase, type Database } from '../../server/utils/database/database'
+import { createFirm } from '../../server/utils/firms/createFirm'
+import { createPlace } from '../../server/utils/places/createPlace'
+import { dispatchShipment } from '../../server/utils/shipments/dispatchShipment'
+import { theShipment } from '../../server/utils/shipments/shipments'
+import { dispatchTestLot } from '../../server/utils/test-lots/dispatchTestLot'
+import { returnTestLot } from '../../server/utils/test-lots/returnTestLot'
+import { theTestLot } from '../../server/utils/test-lots/testLots'
+import type { Access } from '../../utils/access/roles'
+import { drawLabelCode } from '../../utils/label/code'
+import { eventOf } from '../helpers/fleet'
+import { lb, stampOf } from '../helpers/stamps'
+
+const NOW = Date.UTC(2026, 4, 4, 15)
+const MONA: Access = { personId: randomUUID(), roles: ['manager'], trainee: false }
+
+let folder: string
+let db: Database
+let firmId: string
+let shopId: string
+beforeEach(async () => {
+  folder = mkdtempSync(join(tmpdir(), 'collarbook-'))
+  db = await openDatabase(`file:${join(folder, 'collarbook.db')}`)
+  await db.migrate('drizzle/migrations')
+  shopId = (await createPlace(db, { name: 'North shop', kind: 'shop' }, NOW)).id
+})
+afterEach(() => {
+  db.close()
+  rmSync(folder, { recursive: true })
+})
+
+/** The database as a process sees it that is overtaken by another one, once, just before it commits. */
+function overtaken(by: () => Promise<unknown>): Database {
+  let isFirst = true
+  return {
+    ...db,
+    async exclusive(work) {
+      if (isFirst) {
+        isFirst = false
+        await by()
+      }
+      return db.exclusive(work)
+    },
+  }
+}
+
+async function registered(contents: unknown): Promise<string> {
+  const id = randomUUID()
+  const at = new Date(NOW - 86_400_000).toISOString()
+  const details = { stamp: stampOf({ serial: id.slice(0, 8) }), marks: [{ month: '2025-06' }], ownership: 'own', contents, ...(contents !== 'evacuated' && { gross: lb(40) }) }
+  const results = await append(db, {
+    access: MONA, now: NOW - 86_400_000, deviceNow: null,
+    events: [
+      { ...eventOf(id, 'registered'), occurredAt: at, placeId: shopId, details },
+      { ...eventOf(id, 'labelled'), occurredAt: at, details: { code: drawLabelCode(randomBytes) } },
+    ],
+  })
+  expect(results.map(result => result.outcome)).toEqual(['accepted', 'accepted'])
+  return id
+}
+
+async function kindsInLog(cylinderId: string): Promise<string[]> {
+  const { rows } = await db.readClient.execute({ sql: 'SELECT kind FROM custody_events WHERE cylinder_id = ? ORDER BY version', args: [cylinderId] })
+  return rows.map(row => row[0] as string)
+}
+
+describe('a shipment that is changed while it is sent off', () => {
+  const draft = { kind: 'shipment' as const, id: randomUUID() }
+  const R22 = { refrigerant: 'R-22', condition: 'clean' }
+  let first: string
+  let second: string
+  beforeEach(async () => {
+    firmId = (await createFirm(db, { name: 'Clearwater Reclaim', kind: 'reclaimer' }, NOW)).id
+    first = await registered(R22)
+    second = await registered(R22)
+    await createDraft(db, draft, { firmId, note: null, cylinderIds: [first], createdBy: MONA.personId, now: NOW })
+  })
+
+  function dispatch(through: Database) {
+    const lines = [{ cylinderId: first, eventId: randomUUID(), expects: 2, gross: lb(40) }]
+    return dispatchShipment(through, draft.id, { occurredAt: new Date(NOW).toISOString(), lines }, MONA, NOW)
+  }
+
+  it('leaves nothing behind where a line was added meanwhile', async () => {
+    await expect(dispatch(overtaken(() => replaceLines(db, draft, [first, second])))).rejects.toMatchObject({ details: { status: 409, title: 'The lines have changed' } })
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled'])
+    expect((await theShipment(db, draft.id)).state).toBe('draft')
+  })
+
+  it('leaves nothing behind where it was cancelled meanwhile', async () => {
+    await expect(dispatch(overtaken(() => cancelDraft(db, draft)))).rejects.toMatchObject({ details: { status: 409, title: 'This shipment is no draft' } })
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled'])
+    expect((await theShipment(db, draft.id)).state).toBe('cancelled')
+  })
+
+  it('leaves where nothing of it was changed', async () => {
+    await dispatch(overtaken(async () => undefined))
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim'])
+    expect(await theShipment(db, draft.id)).toMatchObject({ state: 'dispatched', dispatchedAt: '2026-05-04T15:00:00.000Z' })
+  })
+})
+
+describe('a test lot that is changed while it is sent off or taken back', () => {
+  const draft = { kind: 'test-lot' as const, id: randomUUID() }
+  let cylinder: string
+  beforeEach(async () => {
+    firmId = (await createFirm(db, { name: 'Gauge Point Testing', kind: 'requalifier', rin: 'A123' }, NOW)).id
+    cylinder = await registered('evacuated')
+    await createDraft(db, draft, { firmId, note: null, cylinderIds: [cylinder], createdBy: MONA.personId, now: NOW })
+  })
+
+  function dispatch(through: Database) {
+    const lines = [{ cylinderId: cylinder, eventId: randomUUID(), expects: 2 }]
+    return dispatchTestLot(through, draft.id, { occurredAt: new Date(NOW).toISOString(), lines }, MONA, NOW)
+  }
+
+  function takeBack(through: Database) {
+    const lines = [{
+      cylinderId: cylinder, retestedEventId: randomUUID(), returnedEventId: randomUUID(), result: 'passed' as const, method: 'volumetric' as const, month: '2026-05',
+    }]
+    return returnTestLot(through, draft.id, { occurredAt: new Date(NOW + 1).toISOString(), toPlaceId: shopId, lines }, MONA, NOW + 1)
+  }
+
+  it('leaves nothing behind where it was cancelled meanwhile', async () => {
+    await expect(dispatch(overtaken(() => cancelDraft(db, draft)))).rejects.toMatchObject({ details: { status: 409, title: 'This test lot is no draft' } })
+    expect(await kindsInLog(cylinder)).toEqual(['registered', 'labelled'])
+  })
+
+  it('is taken back once where two people do it at the same moment', async () => {
+    await dispatch(db)
+    await expect(takeBack(overtaken(() => takeBack(db)))).rejects.toMatchObject({ details: { status: 409 } })
+    expect(await kindsInLog(cylinder)).toEqual(['registered', 'labelled', 'sent-for-test', 'retested', 'returned'])
+    expect((await theTestLot(db, draft.id)).state).toBe('back')
+  })
+})
