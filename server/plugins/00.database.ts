@@ -7,6 +7,7 @@ import { configureSessionCookie } from '../utils/session/sessionCookie'
 async function start(): Promise<void> {
   const environment = useEnvironment()
   configureSessionCookie(environment)
+  if (environment.unprotected) console.warn(`${environment.publicUrl} is plain http: passwords can be read on the way, and phones open no camera. Put it behind https.`)
   await startDatabase(environment)
   await dummyHash()
 }

@@ -37,6 +37,8 @@ export interface Environment {
   publicUrl: string
   /** Whether people reach it by https. */
   secure: boolean
+  /** Whether passwords go over a network in clear. */
+  unprotected: boolean
   proxyHops: number
   demo: boolean
 }
@@ -63,6 +65,7 @@ export function readEnvironment(variables: Record<string, string | undefined>): 
     mailFrom: values.MAIL_FROM,
     publicUrl: values.PUBLIC_URL,
     secure: values.PUBLIC_URL.startsWith('https:'),
+    unprotected: values.PUBLIC_URL.startsWith('http:') && !isLoopback(values.PUBLIC_URL),
     proxyHops: values.PROXY_HOPS,
     demo: values.COLLARBOOK_DEMO === '1',
   }

@@ -29,6 +29,12 @@ describe('the settings of the server', () => {
     expect(readEnvironment({ ...GOOD, PUBLIC_URL: 'https://cylinders.example/' })).toMatchObject({ publicUrl: 'https://cylinders.example', secure: true })
   })
 
+  it('tell where passwords would go over a network in clear', () => {
+    expect(readEnvironment({ ...GOOD, PUBLIC_URL: 'http://192.0.2.10:3000' }).unprotected).toBe(true)
+    expect(readEnvironment({ ...GOOD, PUBLIC_URL: 'http://127.0.0.1:3000' }).unprotected).toBe(false)
+    expect(readEnvironment({ ...GOOD, PUBLIC_URL: 'https://cylinders.example' }).unprotected).toBe(false)
+  })
+
   it('refuse a session password of 31 characters and take one of 32', () => {
     const long = 'b7e1c94a5d20f3886a4e0c17d95f2b63'
     expect(refusal({ NUXT_SESSION_PASSWORD: long.slice(1) })).toMatch(/^NUXT_SESSION_PASSWORD must have at least 32/)

@@ -1,3 +1,4 @@
+import { createClient } from '@libsql/client'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { InvitedAnswer, PeopleAnswer } from '../../utils/contract/people'
 import type { MailAnswer } from '../../utils/contract/mail'
@@ -51,6 +52,14 @@ describe('the firm\'s people', () => {
 
   it('are refused to the one without the right before a body is looked at', async () => {
     expect((await tech.client.post('/api/people', { nonsense: true })).status).toBe(403)
+  })
+
+  it('are refused on the record', async () => {
+    await auditor.client.patch(`/api/people/${tech.id}`, { roles: ['admin'] })
+    const database = createClient({ url: `file:${server.databaseFile}`, timeout: 5000 })
+    const { rows } = await database.execute('select person_id, what, subject from security_log order by id desc limit 1')
+    database.close()
+    expect(rows[0]).toMatchObject({ person_id: auditor.id, what: 'refused', subject: 'people:manage' })
   })
 
   it('change by name, certification and trainee, and nothing else', async () => {

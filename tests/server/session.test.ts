@@ -1,3 +1,4 @@
+import { setTimeout as wait } from 'node:timers/promises'
 import { createClient } from '@libsql/client'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { ProblemDetails } from '../../utils/contract/problem'
@@ -159,6 +160,16 @@ describe('the sealed cookie', () => {
     for (const { secret_hash } of rows) expect(secret_hash).toMatch(/^[0-9a-f]{64}$/)
   })
 
+  it('is good for 30 days from this sign-in, not from an earlier one on the same browser', async () => {
+    const client = await signedIn(tech)
+    await wait(1100)
+    const before = Math.floor(Date.now() / 1000) * 1000
+    const [cookie = ''] = (await client.signIn(tech.email, PASSWORD)).headers.getSetCookie()
+    const expires = Date.parse(/Expires=([^;]+)/.exec(cookie)?.[1] ?? '')
+    expect(expires - before).toBeGreaterThanOrEqual(30 * 86_400_000)
+    expect(expires - before).toBeLessThan(30 * 86_400_000 + 30_000)
+  })
+
   it('does not open when one character of it is changed', async () => {
     const client = await signedIn(tech)
     const { session } = client
@@ -239,6 +250,15 @@ describe('what ends the sessions of a person at once', () => {
     expect(await status(other)).toBe(401)
     expect(await status(holding(former))).toBe(401)
     expect((await new TestClient(server.baseUrl).signIn(nina.email, PASSWORD)).status).toBe(401)
+  })
+})
+
+describe('guessing with a borrowed session', () => {
+  it('has to wait after five wrong present passwords', async () => {
+    const rita = await addMember(admin, 'Rita', ['technician'])
+    const guess = (n: number) => rita.client.post('/api/session/password', { current: `guess-${n}`, next: 'green-hose-on-left' })
+    for (let n = 0; n < 5; n++) expect((await guess(n)).status).toBe(403)
+    expect((await guess(5)).status).toBe(429)
   })
 })
 

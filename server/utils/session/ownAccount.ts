@@ -5,6 +5,7 @@ import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
 import { problem } from '../http/problem'
 import { securityEntry } from '../securityLog'
+import { attemptSucceeded, beginAttempt } from './attempts'
 import { hashNewPassword, passwordMatches } from './password'
 import { refuseWeakPassword } from './passwordRules'
 import { endSessionsOf, newSession } from './sessions'
@@ -12,9 +13,11 @@ import { endSessionsOf, newSession } from './sessions'
 /**
  * Changes one's own password. Every session of the person ends; the new one's secret is answered.
  *
- * Errors: 403 when the present password is wrong, 422 for a weak new one, 409 when it was changed meanwhile.
+ * Errors: 403 when the present password is wrong, 429 after many tries, 422 for a weak new one, 409 when it was changed meanwhile.
  */
 export async function changePassword(user: User, current: string, next: string, now: number): Promise<string> {
+  // Whoever holds the session is one caller, wherever they are.
+  await beginAttempt(user.id, user.id, now)
   const { read, write } = useDatabase()
   const [row] = await read.select({ passwordHash: people.passwordHash }).from(people).where(eq(people.id, user.id)).limit(1)
   const stored = row?.passwordHash ?? null
@@ -22,6 +25,7 @@ export async function changePassword(user: User, current: string, next: string, 
     await write([securityEntry({ what: 'password-change-refused', personId: user.id }, now)])
     throw problem(403, 'Not your password', 'The present password is not right.', [{ path: 'current', message: 'is not right' }], { type: 'wrong-password' })
   }
+  attemptSucceeded(user.id, user.id)
   refuseWeakPassword(next, user.email, 'next')
   const passwordHash = await hashNewPassword(next)
   const { sid, store } = newSession(user.id, now)
