@@ -94,7 +94,7 @@ export function cacheRow(state: CylinderState, context: RowContext): RowColumns 
     roomGrams: capacity.roomGrams,
     stopWeightGrams: capacity.stopWeightGrams,
     exactStopWeight: capacity.exactStopWeightGrams === null ? null : String(capacity.exactStopWeightGrams),
-    tareWeightGrams: tare === null ? null : Math.round(tare.exactGrams),
+    tareWeightGrams: stamp === null || tare === null ? null : Math.round(tare.exactGrams),
     waterCapacityGrams: stamp?.waterCapacity ? readingGrams(stamp.waterCapacity) : null,
     dueMonth: retest.dueMonth,
     retestState: undated.state === 'in-date' ? 'dated' : undated.state === 'unknown' ? 'unknown' : 'not-required',

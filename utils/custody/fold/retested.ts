@@ -51,6 +51,9 @@ function vapourHeelGrams({ state, context }: Turn): number {
 // 49 CFR 180.209(c): a loss of 5 % of the tare asks for a test before the next fill.
 const TARE_LOSS_RATIO = 0.95
 
+// Keeps a product of decimals from landing a hair below the edge.
+const FLOAT_NOISE_GRAMS = 1e-6
+
 function takeTare(turn: Turn<'retested'>, newTare: MassReading): void {
   const { state, event } = turn
   const grams = exactGrams(newTare)
@@ -58,7 +61,7 @@ function takeTare(turn: Turn<'retested'>, newTare: MassReading): void {
   state.tare = { exactGrams: grams, since: event.effectiveAt, isWeighedAnew: true }
   const stamped = state.stamp?.tareWeight
   const isNews = before === null || grams < before.exactGrams
-  if (stamped && isNews && grams <= exactGrams(stamped) * TARE_LOSS_RATIO) holdBack(turn, 'tare-loss')
+  if (stamped && isNews && grams <= exactGrams(stamped) * TARE_LOSS_RATIO + FLOAT_NOISE_GRAMS) holdBack(turn, 'tare-loss')
   judgeGrossAnew(turn, grams)
 }
 

@@ -1,0 +1,231 @@
+import { describe, expect, it } from 'vitest'
+import {
+  codes, contentsAfter, CUSTOMER, DAY, did, filled, kg, lastFindings, lastMovements, registered, SHIPMENT, STAMP, START, SUPPLIER, viewAfter, weighed,
+} from '~~/tests/helpers/custody'
+
+const holding = (refrigerant: string, grossKg = 15) => registered({ contents: { refrigerant, condition: 'clean' }, gross: kg(grossKg) })
+
+describe('a fill into an evacuated cylinder', () => {
+  it('makes it hold this refrigerant, clean where nothing else was said', () => {
+    const story = [registered(), filled('R-22', 20)]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: 'R-22', condition: 'clean', netGrams: 8000, nothingInIt: false, evacuated: false })
+    expect(lastMovements(...story)).toEqual(['recovered R-22 8000'])
+    expect(lastFindings(...story)).toEqual([])
+    expect(viewAfter(story).capacity).toMatchObject({ fillLimitGrams: 16_000, stopWeightGrams: 28_000, roomGrams: 8000, refusals: [], governingRule: 'water-weight' })
+  })
+
+  it('keeps the word that was said of it', () => {
+    expect(contentsAfter(registered(), filled('R-22', 20, { condition: 'suspect' })).condition).toBe('suspect')
+  })
+
+  it('counts what the scale showed before as a weighing, and the rest as recovered', () => {
+    expect(lastMovements(registered(), filled('R-22', 20, { grossBefore: kg(12.04) }))).toEqual(['weighing R-22 40', 'recovered R-22 7960'])
+  })
+
+  it('takes an unnamed gas alone, without a stop', () => {
+    const shown = viewAfter([registered(), filled(null, 15)])
+    expect(shown.contents).toMatchObject({ refrigerant: null, condition: 'unknown', netGrams: 3000 })
+    expect(codes(shown)).not.toContain('unknown-onto-known')
+    expect(shown.capacity).toMatchObject({ stopWeightGrams: null, missing: ['refrigerant'] })
+  })
+
+  it('found heavier than its tare before the fill is a fill onto something unknown', () => {
+    const story = [registered(), filled('R-22', 20, { grossBefore: kg(13) })]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: null, condition: 'unknown', netGrams: 8000 })
+    expect(lastFindings(...story)).toEqual(['unknown-onto-known'])
+    expect(lastMovements(...story)).toEqual(['weighing ? 1000', 'recovered R-22 7000', 'renamed R-22 -7000', 'renamed ? 7000'])
+  })
+})
+
+describe('a fill onto the same refrigerant', () => {
+  it('keeps its name and adds to it', () => {
+    expect(contentsAfter(holding('R-22'), filled('R-22', 20))).toMatchObject({ refrigerant: 'R-22', condition: 'clean', netGrams: 8000 })
+    expect(lastMovements(holding('R-22'), filled('R-22', 20, { grossBefore: kg(14.9) }))).toEqual(['weighing R-22 -100', 'recovered R-22 5100'])
+  })
+
+  it('takes the worse of both words', () => {
+    expect(contentsAfter(holding('R-22'), filled('R-22', 20, { condition: 'suspect' })).condition).toBe('suspect')
+    expect(contentsAfter(holding('R-22'), filled('R-22', 17, { condition: 'suspect' }), filled('R-22', 20, { condition: 'clean' })).condition).toBe('suspect')
+  })
+
+  it('leaves it burnt once it was, and then holds it to the oily limit', () => {
+    const story = [holding('R-22'), filled('R-22', 17, { condition: 'burnt' }), filled('R-22', 18, { condition: 'clean' })]
+    const shown = viewAfter(story)
+    expect(shown.contents.burnt).toBe(true)
+    // 0.69 x 20.0192 L x 1.0823 kg/L of R-22 at 50 C = 14.950 kg
+    expect(shown.capacity).toMatchObject({ governingRule: 'oily', fillLimitGrams: 14_950 })
+  })
+})
+
+describe('a fill with a second refrigerant', () => {
+  it('mixes what is in it, and stops until a deep vacuum', () => {
+    const story = [holding('R-22'), filled('R-134a', 20)]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: null, condition: 'mixed', netGrams: 8000 })
+    expect(lastFindings(...story)).toContain('second-refrigerant')
+    const shown = viewAfter(story)
+    expect(shown.capacity.refusals.map(({ code }) => code)).toEqual(['second-refrigerant'])
+    expect(shown.capacity.stopWeightGrams).toBeNull()
+    expect(codes(viewAfter([...story, did('emptied', { vacuum: { microns: 900 } })]))).not.toContain('second-refrigerant')
+  })
+
+  it('is booked under the name it came with and renamed at once', () => {
+    expect(lastMovements(holding('R-22'), filled('R-134a', 20))).toEqual([
+      'renamed R-22 -3000', 'renamed ? 3000', 'recovered R-134a 5000', 'renamed R-134a -5000', 'renamed ? 5000',
+    ])
+  })
+
+  it('at the tare is taken by its name, but suspect and stopped, for the first one was never evacuated', () => {
+    const story = [holding('R-22'), filled('R-134a', 20, { grossBefore: kg(12) })]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: 'R-134a', condition: 'suspect', netGrams: 8000 })
+    expect(lastFindings(...story)).toContain('second-refrigerant')
+  })
+
+  it('after the reclaimer has taken the first is the same', () => {
+    const back = [
+      holding('R-22'), did('sent-for-reclaim', { shipmentId: SHIPMENT, gross: kg(15) }), did('reclaimed', { shipmentId: SHIPMENT }),
+      did('returned', { fromFirmId: SUPPLIER, gross: kg(12) }),
+    ]
+    expect(contentsAfter(...back).nothingInIt).toBe(true)
+    expect(contentsAfter(...back, filled('R-134a', 20))).toMatchObject({ refrigerant: 'R-134a', condition: 'suspect' })
+    expect(lastFindings(...back, filled('R-134a', 20))).toContain('second-refrigerant')
+    expect(lastFindings(...back, filled('R-22', 20))).toEqual([])
+  })
+
+  it('is none after a deep vacuum', () => {
+    const story = [holding('R-22'), did('emptied', { vacuum: { microns: 500 } }), filled('R-134a', 20)]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: 'R-134a', condition: 'clean' })
+    expect(lastFindings(...story)).toEqual([])
+  })
+
+  it('onto a mixture leaves a mixture, without another finding', () => {
+    const story = [holding('R-22'), filled('R-134a', 17), filled('R-22', 18)]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: null, condition: 'mixed' })
+    expect(lastFindings(...story)).not.toContain('second-refrigerant')
+  })
+})
+
+describe('a fill of something unknown', () => {
+  it('onto a known refrigerant, or the other way round, leaves nobody knowing', () => {
+    const unknownOnto = [holding('R-22'), filled(null, 20)]
+    const knownOnto = [registered({ contents: 'unknown', gross: kg(15) }), filled('R-22', 20)]
+    for (const story of [unknownOnto, knownOnto]) {
+      expect(contentsAfter(...story)).toMatchObject({ refrigerant: null, condition: 'unknown' })
+      expect(lastFindings(...story)).toContain('unknown-onto-known')
+    }
+  })
+
+  it('onto something unknown stays unknown, without a finding', () => {
+    const story = [registered({ contents: 'unknown', gross: kg(15) }), filled(null, 20)]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: null, condition: 'unknown' })
+    expect(lastFindings(...story)).toEqual([])
+  })
+
+  it('onto nothing but the traces of a known one is a stop', () => {
+    const story = [holding('R-22'), filled(null, 20, { grossBefore: kg(12) })]
+    expect(lastFindings(...story)).toContain('unknown-onto-known')
+  })
+})
+
+describe('the amount recovered', () => {
+  it('is not known where nobody knows the weight before; the net enters as an opening', () => {
+    const story = [registered({ contents: { refrigerant: 'R-22', condition: 'clean' } }), filled('R-22', 20)]
+    expect(lastMovements(...story)).toEqual(['opening R-22 8000'])
+    expect(lastFindings(...story)).toContain('weight-not-known')
+  })
+
+  it('belongs to the owner named, beside the firm\'s own', () => {
+    const story = [holding('R-22'), filled('R-22', 20, { ownerOfRefrigerantId: CUSTOMER })]
+    expect(lastMovements(...story)).toEqual(['recovered R-22 5000 f1'])
+    const shown = viewAfter(story)
+    expect(shown.contents.owners).toEqual([{ ownerId: null, grams: 3000 }, { ownerId: CUSTOMER, grams: 5000 }])
+    expect(codes(shown)).toContain('two-owners')
+  })
+
+  it('is never negative: less after than before is a weighing to look at again', () => {
+    const story = [holding('R-22'), filled('R-22', 14)]
+    expect(lastMovements(...story)).toEqual(['weighing R-22 -1000'])
+    expect(lastFindings(...story)).toContain('weigh-again')
+  })
+
+  it('is unknown below the tare', () => {
+    const story = [holding('R-22'), filled('R-22', 11)]
+    expect(contentsAfter(...story)).toMatchObject({ netGrams: null, refrigerant: 'R-22' })
+    expect(lastMovements(...story)).toEqual(['weighing R-22 -3000'])
+  })
+})
+
+describe('an overfilled cylinder', () => {
+  it('is one above its limit, not at it; at nine tenths it is nearly full', () => {
+    const after = (grossKg: number) => codes(viewAfter([registered(), filled('R-22', grossKg)]))
+    expect(after(26.399)).toEqual([])
+    expect(after(26.4)).toEqual(['nearly-full'])
+    expect(after(28)).toEqual(['nearly-full'])
+    expect(after(28.001)).toEqual(['overfill'])
+  })
+
+  it('is recorded as a fact, with its excess and negative room', () => {
+    const story = [registered(), filled('R-22', 30)]
+    expect(lastFindings(...story)).toEqual(['overfill'])
+    const shown = viewAfter(story)
+    expect(shown.capacity).toMatchObject({ roomGrams: -2000, stopWeightGrams: 28_000, refusals: [] })
+    expect(shown.findings[0]).toMatchObject({ code: 'overfill', severity: 'stop', since: '2026-07-01T18:00:00.000Z' })
+    // 2 kg are 4.409 lb: an excess is rounded up.
+    expect(shown.findings[0]?.text.replaceAll('\u00A0', ' ')).toContain('Overfilled by 4.5 lb (2.00 kg)')
+  })
+
+  it('stays so when its weight is lost, until a weight clears it', () => {
+    const leaking = [registered(), filled('R-22', 30), did('lost', { cause: 'hose' })]
+    expect(codes(viewAfter(leaking))).toEqual(['overfill', 'weight-not-known'])
+    expect(codes(viewAfter([...leaking, weighed(27)]))).toEqual(['nearly-full'])
+  })
+
+  it('stays so when its refrigerant becomes unknown, by the limit of what is known to be in it', () => {
+    const story = [registered(), filled('R-22', 27), filled('R-134a', 29)]
+    expect(codes(viewAfter(story))).toEqual(['overfill', 'second-refrigerant'])
+    expect(codes(viewAfter([...story, weighed(27)]))).toEqual(['second-refrigerant'])
+  })
+
+  it('is forgiven a rule that became stricter after the fill, but shows that there is no room', () => {
+    const policyAt = (ms: number) => ({ shareThousandths: ms < START + 2 * DAY ? 800 : 700, ceilingThousandths: 950, options: { liquid130F: false, unRatio: false } })
+    const later = { policyAt, policyNow: policyAt(START + 3 * DAY), nowMs: START + 3 * DAY }
+    const shown = viewAfter([registered(), filled('R-22', 27)], later)
+    expect(codes(shown)).toEqual(['nearly-full'])
+    expect(shown.capacity).toMatchObject({ fillLimitGrams: 14_000, roomGrams: -1000 })
+    // One that was filled after the change has no such excuse.
+    expect(codes(viewAfter([registered(), filled('R-22', 27, {}, { occurredAt: START + 2 * DAY })], later))).toEqual(['overfill'])
+  })
+})
+
+describe('a fill that should not have been', () => {
+  it('of an overdue cylinder is recorded with a stop', () => {
+    const old = { ...STAMP, madeMonth: '2019-03' }
+    const story = [registered({ stamp: old }), filled('R-22', 20)]
+    expect(lastFindings(...story)).toEqual(['retest-overdue'])
+    const shown = viewAfter(story)
+    expect(shown.findings[0]).toMatchObject({ code: 'retest-overdue', severity: 'caution' })
+    expect(shown.capacity.refusals[0]).toMatchObject({ code: 'retest-overdue', severity: 'stop' })
+    expect(shown.capacity).toMatchObject({ fillLimitGrams: 16_000, stopWeightGrams: null, roomGrams: null })
+  })
+
+  it('of a cylinder without a test date is recorded with a stop', () => {
+    expect(lastFindings(registered({ stamp: { ...STAMP, madeMonth: null } }), filled('R-22', 20))).toEqual(['retest-unknown'])
+  })
+
+  it('with a flammable into a cylinder not marked for it is recorded with a stop that then stands', () => {
+    const story = [registered({ stamp: { ...STAMP, flammableMarked: false } }), filled('R-454B', 15)]
+    expect(lastFindings(...story)).toEqual(['not-marked-flammable'])
+    expect(codes(viewAfter(story))).toEqual(['not-marked-flammable'])
+  })
+
+  it('of a DOT-39 is a stop of the cylinder from then on, not before', () => {
+    const stamp = { ...STAMP, spec: 'DOT-39' }
+    const bought = registered({ stamp, contents: { refrigerant: 'R-22', condition: 'clean' }, gross: kg(15) })
+    expect(codes(viewAfter([bought]))).not.toContain('not-refillable')
+    expect(viewAfter([bought]).capacity.refusals.map(({ code }) => code)).toContain('not-refillable')
+    expect(codes(viewAfter([bought, filled('R-22', 16)]))).toContain('not-refillable')
+  })
+
+  it('without a look at the outside says so', () => {
+    expect(lastFindings(registered(), did('filled', { refrigerant: 'R-22', grossAfter: kg(20) }))).toEqual(['look-before-fill'])
+  })
+})

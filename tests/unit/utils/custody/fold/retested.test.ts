@@ -1,0 +1,105 @@
+import { describe, expect, it } from 'vitest'
+import {
+  codes, contentsAfter, did, filled, kg, lastFindings, lastMovements, LOT, registered, REQUALIFIER, STAMP, TEST_PLACE, viewAfter, weighed,
+} from '~~/tests/helpers/custody'
+import type { DetailsOf } from '~~/utils/custody/schema'
+
+const retested = (details: Partial<DetailsOf<'retested'>> = {}) => did('retested', {
+  month: '2026-07', method: 'volumetric', result: 'passed', requalifierId: REQUALIFIER, ...details,
+})
+const atTest = [registered(), did('sent-for-test', { lotId: LOT }, { placeId: TEST_PLACE })]
+const full = [registered(), filled('R-22', 20)]
+
+describe('a passed test', () => {
+  it('moves the due month, ends the stay and stays on record as a mark', () => {
+    const shown = viewAfter([...atTest, retested({ suffix: 'R' })])
+    expect(viewAfter(atTest)).toMatchObject({ lifecycle: 'at-test', requalification: { dueMonth: '2029-03' } })
+    expect(shown).toMatchObject({ lifecycle: 'in-service', requalification: { lastMonth: '2026-07', dueMonth: '2031-07', state: 'in-date' } })
+    expect(shown.marks).toEqual([{ month: '2026-07', method: 'volumetric', suffix: 'R' }])
+  })
+
+  it('dated after the month it was entered in does not count', () => {
+    expect(viewAfter([...atTest, retested({ month: '2026-08' })], { nowMs: Date.UTC(2027, 0, 1) }).requalification.dueMonth).toBe('2029-03')
+  })
+
+  it('by a look alone does not move the due month', () => {
+    expect(viewAfter([...atTest, retested({ method: 'visual' })]).requalification.dueMonth).toBe('2029-03')
+  })
+
+  it('with water leaves it wet and empty, with no stop weight until it is evacuated', () => {
+    for (const method of ['volumetric', 'proof'] as const) {
+      const shown = viewAfter([...full, weighed(12.5), retested({ method })])
+      expect(shown).toMatchObject({ holds: ['wet'], contents: { nothingInIt: true, evacuated: false, netGrams: 0, basis: 'reckoned' }, capacity: { stopWeightGrams: null } })
+      expect(codes(shown)).toEqual(['wet'])
+    }
+    expect(viewAfter([...full, retested({ method: 'visual' })])).toMatchObject({ holds: [], contents: { refrigerant: 'R-22', netGrams: 8000 } })
+  })
+
+  it('with more in it than vapour is a stop, and what was in it is lost', () => {
+    // 20.0192 L of R-22 vapour at 77 F, 44.23 kg/m3: 885 g.
+    const after = (grossKg: number) => lastFindings(...full, weighed(grossKg), retested())
+    expect(after(12.885)).toEqual([])
+    expect(after(12.886)).toEqual(['tested-full'])
+    expect(lastMovements(...full, retested())).toEqual(['emptied-loss R-22 -8000'])
+  })
+
+  it('does not clean a burnt cylinder nor lift a second refrigerant', () => {
+    const story = [registered(), filled('R-22', 14, { condition: 'burnt' }), filled('R-134a', 15), retested()]
+    expect(contentsAfter(...story).burnt).toBe(true)
+    expect(codes(viewAfter(story))).toContain('second-refrigerant')
+  })
+})
+
+describe('a failed test', () => {
+  it('rejects the cylinder until one passes', () => {
+    const story = [...atTest, retested({ method: 'visual', result: 'rejected' })]
+    expect(viewAfter(story)).toMatchObject({ lifecycle: 'rejected', holds: ['rejected'], capacity: { stopWeightGrams: null }, marks: [] })
+    expect(viewAfter([...story, retested({ method: 'visual' })])).toMatchObject({ lifecycle: 'in-service', holds: [] })
+  })
+
+  it('condemns it for good', () => {
+    const story = [...atTest, retested({ method: 'visual', result: 'condemned' })]
+    expect(viewAfter([...story, retested()])).toMatchObject({ lifecycle: 'condemned', capacity: { stopWeightGrams: null } })
+    expect(codes(viewAfter(story))).toEqual(['condemned'])
+  })
+
+  it('leaves a condemned cylinder only with the findings of its contents and of what came after', () => {
+    const story = [registered(), filled('R-22', 30), retested({ method: 'visual', result: 'condemned' }), filled('R-22', 31)]
+    expect(lastFindings(...story)).toEqual(['after-end', 'overfill'])
+    expect(codes(viewAfter(story, { nowMs: Date.UTC(2040, 0, 1) }))).toEqual(['overfill', 'condemned', 'after-end'])
+  })
+})
+
+describe('a new tare', () => {
+  it('holds from then on: the net follows the same reading, the stop weight the new tare', () => {
+    const story = [...full, retested({ method: 'visual', newTare: kg(12.1) })]
+    expect(lastMovements(...story)).toEqual(['tare-change R-22 -100'])
+    expect(viewAfter(story)).toMatchObject({ stamp: { tareWeightGrams: 12_100 }, contents: { netGrams: 7900 }, capacity: { stopWeightGrams: 28_100, roomGrams: 8100 } })
+    expect(contentsAfter(...story, weighed(20))).toMatchObject({ netGrams: 7900 })
+  })
+
+  it('changes nothing before it', () => {
+    expect(lastMovements(...full, retested({ method: 'visual', newTare: kg(12.1) }), weighed(19.9))).toEqual(['weighing R-22 -100'])
+  })
+
+  it('makes a net known where the stamp has no tare', () => {
+    const story = [
+      registered({ stamp: { ...STAMP, tareWeight: null }, contents: { refrigerant: 'R-22', condition: 'clean' }, gross: kg(15) }),
+      retested({ method: 'visual', newTare: kg(12) }),
+    ]
+    expect(viewAfter(story)).toMatchObject({ contents: { netGrams: 3000 }, capacity: { stopWeightGrams: 28_000, missing: [] } })
+  })
+
+  it('is taken after a wet test has emptied the cylinder, so that nothing changes with it', () => {
+    expect(lastMovements(...full, retested({ newTare: kg(12.1) }))).toEqual(['emptied-loss R-22 -8000'])
+  })
+
+  it('5 % below the stamp has lost steel: no fill until a test has passed with that in view', () => {
+    // 5 % of 12.00 kg is 0.60 kg.
+    expect(viewAfter([...atTest, retested({ method: 'visual', newTare: kg(11.401) })]).holds).toEqual([])
+    const story = [...atTest, retested({ method: 'visual', newTare: kg(11.4) })]
+    expect(viewAfter(story)).toMatchObject({ holds: ['tare-loss'], capacity: { stopWeightGrams: null } })
+    expect(codes(viewAfter(story))).toEqual(['early-test'])
+    expect(viewAfter([...story, retested({ method: 'visual', newTare: kg(11.4) })]).holds).toEqual([])
+  })
+})
