@@ -1,0 +1,133 @@
+import { describe, expect, it } from 'vitest'
+import { parseEvent } from '~~/utils/custody/schema/parseEvent'
+import { CYLINDER, idOf, kg, SHOP, STAMP, SUPPLIER } from '~~/tests/helpers/custody'
+
+const sound = { id: idOf(1), cylinderId: CYLINDER, kind: 'weighed', occurredAt: '2026-07-01T12:00:00-05:00', details: { gross: { unit: 'lb', value: 41.8 } } }
+
+/** What is wrong with an event, as 'path: message'; nothing where it is sound. */
+function faults(changes: Record<string, unknown>): string[] {
+  const parsed = parseEvent({ ...sound, ...changes })
+  return parsed.ok ? [] : parsed.errors.map(({ path, message }) => `${path}: ${message}`)
+}
+
+const gross = (reading: unknown) => faults({ details: { gross: reading } })
+
+describe('an event as sent', () => {
+  it('is read with its reading as entered, and a device left out', () => {
+    expect(parseEvent(sound)).toEqual({ ok: true, event: { ...sound, deviceId: '', deviceSeq: 0 } })
+  })
+
+  it('may not say who acted, when it was recorded, nor anything else that is the server\'s', () => {
+    for (const field of ['actorId', 'postedBy', 'recordedAt', 'seq', 'version', 'effectiveAt', 'trainee', 'hash']) {
+      expect(faults({ [field]: 'x' })).toEqual([`${field}: is not a field that can be given here`])
+    }
+    expect(faults({ details: { gross: kg(1), net: 3 } })).toEqual(['details.net: is not a field that can be given here'])
+  })
+
+  it('has a time that exists, with its offset', () => {
+    for (const time of ['2026-02-28T23:59:59Z', '2026-02-28T23:59+05:30', '2024-02-29T10:00:00.123-08:00']) expect(faults({ occurredAt: time }), time).toEqual([])
+    for (const time of ['2026-02-29T10:00:00Z', '2026-02-28T10:00:00', '2026-02-28', '2026-02-28T25:00:00Z', 'yesterday', 1_782_925_200_000, null]) {
+      expect(faults({ occurredAt: time }).map(text => text.split(':')[0]), String(time)).toEqual(['occurredAt'])
+    }
+  })
+
+  it('may lie in the past and in the future', () => {
+    expect(faults({ occurredAt: '2001-01-01T00:00:00Z' })).toEqual([])
+    expect(faults({ occurredAt: '2101-01-01T00:00:00Z' })).toEqual([])
+  })
+
+  it('is of a known kind', () => {
+    expect(faults({ kind: 'painted' })[0]).toMatch(/^kind: must be one of registered, /)
+  })
+
+  it('names each field that is missing', () => {
+    expect(faults({ details: {} })).toEqual(['details.gross: is missing'])
+    expect(faults({ details: undefined })).toEqual(['details: is missing'])
+    expect(faults({ cylinderId: undefined, kind: 'moved', details: {} })).toEqual(['cylinderId: is missing', 'details.toPlaceId: is missing'])
+  })
+
+  it('has ids in lower case, whatever the sender wrote', () => {
+    const parsed = parseEvent({ ...sound, id: sound.id.toUpperCase(), kind: 'moved', details: { toPlaceId: SHOP.toUpperCase() } })
+    expect(parsed).toMatchObject({ ok: true, event: { id: sound.id, details: { toPlaceId: SHOP } } })
+    expect(faults({ id: 'abc' })).toEqual(['id: must be an id (a UUID)'])
+  })
+
+  it('that is no object is refused without an id', () => {
+    for (const raw of [null, 3, 'x', []]) expect(parseEvent(raw)).toMatchObject({ ok: false, id: null })
+    expect(parseEvent({ id: 'mine' })).toMatchObject({ ok: false, id: 'mine' })
+  })
+})
+
+describe('a mass as read', () => {
+  it('may be nothing, but never negative, endless or beyond any scale', () => {
+    expect(gross({ unit: 'lb', value: 0 })).toEqual([])
+    for (const value of [-0.1, Number.NaN, Number.POSITIVE_INFINITY, 100_001]) expect(gross({ unit: 'lb', value }), String(value)).toHaveLength(1)
+  })
+
+  it('has whole pounds and less than sixteen ounces', () => {
+    expect(gross({ unit: 'lb-oz', lb: 41, oz: 15.9 })).toEqual([])
+    expect(gross({ unit: 'lb-oz', lb: 41, oz: 16 })).toEqual(['details.gross.oz: must be less than 16 oz'])
+    expect(gross({ unit: 'lb-oz', lb: 41.5, oz: 0 })).toEqual(['details.gross.lb: must be whole pounds'])
+  })
+
+  it('has a unit that is known, and nothing beside', () => {
+    expect(gross({ unit: 'stone', value: 3 })).toHaveLength(1)
+    expect(gross({ unit: 'kg', value: 3, lb: 2 })).toEqual(['details.gross.lb: is not a field that can be given here'])
+    expect(gross('41.8 lb')).toHaveLength(1)
+  })
+})
+
+describe('a registration', () => {
+  const registration = (stamp: object, more: object = {}) => faults({ kind: 'registered', details: { stamp: { ...STAMP, ...stamp }, ownership: 'own', ...more } })
+
+  it('may leave unread what cannot be read', () => {
+    expect(registration({ serial: null, servicePressurePsig: null, tareWeight: null, waterCapacity: null, madeMonth: null })).toEqual([])
+  })
+
+  it('has a specification of the list, without its pressure', () => {
+    expect(registration({ spec: 'DOT-39' })).toEqual([])
+    expect(registration({ spec: 'DOT-4BA400' })).toEqual(['details.stamp.spec: must be a specification without its pressure, such as "DOT-4BA"'])
+    expect(registration({ spec: '__proto__' })).toHaveLength(1)
+  })
+
+  it('has no cylinder that weighs or holds nothing', () => {
+    expect(registration({ waterCapacity: kg(0) })).toHaveLength(1)
+    expect(registration({ tareWeight: kg(0) })).toHaveLength(1)
+  })
+
+  it('has marks with months and RINs that can be', () => {
+    expect(registration({}, { marks: [{ month: '2024-12', rin: 'B123', suffix: 'E' }] })).toEqual([])
+    expect(registration({}, { marks: [{ month: '2024-13' }] })).toHaveLength(1)
+    expect(registration({}, { marks: [{ month: '2024-12', rin: '1234' }] })).toHaveLength(1)
+  })
+
+  it('says what is in it in one of three ways', () => {
+    for (const contents of ['evacuated', 'unknown', { refrigerant: 'R-1234ze(E)', condition: 'clean' }]) expect(registration({}, { contents })).toEqual([])
+    for (const contents of ['empty', { refrigerant: 'R-22' }, { refrigerant: 'freon', condition: 'clean' }]) expect(registration({}, { contents })).not.toEqual([])
+  })
+})
+
+describe('the other kinds', () => {
+  it('receive and return at a place', () => {
+    expect(faults({ kind: 'received', details: {} })).toEqual(['placeId: is missing: say where the cylinder is now'])
+    expect(faults({ kind: 'received', placeId: SHOP, details: {} })).toEqual([])
+    expect(faults({ kind: 'returned', details: { fromFirmId: SUPPLIER } })).toHaveLength(1)
+  })
+
+  it('label with a code whose check character is right', () => {
+    expect(parseEvent({ ...sound, kind: 'labelled', details: { code: '7k3 m9q 2tx' } })).toMatchObject({ ok: true, event: { details: { code: '7K3M9Q2TX' } } })
+    expect(faults({ kind: 'labelled', details: { code: '7K3M9Q2TY' } })).toHaveLength(1)
+  })
+
+  it('fill with a refrigerant, or with one that nobody knows', () => {
+    expect(faults({ kind: 'filled', details: { refrigerant: null, grossAfter: kg(20) } })).toEqual([])
+    expect(faults({ kind: 'filled', details: { grossAfter: kg(20) } })).toEqual(['details.refrigerant: is missing'])
+    expect(faults({ kind: 'filled', details: { refrigerant: 'R-22', grossAfter: kg(20), looked: false } })).toHaveLength(1)
+  })
+
+  it('measure a vacuum in one way', () => {
+    expect(faults({ kind: 'emptied', details: { vacuum: { inHg: 29.5, barometerInHg: 29.9 } } })).toEqual([])
+    expect(faults({ kind: 'emptied', details: { vacuum: { microns: 500, inHg: 29 } } })).not.toEqual([])
+    expect(faults({ kind: 'emptied', details: { vacuum: { microns: -1 } } })).toHaveLength(1)
+  })
+})
