@@ -46,6 +46,17 @@ export default defineNuxtConfig({
   vite: { optimizeDeps: { include: ['vue-qrcode-reader', 'qrcode'] } },
   typescript: { strict: true, typeCheck: false },
   telemetry: false,
+  hooks: {
+    // The routes as the server has them, for its description of itself.
+    'nitro:init'(nitro) {
+      nitro.options.virtual['#api-routes'] = () => {
+        const routes = nitro.scannedHandlers.filter(({ route, method }) => method && route?.startsWith('/api/'))
+        const entries = routes.map(({ route, method, handler }) =>
+          `{ path: ${JSON.stringify(route)}, method: ${JSON.stringify(method)}, load: () => import(${JSON.stringify(handler)}) }`)
+        return `export default [${entries.join(',\n')}]`
+      }
+    },
+  },
   // Who is signed in is asked by our own routes; the package's plugins would ask its own at each page.
   auth: {
     loadStrategy: 'none',

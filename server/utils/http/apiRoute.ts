@@ -24,6 +24,9 @@ export interface RouteOptions<Who extends RoutePermission, P, Q, B> {
   status?: number
 }
 
+/** What a route says of itself: who may call it and what it takes. */
+export type RouteDescription = RouteOptions<RoutePermission, z.ZodType | undefined, z.ZodType | undefined, z.ZodType | undefined>
+
 type Parsed<S> = S extends z.ZodType ? z.output<S> : undefined
 
 /** What a route's handler is given. A public route knows nobody: it must work without the database. */
@@ -50,8 +53,8 @@ export function apiRoute<
 >(
   options: RouteOptions<Who, P, Q, B>,
   handler: (context: RouteContext<Who, P, Q, B>) => R | Promise<R>,
-): EventHandler<EventHandlerRequest, Promise<R>> {
-  return defineEventHandler(async (event): Promise<R> => {
+): EventHandler<EventHandlerRequest, Promise<R>> & { described: RouteDescription } {
+  const handle = defineEventHandler(async (event): Promise<R> => {
     try {
       const person = options.permission === 'public' ? null : await admit(event, options.permission)
       const context = {
@@ -73,6 +76,7 @@ export function apiRoute<
       return undefined as R
     }
   })
+  return Object.assign(handle, { described: options })
 }
 
 async function admit(event: H3Event, permission: Permission | 'signed-in'): Promise<User> {

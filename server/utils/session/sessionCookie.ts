@@ -45,6 +45,7 @@ function ownName(): string {
   return process.env.NUXT_SESSION_NAME ?? cookieName(true)
 }
 
-function cookieName(secure: boolean): string {
+/** The cookie that holds the sealed session. */
+export function cookieName(secure: boolean): string {
   return secure ? '__Host-collarbook' : 'collarbook'
 }
