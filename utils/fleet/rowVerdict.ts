@@ -82,8 +82,8 @@ export function daysSinceLastEvent(row: CylinderRow, now: number): number | null
 }
 
 function awayWord(row: CylinderRow): string | null {
-  if (row.lifecycle === 'at-reclaim') return 'At the reclaimer'
-  if (row.lifecycle === 'at-test') return 'At the test station'
+  if (row.lifecycle === 'at-reclaim') return 'At reclaim'
+  if (row.lifecycle === 'at-test') return 'At test'
   return null
 }
 
