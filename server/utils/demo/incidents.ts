@@ -154,7 +154,7 @@ function records(stage: Stage): void {
   const shipment = stage.shipments.at(-1)!
   const gross = weigh(away, 'lb')
   shipment.cylinders.push({ steel: away, gross, refrigerant: away.refrigerant, netGrams: away.netGrams })
-  script.add(manager, shipment.at, away.id, 'sent-for-reclaim', { shipmentId: shipment.id, gross }, { dispatchId: shipment.id, lateMs: MINUTE })
+  script.add(manager, shipment.at, away.id, 'sent-for-reclaim', { shipmentId: shipment.id, gross }, { dispatchId: shipment.id, lateMs: MINUTE, placeId: cast.placeOf(cast.firms[shipment.to]).id })
   script.add(warehouse, shipment.at + 2 * DAY, away.id, 'moved', { toPlaceId: cast.racks[0]!.id })
   const mistyped = made(stage, 3).steel
   const wrong = script.add(warehouse, daysAgo(stage, 23), mistyped.id, 'weighed', { gross: { unit: 'lb', value: 72.9 } })

@@ -52,16 +52,25 @@ function playLife(stage: Stage, refrigerant: string, size: SteelSize): Steel {
       continue
     }
     const out = takeOut(stage, steel, refrigerant, at)
+    if (out === 'stays') return countLately(stage, steel, at, shop.id)
     if (out === null) return steel
     at = bringBack(stage, steel, out, shop.id)
     if (at > endAt) return steel
     if (steel.netGrams > limitOf(steel, refrigerant) * 0.82) {
+      if (!stage.shipments.some(one => one.at > at + DAY)) return countLately(stage, steel, at, shop.id)
       const back = ship(stage, steel, at, shop.id)
       if (back === null) return steel
       at = back
     }
     at = workingTime(at, random.between(1, 20), random)
   }
+  return steel
+}
+
+/** The warehouse's count: most of what stands idle at the story's end was on the scale within the last weeks. */
+function countLately({ random, script, cast, endAt }: Stage, steel: Steel, since: number, shopId: string): Steel {
+  const at = workingTime(endAt, -random.between(3, 24), random)
+  if (at > since + 2 * DAY && random.chance(0.85)) script.add(cast.people.warehouse, at, steel.id, 'weighed', { gross: weigh(steel, 'lb') }, { placeId: shopId })
   return steel
 }
 
@@ -79,14 +88,14 @@ export function registerAt(stage: Stage, steel: Steel, at: number, placeId: stri
   script.add(cast.people.warehouse, at + 9 * MINUTE, steel.id, 'labelled', { code: steel.code }, { placeId, lateMs: 2 * MINUTE })
 }
 
-/** Onto a van and filled on a few jobs; null where the story's end comes first. */
-function takeOut(stage: Stage, steel: Steel, refrigerant: string, from: number): { at: number, by: DemoPerson } | null {
+/** Onto a van and filled on a few jobs; it stays, or is still out (null), where the story's end comes first. */
+function takeOut(stage: Stage, steel: Steel, refrigerant: string, from: number): { at: number, by: DemoPerson } | 'stays' | null {
   const { random, script, cast, endAt } = stage
-  const by = random.pick([cast.people.technician, cast.people.second, cast.people.third, cast.people.trainee])
+  const by = random.chance(0.03) ? cast.people.trainee : random.pick([cast.people.technician, cast.people.second, cast.people.third])
   const van = cast.vans.find(one => one.technicianId === by.id)!
   const signed = by.trainee ? { supervisorId: stage.supervisor.id } : {}
   let at = workingTime(from, random.between(2, 24), random)
-  if (at > endAt) return null
+  if (at > endAt) return 'stays'
   script.add(by, at, steel.id, 'moved', { toPlaceId: van.id, toHolderId: by.id }, signed)
   const limit = limitOf(steel, refrigerant)
   for (let job = random.whole(1, 4); job > 0; job--) {
@@ -98,7 +107,7 @@ function takeOut(stage: Stage, steel: Steel, refrigerant: string, from: number):
     const amount = Math.min(room - pounds(0.2), pounds(random.between(2.2, steel.stamp.servicePressurePsig === 400 ? 13 : 16)))
     steel.netGrams += amount
     steel.refrigerant = refrigerant
-    const customer = random.chance(0.06) ? { ownerOfRefrigerantId: cast.firms.dairy.id } : {}
+    const customer = random.chance(0.01) ? { ownerOfRefrigerantId: cast.firms.dairy.id } : {}
     script.add(by, at, steel.id, 'filled', {
       refrigerant, ...(random.chance(0.9) ? { condition: 'clean' as const } : { condition: 'suspect' as const }),
       grossBefore, grossAfter: weigh(steel, by.reads), method: 'machine', looked: true, ...customer,
@@ -130,13 +139,13 @@ function bringBack(stage: Stage, steel: Steel, out: { at: number, by: DemoPerson
 /** On the next shipment, and back evacuated some weeks later; null where it is still away at the story's end. */
 function ship(stage: Stage, steel: Steel, from: number, shopId: string): number | null {
   const { random, script, cast, endAt } = stage
-  const shipment = stage.shipments.find(one => one.at > from + DAY && one.cylinders.length < 14)
+  const shipment = stage.shipments.find(one => one.at > from + DAY && one.cylinders.length < 24)
   if (!shipment) return null
   const gross = weigh(steel, 'lb')
   shipment.cylinders.push({ steel, gross, refrigerant: steel.refrigerant, netGrams: steel.netGrams })
   const { manager, warehouse } = cast.people
   const to = cast.firms[shipment.to]
-  script.add(manager, shipment.at, steel.id, 'sent-for-reclaim', { shipmentId: shipment.id, gross }, { dispatchId: shipment.id, lateMs: MINUTE, placeId: shopId })
+  script.add(manager, shipment.at, steel.id, 'sent-for-reclaim', { shipmentId: shipment.id, gross }, { dispatchId: shipment.id, lateMs: MINUTE, placeId: cast.placeOf(to).id })
   if (shipment.backAt > endAt) return null
   script.add(manager, shipment.backAt, steel.id, 'reclaimed', {
     shipmentId: shipment.id, theirGross: weigh(steel, 'lb'), grade: random.chance(0.9) ? 'clean' : 'mixed',
@@ -169,7 +178,7 @@ function joinLot(stage: Stage, steel: Steel, from: number, shopId: string): numb
   if (!lot) return null
   lot.cylinders.push(steel)
   const { manager, warehouse } = cast.people
-  script.add(manager, lot.at, steel.id, 'sent-for-test', { lotId: lot.id }, { dispatchId: lot.id, lateMs: MINUTE, placeId: shopId })
+  script.add(manager, lot.at, steel.id, 'sent-for-test', { lotId: lot.id }, { dispatchId: lot.id, lateMs: MINUTE, placeId: cast.placeOf(cast.firms.requalifier).id })
   if (lot.backAt > endAt) return null
   const month = new Date(lot.backAt - 4 * DAY).toISOString().slice(0, 7)
   steel.testedMonth = month
