@@ -83,9 +83,9 @@ describe('a shipment that is changed while it is sent off', () => {
     await createDraft(db, draft, { firmId, note: null, cylinderIds: [first], createdBy: MONA.personId, now: NOW })
   })
 
-  function dispatch(through: Database) {
+  function dispatch(through: Database, when: { occurredAt: string, deviceNow?: string } = { occurredAt: new Date(NOW).toISOString() }) {
     const lines = [{ cylinderId: first, eventId: randomUUID(), expects: 2, gross: lb(40) }]
-    return dispatchShipment(through, draft.id, { occurredAt: new Date(NOW).toISOString(), lines }, MONA, NOW)
+    return dispatchShipment(through, draft.id, { ...when, lines }, MONA, NOW)
   }
 
   it('leaves nothing behind where a line was added meanwhile', async () => {
@@ -104,6 +104,11 @@ describe('a shipment that is changed while it is sent off', () => {
     await dispatch(overtaken(async () => undefined))
     expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim'])
     expect(await theShipment(db, draft.id)).toMatchObject({ state: 'dispatched', dispatchedAt: '2026-05-04T15:00:00.000Z' })
+  })
+
+  it('is dated as its events are where the sender\'s clock runs two days fast', async () => {
+    await dispatch(db, { occurredAt: '2026-05-06T14:00:00.000Z', deviceNow: '2026-05-06T15:00:00.000Z' })
+    expect((await theShipment(db, draft.id)).dispatchedAt).toBe('2026-05-04T14:00:00.000Z')
   })
 })
 

@@ -24,6 +24,11 @@ export function refuseOtherLines(told: readonly string[], ofList: readonly strin
   if (errors.length > 0) throw problem(409, 'The lines have changed', 'Look at the list again, then decide.', errors)
 }
 
+/** When events took effect, as the log has it once they are written. */
+export function effectOf(eventIds: readonly string[]): Guard {
+  return { sql: '(SELECT max(effective_at) FROM custody_events WHERE id IN (SELECT value FROM json_each(?)))', args: [JSON.stringify(eventIds)] }
+}
+
 /** Whether every one of these events is in the log already: the same request was sent before. */
 export async function areRecorded(db: Database, eventIds: readonly string[]): Promise<boolean> {
   const { rows } = await db.readClient.execute({

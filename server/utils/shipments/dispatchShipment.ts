@@ -1,7 +1,7 @@
 import type { InStatement } from '@libsql/client'
 import type { Access } from '~~/utils/access/roles'
 import type { ShipmentDispatch } from '~~/utils/contract/shipments'
-import { areRecorded, hasLines, refuseHeldBack, refuseOtherLines, refuseRefused } from '../cylinder-lists/lineCommands'
+import { areRecorded, effectOf, hasLines, refuseHeldBack, refuseOtherLines, refuseRefused } from '../cylinder-lists/lineCommands'
 import { refuseUnlessDraft } from '../cylinder-lists/drafts'
 import { append } from '../custody/append'
 import type { Guard, Posting } from '../custody/posting'
@@ -30,9 +30,9 @@ export async function dispatchShipment(db: Database, id: string, body: ShipmentD
   refuseOtherLines(body.lines.map(line => line.cylinderId), (await shipmentLines(db, id)).map(line => line.cylinderId))
   const lines = await afterWeighing(db, body.lines, access, now)
   refuseHeldBack(lines.map(line => line.because))
-  const dispatchedAt = Math.min(Date.parse(body.occurredAt), now)
+  const eventIds = body.lines.map(line => line.eventId)
   try {
-    refuseRefused(await append(db, { ...posting, dispatch: { alongside: guard => departure(id, lines, { dispatchedAt, dispatchedBy: access.personId }, guard) } }))
+    refuseRefused(await append(db, { ...posting, dispatch: { alongside: guard => departure(id, lines, { eventIds, dispatchedBy: access.personId }, guard) } }))
   }
   catch (error) {
     // The commit fails where the draft or its lines changed under us; then the reason is told, else the error itself.
@@ -49,14 +49,15 @@ async function eventsOf(db: Database, shipmentId: string, firmId: string, body: 
   }))
 }
 
-function departure(id: string, lines: readonly WeighedLine[], when: { dispatchedAt: number, dispatchedBy: string }, guard: Guard): InStatement[] {
+function departure(id: string, lines: readonly WeighedLine[], by: { eventIds: readonly string[], dispatchedBy: string }, guard: Guard): InStatement[] {
   const same = hasLines({ kind: 'shipment', id }, lines.map(line => line.cylinderId))
+  const effect = effectOf(by.eventIds)
   return [
     {
       // A shipment that is no draft with these lines any more gets no state, which its column refuses: all is undone.
-      sql: `UPDATE shipments SET state = CASE WHEN state = 'draft' AND ${same.sql} THEN 'dispatched' END, dispatched_at = ?, dispatched_by = ?
+      sql: `UPDATE shipments SET state = CASE WHEN state = 'draft' AND ${same.sql} THEN 'dispatched' END, dispatched_at = ${effect.sql}, dispatched_by = ?
         WHERE id = ? AND ${guard.sql}`,
-      args: [...same.args, when.dispatchedAt, when.dispatchedBy, id, ...guard.args],
+      args: [...same.args, ...effect.args, by.dispatchedBy, id, ...guard.args],
     },
     ...lines.map(({ cylinderId, sent }) => ({
       sql: `UPDATE shipment_lines SET sent = ? WHERE shipment_id = ? AND cylinder_id = ? AND ${guard.sql}`,

@@ -1,6 +1,6 @@
 import type { Access } from '~~/utils/access/roles'
 import type { ShipmentReceipt } from '~~/utils/contract/shipments'
-import { areRecorded, refuseOtherLines, refuseRefused } from '../cylinder-lists/lineCommands'
+import { areRecorded, effectOf, refuseOtherLines, refuseRefused } from '../cylinder-lists/lineCommands'
 import { append } from '../custody/append'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
@@ -24,9 +24,9 @@ export async function receiveShipment(db: Database, id: string, body: ShipmentRe
     id: eventId, cylinderId, kind: 'reclaimed', occurredAt: body.occurredAt, expects, details: { shipmentId: id, ...figures },
   }))
   const deviceNow = body.deviceNow === undefined ? null : Date.parse(body.deviceNow)
-  const receivedAt = Math.min(Date.parse(body.occurredAt), now)
+  const eventIds = body.lines.map(line => line.eventId)
   try {
-    refuseRefused(await append(db, { events, access, now, deviceNow, dispatch: { alongside: guard => arrival(id, receivedAt, guard) } }))
+    refuseRefused(await append(db, { events, access, now, deviceNow, dispatch: { alongside: guard => arrival(id, eventIds, guard) } }))
   }
   catch (error) {
     // The commit fails where somebody else received it meanwhile; then that is told, else the error itself.
@@ -35,12 +35,13 @@ export async function receiveShipment(db: Database, id: string, body: ShipmentRe
   }
 }
 
-function arrival(id: string, receivedAt: number, guard: Guard) {
+function arrival(id: string, eventIds: readonly string[], guard: Guard) {
+  const effect = effectOf(eventIds)
   return [
     {
       // A shipment that is not on its way any more gets no state, which its column refuses: all is undone.
-      sql: `UPDATE shipments SET state = CASE state WHEN 'dispatched' THEN 'received' END, received_at = ? WHERE id = ? AND ${guard.sql}`,
-      args: [receivedAt, id, ...guard.args],
+      sql: `UPDATE shipments SET state = CASE state WHEN 'dispatched' THEN 'received' END, received_at = ${effect.sql} WHERE id = ? AND ${guard.sql}`,
+      args: [...effect.args, id, ...guard.args],
     },
     { sql: `DELETE FROM open_lines WHERE list_id = ? AND ${guard.sql}`, args: [id, ...guard.args] },
   ]

@@ -2,7 +2,7 @@ import type { Access } from '~~/utils/access/roles'
 import type { TestLotDispatch } from '~~/utils/contract/testLots'
 import type { Finding } from '~~/utils/custody/finding'
 import { mayTest } from '~~/utils/custody/plan'
-import { areRecorded, hasLines, refuseHeldBack, refuseOtherLines, refuseRefused } from '../cylinder-lists/lineCommands'
+import { areRecorded, effectOf, hasLines, refuseHeldBack, refuseOtherLines, refuseRefused } from '../cylinder-lists/lineCommands'
 import { refuseUnlessDraft } from '../cylinder-lists/drafts'
 import { append } from '../custody/append'
 import { cylinderViews } from '../custody/cylinderViews'
@@ -33,9 +33,9 @@ export async function dispatchTestLot(db: Database, id: string, body: TestLotDis
   const ids = body.lines.map(line => line.cylinderId)
   refuseOtherLines(ids, (await testLotLines(db, id)).map(line => line.cylinderId))
   refuseHeldBack(await reasonsOf(db, ids, access, now))
-  const sentAt = Math.min(Date.parse(body.occurredAt), now)
+  const eventIds = body.lines.map(line => line.eventId)
   try {
-    refuseRefused(await append(db, { ...posting, dispatch: { alongside: guard => departure(id, ids, { sentAt, sentBy: access.personId }, guard) } }))
+    refuseRefused(await append(db, { ...posting, dispatch: { alongside: guard => departure(id, ids, { eventIds, sentBy: access.personId }, guard) } }))
   }
   catch (error) {
     // The commit fails where the draft or its lines changed under us; then the reason is told, else the error itself.
@@ -50,12 +50,13 @@ async function reasonsOf(db: Database, ids: readonly string[], access: Access, n
   return ids.map(cylinderId => because.get(cylinderId) ?? [])
 }
 
-function departure(id: string, cylinderIds: readonly string[], when: { sentAt: number, sentBy: string }, guard: Guard) {
+function departure(id: string, cylinderIds: readonly string[], by: { eventIds: readonly string[], sentBy: string }, guard: Guard) {
   const same = hasLines({ kind: 'test-lot', id }, cylinderIds)
+  const effect = effectOf(by.eventIds)
   return [{
     // A lot that is no draft with these lines any more gets no state, which its column refuses: all is undone.
-    sql: `UPDATE test_lots SET state = CASE WHEN state = 'draft' AND ${same.sql} THEN 'sent' END, sent_at = ?, sent_by = ?
+    sql: `UPDATE test_lots SET state = CASE WHEN state = 'draft' AND ${same.sql} THEN 'sent' END, sent_at = ${effect.sql}, sent_by = ?
       WHERE id = ? AND ${guard.sql}`,
-    args: [...same.args, when.sentAt, when.sentBy, id, ...guard.args],
+    args: [...same.args, ...effect.args, by.sentBy, id, ...guard.args],
   }]
 }

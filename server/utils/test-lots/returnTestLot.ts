@@ -1,6 +1,6 @@
 import type { Access } from '~~/utils/access/roles'
 import type { TestLotReturn } from '~~/utils/contract/testLots'
-import { areRecorded, refuseRefused } from '../cylinder-lists/lineCommands'
+import { areRecorded, effectOf, refuseRefused } from '../cylinder-lists/lineCommands'
 import { append } from '../custody/append'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
@@ -19,16 +19,16 @@ const EVENTS_A_LINE = 2
  */
 export async function returnTestLot(db: Database, id: string, body: TestLotReturn, access: Access, now: number): Promise<void> {
   const lot = await theTestLot(db, id)
-  const isRepeated = await areRecorded(db, body.lines.flatMap(line => [line.retestedEventId, line.returnedEventId]))
+  const eventIds = body.lines.flatMap(line => [line.retestedEventId, line.returnedEventId])
+  const isRepeated = await areRecorded(db, eventIds)
   if (!isRepeated) await refuseUnlessOut(db, id, body)
   await refuseOtherPlace(db, body.toPlaceId)
 
   const events = body.lines.flatMap(line => eventsOf(line, body, lot.requalifier.id))
   const ids = body.lines.map(line => line.cylinderId)
   const deviceNow = body.deviceNow === undefined ? null : Date.parse(body.deviceNow)
-  const backAt = Math.min(Date.parse(body.occurredAt), now)
   try {
-    const results = await append(db, { events, access, now, deviceNow, dispatch: { alongside: guard => arrival(id, ids, backAt, guard) } })
+    const results = await append(db, { events, access, now, deviceNow, dispatch: { alongside: guard => arrival(id, ids, effectOf(eventIds), guard) } })
     refuseRefused(results, event => Math.floor(event / EVENTS_A_LINE))
   }
   catch (error) {
@@ -56,7 +56,7 @@ function eventsOf(line: TestLotReturn['lines'][number], { occurredAt, toPlaceId 
   return inOrder.map((event, index) => ({ ...event, deviceSeq: index + 1 }))
 }
 
-function arrival(id: string, cylinderIds: readonly string[], backAt: number, guard: Guard) {
+function arrival(id: string, cylinderIds: readonly string[], effect: Guard, guard: Guard) {
   const ids = JSON.stringify(cylinderIds)
   const remaining = `(SELECT count(*) FROM open_lines WHERE list_id = ?)`
   const theseAreOut = `(SELECT count(*) FROM open_lines WHERE list_id = ? AND cylinder_id IN (SELECT value FROM json_each(?))) = ?`
@@ -65,9 +65,9 @@ function arrival(id: string, cylinderIds: readonly string[], backAt: number, gua
       // A lot that is not out with these lines any more gets no state, which its column refuses: all is undone.
       sql: `UPDATE test_lots SET
           state = CASE WHEN state <> 'sent' OR NOT ${theseAreOut} THEN NULL WHEN ${remaining} = ? THEN 'back' ELSE 'sent' END,
-          back_at = CASE WHEN ${remaining} = ? THEN ? END
+          back_at = CASE WHEN ${remaining} = ? THEN ${effect.sql} END
         WHERE id = ? AND ${guard.sql}`,
-      args: [id, ids, cylinderIds.length, id, cylinderIds.length, id, cylinderIds.length, backAt, id, ...guard.args],
+      args: [id, ids, cylinderIds.length, id, cylinderIds.length, id, cylinderIds.length, ...effect.args, id, ...guard.args],
     },
     {
       sql: `DELETE FROM open_lines WHERE list_id = ? AND cylinder_id IN (SELECT value FROM json_each(?)) AND ${guard.sql}`,
