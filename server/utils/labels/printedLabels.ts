@@ -1,10 +1,7 @@
-import { formatReading, nearestToDivision } from '~~/utils/quantity/mass'
 import { identityLabel, type LabelledStamp } from '~~/utils/label/identityLabel'
 import { labelUrl } from '~~/utils/label/code'
 import { sheet } from '~~/utils/label/sheet'
 import { LABEL_STOCKS, type LabelStockId } from '~~/utils/label/stock'
-import type { Stamp } from '~~/utils/capacity/types'
-import type { CylinderState } from '~~/utils/custody/state'
 import { firm } from '~~/drizzle/schema'
 import { cylinderStates } from '../custody/cylinderViews'
 import { CLAIM_ORDER } from '../custody/findCylinder'
@@ -12,6 +9,7 @@ import type { Database } from '../database/database'
 import { problem } from '../http/problem'
 import { labelFonts } from '../pdf/fonts'
 import { labelSheetPdf } from '../pdf/labelSheetPdf'
+import { labelledStamp } from './labelledStamp'
 
 /** Which labels to print, on what, and where their symbols lead. */
 export interface Printing { codes: readonly string[], stock: LabelStockId, start: number, publicUrl: string }
@@ -54,18 +52,4 @@ async function stampsByCode(db: Database, codes: readonly string[]): Promise<Map
     const state = states.get(carriers.get(code) ?? '')
     return [code, state?.stamp ? labelledStamp(state.stamp, state.tare) : null]
   }))
-}
-
-/** The collar as stamped; a tare that was weighed anew stands in place of the stamped one. */
-function labelledStamp(stamp: Stamp, tare: CylinderState['tare']): LabelledStamp {
-  const tareUnit = stamp.tareWeight?.unit ?? 'lb'
-  return {
-    serial: stamp.serial,
-    spec: stamp.spec,
-    servicePressurePsig: stamp.servicePressurePsig,
-    tareWeight: tare?.isWeighedAnew
-      ? formatReading(nearestToDivision(tare.exactGrams, tareUnit))
-      : stamp.tareWeight && formatReading(stamp.tareWeight),
-    waterCapacity: stamp.waterCapacity && formatReading(stamp.waterCapacity),
-  }
 }
