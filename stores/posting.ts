@@ -14,7 +14,7 @@ export type NewEvent<K extends EventKind = EventKind> = Omit<CustodyEvent<K>, 'i
 /** What was recorded, and the cylinder as it now stands. */
 export interface Posted { event: CustodyEvent, version: number, cylinder: CylinderView | null }
 
-const TAKE_BACK_MS = 10_000
+const NOTICE_MS = 10_000
 const NOT_TAKEN_BACK: readonly EventKind[] = ['registered', 'corrected']
 
 /** The present instant as this device's clock has it, with its offset. */
@@ -27,6 +27,8 @@ export const usePostingStore = defineStore('posting', () => {
   const api = useApi()
   const notice = ref('')
   const last = shallowRef<Posted | null>(null)
+  /** The event that was last taken back. */
+  const takenBackId = ref<string | null>(null)
   const busy = ref(false)
   /** Goes up with each event recorded here; a page that shows a cylinder asks for it again. */
   const recorded = ref(0)
@@ -60,7 +62,6 @@ export const usePostingStore = defineStore('posting', () => {
     say(`Recorded: ${KIND_WORDS[posted.event.kind].done.toLowerCase()}`)
     if (NOT_TAKEN_BACK.includes(posted.event.kind)) return
     last.value = posted
-    timer = setTimeout(clear, TAKE_BACK_MS)
   }
 
   /** Takes back what was just recorded, by an event of its own: the log loses nothing. */
@@ -77,6 +78,7 @@ export const usePostingStore = defineStore('posting', () => {
         details: { eventId: taken.event.id, reason: 'taken back at once' },
       })
       const posted = await post(correction as CustodyEvent)
+      takenBackId.value = taken.event.id
       say('Taken back. Both lines stay in the custody log.')
       return posted.cylinder
     }
@@ -92,6 +94,7 @@ export const usePostingStore = defineStore('posting', () => {
   function say(text: string) {
     clear()
     notice.value = text
+    timer = setTimeout(clear, NOTICE_MS)
   }
 
   function clear() {
@@ -100,5 +103,5 @@ export const usePostingStore = defineStore('posting', () => {
     last.value = null
   }
 
-  return { notice, last, busy, recorded, seal, post, announce, takeBack, say, clear }
+  return { notice, last, takenBackId, busy, recorded, seal, post, announce, takeBack, say, clear }
 })

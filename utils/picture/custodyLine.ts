@@ -13,13 +13,14 @@ export function eventInWords(line: LogLine, unit: MassUnit): string {
   return change ? `${word}, ${signedMass(change, unit)}` : word
 }
 
-/** By how much an event changed the known net; null where one of the two is not known. */
-export function netChangeGrams({ netBeforeGrams, netAfterGrams }: LogLine): number | null {
-  return netBeforeGrams === null || netAfterGrams === null ? null : netAfterGrams - netBeforeGrams
+/** By how much an event changed the known net; null where one of the two is not known. Before it was registered there was nothing. */
+export function netChangeGrams({ kind, netBeforeGrams, netAfterGrams }: LogLine): number | null {
+  const before = kind === 'registered' ? netBeforeGrams ?? 0 : netBeforeGrams
+  return before === null || netAfterGrams === null ? null : netAfterGrams - before
 }
 
-/** A mass with its sign, a plus as well as a minus. */
+/** A mass with its sign, a plus as well as a minus; one that rounds to nothing has none. */
 export function signedMass(grams: number, unit: MassUnit): string {
   const text = formatMass(grams, unit, 'nearest')
-  return grams > 0 ? `+${text}` : text
+  return grams > 0 && /[1-9]/.test(text) ? `+${text}` : text
 }

@@ -9,6 +9,8 @@ export interface Verdict {
   text: string
   /** Stands in the place of the stop weight; null where that is given. */
   reason: string | null
+  /** Where the reason comes from, where a rule gave it. */
+  source: string | null
 }
 
 /**
@@ -19,33 +21,33 @@ export interface Verdict {
 export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
   const { capacity, contents } = view
   const overfill = view.findings.find(finding => finding.code === 'overfill')
-  if (overfill) return { kind: 'stop', text: excessText(view, unit), reason: overfill.text }
-  if (!view.stamp) return { kind: 'unk', text: 'Not registered yet', reason: 'Its stamp is not in the log, so no weight can be given.' }
+  if (overfill) return { kind: 'stop', text: excessText(view, unit), reason: overfill.text, source: overfill.source }
+  if (!view.stamp) return { kind: 'unk', text: 'Not registered yet', reason: 'Its stamp is not in the log, so no weight can be given.', source: null }
 
   const refusal = capacity.refusals[0]
-  if (refusal) return { kind: 'stop', text: 'Do not fill', reason: refusal.text }
+  if (refusal) return { kind: 'stop', text: 'Do not fill', reason: refusal.text, source: refusal.source }
   if (!contents.nothingInIt && contents.refrigerant === null) {
-    return { kind: 'stop', text: 'Do not fill: contents not known', reason: 'What is in it is not known. Nothing goes in until it is identified or emptied to a deep vacuum.' }
+    return { kind: 'stop', text: 'Do not fill: contents not known', reason: 'What is in it is not known. Nothing goes in until it is identified or emptied to a deep vacuum.', source: null }
   }
 
   const missing = capacity.missing.filter(each => each !== 'weight')
   if (capacity.stopWeightGrams === null) {
     if (contents.nothingInIt && capacity.forRefrigerant === null) {
-      return { kind: 'ok', text: 'Nothing in it', reason: 'Choose the refrigerant that is to go in, and the weight to stop at stands here.' }
+      return { kind: 'ok', text: 'Nothing in it', reason: 'Choose the refrigerant that is to go in, and the weight to stop at stands here.', source: null }
     }
     const what = missing.map(each => MISSING_WORDS[each]).join(' and ')
-    return { kind: 'unk', text: 'No stop weight', reason: what ? `Not known: ${what}.` : 'No rule has a figure for this refrigerant in this cylinder.' }
+    return { kind: 'unk', text: 'No stop weight', reason: what ? `Not known: ${what}.` : 'No rule has a figure for this refrigerant in this cylinder.', source: null }
   }
   return roomVerdict(view, unit)
 }
 
 function roomVerdict({ capacity, contents, findings }: CylinderView, unit: MassUnit): Verdict {
   const { roomGrams, forRefrigerant } = capacity
-  if (roomGrams === null) return { kind: 'att', text: 'Not weighed: the room is not known', reason: null }
+  if (roomGrams === null) return { kind: 'att', text: 'Not weighed: the room is not known', reason: null, source: null }
   const isNearlyFull = findings.some(finding => finding.code === 'nearly-full')
-  if (isNearlyFull && roomGrams <= (contents.uncertaintyGrams ?? 0)) return { kind: 'att', text: 'Full', reason: null }
+  if (isNearlyFull && roomGrams <= (contents.uncertaintyGrams ?? 0)) return { kind: 'att', text: 'Full', reason: null, source: null }
   const text = `Room for ${formatMass(roomGrams, unit, 'down')} of ${forRefrigerant ?? 'refrigerant'}`
-  return { kind: isNearlyFull ? 'att' : 'ok', text, reason: null }
+  return { kind: isNearlyFull ? 'att' : 'ok', text, reason: null, source: null }
 }
 
 function excessText({ capacity, contents }: CylinderView, unit: MassUnit): string {
