@@ -12,7 +12,7 @@ export function judgedNetGrams({ contents }: CylinderState): number | null {
  * The limit that an overfill is judged by, unrounded; null where none can be known.
  *
  * The rule of the day it was last filled or today's, whichever allows more, but never above today's ceiling. Where the
- * contents cannot be named, the lowest limit of what is known to have gone in since the last deep vacuum.
+ * contents cannot be named or have no limit, the lowest of what is known to have gone in since the last deep vacuum.
  */
 export function judgedLimitGrams(
   state: CylinderState, policyNow: FillPolicy, policyAt: (ms: number) => FillPolicy, catalogue: Catalogue,
@@ -20,9 +20,7 @@ export function judgedLimitGrams(
   const { stamp, tare, contents, lastPutInAt } = state
   if (stamp === null || tare === null || contents.nothingInIt) return null
   const policies = lastPutInAt === null ? [policyNow] : [policyNow, policyAt(lastPutInAt)]
-  const isNamed = contents.refrigerant !== null && contents.condition !== 'mixed' && contents.condition !== 'unknown'
-  const names = isNamed ? [contents.refrigerant] : contents.knownSinceVacuum
-  const limits = names.flatMap((refrigerant) => {
+  const limitsOf = (names: readonly string[]) => names.flatMap((refrigerant) => {
     const answers = policies.map(policy => fillLimit({
       stamp, refrigerant, condition: 'suspect', burnt: contents.burnt || contents.condition === 'burnt', policy, catalogue, tareGrams: tare.exactGrams,
     }))
@@ -31,6 +29,9 @@ export function judgedLimitGrams(
     const ceiling = answers[0]?.terms.find(term => term.rule === 'hot-ceiling')?.limitGrams ?? Infinity
     return [Math.min(Math.max(...known), ceiling)]
   })
+  const isNamed = contents.refrigerant !== null && contents.condition !== 'mixed' && contents.condition !== 'unknown'
+  const ofPresent = isNamed ? limitsOf([contents.refrigerant]) : []
+  const limits = ofPresent.length > 0 ? ofPresent : limitsOf(contents.knownSinceVacuum)
   return limits.length === 0 ? null : Math.min(...limits)
 }
 

@@ -91,6 +91,11 @@ describe('a fill with a second refrigerant', () => {
     expect(lastFindings(...back, filled('R-22', 20))).toEqual([])
   })
 
+  it('at the tare of what was registered as a mixture leaves its own name suspect', () => {
+    const story = [registered({ contents: { refrigerant: 'R-22', condition: 'mixed' }, gross: kg(15) }), filled('R-22', 20, { grossBefore: kg(12) })]
+    expect(contentsAfter(...story)).toMatchObject({ refrigerant: 'R-22', condition: 'suspect' })
+  })
+
   it('is none after a deep vacuum', () => {
     const story = [holding('R-22'), did('emptied', { vacuum: { microns: 500 } }), filled('R-134a', 20)]
     expect(contentsAfter(...story)).toMatchObject({ refrigerant: 'R-134a', condition: 'clean' })
@@ -183,6 +188,32 @@ describe('an overfilled cylinder', () => {
     const story = [registered(), filled('R-22', 27), filled('R-134a', 29)]
     expect(codes(viewAfter(story))).toEqual(['overfill', 'second-refrigerant'])
     expect(codes(viewAfter([...story, weighed(27)]))).toEqual(['second-refrigerant'])
+  })
+
+  it('of a mixture is judged by the lowest limit of all that is known to be in it', () => {
+    // R-454B at 131 F weighs 0.8299 kg/L: 0.95 x 20.0192 L x 0.8299 = 15.783 kg; R-22 may be 16 kg.
+    const mixedTo = (grossKg: number) => codes(viewAfter([registered(), filled('R-22', 20), filled('R-454B', grossKg)]))
+    expect(mixedTo(27.78)).not.toContain('overfill')
+    expect(mixedTo(27.79)).toContain('overfill')
+  })
+
+  it('is judged by what was in it before where the catalogue does not know what came', () => {
+    const story = [registered(), filled('R-22', 29), filled('R-9999', 29.5, { grossBefore: kg(12) })]
+    expect(codes(viewAfter(story))).toContain('overfill')
+    expect(codes(viewAfter([...story, weighed(27)]))).not.toContain('overfill')
+  })
+
+  it('is not one that was evacuated since and whose weight is not known', () => {
+    const story = [registered(), filled('R-22', 29), did('emptied', { vacuum: { microns: 500 }, grossAfter: kg(11) }), filled('R-22', 11)]
+    expect(codes(viewAfter(story))).toEqual(['weight-not-known'])
+  })
+
+  it('is one above today\'s ceiling, whatever the rule it was filled by', () => {
+    const policyAt = (ms: number) => ({ shareThousandths: 800, ceilingThousandths: ms < START + 2 * DAY ? 950 : 700, options: { liquid130F: false, unRatio: false } })
+    const later = { policyAt, policyNow: policyAt(START + 3 * DAY), nowMs: START + 3 * DAY }
+    // 0.70 x 20.0192 L x 1.0572 kg/L of R-22 at 131 F = 14.815 kg
+    expect(codes(viewAfter([registered(), filled('R-22', 26.81)], later))).toEqual(['nearly-full'])
+    expect(codes(viewAfter([registered(), filled('R-22', 26.82)], later))).toEqual(['overfill'])
   })
 
   it('is forgiven a rule that became stricter after the fill, but shows that there is no room', () => {

@@ -47,6 +47,10 @@ describe('a returned cylinder', () => {
     expect(contentsAfter(...gone, returned(), weighed(12.1))).toMatchObject({ nothingInIt: false, refrigerant: null, netGrams: 100 })
   })
 
+  it('from a reclaimer and filled before it was weighed is not empty for weighing no more than its tare later', () => {
+    expect(contentsAfter(...gone, returned(), filled('R-22', 20), weighed(12))).toMatchObject({ nothingInIt: false, refrigerant: null, condition: 'unknown', netGrams: 0 })
+  })
+
   it('from a reclaimer with a weight above its tare brings that in, by no name', () => {
     expect(lastMovements(...gone, returned(13))).toEqual(['returned-with ? 1000'])
   })

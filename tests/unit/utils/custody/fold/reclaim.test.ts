@@ -22,6 +22,11 @@ describe('a cylinder sent for reclaim', () => {
     expect(lastMovements(...full, sent(19.8))).toEqual(['weighing R-22 -200', 'shipped R-22 -7800'])
   })
 
+  it('weighed below its tare leaves with what the log knew, and a net that nobody knows', () => {
+    expect(lastMovements(...full, sent(11))).toEqual(['shipped R-22 -8000'])
+    expect(contentsAfter(...full, sent(11))).toMatchObject({ netGrams: null, inStock: false })
+  })
+
   it('sent a second time without having come back came back with what it left with', () => {
     expect(lastMovements(...full, sent(20), sent(20, OTHER_SHIPMENT))).toEqual(['opening R-22 8000', 'shipped R-22 -8000'])
     expect(lastFindings(...full, sent(20), sent(20, OTHER_SHIPMENT))).toEqual(['away'])
