@@ -25,8 +25,7 @@ export function useDeskFrame(title: string | (() => string)) {
 
   function key(event: KeyboardEvent) {
     if (event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey) return
-    const at = event.target
-    if (at instanceof HTMLElement && (at.isContentEditable || /^(?:INPUT|TEXTAREA|SELECT)$/.test(at.tagName))) return
+    if (takesText(event.target)) return
     const field = document.querySelector<HTMLInputElement>('[data-search]') ?? document.querySelector<HTMLInputElement>('[data-code-field]')
     if (!field) return
     event.preventDefault()
@@ -43,4 +42,10 @@ export function useDeskFrame(title: string | (() => string)) {
     onCode: openCode,
     onSignOut: signOut,
   }))
+}
+
+function takesText(target: EventTarget | null): boolean {
+  if (!(target instanceof HTMLElement)) return false
+  if (target instanceof HTMLInputElement) return !['checkbox', 'radio', 'button', 'submit'].includes(target.type)
+  return target.isContentEditable || ['TEXTAREA', 'SELECT'].includes(target.tagName)
 }

@@ -1,6 +1,7 @@
 import { v7 as uuidv7 } from 'uuid'
 import { ApiError, problemOf, useApi } from '~~/composables/useApi'
 import { deviceNow, usePostingStore } from '~~/stores/posting'
+import type { Stamp } from '~~/utils/capacity/types'
 import type { EventsAnswer } from '~~/utils/contract/custody'
 import type { MintAnswer } from '~~/utils/contract/labels'
 import type { ProblemDetails } from '~~/utils/contract/problem'
@@ -8,7 +9,7 @@ import type { CustodyEvent } from '~~/utils/custody/event'
 import type { RegistrationDetails } from '~~/utils/registration/draft'
 
 /** A cylinder that was registered; `labelProblem` says why its label was not recorded with it. */
-export interface Registered { id: string, code: string | null, serial: string | null, labelProblem: ProblemDetails | null }
+export interface Registered { id: string, code: string | null, stamp: Stamp, labelProblem: ProblemDetails | null }
 
 type Label = { choice: 'new' } | { choice: 'blank', code: string } | { choice: 'later' }
 
@@ -41,7 +42,7 @@ export function useRegistration() {
       if (results[0]?.outcome === 'refused') throw new ApiError(results[0].problem ?? problemOf(undefined))
       sealed = null
       const labelProblem = results[1]?.outcome === 'refused' ? results[1].problem ?? problemOf(undefined) : null
-      return { id: events[0]!.cylinderId, code: labelProblem ? null : code, serial: details.stamp.serial, labelProblem }
+      return { id: events[0]!.cylinderId, code: labelProblem ? null : code, stamp: details.stamp, labelProblem }
     }
     catch (error) {
       problem.value = problemOf(error)

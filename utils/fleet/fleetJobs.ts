@@ -32,7 +32,7 @@ function overfilled({ overfilled: { count, first } }: FleetSummary, unit: MassUn
   return {
     code: 'overfilled', kind: 'stop', act: 'filter', finding: 'overfill',
     title: `${count} overfilled${by}`,
-    text: `${where}Keep it cool and off the road; a trained person draws it down.`,
+    text: `${where}Keep it cool and off the road until drawn down.`,
     verb: count === 1 ? 'Show it' : `Show the ${count}`,
   }
 }
@@ -42,7 +42,7 @@ function full({ full: { count, netGrams } }: FleetSummary, unit: MassUnit, maySh
   return {
     code: 'full', kind: 'att', act: mayShip ? 'ship' : 'filter', finding: 'nearly-full',
     title: `${count} full, ready to ship`,
-    text: `${formatMass(netGrams, unit, 'nearest')} net, ${count === 1 ? 'a cylinder' : 'each'} at 90 % of its limit or more.`,
+    text: `${formatMass(netGrams, unit, 'nearest')} net, ${count === 1 ? 'it is' : 'each'} at 90 % of its limit or more.`,
     verb: mayShip ? 'Prepare a shipment' : count === 1 ? 'Show it' : `Show the ${count}`,
   }
 }
@@ -52,7 +52,7 @@ function withoutNumber({ withoutNumber: { count } }: FleetSummary): FleetJob | n
   return {
     code: 'without-number', kind: 'unk', act: 'filter', finding: 'weight-not-known',
     title: `${count} without a number`,
-    text: 'Not weighed, or not known what is in it: no room can be given.',
+    text: 'Not weighed: no room can be given.',
     verb: count === 1 ? 'Show it' : `Show the ${count}`,
   }
 }

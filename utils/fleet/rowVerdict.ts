@@ -17,12 +17,12 @@ const LIFECYCLE_VERDICTS: Partial<Record<Lifecycle, RowVerdict>> = {
 
 const STOP_WORDS: Partial<Record<FindingCode, string>> = {
   'overfill': 'Overfilled',
-  'pressure-class': 'Pressure too high for it',
+  'pressure-class': 'Pressure too high',
   'spec-not-for-gas': 'Not made for this gas',
   'not-refillable': 'Never to be refilled',
   'not-marked-flammable': 'Not marked flammable',
   'second-refrigerant': 'Two refrigerants in it',
-  'unknown-onto-known': 'Something unknown in it',
+  'unknown-onto-known': 'Unknown mixed in',
   'retest-overdue': 'Retest overdue',
   'retest-unknown': 'No test date known',
   'early-test': 'Test it before use',
@@ -38,6 +38,7 @@ const STOP_WORDS: Partial<Record<FindingCode, string>> = {
 
 const CAUTION_WORDS: Partial<Record<FindingCode, string>> = {
   'retest-overdue': 'Retest overdue',
+  'nearly-full': 'Nearly full',
   'retest-soon': 'Usable, retest soon',
   'not-registered': 'Not registered yet',
   'registered-twice': 'Registered twice',
@@ -45,7 +46,6 @@ const CAUTION_WORDS: Partial<Record<FindingCode, string>> = {
   'two-owners': 'Two owners in it',
   'old-tare-on-label': 'Old tare on its label',
   'unsigned': 'Waits for a signature',
-  'nearly-full': 'Nearly full',
 }
 
 const CAUTION_ORDER = Object.keys(CAUTION_WORDS) as FindingCode[]
@@ -93,15 +93,15 @@ function notKnown(row: CylinderRow, now: number): RowVerdict | null {
     const days = daysSinceLastEvent(row, now)
     return { kind: 'unk', text: days === null ? 'Not seen' : days >= 90 ? `Missing? ${days} days` : `Not seen for ${days} days` }
   }
-  if (row.tareWeightGrams === null || row.waterCapacityGrams === null) return { kind: 'unk', text: 'Stamp not known, no limit' }
+  if (row.tareWeightGrams === null || row.waterCapacityGrams === null) return { kind: 'unk', text: 'Stamp unknown, no limit' }
   if (!row.nothingInIt && row.netGrams === null) return { kind: 'unk', text: 'Not weighed' }
   return null
 }
 
 function caution(row: CylinderRow): RowVerdict | null {
-  if (row.findingCodes.includes('nearly-full') && isFull(row)) return { kind: 'att', text: 'Full' }
   const code = CAUTION_ORDER.find(known => row.findingCodes.includes(known))
-  return code ? { kind: 'att', text: CAUTION_WORDS[code]! } : null
+  if (code === undefined) return null
+  return { kind: 'att', text: code === 'nearly-full' && isFull(row) ? 'Full' : CAUTION_WORDS[code]! }
 }
 
 function lowerFirst(text: string): string {

@@ -42,7 +42,7 @@ describe('the fleet', () => {
   // 10251 g are 22.6 lb; 17272 g are 38.08 lb; 29746.6 g are 65.58 lb, and 7021 g are 15.48 lb: the last three go down.
   it('writes weights under a head that names the unit, limits rounded down', async () => {
     const wrapper = await mount([cylinderRow()])
-    expect(byRole(wrapper.element, 'columnheader', /^Stop weight, lb/)).toBeTruthy()
+    expect(byRole(wrapper.element, 'columnheader', /^Stop, lb/)).toBeTruthy()
     const cells = cellsOf(wrapper.element, '7K3 M9Q 2TX')
     expect(cells).toContain('22.6 / 38.0')
     expect(cells).toContain('15.4')

@@ -18,7 +18,7 @@ describe('the word that the fleet says of a cylinder', () => {
   it('is that something unknown is in it, never that it is usable', () => {
     expect(rowVerdict(cylinderRow({ refrigerant: null }), NOW)).toEqual({ kind: 'unk', text: 'Unknown, no limit' })
     expect(rowVerdict(cylinderRow({ netGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Not weighed' })
-    expect(rowVerdict(cylinderRow({ waterCapacityGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Stamp not known, no limit' })
+    expect(rowVerdict(cylinderRow({ waterCapacityGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Stamp unknown, no limit' })
   })
 
   it('counts a net of nothing as a weight', () => {
@@ -39,7 +39,7 @@ describe('the word that the fleet says of a cylinder', () => {
 
   it('shows a late retest before a near one and a full cylinder as full', () => {
     expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full', 'retest-overdue'] }), NOW).text).toBe('Retest overdue')
-    expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full'], netGrams: 16_500, roomGrams: 772 }), NOW).text).toBe('Nearly full')
+    expect(rowVerdict(cylinderRow({ findingCodes: ['retest-soon', 'nearly-full'], netGrams: 16_500, roomGrams: 772 }), NOW).text).toBe('Nearly full')
     expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full'], netGrams: 17_200, roomGrams: 72 }), NOW).text).toBe('Full')
   })
 })
