@@ -7,7 +7,7 @@ import {
 /** Gross weights from below the tare of 12 kg to far above what 20 kg of water capacity may hold. */
 const gross = fc.integer({ min: 1100, max: 4500 }).map(hundredths => kg(hundredths / 100))
 const maybeGross = fc.option(gross, { nil: undefined })
-const refrigerant = fc.constantFrom('R-22', 'R-410A', 'R-454B', 'R-134a')
+const refrigerant = fc.constantFrom('R-22', 'R-410A', 'R-454B', 'R-744', 'R-9999')
 const ofFill = fc.oneof(refrigerant, fc.constant(null))
 const condition = fc.constantFrom('clean', 'suspect', 'burnt', 'mixed', 'unknown') as fc.Arbitrary<'clean' | 'suspect' | 'burnt' | 'mixed' | 'unknown'>
 

@@ -190,6 +190,13 @@ describe('an overfilled cylinder', () => {
     expect(codes(viewAfter([...story, weighed(27)]))).toEqual(['second-refrigerant'])
   })
 
+  it('once burnt is judged by the oily limit', () => {
+    // 14.950 kg, as above.
+    const burntTo = (grossKg: number) => codes(viewAfter([registered(), filled('R-22', grossKg, { condition: 'burnt' })]))
+    expect(burntTo(26.95)).toEqual(['nearly-full'])
+    expect(burntTo(26.951)).toEqual(['overfill'])
+  })
+
   it('of a mixture is judged by the lowest limit of all that is known to be in it', () => {
     // R-454B at 131 F weighs 0.8299 kg/L: 0.95 x 20.0192 L x 0.8299 = 15.783 kg; R-22 may be 16 kg.
     const mixedTo = (grossKg: number) => codes(viewAfter([registered(), filled('R-22', 20), filled('R-454B', grossKg)]))

@@ -43,6 +43,14 @@ describe('a passed test', () => {
     expect(lastMovements(...full, retested())).toEqual(['emptied-loss R-22 -8000'])
   })
 
+  it('with a gas that has no vapour heel at 77 F is a stop for anything the scale can tell from nothing', () => {
+    const carbonDioxide = (grossKg: number) => [
+      registered({ stamp: { ...STAMP, spec: 'DOT-3AA', servicePressurePsig: 2400 }, contents: { refrigerant: 'R-744', condition: 'clean' }, gross: kg(grossKg) }), retested(),
+    ]
+    expect(lastFindings(...carbonDioxide(12.06))).toEqual([])
+    expect(lastFindings(...carbonDioxide(12.2))).toEqual(['tested-full'])
+  })
+
   it('does not clean a burnt cylinder nor lift a second refrigerant', () => {
     const story = [registered(), filled('R-22', 14, { condition: 'burnt' }), filled('R-134a', 15), retested()]
     expect(contentsAfter(...story).burnt).toBe(true)
