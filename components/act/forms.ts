@@ -3,6 +3,7 @@ import type { DraftKind } from '~~/utils/custody/draft/draft'
 import { DRAWN } from '~~/utils/custody/draft/drawn'
 import { EMPTIED } from '~~/utils/custody/draft/emptied'
 import { FILLED } from '~~/utils/custody/draft/filled'
+import { isFormKind, type FormKind } from '~~/utils/custody/draft/formKinds'
 import { HANDED_OVER } from '~~/utils/custody/draft/handedOver'
 import { LABELLED } from '~~/utils/custody/draft/labelled'
 import { LOST } from '~~/utils/custody/draft/lost'
@@ -23,11 +24,6 @@ import ReceivedForm from './ReceivedForm.vue'
 import RegisteredForm from './RegisteredForm.vue'
 import ReturnedForm from './ReturnedForm.vue'
 import WeighedForm from './WeighedForm.vue'
-
-/** Kinds that have no form of this sort: their own pages write them, or a correction does. */
-type WrittenElsewhere = 'registered' | 'sent-for-reclaim' | 'reclaimed' | 'sent-for-test' | 'retested' | 'corrected'
-
-export type FormKind = Exclude<EventKind, WrittenElsewhere>
 
 export interface ActForm {
   component: Component
@@ -62,5 +58,5 @@ export function correctionFormOf(kind: EventKind): Pick<ActForm, 'component' | '
 
 /** The form of a kind, or null where it has none of this sort. */
 export function formOf(kind: string): ActForm | null {
-  return Object.hasOwn(ACT_FORMS, kind) ? ACT_FORMS[kind as FormKind] : null
+  return isFormKind(kind) ? ACT_FORMS[kind] : null
 }
