@@ -29,8 +29,8 @@ export function judgedLimitGrams(
     const ceiling = answers[0]?.terms.find(term => term.rule === 'hot-ceiling')?.limitGrams ?? Infinity
     return [Math.min(Math.max(...known), ceiling)]
   })
-  const isNamed = contents.refrigerant !== null && contents.condition !== 'mixed' && contents.condition !== 'unknown'
-  const ofPresent = isNamed ? limitsOf([contents.refrigerant]) : []
+  const named = contents.condition === 'mixed' || contents.condition === 'unknown' ? null : contents.refrigerant
+  const ofPresent = named === null ? [] : limitsOf([named])
   const limits = ofPresent.length > 0 ? ofPresent : limitsOf(contents.knownSinceVacuum)
   return limits.length === 0 ? null : Math.min(...limits)
 }

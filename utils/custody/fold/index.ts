@@ -2,20 +2,17 @@ import type { Lifecycle } from '../cylinderView'
 import { applyCorrections, type Correction, type Standing } from '../corrections'
 import type { AnyRecordedEvent, RecordedEvent } from '../event'
 import type { Finding } from '../finding'
-import { overfill } from '../findings/weight'
-import { afterEnd, clockDoubtful } from '../findings/record'
-import { judgedLimitGrams, judgedNetGrams, overfillGrams } from '../judgedLimit'
+import { afterEnd } from '../findings/record'
 import type { EventKind } from '../kinds'
 import { lifecycleOf } from '../lifecycle'
 import type { Movement } from '../movement'
-import { isClamped } from '../order'
-import { standingFinding } from '../findings/standing'
-import { initialState, STANDING_CODES, type CylinderState } from '../state'
+import { initialState, type CylinderState } from '../state'
 import { corrected } from './corrected'
 import { drawn } from './drawn'
 import { emptied } from './emptied'
 import { filled } from './filled'
 import { handedOver } from './handedOver'
+import { raiseCommon } from './raiseCommon'
 import { labelled, labelledCode } from './labelled'
 import { lost } from './lost'
 import { moved } from './moved'
@@ -55,6 +52,7 @@ export interface FoldStep {
 /** A label code that an event of this cylinder claims. */
 export interface LabelClaim { eventId: string, code: string, effectiveAt: number, deviceId: string, deviceSeq: number }
 
+/** A cylinder as its events have made it, and what each of them did. */
 export interface FoldResult {
   state: CylinderState
   movements: Movement[]
@@ -87,8 +85,6 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
 const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed']
 /** Kinds that handle no cylinder, so that they need no signature and may follow its end. */
 const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected']
-
-const DOUBTFUL_SKEW_S = 300
 
 /**
  * One cylinder from its events, in whatever order they arrived.
@@ -135,10 +131,7 @@ function takeTurn(before: CylinderState, { event, isOut }: Standing, isBeginning
   }
   if (event.kind === 'registered' && !isBeginning) registeredAgain(turn as Turn<'registered'>)
   else foldByKind(turn)
-  raiseClock(turn)
-  raiseTrainee(turn)
-  raiseOverfill(turn, before)
-  raiseStanding(turn, before)
+  raiseCommon(turn, before)
   return turn
 }
 
@@ -146,42 +139,6 @@ function foldByKind<K extends EventKind>(turn: Turn<K>): void {
   // The kind of the event names the fold that takes it, which the compiler cannot follow.
   const foldKind = FOLDS[turn.event.kind] as ((turn: Turn<K>) => void) | undefined
   foldKind?.(turn)
-}
-
-function raiseClock({ event, findings }: Turn): void {
-  const clamped = isClamped(event)
-  if (clamped || Math.abs(event.clockSkewSeconds) > DOUBTFUL_SKEW_S) findings.push(clockDoubtful(clamped))
-}
-
-function raiseTrainee(turn: Turn): void {
-  const { event } = turn
-  if (!event.trainee || event.kind === 'corrected') return
-  stand(turn, 'unsigned')
-  if (event.supervisorId === null) stand(turn, 'unsupervised')
-}
-
-function raiseOverfill(turn: Turn, before: CylinderState): void {
-  const { state, context, event, findings } = turn
-  const limit = judgedLimitGrams(state, context.policyAt(event.effectiveAt), context.policyAt, context.catalogue)
-  const excess = overfillGrams(state, limit)
-  if (excess === 0) {
-    state.overfilledAt = null
-    return
-  }
-  state.overfilledAt ??= event.effectiveAt
-  const isWeighedNow = state.contents.asOf === event.effectiveAt && state.contents.netGrams !== before.contents.netGrams
-  if (before.overfilledAt === null || isWeighedNow) {
-    findings.push(overfill(excess, state.contents.netGrams === null && judgedNetGrams(state) !== null, state.overfilledAt))
-  }
-}
-
-/** Findings that begin to stand with this event show on its line too. */
-function raiseStanding({ state, findings }: Turn, before: CylinderState): void {
-  for (const code of STANDING_CODES) {
-    const standing = state.standing.find(one => one.code === code)
-    if (!standing || code === 'after-end' || before.standing.some(one => one.code === code)) continue
-    findings.push(standingFinding(standing))
-  }
 }
 
 function withLastEvent(state: CylinderState, standings: readonly Standing[]): CylinderState {
