@@ -2,7 +2,7 @@ import { clockDoubtful } from '../findings/record'
 import { standingFinding } from '../findings/standing'
 import { overfill } from '../findings/weight'
 import { judgedLimitGrams, judgedNetGrams, overfillGrams } from '../judgedLimit'
-import { isClamped } from '../order'
+import { unclampedTime } from '../order'
 import { STANDING_CODES, type CylinderState } from '../state'
 import { stand } from './standing'
 import type { Turn } from './turn'
@@ -16,9 +16,11 @@ export function raiseCommon(turn: Turn, before: CylinderState): void {
 }
 
 const DOUBTFUL_SKEW_S = 300
+/** A clock that is off by less counts as right, so a time held back by less raises no doubt. */
+const DOUBTFUL_CLAMP_MS = 60_000
 
 function raiseClock({ event, findings }: Turn): void {
-  const clamped = isClamped(event)
+  const clamped = unclampedTime(event) - event.effectiveAt >= DOUBTFUL_CLAMP_MS
   if (clamped || Math.abs(event.clockSkewSeconds) > DOUBTFUL_SKEW_S) findings.push(clockDoubtful(clamped))
 }
 

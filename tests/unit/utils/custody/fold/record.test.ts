@@ -22,6 +22,13 @@ describe('an event\'s time', () => {
     expect(skewed(-301)).toEqual(['clock-doubtful'])
   })
 
+  it('is not doubted for a phone less than a minute fast, though it is held back', () => {
+    const ahead = (ms: number) => weighed(19, { occurredAt: START + 2 * HOUR + ms, recordedAt: START + 2 * HOUR })
+    expect(lastFindings(registered(), filled('R-22', 20), ahead(MINUTE - 1))).toEqual([])
+    expect(lastFindings(registered(), filled('R-22', 20), ahead(MINUTE))).toEqual(['clock-doubtful'])
+    expect(folded(registered(), filled('R-22', 20), ahead(MINUTE - 1)).state.lastEventAt).toBe(START + 2 * HOUR)
+  })
+
   it('is held back to its recording where it claims to be later', () => {
     const early = weighed(19, { occurredAt: START + 9 * HOUR, recordedAt: START + 2 * HOUR })
     expect(lastFindings(registered(), filled('R-22', 20), early)).toEqual(['clock-doubtful'])
