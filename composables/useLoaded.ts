@@ -1,4 +1,4 @@
-import type { WatchSource } from 'vue'
+import type { Ref, WatchSource } from 'vue'
 import { problemOf } from '~~/composables/useApi'
 
 /**
@@ -9,7 +9,7 @@ import { problemOf } from '~~/composables/useApi'
 export function useLoaded<T>(key: string, load: () => Promise<T>, watched: WatchSource[] = []) {
   const { data, error, status, refresh } = useAsyncData<T>(key, load, { watch: watched, deep: false })
   return {
-    data,
+    data: data as Ref<T | null | undefined>,
     problem: computed(() => error.value ? problemOf(error.value) : null),
     waiting: computed(() => status.value === 'pending' || status.value === 'idle'),
     refresh: () => refresh(),
