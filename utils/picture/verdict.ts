@@ -41,6 +41,17 @@ export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
   return roomVerdict(view, unit)
 }
 
+/** Whether the label that leads here was recorded on another cylinder as well. */
+export function isCodeOnTwo({ findings }: CylinderView): boolean {
+  return findings.some(finding => finding.code === 'code-on-two')
+}
+
+/** The same as {@link verdictOf} for whoever has only read the label: a code on two cylinders says nothing of either. */
+export function verdictOfScan(view: CylinderView, unit: MassUnit): Verdict {
+  if (!isCodeOnTwo(view)) return verdictOf(view, unit)
+  return { kind: 'stop', text: 'This code is on two cylinders', reason: 'Open it, and give the last four of the serial on its collar.', source: null }
+}
+
 function roomVerdict({ capacity, contents, findings }: CylinderView, unit: MassUnit): Verdict {
   const { roomGrams, forRefrigerant } = capacity
   if (roomGrams === null) return { kind: 'att', text: 'Not weighed: the room is not known', reason: null, source: null }

@@ -1,0 +1,53 @@
+import { describe, expect, it } from 'vitest'
+import { verdictOf, verdictOfScan } from '../../../../utils/picture/verdict'
+import { fold } from '../../../../utils/custody/fold'
+import { view } from '../../../../utils/custody/view'
+import { did, filled, FOLD_CONTEXT, recorded, registered, STAMP, VIEW_CONTEXT, type Told } from '../../../helpers/custody'
+
+// Tare 12 kg, water capacity 20 kg: room for 16 kg of R-22 in the empty cylinder.
+function verdict(story: Told[], context: Partial<typeof VIEW_CONTEXT> = {}) {
+  const { state } = fold(recorded(...story), FOLD_CONTEXT)
+  return verdictOf(view(state, { ...VIEW_CONTEXT, ...context }), 'kg')
+}
+
+describe('the first line said of a cylinder', () => {
+  it('is the room that is left, rounded down', () => {
+    expect(verdict([registered(), filled('R-22', 20)])).toEqual({ kind: 'ok', text: 'Room for 8.00\u00A0kg of R-22', reason: null, source: null })
+  })
+
+  it('asks for the refrigerant while nothing is in it', () => {
+    expect(verdict([registered()])).toMatchObject({ kind: 'ok', text: 'Nothing in it' })
+    expect(verdict([registered()], { askedRefrigerant: 'R-22' }).text).toBe('Room for 16.00\u00A0kg of R-22')
+  })
+
+  it('is nearly full from nine tenths of the limit, and full within the accuracy of the scale', () => {
+    // Nine tenths of 16 kg is 14.4 kg, a gross of 26.4 kg.
+    expect(verdict([registered(), filled('R-22', 26.3)]).kind).toBe('ok')
+    expect(verdict([registered(), filled('R-22', 26.4)])).toMatchObject({ kind: 'att', text: 'Room for 1.60\u00A0kg of R-22' })
+    // Half a percent of 27.9 kg is 0.14 kg, more than the 0.10 kg that are left.
+    expect(verdict([registered(), filled('R-22', 27.9)])).toMatchObject({ kind: 'att', text: 'Full' })
+  })
+
+  it('is a stop with the excess rounded up when it is overfilled, with no stop weight beside it', () => {
+    const said = verdict([registered(), filled('R-22', 28.001)])
+    expect(said).toMatchObject({ kind: 'stop', text: 'Overfilled by 0.01\u00A0kg' })
+    expect(said.reason).not.toBeNull()
+  })
+
+  it('is a stop where nobody knows what is in it, never a room', () => {
+    expect(verdict([registered({ contents: 'unknown', gross: { unit: 'kg', value: 15 } })])).toMatchObject({ kind: 'stop', text: 'Do not fill: contents not known' })
+  })
+
+  it('names what is missing from the stamp', () => {
+    const said = verdict([registered({ stamp: { ...STAMP, tareWeight: null } })], { askedRefrigerant: 'R-22' })
+    expect(said.kind).toBe('unk')
+    expect(said.reason).toBe('Not known: its tare weight (TW).')
+  })
+
+  it('tells a scanned code that is on two cylinders from either of them', () => {
+    const { state } = fold(recorded(registered(), did('labelled', { code: '7K3M9Q2TX' }), filled('R-22', 20)), FOLD_CONTEXT)
+    const shown = view(state, { ...VIEW_CONTEXT, codesOnTwo: new Set(['7K3M9Q2TX']) })
+    expect(verdictOfScan(shown, 'kg')).toMatchObject({ kind: 'stop', text: 'This code is on two cylinders' })
+    expect(verdictOfScan(view(state, VIEW_CONTEXT), 'kg').kind).toBe('ok')
+  })
+})
