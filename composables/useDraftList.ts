@@ -3,7 +3,7 @@ import { useLoaded } from '~~/composables/useLoaded'
 import type { CylinderRow, CylinderView } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import { readScannedText } from '~~/utils/label/code'
-import { changedLines } from '~~/utils/shipment/changedLines'
+import { changedLines, cylinderName } from '~~/utils/shipment/changedLines'
 
 interface List { id: string, state: string, lines: { cylinder: CylinderRow, version: number }[] }
 
@@ -27,13 +27,22 @@ export function useDraftList<L extends List>(kind: 'shipments' | 'test-lots', id
       return true
     }
     catch (error) {
-      problem.value = problemOf(error)
+      problem.value = withNames(problemOf(error))
       if (problem.value.status === 409) await lookAgain()
       return false
     }
     finally {
       busy.value = false
     }
+  }
+
+  // The server counts the lines of a request; a person knows cylinders.
+  function withNames(found: ProblemDetails): ProblemDetails {
+    const errors = found.errors?.map((one) => {
+      const line = loaded.data.value?.lines[Number(/^lines\.(\d+)/.exec(one.path)?.[1] ?? -1)]
+      return line ? { ...one, path: cylinderName(line.cylinder) } : one
+    })
+    return errors ? { ...found, errors } : found
   }
 
   async function lookAgain() {
