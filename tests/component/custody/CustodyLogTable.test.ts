@@ -1,0 +1,78 @@
+import { mountSuspended } from '@nuxt/test-utils/runtime'
+import { describe, expect, it } from 'vitest'
+import CustodyLogTable from '~~/components/custody/CustodyLogTable.vue'
+import type { LogLine } from '~~/utils/custody/cylinderView'
+import { byRole } from '../../helpers/roles'
+
+const DAYO = { id: 'd', name: 'D. Author' }
+
+function line(version: number, at: string, more: Partial<LogLine>): LogLine {
+  return {
+    id: `line-${version}`, seq: version, version, kind: 'weighed', occurredAt: at, effectiveAt: at, recordedAt: at, clockSkewSeconds: 0,
+    author: DAYO, postedBy: DAYO, supervisor: null, place: null, note: null, practice: false, confirmed: [], details: {}, names: {},
+    netBeforeGrams: null, netAfterGrams: null, findings: [], correction: null, ...more,
+  }
+}
+
+// One pound is 453.59 g: 20.0 lb is 9,072 g, 17.0 lb is 7,711 g.
+const LINES = [
+  line(4, '2026-07-15T16:02:00Z', {
+    kind: 'corrected', details: { eventId: 'line-3', reason: 'typed 47.9, the photo shows 44.9', instead: {} }, netBeforeGrams: 7711, netAfterGrams: 7711,
+  }),
+  line(3, '2026-07-14T15:20:00Z', {
+    kind: 'filled', details: { refrigerant: 'R-410A', grossAfter: { unit: 'lb', value: 47.9 } }, netBeforeGrams: 0, netAfterGrams: 7711,
+    recordedAt: '2026-07-16T08:20:00Z', correction: { eventId: 'line-4', reason: 'typed 47.9, the photo shows 44.9', takenOut: false },
+  }),
+  line(2, '2026-03-18T15:00:00Z', { kind: 'moved', details: { toPlaceId: 'van' }, names: { van: 'Van 12' }, netBeforeGrams: 0, netAfterGrams: 0 }),
+  line(1, '2026-03-17T15:00:00Z', {
+    kind: 'registered', details: { stamp: { serial: 'K48213', spec: 'DOT-4BA' }, ownership: 'own', contents: 'evacuated' }, netAfterGrams: 0,
+  }),
+]
+
+const mount = (more: object = {}) => mountSuspended(CustodyLogTable, {
+  props: {
+    lines: LINES, unit: 'lb', timeZone: 'America/Phoenix', nowMs: Date.parse('2026-07-20T12:00:00Z'), correctable: new Set(['line-3']),
+    correctTo: '/c/7k3m9q2tx/act/corrected', whole: true, ...more,
+  },
+})
+
+describe('the custody log as a table', () => {
+  it('sums the signed column to the net', async () => {
+    const table = byRole((await mount()).element, 'table', 'Custody log, newest first')
+    expect(table.querySelector('tfoot')?.textContent).toMatch(/\+17\.0\s*17\.0/)
+  })
+
+  it('draws a gap of 118 days without an event, and none between neighbouring days', async () => {
+    const table = byRole((await mount()).element, 'table', 'Custody log, newest first')
+    const gaps = [...table.querySelectorAll('strong')].map(each => each.textContent).filter(text => text?.includes('no event'))
+    expect(gaps).toEqual(['118 days, no event'])
+  })
+
+  it('draws no gap and no sum where lines are left out', async () => {
+    const table = byRole((await mount({ whole: false })).element, 'table', 'Custody log, newest first')
+    expect(table.textContent).not.toContain('no event')
+    expect(table.querySelector('tfoot')).toBeNull()
+  })
+
+  it('shows both times where an event was recorded late', async () => {
+    const table = byRole((await mount()).element, 'table', 'Custody log, newest first')
+    const row = [...table.querySelectorAll('tbody tr')].find(each => each.textContent?.includes('R-410A recovered'))!
+    expect(row.textContent).toContain('14 Jul 08:20')
+    expect(row.textContent).toContain('16 Jul 01:20')
+    expect(row.textContent).toContain('1 d 17 h late')
+  })
+
+  it('lets a correction and the line it mends point to one another', async () => {
+    const wrapper = await mount()
+    const table = byRole(wrapper.element, 'table', 'Custody log, newest first')
+    expect(byRole(table, 'link', 'corrects line 3').getAttribute('href')).toBe('#line-3')
+    expect(byRole(table, 'link', 'corrected by line 4').getAttribute('href')).toBe('#line-4')
+    expect(byRole(table, 'link', /Correct line 3/).getAttribute('href')).toBe('/c/7k3m9q2tx/act/corrected?event=line-3')
+  })
+
+  it('shows a net that is not known as a dash, never as nothing', async () => {
+    const table = byRole((await mount({ lines: [line(1, '2026-07-14T15:20:00Z', { kind: 'lost', details: { cause: 'leak' }, netBeforeGrams: 7711 })] })).element, 'table', 'Custody log, newest first')
+    const cells = [...table.querySelectorAll('tbody tr td')].map(cell => cell.textContent?.trim())
+    expect(cells.slice(-2)).toEqual(['–', '–'])
+  })
+})
