@@ -24,7 +24,8 @@ const FLOAT_NOISE = 1e-9
 export function isDeep(vacuum: Turn<'emptied'>['event']['details']['vacuum']): boolean {
   if (vacuum === undefined) return false
   if ('microns' in vacuum) return vacuum.microns <= DEEP_MICRONS
-  return (vacuum.barometerInHg ?? STANDARD_BAROMETER_INHG) - vacuum.inHg <= DEEP_INHG_FROM_BAROMETER + FLOAT_NOISE
+  // A gauge that shows far more than the barometer is wrong, and tells nothing of what is left.
+  return Math.abs((vacuum.barometerInHg ?? STANDARD_BAROMETER_INHG) - vacuum.inHg) <= DEEP_INHG_FROM_BAROMETER + FLOAT_NOISE
 }
 
 function emptiedDeep(turn: Turn<'emptied'>): void {

@@ -16,6 +16,12 @@ describe('a vacuum', () => {
     expect(isDeep({ inHg: 23.8, barometerInHg: 24.9 })).toBe(false)
     expect(isDeep(undefined)).toBe(false)
   })
+
+  it('is not believed from a gauge that shows more than the barometer allows', () => {
+    expect(isDeep({ inHg: 25.9, barometerInHg: 24.9 })).toBe(true)
+    expect(isDeep({ inHg: 26, barometerInHg: 24.9 })).toBe(false)
+    expect(isDeep({ inHg: 31 })).toBe(false)
+  })
 })
 
 describe('a cylinder emptied by a deep vacuum', () => {
