@@ -9,6 +9,7 @@ import type { Requalification } from '../requalification/requalification'
 import type { CapacityView, Missing } from './cylinderView'
 import type { Finding } from './finding'
 import { holdFinding } from './findings/holds'
+import { notEvacuatedFor } from './findings/mixing'
 import { urgencyOrder } from './findings/order'
 import { afterEnd, away } from './findings/record'
 import { retestOverdue, retestUnknown } from './findings/retest'
@@ -76,12 +77,20 @@ function refusalsOfFill(state: CylinderState, retest: Requalification, refrigera
   return [
     ...fit.filter(({ severity }) => severity === 'stop').map(finding => ({ ...finding, since: null })),
     ...state.standing.filter(({ code }) => code === 'second-refrigerant' || code === 'unknown-onto-known').map(standingFinding),
+    ...againstTraces(state, refrigerant),
     ...state.holds.map(holdFinding),
     ...(retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, 'stop')] : []),
     ...(retest.state === 'unknown' ? [retestUnknown()] : []),
     ...(where ? [away(where.at, where.since)] : []),
     ...(condemnedAt === null ? [] : [afterEnd(condemnedAt)]),
   ].sort(urgencyOrder)
+}
+
+// An empty cylinder keeps the traces of what was in it until a deep vacuum.
+function againstTraces({ contents, standing }: CylinderState, refrigerant: string | null): Finding[] {
+  if (!contents.nothingInIt || refrigerant === null || standing.some(({ code }) => code === 'second-refrigerant')) return []
+  const others = contents.knownSinceVacuum.filter(name => name !== refrigerant)
+  return others.length === 0 ? [] : [notEvacuatedFor(refrigerant, others)]
 }
 
 function liquidFullOf(state: CylinderState, name: string | null, exactLimitGrams: number | null, catalogue: Catalogue): CapacityView['liquidFull'] {

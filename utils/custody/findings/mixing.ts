@@ -9,6 +9,14 @@ export function secondRefrigerant(since: number | null): Finding {
   }
 }
 
+/** Another refrigerant has been in it, and only a deep vacuum makes way for this one. */
+export function notEvacuatedFor(refrigerant: string, others: readonly string[]): Finding {
+  return {
+    code: 'second-refrigerant', severity: 'stop', source: COMMON_PRACTICE, since: null,
+    text: `${others.join(' and ')} has been in it since its last deep vacuum. Empty it to a deep vacuum before ${refrigerant} goes in.`,
+  }
+}
+
 /** What nobody can name and what somebody can were put together. */
 export function unknownOntoKnown(since: number | null): Finding {
   return {

@@ -111,7 +111,7 @@ function fresh({ state, event }: Turn<'filled'>): Outcome {
     isFresh: true,
     refrigerant,
     condition: isDoubtful ? worse(condition, 'suspect') : condition,
-    raises: others.length > 0 ? 'second-refrigerant' : null,
+    raises: isDoubtful ? 'second-refrigerant' : null,
   }
 }
 

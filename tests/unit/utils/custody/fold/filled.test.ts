@@ -91,9 +91,22 @@ describe('a fill with a second refrigerant', () => {
     expect(lastFindings(...back, filled('R-22', 20))).toEqual([])
   })
 
-  it('at the tare of what was registered as a mixture leaves its own name suspect', () => {
+  it('is refused beforehand where the first one was taken out but never evacuated', () => {
+    const back = [
+      holding('R-22'), did('sent-for-reclaim', { shipmentId: SHIPMENT, gross: kg(15) }), did('reclaimed', { shipmentId: SHIPMENT }),
+      did('returned', { fromFirmId: SUPPLIER, gross: kg(12) }),
+    ]
+    const asked = (refrigerant: string, more: Parameters<typeof viewAfter>[0] = []) => viewAfter([...back, ...more], { askedRefrigerant: refrigerant }).capacity
+    expect(asked('R-134a')).toMatchObject({ refusals: [{ code: 'second-refrigerant', severity: 'stop' }], stopWeightGrams: null, roomGrams: null })
+    expect(asked('R-22')).toMatchObject({ refusals: [], stopWeightGrams: 28_000 })
+    expect(asked('R-134a', [did('emptied', { vacuum: { microns: 500 } })])).toMatchObject({ refusals: [], stopWeightGrams: 28_000 })
+  })
+
+  it('at the tare of what was registered as a mixture leaves its own name suspect, and stopped for what else was in it', () => {
     const story = [registered({ contents: { refrigerant: 'R-22', condition: 'mixed' }, gross: kg(15) }), filled('R-22', 20, { grossBefore: kg(12) })]
     expect(contentsAfter(...story)).toMatchObject({ refrigerant: 'R-22', condition: 'suspect' })
+    expect(lastFindings(...story)).toContain('second-refrigerant')
+    expect(viewAfter(story).capacity).toMatchObject({ stopWeightGrams: null, roomGrams: null })
   })
 
   it('is none after a deep vacuum', () => {
