@@ -32,9 +32,11 @@ export function bestRow(designation: string, cylinder: CylinderMark): FillingDen
   )
 }
 
-/** The service pressure of a cylinder: as marked, else as its specification implies, else null. */
+/** The service pressure of a cylinder: as marked, but never above the one that its specification fixes; null where neither is known. */
 export function markedPressurePsig(cylinder: CylinderMark): number | null {
-  return cylinder.servicePressurePsig ?? impliedServicePressurePsig(cylinder.spec)
+  const implied = impliedServicePressurePsig(cylinder.spec)
+  if (cylinder.servicePressurePsig === null || implied === null) return cylinder.servicePressurePsig ?? implied
+  return Math.min(cylinder.servicePressurePsig, implied)
 }
 
 /** Whether a specification is authorised for liquefied gases that no row names. Source: 49 CFR 173.304a(a)(1). */

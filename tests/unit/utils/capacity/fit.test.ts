@@ -73,6 +73,13 @@ describe('the specification', () => {
     expect(codes('R-124', { spec: 'DOT-4E', servicePressurePsig: 240 })).toEqual([])
   })
 
+  it('that fixes its pressure is not believed to stand more', () => {
+    // R-410A may reach 489.1 psig; a 4B240ET stands 5/4 of 240 psig, 300 psig.
+    expect(codes('R-410A', { spec: 'DOT-4B240ET', servicePressurePsig: 400 })).toEqual(['pressure-class'])
+    expect(codes('R-717', { spec: 'DOT-4AA480', servicePressurePsig: 479 })).toEqual(['pressure-class', 'toxic'])
+    expect(codes('R-22', { spec: 'DOT-4B240ET', servicePressurePsig: 400 })).toEqual([])
+  })
+
   it('takes a 3E without a mark as 1800 psig', () => {
     expect(codes('R-410A', { spec: 'DOT-3E', servicePressurePsig: null })).toEqual([])
     expect(codes('R-13', { spec: 'DOT-3E', servicePressurePsig: null })).toEqual([])
