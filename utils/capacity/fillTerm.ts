@@ -9,9 +9,9 @@ import type { FillTerm, TermStanding } from './types'
 export type HotBounds = { ceilingGrams: number, unsafeAboveGrams: number, unsafeBecause: string }
 
 /**
- * The bounds of a cylinder at 131 F: liquid-full and the ceiling below it for a liquid, 5/4 of the service pressure for a gas.
+ * The bounds of a cylinder when hot: liquid-full at 131 F and the ceiling below it for a liquid, the service pressure for a gas.
  *
- * Returns null where a row alone decides. Source: 49 CFR 173.304(b), 173.301a(d).
+ * Returns null where a row alone decides. Source: 49 CFR 173.304(b), 173.301a(c), (d).
  */
 export function hotBounds(input: RuleInput, answers: readonly RuleAnswer[]): HotBounds | null {
   const { designation } = input.refrigerant
@@ -29,7 +29,7 @@ export function hotBounds(input: RuleInput, answers: readonly RuleAnswer[]): Hot
   return {
     ceilingGrams: boundGrams,
     unsafeAboveGrams: boundGrams,
-    unsafeBecause: `unsafe for ${designation}: above 5/4 of the service pressure at 131 °F`,
+    unsafeBecause: `unsafe for ${designation}: its pressure would pass what the cylinder may stand`,
   }
 }
 

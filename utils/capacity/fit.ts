@@ -1,10 +1,10 @@
-import { kPaFromPsig, psigFromKPa } from '../quantity/pressure'
+import { psigFromKPa } from '../quantity/pressure'
 import { isFlammable, isToxic } from '../refrigerant/safety'
 import { hasLiquidAt, saturationAt } from '../refrigerant/saturation'
 import type { Catalogue, Refrigerant } from '../refrigerant/types'
 import type { RowFit } from './fillingDensities'
 import { fillingDensityRows, isLiquefiedGasSpec, markedPressurePsig, rowFit } from './fillingDensities'
-import { HOT_PRESSURE_FACTOR, hotDensityAtPressure } from './rules/hotPressure'
+import { HOT_PRESSURE_FACTOR, mostDensity } from './rules/hotPressure'
 import { HOT_REFERENCE_C } from './rules/ruleInput'
 import type { FitFinding, Stamp } from './types'
 
@@ -67,8 +67,9 @@ function hotPressureStop(marked: number, refrigerant: Refrigerant, catalogue: Ca
   const allowedPsig = HOT_PRESSURE_FACTOR * marked
   if (!hasLiquidAt(refrigerant, HOT_REFERENCE_C)) {
     const table = catalogue.supercritical.get(designation)
-    if (table && hotDensityAtPressure(table, kPaFromPsig(allowedPsig)) !== null) return null
-    return stopForPressure(`The service pressure of ${marked} psig is too low for ${designation}, a gas at 131 °F.`, source)
+    if (table && mostDensity(table, marked) !== null) return null
+    const gasSource = `49 CFR 173.301a(c), (d); pressure: ${refrigerant.source}`
+    return stopForPressure(`The service pressure of ${marked} psig is too low for ${designation}, a gas at 131 °F.`, gasSource)
   }
   const { bubblePressureKPa, relativeErrorPressure } = saturationAt(refrigerant, HOT_REFERENCE_C)
   const hotPsig = psigFromKPa(bubblePressureKPa * (1 + relativeErrorPressure))

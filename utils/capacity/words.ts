@@ -9,7 +9,7 @@ export const RULE_WORDS: Record<FillRule, string> = {
   'liquid-130F': 'liquid at 130 °F',
   'un-ratio': 'the UN filling ratio',
   'oily': 'oily refrigerant',
-  'hot-pressure': 'the pressure at 131 °F',
+  'hot-pressure': 'the pressure at 131 °F and at 70 °F',
 }
 
 /** How a rule stands beside the one that governs. */

@@ -7,7 +7,12 @@ import type { RuleFigure, RuleInput } from './ruleInput'
 import { HOT_REFERENCE_C } from './ruleInput'
 import { litresText } from './sumText'
 
-const SOURCE = '49 CFR 173.301a(d): pressure at 131 °F at most 5/4 of the service pressure'
+const HOT_SOURCE = '49 CFR 173.301a(d): pressure at 131 °F at most 5/4 of the service pressure'
+const COOL_SOURCE = '49 CFR 173.301a(c): pressure at 70 °F at most the service pressure'
+const BOTH_SOURCES = '49 CFR 173.301a(c), (d)'
+
+// 70 F as the tables of pressures have it. Units: C.
+const COOL_REFERENCE_C = 21.1
 
 /** The most a cylinder's pressure at 131 F may be, by its service pressure. Units: psig. Source: 49 CFR 173.301a(d). */
 export const HOT_PRESSURE_FACTOR = 1.25
@@ -16,31 +21,46 @@ export const HOT_PRESSURE_FACTOR = 1.25
 const DENSITY_STEP = 1e-6
 
 /**
- * The limit of a fluid that is a gas at 131 F: the weight at which its pressure reaches 5/4 of the service pressure.
+ * The limit of a fluid that is a gas at 131 F: the weight at which its pressure reaches 5/4 of the service pressure when
+ * hot, or the service pressure itself at 70 F where that is less.
  *
- * Source: 49 CFR 173.301a(d).
+ * Source: 49 CFR 173.301a(c), (d).
  */
 export function hotPressure(input: RuleInput): RuleFigure {
   const marked = markedPressurePsig(input.cylinder)
   if (marked === null) return none('the service pressure is not known')
   if (!input.supercritical) return none(`no pressures over fill density for ${input.refrigerant.designation}`)
-  const kPa = kPaFromPsig(HOT_PRESSURE_FACTOR * marked)
-  const density = hotDensityAtPressure(input.supercritical, kPa)
-  if (density === null) return none(`the service pressure of ${marked} psig is too low for ${input.refrigerant.designation}`)
+  const most = mostDensity(input.supercritical, marked)
+  if (most === null) return none(`the service pressure of ${marked} psig is too low for ${input.refrigerant.designation}`)
+  const at = most.isCool ? `${marked} psig at 70 °F` : `${HOT_PRESSURE_FACTOR} × ${marked} psig at 131 °F`
   return {
-    exactGrams: input.volumeLitres * density,
-    sum: `${litresText(input.volumeLitres)} × ${(density / 1000).toFixed(4)} kg/L (${HOT_PRESSURE_FACTOR} × ${marked} psig at 131 °F)`,
-    source: `${SOURCE}; pressure: ${input.supercritical.source}`,
+    exactGrams: input.volumeLitres * most.kgPerM3,
+    sum: `${litresText(input.volumeLitres)} × ${(most.kgPerM3 / 1000).toFixed(4)} kg/L (${at})`,
+    source: `${most.isCool ? COOL_SOURCE : HOT_SOURCE}; pressure: ${input.supercritical.source}`,
   }
 }
 
 /**
- * The density of what fills a cylinder at which its pressure at 131 F is a given one.
+ * The most that may be filled per volume of a gas by a service pressure, and whether the rule at 70 F sets it.
  *
- * Units: kPa absolute in, kg/m3 out; the last row of the table where the pressure is above it, null where below the first.
+ * Units: psig in, kg/m3 out; null where the service pressure is too low for any density of the table.
+ * Source: 49 CFR 173.301a(c), (d).
  */
-export function hotDensityAtPressure(table: SupercriticalTable, kPa: number): number | null {
-  const points = hotPressures(table)
+export function mostDensity(table: SupercriticalTable, markedPsig: number): { kgPerM3: number, isCool: boolean } | null {
+  const hot = densityAtPressure(table, HOT_REFERENCE_C, kPaFromPsig(HOT_PRESSURE_FACTOR * markedPsig))
+  const cool = densityAtPressure(table, COOL_REFERENCE_C, kPaFromPsig(markedPsig))
+  if (hot === null || cool === null) return null
+  return cool < hot ? { kgPerM3: cool, isCool: true } : { kgPerM3: hot, isCool: false }
+}
+
+/**
+ * The density of what fills a cylinder at which its pressure at a temperature of the table is a given one.
+ *
+ * Units: C and kPa absolute in, kg/m3 out; the last row of the table where the pressure is above it, null where below the
+ * first. While liquid and vapour share the cylinder the pressure stays the same: then the most that has it.
+ */
+export function densityAtPressure(table: SupercriticalTable, tC: number, kPa: number): number | null {
+  const points = pressuresAt(table, tC)
   const first = points[0]
   const last = points.at(-1)
   if (!first || !last || kPa < first.y) return null
@@ -55,8 +75,8 @@ export function hotDensityAtPressure(table: SupercriticalTable, kPa: number): nu
   return low
 }
 
-function hotPressures(table: SupercriticalTable): CurvePoint[] {
-  const column = table.tempsC.indexOf(HOT_REFERENCE_C)
+function pressuresAt(table: SupercriticalTable, tC: number): CurvePoint[] {
+  const column = table.tempsC.indexOf(tC)
   return table.rows.flatMap((row) => {
     const density = row[0]
     const kPa = row[column + 1]
@@ -65,5 +85,5 @@ function hotPressures(table: SupercriticalTable): CurvePoint[] {
 }
 
 function none(because: string): RuleFigure {
-  return { exactGrams: null, because, source: SOURCE }
+  return { exactGrams: null, because, source: BOTH_SOURCES }
 }
