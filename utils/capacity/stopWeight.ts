@@ -22,6 +22,15 @@ export function stopWeight(exactLimitGrams: number, exactTareGrams: number): { s
   return { stopWeightGrams: Math.floor(exactStopWeightGrams), exactStopWeightGrams }
 }
 
+// What a scale's division is rounded by before it is shown as a stop weight: filled to that, a cylinder is at its limit.
+const CONVERSION_NOISE_GRAMS = 0.5
+
+/** By how much a net lies above a limit, both unrounded; 0 where it does not by more than the noise of conversion. Units: grams. */
+export function excessGrams(exactLimitGrams: number, exactNetGrams: number): number {
+  const excess = exactNetGrams - exactLimitGrams
+  return excess > CONVERSION_NOISE_GRAMS ? excess : 0
+}
+
 /** What may still go in: fill limit less net, negative when overfilled. Units: grams. */
 export function roomGrams(limitGrams: number, netGrams: number): number {
   return limitGrams - netGrams

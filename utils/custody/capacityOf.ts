@@ -1,7 +1,7 @@
 import { fillLimit } from '../capacity/fillLimit'
 import { fitFindings } from '../capacity/fit'
 import { liquidFullTemperature } from '../capacity/liquidFull'
-import { stopWeight } from '../capacity/stopWeight'
+import { excessGrams, roomGrams, stopWeight } from '../capacity/stopWeight'
 import { DEFAULT_FILL_POLICY, type FillPolicy } from '../capacity/types'
 import { exactGrams } from '../quantity/mass'
 import type { Catalogue } from '../refrigerant/types'
@@ -56,13 +56,22 @@ export function capacityOf(state: CylinderState, retest: Requalification, contex
     fillLimitGrams: limit.fillLimitGrams,
     stopWeightGrams: stop?.stopWeightGrams ?? null,
     exactStopWeightGrams: stop?.exactStopWeightGrams ?? null,
-    roomGrams: exact === null || limit.fillLimitGrams === null || contents.netGrams === null ? null : limit.fillLimitGrams - contents.netGrams,
+    roomGrams: exact === null ? null : roomOf(state, exact),
     liquidFull: liquidFullOf(state, forRefrigerant, limit.exactLimitGrams, catalogue),
     share: Math.min(policy.shareThousandths, DEFAULT_FILL_POLICY.shareThousandths) / 1000,
     terms: limit.terms,
     missing,
     refusals,
   }
+}
+
+// Whole grams of tare and reading may add up to one above the limit: at its stop weight a cylinder is full, not overfilled.
+function roomOf({ contents }: CylinderState, exactLimitGrams: number): number | null {
+  const { netGrams, nothingInIt, lastKnownNetGrams } = contents
+  if (netGrams === null) return null
+  const room = roomGrams(Math.floor(exactLimitGrams), netGrams)
+  const exactNetGrams = nothingInIt ? netGrams : lastKnownNetGrams ?? netGrams
+  return room < 0 && excessGrams(exactLimitGrams, exactNetGrams) === 0 ? 0 : room
 }
 
 const NO_STAMP = {

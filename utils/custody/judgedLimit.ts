@@ -1,11 +1,12 @@
 import { fillLimit } from '../capacity/fillLimit'
+import { excessGrams } from '../capacity/stopWeight'
 import type { FillPolicy } from '../capacity/types'
 import type { Catalogue } from '../refrigerant/types'
 import type { CylinderState } from './state'
 
-/** The net that an overfill is judged by: the one known now, else the last that was; null where nothing is in it. */
+/** The net that an overfill is judged by: the one known now, else the last that was, unrounded; null where nothing is in it. */
 export function judgedNetGrams({ contents }: CylinderState): number | null {
-  return contents.nothingInIt ? null : contents.netGrams ?? contents.lastKnownNetGrams
+  return contents.nothingInIt ? null : contents.lastKnownNetGrams
 }
 
 /**
@@ -19,20 +20,22 @@ export function judgedLimitGrams(
 ): number | null {
   const { stamp, tare, contents, lastPutInAt } = state
   if (stamp === null || tare === null || contents.nothingInIt) return null
-  const policies = lastPutInAt === null ? [policyNow] : [policyNow, policyAt(lastPutInAt)]
+  const policies = lastPutInAt === null ? [policyNow] : [policyNow, underCeilingOf(policyNow, policyAt(lastPutInAt))]
   const limitsOf = (names: readonly string[]) => names.flatMap((refrigerant) => {
     const answers = policies.map(policy => fillLimit({
       stamp, refrigerant, condition: 'suspect', burnt: contents.burnt || contents.condition === 'burnt', policy, catalogue, tareGrams: tare.exactGrams,
     }))
     const known = answers.flatMap(({ exactLimitGrams }) => exactLimitGrams ?? [])
-    if (known.length === 0) return []
-    const ceiling = answers[0]?.terms.find(term => term.rule === 'hot-ceiling')?.limitGrams ?? Infinity
-    return [Math.min(Math.max(...known), ceiling)]
+    return known.length === 0 ? [] : [Math.max(...known)]
   })
   const named = contents.condition === 'mixed' || contents.condition === 'unknown' ? null : contents.refrigerant
   const ofPresent = named === null ? [] : limitsOf([named])
   const limits = ofPresent.length > 0 ? ofPresent : limitsOf(contents.knownSinceVacuum)
   return limits.length === 0 ? null : Math.min(...limits)
+}
+
+function underCeilingOf(policyNow: FillPolicy, policy: FillPolicy): FillPolicy {
+  return { ...policy, ceilingThousandths: Math.min(policy.ceilingThousandths, policyNow.ceilingThousandths) }
 }
 
 /**
@@ -44,5 +47,5 @@ export function overfillGrams(state: CylinderState, limitGrams: number | null): 
   const net = judgedNetGrams(state)
   if (net === null) return 0
   if (limitGrams === null) return state.overfilledAt === null ? 0 : null
-  return Math.max(0, net - limitGrams)
+  return excessGrams(limitGrams, net)
 }

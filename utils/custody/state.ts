@@ -24,7 +24,7 @@ export interface ContentsState {
   shares: Share[]
   /** Every refrigerant known to have been in it since the last deep vacuum, the last one last. */
   knownSinceVacuum: string[]
-  /** The net when it was last known; null once nothing is in it. */
+  /** The net when it was last known, unrounded where a weight told it; null once nothing is in it. */
   lastKnownNetGrams: number | null
   /** Came back from a reclaimer: a weight at its tare would show that nothing is in it. */
   backFromReclaim: boolean

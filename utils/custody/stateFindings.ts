@@ -8,7 +8,7 @@ import { codeOnTwo, notRegistered } from './findings/record'
 import { condemned, oldTareOnLabel } from './findings/retest'
 import { standingFinding } from './findings/standing'
 import { nearlyFull, overfill, weightNotKnown } from './findings/weight'
-import { judgedLimitGrams, overfillGrams } from './judgedLimit'
+import { judgedLimitGrams, judgedNetGrams, overfillGrams } from './judgedLimit'
 import type { CylinderState, StandingCode } from './state'
 
 /** What the standing findings depend on beside the cylinder; nothing of it is the date. */
@@ -47,7 +47,7 @@ function ofWeight(state: CylinderState, fillLimitGrams: number | null, context: 
   const notKnown = contents.netGrams === null ? [weightNotKnown(contents.asOf)] : []
   if (excess !== 0) return [overfill(excess, contents.netGrams === null, state.overfilledAt), ...notKnown]
   if (contents.nothingInIt || contents.netGrams === null || fillLimitGrams === null) return notKnown
-  return contents.netGrams >= fillLimitGrams * NEARLY_FULL_RATIO ? [nearlyFull(fillLimitGrams - contents.netGrams)] : []
+  return contents.netGrams >= fillLimitGrams * NEARLY_FULL_RATIO ? [nearlyFull(fillLimitGrams - (judgedNetGrams(state) ?? contents.netGrams))] : []
 }
 
 function ofFit({ stamp, contents, filledHere }: CylinderState, catalogue: Catalogue): Finding[] {

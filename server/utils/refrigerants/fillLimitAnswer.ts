@@ -3,7 +3,7 @@ import type { FillPolicy, Stamp } from '~~/utils/capacity/types'
 import type { FillLimitAnswer, FillLimitQuery } from '~~/utils/contract/refrigerants'
 import { capacityOf } from '~~/utils/custody/capacityOf'
 import { initialState, type CylinderState } from '~~/utils/custody/state'
-import { readingGrams, type MassReading } from '~~/utils/quantity/mass'
+import { exactGrams, readingGrams, type MassReading } from '~~/utils/quantity/mass'
 import { scaleAccuracyGrams } from '~~/utils/quantity/scale'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
 import type { Requalification } from '~~/utils/requalification/requalification'
@@ -42,6 +42,7 @@ function stateOf(query: FillLimitQuery, netGrams: number | null): CylinderState 
       burnt: query.condition === 'burnt',
       nothingInIt: netGrams === null,
       netGrams,
+      lastKnownNetGrams: query.gross && exactTareGrams !== null ? Math.max(0, exactGrams(query.gross) - exactTareGrams) : netGrams,
     },
   }
 }

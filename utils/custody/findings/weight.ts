@@ -15,10 +15,13 @@ export function overfill(excessGrams: number | null, isLastKnownWeight: boolean,
   }
 }
 
+// A limit loses up to a gram to whole grams, and a reading at the stop weight may lie half a gram above it.
+const AT_LIMIT_GRAMS = 1.5
+
 /** It holds nine tenths of its fill limit or more. */
 export function nearlyFull(roomGrams: number): Finding {
-  const text = roomGrams >= 0
-    ? `Nearly full: room for ${massWords(roomGrams, 'down')}. Watch the scale, or take another cylinder.`
+  const text = roomGrams >= -AT_LIMIT_GRAMS
+    ? `Nearly full: room for ${massWords(Math.max(0, roomGrams), 'down')}. Watch the scale, or take another cylinder.`
     : `Over today's fill limit by ${massWords(-roomGrams, 'up')}, within the rule it was filled by. Put nothing more in.`
   return { code: 'nearly-full', severity: 'caution', text, source: COMMON_PRACTICE, since: null }
 }

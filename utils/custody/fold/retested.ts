@@ -72,6 +72,7 @@ function judgeGrossAnew(turn: Turn<'retested'>, tareGrams: number): void {
   const accuracy = contents.uncertaintyGrams ?? scaleAccuracyGrams(contents.grossGrams)
   if (net < -accuracy) turn.findings.push(belowTare(-net, isConfirmed(turn, 'weigh-again')))
   changeNet(turn, net < -accuracy ? null : Math.max(0, net), 'tare-change')
+  if (contents.netGrams !== null) contents.lastKnownNetGrams = Math.max(0, contents.grossGrams - tareGrams)
   contents.basis = contents.netGrams === null ? 'unknown' : 'weighed'
   contents.uncertaintyGrams = contents.netGrams === null ? null : accuracy
   contents.asOf = turn.event.effectiveAt

@@ -1,5 +1,5 @@
 import { volumeLitres } from '../../capacity/rules/ruleInput'
-import { readingGrams, type MassReading } from '../../quantity/mass'
+import { exactGrams, readingGrams, type MassReading } from '../../quantity/mass'
 import { scaleAccuracyGrams } from '../../quantity/scale'
 import { hasLiquidAt, saturationAt } from '../../refrigerant/saturation'
 import { aboveVolume, belowTare } from '../findings/weight'
@@ -11,6 +11,8 @@ export interface ScaleReading {
   accuracyGrams: number
   /** Gross less tare, signed; null without a tare. */
   aboveTareGrams: number | null
+  /** The same of the reading and the tare as they were entered. */
+  exactAboveTareGrams: number | null
   /** Never negative: null without a tare, and where the scale shows less than the tare allows for. */
   netGrams: number | null
   isBelowTare: boolean
@@ -25,7 +27,10 @@ export function readScale(turn: Turn, gross: MassReading, scaleId?: string): Sca
   const accuracyGrams = scaleAccuracyGrams(grossGrams, scaleId === undefined ? undefined : turn.context.scales.get(scaleId))
   const { tare } = turn.state
   if (tare === null) {
-    return { grossGrams, accuracyGrams, aboveTareGrams: null, netGrams: null, isBelowTare: false, isAtTare: false, isAboveTare: false }
+    return {
+      grossGrams, accuracyGrams, aboveTareGrams: null, exactAboveTareGrams: null, netGrams: null,
+      isBelowTare: false, isAtTare: false, isAboveTare: false,
+    }
   }
   const aboveTareGrams = grossGrams - Math.round(tare.exactGrams)
   const isBelowTare = aboveTareGrams < -accuracyGrams
@@ -33,6 +38,7 @@ export function readScale(turn: Turn, gross: MassReading, scaleId?: string): Sca
     grossGrams,
     accuracyGrams,
     aboveTareGrams,
+    exactAboveTareGrams: exactGrams(gross) - tare.exactGrams,
     netGrams: isBelowTare ? null : Math.max(0, aboveTareGrams),
     isBelowTare,
     isAtTare: Math.abs(aboveTareGrams) <= accuracyGrams,
@@ -47,6 +53,7 @@ export function restOn(turn: Turn, reading: ScaleReading): void {
   contents.basis = isKnown ? 'weighed' : 'unknown'
   contents.grossGrams = reading.grossGrams
   contents.uncertaintyGrams = isKnown ? reading.accuracyGrams : null
+  if (isKnown && !contents.nothingInIt) contents.lastKnownNetGrams = Math.max(0, reading.exactAboveTareGrams ?? 0)
   contents.asOf = turn.event.effectiveAt
 }
 

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import {
   codes, contentsAfter, CUSTOMER, DAY, did, filled, kg, lastFindings, lastMovements, registered, SHIPMENT, STAMP, START, SUPPLIER, viewAfter, weighed,
 } from '~~/tests/helpers/custody'
+import { ceilToDivision, floorToDivision, type MassReading } from '~~/utils/quantity/mass'
 
 const holding = (refrigerant: string, grossKg = 15) => registered({ contents: { refrigerant, condition: 'clean' }, gross: kg(grossKg) })
 
@@ -179,6 +180,29 @@ describe('an overfilled cylinder', () => {
     expect(after(26.4)).toEqual(['nearly-full'])
     expect(after(28)).toEqual(['nearly-full'])
     expect(after(28.001)).toEqual(['overfill'])
+  })
+
+  it('is not one filled to the very stop weight that was shown', () => {
+    // WC 24.0 lb, TW 15.0 lb: 19.2 + 15.0 = 34.2 lb. In whole grams 15,513 - 6,804 = 8,709, a hair above 19.2 lb = 8,708.97 g.
+    const inPounds = registered({ stamp: { ...STAMP, tareWeight: { unit: 'lb', value: 15 }, waterCapacity: { unit: 'lb', value: 24 } } })
+    const filledTo = (value: number) => viewAfter([inPounds, filled('R-22', 0, { grossAfter: { unit: 'lb', value } })])
+    expect(codes(filledTo(34.2))).toEqual(['nearly-full'])
+    expect(filledTo(34.2).capacity.roomGrams).toBe(0)
+    expect(filledTo(34.2).findings[0]?.text.replaceAll('\u00A0', ' ')).toContain('room for 0.0 lb (0.00 kg)')
+    expect(codes(filledTo(34.3))).toEqual(['overfill'])
+    expect(codes(viewAfter([inPounds, filled('R-22', 0, { grossAfter: { unit: 'lb', value: 34.2 } }), did('lost', { cause: 'hose' })]))).toEqual(['weight-not-known'])
+  })
+
+  it.each(['lb', 'lb-oz', 'kg'] as const)('is never one at the stop weight in %s, and always one a division above', (unit) => {
+    for (let tenths = 200; tenths < 600; tenths += 7) {
+      const stamp = { ...STAMP, tareWeight: { unit: 'lb' as const, value: (tenths % 97 + 100) / 10 }, waterCapacity: { unit: 'lb' as const, value: tenths / 10 } }
+      for (const name of ['R-22', 'R-32']) {
+        const stop = viewAfter([registered({ stamp })], { askedRefrigerant: name }).capacity.exactStopWeightGrams!
+        const after = (grossAfter: MassReading) => codes(viewAfter([registered({ stamp }), filled(name, 0, { grossAfter })]))
+        expect(after(floorToDivision(stop, unit))).toEqual(['nearly-full'])
+        expect(after(ceilToDivision(stop + 1, unit))).toEqual(['overfill'])
+      }
+    }
   })
 
   it('is recorded as a fact, with its excess and negative room', () => {
