@@ -3,6 +3,11 @@ import { rmSync } from 'node:fs'
 import { connect, createServer, type Server } from 'node:net'
 import { tmpdir } from 'node:os'
 import { join, resolve } from 'node:path'
+import { setTimeout as wait } from 'node:timers/promises'
+
+/** A server that is being restarted may still be on its way out: how long, and how often, it is looked for again. */
+const PATIENCE_MS = 2_000
+const LOOK_EVERY_MS = 100
 
 /** A longer socket path is refused by the system (108 bytes on Linux). */
 const LONGEST_SOCKET_PATH = 100
@@ -15,7 +20,7 @@ const LONGEST_SOCKET_PATH = 100
  */
 export async function holdDatabaseFile(file: string): Promise<Server> {
   const path = socketPath(file)
-  if (await answers(path)) throw new Error(`Another process is serving ${file}. Stop it first: a local database file has one server.`)
+  if (await staysHeld(path)) throw new Error(`Another process is serving ${file}. Stop it first: a local database file has one server.`)
   rmSync(path, { force: true })
   const server = createServer(socket => socket.end())
   await new Promise<void>((done, failed) => {
@@ -24,6 +29,14 @@ export async function holdDatabaseFile(file: string): Promise<Server> {
   })
   server.unref()
   return server
+}
+
+async function staysHeld(path: string): Promise<boolean> {
+  for (let waited = 0; await answers(path); waited += LOOK_EVERY_MS) {
+    if (waited >= PATIENCE_MS) return true
+    await wait(LOOK_EVERY_MS)
+  }
+  return false
 }
 
 function socketPath(file: string): string {
