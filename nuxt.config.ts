@@ -36,6 +36,7 @@ export default defineNuxtConfig({
   // Without a shared/ folder, and with utils/ imported by path on both sides.
   compatibilityDate: '2026-01-01',
   nitro: {
+    compressPublicAssets: { gzip: true, brotli: true },
     esbuild: { options: { target: 'es2022' } },
     typescript: { tsConfig: { include: ['../types/auth.d.ts'] } },
     hooks: {

@@ -33,8 +33,8 @@ export async function addMember(admin: Member, name: string, roles: Role[], more
 }
 
 /** The token in the newest letter to an address. */
-export async function invitationToken(admin: Member, email: string): Promise<string> {
-  const { body } = await admin.client.get<MailAnswer>('/api/mail')
+export async function invitationToken({ client }: Pick<Member, 'client'>, email: string): Promise<string> {
+  const { body } = await client.get<MailAnswer>('/api/mail')
   const letter = body.items.find(line => line.recipient === email)
   return /invitation\/([\w-]{43})/.exec(letter?.body ?? '')?.[1] ?? ''
 }

@@ -21,7 +21,7 @@ export function castTables({ read }: Database, cast: Cast, passwordHash: string,
   ]
 }
 
-/** The shipments and test lots as they stand at the story's end, the latest of each still a draft. */
+/** The shipments and test lots as they stand at the story's end; none is a draft. */
 export function listTables({ read }: Database, stage: Stage): InStatement[] {
   const sent = stage.shipments.filter(one => one.cylinders.length > 0)
   const lots = stage.lots.filter(one => one.cylinders.length > 0)

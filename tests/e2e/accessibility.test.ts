@@ -1,0 +1,142 @@
+import type { Browser, BrowserContext, Page } from 'playwright-core'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { FORM_KINDS } from '../../utils/custody/draft/formKinds'
+import { launchBrowser, listenForErrors } from '../helpers/browser'
+import { demoFleet, type DemoFleet } from '../helpers/demoFleet'
+import { seriousOn, sidewaysScroll, targetsLowerThan } from '../helpers/pageChecks'
+import { startServer, type TestServer } from '../helpers/server'
+import { projectFiles } from '../helpers/sources'
+import { DESK, PHONE, visit } from '../helpers/visit'
+
+const NARROW = { width: 320, height: 800 }
+/** Row height of a screen that is used with gloves, in CSS px. */
+const THUMB = 48
+
+type Who = keyof DemoFleet['people'] | 'nobody'
+
+/** A page as somebody meets it; `empty` is a server that is not set up yet. */
+interface Screen { as: Who, at: (demo: DemoFleet) => string, empty?: true, /** The browser says in its console that the page answered so. */ answers?: number }
+
+const [technician, manager, admin, auditor, warehouse] = ['technician', 'manager', 'admin', 'auditor', 'warehouse'] as const
+
+/** Every page by its file: who would open it, and where it has states that differ, each of them. */
+const SCREENS: Record<string, Screen[]> = {
+  'account.vue': [{ as: technician, at: () => '/account' }],
+  'c/[ref]/index.vue': [
+    { as: 'nobody', at: demo => `/c/${demo.codes.usual}` },
+    { as: technician, at: demo => `/c/${demo.codes.usual}` },
+    { as: technician, at: demo => `/c/${demo.codes.empty}` },
+    { as: technician, at: demo => `/c/${demo.codes.empty}?refrigerant=R-22` },
+    { as: technician, at: demo => `/c/${demo.codes.overfilled}` },
+    { as: technician, at: demo => `/c/${demo.codes.onTwo}` },
+    { as: technician, at: demo => `/c/${demo.codes.onNone}`, answers: 404 },
+    { as: manager, at: demo => `/c/${demo.codes.usual}` },
+  ],
+  'c/[ref]/act/[kind].vue': [
+    ...FORM_KINDS.map(kind => ({ as: warehouse, at: (demo: DemoFleet) => `/c/${demo.codes.usual}/act/${kind}` })),
+    { as: 'trainee', at: demo => `/c/${demo.codes.usual}/act/weighed` },
+  ],
+  'c/[ref]/act/corrected.vue': [{ as: manager, at: demo => `/c/${demo.codes.usual}/act/corrected?event=${demo.event}` }],
+  'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
+  'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }],
+  'fleet/register.vue': [{ as: warehouse, at: () => '/fleet/register' }],
+  'invitation/[token].vue': [
+    { as: 'nobody', at: demo => `/invitation/${demo.invitation}` },
+    { as: 'nobody', at: () => `/invitation/${'x'.repeat(43)}` },
+  ],
+  'labels.vue': [{ as: warehouse, at: () => '/labels' }],
+  'log.vue': [{ as: auditor, at: () => '/log' }],
+  'mail.vue': [{ as: admin, at: () => '/mail' }],
+  'people.vue': [{ as: admin, at: () => '/people' }],
+  'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
+  'retests/[id].vue': [...(['draft', 'sent', 'back'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/retests/${demo.lots[state]}` }))],
+  'retests/index.vue': [{ as: manager, at: () => '/retests' }],
+  'scan.vue': [{ as: technician, at: () => '/scan' }],
+  'setup.vue': [{ as: 'nobody', at: demo => `/setup?token=${demo.setUpToken}`, empty: true }, { as: 'nobody', at: () => '/setup' }],
+  'shipments/[id].vue': [...(['draft', 'dispatched', 'received'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
+  'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
+  'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
+  'van.vue': [{ as: technician, at: () => '/van' }],
+}
+
+/** Pages that show nothing, and why. */
+const WITHOUT_SCREEN: Record<string, string> = {
+  'index.vue': 'leads on to the first screen of whoever opens it',
+}
+
+let server: TestServer
+let empty: TestServer
+let browser: Browser
+let demo: DemoFleet
+
+beforeAll(async () => {
+  [server, empty, browser] = await Promise.all([startServer({ env: { COLLARBOOK_DEMO: '1' } }), startServer(), launchBrowser()])
+  demo = await demoFleet(server, empty.setUpToken())
+})
+afterAll(async () => {
+  await browser?.close()
+  await Promise.all([server?.stop(), empty?.stop()])
+})
+
+async function opened({ as, at, empty: onEmpty, answers }: Screen, viewport: typeof PHONE): Promise<{ page: Page, context: BrowserContext, said: string[] }> {
+  const client = as === 'nobody' ? null : demo.people[as]
+  const context = await visit(browser, client, { viewport, reducedMotion: 'reduce', colorScheme: 'light' })
+  const said = listenForErrors(context)
+  const page = await context.newPage()
+  const address = `${(onEmpty ? empty : server).baseUrl}${at(demo)}`
+  const answer = await page.goto(address, { waitUntil: 'networkidle' })
+  expect(answer?.status(), 'the page itself, and no word that something broke').toBe(answers ?? 200)
+  expect(page.url(), 'the page itself, and no other that it led on to').toBe(address)
+  return { page, context, said }
+}
+
+/** Everything that is wrong with a page at a width, in light and then in dark. */
+async function wrongWith(screen: Screen, viewport: typeof PHONE): Promise<string[]> {
+  const { page, context, said } = await opened(screen, viewport)
+  const wrong: string[] = []
+  const note = (where: string, found: string[]) => wrong.push(...found.map(one => `${where}: ${one}`))
+  note('light', await seriousOn(page))
+  if (viewport === PHONE) {
+    if (await page.locator('.for-thumbs').count() > 0) note('too low for a thumb', await targetsLowerThan(page, THUMB))
+    await page.setViewportSize(NARROW)
+    note('at 320 px', await sidewaysScroll(page))
+    await page.setViewportSize(PHONE)
+  }
+  await page.emulateMedia({ colorScheme: 'dark' })
+  await page.locator('html.dark').waitFor({ timeout: 5_000 })
+  note('dark', await seriousOn(page, 'colours'))
+  note('console', said.filter(line => !(screen.answers && line.includes(`status of ${screen.answers}`))))
+  await context.close()
+  return wrong
+}
+
+describe('every page', () => {
+  it('has a screen here, or says why it shows nothing', () => {
+    const pages = projectFiles(/\.vue$/, 'pages').map(path => path.replace('pages/', ''))
+    expect([...Object.keys(SCREENS), ...Object.keys(WITHOUT_SCREEN)].sort()).toEqual(pages.sort())
+  })
+
+  it.each(Object.entries(SCREENS).flatMap(([file, screens]) => screens.map((screen, index) => ({ file, screen, who: screen.as, nth: index + 1 }))))(
+    'can be read and pressed by everybody on a phone and at a desk, in light and in dark, and says nothing of errors: $file $nth, for $who',
+    async ({ screen }) => {
+      const [phone, desk] = await Promise.all([wrongWith(screen, PHONE), wrongWith(screen, DESK)])
+      expect({ phone, desk }).toEqual({ phone: [], desk: [] })
+    })
+})
+
+describe('the checks themselves', () => {
+  const WORN = '<html lang="en"><title>Worn</title><body style="margin:0"><main><h1>Worn</h1>'
+    + '<p style="color:#bbb;background:#fff">pale words</p><button style="height:20px">Go</button>'
+    + '<p>in a <a href="#x">sentence</a> of words</p><div style="width:900px">wide</div></main></body></html>'
+
+  it('find pale words, a low button and a page that is too wide', async () => {
+    const context = await visit(browser, null)
+    const page = await context.newPage()
+    await page.setContent(WORN)
+    expect((await seriousOn(page)).join()).toContain('color-contrast')
+    expect((await seriousOn(page, 'colours')).join()).toContain('color-contrast')
+    expect(await targetsLowerThan(page, THUMB)).toEqual(['BUTTON "Go": 20 px'])
+    expect(await sidewaysScroll(page)).toEqual(['the page: 900 px in 412'])
+    await context.close()
+  })
+})
