@@ -1,21 +1,31 @@
 import { useWedge } from '~~/composables/useWedge'
+import { usePreferencesStore } from '~~/stores/preferences'
 import { useSessionStore } from '~~/stores/session'
 import { navigationFor } from '~~/utils/access/navigation'
 import { readScannedText } from '~~/utils/label/code'
 
+const LONGEST_BURST_GAP_MS = 60
+
 /**
  * What the desk's frame asks of every page: who is signed in, where one may go, and what a scanned or typed code does.
  *
- * Handed to the layout whole: `<NuxtLayout name="desk" v-bind="frame">`.
+ * A page with a list or a form of its own takes what a hand scanner reads; elsewhere it opens the cylinder. Handed to
+ * the layout whole: `<NuxtLayout name="desk" v-bind="frame">`.
  */
-export function useDeskFrame(title: string | (() => string)) {
+export function useDeskFrame(title: string | (() => string), onScan?: (code: string) => unknown) {
   const session = useSessionStore()
+  const preferences = usePreferencesStore()
+  let lastKeyAt = -Infinity
   useHead({ title })
-  useWedge(code => navigateTo(`/c/${code.toLowerCase()}`))
+  useWedge(code => void (onScan ?? openCylinder)(code))
+
+  function openCylinder(code: string) {
+    return navigateTo(`/c/${code.toLowerCase()}`)
+  }
 
   function openCode(typed: string) {
     const found = readScannedText(typed)
-    return navigateTo(found ? `/c/${found.code.toLowerCase()}` : { path: '/fleet', query: { q: typed } })
+    return found ? openCylinder(found.code) : navigateTo({ path: '/fleet', query: { q: typed } })
   }
 
   async function signOut() {
@@ -24,7 +34,10 @@ export function useDeskFrame(title: string | (() => string)) {
   }
 
   function key(event: KeyboardEvent) {
-    if (event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey) return
+    const isBurst = event.timeStamp - lastKeyAt < LONGEST_BURST_GAP_MS
+    lastKeyAt = event.timeStamp
+    // An address in a hand scanner's burst has slashes too.
+    if (isBurst || !preferences.keyShortcuts || event.key !== '/' || event.ctrlKey || event.metaKey || event.altKey) return
     if (takesText(event.target)) return
     const field = document.querySelector<HTMLInputElement>('[data-search]') ?? document.querySelector<HTMLInputElement>('[data-code-field]')
     if (!field) return

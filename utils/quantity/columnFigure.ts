@@ -2,7 +2,7 @@ import { formatFigure, formatMass, type MassRounding, type MassUnit } from './ma
 
 /** The unit as a column's head names it; pounds and ounces stand in the cells themselves. */
 export function columnUnit(unit: MassUnit): string {
-  return unit === 'lb-oz' ? 'lb and oz' : unit
+  return unit === 'lb-oz' ? 'lb oz' : unit
 }
 
 /** A mass as it stands under a head that names the unit. Rounding: as asked for. */
