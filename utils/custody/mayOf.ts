@@ -36,5 +36,6 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
 
 function reason({ allowed, because, missing }: PlanAnswer): string | null {
   if (allowed) return null
+  if (because.length === 0 && missing.length === 0) return 'No rule has a figure for this refrigerant in this cylinder.'
   return because[0]?.text ?? `Not known: ${missing.map(input => MISSING_WORDS[input]).join(', ')}.`
 }

@@ -19,12 +19,13 @@ export function mayTake(view: Planned): PlanAnswer {
   return answer([...standing(view, 'overfill'), ...gone(view), ...ended(view)])
 }
 
-/** Whether refrigerant may be put in. */
+/** Whether refrigerant may be put in: never where no rule gives a weight to stop at. */
 export function mayFill(view: Planned): PlanAnswer {
-  const { refusals, missing, roomGrams } = view.capacity
+  const { refusals, missing, roomGrams, stopWeightGrams } = view.capacity
   const isFull = roomGrams !== null && roomGrams <= 0
   const full = [...standing(view, 'overfill'), ...(isFull ? standing(view, 'nearly-full') : [])]
-  return answer([...full, ...refusals], missing.filter(input => input !== 'weight'))
+  const answered = answer([...full, ...refusals], missing.filter(input => input !== 'weight'))
+  return { ...answered, allowed: answered.allowed && stopWeightGrams !== null }
 }
 
 /** Whether refrigerant may be drawn from it. */

@@ -35,6 +35,15 @@ describe('a cylinder may be filled', () => {
     expect(plan(mayFill, [...full, filled('R-134a', 21)])).toEqual(['second-refrigerant', 'refrigerant'])
     expect(plan(mayFill, [...full, condemned])).toEqual(['after-end'])
   })
+
+  it('not where no rule has a figure, though nothing else speaks against it', () => {
+    // R-428A has no filling ratio by the UN rule: its table ends at 55 C, below the 60 C that the ratio asks for.
+    const unRatio = { shareThousandths: 800, ceilingThousandths: 950, options: { liquid130F: false, unRatio: true } }
+    const shown = viewAfter(start, { askedRefrigerant: 'R-428A', policyNow: unRatio })
+    expect(shown.capacity).toMatchObject({ fillLimitGrams: null, stopWeightGrams: null, refusals: [], missing: [] })
+    expect(mayFill(shown)).toEqual({ allowed: false, because: [], missing: [] })
+    expect(shown.mayNot).toContainEqual({ kind: 'filled', because: 'No rule has a figure for this refrigerant in this cylinder.' })
+  })
 })
 
 describe('a cylinder may be taken along', () => {
