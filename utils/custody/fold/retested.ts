@@ -18,7 +18,8 @@ export function retested(turn: Turn<'retested'>): void {
   if (method !== 'visual') fillWithWater(turn)
   if (result === 'passed') {
     state.marks.push({ month, method, ...(suffix === undefined ? {} : { suffix }), enteredAt: event.effectiveAt })
-    lift(turn, 'rejected', 'damaged', 'tare-loss')
+    // An outside look tells nothing of the strength of steel that failed or was hurt (49 CFR 180.205(d), (h)).
+    if (method !== 'visual') lift(turn, 'rejected', 'damaged', 'tare-loss')
   }
   if (result === 'rejected') holdBack(turn, 'rejected')
   if (result === 'condemned') state.condemnedAt ??= event.effectiveAt

@@ -24,10 +24,10 @@ describe('refrigerant lost', () => {
 
   it('keeps its hold until a test has passed', () => {
     const leaking = [...full, did('lost', { cause: 'leak', grossAfter: kg(19) })]
-    const retested = (result: 'passed' | 'rejected') => did('retested', { month: '2026-07', method: 'visual', result, requalifierId: REQUALIFIER })
-    expect(viewAfter([...leaking, retested('rejected')]).holds).toEqual(['damaged', 'rejected'])
-    expect(viewAfter([...leaking, retested('passed')]).holds).toEqual([])
-    expect(codes(viewAfter([...leaking, retested('passed')]))).toEqual([])
+    const retested = (result: 'passed' | 'rejected') => did('retested', { month: '2026-07', method: 'volumetric', result, requalifierId: REQUALIFIER })
+    expect(viewAfter([...leaking, retested('rejected')]).holds).toEqual(['damaged', 'wet', 'rejected'])
+    expect(viewAfter([...leaking, retested('passed')]).holds).toEqual(['wet'])
+    expect(codes(viewAfter([...leaking, retested('passed')]))).toEqual(['wet'])
   })
 
   it('from a cylinder with nothing in it loses nothing, but it does not count as evacuated', () => {

@@ -62,7 +62,16 @@ describe('a failed test', () => {
   it('rejects the cylinder until one passes', () => {
     const story = [...atTest, retested({ method: 'visual', result: 'rejected' })]
     expect(viewAfter(story)).toMatchObject({ lifecycle: 'rejected', holds: ['rejected'], capacity: { stopWeightGrams: null }, marks: [] })
-    expect(viewAfter([...story, retested({ method: 'visual' })])).toMatchObject({ lifecycle: 'in-service', holds: [] })
+    expect(viewAfter([...story, retested({ method: 'proof' })])).toMatchObject({ lifecycle: 'in-service', holds: ['wet'] })
+  })
+
+  it('and damage and a lost tare are not cleared by an outside look', () => {
+    const look = retested({ method: 'visual' })
+    expect(viewAfter([...atTest, retested({ result: 'rejected' }), look])).toMatchObject({ lifecycle: 'rejected', holds: ['wet', 'rejected'], capacity: { stopWeightGrams: null } })
+    const leaked = [...full, did('lost', { cause: 'leak', grossAfter: kg(15) })]
+    expect(viewAfter([...leaked, look])).toMatchObject({ holds: ['damaged'], capacity: { stopWeightGrams: null, refusals: [{ code: 'early-test' }] } })
+    const light = [registered(), retested({ method: 'visual', newTare: kg(11.4) })]
+    expect(viewAfter([...light, look])).toMatchObject({ holds: ['tare-loss'], capacity: { stopWeightGrams: null } })
   })
 
   it('condemns it for good', () => {
@@ -108,6 +117,6 @@ describe('a new tare', () => {
     const story = [...atTest, retested({ method: 'visual', newTare: kg(11.4) })]
     expect(viewAfter(story)).toMatchObject({ holds: ['tare-loss'], capacity: { stopWeightGrams: null } })
     expect(codes(viewAfter(story))).toEqual(['early-test'])
-    expect(viewAfter([...story, retested({ method: 'visual', newTare: kg(11.4) })]).holds).toEqual([])
+    expect(viewAfter([...story, retested({ newTare: kg(11.4) })]).holds).toEqual(['wet'])
   })
 })
