@@ -21,7 +21,11 @@ export function applyCorrections(events: readonly AnyRecordedEvent[]): Standing[
   const corrections = ordered.filter((event): event is CorrectionEvent => event.kind === 'corrected')
   if (corrections.length === 0) return ordered.map(event => ({ event, correction: null, isOut: false }))
 
-  const onCorrections = byTarget(corrections, correction => correction.details.eventId)
+  // Whom a correction names may itself be corrected, so all that it may come to name are looked at.
+  const onCorrections = byTarget(corrections, ({ id, details }) => [
+    details.eventId,
+    ...corrections.flatMap(({ details: { eventId, instead } }) => eventId === id && typeof instead?.['eventId'] === 'string' ? [instead['eventId']] : []),
+  ])
   const decided = new Map<string, CorrectionEvent | null>()
   const deciding = new Set<string>()
 
@@ -39,7 +43,7 @@ export function applyCorrections(events: readonly AnyRecordedEvent[]): Standing[
   }
 
   const effective = corrections.flatMap(correction => inEffect(correction) ?? [])
-  const onEvents = byTarget(effective, correction => correction.details.eventId)
+  const onEvents = byTarget(effective, correction => [correction.details.eventId])
   return ordered.map((event) => {
     const mends = event.kind === 'corrected' ? onCorrections.get(event.id) : onEvents.get(event.id)
     const latest = latestFitting(event, mends ?? [], event.kind === 'corrected' ? inEffect : correction => correction)
@@ -59,7 +63,7 @@ function latestFitting(
 ): { by: CorrectionEvent, standing: AnyRecordedEvent | null } | null {
   for (const raw of [...corrections].reverse()) {
     const by = inEffect(raw)
-    if (by === null || by.id === event.id) continue
+    if (by === null || by.id === event.id || by.details.eventId !== event.id) continue
     const { instead } = by.details
     if (instead === undefined) {
       if (event.kind === 'registered') continue
@@ -72,11 +76,10 @@ function latestFitting(
   return null
 }
 
-function byTarget(corrections: readonly CorrectionEvent[], target: (correction: CorrectionEvent) => string): Map<string, CorrectionEvent[]> {
+function byTarget(corrections: readonly CorrectionEvent[], targets: (correction: CorrectionEvent) => string[]): Map<string, CorrectionEvent[]> {
   const map = new Map<string, CorrectionEvent[]>()
   for (const correction of corrections) {
-    const id = target(correction)
-    map.set(id, [...map.get(id) ?? [], correction])
+    for (const id of new Set(targets(correction))) map.set(id, [...map.get(id) ?? [], correction])
   }
   return map
 }

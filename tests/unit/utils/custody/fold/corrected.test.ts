@@ -37,6 +37,15 @@ describe('a correction', () => {
     expect(contentsAfter(...story, corrected(WEIGHING), corrected(idOf(3)), corrected(idOf(4))).netGrams).toBe(8000)
   })
 
+  it('may itself be pointed at another event or at another correction', () => {
+    // The weighing was taken out by a slip; it is the fill that was meant, so 19 kg is all that the scale ever showed.
+    const meantFill = corrected(idOf(3), { eventId: idOf(1), reason: 'the wrong line' })
+    expect(contentsAfter(...story, corrected(WEIGHING), meantFill)).toMatchObject({ netGrams: 7000, refrigerant: null })
+    // The second correction named the registration, which stands; it is the first one that was meant, so the fill counts again.
+    const meantFirst = corrected(idOf(4), { eventId: idOf(3), reason: 'the wrong line' })
+    expect(contentsAfter(...story, corrected(idOf(1)), corrected(idOf(0)), meantFirst)).toMatchObject({ netGrams: 7000, refrigerant: 'R-22' })
+  })
+
   it('that corrects another in a circle still ends', () => {
     const circle = [...story, corrected(idOf(4)), corrected(idOf(3))]
     expect(contentsAfter(...circle).netGrams).toBe(7000)
