@@ -28,5 +28,6 @@ export function nextStep(row: CylinderRow): NextStep | null {
   if (!row.nothingInIt && row.netGrams === null) return { word: 'Weigh it', screen: 'cylinder' }
   if (has('nearly-full')) return isFull(row) ? { word: 'Ship it', screen: 'shipment' } : { word: 'Bring it back', screen: 'cylinder' }
   if (has('retest-soon') && row.nothingInIt) return { word: 'Plan its test', screen: 'test-lot' }
+  if (row.fillLimitGrams !== null && row.stopWeightGrams === null) return { word: 'See why', screen: 'cylinder' }
   return { word: 'Fill it', screen: 'cylinder' }
 }

@@ -39,7 +39,6 @@ const STOP_WORDS: Partial<Record<FindingCode, string>> = {
 const CAUTION_WORDS: Partial<Record<FindingCode, string>> = {
   'retest-overdue': 'Retest overdue',
   'nearly-full': 'Nearly full',
-  'retest-soon': 'Usable, retest soon',
   'not-registered': 'Not registered yet',
   'registered-twice': 'Registered twice',
   'toxic': 'Toxic refrigerant',
@@ -65,7 +64,7 @@ export function rowVerdict(row: CylinderRow, now: number): RowVerdict {
     return { kind: 'stop', text: away ? `${away}, ${lowerFirst(word)}` : word }
   }
   if (away) return { kind: 'unk', text: away }
-  return notKnown(row, now) ?? caution(row) ?? { kind: 'ok', text: row.nothingInIt ? 'Empty, usable' : 'Usable' }
+  return notKnown(row, now) ?? caution(row) ?? mayBeUsed(row)
 }
 
 /** Whether a cylinder is full on the screen: less room in it than the scale can tell. */
@@ -102,6 +101,13 @@ function caution(row: CylinderRow): RowVerdict | null {
   const code = CAUTION_ORDER.find(known => row.findingCodes.includes(known))
   if (code === undefined) return null
   return { kind: 'att', text: code === 'nearly-full' && isFull(row) ? 'Full' : CAUTION_WORDS[code]! }
+}
+
+/** A limit without a stop weight means that something keeps it from being filled: then it is not called usable. */
+function mayBeUsed(row: CylinderRow): RowVerdict {
+  if (row.fillLimitGrams !== null && row.stopWeightGrams === null) return { kind: 'unk', text: 'No stop weight' }
+  if (row.findingCodes.includes('retest-soon')) return { kind: 'att', text: 'Usable, retest soon' }
+  return { kind: 'ok', text: row.nothingInIt ? 'Empty, usable' : 'Usable' }
 }
 
 function lowerFirst(text: string): string {

@@ -21,6 +21,14 @@ describe('the word that the fleet says of a cylinder', () => {
     expect(rowVerdict(cylinderRow({ waterCapacityGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Stamp unknown, no limit' })
   })
 
+  it('is never that it is usable where a limit is known and no stop weight can be given', () => {
+    const barred = { stopWeightGrams: null, exactStopWeightGrams: null, roomGrams: null }
+    expect(rowVerdict(cylinderRow(barred), NOW)).toEqual({ kind: 'unk', text: 'No stop weight' })
+    expect(rowVerdict(cylinderRow({ ...barred, findingCodes: ['retest-soon'] }), NOW).text).toBe('No stop weight')
+    expect(rowVerdict(cylinderRow({ ...barred, findingCodes: ['retest-overdue'] }), NOW).text).toBe('Retest overdue')
+    expect(rowVerdict(cylinderRow({ findingCodes: ['retest-soon'] }), NOW)).toEqual({ kind: 'att', text: 'Usable, retest soon' })
+  })
+
   it('counts a net of nothing as a weight', () => {
     expect(rowVerdict(cylinderRow({ netGrams: 0 }), NOW).text).toBe('Usable')
   })
