@@ -50,9 +50,14 @@ function ofWeight(state: CylinderState, fillLimitGrams: number | null, context: 
   return contents.netGrams >= fillLimitGrams * NEARLY_FULL_RATIO ? [nearlyFull(fillLimitGrams - (judgedNetGrams(state) ?? contents.netGrams))] : []
 }
 
+// A mixture has no name, but it holds what went in: each of those still speaks against the cylinder, once for each code.
 function ofFit({ stamp, contents, filledHere }: CylinderState, catalogue: Catalogue): Finding[] {
   if (stamp === null || contents.nothingInIt) return []
-  return fitFindings({ stamp, refrigerant: contents.refrigerant, catalogue })
+  const { refrigerant, knownSinceVacuum } = contents
+  const names = refrigerant === null && knownSinceVacuum.length > 0 ? knownSinceVacuum : [refrigerant]
+  const findings = names.flatMap(name => fitFindings({ stamp, refrigerant: name, catalogue }))
+  return findings
+    .filter(({ code }, index) => findings.findIndex(other => other.code === code) === index)
     .filter(({ code }) => code !== 'not-refillable' || filledHere)
     .map(finding => ({ ...finding, since: null }))
 }

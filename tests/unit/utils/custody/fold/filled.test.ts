@@ -292,6 +292,14 @@ describe('a fill that should not have been', () => {
     expect(codes(viewAfter(story))).toEqual(['not-marked-flammable'])
   })
 
+  it('keeps its stops when another refrigerant takes away the name of what is in it', () => {
+    const unmarked = registered({ stamp: { ...STAMP, flammableMarked: false, servicePressurePsig: 350 } })
+    // R-410A may reach 490 psig at 131 F; 5/4 of 350 psig is 437 psig.
+    expect(codes(viewAfter([unmarked, filled('R-454B', 14), filled('R-410A', 15), filled('R-22', 16)])))
+      .toEqual(['pressure-class', 'not-marked-flammable', 'second-refrigerant'])
+    expect(codes(viewAfter([unmarked, filled('R-454B', 14), filled('R-22', 16), did('emptied', { vacuum: { microns: 500 } })]))).toEqual([])
+  })
+
   it('of a DOT-39 is a stop of the cylinder from then on, not before', () => {
     const stamp = { ...STAMP, spec: 'DOT-39' }
     const bought = registered({ stamp, contents: { refrigerant: 'R-22', condition: 'clean' }, gross: kg(15) })
