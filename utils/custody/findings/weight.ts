@@ -63,6 +63,11 @@ export function heavyVacuum(netGrams: number, confirmed: boolean): Finding {
   return weighAgain(`A deep vacuum is reported, but the scale shows ${massWords(netGrams, 'nearest')} above the tare, so it does not count as evacuated`, confirmed)
 }
 
+/** A new tare far above the stamped one: taken as it is, it would raise the stop weight by as much. */
+export function tareAboveStamp(excessGrams: number, confirmed: boolean): Finding {
+  return weighAgain(`The new tare is ${massWords(excessGrams, 'nearest')} above the stamped one, and steel does not grow; the stop weight would rise with it`, confirmed)
+}
+
 function weighAgain(what: string, confirmed: boolean): Finding {
   return {
     code: 'weigh-again', severity: 'caution', source: COMMON_PRACTICE, since: null,

@@ -4,7 +4,7 @@ import { exactGrams, type MassReading } from '../../quantity/mass'
 import { scaleAccuracyGrams } from '../../quantity/scale'
 import { hasLiquidAt, saturationAt } from '../../refrigerant/saturation'
 import { testedFull } from '../findings/retest'
-import { belowTare } from '../findings/weight'
+import { belowTare, tareAboveStamp } from '../findings/weight'
 import { becomeNothing } from './contents'
 import { changeNet } from './ledger'
 import { restOnNothing } from './scaleReading'
@@ -52,6 +52,9 @@ function vapourHeelGrams({ state, context }: Turn): number {
 // 49 CFR 180.209(c): a loss of 5 % of the tare asks for a test before the next fill.
 const TARE_LOSS_RATIO = 0.95
 
+// As far above the stamp nothing but a slip or a fitting explains it: our threshold.
+const TARE_GAIN_RATIO = 1.05
+
 // Keeps a product of decimals from landing a hair below the edge.
 const FLOAT_NOISE_GRAMS = 1e-6
 
@@ -63,6 +66,10 @@ function takeTare(turn: Turn<'retested'>, newTare: MassReading): void {
   const stamped = state.stamp?.tareWeight
   const isNews = before === null || grams < before.exactGrams
   if (stamped && isNews && grams <= exactGrams(stamped) * TARE_LOSS_RATIO + FLOAT_NOISE_GRAMS) holdBack(turn, 'tare-loss')
+  const isWithValve = state.stamp?.tareIncludesValve !== false
+  if (stamped && isWithValve && grams > exactGrams(stamped) * TARE_GAIN_RATIO + FLOAT_NOISE_GRAMS) {
+    turn.findings.push(tareAboveStamp(grams - exactGrams(stamped), isConfirmed(turn, 'weigh-again')))
+  }
   judgeGrossAnew(turn, grams)
 }
 

@@ -111,6 +111,14 @@ describe('a new tare', () => {
     expect(lastMovements(...full, retested({ newTare: kg(12.1) }))).toEqual(['emptied-loss R-22 -8000'])
   })
 
+  it('more than 5 % above the stamp is to be weighed again, for the stop weight rises with it', () => {
+    // 5 % of 12.00 kg is 0.60 kg.
+    expect(lastFindings(...atTest, retested({ newTare: kg(12.6) }))).toEqual([])
+    expect(lastFindings(...atTest, retested({ newTare: kg(12.601) }))).toEqual(['weigh-again'])
+    const withoutValve = registered({ stamp: { ...STAMP, tareIncludesValve: false } })
+    expect(lastFindings(withoutValve, retested({ newTare: kg(13.2) }))).toEqual([])
+  })
+
   it('5 % below the stamp has lost steel: no fill until a test has passed with that in view', () => {
     // 5 % of 12.00 kg is 0.60 kg.
     expect(viewAfter([...atTest, retested({ method: 'visual', newTare: kg(11.401) })]).holds).toEqual([])
