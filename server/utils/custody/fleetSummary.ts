@@ -20,7 +20,7 @@ export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSu
   const [counts, full, due, refrigerants, lateRows] = await db.readClient.batch([
     countsOf([
       { sql: IN_USE, args: [] }, findingFilter('stop', bounds), findingFilter('caution', bounds), overfilled,
-      { sql: `c.net_grams IS NULL AND ${OURS}`, args: [] }, findingFilter('not-seen', bounds),
+      findingFilter('weight-not-known', bounds), findingFilter('not-seen', bounds),
     ]),
     `SELECT count(*), coalesce(sum(c.net_grams), 0) FROM cylinders c
       WHERE c.finding_codes LIKE '% nearly-full %' AND c.finding_codes NOT LIKE '% overfill %' AND c.lifecycle = 'in-service'`,
