@@ -16,6 +16,8 @@ export interface RegistrationDraft {
   /** As stamped, 'DOT-4BA400'. */
   spec: string
   tareWeight: MassReading | null
+  /** null = not said; a TW without the valve gives no stop weight, and mending another field must not hide that. */
+  tareIncludesValve: boolean | null
   waterCapacity: MassReading | null
   made: string
   marks: MarkDraft[]
@@ -50,8 +52,8 @@ export type FieldErrors = Partial<Record<string, string>>
 /** A form with nothing typed yet. */
 export function emptyDraft(): RegistrationDraft {
   return {
-    serial: '', serialUnreadable: false, maker: '', spec: '', tareWeight: null, waterCapacity: null, made: '',
-    marks: [{ month: '', rin: '', suffix: '' }], flammableMarked: null, floatSwitch: null, valve: '',
+    serial: '', serialUnreadable: false, maker: '', spec: '', tareWeight: null, tareIncludesValve: null,
+    waterCapacity: null, made: '', marks: [{ month: '', rin: '', suffix: '' }], flammableMarked: null, floatSwitch: null, valve: '',
     ownership: 'own', ownerId: '', dedicatedTo: '', contents: null, refrigerant: '', condition: 'clean', gross: null, placeId: '',
   }
 }
@@ -101,6 +103,7 @@ function stampOf(draft: RegistrationDraft, spec: { spec: string, servicePressure
     spec: spec.spec,
     servicePressurePsig: spec.servicePressurePsig,
     tareWeight: draft.tareWeight,
+    ...(draft.tareIncludesValve === null ? {} : { tareIncludesValve: draft.tareIncludesValve }),
     waterCapacity: draft.waterCapacity,
     madeMonth: made,
     // Not seen counts as not marked: it only ever refuses, never permits.

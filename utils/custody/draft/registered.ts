@@ -32,6 +32,7 @@ function stampInDraft(stamp: DetailsOf<'registered'>['stamp']): Partial<Registra
     maker: stamp.maker ?? '',
     spec: specAsStamped(stamp),
     tareWeight: stamp.tareWeight,
+    tareIncludesValve: stamp.tareIncludesValve ?? null,
     waterCapacity: stamp.waterCapacity,
     made: stamp.madeMonth === null ? '' : stamp.madeMonth,
     flammableMarked: stamp.flammableMarked,

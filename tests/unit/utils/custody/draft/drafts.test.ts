@@ -91,6 +91,8 @@ describe('a recorded registration in its form', () => {
     })
     const context = contextOf([registered()])
     expect(REGISTERED.read(REGISTERED.of(details, SHOP), context)).toEqual({ details, placeId: SHOP })
+    const withoutValve = { ...details, stamp: { ...details.stamp, tareIncludesValve: false } }
+    expect(REGISTERED.read(REGISTERED.of(withoutValve, SHOP), context)).toEqual({ details: withoutValve, placeId: SHOP })
   })
 })
 
