@@ -64,7 +64,8 @@ export function useApi() {
     catch (error) {
       const problem = problemOf(error)
       if (problem.status === 401 && import.meta.client && !path.startsWith('/api/session')) {
-        await nuxt.runWithContext(() => navigateTo({ path: '/sign-in', query: { next: router.currentRoute.value.fullPath } }))
+        // By a fresh page: this one still believes that its person is signed in, and holds what they read.
+        await nuxt.runWithContext(() => navigateTo({ path: '/sign-in', query: { next: router.currentRoute.value.fullPath } }, { external: true }))
       }
       throw new ApiError(problem)
     }

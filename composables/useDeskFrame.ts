@@ -30,7 +30,8 @@ export function useDeskFrame(title: string | (() => string), onScan?: (code: str
 
   async function signOut() {
     await session.signOut()
-    await navigateTo('/sign-in')
+    // By a fresh page, which holds nothing of what this person has read.
+    await navigateTo('/sign-in', { external: true })
   }
 
   function key(event: KeyboardEvent) {

@@ -1,5 +1,6 @@
 import { problemOf } from '~~/composables/useApi'
 import { deviceNow, usePostingStore, type NewEvent, type Posted } from '~~/stores/posting'
+import { useSessionStore } from '~~/stores/session'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
 
@@ -25,7 +26,8 @@ interface Kept<Draft> {
  */
 export function useEventForm<Draft extends object>(key: string, empty: () => Draft) {
   const posting = usePostingStore()
-  const storageKey = `collarbook-form ${key}`
+  // On a phone that changes hands nobody finds, or records, what another has typed.
+  const storageKey = `collarbook-form ${useSessionStore().user?.id ?? ''} ${key}`
   const draft = ref(empty()) as Ref<Draft>
   const envelope = ref<Envelope>({ at: '', supervisorId: '', note: '' })
   const sent = shallowRef<Kept<Draft>['sent']>(null)
