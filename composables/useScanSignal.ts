@@ -6,8 +6,9 @@ const TONES: Record<StatusKind, { hertz: number, from: number, length: number }[
   att: [{ hertz: 880, from: 0, length: 0.16 }],
   stop: [{ hertz: 260, from: 0, length: 0.18 }, { hertz: 260, from: 0.26, length: 0.18 }],
   unk: [{ hertz: 520, from: 0, length: 0.1 }, { hertz: 780, from: 0.1, length: 0.12 }],
+  away: [{ hertz: 880, from: 0, length: 0.16 }],
 }
-const BUZZES: Record<StatusKind, number[]> = { ok: [40], att: [90], stop: [160, 90, 160], unk: [40, 60, 40] }
+const BUZZES: Record<StatusKind, number[]> = { ok: [40], att: [90], stop: [160, 90, 160], unk: [40, 60, 40], away: [90] }
 
 /** Says with a tone, and where the device can with a buzz, how a scan came out. */
 export function useScanSignal() {

@@ -1,9 +1,10 @@
 import type { CylinderRow, Lifecycle } from '../custody/cylinderView'
 import type { FindingCode } from '../custody/finding'
+import type { StatusKind } from '../picture/status'
 import { scaleAccuracyGrams } from '../quantity/scale'
 
 /** A status of the screen and the word beside its shape. */
-export interface RowVerdict { kind: 'ok' | 'att' | 'stop' | 'unk', text: string }
+export interface RowVerdict { kind: StatusKind, text: string }
 
 const DAY_MS = 86_400_000
 
@@ -11,7 +12,7 @@ const LIFECYCLE_VERDICTS: Partial<Record<Lifecycle, RowVerdict>> = {
   condemned: { kind: 'stop', text: 'Condemned' },
   rejected: { kind: 'stop', text: 'Rejected at its test' },
   quarantined: { kind: 'stop', text: 'Set apart' },
-  retired: { kind: 'unk', text: 'Retired' },
+  retired: { kind: 'away', text: 'Retired' },
   missing: { kind: 'unk', text: 'Missing' },
 }
 
@@ -63,7 +64,7 @@ export function rowVerdict(row: CylinderRow, now: number): RowVerdict {
     const word = STOP_WORDS[row.worstFinding.code] ?? 'Not to be used'
     return { kind: 'stop', text: away ? `${away}, ${lowerFirst(word)}` : word }
   }
-  if (away) return { kind: 'unk', text: away }
+  if (away) return { kind: 'away', text: away }
   return notKnown(row, now) ?? caution(row) ?? mayBeUsed(row)
 }
 

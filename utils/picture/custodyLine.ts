@@ -5,12 +5,13 @@ import { formatMass, type MassUnit } from '../quantity/mass'
 /**
  * One event in a few words: what was done and by how much the weight changed.
  *
- * Rounding: to the nearest division. @example 'Filled, +6.2 lb'
+ * Rounding: to the nearest division; a change that rounds to nothing is not said. @example 'Filled, +6.2 lb'
  */
 export function eventInWords(line: LogLine, unit: MassUnit): string {
   const word = KIND_WORDS[line.kind].done
   const change = netChangeGrams(line)
-  return change ? `${word}, ${signedMass(change, unit)}` : word
+  const text = change === null ? '' : signedMass(change, unit)
+  return /[1-9]/.test(text) ? `${word}, ${text}` : word
 }
 
 /** By how much an event changed the known net; null where one of the two is not known. Before it was registered there was nothing. */

@@ -93,6 +93,8 @@ export function nearestToDivision(grams: number, unit: MassUnit): MassReading {
  *
  * Rounding: as asked for; a limit, a room and a stop weight go down, also below zero; an excess goes up.
  *
+ * Shape: ounces alone where there is no whole pound.
+ *
  * @example formatMass(29_937, 'lb', 'down') // '66.0 lb', with a no-break space
  */
 export function formatMass(grams: number, unit: MassUnit, rounding: MassRounding): string {
@@ -107,7 +109,8 @@ export function formatFigure(grams: number, unit: MassUnit, rounding: MassRoundi
   const { perUnit, decimals } = DIVISIONS[unit]
   if (unit !== 'lb-oz') return { figure: sign + (Math.abs(count) / perUnit).toFixed(decimals), symbol: unit }
   const pounds = Math.floor(Math.abs(count) / perUnit)
-  return { figure: `${sign}${pounds}${NO_BREAK_SPACE}lb${NO_BREAK_SPACE}${Math.abs(count) % perUnit}`, symbol: 'oz' }
+  const ounces = Math.abs(count) % perUnit
+  return { figure: pounds === 0 ? `${sign}${ounces}` : `${sign}${pounds}${NO_BREAK_SPACE}lb${NO_BREAK_SPACE}${ounces}`, symbol: 'oz' }
 }
 
 /** A reading as it was entered, with no fewer decimals than its scale shows. */

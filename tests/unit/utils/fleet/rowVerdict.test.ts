@@ -40,7 +40,7 @@ describe('the word that the fleet says of a cylinder', () => {
   })
 
   it('says where a cylinder is that is away, and the stop that stands on it', () => {
-    expect(rowVerdict(cylinderRow({ lifecycle: 'at-test' }), NOW)).toEqual({ kind: 'unk', text: 'At test' })
+    expect(rowVerdict(cylinderRow({ lifecycle: 'at-test' }), NOW)).toEqual({ kind: 'away', text: 'At test' })
     const late = cylinderRow({ lifecycle: 'at-test', worstFinding: { code: 'retest-overdue', severity: 'stop' }, findingCodes: ['retest-overdue'] })
     expect(rowVerdict(late, NOW)).toEqual({ kind: 'stop', text: 'At test, retest overdue' })
   })

@@ -129,10 +129,17 @@ describe('a mass as it is shown', () => {
     expect(plain(formatMass(120, 'lb', 'nearest'))).toBe('0.3 lb')
   })
 
+  it('is in ounces alone where there is no whole pound', () => {
+    expect(plain(formatMass(340, 'lb-oz', 'nearest'))).toBe('12 oz')
+    expect(plain(formatMass(0, 'lb-oz', 'nearest'))).toBe('0 oz')
+    expect(formatFigure(-340, 'lb-oz', 'nearest')).toEqual({ figure: '−12', symbol: 'oz' })
+    expect(plain(formatMass(454, 'lb-oz', 'nearest'))).toBe('1 lb 0 oz')
+  })
+
   it('puts one minus before what is below zero', () => {
     expect(plain(formatMass(-1361, 'lb', 'nearest'))).toBe('−3.0 lb')
     expect(plain(formatMass(-539, 'lb-oz', 'nearest'))).toBe('−1 lb 3 oz')
-    expect(plain(formatMass(-28, 'lb-oz', 'nearest'))).toBe('−0 lb 1 oz')
+    expect(plain(formatMass(-28, 'lb-oz', 'nearest'))).toBe('−1 oz')
     expect(plain(formatMass(-0.2, 'kg', 'down'))).toBe('0.00 kg')
   })
 })
