@@ -101,6 +101,9 @@ function refusalOfCorrection(
   if (!target && !isManager && !mayPost(access, 'weighed')) {
     return refuse(403, 'Not yours to correct', 'Its author may correct it within 24 hours, a manager at any time.')
   }
+  if (target?.kind === 'corrected' && !isManager && namesAnother(event.details.instead, target.details.eventId)) {
+    return refuse(403, 'Not yours to correct', 'A correction of yours keeps to the entry it was made for; only a manager may point it at another.')
+  }
   if (target?.kind === 'registered' && !event.details.instead && events.length > 1) {
     return refuse(409, 'The registration cannot be taken out', 'Other events stand on it. Give the right details instead.')
   }
@@ -115,6 +118,12 @@ function refusalOfCorrection(
   // The author's own correction may come from a phone that does not know the newest version.
   if (event.expects === undefined && isAuthor) return null
   return wrongVersion(event, events)
+}
+
+// Else a correction of one's own entry would open the way to anybody's.
+function namesAnother(instead: Record<string, unknown> | undefined, eventId: string): boolean {
+  const named = instead?.['eventId']
+  return typeof named === 'string' && named.toLowerCase() !== eventId
 }
 
 function wrongVersion(event: AnyCustodyEvent, events: readonly AnyRecordedEvent[]): Refusal | null {

@@ -97,6 +97,23 @@ describe('the one way into the log', () => {
     expect(own?.outcome).toBe('accepted')
   })
 
+  it('lets nobody but a manager point a correction of their own at somebody else\'s entry', async () => {
+    const id = await newCylinder(log)
+    const theirs = sent(id, 'filled', { refrigerant: 'R-22', grossAfter: lb(80), looked: true })
+    const own = sent(id, 'weighed', { gross: lb(79) })
+    await record(log.db, log.warehouse, [theirs])
+    await record(log.db, log.technician, [own])
+    const correction = sent(id, 'corrected', { eventId: own.id, reason: 'read wrong', instead: { gross: lb(78) } })
+    expect((await record(log.db, log.technician, [correction]))[0]?.outcome).toBe('accepted')
+    const pointed = (eventId: string) => sent(id, 'corrected', { eventId: correction.id, reason: 'the other line', instead: { eventId, reason: 'taken back' } })
+    const [stranger] = await record(log.db, log.technician, [pointed(theirs.id.toUpperCase())])
+    expect(stranger?.problem?.status).toBe(403)
+    const view = await cylinderView(log.db, id, { access: log.manager, nowMs: Date.now() })
+    expect(view!.findings.map(({ code }) => code)).toContain('overfill')
+    expect((await record(log.db, log.technician, [pointed(own.id)]))[0]?.outcome).toBe('accepted')
+    expect((await record(log.db, log.manager, [{ ...pointed(theirs.id), expects: 5 }]))[0]?.outcome).toBe('accepted')
+  })
+
   it('does not take a registration out while other events stand on it', async () => {
     const id = await newCylinder(log)
     await record(log.db, log.technician, [sent(id, 'weighed', { gross: lb(27.5) })])
