@@ -1,5 +1,6 @@
+import { excessGrams } from '../capacity/stopWeight'
 import type { ShipmentLine } from '../contract/shipments'
-import { readingGrams, type MassReading } from '../quantity/mass'
+import { exactGrams, readingGrams, type MassReading } from '../quantity/mass'
 import { scaleAccuracyGrams } from '../quantity/scale'
 
 /** One line as it is about to leave: what the scale showed, and what follows from it. */
@@ -28,7 +29,7 @@ export function weighedLines(lines: readonly ShipmentLine[], grossOf: Readonly<R
     return {
       line, gross, grossGrams, netGrams,
       changedGrams: changed(netGrams, grossGrams, cylinder.netGrams, cylinder.tareWeightGrams),
-      over: netGrams !== null && cylinder.fillLimitGrams !== null && netGrams > cylinder.fillLimitGrams,
+      over: gross !== null && isOver(gross, netGrams, cylinder),
     }
   })
 }
@@ -43,6 +44,13 @@ export function dispatchSum(lines: readonly WeighedLine[]): DispatchSum {
     netGrams: nets.length ? nets.reduce((sum, net) => sum + net, 0) : null,
     nets: nets.length,
   }
+}
+
+// By the stop weight where there is one, for whole grams would show a cylinder filled to it as a hair above.
+function isOver(gross: MassReading, netGrams: number | null, cylinder: ShipmentLine['cylinder']): boolean {
+  const { exactStopWeightGrams, fillLimitGrams } = cylinder
+  if (exactStopWeightGrams !== null) return excessGrams(exactStopWeightGrams, exactGrams(gross)) > 0
+  return netGrams !== null && fillLimitGrams !== null && netGrams > fillLimitGrams
 }
 
 function changed(netGrams: number | null, grossGrams: number | null, knownNet: number | null, tare: number | null): number | null {

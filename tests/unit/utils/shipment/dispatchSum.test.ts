@@ -34,6 +34,20 @@ describe('a shipment being weighed', () => {
     expect(over(12_474 + 17_272)).toBe(false)
     expect(over(12_474 + 17_273)).toBe(true)
   })
+
+  it('lets a cylinder leave that was filled to its very stop weight', () => {
+    // WC 24.0 lb, TW 15.0 lb: 34.2 lb, in whole grams 6,804 + 8,708 = 15,512, though 34.2 lb are 15,513.
+    const full = line('a', { tareWeightGrams: 6804, fillLimitGrams: 8708, exactStopWeightGrams: 34.2 * 453.59237 })
+    const over = (value: number) => weighedLines([full], { a: { unit: 'lb', value } })[0]!.over
+    expect(over(34.2)).toBe(false)
+    expect(over(34.3)).toBe(true)
+  })
+
+  it('sees an excess where there is a limit but no stop weight', () => {
+    const overdue = line('a', { exactStopWeightGrams: null })
+    expect(weighedLines([overdue], { a: { unit: 'kg', value: 29.747 } })[0]!.over).toBe(true)
+    expect(weighedLines([overdue], { a: { unit: 'kg', value: 29.746 } })[0]!.over).toBe(false)
+  })
 })
 
 describe('their weight beside ours', () => {
