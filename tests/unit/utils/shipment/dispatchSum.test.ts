@@ -30,7 +30,8 @@ describe('a shipment being weighed', () => {
   })
 
   it('sees the first gram above the fill limit', () => {
-    const over = (grams: number) => weighedLines([line('a')], { a: { unit: 'kg', value: grams / 1000 } })[0]!.over
+    const full = line('a', { exactStopWeightGrams: 12_474 + 17_272 })
+    const over = (grams: number) => weighedLines([full], { a: { unit: 'kg', value: grams / 1000 } })[0]!.over
     expect(over(12_474 + 17_272)).toBe(false)
     expect(over(12_474 + 17_273)).toBe(true)
   })
