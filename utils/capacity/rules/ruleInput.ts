@@ -20,7 +20,10 @@ export type RuleInput = {
 /** What a rule gives: net grams, unrounded, or why it has none; and the sum behind it, without its result. */
 export type RuleFigure = { exactGrams: number, sum: string, source: string } | { exactGrams: null, because: string, source: string }
 
-/** Density of water at 60 F, at which a water capacity is taken (49 CFR 173.304a(a)(2) Note 1). Units: kg/L. */
+/**
+ * Density of water at 60 F, the temperature at which a water capacity is taken (49 CFR 173.304a(a)(2) Note 1).
+ * Units: kg/L. Source: the figure is from memory; the note's own 27.737 in3 a pound gives 0.9979, which would make every volume larger.
+ */
 export const WATER_DENSITY_60F = 0.99904
 
 /** Reference temperature at which no cylinder may be liquid-full, 131 F (49 CFR 173.304(b)). Units: C. */
