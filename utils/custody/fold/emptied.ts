@@ -1,7 +1,10 @@
+import { exactGrams } from '../../quantity/mass'
 import { heavyVacuum } from '../findings/weight'
 import { becomeNothing, loseNet, weighAfterOutflow } from './contents'
 import { changeNet } from './ledger'
 import { doubtReading, readScale, restOn, restOnNothing } from './scaleReading'
+import { holdBack } from './standing'
+import { isTareLoss } from './tareLoss'
 import { isConfirmed, type Turn } from './turn'
 import { raiseAway } from './whereabouts'
 
@@ -45,6 +48,8 @@ function emptiedDeep(turn: Turn<'emptied'>): void {
   }
   else restOnNothing(turn)
   becomeNothing(turn, { evacuated: true })
+  // With nothing in it the scale shows the tare as it is now.
+  if (grossAfter && turn.state.tare && isTareLoss(exactGrams(grossAfter), turn.state.tare.exactGrams)) holdBack(turn, 'tare-loss')
 }
 
 function emptiedToHeel(turn: Turn<'emptied'>): void {

@@ -9,6 +9,7 @@ import { becomeNothing } from './contents'
 import { changeNet } from './ledger'
 import { restOnNothing } from './scaleReading'
 import { holdBack, lift } from './standing'
+import { isTareLoss } from './tareLoss'
 import { isConfirmed, type Turn } from './turn'
 
 /** A requalifier has tested the cylinder. */
@@ -49,9 +50,6 @@ function vapourHeelGrams({ state, context }: Turn): number {
   return volumeLitres(stamp.waterCapacity) * saturationAt(refrigerant, HEEL_C).vapourDensity
 }
 
-// 49 CFR 180.209(c): a loss of 5 % of the tare asks for a test before the next fill.
-const TARE_LOSS_RATIO = 0.95
-
 // As far above the stamp nothing but a slip or a fitting explains it: our threshold.
 const TARE_GAIN_RATIO = 1.05
 
@@ -65,7 +63,7 @@ function takeTare(turn: Turn<'retested'>, newTare: MassReading): void {
   state.tare = { exactGrams: grams, since: event.effectiveAt, isWeighedAnew: true }
   const stamped = state.stamp?.tareWeight
   const isNews = before === null || grams < before.exactGrams
-  if (stamped && isNews && grams <= exactGrams(stamped) * TARE_LOSS_RATIO + FLOAT_NOISE_GRAMS) holdBack(turn, 'tare-loss')
+  if (stamped && isNews && isTareLoss(grams, exactGrams(stamped))) holdBack(turn, 'tare-loss')
   const isWithValve = state.stamp?.tareIncludesValve !== false
   if (stamped && isWithValve && grams > exactGrams(stamped) * TARE_GAIN_RATIO + FLOAT_NOISE_GRAMS) {
     turn.findings.push(tareAboveStamp(grams - exactGrams(stamped), isConfirmed(turn, 'weigh-again')))
