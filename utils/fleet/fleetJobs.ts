@@ -42,7 +42,7 @@ function full({ full: { count, netGrams } }: FleetSummary, unit: MassUnit, maySh
   return {
     code: 'full', kind: 'att', act: mayShip ? 'ship' : 'filter', finding: 'nearly-full',
     title: `${count} full, ready to ship`,
-    text: `${formatMass(netGrams, unit, 'nearest')} net, ${count === 1 ? 'it is' : 'each'} at 90 % of its limit or more.`,
+    text: `${formatMass(netGrams, unit, 'nearest')} net, ${count === 1 ? 'it is' : 'each'} at 90\u00A0% of its limit or more.`,
     verb: mayShip ? 'Prepare a shipment' : count === 1 ? 'Show it' : `Show the ${count}`,
   }
 }
