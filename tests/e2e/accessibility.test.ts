@@ -15,7 +15,15 @@ const THUMB = 48
 type Who = keyof DemoFleet['people'] | 'nobody'
 
 /** A page as somebody meets it; `empty` is a server that is not set up yet. */
-interface Screen { as: Who, at: (demo: DemoFleet) => string, empty?: true, /** The browser says in its console that the page answered so. */ answers?: number }
+interface Screen {
+  as: Who
+  at: (demo: DemoFleet) => string
+  empty?: true
+  /** The page answers so, and the browser says it in its console. */
+  answers?: number
+  /** What is pressed and typed to bring the page where it is looked at. */
+  after?: (page: Page, demo: DemoFleet) => Promise<void>
+}
 
 const [technician, manager, admin, auditor, warehouse] = ['technician', 'manager', 'admin', 'auditor', 'warehouse'] as const
 
@@ -59,6 +67,68 @@ const SCREENS: Record<string, Screen[]> = {
   'van.vue': [{ as: technician, at: () => '/van' }],
 }
 
+/** What pages show only once something is pressed. */
+const PRESSED: Record<string, Screen> = {
+  'a wrong password': { as: 'nobody', at: () => '/sign-in', answers: 401, after: async (page) => {
+    await page.getByLabel('Email address').fill('nobody@demo.example')
+    await page.getByLabel('Password', { exact: true }).fill('not-this-one-0000')
+    await page.getByRole('button', { name: 'Sign in' }).click()
+    await page.getByRole('alert').waitFor()
+  } },
+  'a weight that is missing': { as: warehouse, at: demo => `/c/${demo.codes.usual}/act/weighed`, after: async (page) => {
+    await page.getByRole('button', { name: 'Record the weight' }).click()
+    await page.getByRole('alert').waitFor()
+  } },
+  'what will be found': { as: warehouse, at: demo => `/c/${demo.codes.usual}/act/weighed`, after: async (page) => {
+    await page.getByLabel(/^The scale shows, /).first().fill('600')
+    await page.getByLabel('Record it anyway: it happened').waitFor()
+  } },
+  'what was found': { as: warehouse, at: demo => `/c/${demo.codes.empty}/act/weighed`, after: async (page) => {
+    await page.getByLabel(/^The scale shows, /).first().fill('600')
+    await page.getByLabel('Record it anyway: it happened').check()
+    await page.getByRole('button', { name: 'Record the weight' }).click()
+    await page.getByText('Recorded: weighed').first().waitFor()
+  } },
+  'a known label that was typed': { as: technician, at: () => '/scan', after: (page, demo) => typed(page, demo.codes.usual) },
+  'a label with a stop': { as: technician, at: () => '/scan', after: (page, demo) => typed(page, demo.codes.overfilled) },
+  'a label on no cylinder': { as: technician, at: () => '/scan', answers: 404, after: (page, demo) => typed(page, demo.codes.onNone) },
+  'how the stop weight is worked out': { as: technician, at: demo => `/c/${demo.codes.usual}`, after: async (page) => {
+    for (const summary of await page.locator('summary').all()) await summary.click()
+  } },
+  'a registration with everything missing': { as: warehouse, at: () => '/fleet/register', after: async (page) => {
+    await page.getByRole('button', { name: /^Register/ }).last().click()
+    await page.getByText(/still open/).first().waitFor()
+  } },
+  'cylinders picked in the fleet': { as: manager, at: () => '/fleet?finding=retest-soon', after: async (page) => {
+    await page.locator('input[type=checkbox]:visible').nth(1).check()
+  } },
+  'the menu': { as: admin, at: () => '/people', after: async (page) => {
+    const menu = page.getByRole('button', { name: 'Menu' })
+    if (await menu.isVisible()) await menu.click()
+    await page.getByRole('button', { name: 'Invite a person' }).click()
+    await page.getByRole('heading', { name: 'Invite a person' }).waitFor()
+  } },
+  'a dispatch without weights': { as: manager, at: demo => `/shipments/${demo.shipments.draft}`, after: async (page) => {
+    await page.getByRole('button', { name: /^Dispatch/ }).first().click()
+    await page.getByText(/not weighed yet/).first().waitFor()
+  } },
+  'a dispatch to be confirmed': { as: manager, at: demo => `/shipments/${demo.shipments.draft}`, after: async (page) => {
+    for (const box of await page.getByLabel(/^Gross of .*, pounds/).all()) await box.fill('32')
+    await page.getByRole('button', { name: /^Dispatch/ }).first().click()
+    await page.getByRole('dialog').waitFor()
+  } },
+  'a log that was verified': { as: auditor, at: () => '/log', after: async (page) => {
+    await page.getByRole('button', { name: 'Verify the log' }).click()
+    await page.getByRole('button', { name: 'Verify again' }).waitFor()
+  } },
+}
+
+/** Without a camera the scan screen asks for the code by keys. */
+async function typed(page: Page, code: string): Promise<void> {
+  await page.getByLabel('The label, or the last characters of the stamp').fill(code)
+  await page.getByRole('region', { name: /^(Cylinder|On no cylinder)/ }).or(page.getByText('A label on no cylinder')).first().waitFor()
+}
+
 /** Pages that show nothing, and why. */
 const WITHOUT_SCREEN: Record<string, string> = {
   'index.vue': 'leads on to the first screen of whoever opens it',
@@ -78,15 +148,16 @@ afterAll(async () => {
   await Promise.all([server?.stop(), empty?.stop()])
 })
 
-async function opened({ as, at, empty: onEmpty, answers }: Screen, viewport: typeof PHONE): Promise<{ page: Page, context: BrowserContext, said: string[] }> {
+async function opened({ as, at, empty: onEmpty, answers, after }: Screen, viewport: typeof PHONE): Promise<{ page: Page, context: BrowserContext, said: string[] }> {
   const client = as === 'nobody' ? null : demo.people[as]
   const context = await visit(browser, client, { viewport, reducedMotion: 'reduce', colorScheme: 'light' })
   const said = listenForErrors(context)
   const page = await context.newPage()
   const address = `${(onEmpty ? empty : server).baseUrl}${at(demo)}`
   const answer = await page.goto(address, { waitUntil: 'networkidle' })
-  expect(answer?.status(), 'the page itself, and no word that something broke').toBe(answers ?? 200)
+  expect(answer?.status(), 'the page itself, and no word that something broke').toBe(after ? 200 : answers ?? 200)
   expect(page.url(), 'the page itself, and no other that it led on to').toBe(address)
+  await after?.(page, demo)
   return { page, context, said }
 }
 
@@ -122,6 +193,13 @@ describe('every page', () => {
       const [phone, desk] = await Promise.all([wrongWith(screen, PHONE), wrongWith(screen, DESK)])
       expect({ phone, desk }).toEqual({ phone: [], desk: [] })
     })
+})
+
+describe('what a page shows once something is pressed', () => {
+  it.each(Object.entries(PRESSED))('is as good to read and to press: %s', async (_, screen) => {
+    const [phone, desk] = await Promise.all([wrongWith(screen, PHONE), wrongWith(screen, DESK)])
+    expect({ phone, desk }).toEqual({ phone: [], desk: [] })
+  })
 })
 
 describe('the checks themselves', () => {
