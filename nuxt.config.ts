@@ -32,7 +32,11 @@ export default defineNuxtConfig({
   },
   srcDir: '.',
   // A page is fetched ahead when a hand goes to its link, not because the link is in sight: phones in a plant room.
-  experimental: { defaults: { nuxtLink: { prefetchOn: { interaction: true, visibility: false } } } },
+  experimental: {
+    defaults: { nuxtLink: { prefetchOn: { interaction: true, visibility: false } } },
+    // A page that cannot be fetched must not take this one away: composables/useUnreachedPage.ts.
+    emitRouteChunkError: 'manual',
+  },
   // Without a shared/ folder, and with utils/ imported by path on both sides.
   compatibilityDate: '2026-01-01',
   nitro: {
