@@ -1,6 +1,6 @@
 import { problemOf } from '~~/composables/useApi'
 import { deviceNow, usePostingStore, type NewEvent, type Posted } from '~~/stores/posting'
-import { useSessionStore } from '~~/stores/session'
+import { useKept } from '~~/composables/useKept'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
 
@@ -26,8 +26,7 @@ interface Kept<Draft> {
  */
 export function useEventForm<Draft extends object>(key: string, empty: () => Draft) {
   const posting = usePostingStore()
-  // On a phone that changes hands nobody finds, or records, what another has typed.
-  const storageKey = `collarbook-form ${useSessionStore().user?.id ?? ''} ${key}`
+  const { restored: kept, keep: store } = useKept<Kept<Draft>>(key)
   const draft = ref(empty()) as Ref<Draft>
   const envelope = ref<Envelope>({ at: '', supervisorId: '', note: '' })
   const sent = shallowRef<Kept<Draft>['sent']>(null)
@@ -37,18 +36,17 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
   const posted = shallowRef<Posted | null>(null)
 
   onMounted(() => {
-    const kept = read<Kept<Draft>>(storageKey)
-    if (kept) {
-      draft.value = { ...empty(), ...kept.draft }
-      envelope.value = kept.envelope
-      sent.value = kept.sent
+    if (kept.value) {
+      draft.value = { ...empty(), ...kept.value.draft }
+      envelope.value = kept.value.envelope
+      sent.value = kept.value.sent
       restored.value = true
     }
     watch([draft, envelope], keep, { deep: true })
   })
 
   function keep() {
-    write(storageKey, { draft: draft.value, envelope: envelope.value, sent: sent.value } satisfies Kept<Draft>)
+    store({ draft: draft.value, envelope: envelope.value, sent: sent.value })
   }
 
   function startOver() {
@@ -57,7 +55,7 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
     sent.value = null
     restored.value = false
     problem.value = null
-    nextTick(() => write(storageKey, null))
+    nextTick(() => store(null))
   }
 
   /** Records what the form says; whatever goes wrong, the form stays as it is and says so. */
@@ -68,7 +66,7 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
     try {
       posted.value = await posting.post(event)
       posting.announce(posted.value)
-      write(storageKey, null)
+      store(null)
       return posted.value
     }
     catch (error) {
@@ -95,24 +93,4 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
   }
 
   return { draft, envelope, restored, busy, problem, posted, send, startOver }
-}
-
-function read<T>(key: string): T | null {
-  try {
-    const text = sessionStorage.getItem(key)
-    return text === null ? null : JSON.parse(text) as T
-  }
-  catch {
-    return null
-  }
-}
-
-function write(key: string, value: object | null) {
-  try {
-    if (value === null) sessionStorage.removeItem(key)
-    else sessionStorage.setItem(key, JSON.stringify(value))
-  }
-  catch {
-    // Without storage the entry is kept as long as the page is open.
-  }
 }

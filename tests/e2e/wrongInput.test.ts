@@ -4,10 +4,10 @@ import type { CustodyLogAnswer } from '../../utils/contract/custody'
 import type { MintAnswer } from '../../utils/contract/labels'
 import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser } from '../helpers/browser'
-import { addMember, PASSWORD } from '../helpers/firm'
+import { addMember, PASSWORD, type Member } from '../helpers/firm'
 import { cylinderNow, made, openShop, registered, type Shop } from '../helpers/fleet'
 import { startServer, type TestServer } from '../helpers/server'
-import { visit } from '../helpers/visit'
+import { DESK, visit } from '../helpers/visit'
 
 let server: TestServer
 let shop: Shop
@@ -178,6 +178,62 @@ describe('a recovery whose recording is disturbed', () => {
     await record(page)
     await page.getByText('Recorded: filled').first().waitFor()
     expect(await kindsOf(id)).toEqual(['filled', ...BEFORE])
+    await context.close()
+  })
+})
+
+describe('a desk whose session ended', () => {
+  async function deskAt(member: Member, path: string): Promise<{ page: Page, context: BrowserContext }> {
+    const context = await visit(browser, member.client, { viewport: DESK })
+    const page = await context.newPage()
+    await page.goto(`${server.baseUrl}${path}`, { waitUntil: 'networkidle' })
+    return { page, context }
+  }
+
+  async function signInAgain(page: Page, member: Member): Promise<void> {
+    await page.waitForURL(url => url.pathname === '/sign-in', { waitUntil: 'networkidle' })
+    await page.getByLabel('Email address').fill(member.email)
+    await page.getByLabel('Password', { exact: true }).fill(PASSWORD)
+    await page.getByRole('button', { name: 'Sign in' }).click()
+    await page.getByText('Kept from before:').waitFor()
+  }
+
+  it('still has the stamp that was copied, and lets go of it when told to', async () => {
+    const { page, context } = await deskAt(shop.warehouse, '/fleet/register')
+    const serial = page.getByLabel('Serial', { exact: true })
+    await serial.fill('KX5521')
+    await page.getByLabel('Tare weight, TW, pounds').fill('27.5')
+    await context.clearCookies({ name: 'collarbook' })
+    await page.goto(`${server.baseUrl}/fleet/register`)
+    await signInAgain(page, shop.warehouse)
+    await expect.poll(() => serial.inputValue()).toBe('KX5521')
+    expect(await page.getByLabel('Tare weight, TW, pounds').inputValue()).toBe('27.5')
+    await page.getByRole('button', { name: 'Start over' }).click()
+    await expect.poll(() => serial.inputValue()).toBe('')
+    await page.reload({ waitUntil: 'networkidle' })
+    expect(await page.getByText('Kept from before:').count()).toBe(0)
+    await context.close()
+  })
+
+  it('still has the weights of a shipment, and sends it off once', async () => {
+    const { id, labelCode } = await registered(shop)
+    const shipment = await made<{ id: string }>(shop.manager.client, '/api/shipments', { toFirmId: shop.reclaimer.id, cylinderIds: [id] })
+    const { page, context } = await deskAt(shop.manager, `/shipments/${shipment.id}`)
+    const gross = page.getByLabel(`Gross of ${formatLabelCode(labelCode!)}, pounds`)
+    await gross.fill('40')
+    await context.clearCookies({ name: 'collarbook' })
+    const send = async () => {
+      await page.getByRole('button', { name: 'Dispatch 1 cylinder' }).click()
+      await page.getByRole('dialog').getByRole('button', { name: 'Dispatch 1 cylinder' }).click()
+    }
+    await send()
+    await signInAgain(page, shop.manager)
+    await expect.poll(() => gross.inputValue()).toBe('40')
+    expect(await kindsOf(id)).toEqual(BEFORE)
+    await send()
+    await page.getByText('Print the packing list').waitFor()
+    expect(await kindsOf(id)).toEqual(['sent-for-reclaim', ...BEFORE])
+    expect(await page.getByText('Kept from before:').count()).toBe(0)
     await context.close()
   })
 })
