@@ -93,6 +93,9 @@ const LEFT = 42
 const RIGHT = 99.2
 const WIDTH = RIGHT - LEFT
 
+/** Characters of the firm's name that one line holds at a size to be read. */
+const LONGEST_ON_ONE_LINE = 30
+
 /** The two columns of facts; the second takes the wider ones: ten characters, as 'DOT-4BA400', at full size. */
 const COLUMNS = [
   { left: LEFT, valueLeft: LEFT + 5.4, right: 67.4 },
@@ -128,7 +131,7 @@ export function identityLabel(content: IdentityLabelContent, stock: LabelStock):
     qr: placedSymbol(content.payload, stock),
     frame: { x: LEFT + 0.25, y: 15, width: WIDTH - 0.5, height: 11, thickness: 0.5, upperRadius: 3.2, lowerRadius: 0.8 },
     texts: [
-      { text: content.owner, face: 'words-bold', size: 5, x: LEFT, y: 7.4, align: 'left', maxWidth: 43 },
+      ...ownerTexts(content.owner),
       { text: `${content.copy} of 2`, face: 'figures', size: 3.4, x: RIGHT, y: 7.4, align: 'right', maxWidth: 13 },
       { text: 'Telephone', face: 'words', size: 3.2, x: LEFT, y: 12.4, align: 'left', maxWidth: 16 },
       { text: content.telephone ?? NOT_KNOWN, face: 'figures', size: 3.4, x: LEFT + 17, y: 12.4, align: 'left', maxWidth: WIDTH - 17 },
@@ -141,6 +144,19 @@ export function identityLabel(content: IdentityLabelContent, stock: LabelStock):
       ...(stamp === null ? facts.map(writingLine) : []),
     ],
   }
+}
+
+/** A long name stands on two lines, broken between words near its middle: on one it would be too small to read. */
+function ownerTexts(owner: string): LabelText[] {
+  const line = { face: 'words-bold', x: LEFT, align: 'left', maxWidth: 43 } as const
+  const gaps = [...owner].flatMap((sign, at) => sign === ' ' ? [at] : [])
+  if (owner.length <= LONGEST_ON_ONE_LINE || gaps.length === 0) return [{ ...line, text: owner, size: 5, y: 7.4 }]
+  const middle = owner.length / 2
+  const at = gaps.reduce((best, gap) => Math.abs(gap - middle) < Math.abs(best - middle) ? gap : best)
+  return [
+    { ...line, text: owner.slice(0, at), size: 3.5, y: 5.7 },
+    { ...line, text: owner.slice(at + 1), size: 3.5, y: 9.2 },
+  ]
 }
 
 interface Fact {

@@ -28,6 +28,16 @@ describe('the identity label', () => {
     ])
   })
 
+  it('breaks a long name between words near its middle, and leaves a shorter one whole', () => {
+    const long = 'Heatherington, Montgomery and Featherstonehaugh Refrigeration of the Northwest'
+    expect(textsOf({ owner: long }).slice(0, 2)).toEqual(['Heatherington, Montgomery and Featherstonehaugh', 'Refrigeration of the Northwest'])
+    expect(textsOf({ owner: 'Acme Cooling of the North East' })[0]).toBe('Acme Cooling of the North East')
+    expect(textsOf({ owner: 'Acme Cooling of the North-East.' }).slice(0, 2)).toEqual(['Acme Cooling of', 'the North-East.'])
+    const { texts } = identityLabel({ ...CONTENT, owner: long }, roll)
+    expect(texts[0]!.y - texts[0]!.size).toBeGreaterThanOrEqual(2)
+    expect(texts[1]!.y - texts[1]!.size).toBeGreaterThanOrEqual(texts[0]!.y - 0.001)
+  })
+
   it('tells the second of its pair', () => {
     expect(textsOf({ copy: 2 })).toContain('2 of 2')
   })
