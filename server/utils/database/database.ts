@@ -1,10 +1,11 @@
-import { mkdirSync } from 'node:fs'
+import { mkdirSync, statSync } from 'node:fs'
 import { dirname } from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { fileURLToPath } from 'node:url'
 import { createClient, type Client, type InStatement, type ResultSet } from '@libsql/client'
 import { drizzle, type LibSQLDatabase } from 'drizzle-orm/libsql'
 import * as schema from '../../../drizzle/schema'
+import { StorageUnavailable, storageFailure } from './storageFailure'
 
 /** The custody database: any number of readers, one writer. */
 export interface Database {
@@ -19,14 +20,20 @@ export interface Database {
   /** Holds the writer's queue while work runs: for a read that a write depends on. */
   exclusive: <T>(work: (commit: Database['write']) => Promise<T>) => Promise<T>
   migrate: (folder: string) => Promise<void>
+  /** Resolves where it can be read and, as far as the last write tells, written; rejects where not. */
+  probe: () => Promise<void>
   close: () => void
   /** The database file, or null on a server. */
   file: string | null
 }
 
-/** A busy wait stops the whole process, so it stays short and the retry happens outside the driver. */
-const BUSY_WAIT_MS = 250
-const BUSY_RETRIES = 20
+/** A busy wait stops the whole process, so it stays short and most of the waiting happens outside the driver. */
+const BUSY_WAIT_MS = 50
+const BETWEEN_TRIES_MS = 100
+const BUSY_PATIENCE_MS = 6_000
+
+/** Where the disk is full a small write may still fit: only after this does a probe's own write speak against a failure. */
+const FAILURE_COUNTS_MS = 10_000
 
 /** A drizzle query as a statement for {@link Database.write}. */
 export function statement(query: { toSQL: () => { sql: string, params: unknown[] } }): InStatement {
@@ -56,19 +63,46 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
     return next
   }
 
+  const refuseIfGone = file ? sameFile(file) : () => undefined
+  let failedAt: number | null = null
+
   async function commit(statements: InStatement[]): Promise<ResultSet[]> {
     if (statements.length === 0) return []
-    for (let attempt = 1; ; attempt++) {
+    try {
+      refuseIfGone()
+      const results = await insist(statements)
+      // What was written into a file that has lost its name is gone with the process.
+      refuseIfGone()
+      failedAt = null
+      return results
+    }
+    catch (error) {
+      if (storageFailure(error)) failedAt = Date.now()
+      throw error
+    }
+  }
+
+  async function insist(statements: InStatement[]): Promise<ResultSet[]> {
+    const until = Date.now() + BUSY_PATIENCE_MS
+    for (;;) {
       try {
         return await writer.batch(statements, 'write')
       }
       catch (error) {
         if (!isBusy(error)) throw error
         await writer.reconnect()
-        if (attempt >= BUSY_RETRIES) throw error
-        await wait(5 * attempt + 10 * (attempt % 3))
+        if (Date.now() >= until) throw error
+        await wait(BETWEEN_TRIES_MS)
       }
     }
+  }
+
+  async function probe(): Promise<void> {
+    refuseIfGone()
+    await readClient.execute('SELECT count(*) FROM firm')
+    if (failedAt === null) return
+    if (Date.now() - failedAt < FAILURE_COUNTS_MS) throw new StorageUnavailable('A write has failed just now')
+    await enqueue(() => commit(['UPDATE firm SET name = name']))
   }
 
   return {
@@ -77,11 +111,21 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
     write: statements => enqueue(() => commit(statements)),
     exclusive: work => enqueue(() => work(commit)),
     migrate: folder => enqueue(() => migrateTo(writer, folder)),
+    probe,
     close() {
       writer.close()
       readClient.close()
     },
     file,
+  }
+}
+
+/** Throws where a file is no longer the one that it is now: moved, removed, or another in its place. */
+function sameFile(file: string): () => void {
+  const { dev, ino } = statSync(file)
+  return () => {
+    const now = statSync(file, { throwIfNoEntry: false })
+    if (now?.dev !== dev || now.ino !== ino) throw new StorageUnavailable(`The database file ${file} was moved, removed or replaced`)
   }
 }
 
