@@ -162,3 +162,14 @@ describe('the last administrator', () => {
     expect(body.items.filter(line => line.roles.includes('admin') && !line.invited)).toHaveLength(1)
   })
 })
+
+describe('a person whom two administrators change at once', () => {
+  it('keeps what each of them changed', async () => {
+    const wes = await addMember(admin, 'Wes', ['warehouse'])
+    const answers = await Promise.all([{ active: false }, { name: 'Wesley' }, { certification: 'Type II' }].map(change => admin.client.patch(`/api/people/${wes.id}`, change)))
+    expect(answers.map(answer => answer.status)).toEqual([200, 200, 200])
+    const { body } = await admin.client.get<PeopleAnswer>('/api/people')
+    expect(body.items.find(person => person.id === wes.id)).toMatchObject({ name: 'Wesley', certification: 'Type II', active: false })
+    expect((await wes.client.get('/api/session')).status).toBe(401)
+  })
+})

@@ -78,14 +78,16 @@ export async function takeUpInvitation(token: string, password: string, now: num
   const passwordHash = await hashNewPassword(password)
   const { read, write } = useDatabase()
   const good = read.select({ hash: oneTimeLinks.tokenHash }).from(oneTimeLinks).where(stillGood('invitation', token, now))
+  const { sid, store } = newSession(person.id, passwordHash, now)
   const [, used] = await write([
     // Before the link is used up, and only where it can be: of two at once one sets the password.
     statement(read.update(people).set({ passwordHash }).where(and(eq(people.id, person.id), eq(people.active, true), exists(good)))),
     useUpLink('invitation', token, now),
+    endSessionsOf(person.id, passwordHash),
+    store,
   ])
   if (used?.rows.length === 0) throw linkUnknown()
-  const { sid, store } = newSession(person.id, now)
-  await write([endSessionsOf(person.id), store, securityEntry({ what: 'invitation-taken-up', personId: person.id }, now)])
+  await write([securityEntry({ what: 'invitation-taken-up', personId: person.id }, now)])
   return { user: userOf(person), sid }
 }
 

@@ -39,15 +39,17 @@ export async function personById(id: string): Promise<PersonRow> {
  */
 export async function changePerson(id: string, change: PersonChange, by: Access, now: number): Promise<PersonLine> {
   const before = await personById(id)
-  const after = { ...before, ...change, roles: change.roles ?? rolesOf(before), certification: change.certification === undefined ? before.certification : change.certification }
+  const after = { ...before, ...change, roles: change.roles ?? rolesOf(before) }
   const { read, write } = useDatabase()
   const rights = !sameRoles(rolesOf(before), after.roles) || before.active !== after.active
-  const stays = after.active && after.roles.includes('admin')
-  const { name, roles, trainee, certification, active } = after
-  const update = read.update(people).set({ name, roles, trainee, certification, active })
+  const stays = change.active !== false && (change.roles?.includes('admin') ?? true)
+  // Only what is given: the rest may have been changed by somebody else meanwhile.
+  const update = read.update(people).set(change)
     .where(stays ? eq(people.id, id) : and(eq(people.id, id), anotherAdminThan(id))).returning({ id: people.id })
   // Only where the change took hold: the update before it may have been refused.
-  const changed = read.select({ id: people.id }).from(people).where(and(eq(people.id, id), eq(people.roles, roles), eq(people.active, active)))
+  const changed = read.select({ id: people.id }).from(people).where(and(
+    eq(people.id, id), change.roles && eq(people.roles, change.roles), change.active === undefined ? undefined : eq(people.active, change.active),
+  ))
   const [updated] = await write([
     statement(update),
     ...(rights ? [statement(read.delete(sessions).where(inArray(sessions.personId, changed)))] : []),

@@ -28,11 +28,16 @@ export async function changePassword(user: User, current: string, next: string, 
   attemptSucceeded(user.id, user.id)
   refuseWeakPassword(next, user.email, 'next')
   const passwordHash = await hashNewPassword(next)
-  const { sid, store } = newSession(user.id, now)
+  const { sid, store } = newSession(user.id, passwordHash, now)
   const unchanged = and(eq(people.id, user.id), eq(people.passwordHash, stored))
-  const [updated] = await write([statement(read.update(people).set({ passwordHash }).where(unchanged).returning({ id: people.id }))])
+  // In one commit: with another password no session of before may stand, not even where the server ends in between.
+  const [updated] = await write([
+    statement(read.update(people).set({ passwordHash }).where(unchanged).returning({ id: people.id })),
+    endSessionsOf(user.id, passwordHash),
+    store,
+  ])
   if (updated?.rows.length === 0) throw problem(409, 'Changed meanwhile', 'The password was changed meanwhile.')
-  await write([endSessionsOf(user.id), store, securityEntry({ what: 'password-changed', personId: user.id }, now)])
+  await write([securityEntry({ what: 'password-changed', personId: user.id }, now)])
   return sid
 }
 

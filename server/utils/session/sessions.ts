@@ -1,5 +1,5 @@
 import type { InStatement } from '@libsql/client'
-import { eq } from 'drizzle-orm'
+import { and, eq, inArray } from 'drizzle-orm'
 import { people, sessions } from '../../../drizzle/schema'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
@@ -8,16 +8,27 @@ import { rolesOf, userOf } from './person'
 import { newSecret, secretHash } from './secret'
 import type { User } from '../../../utils/contract/session'
 
-/** A new session of a person: the secret for the cookie, and the statement that stores its hash. */
-export function newSession(personId: string, now: number): { sid: string, store: InStatement } {
+/**
+ * A new session of a person: the secret for the cookie, and the statement that stores its hash and answers a row. It does
+ * so only while the person is active and has this password: a check takes long enough for either to change meanwhile.
+ */
+export function newSession(personId: string, passwordHash: string, now: number): { sid: string, store: InStatement } {
   const sid = newSecret()
-  const row = { secretHash: secretHash(sid), personId, createdAt: now, lastSeenAt: now }
-  return { sid, store: statement(useDatabase().read.insert(sessions).values(row)) }
+  return {
+    sid,
+    store: {
+      sql: `insert into sessions (secret_hash, person_id, created_at, last_seen_at)
+        select ?, id, ?, ? from people where id = ? and active = 1 and password_hash = ? returning person_id`,
+      args: [secretHash(sid), now, now, personId, passwordHash],
+    },
+  }
 }
 
-/** The statement that ends every session of a person. */
-export function endSessionsOf(personId: string): InStatement {
-  return statement(useDatabase().read.delete(sessions).where(eq(sessions.personId, personId)))
+/** The statement that ends every session of a person who now has this password. */
+export function endSessionsOf(personId: string, passwordHash: string): InStatement {
+  const { read } = useDatabase()
+  const changed = read.select({ id: people.id }).from(people).where(and(eq(people.id, personId), eq(people.passwordHash, passwordHash)))
+  return statement(read.delete(sessions).where(inArray(sessions.personId, changed)))
 }
 
 /** The statement that ends one session. */

@@ -60,7 +60,7 @@ export async function setUp({ token, firm: own, admin }: SetUp, now: number): Pr
   if (results.at(-1)?.rows.length === 0) throw linkUnknown()
   const [row] = await read.select().from(people).where(eq(people.id, personId)).limit(1)
   if (!row) throw linkUnknown()
-  const { sid, store } = newSession(personId, now)
+  const { sid, store } = newSession(personId, passwordHash, now)
   await write([store, securityEntry({ what: 'set-up', personId }, now)])
   return { user: userOf(row), sid }
 }
