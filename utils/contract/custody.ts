@@ -3,7 +3,7 @@ import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView
 import type { AnyRecordedEvent } from '../custody/event'
 import type { FillPolicy } from '../capacity/types'
 import type { ProblemDetails } from './problem'
-import { page, type Page } from './parts'
+import { id, page, type Page } from './parts'
 
 /** Most events in one request. */
 export const MOST_EVENTS = 200
@@ -31,14 +31,14 @@ export const SORTS = ['urgency', 'code', 'refrigerant', 'net', 'room', 'due', 'p
 export const fleetQuery = z.strictObject({
   ...page,
   q: z.string().trim().max(80).optional(),
-  place: z.uuid().optional(),
-  holder: z.uuid().optional(),
+  place: id.optional(),
+  holder: id.optional(),
   refrigerant: z.string().max(40).optional(),
   condition: z.enum(['clean', 'suspect', 'burnt', 'mixed', 'unknown']).optional(),
   lifecycle: z.enum(['in-service', 'quarantined', 'rejected', 'at-reclaim', 'at-test', 'missing', 'condemned', 'retired']).optional(),
   dueBefore: z.string().regex(/^\d{4}-(0[1-9]|1[0-2])$/).optional(),
   finding: z.string().max(40).optional(),
-  owner: z.uuid().optional(),
+  owner: id.optional(),
   label: z.string().max(20).optional(),
   sort: z.enum(SORTS).default('urgency'),
   order: z.enum(['asc', 'desc']).default('asc'),

@@ -9,8 +9,7 @@ export const idParams = z.strictObject({ id })
 /** A line of text that a person typed: trimmed, without control characters. */
 export function line(longest: number) {
   return z.string().trim().min(1, 'must not be empty').max(longest, `must be at most ${longest} characters`)
-    // eslint-disable-next-line no-control-regex
-    .regex(/^[^\u0000-\u001F\u007F\u202A-\u202E\u2066-\u2069]*$/, 'must not hold control characters')
+    .regex(/^[^\p{Cc}\p{Cs}\u202A-\u202E\u2066-\u2069]*$/u, 'must not hold control characters')
 }
 
 /** A page of a list: how many, and where the page before ended. */

@@ -4,6 +4,7 @@ import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold } from '../../../utils/custody/fold'
 import type { Database } from '../database/database'
 import { directory, namesOf } from '../directory/directory'
+import { foreignCursor } from '../http/cursor'
 import { codesOnTwo } from './findCylinder'
 import { foldContext } from './foldContext'
 import { logRow, recordedEvent, SELECT_LOG } from './logRow'
@@ -14,7 +15,7 @@ export async function recordedEvents(db: Database, cylinderId: string): Promise<
   return result.rows.map(row => recordedEvent(logRow(row)))
 }
 
-/** A cylinder's custody log for people: in order of effect, newest first, each line numbered by recording. */
+/** A cylinder's custody log for people: in order of effect, newest first, each line numbered by recording. Errors: 400 for a cursor that is none of ours. */
 export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }): Promise<CustodyLogAnswer> {
   const [events, from] = await Promise.all([recordedEvents(db, cylinderId), directory(db)])
   const { state, steps } = fold(events, foldContext(from))
@@ -47,7 +48,8 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
       correction: step.correction,
     }]
   }).reverse()
-  const start = page.cursor ? Math.max(0, lines.findIndex(line => line.id === page.cursor) + 1) : 0
+  const start = page.cursor === undefined ? 0 : lines.findIndex(line => line.id === page.cursor) + 1
+  if (page.cursor !== undefined && start === 0) throw foreignCursor()
   const items = lines.slice(start, start + page.limit)
   return {
     items,

@@ -3,6 +3,7 @@ import type { FleetAnswer, FleetQuery } from '../../../utils/contract/custody'
 import { rowToday, type CachedRow } from '../../../utils/custody/row'
 import type { Database } from '../database/database'
 import { directory, namesOf, type Directory } from '../directory/directory'
+import { foreignCursor } from '../http/cursor'
 import { fleetFilter, type FleetFilter } from './fleetFilter'
 import { dateBounds, type DateBounds } from './dateBounds'
 
@@ -27,7 +28,7 @@ const SORT_SQL: Record<FleetQuery['sort'], (bounds: DateBounds) => { sql: string
   'last-event': () => plain('coalesce(c.last_event_at, 0)'),
 }
 
-/** The fleet, filtered and sorted by the cache of the fold and today's date. */
+/** The fleet, filtered and sorted by the cache of the fold and today's date. Errors: 400 for a cursor that is none of ours. */
 export async function fleet(db: Database, query: FleetQuery, nowMs: number): Promise<FleetAnswer> {
   const from = await directory(db)
   const bounds = dateBounds(from, nowMs)
@@ -132,10 +133,17 @@ function cursorText(value: InValue, id: string): string {
 }
 
 function cursorOf(text: string | undefined): { value: InValue, id: string } | null {
-  if (!text) return null
+  if (text === undefined) return null
+  const parts = parsed(Buffer.from(text, 'base64url').toString('utf8'))
+  if (!Array.isArray(parts) || parts.length !== 2) throw foreignCursor()
+  const [value, id] = parts as unknown[]
+  if (!(typeof value === 'string' || Number.isFinite(value)) || typeof id !== 'string') throw foreignCursor()
+  return { value: value as InValue, id }
+}
+
+function parsed(json: string): unknown {
   try {
-    const [value, id] = JSON.parse(Buffer.from(text, 'base64url').toString('utf8')) as [InValue, string]
-    return (typeof value === 'string' || typeof value === 'number') && typeof id === 'string' ? { value, id } : null
+    return JSON.parse(json)
   }
   catch {
     return null

@@ -1,5 +1,5 @@
 import type { InValue } from '@libsql/client'
-import { problem } from '../http/problem'
+import { foreignCursor } from '../http/cursor'
 import { LISTS, type ListKind } from './lists'
 
 /**
@@ -9,9 +9,7 @@ import { LISTS, type ListKind } from './lists'
  */
 export function pageFilter(kind: ListKind, { state, cursor }: { state?: string, cursor?: string }): { sql: string, args: InValue[] } {
   const { heads } = LISTS[kind]
-  if (cursor !== undefined && !/^[1-9]\d{0,14}$/.test(cursor)) {
-    throw problem(400, 'Malformed', 'The query does not fit.', [{ path: 'cursor', message: 'is none of ours' }])
-  }
+  if (cursor !== undefined && !/^[1-9]\d{0,14}$/.test(cursor)) throw foreignCursor()
   return {
     sql: `(? IS NULL OR ${heads}.state = ?) AND (? IS NULL OR ${heads}.number < ?)`,
     args: [state ?? null, state ?? null, cursor ? Number(cursor) : null, cursor ? Number(cursor) : null],

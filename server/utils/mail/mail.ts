@@ -7,6 +7,7 @@ import type { MailOutcome } from '../../../utils/contract/people'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
 import { useEnvironment } from '../environment'
+import { foreignCursor } from '../http/cursor'
 
 const PATIENCE_MS = 10_000
 const LONGEST_ERROR = 300
@@ -29,10 +30,10 @@ export async function sendMail(letter: Letter, now: number): Promise<MailOutcome
   return error ? 'failed' : 'sent'
 }
 
-/** The letters kept, newest first, a page at a time. */
+/** The letters kept, newest first, a page at a time. Errors: 400 for a cursor that is none of ours. */
 export async function listMail({ limit, cursor }: { limit: number, cursor?: string }): Promise<MailAnswer> {
-  const [at, id] = cursor?.split('_') ?? []
-  const before = at && id ? or(lt(mail.createdAt, Number(at)), and(eq(mail.createdAt, Number(at)), lt(mail.id, id))) : undefined
+  const [at, id] = cursorOf(cursor) ?? []
+  const before = at !== undefined && id !== undefined ? or(lt(mail.createdAt, at), and(eq(mail.createdAt, at), lt(mail.id, id))) : undefined
   const rows = await useDatabase().read.select().from(mail).where(before).orderBy(desc(mail.createdAt), desc(mail.id)).limit(limit + 1)
   const shown = rows.slice(0, limit)
   const last = shown.at(-1)
@@ -40,6 +41,13 @@ export async function listMail({ limit, cursor }: { limit: number, cursor?: stri
     items: shown.map(lineOf),
     nextCursor: rows.length > limit && last ? `${last.createdAt}_${last.id}` : null,
   }
+}
+
+function cursorOf(text: string | undefined): [at: number, id: string] | null {
+  if (text === undefined) return null
+  const [, at, id] = /^(\d{1,15})_([0-9a-f-]{36})$/.exec(text) ?? []
+  if (at === undefined || id === undefined) throw foreignCursor()
+  return [Number(at), id]
 }
 
 /** What the mail server said against it, or null when it took the letter. */

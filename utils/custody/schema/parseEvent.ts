@@ -2,7 +2,7 @@ import { z } from 'zod'
 import type { AnyCustodyEvent } from '../event'
 import { EVENT_KINDS, type EventKind } from '../kinds'
 import { DETAILS } from '.'
-import { instant, line, prose, uuid } from './parts'
+import { deviceName, instant, line, prose, uuid } from './parts'
 
 /** An event that was understood, or what is wrong with it, field by field. */
 export type EventParse
@@ -17,7 +17,7 @@ const envelope = z.strictObject({
   cylinderId: uuid,
   kind: z.enum(EVENT_KINDS, `must be one of ${EVENT_KINDS.join(', ')}`),
   occurredAt: instant,
-  deviceId: z.string('must be a text').max(100, 'must be at most 100 characters').default(''),
+  deviceId: deviceName.default(''),
   deviceSeq: z.int('must be a whole number').nonnegative('must not be negative').default(0),
   placeId: uuid.optional(),
   supervisorId: uuid.optional(),

@@ -8,12 +8,17 @@ const MOST_POUNDS = 100_000
 const MOST_KILOGRAMS = 45_000
 const MOST_PSIG = 10_000
 
-const CONTROL_CHARACTERS = /[\p{Cc}\u202A-\u202E\u2066-\u2069]/u
-const CONTROL_CHARACTERS_BUT_LINE_ENDS = /[\u202A-\u202E\u2066-\u2069]|(?![\n\r\t])\p{Cc}/u
+// Half of a surrogate pair is no character: a database keeps another in its place, and the chain would not close.
+const CONTROL_CHARACTERS = /[\p{Cc}\p{Cs}\u202A-\u202E\u2066-\u2069]/u
+const CONTROL_CHARACTERS_BUT_LINE_ENDS = /[\p{Cs}\u202A-\u202E\u2066-\u2069]|(?![\n\r\t])\p{Cc}/u
 const REFRIGERANT = /^R[A-Z]{0,2}-\d{1,4}[A-Za-z0-9]*(?:\([EZ]\))?$/
 
 /** A UUID, in lower case. */
 export const uuid = z.uuid('must be an id (a UUID)').transform(value => value.toLowerCase())
+
+/** The name a device gives itself; a script has none. */
+export const deviceName = z.string('must be a text').max(100, 'must be at most 100 characters')
+  .refine(text => !CONTROL_CHARACTERS.test(text), 'must not hold control characters')
 
 /** A line that a person typed, without line breaks or control characters. */
 export function line(longest: number) {

@@ -52,6 +52,24 @@ describe('an event as sent', () => {
     expect(faults({ id: 'abc' })).toEqual(['id: must be an id (a UUID)'])
   })
 
+  it('holds no text that a database would give back changed: that would break its chain', () => {
+    for (const text of ['a\u0000b', 'half a pair \uD800', '\uDC00', 'a\nb']) {
+      expect(faults({ deviceId: text }), JSON.stringify(text)).toEqual(['deviceId: must not hold control characters'])
+      if (text !== 'a\nb') expect(faults({ note: text }), JSON.stringify(text)).toEqual(['note: must not hold control characters'])
+    }
+    expect(faults({ deviceId: 'van 3 \u{1F69A}', note: 'two\nlines \u{1F69A}' })).toEqual([])
+  })
+
+  it('that corrects one not known yet holds nothing that has no hash', () => {
+    const corrected = (instead: unknown) => faults({ kind: 'corrected', details: { eventId: idOf(2), reason: 'misread', instead } })
+    const nested = (depth: number): unknown => depth === 0 ? 1 : [nested(depth - 1)]
+    expect(corrected({ gross: { unit: 'lb', value: 41.8 } })).toEqual([])
+    expect(corrected({ gross: nested(7) })).toEqual([])
+    for (const wrong of [{ gross: Infinity }, { gross: nested(8) }, JSON.parse(`{"gross":${'['.repeat(5000)}${']'.repeat(5000)}}`)]) {
+      expect(corrected(wrong)).toEqual(['details.instead: must be the details of the event'])
+    }
+  })
+
   it('that is no object is refused without an id', () => {
     for (const raw of [null, 3, 'x', []]) expect(parseEvent(raw)).toMatchObject({ ok: false, id: null })
     expect(parseEvent({ id: 'mine' })).toMatchObject({ ok: false, id: 'mine' })
