@@ -24,7 +24,8 @@ export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
   if (overfill) return { kind: 'stop', text: excessText(view, unit), reason: overfill.text, source: overfill.source }
   if (!view.stamp) return { kind: 'unk', text: 'Not registered yet', reason: 'Its stamp is not in the log, so no weight can be given.', source: null }
 
-  const refusal = capacity.refusals[0]
+  // That it was used after its end says less than what ended it.
+  const refusal = capacity.refusals.find(each => each.code !== 'after-end') ?? capacity.refusals[0]
   if (refusal) return { kind: 'stop', text: 'Do not fill', reason: refusal.text, source: refusal.source }
   if (!contents.nothingInIt && contents.refrigerant === null) {
     return { kind: 'stop', text: 'Do not fill: contents not known', reason: 'What is in it is not known. Nothing goes in until it is identified or emptied to a deep vacuum.', source: null }
