@@ -29,7 +29,7 @@ export interface Database {
 
 /** A busy wait stops the whole process, so it stays short and most of the waiting happens outside the driver. */
 const BUSY_WAIT_MS = 50
-const BETWEEN_TRIES_MS = 100
+const LONGEST_BETWEEN_TRIES_MS = 400
 const BUSY_PATIENCE_MS = 6_000
 
 /** Where the disk is full a small write may still fit: only after this does a probe's own write speak against a failure. */
@@ -84,7 +84,8 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
 
   async function insist(statements: InStatement[]): Promise<ResultSet[]> {
     const until = Date.now() + BUSY_PATIENCE_MS
-    for (;;) {
+    // Each connection thrown away may keep its file open: so fewer tries the longer it takes.
+    for (let attempt = 1; ; attempt++) {
       try {
         return await writer.batch(statements, 'write')
       }
@@ -92,7 +93,7 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
         if (!isBusy(error)) throw error
         await writer.reconnect()
         if (Date.now() >= until) throw error
-        await wait(BETWEEN_TRIES_MS)
+        await wait(Math.min(LONGEST_BETWEEN_TRIES_MS, 50 * attempt))
       }
     }
   }
