@@ -1,5 +1,5 @@
 import type { CylinderView } from '../custody/cylinderView'
-import { MISSING_WORDS } from '../custody/words'
+import { FINDING_WORDS, MISSING_WORDS } from '../custody/words'
 import { formatMass, type MassUnit } from '../quantity/mass'
 import type { StatusKind } from './status'
 
@@ -24,9 +24,10 @@ export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
   if (overfill) return { kind: 'stop', text: excessText(view, unit), reason: overfill.text, source: overfill.source }
   if (!view.stamp) return { kind: 'unk', text: 'Not registered yet', reason: 'Its stamp is not in the log, so no weight can be given.', source: null }
 
-  // That it was used after its end says less than what ended it.
-  const refusal = capacity.refusals.find(each => each.code !== 'after-end') ?? capacity.refusals[0]
-  if (refusal) return { kind: 'stop', text: 'Do not fill', reason: refusal.text, source: refusal.source }
+  const condemned = view.findings.find(finding => finding.code === 'condemned')
+  if (condemned) return { kind: 'stop', text: 'Condemned: never fill it again', reason: condemned.text, source: condemned.source }
+  const refusal = capacity.refusals[0]
+  if (refusal) return { kind: 'stop', text: `Do not fill: ${FINDING_WORDS[refusal.code]}`, reason: refusal.text, source: refusal.source }
   if (!contents.nothingInIt && contents.refrigerant === null) {
     return { kind: 'stop', text: 'Do not fill: contents not known', reason: 'What is in it is not known. Nothing goes in until it is identified or emptied to a deep vacuum.', source: null }
   }

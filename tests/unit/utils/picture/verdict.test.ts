@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { verdictOf, verdictOfScan } from '../../../../utils/picture/verdict'
 import { fold } from '../../../../utils/custody/fold'
 import { view } from '../../../../utils/custody/view'
-import { did, filled, FOLD_CONTEXT, recorded, registered, STAMP, VIEW_CONTEXT, type Told } from '../../../helpers/custody'
+import { did, filled, FOLD_CONTEXT, recorded, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, weighed, type Told } from '../../../helpers/custody'
 
 // Tare 12 kg, water capacity 20 kg: room for 16 kg of R-22 in the empty cylinder.
 function verdict(story: Told[], context: Partial<typeof VIEW_CONTEXT> = {}) {
@@ -36,6 +36,17 @@ describe('the first line said of a cylinder', () => {
 
   it('is a stop where nobody knows what is in it, never a room', () => {
     expect(verdict([registered({ contents: 'unknown', gross: { unit: 'kg', value: 15 } })])).toMatchObject({ kind: 'stop', text: 'Do not fill: contents not known' })
+  })
+
+  it('says in the line itself why nothing may go in', () => {
+    const said = verdict([registered(), filled('R-22', 20)], { nowMs: Date.UTC(2040, 0, 1) })
+    expect(said).toMatchObject({ kind: 'stop', text: 'Do not fill: retest overdue' })
+    expect(said.reason).not.toBeNull()
+  })
+
+  it('names the end of a condemned cylinder before all else that keeps it from being filled', () => {
+    const condemned = did('retested', { month: '2026-07', method: 'visual', result: 'condemned', requalifierId: REQUALIFIER })
+    expect(verdict([registered(), condemned, weighed(12)])).toMatchObject({ kind: 'stop', text: 'Condemned: never fill it again' })
   })
 
   it('names what is missing from the stamp', () => {
