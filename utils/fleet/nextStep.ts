@@ -23,6 +23,7 @@ export function nextStep(row: CylinderRow): NextStep | null {
   if (has('retest-overdue') || has('early-test') || has('retest-unknown')) {
     return row.nothingInIt ? { word: 'Send to test', screen: 'test-lot' } : { word: 'Empty or ship it', screen: 'shipment' }
   }
+  if (has('wet')) return { word: 'Evacuate it', screen: 'cylinder' }
   if (row.worstFinding?.severity === 'stop') return { word: 'See why', screen: 'cylinder' }
   if (row.labelCode === null) return { word: 'Label it', screen: 'label' }
   if (!row.nothingInIt && row.netGrams === null) return { word: 'Weigh it', screen: 'cylinder' }

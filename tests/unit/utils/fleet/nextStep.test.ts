@@ -17,6 +17,10 @@ describe('what to do with a cylinder next', () => {
     expect(nextStep(cylinderRow({ refrigerant: null }))?.word).toBe('Identify it')
   })
 
+  it('is to evacuate what came back wet from its test', () => {
+    expect(nextStep(cylinderRow({ nothingInIt: true, refrigerant: null, findingCodes: ['wet'], worstFinding: { code: 'wet', severity: 'stop' } }))?.word).toBe('Evacuate it')
+  })
+
   it('is nothing where its life has ended', () => {
     expect(nextStep(cylinderRow({ lifecycle: 'condemned' }))).toBeNull()
   })
