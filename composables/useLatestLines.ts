@@ -1,0 +1,27 @@
+import { useApi } from '~~/composables/useApi'
+import { useFirmRulesStore } from '~~/stores/firmRules'
+import { usePostingStore } from '~~/stores/posting'
+import { useSessionStore } from '~~/stores/session'
+import type { CustodyLogAnswer } from '~~/utils/contract/custody'
+
+const LINES_SHOWN = 6
+
+/** The newest lines of the log of the cylinder that this page's address names, with the firm's time zone to show them in. */
+export function useLatestLines() {
+  const api = useApi()
+  const route = useRoute('c-ref')
+  const session = useSessionStore()
+  const rules = useFirmRulesStore()
+  const posting = usePostingStore()
+
+  const request = useAsyncData(() => `around-${String(route.params.ref)}`, async () => {
+    if (!session.user) return null
+    const [log] = await Promise.all([
+      api.get<CustodyLogAnswer>(`/api/cylinders/${encodeURIComponent(String(route.params.ref))}/events`, { limit: LINES_SHOWN }).catch(() => null),
+      rules.load(),
+    ])
+    return { lines: log?.items ?? [], total: log?.total ?? 0 }
+  }, { watch: [() => posting.recorded] })
+
+  return { ready: request as PromiseLike<unknown>, latest: request.data }
+}
