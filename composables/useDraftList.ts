@@ -1,14 +1,17 @@
 import { ApiError, problemOf, useApi } from '~~/composables/useApi'
 import { useLoaded } from '~~/composables/useLoaded'
+import { deviceNow } from '~~/stores/posting'
 import type { CylinderRow, CylinderView } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
+import type { Finding } from '~~/utils/custody/finding'
 import { readScannedText } from '~~/utils/label/code'
 import { changedLines, cylinderName } from '~~/utils/shipment/changedLines'
 
-interface List { id: string, state: string, lines: { cylinder: CylinderRow, version: number }[] }
+/** What a shipment and a test lot have in common. */
+export interface DraftList { id: string, state: string, lines: { cylinder: CylinderRow, version: number, because: Finding[] }[] }
 
 /** A shipment or a test lot with its lines, and what may be done to it while it is a draft. */
-export function useDraftList<L extends List>(kind: 'shipments' | 'test-lots', id: string) {
+export function useDraftList<L extends DraftList>(kind: 'shipments' | 'test-lots', id: string) {
   const api = useApi()
   const path = `/api/${kind}/${id}`
   const loaded = useLoaded(`${kind}-${id}`, () => api.get<L>(path))
@@ -77,9 +80,11 @@ export function useDraftList<L extends List>(kind: 'shipments' | 'test-lots', id
     return act(() => api.post<L>(`${path}/cancel`, {}))
   }
 
-  function post(what: 'dispatch' | 'receipt' | 'return', body: unknown): Promise<boolean> {
-    return act(() => api.post<L>(`${path}/${what}`, body))
+  /** Records for all of its lines at once what happens now. */
+  function record(what: 'dispatch' | 'receipt' | 'return', body: object): Promise<boolean> {
+    const now = deviceNow()
+    return act(() => api.post<L>(`${path}/${what}`, { occurredAt: now, deviceNow: now, ...body }))
   }
 
-  return { ...loaded, busy, actProblem: problem, changes, add, takeOff, putBack, cancel, post }
+  return { ...loaded, busy, actProblem: problem, changes, add, takeOff, putBack, cancel, record }
 }

@@ -27,5 +27,8 @@ export function useNotice() {
 
   onBeforeUnmount(() => clearTimeout(timer))
 
-  return { text, undo, say, clear, takeBack }
+  /** Handed to the notice whole: `<BaseToast v-bind="toast" />`. */
+  const toast = computed(() => ({ text: text.value, undo: undo.value !== null, onUndo: takeBack, onClose: clear }))
+
+  return { toast, say, clear }
 }
