@@ -67,4 +67,27 @@ describe('dispatching a shipment', () => {
     expect(form.wrapper.element.textContent).toContain('2.1\u00A0lb less than last known.')
     form.wrapper.unmount()
   })
+
+  it('weighs a cylinder anew that was taken off and put back', async () => {
+    const form = await mount()
+    await form.weigh('0YH P9K RRT', '50.1')
+    await form.weigh('7K3 M9Q 2TX', '49.9')
+    const both = form.wrapper.props('lines')
+    await form.wrapper.setProps({ lines: both.slice(1) })
+    await form.wrapper.setProps({ lines: both })
+    expect(form.wrapper.findAll('input').map(input => input.element.value)).toEqual(['', '49.9'])
+    expect(form.wrapper.emitted('change')!.at(-1)).toEqual([{ a: null, b: { unit: 'lb', value: 49.9 } }])
+    form.wrapper.unmount()
+  })
+
+  it('asks no more for what is on the list no more', async () => {
+    const form = await mount()
+    await form.weigh('0YH P9K RRT', '50.1')
+    await form.weigh('7K3 M9Q 2TX', '49.9')
+    await form.wrapper.find('form').trigger('submit')
+    expect(form.dialog().open).toBe(true)
+    await form.wrapper.setProps({ lines: [...form.wrapper.props('lines'), line('c', '4TR8W2HN6', 1)] })
+    expect(form.dialog().open).toBe(false)
+    form.wrapper.unmount()
+  })
 })
