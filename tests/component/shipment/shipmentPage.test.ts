@@ -1,5 +1,6 @@
 import { mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
-import { describe, expect, it, vi } from 'vitest'
+import { readBody } from 'h3'
+import { beforeEach, describe, expect, it, vi } from 'vitest'
 import ShipmentPage from '~~/pages/shipments/[id].vue'
 import { useSessionStore } from '~~/stores/session'
 import type { User } from '~~/utils/contract/session'
@@ -21,22 +22,57 @@ function draft(lines: ShipmentLine[]) {
 }
 
 registerEndpoint(`/api/shipments/${ID}`, () => draft(LINES))
-registerEndpoint(`/api/shipments/${ID}/lines`, { method: 'PUT', handler: () => draft(LINES.slice(1)) })
+registerEndpoint(`/api/shipments/${ID}/lines`, {
+  method: 'PUT',
+  handler: async (event) => {
+    const { cylinderIds } = await readBody<{ cylinderIds: string[] }>(event)
+    return draft(LINES.filter(line => cylinderIds.includes(line.cylinder.id)))
+  },
+})
 registerEndpoint('/api/policy', () => ({ timeZone: 'America/Chicago', fillPolicies: [], scales: [], retest: { soonDays: 120 } }))
 registerEndpoint('/api/session', () => ({ user: MANAGER }))
 
+async function open() {
+  const page = await mountSuspended(ShipmentPage, { route: `/shipments/${ID}`, attachTo: document.body })
+  const boxOf = (code: string) => page.findAll('input').find(input => input.element.closest('label')?.textContent?.includes(code))
+  await vi.waitFor(() => expect(boxOf('0YH P9K RRT')).toBeDefined())
+  return {
+    page,
+    boxOf,
+    press: (name: string) => byRole(page.element.parentElement!, 'button', name).click(),
+  }
+}
+
 describe('a shipment that is being weighed', () => {
-  it('keeps the weights of the cylinders that stay when one is taken off', async () => {
+  beforeEach(() => {
+    sessionStorage.clear()
     useSessionStore().set(MANAGER)
-    const page = await mountSuspended(ShipmentPage, { route: `/shipments/${ID}`, attachTo: document.body })
-    const boxOf = (code: string) => page.findAll('input').find(input => input.element.closest('label')?.textContent?.includes(code))
-    await vi.waitFor(() => expect(boxOf('7K3 M9Q 2TX')).toBeDefined())
+  })
+
+  it('keeps the weights of the cylinders that stay when one is taken off', async () => {
+    const { page, boxOf, press } = await open()
     await boxOf('0YH P9K RRT')!.setValue('50.1')
     await boxOf('7K3 M9Q 2TX')!.setValue('49.9')
-    byRole(page.element.parentElement!, 'button', 'Take off 0YH P9K RRT').click()
+    press('Take off 0YH P9K RRT')
     await vi.waitFor(() => expect(boxOf('0YH P9K RRT')).toBeUndefined())
     expect(boxOf('7K3 M9Q 2TX')!.element.value).toBe('49.9')
     expect(page.text()).toContain('1 of 1 weighed')
+    page.unmount()
+  })
+
+  it('forgets the weights kept from before once none is left on it', async () => {
+    const before = await open()
+    await before.boxOf('7K3 M9Q 2TX')!.setValue('49.9')
+    before.page.unmount()
+    const { page, boxOf, press } = await open()
+    await vi.waitFor(() => expect(boxOf('7K3 M9Q 2TX')!.element.value).toBe('49.9'))
+    press('Take off 0YH P9K RRT')
+    await vi.waitFor(() => expect(boxOf('0YH P9K RRT')).toBeUndefined())
+    press('Take off 7K3 M9Q 2TX')
+    await vi.waitFor(() => expect(page.text()).toContain('No cylinder is on this shipment yet.'))
+    press('Undo')
+    await vi.waitFor(() => expect(boxOf('7K3 M9Q 2TX')).toBeDefined())
+    expect(boxOf('7K3 M9Q 2TX')!.element.value).toBe('')
     page.unmount()
   })
 })
