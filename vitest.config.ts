@@ -29,7 +29,7 @@ export default defineConfig(async () => ({
         test: {
           name: 'component',
           include: ['tests/component/**/*.test.ts'],
-          setupFiles: ['tests/setup/component.ts'],
+          setupFiles: ['tests/helpers/nobodySignedIn.ts'],
           environment: 'nuxt',
           environmentOptions: { nuxt: { domEnvironment: 'happy-dom' } },
         },
