@@ -30,8 +30,8 @@ export async function openShop(server: TestServer): Promise<Shop> {
   const manager = await addMember(admin, 'Mona', ['manager'])
   const auditor = await addMember(admin, 'Otto', ['auditor'])
   const shop = await made<Place>(admin.client, '/api/places', { name: 'North shop', kind: 'shop' })
-  const reclaimer = await made<Firm>(admin.client, '/api/firms', { name: 'Clearwater Reclaim', kind: 'reclaimer' })
-  const requalifier = await made<Firm>(admin.client, '/api/firms', { name: 'Gauge Point Testing', kind: 'requalifier', rin: 'A123' })
+  const reclaimer = await made<Firm>(admin.client, '/api/firms', { name: 'Tarnvale Reclaim', kind: 'reclaimer' })
+  const requalifier = await made<Firm>(admin.client, '/api/firms', { name: 'Ostwick Cylinder Tests', kind: 'requalifier', rin: 'A123' })
   return { admin, warehouse, technician, manager, auditor, shop, reclaimer, requalifier }
 }
 

@@ -77,7 +77,7 @@ describe('a shipment that is changed while it is sent off', () => {
   let first: string
   let second: string
   beforeEach(async () => {
-    firmId = (await createFirm(db, { name: 'Clearwater Reclaim', kind: 'reclaimer' }, NOW)).id
+    firmId = (await createFirm(db, { name: 'Tarnvale Reclaim', kind: 'reclaimer' }, NOW)).id
     first = await registered(R22)
     second = await registered(R22)
     await createDraft(db, draft, { firmId, note: null, cylinderIds: [first], createdBy: MONA.personId, now: NOW })
@@ -116,7 +116,7 @@ describe('a test lot that is changed while it is sent off or taken back', () => 
   const draft = { kind: 'test-lot' as const, id: randomUUID() }
   let cylinder: string
   beforeEach(async () => {
-    firmId = (await createFirm(db, { name: 'Gauge Point Testing', kind: 'requalifier', rin: 'A123' }, NOW)).id
+    firmId = (await createFirm(db, { name: 'Ostwick Cylinder Tests', kind: 'requalifier', rin: 'A123' }, NOW)).id
     cylinder = await registered('evacuated')
     await createDraft(db, draft, { firmId, note: null, cylinderIds: [cylinder], createdBy: MONA.personId, now: NOW })
   })

@@ -118,7 +118,7 @@ describe('what a page tells', () => {
   it('about a cylinder found by a stranger is the firm\'s name and telephone, the same for every code', async () => {
     const known = await pageOf(nobody, `/c/${cylinder.labelCode!.toLowerCase()}`)
     expect(known.status).toBe(200)
-    expect(known.body).toContain('Harbor Cooling')
+    expect(known.body).toContain('Quillfen Cooling')
     expect(known.body).toContain('555-0100')
     const itsOwn = ['QX77301', 'R-22', cylinder.id, 'North shop', 'DOT-4BA', '47.6', '27.5', shop.warehouse.id, 'Wes']
     expect(itsOwn.filter(text => known.body.includes(text))).toEqual([])

@@ -111,7 +111,7 @@ describe('firms', () => {
 
   it('are listed by kind, made by an admin alone', async () => {
     const { body } = await firm.technician.client.get<FirmsAnswer>('/api/firms?kind=requalifier')
-    expect(body.items.map(one => one.name)).toEqual(['Gauge Point Testing'])
+    expect(body.items.map(one => one.name)).toEqual(['Ostwick Cylinder Tests'])
     for (const person of [firm.warehouse, firm.technician, firm.manager, firm.auditor]) {
       expect((await person.client.post('/api/firms', { name: 'R', kind: 'customer' })).status).toBe(403)
       expect((await person.client.patch(`/api/firms/${firm.reclaimer.id}`, { name: 'R' })).status).toBe(403)

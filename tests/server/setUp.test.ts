@@ -13,7 +13,7 @@ beforeAll(async () => {
 afterAll(() => server?.stop())
 
 function request(token: string, change: Record<string, unknown> = {}) {
-  return { token, firm: { name: 'Harbor Cooling', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb' }, admin: ADMIN, ...change }
+  return { token, firm: { name: 'Quillfen Cooling', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb' }, admin: ADMIN, ...change }
 }
 
 describe('setting up', () => {
@@ -61,10 +61,10 @@ describe('setting up', () => {
 
   it('then tells a finder whom to ring, and nothing else', async () => {
     const client = new TestClient(server.baseUrl)
-    expect((await client.get('/api/firm/card')).body).toEqual({ name: 'Harbor Cooling', telephone: '555-0100' })
+    expect((await client.get('/api/firm/card')).body).toEqual({ name: 'Quillfen Cooling', telephone: '555-0100' })
     expect((await client.get('/api/firm')).status).toBe(401)
     await client.signIn(ADMIN.email, ADMIN.password)
-    expect((await client.get('/api/firm')).body).toEqual({ name: 'Harbor Cooling', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb' })
+    expect((await client.get('/api/firm')).body).toEqual({ name: 'Quillfen Cooling', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb' })
     expect((await client.patch('/api/firm', { telephone: '555-0101' })).body).toMatchObject({ telephone: '555-0101' })
   })
 

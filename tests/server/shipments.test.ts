@@ -35,7 +35,7 @@ describe('a shipment to a reclaimer', () => {
   it('leaves with the weight of each line, is received with the reclaimer\'s, and frees its cylinders', async () => {
     const cylinders = [await registered(firm), await registered(firm)]
     const shipment = await draft(cylinders, { note: 'Gate 4' })
-    expect(shipment).toMatchObject({ state: 'draft', note: 'Gate 4', cylinders: 2, to: { name: 'Clearwater Reclaim' } })
+    expect(shipment).toMatchObject({ state: 'draft', note: 'Gate 4', cylinders: 2, to: { name: 'Tarnvale Reclaim' } })
     // 40.0 - 27.5 = 12.5 lb = 5669.9 g a cylinder.
     expect(shipment.netGrams).toBe(11_340)
     expect(shipment.lines.map(line => line.because)).toEqual([[], []])
@@ -46,7 +46,7 @@ describe('a shipment to a reclaimer', () => {
     // 39.0 lb = 17690.1 g; 39.0 - 27.5 = 11.5 lb = 5216.3 g.
     expect(sent.body.lines[0]!.sent).toEqual({ gross: lb(39), grossGrams: 17_690, refrigerant: 'R-22', condition: 'clean', netGrams: 5_216 })
     const away = await cylinderNow(firm.auditor.client, cylinders[0]!.id)
-    expect(away).toMatchObject({ lifecycle: 'at-reclaim', place: { name: 'Clearwater Reclaim' }, contents: { inStock: false } })
+    expect(away).toMatchObject({ lifecycle: 'at-reclaim', place: { name: 'Tarnvale Reclaim' }, contents: { inStock: false } })
 
     const receipt = {
       occurredAt: new Date().toISOString(),

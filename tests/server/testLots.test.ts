@@ -63,8 +63,8 @@ describe('a lot for the test station', () => {
   it('comes back line by line, each with what the test found', async () => {
     const [good, bad] = [await empty(), await empty()]
     const lot = await sentOff([good, bad])
-    expect(lot).toMatchObject({ state: 'sent', requalifier: { name: 'Gauge Point Testing', rin: 'A123' }, cylinders: 2, backAt: null })
-    expect(await cylinderNow(firm.auditor.client, good.id)).toMatchObject({ lifecycle: 'at-test', place: { name: 'Gauge Point Testing' } })
+    expect(lot).toMatchObject({ state: 'sent', requalifier: { name: 'Ostwick Cylinder Tests', rin: 'A123' }, cylinders: 2, backAt: null })
+    expect(await cylinderNow(firm.auditor.client, good.id)).toMatchObject({ lifecycle: 'at-test', place: { name: 'Ostwick Cylinder Tests' } })
 
     const first = await returned(lot.id, backFromTest([good, { result: 'passed', newTare: lb(27.4) }]))
     expect(first.status).toBe(200)

@@ -14,12 +14,21 @@ export function localIso(ms: number, timeZone: string): string {
 
 /** Some minute of a working day, so many days after an instant; a weekend goes on to Monday. */
 export function workingTime(from: number, days: number, random: Random): number {
-  const day = new Date(from + days * DAY)
+  return startOfWork(from + days * DAY) + random.whole(0, 8 * 60) * MINUTE
+}
+
+/** An hour into the working day of an instant: when a dispatch leaves. */
+export function workingMorning(at: number): number {
+  return startOfWork(at) + HOUR
+}
+
+function startOfWork(at: number): number {
+  const day = new Date(at)
   const weekday = day.getUTCDay()
   if (weekday === 0 || weekday === 6) day.setUTCDate(day.getUTCDate() + (weekday === 6 ? 2 : 1))
   // 14 to 22 h UTC is the working day of the demo's time zone.
   day.setUTCHours(14, 0, 0, 0)
-  return day.getTime() + random.whole(0, 8 * 60) * MINUTE
+  return day.getTime()
 }
 
 /** 'YYYY-MM', so many months after the month of an instant. */

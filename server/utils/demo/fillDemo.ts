@@ -2,7 +2,7 @@ import { meta } from '../../../drizzle/schema'
 import { drawLabelCode } from '../../../utils/label/code'
 import { statement, type Database } from '../database/database'
 import { directory } from '../directory/directory'
-import { DAY, workingTime } from './calendar'
+import { DAY, workingMorning } from './calendar'
 import { castOf } from './cast'
 import { playIncidents } from './incidents'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
@@ -58,8 +58,8 @@ async function refuseUnlessEmpty(db: Database): Promise<void> {
 function shipmentsOf(uuid: (ms: number) => string, startAt: number, now: number): DemoShipment[] {
   const list: DemoShipment[] = []
   for (let at = startAt + 45 * DAY; at < now - 3 * DAY; at += 14 * DAY) {
-    const day = workingDay(at)
-    list.push({ id: uuid(day), at: day, backAt: workingDay(day + 35 * DAY), to: list.length % 4 === 3 ? 'otherReclaimer' : 'reclaimer', cylinders: [] })
+    const day = workingMorning(at)
+    list.push({ id: uuid(day), at: day, backAt: workingMorning(day + 35 * DAY), to: list.length % 4 === 3 ? 'otherReclaimer' : 'reclaimer', cylinders: [] })
   }
   return list
 }
@@ -68,14 +68,10 @@ function shipmentsOf(uuid: (ms: number) => string, startAt: number, now: number)
 function lotsOf(uuid: (ms: number) => string, startAt: number, now: number): DemoLot[] {
   const list: DemoLot[] = []
   for (let at = startAt + 60 * DAY; at < now - 5 * DAY; at += 30 * DAY) {
-    const day = workingDay(at)
-    list.push({ id: uuid(day), at: day, backAt: workingDay(day + 21 * DAY), cylinders: [] })
+    const day = workingMorning(at)
+    list.push({ id: uuid(day), at: day, backAt: workingMorning(day + 21 * DAY), cylinders: [] })
   }
   return list
-}
-
-function workingDay(at: number): number {
-  return workingTime(at, 0, { whole: () => 60 } as never)
 }
 
 /** The codes that the script's `labelled` events put on cylinders. */

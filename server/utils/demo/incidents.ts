@@ -87,7 +87,7 @@ function wrongSteel(stage: Stage): void {
   fill(stage, made(stage, 5, 'middle', { flammableMarked: true }).steel, { refrigerant: 'R-717', pounds: 8, days: 19 })
   fill(stage, made(stage, 5, 'low').steel, { refrigerant: 'R-123', pounds: 16, days: 11 })
   const disposable = newSteel(stage.random, daysAgo(stage, 100), 'small', {
-    spec: 'DOT-39', servicePressurePsig: 260, tareWeight: { unit: 'lb', value: 6.1 }, waterCapacity: { unit: 'lb', value: 29.8 }, madeMonth: monthFrom(stage.endAt, -20) as never,
+    spec: 'DOT-39', servicePressurePsig: 260, tareWeight: { unit: 'lb', value: 6.1 }, waterCapacity: { unit: 'lb', value: 29.8 }, madeMonth: monthFrom(stage.endAt, -20),
   })
   registerAt(stage, disposable, daysAgo(stage, 100), cast.racks[2]!.id)
   fill(stage, disposable, { refrigerant: 'R-134a', pounds: 6, days: 28 })
@@ -120,7 +120,7 @@ function tests(stage: Stage): void {
   const { manager, warehouse } = cast.people
   const requalifierId = cast.firms.requalifier.id
   const retest = (steel: Steel, days: number, result: 'passed' | 'rejected' | 'condemned', more: object = {}) =>
-    script.add(manager, daysAgo(stage, days), steel.id, 'retested', { month: monthFrom(daysAgo(stage, days), 0) as never, method: 'volumetric', result, requalifierId, ...more }, { lateMs: 10 * MINUTE })
+    script.add(manager, daysAgo(stage, days), steel.id, 'retested', { month: monthFrom(daysAgo(stage, days), 0), method: 'volumetric', result, requalifierId, ...more }, { lateMs: 10 * MINUTE })
   retest(made(stage, 8).steel, 5, 'passed')
   retest(made(stage, 8).steel, 34, 'rejected')
   const condemned = made(stage, 8).steel

@@ -79,7 +79,7 @@ export function registerAt(stage: Stage, steel: Steel, at: number, placeId: stri
   const { script, cast } = stage
   script.add(cast.people.warehouse, at, steel.id, 'registered', {
     stamp: steel.stamp,
-    marks: [{ month: steel.testedMonth as never, rin: 'Z987' }],
+    marks: [{ month: steel.testedMonth, rin: 'Z987' }],
     ownership: 'own',
     ...(dedicatedTo ? { dedicatedTo } : {}),
     contents: 'evacuated',
@@ -168,7 +168,7 @@ function evacuate(stage: Stage, steel: Steel, at: number): number | null {
 }
 
 function dueSoon(steel: Steel, at: number): boolean {
-  return addMonths(steel.testedMonth as never, 60 - 3) <= new Date(at).toISOString().slice(0, 7)
+  return addMonths(steel.testedMonth, 60 - 3) <= new Date(at).toISOString().slice(0, 7)
 }
 
 /** To the test station with the next lot, back passed and wet, evacuated; null where it is still away at the end. */
@@ -182,7 +182,7 @@ function joinLot(stage: Stage, steel: Steel, from: number, shopId: string): numb
   if (lot.backAt > endAt) return null
   const month = new Date(lot.backAt - 4 * DAY).toISOString().slice(0, 7)
   steel.testedMonth = month
-  script.add(manager, lot.backAt, steel.id, 'retested', { month: month as never, method: 'volumetric', result: 'passed', requalifierId: cast.firms.requalifier.id }, { lateMs: 30 * MINUTE })
+  script.add(manager, lot.backAt, steel.id, 'retested', { month, method: 'volumetric', result: 'passed', requalifierId: cast.firms.requalifier.id }, { lateMs: 30 * MINUTE })
   script.add(warehouse, lot.backAt + HOUR, steel.id, 'returned', { fromFirmId: cast.firms.requalifier.id, gross: weigh(steel, 'lb') }, { placeId: shopId })
   return evacuate(stage, steel, workingTime(lot.backAt + HOUR, random.between(0, 3), random) + 6 * HOUR)
 }

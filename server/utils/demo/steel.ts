@@ -38,7 +38,7 @@ export function newSteel(random: Random, at: number, size: SteelSize, more: Part
   const tare: MassReading = { unit: 'lb', value: Math.round((twLb + random.between(-0.5, 0.5)) * 10) / 10 }
   const whole: Stamp = {
     serial: `${random.pick(['K', 'H', 'T'])}${random.whole(20000, 98999)}`,
-    maker: random.pick(['M4417', 'M2093']),
+    maker: random.pick(['QZT', 'VHX']),
     spec,
     servicePressurePsig: psig,
     tareWeight: tare,
