@@ -296,7 +296,7 @@ describe('signing in', () => {
     const page = await context.newPage()
     await page.goto(`${server.baseUrl}/sign-in`, { waitUntil: 'networkidle' })
     const said: string[] = []
-    for (const email of [shop.technician.email, 'nobody@quillfen.example']) {
+    for (const email of [shop.technician.email, 'nobody@harbor.example']) {
       await page.getByLabel('Email address').fill(email)
       await page.getByLabel('Password', { exact: true }).fill('not-this-one-0000')
       const [answer] = await Promise.all([

@@ -4,7 +4,7 @@ import type { InvitedAnswer } from '../../utils/contract/people'
 import { TestClient } from './client'
 import type { TestServer } from './server'
 
-export const ADMIN = { name: 'Ada Lind', email: 'ada@quillfen.example', password: 'copper-elbow-1987' }
+export const ADMIN = { name: 'Ada Lind', email: 'ada@harbor.example', password: 'copper-elbow-1987' }
 export const PASSWORD = 'brazed-joint-4411'
 
 export interface Member { id: string, email: string, password: string, client: TestClient }
@@ -23,7 +23,7 @@ export async function setUpFirm(server: TestServer): Promise<Member> {
 
 /** Invites a person and takes the invitation up, as that person would from the letter; answers them signed in. */
 export async function addMember(admin: Member, name: string, roles: Role[], more: { trainee?: boolean } = {}): Promise<Member> {
-  const email = `${name.toLowerCase()}@quillfen.example`
+  const email = `${name.toLowerCase()}@harbor.example`
   const invited = await admin.client.post<InvitedAnswer>('/api/people', { name, email, roles, ...more })
   if (invited.status !== 201) throw new Error(`The invitation answered ${invited.status}: ${JSON.stringify(invited.body)}`)
   const client = new TestClient(admin.client.baseUrl)

@@ -65,6 +65,6 @@ describe('the settings of the server', () => {
   it('refuse a public address with a path, and a mail server without a sender', () => {
     expect(refusal({ PUBLIC_URL: 'https://firm.example/collarbook' })).toMatch(/^PUBLIC_URL/)
     expect(refusal({ SMTP_URL: 'smtp://mail.example' })).toMatch(/^MAIL_FROM/)
-    expect(refusal({ SMTP_URL: 'smtp://mail.example', MAIL_FROM: 'cylinders@quillfen.example' })).toBe('')
+    expect(refusal({ SMTP_URL: 'smtp://mail.example', MAIL_FROM: 'cylinders@harbor.example' })).toBe('')
   })
 })

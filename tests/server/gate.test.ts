@@ -28,7 +28,7 @@ function raw(headers: Record<string, string>, body: string, path = '/api/people'
 }
 
 const OWN = { 'sec-fetch-site': 'same-origin', 'content-type': 'application/json' }
-const PERSON = JSON.stringify({ name: 'Eve', email: 'eve@quillfen.example', roles: ['admin'] })
+const PERSON = JSON.stringify({ name: 'Eve', email: 'eve@harbor.example', roles: ['admin'] })
 
 describe('the gate of the running server', () => {
   it.each([
@@ -99,11 +99,11 @@ describe('the gate of the running server', () => {
 
 describe('a server that people reach by https', () => {
   it('keeps its cookie for that host and asks for https from then on', async () => {
-    const secure = await startServer({ env: { PUBLIC_URL: 'https://cylinders.quillfen.example' } })
+    const secure = await startServer({ env: { PUBLIC_URL: 'https://cylinders.harbor.example' } })
     try {
       const { client } = await setUpFirm(secure)
       expect([...client.cookies.keys()]).toEqual(['__Host-collarbook'])
-      const again = await client.signIn('ada@quillfen.example', 'copper-elbow-1987')
+      const again = await client.signIn('ada@harbor.example', 'copper-elbow-1987')
       expect(again.headers.getSetCookie()[0]).toMatch(/^__Host-collarbook=.*; Path=\/; Expires=[^;]+; HttpOnly; Secure; SameSite=Lax$/)
       expect(again.headers.get('strict-transport-security')).toMatch(/^max-age=31536000/)
       expect((await client.get('/api/session')).status).toBe(200)

@@ -29,7 +29,7 @@ beforeAll(async () => {
     },
   })
   await new Promise<void>(done => post.listen(port, '127.0.0.1', done))
-  server = await startServer({ env: { SMTP_URL: `smtp://127.0.0.1:${port}`, MAIL_FROM: 'cylinders@quillfen.example' } })
+  server = await startServer({ env: { SMTP_URL: `smtp://127.0.0.1:${port}`, MAIL_FROM: 'cylinders@harbor.example' } })
   admin = await setUpFirm(server)
 })
 afterAll(async () => {
@@ -47,11 +47,11 @@ async function letters(query = '') {
 
 describe('a letter with a mail server', () => {
   it('goes out with a link that works, and is then the reader\'s alone', async () => {
-    expect((await invite('Ines', 'ines@quillfen.example')).body.mail).toBe('sent')
+    expect((await invite('Ines', 'ines@harbor.example')).body.mail).toBe('sent')
     expect(received).toHaveLength(1)
-    expect(received[0]).toMatchObject({ to: ['ines@quillfen.example'], from: 'cylinders@quillfen.example' })
+    expect(received[0]).toMatchObject({ to: ['ines@harbor.example'], from: 'cylinders@harbor.example' })
     const [kept] = (await letters()).items
-    expect(kept).toMatchObject({ recipient: 'ines@quillfen.example', body: null, error: null })
+    expect(kept).toMatchObject({ recipient: 'ines@harbor.example', body: null, error: null })
     expect(kept?.sentAt).not.toBeNull()
     const text = received[0]?.text.replace(/=\r?\n/g, '').replace(/=3D/g, '=') ?? ''
     const token = /invitation\/([\w-]{43})/.exec(text)?.[1]
@@ -59,7 +59,7 @@ describe('a letter with a mail server', () => {
   })
 
   it('that the mail server refuses is kept with the reason; the person stays invited and it can be sent again', async () => {
-    const answer = await invite('Bo', 'bounce@quillfen.example')
+    const answer = await invite('Bo', 'bounce@harbor.example')
     expect(answer.status).toBe(201)
     expect(answer.body).toMatchObject({ mail: 'failed', person: { invited: true } })
     const [kept] = (await letters()).items
@@ -69,9 +69,9 @@ describe('a letter with a mail server', () => {
   })
 
   it('does not let a name write headers or lines of its own', async () => {
-    expect((await invite('Eve\r\nBcc: all@quillfen.example', 'eve@quillfen.example')).status).toBe(400)
-    expect((await invite('Eve', 'eve@quillfen.example\r\nBcc: all@quillfen.example')).status).toBe(400)
-    expect((await invite('Eve', 'eve@quillfen.example,all@quillfen.example')).status).toBe(400)
+    expect((await invite('Eve\r\nBcc: all@harbor.example', 'eve@harbor.example')).status).toBe(400)
+    expect((await invite('Eve', 'eve@harbor.example\r\nBcc: all@harbor.example')).status).toBe(400)
+    expect((await invite('Eve', 'eve@harbor.example,all@harbor.example')).status).toBe(400)
   })
 
   it('is listed a page at a time, newest first, each once', async () => {
@@ -80,6 +80,6 @@ describe('a letter with a mail server', () => {
     const second = await letters(`?limit=2&cursor=${first.nextCursor}`)
     expect(second.items).toHaveLength(1)
     expect(second.nextCursor).toBeNull()
-    expect([...first.items, ...second.items].map(({ recipient }) => recipient)).toEqual(['bounce@quillfen.example', 'bounce@quillfen.example', 'ines@quillfen.example'])
+    expect([...first.items, ...second.items].map(({ recipient }) => recipient)).toEqual(['bounce@harbor.example', 'bounce@harbor.example', 'ines@harbor.example'])
   })
 })

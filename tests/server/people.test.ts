@@ -26,7 +26,7 @@ function visitor(): TestClient {
 describe('the firm\'s people', () => {
   it('are known to everybody signed in, their addresses only to admin and auditor', async () => {
     const seen = async (member: Member) => (await member.client.get<PeopleAnswer>('/api/people')).body.items.map(line => [line.name, line.email])
-    expect(await seen(admin)).toEqual([[ADMIN.name, ADMIN.email], ['Otto', 'otto@quillfen.example'], ['Tess', 'tess@quillfen.example']])
+    expect(await seen(admin)).toEqual([[ADMIN.name, ADMIN.email], ['Otto', 'otto@harbor.example'], ['Tess', 'tess@harbor.example']])
     expect(await seen(auditor)).toEqual(await seen(admin))
     expect(await seen(tech)).toEqual([[ADMIN.name, null], ['Otto', null], ['Tess', null]])
   })
@@ -42,7 +42,7 @@ describe('the firm\'s people', () => {
 
   it('are managed by the admin alone', async () => {
     for (const { client } of [tech, auditor]) {
-      expect((await client.post('/api/people', { name: 'Eve', email: 'eve@quillfen.example', roles: ['admin'] })).status).toBe(403)
+      expect((await client.post('/api/people', { name: 'Eve', email: 'eve@harbor.example', roles: ['admin'] })).status).toBe(403)
       expect((await client.patch(`/api/people/${tech.id}`, { roles: ['admin'] })).status).toBe(403)
       expect((await client.post(`/api/people/${tech.id}/invitation`)).status).toBe(403)
       expect((await client.get('/api/mail')).status).toBe(403)
@@ -83,21 +83,21 @@ describe('an invitation', () => {
   it('goes by a letter that is kept, shows whose it is, and is taken up once', async () => {
     const invited = await admin.client.post<InvitedAnswer>('/api/people', { name: 'Ines', email: 'Ines@Harbor.example', roles: ['warehouse'] })
     expect(invited.status).toBe(201)
-    expect(invited.body).toMatchObject({ mail: 'kept', person: { email: 'ines@quillfen.example', invited: true } })
-    const token = await invitationToken(admin, 'ines@quillfen.example')
+    expect(invited.body).toMatchObject({ mail: 'kept', person: { email: 'ines@harbor.example', invited: true } })
+    const token = await invitationToken(admin, 'ines@harbor.example')
     const client = visitor()
-    expect((await client.get(`/api/invitations/${token}`)).body).toMatchObject({ name: 'Ines', email: 'ines@quillfen.example', firmName: 'Quillfen Cooling' })
+    expect((await client.get(`/api/invitations/${token}`)).body).toMatchObject({ name: 'Ines', email: 'ines@harbor.example', firmName: 'Quillfen Cooling' })
     const both = await Promise.all([client, visitor()].map(one => one.post(`/api/invitations/${token}`, { password: PASSWORD })))
     expect(both.map(({ status }) => status).sort()).toEqual([200, 404])
     expect((await visitor().get(`/api/invitations/${token}`)).status).toBe(404)
-    expect((await visitor().signIn('ines@quillfen.example', PASSWORD)).status).toBe(200)
+    expect((await visitor().signIn('ines@harbor.example', PASSWORD)).status).toBe(200)
   })
 
   it('is ended by the next one, and by turning the person off', async () => {
-    const { body } = await admin.client.post<InvitedAnswer>('/api/people', { name: 'Leo', email: 'leo@quillfen.example', roles: ['technician'] })
-    const first = await invitationToken(admin, 'leo@quillfen.example')
+    const { body } = await admin.client.post<InvitedAnswer>('/api/people', { name: 'Leo', email: 'leo@harbor.example', roles: ['technician'] })
+    const first = await invitationToken(admin, 'leo@harbor.example')
     expect((await admin.client.post(`/api/people/${body.person.id}/invitation`)).status).toBe(200)
-    const second = await invitationToken(admin, 'leo@quillfen.example')
+    const second = await invitationToken(admin, 'leo@harbor.example')
     expect(second).not.toBe(first)
     expect((await visitor().get(`/api/invitations/${first}`)).status).toBe(404)
     expect((await visitor().get(`/api/invitations/${second}`)).status).toBe(200)
@@ -107,9 +107,9 @@ describe('an invitation', () => {
   })
 
   it('refuses a weak password and stays good', async () => {
-    await admin.client.post('/api/people', { name: 'Mara', email: 'mara@quillfen.example', roles: ['technician'] })
-    const token = await invitationToken(admin, 'mara@quillfen.example')
-    expect((await visitor().post(`/api/invitations/${token}`, { password: 'mara@quillfen.example' })).status).toBe(422)
+    await admin.client.post('/api/people', { name: 'Mara', email: 'mara@harbor.example', roles: ['technician'] })
+    const token = await invitationToken(admin, 'mara@harbor.example')
+    expect((await visitor().post(`/api/invitations/${token}`, { password: 'mara@harbor.example' })).status).toBe(422)
     expect((await visitor().post(`/api/invitations/${token}`, { password: 'eleven-char' })).status).toBe(400)
     expect((await visitor().post(`/api/invitations/${token}`, { password: 'twelve-chars' })).status).toBe(200)
   })
@@ -127,7 +127,7 @@ describe('an invitation', () => {
   })
 
   it('to an address that is taken is a conflict, whatever its case', async () => {
-    expect((await admin.client.post('/api/people', { name: 'Ada Two', email: 'ADA@quillfen.example', roles: ['manager'] })).status).toBe(409)
+    expect((await admin.client.post('/api/people', { name: 'Ada Two', email: 'ADA@harbor.example', roles: ['manager'] })).status).toBe(409)
   })
 
   it('is unknown for a made-up token', async () => {
@@ -145,7 +145,7 @@ describe('the last administrator', () => {
     }
     expect((await admin.client.get('/api/session')).body).toMatchObject({ user: { roles: ['admin'] } })
     // One who was only invited cannot sign in yet and does not count.
-    await admin.client.post('/api/people', { name: 'Vera', email: 'vera@quillfen.example', roles: ['admin'] })
+    await admin.client.post('/api/people', { name: 'Vera', email: 'vera@harbor.example', roles: ['admin'] })
     expect((await admin.client.patch(`/api/people/${admin.id}`, { active: false })).status).toBe(409)
   })
 

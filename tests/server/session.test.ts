@@ -55,7 +55,7 @@ describe('signing in', () => {
   it('answers who one is, and nothing of the password', async () => {
     const answer = await new TestClient(server.baseUrl).signIn(' Tess@Harbor.example ', PASSWORD)
     expect(answer.body).toEqual({
-      user: { id: tech.id, name: 'Tess', email: 'tess@quillfen.example', roles: ['technician'], trainee: false, certification: null, units: 'lb' },
+      user: { id: tech.id, name: 'Tess', email: 'tess@harbor.example', roles: ['technician'], trainee: false, certification: null, units: 'lb' },
     })
   })
 
@@ -67,10 +67,10 @@ describe('signing in', () => {
   })
 
   it('says the same in nearly the same time to a wrong password, an unknown address, one not yet taken up and one turned off', async () => {
-    await admin.client.post('/api/people', { name: 'Ira', email: 'ira@quillfen.example', roles: ['auditor'] })
+    await admin.client.post('/api/people', { name: 'Ira', email: 'ira@harbor.example', roles: ['auditor'] })
     const off = await addMember(admin, 'Olga', ['warehouse'])
     await admin.client.patch(`/api/people/${off.id}`, { active: false })
-    const tries = [tech.email, 'nobody@quillfen.example', 'ira@quillfen.example', off.email]
+    const tries = [tech.email, 'nobody@harbor.example', 'ira@harbor.example', off.email]
     const seen = []
     for (const email of tries) {
       const times = []
@@ -99,7 +99,7 @@ describe('signing in', () => {
   })
 
   it('has to wait after five failures from one address, told in seconds', async () => {
-    const email = 'guessed@quillfen.example'
+    const email = 'guessed@harbor.example'
     for (let n = 0; n < 5; n++) expect((await from('203.0.113.2', email, `guess-${n}`)).status).toBe(401)
     const sixth = await from('203.0.113.2', email, 'guess-5')
     expect(sixth.status).toBe(429)
@@ -110,7 +110,7 @@ describe('signing in', () => {
   })
 
   it('answers 429 instead of hashing a crowd', async () => {
-    const crowd = await Promise.all(Array.from({ length: 30 }, (_, n) => from(`203.0.113.${100 + n}`, `crowd${n}@quillfen.example`, 'x')))
+    const crowd = await Promise.all(Array.from({ length: 30 }, (_, n) => from(`203.0.113.${100 + n}`, `crowd${n}@harbor.example`, 'x')))
     const refused = crowd.filter(({ status: answered }) => answered === 429)
     // Two are hashed and sixteen wait; while they do, some of the rest may find a place.
     expect(refused.length).toBeGreaterThan(0)

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { refuseWeakPassword, weakness } from '../../../server/utils/session/passwordRules'
 import { Problem } from '../../../server/utils/http/problem'
 
-const EMAIL = 'ann.miller@quillfen.example'
+const EMAIL = 'ann.miller@harbor.example'
 
 describe('a new password', () => {
   it.each([
@@ -13,7 +13,7 @@ describe('a new password', () => {
     expect(weakness(password, EMAIL)).toBe('is one that many people use')
   })
 
-  it.each(['ann.miller@quillfen.example', 'Ann.Miller@Harbor.Example', 'annmillerharborexample', 'ann.miller@quillfen.example1'])('is refused where it is one\'s own address: %s', (password) => {
+  it.each(['ann.miller@harbor.example', 'Ann.Miller@Harbor.Example', 'annmillerharborexample', 'ann.miller@harbor.example1'])('is refused where it is one\'s own address: %s', (password) => {
     expect(weakness(password, EMAIL)).toBe('is your own address')
   })
 
