@@ -84,8 +84,8 @@ describe('places', () => {
 
 describe('firms', () => {
   it('have one place of their own, which follows their name', async () => {
-    const supplier = await made<Firm>(firm.admin.client, '/api/firms', { name: 'Harbor Gas Supply', kind: 'supplier', telephone: '555-0170' })
-    expect(await place(supplier.placeId)).toMatchObject({ name: 'Harbor Gas Supply', kind: 'firm', firmId: supplier.id, cylinders: 0 })
+    const supplier = await made<Firm>(firm.admin.client, '/api/firms', { name: 'Quillfen Gas Supply', kind: 'supplier', telephone: '555-0170' })
+    expect(await place(supplier.placeId)).toMatchObject({ name: 'Quillfen Gas Supply', kind: 'firm', firmId: supplier.id, cylinders: 0 })
     const changed = await firm.admin.client.patch<Firm>(`/api/firms/${supplier.id}`, { name: 'Bay Gas Supply', telephone: null })
     expect(changed.body).toMatchObject({ id: supplier.id, name: 'Bay Gas Supply', telephone: null, placeId: supplier.placeId })
     expect((await place(supplier.placeId))!.name).toBe('Bay Gas Supply')
