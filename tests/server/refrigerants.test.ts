@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { PolicyAnswer } from '../../utils/contract/custody'
 import type { ProblemDetails } from '../../utils/contract/problem'
-import type { FillLimitAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, Saturation } from '../../utils/contract/refrigerants'
+import type { FillLimitAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer } from '../../utils/contract/refrigerants'
 import { TestClient } from '../helpers/client'
 import { setUpFirm, type Member } from '../helpers/firm'
 import { startServer, type TestServer } from '../helpers/server'
@@ -94,7 +94,7 @@ describe('the catalogue of refrigerants', () => {
 
   it('gives the saturation inside the table and refuses outside it', async () => {
     // R-22 at 25 C: 1044 kPa and 1191 kg/m3 (from memory of published tables).
-    const { body } = await admin.client.get<Saturation>('/api/refrigerants/R-22/saturation?temperatureC=25')
+    const { body } = await admin.client.get<SaturationAnswer>('/api/refrigerants/R-22/saturation?temperatureC=25')
     expect(Math.abs(body.bubblePressureKPa / 1044 - 1)).toBeLessThan(0.005)
     expect(Math.abs(body.liquidDensity / 1191 - 1)).toBeLessThan(0.005)
     const coldest = await admin.client.get('/api/refrigerants/R-22/saturation?temperatureC=-40')

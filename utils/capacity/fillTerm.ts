@@ -47,12 +47,12 @@ export function fillTerm(answer: RuleAnswer, bounds: HotBounds | null, input: Ru
   const { rule, figure } = answer
   const standing = standingOf(answer, bounds)
   if (figure.exactGrams === null) {
-    return { rule, limitGrams: null, because: figure.because, standing, working: '', source: figure.source }
+    return { rule, limitGrams: null, because: figure.because, standing, factors: [], working: '', source: figure.source }
   }
   if (bounds && standing === 'unsafe') {
-    return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, working: figure.sum, source: figure.source }
+    return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, factors: [], working: figure.sum, source: figure.source }
   }
   const working = `${figure.sum} = ${resultText(figure.exactGrams, input.waterCapacity)}`
   const because = standing === 'above-margin' ? { because: 'above our margin below liquid-full at 131 °F' } : {}
-  return { rule, limitGrams: Math.floor(figure.exactGrams), ...because, standing, working, source: figure.source }
+  return { rule, limitGrams: Math.floor(figure.exactGrams), ...because, standing, factors: [], working, source: figure.source }
 }

@@ -2,8 +2,8 @@ import { WATER_DENSITY_60F } from './rules/ruleInput'
 import { liquidDensityAt } from '../refrigerant/saturation'
 import type { Refrigerant } from '../refrigerant/types'
 
-/** When the liquid fills the whole volume: at a temperature, or somewhere above the last one known. Units: C. */
-export type LiquidFull = { c: number } | { aboveC: number }
+/** When the liquid fills the whole volume: at a temperature, somewhere above the last one known, or never. Units: C. */
+export type LiquidFull = { c: number } | { aboveC: number } | { never: true }
 
 // Far finer than any thermometer.
 const STEP_C = 0.001

@@ -52,12 +52,25 @@ export const DEFAULT_FILL_POLICY: FillPolicy = {
  */
 export type TermStanding = 'in-force' | 'compared' | 'above-margin' | 'unsafe'
 
+/** One term of a rule's sum. Units: as said; a temperature in C where the term holds at one. Unrounded. */
+export type Factor = {
+  name: 'share' | 'water-capacity' | 'volume' | 'liquid-density' | 'filling-density' | 'filling-ratio' | 'density-at-pressure' | 'derate'
+  value: number
+  unit: 'lb' | 'kg' | 'L' | 'kg/L' | '%' | ''
+  atC?: number
+  /** What more there is to say of it: 'as stamped', 'WC \u00F7 0.99904 kg/L'. */
+  note?: string
+  source?: string
+}
+
 /** One rule's figure with the sum behind it. Units: net grams. Rounding: down. */
 export type FillTerm = {
   rule: FillRule
   limitGrams: number | null
   because?: string
   standing: TermStanding
+  /** What is multiplied, in order; empty where there is no sum. */
+  factors: Factor[]
   working: string
   source: string
 }

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import type { CapacityView } from '../custody/cylinderView'
 import { parseMassText } from '../quantity/mass'
+import type { Saturation } from '../refrigerant/saturation'
 import type { Refrigerant } from '../refrigerant/types'
 import { splitSpec } from '../requalification/specs'
 import type { Page } from './parts'
@@ -18,15 +19,7 @@ export const designationParams = z.strictObject({ designation: z.string().min(1)
 export const saturationQuery = z.strictObject({ temperatureC: z.string().regex(/^-?\d{1,3}(\.\d+)?$/, 'must be degrees Celsius').transform(Number) })
 
 /** What GET /api/refrigerants/{designation}/saturation answers. Densities kg/m3, pressures kPa absolute. */
-export interface Saturation {
-  liquidDensity: number
-  vapourDensity: number
-  bubblePressureKPa: number
-  dewPressureKPa: number
-  source: string
-  relativeErrorDensity: number
-  relativeErrorPressure: number
-}
+export type SaturationAnswer = Saturation
 
 const massInQuery = z.string().max(20).transform((text, context) => {
   const reading = parseMassText(text)

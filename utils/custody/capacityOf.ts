@@ -58,6 +58,7 @@ export function capacityOf(state: CylinderState, retest: Requalification, contex
     exactStopWeightGrams: stop?.exactStopWeightGrams ?? null,
     roomGrams: exact === null ? null : roomOf(state, exact),
     liquidFull: liquidFullOf(state, forRefrigerant, limit.exactLimitGrams, catalogue),
+    hotLiquidShare: null,
     share: Math.min(policy.shareThousandths, DEFAULT_FILL_POLICY.shareThousandths) / 1000,
     terms: limit.terms,
     missing,

@@ -1,4 +1,5 @@
 import type { Month } from '../quantity/month'
+import type { LiquidFull } from '../capacity/liquidFull'
 import type { FillTerm, FillRule, Stamp } from '../capacity/types'
 import type { EventKind } from './kinds'
 import type { Finding, FindingCode, Severity } from './finding'
@@ -29,7 +30,9 @@ export interface CapacityView {
   /** The unrounded sum of tare and limit, from which a screen rounds down to the scale's division; null with stopWeightGrams. */
   exactStopWeightGrams: number | null
   roomGrams: number | null
-  liquidFull: { c: number } | { aboveC: number } | null
+  liquidFull: LiquidFull | null
+  /** How much of the volume is liquid at 131 F, 0 to 1, at the present net or, where nothing is in it, at the limit; null where not known. */
+  hotLiquidShare: number | null
   /** The firm's share, 0.8 by default. */
   share: number
   terms: FillTerm[]

@@ -1,14 +1,17 @@
-import type { Catalogue, Refrigerant, RefrigerantRecord, SaturationRow, SupercriticalTable } from './types'
+import type { Catalogue, Composition, Refrigerant, RefrigerantRecord, SaturationRow, SupercriticalTable } from './types'
 
 /**
  * The catalogue from the records of its data files.
  *
  * Errors: RangeError where a designation stands twice or a table holds an incomplete row.
  */
-export function buildCatalogue(records: readonly RefrigerantRecord[], supercritical: readonly SupercriticalTable[]): Catalogue {
+export function buildCatalogue(
+  records: readonly RefrigerantRecord[], supercritical: readonly SupercriticalTable[], compositions: readonly Composition[] = [],
+): Catalogue {
   return {
     refrigerants: byDesignation(records.map(refrigerantOf)),
     supercritical: byDesignation(supercritical),
+    compositions: byDesignation(compositions),
   }
 }
 

@@ -11,6 +11,9 @@ export type Saturation = {
   dewPressureKPa: number
   relativeErrorDensity: number
   relativeErrorPressure: number
+  accuracyGroup: Refrigerant['accuracyGroup']
+  /** What makes this refrigerant's figures less sure than its group; null where nothing does. */
+  doubt: string | null
   source: string
 }
 
@@ -34,6 +37,8 @@ export function saturationAt(refrigerant: Refrigerant, tC: number): Saturation {
     dewPressureKPa: pressureAt(refrigerant, tC, row => row.dewPressureKPa),
     relativeErrorDensity: refrigerant.relativeErrorDensity,
     relativeErrorPressure: refrigerant.relativeErrorPressure,
+    accuracyGroup: refrigerant.accuracyGroup,
+    doubt: refrigerant.doubt ?? null,
     source: refrigerant.source,
   }
 }

@@ -7,6 +7,24 @@ export type SaturationRow = {
   vapourDensity: number
 }
 
+/** What a fill limit needs of a fluid: the density of its liquid over temperature, how well it is known, and from where. */
+export type LiquidTable = {
+  designation: string
+  source: string
+  /** Last temperature of the table. Units: C. */
+  tableMaxC: number
+  relativeErrorDensity: number
+  /** In rising order of temperature. Units: C, kg/m3. */
+  table: readonly { tC: number, liquidDensity: number }[]
+}
+
+/** What a fluid is made of, by mass. */
+export type Composition = {
+  designation: string
+  components: readonly { component: string, massPercent: number }[]
+  source: string
+}
+
 /** A refrigerant of the catalogue with what is known of it and how well. */
 export type Refrigerant = {
   designation: string
@@ -27,6 +45,8 @@ export type Refrigerant = {
   accuracyGroup: 'A' | 'B' | 'C' | 'D'
   source: string
   accuracy: string
+  /** What makes its figures less sure than its accuracy group says. */
+  doubt?: string
   /** Last temperature of the table: 0.97 of the critical one, at most 70 C. */
   tableMaxC: number
   relativeErrorPressure: number
@@ -50,4 +70,6 @@ export type RefrigerantRecord = Omit<Refrigerant, 'table'> & { table: number[][]
 export type Catalogue = {
   refrigerants: ReadonlyMap<string, Refrigerant>
   supercritical: ReadonlyMap<string, SupercriticalTable>
+  /** Blends whose composition is published but whose properties are not held: only their liquid's density can be estimated. */
+  compositions: ReadonlyMap<string, Composition>
 }

@@ -1,4 +1,4 @@
-import type { RefrigerantLine, RefrigerantRecordAnswer, Saturation } from '~~/utils/contract/refrigerants'
+import type { RefrigerantLine, RefrigerantRecordAnswer, SaturationAnswer } from '~~/utils/contract/refrigerants'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
 import { isFlammable, isToxic } from '~~/utils/refrigerant/safety'
 import { hasLiquidAt, saturationAt } from '~~/utils/refrigerant/saturation'
@@ -19,7 +19,7 @@ export function refrigerantRecord(designation: string): RefrigerantRecordAnswer 
 }
 
 /** Saturation of a refrigerant. Errors: 404; 422 outside its table. */
-export function saturationOf(designation: string, temperatureC: number): Saturation {
+export function saturationOf(designation: string, temperatureC: number): SaturationAnswer {
   const refrigerant = refrigerantNamed(designation)
   if (!hasLiquidAt(refrigerant, temperatureC)) {
     const coldest = refrigerant.table[0]?.tC ?? refrigerant.tableMaxC
