@@ -12,3 +12,8 @@ export function fahrenheitFromCelsius(c: number): number {
 export function kelvinFromCelsius(c: number): number {
   return c + 273.15
 }
+
+/** A temperature in degrees Celsius from one in kelvin. */
+export function celsiusFromKelvin(k: number): number {
+  return k - 273.15
+}

@@ -1,0 +1,125 @@
+import { formatThermometer } from '../quantity/gauge'
+import { KPA_PER_PSI, STANDARD_ATMOSPHERE_KPA } from '../quantity/pressure'
+import { celsiusFromKelvin } from '../quantity/temperature'
+import { hasLiquidAt, saturationAt } from './saturation'
+import type { Refrigerant } from './types'
+
+/** What a gauge and a thermometer at a cylinder showed, and how far each may be off. */
+export interface PressureReading {
+  /** Absolute by the standard atmosphere: the gauge's reading and 101.325 kPa. */
+  pressureKPa: number
+  temperatureC: number
+  gaugeErrorKPa: number
+  thermometerErrorC: number
+  /** The air's own pressure at the cylinder, not reduced to sea level. */
+  barometerKPa: number
+}
+
+export type PressureVerdict = 'agrees' | 'excess' | 'below'
+
+/** A pressure beside what a refrigerant can have at that temperature while liquid is left. Units: kPa, C. */
+export interface PressureCheck {
+  /** The lowest pressure with liquid left: the last drop of a blend. Absolute. */
+  dewKPa: number
+  /** The highest: hardly any vapour. Absolute. The same as the dew pressure for a single fluid. */
+  bubbleKPa: number
+  /** What stood in the cylinder, by the barometer. */
+  absoluteKPa: number
+  /** Above the bubble pressure; negative within the band and below it. */
+  excessKPa: number
+  /** What the gauge and the thermometer together may be off. */
+  toleranceKPa: number
+  /** What the refrigerant's own figures may be off. */
+  dataErrorKPa: number
+  /** How fast the nearer edge of the band rises with temperature. */
+  slopeKPaPerC: number
+  verdict: PressureVerdict
+  relativeErrorPressure: number
+  accuracyGroup: Refrigerant['accuracyGroup']
+  doubt: string | null
+  source: string
+}
+
+/** How far a gauge may be off that nobody has said more of: 1 psi (US Army TM 5-3810-307-24-1-2 asks for a gauge to 1 psi). */
+export const DEFAULT_GAUGE_ERROR_KPA = KPA_PER_PSI
+
+/** How far a thermometer may be off that nobody has said more of: 2 F (from memory). */
+export const DEFAULT_THERMOMETER_ERROR_C = 2 * 5 / 9
+
+// Far below the step of the tables, and far above what is lost in a difference of two pressures.
+const SLOPE_STEP_C = 0.05
+
+/**
+ * Judges the pressure of a cylinder at rest against the band between a refrigerant's dew and bubble pressure.
+ *
+ * A pressure above the band says that more than this refrigerant is in it, or another; it never says what. The band is
+ * widened by what the instruments may be off, a thermometer's error by the slope of the edge, and apart from that by
+ * what the refrigerant's figures may be off.
+ *
+ * Errors: RangeError where the table has no liquid at the temperature ({@link whyNoCheck} says why), for an absolute
+ * pressure below zero, and for an error below zero.
+ */
+export function pressureCheck(input: PressureReading & { refrigerant: Refrigerant }): PressureCheck {
+  const { refrigerant, temperatureC, gaugeErrorKPa, thermometerErrorC } = input
+  const absoluteKPa = absoluteOf(input)
+  if (!(absoluteKPa >= 0)) throw new RangeError(`No absolute pressure: ${absoluteKPa}`)
+  if (!(gaugeErrorKPa >= 0) || !(thermometerErrorC >= 0)) throw new RangeError('An instrument cannot be off by less than nothing')
+  const { bubblePressureKPa: bubbleKPa, dewPressureKPa: dewKPa, ...sureness } = saturationAt(refrigerant, temperatureC)
+  const isNearerBubble = absoluteKPa >= (bubbleKPa + dewKPa) / 2
+  const slopeKPaPerC = slopeAt(refrigerant, temperatureC, isNearerBubble ? 'bubblePressureKPa' : 'dewPressureKPa')
+  const toleranceKPa = gaugeErrorKPa + Math.abs(slopeKPaPerC) * thermometerErrorC
+  const dataErrorKPa = sureness.relativeErrorPressure * (isNearerBubble ? bubbleKPa : dewKPa)
+  const { relativeErrorPressure, accuracyGroup, doubt, source } = sureness
+  return {
+    dewKPa,
+    bubbleKPa,
+    absoluteKPa,
+    excessKPa: absoluteKPa - bubbleKPa,
+    toleranceKPa,
+    dataErrorKPa,
+    slopeKPaPerC,
+    verdict: verdictOf(absoluteKPa, dewKPa, bubbleKPa, toleranceKPa + dataErrorKPa),
+    relativeErrorPressure,
+    accuracyGroup,
+    doubt,
+    source,
+  }
+}
+
+/** Whether a gauge can show this under this barometer: no pressure lies below none at all. */
+export function isPressurePossible({ pressureKPa, barometerKPa }: Pick<PressureReading, 'pressureKPa' | 'barometerKPa'>): boolean {
+  return absoluteOf({ pressureKPa, barometerKPa }) >= 0
+}
+
+/** Why a pressure says nothing of a refrigerant at a temperature; null where a check is possible. */
+export function whyNoCheck(refrigerant: Refrigerant, temperatureC: number): string | null {
+  if (hasLiquidAt(refrigerant, temperatureC)) return null
+  const { designation, table, tableMaxC, tcK } = refrigerant
+  const coldestC = table[0]?.tC ?? tableMaxC
+  const at = bothScales(temperatureC)
+  if (temperatureC < coldestC) return `The figures of ${designation} begin at ${bothScales(coldestC)}. At ${at} a check is not possible.`
+  const criticalC = celsiusFromKelvin(tcK)
+  return temperatureC >= criticalC
+    ? `At ${at} ${designation} has no liquid: from ${bothScales(criticalC)} up it is a gas, and its pressure depends on how much is in the cylinder. A check is not possible.`
+    : `The figures of ${designation} end at ${bothScales(tableMaxC)}. At ${at} a check is not possible.`
+}
+
+function bothScales(tC: number): string {
+  return `${formatThermometer(tC, 'psi')} (${formatThermometer(tC, 'bar')})`
+}
+
+function absoluteOf({ pressureKPa, barometerKPa }: Pick<PressureReading, 'pressureKPa' | 'barometerKPa'>): number {
+  return pressureKPa - STANDARD_ATMOSPHERE_KPA + barometerKPa
+}
+
+function verdictOf(absoluteKPa: number, dewKPa: number, bubbleKPa: number, marginKPa: number): PressureVerdict {
+  if (absoluteKPa > bubbleKPa + marginKPa) return 'excess'
+  return absoluteKPa < dewKPa - marginKPa ? 'below' : 'agrees'
+}
+
+// By a difference, one-sided at an end of the table.
+function slopeAt(refrigerant: Refrigerant, tC: number, edge: 'bubblePressureKPa' | 'dewPressureKPa'): number {
+  const low = hasLiquidAt(refrigerant, tC - SLOPE_STEP_C) ? tC - SLOPE_STEP_C : tC
+  const high = hasLiquidAt(refrigerant, tC + SLOPE_STEP_C) ? tC + SLOPE_STEP_C : tC
+  return (saturationAt(refrigerant, high)[edge] - saturationAt(refrigerant, low)[edge]) / (high - low)
+}
