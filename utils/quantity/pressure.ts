@@ -26,3 +26,8 @@ export function kPaFromInHg(inHg: number): number {
 export function inHgFromKPa(kPa: number): number {
   return kPa / KPA_PER_INHG
 }
+
+/** Absolute pressure in kPa from one in pounds to the square inch absolute. */
+export function kPaFromPsia(psia: number): number {
+  return psia * KPA_PER_PSI
+}

@@ -1,0 +1,47 @@
+import { COMPONENT_GWPS, WHY_NO_GWP } from './data/componentGwps'
+import type { HowKnown } from './data/componentGwps'
+import type { Refrigerant } from './types'
+
+/** The lists that a GWP is taken from: three IPCC reports, the law of the United States, that of the EU and the one before it. */
+export const GWP_BASES = ['AR4', 'AR5', 'AR6', 'exchange-value', 'EU-2024/573', 'EU-517/2014'] as const
+export type GwpBasis = typeof GWP_BASES[number]
+
+/** One component's share in a GWP; `gwp` null where the basis has no value for it. */
+export interface GwpPart { component: string, massPercent: number, gwp: number | null, source: string | null, known: HowKnown | null }
+
+/** A 100-year GWP on one basis, with what it is summed from. */
+export interface Gwp {
+  basis: GwpBasis
+  value: number | null
+  /** Why there is no value. */
+  because?: string
+  parts: GwpPart[]
+  /** Whether a component's value was never looked up. */
+  fromMemory: boolean
+}
+
+/**
+ * The 100-year GWP of a refrigerant on a basis: of a blend the sum of mass fraction times component value.
+ *
+ * Units: kg of CO2 for one kg. Rounding: to four decimals, below what any component is known to.
+ * Source: 40 CFR 84.64(b) for the sum; each part carries the source of its value.
+ */
+export function gwpOf(refrigerant: Pick<Refrigerant, 'composition'>, basis: GwpBasis): Gwp {
+  const parts = refrigerant.composition.map(({ component, massPercent }) => partOf(component, massPercent, basis))
+  const fromMemory = parts.some(part => part.known === 'from memory')
+  const unknown = parts.filter(part => part.gwp === null).map(part => part.component)
+  if (parts.length === 0 || unknown.length > 0) {
+    const because = unknown.length === 0 ? 'Its composition is not known' : `${unknown.join(', ')} ${WHY_NO_GWP[basis]}`
+    return { basis, value: null, because, parts, fromMemory }
+  }
+  const sum = parts.reduce((total, part) => total + part.massPercent / 100 * (part.gwp ?? 0), 0)
+  return { basis, value: Math.round(sum * 10_000) / 10_000, parts, fromMemory }
+}
+
+function partOf(component: string, massPercent: number, basis: GwpBasis): GwpPart {
+  for (const { source, known, values } of COMPONENT_GWPS[basis]) {
+    const gwp = values[component]
+    if (gwp !== undefined) return { component, massPercent, gwp, source, known }
+  }
+  return { component, massPercent, gwp: null, source: null, known: null }
+}
