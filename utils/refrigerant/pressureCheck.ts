@@ -1,19 +1,8 @@
 import { formatThermometer } from '../quantity/gauge'
-import { KPA_PER_PSI, STANDARD_ATMOSPHERE_KPA } from '../quantity/pressure'
 import { celsiusFromKelvin } from '../quantity/temperature'
+import { absolutePressureKPa, type PressureReading } from './pressureReading'
 import { hasLiquidAt, saturationAt } from './saturation'
 import type { Refrigerant } from './types'
-
-/** What a gauge and a thermometer at a cylinder showed, and how far each may be off. */
-export interface PressureReading {
-  /** Absolute by the standard atmosphere: the gauge's reading and 101.325 kPa. */
-  pressureKPa: number
-  temperatureC: number
-  gaugeErrorKPa: number
-  thermometerErrorC: number
-  /** The air's own pressure at the cylinder, not reduced to sea level. */
-  barometerKPa: number
-}
 
 export type PressureVerdict = 'agrees' | 'excess' | 'below'
 
@@ -40,12 +29,6 @@ export interface PressureCheck {
   source: string
 }
 
-/** How far a gauge may be off that nobody has said more of: 1 psi (US Army TM 5-3810-307-24-1-2 asks for a gauge to 1 psi). */
-export const DEFAULT_GAUGE_ERROR_KPA = KPA_PER_PSI
-
-/** How far a thermometer may be off that nobody has said more of: 2 F (from memory). */
-export const DEFAULT_THERMOMETER_ERROR_C = 2 * 5 / 9
-
 // Far below the step of the tables, and far above what is lost in a difference of two pressures.
 const SLOPE_STEP_C = 0.05
 
@@ -61,7 +44,7 @@ const SLOPE_STEP_C = 0.05
  */
 export function pressureCheck(input: PressureReading & { refrigerant: Refrigerant }): PressureCheck {
   const { refrigerant, temperatureC, gaugeErrorKPa, thermometerErrorC } = input
-  const absoluteKPa = absoluteOf(input)
+  const absoluteKPa = absolutePressureKPa(input)
   if (!(absoluteKPa >= 0)) throw new RangeError(`No absolute pressure: ${absoluteKPa}`)
   if (!(gaugeErrorKPa >= 0) || !(thermometerErrorC >= 0)) throw new RangeError('An instrument cannot be off by less than nothing')
   const { bubblePressureKPa: bubbleKPa, dewPressureKPa: dewKPa, ...sureness } = saturationAt(refrigerant, temperatureC)
@@ -86,11 +69,6 @@ export function pressureCheck(input: PressureReading & { refrigerant: Refrigeran
   }
 }
 
-/** Whether a gauge can show this under this barometer: no pressure lies below none at all. */
-export function isPressurePossible({ pressureKPa, barometerKPa }: Pick<PressureReading, 'pressureKPa' | 'barometerKPa'>): boolean {
-  return absoluteOf({ pressureKPa, barometerKPa }) >= 0
-}
-
 /** Why a pressure says nothing of a refrigerant at a temperature; null where a check is possible. */
 export function whyNoCheck(refrigerant: Refrigerant, temperatureC: number): string | null {
   if (hasLiquidAt(refrigerant, temperatureC)) return null
@@ -106,10 +84,6 @@ export function whyNoCheck(refrigerant: Refrigerant, temperatureC: number): stri
 
 function bothScales(tC: number): string {
   return `${formatThermometer(tC, 'psi')} (${formatThermometer(tC, 'bar')})`
-}
-
-function absoluteOf({ pressureKPa, barometerKPa }: Pick<PressureReading, 'pressureKPa' | 'barometerKPa'>): number {
-  return pressureKPa - STANDARD_ATMOSPHERE_KPA + barometerKPa
 }
 
 function verdictOf(absoluteKPa: number, dewKPa: number, bubbleKPa: number, marginKPa: number): PressureVerdict {

@@ -30,7 +30,8 @@ export function saturationOf(designation: string, temperatureC: number): Saturat
   return saturationAt(refrigerant, temperatureC)
 }
 
-function refrigerantNamed(designation: string): Refrigerant {
+/** A refrigerant of the catalogue by its name, in any case. Errors: 404 where it has none of this name. */
+export function refrigerantNamed(designation: string): Refrigerant {
   const wanted = designation.toUpperCase()
   const found = CATALOGUE.refrigerants.get(designation)
     ?? [...CATALOGUE.refrigerants.values()].find(one => one.designation.toUpperCase() === wanted)
