@@ -29,13 +29,24 @@ export interface Gwp {
 export function gwpOf(refrigerant: Pick<Refrigerant, 'composition'>, basis: GwpBasis): Gwp {
   const parts = refrigerant.composition.map(({ component, massPercent }) => partOf(component, massPercent, basis))
   const fromMemory = parts.some(part => part.known === 'from memory')
-  const unknown = parts.filter(part => part.gwp === null).map(part => part.component)
-  if (parts.length === 0 || unknown.length > 0) {
-    const because = unknown.length === 0 ? 'Its composition is not known' : `${unknown.join(', ')} ${WHY_NO_GWP[basis]}`
-    return { basis, value: null, because, parts, fromMemory }
-  }
-  const sum = parts.reduce((total, part) => total + part.massPercent / 100 * (part.gwp ?? 0), 0)
-  return { basis, value: Math.round(sum * 10_000) / 10_000, parts, fromMemory }
+  const because = whyUnknown(parts, basis)
+  return because === null ? { basis, value: sumOf(parts), parts, fromMemory } : { basis, value: null, because, parts, fromMemory }
+}
+
+function sumOf(parts: readonly GwpPart[]): number {
+  const sum = parts.reduce((total, { massPercent, gwp }) => total + massPercent / 100 * (gwp ?? 0), 0)
+  return Math.round(sum * 10_000) / 10_000
+}
+
+function whyUnknown(parts: readonly GwpPart[], basis: GwpBasis): string | null {
+  if (parts.length === 0) return 'its composition is not known'
+  const unknown = parts.filter(part => part.gwp === null)
+  if (unknown.length === 0) return null
+  const reason = `${unknown.map(part => part.component).join(', ')} ${WHY_NO_GWP[basis]}`
+  const rest = parts.filter(part => part.gwp !== null)
+  if (rest.length === 0) return reason
+  const percent = Math.round(rest.reduce((total, { massPercent }) => total + massPercent, 0) * 10) / 10
+  return `${reason}; the other ${percent} % of it sum to ${Math.round(sumOf(rest)).toLocaleString('en-US')}`
 }
 
 function partOf(component: string, massPercent: number, basis: GwpBasis): GwpPart {

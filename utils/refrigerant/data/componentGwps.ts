@@ -97,12 +97,12 @@ export const COMPONENT_GWPS: Readonly<Record<GwpBasis, readonly GwpGroup[]>> = {
   ],
 }
 
-/** Why a component may be without a value, by basis; it follows the component's name. */
+/** Why components may be without a value, by basis; it follows their names. */
 export const WHY_NO_GWP: Readonly<Record<GwpBasis, string>> = {
-  'AR4': 'is not in the tables of the fourth report',
-  'AR5': 'is not in the table of the fifth report',
-  'AR6': 'is not in the table of the sixth report',
-  'exchange-value': 'is no regulated HFC, and no value of 40 CFR 84.64(b) is held for it',
-  'EU-2024/573': 'is not under this regulation, or no value of its annexes is held for it',
-  'EU-517/2014': 'was not under this regulation, or no value of its annexes is held for it',
+  'AR4': 'without a value in the tables of the fourth report',
+  'AR5': 'without a value in the table of the fifth report',
+  'AR6': 'without a value in the table of the sixth report',
+  'exchange-value': 'not among the regulated HFCs, and no value of 40 CFR 84.64(b) is held',
+  'EU-2024/573': 'not under this regulation, or no value of its annexes is held',
+  'EU-517/2014': 'not under this regulation, or no value of its annexes is held',
 }
