@@ -119,14 +119,14 @@ export const FOLD_CONTEXT: FoldContext = {
   catalogue: CATALOGUE,
   policyAt: () => DEFAULT_FILL_POLICY,
   timeZone: 'America/Chicago',
-  retest: { intervalMonths: null },
+  retest: { intervalMonths: null, ownerChoices: [] },
 }
 
 export const VIEW_CONTEXT: ViewContext = {
   ...FOLD_CONTEXT,
   nowMs: START + DAY,
   policyNow: DEFAULT_FILL_POLICY,
-  retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null },
+  retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] },
   access: { personId: TECHNICIAN, roles: ['technician'], trainee: false },
   codesOnTwo: new Set(),
   names: {

@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { PolicyAnswer } from '../../utils/contract/custody'
+import type { PolicyAnswer } from '../../utils/contract/policy'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import type { FillLimitAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer } from '../../utils/contract/refrigerants'
 import { TestClient } from '../helpers/client'
@@ -118,6 +118,6 @@ describe('the firm\'s rules', () => {
     const { body } = await admin.client.get<PolicyAnswer>('/api/policy')
     expect(body.timeZone).toBe('America/Chicago')
     expect(body.fillPolicies).toEqual([{ fromAt: 0, policy: { shareThousandths: 800, ceilingThousandths: 950, options: { liquid130F: false, unRatio: false } } }])
-    expect(body.retest).toEqual({ soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null })
+    expect(body.retest).toEqual({ soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] })
   })
 })

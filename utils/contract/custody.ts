@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
 import type { FillPolicy } from '../capacity/types'
+import type { RetestRules } from '../requalification/ownerChoice'
 import type { ProblemDetails } from './problem'
 import { id, page, type Page } from './parts'
 
@@ -77,7 +78,7 @@ export interface FoldInput {
 export interface PolicyAnswer {
   timeZone: string
   fillPolicies: { fromAt: number, policy: FillPolicy }[]
-  retest: { soonDays: number, notSeenDays: number, missingDays: number, intervalMonths: number | null }
+  retest: RetestRules & { soonDays: number, notSeenDays: number, missingDays: number }
   scales: { id: string, name: string, accuracyGrams: number, accuracyPercent: number, lastCheck: string | null }[]
 }
 

@@ -1,6 +1,7 @@
 import type { Month } from '../quantity/month'
 import type { LiquidFull } from '../capacity/liquidFull'
 import type { FillTerm, FillRule, Stamp } from '../capacity/types'
+import type { OwnerChoice } from '../requalification/ownerChoice'
 import type { EventKind } from './kinds'
 import type { Finding, FindingCode, Severity } from './finding'
 
@@ -48,6 +49,8 @@ export interface RequalificationView {
   state: 'in-date' | 'due-soon' | 'overdue' | 'unknown' | 'not-required'
   /** In words: from which mark and by which rule. */
   basis: string
+  /** The owner's choice that the period is by; null where it is the regulation's shortest. */
+  choice: OwnerChoice | null
 }
 
 /** Everything the application says of one cylinder today, to one person. */

@@ -1,12 +1,15 @@
+import { exactGrams } from '../quantity/mass'
 import { monthOfInstant } from '../quantity/month'
+import type { RetestRules } from '../requalification/ownerChoice'
 import { requalification, type Requalification } from '../requalification/requalification'
+import type { Service } from '../requalification/testPeriod'
 import type { CylinderState } from './state'
 
-/** When and by which of the firm's rules a due month is judged. */
-export interface RetestDay { nowMs: number, timeZone: string, intervalMonths: number | null, soonDays?: number }
+/** When and by which of the owner's rules a due month is judged. */
+export interface RetestDay { nowMs: number, timeZone: string, rules: RetestRules, soonDays?: number }
 
 const UNREGISTERED: Requalification = {
-  lastMonth: null, intervalMonths: null, dueMonth: null, state: 'unknown', basis: 'Its collar has not been entered.',
+  lastMonth: null, intervalMonths: null, dueMonth: null, state: 'unknown', basis: 'Its collar has not been entered.', choice: null,
 }
 
 /**
@@ -18,14 +21,22 @@ export function retestOf(state: CylinderState, day: RetestDay): Requalification 
   const { stamp, registeredAt } = state
   if (stamp === null) return UNREGISTERED
   const isPast = (month: string, enteredAt: number) => month <= monthOfInstant(enteredAt, day.timeZone)
-  const madeMonth = stamp.madeMonth !== null && registeredAt !== null && isPast(stamp.madeMonth, registeredAt) ? stamp.madeMonth : null
   return requalification({
-    spec: stamp.spec,
+    steel: {
+      spec: stamp.spec,
+      madeMonth: stamp.madeMonth !== null && registeredAt !== null && isPast(stamp.madeMonth, registeredAt) ? stamp.madeMonth : null,
+      waterCapacityGrams: stamp.waterCapacity === null ? null : exactGrams(stamp.waterCapacity),
+      service: serviceOf(state),
+    },
     marks: state.marks.filter(mark => isPast(mark.month, mark.enteredAt)),
-    madeMonth,
     nowMs: day.nowMs,
     timeZone: day.timeZone,
-    intervalMonthsSetting: day.intervalMonths,
+    rules: day.rules,
     ...(day.soonDays === undefined ? {} : { soonDays: day.soonDays }),
   })
+}
+
+function serviceOf({ dedicatedTo, contents, hasHeldBurnt }: CylinderState): Service {
+  const { refrigerant, knownSinceVacuum } = contents
+  return { dedicatedTo, holds: refrigerant === null ? knownSinceVacuum : [...knownSinceVacuum, refrigerant], hasHeldBurnt }
 }

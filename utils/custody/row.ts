@@ -2,6 +2,7 @@ import type { FillPolicy } from '../capacity/types'
 import { readingGrams } from '../quantity/mass'
 import type { Month } from '../quantity/month'
 import type { Catalogue } from '../refrigerant/types'
+import type { RetestRules } from '../requalification/ownerChoice'
 import { capacityOf } from './capacityOf'
 import type { CylinderRow, Lifecycle } from './cylinderView'
 import { dateFindings, isOverdue, type Day } from './dateFindings'
@@ -21,7 +22,7 @@ export interface RowContext {
   policyAt: (ms: number) => FillPolicy
   catalogue: Catalogue
   timeZone: string
-  retest: { intervalMonths: number | null }
+  retest: RetestRules
   codesOnTwo?: ReadonlySet<string>
 }
 
@@ -141,7 +142,7 @@ export function rowToday(cached: CachedRow, day: RowDay): CylinderRow {
 // The due month does not change with the day, so any instant will do that is not before the last mark was entered.
 function retestOnNoDay(state: CylinderState, context: RowContext) {
   const nowMs = Math.max(0, state.lastEventAt ?? 0, state.registeredAt ?? 0, ...state.marks.map(({ enteredAt }) => enteredAt))
-  return retestOf(state, { nowMs, timeZone: context.timeZone, intervalMonths: context.retest.intervalMonths })
+  return retestOf(state, { nowMs, timeZone: context.timeZone, rules: context.retest })
 }
 
 const STOPS: ReadonlySet<FindingCode> = new Set<FindingCode>([

@@ -62,6 +62,8 @@ export interface CylinderState {
   condemnedAt: number | null
   holds: { hold: StateHold, since: number }[]
   contents: ContentsState
+  /** Burnt refrigerant was in it at any time, whatever was done since. */
+  hasHeldBurnt: boolean
   /** Something was put in while the cylinder was in our hands. */
   filledHere: boolean
   /** The last event that put refrigerant in: its day's fill rule also judges an overfill. */
@@ -110,6 +112,7 @@ export function initialState(id: string): CylinderState {
       lastKnownNetGrams: null,
       backFromReclaim: false,
     },
+    hasHeldBurnt: false,
     filledHere: false,
     lastPutInAt: null,
     overfilledAt: null,

@@ -3,6 +3,7 @@ import type { Access } from '../access/roles'
 import { readingGrams } from '../quantity/mass'
 import type { Scale } from '../quantity/scale'
 import type { Catalogue } from '../refrigerant/types'
+import type { RetestRules } from '../requalification/ownerChoice'
 import { capacityOf } from './capacityOf'
 import type { CylinderView, Named, RequalificationView } from './cylinderView'
 import { dateFindings } from './dateFindings'
@@ -29,7 +30,7 @@ export interface ViewContext {
   policyAt: (ms: number) => FillPolicy
   catalogue: Catalogue
   scales: ReadonlyMap<string, Scale>
-  retest: { soonDays: number, notSeenDays: number, missingDays: number, intervalMonths: number | null }
+  retest: RetestRules & { soonDays: number, notSeenDays: number, missingDays: number }
   askedRefrigerant?: string | null
   /** null shows the cylinder to nobody in particular: nothing may be done. */
   access: Access | null
@@ -40,7 +41,7 @@ export interface ViewContext {
 /** Everything there is to say of one cylinder on a day, to one person. */
 export function view(state: CylinderState, context: ViewContext): CylinderView {
   const retest = retestOf(state, {
-    nowMs: context.nowMs, timeZone: context.timeZone, intervalMonths: context.retest.intervalMonths, soonDays: context.retest.soonDays,
+    nowMs: context.nowMs, timeZone: context.timeZone, rules: context.retest, soonDays: context.retest.soonDays,
   })
   const capacity = capacityOf(state, retest, context)
   const lifecycle = lifecycleOf(state)
@@ -99,8 +100,8 @@ function contentsOf({ contents }: CylinderState): CylinderView['contents'] {
   }
 }
 
-function requalificationOf({ lastMonth, intervalMonths, dueMonth, state, basis }: RequalificationView): RequalificationView {
-  return { lastMonth, intervalMonths, dueMonth, state, basis }
+function requalificationOf({ lastMonth, intervalMonths, dueMonth, state, basis, choice }: RequalificationView): RequalificationView {
+  return { lastMonth, intervalMonths, dueMonth, state, basis, choice }
 }
 
 function instant(ms: number | null): string | null {

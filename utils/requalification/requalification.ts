@@ -1,7 +1,9 @@
 import type { Month } from '../quantity/month'
 import { addMonths, compareMonths, daysUntilEndOfMonth, formatMonth, monthOfInstant } from '../quantity/month'
-import { intervalMonths } from './intervalMonths'
+import type { OwnerChoice, RetestRules } from './ownerChoice'
+import { suffixMeaning } from './retestSuffix'
 import { SPECS } from './specs'
+import { testPeriod, type Beginning, type Steel, type TestPeriod } from './testPeriod'
 
 /** How a cylinder was tested: by its expansion under water, under proof pressure, or by an outside look. */
 export type TestMethod = 'volumetric' | 'proof' | 'visual'
@@ -22,81 +24,125 @@ export type Requalification = {
   dueMonth: Month | null
   state: 'in-date' | 'due-soon' | 'overdue' | 'unknown' | 'not-required'
   basis: string
+  /** The owner's choice that the period is by; null where it is the regulation's shortest. */
+  choice: OwnerChoice | null
 }
 
 /** What the due month rests on. */
 export type RequalificationInput = {
-  spec: string
+  steel: Steel
   marks: readonly RequalificationMark[]
-  madeMonth: Month | null
   nowMs: number
   timeZone: string
-  /** The owner's period, kept with its reason, where it is not the regulation's shortest. */
-  intervalMonthsSetting?: number | null
-  /** Whether the owner's setting lets an outside look take the place of a test (49 CFR 180.209(g)). */
-  visualCounts?: boolean
+  rules: RetestRules
   /** Days ahead from which the test is due soon. */
   soonDays?: number
 }
 
 const DEFAULT_SOON_DAYS = 120
 
-// 49 CFR 180.209(g): the look is repeated every 5 years; 180.209(e): a proof pressure test holds 10 years at most.
-const LONGEST_MONTHS_AFTER: Readonly<Record<TestMethod, number>> = { volumetric: Infinity, proof: 120, visual: 60 }
-
-// 49 CFR 180.213: suffix E marks an outside look, S a proof pressure test.
-const METHOD_OF_SUFFIX: Readonly<Record<string, TestMethod>> = { E: 'visual', S: 'proof' }
-
 /**
  * When a cylinder must next be tested, and whether it is in date: through the last day of the due month in the firm's zone.
  *
- * Marks after the current month do not count; before the first test the month it was made in does (49 CFR 178.35(f)).
+ * Marks after the current month do not count, nor do those whose kind of test begins no period here; before the first
+ * test the month it was made in counts (49 CFR 178.35(f)).
+ *
  * Source: 49 CFR 180.205(c), 180.209.
  */
 export function requalification(input: RequalificationInput): Requalification {
-  const last = lastTest(input)
-  const lastMonth = last?.month ?? null
-  if (SPECS[input.spec]?.requalified === false) {
-    return {
-      lastMonth, intervalMonths: null, dueMonth: null, state: 'not-required',
-      basis: `A ${input.spec} is not requalified (49 CFR 180.209 Table 1).`,
-    }
-  }
-  const months = periodAfter(last?.method, intervalMonths(input.spec, input.intervalMonthsSetting))
-  if (months === null) {
-    return { lastMonth, intervalMonths: null, dueMonth: null, state: 'unknown', basis: `No test period is known for ${input.spec}.` }
-  }
-  if (!last) return { lastMonth, intervalMonths: months, dueMonth: null, state: 'unknown', basis: 'No test date is known.' }
+  const { spec } = input.steel
+  const last = lastBeginning(input)
+  const begun = { lastMonth: last?.month ?? null, intervalMonths: null, dueMonth: null, choice: null }
+  if (SPECS[spec]?.requalified === false) return { ...begun, state: 'not-required', basis: notRequired(spec) }
+  const left = uncounted(input, last).map(mark => ` ${notCounted(mark)}`).join('')
+  if (!last) return { ...begun, intervalMonths: plainMonths(input), state: 'unknown', basis: `No test date is known.${left}` }
+  if (last.period === null) return { ...begun, state: 'unknown', basis: periodNotKnown(spec) }
+  const { months, choice } = last.period
   const dueMonth = addMonths(last.month, months)
   return {
-    lastMonth,
+    lastMonth: last.month,
     intervalMonths: months,
     dueMonth,
     state: stateOf(daysUntilEndOfMonth(dueMonth, input.nowMs, input.timeZone), input.soonDays ?? DEFAULT_SOON_DAYS),
-    basis: `${last.stamped ? 'Tested' : 'Made'} ${formatMonth(last.month)}, ${months} months for ${input.spec} (49 CFR 180.209).`,
+    basis: `${last.beginning === 'made' ? 'Made' : 'Tested'} ${formatMonth(last.month)}; ${periodInWords(spec, last.period)}.${left}`,
+    choice,
   }
 }
 
-type LastTest = { month: Month, method: TestMethod | undefined, stamped: boolean }
+type Last = { month: Month, beginning: Beginning, period: TestPeriod | null }
 
-function lastTest(input: RequalificationInput): LastTest | null {
-  const currentMonth = monthOfInstant(input.nowMs, input.timeZone)
-  const known = (month: Month) => compareMonths(month, currentMonth) <= 0
-  let latest: LastTest | null = null
-  for (const mark of input.marks) {
-    const method = mark.method ?? METHOD_OF_SUFFIX[mark.suffix?.toUpperCase() ?? '']
-    const passed = mark.result === undefined || mark.result === 'passed'
-    const counts = passed && known(mark.month) && (method !== 'visual' || input.visualCounts === true)
-    if (counts && (latest === null || compareMonths(mark.month, latest.month) > 0)) {
-      latest = { month: mark.month, method, stamped: true }
-    }
+function lastBeginning(input: RequalificationInput): Last | null {
+  const { steel, rules } = input
+  const begun = (beginning: Beginning, month: Month): Last[] => {
+    const period = testPeriod(beginning, month, steel, rules)
+    return period !== null || (beginning !== 'visual' && plainMonths(input) === null) ? [{ month, beginning, period }] : []
   }
-  if (latest !== null) return latest
-  return input.madeMonth !== null && known(input.madeMonth) ? { month: input.madeMonth, method: undefined, stamped: false } : null
+  const tests = passedMarks(input).flatMap(({ month, beginning }) => beginning === null ? [] : begun(beginning, month))
+  if (tests.length > 0) return tests.reduce((latest, test) => isLaterOrShorter(test, latest) ? test : latest)
+  const { madeMonth } = steel
+  return madeMonth !== null && hasCome(madeMonth, input) ? begun('made', madeMonth)[0] ?? null : null
 }
 
-function periodAfter(method: TestMethod | undefined, months: number | null): number | null {
-  return months === null || method === undefined ? months : Math.min(months, LONGEST_MONTHS_AFTER[method])
+// Of two marks of one month the one with the shorter period counts.
+function isLaterOrShorter(a: Last, b: Last): boolean {
+  const order = compareMonths(a.month, b.month)
+  return order === 0 ? (a.period?.months ?? 0) < (b.period?.months ?? 0) : order > 0
+}
+
+function passedMarks(input: RequalificationInput): (RequalificationMark & { beginning: Beginning | null })[] {
+  return input.marks
+    .filter(({ month, result }) => (result === undefined || result === 'passed') && hasCome(month, input))
+    .map(mark => ({ ...mark, beginning: beginningOf(mark) }))
+}
+
+function hasCome(month: Month, { nowMs, timeZone }: RequalificationInput): boolean {
+  return compareMonths(month, monthOfInstant(nowMs, timeZone)) <= 0
+}
+
+/** What a mark begins: the lesser test, where the method and the suffix say different ones; null where neither tells. */
+function beginningOf({ method, suffix }: RequalificationMark): Beginning | null {
+  const marked = suffixMeaning(suffix ?? '')?.beginning ?? null
+  if (marked === null) return method ?? null
+  return (['visual', 'proof'] as const).find(lesser => lesser === method || lesser === marked) ?? marked
+}
+
+/** The period without any choice; null where the specification has none that is known. */
+function plainMonths({ steel, rules }: RequalificationInput): number | null {
+  return testPeriod('examination', '0000-01', steel, { ...rules, ownerChoices: [] })?.months ?? null
+}
+
+/** The latest mark that came after the one that counts, and begins no period itself. */
+function uncounted(input: RequalificationInput, last: Last | null): ReturnType<typeof passedMarks> {
+  const later = passedMarks(input)
+    .filter(mark => last === null || last.beginning === 'made' || compareMonths(mark.month, last.month) > 0)
+    .sort((a, b) => compareMonths(b.month, a.month))
+  return later.slice(0, 1)
+}
+
+function notCounted({ month, beginning, suffix }: ReturnType<typeof passedMarks>[number]): string {
+  const when = formatMonth(month)
+  if (beginning === null) return `The mark of ${when} does not count: no test is marked ${suffix} (49 CFR 180.213).`
+  const [what, paragraph] = beginning === 'visual' ? ['outside look', '180.209(g)'] : ['proof pressure test', '180.209(e)']
+  return `The ${what} of ${when} does not count: only 49 CFR ${paragraph} lets it stand in for a volumetric test, and the owner has not chosen that for this cylinder.`
+}
+
+function periodInWords(spec: string, { months, choice, isOwnMonths }: TestPeriod): string {
+  if (isOwnMonths) return `due ${months} months later by the owner’s own setting`
+  return choice === null
+    ? `due ${months} months later by 49 CFR 180.209(a), Table 1, for ${spec}`
+    : `due ${months} months later by 49 CFR ${choice.paragraph}, as the owner chose: ${choice.reason.replace(/\.$/, '')}`
+}
+
+function notRequired(spec: string): string {
+  return spec === 'DOT-39'
+    ? 'A DOT-39 is never refilled, so it is never tested again (49 CFR 178.65).'
+    : `No test is asked of a ${spec} (49 CFR 180.209(a), Table 1).`
+}
+
+function periodNotKnown(spec: string): string {
+  return spec === 'DOT-SP'
+    ? 'Its special permit names its test period, and the owner has not entered that.'
+    : `No test period is known for ${spec}.`
 }
 
 function stateOf(daysLeft: number, soonDays: number): Requalification['state'] {

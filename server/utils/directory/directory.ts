@@ -3,18 +3,17 @@ import { firm, firms, people, places, scales, settings } from '../../../drizzle/
 import { DEFAULT_FILL_POLICY, type FillPolicy } from '../../../utils/capacity/types'
 import type { Named } from '../../../utils/custody/cylinderView'
 import type { Scale } from '../../../utils/quantity/scale'
+import type { RetestRules } from '../../../utils/requalification/ownerChoice'
 import type { Database } from '../database/database'
 
 /** Dates and days that the firm sets for its reminders. */
-export interface RetestSettings {
+export interface RetestSettings extends RetestRules {
   soonDays: number
   notSeenDays: number
   missingDays: number
-  /** A longer interval than the default, with the firm's reason on record; null = by the specification. */
-  intervalMonths: number | null
 }
 
-export const DEFAULT_RETEST_SETTINGS: RetestSettings = { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null }
+export const DEFAULT_RETEST_SETTINGS: RetestSettings = { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] }
 
 export interface DatedFillPolicy { fromAt: number, policy: FillPolicy }
 

@@ -24,7 +24,7 @@ export function fillLimitAnswer(query: FillLimitQuery, firmPolicy: FillPolicy): 
 }
 
 /** A stamp alone says nothing of tests. */
-const NO_RETEST: Requalification = { lastMonth: null, intervalMonths: null, dueMonth: null, state: 'not-required', basis: '' }
+const NO_RETEST: Requalification = { lastMonth: null, intervalMonths: null, dueMonth: null, state: 'not-required', basis: '', choice: null }
 
 /** The cylinder that would have this stamp and this weight. */
 function stateOf(query: FillLimitQuery, netGrams: number | null): CylinderState {

@@ -32,7 +32,7 @@ registerEndpoint('/api/people', list([]))
 registerEndpoint('/api/refrigerants', list([{ designation: 'R-22' }, { designation: 'R-410A' }]))
 registerEndpoint('/api/policy', () => ({
   timeZone: 'America/Chicago', fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }], scales: [],
-  retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null },
+  retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] },
 }))
 registerEndpoint('/api/events', {
   method: 'POST',

@@ -18,7 +18,7 @@ export function againstFill(turn: Turn<'filled'>, refrigerant: string | null): F
 }
 
 function againstDate({ state, context }: Turn, at: number): Finding[] {
-  const retest = retestOf(state, { nowMs: at, timeZone: context.timeZone, intervalMonths: context.retest.intervalMonths })
+  const retest = retestOf(state, { nowMs: at, timeZone: context.timeZone, rules: context.retest })
   if (retest.state === 'unknown') return [retestUnknown()]
   return retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, 'stop')] : []
 }

@@ -131,6 +131,7 @@ function takeTurn(before: CylinderState, { event, isOut }: Standing, isBeginning
   }
   if (event.kind === 'registered' && !isBeginning) registeredAgain(turn as Turn<'registered'>)
   else foldByKind(turn)
+  turn.state.hasHeldBurnt ||= turn.state.contents.burnt
   raiseCommon(turn, before)
   return turn
 }

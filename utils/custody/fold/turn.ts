@@ -1,6 +1,7 @@
 import type { FillPolicy } from '../../capacity/types'
 import type { Scale } from '../../quantity/scale'
 import type { Catalogue } from '../../refrigerant/types'
+import type { RetestRules } from '../../requalification/ownerChoice'
 import type { RecordedEvent } from '../event'
 import type { Finding } from '../finding'
 import type { EventKind } from '../kinds'
@@ -15,8 +16,8 @@ export interface FoldContext {
   policyAt: (ms: number) => FillPolicy
   /** The firm's IANA time zone, in which months begin and end. */
   timeZone: string
-  /** The owner's own period between tests; null = by the specification. */
-  retest: { intervalMonths: number | null }
+  /** What the owner has settled about tests. */
+  retest: RetestRules
 }
 
 /** One event's turn: the state it finds and changes, and what it leaves in the books. */
