@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { PolicyAnswer } from '../../utils/contract/policy'
 import type { ProblemDetails } from '../../utils/contract/problem'
-import type { FillLimitAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer } from '../../utils/contract/refrigerants'
+import type { CompositionRecordAnswer, FillLimitAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer } from '../../utils/contract/refrigerants'
 import { TestClient } from '../helpers/client'
 import { setUpFirm, type Member } from '../helpers/firm'
 import { startServer, type TestServer } from '../helpers/server'
@@ -83,12 +83,53 @@ describe('the catalogue of refrigerants', () => {
     expect(body.items.find(one => one.designation === 'R-717')).toMatchObject({ safetyClass: 'B2L', flammable: true, toxic: true })
   })
 
+  it('gives each its pressure class and the GWP that stands for it, and lists known blends beside', async () => {
+    const { body } = await admin.client.get<RefrigerantsAnswer>('/api/refrigerants')
+    const line = (designation: string) => body.items.find(one => one.designation === designation)
+    // 40 CFR 82.152 names R-22 high and R-134a medium; 42 USC 7675(c) gives R-134a 1430, IPCC AR4 R-22 1810.
+    expect(line('R-22')).toMatchObject({ pressureClass: 'high', gwp: { basis: 'AR4', value: 1810 } })
+    expect(line('R-134a')).toMatchObject({ pressureClass: 'medium', gwp: { basis: 'exchange-value', value: 1430 } })
+    // 10 % R-32, 70 % R-125, 20 % R-134a: 2803.5.
+    expect(body.compositions.find(one => one.designation === 'R-407B')).toMatchObject({ gwp: { basis: 'exchange-value', value: 2803.5 } })
+  })
+
+  it('gives one its properties, its class, its GWPs, its transport entry and its doubt', async () => {
+    const { body } = await admin.client.get<RefrigerantRecordAnswer>('/api/refrigerants/R-454B')
+    expect(body.known).toBe('properties')
+    expect(body.unEntry).toMatchObject({ un: 'UN3161', division: '2.1' })
+    expect(body.noUnEntryBecause).toBeNull()
+    expect(body.pressureClass).toMatchObject({ pressureClass: 'high', nearBound: null })
+    // 0.689 x 675 + 0.311 x 1.
+    expect(body.gwp.find(one => one.basis === 'exchange-value')?.value).toBeCloseTo(465.39, 2)
+    expect(body.gwp.find(one => one.basis === 'AR4')?.value).toBeNull()
+    expect(body.points.map(point => point.temperatureF)).toEqual([32, 70, 77, 104, 130, 131])
+    expect(body.points.every(point => point.saturation!.bubblePressureKPa > point.saturation!.dewPressureKPa)).toBe(true)
+    expect(body.curve.length).toBeGreaterThan(15)
+    const { body: weak } = await admin.client.get<RefrigerantRecordAnswer>('/api/refrigerants/R-413A')
+    expect(weak.doubt).toContain('3.6 K')
+  })
+
+  it('gives carbon dioxide no liquid from 104 °F on, and no numbers for it', async () => {
+    const { body } = await admin.client.get<RefrigerantRecordAnswer>('/api/refrigerants/R-744')
+    expect(body.pressureClass.at104F).toEqual({ aboveCritical: true })
+    expect(body.points.filter(point => point.saturation === null).map(point => point.temperatureF)).toEqual([77, 104, 130, 131])
+  })
+
+  it('knows of a blend outside the catalogue what it is made of, and nothing more', async () => {
+    const { body } = await admin.client.get<CompositionRecordAnswer>('/api/refrigerants/r-407b')
+    expect(body).toMatchObject({ known: 'composition', designation: 'R-407B', unEntry: { un: 'UN3339', division: '2.2' } })
+    expect(body.compositionSource).not.toBe('')
+    expect(body).not.toHaveProperty('points')
+    expect((await admin.client.get('/api/refrigerants/R-407B/saturation?temperatureC=25')).status).toBe(404)
+  })
+
   it('says what one is made of and from where it is known, in any case', async () => {
     const { body } = await admin.client.get<RefrigerantRecordAnswer>('/api/refrigerants/r-410a')
     expect(body.designation).toBe('R-410A')
     expect(body.composition).toEqual([{ component: 'R-32', massPercent: 50 }, { component: 'R-125', massPercent: 50 }])
     expect(body.source).not.toBe('')
     expect(body).not.toHaveProperty('table')
+    expect(body).not.toHaveProperty('curves')
     expect((await admin.client.get('/api/refrigerants/R-9999')).status).toBe(404)
   })
 

@@ -9,6 +9,7 @@ const ITEMS: readonly (NavigationItem & { permission: Permission })[] = [
   { label: 'Fleet', to: '/fleet', permission: 'fleet:read' },
   { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
   { label: 'Retests', to: '/retests', permission: 'lots:read' },
+  { label: 'Refrigerants', to: '/refrigerants', permission: 'refrigerants:read' },
   { label: 'Labels', to: '/labels', permission: 'labels:mint' },
   { label: 'Places', to: '/places', permission: 'places:read' },
   { label: 'People', to: '/people', permission: 'people:read' },

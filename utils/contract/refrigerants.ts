@@ -1,18 +1,64 @@
 import { z } from 'zod'
 import type { CapacityView } from '../custody/cylinderView'
 import { parseMassText } from '../quantity/mass'
+import type { Gwp, GwpBasis } from '../refrigerant/gwp'
+import type { PressureClass, PressureClassing } from '../refrigerant/pressureClass'
 import type { Saturation } from '../refrigerant/saturation'
-import type { Refrigerant } from '../refrigerant/types'
+import type { Refrigerant, SaturationRow } from '../refrigerant/types'
+import type { UnEntry } from '../refrigerant/unEntry'
 import { splitSpec } from '../requalification/specs'
 import type { Page } from './parts'
 
+/** A GWP that stands for a refrigerant where there is room for one, with the list it is from. */
+export type HeadlineGwp = { basis: GwpBasis, value: number } | null
+
 /** GET /api/refrigerants, one line. */
-export interface RefrigerantLine { designation: string, kind: string, safetyClass: string | null, accuracyGroup: string, flammable: boolean, toxic: boolean }
+export interface RefrigerantLine {
+  designation: string
+  kind: string
+  safetyClass: string | null
+  accuracyGroup: string
+  flammable: boolean
+  toxic: boolean
+  pressureClass: PressureClass
+  gwp: HeadlineGwp
+}
 
-export type RefrigerantsAnswer = Page<RefrigerantLine>
+/** A blend of which the composition is published and no property is held. */
+export interface CompositionLine { designation: string, composition: Refrigerant['composition'], gwp: HeadlineGwp }
 
-/** GET /api/refrigerants/{designation}: composition, class, sources and how sure they are. Any case. */
-export type RefrigerantRecordAnswer = Omit<Refrigerant, 'table'> & { flammable: boolean, toxic: boolean }
+export type RefrigerantsAnswer = Page<RefrigerantLine> & { compositions: CompositionLine[] }
+
+interface NamedForTransport { unEntry: UnEntry | null, noUnEntryBecause: string | null }
+
+/** A point of the saturation table; null above the refrigerant's last temperature, where it has no liquid. Units: F, C. */
+export interface PropertyPoint { temperatureF: number, temperatureC: number, saturation: Saturation | null }
+
+/** GET /api/refrigerants/{designation} of the catalogue: properties, class, composition, GWPs, transport entry, how sure each is. */
+export interface RefrigerantRecordAnswer extends Omit<Refrigerant, 'table' | 'curves'>, NamedForTransport {
+  known: 'properties'
+  flammable: boolean
+  toxic: boolean
+  pressureClass: PressureClassing
+  gwp: Gwp[]
+  /** At the temperatures that the trade and the regulations name. */
+  points: PropertyPoint[]
+  /** The rows of its table, for a picture. Units: C, kPa absolute. */
+  curve: CurveRow[]
+}
+
+export type CurveRow = Pick<SaturationRow, 'tC' | 'bubblePressureKPa' | 'dewPressureKPa'>
+
+/** GET /api/refrigerants/{designation} of a blend whose composition alone is known. */
+export interface CompositionRecordAnswer extends NamedForTransport {
+  known: 'composition'
+  designation: string
+  composition: Refrigerant['composition']
+  compositionSource: string
+  gwp: Gwp[]
+}
+
+/** The path of a refrigerant: its designation in any case. */
 export const designationParams = z.strictObject({ designation: z.string().min(1).max(40) })
 
 /** GET /api/refrigerants/{designation}/saturation?temperatureC= ; 422 outside the refrigerant's table. */

@@ -33,6 +33,18 @@ export function gwpOf(refrigerant: Pick<Refrigerant, 'composition'>, basis: GwpB
   return because === null ? { basis, value: sumOf(parts), parts, fromMemory } : { basis, value: null, because, parts, fromMemory }
 }
 
+// The law of the land first; then the list that its values were taken from; then what still names the rest.
+const HEADLINE_ORDER: readonly GwpBasis[] = ['exchange-value', 'AR4', 'EU-517/2014', 'EU-2024/573', 'AR6', 'AR5']
+
+/** The GWP that stands for a refrigerant where there is room for one; null where no basis has it. */
+export function headlineGwp(refrigerant: Pick<Refrigerant, 'composition'>): { basis: GwpBasis, value: number } | null {
+  for (const basis of HEADLINE_ORDER) {
+    const { value } = gwpOf(refrigerant, basis)
+    if (value !== null) return { basis, value }
+  }
+  return null
+}
+
 function sumOf(parts: readonly GwpPart[]): number {
   const sum = parts.reduce((total, { massPercent, gwp }) => total + massPercent / 100 * (gwp ?? 0), 0)
   return Math.round(sum * 10_000) / 10_000

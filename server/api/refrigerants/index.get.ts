@@ -1,9 +1,5 @@
 import { apiRoute } from '~~/server/utils/http/apiRoute'
-import { refrigerantLines } from '~~/server/utils/refrigerants/refrigerants'
-import type { RefrigerantsAnswer } from '~~/utils/contract/refrigerants'
+import { refrigerantList } from '~~/server/utils/refrigerants/refrigerants'
 
-/** GET /api/refrigerants: the catalogue, one line each. */
-export default apiRoute({ permission: 'refrigerants:read' }, (): RefrigerantsAnswer => {
-  const items = refrigerantLines()
-  return { items, nextCursor: null, total: items.length }
-})
+/** GET /api/refrigerants: the catalogue, one line each, and the blends of which only the composition is known. */
+export default apiRoute({ permission: 'refrigerants:read' }, () => refrigerantList())

@@ -1,21 +1,30 @@
-import type { RefrigerantLine, RefrigerantRecordAnswer, SaturationAnswer } from '~~/utils/contract/refrigerants'
+import type {
+  CompositionLine, CompositionRecordAnswer, RefrigerantLine, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer,
+} from '~~/utils/contract/refrigerants'
+import { celsiusFromFahrenheit } from '~~/utils/quantity/temperature'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
+import { GWP_BASES, gwpOf, headlineGwp } from '~~/utils/refrigerant/gwp'
+import { pressureClassOf } from '~~/utils/refrigerant/pressureClass'
 import { isFlammable, isToxic } from '~~/utils/refrigerant/safety'
 import { hasLiquidAt, saturationAt } from '~~/utils/refrigerant/saturation'
-import type { Refrigerant } from '~~/utils/refrigerant/types'
+import type { Composition, Refrigerant } from '~~/utils/refrigerant/types'
+import { noUnEntryBecause, unEntryOf } from '~~/utils/refrigerant/unEntry'
 import { problem } from '../http/problem'
 
-/** Every refrigerant of the catalogue, in its order. */
-export function refrigerantLines(): RefrigerantLine[] {
-  return [...CATALOGUE.refrigerants.values()].map(({ designation, kind, safetyClass, accuracyGroup }) => ({
-    designation, kind, safetyClass, accuracyGroup, flammable: isFlammable(safetyClass), toxic: isToxic(safetyClass),
-  }))
+// Ice; a shop; the temperatures of 80 % by volume, of the pressure classes, and of full cylinders (49 CFR 173.304a(a)(2), 173.304(b)).
+const NAMED_TEMPERATURES_F = [32, 70, 77, 104, 130, 131]
+
+/** Every refrigerant of the catalogue in its order, and the blends of which only the composition is known. */
+export function refrigerantList(): RefrigerantsAnswer {
+  const items = [...CATALOGUE.refrigerants.values()].map(line)
+  const compositions = [...CATALOGUE.compositions.values()].map(compositionLine)
+  return { items, nextCursor: null, total: items.length, compositions }
 }
 
-/** What is known of one refrigerant, without its table. Errors: 404 where the catalogue has none of this name. */
-export function refrigerantRecord(designation: string): RefrigerantRecordAnswer {
-  const { table: _, ...record } = refrigerantNamed(designation)
-  return { ...record, flammable: isFlammable(record.safetyClass), toxic: isToxic(record.safetyClass) }
+/** What is known of one refrigerant, or of a blend's composition. Errors: 404 where nothing has this name. */
+export function refrigerantRecord(designation: string): RefrigerantRecordAnswer | CompositionRecordAnswer {
+  const blend = named(CATALOGUE.compositions, designation)
+  return blend ? compositionRecord(blend) : propertiesRecord(refrigerantNamed(designation))
 }
 
 /** Saturation of a refrigerant. Errors: 404; 422 outside its table. */
@@ -30,11 +39,56 @@ export function saturationOf(designation: string, temperatureC: number): Saturat
   return saturationAt(refrigerant, temperatureC)
 }
 
-/** A refrigerant of the catalogue by its name, in any case. Errors: 404 where it has none of this name. */
-export function refrigerantNamed(designation: string): Refrigerant {
-  const wanted = designation.toUpperCase()
-  const found = CATALOGUE.refrigerants.get(designation)
-    ?? [...CATALOGUE.refrigerants.values()].find(one => one.designation.toUpperCase() === wanted)
+function line(refrigerant: Refrigerant): RefrigerantLine {
+  const { designation, kind, safetyClass, accuracyGroup } = refrigerant
+  return {
+    designation, kind, safetyClass, accuracyGroup, flammable: isFlammable(safetyClass), toxic: isToxic(safetyClass),
+    pressureClass: pressureClassOf(refrigerant).pressureClass, gwp: headlineGwp(refrigerant),
+  }
+}
+
+function compositionLine({ designation, components }: Composition): CompositionLine {
+  return { designation, composition: [...components], gwp: headlineGwp({ composition: [...components] }) }
+}
+
+function propertiesRecord(refrigerant: Refrigerant): RefrigerantRecordAnswer {
+  const { table, curves: _, ...record } = refrigerant
+  return {
+    ...record, known: 'properties', flammable: isFlammable(record.safetyClass), toxic: isToxic(record.safetyClass),
+    pressureClass: pressureClassOf(refrigerant),
+    gwp: GWP_BASES.map(basis => gwpOf(refrigerant, basis)),
+    ...namedForTransport(refrigerant),
+    points: NAMED_TEMPERATURES_F.map(temperatureF => pointAt(refrigerant, temperatureF)),
+    curve: table.map(({ tC, bubblePressureKPa, dewPressureKPa }) => ({ tC, bubblePressureKPa, dewPressureKPa })),
+  }
+}
+
+function compositionRecord({ designation, components, source }: Composition): CompositionRecordAnswer {
+  const composition = [...components]
+  return {
+    known: 'composition', designation, composition, compositionSource: source,
+    gwp: GWP_BASES.map(basis => gwpOf({ composition }, basis)),
+    ...namedForTransport({ designation, composition, safetyClass: null }),
+  }
+}
+
+function namedForTransport(refrigerant: Parameters<typeof unEntryOf>[0]) {
+  const unEntry = unEntryOf(refrigerant)
+  return { unEntry, noUnEntryBecause: unEntry ? null : noUnEntryBecause(refrigerant) }
+}
+
+function pointAt(refrigerant: Refrigerant, temperatureF: number) {
+  const temperatureC = celsiusFromFahrenheit(temperatureF)
+  return { temperatureF, temperatureC, saturation: hasLiquidAt(refrigerant, temperatureC) ? saturationAt(refrigerant, temperatureC) : null }
+}
+
+function refrigerantNamed(designation: string): Refrigerant {
+  const found = named(CATALOGUE.refrigerants, designation)
   if (!found) throw problem(404, 'No such refrigerant', 'The catalogue does not have it under this name.')
   return found
+}
+
+function named<T extends { designation: string }>(map: ReadonlyMap<string, T>, designation: string): T | undefined {
+  const wanted = designation.toUpperCase()
+  return map.get(designation) ?? [...map.values()].find(one => one.designation.toUpperCase() === wanted)
 }
