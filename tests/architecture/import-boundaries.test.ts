@@ -9,9 +9,10 @@ const PURE: Record<string, readonly string[]> = {
   refrigerant: ['quantity'],
   requalification: ['quantity'],
   capacity: ['quantity', 'refrigerant', 'requalification'],
-  custody: ['quantity', 'refrigerant', 'requalification', 'capacity', 'access', 'label', 'registration'],
+  recovery: ['quantity', 'refrigerant'],
+  custody: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'access', 'label', 'registration'],
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
-  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'access', 'label'],
+  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'custody', 'access', 'label'],
 }
 
 /** What else in utils/ draws, prints and plans: all of the above. */
