@@ -1,8 +1,17 @@
 import { describe, expect, it } from 'vitest'
-import { fillingDensityRows, hydrocarbonPercent, isLiquefiedGasSpec, rowFit } from '~~/utils/capacity/fillingDensities'
+import { fillLimit } from '~~/utils/capacity/fillLimit'
+import { fillingDensityRows, isLiquefiedGasSpec, rowFit } from '~~/utils/capacity/fillingDensities'
+import { fitFindings } from '~~/utils/capacity/fit'
+import type { FillTerm, Stamp } from '~~/utils/capacity/types'
+import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
 import { liquidDensityAt } from '~~/utils/refrigerant/saturation'
+import type { Catalogue } from '~~/utils/refrigerant/types'
 import { splitSpec } from '~~/utils/requalification/specs'
+import { catalogueOfFluid } from '~~/tests/helpers/fluids'
+import { lb, stampOf } from '~~/tests/helpers/stamps'
+
+const GRAMS_PER_POUND = 453.59237
 
 // 49 CFR 173.304a(a)(2), table of maximum permitted filling densities: refrigerant, percent of the weight of water at 60 F
 // (null: not liquid-full at 131 F), least marks.
@@ -32,6 +41,28 @@ const PRINTED: [string, number | null, string][] = [
   ['R-1113', 115, '3A300, 3AA300, 3B300, 3E1800, 4B300, 4BA300, 4BW300'],
 ]
 
+// So heavy that no bound of the liquid hides what a row prints. Units: kg/m3.
+const HEAVY = 2000
+
+// The rows of R-170 and R-1150 that list a 39, which carries no pressure there: the highest.
+const MOST_IN_A_39: Record<string, number> = { 'R-170': 36.8, 'R-1150': 35.5 }
+
+function stampMarked(mark: string): Stamp {
+  return stampOf({ ...splitSpec(mark)!, waterCapacity: lb(100), tareWeight: lb(60) })
+}
+
+function limitFor(stamp: Stamp, refrigerant: string, catalogue: Catalogue) {
+  return fillLimit({ stamp, refrigerant, condition: 'clean', burnt: false, policy: DEFAULT_FILL_POLICY, catalogue })
+}
+
+function fillingDensityTerm(stamp: Stamp, designation: string, catalogue: Catalogue): FillTerm | undefined {
+  return limitFor(stamp, designation, catalogue).terms.find(term => term.rule === 'filling-density')
+}
+
+function codes(mark: string, refrigerant: string): string[] {
+  return fitFindings({ stamp: stampMarked(mark), refrigerant, catalogue: CATALOGUE }).map(({ code }) => code)
+}
+
 describe('49 CFR 173.304a(a)(2)', () => {
   it.each(PRINTED)('prints for %s %s %% in %s', (designation, percent, marks) => {
     const row = fillingDensityRows(designation).find(one => one.percent === percent)
@@ -57,54 +88,55 @@ describe('49 CFR 173.304a(a)(2)', () => {
     }
   })
 
+  // In 100 lb of water capacity a filling density in percent is a weight in pounds.
+  it.each(PRINTED)('lets 100 lb of water capacity take of %s %s lb in each of %s', (designation, percent, marks) => {
+    for (const mark of marks.split(', ')) {
+      const term = fillingDensityTerm(stampMarked(mark), designation, catalogueOfFluid(designation, HEAVY))
+      if (percent === null) {
+        expect(term, mark).toMatchObject({ limitGrams: null, because: expect.stringMatching(/131/) })
+      }
+      else {
+        // A mark without a pressure that stands in several rows takes the best of them.
+        const best = mark === '39' ? MOST_IN_A_39[designation] ?? percent : percent
+        expect(term?.limitGrams, mark).toBe(Math.floor(best * GRAMS_PER_POUND + 1e-6))
+      }
+    }
+  })
+
+  it.each([
+    ['3AA1800', 68], ['3AA1999', 68], ['3AA2000', 70.3], ['3AA2264', 70.3], ['3AA2265', 73.2], ['3AA2399', 73.2], ['3AA2400', 74.5],
+  ])('lets a %s take R-744 up to %d %% and no other rule speak', (mark, percent) => {
+    const limit = limitFor(stampMarked(mark), 'R-744', CATALOGUE)
+    expect(limit.governingRule).toBe('filling-density')
+    expect(limit.fillLimitGrams).toBe(Math.floor(percent * GRAMS_PER_POUND + 1e-6))
+  })
+
+  it('gives R-744 no figure in a cylinder below 1800 psig', () => {
+    expect(limitFor(stampMarked('3AA1799'), 'R-744', CATALOGUE).fillLimitGrams).toBeNull()
+    expect(limitFor(stampMarked('4BA400'), 'R-744', CATALOGUE).fillLimitGrams).toBeNull()
+  })
+
+  // "Refrigerant gas, n.o.s.": 3A240, 3AA240, 3AL240, 3B240, 3E1800, 4B240, 4BA240, 4BW240, 4E240, 39.
+  it.each(['R-134a', 'R-124', 'R-513A', 'R-1234ze(E)', 'R-227ea'])('asks of a cylinder for %s, which no row names, 240 psig', (designation) => {
+    for (const type of ['3A', '3AA', '3AL', '3B', '4B', '4BA', '4BW', '4E']) {
+      expect(codes(`${type}240`, designation), type).not.toContain('pressure-class')
+      expect(codes(`${type}239`, designation), type).toContain('pressure-class')
+    }
+  })
+
+  it.each([
+    ['R-12', '4BA225', '4BA224'], ['R-22', '4BW240', '4BW239'], ['R-115', '4B225', '4B224'], ['R-142b', '3AA150', '3AA149'],
+    ['R-152a', '3AL150', '3AL149'], ['R-717', '3AA480', '3AA479'], ['R-500', '4BA240', '4BA239'], ['R-13', '3AA1800', '3AA1799'],
+  ])('lets %s into a %s and not into a %s', (designation, enough, tooLow) => {
+    expect(codes(enough, designation)).not.toContain('pressure-class')
+    expect(codes(tooLow, designation)).toContain('pressure-class')
+  })
+
   it('lists in (a)(1) the specifications for liquefied gases', () => {
     const listed = ['3', '3A', '3AA', '3AL', '3B', '3BN', '3E', '4B', '4BA', '4B240ET', '4BW', '4E', '39']
     const others = ['3AX', '3AAX', '3HT', '3T', '4AA480', '4D', '4DA', '4DS', '4L', '8', '8AL', 'SP']
     for (const spec of listed) expect(isLiquefiedGasSpec(`DOT-${spec}`), spec).toBe(true)
     for (const spec of others) expect(isLiquefiedGasSpec(`DOT-${spec}`), spec).toBe(false)
-  })
-})
-
-// 49 CFR 173.304a(d)(1), filling densities of liquefied petroleum gas: specific gravity at 60 F from, to, percent.
-const PRINTED_BANDS: [number, number, number][] = [
-  [0.271, 0.289, 26],
-  [0.290, 0.306, 27],
-  [0.307, 0.322, 28],
-  [0.323, 0.338, 29],
-  [0.339, 0.354, 30],
-  [0.355, 0.371, 31],
-  [0.372, 0.398, 32],
-  [0.399, 0.425, 33],
-  [0.426, 0.440, 34],
-  [0.441, 0.452, 35],
-  [0.453, 0.462, 36],
-  [0.463, 0.472, 37],
-  [0.473, 0.480, 38],
-  [0.481, 0.488, 39],
-  [0.489, 0.495, 40],
-  [0.496, 0.503, 41],
-  [0.504, 0.510, 42],
-  [0.511, 0.519, 43],
-  [0.520, 0.527, 44],
-  [0.528, 0.536, 45],
-  [0.537, 0.544, 46],
-  [0.545, 0.552, 47],
-  [0.553, 0.560, 48],
-  [0.561, 0.568, 49],
-  [0.569, 0.576, 50],
-  [0.577, 0.584, 51],
-  [0.585, 0.592, 52],
-  [0.593, 0.600, 53],
-  [0.601, 0.608, 54],
-  [0.609, 0.617, 55],
-  [0.618, 0.626, 56],
-  [0.627, 0.634, 57],
-]
-
-describe('49 CFR 173.304a(d)(1)', () => {
-  it.each(PRINTED_BANDS)('prints for a specific gravity of %d to %d %d %%', (from, to, percent) => {
-    expect(hydrocarbonPercent(from)).toBe(percent)
-    expect(hydrocarbonPercent(to)).toBe(percent)
   })
 })
 
@@ -117,11 +149,4 @@ describe('computed cross-check: liquid density at 131 F over water at 60 F', () 
     expect(liquidFullPercent).toBeGreaterThan(percent)
     expect(liquidFullPercent).toBeLessThan(percent * 1.04)
   })
-
-  it.each([['R-290', 0.507, 42], ['R-600a', 0.563, 49], ['R-1270', 0.523, 44], ['R-600', 0.584, 51]])(
-    'puts %s at a specific gravity of %d at 60 F, so at %d %%', (designation, gravity, percent) => {
-      const computed = liquidDensityAt(CATALOGUE.refrigerants.get(designation)!, (60 - 32) / 1.8) / 999.04
-      expect(computed).toBeCloseTo(gravity, 2)
-      expect(hydrocarbonPercent(computed)).toBe(percent)
-    })
 })

@@ -39,11 +39,14 @@ const PRESSURE_PAGE: [string, number, number][] = [
   ['R-404A', 60, 126.0],
 ]
 
+// Printed to 0.1 psi, so within half of that; a blend may differ by 0.02 % more, because the page has it as one fluid.
+const HALF_A_TENTH_PSI = 0.05
+
 describe('a pressure-temperature page, bubble side', () => {
-  // Printed to 0.1 psi.
   it.each(PRESSURE_PAGE)('%s at %d F: %d psig', (designation, f, psig) => {
     const kPa = computed(designation, celsiusFromFahrenheit(f), 'bubblePressureKPa')
-    expect(Math.abs(psigFromKPa(kPa) - psig)).toBeLessThanOrEqual(0.1)
+    const blend = CATALOGUE.refrigerants.get(designation)!.kind === 'pure' ? 0 : 0.0002 * psig
+    expect(Math.abs(psigFromKPa(kPa) - psig)).toBeLessThanOrEqual(HALF_A_TENTH_PSI + blend)
   })
 })
 
@@ -57,7 +60,7 @@ const R409A_PAGE: [string, number, number][] = [
 ]
 
 describe('a pressure-temperature page for R-409A, dew side', () => {
-  // Printed to 0.1 psi.
+  // Printed to 0.1 psi; the page may rest on the same software.
   it.each(R409A_PAGE)('%s at %d F: %d psig', (designation, f, psig) => {
     const kPa = computed(designation, celsiusFromFahrenheit(f), 'dewPressureKPa')
     expect(Math.abs(psigFromKPa(kPa) - psig)).toBeLessThanOrEqual(0.1)
@@ -75,8 +78,8 @@ const TABLE_R12: Point[] = [
 ]
 
 describe('a table for R-12', () => {
-  // Of the same family of equations; the printed temperature is rounded to 0.01 K.
-  it.each(TABLE_R12)('%s at %d C, %s: %d', (...point) => expectWithin(0.05, point))
+  // Of the same family of equations; the printed temperature is rounded to 0.01 K, which is 0.02 % in pressure and vapour.
+  it.each(TABLE_R12)('%s at %d C, %s: %d', (...point) => expectWithin(point[2] === 'liquidDensity' ? 0.01 : 0.03, point))
 })
 
 // DuPont Suva 410A, thermodynamic tables.
@@ -158,10 +161,29 @@ describe('the vapour densities of an independent table for R-32', () => {
   it.each(R32_VAPOUR)('%s at %d C, %s: %d', (...point) => expectWithin(0.8, point))
 })
 
-// Normal boiling points read: R-515B -18.9 C, R-1233zd(E) 18.1 C, R-1336mzz(Z) 33.4 C (data sheets).
-const BOILING: [string, number][] = [['R-515B', -18.9], ['R-1233zd(E)', 18.1], ['R-1336mzz(Z)', 33.4]]
+// Preparation for the EPA certification, epacertificationprep.com: the pressure-temperature chart's column for R-500 at 80 F.
+describe('a chart for an examination', () => {
+  it('R-500 at 80 F: 101.9 psig, within the 1.5 % that this blend deserves', () => {
+    expectWithin(1.5, ['R-500', celsiusFromFahrenheit(80), 'bubblePressureKPa', kPaFromPsig(101.9)])
+  })
+})
 
-describe('a printed normal boiling point', () => {
-  // Printed to 0.1 K, which is up to 0.4 % in pressure.
-  it.each(BOILING)('%s boils at %d C', (designation, tC) => expectWithin(0.4, [designation, tC, 'bubblePressureKPa', 101.325]))
+// HVAC School, "How Much Pressure Is That Recovery Tank Designed For?": R-410A reaches the 400 psig of a DOT-4BA400 at about 116 F.
+describe('the service pressure of a DOT-4BA400', () => {
+  it('is reached by R-410A at about 116 F', () => {
+    expect(psigFromKPa(computed('R-410A', celsiusFromFahrenheit(115), 'bubblePressureKPa'))).toBeLessThan(400)
+    expect(psigFromKPa(computed('R-410A', celsiusFromFahrenheit(117), 'bubblePressureKPa'))).toBeGreaterThan(400)
+  })
+})
+
+// From memory, tables of manufacturers: R-22 at 25 C 1044 kPa and 1191 kg/m3, R-134a at 25 C 666 kPa and 1207 kg/m3.
+const REMEMBERED: Point[] = [
+  ['R-22', 25, 'bubblePressureKPa', 1044],
+  ['R-22', 25, 'liquidDensity', 1191],
+  ['R-134a', 25, 'bubblePressureKPa', 666],
+  ['R-134a', 25, 'liquidDensity', 1207],
+]
+
+describe('figures at 25 C, from memory', () => {
+  it.each(REMEMBERED)('%s at %d C, %s: %d', (...point) => expectWithin(0.5, point))
 })
