@@ -1,9 +1,9 @@
 import type { Month } from '../quantity/month'
 import { addMonths, compareMonths, daysUntilEndOfMonth, formatMonth, monthOfInstant } from '../quantity/month'
-import type { OwnerChoice, RetestRules } from './ownerChoice'
+import { CHOICE_TERMS, type OwnerChoice, type RetestRules } from './ownerChoice'
 import { suffixMeaning } from './retestSuffix'
 import { SPECS } from './specs'
-import { testPeriod, type Beginning, type Steel, type TestPeriod } from './testPeriod'
+import { shortestMonths, testPeriod, type Beginning, type Steel, type TestPeriod } from './testPeriod'
 
 /** How a cylinder was tested: by its expansion under water, under proof pressure, or by an outside look. */
 export type TestMethod = 'volumetric' | 'proof' | 'visual'
@@ -54,8 +54,8 @@ export function requalification(input: RequalificationInput): Requalification {
   const last = lastBeginning(input)
   const begun = { lastMonth: last?.month ?? null, intervalMonths: null, dueMonth: null, choice: null }
   if (SPECS[spec]?.requalified === false) return { ...begun, state: 'not-required', basis: notRequired(spec) }
-  const left = uncounted(input, last).map(mark => ` ${notCounted(mark)}`).join('')
-  if (!last) return { ...begun, intervalMonths: plainMonths(input), state: 'unknown', basis: `No test date is known.${left}` }
+  const left = [...uncounted(input, last).map(notCounted), ...burntWord(input)].map(sentence => ` ${sentence}`).join('')
+  if (!last) return { ...begun, intervalMonths: shortestMonths(spec, input.rules), state: 'unknown', basis: `No test date is known.${left}` }
   if (last.period === null) return { ...begun, state: 'unknown', basis: periodNotKnown(spec) }
   const { months, choice } = last.period
   const dueMonth = addMonths(last.month, months)
@@ -75,7 +75,7 @@ function lastBeginning(input: RequalificationInput): Last | null {
   const { steel, rules } = input
   const begun = (beginning: Beginning, month: Month): Last[] => {
     const period = testPeriod(beginning, month, steel, rules)
-    return period !== null || (beginning !== 'visual' && plainMonths(input) === null) ? [{ month, beginning, period }] : []
+    return period !== null || (beginning !== 'visual' && shortestMonths(steel.spec, rules) === null) ? [{ month, beginning, period }] : []
   }
   const tests = passedMarks(input).flatMap(({ month, beginning }) => beginning === null ? [] : begun(beginning, month))
   if (tests.length > 0) return tests.reduce((latest, test) => isLaterOrShorter(test, latest) ? test : latest)
@@ -106,11 +106,6 @@ function beginningOf({ method, suffix }: RequalificationMark): Beginning | null 
   return (['visual', 'proof'] as const).find(lesser => lesser === method || lesser === marked) ?? marked
 }
 
-/** The period without any choice; null where the specification has none that is known. */
-function plainMonths({ steel, rules }: RequalificationInput): number | null {
-  return testPeriod('examination', '0000-01', steel, { ...rules, ownerChoices: [] })?.months ?? null
-}
-
 /** The latest mark that came after the one that counts, and begins no period itself. */
 function uncounted(input: RequalificationInput, last: Last | null): ReturnType<typeof passedMarks> {
   const later = passedMarks(input)
@@ -123,7 +118,12 @@ function notCounted({ month, beginning, suffix }: ReturnType<typeof passedMarks>
   const when = formatMonth(month)
   if (beginning === null) return `The mark of ${when} does not count: no test is marked ${suffix} (49 CFR 180.213).`
   const [what, paragraph] = beginning === 'visual' ? ['outside look', '180.209(g)'] : ['proof pressure test', '180.209(e)']
-  return `The ${what} of ${when} does not count: only 49 CFR ${paragraph} lets it stand in for a volumetric test, and the owner has not chosen that for this cylinder.`
+  return `The ${what} of ${when} does not count: only 49 CFR ${paragraph} lets it stand in for a volumetric test, and no choice of the owner’s covers this cylinder.`
+}
+
+function burntWord({ steel, rules }: RequalificationInput): string[] {
+  const isMeant = rules.ownerChoices.some(({ paragraph }) => CHOICE_TERMS[paragraph].specs.includes(steel.spec))
+  return steel.service.hasHeldBurnt && isMeant ? ['Burnt refrigerant was in it, so the owner’s choice does not cover it.'] : []
 }
 
 function periodInWords(spec: string, { months, choice, isOwnMonths }: TestPeriod): string {

@@ -1,18 +1,16 @@
 /** How often cylinders of a specification are requalified. Units: months. */
 export type SpecPeriod = {
-  /** The period without any owner's setting; null where the regulation names none. */
+  /** The shortest period, which counts without any choice of the owner's; null where the regulation names none. */
   months: number | null
-  /** The longest the regulation allows an owner to choose; null where a special permit says. */
-  longestMonths: number | null
   /** Whether the specification is requalified at all. */
   requalified: boolean
 }
 
-function years(shortest: number, longest = shortest): SpecPeriod {
-  return { months: shortest * 12, longestMonths: longest * 12, requalified: true }
+function years(shortest: number): SpecPeriod {
+  return { months: shortest * 12, requalified: true }
 }
 
-const NEVER: SpecPeriod = { months: null, longestMonths: null, requalified: false }
+const NEVER: SpecPeriod = { months: null, requalified: false }
 
 /**
  * The specifications a stamp can name, with their requalification periods.
@@ -21,31 +19,31 @@ const NEVER: SpecPeriod = { months: null, longestMonths: null, requalified: fals
  * (DOT-SP) names its own period.
  */
 export const SPECS: Readonly<Record<string, SpecPeriod>> = {
-  'DOT-3A': years(5, 12),
-  'DOT-3AA': years(5, 12),
-  'DOT-3A480X': years(5, 10),
-  'DOT-3AL': years(5, 12),
+  'DOT-3A': years(5),
+  'DOT-3AA': years(5),
+  'DOT-3A480X': years(5),
+  'DOT-3AL': years(5),
   'DOT-3AX': years(5),
   'DOT-3AAX': years(5),
-  'DOT-3B': years(5, 10),
-  'DOT-3BN': years(5, 10),
+  'DOT-3B': years(5),
+  'DOT-3BN': years(5),
   'DOT-3E': NEVER,
   'DOT-3HT': years(3),
   'DOT-3T': years(5),
-  'DOT-4AA480': years(5, 10),
-  'DOT-4B': years(5, 12),
-  'DOT-4BA': years(5, 12),
-  'DOT-4BW': years(5, 12),
-  'DOT-4B240ET': years(5, 12),
+  'DOT-4AA480': years(5),
+  'DOT-4B': years(5),
+  'DOT-4BA': years(5),
+  'DOT-4BW': years(5),
+  'DOT-4B240ET': years(5),
   'DOT-4D': years(5),
   'DOT-4DA': years(5),
   'DOT-4DS': years(5),
-  'DOT-4E': years(5, 12),
+  'DOT-4E': years(5),
   'DOT-4L': NEVER,
-  'DOT-8': years(10, 20),
-  'DOT-8AL': years(10, 20),
+  'DOT-8': years(10),
+  'DOT-8AL': years(10),
   'DOT-39': NEVER,
-  'DOT-SP': { months: null, longestMonths: null, requalified: true },
+  'DOT-SP': { months: null, requalified: true },
 }
 
 // Specification 3 stands in the lists of 49 CFR 173.304a only, so its period is not known here.

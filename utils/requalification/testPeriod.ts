@@ -39,6 +39,8 @@ const SPECIAL_PERMIT = 'DOT-SP'
 const FIRST_MONTH_OF_STAR = '1946-01'
 // 49 CFR 180.209(b)(1): a water capacity of 125 lb (56.7 kg) or less. 1 lb = 453.59237 g exactly.
 const MOST_WATER_OF_STAR_GRAMS = 125 * 453.59237
+// An acetylene shell (specification 8) is tested by pressure and marked S, 49 CFR 180.213; a special permit says for itself.
+const PROOF_SUFFICES: readonly string[] = ['DOT-8', 'DOT-8AL', 'DOT-SP']
 // The 700 series: inorganic, by the numbering of ASHRAE 34.
 const INORGANIC = /^R-7\d\d/
 const AMMONIA = 'R-717'
@@ -61,16 +63,34 @@ const CHOSEN_MONTHS: Readonly<Record<ChoiceParagraph, Partial<Record<Beginning, 
  * Source: 49 CFR 180.205(g), 180.209(a) Table 1, (b), (e), (g), (h).
  */
 export function testPeriod(beginning: Beginning, month: Month, steel: Steel, rules: RetestRules): TestPeriod | null {
-  const shortest = shortestMonths(beginning, steel.spec, rules)
-  let period: TestPeriod | null = shortest === null ? null : { months: shortest, choice: null, isOwnMonths: steel.spec === SPECIAL_PERMIT }
+  const months = standsAlone(beginning, steel.spec) ? regularMonths(steel.spec, rules) : null
+  let period: TestPeriod | null = months === null ? null : { months, choice: null, isOwnMonths: steel.spec === SPECIAL_PERMIT }
   for (const choice of rules.ownerChoices) {
-    const months = CHOSEN_MONTHS[choice.paragraph][beginning]
-    if (months === undefined || !covers(choice, month, steel)) continue
-    if (period === null || months > period.months) period = { months, choice, isOwnMonths: false }
+    const chosen = CHOSEN_MONTHS[choice.paragraph][beginning]
+    if (chosen === undefined || !covers(choice, month, steel)) continue
+    if (period === null || chosen > period.months) period = { months: chosen, choice, isOwnMonths: false }
   }
-  const own = rules.intervalMonths
-  if (period === null || own === null || !(own > 0) || own >= period.months) return period
-  return { months: own, choice: period.choice, isOwnMonths: true }
+  return period !== null && isCut(period.months, rules) ? { ...period, months: rules.intervalMonths!, isOwnMonths: true } : period
+}
+
+/** The months that a test holds without any choice of the owner's, or null where the specification has no period that is known. */
+export function shortestMonths(spec: string, rules: RetestRules): number | null {
+  const months = regularMonths(spec, rules)
+  return months !== null && isCut(months, rules) ? rules.intervalMonths : months
+}
+
+function isCut(months: number, { intervalMonths }: RetestRules): boolean {
+  return intervalMonths !== null && intervalMonths > 0 && intervalMonths < months
+}
+
+function regularMonths(spec: string, { intervalMonths }: RetestRules): number | null {
+  if (spec !== SPECIAL_PERMIT) return SPECS[spec]?.months ?? null
+  return intervalMonths !== null && intervalMonths > 0 ? intervalMonths : null
+}
+
+/** Whether a beginning counts without a choice of the owner's. */
+function standsAlone(beginning: Beginning, spec: string): boolean {
+  return beginning !== 'visual' && (beginning !== 'proof' || PROOF_SUFFICES.includes(spec))
 }
 
 /** Whether an owner's choice covers a period of a cylinder that begins in a month. */
@@ -88,13 +108,3 @@ function isInService(paragraph: ChoiceParagraph, { service, madeMonth, waterCapa
   return madeMonth !== null && compareMonths(madeMonth, FIRST_MONTH_OF_STAR) >= 0
     && waterCapacityGrams !== null && waterCapacityGrams <= MOST_WATER_OF_STAR_GRAMS
 }
-
-function shortestMonths(beginning: Beginning, spec: string, rules: RetestRules): number | null {
-  const period = SPECS[spec]
-  if (!period?.requalified || beginning === 'visual') return null
-  if (spec === SPECIAL_PERMIT) return rules.intervalMonths !== null && rules.intervalMonths > 0 ? rules.intervalMonths : null
-  return beginning === 'proof' && !PROOF_SUFFICES.includes(spec) ? null : period.months
-}
-
-// 49 CFR 180.213: an acetylene shell (specification 8) is tested by pressure and marked S.
-const PROOF_SUFFICES: readonly string[] = ['DOT-8', 'DOT-8AL']
