@@ -1,8 +1,9 @@
 import { exactGrams } from '../quantity/mass'
-import type { Catalogue, Refrigerant } from '../refrigerant/types'
+import { idealMixture } from '../refrigerant/idealMixture'
+import type { Catalogue, LiquidTable } from '../refrigerant/types'
 import { markedPressurePsig } from './fillingDensities'
 import type { HotBounds } from './fillTerm'
-import { fillTerm, hotBounds, standingOf } from './fillTerm'
+import { fillTerm, hotBounds, standingOf, termsWithoutFigure } from './fillTerm'
 import type { RuleInput } from './rules/ruleInput'
 import { volumeLitres } from './rules/ruleInput'
 import type { RuleAnswer } from './rulesInForce'
@@ -25,32 +26,35 @@ export type FillLimitInput = {
 }
 
 /**
- * The most net weight a cylinder may hold: the lowest of the rules in force, each shown with its sum and its source.
+ * The most net weight a cylinder may hold: the lowest of the rules in force. Every rule is listed, with its sum and its
+ * source or with why it has none.
  *
  * Units: net grams; `exactLimitGrams` unrounded.
  * Rounding: down.
  * Errors: none; where an input is not known there is no figure and `missing` names it.
  */
 export function fillLimit(input: FillLimitInput): FillLimit {
-  const refrigerant = knownRefrigerant(input)
-  const missing = missingInputs(input, refrigerant)
+  const known = knownFluid(input)
+  const fluid = 'fluid' in known ? known.fluid : null
+  const missing = missingInputs(input, fluid)
   const { waterCapacity } = input.stamp
-  if (!refrigerant || !waterCapacity) return withoutFigure([], missing)
+  if ('because' in known) return withoutFigure(termsWithoutFigure(known.because), missing)
+  if (!waterCapacity) return withoutFigure(termsWithoutFigure('the water capacity is not known'), missing)
 
   const ruleInput: RuleInput = {
     waterCapacity,
     waterCapacityGrams: exactGrams(waterCapacity),
     volumeLitres: volumeLitres(waterCapacity),
     cylinder: input.stamp,
-    refrigerant,
-    supercritical: input.catalogue.supercritical.get(refrigerant.designation) ?? null,
+    fluid: known.fluid,
+    supercritical: input.catalogue.supercritical.get(known.fluid.designation) ?? null,
     policy: cappedPolicy(input.policy),
   }
   const answers = ruleAnswers(ruleInput, input.burnt || input.condition === 'burnt')
   const bounds = hotBounds(ruleInput, answers)
-  const terms = answers.map(answer => fillTerm(answer, bounds, ruleInput))
+  const terms = answers.map(answer => fillTerm(answer, bounds, waterCapacity))
   const lowest = lowestInForce(answers, bounds)
-  if (!lowest || missing.includes('tareWeight') || lacksGuard(answers, ruleInput)) return withoutFigure(terms, missing)
+  if (!lowest || missing.includes('tareWeight') || lacksGuard(answers, known.fluid)) return withoutFigure(terms, missing)
   return {
     governingRule: lowest.rule,
     exactLimitGrams: lowest.exactGrams,
@@ -61,17 +65,21 @@ export function fillLimit(input: FillLimitInput): FillLimit {
 }
 
 // What nobody has named, or what is mixed, has no density to reckon with.
-function knownRefrigerant(input: FillLimitInput): Refrigerant | null {
-  if (input.refrigerant === null || input.condition === 'mixed' || input.condition === 'unknown') return null
-  return input.catalogue.refrigerants.get(input.refrigerant) ?? null
+function knownFluid({ refrigerant, condition, catalogue }: FillLimitInput): { fluid: LiquidTable } | { because: string } {
+  if (condition === 'mixed') return { because: 'what is mixed has no density to reckon with' }
+  if (refrigerant === null || condition === 'unknown') return { because: 'the refrigerant is not known' }
+  const listed = catalogue.refrigerants.get(refrigerant)
+  if (listed) return { fluid: listed }
+  const composition = catalogue.compositions.get(refrigerant)
+  return composition ? idealMixture(composition, catalogue) : { because: `no liquid density is held for ${refrigerant}` }
 }
 
-function missingInputs(input: FillLimitInput, refrigerant: Refrigerant | null): MissingInput[] {
+function missingInputs(input: FillLimitInput, fluid: LiquidTable | null): MissingInput[] {
   const missing: MissingInput[] = []
   if (tareInForceGrams(input.stamp, input.tareGrams) === null) missing.push('tareWeight')
   if (input.stamp.waterCapacity === null) missing.push('waterCapacity')
   if (markedPressurePsig(input.stamp) === null) missing.push('servicePressure')
-  if (refrigerant === null) missing.push('refrigerant')
+  if (fluid === null) missing.push('refrigerant')
   return missing
 }
 

@@ -1,8 +1,10 @@
+import type { MassReading } from '../quantity/mass'
 import { liquidDensityAt } from '../refrigerant/saturation'
 import type { RuleInput } from './rules/ruleInput'
 import { HOT_REFERENCE_C, isLiquidWhenHot } from './rules/ruleInput'
-import { resultText } from './rules/sumText'
+import { resultText, sumText } from './rules/sumText'
 import type { RuleAnswer } from './rulesInForce'
+import { FILL_RULES } from './rulesInForce'
 import type { FillTerm, TermStanding } from './types'
 
 /** What no figure may pass when a cylinder is hot, and why. Units: net grams, unrounded. */
@@ -14,9 +16,9 @@ export type HotBounds = { ceilingGrams: number, unsafeAboveGrams: number, unsafe
  * Returns null where a row alone decides. Source: 49 CFR 173.304(b), 173.301a(c), (d).
  */
 export function hotBounds(input: RuleInput, answers: readonly RuleAnswer[]): HotBounds | null {
-  const { designation } = input.refrigerant
-  if (isLiquidWhenHot(input.refrigerant)) {
-    const liquidFullGrams = input.volumeLitres * liquidDensityAt(input.refrigerant, HOT_REFERENCE_C)
+  const { designation } = input.fluid
+  if (isLiquidWhenHot(input.fluid)) {
+    const liquidFullGrams = input.volumeLitres * liquidDensityAt(input.fluid, HOT_REFERENCE_C)
     return {
       ceilingGrams: liquidFullGrams * input.policy.ceilingThousandths / 1000,
       unsafeAboveGrams: liquidFullGrams,
@@ -24,7 +26,7 @@ export function hotBounds(input: RuleInput, answers: readonly RuleAnswer[]): Hot
     }
   }
   const hotPressure = answers.find(answer => answer.rule === 'hot-pressure')
-  if (!hotPressure) return null
+  if (!hotPressure?.counts) return null
   const boundGrams = hotPressure.figure.exactGrams ?? 0
   return {
     ceilingGrams: boundGrams,
@@ -43,16 +45,21 @@ export function standingOf({ rule, counts, figure }: RuleAnswer, bounds: HotBoun
 }
 
 /** A rule's answer as it is shown: with its sum, and without a figure where that would be unsafe. Rounding: down. */
-export function fillTerm(answer: RuleAnswer, bounds: HotBounds | null, input: RuleInput): FillTerm {
+export function fillTerm(answer: RuleAnswer, bounds: HotBounds | null, waterCapacity: MassReading): FillTerm {
   const { rule, figure } = answer
   const standing = standingOf(answer, bounds)
   if (figure.exactGrams === null) {
     return { rule, limitGrams: null, because: figure.because, standing, factors: [], working: '', source: figure.source }
   }
-  if (bounds && standing === 'unsafe') {
-    return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, factors: [], working: figure.sum, source: figure.source }
-  }
-  const working = `${figure.sum} = ${resultText(figure.exactGrams, input.waterCapacity)}`
+  const { exactGrams, factors, source } = figure
+  const sum = sumText(factors)
+  if (bounds && standing === 'unsafe') return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, factors, working: sum, source }
   const because = standing === 'above-margin' ? { because: 'above our margin below liquid-full at 131 °F' } : {}
-  return { rule, limitGrams: Math.floor(figure.exactGrams), ...because, standing, factors: [], working, source: figure.source }
+  const working = `${sum} = ${resultText(exactGrams, waterCapacity)}`
+  return { rule, limitGrams: Math.floor(exactGrams), ...because, standing, factors, working, source }
+}
+
+/** Every rule without a figure, for one reason that holds for all. */
+export function termsWithoutFigure(because: string): FillTerm[] {
+  return FILL_RULES.map(rule => ({ rule, limitGrams: null, because, standing: 'compared', factors: [], working: '', source: '' }))
 }

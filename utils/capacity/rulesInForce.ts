@@ -1,3 +1,4 @@
+import type { LiquidTable } from '../refrigerant/types'
 import { fillingDensity } from './rules/fillingDensity'
 import { hotCeiling } from './rules/hotCeiling'
 import { hotPressure } from './rules/hotPressure'
@@ -24,12 +25,18 @@ const RULES: Readonly<Record<FillRule, (input: RuleInput) => RuleFigure>> = {
   'oily': oily,
 }
 
-// Exempt from the 5/4 rule (49 CFR 173.301a(d)(1)) and from "never liquid-full" (173.304(b)): its row alone decides.
-const DECIDED_BY_ITS_ROW = 'R-744'
+/** Every rule, in the order in which they are listed. */
+export const FILL_RULES = Object.keys(RULES) as FillRule[]
 
-/** What every rule that speaks for a refrigerant gives; the oily one only where it has been burnt. */
+// Exempt from the 5/4 rule and from "never liquid-full": its row alone decides.
+const DECIDED_BY_ITS_ROW = 'R-744'
+const EXEMPTING_SOURCE = '49 CFR 173.301a(d)(1), 173.304(b)'
+
+/** What every rule gives, also those that do not speak for a fluid; the oily one counts only where it has been burnt. */
 export function ruleAnswers(input: RuleInput, burnt: boolean): RuleAnswer[] {
-  return rulesFor(input, burnt).map(({ rule, counts }) => ({ rule, counts, figure: RULES[rule](input) }))
+  if (isDecidedByItsRow(input.fluid)) return FILL_RULES.map(rule => rule === 'filling-density' ? decidingRow(input) : exempted(rule, input.fluid))
+  const counts = countsFor(input, burnt)
+  return FILL_RULES.map(rule => ({ rule, counts: counts[rule], figure: RULES[rule](input) }))
 }
 
 /**
@@ -37,23 +44,36 @@ export function ruleAnswers(input: RuleInput, burnt: boolean): RuleAnswer[] {
  *
  * That is its row for R-744, the hot pressure for a gas, and the filling ratio where the firm has chosen it.
  */
-export function lacksGuard(answers: readonly RuleAnswer[], input: RuleInput): boolean {
-  const guards: FillRule[] = input.refrigerant.designation === DECIDED_BY_ITS_ROW
+export function lacksGuard(answers: readonly RuleAnswer[], fluid: LiquidTable): boolean {
+  const guards: FillRule[] = isDecidedByItsRow(fluid)
     ? ['filling-density']
-    : isLiquidWhenHot(input.refrigerant) ? ['hot-ceiling', 'un-ratio'] : ['hot-pressure']
+    : isLiquidWhenHot(fluid) ? ['hot-ceiling', 'un-ratio'] : ['hot-pressure']
   return answers.some(({ rule, counts, figure }) => counts && guards.includes(rule) && figure.exactGrams === null)
 }
 
-function rulesFor(input: RuleInput, burnt: boolean): { rule: FillRule, counts: boolean }[] {
-  if (input.refrigerant.designation === DECIDED_BY_ITS_ROW) return [{ rule: 'filling-density', counts: true }]
-  const { options } = input.policy
-  return [
-    { rule: 'water-weight', counts: true },
-    { rule: 'liquid-77F', counts: true },
-    { rule: 'filling-density', counts: true },
-    { rule: isLiquidWhenHot(input.refrigerant) ? 'hot-ceiling' : 'hot-pressure', counts: true },
-    { rule: 'liquid-130F', counts: options.liquid130F },
-    { rule: 'un-ratio', counts: options.unRatio },
-    ...burnt ? [{ rule: 'oily' as const, counts: true }] : [],
-  ]
+function countsFor({ fluid, policy }: RuleInput, burnt: boolean): Record<FillRule, boolean> {
+  const isLiquid = isLiquidWhenHot(fluid)
+  return {
+    'water-weight': true,
+    'liquid-77F': true,
+    'filling-density': true,
+    'hot-ceiling': isLiquid,
+    'hot-pressure': !isLiquid,
+    'liquid-130F': policy.options.liquid130F,
+    'un-ratio': policy.options.unRatio,
+    'oily': burnt,
+  }
+}
+
+function isDecidedByItsRow(fluid: LiquidTable): boolean {
+  return fluid.designation === DECIDED_BY_ITS_ROW
+}
+
+function decidingRow(input: RuleInput): RuleAnswer {
+  return { rule: 'filling-density', counts: true, figure: fillingDensity(input) }
+}
+
+function exempted(rule: FillRule, { designation }: LiquidTable): RuleAnswer {
+  const because = `${designation} is exempt from the rules at 131 °F: its row of filling densities alone decides`
+  return { rule, counts: false, figure: { exactGrams: null, because, source: EXEMPTING_SOURCE } }
 }

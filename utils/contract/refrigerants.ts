@@ -81,12 +81,24 @@ const specInQuery = z.string().max(20).transform((text, context) => {
   return z.NEVER
 })
 
+const componentInQuery = /^([^:,]{1,40}):(\d{1,3}(?:\.\d{1,4})?)$/
+
+const compositionInQuery = z.string().max(400).transform((text, context) => {
+  const parts = text.split(',').map(part => componentInQuery.exec(part))
+  const components = parts.flatMap(part => part ? [{ component: part[1]!, massPercent: Number(part[2]) }] : [])
+  if (components.length === parts.length) return components
+  context.addIssue({ code: 'custom', message: 'must be components with their mass percent such as R-32:50,R-125:50' })
+  return z.NEVER
+})
+
 /**
  * GET /api/fill-limit: capacity for a stamp without a cylinder. Masses as '47.6lb', '41lb13oz', '18.97kg'. What is left
- * out of the stamp is not known and named in `missing`.
+ * out of the stamp is not known and named in `missing`. Either `refrigerant` or, for a blend that has no name in the
+ * catalogue, `composition`: 422 with both or neither, and where no density can be reckoned from it.
  */
 export const fillLimitQuery = z.strictObject({
-  refrigerant: z.string().min(1).max(40),
+  refrigerant: z.string().min(1).max(40).optional(),
+  composition: compositionInQuery.optional(),
   waterCapacity: massInQuery.optional(),
   tareWeight: massInQuery.optional(),
   spec: specInQuery,

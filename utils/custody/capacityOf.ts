@@ -1,8 +1,11 @@
 import { fillLimit } from '../capacity/fillLimit'
+import { termsWithoutFigure } from '../capacity/fillTerm'
 import { fitFindings } from '../capacity/fit'
 import { liquidFullTemperature } from '../capacity/liquidFull'
+import { HOT_REFERENCE_C, isLiquidWhenHot, volumeLitres } from '../capacity/rules/ruleInput'
 import { excessGrams, roomGrams, stopWeight } from '../capacity/stopWeight'
-import { DEFAULT_FILL_POLICY, type FillPolicy } from '../capacity/types'
+import { twoPhase } from '../capacity/twoPhase'
+import { DEFAULT_FILL_POLICY, type FillLimit, type FillPolicy } from '../capacity/types'
 import { exactGrams } from '../quantity/mass'
 import type { Catalogue } from '../refrigerant/types'
 import type { Requalification } from '../requalification/requalification'
@@ -57,8 +60,7 @@ export function capacityOf(state: CylinderState, retest: Requalification, contex
     stopWeightGrams: stop?.stopWeightGrams ?? null,
     exactStopWeightGrams: stop?.exactStopWeightGrams ?? null,
     roomGrams: exact === null ? null : roomOf(state, exact),
-    liquidFull: liquidFullOf(state, forRefrigerant, limit.exactLimitGrams, catalogue),
-    hotLiquidShare: null,
+    ...withHeat(state, forRefrigerant, limit.exactLimitGrams, catalogue),
     share: Math.min(policy.shareThousandths, DEFAULT_FILL_POLICY.shareThousandths) / 1000,
     terms: limit.terms,
     missing,
@@ -75,9 +77,9 @@ function roomOf({ contents }: CylinderState, exactLimitGrams: number): number | 
   return room < 0 && excessGrams(exactLimitGrams, exactNetGrams) === 0 ? 0 : room
 }
 
-const NO_STAMP = {
-  governingRule: null, exactLimitGrams: null, fillLimitGrams: null, terms: [],
-  missing: ['tareWeight', 'waterCapacity', 'servicePressure', 'refrigerant'] as Missing[],
+const NO_STAMP: FillLimit = {
+  governingRule: null, exactLimitGrams: null, fillLimitGrams: null, terms: termsWithoutFigure('the stamp is not known'),
+  missing: ['tareWeight', 'waterCapacity', 'servicePressure', 'refrigerant'],
 }
 
 /** Everything that keeps a cylinder from being filled now; an overfill is not among it, for that shows as room. */
@@ -103,14 +105,20 @@ function againstTraces({ contents, standing }: CylinderState, refrigerant: strin
   return others.length === 0 ? [] : [notEvacuatedFor(refrigerant, others)]
 }
 
-function liquidFullOf(state: CylinderState, name: string | null, exactLimitGrams: number | null, catalogue: Catalogue): CapacityView['liquidFull'] {
+// Of the present net; where nothing is in it, of the limit it would be filled to.
+function withHeat(
+  state: CylinderState, name: string | null, exactLimitGrams: number | null, catalogue: Catalogue,
+): Pick<CapacityView, 'liquidFull' | 'hotLiquidShare'> {
   const { stamp, contents } = state
   const netGrams = contents.nothingInIt ? exactLimitGrams : contents.netGrams
   const isNameless = name === null || (!contents.nothingInIt && (contents.condition === 'mixed' || contents.condition === 'unknown'))
-  if (netGrams === null || isNameless) return null
-  return liquidFullTemperature({
-    netGrams,
-    waterCapacityGrams: stamp?.waterCapacity ? exactGrams(stamp.waterCapacity) : null,
-    refrigerant: catalogue.refrigerants.get(name) ?? null,
-  })
+  const refrigerant = isNameless ? null : catalogue.refrigerants.get(name) ?? null
+  if (netGrams === null || refrigerant === null || !stamp?.waterCapacity) return { liquidFull: null, hotLiquidShare: null }
+  const litres = volumeLitres(stamp.waterCapacity)
+  return {
+    liquidFull: liquidFullTemperature({ netGrams, waterCapacityGrams: exactGrams(stamp.waterCapacity), refrigerant }),
+    hotLiquidShare: isLiquidWhenHot(refrigerant)
+      ? twoPhase({ netGrams, volumeLitres: litres, refrigerant, tC: HOT_REFERENCE_C }).liquidShare
+      : null,
+  }
 }

@@ -1,7 +1,8 @@
 import { buildCatalogue } from './catalogue'
+import { COMPOSITIONS } from './data/compositions'
 import refrigerants from './data/refrigerants.json'
 import supercritical from './data/supercritical.json'
-import type { Catalogue, RefrigerantRecord, SupercriticalTable } from './types'
+import type { Catalogue, RefrigerantRecord, SupercriticalRecord } from './types'
 
 /**
  * Every refrigerant of the catalogue.
@@ -11,5 +12,6 @@ import type { Catalogue, RefrigerantRecord, SupercriticalTable } from './types'
  */
 export const CATALOGUE: Catalogue = buildCatalogue(
   refrigerants as unknown as RefrigerantRecord[],
-  supercritical as unknown as SupercriticalTable[],
+  supercritical as unknown as SupercriticalRecord[],
+  COMPOSITIONS,
 )

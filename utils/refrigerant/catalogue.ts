@@ -1,22 +1,28 @@
-import type { Catalogue, Composition, Refrigerant, RefrigerantRecord, SaturationRow, SupercriticalTable } from './types'
+import type { CurvePoint } from './monotoneCurve'
+import { curveThrough } from './monotoneCurve'
+import { risingInverse } from './saturation'
+import type {
+  Catalogue, Composition, Refrigerant, RefrigerantRecord, SaturationCurves, SaturationRow, SupercriticalRecord, SupercriticalTable,
+} from './types'
 
 /**
- * The catalogue from the records of its data files.
+ * The catalogue from the records of its data files, with the curves through their rows.
  *
- * Errors: RangeError where a designation stands twice or a table holds an incomplete row.
+ * Errors: RangeError where a designation stands twice, a row is incomplete, or rows do not stand in rising order.
  */
 export function buildCatalogue(
-  records: readonly RefrigerantRecord[], supercritical: readonly SupercriticalTable[], compositions: readonly Composition[] = [],
+  records: readonly RefrigerantRecord[], supercritical: readonly SupercriticalRecord[], compositions: readonly Composition[] = [],
 ): Catalogue {
   return {
     refrigerants: byDesignation(records.map(refrigerantOf)),
-    supercritical: byDesignation(supercritical),
+    supercritical: byDesignation(supercritical.map(supercriticalOf)),
     compositions: byDesignation(compositions),
   }
 }
 
 function refrigerantOf(record: RefrigerantRecord): Refrigerant {
-  return { ...record, table: record.table.map(columns => saturationRow(record.designation, columns)) }
+  const table = record.table.map(columns => saturationRow(record.designation, columns))
+  return { ...record, table, curves: saturationCurves(table) }
 }
 
 function saturationRow(designation: string, columns: readonly number[]): SaturationRow {
@@ -26,6 +32,27 @@ function saturationRow(designation: string, columns: readonly number[]): Saturat
     throw new RangeError(`Incomplete saturation row of ${designation}`)
   }
   return { tC, bubblePressureKPa, dewPressureKPa, liquidDensity, vapourDensity }
+}
+
+// The logarithm of a vapour pressure is nearly straight over the inverse of the absolute temperature.
+function saturationCurves(table: readonly SaturationRow[]): SaturationCurves {
+  const curve = (point: (row: SaturationRow) => CurvePoint) => curveThrough(table.map(point))
+  return {
+    liquidDensity: curve(row => ({ x: row.tC, y: row.liquidDensity })),
+    vapourDensity: curve(row => ({ x: row.tC, y: row.vapourDensity })),
+    lnBubblePressure: curve(row => ({ x: risingInverse(row.tC), y: Math.log(row.bubblePressureKPa) })),
+    lnDewPressure: curve(row => ({ x: risingInverse(row.tC), y: Math.log(row.dewPressureKPa) })),
+  }
+}
+
+function supercriticalOf(record: SupercriticalRecord): SupercriticalTable {
+  const curves = record.tempsC.map((_, column) => curveThrough(record.rows.map((row) => {
+    const [density, ...pressures] = row
+    const kPa = pressures[column]
+    if (density === undefined || kPa === undefined) throw new RangeError(`Incomplete supercritical row of ${record.designation}`)
+    return { x: density, y: kPa }
+  })))
+  return { ...record, curves }
 }
 
 function byDesignation<T extends { designation: string }>(records: readonly T[]): ReadonlyMap<string, T> {

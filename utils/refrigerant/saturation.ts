@@ -1,7 +1,6 @@
 import { kelvinFromCelsius } from '../quantity/temperature'
-import type { CurvePoint } from './monotoneCurve'
 import { valueOnCurve } from './monotoneCurve'
-import type { Refrigerant, SaturationRow } from './types'
+import type { LiquidTable, Refrigerant } from './types'
 
 /** Saturation of a refrigerant at a temperature, with how far it may be off. Units: kg/m3, kPa absolute, fractions of one. */
 export type Saturation = {
@@ -18,23 +17,26 @@ export type Saturation = {
 }
 
 /** Whether a refrigerant's table gives a liquid at a temperature; near and above its critical temperature there is none. */
-export function hasLiquidAt(refrigerant: Refrigerant, tC: number): boolean {
-  const coldest = refrigerant.table[0]
-  return coldest !== undefined && tC >= coldest.tC && tC <= refrigerant.tableMaxC
+export function hasLiquidAt(fluid: LiquidTable, tC: number): boolean {
+  const coldest = fluid.table[0]
+  return coldest !== undefined && tC >= coldest.tC && tC <= fluid.tableMaxC
 }
 
 /**
  * Saturation of a refrigerant at a temperature, between the rows of its table.
  *
  * Units: C in; kg/m3 and kPa absolute out; liquid at the bubble point, vapour at the dew point.
- * Errors: RangeError outside the table.
+ * Errors: RangeError outside the table, also for what is no number.
  */
 export function saturationAt(refrigerant: Refrigerant, tC: number): Saturation {
+  assertInTable(refrigerant, tC)
+  const { curves } = refrigerant
+  const inverse = risingInverse(tC)
   return {
-    liquidDensity: densityAt(refrigerant, tC, row => row.liquidDensity),
-    vapourDensity: densityAt(refrigerant, tC, row => row.vapourDensity),
-    bubblePressureKPa: pressureAt(refrigerant, tC, row => row.bubblePressureKPa),
-    dewPressureKPa: pressureAt(refrigerant, tC, row => row.dewPressureKPa),
+    liquidDensity: valueOnCurve(curves.liquidDensity, tC),
+    vapourDensity: valueOnCurve(curves.vapourDensity, tC),
+    bubblePressureKPa: Math.exp(valueOnCurve(curves.lnBubblePressure, inverse)),
+    dewPressureKPa: Math.exp(valueOnCurve(curves.lnDewPressure, inverse)),
     relativeErrorDensity: refrigerant.relativeErrorDensity,
     relativeErrorPressure: refrigerant.relativeErrorPressure,
     accuracyGroup: refrigerant.accuracyGroup,
@@ -44,28 +46,16 @@ export function saturationAt(refrigerant: Refrigerant, tC: number): Saturation {
 }
 
 /** Density of the saturated liquid in kg/m3. Errors: RangeError outside the table. */
-export function liquidDensityAt(refrigerant: Refrigerant, tC: number): number {
-  return densityAt(refrigerant, tC, row => row.liquidDensity)
+export function liquidDensityAt(fluid: LiquidTable, tC: number): number {
+  assertInTable(fluid, tC)
+  return valueOnCurve(fluid.curves.liquidDensity, tC)
 }
 
-function densityAt(refrigerant: Refrigerant, tC: number, column: (row: SaturationRow) => number): number {
-  assertInTable(refrigerant, tC)
-  return valueOnCurve(refrigerant.table.map(row => ({ x: row.tC, y: column(row) })), tC)
-}
-
-// The logarithm of a vapour pressure is nearly straight over the inverse of the absolute temperature.
-function pressureAt(refrigerant: Refrigerant, tC: number, column: (row: SaturationRow) => number): number {
-  assertInTable(refrigerant, tC)
-  const points: CurvePoint[] = refrigerant.table.map(row => ({ x: risingInverse(row.tC), y: Math.log(column(row)) }))
-  return Math.exp(valueOnCurve(points, risingInverse(tC)))
-}
-
-function risingInverse(tC: number): number {
+/** What pressures are interpolated over: the inverse of the absolute temperature, turned so that it rises with it. Units: 1/K. */
+export function risingInverse(tC: number): number {
   return -1 / kelvinFromCelsius(tC)
 }
 
-function assertInTable(refrigerant: Refrigerant, tC: number): void {
-  if (!hasLiquidAt(refrigerant, tC)) {
-    throw new RangeError(`${refrigerant.designation} has no saturation data at ${tC} C`)
-  }
+function assertInTable(fluid: LiquidTable, tC: number): void {
+  if (!hasLiquidAt(fluid, tC)) throw new RangeError(`${fluid.designation} has no saturation data at ${tC} C`)
 }

@@ -1,3 +1,5 @@
+import type { Curve } from './monotoneCurve'
+
 /** Saturation of a refrigerant at one temperature, as computed from its equation of state. Units: C, kPa absolute, kg/m3. */
 export type SaturationRow = {
   tC: number
@@ -16,7 +18,13 @@ export type LiquidTable = {
   relativeErrorDensity: number
   /** In rising order of temperature. Units: C, kg/m3. */
   table: readonly { tC: number, liquidDensity: number }[]
+  curves: { liquidDensity: Curve }
+  /** What an estimated density was multiplied by, to stay under the true one; the table holds the result. */
+  derate?: number
 }
+
+/** The curves through a table's columns: densities over the temperature, the logarithms of pressures over its inverse. */
+export type SaturationCurves = { liquidDensity: Curve, vapourDensity: Curve, lnBubblePressure: Curve, lnDewPressure: Curve }
 
 /** What a fluid is made of, by mass. */
 export type Composition = {
@@ -52,6 +60,7 @@ export type Refrigerant = {
   relativeErrorPressure: number
   relativeErrorDensity: number
   table: SaturationRow[]
+  curves: SaturationCurves
 }
 
 /** Pressure against the density of what fills a cylinder, for a fluid that is a gas when warm. Units: C, kg/m3, kPa absolute. */
@@ -61,10 +70,15 @@ export type SupercriticalTable = {
   tempsC: number[]
   /** Density, then one pressure for each of `tempsC`. */
   rows: number[][]
+  /** Pressure over density, one curve for each of `tempsC`. */
+  curves: Curve[]
 }
 
+/** The same as the data file holds it. */
+export type SupercriticalRecord = Omit<SupercriticalTable, 'curves'>
+
 /** A refrigerant as the data file holds it: its table in columns tC, bubble pressure, dew pressure, liquid and vapour density. */
-export type RefrigerantRecord = Omit<Refrigerant, 'table'> & { table: number[][] }
+export type RefrigerantRecord = Omit<Refrigerant, 'table' | 'curves'> & { table: number[][] }
 
 /** All refrigerants by designation. */
 export type Catalogue = {

@@ -6,6 +6,8 @@ import { initialState, type CylinderState } from '~~/utils/custody/state'
 import { exactGrams, readingGrams, type MassReading } from '~~/utils/quantity/mass'
 import { scaleAccuracyGrams } from '~~/utils/quantity/scale'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
+import { idealMixture } from '~~/utils/refrigerant/idealMixture'
+import type { Catalogue, Composition } from '~~/utils/refrigerant/types'
 import type { Requalification } from '~~/utils/requalification/requalification'
 import { problem } from '../http/problem'
 
@@ -13,21 +15,37 @@ import { problem } from '../http/problem'
  * The capacity of a stamp for a refrigerant, by the firm's rule of today.
  *
  * Rounding: limits, room and stop weight down.
- * Errors: 422 for a refrigerant that the catalogue does not have, and for two service pressures that differ.
+ * Errors: 422 for a refrigerant that is not known, for a composition without a density, for both or neither of them, and
+ * for two service pressures that differ.
  */
 export function fillLimitAnswer(query: FillLimitQuery, firmPolicy: FillPolicy): FillLimitAnswer {
-  if (!CATALOGUE.refrigerants.has(query.refrigerant)) throw impossible('refrigerant', 'is not in the catalogue')
+  const { refrigerant, catalogue } = fluidOf(query)
   const netGrams = netOf(query.gross, query.tareWeight)
   const policyNow = { ...firmPolicy, shareThousandths: stricterShare(firmPolicy.shareThousandths, query.share) }
-  const capacity = capacityOf(stateOf(query, netGrams), NO_RETEST, { policyNow, catalogue: CATALOGUE, askedRefrigerant: query.refrigerant })
+  const capacity = capacityOf(stateOf(query, refrigerant, netGrams), NO_RETEST, { policyNow, catalogue, askedRefrigerant: refrigerant })
   return { ...capacity, netGrams }
+}
+
+/** The fluid asked about, and the catalogue that knows it: a composition is added to it under its own text. */
+function fluidOf({ refrigerant, composition }: FillLimitQuery): { refrigerant: string, catalogue: Catalogue } {
+  if (refrigerant !== undefined) {
+    if (composition !== undefined) throw impossible('composition', 'cannot stand beside a refrigerant')
+    if (!CATALOGUE.refrigerants.has(refrigerant) && !CATALOGUE.compositions.has(refrigerant)) throw impossible('refrigerant', 'is not in the catalogue')
+    return { refrigerant, catalogue: CATALOGUE }
+  }
+  if (composition === undefined) throw impossible('refrigerant', 'must be named, or a composition')
+  const designation = composition.map(({ component, massPercent }) => `${component}:${massPercent}`).join(',')
+  const asked: Composition = { designation, components: composition, source: 'as asked' }
+  const mixture = idealMixture(asked, CATALOGUE)
+  if ('because' in mixture) throw impossible('composition', mixture.because)
+  return { refrigerant: designation, catalogue: { ...CATALOGUE, compositions: new Map([...CATALOGUE.compositions, [designation, asked]]) } }
 }
 
 /** A stamp alone says nothing of tests. */
 const NO_RETEST: Requalification = { lastMonth: null, intervalMonths: null, dueMonth: null, state: 'not-required', basis: '', choice: null }
 
 /** The cylinder that would have this stamp and this weight. */
-function stateOf(query: FillLimitQuery, netGrams: number | null): CylinderState {
+function stateOf(query: FillLimitQuery, refrigerant: string, netGrams: number | null): CylinderState {
   const stamp = stampOf(query)
   const exactTareGrams = tareInForceGrams(stamp)
   const unknown = initialState('')
@@ -37,7 +55,7 @@ function stateOf(query: FillLimitQuery, netGrams: number | null): CylinderState 
     tare: exactTareGrams === null ? null : { exactGrams: exactTareGrams, since: 0, isWeighedAnew: false },
     contents: {
       ...unknown.contents,
-      refrigerant: query.refrigerant,
+      refrigerant,
       condition: query.condition,
       burnt: query.condition === 'burnt',
       nothingInIt: netGrams === null,

@@ -11,7 +11,6 @@ export function hotCeiling(input: RuleInput): RuleFigure {
   return liquidShareOfVolume(input, {
     shareThousandths: input.policy.ceilingThousandths,
     tC: HOT_REFERENCE_C,
-    temperature: '131 °F',
     source: '49 CFR 173.304(b): never liquid-full up to 131 °F; the margin below that is ours',
   })
 }

@@ -1,11 +1,10 @@
 import { kPaFromPsig } from '../../quantity/pressure'
-import type { CurvePoint } from '../../refrigerant/monotoneCurve'
-import { valueOnCurve } from '../../refrigerant/monotoneCurve'
+import { whereOnCurve } from '../../refrigerant/monotoneCurve'
 import type { SupercriticalTable } from '../../refrigerant/types'
 import { markedPressurePsig } from '../fillingDensities'
+import { volumeFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
-import { HOT_REFERENCE_C } from './ruleInput'
-import { litresText } from './sumText'
+import { HOT_REFERENCE_C, isLiquidWhenHot } from './ruleInput'
 
 const HOT_SOURCE = '49 CFR 173.301a(d): pressure at 131 °F at most 5/4 of the service pressure'
 const COOL_SOURCE = '49 CFR 173.301a(c): pressure at 70 °F at most the service pressure'
@@ -17,9 +16,6 @@ const COOL_REFERENCE_C = 21.1
 /** The most a cylinder's pressure at 131 F may be, by its service pressure. Units: psig. Source: 49 CFR 173.301a(d). */
 export const HOT_PRESSURE_FACTOR = 1.25
 
-// Finer than any scale: a millionth of a kg/m3.
-const DENSITY_STEP = 1e-6
-
 /**
  * The limit of a fluid that is a gas at 131 F: the weight at which its pressure reaches 5/4 of the service pressure when
  * hot, or the service pressure itself at 70 F where that is less.
@@ -27,16 +23,24 @@ const DENSITY_STEP = 1e-6
  * Source: 49 CFR 173.301a(c), (d).
  */
 export function hotPressure(input: RuleInput): RuleFigure {
+  const { designation } = input.fluid
+  if (isLiquidWhenHot(input.fluid)) return none(`${designation} is still a liquid at 131 °F: the hot ceiling holds it`)
   const marked = markedPressurePsig(input.cylinder)
   if (marked === null) return none('the service pressure is not known')
-  if (!input.supercritical) return none(`no pressures over fill density for ${input.refrigerant.designation}`)
+  if (!input.supercritical) return none(`no pressures over fill density for ${designation}`)
   const most = mostDensity(input.supercritical, marked)
-  if (most === null) return none(`the service pressure of ${marked} psig is too low for ${input.refrigerant.designation}`)
-  const at = most.isCool ? `${marked} psig at 70 °F` : `${HOT_PRESSURE_FACTOR} × ${marked} psig at 131 °F`
+  if (most === null) return none(`the service pressure of ${marked} psig is too low for ${designation}`)
+  const source = `${most.isCool ? COOL_SOURCE : HOT_SOURCE}; pressure: ${input.supercritical.source}`
   return {
     exactGrams: input.volumeLitres * most.kgPerM3,
-    sum: `${litresText(input.volumeLitres)} × ${(most.kgPerM3 / 1000).toFixed(4)} kg/L (${at})`,
-    source: `${most.isCool ? COOL_SOURCE : HOT_SOURCE}; pressure: ${input.supercritical.source}`,
+    factors: [
+      volumeFactor(input.volumeLitres),
+      {
+        name: 'density-at-pressure', value: most.kgPerM3 / 1000, unit: 'kg/L', atC: most.isCool ? COOL_REFERENCE_C : HOT_REFERENCE_C,
+        note: most.isCool ? `${marked} psig` : `${HOT_PRESSURE_FACTOR} × ${marked} psig`, source,
+      },
+    ],
+    source,
   }
 }
 
@@ -58,30 +62,16 @@ export function mostDensity(table: SupercriticalTable, markedPsig: number): { kg
  *
  * Units: C and kPa absolute in, kg/m3 out; the last row of the table where the pressure is above it, null where below the
  * first. While liquid and vapour share the cylinder the pressure stays the same: then the most that has it.
+ * Errors: RangeError where the table has no pressures at the temperature.
  */
 export function densityAtPressure(table: SupercriticalTable, tC: number, kPa: number): number | null {
-  const points = pressuresAt(table, tC)
-  const first = points[0]
-  const last = points.at(-1)
-  if (!first || !last || kPa < first.y) return null
-  if (kPa >= last.y) return last.x
-  let low = first.x
-  let high = last.x
-  while (high - low > DENSITY_STEP) {
-    const middle = (low + high) / 2
-    if (valueOnCurve(points, middle) <= kPa) low = middle
-    else high = middle
+  const curve = table.curves[table.tempsC.indexOf(tC)]
+  const lowest = curve?.y[0]
+  const highest = curve?.y.at(-1)
+  if (!curve || lowest === undefined || highest === undefined) {
+    throw new RangeError(`${table.designation} has no pressures over fill density at ${tC} C`)
   }
-  return low
-}
-
-function pressuresAt(table: SupercriticalTable, tC: number): CurvePoint[] {
-  const column = table.tempsC.indexOf(tC)
-  return table.rows.flatMap((row) => {
-    const density = row[0]
-    const kPa = row[column + 1]
-    return column >= 0 && density !== undefined && kPa !== undefined ? [{ x: density, y: kPa }] : []
-  })
+  return kPa < lowest ? null : whereOnCurve(curve, Math.min(kPa, highest))
 }
 
 function none(because: string): RuleFigure {

@@ -11,7 +11,6 @@ export function liquid130F(input: RuleInput): RuleFigure {
   return liquidShareOfVolume(input, {
     shareThousandths: input.policy.shareThousandths,
     tC: celsiusFromFahrenheit(130),
-    temperature: '130 °F',
     source: 'taught form of the 80 % rule at 130 °F, HVAC School, articles on recovery',
   })
 }

@@ -11,7 +11,6 @@ export function liquid77F(input: RuleInput): RuleFigure {
   return liquidShareOfVolume(input, {
     shareThousandths: input.policy.shareThousandths,
     tC: 25,
-    temperature: '77 °F',
     source: 'AHRI Guideline K-2004, as reported in ACHR News, "On the Level: Filling Cylinders"',
   })
 }

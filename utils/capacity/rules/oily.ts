@@ -14,7 +14,6 @@ export function oily(input: RuleInput): RuleFigure {
   return liquidShareOfVolume(input, {
     shareThousandths: SHARE_WITH_OIL_THOUSANDTHS,
     tC: 50,
-    temperature: '122 °F',
     source: 'TRG 102 annex (German, repealed): 0.75 kg/L for R-22 with oil; carrying its ratio over to others is ours',
   })
 }

@@ -2,23 +2,25 @@ import type { MassReading } from '../../quantity/mass'
 import { exactGrams } from '../../quantity/mass'
 import { celsiusFromFahrenheit } from '../../quantity/temperature'
 import { hasLiquidAt } from '../../refrigerant/saturation'
-import type { Refrigerant, SupercriticalTable } from '../../refrigerant/types'
+import type { LiquidTable, SupercriticalTable } from '../../refrigerant/types'
 import type { CylinderMark } from '../fillingDensities'
-import type { FillPolicy } from '../types'
+import type { Factor, FillPolicy } from '../types'
 
-/** What a rule needs of a cylinder and a refrigerant. Units: litres of volume, grams of water capacity, unrounded. */
+/** What a rule needs of a cylinder and a fluid. Units: litres of volume, grams of water capacity, unrounded. */
 export type RuleInput = {
   waterCapacity: MassReading
   waterCapacityGrams: number
   volumeLitres: number
   cylinder: CylinderMark
-  refrigerant: Refrigerant
+  fluid: LiquidTable
   supercritical: SupercriticalTable | null
   policy: FillPolicy
 }
 
-/** What a rule gives: net grams, unrounded, or why it has none; and the sum behind it, without its result. */
-export type RuleFigure = { exactGrams: number, sum: string, source: string } | { exactGrams: null, because: string, source: string }
+/** What a rule gives: net grams, unrounded, and the factors whose product they are; or why it has none. */
+export type RuleFigure
+  = | { exactGrams: number, factors: Factor[], source: string }
+    | { exactGrams: null, because: string, source: string }
 
 /**
  * Density of water at 60 F, the temperature at which a water capacity is taken (49 CFR 173.304a(a)(2) Note 1).
@@ -34,7 +36,7 @@ export function volumeLitres(waterCapacity: MassReading): number {
   return exactGrams(waterCapacity) / 1000 / WATER_DENSITY_60F
 }
 
-/** Whether a refrigerant is still a liquid with a vapour at 131 F, so that its density sets the limit. */
-export function isLiquidWhenHot(refrigerant: Refrigerant): boolean {
-  return hasLiquidAt(refrigerant, HOT_REFERENCE_C)
+/** Whether a fluid is still a liquid with a vapour at 131 F, so that its density sets the limit. */
+export function isLiquidWhenHot(fluid: LiquidTable): boolean {
+  return hasLiquidAt(fluid, HOT_REFERENCE_C)
 }

@@ -1,6 +1,6 @@
 import { hasLiquidAt, liquidDensityAt } from '../../refrigerant/saturation'
+import { volumeFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
-import { litresText } from './sumText'
 
 const SOURCE = '49 CFR 173.304b(b)'
 
@@ -14,17 +14,23 @@ const PUBLISHED_SOURCE = '49 CFR 173.313, portable tank instruction T50'
  * Source: 49 CFR 173.304b(b); R-125 by 49 CFR 173.313.
  */
 export function unRatio(input: RuleInput): RuleFigure {
-  const { refrigerant, volumeLitres } = input
-  const published = PUBLISHED_RATIOS.get(refrigerant.designation)
-  if (published !== undefined) return ratioFigure(volumeLitres, published, `${published} kg/L`, PUBLISHED_SOURCE)
-  if (!hasLiquidAt(refrigerant, 60)) {
-    return { exactGrams: null, because: `${refrigerant.designation} has no liquid at 60 °C, or no figure for it`, source: SOURCE }
+  const { fluid, volumeLitres } = input
+  const published = PUBLISHED_RATIOS.get(fluid.designation)
+  if (published !== undefined) return ratioFigure(volumeLitres, published, `printed for ${fluid.designation}`, PUBLISHED_SOURCE)
+  if (!hasLiquidAt(fluid, 60)) {
+    return { exactGrams: null, because: `${fluid.designation} has no liquid at 60 °C, or no figure for it`, source: SOURCE }
   }
-  const kgPerLitre = Math.min(0.95 * liquidDensityAt(refrigerant, 50), liquidDensityAt(refrigerant, 60)) / 1000
-  const terms = `${kgPerLitre.toFixed(4)} kg/L (the lower of 0.95 × liquid at 50 °C and liquid at 60 °C)`
-  return ratioFigure(volumeLitres, kgPerLitre, terms, `${SOURCE}; density: ${refrigerant.source}`)
+  const at50C = 0.95 * liquidDensityAt(fluid, 50)
+  const at60C = liquidDensityAt(fluid, 60)
+  const derated = fluid.derate === undefined ? '' : ', each less the derate for ideal mixing'
+  const note = `the lower of 0.95 × liquid at 50 °C and liquid at 60 °C${derated}`
+  return ratioFigure(volumeLitres, Math.min(at50C, at60C) / 1000, note, `${SOURCE}; density: ${fluid.source}`)
 }
 
-function ratioFigure(volumeLitres: number, kgPerLitre: number, ratio: string, source: string): RuleFigure {
-  return { exactGrams: volumeLitres * kgPerLitre * 1000, sum: `${litresText(volumeLitres)} × ${ratio}`, source }
+function ratioFigure(volumeLitres: number, kgPerLitre: number, note: string, source: string): RuleFigure {
+  return {
+    exactGrams: volumeLitres * kgPerLitre * 1000,
+    factors: [volumeFactor(volumeLitres), { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }],
+    source,
+  }
 }

@@ -1,5 +1,5 @@
+import { shareFactor, waterCapacityFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
-import { shareText, waterCapacityText } from './sumText'
 
 /**
  * A share of the water capacity, whatever the refrigerant: the form on older cylinders.
@@ -9,7 +9,7 @@ import { shareText, waterCapacityText } from './sumText'
 export function waterWeight(input: RuleInput): RuleFigure {
   return {
     exactGrams: input.waterCapacityGrams * input.policy.shareThousandths / 1000,
-    sum: `${shareText(input.policy.shareThousandths)} × ${waterCapacityText(input.waterCapacity)}`,
+    factors: [shareFactor(input.policy.shareThousandths), waterCapacityFactor(input.waterCapacity)],
     source: 'ARI Guideline K (early 1990s), as reported in ACHR News, "On the Level: Filling Cylinders"',
   }
 }

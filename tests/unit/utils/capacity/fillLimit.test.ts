@@ -52,7 +52,7 @@ describe('the fill limit', () => {
   it('shows every rule with its sum and its source', () => {
     const limit = limitOf({ refrigerant: 'R-22' })
     expect(limit.terms.map(one => one.rule)).toEqual([
-      'water-weight', 'liquid-77F', 'filling-density', 'hot-ceiling', 'liquid-130F', 'un-ratio',
+      'water-weight', 'liquid-77F', 'filling-density', 'hot-ceiling', 'hot-pressure', 'liquid-130F', 'un-ratio', 'oily',
     ])
     expect(term(limit, 'water-weight').working.replaceAll('\u00A0', ' ')).toBe('0.80 × WC 47.6 lb = 38.08 lb')
     expect(term(limit, 'hot-ceiling').working).toBe('0.95 × 21.61 L × 1.0572 kg/L (liquid R-22 at 131 °F) = 47.85 lb')
@@ -172,7 +172,8 @@ describe('burnt refrigerant', () => {
 
   it('stays burnt whatever the word for its condition is now', () => {
     expect(limitOf({ condition: 'suspect', burnt: true }).governingRule).toBe('oily')
-    expect(limitOf({ condition: 'suspect' }).terms.map(one => one.rule)).not.toContain('oily')
+    expect(term(limitOf({ condition: 'suspect' }), 'oily').standing).toBe('compared')
+    expect(limitOf({ condition: 'suspect' }).governingRule).toBe('water-weight')
   })
 })
 
@@ -189,9 +190,10 @@ describe('what is not known', () => {
   })
 
   it('is the water capacity: no figure and no sum', () => {
-    expect(limitOf({ stamp: stampOf({ waterCapacity: null }) })).toEqual({
-      governingRule: null, exactLimitGrams: null, fillLimitGrams: null, terms: [], missing: ['waterCapacity'],
-    })
+    const limit = limitOf({ stamp: stampOf({ waterCapacity: null }) })
+    expect(limit).toMatchObject({ governingRule: null, exactLimitGrams: null, fillLimitGrams: null, missing: ['waterCapacity'] })
+    expect(limit.terms).toHaveLength(8)
+    for (const one of limit.terms) expect(one).toMatchObject({ limitGrams: null, because: 'the water capacity is not known', factors: [], working: '' })
   })
 
   it('is the service pressure: it is named, and the limit of what is in it still stands', () => {
@@ -241,7 +243,9 @@ describe('a fluid that is a gas at 131 F', () => {
     const limit = limitOf({ refrigerant: 'R-744', stamp: stampOf({ spec: 'DOT-3AA', servicePressurePsig }) })
     expect(limit.governingRule).toBe('filling-density')
     expect(limit.exactLimitGrams).toBeCloseTo(47.6 * GRAMS_PER_POUND * percent / 100, 6)
-    expect(limit.terms).toHaveLength(1)
+    const others = limit.terms.filter(one => one.rule !== 'filling-density')
+    expect(others).toHaveLength(7)
+    for (const one of others) expect(one).toMatchObject({ limitGrams: null, because: expect.stringContaining('its row of filling densities alone decides') })
   })
 
   it('has no limit for R-744 where no row is met', () => {

@@ -27,7 +27,13 @@ describe('the liquid-full temperature', () => {
     // R-410A: 815.5 kg/m3 at 60 C, its last row.
     expect(fullAt('R-410A', 8154)).toEqual({ aboveC: 60 })
     expect(fullAt('R-410A', 8156)).toEqual({ c: expect.closeTo(60, 1) })
-    expect(fullAt('R-410A', 0)).toEqual({ aboveC: 60 })
+  })
+
+  it('is never where all of it is vapour at the last row', () => {
+    // R-410A: 200.8 kg/m3 of vapour at 60 C.
+    expect(fullAt('R-410A', 2007)).toEqual({ never: true })
+    expect(fullAt('R-410A', 2009)).toEqual({ aboveC: 60 })
+    expect(fullAt('R-410A', 0)).toEqual({ never: true })
   })
 
   it('is the coldest row for a cylinder that is full everywhere', () => {

@@ -1,6 +1,11 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { valueOnCurve } from '~~/utils/refrigerant/monotoneCurve'
+import type { CurvePoint } from '~~/utils/refrigerant/monotoneCurve'
+import { curveThrough, valueOnCurve as valueOn, whereOnCurve } from '~~/utils/refrigerant/monotoneCurve'
+
+function valueOnCurve(points: readonly CurvePoint[], x: number): number {
+  return valueOn(curveThrough(points), x)
+}
 
 const STEPS = [{ x: 0, y: 0 }, { x: 1, y: 1 }, { x: 3, y: 1.5 }, { x: 4, y: 4 }]
 
@@ -48,5 +53,50 @@ describe('a curve through the rows of a table', () => {
     expect(() => valueOnCurve(STEPS, -0.001)).toThrow(RangeError)
     expect(() => valueOnCurve(STEPS, 4.001)).toThrow(RangeError)
     expect(() => valueOnCurve(STEPS, Number.NaN)).toThrow(RangeError)
+  })
+})
+
+describe('where a curve has a value', () => {
+  const rising = curveThrough(STEPS)
+  const falling = curveThrough(STEPS.map(({ x, y }) => ({ x, y: -y })))
+
+  it('is the point of a row that has it', () => {
+    for (const { x, y } of STEPS) {
+      expect(whereOnCurve(rising, y)).toBe(x)
+      expect(whereOnCurve(falling, -y)).toBe(x)
+    }
+  })
+
+  it('is where the curve has it elsewhere, rising or falling', () => {
+    fc.assert(fc.property(fc.double({ min: 0, max: 4, noNaN: true }), (y) => {
+      expect(valueOn(rising, whereOnCurve(rising, y))).toBeCloseTo(y, 12)
+      expect(whereOnCurve(falling, -y)).toBe(whereOnCurve(rising, y))
+    }))
+  })
+
+  it('is worked by hand on a straight line', () => {
+    const line = curveThrough([{ x: 0, y: 12 }, { x: 1, y: 10 }, { x: 5, y: 2 }])
+    expect(whereOnCurve(line, 7)).toBeCloseTo(2.5, 12)
+    expect(whereOnCurve(line, 11.5)).toBeCloseTo(0.25, 12)
+  })
+
+  it('is the last one where the curve stays level', () => {
+    const level = curveThrough([{ x: 0, y: 0 }, { x: 1, y: 3 }, { x: 2, y: 3 }, { x: 3, y: 3 }, { x: 4, y: 9 }])
+    expect(whereOnCurve(level, 3)).toBe(3)
+    expect(whereOnCurve(level, 2.999)).toBeLessThan(1)
+    expect(whereOnCurve(level, 3.001)).toBeGreaterThan(3)
+  })
+
+  it('is nowhere for a value that the curve does not take', () => {
+    for (const y of [-0.001, 4.001, Number.NaN]) expect(() => whereOnCurve(rising, y)).toThrow(RangeError)
+  })
+})
+
+describe('the points of a curve', () => {
+  it('are at least two, in rising order', () => {
+    expect(() => curveThrough([{ x: 0, y: 1 }])).toThrow(RangeError)
+    expect(() => curveThrough([{ x: 0, y: 1 }, { x: 0, y: 2 }])).toThrow(RangeError)
+    expect(() => curveThrough([{ x: 1, y: 1 }, { x: 0, y: 2 }])).toThrow(RangeError)
+    expect(valueOn(curveThrough([{ x: 0, y: 1 }, { x: 2, y: 2 }]), 1)).toBeCloseTo(1.5, 12)
   })
 })
