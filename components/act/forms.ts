@@ -1,5 +1,6 @@
 import type { Component } from 'vue'
 import type { DraftKind } from '~~/utils/custody/draft/draft'
+import { CHECKED } from '~~/utils/custody/draft/checked'
 import { DRAWN } from '~~/utils/custody/draft/drawn'
 import { EMPTIED } from '~~/utils/custody/draft/emptied'
 import { FILLED } from '~~/utils/custody/draft/filled'
@@ -13,6 +14,7 @@ import { RECEIVED, RETURNED } from '~~/utils/custody/draft/received'
 import { WEIGHED } from '~~/utils/custody/draft/weighed'
 import type { EventKind } from '~~/utils/custody/kinds'
 import type { CautionTopic } from '~~/utils/document/cautions'
+import CheckedForm from './CheckedForm.vue'
 import DrawnForm from './DrawnForm.vue'
 import EmptiedForm from './EmptiedForm.vue'
 import FilledForm from './FilledForm.vue'
@@ -46,6 +48,7 @@ export const ACT_FORMS = {
   'received': { component: ReceivedForm, draft: RECEIVED, title: 'Received', verb: 'Record that it came in', cautions: ['storing'] },
   'returned': { component: ReturnedForm, draft: RETURNED, title: 'Returned', verb: 'Record that it came back', cautions: ['storing'] },
   'drawn': { component: DrawnForm, draft: DRAWN, title: 'Drawn', verb: 'Record what was drawn', cautions: ['handling'] },
+  'checked': { component: CheckedForm, draft: CHECKED, title: 'A check of the contents', verb: 'Record the check', cautions: ['checking'] },
   'emptied': { component: EmptiedForm, draft: EMPTIED, title: 'Emptied', verb: 'Record that it is empty', cautions: ['handling'] },
   'lost': { component: LostForm, draft: LOST, title: 'A loss', verb: 'Record the loss', cautions: ['handling'] },
   'labelled': { component: LabelledForm, draft: LABELLED, title: 'A label', verb: 'Record the label', cautions: [] },

@@ -3,8 +3,10 @@ import type { LogLine } from '~~/utils/custody/cylinderView'
 import type { EventKind } from '~~/utils/custody/kinds'
 import { CONDITION_WORDS, KIND_WORDS } from '~~/utils/custody/words'
 import { formatLabelCode } from '~~/utils/label/code'
+import { formatGauge, formatThermometer } from '~~/utils/quantity/gauge'
 import { formatReading, type MassReading } from '~~/utils/quantity/mass'
 import { formatMonth } from '~~/utils/quantity/month'
+import { methodWords } from '~~/utils/recovery/methods'
 
 /** What a line of the custody log says of one event. */
 export interface LineWords {
@@ -39,12 +41,13 @@ const LINES: { [K in EventKind]: Say<K> } = {
   }),
   'handed-over': ({ toHolderId }, names) => ({ what: `to ${named(toHolderId, names)}` }),
   'weighed': ({ gross }) => ({ what: 'the change is weighing', gross }),
-  'filled': ({ refrigerant, condition, grossBefore, grossAfter, ownerOfRefrigerantId }, names) => ({
+  'filled': ({ refrigerant, condition, grossBefore, grossAfter, method, ownerOfRefrigerantId }, names) => ({
     what: [
       `${refrigerant ?? 'refrigerant not known,'} recovered`,
       condition && CONDITION_WORDS[condition],
       ownerOfRefrigerantId && `of ${named(ownerOfRefrigerantId, names)}`,
       grossBefore && `from ${formatReading(grossBefore)}`,
+      method && `by ${methodWords(method)}`,
     ].filter(Boolean).join(', '),
     gross: grossAfter,
   }),
@@ -52,6 +55,7 @@ const LINES: { [K in EventKind]: Say<K> } = {
     what: `${PURPOSES[purpose]}${phase ? `, ${phase === 'vapour' ? 'vapor' : phase}` : ''}`,
     gross: grossAfter,
   }),
+  'checked': details => ({ what: checkInWords(details) }),
   'emptied': ({ grossAfter, vacuum }) => ({ what: vacuum ? vacuumInWords(vacuum) : 'a heel is left', gross: grossAfter ?? null }),
   'lost': ({ grossAfter, cause, unavoidable }) => ({
     what: `${LOSSES[cause]}${unavoidable ? ', could not be avoided' : ''}`,
@@ -94,4 +98,16 @@ function contentsInWords(contents: NonNullable<DetailsOf<'registered'>['contents
 
 function vacuumInWords(vacuum: NonNullable<DetailsOf<'emptied'>['vacuum']>): string {
   return 'microns' in vacuum ? `down to ${vacuum.microns} microns` : `down to ${vacuum.inHg} inHg`
+}
+
+function checkInWords(details: DetailsOf<'checked'>): string {
+  if (details.method === 'pressure') {
+    const { pressureKPa, temperatureC } = details
+    const read = (unit: 'psi' | 'bar') => `${formatGauge(pressureKPa, unit)} at ${formatThermometer(temperatureC, unit)}`
+    return `pressure ${read('psi')} (${read('bar')})`
+  }
+  const { method, composition = [], verdict } = details
+  const parts = composition.map(({ component, massPercent }) => `${component} ${massPercent} %`).join(', ')
+  const by = method === 'identifier' ? 'by identifier' : 'by laboratory'
+  return `${by}: ${verdict.refrigerant ?? 'refrigerant not named'}, ${CONDITION_WORDS[verdict.condition]}${parts && `; ${parts}`}`
 }

@@ -28,12 +28,18 @@ const happenings: fc.Arbitrary<Told>[] = [
   fc.constantFrom(SHOP, VAN).map(toPlaceId => did('moved', { toPlaceId, toHolderId: TECHNICIAN })),
   fc.constant(did('handed-over', { toHolderId: TECHNICIAN })),
   gross.map(reading => did('weighed', { gross: reading })),
-  fc.record({ refrigerant: ofFill, condition: fc.option(condition, { nil: undefined }), before: maybeGross, after: gross, owner: fc.constantFrom(undefined, CUSTOMER) })
-    .map(({ refrigerant: name, condition: word, before, after, owner }) => filled(name, 0, {
-      grossAfter: after, condition: word, grossBefore: before, ownerOfRefrigerantId: owner,
+  fc.record({ refrigerant: ofFill, condition: fc.option(condition, { nil: undefined }), before: maybeGross, after: gross, owner: fc.constantFrom(undefined, CUSTOMER), method: fc.constantFrom(undefined, 'own-compressor') })
+    .map(({ refrigerant: name, condition: word, before, after, owner, method }) => filled(name, 0, {
+      grossAfter: after, condition: word, grossBefore: before, ownerOfRefrigerantId: owner, method,
     })),
   fc.record({ grossAfter: gross, purpose: fc.constantFrom('same-system' as const, 'sampling' as const, 'other' as const), phase: fc.constantFrom(undefined, 'vapour' as const) })
     .map(details => did('drawn', details)),
+  fc.record({ pressureKPa: fc.constantFrom(0, 500, 1_100, 2_500), temperatureC: fc.constantFrom(-60, 25, 90), barometerKPa: fc.constantFrom(undefined, 84.3) })
+    .map(({ barometerKPa, pressureKPa, temperatureC }) => did('checked', {
+      method: 'pressure', temperatureC, barometerKPa, pressureKPa: barometerKPa === undefined ? pressureKPa : pressureKPa + 20,
+    })),
+  fc.record({ method: fc.constantFrom('identifier' as const, 'laboratory' as const), name: ofFill, word: condition })
+    .map(({ method, name, word }) => did('checked', { method, verdict: { refrigerant: name, condition: name === null && word === 'clean' ? 'unknown' : word } })),
   fc.record({ grossAfter: maybeGross, vacuum: fc.constantFrom(undefined, { microns: 500 }, { microns: 5000 }) }).map(details => did('emptied', details)),
   fc.record({ grossAfter: maybeGross, cause: fc.constantFrom('leak' as const, 'hose' as const) }).map(details => did('lost', details)),
   gross.map(reading => did('sent-for-reclaim', { shipmentId: SHIPMENT, gross: reading }, { placeId: RECLAIMER_PLACE })),

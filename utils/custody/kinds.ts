@@ -3,7 +3,7 @@
  * A new kind is added here; the compiler then names every place that has to learn it.
  */
 export const EVENT_KINDS = [
-  'registered', 'labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'emptied', 'lost',
+  'registered', 'labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost',
   'sent-for-reclaim', 'reclaimed', 'returned', 'sent-for-test', 'retested', 'corrected',
 ] as const
 

@@ -1,7 +1,7 @@
 import type { Access } from '../access/roles'
 import type { CylinderView } from './cylinderView'
 import { DISPATCH_KINDS, EVENT_KINDS, type EventKind } from './kinds'
-import { mayDraw, mayFill, mayTake, type PlanAnswer, type Planned } from './plan'
+import { mayCheck, mayDraw, mayFill, mayTake, type PlanAnswer, type Planned } from './plan'
 import { mayPost } from './posting'
 import { MISSING_WORDS } from './words'
 
@@ -28,6 +28,7 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
     case 'reclaimed': return view.lifecycle === 'at-reclaim' ? null : 'It is not at a reclaimer.'
     case 'filled': return reason(mayFill(view))
     case 'drawn': return reason(mayDraw(view))
+    case 'checked': return view.contents.nothingInIt ? 'By the log nothing is in it.' : reason(mayCheck(view))
     case 'moved':
     case 'handed-over': return reason(mayTake(view))
     default: return null

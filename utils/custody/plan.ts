@@ -33,6 +33,11 @@ export function mayDraw(view: Planned): PlanAnswer {
   return answer(gone(view))
 }
 
+/** Whether what is in it may be checked. */
+export function mayCheck(view: Planned): PlanAnswer {
+  return answer(gone(view))
+}
+
 /** Whether it may leave on a shipment to a reclaimer. Mixed contents and a passed date may; the papers say so. */
 export function mayShip(view: Planned): PlanAnswer {
   return answer([

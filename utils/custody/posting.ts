@@ -2,7 +2,7 @@ import type { Access, Role } from '../access/roles'
 import { EVENT_KINDS, type EventKind } from './kinds'
 
 const TECHNICIAN = [
-  'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'emptied', 'lost', 'labelled', 'returned',
+  'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost', 'labelled', 'returned',
 ] as const satisfies readonly EventKind[]
 
 /** Which kinds each role may record. The kinds of a dispatch are a manager's, and come with its papers only. */

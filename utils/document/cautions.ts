@@ -1,5 +1,5 @@
 /** A kind of work or thing that a caution belongs to. */
-export type CautionTopic = 'filling' | 'handling' | 'moving' | 'storing' | 'unknown-contents' | 'flammable' | 'not-refillable'
+export type CautionTopic = 'filling' | 'handling' | 'moving' | 'storing' | 'checking' | 'unknown-contents' | 'flammable' | 'not-refillable'
 
 const CAUTIONS: Record<CautionTopic, readonly string[]> = {
   'filling': [
@@ -20,6 +20,12 @@ const CAUTIONS: Record<CautionTopic, readonly string[]> = {
   'storing': [
     'Keep it upright, secured, dry, and below 125 °F.',
     'Keep full, empty and unknown cylinders apart.',
+  ],
+  'checking': [
+    'Wear eye and hand protection: a gauge line holds refrigerant at cylinder pressure.',
+    'Bleed vapor into recovery equipment only, never to the air.',
+    'Never warm a cylinder above 125 °F, and never with a flame.',
+    'Do not open a cylinder whose contents nobody can name; leave it to an analysis.',
   ],
   'unknown-contents': [
     'Do not open the valve. What is in it may burn, poison or stand at high pressure.',

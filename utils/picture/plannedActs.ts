@@ -15,7 +15,7 @@ export interface PlannedActs {
 }
 
 // What a hand does most often comes first; the primary one is apart.
-const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'emptied', 'lost', 'labelled', 'received', 'returned']
+const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned']
 
 /** What may be recorded of a cylinder by this person, the likeliest apart, where `verdict` is the kind of its first line. */
 export function plannedActs(view: CylinderView, verdict: StatusKind, access: Access | null): PlannedActs {

@@ -20,3 +20,16 @@ export function parseFigure(text: string): ParsedFigure {
   if (PLAIN.test(typed)) return { value: Number(typed.replace(',', '.')) }
   return { error: GROUPED.test(typed) ? 'ambiguous' : 'not-a-number' }
 }
+
+/**
+ * The same for what may lie below zero, such as a temperature or a gauge in a vacuum.
+ *
+ * @example parseSignedFigure('-4.9') // { value: -4.9 }
+ */
+export function parseSignedFigure(text: string): ParsedFigure {
+  const [, sign, rest] = /^\s*([-\u2212]?)(.*)$/s.exec(text)!
+  const parsed = parseFigure(rest!)
+  if (sign === '') return parsed
+  if ('error' in parsed) return parsed.error === 'empty' ? { error: 'not-a-number' } : parsed
+  return { value: parsed.value === 0 ? 0 : -parsed.value }
+}

@@ -29,7 +29,8 @@ export type ReadDraft<K extends EventKind> = { details: DetailsOf<K>, placeId?: 
 export interface DraftKind<K extends EventKind, Draft> {
   empty(context: DraftContext): Draft
   read(draft: Draft, context: DraftContext): ReadDraft<K>
-  of(details: DetailsOf<K>, placeId: string | null): Draft
+  /** `unit` is what the person reads scales in, for readings that are not kept in the unit they were typed in. */
+  of(details: DetailsOf<K>, placeId: string | null, unit: MassUnit): Draft
 }
 
 /** A text that was typed, trimmed; undefined where nothing was. */

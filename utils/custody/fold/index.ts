@@ -7,6 +7,7 @@ import type { EventKind } from '../kinds'
 import { lifecycleOf } from '../lifecycle'
 import type { Movement } from '../movement'
 import { initialState, type CylinderState } from '../state'
+import { checked } from './checked'
 import { corrected } from './corrected'
 import { drawn } from './drawn'
 import { emptied } from './emptied'
@@ -71,6 +72,7 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
   'weighed': weighed,
   'filled': filled,
   'drawn': drawn,
+  'checked': checked,
   'emptied': emptied,
   'lost': lost,
   'sent-for-reclaim': sentForReclaim,

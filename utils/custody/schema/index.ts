@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import type { EventKind } from '../kinds'
+import { details as checked } from './checked'
 import { details as corrected } from './corrected'
 import { details as drawn } from './drawn'
 import { details as emptied } from './emptied'
@@ -27,6 +28,7 @@ export const DETAILS = {
   'weighed': weighed,
   'filled': filled,
   'drawn': drawn,
+  'checked': checked,
   'emptied': emptied,
   'lost': lost,
   'sent-for-reclaim': sentForReclaim,

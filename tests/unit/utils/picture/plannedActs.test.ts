@@ -29,7 +29,7 @@ describe('the likeliest act with a cylinder', () => {
 
   it('is never offered twice, nor to somebody who records nothing', () => {
     const view = viewAfter([registered(), filled('R-22', 20), weighed(20)])
-    expect(plannedActs(view, 'ok', access).others).toEqual(['weighed', 'drawn', 'moved', 'handed-over', 'emptied', 'lost', 'labelled', 'received', 'returned'])
+    expect(plannedActs(view, 'ok', access).others).toEqual(['weighed', 'drawn', 'moved', 'handed-over', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned'])
     expect(plannedActs(view, 'ok', { personId: TECHNICIAN, roles: ['auditor'], trainee: false })).toMatchObject({ primary: null, others: [] })
     expect(plannedActs(view, 'ok', null)).toMatchObject({ primary: null, others: [] })
   })

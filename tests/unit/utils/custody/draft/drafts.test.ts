@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { EMPTIED } from '../../../../../utils/custody/draft/emptied'
-import { FILLED, NOT_KNOWN } from '../../../../../utils/custody/draft/filled'
+import { FILLED, NOT_KNOWN, OTHER_METHOD } from '../../../../../utils/custody/draft/filled'
 import { LABELLED } from '../../../../../utils/custody/draft/labelled'
 import { lastGross } from '../../../../../utils/custody/draft/lastGross'
 import { MOVED } from '../../../../../utils/custody/draft/moved'
@@ -43,6 +43,25 @@ describe('the form of a recovery', () => {
   it('leaves out what was not said, so that nothing is made up', () => {
     const context = contextOf([registered()])
     expect(FILLED.read({ ...FILLED.empty(context), refrigerant: 'R-22', grossAfter: kg(0) }, context)).toEqual({ details: { refrigerant: 'R-22', grossAfter: kg(0) } })
+  })
+})
+
+describe('the method of a recovery', () => {
+  const context = contextOf([registered()])
+  const draft = { ...FILLED.empty(context), refrigerant: 'R-22', grossAfter: kg(20) }
+  const details = { refrigerant: 'R-22', grossAfter: kg(20) }
+
+  it('is one with a name, or a line of one’s own', () => {
+    expect(FILLED.read({ ...draft, method: 'push-pull' }, context)).toEqual({ details: { ...details, method: 'push-pull' } })
+    expect(FILLED.read({ ...draft, method: OTHER_METHOD, otherMethod: ' by gravity ' }, context)).toEqual({ details: { ...details, method: 'by gravity' } })
+    expect(FILLED.read({ ...draft, method: OTHER_METHOD }, context)).toHaveProperty('reason')
+    expect(FILLED.read({ ...draft, otherMethod: 'left behind' }, context)).toEqual({ details })
+  })
+
+  it('of an older record stands in its form as it was written', () => {
+    expect(FILLED.of({ ...details, method: 'machine' }, context)).toMatchObject({ method: OTHER_METHOD, otherMethod: 'machine' })
+    expect(FILLED.of({ ...details, method: 'own-compressor' }, context)).toMatchObject({ method: 'own-compressor', otherMethod: '' })
+    expect(FILLED.of(details, context)).toMatchObject({ method: '', otherMethod: '' })
   })
 })
 
@@ -90,9 +109,9 @@ describe('a recorded registration in its form', () => {
       marks: [{ month: '2024-05', rin: 'A123' }], ownership: 'own', contents: { refrigerant: 'R-22', condition: 'suspect' }, gross: kg(20),
     })
     const context = contextOf([registered()])
-    expect(REGISTERED.read(REGISTERED.of(details, SHOP), context)).toEqual({ details, placeId: SHOP })
+    expect(REGISTERED.read(REGISTERED.of(details, SHOP, 'lb'), context)).toEqual({ details, placeId: SHOP })
     const withoutValve = { ...details, stamp: { ...details.stamp, tareIncludesValve: false } }
-    expect(REGISTERED.read(REGISTERED.of(withoutValve, SHOP), context)).toEqual({ details: withoutValve, placeId: SHOP })
+    expect(REGISTERED.read(REGISTERED.of(withoutValve, SHOP, 'lb'), context)).toEqual({ details: withoutValve, placeId: SHOP })
   })
 })
 
