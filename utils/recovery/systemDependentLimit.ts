@@ -13,7 +13,7 @@ export interface SystemDependentCaution { text: string, source: string }
 export function systemDependentLimit({ chargeGrams, isFixedPumpOut }: { chargeGrams: number | null, isFixedPumpOut: boolean }): SystemDependentCaution | null {
   if (isFixedPumpOut || chargeGrams === null || chargeGrams <= SYSTEM_DEPENDENT_LIMIT_GRAMS) return null
   return {
-    text: 'More than 15 lb (6.80 kg): the system’s own compressor may not do this recovery, unless it is a pump-out unit fixed to the system. Use a recovery machine.',
+    text: 'Above 15 lb (6.80 kg) of charge only a recovery machine may do it, or a pump-out unit fixed to the system.',
     source: '40 CFR 82.156(e)',
   }
 }

@@ -10,6 +10,7 @@ export function playIncidents(stage: Stage): void {
   tests(stage)
   records(stage)
   people(stage)
+  methods(stage)
 }
 
 /** A cylinder that was registered some months ago, ready for what happens to it. */
@@ -179,4 +180,9 @@ function people(stage: Stage): void {
   const bench = made(stage, 5, 'small').steel
   fill(stage, bench, { by: 'trainee', refrigerant: 'R-134a', pounds: 3, days: 27, options: { practice: true, supervisorId: stage.supervisor.id, note: 'bench exercise' } })
   script.add(cast.people.trainee, daysAgo(stage, 27) + HOUR, bench.id, 'weighed', { gross: weigh(bench, 'lb') }, { practice: true, supervisorId: stage.supervisor.id })
+}
+
+function methods(stage: Stage): void {
+  fill(stage, made(stage, 4).steel, { refrigerant: 'R-22', pounds: 17, days: 24, more: { method: 'own-compressor' } })
+  fill(stage, made(stage, 4).steel, { refrigerant: 'R-134a', pounds: 28, days: 17, more: { method: 'push-pull' } })
 }

@@ -1,9 +1,13 @@
 import type { MassReading } from '../../quantity/mass'
+import { isRecoveryMethod, type RecoveryMethod } from '../../recovery/methods'
 import type { Condition, CylinderView } from '../cylinderView'
-import type { DraftKind } from './draft'
+import { typedText, type DraftKind } from './draft'
 
 /** The choice of a refrigerant that nobody knows the name of. */
 export const NOT_KNOWN = 'not-known'
+
+/** The choice of a method that has no name here. */
+export const OTHER_METHOD = 'other'
 
 export interface FilledDraft {
   /** A designation, {@link NOT_KNOWN}, or '' while none is chosen. */
@@ -11,6 +15,10 @@ export interface FilledDraft {
   condition: Condition | ''
   grossBefore: MassReading | null
   grossAfter: MassReading | null
+  /** '' = not said. */
+  method: RecoveryMethod | typeof OTHER_METHOD | ''
+  /** How, where the method is another one. */
+  otherMethod: string
   /** '' = the firm's own. */
   ownerId: string
   looked: boolean
@@ -24,6 +32,8 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     condition: '',
     grossBefore: null,
     grossAfter: null,
+    method: '',
+    otherMethod: '',
     ownerId: '',
     looked: false,
     scaleId: '',
@@ -31,12 +41,15 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
   read: (draft) => {
     if (draft.refrigerant === '') return { reason: 'Choose the refrigerant that went in.' }
     if (!draft.grossAfter) return { reason: 'Type what the scale shows, hoses off.' }
+    const method = draft.method === OTHER_METHOD ? typedText(draft.otherMethod) : draft.method
+    if (method === undefined) return { reason: 'Write how it was brought out, or leave the method open.' }
     return {
       details: {
         refrigerant: draft.refrigerant === NOT_KNOWN ? null : draft.refrigerant,
         ...(draft.condition && { condition: draft.condition }),
         ...(draft.grossBefore && { grossBefore: draft.grossBefore }),
         grossAfter: draft.grossAfter,
+        ...(method && { method }),
         ...(draft.ownerId && { ownerOfRefrigerantId: draft.ownerId }),
         ...(draft.scaleId && { scaleId: draft.scaleId }),
         ...(draft.looked && { looked: true as const }),
@@ -48,10 +61,16 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     condition: details.condition ?? '',
     grossBefore: details.grossBefore ?? null,
     grossAfter: details.grossAfter,
+    ...methodOf(details.method),
     ownerId: details.ownerOfRefrigerantId ?? '',
     looked: details.looked === true,
     scaleId: details.scaleId ?? '',
   }),
+}
+
+function methodOf(line: string | undefined): Pick<FilledDraft, 'method' | 'otherMethod'> {
+  if (line === undefined) return { method: '', otherMethod: '' }
+  return isRecoveryMethod(line) ? { method: line, otherMethod: '' } : { method: OTHER_METHOD, otherMethod: line }
 }
 
 function refrigerantToBegin(view: CylinderView, asked: string | null): string {

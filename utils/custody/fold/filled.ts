@@ -1,6 +1,7 @@
 import { worse } from '../condition'
 import type { Condition } from '../cylinderView'
 import { lookBeforeFill } from '../findings/record'
+import { beyondOwnCompressor } from '../findings/recovery'
 import { amountNotKnown, wrongWay } from '../findings/weight'
 import { againstFill } from './againstFill'
 import { becomeUnknown } from './contents'
@@ -82,6 +83,7 @@ function weighAfter(turn: Turn<'filled'>, ownerId: string | null): void {
   if (before === null) findings.push(amountNotKnown('recovered'))
   if (before !== null && after.netGrams !== null && after.netGrams >= before) {
     putIn(turn, after.netGrams - before, 'recovered', details.refrigerant, ownerId)
+    raiseMethod(turn, after.netGrams - before)
   }
   else {
     if (before !== null && after.netGrams !== null) {
@@ -91,6 +93,11 @@ function weighAfter(turn: Turn<'filled'>, ownerId: string | null): void {
   }
   restOn(turn, after)
   doubtReading(turn, after)
+}
+
+function raiseMethod({ event, findings }: Turn<'filled'>, recoveredGrams: number): void {
+  const finding = event.details.method === 'own-compressor' ? beyondOwnCompressor(recoveredGrams) : null
+  if (finding) findings.push(finding)
 }
 
 function outcomeOf(turn: Turn<'filled'>, before: ScaleReading | null): Outcome {

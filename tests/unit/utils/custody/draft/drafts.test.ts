@@ -59,9 +59,9 @@ describe('the method of a recovery', () => {
   })
 
   it('of an older record stands in its form as it was written', () => {
-    expect(FILLED.of({ ...details, method: 'machine' }, context)).toMatchObject({ method: OTHER_METHOD, otherMethod: 'machine' })
-    expect(FILLED.of({ ...details, method: 'own-compressor' }, context)).toMatchObject({ method: 'own-compressor', otherMethod: '' })
-    expect(FILLED.of(details, context)).toMatchObject({ method: '', otherMethod: '' })
+    expect(FILLED.of({ ...details, method: 'machine' }, null, 'kg')).toMatchObject({ method: OTHER_METHOD, otherMethod: 'machine' })
+    expect(FILLED.of({ ...details, method: 'own-compressor' }, null, 'kg')).toMatchObject({ method: 'own-compressor', otherMethod: '' })
+    expect(FILLED.of(details, null, 'kg')).toMatchObject({ method: '', otherMethod: '' })
   })
 })
 

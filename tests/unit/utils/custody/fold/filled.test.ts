@@ -308,6 +308,21 @@ describe('a fill that should not have been', () => {
     expect(codes(viewAfter([bought, filled('R-22', 16)]))).toContain('not-refillable')
   })
 
+  it('with the system’s own compressor of more than 15 lb is a caution, for so much came out', () => {
+    // 15 lb = 6,803.9 g.
+    const own = (grossKg: number, method = 'own-compressor') => lastFindings(registered(), filled('R-22', grossKg, { grossBefore: kg(12), method }))
+    expect(own(18.804)).toEqual([])
+    expect(own(18.805)).toEqual(['system-dependent-limit'])
+    expect(own(20, 'fixed-pump-out')).toEqual([])
+    expect(own(20, 'machine')).toEqual([])
+    expect(codes(viewAfter([registered(), filled('R-22', 20, { method: 'own-compressor' })]))).not.toContain('system-dependent-limit')
+  })
+
+  it('with the system’s own compressor says nothing of an amount that no weight tells', () => {
+    const unknown = registered({ contents: 'unknown' })
+    expect(lastFindings(unknown, filled('R-22', 20, { method: 'own-compressor' }))).not.toContain('system-dependent-limit')
+  })
+
   it('without a look at the outside says so', () => {
     expect(lastFindings(registered(), did('filled', { refrigerant: 'R-22', grossAfter: kg(20) }))).toEqual(['look-before-fill'])
   })
