@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { parseMassText } from '../quantity/mass'
 
 /** A UUID in lower case. */
 export const id = z.uuid('must be an id (a UUID)').transform(value => value.toLowerCase())
@@ -27,6 +28,14 @@ export const massReading = z.discriminatedUnion('unit', [
   z.strictObject({ unit: z.literal('lb-oz'), lb: z.number().int().nonnegative().max(100_000), oz: z.number().nonnegative().lt(16) }),
   z.strictObject({ unit: z.literal('kg'), value: z.number().nonnegative().finite().max(50_000) }),
 ])
+
+/** A mass as it is written in a query. */
+export const massInQuery = z.string().max(20).transform((text, context) => {
+  const reading = parseMassText(text)
+  if (reading) return reading
+  context.addIssue({ code: 'custom', message: 'must be a mass such as 47.6lb, 41lb13oz or 18.97kg' })
+  return z.NEVER
+})
 
 /** Whether no id stands twice in a list. */
 export function eachOnce(ids: readonly string[]): boolean {

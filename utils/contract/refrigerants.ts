@@ -1,13 +1,12 @@
 import { z } from 'zod'
 import type { CapacityView } from '../custody/cylinderView'
-import { parseMassText } from '../quantity/mass'
 import type { Gwp, GwpBasis } from '../refrigerant/gwp'
 import type { PressureClass, PressureClassing } from '../refrigerant/pressureClass'
 import type { Saturation } from '../refrigerant/saturation'
 import type { Refrigerant, SaturationRow } from '../refrigerant/types'
 import type { UnEntry } from '../refrigerant/unEntry'
 import { splitSpec } from '../requalification/specs'
-import type { Page } from './parts'
+import { massInQuery, type Page } from './parts'
 
 /** A GWP that stands for a refrigerant where there is room for one, with the list it is from. */
 export type HeadlineGwp = { basis: GwpBasis, value: number } | null
@@ -66,13 +65,6 @@ export const saturationQuery = z.strictObject({ temperatureC: z.string().regex(/
 
 /** What GET /api/refrigerants/{designation}/saturation answers. Densities kg/m3, pressures kPa absolute. */
 export type SaturationAnswer = Saturation
-
-const massInQuery = z.string().max(20).transform((text, context) => {
-  const reading = parseMassText(text)
-  if (reading) return reading
-  context.addIssue({ code: 'custom', message: 'must be a mass such as 47.6lb, 41lb13oz or 18.97kg' })
-  return z.NEVER
-})
 
 const specInQuery = z.string().max(20).transform((text, context) => {
   const mark = splitSpec(text)

@@ -42,7 +42,7 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     if (draft.refrigerant === '') return { reason: 'Choose the refrigerant that went in.' }
     if (!draft.grossAfter) return { reason: 'Type what the scale shows, hoses off.' }
     const method = draft.method === OTHER_METHOD ? typedText(draft.otherMethod) : draft.method
-    if (method === undefined) return { reason: 'Write how it was brought out, or leave the method open.' }
+    if (draft.method === OTHER_METHOD && !method) return { reason: 'Write how it was brought out, or leave the method open.' }
     return {
       details: {
         refrigerant: draft.refrigerant === NOT_KNOWN ? null : draft.refrigerant,
