@@ -4,11 +4,13 @@ import { deviceNow, usePostingStore } from '~~/stores/posting'
 import { useFirmRulesStore } from '~~/stores/firmRules'
 import { useSessionStore } from '~~/stores/session'
 import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
-import type { FoldInput, PolicyAnswer } from '~~/utils/contract/custody'
+import type { FoldInput } from '~~/utils/contract/custody'
+import type { PolicyAnswer } from '~~/utils/contract/policy'
 import type { AnyCustodyEvent } from '~~/utils/custody/event'
 import type { Finding, FindingCode } from '~~/utils/custody/finding'
 import type { EventKind } from '~~/utils/custody/kinds'
 import type { ViewContext } from '~~/utils/custody/view'
+import { DEFAULT_RETEST_SETTINGS } from '~~/utils/requalification/retestSettings'
 
 /** An event as far as its form is filled in. */
 export interface PreviewContent { cylinderId: string, kind: EventKind, placeId?: string, supervisorId?: string, details: unknown, expects?: number }
@@ -77,6 +79,7 @@ export function usePreview(input: { content: () => PreviewContent | null, at: ()
 function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], access: ViewContext['access'], codesOnTwo: string[]): ViewContext {
   const nowMs = Date.now()
   const policyAt = (ms: number) => policy.fillPolicies.findLast(entry => entry.fromAt <= ms)?.policy ?? DEFAULT_FILL_POLICY
+  const retestAt = (ms: number) => policy.retests.findLast(entry => entry.fromAt <= ms)?.retest ?? DEFAULT_RETEST_SETTINGS
   const itself = (id: string) => ({ id, name: '' })
   return {
     nowMs,
@@ -85,7 +88,8 @@ function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], 
     policyAt,
     catalogue,
     scales: new Map(policy.scales.map(scale => [scale.id, scale])),
-    retest: policy.retest,
+    retest: retestAt(nowMs),
+    retestAt,
     access,
     codesOnTwo: new Set(codesOnTwo),
     // Nobody reads names here: only the findings are shown.

@@ -13,10 +13,13 @@ export const firm = sqliteTable('firm', {
   createdAt: integer('created_at').notNull(),
 })
 
-/** Rules of the firm from a date on; the row in force is the latest that has begun. */
+/**
+ * Rules of the firm from a date on; the row in force is the latest that has begun. Append-only: triggers refuse UPDATE
+ * and DELETE. A rule that has not begun is taken back by a row of its own, the withdrawal.
+ */
 export const settings = sqliteTable('settings', {
   id: text('id').primaryKey(),
-  kind: text('kind', { enum: ['fill-policy', 'retest'] }).notNull(),
+  kind: text('kind', { enum: ['fill-policy', 'retest', 'withdrawal'] }).notNull(),
   fromAt: integer('from_at').notNull(),
   value: text('value', { mode: 'json' }).notNull(),
   reason: text('reason').notNull(),
@@ -183,6 +186,8 @@ export const cylinders = sqliteTable('cylinders', {
   /** 2 = a stop stands whatever the date, 1 = a caution, 0 = none. */
   severity: integer('severity').notNull(),
   state: text('state').notNull(),
+  /** Names the firm's rules that the columns rest on; a row under other rules than those in force is made anew. */
+  ruledBy: text('ruled_by').notNull().default(''),
 }, table => [
   index('cylinders_label').on(table.labelCode),
   index('cylinders_serial').on(table.serial),
@@ -191,6 +196,7 @@ export const cylinders = sqliteTable('cylinders', {
   index('cylinders_refrigerant').on(table.refrigerant),
   index('cylinders_due').on(table.dueMonth),
   index('cylinders_last_event').on(table.lastEventAt),
+  index('cylinders_ruled_by').on(table.ruledBy),
 ])
 
 /** A cache of the fold: every change of net, signed. */

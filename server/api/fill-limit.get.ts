@@ -1,5 +1,6 @@
 import { useDatabase } from '~~/server/utils/database/currentDatabase'
-import { directory, fillPolicyAt } from '~~/server/utils/directory/directory'
+import { fillPolicyAt } from '~~/server/utils/directory/datedRules'
+import { directory } from '~~/server/utils/directory/directory'
 import { apiRoute } from '~~/server/utils/http/apiRoute'
 import { fillLimitAnswer } from '~~/server/utils/refrigerants/fillLimitAnswer'
 import { fillLimitQuery } from '~~/utils/contract/refrigerants'

@@ -119,7 +119,7 @@ export const FOLD_CONTEXT: FoldContext = {
   catalogue: CATALOGUE,
   policyAt: () => DEFAULT_FILL_POLICY,
   timeZone: 'America/Chicago',
-  retest: { intervalMonths: null, ownerChoices: [] },
+  retestAt: () => ({ intervalMonths: null, ownerChoices: [] }),
 }
 
 export const VIEW_CONTEXT: ViewContext = {

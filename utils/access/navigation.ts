@@ -12,6 +12,7 @@ const ITEMS: readonly (NavigationItem & { permission: Permission })[] = [
   { label: 'Refrigerants', to: '/refrigerants', permission: 'refrigerants:read' },
   { label: 'Labels', to: '/labels', permission: 'labels:mint' },
   { label: 'Places', to: '/places', permission: 'places:read' },
+  { label: 'Rules', to: '/rules', permission: 'settings:read' },
   { label: 'People', to: '/people', permission: 'people:read' },
   { label: 'Log', to: '/log', permission: 'log:verify' },
   { label: 'Mail', to: '/mail', permission: 'mail:read' },

@@ -12,7 +12,9 @@ export type Permission
     | 'firms:read' | 'firms:manage'
     | 'people:read' | 'people:read-contact' | 'people:manage'
     | 'log:verify' | 'log:export'
-    | 'settings:read' | 'settings:manage' | 'fill-rule:set'
+    | 'settings:read' | 'settings:manage'
+    /** Reminders and test choices; the fill rule asks for its own besides. */
+    | 'rules:set' | 'fill-rule:set'
     | 'mail:read'
     | 'refrigerants:read'
     | 'account:own'
@@ -32,10 +34,10 @@ export const PERMISSIONS = {
   technician: [...EVERYONE, 'events:post'],
   manager: [
     ...WAREHOUSE, 'events:correct-any', 'shipments:dispatch', 'shipments:receive', 'lots:dispatch', 'lots:receive',
-    'fill-rule:set', 'log:verify',
+    'rules:set', 'fill-rule:set', 'log:verify',
   ],
   auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'people:read-contact', 'log:verify', 'log:export'],
-  admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'settings:manage', 'mail:read'],
+  admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'settings:manage', 'rules:set', 'mail:read'],
 } as const satisfies Record<Role, readonly Permission[]>
 
 /** What a permission is asked about, where it depends on that. */

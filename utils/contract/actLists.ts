@@ -1,6 +1,6 @@
 import type { Firm } from './places'
 import type { PersonLine } from './people'
-import type { PolicyAnswer } from './custody'
+import type { PolicyAnswer } from './policy'
 import type { DraftPlace } from '../custody/draft/draft'
 
 /** What the forms choose from. */

@@ -1,8 +1,6 @@
 import { z } from 'zod'
 import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
-import type { FillPolicy } from '../capacity/types'
-import type { RetestRules } from '../requalification/ownerChoice'
 import type { ProblemDetails } from './problem'
 import { id, page, type Page } from './parts'
 
@@ -72,14 +70,6 @@ export interface CustodyLogAnswer extends Page<LogLine> {
 export interface FoldInput {
   events: AnyRecordedEvent[]
   codesOnTwo: string[]
-}
-
-/** What GET /api/policy answers: the firm's dated rules. */
-export interface PolicyAnswer {
-  timeZone: string
-  fillPolicies: { fromAt: number, policy: FillPolicy }[]
-  retest: RetestRules & { soonDays: number, notSeenDays: number, missingDays: number }
-  scales: { id: string, name: string, accuracyGrams: number, accuracyPercent: number, lastCheck: string | null }[]
 }
 
 export type { CylinderRow, CylinderView, LogLine }

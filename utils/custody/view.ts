@@ -31,6 +31,8 @@ export interface ViewContext {
   catalogue: Catalogue
   scales: ReadonlyMap<string, Scale>
   retest: RetestRules & { soonDays: number, notSeenDays: number, missingDays: number }
+  /** What the owner had settled about tests at an instant. */
+  retestAt: (ms: number) => RetestRules
   askedRefrigerant?: string | null
   /** null shows the cylinder to nobody in particular: nothing may be done. */
   access: Access | null

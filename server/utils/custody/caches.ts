@@ -2,10 +2,10 @@ import type { InStatement, InValue } from '@libsql/client'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold, type FoldResult } from '../../../utils/custody/fold'
 import type { Movement } from '../../../utils/custody/movement'
-import { cacheRow, type RowContext } from '../../../utils/custody/row'
+import { cacheRow } from '../../../utils/custody/row'
 import type { CylinderState } from '../../../utils/custody/state'
 import type { Directory } from '../directory/directory'
-import { foldContext, rowContext } from './foldContext'
+import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
 import type { LogRow } from './logRow'
 import type { Guard } from './posting'
@@ -43,13 +43,19 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
   ]
 }
 
-/** The row of a cylinder from its cached state, where something outside its events has changed. */
-export function refreshedRow(cylinderId: string, state: CylinderState, context: RowContext): InStatement {
-  return upsertCylinder(cylinderId, state, context, NO_GUARD)
+/**
+ * The row of a cylinder from its cached state, where something outside its events has changed. A row that another
+ * process has meanwhile made of a later event stays.
+ */
+export function refreshedRow(cylinderId: string, state: CylinderState, context: RuledRowContext): InStatement {
+  return upsertCylinder(cylinderId, state, context, {
+    sql: 'EXISTS (SELECT 1 FROM cylinders WHERE id = ? AND version = ?)',
+    args: [cylinderId, state.version],
+  })
 }
 
-function upsertCylinder(cylinderId: string, state: CylinderState, context: RowContext, guard: Guard): InStatement {
-  const columns: Record<string, InValue> = { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state) }
+function upsertCylinder(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard): InStatement {
+  const columns: Record<string, InValue> = { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state), ruled_by: context.ruledBy }
   const names = Object.keys(columns)
   return {
     sql: `INSERT INTO cylinders (${names.join(', ')}) SELECT ${names.map(() => '?').join(', ')} WHERE ${guard.sql}

@@ -1,4 +1,5 @@
 import { addMonths, daysUntilEndOfMonth, monthOfInstant, type Month } from '../../../utils/quantity/month'
+import { retestAt } from '../directory/datedRules'
 import type { Directory } from '../directory/directory'
 
 const MS_PER_DAY = 86_400_000
@@ -14,14 +15,15 @@ export interface DateBounds {
 }
 
 /** The bounds of a day, in the firm's time zone and by the firm's reminders. */
-export function dateBounds(from: Pick<Directory, 'timeZone' | 'retest'>, nowMs: number): DateBounds {
+export function dateBounds(from: Pick<Directory, 'timeZone' | 'retests'>, nowMs: number): DateBounds {
+  const retest = retestAt(from.retests, nowMs)
   const thisMonth = monthOfInstant(nowMs, from.timeZone)
   let lastSoonMonth = addMonths(thisMonth, -1)
-  while (daysUntilEndOfMonth(addMonths(lastSoonMonth, 1), nowMs, from.timeZone) <= from.retest.soonDays) lastSoonMonth = addMonths(lastSoonMonth, 1)
+  while (daysUntilEndOfMonth(addMonths(lastSoonMonth, 1), nowMs, from.timeZone) <= retest.soonDays) lastSoonMonth = addMonths(lastSoonMonth, 1)
   return {
     thisMonth,
     lastSoonMonth,
-    notSeenBefore: startOfDay(nowMs, from.timeZone) - (from.retest.notSeenDays - 1) * MS_PER_DAY,
+    notSeenBefore: startOfDay(nowMs, from.timeZone) - (retest.notSeenDays - 1) * MS_PER_DAY,
   }
 }
 

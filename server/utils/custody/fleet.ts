@@ -1,19 +1,11 @@
-import type { InValue, Row } from '@libsql/client'
-import type { FleetAnswer, FleetQuery } from '../../../utils/contract/custody'
-import { rowToday, type CachedRow } from '../../../utils/custody/row'
+import type { InValue } from '@libsql/client'
+import type { CylinderRow, FleetAnswer, FleetQuery } from '../../../utils/contract/custody'
 import type { Database } from '../database/database'
-import { directory, namesOf, type Directory } from '../directory/directory'
+import { directory } from '../directory/directory'
 import { foreignCursor } from '../http/cursor'
 import { fleetFilter, type FleetFilter } from './fleetFilter'
 import { dateBounds, type DateBounds } from './dateBounds'
-
-/** Columns of the cache in the order in which a row reads them. */
-const COLUMNS = [
-  'id', 'version', 'label_code', 'serial', 'spec', 'place_id', 'holder_id', 'owner_id', 'refrigerant', 'condition', 'lifecycle',
-  'nothing_in_it', 'net_grams', 'fill_limit_grams', 'governing_rule', 'room_grams', 'stop_weight_grams', 'exact_stop_weight',
-  'tare_weight_grams', 'water_capacity_grams', 'due_month', 'retest_state', 'last_event_at', 'last_event_kind', 'last_seen_at',
-  'finding_codes', 'severity',
-] as const
+import { listedRows, rowColumns, type ListedRow } from './listedRows'
 
 /** What the list sorts by, as SQL; each gives a value that is never null, so that a cursor can stand on it. */
 const SORT_SQL: Record<FleetQuery['sort'], (bounds: DateBounds) => { sql: string, args: InValue[] }> = {
@@ -37,13 +29,14 @@ export async function fleet(db: Database, query: FleetQuery, nowMs: number): Pro
   const down = query.order === 'desc'
   const after = cursorOf(query.cursor)
   const seek = after ? `AND (${sort.sql}, c.id) ${down ? '<' : '>'} (?, ?)` : ''
+  const columns = rowColumns(from, nowMs)
   const [page, count] = await db.readClient.batch([
     {
-      sql: `SELECT ${COLUMNS.map(column => `c.${column}`).join(', ')}, ${sort.sql} AS sort_value
+      sql: `SELECT ${columns.sql}, ${sort.sql} AS sort_value
         FROM cylinders c LEFT JOIN places p ON p.id = c.place_id
         WHERE ${filter.sql} ${seek}
         ORDER BY sort_value ${down ? 'DESC' : 'ASC'}, c.id ${down ? 'DESC' : 'ASC'} LIMIT ?`,
-      args: [...sort.args, ...filter.args, ...(after ? [...sort.args, after.value, after.id] : []), query.limit + 1],
+      args: [...columns.args, ...sort.args, ...filter.args, ...(after ? [...sort.args, after.value, after.id] : []), query.limit + 1],
     },
     { sql: `SELECT count(*) FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql}`, args: filter.args },
   ], 'read')
@@ -51,65 +44,33 @@ export async function fleet(db: Database, query: FleetQuery, nowMs: number): Pro
   const shown = rows.slice(0, query.limit)
   const last = shown.at(-1)
   return {
-    items: shown.map(row => rowOf(row, from, nowMs).row),
+    items: (await listedRows(db, shown, from, nowMs)).map(({ row }) => row),
     nextCursor: rows.length > query.limit && last ? cursorText(last['sort_value'] as InValue, last['id'] as string) : null,
     total: count?.rows[0]?.[0] as number,
   }
 }
 
 /** Rows of the fleet by id, with the version of each. */
-export async function cylinderRows(db: Database, ids: readonly string[], nowMs: number) {
-  if (ids.length === 0) return new Map<string, ReturnType<typeof rowOf>>()
+export async function cylinderRows(db: Database, ids: readonly string[], nowMs: number): Promise<Map<string, ListedRow>> {
+  if (ids.length === 0) return new Map()
   const from = await directory(db)
+  const columns = rowColumns(from, nowMs)
   const result = await db.readClient.execute({
-    sql: `SELECT ${COLUMNS.join(', ')} FROM cylinders WHERE id IN (${ids.map(() => '?').join(', ')})`,
-    args: [...ids],
+    sql: `SELECT ${columns.sql} FROM cylinders c WHERE c.id IN (${ids.map(() => '?').join(', ')})`,
+    args: [...columns.args, ...ids],
   })
-  return new Map(result.rows.map(row => [row['id'] as string, rowOf(row, from, nowMs)]))
+  return new Map((await listedRows(db, result.rows, from, nowMs)).map(listed => [listed.row.id, listed]))
 }
 
 /** Rows of the fleet that a filter lets through, at most `limit`, in the order of their ids. */
-export async function cylinderRowsWhere(db: Database, filter: FleetFilter, limit: number, nowMs: number) {
+export async function cylinderRowsWhere(db: Database, filter: FleetFilter, limit: number, nowMs: number): Promise<CylinderRow[]> {
   const from = await directory(db)
+  const columns = rowColumns(from, nowMs)
   const result = await db.readClient.execute({
-    sql: `SELECT ${COLUMNS.map(column => `c.${column}`).join(', ')} FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql} ORDER BY c.id LIMIT ?`,
-    args: [...filter.args, limit],
+    sql: `SELECT ${columns.sql} FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql} ORDER BY c.id LIMIT ?`,
+    args: [...columns.args, ...filter.args, limit],
   })
-  return result.rows.map(row => rowOf(row, from, nowMs).row)
-}
-
-function rowOf(row: Row, from: Directory, nowMs: number) {
-  const cached: CachedRow = {
-    id: row['id'] as string,
-    version: row['version'] as number,
-    labelCode: row['label_code'] as string | null,
-    serial: row['serial'] as string | null,
-    spec: row['spec'] as string | null,
-    placeId: row['place_id'] as string | null,
-    holderId: row['holder_id'] as string | null,
-    ownerId: row['owner_id'] as string | null,
-    refrigerant: row['refrigerant'] as string | null,
-    condition: row['condition'] as CachedRow['condition'],
-    lifecycle: row['lifecycle'] as CachedRow['lifecycle'],
-    nothingInIt: row['nothing_in_it'] === 1,
-    netGrams: row['net_grams'] as number | null,
-    fillLimitGrams: row['fill_limit_grams'] as number | null,
-    governingRule: row['governing_rule'] as CachedRow['governingRule'],
-    roomGrams: row['room_grams'] as number | null,
-    stopWeightGrams: row['stop_weight_grams'] as number | null,
-    exactStopWeight: row['exact_stop_weight'] as string | null,
-    tareWeightGrams: row['tare_weight_grams'] as number | null,
-    waterCapacityGrams: row['water_capacity_grams'] as number | null,
-    dueMonth: row['due_month'] as CachedRow['dueMonth'],
-    retestState: row['retest_state'] as CachedRow['retestState'],
-    lastEventAt: row['last_event_at'] as number | null,
-    lastEventKind: row['last_event_kind'] as CachedRow['lastEventKind'],
-    lastSeenAt: row['last_seen_at'] as number | null,
-    findingCodes: row['finding_codes'] as string,
-    severity: row['severity'] as number,
-  }
-  const today = { nowMs, timeZone: from.timeZone, retest: from.retest, names: namesOf(from) }
-  return { row: rowToday(cached, today), version: cached.version }
+  return (await listedRows(db, result.rows, from, nowMs)).map(({ row }) => row)
 }
 
 function plain(sql: string) {

@@ -1,19 +1,20 @@
 import type { FoldContext } from '../../../utils/custody/fold'
 import type { RowContext } from '../../../utils/custody/row'
 import type { ViewContext } from '../../../utils/custody/view'
+import type { RetestSettings } from '../../../utils/requalification/retestSettings'
 import type { Access } from '../../../utils/access/roles'
 import { CATALOGUE } from '../../../utils/refrigerant/allRefrigerants'
-import { fillPolicyAt, namesOf, type Directory } from '../directory/directory'
+import { fillPolicyAt, retestAt, rulesInForceKey } from '../directory/datedRules'
+import { namesOf, type Directory } from '../directory/directory'
 
-/** What the fold and the cached columns take from outside the log: the firm's rules as they stand now. */
-export function foldContext(from: Directory): FoldContext & RowContext {
+/** What the fold takes from outside the log: the firm's rules, each as of its day. */
+export function foldContext(from: Directory): FoldContext {
   return {
     catalogue: CATALOGUE,
     scales: from.scales,
     policyAt: at => fillPolicyAt(from.fillPolicies, at),
-    policyNow: fillPolicyAt(from.fillPolicies, from.readAt),
+    retestAt: at => retestAt(from.retests, at),
     timeZone: from.timeZone,
-    retest: from.retest,
   }
 }
 
@@ -28,7 +29,7 @@ export function viewContext(from: Directory, more: {
     ...foldContext(from),
     nowMs: more.nowMs,
     policyNow: fillPolicyAt(from.fillPolicies, more.nowMs),
-    retest: from.retest,
+    retest: retestAt(from.retests, more.nowMs),
     askedRefrigerant: more.askedRefrigerant ?? null,
     access: more.access,
     codesOnTwo: more.codesOnTwo ?? new Set(),
@@ -36,14 +37,21 @@ export function viewContext(from: Directory, more: {
   }
 }
 
-/** What the cached columns take from outside the log: the rule in force, but not the day. */
-export function rowContext(from: Directory, nowMs: number, codesOnTwo: ReadonlySet<string> = new Set()): RowContext {
+/** A {@link RowContext}, and the name by which a row keeps the rules in it. */
+export interface RuledRowContext extends RowContext {
+  ruledBy: string
+  retest: RetestSettings
+}
+
+/** What the cached columns take from outside the log: the rules in force, but not the day. */
+export function rowContext(from: Directory, nowMs: number, codesOnTwo: ReadonlySet<string> = new Set()): RuledRowContext {
   return {
+    ruledBy: rulesInForceKey(from, nowMs),
     policyNow: fillPolicyAt(from.fillPolicies, nowMs),
     policyAt: at => fillPolicyAt(from.fillPolicies, at),
     catalogue: CATALOGUE,
     timeZone: from.timeZone,
-    retest: from.retest,
+    retest: retestAt(from.retests, nowMs),
     codesOnTwo,
   }
 }

@@ -1,24 +1,12 @@
 import { asc } from 'drizzle-orm'
 import { firm, firms, people, places, scales, settings } from '../../../drizzle/schema'
-import { DEFAULT_FILL_POLICY, type FillPolicy } from '../../../utils/capacity/types'
 import type { Named } from '../../../utils/custody/cylinderView'
 import type { Scale } from '../../../utils/quantity/scale'
-import type { RetestRules } from '../../../utils/requalification/ownerChoice'
 import type { Database } from '../database/database'
-
-/** Dates and days that the firm sets for its reminders. */
-export interface RetestSettings extends RetestRules {
-  soonDays: number
-  notSeenDays: number
-  missingDays: number
-}
-
-export const DEFAULT_RETEST_SETTINGS: RetestSettings = { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] }
-
-export interface DatedFillPolicy { fromAt: number, policy: FillPolicy }
+import { datedRules, type DatedRules, type SettingRow } from './datedRules'
 
 /** The small tables that every custody event and view needs by id, read as one. */
-export interface Directory {
+export interface Directory extends DatedRules {
   timeZone: string
   places: ReadonlyMap<string, typeof places.$inferSelect>
   firms: ReadonlyMap<string, typeof firms.$inferSelect>
@@ -26,9 +14,8 @@ export interface Directory {
   /** By the id of its firm. */
   placeOfFirm: ReadonlyMap<string, string>
   scales: ReadonlyMap<string, Scale>
-  /** Oldest first. */
-  fillPolicies: readonly DatedFillPolicy[]
-  retest: RetestSettings
+  /** Every rule that was ever set or withdrawn, in order of its beginning. */
+  settings: readonly SettingRow[]
   readAt: number
 }
 
@@ -61,10 +48,10 @@ async function readDirectory(db: Database): Promise<Directory> {
     db.read.select().from(firms),
     db.read.select().from(people),
     db.read.select().from(scales),
-    db.read.select().from(settings).orderBy(asc(settings.fromAt), asc(settings.setAt)),
+    db.read.select().from(settings).orderBy(asc(settings.fromAt), asc(settings.setAt), asc(settings.id)),
   ])
-  const retest = settingRows.filter(row => row.kind === 'retest').at(-1)?.value as Partial<RetestSettings> | undefined
   return {
+    ...datedRules(settingRows),
     timeZone: firmRows[0]?.timeZone ?? 'UTC',
     places: byId(placeRows),
     firms: byId(firmsRows),
@@ -77,15 +64,9 @@ async function readDirectory(db: Database): Promise<Directory> {
       accuracyPercent: row.accuracyBasisPoints / 100,
       lastCheck: row.lastCheckOn,
     }])),
-    fillPolicies: settingRows.filter(row => row.kind === 'fill-policy').map(row => ({ fromAt: row.fromAt, policy: row.value as FillPolicy })),
-    retest: { ...DEFAULT_RETEST_SETTINGS, ...retest },
+    settings: settingRows,
     readAt: Date.now(),
   }
-}
-
-/** The fill rule in force at an instant (UTC milliseconds). */
-export function fillPolicyAt(policies: readonly DatedFillPolicy[], at: number): FillPolicy {
-  return policies.findLast(entry => entry.fromAt <= at)?.policy ?? DEFAULT_FILL_POLICY
 }
 
 /** Names by id, for people to read; an id that nobody knows any more reads as itself. */

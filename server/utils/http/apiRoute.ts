@@ -1,12 +1,11 @@
 import { defineEventHandler, getRouterParams, setResponseStatus, type EventHandler, type EventHandlerRequest, type H3Event } from 'h3'
 import type { z } from 'zod'
 import type { Access } from '../../../utils/access/roles'
-import { can, type Permission } from '../../../utils/access/permissions'
+import type { Permission } from '../../../utils/access/permissions'
 import type { User } from '../../../utils/contract/session'
-import { useDatabase } from '../database/currentDatabase'
-import { securityEntry } from '../securityLog'
 import { accessOf, currentUser } from '../session/currentUser'
 import { asProblem } from './asProblem'
+import { insistOn } from './insistOn'
 import { readJsonBody } from './jsonBody'
 import { problem, sendProblem } from './problem'
 import { queryOf, validate } from './validate'
@@ -82,9 +81,8 @@ export function apiRoute<
 async function admit(event: H3Event, permission: Permission | 'signed-in'): Promise<User> {
   const person = await currentUser(event)
   if (!person) throw problem(401, 'Not signed in', 'Sign in first.', undefined, { type: 'not-signed-in' })
-  if (permission === 'signed-in' || can(accessOf(person), permission)) return person
-  await useDatabase().write([securityEntry({ what: 'refused', personId: person.id, subject: permission }, Date.now())])
-  throw problem(403, 'Not yours', 'Your role does not include this.', undefined, { type: 'not-permitted' })
+  if (permission !== 'signed-in') await insistOn(person, permission)
+  return person
 }
 
 function pathOf(event: H3Event): Record<string, string> {

@@ -31,7 +31,7 @@ registerEndpoint('/api/firms', list([]))
 registerEndpoint('/api/people', list([]))
 registerEndpoint('/api/refrigerants', list([{ designation: 'R-22' }, { designation: 'R-410A' }]))
 registerEndpoint('/api/policy', () => ({
-  timeZone: 'America/Chicago', fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }], scales: [],
+  timeZone: 'America/Chicago', fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }], retests: [], scales: [],
   retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] },
 }))
 registerEndpoint('/api/events', {

@@ -29,7 +29,7 @@ registerEndpoint(`/api/shipments/${ID}/lines`, {
     return draft(LINES.filter(line => cylinderIds.includes(line.cylinder.id)))
   },
 })
-registerEndpoint('/api/policy', () => ({ timeZone: 'America/Chicago', fillPolicies: [], scales: [], retest: { soonDays: 120 } }))
+registerEndpoint('/api/policy', () => ({ timeZone: 'America/Chicago', fillPolicies: [], retests: [], scales: [], retest: { soonDays: 120 } }))
 registerEndpoint('/api/session', () => ({ user: MANAGER }))
 
 async function open() {

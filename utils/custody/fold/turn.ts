@@ -16,8 +16,8 @@ export interface FoldContext {
   policyAt: (ms: number) => FillPolicy
   /** The firm's IANA time zone, in which months begin and end. */
   timeZone: string
-  /** What the owner has settled about tests. */
-  retest: RetestRules
+  /** What the owner had settled about tests at an instant. */
+  retestAt: (ms: number) => RetestRules
 }
 
 /** One event's turn: the state it finds and changes, and what it leaves in the books. */

@@ -7,11 +7,11 @@ const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => 
 
 describe('where a person can go', () => {
   it.each<[Role, string[]]>([
-    ['technician', ['Scan', 'Fleet', 'Refrigerants', 'Places', 'People']],
-    ['warehouse', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'People']],
-    ['manager', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'People', 'Log']],
-    ['auditor', ['Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'People', 'Log']],
-    ['admin', ['Fleet', 'Refrigerants', 'Places', 'People', 'Mail']],
+    ['technician', ['Scan', 'Fleet', 'Refrigerants', 'Places', 'Rules', 'People']],
+    ['warehouse', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People']],
+    ['manager', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People', 'Log']],
+    ['auditor', ['Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'Rules', 'People', 'Log']],
+    ['admin', ['Fleet', 'Refrigerants', 'Places', 'Rules', 'People', 'Mail']],
   ])('as %s', (role, labels) => {
     expect(words(role)).toEqual(labels)
   })

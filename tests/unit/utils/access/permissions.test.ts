@@ -26,6 +26,7 @@ const MATRIX: Record<Permission, string> = {
   'places:manage': 'D',
   'places:read': 'W T M A D',
   'refrigerants:read': 'W T M A D',
+  'rules:set': 'M D',
   'settings:manage': 'D',
   'settings:read': 'W T M A D',
   'shipments:dispatch': 'M',

@@ -1,0 +1,33 @@
+import { wallClock } from './instant'
+
+/** A calendar day as 'YYYY-MM-DD'. */
+export type Day = string
+
+const MS_PER_DAY = 86_400_000
+
+/** The day it is at an instant (UTC milliseconds) in a time zone. */
+export function dayOfInstant(ms: number, timeZone: string): Day {
+  const { year, month, day } = wallClock(ms, timeZone)
+  return `${String(year).padStart(4, '0')}-${two(month)}-${two(day)}`
+}
+
+/**
+ * The first millisecond of a day in a time zone.
+ *
+ * Found by halving, so that a change of the clock at midnight cannot move it.
+ */
+export function firstInstantOfDay(day: Day, timeZone: string): number {
+  const midnightInUtc = Date.parse(`${day}T00:00:00Z`)
+  let before = midnightInUtc - MS_PER_DAY
+  let within = midnightInUtc + MS_PER_DAY
+  while (within - before > 1) {
+    const middle = Math.floor((before + within) / 2)
+    if (dayOfInstant(middle, timeZone) < day) before = middle
+    else within = middle
+  }
+  return within
+}
+
+function two(value: number): string {
+  return String(value).padStart(2, '0')
+}
