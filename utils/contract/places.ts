@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { RIN } from '../requalification/retestMark'
 import { id, line, type Page } from './parts'
 
 export const PLACE_KINDS = ['shop', 'rack', 'van', 'site', 'firm'] as const
@@ -50,7 +51,7 @@ export const firmBody = z.strictObject({
   telephone: line(40).nullish(),
   email: z.email().max(200).nullish(),
   address: line(300).nullish(),
-  rin: z.string().regex(/^[A-Z]\d{3}$/, 'a RIN is a letter and three digits').nullish(),
+  rin: z.string().regex(RIN, 'a RIN has four letters or figures').nullish(),
 })
 /** PATCH /api/firms/{id}. */
 export const firmChange = firmBody.omit({ id: true, kind: true }).partial().extend({ active: z.boolean().optional() })

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import type { CylinderRow } from '../custody/cylinderView'
 import type { Finding } from '../custody/finding'
+import { RIN } from '../requalification/retestMark'
 import { eachOnce, id, line, massReading, page, type Page } from './parts'
 
 const cylinderIds = z.array(id).max(200).refine(ids => eachOnce(ids), 'must name each cylinder once')
@@ -30,6 +31,7 @@ export const testLotReturnBody = z.strictObject({
     result: z.enum(['passed', 'rejected', 'condemned']),
     method: z.enum(['volumetric', 'proof', 'visual']),
     month: z.string().regex(/^\d{4}-(0[1-9]|1[0-2])$/),
+    rin: z.string().trim().toUpperCase().regex(RIN, 'must be a RIN: four letters or figures').optional(),
     suffix: z.string().trim().max(3).optional(),
     newTare: massReading.optional(),
     gross: massReading.optional(),

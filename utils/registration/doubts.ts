@@ -2,6 +2,9 @@ import { exactGrams, formatMass, type MassUnit } from '../quantity/mass'
 import { readMonthMark } from '../quantity/monthMark'
 import { compareMonths, formatMonth, type Month } from '../quantity/month'
 import { scaleAccuracyGrams } from '../quantity/scale'
+import { readMarkEntry } from '../requalification/markEntry'
+import type { RetestMark } from '../requalification/retestMark'
+import { suffixDoubt } from '../requalification/retestSuffix'
 import { splitSpec } from '../requalification/specs'
 import type { RegistrationDraft } from './draft'
 
@@ -29,6 +32,7 @@ export function registrationDoubts(draft: RegistrationDraft, thisMonth: Month, u
     ...ratioDoubts(draft),
     ...grossDoubts(draft, unit),
     ...monthDoubts(draft, thisMonth),
+    ...suffixDoubts(draft, thisMonth),
     ...saidDoubts(draft),
   ]
 }
@@ -80,7 +84,7 @@ function grossDoubts(draft: RegistrationDraft, unit: MassUnit): Doubt[] {
 
 function monthDoubts(draft: RegistrationDraft, thisMonth: Month): Doubt[] {
   const made = readMonthMark(draft.made, thisMonth)
-  const marks = draft.marks.flatMap(mark => readMonthMark(mark.month, thisMonth) ?? [])
+  const marks = readMarks(draft, thisMonth).map(({ month }) => month)
   const future = [made, ...marks].filter(month => month !== null && compareMonths(month, thisMonth) > 0) as Month[]
   const doubts: Doubt[] = future.map(month => ({ code: 'month-ahead', kind: 'att', text: `${formatMonth(month)} has not come yet.` }))
   if (made && compareMonths(thisMonth, made) > OLDEST_YEARS * 12) {
@@ -94,6 +98,16 @@ function monthDoubts(draft: RegistrationDraft, thisMonth: Month): Doubt[] {
   }
   if (!made && marks.length === 0) doubts.push({ code: 'no-month', kind: 'unk', text: 'No month known: it may not be filled before a test.' })
   return doubts
+}
+
+function readMarks(draft: RegistrationDraft, thisMonth: Month): RetestMark[] {
+  return draft.marks.map(mark => readMarkEntry(mark, thisMonth)).flatMap(read => 'mark' in read ? [read.mark] : [])
+}
+
+function suffixDoubts(draft: RegistrationDraft, thisMonth: Month): Doubt[] {
+  return readMarks(draft, thisMonth)
+    .flatMap(({ suffix }) => suffixDoubt(suffix ?? '') ?? [])
+    .map(text => ({ code: 'suffix', kind: 'att', text }))
 }
 
 function saidDoubts(draft: RegistrationDraft): Doubt[] {

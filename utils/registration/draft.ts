@@ -3,10 +3,9 @@ import { readMonthMark } from '../quantity/monthMark'
 import type { Month } from '../quantity/month'
 import type { Condition, Ownership } from '../custody/cylinderView'
 import type { Stamp } from '../capacity/types'
+import { EMPTY_MARK, isMarkTyped, readMarkEntry, type MarkEntry } from '../requalification/markEntry'
+import type { RetestMark } from '../requalification/retestMark'
 import { splitSpec } from '../requalification/specs'
-
-/** One test mark as it is typed from the collar. */
-export interface MarkDraft { month: string, rin: string, suffix: string }
 
 /** What a person has typed of a collar stamp and of the cylinder that carries it. */
 export interface RegistrationDraft {
@@ -20,7 +19,7 @@ export interface RegistrationDraft {
   tareIncludesValve: boolean | null
   waterCapacity: MassReading | null
   made: string
-  marks: MarkDraft[]
+  marks: MarkEntry[]
   flammableMarked: boolean | null
   floatSwitch: boolean | null
   valve: string
@@ -53,7 +52,7 @@ export type FieldErrors = Partial<Record<string, string>>
 export function emptyDraft(): RegistrationDraft {
   return {
     serial: '', serialUnreadable: false, maker: '', spec: '', tareWeight: null, tareIncludesValve: null,
-    waterCapacity: null, made: '', marks: [{ month: '', rin: '', suffix: '' }], flammableMarked: null, floatSwitch: null, valve: '',
+    waterCapacity: null, made: '', marks: [{ ...EMPTY_MARK }], flammableMarked: null, floatSwitch: null, valve: '',
     ownership: 'own', ownerId: '', dedicatedTo: '', contents: null, refrigerant: '', condition: 'clean', gross: null, placeId: '',
   }
 }
@@ -67,15 +66,15 @@ export function readDraft(draft: RegistrationDraft, thisMonth: Month): { details
   const errors: FieldErrors = {}
   const spec = splitSpec(draft.spec)
   const made = draft.made.trim() === '' ? null : readMonthMark(draft.made, thisMonth)
-  const typedMarks = draft.marks.filter(mark => mark.month.trim() || mark.rin.trim() || mark.suffix.trim())
-  const marks = typedMarks.map(mark => ({ ...mark, read: readMonthMark(mark.month, thisMonth) }))
+  const typedMarks = draft.marks.filter(isMarkTyped)
+  const marks = typedMarks.map(mark => readMarkEntry(mark, thisMonth))
 
   if (draft.serial.trim() === '' && !draft.serialUnreadable) errors.serial = 'Copy the serial, or say that it cannot be read.'
   if (draft.spec.trim() === '') errors.spec = 'Copy the specification, such as DOT-4BA400.'
   else if (!spec) errors.spec = 'No specification of the list begins like this. Copy it with its DOT, such as DOT-4BA400.'
   if (draft.made.trim() !== '' && !made) errors.made = 'Write month and year, such as 03-21.'
-  if (marks.some(mark => !mark.read)) errors.marks = 'Write month and year of each test, such as 04-26.'
-  if (marks.some(mark => mark.rin.trim() !== '' && !isRin(mark.rin))) errors.marks ??= 'A RIN is a letter and three digits, such as A123.'
+  const wrongMark = marks.find(mark => 'error' in mark)
+  if (wrongMark) errors.marks = wrongMark.error
   if (draft.contents === null) errors.contents = 'Say what is in it. If nobody knows, choose “unknown”.'
   if (draft.contents === 'refrigerant' && draft.refrigerant === '') errors.refrigerant = 'Choose the refrigerant.'
   if (draft.ownership !== 'own' && draft.ownerId === '') errors.ownerId = 'Choose whose it is.'
@@ -85,7 +84,7 @@ export function readDraft(draft: RegistrationDraft, thisMonth: Month): { details
   return {
     details: {
       stamp: stampOf(draft, spec, made),
-      ...(marks.length ? { marks: marks.map(mark => markOf(mark.read!, mark)) } : {}),
+      ...(marks.length ? { marks: marks.flatMap(read => 'mark' in read ? [markOf(read.mark)] : []) } : {}),
       ownership: draft.ownership,
       ...(draft.ownership === 'own' ? {} : { ownerId: draft.ownerId }),
       ...(draft.dedicatedTo ? { dedicatedTo: draft.dedicatedTo } : {}),
@@ -113,15 +112,6 @@ function stampOf(draft: RegistrationDraft, spec: { spec: string, servicePressure
   }
 }
 
-function markOf(month: Month, mark: MarkDraft) {
-  return {
-    month,
-    ...(mark.rin.trim() ? { rin: mark.rin.trim().toUpperCase() } : {}),
-    ...(mark.suffix.trim() ? { suffix: mark.suffix.trim().toUpperCase() } : {}),
-  }
-}
-
-/** Whether a text is a requalifier identification number: a letter and three digits. Source: 49 CFR 180.213(d). */
-export function isRin(text: string): boolean {
-  return /^[A-Z]\d{3}$/.test(text.trim().toUpperCase())
+function markOf({ month, rin, suffix }: RetestMark) {
+  return { month, ...(rin === null ? {} : { rin }), ...(suffix === null ? {} : { suffix }) }
 }

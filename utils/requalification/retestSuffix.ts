@@ -23,13 +23,18 @@ const MEANINGS: Readonly<Record<string, SuffixMeaning>> = {
   'VE': { words: 'eddy current test with a visual inspection', beginning: 'examination' },
 }
 
-/** A suffix as it is kept: capitals, and the star, however it was typed or drawn, as an asterisk. */
+/** A typed mark or suffix in capitals, with an asterisk for a star, however that was typed or drawn. */
+export function capitalsAndStars(text: string): string {
+  return text.trim().toUpperCase().replaceAll(/[★☆✩✶✱⭐]/gu, '*')
+}
+
+/** A suffix as it is kept: without gaps, the plus before the star. */
 export function tidySuffix(text: string): string {
-  const tidy = text.replaceAll(/\s/g, '').toUpperCase().replaceAll(/[★☆⭐✩✶✱]/gu, '*')
+  const tidy = capitalsAndStars(text).replaceAll(/\s/g, '')
   return tidy === '*+' ? '+*' : tidy
 }
 
-/** What a suffix means, or null where it is none of a retest mark. Source: 49 CFR 180.213(f). */
+/** What a suffix means, or null where it is none of a retest mark. Source: 49 CFR 180.213. */
 export function suffixMeaning(suffix: string): SuffixMeaning | null {
   const tidy = tidySuffix(suffix)
   return Object.hasOwn(MEANINGS, tidy) ? MEANINGS[tidy]! : null

@@ -43,10 +43,10 @@ export async function returnTestLot(db: Database, id: string, body: TestLotRetur
  * condemned cylinder comes back first, for nothing may follow its end.
  */
 function eventsOf(line: TestLotReturn['lines'][number], { occurredAt, toPlaceId }: TestLotReturn, requalifierId: string): object[] {
-  const { cylinderId, month, method, result, suffix, newTare, gross } = line
+  const { cylinderId, month, method, result, rin, suffix, newTare, gross } = line
   const retested = {
     id: line.retestedEventId, cylinderId, kind: 'retested', occurredAt,
-    details: { month, method, result, requalifierId, ...(suffix && { suffix }), ...(newTare && { newTare }) },
+    details: { month, method, result, requalifierId, ...(rin && { rin }), ...(suffix && { suffix }), ...(newTare && { newTare }) },
   }
   const returned = {
     id: line.returnedEventId, cylinderId, kind: 'returned', occurredAt, placeId: toPlaceId,

@@ -15,10 +15,10 @@ import { isConfirmed, type Turn } from './turn'
 /** A requalifier has tested the cylinder. */
 export function retested(turn: Turn<'retested'>): void {
   const { state, event } = turn
-  const { method, result, month, suffix, newTare } = event.details
+  const { method, result, month, rin, suffix, newTare } = event.details
   if (method !== 'visual') fillWithWater(turn)
   if (result === 'passed') {
-    state.marks.push({ month, method, ...(suffix === undefined ? {} : { suffix }), enteredAt: event.effectiveAt })
+    state.marks.push({ month, method, ...(rin === undefined ? {} : { rin }), ...(suffix === undefined ? {} : { suffix }), enteredAt: event.effectiveAt })
     // An outside look tells nothing of the strength of steel that failed or was hurt (49 CFR 180.205(d), (h)).
     if (method !== 'visual') lift(turn, 'rejected', 'damaged', 'tare-loss')
   }

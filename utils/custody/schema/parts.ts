@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { normaliseLabelCode } from '../../label/code'
+import { RIN } from '../../requalification/retestMark'
 import { splitSpec } from '../../requalification/specs'
 import { isMonth } from '../../quantity/month'
 
@@ -73,7 +74,8 @@ export const labelCode = z.string('must be a label code').max(40, 'must be a lab
   return z.NEVER
 })
 
-const rin = z.string('must be a RIN').regex(/^[A-Z]\d{3}$/, 'must be a RIN: a letter and three digits')
+/** A requalifier identification number. */
+export const rin = z.string('must be a RIN').regex(RIN, 'must be a RIN: four letters or figures, such as "A123"')
 
 /** What is stamped behind a test date to say how it was done. */
 export const suffix = line(3)

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { month, newTare, retestMethod, suffix, uuid } from './parts'
+import { month, newTare, retestMethod, rin, suffix, uuid } from './parts'
 
 /** A requalifier has tested a cylinder. */
 export const details = z.strictObject({
@@ -7,6 +7,7 @@ export const details = z.strictObject({
   method: retestMethod,
   result: z.enum(['passed', 'rejected', 'condemned'], 'must be passed, rejected or condemned'),
   requalifierId: uuid,
+  rin: rin.optional(),
   suffix: suffix.optional(),
   newTare: newTare.optional(),
 })

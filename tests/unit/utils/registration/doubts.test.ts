@@ -49,6 +49,12 @@ describe('a second look at a stamp', () => {
     expect(doubtful({ marks: [{ month: '02-21', rin: '', suffix: '' }] })).toEqual(['test-before-made'])
   })
 
+  it('asks about a suffix that no retest mark has, wherever it is typed', () => {
+    expect(doubtful({ marks: [{ month: '04-26', rin: 'Z000', suffix: 's' }] })).toEqual([])
+    expect(doubtful({ marks: [{ month: '04-26', rin: 'Z000', suffix: 'V' }] })).toEqual(['suffix'])
+    expect(doubtful({ marks: [{ month: '4 Z000 26 DT', rin: '', suffix: '' }] })).toEqual(['suffix'])
+  })
+
   it('asks about a serial that the fleet knows already, and only then', () => {
     expect(doubtful({}, true)).toEqual(['serial-taken'])
     expect(doubtful({}, null)).toEqual([])

@@ -53,6 +53,6 @@ describe('what is typed of a collar stamp', () => {
   it('asks for a mark that can be read', () => {
     expect(errors({ made: '2021' })).toEqual(['made'])
     expect(errors({ marks: [{ month: '', rin: 'A123', suffix: '' }] })).toEqual(['marks'])
-    expect(errors({ marks: [{ month: '04-26', rin: '1234', suffix: '' }] })).toEqual(['marks'])
+    expect(errors({ marks: [{ month: '04-26', rin: '123', suffix: '' }] })).toEqual(['marks'])
   })
 })

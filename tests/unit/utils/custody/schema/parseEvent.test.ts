@@ -116,7 +116,7 @@ describe('a registration', () => {
   it('has marks with months and RINs that can be', () => {
     expect(registration({}, { marks: [{ month: '2024-12', rin: 'B123', suffix: 'E' }] })).toEqual([])
     expect(registration({}, { marks: [{ month: '2024-13' }] })).toHaveLength(1)
-    expect(registration({}, { marks: [{ month: '2024-12', rin: '1234' }] })).toHaveLength(1)
+    expect(registration({}, { marks: [{ month: '2024-12', rin: '123' }] })).toHaveLength(1)
   })
 
   it('says what is in it in one of three ways', () => {
