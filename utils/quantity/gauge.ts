@@ -106,9 +106,10 @@ export function formatThermometer(tC: number, unit: GaugeUnit): string {
   return `${fixed(thermometerFromCelsius(tC, unit), 1)}${NO_BREAK_SPACE}${thermometerSymbol(unit)}`
 }
 
-/** A figure as a field shows it again: at most three places, none that says nothing. */
+/** A reading as a field shows it again: at most two places, none that says nothing, so that 80 °F comes back as 80. */
 export function plainFigure(value: number): string {
-  return String(toThousandth(value))
+  const rounded = Math.round(value * 100) / 100
+  return String(rounded === 0 ? 0 : rounded)
 }
 
 function fixed(value: number, places: number): string {
