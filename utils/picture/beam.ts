@@ -64,7 +64,7 @@ export function layOutBeam(masses: BeamMasses, unit: MassUnit): Beam {
     stop,
     filled: Math.min(now, stop),
     over: Math.max(0, now - stop),
-    ticks: ticks(tareGrams, endGrams, unit, place, label => clear(label, now, stop, stopLabelAbove ? '' : stopLabel)),
+    ticks: scaleTicks(tareGrams, endGrams, unit, place, label => clear(label, now, stop, stopLabelAbove ? '' : stopLabel)),
     nowLabel,
     tareLabel: leftOf(now, nowLabel) > width(tareLabel) + GAP ? tareLabel : null,
     stopLabel,
@@ -112,7 +112,8 @@ function clear(label: Label, now: number, stop: number, stopLabel: string): bool
   return offPoise && offStop && label.at >= width(label.text) / 2 && label.at <= 100 - width(label.text) / 2
 }
 
-function ticks(
+/** Marks of a straight scale in the unit's round steps, a label where `free` has room for it. Units: grams. */
+export function scaleTicks(
   fromGrams: number, toGrams: number, unit: MassUnit, place: (grams: number) => number, free: (label: Label) => boolean,
 ): BeamTick[] {
   const gramsPerUnit = exactGrams({ unit: unit === 'kg' ? 'kg' : 'lb', value: 1 })
