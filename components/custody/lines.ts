@@ -68,8 +68,8 @@ const LINES: { [K in EventKind]: Say<K> } = {
   }),
   'returned': ({ fromFirmId, gross }, names) => ({ what: `from ${named(fromFirmId, names)}`, gross: gross ?? null }),
   'sent-for-test': () => ({ what: 'left with a test lot' }),
-  'retested': ({ month, method, result, requalifierId, newTare }, names) => ({
-    what: `${result}, ${method}, ${formatMonth(month)}, by ${named(requalifierId, names)}${newTare ? `, new tare ${formatReading(newTare)}` : ''}`,
+  'retested': ({ month, method, result, requalifierId, suffix, newTare }, names) => ({
+    what: `${result}, ${method}, ${formatMonth(month)}${suffix ? `, marked ${suffix}` : ''}, by ${named(requalifierId, names)}${newTare ? `, new tare ${formatReading(newTare)}` : ''}`,
   }),
   'corrected': ({ reason, instead }) => ({ what: `${instead ? 'other details' : 'taken out'}: ${reason}` }),
 }

@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { readRetestMark, readRin, retestMarkParts, retestMarkText } from '~~/utils/requalification/retestMark'
-import { suffixDoubt, suffixMeaning, tidySuffix } from '~~/utils/requalification/retestSuffix'
+import { methodDoubt, suffixDoubt, suffixMeaning, tidySuffix } from '~~/utils/requalification/retestSuffix'
 
 const NOW = '2026-12'
 
@@ -103,5 +103,14 @@ describe('a suffix', () => {
     expect(suffixDoubt('DT')).toContain('dip tube')
     expect(suffixMeaning('V')).toBeNull()
     expect(suffixMeaning('constructor')).toBeNull()
+  })
+
+  it('is doubted where it does not fit the method', () => {
+    expect(['', '+', '*', 'UE'].map(suffix => methodDoubt(suffix, 'volumetric'))).toEqual([null, null, null, null])
+    expect(methodDoubt('S', 'proof')).toBeNull()
+    expect(methodDoubt('E', 'visual')).toBeNull()
+    expect(methodDoubt('S', 'volumetric')).toContain('A volumetric test has no suffix')
+    expect(methodDoubt('', 'proof')).toContain('is marked S')
+    expect(methodDoubt('S', 'visual')).toContain('is marked E')
   })
 })

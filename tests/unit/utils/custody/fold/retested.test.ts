@@ -7,15 +7,17 @@ import type { DetailsOf } from '~~/utils/custody/schema'
 const retested = (details: Partial<DetailsOf<'retested'>> = {}) => did('retested', {
   month: '2026-07', method: 'volumetric', result: 'passed', requalifierId: REQUALIFIER, ...details,
 })
+const CHOICE = { paragraph: '180.209(e)' as const, reason: 'coated, analyzed refrigerant only', from: null }
+const byChoice = { retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [CHOICE] } }
 const atTest = [registered(), did('sent-for-test', { lotId: LOT }, { placeId: TEST_PLACE })]
 const full = [registered(), filled('R-22', 20)]
 
 describe('a passed test', () => {
   it('moves the due month, ends the stay and stays on record as a mark', () => {
-    const shown = viewAfter([...atTest, retested({ suffix: 'R' })])
+    const shown = viewAfter([...atTest, retested({ rin: 'A123', suffix: '+' })])
     expect(viewAfter(atTest)).toMatchObject({ lifecycle: 'at-test', requalification: { dueMonth: '2029-03' } })
     expect(shown).toMatchObject({ lifecycle: 'in-service', requalification: { lastMonth: '2026-07', dueMonth: '2031-07', state: 'in-date' } })
-    expect(shown.marks).toEqual([{ month: '2026-07', method: 'volumetric', suffix: 'R' }])
+    expect(shown.marks).toEqual([{ month: '2026-07', method: 'volumetric', rin: 'A123', suffix: '+' }])
   })
 
   it('dated after the month it was entered in does not count', () => {
@@ -24,6 +26,20 @@ describe('a passed test', () => {
 
   it('by a look alone does not move the due month', () => {
     expect(viewAfter([...atTest, retested({ method: 'visual' })]).requalification.dueMonth).toBe('2029-03')
+  })
+
+  it('by proof pressure moves the due month only by the owner\'s choice, and for ten years', () => {
+    const story = [...atTest, retested({ method: 'proof', suffix: 'S' })]
+    expect(viewAfter(story).requalification).toMatchObject({ dueMonth: '2029-03', choice: null })
+    expect(viewAfter(story, byChoice).requalification).toMatchObject({ dueMonth: '2036-07', choice: CHOICE })
+  })
+
+  it('holds twelve years by the owner\'s choice, but not once burnt refrigerant was in it, nor after a vacuum', () => {
+    const burnt = [registered(), filled('R-22', 20, { condition: 'burnt' }), did('emptied', { vacuum: { microns: 400 } })]
+    expect(viewAfter([...atTest, retested()], byChoice).requalification.dueMonth).toBe('2038-07')
+    expect(viewAfter([...burnt, retested()], byChoice).requalification).toMatchObject({ dueMonth: '2031-07', choice: null })
+    expect(viewAfter([...burnt, retested()], byChoice).contents.burnt).toBe(false)
+    expect(viewAfter([registered({ contents: { refrigerant: 'R-22', condition: 'burnt' } }), retested()], byChoice).requalification.dueMonth).toBe('2031-07')
   })
 
   it('with water leaves it wet and empty, with no stop weight until it is evacuated', () => {
