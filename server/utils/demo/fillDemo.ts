@@ -4,6 +4,7 @@ import { statement, type Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { DAY, workingMorning } from './calendar'
 import { castOf } from './cast'
+import { playChecks } from './checks'
 import { playIncidents } from './incidents'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { seededRandom } from './random'
@@ -34,6 +35,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   }
   playLives(stage)
   playIncidents(stage)
+  playChecks(stage)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(listTables(db, stage))
   await directory(db, true)

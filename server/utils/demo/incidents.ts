@@ -14,20 +14,22 @@ export function playIncidents(stage: Stage): void {
 }
 
 /** A cylinder that was registered some months ago, ready for what happens to it. */
-function made(stage: Stage, monthsAgo: number, size: SteelSize = 'middle', more: Parameters<typeof newSteel>[3] = {}): { steel: Steel, at: number } {
+export function made(stage: Stage, monthsAgo: number, size: SteelSize = 'middle', more: Parameters<typeof newSteel>[3] = {}): { steel: Steel, at: number } {
   const at = workingTime(stage.endAt, -30 * monthsAgo, stage.random)
   const steel = newSteel(stage.random, at, size, { testedMonthsAgo: 14, ...more })
   registerAt(stage, steel, at, stage.cast.racks[1]!.id)
   return { steel, at }
 }
 
-function daysAgo(stage: Stage, days: number): number {
+/** A time of work some days before the demo ends. */
+export function daysAgo(stage: Stage, days: number): number {
   return workingTime(stage.endAt, -days, stage.random)
 }
 
 interface FillOptions { by?: 'technician' | 'second' | 'third' | 'trainee', refrigerant: string | null, pounds: number, days: number, more?: object, options?: object, noLook?: boolean }
 
-function fill(stage: Stage, steel: Steel, one: FillOptions): number {
+/** A recovery into a cylinder of the demo; when it was done. */
+export function fill(stage: Stage, steel: Steel, one: FillOptions): number {
   const by = stage.cast.people[one.by ?? 'second']
   const at = daysAgo(stage, one.days)
   const grossBefore = weigh(steel, by.reads)
