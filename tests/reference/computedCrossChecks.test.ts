@@ -26,7 +26,7 @@ const WORKED: [string, number, number, number][] = [
 describe('computed cross-check: a cylinder of WC 47.7 lb', () => {
   const stamp = stampOf({ waterCapacity: lb(47.7) })
 
-  it.each(WORKED)('%s: the liquid at 77 F takes %d lb, less 0.2 %% for water at 60 F in place of 77 F', (refrigerant, printedPounds) => {
+  it.each(WORKED)('%s: the liquid at 77 F takes %d lb, less 0.2 percent for water at 60 F in place of 77 F', (refrigerant, printedPounds) => {
     const { terms } = fillLimit({ stamp, refrigerant, condition: 'clean', burnt: false, policy: DEFAULT_FILL_POLICY, catalogue: CATALOGUE })
     const term = terms.find(one => one.rule === 'liquid-77F')
     if (refrigerant === 'R-125') {
@@ -88,7 +88,7 @@ describe('computed cross-check: liquid-full at 131 F', () => {
     ['R-134a', 107.9], ['R-32', 80.9], ['R-125', 94.6], ['R-143a', 77.0], ['R-404A', 86.1], ['R-407C', 98.5], ['R-407A', 98.1],
     ['R-410A', 86.6], ['R-507A', 85.7], ['R-448A', 94.0], ['R-449A', 94.0], ['R-454B', 83.1], ['R-454C', 90.5], ['R-513A', 100.6],
     ['R-1234yf', 96.7], ['R-1234ze(E)', 105.5],
-  ])('%s: %d %%, of which the ceiling takes 0.95', (refrigerant, percent) => {
+  ])('%s: %d percent, of which the ceiling takes 0.95', (refrigerant, percent) => {
     const stamp = stampOf({ waterCapacity: lb(100), servicePressurePsig: 500 })
     const { terms } = fillLimit({ stamp, refrigerant, condition: 'clean', burnt: false, policy: DEFAULT_FILL_POLICY, catalogue: CATALOGUE })
     const grams = terms.find(one => one.rule === 'hot-ceiling')?.limitGrams ?? Number.NaN

@@ -64,7 +64,7 @@ function codes(mark: string, refrigerant: string): string[] {
 }
 
 describe('49 CFR 173.304a(a)(2)', () => {
-  it.each(PRINTED)('prints for %s %s %% in %s', (designation, percent, marks) => {
+  it.each(PRINTED)('prints for %s %s percent in %s', (designation, percent, marks) => {
     const row = fillingDensityRows(designation).find(one => one.percent === percent)
     expect(row?.specs).toEqual(marks.split(', '))
   })
@@ -78,7 +78,7 @@ describe('49 CFR 173.304a(a)(2)', () => {
     }
   })
 
-  it.each(PRINTED)('is met for %s (%s %%) by each of its marks and not by 1 psig less', (designation, percent, marks) => {
+  it.each(PRINTED)('is met for %s (%s percent) by each of its marks and not by 1 psig less', (designation, percent, marks) => {
     const row = fillingDensityRows(designation).find(one => one.percent === percent)!
     for (const mark of marks.split(', ')) {
       const { spec, servicePressurePsig } = splitSpec(mark)!
@@ -105,7 +105,7 @@ describe('49 CFR 173.304a(a)(2)', () => {
 
   it.each([
     ['3AA1800', 68], ['3AA1999', 68], ['3AA2000', 70.3], ['3AA2264', 70.3], ['3AA2265', 73.2], ['3AA2399', 73.2], ['3AA2400', 74.5],
-  ])('lets a %s take R-744 up to %d %% and no other rule speak', (mark, percent) => {
+  ])('lets a %s take R-744 up to %d percent and no other rule speak', (mark, percent) => {
     const limit = limitFor(stampMarked(mark), 'R-744', CATALOGUE)
     expect(limit.governingRule).toBe('filling-density')
     expect(limit.fillLimitGrams).toBe(Math.floor(percent * GRAMS_PER_POUND + 1e-6))
@@ -144,7 +144,7 @@ describe('computed cross-check: liquid density at 131 F over water at 60 F', () 
   // A printed filling density keeps the cylinder just short of liquid-full at 131 F.
   it.each([
     ['R-12', 119], ['R-22', 105], ['R-115', 110], ['R-142b', 100], ['R-152a', 79], ['R-717', 54],
-  ])('lies above the %s row of %d %%, by 4 %% at most', (designation, percent) => {
+  ])('lies above the %s row of %d percent, by 4 percent at most', (designation, percent) => {
     const liquidFullPercent = liquidDensityAt(CATALOGUE.refrigerants.get(designation)!, 55) / 0.99904 / 10
     expect(liquidFullPercent).toBeGreaterThan(percent)
     expect(liquidFullPercent).toBeLessThan(percent * 1.04)

@@ -28,12 +28,12 @@ describe('the filling ratios of 49 CFR 173.313', () => {
     ['R-12', 1.15], ['R-22', 1.03], ['R-32', 0.78], ['R-114', 1.3], ['R-124', 1.2], ['R-125', 0.87], ['R-134a', 1.04],
     ['R-142b', 0.99], ['R-152a', 0.79], ['R-227ea', 1.2], ['R-290', 0.42], ['R-407A', 0.95], ['R-407C', 0.95], ['R-600', 0.51],
     ['R-600a', 0.49], ['R-717', 0.53], ['R-1270', 0.43], ['R-115', 1.06],
-  ])('print for %s %d kg/L, which our computed ratio meets within 1.6 %%', (refrigerant, printed) => {
+  ])('print for %s %d kg/L, which our computed ratio meets within 1.6 percent', (refrigerant, printed) => {
     expect(Math.abs(ratio(refrigerant) / printed - 1)).toBeLessThanOrEqual(0.016)
   })
 
   it.each([['R-143a', 0.76], ['R-404A', 0.84], ['R-500', 1.01], ['R-502', 1.05]])(
-    'print for %s %d kg/L, up to 4.5 %% more than our computed ratio', (refrigerant, printed) => {
+    'print for %s %d kg/L, up to 4.5 percent more than our computed ratio', (refrigerant, printed) => {
       expect(ratio(refrigerant)).toBeLessThan(printed)
       expect(ratio(refrigerant)).toBeGreaterThan(printed * 0.955)
     })
@@ -54,7 +54,7 @@ describe('the filling ratios of P200, from memory', () => {
     ['R-717', 0.54], ['R-12', 1.15], ['R-22', 1.03], ['R-32', 0.78], ['R-114', 1.3], ['R-115', 1.05], ['R-124', 1.2],
     ['R-134a', 1.05], ['R-142b', 0.99], ['R-143a', 0.73], ['R-152a', 0.79], ['R-227ea', 1.21], ['R-290', 0.43], ['R-404A', 0.82],
     ['R-407A', 0.94], ['R-407C', 0.95], ['R-500', 1.01], ['R-502', 1.01], ['R-600a', 0.49], ['R-1270', 0.43],
-  ])('give %s %d kg/L, which our computed ratio meets within 1.9 %%', (refrigerant, remembered) => {
+  ])('give %s %d kg/L, which our computed ratio meets within 1.9 percent', (refrigerant, remembered) => {
     expect(Math.abs(ratio(refrigerant) / remembered - 1)).toBeLessThanOrEqual(0.019)
   })
 })
@@ -109,7 +109,7 @@ describe('the filling ratios of TRG 102', () => {
 
 // TRG 300, annex 1 (repealed), for metal packs: kg/L.
 describe('the filling ratios of TRG 300', () => {
-  it.each([['R-12', 1.12], ['R-114', 1.29], ['R-227ea', 1.2]])('give %s %d kg/L, which our limit stays under and our ratio meets within 3 %%', (refrigerant, printed) => {
+  it.each([['R-12', 1.12], ['R-114', 1.29], ['R-227ea', 1.2]])('give %s %d kg/L, which our limit stays under and our ratio meets within 3 percent', (refrigerant, printed) => {
     expect(limitOf(refrigerant).exactLimitGrams).toBeLessThanOrEqual(printed * 1000)
     expect(Math.abs(ratio(refrigerant) / printed - 1)).toBeLessThanOrEqual(0.03)
   })

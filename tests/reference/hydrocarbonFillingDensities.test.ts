@@ -56,7 +56,7 @@ function limitGramsOfPropane(specificGravity: number): number | null | undefined
 }
 
 describe('49 CFR 173.304a(d)(1)', () => {
-  it.each(PRINTED_BANDS)('prints for a specific gravity of %d to %d %d %%', (from, to, percent) => {
+  it.each(PRINTED_BANDS)('prints for a specific gravity of %d to %d %d percent', (from, to, percent) => {
     expect(hydrocarbonPercent(from)).toBe(percent)
     expect(hydrocarbonPercent(to)).toBe(percent)
   })
@@ -84,7 +84,7 @@ describe('49 CFR 173.304a(d)(1)', () => {
 
 describe('computed cross-check: the specific gravity at 60 F', () => {
   it.each([['R-290', 0.507, 42], ['R-600a', 0.563, 49], ['R-1270', 0.523, 44], ['R-600', 0.584, 51]])(
-    'puts %s at a specific gravity of %d at 60 F, so at %d %%', (designation, gravity, percent) => {
+    'puts %s at a specific gravity of %d at 60 F, so at %d percent', (designation, gravity, percent) => {
       const computed = liquidDensityAt(CATALOGUE.refrigerants.get(designation)!, (60 - 32) / 1.8) / WATER_DENSITY_60F
       expect(Math.abs(computed - gravity)).toBeLessThanOrEqual(0.001)
       expect(hydrocarbonPercent(computed)).toBe(percent)
