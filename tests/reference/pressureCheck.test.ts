@@ -48,9 +48,10 @@ describe('a printed pressure at its temperature', () => {
 describe('a degree of the thermometer near 75 F', () => {
   it.each([['R-22', 2.22, 132], ['R-134a', 1.56, 79], ['R-410A', 3.55, 217]])('of %s is worth %d psi', (designation, psiPerF, psig) => {
     const { slopeKPaPerC, toleranceKPa } = check(designation, 75, psig)
-    expect(Math.abs(slopeKPaPerC / 1.8 / KPA_PER_PSI - psiPerF)).toBeLessThanOrEqual(0.05)
+    // Two figures of a whole psi each, a tenth of that.
+    expect(Math.abs(slopeKPaPerC / 1.8 / KPA_PER_PSI - psiPerF)).toBeLessThanOrEqual(0.1)
     // The gauge to 1 psi and the thermometer to 2 F.
-    expect(Math.abs(toleranceKPa / KPA_PER_PSI - (1 + 2 * psiPerF))).toBeLessThanOrEqual(0.1)
+    expect(Math.abs(toleranceKPa / KPA_PER_PSI - (1 + 2 * psiPerF))).toBeLessThanOrEqual(0.2)
   })
 })
 
