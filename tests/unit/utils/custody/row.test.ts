@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { did, filled, folded, kg, registered, STAMP, VIEW_CONTEXT, type Told } from '~~/tests/helpers/custody'
+import { did, filled, folded, kg, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, type Told } from '~~/tests/helpers/custody'
 import { cacheRow, rowToday } from '~~/utils/custody/row'
+import { view } from '~~/utils/custody/view'
+import type { ChoiceParagraph } from '~~/utils/requalification/ownerChoice'
 
 const row = (story: Told[], nowMs: number) => {
   const { state } = folded(...story)
@@ -36,6 +38,18 @@ describe('a line of the fleet', () => {
     const cached = (stamp: object) => cacheRow(folded(registered({ stamp: { ...STAMP, ...stamp } })).state, VIEW_CONTEXT)
     expect(cached({ spec: 'DOT-39' })).toMatchObject({ retestState: 'not-required', dueMonth: null })
     expect(cached({ madeMonth: null })).toMatchObject({ retestState: 'unknown', dueMonth: null, findingCodes: ' retest-unknown ' })
+  })
+
+  it('has the due month of the view, by whatever the owner chose', () => {
+    const { state } = folded(registered(), did('retested', { month: '2026-07', method: 'proof', suffix: 'S', result: 'passed', requalifierId: REQUALIFIER }))
+    const context = (paragraphs: ChoiceParagraph[]) => ({
+      ...VIEW_CONTEXT, retest: { ...VIEW_CONTEXT.retest, ownerChoices: paragraphs.map(paragraph => ({ paragraph, reason: 'coated', from: null })) },
+    })
+    expect(cacheRow(state, context([])).dueMonth).toBe('2029-03')
+    expect(cacheRow(state, context(['180.209(e)'])).dueMonth).toBe('2036-07')
+    for (const paragraphs of [[], ['180.209(e)'], ['180.209(g)', '180.209(b)']] as ChoiceParagraph[][]) {
+      expect(view(state, context(paragraphs)).requalification.dueMonth).toBe(cacheRow(state, context(paragraphs)).dueMonth)
+    }
   })
 
   it('keeps a net of nothing apart from a net that nobody knows', () => {

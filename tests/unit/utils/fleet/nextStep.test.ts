@@ -10,6 +10,15 @@ describe('what to do with a cylinder next', () => {
   it('is never to test a cylinder with something in it', () => {
     expect(nextStep(cylinderRow({ findingCodes: ['retest-overdue'] }))).toEqual({ word: 'Empty or ship it', screen: 'shipment' })
     expect(nextStep(cylinderRow({ findingCodes: ['retest-overdue'], nothingInIt: true, refrigerant: null }))).toEqual({ word: 'Send to test', screen: 'test-lot' })
+    for (const code of ['early-test', 'retest-unknown'] as const) {
+      expect(nextStep(cylinderRow({ findingCodes: [code] }))?.word).toBe('Empty or ship it')
+      expect(nextStep(cylinderRow({ findingCodes: [code], nothingInIt: true, refrigerant: null }))?.word).toBe('Send to test')
+    }
+  })
+
+  it('is to plan the test of an empty one that falls due soon, and to go on using a filled one', () => {
+    expect(nextStep(cylinderRow({ findingCodes: ['retest-soon'], nothingInIt: true, refrigerant: null }))).toEqual({ word: 'Plan its test', screen: 'test-lot' })
+    expect(nextStep(cylinderRow({ findingCodes: ['retest-soon'] }))?.screen).not.toBe('test-lot')
   })
 
   it('is to weigh what was not weighed and to identify what is not known', () => {
