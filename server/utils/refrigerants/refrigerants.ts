@@ -82,7 +82,8 @@ function pointAt(refrigerant: Refrigerant, temperatureF: number) {
   return { temperatureF, temperatureC, saturation: hasLiquidAt(refrigerant, temperatureC) ? saturationAt(refrigerant, temperatureC) : null }
 }
 
-function refrigerantNamed(designation: string): Refrigerant {
+/** The refrigerant of the catalogue by its designation in any case. Errors: 404 where the catalogue has none of this name. */
+export function refrigerantNamed(designation: string): Refrigerant {
   const found = named(CATALOGUE.refrigerants, designation)
   if (!found) throw problem(404, 'No such refrigerant', 'The catalogue does not have it under this name.')
   return found
