@@ -66,7 +66,7 @@ describe('a lot for the test station', () => {
     expect(lot).toMatchObject({ state: 'sent', requalifier: { name: 'Ostwick Cylinder Tests', rin: 'A123' }, cylinders: 2, backAt: null })
     expect(await cylinderNow(firm.auditor.client, good.id)).toMatchObject({ lifecycle: 'at-test', place: { name: 'Ostwick Cylinder Tests' } })
 
-    const first = await returned(lot.id, backFromTest([good, { result: 'passed', newTare: lb(27.4) }]))
+    const first = await returned(lot.id, backFromTest([good, { result: 'passed', newTare: lb(27.4), rin: 'b765', suffix: '+' }]))
     expect(first.status).toBe(200)
     expect(first.body).toMatchObject({ state: 'sent', backAt: null })
     expect(first.body.lines.map(line => [line.open, line.result])).toEqual([[false, { result: 'passed', month: THIS_MONTH }], [true, null]])
@@ -74,6 +74,7 @@ describe('a lot for the test station', () => {
       lifecycle: 'in-service', place: { name: 'North shop' }, holds: ['wet'], requalification: { lastMonth: THIS_MONTH, state: 'in-date' },
       // 27.4 lb = 12428.4 g.
       stamp: { tareWeightGrams: 12_428 },
+      marks: [{ month: '2019-03' }, { month: THIS_MONTH, method: 'volumetric', rin: 'B765', suffix: '+' }],
     })
 
     const second = await returned(lot.id, backFromTest([bad, { result: 'condemned' }]))

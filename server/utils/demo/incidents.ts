@@ -121,17 +121,17 @@ function dates(stage: Stage): void {
 function tests(stage: Stage): void {
   const { cast, script } = stage
   const { manager, warehouse } = cast.people
-  const requalifierId = cast.firms.requalifier.id
+  const { id: requalifierId, rin } = cast.firms.requalifier
   const retest = (steel: Steel, days: number, result: 'passed' | 'rejected' | 'condemned', more: object = {}) =>
     script.add(manager, daysAgo(stage, days), steel.id, 'retested', { month: monthFrom(daysAgo(stage, days), 0), method: 'volumetric', result, requalifierId, ...more }, { lateMs: 10 * MINUTE })
-  retest(made(stage, 8).steel, 5, 'passed')
+  retest(made(stage, 8).steel, 5, 'passed', { rin })
   retest(made(stage, 8).steel, 34, 'rejected')
   const condemned = made(stage, 8).steel
   retest(condemned, 60, 'condemned')
   script.add(warehouse, daysAgo(stage, 31), condemned.id, 'moved', { toPlaceId: cast.racks[2]!.id })
   const full = made(stage, 8).steel
   fill(stage, full, { refrigerant: 'R-22', pounds: 13, days: 72 })
-  retest(full, 35, 'passed')
+  retest(full, 35, 'passed', { rin })
   const lighter = made(stage, 8).steel
   retest(lighter, 45, 'passed', { newTare: shown(lighter.tareGrams - pounds(0.4), 'lb') })
   lighter.tareGrams -= pounds(0.4)

@@ -182,7 +182,8 @@ function joinLot(stage: Stage, steel: Steel, from: number, shopId: string): numb
   if (lot.backAt > endAt) return null
   const month = new Date(lot.backAt - 4 * DAY).toISOString().slice(0, 7)
   steel.testedMonth = month
-  script.add(manager, lot.backAt, steel.id, 'retested', { month, method: 'volumetric', result: 'passed', requalifierId: cast.firms.requalifier.id }, { lateMs: 30 * MINUTE })
+  const { id: requalifierId, rin } = cast.firms.requalifier
+  script.add(manager, lot.backAt, steel.id, 'retested', { month, method: 'volumetric', result: 'passed', requalifierId, rin }, { lateMs: 30 * MINUTE })
   script.add(warehouse, lot.backAt + HOUR, steel.id, 'returned', { fromFirmId: cast.firms.requalifier.id, gross: weigh(steel, 'lb') }, { placeId: shopId })
   return evacuate(stage, steel, workingTime(lot.backAt + HOUR, random.between(0, 3), random) + 6 * HOUR)
 }
