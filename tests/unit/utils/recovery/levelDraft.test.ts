@@ -1,0 +1,77 @@
+import { describe, expect, it } from 'vitest'
+import { addressOf, chargeGramsOf, emptyLevel, levelDraft, levelQuery } from '../../../../utils/recovery/levelDraft'
+import { emptyReached, gaugeFor, readReached } from '../../../../utils/recovery/reachedDraft'
+
+describe('the address of a question', () => {
+  const address = { refrigerant: 'R-134a', charge: '212.5lb', machineMade: 'before-1993-11-15', circumstances: 'leaking', inHg: '3.5', barometerInHg: '29.1', heldMinutes: '6' }
+
+  it('opens the same question again', () => {
+    expect(addressOf(levelDraft(address))).toEqual(address)
+  })
+
+  it('asks the server only for the level', () => {
+    expect(levelQuery(levelDraft(address))).toEqual({ refrigerant: 'R-134a', charge: '212.5lb', machineMade: 'before-1993-11-15', circumstances: 'leaking' })
+  })
+
+  it('of nothing is empty', () => {
+    expect(addressOf(emptyLevel())).toEqual({})
+    expect(levelDraft({})).toEqual(emptyLevel())
+  })
+
+  it('takes a date of the machine as the side that it lies on', () => {
+    expect(levelDraft({ machineMade: '2004' }).machineMade).toBe('since-1993-11-15')
+    expect(levelDraft({ machineMade: '1993' }).machineMade).toBe('')
+  })
+
+  it('holds what it cannot be as not known', () => {
+    expect(levelDraft({ appliance: 'large', circumstances: 'whim', compressorRuns: 'perhaps', charge: '12', refrigerant: ['R-22', 'R-12'] })).toEqual(emptyLevel())
+  })
+
+  it('leaves out what does not count for this kind of appliance', () => {
+    const said = { ...levelDraft({ ...address, compressorRuns: 'true' }) }
+    expect(levelQuery({ ...said, appliance: 'mvac' })).toEqual({ refrigerant: 'R-134a', charge: '212.5lb', appliance: 'mvac' })
+    expect(levelQuery({ ...said, appliance: 'small' })).toEqual({ refrigerant: 'R-134a', charge: '212.5lb', machineMade: 'before-1993-11-15', appliance: 'small', compressorRuns: 'true' })
+  })
+
+  it('keeps a charge of nothing', () => {
+    expect(addressOf(levelDraft({ charge: '0lb' }))).toEqual({ charge: '0lb' })
+    expect(chargeGramsOf(levelDraft({ charge: '0lb' }))).toBe(0)
+    expect(chargeGramsOf(emptyLevel())).toBeNull()
+  })
+})
+
+describe('what was read', () => {
+  const typed = { ...emptyReached(), figure: '28.5', held: '5' }
+
+  it('is read on the gauge that goes with the level, until another is chosen', () => {
+    expect(gaugeFor(typed, { unit: 'inHg-vacuum', value: 10 })).toBe('inHg')
+    expect(gaugeFor(typed, { unit: 'mmHg-absolute', value: 25 })).toBe('mmHgAbsolute')
+    expect(gaugeFor(typed, { unit: 'percent-of-charge', value: 90 })).toBe('recovered')
+    expect(gaugeFor({ ...typed, gauge: 'microns' }, { unit: 'percent-of-charge', value: 90 })).toBe('microns')
+    expect(gaugeFor({ ...typed, gauge: 'recovered' }, { unit: 'inHg-vacuum', value: 10 })).toBe('inHg')
+  })
+
+  it('comes with its barometer and with how long it held', () => {
+    expect(readReached(typed, 'inHg', null)).toEqual({ reached: { inHg: 28.5 }, heldMinutes: 5, faults: {} })
+    expect(readReached({ ...typed, barometer: '29.1' }, 'inHg', null).reached).toEqual({ inHg: 28.5, barometerInHg: 29.1 })
+    expect(readReached({ ...typed, barometer: '29.1' }, 'microns', null).reached).toEqual({ microns: 28.5 })
+  })
+
+  it('is nothing where the field is empty, and 0 where it says 0', () => {
+    expect(readReached(emptyReached(), 'inHg', null)).toEqual({ reached: null, heldMinutes: null, faults: {} })
+    expect(readReached({ ...emptyReached(), figure: '0', held: '0' }, 'inHg', null)).toMatchObject({ reached: { inHg: 0 }, heldMinutes: 0 })
+  })
+
+  it('is not taken where it cannot be read, and says which field', () => {
+    expect(readReached({ ...typed, figure: '1,000' }, 'microns', null)).toMatchObject({ reached: null, faults: { figure: expect.any(String) as string } })
+    expect(readReached({ ...typed, figure: '33' }, 'inHg', null)).toMatchObject({ reached: null, faults: { figure: 'It goes from 0 to 32.' } })
+    expect(readReached({ ...typed, barometer: '14' }, 'inHg', null)).toMatchObject({ reached: null, faults: { barometer: 'It goes from 15 to 32.' } })
+    expect(readReached({ ...typed, held: 'long' }, 'inHg', null)).toMatchObject({ reached: { inHg: 28.5 }, heldMinutes: null, faults: { held: expect.any(String) as string } })
+  })
+
+  it('is a share only of a charge that is known', () => {
+    const weighed = { ...emptyReached(), recovered: { unit: 'kg' as const, value: 0.9 } }
+    expect(readReached(weighed, 'recovered', 1000).reached).toEqual({ recoveredGrams: 900, chargeGrams: 1000 })
+    expect(readReached(weighed, 'recovered', null).reached).toBeNull()
+  })
+})
