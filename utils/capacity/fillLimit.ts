@@ -2,11 +2,10 @@ import { exactGrams } from '../quantity/mass'
 import { idealMixture } from '../refrigerant/idealMixture'
 import type { Catalogue, LiquidTable } from '../refrigerant/types'
 import { markedPressurePsig } from './fillingDensities'
-import type { HotBounds } from './fillTerm'
 import { fillTerm, hotBounds, standingOf, termsWithoutFigure } from './fillTerm'
+import { volumeFactor, waterCapacityFactor } from './rules/factors'
 import type { RuleInput } from './rules/ruleInput'
 import { volumeLitres } from './rules/ruleInput'
-import type { RuleAnswer } from './rulesInForce'
 import { lacksGuard, ruleAnswers } from './rulesInForce'
 import { tareInForceGrams } from './stopWeight'
 import type { Condition, FillLimit, FillPolicy, FillRule, FillTerm, MissingInput, Stamp } from './types'
@@ -41,10 +40,12 @@ export function fillLimit(input: FillLimitInput): FillLimit {
   if ('because' in known) return withoutFigure(termsWithoutFigure(known.because), missing)
   if (!waterCapacity) return withoutFigure(termsWithoutFigure('the water capacity is not known'), missing)
 
+  const litres = volumeLitres(waterCapacity)
   const ruleInput: RuleInput = {
-    waterCapacity,
     waterCapacityGrams: exactGrams(waterCapacity),
-    volumeLitres: volumeLitres(waterCapacity),
+    volumeLitres: litres,
+    waterCapacity: waterCapacityFactor(waterCapacity),
+    volume: volumeFactor(litres),
     cylinder: input.stamp,
     fluid: known.fluid,
     supercritical: input.catalogue.supercritical.get(known.fluid.designation) ?? null,
@@ -52,8 +53,14 @@ export function fillLimit(input: FillLimitInput): FillLimit {
   }
   const answers = ruleAnswers(ruleInput, input.burnt || input.condition === 'burnt')
   const bounds = hotBounds(ruleInput, answers)
-  const terms = answers.map(answer => fillTerm(answer, bounds, waterCapacity))
-  const lowest = lowestInForce(answers, bounds)
+  const terms: FillTerm[] = []
+  let lowest: { rule: FillRule, exactGrams: number } | null = null
+  for (const answer of answers) {
+    const standing = standingOf(answer, bounds)
+    const { exactGrams: grams } = answer.figure
+    terms.push(fillTerm(answer, standing, bounds))
+    if (standing === 'in-force' && grams !== null && (lowest === null || grams < lowest.exactGrams)) lowest = { rule: answer.rule, exactGrams: grams }
+  }
   if (!lowest || missing.includes('tareWeight') || lacksGuard(answers, known.fluid)) return withoutFigure(terms, missing)
   return {
     governingRule: lowest.rule,
@@ -90,16 +97,6 @@ function cappedPolicy(policy: FillPolicy): FillPolicy {
     ceilingThousandths: Math.min(policy.ceilingThousandths, DEFAULT_FILL_POLICY.ceilingThousandths),
     options: policy.options,
   }
-}
-
-function lowestInForce(answers: readonly RuleAnswer[], bounds: HotBounds | null): { rule: FillRule, exactGrams: number } | null {
-  let lowest: { rule: FillRule, exactGrams: number } | null = null
-  for (const answer of answers) {
-    const { exactGrams: grams } = answer.figure
-    if (grams === null || standingOf(answer, bounds) !== 'in-force') continue
-    if (lowest === null || grams < lowest.exactGrams) lowest = { rule: answer.rule, exactGrams: grams }
-  }
-  return lowest
 }
 
 function withoutFigure(terms: FillTerm[], missing: MissingInput[]): FillLimit {

@@ -1,8 +1,6 @@
-import type { MassReading } from '../quantity/mass'
 import { liquidDensityAt } from '../refrigerant/saturation'
 import type { RuleInput } from './rules/ruleInput'
 import { HOT_REFERENCE_C, isLiquidWhenHot } from './rules/ruleInput'
-import { resultText, sumText } from './rules/sumText'
 import type { RuleAnswer } from './rulesInForce'
 import { FILL_RULES } from './rulesInForce'
 import type { FillTerm, TermStanding } from './types'
@@ -44,22 +42,18 @@ export function standingOf({ rule, counts, figure }: RuleAnswer, bounds: HotBoun
   return counts ? 'in-force' : 'compared'
 }
 
-/** A rule's answer as it is shown: with its sum, and without a figure where that would be unsafe. Rounding: down. */
-export function fillTerm(answer: RuleAnswer, bounds: HotBounds | null, waterCapacity: MassReading): FillTerm {
-  const { rule, figure } = answer
-  const standing = standingOf(answer, bounds)
-  if (figure.exactGrams === null) {
-    return { rule, limitGrams: null, because: figure.because, standing, factors: [], working: '', source: figure.source }
-  }
+/** A rule's answer as it is listed: with what it is the product of, and without a figure where that would be unsafe. Rounding: down. */
+export function fillTerm({ rule, figure }: RuleAnswer, standing: TermStanding, bounds: HotBounds | null): FillTerm {
+  if (figure.exactGrams === null) return { rule, limitGrams: null, because: figure.because, standing, factors: [], source: figure.source }
   const { exactGrams, factors, source } = figure
-  const sum = sumText(factors)
-  if (bounds && standing === 'unsafe') return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, factors, working: sum, source }
-  const because = standing === 'above-margin' ? { because: 'above our margin below liquid-full at 131 °F' } : {}
-  const working = `${sum} = ${resultText(exactGrams, waterCapacity)}`
-  return { rule, limitGrams: Math.floor(exactGrams), ...because, standing, factors, working, source }
+  if (bounds && standing === 'unsafe') return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, factors, source }
+  const limitGrams = Math.floor(exactGrams)
+  return standing === 'above-margin'
+    ? { rule, limitGrams, because: 'above our margin below liquid-full at 131 °F', standing, factors, source }
+    : { rule, limitGrams, standing, factors, source }
 }
 
 /** Every rule without a figure, for one reason that holds for all. */
 export function termsWithoutFigure(because: string): FillTerm[] {
-  return FILL_RULES.map(rule => ({ rule, limitGrams: null, because, standing: 'compared', factors: [], working: '', source: '' }))
+  return FILL_RULES.map(rule => ({ rule, limitGrams: null, because, standing: 'compared', factors: [], source: '' }))
 }

@@ -1,3 +1,4 @@
+import type { SpecMark } from '../requalification/specs'
 import { impliedServicePressurePsig, splitSpec } from '../requalification/specs'
 import { FILLING_DENSITY_ROWS, HYDROCARBON_BANDS, HYDROCARBONS, LIQUEFIED_GAS_SPECS } from './data/fillingDensityRows'
 import type { FillingDensityRow } from './types'
@@ -8,14 +9,19 @@ export type RowFit = 'met' | 'mark-below' | 'spec-not-listed'
 /** What of a stamp decides about filling densities. */
 export type CylinderMark = { spec: string, servicePressurePsig: number | null }
 
+const NO_ROWS: readonly FillingDensityRow[] = []
+const ROWS_BY_GAS: ReadonlyMap<string, readonly FillingDensityRow[]> = new Map(
+  FILLING_DENSITY_ROWS.map(({ designation }) => [designation, FILLING_DENSITY_ROWS.filter(row => row.designation === designation)]),
+)
+
 /** The rows that name a gas; none where only the general rule holds. Source: 49 CFR 173.304a(a)(2). */
-export function fillingDensityRows(designation: string): FillingDensityRow[] {
-  return FILLING_DENSITY_ROWS.filter(row => row.designation === designation)
+export function fillingDensityRows(designation: string): readonly FillingDensityRow[] {
+  return ROWS_BY_GAS.get(designation) ?? NO_ROWS
 }
 
 /** How a cylinder's marks stand to a row. */
 export function rowFit(row: FillingDensityRow, cylinder: CylinderMark): RowFit {
-  const listed = row.specs.map(splitSpec).find(mark => mark?.spec === cylinder.spec)
+  const listed = listedMark(row, cylinder.spec)
   if (!listed) return 'spec-not-listed'
   // A mark without a figure of its own ("39") asks for none.
   if (listed.servicePressurePsig === null) return 'met'
@@ -23,13 +29,21 @@ export function rowFit(row: FillingDensityRow, cylinder: CylinderMark): RowFit {
   return marked !== null && marked >= listed.servicePressurePsig ? 'met' : 'mark-below'
 }
 
+function listedMark(row: FillingDensityRow, spec: string): SpecMark | null {
+  for (const text of row.specs) {
+    const mark = `DOT-${text}`.startsWith(spec) ? splitSpec(text) : null
+    if (mark?.spec === spec) return mark
+  }
+  return null
+}
+
 /** The row of a gas with the highest filling density among those that a cylinder's marks meet, or null. */
 export function bestRow(designation: string, cylinder: CylinderMark): FillingDensityRow | null {
-  const met = fillingDensityRows(designation).filter(row => rowFit(row, cylinder) === 'met')
-  return met.reduce<FillingDensityRow | null>(
-    (best, row) => best === null || (row.percent ?? 0) > (best.percent ?? 0) ? row : best,
-    null,
-  )
+  let best: FillingDensityRow | null = null
+  for (const row of fillingDensityRows(designation)) {
+    if (rowFit(row, cylinder) === 'met' && (best === null || (row.percent ?? 0) > (best.percent ?? 0))) best = row
+  }
+  return best
 }
 
 /** The service pressure of a cylinder: as marked, but never above the one that its specification fixes; null where neither is known. */

@@ -1,6 +1,6 @@
 import { psigFromKPa } from '../quantity/pressure'
 import { isFlammable, isToxic } from '../refrigerant/safety'
-import { hasLiquidAt, saturationAt } from '../refrigerant/saturation'
+import { bubblePressureAt, hasLiquidAt } from '../refrigerant/saturation'
 import type { Catalogue, Refrigerant } from '../refrigerant/types'
 import type { RowFit } from './fillingDensities'
 import { fillingDensityRows, isLiquefiedGasSpec, markedPressurePsig, rowFit } from './fillingDensities'
@@ -45,7 +45,7 @@ function notRefillable(stamp: Stamp): FitFinding | null {
 }
 
 function pressureClass(
-  stamp: Stamp, designation: string, refrigerant: Refrigerant | null, rowFits: RowFit[], catalogue: Catalogue,
+  stamp: Stamp, designation: string, refrigerant: Refrigerant | null, rowFits: readonly RowFit[], catalogue: Catalogue,
 ): FitFinding | null {
   const marked = markedPressurePsig(stamp)
   if (rowFits.length > 0) {
@@ -71,8 +71,7 @@ function hotPressureStop(marked: number, refrigerant: Refrigerant, catalogue: Ca
     const gasSource = `49 CFR 173.301a(c), (d); pressure: ${refrigerant.source}`
     return stopForPressure(`The service pressure of ${marked} psig is too low for ${designation}, a gas at 131 °F.`, gasSource)
   }
-  const { bubblePressureKPa, relativeErrorPressure } = saturationAt(refrigerant, HOT_REFERENCE_C)
-  const hotPsig = psigFromKPa(bubblePressureKPa * (1 + relativeErrorPressure))
+  const hotPsig = psigFromKPa(bubblePressureAt(refrigerant, HOT_REFERENCE_C) * (1 + refrigerant.relativeErrorPressure))
   if (hotPsig <= allowedPsig) return null
   const text = `${designation} may reach ${Math.ceil(hotPsig)} psig at 131 °F; a service pressure of ${marked} psig `
     + `allows ${Math.floor(allowedPsig)} psig.`

@@ -9,7 +9,7 @@ import type { RuleFigure, RuleInput } from './rules/ruleInput'
 import { isLiquidWhenHot } from './rules/ruleInput'
 import { unRatio } from './rules/unRatio'
 import { waterWeight } from './rules/waterWeight'
-import type { FillRule } from './types'
+import type { FillPolicy, FillRule } from './types'
 
 /** A rule's figure for one cylinder, and whether it counts or is only shown beside the others. */
 export type RuleAnswer = { rule: FillRule, counts: boolean, figure: RuleFigure }
@@ -35,8 +35,8 @@ const EXEMPTING_SOURCE = '49 CFR 173.301a(d)(1), 173.304(b)'
 /** What every rule gives, also those that do not speak for a fluid; the oily one counts only where it has been burnt. */
 export function ruleAnswers(input: RuleInput, burnt: boolean): RuleAnswer[] {
   if (isDecidedByItsRow(input.fluid)) return FILL_RULES.map(rule => rule === 'filling-density' ? decidingRow(input) : exempted(rule, input.fluid))
-  const counts = countsFor(input, burnt)
-  return FILL_RULES.map(rule => ({ rule, counts: counts[rule], figure: RULES[rule](input) }))
+  const isLiquid = isLiquidWhenHot(input.fluid)
+  return FILL_RULES.map(rule => ({ rule, counts: countsFor(rule, isLiquid, input.policy, burnt), figure: RULES[rule](input) }))
 }
 
 /**
@@ -45,23 +45,24 @@ export function ruleAnswers(input: RuleInput, burnt: boolean): RuleAnswer[] {
  * That is its row for R-744, the hot pressure for a gas, and the filling ratio where the firm has chosen it.
  */
 export function lacksGuard(answers: readonly RuleAnswer[], fluid: LiquidTable): boolean {
-  const guards: FillRule[] = isDecidedByItsRow(fluid)
-    ? ['filling-density']
-    : isLiquidWhenHot(fluid) ? ['hot-ceiling', 'un-ratio'] : ['hot-pressure']
-  return answers.some(({ rule, counts, figure }) => counts && guards.includes(rule) && figure.exactGrams === null)
+  return answers.some(({ rule, counts, figure }) => counts && figure.exactGrams === null && isGuard(rule, fluid))
 }
 
-function countsFor({ fluid, policy }: RuleInput, burnt: boolean): Record<FillRule, boolean> {
-  const isLiquid = isLiquidWhenHot(fluid)
-  return {
-    'water-weight': true,
-    'liquid-77F': true,
-    'filling-density': true,
-    'hot-ceiling': isLiquid,
-    'hot-pressure': !isLiquid,
-    'liquid-130F': policy.options.liquid130F,
-    'un-ratio': policy.options.unRatio,
-    'oily': burnt,
+function isGuard(rule: FillRule, fluid: LiquidTable): boolean {
+  if (isDecidedByItsRow(fluid)) return rule === 'filling-density'
+  return isLiquidWhenHot(fluid) ? rule === 'hot-ceiling' || rule === 'un-ratio' : rule === 'hot-pressure'
+}
+
+function countsFor(rule: FillRule, isLiquid: boolean, { options }: FillPolicy, burnt: boolean): boolean {
+  switch (rule) {
+    case 'hot-ceiling': return isLiquid
+    case 'hot-pressure': return !isLiquid
+    case 'liquid-130F': return options.liquid130F
+    case 'un-ratio': return options.unRatio
+    case 'oily': return burnt
+    case 'water-weight':
+    case 'liquid-77F':
+    case 'filling-density': return true
   }
 }
 

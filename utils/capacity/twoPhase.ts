@@ -1,4 +1,4 @@
-import { saturationAt } from '../refrigerant/saturation'
+import { bubblePressureAt, liquidDensityAt, vapourDensityAt } from '../refrigerant/saturation'
 import type { Refrigerant } from '../refrigerant/types'
 
 /** How a net weight stands in a cylinder at a temperature. */
@@ -24,7 +24,8 @@ export type TwoPhase = {
 export function twoPhase(input: { netGrams: number, volumeLitres: number, refrigerant: Refrigerant, tC: number }): TwoPhase {
   const { netGrams, volumeLitres, refrigerant, tC } = input
   if (!(netGrams >= 0 && volumeLitres > 0)) throw new RangeError(`No ${netGrams} g fill ${volumeLitres} L`)
-  const { liquidDensity, vapourDensity, bubblePressureKPa } = saturationAt(refrigerant, tC)
+  const liquidDensity = liquidDensityAt(refrigerant, tC)
+  const vapourDensity = vapourDensityAt(refrigerant, tC)
   // Grams per litre are kilograms per cubic metre.
   const density = netGrams / volumeLitres
   if (density >= liquidDensity) return { phase: 'liquid-full', liquidShare: 1, liquidGrams: netGrams, vapourGrams: 0, pressureKPa: null }
@@ -35,6 +36,6 @@ export function twoPhase(input: { netGrams: number, volumeLitres: number, refrig
     liquidShare,
     liquidGrams: liquidShare * volumeLitres * liquidDensity,
     vapourGrams: (1 - liquidShare) * volumeLitres * vapourDensity,
-    pressureKPa: bubblePressureKPa,
+    pressureKPa: bubblePressureAt(refrigerant, tC),
   }
 }

@@ -63,7 +63,7 @@ export type Factor = {
   source?: string
 }
 
-/** One rule's figure with the sum behind it. Units: net grams. Rounding: down. */
+/** One rule's figure and what it is the product of. Units: net grams. Rounding: down. */
 export type FillTerm = {
   rule: FillRule
   limitGrams: number | null
@@ -71,9 +71,11 @@ export type FillTerm = {
   standing: TermStanding
   /** What is multiplied, in order; empty where there is no sum. */
   factors: Factor[]
-  working: string
   source: string
 }
+
+/** A rule's figure with its sum as the trade writes it. */
+export type FillTermInWords = FillTerm & { working: string }
 
 /** What keeps a figure from being given. */
 export type MissingInput = 'tareWeight' | 'waterCapacity' | 'servicePressure' | 'refrigerant' | 'weight' | 'testDate'

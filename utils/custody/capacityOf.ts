@@ -3,9 +3,10 @@ import { termsWithoutFigure } from '../capacity/fillTerm'
 import { fitFindings } from '../capacity/fit'
 import { liquidFullTemperature } from '../capacity/liquidFull'
 import { HOT_REFERENCE_C, isLiquidWhenHot, volumeLitres } from '../capacity/rules/ruleInput'
+import { workingText } from '../capacity/rules/sumText'
 import { excessGrams, roomGrams, stopWeight } from '../capacity/stopWeight'
 import { twoPhase } from '../capacity/twoPhase'
-import { DEFAULT_FILL_POLICY, type FillLimit, type FillPolicy } from '../capacity/types'
+import { DEFAULT_FILL_POLICY, type FillLimit, type FillPolicy, type FillTerm, type Stamp } from '../capacity/types'
 import { exactGrams } from '../quantity/mass'
 import type { Catalogue } from '../refrigerant/types'
 import type { Requalification } from '../requalification/requalification'
@@ -27,6 +28,9 @@ export interface CapacityContext {
   askedRefrigerant?: string | null
 }
 
+/** A cylinder's capacity in figures; {@link capacityInWords} writes its sums out. */
+export type Capacity = Omit<CapacityView, 'terms'> & { terms: FillTerm[] }
+
 /**
  * How much a cylinder may hold and at which weight to stop, or why there is no such number.
  *
@@ -34,7 +38,7 @@ export interface CapacityContext {
  * While anything speaks against a fill there is no stop weight and no room; a weight that is not known leaves the stop
  * weight but no room.
  */
-export function capacityOf(state: CylinderState, retest: Requalification, context: CapacityContext): CapacityView {
+export function capacityOf(state: CylinderState, retest: Requalification, context: CapacityContext): Capacity {
   const { stamp, tare, contents } = state
   const { policyNow: policy, catalogue } = context
   const forRefrigerant = contents.nothingInIt ? state.dedicatedTo ?? context.askedRefrigerant ?? null : contents.refrigerant
@@ -52,6 +56,7 @@ export function capacityOf(state: CylinderState, retest: Requalification, contex
   ]
   const mayHaveStop = refusals.length === 0 && missing.every(input => input === 'weight')
   const exact = mayHaveStop && limit.exactLimitGrams !== null && tare !== null ? limit.exactLimitGrams : null
+  const heat = withHeat(state, forRefrigerant, limit.exactLimitGrams, catalogue)
   const stop = exact === null || tare === null ? null : stopWeight(exact, tare.exactGrams)
   return {
     forRefrigerant,
@@ -60,12 +65,20 @@ export function capacityOf(state: CylinderState, retest: Requalification, contex
     stopWeightGrams: stop?.stopWeightGrams ?? null,
     exactStopWeightGrams: stop?.exactStopWeightGrams ?? null,
     roomGrams: exact === null ? null : roomOf(state, exact),
-    ...withHeat(state, forRefrigerant, limit.exactLimitGrams, catalogue),
+    liquidFull: heat.liquidFull,
+    hotLiquidShare: heat.hotLiquidShare,
     share: Math.min(policy.shareThousandths, DEFAULT_FILL_POLICY.shareThousandths) / 1000,
     terms: limit.terms,
     missing,
     refusals,
   }
+}
+
+/** A capacity with the sum of each rule as the trade writes it. */
+export function capacityInWords(capacity: Capacity, stamp: Stamp | null): CapacityView {
+  const waterCapacity = stamp?.waterCapacity ?? null
+  const inWords = (term: FillTerm) => ({ working: waterCapacity === null ? '' : workingText(term, waterCapacity), ...term })
+  return { ...capacity, terms: capacity.terms.map(inWords) }
 }
 
 // Whole grams of tare and reading may add up to one above the limit: at its stop weight a cylinder is full, not overfilled.

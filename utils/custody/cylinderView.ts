@@ -1,6 +1,6 @@
 import type { Month } from '../quantity/month'
 import type { LiquidFull } from '../capacity/liquidFull'
-import type { FillTerm, FillRule, Stamp } from '../capacity/types'
+import type { FillRule, FillTermInWords, Stamp } from '../capacity/types'
 import type { OwnerChoice } from '../requalification/ownerChoice'
 import type { EventKind } from './kinds'
 import type { Finding, FindingCode, Severity } from './finding'
@@ -36,7 +36,7 @@ export interface CapacityView {
   hotLiquidShare: number | null
   /** The firm's share, 0.8 by default. */
   share: number
-  terms: FillTerm[]
+  terms: FillTermInWords[]
   missing: Missing[]
   /** Why nothing may be put in now; empty when it may. */
   refusals: Finding[]

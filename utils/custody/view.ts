@@ -4,7 +4,7 @@ import { readingGrams } from '../quantity/mass'
 import type { Scale } from '../quantity/scale'
 import type { Catalogue } from '../refrigerant/types'
 import type { RetestRules } from '../requalification/ownerChoice'
-import { capacityOf } from './capacityOf'
+import { capacityInWords, capacityOf } from './capacityOf'
 import type { CylinderView, Named, RequalificationView } from './cylinderView'
 import { dateFindings } from './dateFindings'
 import { urgencyOrder } from './findings/order'
@@ -45,7 +45,7 @@ export function view(state: CylinderState, context: ViewContext): CylinderView {
   const retest = retestOf(state, {
     nowMs: context.nowMs, timeZone: context.timeZone, rules: context.retest, soonDays: context.retest.soonDays,
   })
-  const capacity = capacityOf(state, retest, context)
+  const capacity = capacityInWords(capacityOf(state, retest, context), state.stamp)
   const lifecycle = lifecycleOf(state)
   const { nothingInIt } = state.contents
   const findings = [

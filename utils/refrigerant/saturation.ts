@@ -51,6 +51,18 @@ export function liquidDensityAt(fluid: LiquidTable, tC: number): number {
   return valueOnCurve(fluid.curves.liquidDensity, tC)
 }
 
+/** Density of the saturated vapour in kg/m3. Errors: RangeError outside the table. */
+export function vapourDensityAt(refrigerant: Refrigerant, tC: number): number {
+  assertInTable(refrigerant, tC)
+  return valueOnCurve(refrigerant.curves.vapourDensity, tC)
+}
+
+/** Pressure at which the liquid begins to boil in kPa absolute. Errors: RangeError outside the table. */
+export function bubblePressureAt(refrigerant: Refrigerant, tC: number): number {
+  assertInTable(refrigerant, tC)
+  return Math.exp(valueOnCurve(refrigerant.curves.lnBubblePressure, risingInverse(tC)))
+}
+
 /** What pressures are interpolated over: the inverse of the absolute temperature, turned so that it rises with it. Units: 1/K. */
 export function risingInverse(tC: number): number {
   return -1 / kelvinFromCelsius(tC)

@@ -1,7 +1,7 @@
 import { tareInForceGrams } from '~~/utils/capacity/stopWeight'
 import type { FillPolicy, Stamp } from '~~/utils/capacity/types'
 import type { FillLimitAnswer, FillLimitQuery } from '~~/utils/contract/refrigerants'
-import { capacityOf } from '~~/utils/custody/capacityOf'
+import { capacityInWords, capacityOf } from '~~/utils/custody/capacityOf'
 import { initialState, type CylinderState } from '~~/utils/custody/state'
 import { exactGrams, readingGrams, type MassReading } from '~~/utils/quantity/mass'
 import { scaleAccuracyGrams } from '~~/utils/quantity/scale'
@@ -22,8 +22,9 @@ export function fillLimitAnswer(query: FillLimitQuery, firmPolicy: FillPolicy): 
   const { refrigerant, catalogue } = fluidOf(query)
   const netGrams = netOf(query.gross, query.tareWeight)
   const policyNow = { ...firmPolicy, shareThousandths: stricterShare(firmPolicy.shareThousandths, query.share) }
-  const capacity = capacityOf(stateOf(query, refrigerant, netGrams), NO_RETEST, { policyNow, catalogue, askedRefrigerant: refrigerant })
-  return { ...capacity, netGrams }
+  const state = stateOf(query, refrigerant, netGrams)
+  const capacity = capacityOf(state, NO_RETEST, { policyNow, catalogue, askedRefrigerant: refrigerant })
+  return { ...capacityInWords(capacity, state.stamp), netGrams }
 }
 
 /** The fluid asked about, and the catalogue that knows it: a composition is added to it under its own text. */

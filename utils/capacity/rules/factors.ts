@@ -1,9 +1,17 @@
 import type { MassReading } from '../../quantity/mass'
 import { exactGrams, formatReading } from '../../quantity/mass'
-import { liquidDensityAt } from '../../refrigerant/saturation'
 import type { LiquidTable } from '../../refrigerant/types'
 import type { Factor } from '../types'
 import { WATER_DENSITY_60F } from './ruleInput'
+
+const VOLUME_NOTE = `WC ÷ ${WATER_DENSITY_60F} kg/L`
+const DERATE_SOURCE = 'ours; it covers the mixing errors seen on computed blends'
+
+/** What the factors of a sum make together. Units: grams, unrounded. */
+export function productGrams(factors: readonly Factor[]): number {
+  const value = factors.reduce((product, factor) => product * (factor.unit === '%' ? factor.value / 100 : factor.value), 1)
+  return exactGrams({ unit: factors.some(({ unit }) => unit === 'lb') ? 'lb' : 'kg', value })
+}
 
 /** A share of the whole, in thousandths, as a factor of one. */
 export function shareFactor(thousandths: number): Factor {
@@ -19,19 +27,16 @@ export function waterCapacityFactor(waterCapacity: MassReading): Factor {
 
 /** The volume of a cylinder. Units: litres, unrounded. */
 export function volumeFactor(litres: number): Factor {
-  return { name: 'volume', value: litres, unit: 'L', note: `WC ÷ ${WATER_DENSITY_60F} kg/L` }
+  return { name: 'volume', value: litres, unit: 'L', note: VOLUME_NOTE }
 }
 
-/** The density of a liquid, and the derate that an estimated one is taken with. Errors: RangeError outside its table. */
-export function liquidDensityFactors(fluid: LiquidTable, tC: number): Factor[] {
-  const { derate = 1 } = fluid
-  const density: Factor = {
-    name: 'liquid-density', value: liquidDensityAt(fluid, tC) / derate / 1000, unit: 'kg/L', atC: tC,
-    note: `liquid ${fluid.designation}`, source: fluid.source,
-  }
-  return fluid.derate === undefined ? [density] : [density, derateFactor(fluid.derate)]
+/** A density of a fluid's liquid, as its table has it. Units: kg/m3 in, kg/L out; the density before the derate of an estimated one. */
+export function liquidDensityFactor(fluid: LiquidTable, tC: number, kgPerM3: number): Factor {
+  const value = fluid.derate === undefined ? kgPerM3 / 1000 : kgPerM3 / fluid.derate / 1000
+  return { name: 'liquid-density', value, unit: 'kg/L', atC: tC, note: `liquid ${fluid.designation}`, source: fluid.source }
 }
 
-function derateFactor(derate: number): Factor {
-  return { name: 'derate', value: derate, unit: '', note: 'for ideal mixing', source: 'ours; it covers the mixing errors seen on computed blends' }
+/** What an estimated density is taken with. */
+export function derateFactor(derate: number): Factor {
+  return { name: 'derate', value: derate, unit: '', note: 'for ideal mixing', source: DERATE_SOURCE }
 }

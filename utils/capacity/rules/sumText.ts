@@ -1,20 +1,23 @@
 import type { MassReading } from '../../quantity/mass'
 import { exactGrams, formatReading } from '../../quantity/mass'
 import { fahrenheitFromCelsius } from '../../quantity/temperature'
-import type { Factor } from '../types'
+import type { Factor, FillTerm } from '../types'
+import { productGrams } from './factors'
 
 // The last decimals of a product that is whole on paper.
 const FLOAT_NOISE = 1e-6
 
 /**
- * A sum as the trade writes it, from its factors.
+ * A rule's sum as the trade writes it, with its result unless that is unsafe; nothing where there is no sum.
  *
- * Rounding: a volume to the nearest hundredth of a litre, a density to the nearest ten-thousandth; what is stamped as it is.
+ * Rounding: a volume to the nearest hundredth of a litre, a density to the nearest ten-thousandth; what is stamped as it
+ * is; the result down.
  *
- * @example '0.95 × 21.61 L × 1.0572 kg/L (liquid R-22 at 131 °F)'
+ * @example '0.95 × 21.61 L × 1.0572 kg/L (liquid R-22 at 131 °F) = 47.85 lb'
  */
-export function sumText(factors: readonly Factor[]): string {
-  return factors.map(factor => FACTOR_TEXT[factor.name](factor)).join(' × ')
+export function workingText({ factors, limitGrams }: FillTerm, waterCapacity: MassReading): string {
+  const sum = factors.map(factor => FACTOR_TEXT[factor.name](factor)).join(' × ')
+  return factors.length === 0 || limitGrams === null ? sum : `${sum} = ${resultText(productGrams(factors), waterCapacity)}`
 }
 
 /** The result of a sum in pounds, or in kilograms where the stamp is metric. Rounding: down to two decimals. */

@@ -1,5 +1,4 @@
 import { hasLiquidAt, liquidDensityAt } from '../../refrigerant/saturation'
-import { volumeFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 
 const SOURCE = '49 CFR 173.304b(b)'
@@ -14,9 +13,9 @@ const PUBLISHED_SOURCE = '49 CFR 173.313, portable tank instruction T50'
  * Source: 49 CFR 173.304b(b); R-125 by 49 CFR 173.313.
  */
 export function unRatio(input: RuleInput): RuleFigure {
-  const { fluid, volumeLitres } = input
+  const { fluid } = input
   const published = PUBLISHED_RATIOS.get(fluid.designation)
-  if (published !== undefined) return ratioFigure(volumeLitres, published, `printed for ${fluid.designation}`, PUBLISHED_SOURCE)
+  if (published !== undefined) return ratioFigure(input, published, `printed for ${fluid.designation}`, PUBLISHED_SOURCE)
   if (!hasLiquidAt(fluid, 60)) {
     return { exactGrams: null, because: `${fluid.designation} has no liquid at 60 °C, or no figure for it`, source: SOURCE }
   }
@@ -24,13 +23,13 @@ export function unRatio(input: RuleInput): RuleFigure {
   const at60C = liquidDensityAt(fluid, 60)
   const derated = fluid.derate === undefined ? '' : ', each less the derate for ideal mixing'
   const note = `the lower of 0.95 × liquid at 50 °C and liquid at 60 °C${derated}`
-  return ratioFigure(volumeLitres, Math.min(at50C, at60C) / 1000, note, `${SOURCE}; density: ${fluid.source}`)
+  return ratioFigure(input, Math.min(at50C, at60C) / 1000, note, `${SOURCE}; density: ${fluid.source}`)
 }
 
-function ratioFigure(volumeLitres: number, kgPerLitre: number, note: string, source: string): RuleFigure {
+function ratioFigure({ volumeLitres, volume }: RuleInput, kgPerLitre: number, note: string, source: string): RuleFigure {
   return {
     exactGrams: volumeLitres * kgPerLitre * 1000,
-    factors: [volumeFactor(volumeLitres), { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }],
+    factors: [volume, { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }],
     source,
   }
 }

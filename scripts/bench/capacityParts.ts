@@ -1,0 +1,5 @@
+export { DEFAULT_FILL_POLICY } from '../../utils/capacity/types'
+export { capacityInWords, capacityOf } from '../../utils/custody/capacityOf'
+export { initialState } from '../../utils/custody/state'
+export { CATALOGUE } from '../../utils/refrigerant/allRefrigerants'
+export { saturationAt } from '../../utils/refrigerant/saturation'
