@@ -5,8 +5,12 @@ import { join, resolve } from 'node:path'
 import { cylinderViews } from '../../server/utils/custody/cylinderViews'
 import { custodyLog } from '../../server/utils/custody/custodyLog'
 import { fleet } from '../../server/utils/custody/fleet'
+import { rebuildCaches } from '../../server/utils/custody/rebuild'
+import { rowsBehind } from '../../server/utils/custody/rowsByRule'
 import { verifyLog } from '../../server/utils/custody/verify'
 import { openDatabase, type Database } from '../../server/utils/database/database'
+import { directory } from '../../server/utils/directory/directory'
+import { firmRules } from '../../server/utils/directory/firmRules'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
 import { fleetQuery } from '../../utils/contract/custody'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
@@ -99,6 +103,16 @@ describe('the demo firm', () => {
       if (view.contents.netGrams === null) continue
       expect(sums.get(view.id) ?? 0, view.labelCode ?? view.id).toBe(view.contents.inStock ? view.contents.netGrams : 0)
     }
+  })
+
+  it('has set its fill rule anew once, with a reason, and each row rests on the one in force', async () => {
+    const rules = firmRules(await directory(db))
+    expect(rules.map(rule => rule.kind === 'fill-policy' && rule.value.shareThousandths)).toEqual([800, 780])
+    expect(rules.every(rule => rule.reason.length > 20 && rule.setBy.name === 'Maren Sorrel')).toBe(true)
+    expect(await rowsBehind(db, NOW)).toBe(0)
+    const live = await db.readClient.execute('SELECT * FROM cylinders ORDER BY id')
+    await rebuildCaches(db, NOW)
+    expect((await db.readClient.execute('SELECT * FROM cylinders ORDER BY id')).rows).toEqual(live.rows)
   })
 
   it('verifies, and is filled once', async () => {

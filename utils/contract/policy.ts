@@ -61,6 +61,8 @@ export type FirmRule = {
 
 /** What GET /api/policy answers: the firm's dated rules and what else a screen judges by. */
 export interface PolicyAnswer {
+  /** When it was told (UTC milliseconds, by the server's clock). */
+  asOf: number
   timeZone: string
   /** Oldest first, without those withdrawn; the first is the one before the firm set any. */
   fillPolicies: { fromAt: number, policy: FillPolicy }[]

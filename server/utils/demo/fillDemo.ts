@@ -1,5 +1,6 @@
 import { meta } from '../../../drizzle/schema'
 import { drawLabelCode } from '../../../utils/label/code'
+import { followRules } from '../custody/rowsByRule'
 import { statement, type Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { DAY, workingMorning } from './calendar'
@@ -40,6 +41,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   await db.write(listTables(db, stage))
   await directory(db, true)
   await recordScript(db, stage.script.events)
+  await followRules(db, () => now)
   await db.write(labelTables(db, stage, codesOf(stage), Array.from({ length: 10 }, () => drawLabelCode(random.bytes))))
   await db.write([statement(db.read.insert(meta).values({ key: 'demo', value: new Date(now).toISOString() }))])
   await directory(db, true)

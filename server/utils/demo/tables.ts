@@ -3,10 +3,13 @@ import { firm, firms, labels, openLines, people, places, scales, settings, shipm
 import { DEFAULT_FILL_POLICY } from '../../../utils/capacity/types'
 import { readingGrams } from '../../../utils/quantity/mass'
 import { statement, type Database } from '../database/database'
+import { DAY, workingMorning } from './calendar'
 import { DEMO_FIRM, type Cast } from './cast'
 import type { DemoLot, DemoShipment, Stage } from './lives'
 
-/** The firm, its people, places and firms, one scale and the fill rule of the first day. */
+const CAREFUL_DAYS = 150
+
+/** The firm, its people, places and firms, one scale and the firm's rules. */
 export function castTables({ read }: Database, cast: Cast, passwordHash: string, at: number, uuid: (ms: number) => string): InStatement[] {
   const created = { createdAt: at }
   return [
@@ -15,9 +18,16 @@ export function castTables({ read }: Database, cast: Cast, passwordHash: string,
     ...Object.values(cast.firms).map(one => statement(read.insert(firms).values({ ...one, ...created }))),
     ...[...cast.shops, ...cast.racks, ...cast.firmPlaces, ...cast.vans, ...cast.sites].map(one => statement(read.insert(places).values({ ...one, ...created }))),
     statement(read.insert(scales).values({ id: uuid(at), name: 'Shop scale', accuracyGrams: 14, accuracyBasisPoints: 25, lastCheckOn: new Date(at).toISOString().slice(0, 10) })),
-    statement(read.insert(settings).values({
-      id: uuid(at), kind: 'fill-policy', fromAt: at, value: DEFAULT_FILL_POLICY, reason: 'The rule from the first day', setBy: cast.people.manager.id, setAt: at,
-    })),
+    ...firmRules(cast, at).map(rule => statement(read.insert(settings).values({ id: uuid(rule.fromAt), ...rule, setAt: rule.fromAt }))),
+  ]
+}
+
+/** The fill rule of the first day, and the one that took its place once the scale was checked. */
+function firmRules({ people: { manager } }: Cast, at: number): (Pick<typeof settings.$inferInsert, 'value' | 'reason' | 'setBy'> & { kind: 'fill-policy', fromAt: number })[] {
+  const shared = { kind: 'fill-policy' as const, setBy: manager.id }
+  return [
+    { ...shared, fromAt: at, value: { ...DEFAULT_FILL_POLICY, shareThousandths: 780 }, reason: 'Careful until the shop scale has been checked against test weights.' },
+    { ...shared, fromAt: workingMorning(at + CAREFUL_DAYS * DAY), value: DEFAULT_FILL_POLICY, reason: 'The shop scale was checked and reads true. The usual 80 % from here on.' },
   ]
 }
 

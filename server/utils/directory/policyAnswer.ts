@@ -8,6 +8,7 @@ import { firmRules } from './firmRules'
 /** The firm's dated rules and its scales, as a screen needs them to judge by the same rules. */
 export function policyAnswer(from: Directory, nowMs: number, rowsBehind: number): PolicyAnswer {
   return {
+    asOf: nowMs,
     timeZone: from.timeZone,
     fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }, ...from.fillPolicies.map(({ fromAt, policy }) => ({ fromAt, policy }))],
     retests: [{ fromAt: 0, retest: DEFAULT_RETEST_SETTINGS }, ...from.retests.map(({ fromAt, retest }) => ({ fromAt, retest }))],
