@@ -3,7 +3,6 @@ import { idealMixture } from '../refrigerant/idealMixture'
 import type { Catalogue, LiquidTable } from '../refrigerant/types'
 import { markedPressurePsig } from './fillingDensities'
 import { fillTerm, hotBounds, standingOf, termsWithoutFigure } from './fillTerm'
-import { volumeFactor, waterCapacityFactor } from './rules/factors'
 import type { RuleInput } from './rules/ruleInput'
 import { volumeLitres } from './rules/ruleInput'
 import { lacksGuard, ruleAnswers } from './rulesInForce'
@@ -40,12 +39,10 @@ export function fillLimit(input: FillLimitInput): FillLimit {
   if ('because' in known) return withoutFigure(termsWithoutFigure(known.because), missing)
   if (!waterCapacity) return withoutFigure(termsWithoutFigure('the water capacity is not known'), missing)
 
-  const litres = volumeLitres(waterCapacity)
   const ruleInput: RuleInput = {
+    waterCapacity,
     waterCapacityGrams: exactGrams(waterCapacity),
-    volumeLitres: litres,
-    waterCapacity: waterCapacityFactor(waterCapacity),
-    volume: volumeFactor(litres),
+    volumeLitres: volumeLitres(waterCapacity),
     cylinder: input.stamp,
     fluid: known.fluid,
     supercritical: input.catalogue.supercritical.get(known.fluid.designation) ?? null,

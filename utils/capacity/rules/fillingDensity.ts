@@ -1,6 +1,7 @@
 import { celsiusFromFahrenheit } from '../../quantity/temperature'
 import { liquidDensityAt } from '../../refrigerant/saturation'
 import { bestRow, fillingDensityRows, hydrocarbonPercent, isHydrocarbon } from '../fillingDensities'
+import { waterCapacityFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 import { isLiquidWhenHot, WATER_DENSITY_60F } from './ruleInput'
 
@@ -42,7 +43,7 @@ function namedFigure(input: RuleInput): RuleFigure {
 function percentFigure(input: RuleInput, percent: number, note: string, source: string): RuleFigure {
   return {
     exactGrams: input.waterCapacityGrams * percent / 100,
-    factors: [{ name: 'filling-density', value: percent, unit: '%', note, source }, input.waterCapacity],
+    factors: [{ name: 'filling-density', value: percent, unit: '%', note, source }, waterCapacityFactor(input.waterCapacity)],
     source,
   }
 }

@@ -2,6 +2,7 @@ import { kPaFromPsig } from '../../quantity/pressure'
 import { whereOnCurve } from '../../refrigerant/monotoneCurve'
 import type { SupercriticalTable } from '../../refrigerant/types'
 import { markedPressurePsig } from '../fillingDensities'
+import { volumeFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 import { HOT_REFERENCE_C, isLiquidWhenHot } from './ruleInput'
 
@@ -33,7 +34,7 @@ export function hotPressure(input: RuleInput): RuleFigure {
   return {
     exactGrams: input.volumeLitres * most.kgPerM3,
     factors: [
-      input.volume,
+      volumeFactor(input.volumeLitres),
       {
         name: 'density-at-pressure', value: most.kgPerM3 / 1000, unit: 'kg/L', atC: most.isCool ? COOL_REFERENCE_C : HOT_REFERENCE_C,
         note: most.isCool ? `${marked} psig` : `${HOT_PRESSURE_FACTOR} × ${marked} psig`, source,

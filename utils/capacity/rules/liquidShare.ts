@@ -1,5 +1,5 @@
 import { hasLiquidAt, liquidDensityAt } from '../../refrigerant/saturation'
-import { derateFactor, liquidDensityFactor, shareFactor } from './factors'
+import { derateFactor, liquidDensityFactor, shareFactor, volumeFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 import { temperatureText } from './sumText'
 
@@ -8,7 +8,7 @@ export type LiquidShare = { shareThousandths: number, tC: number, source: string
 
 /** The weight of liquid that takes a share of a cylinder's volume at a temperature, or none where there is no liquid then. */
 export function liquidShareOfVolume(input: RuleInput, share: LiquidShare): RuleFigure {
-  const { fluid, volumeLitres, volume } = input
+  const { fluid, volumeLitres } = input
   if (!hasLiquidAt(fluid, share.tC)) {
     return {
       exactGrams: null,
@@ -17,7 +17,7 @@ export function liquidShareOfVolume(input: RuleInput, share: LiquidShare): RuleF
     }
   }
   const density = liquidDensityAt(fluid, share.tC)
-  const factors = [shareFactor(share.shareThousandths), volume, liquidDensityFactor(fluid, share.tC, density)]
+  const factors = [shareFactor(share.shareThousandths), volumeFactor(volumeLitres), liquidDensityFactor(fluid, share.tC, density)]
   if (fluid.derate !== undefined) factors.push(derateFactor(fluid.derate))
   return {
     exactGrams: volumeLitres * density * share.shareThousandths / 1000,

@@ -8,11 +8,9 @@ import type { Factor, FillPolicy } from '../types'
 
 /** What a rule needs of a cylinder and a fluid. Units: litres of volume, grams of water capacity, unrounded. */
 export type RuleInput = {
+  waterCapacity: MassReading
   waterCapacityGrams: number
   volumeLitres: number
-  /** Water capacity and volume as they stand in a sum. */
-  waterCapacity: Factor
-  volume: Factor
   cylinder: CylinderMark
   fluid: LiquidTable
   supercritical: SupercriticalTable | null

@@ -1,4 +1,5 @@
 import { hasLiquidAt, liquidDensityAt } from '../../refrigerant/saturation'
+import { volumeFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 
 const SOURCE = '49 CFR 173.304b(b)'
@@ -26,10 +27,10 @@ export function unRatio(input: RuleInput): RuleFigure {
   return ratioFigure(input, Math.min(at50C, at60C) / 1000, note, `${SOURCE}; density: ${fluid.source}`)
 }
 
-function ratioFigure({ volumeLitres, volume }: RuleInput, kgPerLitre: number, note: string, source: string): RuleFigure {
+function ratioFigure({ volumeLitres }: RuleInput, kgPerLitre: number, note: string, source: string): RuleFigure {
   return {
     exactGrams: volumeLitres * kgPerLitre * 1000,
-    factors: [volume, { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }],
+    factors: [volumeFactor(volumeLitres), { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }],
     source,
   }
 }

@@ -1,4 +1,4 @@
-import { shareFactor } from './factors'
+import { shareFactor, waterCapacityFactor } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 
 /**
@@ -9,7 +9,7 @@ import type { RuleFigure, RuleInput } from './ruleInput'
 export function waterWeight(input: RuleInput): RuleFigure {
   return {
     exactGrams: input.waterCapacityGrams * input.policy.shareThousandths / 1000,
-    factors: [shareFactor(input.policy.shareThousandths), input.waterCapacity],
+    factors: [shareFactor(input.policy.shareThousandths), waterCapacityFactor(input.waterCapacity)],
     source: 'ARI Guideline K (early 1990s), as reported in ACHR News, "On the Level: Filling Cylinders"',
   }
 }
