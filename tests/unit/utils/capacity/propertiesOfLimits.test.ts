@@ -7,7 +7,7 @@ import type { RuleInput } from '~~/utils/capacity/rules/ruleInput'
 import { workingText } from '~~/utils/capacity/rules/sumText'
 import { ruleAnswers } from '~~/utils/capacity/rulesInForce'
 import { twoPhase } from '~~/utils/capacity/twoPhase'
-import type { FillLimit, FillRule } from '~~/utils/capacity/types'
+import type { Factor, FillLimit, FillRule } from '~~/utils/capacity/types'
 import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
 import { exactGrams } from '~~/utils/quantity/mass'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
@@ -15,7 +15,7 @@ import type { Refrigerant } from '~~/utils/refrigerant/types'
 import {
   anyCondition, anyPartialStamp, anyPolicy, anyStamp, anyWaterCapacity, GAS_WHEN_HOT, LIQUID_WHEN_HOT,
 } from '~~/tests/helpers/capacityArbitraries'
-import { lb, stampOf } from '~~/tests/helpers/stamps'
+import { stampOf } from '~~/tests/helpers/stamps'
 
 const EVERY_RULE: FillRule[] = ['water-weight', 'liquid-77F', 'filling-density', 'hot-ceiling', 'liquid-130F', 'un-ratio', 'oily', 'hot-pressure']
 
@@ -146,9 +146,17 @@ describe('every answer', () => {
       const { terms } = answerTo(input)
       for (const term of terms) {
         const { rule, standing, limitGrams } = term
-        if (standing === 'unsafe') expect([limitGrams, workingText(term, lb(47.6)).includes('=')], rule).toEqual([null, false])
+        if (standing === 'unsafe') expect([limitGrams, workingText(term, input.stamp.waterCapacity!).includes('=')], rule).toEqual([null, false])
         const hot = CATALOGUE.refrigerants.get(input.refrigerant!)!.table.find(row => row.tC === HOT_C)
         if (hot && limitGrams !== null) expect(limitGrams, rule).toBeLessThanOrEqual(litres({ waterCapacity: input.stamp.waterCapacity! }) * hot.liquidDensity)
+      }
+    }), { numRuns: 500 })
+  })
+
+  it('shows as each figure the product of its factors', () => {
+    fc.assert(fc.property(anyQuestion, (input) => {
+      for (const { rule, limitGrams, factors } of answerTo(input).terms) {
+        if (limitGrams !== null) expect(Math.abs(gramsOfProduct(factors) - limitGrams - 0.5), rule).toBeLessThanOrEqual(0.5 + 1e-6)
       }
     }), { numRuns: 500 })
   })
@@ -180,6 +188,12 @@ describe('every answer', () => {
     }), { numRuns: 50 })
   })
 })
+
+/** Pounds, kilograms, litres and kg/L multiplied by hand. */
+function gramsOfProduct(factors: readonly Factor[]): number {
+  const grams: Record<Factor['unit'], number> = { 'lb': 453.59237, 'kg': 1000, 'L': 1, 'kg/L': 1000, '%': 0.01, '': 1 }
+  return factors.reduce((product, { value, unit }) => product * value * grams[unit], 1)
+}
 
 function expectFinite(value: unknown): void {
   if (typeof value === 'number') expect(Number.isFinite(value)).toBe(true)
