@@ -23,7 +23,8 @@ export interface SaturationDrawing {
   place: (tC: number, kPa: number) => { x: number, y: number }
 }
 
-const MOST_MARKS = 6
+const MOST_PRESSURES = 8
+const MOST_TEMPERATURES = 6
 const PRESSURE_STEPS = [0.5, 1, 2, 5, 10, 20, 50, 100, 200, 500, 1000, 2000]
 const TEMPERATURE_STEPS = [5, 10, 20, 40]
 // Bubble and dew pressure closer than this are one line, and one figure.
@@ -42,8 +43,8 @@ export function layOutSaturation(rows: readonly CurvePoint[], unit: GaugeUnit): 
   const place = (tC: number, kPa: number) => ({ x: (tC - first.tC) / (last.tC - first.tC) * 100, y: 100 - kPa / topKPa * 100 })
   const points = (pressure: (row: CurvePoint) => number) => rows.map(row => place(row.tC, pressure(row)))
   const [bubble, dew] = [points(row => row.bubblePressureKPa), points(row => row.dewPressureKPa)]
-  const pressureMarks = (of: GaugeUnit) => marks(PRESSURE_STEPS, gaugeFromKPa(0, of), gaugeFromKPa(topKPa, of))
-  const temperatureMarks = (of: GaugeUnit) => marks(TEMPERATURE_STEPS, thermometerFromCelsius(first.tC, of), thermometerFromCelsius(last.tC, of))
+  const pressureMarks = (of: GaugeUnit) => marks(PRESSURE_STEPS, MOST_PRESSURES, gaugeFromKPa(0, of), gaugeFromKPa(topKPa, of))
+  const temperatureMarks = (of: GaugeUnit) => marks(TEMPERATURE_STEPS, MOST_TEMPERATURES, thermometerFromCelsius(first.tC, of), thermometerFromCelsius(last.tC, of))
   return {
     bubble: path(bubble),
     dew: path(dew),
@@ -71,8 +72,8 @@ export function saturationInWords(tC: number, saturation: Pick<Saturation, 'bubb
     : `${at}: bubble ${both(saturation.bubblePressureKPa)}, dew ${both(saturation.dewPressureKPa)}.`
 }
 
-function marks(steps: readonly number[], from: number, to: number): AxisMark[] {
-  const step = steps.find(each => (to - from) / each <= MOST_MARKS) ?? steps.at(-1) ?? 1
+function marks(steps: readonly number[], most: number, from: number, to: number): AxisMark[] {
+  const step = steps.find(each => (to - from) / each <= most) ?? steps.at(-1) ?? 1
   const found: AxisMark[] = []
   for (let value = Math.ceil(from / step) * step; value <= to; value += step) {
     found.push({ at: (value - from) / (to - from) * 100, label: String(value === 0 ? 0 : value).replace('-', '−') })

@@ -44,6 +44,6 @@ it('draws one line and one mark for a single substance', async () => {
 
 it('marks nothing while nothing is asked', async () => {
   const wrapper = await mountSuspended(RefrigerantCurve, { props: { ...props, reading: null } })
-  expect(wrapper.find('[role=status]').exists()).toBe(false)
+  expect(wrapper.find('[role=status]').text()).toBe('')
   expect(wrapper.find('[data-part=bubble]').exists()).toBe(false)
 })
