@@ -52,9 +52,9 @@ export function useSaturation(designation: Ref<string>, unit: Ref<GaugeUnit>, ho
   }
 
   watch(hottestC, (hottest) => {
-    if (hottest !== null && temperature.value === '') {
-      temperature.value = plainFigure(thermometerFromCelsius(Math.min(FIRST_C, hottest), unit.value))
-    }
+    if (hottest === null || temperature.value !== '') return
+    const first = Math.floor(thermometerFromCelsius(Math.min(FIRST_C, hottest), unit.value))
+    temperature.value = plainFigure(first)
   }, { immediate: true })
   // The same temperature in another unit: the thermometer changes, not what it measures.
   watch(unit, (next, before) => {
