@@ -2,7 +2,7 @@ import type { GwpBasis } from './gwp'
 import type { PressureClass } from './pressureClass'
 import type { Refrigerant } from './types'
 
-export const PRESSURE_CLASS_WORDS: Record<PressureClass, string> = {
+export const PRESSURE_CLASS_NAMES: Record<PressureClass, string> = {
   'very-high': 'very high', 'high': 'high', 'medium': 'medium', 'low': 'low',
 }
 
