@@ -104,7 +104,7 @@ function refusalsOfFill(state: CylinderState, retest: Requalification, refrigera
     ...state.standing.filter(({ code }) => code === 'second-refrigerant' || code === 'unknown-onto-known').map(standingFinding),
     ...againstTraces(state, refrigerant),
     ...state.holds.map(holdFinding),
-    ...(retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, 'stop')] : []),
+    ...(retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, { severity: 'stop', nothingInIt: state.contents.nothingInIt })] : []),
     ...(retest.state === 'unknown' ? [retestUnknown()] : []),
     ...(where ? [away(where.at, where.since)] : []),
     ...(condemnedAt === null ? [] : [afterEnd(condemnedAt)]),

@@ -37,7 +37,7 @@ export function dateFindings(dated: Dated, day: Day): Finding[] {
 
 function ofRetest({ dueMonth, nothingInIt }: Dated, day: Day): Finding[] {
   if (dueMonth === null) return []
-  if (isOverdue(dueMonth, day)) return [retestOverdue(dueMonth, nothingInIt ? 'stop' : 'caution')]
+  if (isOverdue(dueMonth, day)) return [retestOverdue(dueMonth, { severity: nothingInIt ? 'stop' : 'caution', nothingInIt })]
   return daysUntilEndOfMonth(dueMonth, day.nowMs, day.timeZone) <= day.retest.soonDays ? [retestSoon(dueMonth)] : []
 }
 

@@ -106,8 +106,8 @@ function readMarks(draft: RegistrationDraft, thisMonth: Month): RetestMark[] {
 
 function suffixDoubts(draft: RegistrationDraft, thisMonth: Month): Doubt[] {
   return readMarks(draft, thisMonth)
-    .flatMap(({ suffix }) => suffixDoubt(suffix ?? '') ?? [])
-    .map(text => ({ code: 'suffix', kind: 'att', text }))
+    .filter(({ suffix }) => suffix !== null && suffixDoubt(suffix) !== null)
+    .map(({ suffix }) => ({ code: 'suffix', kind: 'att', text: `${suffix} is no suffix of a retest mark.` }))
 }
 
 function saidDoubts(draft: RegistrationDraft): Doubt[] {

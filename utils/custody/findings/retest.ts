@@ -2,10 +2,10 @@ import { formatMonth, type Month } from '../../quantity/month'
 import type { Finding } from '../finding'
 import { COMMON_PRACTICE, massWords, sinceText } from './words'
 
-/** The retest is overdue: a stop before anything goes in, a caution while old contents wait. */
-export function retestOverdue(dueMonth: Month, severity: 'stop' | 'caution'): Finding {
-  const next = severity === 'stop'
-    ? 'Put nothing in; send it for its test when nothing is in it.'
+/** The retest is overdue: a stop before anything goes in, a caution while old contents wait. It is never tested with those. */
+export function retestOverdue(dueMonth: Month, { severity, nothingInIt }: Pick<Finding, 'severity'> & { nothingInIt: boolean }): Finding {
+  const next = nothingInIt
+    ? 'Put nothing in; send it for its test.'
     : 'Put nothing more in; ship it or empty it, then send it for its test.'
   return { code: 'retest-overdue', severity, text: `The retest was due in ${formatMonth(dueMonth)}. ${next}`, source: '49 CFR 180.205(c)', since: null }
 }

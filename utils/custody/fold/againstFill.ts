@@ -20,5 +20,5 @@ export function againstFill(turn: Turn<'filled'>, refrigerant: string | null): F
 function againstDate({ state, context }: Turn, at: number): Finding[] {
   const retest = retestOf(state, { nowMs: at, timeZone: context.timeZone, rules: context.retestAt(at) })
   if (retest.state === 'unknown') return [retestUnknown()]
-  return retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, 'stop')] : []
+  return retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, { severity: 'stop', nothingInIt: false })] : []
 }
