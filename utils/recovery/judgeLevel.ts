@@ -6,8 +6,8 @@ import { levelWords } from './words'
 /**
  * Whether a level was reached: by the gauge, or for a share of the charge by what was weighed out.
  *
- * Vacuums are compared as what is left in mmHg absolute, the required one counted from 29.9 inHg; a gauge of inHg
- * without its barometer is taken against 29.9 too. How long it held does not change the verdict: no text asks for a
+ * Vacuums are compared as what is left in mmHg absolute, the required one counted from 29.9 inHg. A gauge of inHg
+ * without its barometer is taken against 29.9 too, and that is said; of an absolute level it tells nothing. How long it held does not change the verdict: no text asks for a
  * time, and 5 minutes without coming back above 0 psig is common practice, no source. It is kept and said.
  */
 export function judgeLevel(required: Pick<RequiredLevel, 'level' | 'alternative'>, reached: Reached | null, heldMinutes: number | null): LevelVerdict {
@@ -37,18 +37,23 @@ function byWeight(level: EvacuationLevel, { recoveredGrams, chargeGrams }: Extra
 }
 
 function byVacuum(level: EvacuationLevel, reached: Exclude<Reached, { recoveredGrams: number }>): Judged {
+  const isWithoutBarometer = 'inHg' in reached && reached.barometerInHg === undefined
+  if (isWithoutBarometer && level.unit === 'mmHg-absolute') {
+    return unknown(`A gauge of inHg tells ${levelWords(level)} only with the barometer. Give it, or read an absolute gauge.`)
+  }
   const barometer = 'inHg' in reached ? reached.barometerInHg ?? STANDARD_ATMOSPHERE_INHG : STANDARD_ATMOSPHERE_INHG
   const left = absoluteMmHg(reached, STANDARD_ATMOSPHERE_INHG)
   if (left < -FLOAT_NOISE) {
-    return unknown('inHg' in reached && reached.barometerInHg !== undefined
-      ? 'The gauge shows a deeper vacuum than the barometer allows. Zero it and read again.'
-      : `Against ${STANDARD_ATMOSPHERE_INHG} inHg the gauge shows less than nothing. Give the barometer, or zero the gauge and read again.`)
+    return unknown(isWithoutBarometer
+      ? `Against ${STANDARD_ATMOSPHERE_INHG} inHg the gauge shows less than nothing. Give the barometer, or zero the gauge and read again.`
+      : 'The gauge shows a deeper vacuum than the barometer allows. Zero it and read again.')
   }
   // psig is what the gauge shows here, whatever the barometer; the table counts from its own atmosphere.
   const most = level.unit === 'psig' ? barometer * MMHG_PER_INHG + mmHgFromPsi(level.value) : mostLeftMmHg(level) ?? NaN
   const shortMmHg = left - most
   const short = level.unit === 'inHg-vacuum' ? shortMmHg / MMHG_PER_INHG : level.unit === 'psig' ? shortMmHg / mmHgFromPsi(1) : shortMmHg
-  return verdictOf(short, `${comesTo(left, level)}, ${levelWords(level)} is asked for.`, left)
+  const assumed = isWithoutBarometer && level.unit !== 'psig' ? ` The barometer is not known: taken as ${STANDARD_ATMOSPHERE_INHG} inHg.` : ''
+  return verdictOf(short, `${comesTo(left, level)}, ${levelWords(level)} is asked for.${assumed}`, left)
 }
 
 function comesTo(left: number, { unit }: EvacuationLevel): string {

@@ -1,7 +1,7 @@
 import { SMALL_APPLIANCE_VACUUM } from './evacuationTable'
 import { exemptUse } from './exceptions'
 import type { AccountLine, EvacuationInput, RequiredLevel } from './types'
-import { formatCharge, MACHINE_MADE_WORDS } from './words'
+import { formatCharge, levelWords, MACHINE_MADE_WORDS } from './words'
 
 const PERCENT_OF_OLD_MACHINE = 80
 const PERCENT_WITH_COMPRESSOR = 90
@@ -29,7 +29,7 @@ export function smallAppliance({ refrigerant, chargeGrams, machineMade, compress
       term: 'Its compressor', value: compressorRuns === null ? 'not known' : compressorRuns ? 'runs' : 'does not run',
       note: isOld ? 'makes no difference with this machine' : compressorMatters ? 'taken as running' : null, isAssumed: compressorMatters,
     },
-    { term: 'To recover', value: `${percent} % of the charge`, note: 'or down to 4 inHg vacuum', isAssumed: false },
+    { term: 'In place of a share', value: levelWords(SMALL_APPLIANCE_VACUUM), note: 'does as well', isAssumed: false },
   ]
   return {
     level: { unit: 'percent-of-charge', value: percent },

@@ -2,7 +2,7 @@ import type { VacuumReading } from '../quantity/vacuum'
 import type { PressureClass } from '../refrigerant/pressureClass'
 import type { Refrigerant } from '../refrigerant/types'
 
-export const APPLIANCES = ['other', 'small', 'mvac'] as const
+export const APPLIANCES = ['small', 'mvac', 'other'] as const
 /** What is opened: a small appliance, the air conditioner of a vehicle (or one like it), or any other. */
 export type Appliance = typeof APPLIANCES[number]
 

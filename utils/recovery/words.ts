@@ -48,6 +48,11 @@ export const LEVEL_UNIT_WORDS: Record<EvacuationLevel['unit'], string> = {
   'percent-of-charge': '% of the charge',
 }
 
+/** What is done about a level: its figure stands behind it. */
+export function levelVerb({ unit }: EvacuationLevel): string {
+  return unit === 'percent-of-charge' ? 'recover' : unit === 'psig' ? 'bring it to' : 'evacuate to'
+}
+
 /** A level in a line. */
 export function levelWords({ unit, value }: EvacuationLevel): string {
   return unit === 'percent-of-charge' ? `${value} % of the charge` : `${value} ${LEVEL_UNIT_WORDS[unit]}`

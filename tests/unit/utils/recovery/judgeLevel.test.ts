@@ -37,6 +37,12 @@ describe('a vacuum of 10 inHg', () => {
     expect(judged(TEN, { microns: 505_470 }).verdict).toBe('not-reached')
   })
 
+  it('says that it took the air as 29.9 inHg where nobody read a barometer', () => {
+    expect(judged(TEN, { inHg: 10 }).because).toContain('The barometer is not known: taken as 29.9 inHg.')
+    expect(judged(TEN, { inHg: 10, barometerInHg: 29.9 }).because).not.toContain('not known')
+    expect(judged(TEN, { microns: 500 }).because).not.toContain('not known')
+  })
+
   it('cannot be told from a weight', () => {
     expect(judged(TEN, { recoveredGrams: 4000, chargeGrams: 4000 }).verdict).toBe('unknown')
   })
@@ -58,13 +64,19 @@ describe('25 mmHg absolute', () => {
     expect(judged(LOW, { microns: 0 })).toMatchObject({ verdict: 'reached', absoluteMmHg: 0 })
   })
 
-  it('is 28.92 on a gauge of inHg and not 28.9', () => {
-    expect(judged(LOW, { inHg: 28.92 }).verdict).toBe('reached')
-    expect(judged(LOW, { inHg: 28.9 }).verdict).toBe('not-reached')
+  it('is 28.92 on a gauge of inHg in air of 29.9, and not 28.9', () => {
+    expect(judged(LOW, { inHg: 28.92, barometerInHg: 29.9 }).verdict).toBe('reached')
+    expect(judged(LOW, { inHg: 28.9, barometerInHg: 29.9 }).verdict).toBe('not-reached')
+  })
+
+  it('is not told by a gauge of inHg whose barometer nobody read', () => {
+    // In air of 30.2 inHg 28.95 leaves 31.75 mmHg, in thin air of 24.9 it cannot be.
+    expect(judged(LOW, { inHg: 28.95 })).toMatchObject({ verdict: 'unknown', shortBy: null })
+    expect(judged(LOW, { inHg: 28.95, barometerInHg: 30.2 }).verdict).toBe('not-reached')
   })
 
   it('is not told by a gauge that shows more than the air can give', () => {
-    expect(judged(LOW, { inHg: 29.92 })).toMatchObject({ verdict: 'unknown', shortBy: null })
+    expect(judged(TEN, { inHg: 29.92 })).toMatchObject({ verdict: 'unknown', shortBy: null })
     expect(judged(LOW, { inHg: 29.92, barometerInHg: 29.92 }).verdict).toBe('reached')
     expect(judged(LOW, { inHg: 29, barometerInHg: 27 }).verdict).toBe('unknown')
   })
