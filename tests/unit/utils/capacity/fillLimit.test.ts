@@ -221,6 +221,79 @@ describe('what is not known', () => {
   })
 })
 
+describe('the factors of a rule', () => {
+  it('are what its sum multiplies, each with its unit, its temperature and its source', () => {
+    const { factors } = term(limitOf({ refrigerant: 'R-22' }), 'hot-ceiling')
+    expect(factors).toEqual([
+      { name: 'share', value: 0.95, unit: '' },
+      // 47.6 x 0.45359237 = 21.590997 kg; / 0.99904 = 21.611744 L.
+      { name: 'volume', value: expect.closeTo(21.611744, 6), unit: 'L', note: 'WC ÷ 0.99904 kg/L' },
+      { name: 'liquid-density', value: expect.closeTo(1.0572, 9), unit: 'kg/L', atC: 55, note: 'liquid R-22', source: expect.stringContaining('CoolProp') },
+    ])
+  })
+
+  it('are a percent and the water capacity for a filling density, as in the regulation', () => {
+    const limit = limitOf({ refrigerant: 'R-22' })
+    expect(term(limit, 'filling-density').factors).toEqual([
+      { name: 'filling-density', value: 105, unit: '%', note: 'filling density of R-22', source: '49 CFR 173.304a(a)(2)' },
+      { name: 'water-capacity', value: 47.6, unit: 'lb' },
+    ])
+    expect(sumOf(limit, 'filling-density')).toBe('105 % (filling density of R-22) × WC 47.6 lb = 49.98 lb')
+  })
+
+  it('name the specific gravity of a hydrocarbon', () => {
+    const limit = limitOf({ refrigerant: 'R-290' })
+    expect(term(limit, 'filling-density').factors[0]).toMatchObject({ value: 42, unit: '%', note: expect.stringMatching(/^specific gravity 0\.50\d at 60 °F$/) })
+  })
+
+  it('are the volume and the density at the pressure for a gas when hot', () => {
+    const limit = limitOf({ refrigerant: 'R-23' })
+    expect(term(limit, 'hot-pressure').factors.map(factor => factor.name)).toEqual(['volume', 'density-at-pressure'])
+    expect(sumOf(limit, 'hot-pressure')).toMatch(/^21\.61 L × 0\.11\d\d kg\/L \(400 psig at 70 °F\) = 5\.\d\d lb$/)
+  })
+
+  it('show pounds and ounces as they are stamped', () => {
+    const waterCapacity: MassReading = { unit: 'lb-oz', lb: 47, oz: 8 }
+    const limit = limitOf({ refrigerant: 'R-22', stamp: stampOf({ waterCapacity }) })
+    expect(term(limit, 'water-weight').factors[1]).toEqual({ name: 'water-capacity', value: 47.5, unit: 'lb', note: '47\u00A0lb\u00A08\u00A0oz' })
+    expect(sumOf(limit, 'water-weight', waterCapacity)).toBe('0.80 × WC 47 lb 8 oz = 38.00 lb')
+  })
+
+  it.each(['R-22', 'R-32', 'R-290', 'R-125', 'R-23', 'R-744', 'R-410B'])('make together the limit of every rule that has one: %s', (refrigerant) => {
+    const stamp = stampOf({ spec: 'DOT-3AA', servicePressurePsig: 1800 })
+    const figures = limitOf({ refrigerant, stamp }).terms.filter(one => one.limitGrams !== null)
+    expect(figures.length).toBeGreaterThan(0)
+    for (const { rule, factors, limitGrams } of figures) {
+      const product = factors.reduce((sum, { value, unit }) => sum * (unit === '%' ? value / 100 : unit === 'lb' ? value * GRAMS_PER_POUND : value), 1)
+      const grams = factors.some(({ unit }) => unit === 'lb') ? product : product * 1000
+      expect(Math.floor(grams + 1e-6), rule).toBe(limitGrams)
+    }
+  })
+})
+
+describe('a blend that is known by its composition alone', () => {
+  it('is held by the density of its parts less 5 %: R-410B', () => {
+    // At 131 F: 1 / (0.45/808.3 + 0.55/945.4) = 878.357 kg/m3; x 0.95 x 0.95 x 21.611744 L = 17,131.9 g; 80 % of the water 17,272 g.
+    const limit = limitOf({ refrigerant: 'R-410B' })
+    expect(limit).toMatchObject({ governingRule: 'hot-ceiling', missing: [] })
+    expect(limit.exactLimitGrams).toBeCloseTo(17_131.9, 0)
+    expect(sumOf(limit, 'hot-ceiling')).toBe('0.95 × 21.61 L × 0.8784 kg/L (liquid R-410B at 131 °F) × 0.95 (for ideal mixing) = 37.76 lb')
+  })
+
+  it('has no figure by a rule for which its parts have none', () => {
+    const limit = limitOf({ refrigerant: 'R-410B' })
+    expect(term(limit, 'un-ratio')).toMatchObject({ limitGrams: null, because: 'R-410B has no liquid at 60 °C, or no figure for it' })
+    expect(term(limit, 'filling-density').because).toBe('the table does not name R-410B')
+  })
+
+  it('has none at all where it cannot be reckoned, and says why', () => {
+    const blend = { designation: 'R-0', components: [{ component: 'R-744', massPercent: 10 }, { component: 'R-32', massPercent: 90 }], source: '' }
+    const limit = limitOf({ refrigerant: 'R-0', catalogue: { ...CATALOGUE, compositions: new Map([['R-0', blend]]) } })
+    expect(limit).toMatchObject({ governingRule: null, fillLimitGrams: null, missing: ['refrigerant'] })
+    for (const one of limit.terms) expect(one.because).toContain('R-744 is near or above its critical temperature')
+  })
+})
+
 describe('a fluid that is a gas at 131 F', () => {
   it('is held by pressure: R-23 at 400 psig', () => {
     // At 131 F 1.25 x 400 psig = 3548.7 kPa absolute would allow 116 to 118 kg/m3; at 70 F 400 psig = 2859.2 kPa lies between

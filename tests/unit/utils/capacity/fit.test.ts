@@ -106,6 +106,11 @@ describe('a flammable refrigerant', () => {
     expect(finding[2]?.severity).toBe('caution')
   })
 
+  it('is a blend of which only the composition is known: no pressure and no class are known of it', () => {
+    expect(codes('R-410B', { flammableMarked: false })).toEqual(['pressure-class', 'not-marked-flammable', 'toxic'])
+    expect(codes('R-410B')).toEqual(['pressure-class', 'toxic'])
+  })
+
   it('is not R-22', () => {
     expect(codes('R-22', { flammableMarked: false })).toEqual([])
   })

@@ -40,6 +40,20 @@ describe('the liquid-full temperature', () => {
     expect(fullAt('R-410A', 20_000)).toEqual({ c: -40 })
   })
 
+  it('lies between the rows elsewhere, where the liquid weighs what is in it', () => {
+    // R-410A: 865.5 kg/m3 at 55 C, 815.5 at 60 C, on a curve that bends down: half way down lies past half way along.
+    const full = fullAt('R-410A', 8405)
+    expect(full).toEqual({ c: expect.closeTo(57.6, 1) })
+  })
+
+  it('of a gas when hot is never for a thin fill, and beyond its table for a dense one', () => {
+    // R-23 at 15 C, its last row: 890.4 and 207.6 kg/m3. R-744 at 21.1 C: 761.3 and 203.2.
+    expect(fullAt('R-23', 2075)).toEqual({ never: true })
+    expect(fullAt('R-23', 2077)).toEqual({ aboveC: 15 })
+    expect(fullAt('R-744', 6800)).toEqual({ aboveC: 21.1 })
+    expect(fullAt('R-744', 7613)).toEqual({ c: expect.closeTo(21.1, 2) })
+  })
+
   it('is not known without a refrigerant or a water capacity', () => {
     expect(fullAt('R-13B1', 8000)).toBeNull()
     const refrigerant = CATALOGUE.refrigerants.get('R-22') ?? null
