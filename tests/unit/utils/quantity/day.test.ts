@@ -1,0 +1,21 @@
+import { describe, expect, it } from 'vitest'
+import { dayOfInstant, firstInstantOfDay } from '~~/utils/quantity/day'
+
+describe('a day in the firm\'s time zone', () => {
+  it('begins at its midnight there', () => {
+    // Chicago is at UTC-6 in winter.
+    expect(firstInstantOfDay('2026-12-15', 'America/Chicago')).toBe(Date.UTC(2026, 11, 15, 6))
+    expect(firstInstantOfDay('2026-12-15', 'Asia/Tokyo')).toBe(Date.UTC(2026, 11, 14, 15))
+  })
+
+  it('begins where the clock jumps over midnight with its first minute', () => {
+    // In Havana the clock goes from 0:00 to 1:00 on 8 March 2026: the day begins at 5:00 UTC.
+    expect(firstInstantOfDay('2026-03-08', 'America/Havana')).toBe(Date.UTC(2026, 2, 8, 5))
+  })
+
+  it('is the day before until then', () => {
+    const midnight = Date.UTC(2026, 11, 15, 6)
+    expect(dayOfInstant(midnight - 1, 'America/Chicago')).toBe('2026-12-14')
+    expect(dayOfInstant(midnight, 'America/Chicago')).toBe('2026-12-15')
+  })
+})
