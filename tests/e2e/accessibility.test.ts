@@ -57,6 +57,11 @@ const SCREENS: Record<string, Screen[]> = {
   'mail.vue': [{ as: admin, at: () => '/mail' }],
   'people.vue': [{ as: admin, at: () => '/people' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
+  'refrigerants/[designation].vue': [
+    { as: manager, at: () => '/refrigerants/R-454B' }, { as: technician, at: () => '/refrigerants/R-407B' },
+    { as: technician, at: () => '/refrigerants/R-9999', answers: 404 },
+  ],
+  'refrigerants/index.vue': [{ as: manager, at: () => '/refrigerants' }, { as: technician, at: () => '/refrigerants?q=xyz' }],
   'retests/[id].vue': [...(['draft', 'sent', 'back'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/retests/${demo.lots[state]}` }))],
   'retests/index.vue': [{ as: manager, at: () => '/retests' }],
   'scan.vue': [{ as: technician, at: () => '/scan' }],
