@@ -23,28 +23,22 @@ export function inThisAir(absoluteKPa: number, barometerKPa: number): number {
   return absoluteKPa - barometerKPa + STANDARD_ATMOSPHERE_KPA
 }
 
-/** How far a reading may lie outside of the band and still agree. Units: kPa. */
-export function marginKPa({ toleranceKPa, dataErrorKPa }: PressureCheck): number {
-  return toleranceKPa + dataErrorKPa
-}
-
 const PADDING = 0.14
-const MOST_TICKS = 5
+const MOST_TICKS = 7
 const STEPS = [1, 2, 5]
 
 /** Lays out the part of a gauge's scale on which the band and the reading lie. */
 export function layOutPressureBand(check: PressureCheck, barometerKPa: number, unit: GaugeUnit): PressureBand {
-  const { dewKPa, bubbleKPa, absoluteKPa } = check
-  const margin = marginKPa(check)
-  const low = Math.min(dewKPa - margin, absoluteKPa)
-  const high = Math.max(bubbleKPa + margin, absoluteKPa)
+  const { dewKPa, bubbleKPa, absoluteKPa, agreesFromKPa, agreesToKPa } = check
+  const low = Math.min(agreesFromKPa, absoluteKPa)
+  const high = Math.max(agreesToKPa, absoluteKPa)
   const padding = (high - low) * PADDING || 1
   const begin = Math.max(0, low - padding)
   const end = high + padding
   const place = (kPa: number) => Math.min(100, Math.max(0, (kPa - begin) / (end - begin) * 100))
   return {
-    from: place(dewKPa - margin),
-    to: place(bubbleKPa + margin),
+    from: place(agreesFromKPa),
+    to: place(agreesToKPa),
     dew: place(dewKPa),
     bubble: place(bubbleKPa),
     needle: place(absoluteKPa),

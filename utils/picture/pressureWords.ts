@@ -1,8 +1,10 @@
-import { degreesFromCelsius, formatDifference, formatGauge, formatThermometer, thermometerSymbol, type GaugeUnit } from '../quantity/gauge'
+import { degreesFromCelsius, formatDifference, formatGauge, formatThermometer, plainFigure, thermometerSymbol, type GaugeUnit } from '../quantity/gauge'
 import type { PressureCheck } from '../refrigerant/pressureCheck'
 import type { PressureReading } from '../refrigerant/pressureReading'
-import { inThisAir, marginKPa } from './pressureBand'
+import { inThisAir } from './pressureBand'
 import type { StatusKind } from './status'
+
+const NO_BREAK_SPACE = '\u00A0'
 
 /** A pressure check as a person reads it. */
 export interface CheckedPressure { check: PressureCheck, reading: PressureReading, designation: string, unit: GaugeUnit }
@@ -28,44 +30,54 @@ export function pressureVerdict({ check, designation, unit }: CheckedPressure): 
   }
 }
 
-/** The band, its tolerance and the reading in one sentence: the same numbers as in the picture. */
+/** The band, where a reading agrees, and the reading in one sentence: the same numbers as in the picture. */
 export function bandInWords(checked: CheckedPressure): string {
   const { check, reading, designation, unit } = checked
   return `The gauge shows ${formatGauge(reading.pressureKPa, unit)}. `
-    + `At ${formatThermometer(reading.temperatureC, unit)} ${designation} with liquid left shows ${bandOf(checked)}, give or take ${formatDifference(marginKPa(check), unit)}.`
+    + `At ${formatThermometer(reading.temperatureC, unit)} ${designation} with liquid left shows ${bandOf(checked)}; `
+    + `by what gauge, thermometer and figures may be off, ${span(checked, check.agreesFromKPa, check.agreesToKPa)} agrees.`
 }
 
 /** The refrigerant's own band as the gauge in this air would show it. */
-export function bandOf({ check, reading, unit }: CheckedPressure): string {
-  const bubble = formatGauge(inThisAir(check.bubbleKPa, reading.barometerKPa), unit)
-  const dew = formatGauge(inThisAir(check.dewKPa, reading.barometerKPa), unit)
-  return dew === bubble ? bubble : `${dew.split('\u00A0')[0]} to ${bubble}`
+export function bandOf(checked: CheckedPressure): string {
+  return span(checked, checked.check.dewKPa, checked.check.bubbleKPa)
 }
 
 /** A line of the account of what a reading may be off. */
-export interface AccountLine { term: string, value: string, figure: true, strong?: boolean }
+export interface AccountLine {
+  term: string
+  /** How the figure comes about. */
+  by: string | null
+  figure: string
+  /** The line that a sum ends in. */
+  isSum: boolean
+}
 
-/** How the tolerance comes about, line by line, down to where a reading agrees. */
-export function pressureAccount({ check, reading, designation, unit }: CheckedPressure): AccountLine[] {
-  const give = (kPa: number) => `±\u00A0${formatDifference(kPa, unit)}`
+/** How the tolerance at the nearer edge comes about, line by line, down to where a reading agrees. */
+export function pressureAccount(checked: CheckedPressure): AccountLine[] {
+  const { check, reading, designation, unit } = checked
+  const give = (kPa: number) => `±${NO_BREAK_SPACE}${formatDifference(kPa, unit)}`
   const degrees = degreesFromCelsius(reading.thermometerErrorC, unit)
-  const slopeText = formatDifference(check.slopeKPaPerC / degreesFromCelsius(1, unit), unit)
-  const margin = marginKPa(check)
-  const isNearerBubble = check.absoluteKPa >= (check.dewKPa + check.bubbleKPa) / 2
-  const edge = (kPa: number) => formatGauge(inThisAir(kPa, reading.barometerKPa), unit)
-  const thermometer = `±\u00A0${degrees.toFixed(1)}\u00A0${thermometerSymbol(unit)} × ${slopeText} to a degree`
+  const slope = formatDifference(check.slopeKPaPerC / degreesFromCelsius(1, unit), unit)
+  const [edge, edgeKPa] = check.absoluteKPa >= (check.dewKPa + check.bubbleKPa) / 2
+    ? ['bubble', check.bubbleKPa] as const
+    : ['dew', check.dewKPa] as const
   return [
-    { term: 'Gauge', value: give(reading.gaugeErrorKPa), figure: true },
-    { term: `Thermometer, ${thermometer}`, value: give(check.toleranceKPa - reading.gaugeErrorKPa), figure: true },
-    { term: `Figures of ${designation}, ${percent(check.relativeErrorPressure)} of the pressure above none`, value: give(check.dataErrorKPa), figure: true },
-    { term: 'Together', value: give(margin), figure: true, strong: true },
-    { term: `Band of ${designation}, as this gauge shows it`, value: bandOf({ check, reading, designation, unit }), figure: true },
-    isNearerBubble
-      ? { term: 'Agrees up to', value: edge(check.bubbleKPa + margin), figure: true, strong: true }
-      : { term: 'Agrees down to', value: edge(Math.max(0, check.dewKPa - margin)), figure: true, strong: true },
+    { term: 'Gauge', by: null, figure: give(reading.gaugeErrorKPa), isSum: false },
+    { term: 'Thermometer', by: `${plainFigure(degrees)}${NO_BREAK_SPACE}${thermometerSymbol(unit)} × ${slope} to a degree`, figure: give(check.toleranceKPa - reading.gaugeErrorKPa), isSum: false },
+    {
+      term: `Figures of ${designation}`,
+      by: `${plainFigure(check.relativeErrorPressure * 100)}${NO_BREAK_SPACE}% of ${formatDifference(edgeKPa, unit)} absolute`,
+      figure: give(check.dataErrorKPa), isSum: false,
+    },
+    { term: 'Together', by: `at the ${edge} pressure`, figure: give(check.toleranceKPa + check.dataErrorKPa), isSum: true },
+    { term: `${designation} shows`, by: 'dew to bubble', figure: bandOf(checked), isSum: false },
+    { term: 'Agrees', by: null, figure: span(checked, check.agreesFromKPa, check.agreesToKPa), isSum: true },
   ]
 }
 
-function percent(share: number): string {
-  return `${Number((share * 100).toFixed(1))}\u00A0%`
+function span({ reading, unit }: CheckedPressure, fromKPa: number, toKPa: number): string {
+  const from = formatGauge(inThisAir(fromKPa, reading.barometerKPa), unit)
+  const to = formatGauge(inThisAir(toKPa, reading.barometerKPa), unit)
+  return from === to ? to : `${from.split(NO_BREAK_SPACE)[0]} to ${to}`
 }

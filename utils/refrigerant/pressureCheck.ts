@@ -16,12 +16,15 @@ export interface PressureCheck {
   absoluteKPa: number
   /** Above the bubble pressure; negative within the band and below it. */
   excessKPa: number
-  /** What the gauge and the thermometer together may be off. */
-  toleranceKPa: number
-  /** What the refrigerant's own figures may be off. */
-  dataErrorKPa: number
   /** How fast the nearer edge of the band rises with temperature. */
   slopeKPaPerC: number
+  /** What the gauge and the thermometer together may be off, at the nearer edge. */
+  toleranceKPa: number
+  /** What the refrigerant's own figures may be off, at the nearer edge. */
+  dataErrorKPa: number
+  /** From where to where a reading agrees: each edge of the band, widened by what it may be off. Absolute. */
+  agreesFromKPa: number
+  agreesToKPa: number
   verdict: PressureVerdict
   relativeErrorPressure: number
   accuracyGroup: Refrigerant['accuracyGroup']
@@ -47,21 +50,21 @@ export function pressureCheck(input: PressureReading & { refrigerant: Refrigeran
   const absoluteKPa = absolutePressureKPa(input)
   if (!(absoluteKPa >= 0)) throw new RangeError(`No absolute pressure: ${absoluteKPa}`)
   if (!(gaugeErrorKPa >= 0) || !(thermometerErrorC >= 0)) throw new RangeError('An instrument cannot be off by less than nothing')
-  const { bubblePressureKPa: bubbleKPa, dewPressureKPa: dewKPa, ...sureness } = saturationAt(refrigerant, temperatureC)
-  const isNearerBubble = absoluteKPa >= (bubbleKPa + dewKPa) / 2
-  const slopeKPaPerC = slopeAt(refrigerant, temperatureC, isNearerBubble ? 'bubblePressureKPa' : 'dewPressureKPa')
-  const toleranceKPa = gaugeErrorKPa + Math.abs(slopeKPaPerC) * thermometerErrorC
-  const dataErrorKPa = sureness.relativeErrorPressure * (isNearerBubble ? bubbleKPa : dewKPa)
-  const { relativeErrorPressure, accuracyGroup, doubt, source } = sureness
+  const { dewPressureKPa: dewKPa, bubblePressureKPa: bubbleKPa, relativeErrorPressure, accuracyGroup, doubt, source } = saturationAt(refrigerant, temperatureC)
+  const dew = edgeOf(input, 'dewPressureKPa', dewKPa)
+  const bubble = edgeOf(input, 'bubblePressureKPa', bubbleKPa)
+  const nearer = absoluteKPa >= (bubbleKPa + dewKPa) / 2 ? bubble : dew
+  const agreesFromKPa = Math.max(0, dewKPa - dew.toleranceKPa - dew.dataErrorKPa)
+  const agreesToKPa = bubbleKPa + bubble.toleranceKPa + bubble.dataErrorKPa
   return {
     dewKPa,
     bubbleKPa,
     absoluteKPa,
     excessKPa: absoluteKPa - bubbleKPa,
-    toleranceKPa,
-    dataErrorKPa,
-    slopeKPaPerC,
-    verdict: verdictOf(absoluteKPa, dewKPa, bubbleKPa, toleranceKPa + dataErrorKPa),
+    ...nearer,
+    agreesFromKPa,
+    agreesToKPa,
+    verdict: absoluteKPa > agreesToKPa ? 'excess' : absoluteKPa < agreesFromKPa ? 'below' : 'agrees',
     relativeErrorPressure,
     accuracyGroup,
     doubt,
@@ -86,13 +89,22 @@ function bothScales(tC: number): string {
   return `${formatThermometer(tC, 'psi')} (${formatThermometer(tC, 'bar')})`
 }
 
-function verdictOf(absoluteKPa: number, dewKPa: number, bubbleKPa: number, marginKPa: number): PressureVerdict {
-  if (absoluteKPa > bubbleKPa + marginKPa) return 'excess'
-  return absoluteKPa < dewKPa - marginKPa ? 'below' : 'agrees'
+type Edge = 'dewPressureKPa' | 'bubblePressureKPa'
+
+/** What a reading at an edge of the band may be off. */
+function edgeOf(
+  { refrigerant, temperatureC, gaugeErrorKPa, thermometerErrorC }: PressureReading & { refrigerant: Refrigerant }, edge: Edge, edgeKPa: number,
+): Pick<PressureCheck, 'slopeKPaPerC' | 'toleranceKPa' | 'dataErrorKPa'> {
+  const slopeKPaPerC = slopeAt(refrigerant, temperatureC, edge)
+  return {
+    slopeKPaPerC,
+    toleranceKPa: gaugeErrorKPa + Math.abs(slopeKPaPerC) * thermometerErrorC,
+    dataErrorKPa: refrigerant.relativeErrorPressure * edgeKPa,
+  }
 }
 
 // By a difference, one-sided at an end of the table.
-function slopeAt(refrigerant: Refrigerant, tC: number, edge: 'bubblePressureKPa' | 'dewPressureKPa'): number {
+function slopeAt(refrigerant: Refrigerant, tC: number, edge: Edge): number {
   const low = hasLiquidAt(refrigerant, tC - SLOPE_STEP_C) ? tC - SLOPE_STEP_C : tC
   const high = hasLiquidAt(refrigerant, tC + SLOPE_STEP_C) ? tC + SLOPE_STEP_C : tC
   return (saturationAt(refrigerant, high)[edge] - saturationAt(refrigerant, low)[edge]) / (high - low)

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { parseFigure } from '~~/utils/quantity/figure'
+import { parseFigure, parseSignedFigure } from '~~/utils/quantity/figure'
 
 describe('a typed figure', () => {
   it.each([
@@ -19,5 +19,20 @@ describe('a typed figure', () => {
 
   it.each(['abc', '-3', '1e3', '12 lb', '.', ',', 'Infinity', '0x10', '1 022'])('%j is not a number', (text) => {
     expect(parseFigure(text)).toEqual({ error: 'not-a-number' })
+  })
+})
+
+describe('a figure that may lie below zero', () => {
+  it('takes one minus before it, of either sort, and otherwise what any figure takes', () => {
+    expect(parseSignedFigure('-4.9')).toEqual({ value: -4.9 })
+    expect(parseSignedFigure(' \u22124,9 ')).toEqual({ value: -4.9 })
+    expect(parseSignedFigure('80')).toEqual({ value: 80 })
+    expect(parseSignedFigure('-0')).toEqual({ value: 0 })
+  })
+
+  it('is none without a figure behind the minus, or with two', () => {
+    expect(parseSignedFigure('')).toEqual({ error: 'empty' })
+    for (const text of ['-', '--4', '+4', '4-']) expect(parseSignedFigure(text), text).toEqual({ error: 'not-a-number' })
+    expect(parseSignedFigure('-1,022')).toEqual({ error: 'ambiguous' })
   })
 })

@@ -39,6 +39,14 @@ describe('a pressure against the band of a blend', () => {
     expect(low.verdict).toBe('below')
   })
 
+  it('says from where to where a reading agrees, each edge by its own slope and its own figures', () => {
+    const { agreesFromKPa, agreesToKPa } = pressureCheck({ ...exact, pressureKPa: 900, gaugeErrorKPa: 7, thermometerErrorC: 2 })
+    // 800 - 7 - 2 x 7.75 - 8 and 1,000 + 7 + 2 x 9.75 + 10, the slopes by the secants on either side of the row.
+    expect(Math.abs(agreesFromKPa - 769.5)).toBeLessThan(1)
+    expect(Math.abs(agreesToKPa - 1036.5)).toBeLessThan(1)
+    expect(pressureCheck({ ...exact, pressureKPa: 900, gaugeErrorKPa: 900 }).agreesFromKPa).toBe(0)
+  })
+
   it('measures the excess from the bubble pressure: negative within the band', () => {
     expect(pressureCheck({ ...exact, pressureKPa: 950 }).excessKPa).toBeCloseTo(-50, 9)
     expect(pressureCheck({ ...exact, pressureKPa: 1050 }).excessKPa).toBeCloseTo(50, 9)
