@@ -41,10 +41,12 @@ export const anyPartialStamp: fc.Arbitrary<Stamp> = fc.record({
   tareIncludesValve,
 }))
 
-/** Any rule that a firm may set, and figures above what it may, which must not count. */
+const anyThousandths = fc.oneof(fc.integer({ min: 1, max: 1000 }), fc.integer({ min: 790, max: 1000 }), fc.constant(1000))
+
+/** Any rule that a firm may set, and figures above what it may, which must not count; often near the highest. */
 export const anyPolicy: fc.Arbitrary<FillPolicy> = fc.record({
-  shareThousandths: fc.integer({ min: 1, max: 1000 }),
-  ceilingThousandths: fc.integer({ min: 1, max: 1000 }),
+  shareThousandths: anyThousandths,
+  ceilingThousandths: anyThousandths,
   options: fc.record({ liquid130F: fc.boolean(), unRatio: fc.boolean() }),
 })
 

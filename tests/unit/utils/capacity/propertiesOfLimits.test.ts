@@ -153,6 +153,20 @@ describe('every answer', () => {
     }), { numRuns: 500 })
   })
 
+  it('calls a rule unsafe above liquid-full at 131 F, above our margin above the ceiling, and else neither', () => {
+    fc.assert(fc.property(anyInput, fc.constantFrom(...LIQUID_WHEN_HOT.map(({ designation }) => designation)), (input, refrigerant) => {
+      const full = litres({ waterCapacity: input.stamp.waterCapacity! }) * rowAt(CATALOGUE.refrigerants.get(refrigerant)!, HOT_C).liquidDensity
+      const ceiling = full * Math.min(0.95, input.policy.ceilingThousandths / 1000)
+      for (const { rule, standing, factors } of answerTo({ ...input, refrigerant }).terms) {
+        if (factors.length === 0 || rule === 'hot-ceiling') continue
+        const grams = gramsOfProduct(factors)
+        if (standing === 'unsafe') expect(grams, rule).toBeGreaterThan(full - 1e-6)
+        else if (standing === 'above-margin') expect([grams > ceiling - 1e-6, grams < full + 1e-6], rule).toEqual([true, true])
+        else expect(grams, rule).toBeLessThan(ceiling + 1e-6)
+      }
+    }), { numRuns: 500 })
+  })
+
   it('shows as each figure the product of its factors', () => {
     fc.assert(fc.property(anyQuestion, (input) => {
       for (const { rule, limitGrams, factors } of answerTo(input).terms) {
