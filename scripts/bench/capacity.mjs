@@ -12,7 +12,7 @@ const WARM_UP_ROUNDS = 60
 const LOOK_UPS_A_ROUND = 2000
 const ANSWERS_A_ROUND = 200
 
-const { CATALOGUE, DEFAULT_FILL_POLICY, capacityInWords, capacityOf, initialState, saturationAt } = await built('capacityParts.ts')
+const { CATALOGUE, DEFAULT_FILL_POLICY, capacityInWords, capacityOf, initialState, saturationAt } = await built('capacityParts.mjs')
 
 /** A file of this folder bundled as for the server: a loader that keeps modules apart would time its own wrappers. */
 async function built(file) {

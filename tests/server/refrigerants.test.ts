@@ -67,11 +67,75 @@ describe('the fill limit of a stamp', () => {
     expect((await fillLimit({ gross: '14.95lb' })).body).toMatchObject({ netGrams: 0, roomGrams: 8_708 })
   })
 
+  it('says how full of liquid it is at 131 F and when it is liquid-full', async () => {
+    // 24.0 lb = 10.886217 kg, / 0.99904 = 10.896678 L; R-22: 8618 g / 10.896678 L = 790.88 kg/m3; (790.88 - 97.9) / (1057.2 - 97.9).
+    const { body } = await fillLimit({ gross: '34.0lb' })
+    expect(body.hotLiquidShare).toBeCloseTo(0.72238, 4)
+    expect(body.liquidFull).toEqual({ aboveC: 70 })
+    // R-410A: 60.0 - 15.0 = 45.0 lb in a cylinder of 24.0 lb of water are more than any liquid of it.
+    expect((await fillLimit({ refrigerant: 'R-410A', gross: '60.0lb' })).body).toMatchObject({ hotLiquidShare: 1, liquidFull: { c: -40 } })
+    expect((await fillLimit({ refrigerant: 'R-410A', gross: '15.5lb' })).body).toMatchObject({ hotLiquidShare: 0, liquidFull: { never: true } })
+  })
+
+  it('lists every rule with its factors, its sum in words and its source', async () => {
+    const { body } = await fillLimit({ condition: 'burnt' })
+    expect(body.terms.map(term => term.rule)).toEqual([
+      'water-weight', 'liquid-77F', 'filling-density', 'hot-ceiling', 'hot-pressure', 'liquid-130F', 'un-ratio', 'oily',
+    ])
+    expect(body.governingRule).toBe('oily')
+    const water = body.terms.find(term => term.rule === 'water-weight')
+    expect(water?.factors).toEqual([{ name: 'share', value: 0.8, unit: '' }, { name: 'water-capacity', value: 24, unit: 'lb' }])
+    expect(water?.working.replaceAll('\u00A0', ' ')).toBe('0.80 × WC 24.0 lb = 19.20 lb')
+    expect(body.terms.find(term => term.rule === 'hot-pressure')).toMatchObject({ limitGrams: null, because: expect.stringContaining('R-22') })
+  })
+
+  it('takes a named blend that is known by its composition, but has no stop weight for it', async () => {
+    const { status, body } = await fillLimit({ refrigerant: 'R-407D', gross: '20lb' })
+    expect(status).toBe(200)
+    expect(body).toMatchObject({ forRefrigerant: 'R-407D', fillLimitGrams: 8_708, stopWeightGrams: null, roomGrams: null })
+    expect(body.refusals.map(refusal => refusal.code)).toContain('pressure-class')
+  })
+
   it.each([
     [{ waterCapacity: '24' }, 400], [{ waterCapacity: '-24lb' }, 400], [{ tareWeight: '15lb17oz' }, 400], [{ spec: 'DOT-9' }, 400],
     [{ colour: 'red' }, 400], [{ servicePressurePsig: '0' }, 400], [{ refrigerant: 'R-9999' }, 422],
   ])('refuses %j with %i', async (query, status) => {
     expect((await fillLimit(query as unknown as Record<string, string>)).status).toBe(status)
+  })
+})
+
+describe('the fill limit of a composition', () => {
+  function ofComposition(composition: string, more: Record<string, string> = {}) {
+    const query = new URLSearchParams({ composition, waterCapacity: '24.0lb', tareWeight: '15.0lb', spec: 'DOT-4BA400', flammableMarked: 'true', ...more })
+    return admin.client.get<FillLimitAnswer & ProblemDetails>(`/api/fill-limit?${query}`)
+  }
+
+  it('is that of its parts by ideal mixing less 5 %, without a stop weight because its pressure is not known', async () => {
+    const { status, body } = await ofComposition('R-32:50,R-125:50')
+    expect(status).toBe(200)
+    // At 131 F 827.916 kg/m3 with the derate; x 0.95 x 10.896678 L = 8,570.5 g, less than 80 % of the water, 8,708 g.
+    expect(body).toMatchObject({ forRefrigerant: 'R-32:50,R-125:50', governingRule: 'hot-ceiling', fillLimitGrams: 8_570, stopWeightGrams: null })
+    expect(body.refusals.map(refusal => refusal.code)).toEqual(['pressure-class'])
+    expect(body.terms.find(term => term.rule === 'hot-ceiling')?.factors.map(factor => factor.name))
+      .toEqual(['share', 'volume', 'liquid-density', 'derate'])
+  })
+
+  it.each([
+    ['R-32:50,R-125:49.8', 'sum to 99.8 %'], ['R-9999:100', 'R-9999'], ['R-32:97,R-744:3', 'critical temperature'], ['R-32:50,R-32:50', 'twice'],
+  ])('is refused for %s, with the reason', async (composition, reason) => {
+    const { status, body } = await ofComposition(composition)
+    expect(status).toBe(422)
+    expect(body.errors?.[0]).toMatchObject({ path: 'composition', message: expect.stringContaining(reason) })
+  })
+
+  it.each(['R-32', 'R-32:fifty', 'R-32:50;R-125:50', ''])('is refused as no composition: "%s"', async (composition) => {
+    expect((await ofComposition(composition)).status).toBe(400)
+  })
+
+  it('is asked for in place of a refrigerant: never with one, and not with neither', async () => {
+    expect((await ofComposition('R-32:50,R-125:50', { refrigerant: 'R-22' })).status).toBe(422)
+    const neither = await admin.client.get('/api/fill-limit?waterCapacity=24.0lb&tareWeight=15.0lb&spec=DOT-4BA400')
+    expect(neither.status).toBe(422)
   })
 })
 
@@ -129,6 +193,7 @@ describe('the catalogue of refrigerants', () => {
     expect(body.composition).toEqual([{ component: 'R-32', massPercent: 50 }, { component: 'R-125', massPercent: 50 }])
     expect(body.source).not.toBe('')
     expect(body).not.toHaveProperty('table')
+    expect(body).not.toHaveProperty('curves')
     expect(body).not.toHaveProperty('curves')
     expect((await admin.client.get('/api/refrigerants/R-9999')).status).toBe(404)
   })
