@@ -2,7 +2,7 @@ import { useApi } from '~~/composables/useApi'
 import { useFirmRulesStore } from '~~/stores/firmRules'
 import { usePostingStore } from '~~/stores/posting'
 import type { CustodyLogAnswer, CylinderView, LogLine } from '~~/utils/contract/custody'
-import type { RefrigerantRecordAnswer } from '~~/utils/contract/refrigerants'
+import type { CompositionRecordAnswer, RefrigerantRecordAnswer } from '~~/utils/contract/refrigerants'
 
 const LINES_AT_ONCE = 200
 
@@ -20,7 +20,7 @@ export function useWorking(view: Ref<CylinderView | null | undefined>) {
     const lines: LogLine[] = []
     let cursor: string | null = null
     do {
-      const page: CustodyLogAnswer = await api.get<CustodyLogAnswer>(`/api/cylinders/${id}/events`, { limit: LINES_AT_ONCE, cursor })
+      const page: CustodyLogAnswer = await api.get<CustodyLogAnswer>(`/api/cylinders/${id}/events`, { limit: LINES_AT_ONCE, ...cursor === null ? {} : { cursor } })
       lines.push(...page.items)
       cursor = page.nextCursor
     } while (cursor !== null)
@@ -32,7 +32,7 @@ export function useWorking(view: Ref<CylinderView | null | undefined>) {
     const [lines, policy, refrigerant] = await Promise.all([
       wholeLog(view.value.id),
       rules.load(),
-      about.value ? api.get<RefrigerantRecordAnswer>(`/api/refrigerants/${encodeURIComponent(about.value)}`).catch(() => null) : null,
+      about.value ? api.get<RefrigerantRecordAnswer | CompositionRecordAnswer>(`/api/refrigerants/${encodeURIComponent(about.value)}`).catch(() => null) : null,
     ])
     return { lines, policy, refrigerant }
   }, { watch: [() => posting.recorded], deep: false })

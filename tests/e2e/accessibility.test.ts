@@ -45,7 +45,17 @@ const SCREENS: Record<string, Screen[]> = {
     { as: 'trainee', at: demo => `/c/${demo.codes.usual}/act/weighed` },
   ],
   'c/[ref]/act/corrected.vue': [{ as: manager, at: demo => `/c/${demo.codes.usual}/act/corrected?event=${demo.event}` }],
+  'c/[ref]/working.vue': [
+    ...(['usual', 'empty', 'overfilled', 'onTwo'] as const).map(code => ({ as: technician, at: (demo: DemoFleet) => `/c/${demo.codes[code]}/working` })),
+    { as: manager, at: demo => `/c/${demo.codes.empty}/working?refrigerant=R-22` },
+  ],
   'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
+  'fill-limit.vue': [
+    { as: technician, at: () => '/fill-limit' },
+    { as: technician, at: () => '/fill-limit?refrigerant=R-290&waterCapacity=47.7lb&tareWeight=27.9lb&spec=DOT-4BA400' },
+    { as: manager, at: () => '/fill-limit?composition=R-32:50&waterCapacity=fortyseven&spec=DOT-9X' },
+    { as: manager, at: () => '/fill-limit?refrigerant=R-744&waterCapacity=47.7lb&tareWeight=97.9lb&spec=DOT-3AA1800' },
+  ],
   'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }],
   'fleet/register.vue': [{ as: warehouse, at: () => '/fleet/register' }],
   'invitation/[token].vue': [
@@ -79,6 +89,10 @@ const PRESSED: Record<string, Screen> = {
     await page.getByLabel('Password', { exact: true }).fill('not-this-one-0000')
     await page.getByRole('button', { name: 'Sign in' }).click()
     await page.getByRole('alert').waitFor()
+  } },
+  'a cylinder with heat': { as: technician, at: demo => `/c/${demo.codes.usual}`, after: async (page) => {
+    await page.getByText('With heat').click()
+    await page.getByRole('slider').waitFor()
   } },
   'a weight that is missing': { as: warehouse, at: demo => `/c/${demo.codes.usual}/act/weighed`, after: async (page) => {
     await page.getByRole('button', { name: 'Record the weight' }).click()

@@ -94,12 +94,12 @@ export const fillLimitQuery = z.strictObject({
   waterCapacity: massInQuery.optional(),
   tareWeight: massInQuery.optional(),
   spec: specInQuery,
-  servicePressurePsig: z.coerce.number().positive().max(10_000).optional(),
+  servicePressurePsig: z.coerce.number('must be a figure in psig').positive('must be above 0').max(10_000, 'must be at most 10,000').optional(),
   flammableMarked: z.enum(['true', 'false']).default('false'),
   gross: massInQuery.optional(),
-  condition: z.enum(['clean', 'suspect', 'burnt', 'mixed', 'unknown']).default('clean'),
+  condition: z.enum(['clean', 'suspect', 'burnt', 'mixed', 'unknown'], 'must be clean, suspect, burnt, mixed or unknown').default('clean'),
   /** A stricter share than the firm's, to compare with. */
-  share: z.coerce.number().positive().max(0.8).optional(),
+  share: z.coerce.number('must be a share such as 0.75').positive('must be above 0').max(0.8, 'must be at most 0.80').optional(),
 })
 export type FillLimitQuery = z.output<typeof fillLimitQuery>
 

@@ -1,4 +1,5 @@
 import type { LiquidFull } from '../capacity/liquidFull'
+import type { FillTerm } from '../capacity/types'
 import type { CapacityView } from '../custody/cylinderView'
 import { fahrenheitFromCelsius } from '../quantity/temperature'
 
@@ -15,7 +16,7 @@ export function volumeShare(share: number): string {
   return `${Math.min(99, Math.max(1, Math.round(share * 100)))}\u00A0%`
 }
 
-type Behaviour = Pick<CapacityView, 'forRefrigerant' | 'hotLiquidShare' | 'terms'>
+type Behaviour = Pick<CapacityView, 'forRefrigerant' | 'hotLiquidShare'> & { terms: readonly FillTerm[] }
 
 /** How full a cylinder is at 131 F, the hottest that the rules reckon with; null where that is not known. An empty one as filled to its limit. */
 export function hotSentence(capacity: Behaviour, nothingInIt: boolean): string | null {
@@ -29,7 +30,7 @@ export function hotSentence(capacity: Behaviour, nothingInIt: boolean): string |
 }
 
 /** Whether there is no liquid at 131 F, so that no ceiling below liquid-full can be given. */
-export function isGasWhenHot({ terms }: Pick<CapacityView, 'terms'>): boolean {
+export function isGasWhenHot({ terms }: Pick<Behaviour, 'terms'>): boolean {
   return terms.some(term => term.rule === 'hot-ceiling' && term.limitGrams === null && term.standing !== 'unsafe')
 }
 
@@ -38,5 +39,5 @@ export function liquidFullWords(full: LiquidFull): string {
   if ('never' in full) return 'never: it turns to vapor first'
   return 'c' in full
     ? `${Math.floor(fahrenheitFromCelsius(full.c))}\u00A0°F`
-    : `above ${Math.floor(fahrenheitFromCelsius(full.aboveC))}\u00A0°F`
+    : `above\u00A0${Math.floor(fahrenheitFromCelsius(full.aboveC))}\u00A0°F`
 }

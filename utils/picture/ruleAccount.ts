@@ -1,7 +1,6 @@
-import { resultText } from '../capacity/rules/sumText'
 import type { Factor, FillRule, FillTerm } from '../capacity/types'
 import { RULE_WORDS } from '../capacity/words'
-import { exactGrams, formatFigure, formatMass, type MassUnit } from '../quantity/mass'
+import { formatFigure, formatMass, formatReading, hundredthsText, type MassUnit } from '../quantity/mass'
 import { fahrenheitFromCelsius } from '../quantity/temperature'
 import type { StatusKind } from './status'
 
@@ -67,13 +66,6 @@ export function standingWords({ rule, standing, limitGrams }: FillTerm): RuleAcc
   return { text: 'not in force: to compare', kind: null }
 }
 
-/** What the factors of a rule make together, unrounded; null where there are none. Units: grams. */
-export function productGrams(factors: readonly Factor[]): number | null {
-  if (factors.length === 0) return null
-  const product = factors.reduce((sum, factor) => sum * (factor.unit === '%' ? factor.value / 100 : factor.value), 1)
-  return exactGrams({ unit: ownUnit(factors), value: product })
-}
-
 /** Figures filled up at their right so that their decimal points stand under one another in a right-aligned column. */
 export function alignDecimals(figures: readonly string[]): string[] {
   const tail = (figure: string) => /^\S*\d\.(\d+)$/.exec(figure)?.[1]?.length ?? -1
@@ -94,7 +86,8 @@ function factorLine(factor: Factor, index: number, termSource: string): AccountL
   }
 }
 
-function factorFigure({ name, value }: Factor): string {
+function factorFigure({ name, value, unit }: Factor): string {
+  if (unit === 'lb' || unit === 'kg') return formatReading({ unit, value }).split('\u00A0')[0]!
   const decimals = DECIMALS[name]
   if (decimals !== undefined) return value.toFixed(decimals)
   const entered = String(Number(value.toFixed(MOST_DECIMALS)))
@@ -103,17 +96,15 @@ function factorFigure({ name, value }: Factor): string {
 
 // An unsafe figure is not shown, so neither is the product that it would be rounded from.
 function resultLines({ factors, limitGrams }: FillTerm, unit: MassUnit): AccountLine[] {
-  const grams = productGrams(factors)
-  if (grams === null || limitGrams === null) return []
+  if (factors.length === 0 || limitGrams === null) return []
   const own = ownUnit(factors)
   const mine = unit === 'kg' ? 'kg' : 'lb'
   const line = (sign: AccountLine['sign'], words: string, figure: string, symbol: string): AccountLine =>
     ({ sign, words, note: null, figure, unit: symbol, isResult: true })
-  const product = (symbol: 'lb' | 'kg') => resultText(grams, { unit: symbol, value: 0 }).split(' ')[0]!
   const { figure, symbol } = formatFigure(limitGrams, unit, 'down')
   return [
-    line('=', 'together', product(own), own),
-    ...own === mine ? [] : [line('=', `in ${mine}`, product(mine), mine)],
+    line('=', 'together', hundredthsText(limitGrams, own), own),
+    ...own === mine ? [] : [line('=', `in ${mine}`, hundredthsText(limitGrams, mine), mine)],
     line('', 'rounded down', figure, symbol),
   ]
 }

@@ -1,8 +1,9 @@
+import { productGrams } from '../capacity/rules/factors'
 import type { FillRule, FillTerm, TermStanding } from '../capacity/types'
 import { RULE_WORDS } from '../capacity/words'
 import { formatMass, type MassUnit } from '../quantity/mass'
 import { scaleTicks, type BeamTick } from './beam'
-import { productGrams, standingWords } from './ruleAccount'
+import { standingWords } from './ruleAccount'
 
 /** One rule on the common scale; `at` is its limit's place from the left in percent, null where it has no figure to show. */
 export type RuleMark = { rule: FillRule, title: string, at: number | null, figure: string, governs: boolean, standing: TermStanding }
@@ -50,9 +51,9 @@ export function layOutRules(terms: readonly FillTerm[], governingRule: FillRule 
   }
 }
 
-/** The weight that leaves no vapor at 131 F: what the hot ceiling takes its share of; null where it has no sum. Units: net grams. */
+/** The weight that leaves no vapor at 131 F: what the hot ceiling takes its share of; null where there is none. Units: net grams. */
 export function liquidFullWhenHotGrams(terms: readonly FillTerm[]): number | null {
-  const ceiling = terms.find(term => term.rule === 'hot-ceiling' && term.limitGrams !== null)
+  const ceiling = terms.find(term => term.rule === 'hot-ceiling' && term.factors.length > 0)
   return ceiling ? productGrams(ceiling.factors.filter(factor => factor.name !== 'share')) : null
 }
 

@@ -113,6 +113,16 @@ export function formatFigure(grams: number, unit: MassUnit, rounding: MassRoundi
   return { figure: pounds === 0 ? `${sign}${ounces}` : `${sign}${pounds}${NO_BREAK_SPACE}lb${NO_BREAK_SPACE}${ounces}`, symbol: 'oz' }
 }
 
+/**
+ * A mass a step finer than a scale shows it, for a sum that is then rounded to the scale.
+ *
+ * Rounding: down to two decimals, by the same half gram as a division, so that 37.70 is not followed by 37.6.
+ */
+export function hundredthsText(grams: number, unit: 'lb' | 'kg'): string {
+  const hundredth = exactGrams({ unit, value: 1 }) / 100
+  return (Math.floor((grams + CONVERSION_NOISE_GRAMS) / hundredth) / 100).toFixed(2)
+}
+
 /** A reading as it was entered, with no fewer decimals than its scale shows. */
 export function formatReading(reading: MassReading): string {
   if (reading.unit === 'lb-oz') {

@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { MassReading, MassUnit } from '~~/utils/quantity/mass'
 import {
-  ceilToDivision, exactGrams, floorToDivision, formatFigure, formatMass, formatReading, massText, nearestToDivision,
+  ceilToDivision, exactGrams, floorToDivision, formatFigure, formatMass, formatReading, hundredthsText, massText, nearestToDivision,
   parseMassText, readingGrams,
 } from '~~/utils/quantity/mass'
 
@@ -152,5 +152,17 @@ describe('a reading as it is shown', () => {
     [{ unit: 'kg', value: 18.9 }, '18.90 kg'],
   ])('keeps what was entered: %j', (reading, shown) => {
     expect(plain(formatReading(reading))).toBe(shown)
+  })
+})
+
+describe('a sum before it is rounded to a scale', () => {
+  it.each([
+    // 38.16 lb = 17,309.08 g; 0.005 lb less still shows 38.15.
+    [17_309, 'lb', '38.16'], [17_307, 'lb', '38.15'],
+    // 37.70 lb = 17,100.43 g: within half a gram it is reached, below not.
+    [17_100, 'lb', '37.70'], [17_099, 'lb', '37.69'],
+    [17_100, 'kg', '17.10'], [17_099, 'kg', '17.09'],
+  ] as const)('%d g stand as %s %s', (grams, unit, text) => {
+    expect(hundredthsText(grams, unit)).toBe(text)
   })
 })

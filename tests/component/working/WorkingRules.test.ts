@@ -1,0 +1,36 @@
+import { mountSuspended } from '@nuxt/test-utils/runtime'
+import { expect, it } from 'vitest'
+import WorkingRules from '~~/components/working/WorkingRules.vue'
+import type { FillTerm } from '~~/utils/capacity/types'
+
+// 0.80 x 20 kg = 16 kg.
+const WATER: FillTerm = {
+  rule: 'water-weight', limitGrams: 16_000, standing: 'in-force', source: 'a guideline',
+  factors: [{ name: 'share', value: 0.8, unit: '' }, { name: 'water-capacity', value: 20, unit: 'kg' }],
+}
+
+function mounted(terms: FillTerm[], governingRule: FillTerm['rule'] | null) {
+  return mountSuspended(WorkingRules, { props: { terms, governingRule, unit: 'kg' as const } })
+}
+
+it('sets each rule as an account, the one that governs first', async () => {
+  const wrapper = await mounted([{ ...WATER, rule: 'liquid-77F', limitGrams: 17_000 }, WATER], 'water-weight')
+  const [first, second] = wrapper.findAll('li')
+  expect(first!.text()).toMatch(/water weight.*governs.*16\.00.kg/s)
+  expect(first!.findAll('tr').map(row => row.findAll('td, th').map(cell => cell.text()))).toEqual([
+    ['', 'share', '0.80', ''], ['×', 'water capacity, WC', '20.00', 'kg'], ['=', 'together', '16.00', 'kg'], ['', 'rounded down', '16.00', 'kg'],
+  ])
+  expect(second!.text()).not.toContain('governs')
+})
+
+it('gives no figure of a rule that would overfill', async () => {
+  const wrapper = await mounted([{ ...WATER, limitGrams: null, because: 'unsafe for R-290: liquid-full below 131 °F', standing: 'unsafe' }], null)
+  expect(wrapper.text()).toContain('unsafe for this refrigerant')
+  expect(wrapper.text()).not.toMatch(/16\.00/)
+})
+
+it('says why a rule has none', async () => {
+  const wrapper = await mounted([{ ...WATER, limitGrams: null, factors: [], because: 'the table does not name R-410A' }], null)
+  expect(wrapper.text()).toContain('no figure')
+  expect(wrapper.text()).toContain('the table does not name R-410A.')
+})
