@@ -50,6 +50,7 @@ describe('the level of evacuation', () => {
     const asked = { appliance: 'small', refrigerant: 'R-134a', charge: '1kg', machineMade: '2004', compressorRuns: 'true' }
     expect((await level({ ...asked, recovered: '0.9kg' })).body).toMatchObject({ level: { value: 90 }, alternative: { value: 4 }, onGauges: null, judged: { verdict: 'reached' } })
     expect((await level({ ...asked, recovered: '0.89kg' })).body.judged).toMatchObject({ verdict: 'not-reached' })
+    expect((await level({ ...asked, charge: '2.0lb', recovered: '1.8lb' })).body.judged).toMatchObject({ verdict: 'reached' })
   })
 })
 

@@ -1,5 +1,5 @@
 import { parseFigure } from '../quantity/figure'
-import { massText, parseMassText, readingGrams, type MassReading } from '../quantity/mass'
+import { exactGrams, massText, parseMassText, type MassReading } from '../quantity/mass'
 import type { EvacuationLevel, Reached } from './types'
 
 export const GAUGES = ['inHg', 'mmHgAbsolute', 'microns', 'recovered'] as const
@@ -65,12 +65,12 @@ export function reachedQuery(draft: ReachedDraft): Record<string, string> {
 }
 
 /** What was read, for a judgement; an empty field is nothing read, never 0. */
-export function readReached(draft: ReachedDraft, gauge: Gauge, chargeGrams: number | null): ReadReached {
+export function readReached(draft: ReachedDraft, gauge: Gauge, charge: MassReading | null): ReadReached {
   const held = read(draft.held, MOST_READ.heldMinutes)
   const heldMinutes = held.value ?? null
   const heldFault = held.fault && { held: held.fault }
   if (gauge === 'recovered') {
-    const reached = draft.recovered && chargeGrams !== null ? { recoveredGrams: readingGrams(draft.recovered), chargeGrams } : null
+    const reached = draft.recovered && charge ? { recoveredGrams: exactGrams(draft.recovered), chargeGrams: exactGrams(charge) } : null
     return { reached, heldMinutes, faults: { ...heldFault } }
   }
   const figure = read(draft.figure, MOST_READ[gauge])

@@ -62,7 +62,7 @@ export interface RequiredLevel {
   source: string
 }
 
-/** What was reached: by a gauge, or by the weight of what came out. */
+/** What was reached: by a gauge, or by the weight of what came out, in grams not rounded, so that 1.8 of 2.0 lb is 90 %. */
 export type Reached = VacuumReading | { recoveredGrams: number, chargeGrams: number }
 
 /** Whether a level was reached, and by how much not. */

@@ -1,5 +1,5 @@
 import type { EvacuationLevelAnswer, EvacuationLevelQuery } from '~~/utils/contract/recovery'
-import { readingGrams } from '~~/utils/quantity/mass'
+import { exactGrams, readingGrams } from '~~/utils/quantity/mass'
 import { requiredLevel } from '~~/utils/recovery/evacuationLevel'
 import { judgeLevel } from '~~/utils/recovery/judgeLevel'
 import type { Reached } from '~~/utils/recovery/types'
@@ -48,8 +48,8 @@ function reachedOf({ inHg, barometerInHg, microns, mmHgAbsolute, recovered, char
   if (microns !== undefined) return { microns }
   if (mmHgAbsolute !== undefined) return { mmHgAbsolute }
   if (recovered === undefined) return null
-  if (!charge || readingGrams(charge) === 0) throw impossible('charge', 'must be known and more than nothing: what was recovered is a share of it')
-  return { recoveredGrams: readingGrams(recovered), chargeGrams: readingGrams(charge) }
+  if (!charge || exactGrams(charge) === 0) throw impossible('charge', 'must be known and more than nothing: what was recovered is a share of it')
+  return { recoveredGrams: exactGrams(recovered), chargeGrams: exactGrams(charge) }
 }
 
 function impossible(path: string, message: string) {

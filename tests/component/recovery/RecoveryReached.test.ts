@@ -8,7 +8,7 @@ import { allByRole, byRole } from '../../helpers/roles'
 
 function mounted(level: EvacuationLevel, draft: ReachedDraft, alternative: EvacuationLevel | null = null) {
   const required = { level, alternative }
-  const read = readReached(draft, gaugeFor(draft, level), 1000)
+  const read = readReached(draft, gaugeFor(draft, level), { unit: 'kg', value: 1 })
   const verdict = judgeLevel(required, read.reached, read.heldMinutes)
   return mountSuspended(RecoveryReached, { props: { modelValue: draft, unit: 'kg', required, read, verdict, isChargeKnown: true } })
 }

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { judgeLevel } from '../../../../utils/recovery/judgeLevel'
 import { addressOf, chargeGramsOf, emptyLevel, levelDraft, levelQuery } from '../../../../utils/recovery/levelDraft'
 import { emptyReached, gaugeFor, readReached } from '../../../../utils/recovery/reachedDraft'
 
@@ -69,9 +70,18 @@ describe('what was read', () => {
     expect(readReached({ ...typed, held: 'long' }, 'inHg', null)).toMatchObject({ reached: { inHg: 28.5 }, heldMinutes: null, faults: { held: expect.any(String) as string } })
   })
 
+  it('of 1.8 from 2.0 lb is 90 %, whole grams or not, and of 1.79 is not', () => {
+    const share = (value: number) => {
+      const { reached } = readReached({ ...emptyReached(), recovered: { unit: 'lb', value } }, 'recovered', { unit: 'lb', value: 2 })
+      return judgeLevel({ level: { unit: 'percent-of-charge', value: 90 }, alternative: null }, reached, null).verdict
+    }
+    expect(share(1.8)).toBe('reached')
+    expect(share(1.79)).toBe('not-reached')
+  })
+
   it('is a share only of a charge that is known', () => {
     const weighed = { ...emptyReached(), recovered: { unit: 'kg' as const, value: 0.9 } }
-    expect(readReached(weighed, 'recovered', 1000).reached).toEqual({ recoveredGrams: 900, chargeGrams: 1000 })
+    expect(readReached(weighed, 'recovered', { unit: 'kg', value: 1 }).reached).toEqual({ recoveredGrams: 900, chargeGrams: 1000 })
     expect(readReached(weighed, 'recovered', null).reached).toBeNull()
   })
 })
