@@ -68,10 +68,11 @@ describe('a pressure check without a cylinder', () => {
   })
 
   it('refuses what no gauge, thermometer or barometer shows', async () => {
-    for (const wrong of [
+    const wrong: Record<string, string>[] = [
       { pressureKPa: 'high' }, { pressureKPa: '' }, { pressureKPa: '-1' }, { pressureKPa: '1e3' }, { temperatureC: '300' }, { gaugeErrorKPa: '-1' },
       { barometerKPa: '29.92' }, { pressureKPa: '10', barometerKPa: '84.3' }, { humidity: '40' },
-    ]) expect((await check(wrong)).status, JSON.stringify(wrong)).toBe(400)
+    ]
+    for (const query of wrong) expect((await check(query)).status, JSON.stringify(query)).toBe(400)
     expect((await admin.client.get('/api/pressure-check?refrigerant=R-22')).status).toBe(400)
   })
 
