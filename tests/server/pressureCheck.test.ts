@@ -62,6 +62,8 @@ describe('a pressure check without a cylinder', () => {
     expect(gas.status).toBe(422)
     expect(gas.body.detail).toMatch(/R-744 has no liquid: from 87\.\d\u00A0°F \(31\.\d\u00A0°C\) up it is a gas/)
     expect(gas.body.errors).toEqual([{ path: 'temperatureC', message: 'is outside the table of this refrigerant' }])
+    // A full double is a figure like any other.
+    expect((await check({ temperatureC: '26.666666666666668' })).status).toBe(200)
     expect((await check({ temperatureC: '60' })).status).toBe(200)
     expect((await check({ temperatureC: '60.1' })).status).toBe(422)
     expect((await check({ temperatureC: '-40.1' })).status).toBe(422)

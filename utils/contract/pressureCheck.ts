@@ -12,11 +12,13 @@ import { isPressurePossible, PRESSURE_READING_RANGES, type PressureReadingField 
  */
 export const pressureCheckQuery = z.strictObject({
   refrigerant: z.string().min(1).max(40),
-  pressureKPa: readingInQuery('pressureKPa'),
+  pressureKPa: readingInQuery('pressureKPa')
+    .describe('What the gauge shows and 101.325, whatever the barometer: absolute by the standard atmosphere.'),
   temperatureC: readingInQuery('temperatureC'),
   gaugeErrorKPa: readingInQuery('gaugeErrorKPa').optional(),
   thermometerErrorC: readingInQuery('thermometerErrorC').optional(),
-  barometerKPa: readingInQuery('barometerKPa').optional(),
+  barometerKPa: readingInQuery('barometerKPa').optional()
+    .describe('The air at the cylinder, not reduced to sea level; 101.325 unless given. The absolute pressure is pressureKPa - 101.325 + barometerKPa.'),
 }).refine(isPressurePossible, { path: ['pressureKPa'], message: 'is a deeper vacuum than this barometer allows' })
 export type PressureCheckQuery = z.output<typeof pressureCheckQuery>
 
@@ -25,6 +27,6 @@ export type PressureCheckAnswer = PressureCheck & { refrigerant: string }
 
 function readingInQuery(field: PressureReadingField) {
   const { least, most, unit } = PRESSURE_READING_RANGES[field]
-  return z.string().regex(/^-?\d{1,6}(\.\d{1,12})?$/, `must be a number of ${unit}`).transform(Number)
+  return z.string().regex(/^-?\d{1,6}(\.\d{1,20})?$/, `must be a number of ${unit}`).transform(Number)
     .pipe(z.number().min(least, `must be at least ${least} ${unit}`).max(most, `must be at most ${most} ${unit}`))
 }

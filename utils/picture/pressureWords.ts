@@ -25,7 +25,7 @@ export function pressureVerdict({ check, designation, unit }: CheckedPressure): 
     case 'below': return {
       kind: 'att',
       head: `${formatDifference(check.dewKPa - check.absoluteKPa, unit)} below ${designation}`,
-      text: 'It is colder inside than the thermometer says, all of it is vapor, or it is another refrigerant.',
+      text: 'It may be colder inside than the thermometer says, all vapor, or another refrigerant.',
     }
   }
 }
