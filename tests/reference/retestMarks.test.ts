@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import { requalification } from '~~/utils/requalification/requalification'
-import { readRetestMark, retestMarkParts, retestMarkText } from '~~/utils/requalification/retestMark'
+import { readRetestMark } from '~~/utils/requalification/retestMark'
 import { suffixMeaning } from '~~/utils/requalification/retestSuffix'
+import { retestMarkParts, retestMarkText } from '~~/utils/requalification/struckMark'
 
 const NOW = '2026-12'
 

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { RIN } from '../requalification/retestMark'
+import { RIN } from '../requalification/struckMark'
 import { id, line, type Page } from './parts'
 
 export const PLACE_KINDS = ['shop', 'rack', 'van', 'site', 'firm'] as const

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import type { CylinderRow } from '../custody/cylinderView'
 import type { Finding } from '../custody/finding'
-import { RIN } from '../requalification/retestMark'
+import { RIN } from '../requalification/struckMark'
 import { eachOnce, id, line, massReading, page, type Page } from './parts'
 
 const cylinderIds = z.array(id).max(200).refine(ids => eachOnce(ids), 'must name each cylinder once')

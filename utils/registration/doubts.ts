@@ -4,7 +4,7 @@ import { compareMonths, formatMonth, type Month } from '../quantity/month'
 import { scaleAccuracyGrams } from '../quantity/scale'
 import { readMarkEntry } from '../requalification/markEntry'
 import type { RetestMark } from '../requalification/retestMark'
-import { suffixDoubt } from '../requalification/retestSuffix'
+import { suffixDoubt } from '../requalification/suffixDoubt'
 import { splitSpec } from '../requalification/specs'
 import type { RegistrationDraft } from './draft'
 

@@ -1,24 +1,9 @@
-import { formatMonth, type Month } from '../quantity/month'
+import type { Month } from '../quantity/month'
 import { readMonthMark } from '../quantity/monthMark'
-import type { TestMethod } from './requalification'
-import { capitalsAndStars, suffixMeaning, tidySuffix } from './retestSuffix'
+import { capitalsAndStars, tidySuffix } from './retestSuffix'
 
 /** A retest mark as it was read off the steel; null = not typed, or not to be read. */
 export type RetestMark = { month: Month, rin: string | null, suffix: string | null }
-
-/** A mark as it is kept: what was not noted of it is left out. */
-export type KeptMark = { month: Month, method?: TestMethod, rin?: string | null, suffix?: string | null }
-
-/** A mark in the parts that are struck side by side. */
-export type MarkParts = {
-  /** "9". */
-  month: string
-  /** The RIN in its square; null where it is not known. */
-  square: { upper: string, lower: string } | null
-  /** "06". */
-  year: string
-  suffix: string
-}
 
 const MONTH = String.raw`\d{1,2}`
 const YEAR = String.raw`\d{4}|\d{2}`
@@ -31,9 +16,6 @@ const AS_STRUCK = new RegExp(`^(?<month>${MONTH})${GAP}${SQUARE}${GAP}(?<year>${
 const RUN_TOGETHER = new RegExp(String.raw`^(?<month>${MONTH})([A-Z]\d{3})()()(?<year>\d{2})${SUFFIX}$`)
 const MONTH_AND_YEAR = new RegExp(String.raw`^(?<date>(?:${MONTH})${GAP}(?:${YEAR})|\d{4}${GAP}(?:${MONTH}))(?:${GAP}${SQUARE})?${SUFFIX}$`)
 const LOOKS_LIKE_A_YEAR = /^(?:19|20)\d{2}$/
-
-/** The shape of a requalifier identification number, in capitals. Source: 49 CFR 180.213(d). */
-export const RIN = /^[A-Z0-9]{4}$/
 const IN_SQUARE = new RegExp(`^${SQUARE}$`)
 
 /**
@@ -70,34 +52,6 @@ export function readRetestMark(text: string, thisMonth: Month): RetestMark | nul
     rin: rin || (upper && lower ? clockwise(upper, lower) : null),
     suffix: suffix ? tidySuffix(suffix) : null,
   }
-}
-
-/** A mark in the parts that are struck, to draw it beside the steel. Source: 49 CFR 180.213(d). */
-export function retestMarkParts({ month, rin, suffix }: KeptMark): MarkParts {
-  const characters = rin?.toUpperCase() ?? ''
-  return {
-    month: String(Number(month.slice(5))),
-    square: RIN.test(characters) ? { upper: characters.slice(0, 2), lower: `${characters[3]}${characters[2]}` } : null,
-    year: month.slice(2, 4),
-    suffix: tidySuffix(suffix ?? ''),
-  }
-}
-
-/**
- * A mark in a sentence, for whoever cannot see it drawn.
- *
- * @example retestMarkText({ month: '2006-09', rin: 'A123' }) // 'Tested September 2006 by RIN A123, no suffix: volumetric expansion test'
- */
-export function retestMarkText({ month, method, rin, suffix }: KeptMark): string {
-  const by = rin ? ` by RIN ${rin}` : ', RIN not noted'
-  const tidy = tidySuffix(suffix ?? '')
-  const struck = tidy === '' ? 'no suffix' : `suffix ${tidy.replace('+', 'plus ').replace('*', 'star').trim()}`
-  const words = tidy === '' && method !== undefined ? METHOD_WORDS[method] : suffixMeaning(tidy)?.words ?? 'no suffix of a retest mark'
-  return `Tested ${formatMonth(month)}${by}, ${struck}: ${words}`
-}
-
-const METHOD_WORDS: Record<TestMethod, string> = {
-  volumetric: 'volumetric expansion test', proof: 'proof pressure test', visual: 'external visual inspection',
 }
 
 /** The four characters of a square, from the upper left clockwise. */

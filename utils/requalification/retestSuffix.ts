@@ -1,4 +1,3 @@
-import type { TestMethod } from './requalification'
 import type { Beginning } from './testPeriod'
 
 /** What a suffix of a retest mark says. */
@@ -10,12 +9,14 @@ export type SuffixMeaning = {
 }
 
 const VOLUMETRIC = 'volumetric expansion test'
+const STAR = ', good for ten years in the service of the star'
+const PLUS = '; may take 110 % of its marked pressure, but not of a liquefied gas'
 
 const MEANINGS: Readonly<Record<string, SuffixMeaning>> = {
   '': { words: VOLUMETRIC, beginning: 'volumetric' },
-  '*': { words: `${VOLUMETRIC}, good for ten years in the service of the star`, beginning: 'starred' },
-  '+': { words: `${VOLUMETRIC}; may take 110 % of its marked pressure, but not of a liquefied gas`, beginning: 'volumetric' },
-  '+*': { words: `${VOLUMETRIC}, good for ten years in the service of the star; may take 110 % of its marked pressure, but not of a liquefied gas`, beginning: 'starred' },
+  '*': { words: VOLUMETRIC + STAR, beginning: 'starred' },
+  '+': { words: VOLUMETRIC + PLUS, beginning: 'volumetric' },
+  '+*': { words: VOLUMETRIC + STAR + PLUS, beginning: 'starred' },
   'S': { words: 'proof pressure test', beginning: 'proof' },
   'E': { words: 'external visual inspection', beginning: 'visual' },
   'FS': { words: 'acetylene shell and its filler inspected', beginning: 'examination' },
@@ -39,26 +40,4 @@ export function tidySuffix(text: string): string {
 export function suffixMeaning(suffix: string): SuffixMeaning | null {
   const tidy = tidySuffix(suffix)
   return Object.hasOwn(MEANINGS, tidy) ? MEANINGS[tidy]! : null
-}
-
-/** What speaks against a suffix as it was typed, or null where it is one of a retest mark. */
-export function suffixDoubt(suffix: string): string | null {
-  const tidy = tidySuffix(suffix)
-  if (suffixMeaning(tidy)) return null
-  return tidy === 'DT'
-    ? 'DT marks a dip tube, not a test. Leave it out, and compare the mark with the steel.'
-    : `No retest mark ends in ${tidy} (49 CFR 180.213). Compare it with the steel; as it is, the mark does not count as a test.`
-}
-
-const OF_METHOD: Readonly<Record<TestMethod, { beginnings: readonly Beginning[], words: string }>> = {
-  volumetric: { beginnings: ['volumetric', 'starred', 'examination'], words: 'A volumetric test has no suffix, a plus or a star' },
-  proof: { beginnings: ['proof'], words: 'A proof pressure test is marked S' },
-  visual: { beginnings: ['visual'], words: 'An external visual inspection is marked E' },
-}
-
-/** What speaks against a suffix beside the method of the test, or null where they agree. Source: 49 CFR 180.213. */
-export function methodDoubt(suffix: string, method: TestMethod): string | null {
-  const { beginnings, words } = OF_METHOD[method]
-  const meaning = suffixMeaning(suffix)
-  return meaning === null || beginnings.includes(meaning.beginning) ? null : `${words}. Compare the mark and the method: the lesser test counts.`
 }

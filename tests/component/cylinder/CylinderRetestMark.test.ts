@@ -1,7 +1,7 @@
 import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
 import CylinderRetestMark from '~~/components/cylinder/CylinderRetestMark.vue'
-import type { KeptMark } from '~~/utils/requalification/retestMark'
+import type { KeptMark } from '~~/utils/requalification/struckMark'
 import { byRole } from '../../helpers/roles'
 
 async function drawn(mark: KeptMark) {

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { normaliseLabelCode } from '../../label/code'
-import { RIN } from '../../requalification/retestMark'
+import { RIN } from '../../requalification/struckMark'
 import { splitSpec } from '../../requalification/specs'
 import { isMonth } from '../../quantity/month'
 

@@ -1,7 +1,9 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { readRetestMark, readRin, retestMarkParts, retestMarkText } from '~~/utils/requalification/retestMark'
-import { methodDoubt, suffixDoubt, suffixMeaning, tidySuffix } from '~~/utils/requalification/retestSuffix'
+import { readRetestMark, readRin } from '~~/utils/requalification/retestMark'
+import { suffixMeaning, tidySuffix } from '~~/utils/requalification/retestSuffix'
+import { retestMarkParts, retestMarkText } from '~~/utils/requalification/struckMark'
+import { methodDoubt, suffixDoubt } from '~~/utils/requalification/suffixDoubt'
 
 const NOW = '2026-12'
 
