@@ -3,7 +3,7 @@ import type { LogLine } from '~~/utils/custody/cylinderView'
 import type { EventKind } from '~~/utils/custody/kinds'
 import { CONDITION_WORDS, KIND_WORDS } from '~~/utils/custody/words'
 import { formatLabelCode } from '~~/utils/label/code'
-import { formatGauge, formatThermometer } from '~~/utils/quantity/gauge'
+import { formatBarometer, formatGauge, formatThermometer } from '~~/utils/quantity/gauge'
 import { formatReading, type MassReading } from '~~/utils/quantity/mass'
 import { formatMonth } from '~~/utils/quantity/month'
 import { methodWords } from '~~/utils/recovery/methods'
@@ -102,9 +102,9 @@ function vacuumInWords(vacuum: NonNullable<DetailsOf<'emptied'>['vacuum']>): str
 
 function checkInWords(details: DetailsOf<'checked'>): string {
   if (details.method === 'pressure') {
-    const { pressureKPa, temperatureC } = details
+    const { pressureKPa, temperatureC, barometerKPa } = details
     const read = (unit: 'psi' | 'bar') => `${formatGauge(pressureKPa, unit)} at ${formatThermometer(temperatureC, unit)}`
-    return `pressure ${read('psi')} (${read('bar')})`
+    return `pressure ${read('psi')} (${read('bar')})${barometerKPa === undefined ? '' : `, barometer ${formatBarometer(barometerKPa)}`}`
   }
   const { method, composition = [], verdict } = details
   const parts = composition.map(({ component, massPercent }) => `${component} ${massPercent} %`).join(', ')

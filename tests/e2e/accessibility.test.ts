@@ -67,6 +67,12 @@ const SCREENS: Record<string, Screen[]> = {
   'mail.vue': [{ as: admin, at: () => '/mail' }],
   'people.vue': [{ as: admin, at: () => '/people' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
+  'pressure-check.vue': [
+    { as: technician, at: () => '/pressure-check' },
+    { as: technician, at: () => '/pressure-check?refrigerant=R-410A&pressureKPa=1869.8&temperatureC=26.667' },
+    { as: technician, at: () => '/pressure-check?refrigerant=R-744&pressureKPa=9000&temperatureC=40' },
+    { as: manager, at: () => '/pressure-check?refrigerant=R-409A&pressureKPa=690&temperatureC=26.667&barometerKPa=84.3' },
+  ],
   'refrigerants/[designation].vue': [
     { as: manager, at: () => '/refrigerants/R-454B' }, { as: technician, at: () => '/refrigerants/R-407B' },
     { as: technician, at: () => '/refrigerants/R-9999', answers: 404 },

@@ -106,6 +106,11 @@ export function formatThermometer(tC: number, unit: GaugeUnit): string {
   return `${fixed(thermometerFromCelsius(tC, unit), 1)}${NO_BREAK_SPACE}${thermometerSymbol(unit)}`
 }
 
+/** The air's pressure in words, on both barometers. Rounding: to the nearest 0.1. */
+export function formatBarometer(kPa: number): string {
+  return `${fixed(inHgFromKPa(kPa), 1)}${NO_BREAK_SPACE}inHg (${fixed(kPa, 1)}${NO_BREAK_SPACE}kPa)`
+}
+
 /** A reading as a field shows it again: at most two places, none that says nothing, so that 80 °F comes back as 80. */
 export function plainFigure(value: number): string {
   const rounded = Math.round(value * 100) / 100

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import {
-  barometerFromKPa, celsiusFromThermometer, formatDifference, formatGauge, formatThermometer, gaugeFromKPa, gaugeUnitFor, GAUGE_UNITS, kPaFromBarometer,
+  barometerFromKPa, celsiusFromThermometer, formatBarometer, formatDifference, formatGauge, formatThermometer, gaugeFromKPa, gaugeUnitFor, GAUGE_UNITS, kPaFromBarometer,
   kPaFromGauge, plainFigure, thermometerFromCelsius,
 } from '~~/utils/quantity/gauge'
 
@@ -48,5 +48,6 @@ describe('the thermometer and the barometer beside it', () => {
     expect(kPaFromBarometer(29.921, 'psi')).toBeCloseTo(101.325, 2)
     expect(kPaFromBarometer(84.3, 'bar')).toBe(84.3)
     expect(plainFigure(barometerFromKPa(84.321, 'psi'))).toBe('24.9')
+    expect(formatBarometer(84.321)).toBe('24.9\u00A0inHg (84.3\u00A0kPa)')
   })
 })
