@@ -60,13 +60,13 @@ function pressureOn(curve: Curve, density: number): number | null {
   return density >= thinnest && density <= (curve.x.at(-1) ?? -Infinity) ? valueOnCurve(curve, density) : null
 }
 
-// Just below the critical temperature the pressure stays level while liquid and vapour share the cylinder.
+// Just below the critical temperature the pressure stays level while liquid and vapour share the cylinder; thinner it is
+// all vapour, denser all liquid.
 function belowCritical(tC: number, curve: Curve, density: number): HeatPoint {
-  const level = curve.y.findIndex((kPa, index) => kPa === curve.y[index + 1])
-  const levelKPa = curve.y[level] ?? null
-  const pressureKPa = pressureOn(curve, density)
-  if (levelKPa === null) throw new RangeError(`No level pressure at ${tC} C`)
-  if (pressureKPa === levelKPa) return { tC, phase: 'two-phase', liquidShare: null, pressureKPa }
-  const isThin = pressureKPa === null ? density < (curve.x[level] ?? 0) : pressureKPa < levelKPa
-  return isThin ? { tC, phase: 'vapour', liquidShare: 0, pressureKPa } : { tC, phase: 'liquid-full', liquidShare: 1, pressureKPa }
+  const first = curve.y.findIndex((kPa, index) => kPa === curve.y[index + 1])
+  const levelKPa = curve.y[first]
+  if (levelKPa === undefined) throw new RangeError(`No level pressure at ${tC} C`)
+  if (density < (curve.x[first] ?? 0)) return { tC, phase: 'vapour', liquidShare: 0, pressureKPa: pressureOn(curve, density) }
+  if (density <= (curve.x[curve.y.lastIndexOf(levelKPa)] ?? 0)) return { tC, phase: 'two-phase', liquidShare: null, pressureKPa: levelKPa }
+  return { tC, phase: 'liquid-full', liquidShare: 1, pressureKPa: pressureOn(curve, density) }
 }

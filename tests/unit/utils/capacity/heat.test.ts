@@ -61,10 +61,15 @@ describe('a cylinder of gas above its critical temperature', () => {
 describe('a cylinder of gas just below its critical temperature', () => {
   // R-23 is critical at 26.1 C; at 21.1 C it boils at 4274.1 kPa, from 300 to 750 kg/m3.
   it.each([
-    [5000, 'two-phase', null, 4274.1], [3000, 'two-phase', null, 4274.1], [7500, 'two-phase', null, 4274.1],
-    [2500, 'vapour', 0, 4175.5], [8000, 'liquid-full', 1, 4301.7],
+    [5000, 'two-phase', null, 4274.1], [3001, 'two-phase', null, 4274.1], [7499, 'two-phase', null, 4274.1],
+    [5555, 'two-phase', null, 4274.1], [2500, 'vapour', 0, 4175.5], [8000, 'liquid-full', 1, 4301.7],
   ])('holds %d g of R-23 in 10 L as %s', (netGrams, phase, liquidShare, pressureKPa) => {
     expect(heated('R-23', netGrams, 21.1)).toEqual([{ tC: 21.1, phase, liquidShare, pressureKPa: expect.closeTo(pressureKPa, 6) }])
+  })
+
+  it('is vapour alone just thinner than that and liquid alone just denser', () => {
+    expect(heated('R-23', 2999, 21.1)[0]?.phase).toBe('vapour')
+    expect(heated('R-23', 7501, 21.1)[0]?.phase).toBe('liquid-full')
   })
 
   it('says on which side it is also where no pressure is held', () => {
