@@ -173,9 +173,10 @@ describe('the catalogue of refrigerants', () => {
     expect(weak.doubt).toContain('3.6 K')
   })
 
-  it('gives carbon dioxide no liquid from 104 °F on, and no numbers for it', async () => {
+  it('gives carbon dioxide no numbers past the end of its table, nor above its critical temperature', async () => {
     const { body } = await admin.client.get<RefrigerantRecordAnswer>('/api/refrigerants/R-744')
     expect(body.pressureClass.at104F).toEqual({ aboveCritical: true })
+    // Its table ends at 21.1 °C, which is 70 °F by the tenth of a degree.
     expect(body.points.filter(point => point.saturation === null).map(point => point.temperatureF)).toEqual([77, 104, 130, 131])
   })
 

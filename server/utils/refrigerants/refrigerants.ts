@@ -14,6 +14,9 @@ import { problem } from '../http/problem'
 // Ice; a shop; the temperatures of 80 % by volume, of the pressure classes, and of full cylinders (49 CFR 173.304a(a)(2), 173.304(b)).
 const NAMED_TEMPERATURES_F = [32, 70, 77, 104, 130, 131]
 
+// A table that ends at 21.1 °C ends at 70 °F.
+const SAME_TEMPERATURE_K = 0.05
+
 /** Every refrigerant of the catalogue in its order, and the blends of which only the composition is known. */
 export function refrigerantList(): RefrigerantsAnswer {
   const items = [...CATALOGUE.refrigerants.values()].map(line)
@@ -78,7 +81,9 @@ function namedForTransport(refrigerant: Parameters<typeof unEntryOf>[0]) {
 }
 
 function pointAt(refrigerant: Refrigerant, temperatureF: number) {
-  const temperatureC = celsiusFromFahrenheit(temperatureF)
+  const exactC = celsiusFromFahrenheit(temperatureF)
+  const isTableEnd = Math.abs(exactC - refrigerant.tableMaxC) < SAME_TEMPERATURE_K
+  const temperatureC = isTableEnd ? refrigerant.tableMaxC : exactC
   return { temperatureF, temperatureC, saturation: hasLiquidAt(refrigerant, temperatureC) ? saturationAt(refrigerant, temperatureC) : null }
 }
 
