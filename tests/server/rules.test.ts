@@ -120,12 +120,13 @@ describe('the firm\'s rules', () => {
 
   it('are set once however often they are sent', async () => {
     const { client } = firm.manager
-    const body = fill(0.75, { id: randomUUID(), from: new Date(Date.now() + DAY).toISOString() })
+    const id = randomUUID()
+    const body = fill(0.75, { id, from: new Date(Date.now() + DAY).toISOString() })
     const [first, again] = [await client.post<FirmRule>('/api/policy', body), await client.post<FirmRule>('/api/policy', body)]
     expect([first.status, again.status]).toEqual([201, 201])
     expect(again.body).toEqual(first.body)
     expect((await client.post('/api/policy', { ...body, reason: 'Another' })).status).toBe(409)
-    expect((await policyFor(client)).rules.filter(rule => rule.id === body.id)).toHaveLength(1)
+    expect((await policyFor(client)).rules.filter(rule => rule.id === id)).toHaveLength(1)
   })
 
   it('are withdrawn before they begin, for a reason, and stay in the history', async () => {

@@ -10,5 +10,5 @@ export interface RetestSettings extends RetestRules {
   missingDays: number
 }
 
-/** What holds until the firm sets something else: common practice, no source. */
+/** What holds until the firm sets something else: the days are ours, no source. */
 export const DEFAULT_RETEST_SETTINGS: RetestSettings = { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] }

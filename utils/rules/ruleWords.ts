@@ -17,14 +17,14 @@ export const OPTION_WORDS: Readonly<Record<keyof FillPolicy['options'], OptionWo
   },
 }
 
-/** A line of a rule: what it sets, and how. */
-export interface RuleLine { term: string, value: string }
+/** A line of a rule: what it sets, and how; a figure or a word. */
+export interface RuleLine { term: string, value: string, figure?: boolean }
 
 /** A fill rule line by line. */
 export function fillRuleLines({ shareThousandths, ceilingThousandths, options }: FillPolicy): RuleLine[] {
   return [
-    { term: 'Share of the cylinder', value: percent(shareThousandths) },
-    { term: 'Never above, when at 131 °F', value: `${percent(ceilingThousandths)} liquid` },
+    { term: 'Share of the cylinder', value: percent(shareThousandths), figure: true },
+    { term: 'Liquid at 131 °F, at most', value: percent(ceilingThousandths), figure: true },
     ...optionNames.map(name => ({ term: OPTION_WORDS[name].name, value: options[name] ? 'on' : 'off' })),
   ]
 }
@@ -32,10 +32,12 @@ export function fillRuleLines({ shareThousandths, ceilingThousandths, options }:
 /** Retest settings line by line. */
 export function retestRuleLines({ soonDays, notSeenDays, missingDays, intervalMonths, ownerChoices }: RetestSettings): RuleLine[] {
   return [
-    { term: 'Retest is due soon', value: `${soonDays} days ahead` },
-    { term: 'Not seen: look for it', value: `after ${notSeenDays} days` },
-    { term: 'Not seen: missing?', value: `after ${missingDays} days` },
-    { term: 'Longest period of our own', value: intervalMonths === null ? 'none' : `${intervalMonths} months` },
+    { term: 'Retest is due soon, days ahead', value: String(soonDays), figure: true },
+    { term: 'Not seen: look for it, after days', value: String(notSeenDays), figure: true },
+    { term: 'Not seen: missing?, after days', value: String(missingDays), figure: true },
+    intervalMonths === null
+      ? { term: 'Longest period of our own', value: 'none' }
+      : { term: 'Longest period of our own, months', value: String(intervalMonths), figure: true },
     { term: 'Test choices', value: ownerChoices.length === 0 ? 'none' : ownerChoices.map(({ paragraph }) => paragraph).join(', ') },
   ]
 }

@@ -29,7 +29,7 @@ describe('the form of a firm rule', () => {
   it('begins from the rule in force', async () => {
     const { field } = await open('fill-policy')
     expect(field('Share of the cylinder').value).toBe('80')
-    expect(field('Never above, when at 131 °F').value).toBe('95')
+    expect(field('Liquid at 131 °F, at most').value).toBe('95')
   })
 
   it('shows what would change before it can be set', async () => {
@@ -64,7 +64,7 @@ describe('the form of a firm rule', () => {
     const { form, type } = await open('fill-policy', true)
     await type('Why', 'A reason changes no figure')
     expect(form.emitted('change')).toBeUndefined()
-    await type('Never above, when at 131 °F', '90')
+    await type('Liquid at 131 °F, at most', '90')
     expect(form.emitted('change')).toHaveLength(1)
   })
 

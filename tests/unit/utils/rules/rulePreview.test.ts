@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { did, filled, folded, kg, registered, STAMP, VIEW_CONTEXT, type Told } from '~~/tests/helpers/custody'
+import { did, filled, folded, kg, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, type Told } from '~~/tests/helpers/custody'
 import { DEFAULT_FILL_POLICY, type FillPolicy } from '~~/utils/capacity/types'
 import { cacheRow, rowToday } from '~~/utils/custody/row'
 import { newRulePreview } from '~~/utils/rules/rulePreview'
@@ -54,7 +54,7 @@ describe('what a fill rule would change', () => {
   })
 
   it('leaves condemned cylinders out', () => {
-    const condemned = [registered(), did('retested', { result: 'condemned', month: '2026-07', method: 'volumetric', rin: 'A123' })]
+    const condemned = [registered(), did('retested', { result: 'condemned', month: '2026-07', method: 'volumetric', requalifierId: REQUALIFIER })]
     expect(previewOf([condemned], { policy: AT_70 }).cylinders).toBe(0)
   })
 })
