@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { APPLIANCES, CIRCUMSTANCES, MACHINE_MADE, type LevelVerdict, type RequiredLevel } from '../recovery/types'
 import { readingGrams } from '../quantity/mass'
 import { machineMadeBy } from '../recovery/machineMade'
+import { BAROMETER_RANGE, MOST_READ } from '../recovery/reachedDraft'
 import type { OnGauges } from '../recovery/words'
 import { massInQuery } from './parts'
 
@@ -35,12 +36,12 @@ export const evacuationLevelQuery = z.strictObject({
   appliance: z.enum(APPLIANCES).default('other'),
   circumstances: z.enum(CIRCUMSTANCES).optional(),
   compressorRuns: z.enum(['true', 'false']).optional(),
-  inHg: reading(32, 'inHg').optional(),
-  barometerInHg: reading(32, 'inHg').pipe(z.number().min(15, 'must be at least 15 inHg')).optional(),
-  microns: reading(1_000_000, 'microns').optional(),
-  mmHgAbsolute: reading(1_000, 'mmHg').optional(),
+  inHg: reading(MOST_READ.inHg, 'inHg').optional(),
+  barometerInHg: reading(BAROMETER_RANGE.most, 'inHg').pipe(z.number().min(BAROMETER_RANGE.least, `must be at least ${BAROMETER_RANGE.least} inHg`)).optional(),
+  microns: reading(MOST_READ.microns, 'microns').optional(),
+  mmHgAbsolute: reading(MOST_READ.mmHgAbsolute, 'mmHg').optional(),
   recovered: chargeInQuery.optional(),
-  heldMinutes: reading(10_000, 'minutes').optional(),
+  heldMinutes: reading(MOST_READ.heldMinutes, 'minutes').optional(),
 })
 export type EvacuationLevelQuery = z.output<typeof evacuationLevelQuery>
 

@@ -1,6 +1,6 @@
 import { massText, parseMassText, readingGrams, type MassReading } from '../quantity/mass'
 import { machineMadeBy } from './machineMade'
-import { emptyReached, reachedDraft, reachedQuery, type ReachedDraft } from './reachedDraft'
+import { reachedDraft, reachedQuery, type ReachedDraft } from './reachedDraft'
 import { APPLIANCES, CIRCUMSTANCES, MACHINE_MADE, type Appliance, type Circumstances, type MachineMade } from './types'
 
 /** What a person says of the appliance and the machine; '' where it is not known. */
@@ -28,11 +28,6 @@ export function levelDraft(query: Record<string, unknown>): LevelDraft {
     compressorRuns: oneOf(['true', 'false'] as const, text('compressorRuns')) ?? '',
     reached: reachedDraft(query),
   }
-}
-
-/** A draft in which nothing is known. */
-export function emptyLevel(): LevelDraft {
-  return { refrigerant: '', charge: null, machineMade: '', appliance: 'other', circumstances: '', compressorRuns: '', reached: emptyReached() }
 }
 
 /** What the server is asked; the other half of the address is {@link addressOf}. */

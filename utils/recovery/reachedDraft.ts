@@ -27,11 +27,6 @@ export interface ReadReached {
 export const MOST_READ = { inHg: 32, mmHgAbsolute: 1_000, microns: 1_000_000, heldMinutes: 10_000 } as const
 export const BAROMETER_RANGE = { least: 15, most: 32 } as const
 
-/** A draft in which nothing was read. */
-export function emptyReached(): ReachedDraft {
-  return { gauge: '', figure: '', barometer: '', recovered: null, held: '' }
-}
-
 /** What tells whether a level was reached: as chosen, else as that level is usually read. A weight tells only a share. */
 export function gaugeFor({ gauge }: ReachedDraft, { unit }: EvacuationLevel): Gauge {
   const isShare = unit === 'percent-of-charge'
@@ -40,7 +35,7 @@ export function gaugeFor({ gauge }: ReachedDraft, { unit }: EvacuationLevel): Ga
   return unit === 'mmHg-absolute' ? 'mmHgAbsolute' : 'inHg'
 }
 
-/** What was read, of what an address holds. */
+/** What was read, of what an address holds; of an empty one, nothing. */
 export function reachedDraft(query: Record<string, unknown>): ReachedDraft {
   const text = (key: string) => typeof query[key] === 'string' ? query[key] : ''
   const gauge = GAUGES.find(one => text(one) !== '') ?? ''

@@ -2,7 +2,7 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { expect, it } from 'vitest'
 import RecoveryReached from '~~/components/recovery/RecoveryReached.vue'
 import { judgeLevel } from '~~/utils/recovery/judgeLevel'
-import { emptyReached, gaugeFor, readReached, type ReachedDraft } from '~~/utils/recovery/reachedDraft'
+import { gaugeFor, reachedDraft, readReached, type ReachedDraft } from '~~/utils/recovery/reachedDraft'
 import type { EvacuationLevel } from '~~/utils/recovery/types'
 import { allByRole, byRole } from '../../helpers/roles'
 
@@ -14,7 +14,7 @@ function mounted(level: EvacuationLevel, draft: ReachedDraft, alternative: Evacu
 }
 
 const TEN: EvacuationLevel = { unit: 'inHg-vacuum', value: 10 }
-const typed = (figure: string, more: Partial<ReachedDraft> = {}): ReachedDraft => ({ ...emptyReached(), figure, ...more })
+const typed = (figure: string, more: Partial<ReachedDraft> = {}): ReachedDraft => ({ ...reachedDraft({}), figure, ...more })
 
 function said(wrapper: Awaited<ReturnType<typeof mounted>>): string {
   return wrapper.find('[role=status]:not(output)').text()
@@ -33,7 +33,7 @@ it('says that the level was reached, and that nobody said for how long', async (
 })
 
 it('judges nothing before something is read', async () => {
-  expect(said(await mounted(TEN, emptyReached()))).toContain('Not judged yet')
+  expect(said(await mounted(TEN, reachedDraft({})))).toContain('Not judged yet')
 })
 
 it('names the field that cannot be read', async () => {
@@ -43,14 +43,14 @@ it('names the field that cannot be read', async () => {
 })
 
 it('takes what came out of a small appliance by weight, or its vacuum instead', async () => {
-  const wrapper = await mounted({ unit: 'percent-of-charge', value: 90 }, emptyReached(), { unit: 'inHg-vacuum', value: 4 })
+  const wrapper = await mounted({ unit: 'percent-of-charge', value: 90 }, reachedDraft({}), { unit: 'inHg-vacuum', value: 4 })
   expect(allByRole(wrapper.element, 'group', 'Recovered')).toHaveLength(1)
   expect(byRole(wrapper.element, 'button', 'By weight').getAttribute('aria-pressed')).toBe('true')
-  expect(allByRole((await mounted(TEN, emptyReached())).element, 'button', 'By weight')).toHaveLength(0)
+  expect(allByRole((await mounted(TEN, reachedDraft({}))).element, 'button', 'By weight')).toHaveLength(0)
 })
 
 it('keeps the gauge it was typed for', async () => {
-  const draft = emptyReached()
+  const draft = reachedDraft({})
   const wrapper = await mounted({ unit: 'mmHg-absolute', value: 25 }, draft)
   const field = byRole(wrapper.element, 'textbox', 'Gauge shows') as HTMLInputElement
   field.value = '24'

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { judgeLevel } from '../../../../utils/recovery/judgeLevel'
-import { addressOf, chargeGramsOf, emptyLevel, levelDraft, levelQuery } from '../../../../utils/recovery/levelDraft'
-import { emptyReached, gaugeFor, readReached } from '../../../../utils/recovery/reachedDraft'
+import { addressOf, chargeGramsOf, levelDraft, levelQuery } from '../../../../utils/recovery/levelDraft'
+import { gaugeFor, reachedDraft, readReached } from '../../../../utils/recovery/reachedDraft'
 
 describe('the address of a question', () => {
   const address = { refrigerant: 'R-134a', charge: '212.5lb', machineMade: 'before-1993-11-15', circumstances: 'leaking', inHg: '3.5', barometerInHg: '29.1', heldMinutes: '6' }
@@ -15,8 +15,8 @@ describe('the address of a question', () => {
   })
 
   it('of nothing is empty', () => {
-    expect(addressOf(emptyLevel())).toEqual({})
-    expect(levelDraft({})).toEqual(emptyLevel())
+    expect(addressOf(levelDraft({}))).toEqual({})
+    expect(levelDraft({})).toMatchObject({ refrigerant: '', charge: null, machineMade: '', appliance: 'other', circumstances: '', compressorRuns: '' })
   })
 
   it('takes a date of the machine as the side that it lies on', () => {
@@ -25,7 +25,7 @@ describe('the address of a question', () => {
   })
 
   it('holds what it cannot be as not known', () => {
-    expect(levelDraft({ appliance: 'large', circumstances: 'whim', compressorRuns: 'perhaps', charge: '12', refrigerant: ['R-22', 'R-12'] })).toEqual(emptyLevel())
+    expect(levelDraft({ appliance: 'large', circumstances: 'whim', compressorRuns: 'perhaps', charge: '12', refrigerant: ['R-22', 'R-12'] })).toEqual(levelDraft({}))
   })
 
   it('leaves out what does not count for this kind of appliance', () => {
@@ -37,12 +37,12 @@ describe('the address of a question', () => {
   it('keeps a charge of nothing', () => {
     expect(addressOf(levelDraft({ charge: '0lb' }))).toEqual({ charge: '0lb' })
     expect(chargeGramsOf(levelDraft({ charge: '0lb' }))).toBe(0)
-    expect(chargeGramsOf(emptyLevel())).toBeNull()
+    expect(chargeGramsOf(levelDraft({}))).toBeNull()
   })
 })
 
 describe('what was read', () => {
-  const typed = { ...emptyReached(), figure: '28.5', held: '5' }
+  const typed = { ...reachedDraft({}), figure: '28.5', held: '5' }
 
   it('is read on the gauge that goes with the level, until another is chosen', () => {
     expect(gaugeFor(typed, { unit: 'inHg-vacuum', value: 10 })).toBe('inHg')
@@ -59,8 +59,8 @@ describe('what was read', () => {
   })
 
   it('is nothing where the field is empty, and 0 where it says 0', () => {
-    expect(readReached(emptyReached(), 'inHg', null)).toEqual({ reached: null, heldMinutes: null, faults: {} })
-    expect(readReached({ ...emptyReached(), figure: '0', held: '0' }, 'inHg', null)).toMatchObject({ reached: { inHg: 0 }, heldMinutes: 0 })
+    expect(readReached(reachedDraft({}), 'inHg', null)).toEqual({ reached: null, heldMinutes: null, faults: {} })
+    expect(readReached({ ...reachedDraft({}), figure: '0', held: '0' }, 'inHg', null)).toMatchObject({ reached: { inHg: 0 }, heldMinutes: 0 })
   })
 
   it('is not taken where it cannot be read, and says which field', () => {
@@ -72,7 +72,7 @@ describe('what was read', () => {
 
   it('of 1.8 from 2.0 lb is 90 %, whole grams or not, and of 1.79 is not', () => {
     const share = (value: number) => {
-      const { reached } = readReached({ ...emptyReached(), recovered: { unit: 'lb', value } }, 'recovered', { unit: 'lb', value: 2 })
+      const { reached } = readReached({ ...reachedDraft({}), recovered: { unit: 'lb', value } }, 'recovered', { unit: 'lb', value: 2 })
       return judgeLevel({ level: { unit: 'percent-of-charge', value: 90 }, alternative: null }, reached, null).verdict
     }
     expect(share(1.8)).toBe('reached')
@@ -80,7 +80,7 @@ describe('what was read', () => {
   })
 
   it('is a share only of a charge that is known', () => {
-    const weighed = { ...emptyReached(), recovered: { unit: 'kg' as const, value: 0.9 } }
+    const weighed = { ...reachedDraft({}), recovered: { unit: 'kg' as const, value: 0.9 } }
     expect(readReached(weighed, 'recovered', { unit: 'kg', value: 1 }).reached).toEqual({ recoveredGrams: 900, chargeGrams: 1000 })
     expect(readReached(weighed, 'recovered', null).reached).toBeNull()
   })
