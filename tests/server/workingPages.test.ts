@@ -5,16 +5,17 @@ import { openShop, registered, type Shop } from '../helpers/fleet'
 import { startServer, type TestServer } from '../helpers/server'
 
 const BROWSER = { 'accept': 'text/html', 'sec-fetch-site': 'none', 'sec-fetch-mode': 'navigate' }
-const LB_TO_G = 453.59237
 
 let server: TestServer
 let shop: Shop
 let cylinder: CylinderView
+let empty: CylinderView
 
 beforeAll(async () => {
   server = await startServer()
   shop = await openShop(server)
   cylinder = await registered(shop)
+  empty = await registered(shop, { contents: 'evacuated', gross: undefined })
 })
 afterAll(() => server?.stop())
 
@@ -32,20 +33,26 @@ async function valuesOf(client: TestClient, path: string): Promise<string[]> {
 }
 
 describe('the first HTML of a cylinder', () => {
-  it('says how full it is at 131 F, and leads to the sum, at the desk and in the field', async () => {
+  it('says how full it is at 131 F, at the desk and in the field: 5,670 g of R-22 in 21.61 L are 262 g a litre, of 1,057 and 97', async () => {
     for (const person of [shop.technician, shop.manager]) {
-      const { body } = await person.client.get<string>(`/c/${cylinder.labelCode!.toLowerCase()}?refrigerant=R-410A`, BROWSER)
-      expect(body).toMatch(/Filled to the limit, at 131 °F it is 9[0-5].% full/)
-      expect(body).toContain(`/c/${cylinder.labelCode!.toLowerCase()}/working?refrigerant=R-410A`)
+      expect(await wordsOf(person.client, `/c/${cylinder.labelCode!.toLowerCase()}`)).toMatch(/At 131 °F it is 17.% full/)
     }
+  })
+
+  it('says it of a fill to the limit where nothing is in it, and leads to the sum of the refrigerant asked about', async () => {
+    const path = `/c/${empty.labelCode!.toLowerCase()}`
+    expect(await wordsOf(shop.technician.client, `${path}?refrigerant=R-410A`)).toMatch(/Filled to the limit, at 131 °F it is 91.% full/)
+    const { body } = await shop.technician.client.get<string>(`${path}?refrigerant=R-410A`, BROWSER)
+    expect(body.includes(`href="${path}/working?refrigerant=R-410A"`)).toBe(true)
+    expect(await wordsOf(shop.technician.client, path)).not.toContain('At 131 °F')
   })
 })
 
 describe('how a cylinder is worked out', () => {
   it('stands in the first HTML: the sum, each rule with its factors, whose stamp it is and whose word counts', async () => {
-    const words = await wordsOf(shop.technician.client, `/c/${cylinder.id}/working?refrigerant=R-410A`)
-    const limit = Math.floor((cylinder.stamp!.waterCapacityGrams! * 0.8 + 0.5) / (LB_TO_G / 10)) / 10
-    expect(words).toContain(`governs ${limit.toFixed(1)} lb`)
+    const words = await wordsOf(shop.technician.client, `/c/${empty.id}/working?refrigerant=R-410A`)
+    // WC 47.6 lb: 0.80 of it is 38.08 lb.
+    expect(words).toMatch(/governs 38\.0.lb/)
     expect(words).toMatch(/Scale reads .* less tare weight .* Net .* Fill limit .* Room .* Stop weight/)
     expect(words).toMatch(/liquid at 77 °F above our margin/)
     expect(words).toContain('not in force: option off')
@@ -56,7 +63,7 @@ describe('how a cylinder is worked out', () => {
   })
 
   it('says of an empty cylinder that the refrigerant is still to be chosen', async () => {
-    const words = await wordsOf(shop.technician.client, `/c/${cylinder.id}/working`)
+    const words = await wordsOf(shop.technician.client, `/c/${empty.id}/working`)
     expect(words).toContain('by refrigerant')
     expect(words).toContain('Choose the refrigerant that is to go in.')
   })

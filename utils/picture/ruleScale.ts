@@ -57,6 +57,11 @@ export function liquidFullWhenHotGrams(terms: readonly FillTerm[]): number | nul
   return ceiling ? productGrams(ceiling.factors.filter(factor => factor.name !== 'share')) : null
 }
 
+/** Whether any rule has something to show; without a refrigerant or a volume none has. */
+export function anySpeaks(terms: readonly FillTerm[]): boolean {
+  return terms.some(term => term.limitGrams !== null || term.standing === 'unsafe')
+}
+
 /** The rules in their order, the one that governs before all others. */
 export function governingFirst(terms: readonly FillTerm[], governingRule: FillRule | null): FillTerm[] {
   return [...terms].sort((a, b) => Number(b.rule === governingRule) - Number(a.rule === governingRule))

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { FillTerm } from '~~/utils/capacity/types'
-import { governingFirst, layOutRules } from '~~/utils/picture/ruleScale'
+import { anySpeaks, governingFirst, layOutRules } from '~~/utils/picture/ruleScale'
 
 function term(rule: FillTerm['rule'], limitGrams: number | null, standing: FillTerm['standing'] = 'in-force', factors: FillTerm['factors'] = []): FillTerm {
   return { rule, limitGrams, standing, factors, source: '' }
@@ -39,5 +39,11 @@ describe('the rules on one scale', () => {
 
   it('keep their order behind the one that governs', () => {
     expect(governingFirst(TERMS, 'hot-ceiling').map(({ rule }) => rule)).toEqual(['hot-ceiling', 'liquid-77F', 'water-weight'])
+  })
+
+  it('speak where one has a figure or keeps an unsafe one back', () => {
+    expect(anySpeaks([term('water-weight', null, 'unsafe')])).toBe(true)
+    expect(anySpeaks([term('water-weight', 0)])).toBe(true)
+    expect(anySpeaks([term('water-weight', null)])).toBe(false)
   })
 })
