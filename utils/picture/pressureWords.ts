@@ -59,6 +59,8 @@ export function pressureAccount(checked: CheckedPressure): AccountLine[] {
   const give = (kPa: number) => `±${NO_BREAK_SPACE}${formatDifference(kPa, unit)}`
   const degrees = degreesFromCelsius(reading.thermometerErrorC, unit)
   const slope = formatDifference(check.slopeKPaPerC / degreesFromCelsius(1, unit), unit)
+  // A single fluid has one pressure, which needs no name.
+  const hasGlide = check.bubbleKPa > check.dewKPa
   const [edge, edgeKPa] = check.absoluteKPa >= (check.dewKPa + check.bubbleKPa) / 2
     ? ['bubble', check.bubbleKPa] as const
     : ['dew', check.dewKPa] as const
@@ -70,8 +72,8 @@ export function pressureAccount(checked: CheckedPressure): AccountLine[] {
       by: `${plainFigure(check.relativeErrorPressure * 100)}${NO_BREAK_SPACE}% of ${formatDifference(edgeKPa, unit)} absolute`,
       figure: give(check.dataErrorKPa), isSum: false,
     },
-    { term: 'Together', by: `at the ${edge} pressure`, figure: give(check.toleranceKPa + check.dataErrorKPa), isSum: true },
-    { term: `${designation} shows`, by: 'dew to bubble', figure: bandOf(checked), isSum: false },
+    { term: 'Together', by: hasGlide ? `at the ${edge} pressure` : null, figure: give(check.toleranceKPa + check.dataErrorKPa), isSum: true },
+    { term: `${designation} shows`, by: hasGlide ? 'dew to bubble' : null, figure: bandOf(checked), isSum: false },
     { term: 'Agrees', by: null, figure: span(checked, check.agreesFromKPa, check.agreesToKPa), isSum: true },
   ]
 }

@@ -108,5 +108,7 @@ describe('the account of what a reading may be off', () => {
     const lines = pressureAccount(checkedAt(75)).map(line => spaced(line.by ?? ''))
     expect(lines[2]).toBe('1 % of 104.7 psi absolute')
     expect(lines[3]).toBe('at the dew pressure')
+    const single = pressureAccount(checkedAt(120, { dewKPa: kPa(100) })).map(line => line.by)
+    expect([single[3], single[4]]).toEqual([null, null])
   })
 })
