@@ -80,6 +80,7 @@ const SCREENS: Record<string, Screen[]> = {
   'refrigerants/index.vue': [{ as: manager, at: () => '/refrigerants' }, { as: technician, at: () => '/refrigerants?q=xyz' }],
   'retests/[id].vue': [...(['draft', 'sent', 'back'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/retests/${demo.lots[state]}` }))],
   'retests/index.vue': [{ as: manager, at: () => '/retests' }],
+  'rules.vue': [{ as: manager, at: () => '/rules' }, { as: technician, at: () => '/rules' }],
   'scan.vue': [{ as: technician, at: () => '/scan' }],
   'setup.vue': [{ as: 'nobody', at: demo => `/setup?token=${demo.setUpToken}`, empty: true }, { as: 'nobody', at: () => '/setup' }],
   'shipments/[id].vue': [...(['draft', 'dispatched', 'received'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
@@ -99,6 +100,19 @@ const PRESSED: Record<string, Screen> = {
   'a cylinder with heat': { as: technician, at: demo => `/c/${demo.codes.usual}`, after: async (page) => {
     await page.getByText('With heat').click()
     await page.getByRole('slider').waitFor()
+  } },
+  'what a fill rule would change': { as: manager, at: () => '/rules', after: async (page) => {
+    await page.getByRole('button', { name: 'Set a fill rule' }).click()
+    await page.getByLabel('Liquid at 131 °F, at most').fill('75')
+    await page.getByLabel('Share of the cylinder').fill('75')
+    await page.getByRole('button', { name: 'Show what it changes' }).click()
+    await page.getByText(/would be overfilled/).waitFor()
+  } },
+  'retest choices that say no reason': { as: admin, at: () => '/rules', after: async (page) => {
+    await page.getByRole('button', { name: 'Set retests and reminders' }).click()
+    await page.getByText(/^49 CFR 180.209\(e\)/).click()
+    await page.getByRole('button', { name: 'Show what it changes' }).click()
+    await page.getByText('Say how it is known').first().waitFor()
   } },
   'a weight that is missing': { as: warehouse, at: demo => `/c/${demo.codes.usual}/act/weighed`, after: async (page) => {
     await page.getByRole('button', { name: 'Record the weight' }).click()
