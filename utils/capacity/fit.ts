@@ -22,13 +22,13 @@ export function fitFindings(input: { stamp: Stamp, refrigerant: string | null, c
   const refrigerant = input.refrigerant === null ? null : catalogue.refrigerants.get(input.refrigerant) ?? null
   const findings = [notRefillable(stamp)]
   if (input.refrigerant !== null) {
-    const safety = safetyOf(refrigerant)
+    const safetyClass = refrigerant?.safetyClass ?? null
     const rowFits = fillingDensityRows(input.refrigerant).map(row => rowFit(row, stamp))
     findings.push(
       pressureClass(stamp, input.refrigerant, refrigerant, rowFits, catalogue),
-      specNotForGas(stamp, input.refrigerant, safety, rowFits),
-      notMarkedFlammable(stamp, input.refrigerant, safety),
-      toxic(input.refrigerant, safety),
+      specNotForGas(stamp, input.refrigerant, safetyClass, rowFits),
+      notMarkedFlammable(stamp, input.refrigerant, refrigerant),
+      toxic(input.refrigerant, refrigerant),
     )
   }
   return findings.filter(finding => finding !== null)
@@ -82,8 +82,8 @@ function stopForPressure(text: string, source: string): FitFinding {
   return { code: 'pressure-class', severity: 'stop', text, source }
 }
 
-function specNotForGas(stamp: Stamp, designation: string, safety: Safety, rowFits: RowFit[]): FitFinding | null {
-  if (SPECS_NOT_FOR_TOXIC.includes(stamp.spec) && isToxic(safety.safetyClass)) {
+function specNotForGas(stamp: Stamp, designation: string, safetyClass: string | null, rowFits: RowFit[]): FitFinding | null {
+  if (SPECS_NOT_FOR_TOXIC.includes(stamp.spec) && isToxic(safetyClass)) {
     return {
       code: 'spec-not-for-gas',
       severity: 'stop',
@@ -102,8 +102,9 @@ function specNotForGas(stamp: Stamp, designation: string, safety: Safety, rowFit
   }
 }
 
-function notMarkedFlammable(stamp: Stamp, designation: string, safety: Safety): FitFinding | null {
-  if (stamp.flammableMarked || !isFlammable(safety.safetyClass)) return null
+function notMarkedFlammable(stamp: Stamp, designation: string, refrigerant: Refrigerant | null): FitFinding | null {
+  if (stamp.flammableMarked || !isFlammable(refrigerant?.safetyClass ?? null)) return null
+  const safety = safetyWords(refrigerant)
   return {
     code: 'not-marked-flammable',
     severity: 'stop',
@@ -112,8 +113,9 @@ function notMarkedFlammable(stamp: Stamp, designation: string, safety: Safety): 
   }
 }
 
-function toxic(designation: string, safety: Safety): FitFinding | null {
-  if (!isToxic(safety.safetyClass)) return null
+function toxic(designation: string, refrigerant: Refrigerant | null): FitFinding | null {
+  if (!isToxic(refrigerant?.safetyClass ?? null)) return null
+  const safety = safetyWords(refrigerant)
   return {
     code: 'toxic',
     severity: 'caution',
@@ -122,13 +124,11 @@ function toxic(designation: string, safety: Safety): FitFinding | null {
   }
 }
 
-type Safety = { safetyClass: string | null, isOrCountsAs: string, source: string }
-
-function safetyOf(refrigerant: Refrigerant | null): Safety {
+function safetyWords(refrigerant: Refrigerant | null): { isOrCountsAs: string, source: string } {
   const safetyClass = refrigerant?.safetyClass ?? null
   if (!refrigerant || safetyClass === null) {
-    return { safetyClass: null, isOrCountsAs: 'has no known safety class and counts as', source: 'ANSI/ASHRAE Standard 34: class not known' }
+    return { isOrCountsAs: 'has no known safety class and counts as', source: 'ANSI/ASHRAE Standard 34: class not known' }
   }
   const fromMemory = refrigerant.safetyClassStatus === 'from memory' ? ', from memory' : ''
-  return { safetyClass, isOrCountsAs: 'is', source: `ANSI/ASHRAE Standard 34, class ${safetyClass}${fromMemory}` }
+  return { isOrCountsAs: 'is', source: `ANSI/ASHRAE Standard 34, class ${safetyClass}${fromMemory}` }
 }

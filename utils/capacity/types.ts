@@ -61,6 +61,10 @@ export type Factor = {
   /** What more there is to say of it: 'as stamped', 'WC \u00F7 0.99904 kg/L'. */
   note?: string
   source?: string
+  /** How far the value may be off, as a fraction of one; left out where it is exact. */
+  relativeError?: number
+  /** What makes it less sure than that. */
+  doubt?: string
 }
 
 /** One rule's figure and what it is the product of. Units: net grams. Rounding: down. */

@@ -19,6 +19,8 @@ export type LiquidTable = {
   /** In rising order of temperature. Units: C, kg/m3. */
   table: readonly { tC: number, liquidDensity: number }[]
   curves: { liquidDensity: Curve }
+  /** What makes its figures less sure than their error says. */
+  doubt?: string
   /** What an estimated density was multiplied by, to stay under the true one; the table holds the result. */
   derate?: number
 }

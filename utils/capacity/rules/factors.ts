@@ -33,7 +33,14 @@ export function volumeFactor(litres: number): Factor {
 /** A density of a fluid's liquid, as its table has it. Units: kg/m3 in, kg/L out; the density before the derate of an estimated one. */
 export function liquidDensityFactor(fluid: LiquidTable, tC: number, kgPerM3: number): Factor {
   const value = fluid.derate === undefined ? kgPerM3 / 1000 : kgPerM3 / fluid.derate / 1000
-  return { name: 'liquid-density', value, unit: 'kg/L', atC: tC, note: `liquid ${fluid.designation}`, source: fluid.source }
+  return withError({ name: 'liquid-density', value, unit: 'kg/L', atC: tC, note: `liquid ${fluid.designation}`, source: fluid.source }, fluid)
+}
+
+/** A factor that rests on a fluid's density, with how far it may be off. */
+export function withError(factor: Factor, { relativeErrorDensity, doubt }: LiquidTable): Factor {
+  factor.relativeError = relativeErrorDensity
+  if (doubt !== undefined) factor.doubt = doubt
+  return factor
 }
 
 /** What an estimated density is taken with. */

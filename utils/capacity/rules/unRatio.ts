@@ -1,5 +1,6 @@
 import { hasLiquidAt, liquidDensityAt } from '../../refrigerant/saturation'
-import { volumeFactor } from './factors'
+import type { Factor } from '../types'
+import { volumeFactor, withError } from './factors'
 import type { RuleFigure, RuleInput } from './ruleInput'
 
 const SOURCE = '49 CFR 173.304b(b)'
@@ -16,7 +17,7 @@ const PUBLISHED_SOURCE = '49 CFR 173.313, portable tank instruction T50'
 export function unRatio(input: RuleInput): RuleFigure {
   const { fluid } = input
   const published = PUBLISHED_RATIOS.get(fluid.designation)
-  if (published !== undefined) return ratioFigure(input, published, `printed for ${fluid.designation}`, PUBLISHED_SOURCE)
+  if (published !== undefined) return ratioFigure(input, ratioFactor(published, `printed for ${fluid.designation}`, PUBLISHED_SOURCE))
   if (!hasLiquidAt(fluid, 60)) {
     return { exactGrams: null, because: `${fluid.designation} has no liquid at 60 °C, or no figure for it`, source: SOURCE }
   }
@@ -24,13 +25,14 @@ export function unRatio(input: RuleInput): RuleFigure {
   const at60C = liquidDensityAt(fluid, 60)
   const derated = fluid.derate === undefined ? '' : ', each less the derate for ideal mixing'
   const note = `the lower of 0.95 × liquid at 50 °C and liquid at 60 °C${derated}`
-  return ratioFigure(input, Math.min(at50C, at60C) / 1000, note, `${SOURCE}; density: ${fluid.source}`)
+  const ratio = ratioFactor(Math.min(at50C, at60C) / 1000, note, `${SOURCE}; density: ${fluid.source}`)
+  return ratioFigure(input, withError(ratio, fluid))
 }
 
-function ratioFigure({ volumeLitres }: RuleInput, kgPerLitre: number, note: string, source: string): RuleFigure {
-  return {
-    exactGrams: volumeLitres * kgPerLitre * 1000,
-    factors: [volumeFactor(volumeLitres), { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }],
-    source,
-  }
+function ratioFactor(kgPerLitre: number, note: string, source: string): Factor {
+  return { name: 'filling-ratio', value: kgPerLitre, unit: 'kg/L', note, source }
+}
+
+function ratioFigure({ volumeLitres }: RuleInput, ratio: Factor): RuleFigure {
+  return { exactGrams: volumeLitres * ratio.value * 1000, factors: [volumeFactor(volumeLitres), ratio], source: ratio.source ?? SOURCE }
 }

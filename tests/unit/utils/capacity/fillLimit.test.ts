@@ -228,8 +228,22 @@ describe('the factors of a rule', () => {
       { name: 'share', value: 0.95, unit: '' },
       // 47.6 x 0.45359237 = 21.590997 kg; / 0.99904 = 21.611744 L.
       { name: 'volume', value: expect.closeTo(21.611744, 6), unit: 'L', note: 'WC ÷ 0.99904 kg/L' },
-      { name: 'liquid-density', value: expect.closeTo(1.0572, 9), unit: 'kg/L', atC: 55, note: 'liquid R-22', source: expect.stringContaining('CoolProp') },
+      {
+        name: 'liquid-density', value: expect.closeTo(1.0572, 9), unit: 'kg/L', atC: 55, note: 'liquid R-22',
+        source: expect.stringContaining('CoolProp'), relativeError: 0.003,
+      },
     ])
+  })
+
+  it('carry how far a density may be off, and what makes it doubtful', () => {
+    const density = (refrigerant: string) => term(limitOf({ refrigerant }), 'liquid-77F').factors[2]
+    expect(density('R-402A')).toMatchObject({ name: 'liquid-density', relativeError: 0.034, doubt: CATALOGUE.refrigerants.get('R-402A')?.doubt })
+    expect(density('R-402A')?.doubt).toMatch(/\w/)
+    expect(density('R-410B')).toMatchObject({ relativeError: 0.05 })
+    expect(density('R-22')).not.toHaveProperty('doubt')
+    const ratio = (refrigerant: string) => term(limitOf({ refrigerant }), 'un-ratio').factors[1]
+    expect(ratio('R-22')).toMatchObject({ name: 'filling-ratio', relativeError: 0.003 })
+    expect(ratio('R-125')).toEqual({ name: 'filling-ratio', value: 0.87, unit: 'kg/L', note: 'printed for R-125', source: expect.stringContaining('T50') })
   })
 
   it('are a percent and the water capacity for a filling density, as in the regulation', () => {
