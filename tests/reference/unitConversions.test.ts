@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import { volumeLitres } from '~~/utils/capacity/rules/ruleInput'
 import { ceilToDivision, exactGrams, floorToDivision, nearestToDivision, parseMassText, readingGrams } from '~~/utils/quantity/mass'
-import { kPaFromPsig, psigFromKPa, STANDARD_ATMOSPHERE_KPA } from '~~/utils/quantity/pressure'
+import { inHgFromKPa, kPaFromInHg, kPaFromPsig, psigFromKPa, STANDARD_ATMOSPHERE_KPA } from '~~/utils/quantity/pressure'
 import { celsiusFromFahrenheit, fahrenheitFromCelsius, kelvinFromCelsius } from '~~/utils/quantity/temperature'
+import { absoluteMmHg, inHgBelow } from '~~/utils/quantity/vacuum'
 import { lb } from '~~/tests/helpers/stamps'
 
 // International yard and pound agreement (1959): 1 lb = 0.45359237 kg exactly, 16 oz to the pound, 1 in = 25.4 mm exactly.
@@ -68,6 +69,21 @@ describe('a gauge', () => {
   // 355, 170 and 45 psia of 40 CFR 82.152 as gauge readings at the standard atmosphere.
   it.each([[355, 340.304], [170, 155.304], [45, 30.304]])('shows %d psia as %d psig', (psia, psig) => {
     expect(psigFromKPa(psia * 6.894757293168361)).toBeCloseTo(psig, 3)
+  })
+})
+
+// NIST Special Publication 811, appendix B: a conventional inch of mercury is 3.386389 kPa. 1 in = 25.4 mm.
+describe('a barometer', () => {
+  it('stands at 29.92 inHg in the standard atmosphere', () => {
+    expect(kPaFromInHg(1)).toBeCloseTo(3.386389, 6)
+    expect(inHgFromKPa(101.325)).toBeCloseTo(29.9213, 3)
+    expect(inHgFromKPa(kPaFromInHg(28.5))).toBeCloseTo(28.5, 12)
+  })
+
+  it('leaves 25.4 mmHg for each inch that a vacuum is short of it', () => {
+    expect(absoluteMmHg({ inHg: 28.92 }, 29.92)).toBeCloseTo(25.4, 9)
+    expect(inHgBelow(25.4, 29.92)).toBeCloseTo(28.92, 9)
+    expect(absoluteMmHg({ inHg: 23.5, barometerInHg: 24.5 }, 29.92)).toBeCloseTo(25.4, 9)
   })
 })
 
