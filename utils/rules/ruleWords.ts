@@ -32,9 +32,9 @@ export function fillRuleLines({ shareThousandths, ceilingThousandths, options }:
 /** Retest settings line by line. */
 export function retestRuleLines({ soonDays, notSeenDays, missingDays, intervalMonths, ownerChoices }: RetestSettings): RuleLine[] {
   return [
-    { term: 'Retest is due soon, days ahead', value: String(soonDays), figure: true },
-    { term: 'Not seen: look for it, after days', value: String(notSeenDays), figure: true },
-    { term: 'Not seen: missing?, after days', value: String(missingDays), figure: true },
+    { term: 'Days ahead: retest due soon', value: String(soonDays), figure: true },
+    { term: 'Days not seen: look for it', value: String(notSeenDays), figure: true },
+    { term: 'Days not seen: missing?', value: String(missingDays), figure: true },
     intervalMonths === null
       ? { term: 'Longest period of our own', value: 'none' }
       : { term: 'Longest period of our own, months', value: String(intervalMonths), figure: true },
