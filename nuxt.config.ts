@@ -54,6 +54,10 @@ export default defineNuxtConfig({
   typescript: { strict: true, typeCheck: false },
   telemetry: false,
   hooks: {
+    // A part that a page loads when it is asked for is fetched then, not ahead: phones in a plant room.
+    'build:manifest'(manifest) {
+      for (const file of Object.values(manifest)) file.prefetch = false
+    },
     // The routes as the server has them, for its description of itself.
     'nitro:init'(nitro) {
       nitro.options.virtual['#api-routes'] = () => {
