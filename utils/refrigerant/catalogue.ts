@@ -34,12 +34,12 @@ function saturationRow(designation: string, columns: readonly number[]): Saturat
   return { tC, bubblePressureKPa, dewPressureKPa, liquidDensity, vapourDensity }
 }
 
-// The logarithm of a vapour pressure is nearly straight over the inverse of the absolute temperature.
+// The logarithm of a vapour's pressure and of its density are nearly straight over the inverse of the absolute temperature.
 function saturationCurves(table: readonly SaturationRow[]): SaturationCurves {
   const curve = (point: (row: SaturationRow) => CurvePoint) => curveThrough(table.map(point))
   return {
     liquidDensity: curve(row => ({ x: row.tC, y: row.liquidDensity })),
-    vapourDensity: curve(row => ({ x: row.tC, y: row.vapourDensity })),
+    lnVapourDensity: curve(row => ({ x: risingInverse(row.tC), y: Math.log(row.vapourDensity) })),
     lnBubblePressure: curve(row => ({ x: risingInverse(row.tC), y: Math.log(row.bubblePressureKPa) })),
     lnDewPressure: curve(row => ({ x: risingInverse(row.tC), y: Math.log(row.dewPressureKPa) })),
   }

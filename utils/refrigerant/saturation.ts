@@ -34,7 +34,7 @@ export function saturationAt(refrigerant: Refrigerant, tC: number): Saturation {
   const inverse = risingInverse(tC)
   return {
     liquidDensity: valueOnCurve(curves.liquidDensity, tC),
-    vapourDensity: valueOnCurve(curves.vapourDensity, tC),
+    vapourDensity: Math.exp(valueOnCurve(curves.lnVapourDensity, inverse)),
     bubblePressureKPa: Math.exp(valueOnCurve(curves.lnBubblePressure, inverse)),
     dewPressureKPa: Math.exp(valueOnCurve(curves.lnDewPressure, inverse)),
     relativeErrorDensity: refrigerant.relativeErrorDensity,
@@ -54,7 +54,7 @@ export function liquidDensityAt(fluid: LiquidTable, tC: number): number {
 /** Density of the saturated vapour in kg/m3. Errors: RangeError outside the table. */
 export function vapourDensityAt(refrigerant: Refrigerant, tC: number): number {
   assertInTable(refrigerant, tC)
-  return valueOnCurve(refrigerant.curves.vapourDensity, tC)
+  return Math.exp(valueOnCurve(refrigerant.curves.lnVapourDensity, risingInverse(tC)))
 }
 
 /** Pressure at which the liquid begins to boil in kPa absolute. Errors: RangeError outside the table. */
@@ -63,7 +63,7 @@ export function bubblePressureAt(refrigerant: Refrigerant, tC: number): number {
   return Math.exp(valueOnCurve(refrigerant.curves.lnBubblePressure, risingInverse(tC)))
 }
 
-/** What pressures are interpolated over: the inverse of the absolute temperature, turned so that it rises with it. Units: 1/K. */
+/** What pressures and the vapour's density are interpolated over: the inverse of the absolute temperature, turned so that it rises with it. Units: 1/K. */
 export function risingInverse(tC: number): number {
   return -1 / kelvinFromCelsius(tC)
 }

@@ -25,8 +25,11 @@ export type LiquidTable = {
   derate?: number
 }
 
-/** The curves through a table's columns: densities over the temperature, the logarithms of pressures over its inverse. */
-export type SaturationCurves = { liquidDensity: Curve, vapourDensity: Curve, lnBubblePressure: Curve, lnDewPressure: Curve }
+/**
+ * The curves through a table's columns: the liquid's density over the temperature, the logarithms of the
+ * vapour's density and of the pressures over its inverse.
+ */
+export type SaturationCurves = { liquidDensity: Curve, lnVapourDensity: Curve, lnBubblePressure: Curve, lnDewPressure: Curve }
 
 /** What a fluid is made of, by mass. */
 export type Composition = {
