@@ -3,6 +3,7 @@ import type { FirmCard, OwnFirm } from '../../utils/contract/firm'
 import type { Access } from '../../utils/access/roles'
 import { useDatabase } from './database/currentDatabase'
 import { statement } from './database/database'
+import { directory } from './directory/directory'
 import { problem } from './http/problem'
 import { securityEntry } from './securityLog'
 
@@ -27,8 +28,12 @@ export async function firmCard(): Promise<FirmCard> {
 
 /** Changes the firm's own particulars. */
 export async function changeOwnFirm(change: Partial<OwnFirm>, by: Access, now: number): Promise<OwnFirm> {
-  const { read, write } = useDatabase()
+  const db = useDatabase()
+  const { read, write } = db
   const entry = securityEntry({ what: 'firm-changed', personId: by.personId, subject: Object.keys(change).join(' ') }, now)
-  if (Object.keys(change).length > 0) await write([statement(read.update(firm).set(change)), entry])
+  if (Object.keys(change).length > 0) {
+    await write([statement(read.update(firm).set(change)), entry])
+    await directory(db, true)
+  }
   return ownFirm()
 }

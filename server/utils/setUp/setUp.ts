@@ -4,6 +4,7 @@ import { firm, people } from '../../../drizzle/schema'
 import { setUpPath, type SetUp, type SetUpOpen } from '../../../utils/contract/setUp'
 import type { User } from '../../../utils/contract/session'
 import { useDatabase } from '../database/currentDatabase'
+import { directory } from '../directory/directory'
 import { linkUnknown, goodLink, newLink, useUpLink } from '../people/oneTimeLinks'
 import { securityEntry } from '../securityLog'
 import { hashNewPassword } from '../session/password'
@@ -41,7 +42,8 @@ export async function setUp({ token, firm: own, admin }: SetUp, now: number): Pr
   await goodLink('set-up', token, now)
   refuseWeakPassword(admin.password, admin.email, 'admin.password')
   const passwordHash = await hashNewPassword(admin.password)
-  const { read, write } = useDatabase()
+  const db = useDatabase()
+  const { read, write } = db
   const personId = uuid()
   // Both only while the link is good and nothing is there: of two at once one finds the link used up.
   const free = 'where exists (select 1 from one_time_links where token_hash = ? and purpose = \'set-up\' and used_at is null and expires_at > ?)'
@@ -60,6 +62,8 @@ export async function setUp({ token, firm: own, admin }: SetUp, now: number): Pr
   if (results.at(-1)?.rows.length === 0) throw linkUnknown()
   const [row] = await read.select().from(people).where(eq(people.id, personId)).limit(1)
   if (!row) throw linkUnknown()
+  // Whoever asked before, asked a firm without a time zone.
+  await directory(db, true)
   const { sid, store } = newSession(personId, passwordHash, now)
   await write([store, securityEntry({ what: 'set-up', personId }, now)])
   return { user: userOf(row), sid }
