@@ -184,6 +184,19 @@ describe('burnt refrigerant', () => {
     expect(term(limitOf({ condition: 'suspect' }), 'oily').standing).toBe('compared')
     expect(limitOf({ condition: 'suspect' }).governingRule).toBe('water-weight')
   })
+
+  it('is 0.75 kg/L for burnt R-12, which is published and lower than the share carried over from R-22', () => {
+    const limit = limitOf({ refrigerant: 'R-12', condition: 'burnt' })
+    // V = 21.590997 / 0.99904 = 21.611744 L; x 0.75 kg/L = 16.208808 kg, against 0.69 x 1.213 kg/L = 0.837 kg/L
+    expect(limit).toMatchObject({ governingRule: 'oily', fillLimitGrams: 16_208 })
+    expect(sumOf(limit, 'oily')).toBe('21.61 L × 0.7500 kg/L (printed for R-12 with oil) = 35.73 lb')
+    expect(term(limit, 'oily').source).toContain('TRG 102')
+  })
+
+  it('holds R-22 to its own share with oil, which comes just below the published 0.75 kg/L', () => {
+    // 21.611744 L x 0.75 kg/L = 16.208808 kg
+    expect(limitOf({ condition: 'burnt', refrigerant: 'R-22' }).fillLimitGrams).toBeLessThan(16_208)
+  })
 })
 
 describe('what is not known', () => {
