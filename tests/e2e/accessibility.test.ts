@@ -50,6 +50,11 @@ const SCREENS: Record<string, Screen[]> = {
     { as: manager, at: demo => `/c/${demo.codes.empty}/working?refrigerant=R-22` },
   ],
   'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
+  'evacuation-level.vue': [
+    { as: technician, at: () => '/evacuation-level' },
+    { as: technician, at: () => '/evacuation-level?refrigerant=R-32&charge=250lb&machineMade=1990&circumstances=leaking' },
+    { as: manager, at: () => '/evacuation-level?refrigerant=R-134a&charge=250lb&machineMade=2015&inHg=14&heldMinutes=5' },
+  ],
   'fill-limit.vue': [
     { as: technician, at: () => '/fill-limit' },
     { as: technician, at: () => '/fill-limit?refrigerant=R-290&waterCapacity=47.7lb&tareWeight=27.9lb&spec=DOT-4BA400' },

@@ -75,7 +75,7 @@ describe('a cylinder from its label to the auditor', () => {
     await weightIn(page, 'Tare weight, TW', 27.5)
     await weightIn(page, 'Water capacity, WC', 47.6)
     await page.getByLabel('Made').fill('03-21')
-    await page.getByLabel('Test mark 1, month and year').fill('04-25')
+    await page.getByLabel('Test mark 1, the mark, or its month and year').fill('04-25')
     await page.getByRole('group', { name: 'Marked for flammables', exact: true }).getByRole('button', { name: 'no', exact: true }).click()
     await page.getByRole('group', { name: 'What is in it', exact: true }).getByRole('button', { name: /evacuated/ }).click()
     await weightIn(page, 'On the scale now', 27.5)
