@@ -45,7 +45,7 @@ describe('the suffixes of 49 CFR 180.213', () => {
   it.each(['V', 'DT', 'R', 'X'])('%s is none of them, and its mark counts for nothing', (suffix) => {
     expect(suffixMeaning(suffix)).toBeNull()
     const { lastMonth } = requalification({
-      steel: { spec: 'DOT-4BA', madeMonth: '2020-01', waterCapacityGrams: 22_000, service: { dedicatedTo: null, holds: [], hasHeldBurnt: false } },
+      steel: { spec: 'DOT-4BA', madeMonth: '2020-01', waterCapacityGrams: 22_000, service: { isOwn: true, dedicatedTo: null, holds: [], hasHeldBurnt: false } },
       marks: [{ month: '2025-01', suffix }],
       nowMs: Date.UTC(2026, 5, 1),
       timeZone: 'UTC',

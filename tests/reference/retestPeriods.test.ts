@@ -12,7 +12,7 @@ function stand(spec: string, marks: RequalificationMark[], choices: OwnerChoice[
       spec,
       madeMonth: more.made ?? '2010-05',
       waterCapacityGrams: 20_000,
-      service: { dedicatedTo: more.refrigerant ?? null, holds: [], hasHeldBurnt: false },
+      service: { isOwn: true, dedicatedTo: more.refrigerant ?? null, holds: [], hasHeldBurnt: false },
     },
     marks,
     nowMs: more.on ?? Date.UTC(2034, 0, 15),

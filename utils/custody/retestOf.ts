@@ -36,7 +36,12 @@ export function retestOf(state: CylinderState, day: RetestDay): Requalification 
   })
 }
 
-function serviceOf({ dedicatedTo, contents, hasHeldBurnt }: CylinderState): Service {
+function serviceOf({ ownership, dedicatedTo, contents, hasHeldBurnt }: CylinderState): Service {
   const { refrigerant, knownSinceVacuum } = contents
-  return { dedicatedTo, holds: refrigerant === null ? knownSinceVacuum : [...knownSinceVacuum, refrigerant], hasHeldBurnt }
+  return {
+    isOwn: ownership === 'own',
+    dedicatedTo,
+    holds: refrigerant === null ? knownSinceVacuum : [...knownSinceVacuum, refrigerant],
+    hasHeldBurnt,
+  }
 }

@@ -54,7 +54,7 @@ export function requalification(input: RequalificationInput): Requalification {
   const last = lastBeginning(input)
   const begun = { lastMonth: last?.month ?? null, intervalMonths: null, dueMonth: null, choice: null }
   if (SPECS[spec]?.requalified === false) return { ...begun, state: 'not-required', basis: notRequired(spec) }
-  const left = [...uncounted(input, last).map(notCounted), ...burntWord(input)].map(sentence => ` ${sentence}`).join('')
+  const left = [...uncounted(input, last).map(notCounted), ...notCovered(input)].map(sentence => ` ${sentence}`).join('')
   if (!last) return { ...begun, intervalMonths: shortestMonths(spec, input.rules), state: 'unknown', basis: `No test date is known.${left}` }
   if (last.period === null) return { ...begun, state: 'unknown', basis: periodNotKnown(spec) }
   const { months, choice } = last.period
@@ -121,9 +121,13 @@ function notCounted({ month, beginning, suffix }: ReturnType<typeof passedMarks>
   return `The ${what} of ${when} does not count: only 49 CFR ${paragraph} lets it stand in for a volumetric test, and no choice of the owner’s covers this cylinder.`
 }
 
-function burntWord({ steel, rules }: RequalificationInput): string[] {
+/** Why a choice that was made for cylinders like this one is not for this one. */
+function notCovered({ steel, rules }: RequalificationInput): string[] {
+  const { isOwn, hasHeldBurnt } = steel.service
   const isMeant = rules.ownerChoices.some(({ paragraph }) => CHOICE_TERMS[paragraph].specs.includes(steel.spec))
-  return steel.service.hasHeldBurnt && isMeant ? ['Burnt refrigerant was in it, so the owner’s choice does not cover it.'] : []
+  if (!isMeant) return []
+  if (!isOwn) return ['It is not the firm’s own, so the owner’s choice does not cover it.']
+  return hasHeldBurnt ? ['Burnt refrigerant was in it, so the owner’s choice does not cover it.'] : []
 }
 
 function periodInWords(spec: string, { months, choice, isOwnMonths }: TestPeriod): string {

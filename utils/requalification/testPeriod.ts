@@ -19,6 +19,8 @@ export type Steel = {
 
 /** What a cylinder is used for, as far as the log tells. */
 export type Service = {
+  /** Whether it is the contractor's own: of another's nobody here knows what else it was used for, nor chooses its owner's period. */
+  isOwn: boolean
   dedicatedTo: string | null
   /** Every refrigerant known to be in it. */
   holds: readonly string[]
@@ -100,8 +102,8 @@ function covers({ paragraph, from }: OwnerChoice, month: Month, steel: Steel): b
 }
 
 function isInService(paragraph: ChoiceParagraph, { service, madeMonth, waterCapacityGrams }: Steel): boolean {
-  const { dedicatedTo, holds, hasHeldBurnt } = service
-  if (hasHeldBurnt) return false
+  const { isOwn, dedicatedTo, holds, hasHeldBurnt } = service
+  if (!isOwn || hasHeldBurnt) return false
   if (paragraph === '180.209(h)') return dedicatedTo === AMMONIA && holds.every(name => name === AMMONIA)
   if ([dedicatedTo ?? '', ...holds].some(name => INORGANIC.test(name))) return false
   if (paragraph !== '180.209(b)') return true

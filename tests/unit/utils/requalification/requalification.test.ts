@@ -7,7 +7,7 @@ const CHICAGO = 'America/Chicago'
 // The last millisecond of March 2027 in Chicago, which keeps summer time by then.
 const END_OF_MARCH = Date.UTC(2027, 3, 1, 5) - 1
 
-const CLEAN = { dedicatedTo: null, holds: [], hasHeldBurnt: false }
+const CLEAN = { isOwn: true, dedicatedTo: null, holds: [], hasHeldBurnt: false }
 const E: OwnerChoice = { paragraph: '180.209(e)', reason: 'coated, analyzed refrigerant only', from: null }
 const G: OwnerChoice = { paragraph: '180.209(g)', reason: 'looked at by a RIN holder', from: null }
 
@@ -113,6 +113,13 @@ describe('the due month', () => {
     expect(stand({ choices: [E], steel: burnt }).dueMonth).toBe('2027-03')
     expect(stand({ choices: [E], steel: burnt }).basis).toContain('Burnt refrigerant was in it, so the owner’s choice does not cover it.')
     expect(stand({ steel: burnt }).basis).not.toContain('Burnt')
+  })
+
+  it('says that the owner\'s choice is not for another\'s cylinder', () => {
+    const rented = { service: { ...CLEAN, isOwn: false } }
+    expect(stand({ choices: [E], steel: rented }).dueMonth).toBe('2027-03')
+    expect(stand({ choices: [E], steel: rented }).basis).toContain('It is not the firm’s own, so the owner’s choice does not cover it.')
+    expect(stand({ steel: rented }).basis).not.toContain('own,')
   })
 
   it('goes by the owner\'s own months where they are fewer', () => {

@@ -2,8 +2,8 @@ import { describe, expect, it } from 'vitest'
 import type { ChoiceParagraph, OwnerChoice } from '~~/utils/requalification/ownerChoice'
 import { testPeriod, type Beginning, type Service, type Steel } from '~~/utils/requalification/testPeriod'
 
-const CLEAN: Service = { dedicatedTo: null, holds: ['R-410A'], hasHeldBurnt: false }
-const AMMONIA: Service = { dedicatedTo: 'R-717', holds: ['R-717'], hasHeldBurnt: false }
+const CLEAN: Service = { isOwn: true, dedicatedTo: null, holds: ['R-410A'], hasHeldBurnt: false }
+const AMMONIA: Service = { isOwn: true, dedicatedTo: 'R-717', holds: ['R-717'], hasHeldBurnt: false }
 
 function chosen(paragraph: ChoiceParagraph, from: string | null = null): OwnerChoice {
   return { paragraph, reason: 'its service is known', from }
@@ -76,6 +76,16 @@ describe('an owner\'s choice', () => {
       expect(months(beginning, spec, [chosen(paragraph)], { steel: { service: AMMONIA } })).toBe(60)
       expect(months(beginning, spec, [chosen(paragraph)], { steel: { service: { ...CLEAN, hasHeldBurnt: true } } })).toBe(60)
     })
+
+  it('covers no cylinder of another owner, whose service nobody here knows', () => {
+    const others = { steel: { service: { ...CLEAN, isOwn: false } } }
+    expect(months('volumetric', 'DOT-4BA', [chosen('180.209(e)')], others)).toBe(60)
+    expect(months('made', 'DOT-4BA', [chosen('180.209(e)')], others)).toBe(60)
+    expect(months('visual', 'DOT-4BA', [chosen('180.209(g)')], others)).toBeNull()
+    expect(months('starred', 'DOT-3AA', [chosen('180.209(b)')], others)).toBe(60)
+    expect(months('volumetric', 'DOT-4AA480', [chosen('180.209(h)')], { steel: { service: { ...AMMONIA, isOwn: false } } })).toBe(60)
+    expect(months('volumetric', 'DOT-4BA', [], { own: 36, ...others })).toBe(36)
+  })
 
   it('lets no outside look count once burnt refrigerant was in it', () => {
     expect(months('visual', 'DOT-4BA', [chosen('180.209(g)')])).toBe(60)

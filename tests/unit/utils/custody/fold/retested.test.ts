@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import {
-  codes, contentsAfter, did, filled, kg, lastFindings, lastMovements, LOT, registered, REQUALIFIER, STAMP, TEST_PLACE, viewAfter, weighed,
+  codes, contentsAfter, CUSTOMER, did, filled, kg, lastFindings, lastMovements, LOT, registered, REQUALIFIER, STAMP, TEST_PLACE, viewAfter, weighed,
 } from '~~/tests/helpers/custody'
 import type { DetailsOf } from '~~/utils/custody/schema'
 
@@ -40,6 +40,11 @@ describe('a passed test', () => {
     expect(viewAfter([...burnt, retested()], byChoice).requalification).toMatchObject({ dueMonth: '2031-07', choice: null })
     expect(viewAfter([...burnt, retested()], byChoice).contents.burnt).toBe(false)
     expect(viewAfter([registered({ contents: { refrigerant: 'R-22', condition: 'burnt' } }), retested()], byChoice).requalification.dueMonth).toBe('2031-07')
+  })
+
+  it.each(['rental', 'deposit', 'customer'] as const)('holds no twelve years by our choice in a %s cylinder', (ownership) => {
+    const story = [registered({ ownership, ownerId: CUSTOMER }), retested()]
+    expect(viewAfter(story, byChoice).requalification).toMatchObject({ dueMonth: '2031-07', choice: null })
   })
 
   it('with water leaves it wet and empty, with no stop weight until it is evacuated', () => {
