@@ -98,6 +98,7 @@ describe('the fill limit of a stamp', () => {
 
   it.each([
     [{ waterCapacity: '24' }, 400], [{ waterCapacity: '-24lb' }, 400], [{ tareWeight: '15lb17oz' }, 400], [{ spec: 'DOT-9' }, 400],
+    [{ waterCapacity: '0lb' }, 400], [{ waterCapacity: '0lb0oz' }, 400], [{ tareWeight: '0kg' }, 400], [{ waterCapacity: '100001lb' }, 400], [{ gross: '999999999999999999kg' }, 400],
     [{ colour: 'red' }, 400], [{ servicePressurePsig: '0' }, 400], [{ refrigerant: 'R-9999' }, 422],
   ])('refuses %j with %i', async (query, status) => {
     expect((await fillLimit(query as unknown as Record<string, string>)).status).toBe(status)
@@ -114,7 +115,7 @@ describe('the fill limit of a composition', () => {
     const { status, body } = await ofComposition('R-32:50,R-125:50')
     expect(status).toBe(200)
     // At 131 F 827.916 kg/m3 with the derate; x 0.95 x 10.896678 L = 8,570.5 g, less than 80 % of the water, 8,708 g.
-    expect(body).toMatchObject({ forRefrigerant: 'R-32:50,R-125:50', governingRule: 'hot-ceiling', fillLimitGrams: 8_570, stopWeightGrams: null })
+    expect(body).toMatchObject({ forRefrigerant: 'R-32/R-125 (50/50)', governingRule: 'hot-ceiling', fillLimitGrams: 8_570, stopWeightGrams: null })
     expect(body.refusals.map(refusal => refusal.code)).toEqual(['pressure-class'])
     expect(body.terms.find(term => term.rule === 'hot-ceiling')?.factors.map(factor => factor.name))
       .toEqual(['share', 'volume', 'liquid-density', 'derate'])

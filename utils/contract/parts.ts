@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { parseMassText } from '../quantity/mass'
+import { parseMassText, readingGrams } from '../quantity/mass'
 
 /** A UUID in lower case. */
 export const id = z.uuid('must be an id (a UUID)').transform(value => value.toLowerCase())
@@ -29,13 +29,16 @@ export const massReading = z.discriminatedUnion('unit', [
   z.strictObject({ unit: z.literal('kg'), value: z.number().nonnegative().finite().max(50_000) }),
 ])
 
-/** A mass as it is written in a query. */
+/** A mass as it is written in a query; no more than in an event. */
 export const massInQuery = z.string().max(20).transform((text, context) => {
   const reading = parseMassText(text)
-  if (reading) return reading
-  context.addIssue({ code: 'custom', message: 'must be a mass such as 47.6lb, 41lb13oz or 18.97kg' })
+  if (reading && massReading.safeParse(reading).success) return reading
+  context.addIssue({ code: 'custom', message: reading ? 'must be at most 100,000 lb or 50,000 kg' : 'must be a mass such as 47.6lb, 41lb13oz or 18.97kg' })
   return z.NEVER
 })
+
+/** A stamped mass as it is written in a query: a cylinder weighs something and holds something. */
+export const stampedMassInQuery = massInQuery.refine(reading => readingGrams(reading) > 0, 'must be more than nothing; leave it out where it cannot be read')
 
 /** Whether no id stands twice in a list. */
 export function eachOnce(ids: readonly string[]): boolean {

@@ -6,7 +6,7 @@ import type { Saturation } from '../refrigerant/saturation'
 import type { Refrigerant, SaturationRow } from '../refrigerant/types'
 import type { UnEntry } from '../refrigerant/unEntry'
 import { splitSpec } from '../requalification/specs'
-import { massInQuery, type Page } from './parts'
+import { massInQuery, stampedMassInQuery, type Page } from './parts'
 
 /** A GWP that stands for a refrigerant where there is room for one, with the list it is from. */
 export type HeadlineGwp = { basis: GwpBasis, value: number } | null
@@ -91,8 +91,8 @@ const compositionInQuery = z.string().max(400).transform((text, context) => {
 export const fillLimitQuery = z.strictObject({
   refrigerant: z.string().min(1).max(40).optional(),
   composition: compositionInQuery.optional(),
-  waterCapacity: massInQuery.optional(),
-  tareWeight: massInQuery.optional(),
+  waterCapacity: stampedMassInQuery.optional(),
+  tareWeight: stampedMassInQuery.optional(),
   spec: specInQuery,
   servicePressurePsig: z.coerce.number('must be a figure in psig').positive('must be above 0').max(10_000, 'must be at most 10,000').optional(),
   flammableMarked: z.enum(['true', 'false']).default('false'),
