@@ -126,6 +126,8 @@ describe('the firm\'s rules', () => {
     expect([first.status, again.status]).toEqual([201, 201])
     expect(again.body).toEqual(first.body)
     expect((await client.post('/api/policy', { ...body, reason: 'Another' })).status).toBe(409)
+    // Else somebody would believe that it begins a day later, while it begins tomorrow.
+    expect((await client.post('/api/policy', { ...body, from: new Date(Date.now() + 2 * DAY).toISOString() })).status).toBe(409)
     expect((await policyFor(client)).rules.filter(rule => rule.id === id)).toHaveLength(1)
   })
 

@@ -8,7 +8,7 @@ import { statement, type Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { firmRules } from '../directory/firmRules'
 import { problem } from '../http/problem'
-import { beginningOf } from './beginning'
+import { beginningOf, instantNamed } from './beginning'
 
 /** Postings that may still stand beside each other in the log out of the order of their clocks. */
 const LAST_LINES = 200
@@ -35,9 +35,12 @@ export async function setRule(db: Database, body: NewRule, by: Access, clock: ()
     await commit([statement(db.read.insert(settings).values({ id, kind: body.kind, fromAt, value, reason: body.reason, setBy: by.personId, setAt }))])
     await directory(db, true)
   })
-  const rule = firmRules(await directory(db)).find(one => one.id === id)
-  if (!rule || rule.kind !== body.kind || rule.reason !== body.reason || JSON.stringify(rule.value) !== JSON.stringify({ ...rule.value, ...value })) {
-    throw problem(409, 'Another rule has this id', 'Send it again under a new id.')
+  const from = await directory(db)
+  const rule = firmRules(from).find(one => one.id === id)
+  const asked = instantNamed(body.from, from.timeZone)
+  if (!rule || rule.kind !== body.kind || rule.reason !== body.reason || (asked ?? rule.fromAt) !== rule.fromAt
+    || JSON.stringify(rule.value) !== JSON.stringify({ ...rule.value, ...value })) {
+    throw problem(409, 'Another rule has this id', 'It was set before with another beginning, other figures or another reason. Look at the rules as they stand, then set yours under a new id.')
   }
   followRules(db, clock).catch((error: unknown) => console.error('The rows could not follow the new rule; they will later:', String(error)))
   return rule
