@@ -8,12 +8,11 @@ export function pressureQuery(reading: EnteredReading): Record<string, string> {
   return Object.fromEntries(FIELDS.flatMap(name => reading[name] === undefined ? [] : [[name, String(reading[name])]]))
 }
 
-/** What of a reading stands in an address; what is no figure, or none that can be, is left out. */
+/** What of a reading stands in an address. What is no figure is left out; one that cannot be stays, for its field to say so. */
 export function readingInQuery(query: Record<string, unknown>): Partial<PressureReading> {
   return Object.fromEntries(FIELDS.flatMap((name) => {
     const text = query[name]
     const value = typeof text === 'string' && text.trim() !== '' ? Number(text) : Number.NaN
-    const { least, most } = PRESSURE_READING_RANGES[name]
-    return value >= least && value <= most ? [[name, value]] : []
+    return Number.isFinite(value) ? [[name, value]] : []
   }))
 }

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { pressureEntryOf, readPressureEntry } from '~~/utils/refrigerant/pressureEntry'
 import { pressureQuery, readingInQuery } from '~~/utils/refrigerant/pressureQuery'
 
 describe('a reading in an address', () => {
@@ -9,8 +10,13 @@ describe('a reading in an address', () => {
     expect(readingInQuery({ pressureKPa: '0' })).toEqual({ pressureKPa: 0 })
   })
 
-  it('is left out where it is no figure or cannot be', () => {
-    expect(readingInQuery({ pressureKPa: 'high', temperatureC: '', gaugeErrorKPa: ['1', '2'], barometerKPa: '29.92', thermometerErrorC: null })).toEqual({})
-    expect(readingInQuery({ temperatureC: '200', pressureKPa: '20000.1' })).toEqual({ temperatureC: 200 })
+  it('is left out where it is no figure', () => {
+    expect(readingInQuery({ pressureKPa: 'high', temperatureC: '', gaugeErrorKPa: ['1', '2'], barometerKPa: 'Infinity', thermometerErrorC: null })).toEqual({})
+  })
+
+  it('is not judged by the standard air where its barometer cannot be: 29.92 was inHg', () => {
+    const entry = pressureEntryOf(readingInQuery({ pressureKPa: '1000', temperatureC: '25', barometerKPa: '29.92' }), 'psi')
+    expect(entry.barometer).toBe('8.84')
+    expect(readPressureEntry(entry)).toEqual({ reason: 'The barometer shows more or less than can be. Look at its unit.' })
   })
 })
