@@ -96,7 +96,8 @@ describe('the comparison of the fill rules', () => {
   it('takes a composition in place of a name', async () => {
     const words = await wordsOf(shop.manager.client, `/fill-limit?composition=R-32:50,R-125:50&${STAMP}`)
     expect(words).toContain('taken off for the estimate')
-    expect(words).toMatch(/No pressure is known/)
+    expect(words).toMatch(/Do not fill: not rated for its pressure/)
+    expect(words).toMatch(/No pressure is known for R-32\/R-125 \(50\/50\)/)
   })
 
   it('says beside each field what cannot be read, and keeps all that was typed', async () => {

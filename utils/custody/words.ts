@@ -83,7 +83,7 @@ export const MISSING_WORDS: Record<Missing, string> = {
 export const FINDING_WORDS: Record<FindingCode, string> = {
   'overfill': 'overfilled',
   'nearly-full': 'nearly full',
-  'pressure-class': 'marked pressure too low',
+  'pressure-class': 'not rated for its pressure',
   'spec-not-for-gas': 'not made for this gas',
   'not-refillable': 'not refillable',
   'not-marked-flammable': 'not marked for flammables',

@@ -45,7 +45,18 @@ export function formatGwp(value: number): string {
 
 /** Shares of a mixture in words. */
 export function compositionInWords(composition: Refrigerant['composition']): string {
-  return composition.map(({ component, massPercent }) => `${component} ${massPercent} %`).join(', ')
+  return composition.map(({ component, massPercent }) => `${component}\u00A0${massPercent}\u00A0%`).join(', ')
+}
+
+/**
+ * The name of a mixture that has no number of its own.
+ *
+ * Source: the form of ANSI/ASHRAE Standard 34 for blends without a number (from memory).
+ *
+ * @example mixtureName([{ component: 'R-32', massPercent: 50 }, { component: 'R-125', massPercent: 50 }]) // 'R-32/R-125 (50/50)'
+ */
+export function mixtureName(composition: Refrigerant['composition']): string {
+  return `${composition.map(({ component }) => component).join('/')} (${composition.map(({ massPercent }) => massPercent).join('/')})`
 }
 
 /** What the safety class of a refrigerant means for a cylinder. */
@@ -53,7 +64,7 @@ export function safetyForCylinder({ safetyClass, flammable, toxic }: { safetyCla
   const unknown = safetyClass === null ? ['Its safety class is not known, so it counts as flammable and toxic.'] : []
   const burns = flammable
     ? ['It burns: only into a cylinder marked for flammables, with machines made for them (common practice, no source).']
-    : ['It does not burn as it is classed.']
+    : ['Does not burn in air, by its class.']
   const poisons = toxic ? ['Class B, more toxic: a DOT-4E or DOT-39 may not hold it (49 CFR 173.304a(a)(1)).'] : []
   return [...unknown, ...burns, ...poisons]
 }

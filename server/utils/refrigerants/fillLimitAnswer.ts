@@ -8,6 +8,7 @@ import { scaleAccuracyGrams } from '~~/utils/quantity/scale'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
 import { idealMixture } from '~~/utils/refrigerant/idealMixture'
 import type { Catalogue, Composition } from '~~/utils/refrigerant/types'
+import { mixtureName } from '~~/utils/refrigerant/words'
 import type { Requalification } from '~~/utils/requalification/requalification'
 import { problem } from '../http/problem'
 
@@ -27,7 +28,7 @@ export function fillLimitAnswer(query: FillLimitQuery, firmPolicy: FillPolicy): 
   return { ...capacityInWords(capacity, state.stamp), netGrams }
 }
 
-/** The fluid asked about, and the catalogue that knows it: a composition is added to it under its own text. */
+/** The fluid asked about, and the catalogue that knows it: a composition is added to it under the name that the trade would write. */
 function fluidOf({ refrigerant, composition }: FillLimitQuery): { refrigerant: string, catalogue: Catalogue } {
   if (refrigerant !== undefined) {
     if (composition !== undefined) throw impossible('composition', 'cannot stand beside a refrigerant')
@@ -35,7 +36,7 @@ function fluidOf({ refrigerant, composition }: FillLimitQuery): { refrigerant: s
     return { refrigerant, catalogue: CATALOGUE }
   }
   if (composition === undefined) throw impossible('refrigerant', 'must be named, or a composition')
-  const designation = composition.map(({ component, massPercent }) => `${component}:${massPercent}`).join(',')
+  const designation = mixtureName(composition)
   const asked: Composition = { designation, components: composition, source: 'as asked' }
   const mixture = idealMixture(asked, CATALOGUE)
   if ('because' in mixture) throw impossible('composition', mixture.because)
