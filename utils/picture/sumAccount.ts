@@ -34,7 +34,7 @@ export function sumAccount(view: CylinderView, sources: SumSources, unit: MassUn
     line('Scale reads', sources.weighing && `${byWhom(sources.weighing, clock)}, hoses off`, sources.weighing && as(exactGrams(sources.weighing.gross), 'nearest'), whyNoReading(view)),
     line('less tare weight', sources.newTare ? `new tare at a retest, ${byWhom(sources.newTare, clock)}` : 'stamp', as(tareGrams === null ? null : -tareGrams, 'nearest'), 'not known'),
     line('Net', contents.nothingInIt ? 'nothing in it' : 'in it now', as(contents.netGrams, 'nearest'), 'not weighed', { isResult: true }),
-    line('Fill limit', limitNote(view), as(capacity.fillLimitGrams, 'down'), capacity.forRefrigerant ? 'no rule gives one' : 'by refrigerant'),
+    line('Fill limit', limitNote(view), as(capacity.fillLimitGrams, 'down'), capacity.forRefrigerant ? 'no rule gives one' : contents.nothingInIt ? 'by refrigerant' : 'not known'),
     line('Room', 'limit less net', as(capacity.roomGrams, 'down'), isRefused ? 'not usable' : contents.netGrams === null ? 'not weighed' : 'not known', { isResult: true }),
     line('Stop weight', 'tare plus limit', as(capacity.exactStopWeightGrams, 'down'), isRefused ? 'nothing may go in' : 'not known', { isResult: true, isEnd: true }),
   ]

@@ -29,6 +29,9 @@ export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
   const refusal = capacity.refusals[0]
   if (refusal) return { kind: 'stop', text: `Do not fill: ${FINDING_WORDS[refusal.code]}`, reason: refusal.text, source: refusal.source }
   if (!contents.nothingInIt && contents.refrigerant === null) {
+    if (contents.condition === 'mixed') {
+      return { kind: 'stop', text: 'Do not fill: contents mixed', reason: 'More than one refrigerant is in it. Nothing goes in until it is emptied to a deep vacuum.', source: null }
+    }
     return { kind: 'stop', text: 'Do not fill: contents not known', reason: 'What is in it is not known. Nothing goes in until it is identified or emptied to a deep vacuum.', source: null }
   }
 
@@ -59,8 +62,10 @@ function roomVerdict({ capacity, contents, findings }: CylinderView, unit: MassU
   if (roomGrams === null) return { kind: 'att', text: 'Not weighed: the room is not known', reason: null, source: null }
   const isNearlyFull = findings.some(finding => finding.code === 'nearly-full')
   if (isNearlyFull && roomGrams <= (contents.uncertaintyGrams ?? 0)) return { kind: 'att', text: 'Full', reason: null, source: null }
-  const text = `Room for ${formatMass(roomGrams, unit, 'down')} of ${forRefrigerant ?? 'refrigerant'}`
-  return { kind: isNearlyFull ? 'att' : 'ok', text, reason: null, source: null }
+  // What joins a burnt charge counts as burnt as well.
+  const isBurnt = contents.burnt && !contents.nothingInIt
+  const text = `Room for ${formatMass(roomGrams, unit, 'down')} of ${isBurnt ? 'burnt ' : ''}${forRefrigerant ?? 'refrigerant'}`
+  return { kind: isNearlyFull || isBurnt ? 'att' : 'ok', text, reason: null, source: null }
 }
 
 function excessText({ capacity, contents }: CylinderView, unit: MassUnit): string {
@@ -69,8 +74,8 @@ function excessText({ capacity, contents }: CylinderView, unit: MassUnit): strin
   return `Overfilled by ${formatMass(contents.netGrams - fillLimitGrams, unit, 'up')}`
 }
 
-/** What stands at the right of the stamp plate: the refrigerant, or that there is none, or that it is not known. */
+/** What stands at the right of the stamp plate: the refrigerant, or that there is none, that it is mixed or not known. */
 export function contentsWord({ contents }: CylinderView): string {
   if (contents.nothingInIt) return 'empty'
-  return contents.refrigerant ?? 'unknown'
+  return contents.refrigerant ?? (contents.condition === 'mixed' ? 'mixed' : 'unknown')
 }

@@ -40,6 +40,11 @@ describe('the sum behind a stop weight', () => {
     expect(figures(lines).slice(2)).toEqual(['Net 0.00', 'Fill limit – by refrigerant', 'Room – not known', 'Stop weight – not known'])
   })
 
+  it('of contents that nobody can name does not ask for a refrigerant', () => {
+    const lines = sumOf([registered({ contents: 'unknown', gross: { unit: 'kg', value: 15 } })])
+    expect(figures(lines)).toContain('Fill limit – not known')
+  })
+
   it('gives no room above a limit but keeps it negative, and says what it says of a refusal', () => {
     const over = sumOf([registered(), filled('R-22', 28.5)])
     expect(figures(over)).toContain('Room \u22120.50')

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { verdictOf, verdictOfScan } from '../../../../utils/picture/verdict'
+import { contentsWord, verdictOf, verdictOfScan } from '../../../../utils/picture/verdict'
 import { fold } from '../../../../utils/custody/fold'
 import { view } from '../../../../utils/custody/view'
 import { did, filled, FOLD_CONTEXT, recorded, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, weighed, type Told } from '../../../helpers/custody'
@@ -36,6 +36,15 @@ describe('the first line said of a cylinder', () => {
 
   it('is a stop where nobody knows what is in it, never a room', () => {
     expect(verdict([registered({ contents: 'unknown', gross: { unit: 'kg', value: 15 } })])).toMatchObject({ kind: 'stop', text: 'Do not fill: contents not known' })
+  })
+
+  it('says of what is mixed that it is mixed, and of what is burnt that it is burnt', () => {
+    const told = (refrigerant: string | null, condition: 'mixed' | 'burnt') =>
+      [registered(), filled('R-22', 20), did('checked', { method: 'laboratory', composition: [], verdict: { refrigerant, condition } })]
+    expect(verdict(told(null, 'mixed'))).toMatchObject({ kind: 'stop', text: 'Do not fill: contents mixed' })
+    expect(contentsWord(view(fold(recorded(...told(null, 'mixed')), FOLD_CONTEXT).state, VIEW_CONTEXT))).toBe('mixed')
+    // V = 20 kg / 0.99904 kg/L; 0.69 of it as R-22 of 1.0823 kg/L at 122 °F is 14.95 kg: less than 16 kg by water weight.
+    expect(verdict(told('R-22', 'burnt'))).toMatchObject({ kind: 'att', text: 'Room for 6.95\u00A0kg of burnt R-22' })
   })
 
   it('says in the line itself why nothing may go in', () => {
