@@ -78,11 +78,11 @@ export function whyNoCheck(refrigerant: Refrigerant, temperatureC: number): stri
   const { designation, table, tableMaxC, tcK } = refrigerant
   const coldestC = table[0]?.tC ?? tableMaxC
   const at = bothScales(temperatureC)
-  if (temperatureC < coldestC) return `The figures of ${designation} begin at ${bothScales(coldestC)}. At ${at} a check is not possible.`
+  if (temperatureC < coldestC) return `The figures of ${designation} begin at ${bothScales(coldestC)}. None is known at ${at}.`
   const criticalC = celsiusFromKelvin(tcK)
   return temperatureC >= criticalC
-    ? `At ${at} ${designation} has no liquid: from ${bothScales(criticalC)} up it is a gas, and its pressure depends on how much is in the cylinder. A check is not possible.`
-    : `The figures of ${designation} end at ${bothScales(tableMaxC)}. At ${at} a check is not possible.`
+    ? `At ${at} ${designation} has no liquid: from ${bothScales(criticalC)} up it is a gas, and its pressure depends on how much is in the cylinder.`
+    : `The figures of ${designation} end at ${bothScales(tableMaxC)}. None is known at ${at}.`
 }
 
 function bothScales(tC: number): string {

@@ -27,6 +27,11 @@ it('writes the point that was asked for, with the same numbers as the marks', as
   expect(wrapper.find('[data-part=dew]').attributes('style')).toContain('left: 40%')
 })
 
+it('says what makes the point doubtful beside it', async () => {
+  const wrapper = await mountSuspended(RefrigerantCurve, { props: { ...props, doubt: 'Its bubble point comes out 4 K too cold.' } })
+  expect(wrapper.find('[role=status] + p').text()).toBe('In doubt. Its bubble point comes out 4 K too cold.')
+})
+
 it('tells bubble and dew apart by their lines and words, not by colour alone', async () => {
   const wrapper = await mountSuspended(RefrigerantCurve, { props })
   expect(wrapper.find('figcaption').text()).toContain('bubble pressure: full of liquid')
