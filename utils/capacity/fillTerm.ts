@@ -49,7 +49,7 @@ export function fillTerm({ rule, figure }: RuleAnswer, standing: TermStanding, b
   if (bounds && standing === 'unsafe') return { rule, limitGrams: null, because: bounds.unsafeBecause, standing, factors, source }
   const limitGrams = Math.floor(exactGrams)
   return standing === 'above-margin'
-    ? { rule, limitGrams, because: 'above our margin below liquid-full at 131 °F', standing, factors, source }
+    ? { rule, limitGrams, because: 'above our margin: over the hot ceiling at 131 °F', standing, factors, source }
     : { rule, limitGrams, standing, factors, source }
 }
 

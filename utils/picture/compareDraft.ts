@@ -1,7 +1,7 @@
 import type { ProblemError } from '../contract/problem'
 import type { CylinderView } from '../custody/cylinderView'
 import { parseFigure } from '../quantity/figure'
-import { massText, readingGrams, type MassUnit } from '../quantity/mass'
+import { formatReading, massText, parseMassText, readingGrams, type MassUnit } from '../quantity/mass'
 
 /** One component of a blend as it is typed. */
 export type ComponentDraft = { component: string, percent: string }
@@ -94,6 +94,28 @@ function componentsOf(text: string): ComponentDraft[] {
     const cut = part.lastIndexOf(':')
     return cut === -1 ? { component: part, percent: '' } : { component: part.slice(0, cut), percent: part.slice(cut + 1) }
   })
+}
+
+/**
+ * The stamp that was asked about, in one line above its answer: as it was typed, never converted.
+ *
+ * @example stampAsked({ spec: 'DOT-4BA400', waterCapacity: '47.7lb' }) // 'DOT-4BA400, WC 47.7 lb, TW not given, not marked for flammables'
+ */
+export function stampAsked(query: CompareQuery): string {
+  const mass = (text: string) => {
+    const reading = parseMassText(text)
+    return reading === null ? text : formatReading(reading)
+  }
+  return [
+    query.spec,
+    query.servicePressurePsig && `${query.servicePressurePsig}\u00A0psig`,
+    query.waterCapacity && `WC\u00A0${mass(query.waterCapacity)}`,
+    query.tareWeight ? `TW\u00A0${mass(query.tareWeight)}` : 'TW not given',
+    query.gross && `gross\u00A0${mass(query.gross)}`,
+    query.condition,
+    query.share && `share\u00A0${query.share}`,
+    query.flammableMarked === 'true' ? 'marked for flammables' : 'not marked for flammables',
+  ].filter(Boolean).join(', ')
 }
 
 /** Where the rules are compared for the stamp of a cylinder and for what is, or is to go, in it. */

@@ -26,7 +26,7 @@ const FACTOR_WORDS: Record<Factor['name'], string> = {
   'water-capacity': 'water capacity, WC',
   'volume': 'volume',
   'liquid-density': 'density of the liquid',
-  'filling-density': 'filling density',
+  'filling-density': 'percent of WC',
   'filling-ratio': 'filling ratio',
   'density-at-pressure': 'density that reaches the pressure',
   'derate': 'taken off for the estimate',
@@ -53,6 +53,19 @@ export function ruleAccount(term: FillTerm, governingRule: FillRule | null, unit
     because: term.because ?? null,
     source: term.source,
   }
+}
+
+/** Accounts with those that say nothing, for one and the same reason, under one title where the first of them stood. */
+export function silentTogether(accounts: readonly RuleAccount[]): RuleAccount[] {
+  const saysTheSame = (a: RuleAccount, b: RuleAccount) => isSilent(a) && isSilent(b) && a.because === b.because && a.source === b.source
+  return accounts.flatMap((account, index) => {
+    const alike = accounts.filter(other => other === account || saysTheSame(other, account))
+    return accounts.indexOf(alike[0]!) === index ? [{ ...account, title: alike.map(({ title }) => title).join('; ') }] : []
+  })
+}
+
+function isSilent({ limit, lines, because }: RuleAccount): boolean {
+  return limit === null && lines.length === 0 && because !== null
 }
 
 /** How a rule that does not govern stands, in a few words. */

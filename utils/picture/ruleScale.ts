@@ -43,7 +43,7 @@ export function layOutRules(terms: readonly FillTerm[], governingRule: FillRule 
     marks,
     liquidFullFrom: liquidFullGrams === null ? null : place(liquidFullGrams),
     liquidFull: full,
-    ticks: scaleTicks(0, endGrams, unit, place, ({ at }) => at < 96),
+    ticks: scaleTicks(0, endGrams, unit, place, ({ at }) => at < 91),
     text: [
       ...marks.map(({ title, figure, governs }) => `${title} ${figure}${governs ? ', governs' : ''}`),
       ...full === null ? [] : [`liquid-full at 131 °F ${full}`],

@@ -21,7 +21,7 @@ export function workingFacts(of: {
   nothingInIt: boolean
 }, unit: MassUnit): WorkingFact[] {
   const { exactStopWeightGrams: stop, waterCapacity, liquidFull } = of
-  const others = stop === null ? null : UNITS.filter(each => each !== unit).map(each => formatMass(stop, each, 'down')).join(' · ')
+  const others = stop === null ? null : UNITS.filter(each => each !== unit).map(each => formatMass(stop, each, 'down')).join(', ')
   return [
     { term: 'Stop weight in the other units, also rounded down', value: others, reason: 'no stop weight', figure: true },
     { term: `Volume, WC ÷ ${WATER_DENSITY_60F} kg/L (water at 60 °F)`, value: waterCapacity && litresText(volumeLitres(waterCapacity)).replace(' ', '\u00A0'), figure: true },

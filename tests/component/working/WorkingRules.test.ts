@@ -29,6 +29,13 @@ it('gives no figure of a rule that would overfill', async () => {
   expect(wrapper.text()).not.toMatch(/16\.00/)
 })
 
+it('says one reason once for all the rules that it silences', async () => {
+  const silent = { ...WATER, limitGrams: null, factors: [], because: 'its row alone decides' }
+  const wrapper = await mounted([silent, { ...silent, rule: 'liquid-77F' }, { ...silent, rule: 'oily', because: 'no figure at 122 °F' }, { ...WATER, rule: 'filling-density' }], 'filling-density')
+  expect(wrapper.findAll('h3').map(title => title.text())).toEqual(['filling density', 'water weight; liquid at 77 °F', 'oily refrigerant'])
+  expect(wrapper.text().match(/its row alone decides/g)).toHaveLength(1)
+})
+
 it('says why a rule has none', async () => {
   const wrapper = await mounted([{ ...WATER, limitGrams: null, factors: [], because: 'the table does not name R-410A' }], null)
   expect(wrapper.text()).toContain('no figure')

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { compareAddress, compareDraft, compareFaults, compareQuery, massForAddress } from '~~/utils/picture/compareDraft'
+import { compareAddress, compareDraft, compareFaults, compareQuery, massForAddress, stampAsked } from '~~/utils/picture/compareDraft'
 import { filled, registered, viewAfter } from '../../../helpers/custody'
 
 describe('the address of a comparison', () => {
@@ -30,6 +30,20 @@ describe('the address of a comparison', () => {
     expect(compareFaults({ composition: 'R-32:50,R-125:50', spec: 'DOT-4BA400', waterCapacity: '47.7lb' })).toEqual([])
   })
 })
+
+describe('the stamp above its answer', () => {
+  it('stands as it was typed, and says what was not', () => {
+    expect(plain(stampAsked({ refrigerant: 'R-22', spec: 'DOT-4BA400', waterCapacity: '47.7lb' })))
+      .toBe('DOT-4BA400, WC 47.7 lb, TW not given, not marked for flammables')
+    expect(plain(stampAsked({
+      spec: 'DOT-3AA', servicePressurePsig: '1800', waterCapacity: '47lb11oz', tareWeight: '44.4kg', gross: '60kg', condition: 'burnt', share: '0.75', flammableMarked: 'true',
+    }))).toBe('DOT-3AA, 1800 psig, WC 47 lb 11 oz, TW 44.40 kg, gross 60.00 kg, burnt, share 0.75, marked for flammables')
+  })
+})
+
+function plain(text: string) {
+  return text.replaceAll('\u00A0', ' ')
+}
 
 describe('the comparison of a cylinder', () => {
   it('takes its stamp as it was read, and what the scale showed', () => {

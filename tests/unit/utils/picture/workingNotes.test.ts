@@ -18,7 +18,7 @@ describe('what follows from a sum', () => {
   const of = { exactStopWeightGrams: 29_950, waterCapacity: { unit: 'lb' as const, value: 47.7 }, liquidFull: { aboveC: 60 }, nothingInIt: true }
 
   it('is the stop weight in the other units, the volume and the liquid-full temperature', () => {
-    expect(workingFacts(of, 'lb').map(({ value }) => value)).toEqual(['66\u00A0lb\u00A00\u00A0oz · 29.95\u00A0kg', '21.66\u00A0L', 'above\u00A0140\u00A0°F'])
+    expect(workingFacts(of, 'lb').map(({ value }) => value)).toEqual(['66\u00A0lb\u00A00\u00A0oz, 29.95\u00A0kg', '21.66\u00A0L', 'above\u00A0140\u00A0°F'])
   })
 
   it('is said for what is in it, or for a fill to the limit', () => {
