@@ -42,12 +42,12 @@ export function retestRuleLines({ soonDays, notSeenDays, missingDays, intervalMo
   ]
 }
 
-/** A rule in one line, for the history. @example '80 %, 95 % at 131 °F, hot van' */
+/** A rule in one line, for the history. @example 'share 80 %, liquid 95 % at 131 °F, hot van' */
 export function ruleInShort(rule: FirmRule): string {
   if (rule.kind === 'fill-policy') {
     const { shareThousandths, ceilingThousandths, options } = rule.value
     const on = optionNames.filter(name => options[name]).map(name => OPTION_WORDS[name].name)
-    return [percent(shareThousandths), `${percent(ceilingThousandths)} at 131 °F`, ...on].join(', ')
+    return [`share ${percent(shareThousandths)}`, `liquid ${percent(ceilingThousandths)} at 131 °F`, ...on].join(', ')
   }
   const { soonDays, notSeenDays, missingDays, intervalMonths, ownerChoices } = rule.value
   return [
