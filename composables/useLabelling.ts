@@ -25,21 +25,23 @@ export function useLabelling() {
     return attempt(async () => (await api.post<MintAnswer>('/api/labels', { count })).codes)
   }
 
-  /** Gives each cylinder without a label a code of its own and records it; answers them as they then are. */
-  function label(all: readonly ToLabel[]): Promise<ToLabel[] | null> {
+  /**
+   * Gives each of these cylinders a new code and records it, in place of the one that it has; answers them as they then
+   * are. `reason` says why a label is replaced.
+   */
+  function label(these: readonly ToLabel[], reason?: string): Promise<ToLabel[] | null> {
     return attempt(async () => {
-      const bare = all.filter(one => one.labelCode === null)
-      const { codes } = await api.post<MintAnswer>('/api/labels', { count: bare.length })
+      const { codes } = await api.post<MintAnswer>('/api/labels', { count: these.length })
       const occurredAt = deviceNow()
-      const events = bare.map((one, index) => posting.seal<'labelled'>({
-        cylinderId: one.id, kind: 'labelled', occurredAt, details: { code: codes[index]! },
-        ...(one.placeId ? { placeId: one.placeId } : {}),
+      const events = these.map(({ id, labelCode, placeId }, index) => posting.seal<'labelled'>({
+        cylinderId: id, kind: 'labelled', occurredAt,
+        details: { code: codes[index]!, ...(labelCode && { replaces: labelCode, ...(reason && { reason }) }) },
+        ...(placeId ? { placeId } : {}),
       }) as CustodyEvent)
       const { results } = await api.post<EventsAnswer>('/api/events', { events, deviceNow: deviceNow() })
       const refused = results.find(result => result.outcome === 'refused')
       if (refused?.problem) problem.value = refused.problem
-      const taken = new Map(events.filter((_, index) => results[index]?.outcome !== 'refused').map(event => [event.cylinderId, (event.details as { code: string }).code]))
-      return all.map(one => ({ ...one, labelCode: one.labelCode ?? taken.get(one.id) ?? null }))
+      return these.map((one, index) => results[index]?.outcome === 'refused' ? one : { ...one, labelCode: codes[index]! })
     })
   }
 

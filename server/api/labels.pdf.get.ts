@@ -7,7 +7,7 @@ import { labelsQuery } from '~~/utils/contract/labels'
 
 /** GET /api/labels.pdf: the labels of codes, ready to print at their exact size. */
 export default apiRoute({ permission: 'labels:mint', query: labelsQuery }, async ({ event, query }) => {
-  const pdf = await printedLabels(useDatabase(), { ...query, publicUrl: useEnvironment().publicUrl })
+  const pdf = await printedLabels(useDatabase(), query, useEnvironment().publicUrl)
   setResponseHeaders(event, { 'Content-Type': 'application/pdf', 'Content-Disposition': 'inline; filename="cylinder-labels.pdf"' })
   return pdf
 })

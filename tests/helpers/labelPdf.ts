@@ -1,7 +1,9 @@
 import { readFileSync } from 'node:fs'
 import { LABEL_FONT_FILES, type LabelFonts } from '../../server/utils/pdf/fonts'
 import { labelSheetPdf } from '../../server/utils/pdf/labelSheetPdf'
-import { identityLabel, type IdentityLabelContent, type LabelledStamp } from '../../utils/label/identityLabel'
+import type { IdentityLabelContent, LabelledStamp } from '../../utils/label/identityContent'
+import { identityLabel } from '../../utils/label/identityLabel'
+import { usualPrinter, type LabelPrinter } from '../../utils/label/printer'
 import { sheet } from '../../utils/label/sheet'
 import { LABEL_STOCKS, type LabelStockId } from '../../utils/label/stock'
 
@@ -20,14 +22,16 @@ export function payloadOf(code: string): string {
   return `HTTPS://CYLINDERS.EXAMPLE/C/${code}`
 }
 
+interface Changes { start?: number, compress?: boolean, changes?: Partial<IdentityLabelContent>, printer?: LabelPrinter }
+
 /** The printed labels of some codes, all alike but for what `changes` says. */
 export function labelPdf(
   codes: string[], stockId: LabelStockId,
-  { start, compress, changes }: { start?: number, compress?: boolean, changes?: Partial<IdentityLabelContent> } = {},
+  { start, compress, changes, printer = usualPrinter(LABEL_STOCKS[stockId]) }: Changes = {},
 ): Promise<Buffer> {
   const stock = LABEL_STOCKS[stockId]
   const labels = codes.map(code => identityLabel({
     code, payload: payloadOf(code), owner: 'Acme Cooling', telephone: '555 0142', copy: 1, stamp: STAMP, ...changes,
-  }, stock))
-  return labelSheetPdf(sheet(labels, stock, start), fonts, { compress })
+  }, { stock, dotsPerInch: printer.dotsPerInch, diameterMm: null }))
+  return labelSheetPdf(sheet(labels, stock, start, printer), fonts, { compress })
 }

@@ -1,10 +1,10 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { MintAnswer } from '../../utils/contract/labels'
+import type { LabelAddress, MintAnswer } from '../../utils/contract/labels'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import { isLabelCode } from '../../utils/label/code'
 import type { Member } from '../helpers/firm'
 import { made, openShop, registered, type Shop } from '../helpers/fleet'
-import { drawnPages, symbolsOf, type DrawnPage } from '../helpers/pdfShapes'
+import { boundsOf, drawnPages, symbolsOf, type DrawnPage } from '../helpers/pdfShapes'
 import { symbolTexts } from '../helpers/printedPage'
 import { startServer, type TestServer } from '../helpers/server'
 
@@ -16,9 +16,9 @@ beforeAll(async () => {
 })
 afterAll(() => server.stop())
 
-async function printed(person: Member, query: string): Promise<{ headers: Headers, pages: DrawnPage[] }> {
+async function printed(person: Member, query: string, path = '/api/labels.pdf'): Promise<{ headers: Headers, pages: DrawnPage[] }> {
   const cookie = [...person.client.cookies].map(([name, value]) => `${name}=${value}`).join('; ')
-  const answer = await fetch(`${server.baseUrl}/api/labels.pdf?${query}`, { headers: { cookie } })
+  const answer = await fetch(`${server.baseUrl}${path}?${query}`, { headers: { cookie } })
   return { headers: answer.headers, pages: drawnPages(Buffer.from(await answer.arrayBuffer())) }
 }
 
@@ -64,7 +64,7 @@ describe('printing labels', () => {
     const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
     const { pages } = await printed(firm.warehouse, `codes=${codes[0]}&stock=letter-10&start=10`)
     expect(pages.map(page => symbolsOf(page).length)).toEqual([1, 1])
-    for (const place of ['stock=letter-10&start=11', 'stock=roll-4x2&start=2', 'start=0', 'stock=a4']) {
+    for (const place of ['stock=letter-10&start=11', 'stock=roll-4x2&start=2', 'start=0', 'stock=a4', 'x=2.5', 'x=0.4', 'dpi=600', 'stock=a4-8&dpi=203.2', 'diameter=40']) {
       expect((await firm.warehouse.client.get(`/api/labels.pdf?codes=${codes[0]}&${place}`)).status).toBe(400)
     }
   })
@@ -76,5 +76,42 @@ describe('printing labels', () => {
     expect((await firm.warehouse.client.get('/api/labels.pdf?codes=7K3M9Q2TY')).status).toBe(400)
     expect((await firm.warehouse.client.get('/api/labels.pdf?codes=')).status).toBe(400)
     expect((await firm.technician.client.get('/api/labels.pdf?codes=7K3M9Q2TX')).status).toBe(403)
+  })
+
+  it('moves the print by the printer\'s offset and fits the symbol to the cylinder', async () => {
+    const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
+    const box = async (query: string) => boundsOf(symbolsOf((await printed(firm.warehouse, `codes=${codes[0]}&${query}`)).pages[0]!)[0]!)
+    const [usual, moved, narrow] = await Promise.all([box('stock=roll-4x2'), box('stock=roll-4x2&x=1.5&y=-0.5'), box('stock=roll-4x2&diameter=152.4')])
+    expect((moved.left - usual.left) / 72 * 25.4).toBeCloseTo(1.5, 3)
+    expect((moved.top - usual.top) / 72 * 25.4).toBeCloseTo(-0.5, 3)
+    // 0.14 x 152.4 mm.
+    expect((narrow.right - narrow.left) / 72 * 25.4).toBeLessThanOrEqual(21.336)
+    expect((usual.right - usual.left) / 72 * 25.4).toBeGreaterThan(21.336)
+  })
+
+  it('prints none that would not be read round a cylinder that narrow', async () => {
+    const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
+    const { status, body } = await firm.warehouse.client.get<ProblemDetails>(`/api/labels.pdf?codes=${codes[0]}&diameter=60`)
+    expect(status).toBe(422)
+    expect(body.detail).toContain('the flat of the guard')
+  })
+})
+
+describe('where labels lead', () => {
+  it('is told to whoever prints them, with what the length of the host makes of them', async () => {
+    const { body } = await firm.warehouse.client.get<LabelAddress>('/api/labels/address')
+    expect(body).toMatchObject({ publicUrl: server.baseUrl, hostCharacters: new URL(server.baseUrl).host.length, version: 3, isLong: false })
+    expect((await firm.technician.client.get('/api/labels/address')).status).toBe(403)
+  })
+})
+
+describe('the test page', () => {
+  it('is a page of the stock\'s size without a symbol', async () => {
+    const { pages, headers } = await printed(firm.warehouse, 'stock=roll-3x2', '/api/labels/test-page.pdf')
+    expect(headers.get('content-disposition')).toBe('inline; filename="label-test-page.pdf"')
+    expect(pages.map(({ width, height }) => [width, height])).toEqual([[216, 144]])
+    expect(symbolsOf(pages[0]!)).toEqual([])
+    expect((await firm.warehouse.client.get('/api/labels/test-page.pdf?stock=a4')).status).toBe(400)
+    expect((await firm.technician.client.get('/api/labels/test-page.pdf')).status).toBe(403)
   })
 })

@@ -1,10 +1,16 @@
 import { z } from 'zod'
 import { normaliseLabelCode } from '../label/code'
-import { LABEL_STOCKS, labelsPerPage } from '../label/stock'
+import type { HostBudget } from '../label/symbol'
+import { LEAST_DIAMETER_MM, MOST_DIAMETER_MM } from '../label/diameter'
+import { offsetsFor, printerChoices, type LabelPrinter } from '../label/printer'
+import { LABEL_STOCKS, labelsPerPage, type LabelStockId } from '../label/stock'
 
 /** POST /api/labels. */
 export const mintBody = z.strictObject({ count: z.number().int().min(1).max(100) })
 export interface MintAnswer { codes: string[] }
+
+/** GET /api/labels/address: what the symbols of labels lead to, and what its length makes of them. */
+export interface LabelAddress extends HostBudget { publicUrl: string }
 
 /** Most codes on one printing. */
 export const MOST_LABELS = 100
@@ -18,10 +24,73 @@ const codeList = z.string().max(2000).transform((text, context) => {
   return z.NEVER
 })
 
+const stockId = z.enum(Object.keys(LABEL_STOCKS) as [LabelStockId, ...LabelStockId[]])
+
+/** How a page is printed: on which stock, by how fine a printer, and how far its print is moved to the right and down. */
+const printing = {
+  stock: stockId.default('roll-4x2'),
+  dpi: z.coerce.number().optional(),
+  x: z.coerce.number().default(0),
+  y: z.coerce.number().default(0),
+}
+
+interface AskedPrinting { stock: LabelStockId, dpi?: number, x: number, y: number }
+
+/** The printer that a request names. */
+export function printerOf({ stock, dpi, x, y }: AskedPrinting): LabelPrinter {
+  return { dotsPerInch: dpi ?? LABEL_STOCKS[stock].dotsPerInch, offset: { x, y } }
+}
+
+function isPrintable({ stock, dpi, x, y }: AskedPrinting, context: z.RefinementCtx) {
+  const offsets = offsetsFor(LABEL_STOCKS[stock])
+  const fault = (path: string, message: string) => context.addIssue({ code: 'custom', path: [path], message })
+  if (dpi !== undefined && !printerChoices(LABEL_STOCKS[stock]).includes(dpi)) fault('dpi', 'is no printer for this stock')
+  if (!offsets.includes(x)) fault('x', `must be in steps of 0.5 up to ${offsets.at(-1)}`)
+  if (!offsets.includes(y)) fault('y', `must be in steps of 0.5 up to ${offsets.at(-1)}`)
+}
+
 /** GET /api/labels.pdf?codes=...&stock=...&start=... : both labels of each code. 404 for codes that nobody minted or stuck on. */
 export const labelsQuery = z.strictObject({
   codes: codeList,
-  stock: z.enum(['roll-4x2', 'letter-10']).default('roll-4x2'),
+  ...printing,
   /** Position of the first label on a part-used sheet, from 1. */
-  start: z.coerce.number().int().min(1).max(30).default(1),
-}).refine(query => query.start <= labelsPerPage(LABEL_STOCKS[query.stock]), { path: ['start'], message: 'the sheet has no such position' })
+  start: z.coerce.number().int().min(1).default(1),
+  /** Of the cylinders, in millimetres; left out for a flat place. */
+  diameter: z.coerce.number().min(LEAST_DIAMETER_MM).max(MOST_DIAMETER_MM).optional(),
+}).superRefine((query, context) => {
+  isPrintable(query, context)
+  if (query.start > labelsPerPage(LABEL_STOCKS[query.stock])) context.addIssue({ code: 'custom', path: ['start'], message: 'the sheet has no such position' })
+})
+export type LabelsQuery = z.output<typeof labelsQuery>
+
+/** GET /api/labels/test-page.pdf?stock=... : rulers and frames. */
+export const testPageQuery = z.strictObject(printing).superRefine(isPrintable)
+
+/** Everything that a person chooses before printing. */
+export interface PrintSetting {
+  stock: LabelStockId
+  start: number
+  printer: LabelPrinter
+  diameterMm: number | null
+}
+
+/** Where the labels of these codes are to be had as a PDF. */
+export function labelsPdfPath(codes: readonly string[], { stock, start, printer, diameterMm }: PrintSetting): string {
+  return pathWith('/api/labels.pdf', {
+    codes: codes.join(','), ...asked(stock, printer), start: start === 1 ? null : start, diameter: diameterMm,
+  })
+}
+
+/** Where the test page for a stock and a printer is. */
+export function testPagePath(stock: LabelStockId, printer: LabelPrinter): string {
+  return pathWith('/api/labels/test-page.pdf', asked(stock, printer))
+}
+
+function asked(stock: LabelStockId, { dotsPerInch, offset }: LabelPrinter) {
+  return { stock, dpi: dotsPerInch === LABEL_STOCKS[stock].dotsPerInch ? null : dotsPerInch, x: offset.x || null, y: offset.y || null }
+}
+
+function pathWith(path: string, query: Record<string, string | number | null>): string {
+  const parts = Object.entries(query).flatMap(([name, value]) => value === null ? [] : [`${name}=${encodeURIComponent(value)}`])
+  return `${path}?${parts.join('&')}`
+}

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import type { LabelAddress } from './labels'
 import { line } from './parts'
 import { email, newPassword, units } from './session'
 
@@ -9,7 +10,7 @@ export const timeZone = z.string().min(1).max(60).refine(isTimeZone, 'must be a 
 
 /** GET /api/setup?token=: 200 while the link is good, else 404. */
 export const setUpQuery = z.strictObject({ token })
-export interface SetUpOpen { open: true, expiresAt: string }
+export interface SetUpOpen { open: true, expiresAt: string, labels: LabelAddress }
 
 /** POST /api/setup: makes the firm and its first admin, and signs that person in (201, SessionAnswer). */
 export const setUpBody = z.strictObject({

@@ -21,33 +21,98 @@ export interface LabelStock {
   source: string
 }
 
-const MM_PER_INCH = 25.4
+export const MM_PER_INCH = 25.4
+
+/** Eight dots to the millimetre, sold as "203 dpi", and the finer of the usual label printers: from memory. */
+export const ROLL_PRINTER_DPI = [203.2, 300] as const
+
+/** Office printers have 300, 600 or 1,200 (from memory): what lies on whole dots of the coarsest does on the others. */
+const SHEET_PRINTER_DPI = 300
+
+const LETTER = { width: 215.9, height: 279.4 }
+const A4 = { width: 210, height: 297 }
+
+const SUMS_TO_SHEET = 'from memory; the figures sum to the sheet'
+
+function roll<Id extends string>(id: Id, name: string, label: SizeMm) {
+  return {
+    id, name, label, page: label,
+    grid: { columns: 1, rows: 1 }, margin: { top: 0, left: 0 }, pitch: { x: label.width, y: label.height },
+    dotsPerInch: ROLL_PRINTER_DPI[0], source: 'one label a page, whole inches',
+  }
+}
 
 /** The stocks that labels are printed on. */
 export const LABEL_STOCKS = {
-  'roll-4x2': {
-    id: 'roll-4x2',
-    name: 'Roll, 4 × 2 in',
-    page: { width: 101.6, height: 50.8 },
-    label: { width: 101.6, height: 50.8 },
-    grid: { columns: 1, rows: 1 },
-    margin: { top: 0, left: 0 },
-    pitch: { x: 101.6, y: 50.8 },
-    // Eight dots to the millimetre, sold as "203 dpi": from memory.
-    dotsPerInch: 203.2,
-    source: 'one label a page: 4 in and 2 in exactly',
+  'roll-4x2': roll('roll-4x2', 'Roll, 4 × 2 in', { width: 101.6, height: 50.8 }),
+  'roll-4x6': roll('roll-4x6', 'Roll, 4 × 6 in', { width: 101.6, height: 152.4 }),
+  'roll-3x2': roll('roll-3x2', 'Roll, 3 × 2 in', { width: 76.2, height: 50.8 }),
+  'roll-2x1': roll('roll-2x1', 'Roll, 2 × 1 in', { width: 50.8, height: 25.4 }),
+  'letter-30': {
+    id: 'letter-30',
+    name: 'Letter sheet, 30 labels of 2 5/8 × 1 in',
+    page: LETTER,
+    label: { width: 66.675, height: 25.4 },
+    grid: { columns: 3, rows: 10 },
+    margin: { top: 12.7, left: 4.763 },
+    pitch: { x: 69.85, y: 25.4 },
+    dotsPerInch: SHEET_PRINTER_DPI,
+    source: 'as published in label templates; the figures sum to the sheet',
   },
   'letter-10': {
     id: 'letter-10',
     name: 'Letter sheet, 10 labels of 4 × 2 in',
-    page: { width: 215.9, height: 279.4 },
+    page: LETTER,
     label: { width: 101.6, height: 50.8 },
     grid: { columns: 2, rows: 5 },
     margin: { top: 12.7, left: 3.969 },
     pitch: { x: 106.363, y: 50.8 },
-    // Office printers: from memory.
-    dotsPerInch: 600,
-    source: 'from memory; the figures sum to the width of the sheet',
+    dotsPerInch: SHEET_PRINTER_DPI,
+    source: SUMS_TO_SHEET,
+  },
+  'letter-6': {
+    id: 'letter-6',
+    name: 'Letter sheet, 6 labels of 4 × 3 1/3 in',
+    page: LETTER,
+    label: { width: 101.6, height: 84.667 },
+    grid: { columns: 2, rows: 3 },
+    margin: { top: 12.7, left: 3.969 },
+    pitch: { x: 106.363, y: 84.667 },
+    dotsPerInch: SHEET_PRINTER_DPI,
+    source: SUMS_TO_SHEET,
+  },
+  'a4-21': {
+    id: 'a4-21',
+    name: 'A4 sheet, 21 labels of 63.5 × 38.1 mm',
+    page: A4,
+    label: { width: 63.5, height: 38.1 },
+    grid: { columns: 3, rows: 7 },
+    margin: { top: 15.15, left: 7.2 },
+    pitch: { x: 66, y: 38.1 },
+    dotsPerInch: SHEET_PRINTER_DPI,
+    source: 'as published in label templates; the figures sum to the sheet within 0.1 mm',
+  },
+  'a4-14': {
+    id: 'a4-14',
+    name: 'A4 sheet, 14 labels of 99.1 × 38.1 mm',
+    page: A4,
+    label: { width: 99.1, height: 38.1 },
+    grid: { columns: 2, rows: 7 },
+    margin: { top: 15.15, left: 4.65 },
+    pitch: { x: 101.6, y: 38.1 },
+    dotsPerInch: SHEET_PRINTER_DPI,
+    source: SUMS_TO_SHEET,
+  },
+  'a4-8': {
+    id: 'a4-8',
+    name: 'A4 sheet, 8 labels of 99.1 × 67.7 mm',
+    page: A4,
+    label: { width: 99.1, height: 67.7 },
+    grid: { columns: 2, rows: 4 },
+    margin: { top: 13.1, left: 4.65 },
+    pitch: { x: 101.6, y: 67.7 },
+    dotsPerInch: SHEET_PRINTER_DPI,
+    source: SUMS_TO_SHEET,
   },
 } as const satisfies Record<string, LabelStock>
 
@@ -57,6 +122,11 @@ export type LabelStockId = keyof typeof LABEL_STOCKS
 /** Whether a stock of this name is known. */
 export function isLabelStockId(text: string): text is LabelStockId {
   return Object.hasOwn(LABEL_STOCKS, text)
+}
+
+/** Whether the labels come from a roll, one a page. */
+export function isRoll(stock: LabelStock): boolean {
+  return labelsPerPage(stock) === 1
 }
 
 /** How many labels one page of the stock holds. */
@@ -80,18 +150,4 @@ export function labelOrigin(stock: LabelStock, position: number): { x: number, y
     x: stock.margin.left + column * stock.pitch.x,
     y: stock.margin.top + row * stock.pitch.y,
   }
-}
-
-/** The width of one of the printer's dots, in millimetres. */
-export function dotMm(stock: LabelStock): number {
-  return MM_PER_INCH / stock.dotsPerInch
-}
-
-/**
- * The nearest place that begins a dot of the printer.
- *
- * Units: millimetres from the page's edge. Rounding: to the nearest dot.
- */
-export function snapToDot(stock: LabelStock, mm: number): number {
-  return Math.round(mm / dotMm(stock)) * dotMm(stock)
 }

@@ -7,6 +7,9 @@ export const QUIET_MODULES = 4
 /** The longest host that still gives the usual symbol, version 3 at level Q: 47 characters less the rest of the address. */
 export const HOST_CHARACTERS = 27
 
+/** The longest host that gives it level H: 35 characters less the rest. */
+export const STRONGEST_HOST_CHARACTERS = 15
+
 /** The symbol of a label: `size` modules a side, asked for by column and row from the top left; outside it all is light. */
 export interface LabelSymbol {
   version: number
@@ -54,6 +57,7 @@ export function symbolPath(symbol: LabelSymbol): string {
 export interface HostBudget {
   hostCharacters: number
   version: number
+  level: CorrectionLevel
   modules: number
   /** The host is longer than the usual symbol has room for: its modules print smaller and read less far. */
   isLong: boolean
@@ -62,12 +66,12 @@ export interface HostBudget {
 /**
  * The symbol that the labels of this host will carry.
  *
- * Shape: a host as in an address, its port with it; judged for https, at level Q.
+ * Shape: a host as in an address, its port with it; judged for https.
  *
- * @example hostBudget('cylinders.example') // { hostCharacters: 17, version: 3, modules: 29, isLong: false }
+ * @example hostBudget('cylinders.example') // { hostCharacters: 17, version: 3, level: 'Q', modules: 29, isLong: false }
  */
 export function hostBudget(host: string): HostBudget {
   // Letters only: digits would be packed more tightly and could flatter the host.
-  const { version, rows } = qrMatrix(labelUrl(`https://${host}`, 'X'.repeat(LABEL_CODE_LENGTH)), 'Q')
-  return { hostCharacters: host.length, version, modules: rows.length, isLong: host.length > HOST_CHARACTERS }
+  const { version, level, size } = labelSymbol(labelUrl(`https://${host}`, 'X'.repeat(LABEL_CODE_LENGTH)))
+  return { hostCharacters: host.length, version, level, modules: size, isLong: host.length > HOST_CHARACTERS }
 }

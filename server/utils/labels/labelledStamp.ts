@@ -1,6 +1,6 @@
 import type { Stamp } from '~~/utils/capacity/types'
 import type { CylinderState } from '~~/utils/custody/state'
-import type { LabelledStamp } from '~~/utils/label/identityLabel'
+import type { LabelledStamp } from '~~/utils/label/identityContent'
 import { formatReading, nearestToDivision } from '~~/utils/quantity/mass'
 
 /**

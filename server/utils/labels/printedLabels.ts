@@ -1,7 +1,9 @@
-import { identityLabel, type LabelledStamp } from '~~/utils/label/identityLabel'
+import { printerOf, type LabelsQuery } from '~~/utils/contract/labels'
 import { labelUrl } from '~~/utils/label/code'
+import type { LabelledStamp } from '~~/utils/label/identityContent'
+import { identityLabel, symbolFit } from '~~/utils/label/identityLabel'
 import { sheet } from '~~/utils/label/sheet'
-import { LABEL_STOCKS, type LabelStockId } from '~~/utils/label/stock'
+import { LABEL_STOCKS } from '~~/utils/label/stock'
 import { firm } from '~~/drizzle/schema'
 import { cylinderStates } from '../custody/cylinderViews'
 import { CLAIM_ORDER } from '../custody/findCylinder'
@@ -11,17 +13,25 @@ import { labelFonts } from '../pdf/fonts'
 import { labelSheetPdf } from '../pdf/labelSheetPdf'
 import { labelledStamp } from './labelledStamp'
 
-/** Which labels to print, on what, and where their symbols lead. */
-export interface Printing { codes: readonly string[], stock: LabelStockId, start: number, publicUrl: string }
+const MISFITS = {
+  'too-curved': 'Round a cylinder this narrow a tilted phone would not read it. Print it without the diameter, for the flat of the guard, or on larger stock.',
+  'no-room': 'The address of this server is too long for labels of this size. Take larger stock.',
+} as const
 
 const COPIES = [1, 2] as const
 
 /**
  * Both labels of each code as a PDF: what the collar says where a cylinder carries the code, else blank ones to write on.
  *
- * Errors: 404 naming the codes that were neither minted here nor are on a cylinder.
+ * Errors: 404 naming the codes that were neither minted here nor are on a cylinder; 422 where the symbol would not be read.
  */
-export async function printedLabels(db: Database, { codes, stock, start, publicUrl }: Printing): Promise<Buffer> {
+export async function printedLabels(db: Database, query: LabelsQuery, publicUrl: string): Promise<Buffer> {
+  const { codes, diameter: diameterMm = null } = query
+  const stock = LABEL_STOCKS[query.stock]
+  const printer = printerOf(query)
+  const fitting = { stock, dotsPerInch: printer.dotsPerInch, diameterMm }
+  const misfit = codes.map(code => symbolFit(labelUrl(publicUrl, code), fitting).is).find(is => is === 'too-curved' || is === 'no-room')
+  if (misfit) throw problem(422, 'The symbol does not fit', MISFITS[misfit])
   const [stamps, owner] = await Promise.all([stampsByCode(db, codes), db.read.select().from(firm).limit(1)])
   const labels = codes.flatMap(code => COPIES.map(copy => identityLabel({
     code,
@@ -30,8 +40,8 @@ export async function printedLabels(db: Database, { codes, stock, start, publicU
     telephone: owner[0]?.telephone ?? null,
     copy,
     stamp: stamps.get(code) ?? null,
-  }, LABEL_STOCKS[stock])))
-  return labelSheetPdf(sheet(labels, LABEL_STOCKS[stock], start), await labelFonts())
+  }, fitting)))
+  return labelSheetPdf(sheet(labels, stock, query.start, printer), await labelFonts())
 }
 
 /** The collar of the cylinder that has each code; null for a code that is on none yet. */

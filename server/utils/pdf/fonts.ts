@@ -1,4 +1,4 @@
-import type { LabelFace } from '~~/utils/label/identityLabel'
+import type { LabelFace } from '~~/utils/label/drawing'
 
 /** The font files of a label's four faces. */
 export type LabelFonts = Record<LabelFace, Buffer>

@@ -1,5 +1,5 @@
 import PDFDocument from 'pdfkit'
-import type { IdentityLabel, LabelFace, LabelFrame, LabelText } from '~~/utils/label/identityLabel'
+import type { LabelFace, LabelQr, LabelText } from '~~/utils/label/drawing'
 import type { LabelSheet, PlacedLabel } from '~~/utils/label/sheet'
 import type { LabelFonts } from './fonts'
 
@@ -41,29 +41,18 @@ function collected(document: PDFKit.PDFDocument): Promise<Buffer> {
   })
 }
 
-function drawLabel(document: PDFKit.PDFDocument, { label, x, y, qrX, qrY }: PlacedLabel): void {
-  drawSymbol(document, label.qr, qrX, qrY)
+function drawLabel(document: PDFKit.PDFDocument, { label, x, y, symbol }: PlacedLabel): void {
+  if (label.qr && symbol) drawSymbol(document, label.qr, symbol.x, symbol.y)
   document.save().translate(x, y)
-  drawFrame(document, label.frame)
+  for (const { path, thickness } of label.strokes) document.path(path).lineWidth(thickness).stroke('black')
   for (const rule of label.rules) document.rect(rule.x, rule.y, rule.width, rule.thickness).fill('black')
   for (const text of label.texts) drawText(document, text)
   document.restore()
 }
 
 /** The path is in whole modules, so that its edges fall on dots whatever the place on the page. */
-function drawSymbol(document: PDFKit.PDFDocument, qr: IdentityLabel['qr'], x: number, y: number): void {
+function drawSymbol(document: PDFKit.PDFDocument, qr: LabelQr, x: number, y: number): void {
   document.save().translate(x, y).scale(qr.moduleMm).path(qr.path).fill('black').restore()
-}
-
-function drawFrame(document: PDFKit.PDFDocument, frame: LabelFrame): void {
-  const { upperRadius: upper, lowerRadius: lower } = frame
-  const [left, right, top, bottom] = [frame.x, frame.x + frame.width, frame.y, frame.y + frame.height]
-  document
-    .moveTo(left, top + upper).quadraticCurveTo(left, top, left + upper, top)
-    .lineTo(right - upper, top).quadraticCurveTo(right, top, right, top + upper)
-    .lineTo(right, bottom - lower).quadraticCurveTo(right, bottom, right - lower, bottom)
-    .lineTo(left + lower, bottom).quadraticCurveTo(left, bottom, left, bottom - lower)
-    .closePath().lineWidth(frame.thickness).stroke('black')
 }
 
 function drawText(document: PDFKit.PDFDocument, { text, face, size, x, y, align, maxWidth }: LabelText): void {

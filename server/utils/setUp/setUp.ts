@@ -5,6 +5,8 @@ import { setUpPath, type SetUp, type SetUpOpen } from '../../../utils/contract/s
 import type { User } from '../../../utils/contract/session'
 import { useDatabase } from '../database/currentDatabase'
 import { directory } from '../directory/directory'
+import { useEnvironment } from '../environment'
+import { labelAddress } from '../labels/labelAddress'
 import { linkUnknown, goodLink, newLink, useUpLink } from '../people/oneTimeLinks'
 import { securityEntry } from '../securityLog'
 import { hashNewPassword } from '../session/password'
@@ -30,7 +32,7 @@ export async function offerSetUp(publicUrl: string, now: number): Promise<string
 /** Whether a set-up link is still good. Errors: 404. */
 export async function setUpLink(token: string, now: number): Promise<SetUpOpen> {
   const { expiresAt } = await goodLink('set-up', token, now)
-  return { open: true, expiresAt: new Date(expiresAt).toISOString() }
+  return { open: true, expiresAt: new Date(expiresAt).toISOString(), labels: labelAddress(useEnvironment().publicUrl) }
 }
 
 /**

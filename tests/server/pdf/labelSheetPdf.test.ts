@@ -1,22 +1,22 @@
 import { describe, expect, it } from 'vitest'
 import { labelSheetPdf } from '../../../server/utils/pdf/labelSheetPdf'
 import { fonts, labelPdf, payloadOf, STAMP } from '../../helpers/labelPdf'
-import { boundsOf, drawnPages, isInside, symbolsOf, type DrawnPage } from '../../helpers/pdfShapes'
-import { readSymbols } from '../../helpers/readSymbols'
+import { drawLabelCode } from '../../../utils/label/code'
+import { offsetsFor, printerChoices } from '../../../utils/label/printer'
+import { LABEL_STOCKS, labelsPerPage, type LabelStockId } from '../../../utils/label/stock'
+import { boundsOf, drawnPages, symbolsOf } from '../../helpers/pdfShapes'
+import { symbolTexts } from '../../helpers/printedPage'
 
 const CODES = ['7K3M9Q2TX', '10100000E']
 
-const PIXELS_PER_POINT = 1.5
+const STOCKS = Object.keys(LABEL_STOCKS) as LabelStockId[]
+const PRINTERS = STOCKS.flatMap(id => printerChoices(LABEL_STOCKS[id]).map(dotsPerInch => [id, dotsPerInch] as const))
 
-async function readPage(page: DrawnPage): Promise<string[]> {
-  const symbols = symbolsOf(page).map(outlines => ({ outlines, bounds: boundsOf(outlines) }))
-  const width = Math.round(page.width * PIXELS_PER_POINT)
-  const height = Math.round(page.height * PIXELS_PER_POINT)
-  return readSymbols(width, height, (column, row) => {
-    const [x, y] = [(column + 0.5) / PIXELS_PER_POINT, (row + 0.5) / PIXELS_PER_POINT]
-    const here = symbols.find(({ bounds }) => x > bounds.left && x < bounds.right && y > bounds.top && y < bounds.bottom)
-    return here && isInside(here.outlines, x, y) ? 0 : 255
-  })
+/** Sizes in points, worked out by hand: 72 to the inch, 72 / 25.4 to the millimetre. */
+const PAGES: Record<LabelStockId, [width: number, height: number]> = {
+  'roll-4x2': [288, 144], 'roll-4x6': [288, 432], 'roll-3x2': [216, 144], 'roll-2x1': [144, 72],
+  'letter-30': [612, 792], 'letter-10': [612, 792], 'letter-6': [612, 792],
+  'a4-21': [595.276, 841.89], 'a4-14': [595.276, 841.89], 'a4-8': [595.276, 841.89],
 }
 
 /** The sizes of a file's texts in millimetres, in the order of drawing. */
@@ -25,22 +25,34 @@ function textSizes(pdf: Buffer): number[] {
 }
 
 describe('printed labels', () => {
-  it('come on pages of exactly 288 x 144 points from the roll, one a label', async () => {
-    const pages = drawnPages(await labelPdf(CODES, 'roll-4x2'))
-    expect(pages.map(({ width, height }) => [width, height])).toEqual([[288, 144], [288, 144]])
+  it.each(STOCKS)('come from %s on pages of its exact size, as many a page as it holds', async (stockId) => {
+    const perPage = labelsPerPage(LABEL_STOCKS[stockId])
+    const pages = drawnPages(await labelPdf(Array.from({ length: perPage + 1 }, () => '7K3M9Q2TX'), stockId))
+    for (const { width, height } of pages) {
+      expect(width).toBeCloseTo(PAGES[stockId][0], 2)
+      expect(height).toBeCloseTo(PAGES[stockId][1], 2)
+    }
+    expect(pages.map(page => symbolsOf(page).length)).toEqual([perPage, 1])
   })
 
-  it('come on pages of exactly 612 x 792 points as a Letter sheet, ten a page', async () => {
-    const pages = drawnPages(await labelPdf(Array.from({ length: 11 }, () => '7K3M9Q2TX'), 'letter-10'))
-    expect(pages.map(({ width, height }) => [width, height])).toEqual([[612, 792], [612, 792]])
-    expect(pages.map(page => symbolsOf(page).length)).toEqual([10, 1])
+  it.each(PRINTERS)('draw every module edge of %s on a whole dot at %d dpi, moved by an offset or not', async (stockId, dotsPerInch) => {
+    const most = offsetsFor(LABEL_STOCKS[stockId]).at(-1)!
+    for (const offset of [{ x: 0, y: 0 }, { x: 0.5, y: -0.5 }, { x: -most, y: most }]) {
+      const perPage = labelsPerPage(LABEL_STOCKS[stockId])
+      const [page] = drawnPages(await labelPdf(Array.from({ length: perPage }, () => CODES[0]!), stockId, { printer: { dotsPerInch, offset } }))
+      const edges = symbolsOf(page!).flat(2).flatMap(({ x, y }) => [x, y]).map(points => points / 72 * dotsPerInch)
+      expect(edges.length).toBeGreaterThan(1000 * perPage)
+      expect(Math.max(...edges.map(dots => Math.abs(dots - Math.round(dots))))).toBeLessThan(0.01)
+      expect(Math.min(...edges)).toBeGreaterThan(0)
+    }
   })
 
-  it.each([['roll-4x2', 203.2], ['letter-10', 600]] as const)('draw every module edge of %s on a whole dot at %d dpi', async (stockId, dotsPerInch) => {
-    const [page] = drawnPages(await labelPdf(CODES, stockId))
-    const edges = symbolsOf(page!).flat(2).flatMap(({ x, y }) => [x, y]).map(points => points / 72 * dotsPerInch)
-    expect(edges.length).toBeGreaterThan(1000)
-    for (const dots of edges) expect(Math.abs(dots - Math.round(dots))).toBeLessThan(0.01)
+  it.each(PRINTERS)('are read off a whole page of %s at %d dpi, every one its own code', async (stockId, dotsPerInch) => {
+    let draws = 0
+    const codes = Array.from({ length: labelsPerPage(LABEL_STOCKS[stockId]) }, () => drawLabelCode(count => Uint8Array.from({ length: count }, () => draws++ * 37 % 251)))
+    expect(new Set(codes).size).toBe(codes.length)
+    const [page] = drawnPages(await labelPdf(codes, stockId, { printer: { dotsPerInch, offset: { x: 0, y: 0 } } }))
+    expect(await symbolTexts(page!)).toEqual(codes.map(payloadOf).sort())
   })
 
   it('draw the symbol 29 mm wide on the roll', async () => {
@@ -50,15 +62,10 @@ describe('printed labels', () => {
     expect((bottom - top) / 72 * 25.4).toBeCloseTo(29, 3)
   })
 
-  it('are read by the decoder of the scan screen, each page its code', async () => {
-    const pages = drawnPages(await labelPdf(CODES, 'roll-4x2'))
-    expect(await Promise.all(pages.map(readPage))).toEqual([[payloadOf('7K3M9Q2TX')], [payloadOf('10100000E')]])
-  })
-
   it('are read on a Letter sheet that begins at its ninth label', async () => {
     const [page] = drawnPages(await labelPdf(CODES, 'letter-10', { start: 9 }))
     expect(symbolsOf(page!).every(symbol => boundsOf(symbol).top > 792 * 0.7)).toBe(true)
-    expect(await readPage(page!)).toEqual([payloadOf('10100000E'), payloadOf('7K3M9Q2TX')])
+    expect(await symbolTexts(page!)).toEqual([payloadOf('10100000E'), payloadOf('7K3M9Q2TX')])
   })
 
   it('bring their four faces with them, and their title names no code or person', async () => {

@@ -1,30 +1,44 @@
 import { describe, expect, it } from 'vitest'
 import { identityLabel, type IdentityLabel } from '../../../../utils/label/identityLabel'
 import { sheet } from '../../../../utils/label/sheet'
-import { isLabelStockId, labelOrigin, LABEL_STOCKS, labelsPerPage } from '../../../../utils/label/stock'
+import { offsetsFor, usualPrinter } from '../../../../utils/label/printer'
+import { isLabelStockId, labelOrigin, LABEL_STOCKS, labelsPerPage, type LabelStock } from '../../../../utils/label/stock'
 
 const letter = LABEL_STOCKS['letter-10']
 const roll = LABEL_STOCKS['roll-4x2']
 
-function label(code: string, stock: typeof letter | typeof roll): IdentityLabel {
+function label(code: string, stock: LabelStock): IdentityLabel {
   return identityLabel({
     code, payload: `HTTPS://CYLINDERS.EXAMPLE/C/${code}`, owner: 'Acme Cooling', telephone: null, copy: 1, stamp: null,
-  }, stock)
+  }, { stock, dotsPerInch: stock.dotsPerInch, diameterMm: null })
 }
 
-function many(count: number, stock: typeof letter | typeof roll): IdentityLabel[] {
+function many(count: number, stock: LabelStock): IdentityLabel[] {
   return Array.from({ length: count }, () => label('7K3M9Q2TX', stock))
 }
 
 describe('label stock', () => {
-  it('holds one label on the roll and ten on a Letter sheet', () => {
-    expect([labelsPerPage(roll), labelsPerPage(letter)]).toEqual([1, 10])
+  it.each([
+    ['roll-4x2', 1], ['roll-4x6', 1], ['roll-3x2', 1], ['roll-2x1', 1], ['letter-30', 30], ['letter-10', 10], ['letter-6', 6], ['a4-21', 21], ['a4-14', 14], ['a4-8', 8],
+  ] as const)('%s has %d labels a page', (id, count) => {
+    expect(labelsPerPage(LABEL_STOCKS[id])).toBe(count)
+    expect(LABEL_STOCKS[id].id).toBe(id)
   })
 
-  it('fills the Letter sheet from edge to edge with the same margin left and right, above and below', () => {
-    const last = labelOrigin(letter, 10)
-    expect(letter.page.width - last.x - letter.label.width).toBeCloseTo(letter.margin.left, 2)
-    expect(letter.page.height - last.y - letter.label.height).toBeCloseTo(letter.margin.top, 2)
+  it.each(Object.values(LABEL_STOCKS))('$id fills its page with the same margin left and right, above and below, and no label over another', (stock) => {
+    const last = labelOrigin(stock, labelsPerPage(stock))
+    // The A4 sheet of 21 falls 0.1 mm short of the page's width.
+    expect(Math.abs(stock.page.width - last.x - stock.label.width - stock.margin.left)).toBeLessThan(0.11)
+    expect(stock.page.height - last.y - stock.label.height).toBeCloseTo(stock.margin.top, 2)
+    expect(stock.pitch.x).toBeGreaterThanOrEqual(stock.label.width)
+    expect(stock.pitch.y).toBeGreaterThanOrEqual(stock.label.height)
+  })
+
+  it('lets a print be moved as far as nothing leaves the page, in half millimetres', () => {
+    // 2 mm are free in each label; the Letter sheet has 3.969 mm more at its side.
+    expect(offsetsFor(roll)).toEqual([-2, -1.5, -1, -0.5, 0, 0.5, 1, 1.5, 2])
+    expect(offsetsFor(letter).at(-1)).toBe(5.5)
+    expect(offsetsFor(letter).at(0)).toBe(-5.5)
   })
 
   it('counts labels along the rows', () => {
@@ -69,13 +83,22 @@ describe('laying out labels', () => {
   })
 
   it('puts every symbol on whole dots of the printer, at most half a dot from its place', () => {
-    const dot = 25.4 / 600
-    for (const placed of sheet(many(10, letter), letter).pages[0]!) {
-      for (const [snapped, exact] of [[placed.qrX, placed.x + placed.label.qr.x], [placed.qrY, placed.y + placed.label.qr.y]] as const) {
+    const dot = 25.4 / 300
+    const moved = { ...usualPrinter(letter), offset: { x: 1.5, y: -0.5 } }
+    for (const placed of [...sheet(many(10, letter), letter).pages[0]!, ...sheet(many(10, letter), letter, 1, moved).pages[0]!]) {
+      for (const [snapped, exact] of [[placed.symbol!.x, placed.x + placed.label.qr.x], [placed.symbol!.y, placed.y + placed.label.qr.y]] as const) {
         expect(snapped / dot).toBeCloseTo(Math.round(snapped / dot), 6)
         expect(Math.abs(snapped - exact)).toBeLessThanOrEqual(dot / 2 + 1e-9)
       }
     }
+  })
+
+  it('moves everything by the printer\'s offset', () => {
+    const placed = sheet(many(1, roll), roll, 1, { dotsPerInch: 203.2, offset: { x: 1.5, y: -0.5 } }).pages[0]![0]!
+    const still = sheet(many(1, roll), roll).pages[0]![0]!
+    expect([placed.x, placed.y]).toEqual([1.5, -0.5])
+    expect(placed.symbol!.x - still.symbol!.x).toBeCloseTo(1.5, 9)
+    expect(placed.symbol!.y - still.symbol!.y).toBeCloseTo(-0.5, 9)
   })
 
   it('has no start outside the sheet', () => {

@@ -48,9 +48,15 @@ describe('the path of a symbol', () => {
 })
 
 describe('the room for a host', () => {
+  // 48 characters in version 4: 50 are its capacity at H (ISO/IEC 18004).
   it('warns beyond 27 characters', () => {
-    expect(hostBudget('a'.repeat(27))).toEqual({ hostCharacters: 27, version: 3, modules: 29, isLong: false })
-    expect(hostBudget('a'.repeat(28))).toEqual({ hostCharacters: 28, version: 4, modules: 33, isLong: true })
+    expect(hostBudget('a'.repeat(27))).toEqual({ hostCharacters: 27, version: 3, level: 'Q', modules: 29, isLong: false })
+    expect(hostBudget('a'.repeat(28))).toEqual({ hostCharacters: 28, version: 4, level: 'H', modules: 33, isLong: true })
+  })
+
+  it('gives the strongest level up to 15 characters', () => {
+    expect(hostBudget('a'.repeat(15))).toMatchObject({ version: 3, level: 'H' })
+    expect(hostBudget('a'.repeat(16))).toMatchObject({ version: 3, level: 'Q' })
   })
 
   it('does not let digits flatter a host', () => {
