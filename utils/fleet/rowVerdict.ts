@@ -18,7 +18,7 @@ const LIFECYCLE_VERDICTS: Partial<Record<Lifecycle, RowVerdict>> = {
 
 const STOP_WORDS: Partial<Record<FindingCode, string>> = {
   'overfill': 'Overfilled',
-  'pressure-class': 'Pressure too high',
+  'pressure-class': 'Not rated for its pressure',
   'spec-not-for-gas': 'Not made for this gas',
   'not-refillable': 'Never to be refilled',
   'not-marked-flammable': 'Not marked flammable',
@@ -88,7 +88,7 @@ function awayWord(row: CylinderRow): string | null {
 }
 
 function notKnown(row: CylinderRow, now: number): RowVerdict | null {
-  if (!row.nothingInIt && row.refrigerant === null) return { kind: 'unk', text: 'Unknown, no limit' }
+  if (!row.nothingInIt && row.refrigerant === null) return { kind: 'unk', text: row.condition === 'mixed' ? 'Mixed, no limit' : 'Unknown, no limit' }
   if (row.findingCodes.includes('not-seen')) {
     const days = daysSinceLastEvent(row, now)
     return { kind: 'unk', text: days === null ? 'Not seen' : days >= 90 ? `Missing? ${days} days` : `Not seen for ${days} days` }

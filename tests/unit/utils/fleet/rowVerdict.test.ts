@@ -17,6 +17,7 @@ describe('the word that the fleet says of a cylinder', () => {
 
   it('is that something unknown is in it, never that it is usable', () => {
     expect(rowVerdict(cylinderRow({ refrigerant: null }), NOW)).toEqual({ kind: 'unk', text: 'Unknown, no limit' })
+    expect(rowVerdict(cylinderRow({ refrigerant: null, condition: 'mixed' }), NOW)).toEqual({ kind: 'unk', text: 'Mixed, no limit' })
     expect(rowVerdict(cylinderRow({ netGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Not weighed' })
     expect(rowVerdict(cylinderRow({ waterCapacityGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Stamp unknown, no limit' })
   })
