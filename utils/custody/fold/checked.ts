@@ -1,6 +1,7 @@
+import { STANDARD_ATMOSPHERE_KPA } from '../../quantity/pressure'
 import { pressureCheck, whyNoCheck } from '../../refrigerant/pressureCheck'
 import { fullReading } from '../../refrigerant/pressureReading'
-import { gasExcess } from '../findings/pressure'
+import { gasExcess, pressureInNothing } from '../findings/pressure'
 import type { DetailsOf } from '../schema'
 import { loseNet } from './contents'
 import { rename } from './ledger'
@@ -18,9 +19,15 @@ export function checked(turn: Turn<'checked'>): void {
 
 function judgePressure(turn: Turn, details: Extract<DetailsOf<'checked'>, { method: 'pressure' }>): void {
   const { refrigerant: name, nothingInIt } = turn.state.contents
-  const refrigerant = name === null || nothingInIt ? undefined : turn.context.catalogue.refrigerants.get(name)
+  const reading = fullReading(details)
+  if (nothingInIt) {
+    const gaugeKPa = reading.pressureKPa - STANDARD_ATMOSPHERE_KPA
+    if (gaugeKPa > reading.gaugeErrorKPa) turn.findings.push(pressureInNothing(gaugeKPa))
+    return
+  }
+  const refrigerant = name === null ? undefined : turn.context.catalogue.refrigerants.get(name)
   if (refrigerant === undefined || whyNoCheck(refrigerant, details.temperatureC) !== null) return
-  const { verdict, excessKPa } = pressureCheck({ ...fullReading(details), refrigerant })
+  const { verdict, excessKPa } = pressureCheck({ ...reading, refrigerant })
   if (verdict === 'excess') turn.findings.push(gasExcess(refrigerant.designation, excessKPa))
 }
 

@@ -58,8 +58,21 @@ describe('a pressure check', () => {
     expect(lastFindings(registered(), filled('R-410A', 20), at80F(236.5))).toEqual([])
     expect(lastFindings(...full, at80F(236.5))).toEqual(['gas-excess'])
     expect(lastFindings(registered(), filled(null, 20), at80F(236.5))).toEqual([])
-    expect(lastFindings(registered(), at80F(236.5))).toEqual([])
     expect(lastFindings(registered(), filled('R-9999', 20), at80F(236.5))).toEqual([])
+  })
+
+  it('speaks where the log has nothing in it and the gauge shows more than it may be off', () => {
+    expect(lastFindings(registered(), at80F(236.5))).toEqual(['gas-excess'])
+    // A gauge is taken as good to 1 psi where nobody says more.
+    expect(lastFindings(registered(), at80F(1.1))).toEqual(['gas-excess'])
+    expect(lastFindings(registered(), at80F(0.9))).toEqual([])
+    expect(lastFindings(registered(), at80F(1.1, { gaugeErrorKPa: 10 }))).toEqual([])
+    // A gauge counts from the air that it stands in, high up too.
+    expect(lastFindings(registered(), at80F(1.1, { barometerKPa: 84.3 }))).toEqual(['gas-excess'])
+    expect(lastFindings(registered(), at80F(-14))).toEqual([])
+    const { text } = folded(registered(), at80F(100)).steps.at(-1)!.findings[0]!
+    expect(text).toContain('100.0\u00A0psi (689\u00A0kPa) above the air')
+    expect(contentsAfter(registered(), at80F(236.5))).toEqual(contentsAfter(registered()))
   })
 
   it('is kept without a word where the refrigerant has no liquid at that temperature', () => {
