@@ -1,9 +1,9 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { LabelAddress, MintAnswer } from '../../utils/contract/labels'
 import type { ProblemDetails } from '../../utils/contract/problem'
-import { isLabelCode } from '../../utils/label/code'
+import { formatLabelCode, isLabelCode } from '../../utils/label/code'
 import type { Member } from '../helpers/firm'
-import { made, openShop, registered, type Shop } from '../helpers/fleet'
+import { cylinderNow, eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
 import { boundsOf, drawnPages, symbolsOf, type DrawnPage } from '../helpers/pdfShapes'
 import { symbolTexts } from '../helpers/printedPage'
 import { startServer, type TestServer } from '../helpers/server'
@@ -94,6 +94,40 @@ describe('printing labels', () => {
     const { status, body } = await firm.warehouse.client.get<ProblemDetails>(`/api/labels.pdf?codes=${codes[0]}&diameter=60`)
     expect(status).toBe(422)
     expect(body.detail).toContain('the flat of the guard')
+  })
+})
+
+describe('a blank label', () => {
+  it('opens nothing until it is bound to a cylinder, and that cylinder from then on', async () => {
+    const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
+    const { id } = await registered(firm, { isLabelled: false })
+    expect((await firm.technician.client.get(`/api/cylinders/${codes[0]}`)).status).toBe(404)
+    await posted(firm.technician.client, [{ ...eventOf(id, 'labelled'), details: { code: codes[0] } }])
+    expect(await cylinderNow(firm.technician.client, codes[0]!)).toMatchObject({ id, labelCode: codes[0] })
+  })
+
+  it('stuck on two cylinders stops both, and opens the one that had it first', async () => {
+    const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
+    const [first, second] = [await registered(firm, { isLabelled: false }), await registered(firm, { isLabelled: false })]
+    for (const { id } of [first, second]) await posted(firm.technician.client, [{ ...eventOf(id, 'labelled'), details: { code: codes[0] } }])
+    for (const { id } of [first, second]) {
+      const { findings } = await cylinderNow(firm.technician.client, id)
+      expect(findings).toContainEqual(expect.objectContaining({ code: 'code-on-two', severity: 'stop' }))
+    }
+    expect((await cylinderNow(firm.technician.client, codes[0]!)).id).toBe(first.id)
+  })
+})
+
+describe('a label that was replaced', () => {
+  it('still opens its cylinder, which names the right one, and is printed no more', async () => {
+    const before = await registered(firm)
+    const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
+    await posted(firm.warehouse.client, [{ ...eventOf(before.id, 'labelled'), details: { code: codes[0], replaces: before.labelCode, reason: 'torn' } }])
+    expect(await cylinderNow(firm.technician.client, before.labelCode!)).toMatchObject({ id: before.id, labelCode: codes[0], oldLabelCodes: [before.labelCode] })
+    const again = await firm.warehouse.client.get<ProblemDetails>(`/api/labels.pdf?codes=${before.labelCode}`)
+    expect(again.status).toBe(409)
+    expect(again.body.detail).toContain(`was replaced by ${formatLabelCode(codes[0]!)}`)
+    expect((await printed(firm.warehouse, `codes=${codes[0]}`)).pages).toHaveLength(2)
   })
 })
 

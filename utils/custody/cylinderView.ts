@@ -58,6 +58,8 @@ export interface CylinderView {
   id: string
   version: number
   labelCode: string | null
+  /** When the present label was stuck on last, ISO 8601. */
+  labelledAt: string | null
   /** Codes that were replaced and still open the cylinder. */
   oldLabelCodes: string[]
   stamp: (Stamp & { tareWeightGrams: number | null, waterCapacityGrams: number | null, dedicatedTo: string | null }) | null

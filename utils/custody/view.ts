@@ -57,6 +57,7 @@ export function view(state: CylinderState, context: ViewContext): CylinderView {
     id: state.id,
     version: state.version,
     labelCode: state.labelCode,
+    labelledAt: instant(state.labels.find(({ code }) => code === state.labelCode)?.lastAt ?? null),
     oldLabelCodes: state.labels.map(({ code }) => code).filter(code => code !== state.labelCode),
     stamp: stampOf(state),
     marks: state.marks.map(({ enteredAt: _, ...mark }) => mark),

@@ -1,5 +1,5 @@
 import { printerOf, type LabelsQuery } from '~~/utils/contract/labels'
-import { labelUrl } from '~~/utils/label/code'
+import { formatLabelCode, labelUrl } from '~~/utils/label/code'
 import type { LabelledStamp } from '~~/utils/label/identityContent'
 import { identityLabel, symbolFit } from '~~/utils/label/identityLabel'
 import { sheet } from '~~/utils/label/sheet'
@@ -23,7 +23,7 @@ const COPIES = [1, 2] as const
 /**
  * Both labels of each code as a PDF: what the collar says where a cylinder carries the code, else blank ones to write on.
  *
- * Errors: 404 naming the codes that were neither minted here nor are on a cylinder; 422 where the symbol would not be read.
+ * Errors: 404 naming the codes that were neither minted here nor are on a cylinder; 409 for one that was replaced; 422 where the symbol would not be read.
  */
 export async function printedLabels(db: Database, query: LabelsQuery, publicUrl: string): Promise<Buffer> {
   const { codes, diameter: diameterMm = null } = query
@@ -60,6 +60,9 @@ async function stampsByCode(db: Database, codes: readonly string[]): Promise<Map
   const states = await cylinderStates(db, [...new Set(carriers.values())])
   return new Map(codes.map((code) => {
     const state = states.get(carriers.get(code) ?? '')
+    if (state && state.labelCode !== code) {
+      throw problem(409, 'That label was replaced', `${formatLabelCode(code)} was replaced${state.labelCode ? ` by ${formatLabelCode(state.labelCode)}` : ''}. It still opens its cylinder, and is printed no more.`)
+    }
     return [code, state?.stamp ? labelledStamp(state.stamp, state.tare) : null]
   }))
 }

@@ -9,6 +9,9 @@ describe('a labelled cylinder', () => {
     const shown = viewAfter([registered(), did('labelled', { code: OLD }), did('labelled', { code: NEW, replaces: OLD })])
     expect(shown.labelCode).toBe(NEW)
     expect(shown.oldLabelCodes).toEqual([OLD])
+    // Registered at the start, labelled an hour after it and again after another.
+    expect(shown.labelledAt).toBe(new Date(START + 2 * 3_600_000).toISOString())
+    expect(viewAfter([registered()]).labelledAt).toBeNull()
   })
 
   it('claims its codes from the instants they took effect, those taken out excepted', () => {
