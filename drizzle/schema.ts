@@ -189,13 +189,22 @@ export const cylinders = sqliteTable('cylinders', {
   /** Names the firm's rules that the columns rest on; a row under other rules than those in force is made anew. */
   ruledBy: text('ruled_by').notNull().default(''),
 }, table => [
-  index('cylinders_label').on(table.labelCode),
-  index('cylinders_serial').on(table.serial),
-  index('cylinders_place').on(table.placeId),
-  index('cylinders_holder').on(table.holderId),
-  index('cylinders_refrigerant').on(table.refrigerant),
-  index('cylinders_due').on(table.dueMonth),
-  index('cylinders_last_event').on(table.lastEventAt),
+  // A list is read in the order of one of these, a page at a time: each ends with the id, on which a page's cursor stands.
+  index('cylinders_label').on(table.labelCode, table.id),
+  index('cylinders_serial').on(table.serial, table.id),
+  index('cylinders_place').on(table.placeId, table.id),
+  index('cylinders_holder').on(table.holderId, table.id),
+  index('cylinders_owner').on(table.ownerId, table.id),
+  index('cylinders_refrigerant').on(table.refrigerant, table.id),
+  index('cylinders_condition').on(table.condition, table.id),
+  index('cylinders_lifecycle').on(table.lifecycle, table.id),
+  index('cylinders_net').on(table.netGrams, table.id),
+  index('cylinders_room').on(table.roomGrams, table.id),
+  index('cylinders_stop_weight').on(table.stopWeightGrams, table.id),
+  index('cylinders_due').on(table.dueMonth, table.id),
+  index('cylinders_last_event').on(table.lastEventAt, table.id),
+  index('cylinders_last_seen').on(table.lastSeenAt, table.id),
+  index('cylinders_severity').on(table.severity, table.id),
   index('cylinders_ruled_by').on(table.ruledBy),
 ])
 
@@ -279,6 +288,23 @@ export const openLines = sqliteTable('open_lines', {
   listKind: text('list_kind', { enum: ['shipment', 'test-lot'] }).notNull(),
   listId: text('list_id').notNull(),
 }, table => [index('open_lines_list').on(table.listId)])
+
+/** How a person has a table: which columns in which order, and how tall its rows. One row a person and table. */
+export const tableLayouts = sqliteTable('table_layouts', {
+  personId: text('person_id').notNull().references(() => people.id),
+  tableName: text('table_name', { enum: ['fleet'] }).notNull(),
+  columns: text('columns', { mode: 'json' }).$type<string[]>().notNull(),
+  density: text('density', { enum: ['compact', 'comfortable'] }).notNull(),
+}, table => [primaryKey({ columns: [table.personId, table.tableName] })])
+
+/** Views of the fleet that a person gave a name: filters and order as they stand in its address. */
+export const fleetViews = sqliteTable('fleet_views', {
+  id: text('id').primaryKey(),
+  personId: text('person_id').notNull().references(() => people.id),
+  name: text('name').notNull(),
+  query: text('query', { mode: 'json' }).$type<Record<string, string>>().notNull(),
+  createdAt: integer('created_at').notNull(),
+}, table => [uniqueIndex('fleet_views_person_name').on(table.personId, table.name)])
 
 /** What this database is: whether the demo firm lives in it, and which migration of the caches it has. */
 export const meta = sqliteTable('meta', {

@@ -24,7 +24,7 @@ export interface EventResult {
 /** What POST /api/events answers: results in the order sent, and each cylinder touched as it now stands. */
 export interface EventsAnswer { results: EventResult[], cylinders: CylinderView[] }
 
-export const SORTS = ['urgency', 'code', 'refrigerant', 'net', 'room', 'due', 'place', 'last-event', 'serial'] as const
+export const SORTS = ['urgency', 'code', 'serial', 'refrigerant', 'condition', 'lifecycle', 'net', 'room', 'stop', 'due', 'place', 'last-event'] as const
 
 /** The query of GET /api/cylinders. */
 export const fleetQuery = z.strictObject({
@@ -44,7 +44,8 @@ export const fleetQuery = z.strictObject({
 })
 
 export type FleetQuery = z.output<typeof fleetQuery>
-export type FleetAnswer = Page<CylinderRow>
+/** A page of the fleet, how many cylinders the whole list has, and the cursors of the pages beside it. */
+export interface FleetAnswer extends Page<CylinderRow> { prevCursor: string | null, total: number }
 
 /** What GET /api/fleet/summary answers: the figures of the strip above the fleet. */
 export interface FleetSummary {

@@ -1,52 +1,64 @@
-import type { InValue } from '@libsql/client'
+import type { InStatement, InValue, Row } from '@libsql/client'
 import type { CylinderRow, FleetAnswer, FleetQuery } from '../../../utils/contract/custody'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
-import { foreignCursor } from '../http/cursor'
-import { fleetFilter, type FleetFilter } from './fleetFilter'
 import { dateBounds, type DateBounds } from './dateBounds'
+import { fleetCursorText, readFleetCursor, type FleetCursor } from './fleetCursor'
+import { fleetFilter, type FleetFilter } from './fleetFilter'
+import { readingOrder, stretchesOf, type ReadStretch } from './fleetOrder'
+import { fleetTotal } from './fleetTotal'
 import { listedRows, rowColumns, type ListedRow } from './listedRows'
 
-/** What the list sorts by, as SQL; each gives a value that is never null, so that a cursor can stand on it. */
-const SORT_SQL: Record<FleetQuery['sort'], (bounds: DateBounds) => { sql: string, args: InValue[] }> = {
-  'urgency': urgency,
-  'code': () => plain(`coalesce(c.label_code, '~')`),
-  'serial': () => plain(`coalesce(c.serial, '~')`),
-  'refrigerant': () => plain(`coalesce(c.refrigerant, '~')`),
-  'net': () => plain('coalesce(c.net_grams, -1)'),
-  'room': () => plain('coalesce(c.room_grams, -1000000000)'),
-  'due': () => plain(`coalesce(c.due_month, '9999-99')`),
-  'place': () => plain(`coalesce(p.name, '~')`),
-  'last-event': () => plain('coalesce(c.last_event_at, 0)'),
-}
-
-/** The fleet, filtered and sorted by the cache of the fold and today's date. Errors: 400 for a cursor that is none of ours. */
+/**
+ * A page of the fleet, filtered and sorted by the cache of the fold and today's date.
+ *
+ * A page goes on from the cylinder on which the one before ended, not from a count: whatever changes in between, what
+ * stays as it is comes once.
+ *
+ * Errors: 400 for a cursor that is none of ours.
+ */
 export async function fleet(db: Database, query: FleetQuery, nowMs: number): Promise<FleetAnswer> {
   const from = await directory(db)
   const bounds = dateBounds(from, nowMs)
-  const filter = fleetFilter(query, bounds)
-  const sort = SORT_SQL[query.sort](bounds)
-  const down = query.order === 'desc'
-  const after = cursorOf(query.cursor)
-  const seek = after ? `AND (${sort.sql}, c.id) ${down ? '<' : '>'} (?, ?)` : ''
-  const columns = rowColumns(from, nowMs)
-  const [page, count] = await db.readClient.batch([
-    {
-      sql: `SELECT ${columns.sql}, ${sort.sql} AS sort_value
-        FROM cylinders c LEFT JOIN places p ON p.id = c.place_id
-        WHERE ${filter.sql} ${seek}
-        ORDER BY sort_value ${down ? 'DESC' : 'ASC'}, c.id ${down ? 'DESC' : 'ASC'} LIMIT ?`,
-      args: [...columns.args, ...sort.args, ...filter.args, ...(after ? [...sort.args, after.value, after.id] : []), query.limit + 1],
-    },
-    { sql: `SELECT count(*) FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql}`, args: filter.args },
-  ], 'read')
-  const rows = page?.rows ?? []
-  const shown = rows.slice(0, query.limit)
-  const last = shown.at(-1)
+  const cursor = readFleetCursor(query.cursor, query, stretchesOf(query.sort, bounds).length)
+  const page = await db.readClient.execute(fleetPage(query, cursor, bounds, rowColumns(from, nowMs)))
+  const read = page.rows.slice(0, query.limit)
+  const hasMore = page.rows.length > query.limit
+  const shown = cursor?.isBackward ? read.reverse() : read
+  const after = cursor?.isBackward ? true : hasMore
+  const before = cursor?.isBackward ? hasMore : cursor !== null
+  const at = (row: Row | undefined, isBackward: boolean) => row === undefined
+    ? null
+    : fleetCursorText({ isBackward, stretch: row['stretch'] as number, value: row['sort_value'] as FleetCursor['value'], id: row['id'] as string }, query)
   return {
     items: (await listedRows(db, shown, from, nowMs)).map(({ row }) => row),
-    nextCursor: rows.length > query.limit && last ? cursorText(last['sort_value'] as InValue, last['id'] as string) : null,
-    total: count?.rows[0]?.[0] as number,
+    nextCursor: after ? at(shown.at(-1), false) : null,
+    prevCursor: before ? at(shown[0], true) : null,
+    total: await fleetTotal(db, fleetFilter(query, bounds)),
+  }
+}
+
+/** The statement that reads a page and one row more: the stretches one after another, as far as the page needs them. */
+export function fleetPage(query: FleetQuery, cursor: FleetCursor | null, bounds: DateBounds, columns: FleetFilter): InStatement {
+  const filter = fleetFilter(query, bounds)
+  const order = readingOrder(query.sort, query.order, cursor?.isBackward ?? false, bounds)
+  const left = cursor === null ? order : order.slice(order.findIndex(stretch => stretch.index === cursor.stretch))
+  const parts = left.map((stretch, place) => stretchRows(stretch, filter, place === 0 ? cursor : null, query.limit + 1))
+  return {
+    sql: `SELECT ${columns.sql}, k.stretch, k.sort_value FROM (${parts.map(part => part.sql).join(' UNION ALL ')} LIMIT ?) k CROSS JOIN cylinders c ON c.id = k.id`,
+    args: [...columns.args, ...parts.flatMap(part => part.args), query.limit + 1],
+  }
+}
+
+function stretchRows({ where, by, index, isDown }: ReadStretch, filter: FleetFilter, after: FleetCursor | null, limit: number): FleetFilter {
+  const way = isDown ? 'DESC' : 'ASC'
+  const compare = isDown ? '<' : '>'
+  const seek = after === null ? '' : by === null ? ` AND c.id ${compare} ?` : ` AND (${by}, c.id) ${compare} (?, ?)`
+  const from: InValue[] = after === null ? [] : by === null ? [after.id] : [after.value, after.id]
+  return {
+    sql: `SELECT * FROM (SELECT c.id AS id, ${index} AS stretch, ${by ?? 'NULL'} AS sort_value FROM cylinders c
+      WHERE (${where.sql}) AND ${filter.sql}${seek} ORDER BY ${by === null ? '' : `${by} ${way}, `}c.id ${way} LIMIT ?)`,
+    args: [...where.args, ...filter.args, ...from, limit],
   }
 }
 
@@ -67,46 +79,8 @@ export async function cylinderRowsWhere(db: Database, filter: FleetFilter, limit
   const from = await directory(db)
   const columns = rowColumns(from, nowMs)
   const result = await db.readClient.execute({
-    sql: `SELECT ${columns.sql} FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${filter.sql} ORDER BY c.id LIMIT ?`,
+    sql: `SELECT ${columns.sql} FROM cylinders c WHERE ${filter.sql} ORDER BY c.id LIMIT ?`,
     args: [...columns.args, ...filter.args, limit],
   })
   return (await listedRows(db, result.rows, from, nowMs)).map(({ row }) => row)
-}
-
-function plain(sql: string) {
-  return { sql, args: [] }
-}
-
-/** 0 a stop, 1 a caution, 2 no number known, 3 nothing to do: by the same dates as a row's worst finding. */
-function urgency(bounds: DateBounds) {
-  return {
-    sql: `(CASE WHEN c.severity = 2 OR (c.retest_state = 'dated' AND c.due_month < ? AND c.nothing_in_it = 1 AND ${IN_USE}) THEN 0
-      WHEN c.severity = 1 OR (c.retest_state = 'dated' AND c.due_month <= ? AND ${IN_USE}) OR (c.last_seen_at < ? AND c.lifecycle NOT IN ('missing', 'at-reclaim', 'at-test', 'condemned', 'retired')) THEN 1
-      WHEN c.net_grams IS NULL THEN 2 ELSE 3 END)`,
-    args: [bounds.thisMonth, bounds.lastSoonMonth, bounds.notSeenBefore] as InValue[],
-  }
-}
-
-const IN_USE = `c.lifecycle NOT IN ('condemned', 'retired')`
-
-function cursorText(value: InValue, id: string): string {
-  return Buffer.from(JSON.stringify([value, id])).toString('base64url')
-}
-
-function cursorOf(text: string | undefined): { value: InValue, id: string } | null {
-  if (text === undefined) return null
-  const parts = parsed(Buffer.from(text, 'base64url').toString('utf8'))
-  if (!Array.isArray(parts) || parts.length !== 2) throw foreignCursor()
-  const [value, id] = parts as unknown[]
-  if (!(typeof value === 'string' || Number.isFinite(value)) || typeof id !== 'string') throw foreignCursor()
-  return { value: value as InValue, id }
-}
-
-function parsed(json: string): unknown {
-  try {
-    return JSON.parse(json)
-  }
-  catch {
-    return null
-  }
 }

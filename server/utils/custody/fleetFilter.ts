@@ -3,8 +3,11 @@ import type { FleetQuery } from '../../../utils/contract/custody'
 import { normaliseLabelCode } from '../../../utils/label/code'
 import type { DateBounds } from './dateBounds'
 
-/** A condition over `cylinders c` and `places p`. */
+/** A condition over `cylinders c`. */
 export interface FleetFilter { sql: string, args: InValue[] }
+
+/** A place and all that stands within it. */
+const WITHIN = 'WITH RECURSIVE inside (id) AS (VALUES (?) UNION SELECT p.id FROM places p JOIN inside ON p.parent_id = inside.id) SELECT id FROM inside'
 
 const ENDED = `('condemned', 'retired')`
 const AWAY_OR_ENDED = `('missing', 'at-reclaim', 'at-test', 'condemned', 'retired')`
@@ -13,12 +16,12 @@ const AWAY_OR_ENDED = `('missing', 'at-reclaim', 'at-test', 'condemned', 'retire
 export function fleetFilter(query: Partial<FleetQuery>, bounds: DateBounds): FleetFilter {
   const all: FleetFilter[] = []
   const when = (sql: string, ...args: InValue[]) => all.push({ sql, args })
-  if (query.place) when('(c.place_id = ? OR p.parent_id = ?)', query.place, query.place)
+  if (query.place) when(`c.place_id IN (${WITHIN})`, query.place)
   if (query.holder) when('c.holder_id = ?', query.holder)
   if (query.refrigerant) when('c.refrigerant = ?', query.refrigerant)
   if (query.condition) when('c.condition = ?', query.condition)
   if (query.lifecycle) when('c.lifecycle = ?', query.lifecycle)
-  if (query.dueBefore) when(`c.retest_state = 'dated' AND c.due_month < ? AND c.lifecycle NOT IN ${ENDED}`, query.dueBefore)
+  if (query.dueBefore) when(dueUntil('<'), query.dueBefore)
   if (query.owner) when('c.owner_id = ?', query.owner)
   if (query.label) when('c.label_code = ?', normaliseLabelCode(query.label) ?? query.label)
   if (query.finding) all.push(findingFilter(query.finding, bounds))
@@ -29,20 +32,36 @@ export function fleetFilter(query: Partial<FleetQuery>, bounds: DateBounds): Fle
 
 /** Cylinders on which a finding stands today; 'stop' and 'caution' stand for any of that severity. */
 export function findingFilter(code: string, bounds: DateBounds): FleetFilter {
-  const overdue: FleetFilter = { sql: `c.retest_state = 'dated' AND c.due_month < ? AND c.lifecycle NOT IN ${ENDED}`, args: [bounds.thisMonth] }
-  const soon: FleetFilter = {
-    sql: `c.retest_state = 'dated' AND c.due_month >= ? AND c.due_month <= ? AND c.lifecycle NOT IN ${ENDED}`,
-    args: [bounds.thisMonth, bounds.lastSoonMonth],
-  }
-  const notSeen: FleetFilter = { sql: `c.last_seen_at < ? AND c.lifecycle NOT IN ${AWAY_OR_ENDED}`, args: [bounds.notSeenBefore] }
+  const overdue = isOverdue(bounds)
+  const soon: FleetFilter = { sql: `c.due_month >= ? AND ${dueUntil('<=')}`, args: [bounds.thisMonth, bounds.lastSoonMonth] }
+  const notSeen = isUnseen(bounds)
   switch (code) {
     case 'retest-overdue': return overdue
     case 'retest-soon': return soon
     case 'not-seen': return notSeen
     case 'stop': return either({ sql: 'c.severity = 2', args: [] }, { sql: `${overdue.sql} AND c.nothing_in_it = 1`, args: overdue.args })
-    case 'caution': return either({ sql: 'c.severity >= 1', args: [] }, overdue, soon, notSeen)
-    default: return { sql: 'c.finding_codes LIKE ?', args: [`% ${code.replace(/[%_]/g, '')} %`] }
+    case 'caution': return either({ sql: 'c.severity >= 1', args: [] }, isSoonOrOverdue(bounds), notSeen)
+    default: return { sql: 'c.severity >= 1 AND c.finding_codes LIKE ?', args: [`% ${code.replace(/[%_]/g, '')} %`] }
   }
+}
+
+/** Cylinders in use whose due month has passed; `more` narrows it down. */
+export function isOverdue(bounds: DateBounds, more = '1'): FleetFilter {
+  return { sql: `${dueUntil('<')} AND ${more}`, args: [bounds.thisMonth] }
+}
+
+/** Cylinders in use whose due month has passed or is near. */
+export function isSoonOrOverdue(bounds: DateBounds): FleetFilter {
+  return { sql: dueUntil('<='), args: [bounds.lastSoonMonth] }
+}
+
+/** Cylinders that ought to be here and were not seen for the firm's number of days. */
+export function isUnseen(bounds: DateBounds): FleetFilter {
+  return { sql: `c.last_seen_at < ? AND c.lifecycle NOT IN ${AWAY_OR_ENDED}`, args: [bounds.notSeenBefore] }
+}
+
+function dueUntil(compare: '<' | '<='): string {
+  return `c.due_month ${compare} ? AND c.retest_state = 'dated' AND c.lifecycle NOT IN ${ENDED}`
 }
 
 function either(...filters: FleetFilter[]): FleetFilter {
@@ -54,7 +73,7 @@ function searchFilter(text: string): FleetFilter {
   const words = `%${text.replace(/[\\%_]/g, match => `\\${match}`)}%`
   const squeezed = `%${text.replace(/[\s-]/g, '').replace(/[\\%_]/g, match => `\\${match}`)}%`
   return {
-    sql: `c.label_code LIKE ? ESCAPE '\\' OR c.serial LIKE ? ESCAPE '\\' OR c.refrigerant LIKE ? ESCAPE '\\' OR p.name LIKE ? ESCAPE '\\'`,
+    sql: `c.label_code LIKE ? ESCAPE '\\' OR c.serial LIKE ? ESCAPE '\\' OR c.refrigerant LIKE ? ESCAPE '\\' OR c.place_id IN (SELECT p.id FROM places p WHERE p.name LIKE ? ESCAPE '\\')`,
     args: [squeezed, words, words, words],
   }
 }

@@ -29,7 +29,7 @@ export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSu
       args: [bounds.thisMonth, lastMonth],
     },
     `SELECT c.refrigerant, count(*) FROM cylinders c WHERE c.refrigerant IS NOT NULL AND ${OURS} GROUP BY c.refrigerant ORDER BY count(*) DESC, c.refrigerant`,
-    { sql: `SELECT count(*) FROM cylinders c LEFT JOIN places p ON p.id = c.place_id WHERE ${late.sql}`, args: late.args },
+    { sql: `SELECT count(*) FROM cylinders c WHERE ${late.sql}`, args: late.args },
   ], 'read')
   const number = (index: number) => (counts?.rows[0]?.[index] as number | null) ?? 0
   const byMonth = new Map((due?.rows ?? []).map(row => [row[0] as string, row[1] as number]))
@@ -53,7 +53,7 @@ export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSu
 
 function countsOf(filters: FleetFilter[]): InStatement {
   return {
-    sql: `SELECT ${filters.map(one => `sum(CASE WHEN ${one.sql} THEN 1 ELSE 0 END)`).join(', ')} FROM cylinders c LEFT JOIN places p ON p.id = c.place_id`,
+    sql: `SELECT ${filters.map(one => `sum(CASE WHEN ${one.sql} THEN 1 ELSE 0 END)`).join(', ')} FROM cylinders c`,
     args: filters.flatMap(one => one.args),
   }
 }

@@ -17,6 +17,8 @@ export interface Database {
    * Resolves only when they are durable; rejects with nothing of them stored.
    */
   write: (statements: InStatement[]) => Promise<ResultSet[]>
+  /** How many writes were tried so far: while it stays, nothing of ours has changed. */
+  writes: () => number
   /** Holds the writer's queue while work runs: for a read that a write depends on. */
   exclusive: <T>(work: (commit: Database['write']) => Promise<T>) => Promise<T>
   migrate: (folder: string) => Promise<void>
@@ -65,6 +67,7 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
 
   const refuseIfGone = file ? sameFile(file) : () => undefined
   let failedAt: number | null = null
+  let writes = 0
 
   async function commit(statements: InStatement[]): Promise<ResultSet[]> {
     if (statements.length === 0) return []
@@ -79,6 +82,9 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
     catch (error) {
       if (storageFailure(error)) failedAt = Date.now()
       throw error
+    }
+    finally {
+      writes++
     }
   }
 
@@ -110,6 +116,7 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
     read: drizzle(readClient, { schema }),
     readClient,
     write: statements => enqueue(() => commit(statements)),
+    writes: () => writes,
     exclusive: work => enqueue(() => work(commit)),
     migrate: folder => enqueue(() => migrateTo(writer, folder)),
     probe,
