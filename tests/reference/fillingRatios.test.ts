@@ -99,11 +99,10 @@ describe('the filling ratios of TRG 102', () => {
     expect(burnt.exactLimitGrams).toBeGreaterThan(746)
   })
 
-  // The share of R-22 carried over to R-12, which is heavier, does not reach down to its own figure.
-  it('give R-12 with compressor oil 0.75 kg/L, above which our limit lies by 6.6 %', () => {
+  it('give R-12 with compressor oil 0.75 kg/L, which is our oily limit of it', () => {
     const burnt = limitOf('R-12', true)
-    expect(burnt.exactLimitGrams! / 750).toBeGreaterThan(1.06)
-    expect(burnt.exactLimitGrams! / 750).toBeLessThan(1.066)
+    expect(burnt.governingRule).toBe('oily')
+    expect(burnt.exactLimitGrams).toBeCloseTo(750, 9)
   })
 })
 
