@@ -44,10 +44,11 @@ const CAUTIONS: Record<CautionTopic, readonly string[]> = {
 export const STANDING_CAUTION = 'Follow the cylinder’s own marking, local code and the authority. Certified persons only. Collarbook computes; it does not license.'
 
 /**
- * Gives the short cautions for some topics, each once.
+ * Gives the short cautions for some topics, each once: of two that begin alike the one that says more.
  *
  * Source: common practice, no source; the heat limit is the one usually stamped or printed on cylinders (from memory).
  */
 export function cautionsFor(topics: readonly CautionTopic[]): string[] {
-  return [...new Set(topics.flatMap(topic => CAUTIONS[topic]))]
+  const all = [...new Set(topics.flatMap(topic => CAUTIONS[topic]))]
+  return all.filter(caution => !all.some(other => other.startsWith(`${caution.slice(0, -1)}:`)))
 }
