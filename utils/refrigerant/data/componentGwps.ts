@@ -27,7 +27,7 @@ export const COMPONENT_GWPS: Readonly<Record<GwpBasis, readonly GwpGroup[]>> = {
         'R-22': 1_810, 'R-123': 77, 'R-124': 609, 'R-142b': 2_310, ...AR4_HFCS, 'R-116': 12_200, 'R-218': 8_830,
       },
     },
-    { source: 'IPCC AR4 WG I (2007), Table 2.15 (indirect)', known: 'reported', values: { 'R-290': 3.3, 'R-600': 4, 'R-1270': 1.8 } },
+    { source: 'IPCC AR4 WG I (2007), Table 2.15 (indirect)', known: 'from memory', values: { 'R-290': 3.3, 'R-600': 4, 'R-1270': 1.8 } },
     { source: '0.4 as commonly printed; the report was not read', known: 'from memory', values: { 'R-13I1': 0.4 } },
     CARBON_DIOXIDE,
   ],
@@ -38,9 +38,10 @@ export const COMPONENT_GWPS: Readonly<Record<GwpBasis, readonly GwpGroup[]>> = {
         'R-11': 4_660, 'R-12': 10_200, 'R-13': 13_900, 'R-113': 5_820, 'R-114': 8_590, 'R-115': 7_670,
         'R-22': 1_760, 'R-123': 79, 'R-124': 527, 'R-142b': 1_980,
         'R-23': 12_400, 'R-32': 677, 'R-125': 3_170, 'R-134a': 1_300, 'R-143a': 4_800, 'R-152a': 138, 'R-227ea': 3_350, 'R-236fa': 8_060, 'R-245fa': 858,
-        'R-116': 11_100, 'R-218': 8_900, 'R-1233zd(E)': 1, 'R-1336mzz(Z)': 2,
+        'R-116': 11_100, 'R-218': 8_900, 'R-1233zd(E)': 1,
       },
     },
+    { source: 'IPCC AR5 WG I (2013), Table 8.A.1', known: 'from memory', values: { 'R-1336mzz(Z)': 2 } },
     { source: 'IPCC AR5 WG I (2013), Table 8.A.1: below 1, counted as 1', known: 'from memory', values: { 'R-1234yf': 1, 'R-1234ze(E)': 1 } },
     CARBON_DIOXIDE,
   ],
@@ -61,9 +62,10 @@ export const COMPONENT_GWPS: Readonly<Record<GwpBasis, readonly GwpGroup[]>> = {
   'exchange-value': [
     { source: '42 USC 7675(c), by 40 CFR 84.64(a)', known: 'read', values: AR4_HFCS },
     { source: '40 CFR 84.64(b)', known: 'read', values: { 'R-1233zd(E)': 4, 'R-1224yd(Z)': 1, 'R-1130(E)': 5 } },
+    { source: '40 CFR 84.64(b)', known: 'from memory', values: { 'R-1234yf': 1, 'R-1234ze(E)': 1, 'R-1336mzz(Z)': 2 } },
     {
       source: '40 CFR 84.64(b)', known: 'reported',
-      values: { 'R-1234yf': 1, 'R-1234ze(E)': 1, 'R-1336mzz(Z)': 2, 'R-290': 3.3, 'R-600': 4, 'R-600a': 1, 'R-1270': 1.8, 'R-717': 1, 'R-744': 1 },
+      values: { 'R-290': 3.3, 'R-600': 4, 'R-600a': 1, 'R-1270': 1.8, 'R-717': 1, 'R-744': 1 },
     },
     {
       source: '40 CFR 84.64(b), light saturated hydrocarbons: 1 to 4, the upper end taken', known: 'reported',
