@@ -2,6 +2,7 @@ import { z } from 'zod'
 import { normaliseLabelCode } from '../../label/code'
 import { RIN } from '../../requalification/struckMark'
 import { splitSpec } from '../../requalification/specs'
+import { readingGrams } from '../../quantity/mass'
 import { isMonth } from '../../quantity/month'
 
 // Far above any scale a cylinder is put on, so that a slip of the finger does not become a record.
@@ -48,9 +49,9 @@ export const mass = z.discriminatedUnion('unit', [
   z.strictObject({ unit: z.literal('kg'), value: figure(MOST_KILOGRAMS, 'kg') }),
 ], 'must be a mass: { "unit": "lb", "value": 41.8 }, { "unit": "lb-oz", "lb": 41, "oz": 13 } or { "unit": "kg", "value": 18.97 }')
 
-/** A stamped mass: a cylinder weighs something and holds something. */
+/** A stamped mass: a cylinder weighs something and holds something, and not only a trace that rounds to no gram. */
 const stampedMass = mass.refine(
-  reading => reading.unit === 'lb-oz' ? reading.lb + reading.oz > 0 : reading.value > 0,
+  reading => readingGrams(reading) > 0,
   'must be more than nothing; leave it unknown (null) where it cannot be read',
 )
 

@@ -110,6 +110,10 @@ describe('a registration', () => {
 
   it('has no cylinder that weighs or holds nothing', () => {
     expect(registration({ waterCapacity: kg(0) })).toHaveLength(1)
+    // Half a gram rounds to one; less rounds to none, and a density over no volume is no number.
+    expect(registration({ waterCapacity: kg(0.0005) })).toEqual([])
+    expect(registration({ waterCapacity: kg(0.0004) })).toHaveLength(1)
+    expect(registration({ waterCapacity: kg(5e-324) })).toHaveLength(1)
     expect(registration({ tareWeight: kg(0) })).toHaveLength(1)
   })
 
