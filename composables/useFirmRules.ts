@@ -9,7 +9,7 @@ const ASK_AGAIN_MS = 1_000
 /** The firm's rules as they stand now, by kind; asked for again for as long as rows of the fleet are still to follow them. */
 export function useFirmRules(now: Readonly<Ref<number>>) {
   const store = useFirmRulesStore()
-  const loaded = useLoaded<PolicyAnswer>('firm-rules-now', () => store.refresh())
+  const loaded = useLoaded<PolicyAnswer>('firm-rules-now', refreshed)
   let timer: ReturnType<typeof setTimeout> | undefined
 
   const histories = computed(() => {
@@ -19,6 +19,17 @@ export function useFirmRules(now: Readonly<Ref<number>>) {
     const [fill, retest] = [ruleHistory(rules, 'fill-policy', at), ruleHistory(rules, 'retest', at)]
     return { fill, retest, fillInForce: inForce(fill), retestInForce: inForce(retest) }
   })
+
+  /** As they are now; without an answer as last told, so that a lost connection does not close the form above them. */
+  async function refreshed(): Promise<PolicyAnswer> {
+    try {
+      return await store.refresh()
+    }
+    catch (error) {
+      if (store.policy) return { ...store.policy }
+      throw error
+    }
+  }
 
   onMounted(() => watch(loaded.data, (policy) => {
     clearTimeout(timer)

@@ -2,6 +2,7 @@ import { mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
 import { createError, readBody } from 'h3'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { nextTick } from 'vue'
+import { clearNuxtData } from '#imports'
 import RulesPage from '~~/pages/rules.vue'
 import { useSessionStore } from '~~/stores/session'
 import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
@@ -18,8 +19,9 @@ const POLICY: PolicyAnswer = {
 }
 
 let sent: NewRule[] = []
+let told: () => PolicyAnswer = () => POLICY
 registerEndpoint('/api/session', () => ({ user: MANAGER }))
-registerEndpoint('/api/policy', () => POLICY)
+registerEndpoint('/api/policy', () => told())
 registerEndpoint('/api/policy/preview', { method: 'POST', handler: (): RulePreview => newRulePreview(POLICY.asOf).answer() })
 registerEndpoint('/api/policy', {
   method: 'POST',
@@ -34,18 +36,19 @@ async function open() {
   const page = await mountSuspended(RulesPage, { route: '/rules', attachTo: document.body })
   const root = page.element.parentElement!
   const button = (name: string) => byRole(root, 'button', name)
+  const field = (name: string) => byRole(root, 'textbox', name) as HTMLInputElement
   await vi.waitFor(() => expect(button('Set a fill rule')).toBeDefined())
   button('Set a fill rule').click()
-  await nextTick()
+  await vi.waitFor(() => field('Why'))
   const submit = (name: string) => button(name).closest('form')!.dispatchEvent(new Event('submit', { cancelable: true }))
   return {
     page,
     async type(name: string, text: string) {
-      const field = byRole(root, 'textbox', name) as HTMLInputElement
-      field.value = text
-      field.dispatchEvent(new Event('input'))
+      field(name).value = text
+      field(name).dispatchEvent(new Event('input'))
       await nextTick()
     },
+    field,
     async preview() {
       submit('Show what it changes')
       await vi.waitFor(() => expect(button('Set this rule')).toBeDefined())
@@ -77,6 +80,24 @@ describe('a rule whose answer was lost', () => {
     const ids = sent.map(rule => rule.id)
     expect(ids[1]).toBe(ids[0])
     expect(ids[2]).not.toBe(ids[0])
+    page.unmount()
+  })
+})
+
+describe('the form of a rule', () => {
+  it('keeps what is typed where the connection is lost while rows still follow', async () => {
+    useSessionStore().set(MANAGER)
+    let asked = 0
+    told = () => {
+      asked++
+      if (asked > 1) throw createError({ statusCode: 503 })
+      return { ...POLICY, rowsBehind: 12 }
+    }
+    clearNuxtData('firm-rules-now')
+    const { page, type, field } = await open()
+    await type('Why', 'The vans stand in the sun')
+    await vi.waitFor(() => expect(asked).toBeGreaterThan(2), { timeout: 5000 })
+    expect(field('Why').value).toBe('The vans stand in the sun')
     page.unmount()
   })
 })
