@@ -1,5 +1,6 @@
 import { sql } from 'drizzle-orm'
 import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import type { MassReading } from '../utils/quantity/mass'
 
 // Instants are UTC milliseconds, masses whole grams, flags 0 or 1, months 'YYYY-MM', ids UUIDv7 in lower case.
 
@@ -105,6 +106,29 @@ export const places = sqliteTable('places', {
   active: integer('active', { mode: 'boolean' }).notNull().default(true),
   createdAt: integer('created_at').notNull(),
 }, table => [uniqueIndex('places_firm').on(table.firmId)])
+
+/** What a van carries beside cylinders, as its crew last said; every saying is kept, the latest counts. */
+export const vanMaterials = sqliteTable('van_materials', {
+  id: text('id').primaryKey(),
+  vanId: text('van_id').notNull().references(() => places.id),
+  /** Gross of all of it together, as entered. */
+  gross: text('gross', { mode: 'json' }).$type<MassReading>().notNull(),
+  note: text('note').notNull(),
+  saidBy: text('said_by').notNull(),
+  saidAt: integer('said_at').notNull(),
+}, table => [index('van_materials_van').on(table.vanId, table.saidAt)])
+
+/** A van's return: what was found of what it should hold. The latest of a van says what is to be looked for. */
+export const vanCheckIns = sqliteTable('van_check_ins', {
+  id: text('id').primaryKey(),
+  vanId: text('van_id').notNull().references(() => places.id),
+  /** Ids of cylinders that were scanned. */
+  found: text('found', { mode: 'json' }).$type<string[]>().notNull(),
+  /** Ids of cylinders that ought to have come back and did not. */
+  missing: text('missing', { mode: 'json' }).$type<string[]>().notNull(),
+  checkedBy: text('checked_by').notNull(),
+  checkedAt: integer('checked_at').notNull(),
+}, table => [index('van_check_ins_van').on(table.vanId, table.checkedAt)])
 
 export const scales = sqliteTable('scales', {
   id: text('id').primaryKey(),
