@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
 import type { ProblemDetails } from './problem'
+import { fleetColumns } from './fleetViews'
 import { id, page, type Page } from './parts'
 
 /** Most events in one request. */
@@ -44,6 +45,14 @@ export const fleetQuery = z.strictObject({
 })
 
 export type FleetQuery = z.output<typeof fleetQuery>
+
+/** The same as a table of values (Accept: text/csv), which also takes columns and unit, and comes whole. */
+export const fleetListQuery = fleetQuery.extend({
+  columns: z.string().max(300).transform(text => text.split(',')).pipe(fleetColumns).optional(),
+  unit: z.enum(['lb', 'lb-oz', 'kg']).optional(),
+})
+
+export type FleetListQuery = z.output<typeof fleetListQuery>
 /** A page of the fleet, how many cylinders the whole list has, and the cursors of the pages beside it. */
 export interface FleetAnswer extends Page<CylinderRow> { prevCursor: string | null, total: number }
 
