@@ -1,21 +1,24 @@
 import { useSessionStore } from '~~/stores/session'
 
+/** Where something is kept: until the tab is closed, or on the device until it is forgotten. */
+type Kept = 'tab' | 'device'
+
 /**
  * What is typed into a form and not recorded yet, kept in this tab for its author: a lost session or a reloaded page
- * loses nothing, and whoever signs in next finds nothing.
+ * loses nothing, and whoever signs in next finds nothing. Kept on the device, a closed tab loses nothing either.
  *
  * Shape: `key` names the form; `restored` is what was kept from before, once the page stands in the browser.
  */
-export function useKept<T extends object>(key: string) {
+export function useKept<T extends object>(key: string, where: Kept = 'tab') {
   const storageKey = `collarbook-form ${useSessionStore().user?.id ?? ''} ${key}`
   const restored = shallowRef<T | null>(null)
 
   onMounted(() => {
-    restored.value = read<T>(storageKey)
+    restored.value = read<T>(where, storageKey)
   })
 
   function keep(entry: T | null) {
-    write(storageKey, entry)
+    write(where, storageKey, entry)
   }
 
   function forget() {
@@ -27,9 +30,13 @@ export function useKept<T extends object>(key: string) {
   return { restored, keep, forget }
 }
 
-function read<T>(key: string): T | null {
+function storageOf(where: Kept): Storage {
+  return where === 'tab' ? sessionStorage : localStorage
+}
+
+function read<T>(where: Kept, key: string): T | null {
   try {
-    const text = sessionStorage.getItem(key)
+    const text = storageOf(where).getItem(key)
     return text === null ? null : JSON.parse(text) as T
   }
   catch {
@@ -37,10 +44,10 @@ function read<T>(key: string): T | null {
   }
 }
 
-function write(key: string, value: object | null) {
+function write(where: Kept, key: string, value: object | null) {
   try {
-    if (value === null) sessionStorage.removeItem(key)
-    else sessionStorage.setItem(key, JSON.stringify(value))
+    if (value === null) storageOf(where).removeItem(key)
+    else storageOf(where).setItem(key, JSON.stringify(value))
   }
   catch {
     // Without storage the entry is kept as long as the page is open.

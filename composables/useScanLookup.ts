@@ -45,6 +45,8 @@ export function useScanLookup(on: { start: () => void, end: () => void }) {
 
   async function look(code: string) {
     if (code === lastCode && Date.now() - lastAt < SAME_CODE_MS) return
+    // A stop stands until it was seen, for a hand scanner too, which the paused camera does not hold back.
+    if (verdict.value?.kind === 'stop') return signal('stop')
     lastCode = code
     lastAt = Date.now()
     on.start()

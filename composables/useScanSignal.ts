@@ -1,3 +1,4 @@
+import { usePreferencesStore } from '~~/stores/preferences'
 import type { StatusKind } from '~~/utils/picture/status'
 
 // One short high tone, two low ones, a rising one, a middle one. Units: hertz, seconds.
@@ -10,12 +11,14 @@ const TONES: Record<StatusKind, { hertz: number, from: number, length: number }[
 }
 const BUZZES: Record<StatusKind, number[]> = { ok: [40], att: [90], stop: [160, 90, 160], unk: [40, 60, 40], away: [90] }
 
-/** Says with a tone, and where the device can with a buzz, how a scan came out. */
+/** Says with a tone, unless sounds are off on this device, and where it can with a buzz, how a scan came out. */
 export function useScanSignal() {
+  const preferences = usePreferencesStore()
   let context: AudioContext | null = null
 
   function signal(kind: StatusKind) {
     navigator.vibrate?.(BUZZES[kind])
+    if (!preferences.scanSounds) return
     try {
       context ??= new AudioContext()
       for (const tone of TONES[kind]) play(context, tone)

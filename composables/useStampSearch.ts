@@ -2,7 +2,6 @@ import { problemOf, useApi } from '~~/composables/useApi'
 import type { CylinderRow, FleetAnswer } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 
-const LEAST_OF_A_STAMP = 3
 const MOST_FOUND = 8
 
 /** The cylinders whose stamp has some typed characters; null before they are asked for. */
@@ -12,7 +11,6 @@ export function useStampSearch() {
 
   /** Gives why it could not be asked, or null. */
   async function searchStamp(text: string): Promise<ProblemDetails | null> {
-    if (text.length < LEAST_OF_A_STAMP) return null
     try {
       found.value = (await api.get<FleetAnswer>('/api/cylinders', { q: text, limit: MOST_FOUND })).items
       return null

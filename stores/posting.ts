@@ -2,7 +2,8 @@ import { defineStore } from 'pinia'
 import { v7 as uuidv7 } from 'uuid'
 import { ApiError, problemOf, useApi } from '~~/composables/useApi'
 import { useDevice } from '~~/composables/useDevice'
-import type { CylinderView, EventsAnswer } from '~~/utils/contract/custody'
+import { MOST_EVENTS, type CylinderView, type EventResult, type EventsAnswer } from '~~/utils/contract/custody'
+import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
 import type { EventKind } from '~~/utils/custody/kinds'
 import { KIND_WORDS } from '~~/utils/custody/words'
@@ -13,6 +14,9 @@ export type NewEvent<K extends EventKind = EventKind> = Omit<CustodyEvent<K>, 'i
 
 /** What was recorded, and the cylinder as it now stands. */
 export interface Posted { event: CustodyEvent, version: number, cylinder: CylinderView | null }
+
+/** What became of an event that was sent: recorded, or refused with a problem. */
+export type Settled = { event: CustodyEvent } & ({ posted: Posted, problem: null } | { posted: null, problem: ProblemDetails })
 
 const NOTICE_MS = 10_000
 const NOT_TAKEN_BACK: readonly EventKind[] = ['registered', 'corrected']
@@ -26,9 +30,10 @@ export function deviceNow(ms = Date.now()): string {
 export const usePostingStore = defineStore('posting', () => {
   const api = useApi()
   const notice = ref('')
-  const last = shallowRef<Posted | null>(null)
-  /** The event that was last taken back. */
-  const takenBackId = ref<string | null>(null)
+  /** What was recorded last and may still be taken back; null where nothing is. */
+  const last = shallowRef<Posted[] | null>(null)
+  /** The events that were last taken back. */
+  const takenBackIds = ref<string[]>([])
   const busy = ref(false)
   /** Goes up with each event recorded here; a page that shows a cylinder asks for it again. */
   const recorded = ref(0)
@@ -42,15 +47,30 @@ export const usePostingStore = defineStore('posting', () => {
 
   /** Errors: ApiError where the server was not reached or refused the event; it is then still its author's. */
   async function post(event: CustodyEvent): Promise<Posted> {
+    const [settled] = await postAll([event])
+    if (settled!.problem) throw new ApiError(settled!.problem)
+    return settled!.posted!
+  }
+
+  /**
+   * Records several events, all in one request as far as one takes them.
+   *
+   * Shape: what became of each, in their order; `each` is told of every request's as soon as it is answered.
+   * Errors: ApiError where the server was not reached; what `each` was told of before that is recorded.
+   */
+  async function postAll(events: readonly CustodyEvent[], each: (settled: Settled[]) => void = () => {}): Promise<Settled[]> {
     busy.value = true
     try {
-      const answer = await api.post<EventsAnswer>('/api/events', { events: [event], deviceNow: deviceNow() })
-      const result = answer.results.find(each => each.id === event.id)
-      if (result?.outcome === 'refused' && result.problem) throw new ApiError(result.problem)
-      if (result?.version === undefined) throw new ApiError(problemOf(undefined))
-      recorded.value++
-      const cylinder = answer.cylinders.find(each => each.id === event.cylinderId) ?? null
-      return { event, version: result.version, cylinder }
+      const all: Settled[] = []
+      for (let from = 0; from < events.length; from += MOST_EVENTS) {
+        const some = events.slice(from, from + MOST_EVENTS)
+        const answer = await api.post<EventsAnswer>('/api/events', { events: some, deviceNow: deviceNow() })
+        const settled = some.map(event => settledBy(answer, event))
+        if (settled.some(({ posted }) => posted !== null)) recorded.value++
+        all.push(...settled)
+        each(settled)
+      }
+      return all
     }
     finally {
       busy.value = false
@@ -59,35 +79,39 @@ export const usePostingStore = defineStore('posting', () => {
 
   /** Says on every screen what was recorded, and offers for ten seconds to take it back. */
   function announce(posted: Posted) {
-    say(`Recorded: ${KIND_WORDS[posted.event.kind].done.toLowerCase()}`)
-    if (NOT_TAKEN_BACK.includes(posted.event.kind)) return
+    announceAll([posted], `Recorded: ${KIND_WORDS[posted.event.kind].done.toLowerCase()}`)
+  }
+
+  /** The same for what was recorded together, in one text. */
+  function announceAll(posted: Posted[], text: string) {
+    say(text)
+    if (posted.length === 0 || posted.some(({ event }) => NOT_TAKEN_BACK.includes(event.kind))) return
     last.value = posted
   }
 
-  /** Takes back what was just recorded, by an event of its own: the log loses nothing. */
-  async function takeBack(): Promise<CylinderView | null> {
+  /** Takes back what was just recorded, each by an event of its own: the log loses nothing. */
+  async function takeBack(): Promise<void> {
     const taken = last.value
-    if (!taken) return null
+    if (!taken) return
     clear()
     try {
-      const correction = seal<'corrected'>({
-        cylinderId: taken.event.cylinderId,
+      const settled = await postAll(taken.map(({ event, version }) => seal<'corrected'>({
+        cylinderId: event.cylinderId,
         kind: 'corrected',
         occurredAt: deviceNow(),
-        expects: taken.version,
-        details: { eventId: taken.event.id, reason: 'taken back at once' },
-      })
-      const posted = await post(correction as CustodyEvent)
-      takenBackId.value = taken.event.id
-      say('Taken back. Both lines stay in the custody log.')
-      return posted.cylinder
+        expects: version,
+        details: { eventId: event.id, reason: 'taken back at once' },
+      }) as CustodyEvent))
+      takenBackIds.value = taken.filter((_, at) => settled[at]!.posted !== null).map(({ event }) => event.id)
+      const refusal = settled.find(({ problem }) => problem !== null)?.problem
+      say(refusal
+        ? notTakenBack(refusal, takenBackIds.value.length, taken.length)
+        : taken.length === 1
+          ? 'Taken back. Both lines stay in the custody log.'
+          : `All ${taken.length} taken back. Every line stays in the custody log.`)
     }
     catch (error) {
-      const problem = problemOf(error)
-      say(problem.status === 409
-        ? 'Something was recorded after it. Correct it from its line in the custody log.'
-        : `Not taken back: ${problem.detail || problem.title}`)
-      return null
+      say(notTakenBack(problemOf(error), 0, taken.length))
     }
   }
 
@@ -103,5 +127,20 @@ export const usePostingStore = defineStore('posting', () => {
     last.value = null
   }
 
-  return { notice, last, takenBackId, busy, recorded, seal, post, announce, takeBack, say, clear }
+  return { notice, last, takenBackIds, busy, recorded, seal, post, postAll, announce, announceAll, takeBack, say, clear }
 })
+
+function settledBy(answer: EventsAnswer, event: CustodyEvent): Settled {
+  const result: EventResult | undefined = answer.results.find(each => each.id === event.id)
+  if (result?.outcome === 'refused' && result.problem) return { event, posted: null, problem: result.problem }
+  if (result?.version === undefined) return { event, posted: null, problem: problemOf(undefined) }
+  const cylinder = answer.cylinders.find(each => each.id === event.cylinderId) ?? null
+  return { event, posted: { event, version: result.version, cylinder }, problem: null }
+}
+
+function notTakenBack(problem: ProblemDetails, done: number, all: number): string {
+  const why = problem.status === 409
+    ? `Something was recorded after ${all === 1 ? 'it. Correct it from its line' : 'the others. Correct each from its line'} in the custody log.`
+    : `Not taken back: ${problem.detail || problem.title}`
+  return done > 0 ? `${done} of ${all} taken back. ${why}` : why
+}

@@ -11,6 +11,8 @@ export const usePreferencesStore = defineStore('preferences', () => {
   const cookie = { maxAge: KEPT_FOR_SECONDS, sameSite: 'strict' as const, path: '/' }
   const chosenUnit = useCookie<MassUnit | null>('unit', { ...cookie, default: () => null })
   const bigKeys = useCookie<boolean>('big-keys', { ...cookie, default: () => false })
+  /** Whether a scan is answered by a tone. */
+  const scanSounds = useCookie<boolean>('scan-sounds', { ...cookie, default: () => true })
   /** Whether a single key, such as the slash that goes to the search, does something. */
   const keyShortcuts = useCookie<boolean>('key-shortcuts', { ...cookie, default: () => true })
   const recentRefrigerants = useCookie<string[]>('recent-refrigerants', { ...cookie, default: () => [] })
@@ -28,5 +30,5 @@ export const usePreferencesStore = defineStore('preferences', () => {
     recentRefrigerants.value = [designation, ...others].slice(0, MOST_RECENT)
   }
 
-  return { unit, bigKeys, keyShortcuts, recentRefrigerants, remember }
+  return { unit, bigKeys, scanSounds, keyShortcuts, recentRefrigerants, remember }
 })

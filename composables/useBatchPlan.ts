@@ -1,0 +1,89 @@
+import { useApi } from '~~/composables/useApi'
+import type { BatchPlan } from '~~/composables/useBatch'
+import { useLoaded } from '~~/composables/useLoaded'
+import { useSessionStore } from '~~/stores/session'
+import { supervisorsFor } from '~~/utils/access/supervisors'
+import { batchActOf, type BatchAct } from '~~/utils/batch/batchAct'
+import type { ExpectedCylinder } from '~~/utils/batch/missing'
+import type { CylinderView, FleetAnswer } from '~~/utils/contract/custody'
+import type { PeopleAnswer } from '~~/utils/contract/people'
+import type { PlacesAnswer } from '~~/utils/contract/places'
+
+const MOST_AT_A_PLACE = 200
+
+/**
+ * What a batch is for, as its address says: `act`, the `van` that is loaded or unloaded, where `to`, and against what:
+ * all that stands `from` a place, or the codes and ids of `expect`.
+ */
+export function useBatchPlan() {
+  const api = useApi()
+  const route = useRoute()
+  const session = useSessionStore()
+  const supervisorId = ref('')
+
+  const lists = useLoaded('batch-lists', async () => {
+    const [places, people] = await Promise.all([
+      api.get<PlacesAnswer>('/api/places', { active: true }),
+      session.user?.trainee ? api.get<PeopleAnswer>('/api/people', { active: true }) : null,
+    ])
+    return { places: places.items, supervisors: people && supervisorsFor(people.items, session.user!.id) }
+  })
+  const places = computed(() => lists.data.value?.places ?? [])
+
+  const act = computed<BatchAct>({ get: () => batchActOf(route.query.act), set: value => ask({ act: value, to: undefined, from: undefined, expect: undefined }) })
+  const usesVan = computed(() => act.value === 'load' || act.value === 'unload')
+  const van = computed({
+    get: () => text('van') || places.value.find(({ technicianId }) => technicianId === session.user?.id)?.id || '',
+    set: value => ask({ van: value }),
+  })
+  const shops = computed(() => places.value.filter(({ kind }) => kind === 'shop'))
+  const to = computed({
+    get: () => text('to') || (shops.value.length === 1 && act.value !== 'move' ? shops.value[0]!.id : ''),
+    set: value => ask({ to: value }),
+  })
+  const from = computed({ get: () => text('from'), set: value => ask({ from: value }) })
+  const target = computed(() => {
+    const id = act.value === 'load' ? van.value : to.value
+    return places.value.find(place => place.id === id) ?? null
+  })
+
+  const listedFrom = computed(() => act.value === 'unload' ? van.value : from.value)
+  const expectedRequest = useLoaded<ExpectedCylinder[] | null>(`batch-expected ${act.value} ${van.value}`, async () => {
+    if (text('expect')) return Promise.all(text('expect').split(',').map(askedFor))
+    return listedFrom.value ? standingAt(listedFrom.value) : null
+  }, [listedFrom, () => route.query.expect])
+  const aboardRequest = useLoaded(`batch-aboard ${van.value}`, async () => act.value === 'load' && van.value ? standingAt(van.value) : [], [van])
+
+  const plan = computed<BatchPlan>(() => ({
+    act: act.value,
+    target: target.value,
+    expected: expectedRequest.data.value ?? null,
+    supervisorId: supervisorId.value || null,
+  }))
+  /** What is still to be chosen before anything can be recorded; null where nothing is. */
+  const lacks = computed(() => {
+    if (usesVan.value && van.value === '') return 'Choose the van.'
+    if (!target.value) return 'Choose where they come to.'
+    return session.user?.trainee && supervisorId.value === '' ? 'Choose who supervises.' : null
+  })
+
+  function text(name: string): string {
+    const value = route.query[name]
+    return typeof value === 'string' ? value : ''
+  }
+
+  function ask(changes: Record<string, string | undefined>) {
+    void navigateTo({ query: { ...route.query, ...changes } }, { replace: true })
+  }
+
+  async function standingAt(place: string) {
+    return (await api.get<FleetAnswer>('/api/cylinders', { place, limit: MOST_AT_A_PLACE })).items
+  }
+
+  async function askedFor(reference: string): Promise<ExpectedCylinder> {
+    const { id, labelCode, stamp, place, holder } = await api.get<CylinderView>(`/api/cylinders/${encodeURIComponent(reference)}`)
+    return { id, labelCode, serial: stamp?.serial ?? null, place, holder }
+  }
+
+  return { lists, places, act, van, to, from, plan, lacks, supervisorId, expectedProblem: expectedRequest.problem, aboard: aboardRequest.data }
+}
