@@ -4,7 +4,7 @@ import { join } from 'node:path'
 export default defineNuxtConfig({
   modules: [
     '@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', 'nuxt-security',
-    '@nuxt/eslint', '@nuxtjs/color-mode', '@nuxt/icon',
+    '@nuxt/eslint', '@nuxtjs/color-mode',
   ],
   // Our own code is imported by path, so that the import table can be checked; components stay registered.
   imports: { scan: false },
@@ -75,10 +75,6 @@ export default defineNuxtConfig({
     hash: { scrypt: { cost: 131_072, maxMemory: 268_435_456 } },
   },
   eslint: { config: { stylistic: true } },
-  icon: {
-    mode: 'svg', provider: 'none', serverBundle: false, fallbackToApi: false,
-    clientBundle: { scan: true, sizeLimitKb: 64 },
-  },
   security: {
     removeLoggers: false,
     corsHandler: false,

@@ -14,6 +14,11 @@ it('leads to a page', async () => {
   expect(byRole(wrapper.element, 'link', 'Move').getAttribute('href')).toBe('/scan')
 })
 
+it('has a drawing beside its word, which is not heard', async () => {
+  const wrapper = await mountSuspended(CylinderActButton, { props: { word: 'Move', icon: 'truck', to: '/scan' } })
+  expect(byRole(wrapper.element, 'link', 'Move').querySelector('svg[aria-hidden="true"] path')?.getAttribute('d')).toMatch(/^M/)
+})
+
 it('says why it may not be done, can still be reached, and does nothing', async () => {
   const wrapper = await mountSuspended(CylinderActButton, { props: { word: 'Fill', to: '/scan', refusal: 'the retest is late' } })
   const button = byRole(wrapper.element, 'button', /^Fill/)
