@@ -3,7 +3,7 @@ import { normaliseLabelCode } from '../label/code'
 import type { HostBudget } from '../label/symbol'
 import { LEAST_DIAMETER_MM, MOST_DIAMETER_MM } from '../label/diameter'
 import { offsetsFor, printerChoices, type LabelPrinter } from '../label/printer'
-import { LABEL_STOCKS, labelsPerPage, type LabelStockId } from '../label/stock'
+import { LABEL_STOCKS, labelsPerPage, takesTag, type LabelStockId } from '../label/stock'
 
 /** POST /api/labels. */
 export const mintBody = z.strictObject({ count: z.number().int().min(1).max(100) })
@@ -49,22 +49,30 @@ function isPrintable({ stock, dpi, x, y }: AskedPrinting, context: z.RefinementC
   if (!offsets.includes(y)) fault('y', `must be in steps of 0.5 up to ${offsets.at(-1)}`)
 }
 
+/** Position of the first label on a part-used sheet, from 1. */
+const start = z.coerce.number().int().min(1).default(1)
+
+function beginsOnPage({ stock, start }: { stock: LabelStockId, start: number }, context: z.RefinementCtx) {
+  if (start > labelsPerPage(LABEL_STOCKS[stock])) context.addIssue({ code: 'custom', path: ['start'], message: 'the sheet has no such position' })
+}
+
 /** GET /api/labels.pdf?codes=...&stock=...&start=... : both labels of each code. 404 for codes that nobody minted or stuck on. */
 export const labelsQuery = z.strictObject({
   codes: codeList,
   ...printing,
-  /** Position of the first label on a part-used sheet, from 1. */
-  start: z.coerce.number().int().min(1).default(1),
+  start,
   /** Of the cylinders, in millimetres; left out for a flat place. */
   diameter: z.coerce.number().min(LEAST_DIAMETER_MM).max(MOST_DIAMETER_MM).optional(),
-}).superRefine((query, context) => {
-  isPrintable(query, context)
-  if (query.start > labelsPerPage(LABEL_STOCKS[query.stock])) context.addIssue({ code: 'custom', path: ['start'], message: 'the sheet has no such position' })
-})
+}).superRefine(isPrintable).superRefine(beginsOnPage)
 export type LabelsQuery = z.output<typeof labelsQuery>
 
 /** GET /api/labels/test-page.pdf?stock=... : rulers and frames. */
 export const testPageQuery = z.strictObject(printing).superRefine(isPrintable)
+
+/** GET /api/cylinders/{ref}/contents-tag.pdf?stock=... : 409 where nothing, or nothing known, is in it. */
+export const contentsTagQuery = z.strictObject({ ...printing, start }).superRefine(isPrintable).superRefine(beginsOnPage)
+  .refine(({ stock }) => takesTag(LABEL_STOCKS[stock]), { path: ['stock'], message: 'is too small for a contents tag' })
+export type ContentsTagQuery = z.output<typeof contentsTagQuery>
 
 /** Everything that a person chooses before printing. */
 export interface PrintSetting {
@@ -79,6 +87,11 @@ export function labelsPdfPath(codes: readonly string[], { stock, start, printer,
   return pathWith('/api/labels.pdf', {
     codes: codes.join(','), ...asked(stock, printer), start: start === 1 ? null : start, diameter: diameterMm,
   })
+}
+
+/** Where the contents tag of a cylinder is to be had as a PDF. */
+export function contentsTagPath(cylinderId: string, stock: LabelStockId, start: number, printer: LabelPrinter): string {
+  return pathWith(`/api/cylinders/${cylinderId}/contents-tag.pdf`, { ...asked(stock, printer), start: start === 1 ? null : start })
 }
 
 /** Where the test page for a stock and a printer is. */

@@ -4,8 +4,9 @@ import { fullText } from './fullText'
 import type { IdentityLabelContent } from './identityContent'
 import { moduleSize, type ModuleSize } from './moduleSize'
 import { mediumText, smallText } from './rowText'
+import { placedSymbol } from './placedSymbol'
 import type { LabelStock } from './stock'
-import { labelSymbol, symbolPath } from './symbol'
+import { labelSymbol } from './symbol'
 
 /** A label that names a cylinder. */
 export interface IdentityLabel extends LabelDrawing {
@@ -40,21 +41,4 @@ export function identityLabel(content: IdentityLabelContent, fitting: Fitting): 
   const { form, symbol, text } = arrangement(fitting.stock.label)
   const words = form === 'full' ? fullText(content, text) : form === 'medium' ? mediumText(content, text) : smallText(content, text)
   return { code: content.code, width, height, strokes: [], ...words, qr: placedSymbol(content.payload, symbol, fitting) }
-}
-
-/** The symbol in the middle of its place. */
-function placedSymbol(payload: string, middle: { x: number, y: number }, fitting: Fitting): LabelQr {
-  const size = symbolFit(payload, fitting)
-  if (!('moduleMm' in size)) throw new RangeError(`No symbol of this address fits ${fitting.stock.id}: ${size.is}`)
-  const symbol = labelSymbol(payload)
-  return {
-    payload,
-    version: symbol.version,
-    level: symbol.level,
-    modules: symbol.size,
-    moduleMm: size.moduleMm,
-    x: middle.x - size.sideMm / 2,
-    y: middle.y - size.sideMm / 2,
-    path: symbolPath(symbol),
-  }
 }

@@ -129,6 +129,11 @@ export function isRoll(stock: LabelStock): boolean {
   return labelsPerPage(stock) === 1
 }
 
+/** Whether a contents tag fits the labels of a stock: 4 x 2 in, or what A4 has in its place. */
+export function takesTag({ label }: LabelStock): boolean {
+  return label.width >= 99 && label.height >= 50
+}
+
 /** How many labels one page of the stock holds. */
 export function labelsPerPage(stock: LabelStock): number {
   return stock.grid.columns * stock.grid.rows

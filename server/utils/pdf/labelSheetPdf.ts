@@ -11,14 +11,14 @@ const POINTS_PER_MM = 72 / 25.4
  * Shape: `compress: false` leaves the drawing readable in the file.
  * Errors: RangeError for a sheet without a label, of which there is no page to print.
  */
-export function labelSheetPdf(sheet: LabelSheet, fonts: LabelFonts, options: { compress?: boolean } = {}): Promise<Buffer> {
+export function labelSheetPdf(sheet: LabelSheet, fonts: LabelFonts, options: { compress?: boolean, title?: string } = {}): Promise<Buffer> {
   if (sheet.pages.length === 0) throw new RangeError('A sheet without a label')
   const document = new PDFDocument({
     autoFirstPage: false,
     compress: options.compress ?? true,
     // Without a face here the document begins with a built-in one, whose measures it looks for on the disk.
     font: fonts.words as unknown as string,
-    info: { Title: 'Cylinder labels', Creator: 'Collarbook', Producer: 'Collarbook' },
+    info: { Title: options.title ?? 'Cylinder labels', Creator: 'Collarbook', Producer: 'Collarbook' },
   })
   for (const face of Object.keys(fonts) as LabelFace[]) document.registerFont(face, fonts[face])
 
