@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { Firm, FirmsAnswer, Place, PlacesAnswer } from '../../utils/contract/places'
+import type { Firm, FirmsAnswer, Place, PlacesAnswer, StandingAnswer } from '../../utils/contract/places'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import { eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
 import { startServer, type TestServer } from '../helpers/server'
@@ -35,6 +35,28 @@ describe('places', () => {
     expect((await firm.admin.client.patch<Place>(`/api/places/${van.id}`, { active: false })).body.active).toBe(false)
     const { body } = await firm.technician.client.get<PlacesAnswer>('/api/places?active=true')
     expect(body.items.map(one => one.id)).not.toContain(van.id)
+  })
+
+  it('are not closed while a place in use is inside them', async () => {
+    const { client } = firm.admin
+    const yard = await made<Place>(client, '/api/places', { name: 'Far yard', kind: 'shop' })
+    const shed = await made<Place>(client, '/api/places', { name: 'Shed', kind: 'rack', parentId: yard.id })
+    expect((await client.patch<ProblemDetails>(`/api/places/${yard.id}`, { active: false })).body).toMatchObject({ status: 409, title: 'Another place is inside it' })
+    await client.patch(`/api/places/${shed.id}`, { active: false })
+    expect((await client.patch<Place>(`/api/places/${yard.id}`, { active: false })).body.active).toBe(false)
+  })
+
+  it('say what stands in each of them, by refrigerant and by gross', async () => {
+    const rack = await made<Place>(firm.admin.client, '/api/places', { name: 'Rack S', kind: 'rack', parentId: firm.shop.id })
+    // 40 lb are 18,144 g, and the empty one weighs its tare of 27.5 lb, 12,474 g.
+    const full = await registered(firm)
+    const empty = await registered(firm, { contents: 'evacuated' })
+    for (const each of [full, empty]) await posted(firm.technician.client, [{ ...eventOf(each.id, 'moved'), details: { toPlaceId: rack.id } }])
+    const { body } = await firm.technician.client.get<StandingAnswer>('/api/places/standing')
+    expect(body.items.find(({ placeId }) => placeId === rack.id)).toEqual({
+      placeId: rack.id, cylinders: 2, withoutWeight: 0, grossGrams: 30_618,
+      refrigerants: [{ refrigerant: 'R-22', cylinders: 1 }, { refrigerant: 'none', cylinders: 1 }],
+    })
   })
 
   it('are known to events from the moment they are made', async () => {

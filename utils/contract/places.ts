@@ -14,7 +14,7 @@ export const placeBody = z.strictObject({
   technicianId: id.nullish(),
 })
 export type NewPlace = z.output<typeof placeBody>
-/** PATCH /api/places/{id}. 409 for turning off a place where cylinders stand, and for a firm's own place. */
+/** PATCH /api/places/{id}. 409 for closing a place where cylinders stand or that has one in use inside it, and for a firm's own place. */
 export const placeChange = z.strictObject({
   name: line(80).optional(),
   parentId: id.nullish(),
@@ -28,6 +28,19 @@ export const placesQuery = z.strictObject({ active: z.enum(['true', 'false']).op
 export const firmsQuery = z.strictObject({ active: z.enum(['true', 'false']).optional(), kind: z.enum(FIRM_KINDS).optional() })
 
 export type PlacesAnswer = Page<Place>
+
+/** What stands in one place itself, without what stands in the places inside it. */
+export interface Standing {
+  placeId: string
+  cylinders: number
+  /** Of the cylinders whose gross is known. */
+  grossGrams: number
+  withoutWeight: number
+  /** By refrigerant; 'none' where nothing is in a cylinder, null where it is not known what is. */
+  refrigerants: { refrigerant: string | null, cylinders: number }[]
+}
+/** GET /api/places/standing: every place in which cylinders stand. */
+export interface StandingAnswer { items: Standing[] }
 export type FirmsAnswer = Page<Firm>
 
 export interface Place {

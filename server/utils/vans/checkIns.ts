@@ -1,0 +1,33 @@
+import { desc, eq } from 'drizzle-orm'
+import { vanCheckIns } from '../../../drizzle/schema'
+import type { NewVanCheckIn, ToLookFor } from '../../../utils/contract/vans'
+import { cylinderRowsWhere } from '../custody/fleet'
+import { statement, type Database } from '../database/database'
+import { namesOf, type Directory } from '../directory/directory'
+
+type CheckIn = typeof vanCheckIns.$inferSelect
+
+/** The last check-in of a van; null where there was none. */
+export async function lastCheckIn(db: Database, vanId: string): Promise<CheckIn | null> {
+  const [row] = await db.read.select().from(vanCheckIns).where(eq(vanCheckIns.vanId, vanId))
+    .orderBy(desc(vanCheckIns.checkedAt), desc(vanCheckIns.id)).limit(1)
+  return row ?? null
+}
+
+/** Keeps what a van came back with; under the same id once. */
+export async function keepCheckIn(db: Database, vanId: string, body: NewVanCheckIn, personId: string, now: number): Promise<void> {
+  const row = { ...body, vanId, checkedBy: personId, checkedAt: now }
+  await db.write([statement(db.read.insert(vanCheckIns).values(row).onConflictDoNothing())])
+}
+
+/** The cylinders that a check-in missed and that nobody has seen since. */
+export async function toLookFor(db: Database, checkIn: CheckIn | null, from: Directory, now: number): Promise<ToLookFor[]> {
+  if (!checkIn?.missing.length) return []
+  const { missing, checkedAt, checkedBy } = checkIn
+  const unseen = {
+    sql: `c.id IN (${missing.map(() => '?').join(', ')}) AND (c.last_seen_at IS NULL OR c.last_seen_at <= ?) AND c.lifecycle <> 'retired'`,
+    args: [...missing, checkedAt],
+  }
+  const rows = await cylinderRowsWhere(db, unseen, missing.length, now)
+  return rows.map(cylinder => ({ cylinder, checkedBy: namesOf(from).person(checkedBy), checkedAt: new Date(checkedAt).toISOString() }))
+}
