@@ -1,6 +1,7 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { FORM_KINDS } from '../../utils/custody/draft/formKinds'
+import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser, listenForErrors } from '../helpers/browser'
 import { demoFleet, type DemoFleet } from '../helpers/demoFleet'
 import { seriousOn, sidewaysScroll, targetsLowerThan } from '../helpers/pageChecks'
@@ -30,6 +31,11 @@ const [technician, manager, admin, auditor, warehouse] = ['technician', 'manager
 /** Every page by its file: who would open it, and where it has states that differ, each of them. */
 const SCREENS: Record<string, Screen[]> = {
   'account.vue': [{ as: technician, at: () => '/account' }],
+  'batch.vue': [
+    { as: technician, at: () => '/batch' },
+    { as: warehouse, at: () => '/batch?act=unload' },
+    { as: 'trainee', at: () => '/batch?act=move' },
+  ],
   'c/[ref]/index.vue': [
     { as: 'nobody', at: demo => `/c/${demo.codes.usual}` },
     { as: technician, at: demo => `/c/${demo.codes.usual}` },
@@ -136,6 +142,18 @@ const PRESSED: Record<string, Screen> = {
   'a known label that was typed': { as: technician, at: () => '/scan', after: (page, demo) => typed(page, demo.codes.usual) },
   'a label with a stop': { as: technician, at: () => '/scan', after: (page, demo) => typed(page, demo.codes.overfilled) },
   'a label on no cylinder': { as: technician, at: () => '/scan', answers: 404, after: (page, demo) => typed(page, demo.codes.onNone) },
+  'a code that does not fit': { as: technician, at: () => '/scan', after: async (page) => {
+    await page.getByLabel('Nine characters of the label').fill('7K3M9Q2TW')
+    await page.getByText('The ninth character does not fit').waitFor()
+  } },
+  'a list with a cylinder, an overfilled one and a label on none': { as: technician, at: () => '/batch?act=load', answers: 404, after: async (page, demo) => {
+    await page.getByLabel('Van', { exact: true }).selectOption({ index: 1 })
+    for (const code of [demo.codes.usual, demo.codes.onNone, demo.codes.overfilled]) {
+      await page.getByLabel('Nine characters of the label').fill(code)
+      await page.getByRole('button', { name: `Take ${formatLabelCode(code.toUpperCase())} off the list` }).waitFor()
+    }
+    await page.getByText(/^Not this cylinder/).first().waitFor()
+  } },
   'how the stop weight is worked out': { as: technician, at: demo => `/c/${demo.codes.usual}`, after: async (page) => {
     for (const summary of await page.locator('summary').all()) await summary.click()
   } },
@@ -169,7 +187,7 @@ const PRESSED: Record<string, Screen> = {
 
 /** Without a camera the scan screen asks for the code by keys. */
 async function typed(page: Page, code: string): Promise<void> {
-  await page.getByLabel('The label, or the last characters of the stamp').fill(code)
+  await page.getByLabel('Nine characters of the label').fill(code)
   await page.getByRole('region', { name: /^(Cylinder|On no cylinder)/ }).or(page.getByText('A label on no cylinder')).first().waitFor()
 }
 
