@@ -89,6 +89,12 @@ describe('printing labels', () => {
     expect((usual.right - usual.left) / 72 * 25.4).toBeGreaterThan(21.336)
   })
 
+  it('begins a new roll with a label that says what to mind', async () => {
+    const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
+    const { pages } = await printed(firm.warehouse, `codes=${codes[0]}&stock=roll-2x1&advice=1`)
+    expect(pages.map(page => symbolsOf(page).length)).toEqual([0, 1, 1])
+  })
+
   it('prints none that would not be read round a cylinder that narrow', async () => {
     const { codes } = await made<MintAnswer>(firm.warehouse.client, '/api/labels', { count: 1 })
     const { status, body } = await firm.warehouse.client.get<ProblemDetails>(`/api/labels.pdf?codes=${codes[0]}&diameter=60`)

@@ -63,6 +63,8 @@ export const labelsQuery = z.strictObject({
   start,
   /** Of the cylinders, in millimetres; left out for a flat place. */
   diameter: z.coerce.number().min(LEAST_DIAMETER_MM).max(MOST_DIAMETER_MM).optional(),
+  /** Whether a label before the first says what to mind before one is stuck on. */
+  advice: z.literal('1').optional(),
 }).superRefine(isPrintable).superRefine(beginsOnPage)
 export type LabelsQuery = z.output<typeof labelsQuery>
 
@@ -80,12 +82,14 @@ export interface PrintSetting {
   start: number
   printer: LabelPrinter
   diameterMm: number | null
+  /** Whether a label before the first says what to mind before one is stuck on. */
+  withAdvice: boolean
 }
 
 /** Where the labels of these codes are to be had as a PDF. */
-export function labelsPdfPath(codes: readonly string[], { stock, start, printer, diameterMm }: PrintSetting): string {
+export function labelsPdfPath(codes: readonly string[], { stock, start, printer, diameterMm, withAdvice }: PrintSetting): string {
   return pathWith('/api/labels.pdf', {
-    codes: codes.join(','), ...asked(stock, printer), start: start === 1 ? null : start, diameter: diameterMm,
+    codes: codes.join(','), ...asked(stock, printer), start: start === 1 ? null : start, diameter: diameterMm, advice: withAdvice ? '1' : null,
   })
 }
 

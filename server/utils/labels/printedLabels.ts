@@ -1,5 +1,7 @@
 import { printerOf, type LabelsQuery } from '~~/utils/contract/labels'
+import { adviceLabel } from '~~/utils/document/adviceLabel'
 import { formatLabelCode, labelUrl } from '~~/utils/label/code'
+import type { LabelDrawing } from '~~/utils/label/drawing'
 import type { LabelledStamp } from '~~/utils/label/identityContent'
 import { identityLabel, symbolFit } from '~~/utils/label/identityLabel'
 import { sheet } from '~~/utils/label/sheet'
@@ -41,7 +43,8 @@ export async function printedLabels(db: Database, query: LabelsQuery, publicUrl:
     copy,
     stamp: stamps.get(code) ?? null,
   }, fitting)))
-  return labelSheetPdf(sheet(labels, stock, query.start, printer), await labelFonts())
+  const printed = query.advice ? [adviceLabel(stock), ...labels] : labels
+  return labelSheetPdf(sheet<LabelDrawing>(printed, stock, query.start, printer), await labelFonts())
 }
 
 /** The collar of the cylinder that has each code; null for a code that is on none yet. */
