@@ -1,5 +1,6 @@
 import type { FleetQuery } from '../contract/custody'
-import { CONDITION_WORDS, LIFECYCLE_WORDS } from '../custody/words'
+import type { FindingCode } from '../custody/finding'
+import { CONDITION_WORDS, FINDING_WORDS, LIFECYCLE_WORDS } from '../custody/words'
 import { addMonths, formatMonth } from '../quantity/month'
 import { FLEET_FILTERS, type FleetFilter } from './fleetAddress'
 
@@ -17,11 +18,16 @@ const FINDING_FILTER_WORDS: Record<string, string> = {
   'retest-soon': 'soon due for its retest',
 }
 
+type Named = { id: string, name: string }
+
+/** Who and what a filter may name by its id. */
+export interface FilterNames { places: readonly Named[], people: readonly Named[], firms: readonly Named[] }
+
 /** The filters of a fleet question, each in words. */
-export function filtersInWords(query: FleetQuery, places: readonly { id: string, name: string }[]): FilterWords[] {
+export function filtersInWords(query: FleetQuery, names: FilterNames): FilterWords[] {
   return FLEET_FILTERS.flatMap((key) => {
     const value = query[key]
-    return value === undefined ? [] : [{ key, words: words(key, value, places) }]
+    return value === undefined ? [] : [{ key, words: words(key, value, names) }]
   })
 }
 
@@ -30,17 +36,18 @@ export function withoutFilter(key: FleetFilter): Partial<Record<FleetFilter, nul
   return { [key]: null }
 }
 
-function words(key: FleetFilter, value: string, places: readonly { id: string, name: string }[]): string {
+function words(key: FleetFilter, value: string, { places, people, firms }: FilterNames): string {
+  const nameOf = (list: readonly Named[]) => list.find(one => one.id === value)?.name
   switch (key) {
     case 'q': return `found by “${value}”`
-    case 'place': return `at ${places.find(place => place.id === value)?.name ?? 'that place'}`
-    case 'holder': return 'with that person'
+    case 'place': return `at ${nameOf(places) ?? 'that place'}`
+    case 'holder': return `with ${nameOf(people) ?? 'that person'}`
     case 'refrigerant': return `with ${value} in it`
     case 'condition': return `of condition ${CONDITION_WORDS[value as keyof typeof CONDITION_WORDS]}`
     case 'lifecycle': return LIFECYCLE_WORDS[value as keyof typeof LIFECYCLE_WORDS]
     case 'dueBefore': return `due by the end of ${formatMonth(addMonths(value, -1))}`
-    case 'finding': return FINDING_FILTER_WORDS[value] ?? `marked ${value.replaceAll('-', ' ')}`
-    case 'owner': return 'of that owner'
+    case 'finding': return FINDING_FILTER_WORDS[value] ?? `marked “${FINDING_WORDS[value as FindingCode] ?? value}”`
+    case 'owner': return `owned by ${nameOf(firms) ?? 'that owner'}`
     case 'label': return `labelled ${value}`
   }
 }

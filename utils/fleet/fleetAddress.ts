@@ -36,3 +36,10 @@ export function changeFleetAddress(address: AddressQuery, change: Partial<Record
 export function fleetRequest(query: FleetQuery): Record<string, string | number> {
   return Object.fromEntries(Object.entries(query).filter((part): part is [string, string | number] => part[1] !== undefined))
 }
+
+/** Whether two addresses ask for the same filters in the same order. */
+export function isSameAddress(one: AddressQuery, other: AddressQuery): boolean {
+  const [first, second] = [changeFleetAddress(one, {}), changeFleetAddress(other, {})]
+  const keys = Object.keys(first)
+  return keys.length === Object.keys(second).length && keys.every(key => first[key] === second[key])
+}

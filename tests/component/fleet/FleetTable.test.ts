@@ -1,6 +1,7 @@
 import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
 import FleetTable from '~~/components/fleet/FleetTable.vue'
+import { FIRST_LAYOUT } from '~~/utils/contract/fleetViews'
 import type { CylinderRow } from '~~/utils/custody/cylinderView'
 import { cylinderRow } from '../../helpers/cylinderRow'
 import { allByRole, byRole } from '../../helpers/roles'
@@ -19,7 +20,7 @@ const UNKNOWN = cylinderRow({
 function mount(rows: CylinderRow[], change: Record<string, unknown> = {}) {
   return mountSuspended(FleetTable, {
     props: {
-      rows, unit: 'lb', now: NOW, timeZone: 'America/Phoenix', sort: { key: 'urgency', descending: false },
+      rows, columns: FIRST_LAYOUT.columns, density: 'compact', unit: 'lb', now: NOW, timeZone: 'America/Phoenix', sort: { key: 'urgency', descending: false },
       linkOf: (row: CylinderRow) => `/?page=${row.id}`, stepLinkOf: (row: CylinderRow) => `/?step=${row.id}`, ...change,
     },
   })
@@ -85,5 +86,30 @@ describe('the fleet', () => {
     await wrapper.find('table input[aria-label="Choose all on this page"]').setValue(true)
     expect(wrapper.emitted('update:picked')!.at(-1)).toEqual([['over', 'unknown']])
     expect(table).toBeTruthy()
+  })
+
+  it('chooses with the space bar on a code, and opens with Enter on a box', async () => {
+    const wrapper = await mount([OVERFILLED], { picked: [] })
+    const link = byRole(wrapper.element, 'rowheader', '0YH P9K RRT').querySelector('a')!
+    const space = new KeyboardEvent('keydown', { key: ' ', cancelable: true, bubbles: true })
+    link.dispatchEvent(space)
+    expect(space.defaultPrevented).toBe(true)
+    expect(wrapper.emitted('update:picked')).toEqual([[['over']]])
+    await wrapper.find('table input[aria-label="Choose 0YH P9K RRT"]').trigger('keydown', { key: 'Enter' })
+    expect(wrapper.emitted('open')!.map(([row]) => (row as CylinderRow).id)).toEqual(['over'])
+  })
+
+  it('keeps what was chosen on another page', async () => {
+    const wrapper = await mount([OVERFILLED], { picked: ['elsewhere'] })
+    await wrapper.find('table input[aria-label="Choose all on this page"]').setValue(true)
+    expect(wrapper.emitted('update:picked')).toEqual([[['elsewhere', 'over']]])
+  })
+
+  it('shows the columns that were asked for, in their order, and what to do behind them', async () => {
+    const wrapper = await mount([cylinderRow()], { columns: ['code', 'verdict', 'tare', 'lifecycle', 'serial'] })
+    const heads = allByRole(wrapper.element, 'columnheader').map(head => head.textContent!.trim())
+    expect(heads.slice(1)).toEqual(['Code', 'Verdict', 'TW, lb', 'Stage of life', 'Serial', 'Next step'])
+    // 12474 g are 27.50 lb.
+    expect(cellsOf(wrapper.element, '7K3 M9Q 2TX').slice(1)).toEqual(['7K3 M9Q 2TX', 'Usable', '27.5', 'in service', 'K48213', 'Fill it'])
   })
 })
