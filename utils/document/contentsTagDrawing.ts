@@ -3,7 +3,7 @@ import type { LabelBox, LabelDrawing, LabelRule, LabelText } from '../label/draw
 import { placedSymbol } from '../label/placedSymbol'
 import { takesTag, type LabelStock } from '../label/stock'
 import type { ContentsTag } from './contentsTag'
-import { fittedLines } from './wrappedText'
+import { fittedLines, LINE_SPACING } from './wrappedText'
 
 /** What is drawn: the tag, where its symbol leads, and the day of the fill as it is written. */
 export interface DrawnTag { tag: ContentsTag, payload: string, day: string }
@@ -71,7 +71,7 @@ function tagText(tag: ContentsTag, day: string, box: LabelBox): { texts: LabelTe
     { ...line, text: tag.refrigerant, face: 'figures-bold', size: head, y: headY, maxWidth: isLow && tag.kind ? width * 0.6 : width },
     ...(tag.kind ? [isLow ? { ...line, text: tag.kind, size: small * 1.1, x: right, y: kindY, align: 'right' as const, maxWidth: width * 0.38 } : { ...line, text: tag.kind, size: small * 1.1, y: kindY }] : []),
     { ...line, text: tag.entry.un ?? 'UN', face: 'figures-bold', size: number, y: numberY },
-    ...lines.map((text, index) => ({ ...line, text, size, y: nameTop + size * (0.8 + 1.15 * index) })),
+    ...lines.map((text, index) => ({ ...line, text, size, y: nameTop + size * (0.8 + LINE_SPACING * index) })),
     { ...line, text: tag.net === null ? 'Net, not weighed:' : `Net ${tag.net}`, face: 'figures-bold', size: small, y: netY },
     { ...line, text: `${day}  ${tag.technician}`, face: 'words', size: small, y: dayY },
   ]

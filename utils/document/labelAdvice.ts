@@ -6,7 +6,7 @@
  */
 export const LABEL_ADVICE: readonly string[] = [
   'Dry and free of oil: wipe the place with isopropyl alcohol and let it dry.',
-  'At least 50 °F is best, and not under 40 °F. A frosted cylinder waits until the next day.',
+  'At least 50\u00A0°F is best, and not under 40\u00A0°F. A frosted cylinder waits until the next day.',
   'One on the collar or guard, one on the upper body; never over the stamp, a relief device or under a strap.',
   'Press it down all over. It holds fully after about a day.',
 ]
