@@ -189,12 +189,16 @@ export function useBatch(key: string, plan: () => BatchPlan) {
     }
   }
 
-  function startOver() {
+  /** Empties the list; gives the way to have it back. */
+  function startOver(): () => void {
+    const before = scans.value
     scans.value = []
-    recordedIds.value = []
     pendingRef.value = null
     problem.value = null
     last = { ref: '', at: 0 }
+    return () => {
+      scans.value = [...scans.value, ...before]
+    }
   }
 
   onMounted(async () => {

@@ -1,7 +1,7 @@
 import type { CylinderView } from '../custody/cylinderView'
 import type { CustodyEvent } from '../custody/event'
 import type { ProblemDetails } from '../contract/problem'
-import { formatLabelCode } from '../label/code'
+import { formatLabelCode, isLabelCode } from '../label/code'
 import type { MassUnit } from '../quantity/mass'
 import { batchVerdict, type BatchQuestion, type BatchVerdict } from './batchVerdict'
 
@@ -39,7 +39,7 @@ export interface BatchLine extends BatchScan {
 /** A scan as a line of the list, judged anew whenever what it is judged against changes. */
 export function batchLine(scan: BatchScan, question: Omit<BatchQuestion, 'keepReason' | 'isChosen'>, unit: MassUnit): BatchLine {
   const { found, keepReason, isChosen } = scan
-  if (found.is !== 'known') return { ...scan, name: formatLabelCode(scan.ref), verdict: null }
+  if (found.is !== 'known') return { ...scan, name: isLabelCode(scan.ref) ? formatLabelCode(scan.ref) : 'A cylinder', verdict: null }
   const { labelCode, stamp } = found.view
   return {
     ...scan,
