@@ -1,7 +1,7 @@
 import type { RouteLocationRaw } from 'vue-router'
 import { useDeskFrame } from '~~/composables/useDeskFrame'
 import { useSessionStore } from '~~/stores/session'
-import { firstScreenFor } from '~~/utils/access/navigation'
+import { worksAtDesk } from '~~/utils/access/navigation'
 
 /**
  * The frame of a page that desk and field share: at the desk its navigation, in the field the page's title and a way back.
@@ -10,7 +10,7 @@ import { firstScreenFor } from '~~/utils/access/navigation'
  */
 export function useRoleFrame(title: string | (() => string), back?: () => RouteLocationRaw | null) {
   const session = useSessionStore()
-  const isDesk = computed(() => firstScreenFor(session.access) === '/fleet')
+  const isDesk = computed(() => worksAtDesk(session.access))
   const desk = useDeskFrame(title)
   const frame = computed(() => isDesk.value
     ? { name: 'desk' as const, ...desk.value }

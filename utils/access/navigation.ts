@@ -25,13 +25,14 @@ export function navigationFor(access: Access | null): NavigationItem[] {
   return ITEMS.filter(item => can(access, item.permission)).map(({ label, to }) => ({ label, to }))
 }
 
-/**
- * Where a person begins: a technician at the scan, whoever works at the desk at the fleet, a signed-out person at sign-in.
- *
- * A person who is a technician and something else begins at the desk.
- */
+/** Whether a person works at the desk: a technician who is nothing else works in the field. */
+export function worksAtDesk(access: Access | null): boolean {
+  if (!access) return false
+  return !access.roles.includes('technician') || access.roles.some(role => DESK_ROLES.includes(role))
+}
+
+/** Where a person begins: a technician at the scan, whoever works at the desk at the fleet, a signed-out person at sign-in. */
 export function firstScreenFor(access: Access | null): string {
   if (!access) return '/sign-in'
-  const isTechnician = access.roles.includes('technician')
-  return isTechnician && !access.roles.some(role => DESK_ROLES.includes(role)) ? '/scan' : '/fleet'
+  return worksAtDesk(access) ? '/fleet' : '/scan'
 }

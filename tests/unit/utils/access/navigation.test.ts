@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { Role } from '../../../../utils/access/roles'
-import { firstScreenFor, navigationFor } from '../../../../utils/access/navigation'
+import { firstScreenFor, navigationFor, worksAtDesk } from '../../../../utils/access/navigation'
 
 const access = (...roles: Role[]) => ({ personId: 'p', roles, trainee: false })
 const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => item.label)
@@ -27,5 +27,14 @@ describe('where a person begins', () => {
     expect(firstScreenFor(access('auditor'))).toBe('/fleet')
     expect(firstScreenFor(access('technician', 'manager'))).toBe('/fleet')
     expect(firstScreenFor(null)).toBe('/sign-in')
+  })
+})
+
+describe('who works at the desk', () => {
+  it('is everybody but a technician who is nothing else', () => {
+    expect(worksAtDesk(access('technician'))).toBe(false)
+    expect(worksAtDesk(access('technician', 'manager'))).toBe(true)
+    expect(worksAtDesk(access('auditor'))).toBe(true)
+    expect(worksAtDesk(null)).toBe(false)
   })
 })
