@@ -7,6 +7,9 @@ export const MATERIALS_OF_TRADE = {
   source: '49 CFR 173.6',
 } as const
 
+/** From this gross on a vehicle with gases of divisions 2.1 and 2.2 is placarded. Units: grams. Source: 49 CFR 172.504(c). */
+export const PLACARD_FROM_GRAMS = exactGrams({ unit: 'lb', value: 1001 })
+
 /** A cylinder aboard, as far as it is known. */
 export interface Aboard { tareWeightGrams: number | null, netGrams: number | null }
 
@@ -17,18 +20,27 @@ export interface VanLoad {
   withoutWeight: number
   /** Cylinders that are above the limit of one. */
   tooHeavy: number
+  /** What else is carried; null where nobody has said. */
+  otherGrams: number | null
+  /** All that is known: cylinders and what else is carried. */
+  allGrams: number
   /** What may still come aboard; negative when it is too much. */
   leftGrams: number
   isOver: boolean
 }
 
-/** Adds up the gross weight aboard. Cylinders without a known gross are counted, never taken as nothing. */
-export function vanLoad(cylinders: readonly Aboard[]): VanLoad {
+/**
+ * Adds up the gross weight aboard; the limit is over all materials of trade together, cylinders or not.
+ *
+ * Cylinders without a known gross are counted, never taken as nothing; so is what nobody has said of the rest.
+ */
+export function vanLoad(cylinders: readonly Aboard[], otherGrams: number | null = null): VanLoad {
   const known = cylinders.map(grossGrams).filter(gross => gross !== null)
   const knownGrossGrams = known.reduce((sum, gross) => sum + gross, 0)
   const tooHeavy = known.filter(gross => gross > MATERIALS_OF_TRADE.eachGrams).length
-  const leftGrams = MATERIALS_OF_TRADE.togetherGrams - knownGrossGrams
-  return { knownGrossGrams, withoutWeight: cylinders.length - known.length, tooHeavy, leftGrams, isOver: leftGrams < 0 }
+  const allGrams = knownGrossGrams + (otherGrams ?? 0)
+  const leftGrams = MATERIALS_OF_TRADE.togetherGrams - allGrams
+  return { knownGrossGrams, withoutWeight: cylinders.length - known.length, tooHeavy, otherGrams, allGrams, leftGrams, isOver: leftGrams < 0 }
 }
 
 /** What the scale would show; null where tare or contents are not known. */

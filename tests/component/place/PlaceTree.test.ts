@@ -15,7 +15,7 @@ async function tree(mayManage = true) {
   ]
   const standing = [{ placeId: 'Bay 1', cylinders: 2, grossGrams: 60_000, withoutWeight: 1, refrigerants: [{ refrigerant: 'R-22', cylinders: 2 }] }]
   const wrapper = await mountSuspended(PlaceTree, { props: { branches: placeBranches(places, standing), unit: 'lb', mayManage }, attachTo: document.body })
-  return { wrapper, root: wrapper.element }
+  return { wrapper, root: wrapper.element as HTMLElement }
 }
 
 describe('the places on the screen', () => {

@@ -21,3 +21,15 @@ describe('the load of a van against the materials of trade of 49 CFR 173.6', () 
     expect(load.withoutWeight).toBe(2)
   })
 })
+
+describe('what else is carried', () => {
+  it('shares the 440 lb with the cylinders: 30,000 g of torch gas leave 169,580 g for them', () => {
+    expect(vanLoad([aboard(100_000, 69_580)], 30_000)).toMatchObject({ knownGrossGrams: 169_580, allGrams: 199_580, isOver: false })
+    expect(vanLoad([aboard(100_000, 69_581)], 30_000)).toMatchObject({ allGrams: 199_581, isOver: true })
+  })
+
+  it('is nothing only where somebody has said so', () => {
+    expect(vanLoad([]).otherGrams).toBeNull()
+    expect(vanLoad([], 0).otherGrams).toBe(0)
+  })
+})
