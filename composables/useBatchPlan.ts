@@ -5,11 +5,11 @@ import { useSessionStore } from '~~/stores/session'
 import { supervisorsFor } from '~~/utils/access/supervisors'
 import { batchActOf, type BatchAct } from '~~/utils/batch/batchAct'
 import type { ExpectedCylinder } from '~~/utils/batch/missing'
-import type { CylinderView, FleetAnswer } from '~~/utils/contract/custody'
+import type { CylinderRow, CylinderView, FleetAnswer } from '~~/utils/contract/custody'
 import type { PeopleAnswer } from '~~/utils/contract/people'
 import type { PlacesAnswer } from '~~/utils/contract/places'
 
-const MOST_AT_A_PLACE = 200
+const MOST_AT_ONCE = 200
 
 /**
  * What a batch is for, as its address says: `act`, the `van` that is loaded or unloaded, where `to`, and against what:
@@ -76,8 +76,16 @@ export function useBatchPlan() {
     void navigateTo({ query: { ...route.query, ...changes } }, { replace: true })
   }
 
-  async function standingAt(place: string) {
-    return (await api.get<FleetAnswer>('/api/cylinders', { place, limit: MOST_AT_A_PLACE })).items
+  /** All that stands at a place: of a list cut short the rest would be called strangers. */
+  async function standingAt(place: string): Promise<CylinderRow[]> {
+    const all: CylinderRow[] = []
+    let cursor: string | null = null
+    do {
+      const answer: FleetAnswer = await api.get<FleetAnswer>('/api/cylinders', { place, limit: MOST_AT_ONCE, cursor: cursor ?? undefined })
+      all.push(...answer.items)
+      cursor = answer.nextCursor
+    } while (cursor !== null)
+    return all
   }
 
   async function askedFor(reference: string): Promise<ExpectedCylinder> {
