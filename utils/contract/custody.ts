@@ -3,10 +3,8 @@ import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView
 import type { AnyRecordedEvent } from '../custody/event'
 import type { ProblemDetails } from './problem'
 import { fleetColumns } from './fleetViews'
+import { MOST_EVENTS } from './mostEvents'
 import { id, page, type Page } from './parts'
-
-/** Most events in one request. */
-export const MOST_EVENTS = 200
 
 /** The envelope of POST /api/events. Each event in it is parsed on its own, so that a bad one refuses only itself. */
 export const eventsBody = z.strictObject({
