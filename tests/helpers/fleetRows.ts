@@ -1,4 +1,7 @@
 import type { InStatement, InValue } from '@libsql/client'
+import { openDatabase } from '../../server/utils/database/database'
+import { rulesInForceKey } from '../../server/utils/directory/datedRules'
+import { directory } from '../../server/utils/directory/directory'
 import { drawLabelCode } from '../../utils/label/code'
 import type { Lifecycle } from '../../utils/custody/cylinderView'
 
@@ -95,4 +98,17 @@ function scattered(number: number): number {
 function monthFrom(nowMs: number, months: number): string {
   const day = new Date(nowMs)
   return new Date(Date.UTC(day.getUTCFullYear(), day.getUTCMonth() + months, 1)).toISOString().slice(0, 7)
+}
+
+/** Puts a made fleet into the database of a server that runs, among its own places and people. */
+export async function fillFleet(databaseFile: string, count: number, setting: Omit<FleetSetting, 'ruledBy' | 'nowMs'>): Promise<void> {
+  const db = await openDatabase(`file:${databaseFile}`)
+  try {
+    const nowMs = Date.now()
+    const ruledBy = rulesInForceKey(await directory(db), nowMs)
+    for (const statement of fleetRows(count, { ...setting, ruledBy, nowMs })) await db.write([statement])
+  }
+  finally {
+    db.close()
+  }
 }
