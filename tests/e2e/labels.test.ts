@@ -5,6 +5,7 @@ import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser, listenForErrors } from '../helpers/browser'
 import type { Member } from '../helpers/firm'
 import { cylinderNow, made, openShop, registered, type Shop } from '../helpers/fleet'
+import { handScanner } from '../helpers/handScanner'
 import { startServer, type TestServer } from '../helpers/server'
 
 let server: TestServer
@@ -50,13 +51,11 @@ describe('labels from the printer to the cylinder', () => {
     await page.getByRole('heading', { name: 'Scan one back' }).waitFor()
 
     const other = await blankCode()
-    await page.getByRole('heading', { name: 'Labels' }).first().click()
-    await page.keyboard.type(`${server.baseUrl.toUpperCase()}/C/${other}`, { delay: 8 })
-    await page.keyboard.press('Enter')
+    const scanner = await handScanner(page)
+    await scanner.scan(`${server.baseUrl.toUpperCase()}/C/${other}`, { enter: true })
     await page.getByText(`${formatLabelCode(other)} is none of those just printed.`).waitFor()
 
-    await page.keyboard.type(`${server.baseUrl.toUpperCase()}/C/${first!.replaceAll(' ', '')}`, { delay: 8 })
-    await page.keyboard.press('Enter')
+    await scanner.scan(`${server.baseUrl.toUpperCase()}/C/${first!.replaceAll(' ', '')}`, { enter: true })
     await page.getByText('It came back: the print is good').waitFor()
     await page.context().close()
   })
