@@ -10,7 +10,7 @@ type Kept = 'tab' | 'device'
  * Shape: `key` names the form; `restored` is what was kept from before, once the page stands in the browser.
  */
 export function useKept<T extends object>(key: string, where: Kept = 'tab') {
-  const storageKey = `collarbook-form ${useSessionStore().user?.id ?? ''} ${key}`
+  const storageKey = keptPrefix(useSessionStore().user?.id) + key
   const restored = shallowRef<T | null>(null)
 
   onMounted(() => {
@@ -28,6 +28,11 @@ export function useKept<T extends object>(key: string, where: Kept = 'tab') {
   }
 
   return { restored, keep, forget }
+}
+
+/** What the names of all that is kept for a person begin with. */
+export function keptPrefix(personId: string | undefined): string {
+  return `collarbook-form ${personId ?? ''} `
 }
 
 function storageOf(where: Kept): Storage {

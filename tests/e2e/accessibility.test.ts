@@ -55,6 +55,11 @@ const SCREENS: Record<string, Screen[]> = {
     ...(['usual', 'empty', 'overfilled', 'onTwo'] as const).map(code => ({ as: technician, at: (demo: DemoFleet) => `/c/${demo.codes[code]}/working` })),
     { as: manager, at: demo => `/c/${demo.codes.empty}/working?refrigerant=R-22` },
   ],
+  'c/[ref]/tag.vue': [
+    { as: technician, at: demo => `/c/${demo.codes.usual}/tag` },
+    { as: technician, at: demo => `/c/${demo.codes.empty}/tag` },
+    { as: warehouse, at: demo => `/c/${demo.codes.usual}/tag` },
+  ],
   'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
   'evacuation-level.vue': [
     { as: technician, at: () => '/evacuation-level' },
@@ -73,9 +78,13 @@ const SCREENS: Record<string, Screen[]> = {
     { as: 'nobody', at: demo => `/invitation/${demo.invitation}` },
     { as: 'nobody', at: () => `/invitation/${'x'.repeat(43)}` },
   ],
-  'labels.vue': [{ as: warehouse, at: () => '/labels' }],
+  'labels.vue': [
+    { as: warehouse, at: () => '/labels' },
+    { as: warehouse, at: demo => `/labels?codes=${demo.codes.usual}` },
+  ],
   'log.vue': [{ as: auditor, at: () => '/log' }],
   'mail.vue': [{ as: admin, at: () => '/mail' }],
+  'now.vue': [...([technician, warehouse, manager, auditor, admin] as const).map(as => ({ as, at: () => '/now' }))],
   'people.vue': [{ as: admin, at: () => '/people' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
   'pressure-check.vue': [

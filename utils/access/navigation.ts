@@ -5,6 +5,7 @@ import type { Access, Role } from './roles'
 export interface NavigationItem { label: string, to: string }
 
 const ITEMS: readonly (NavigationItem & { permission: Permission })[] = [
+  { label: 'Now', to: '/now', permission: 'fleet:read' },
   { label: 'Scan', to: '/scan', permission: 'events:post' },
   { label: 'Fleet', to: '/fleet', permission: 'fleet:read' },
   { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
@@ -31,8 +32,8 @@ export function worksAtDesk(access: Access | null): boolean {
   return !access.roles.includes('technician') || access.roles.some(role => DESK_ROLES.includes(role))
 }
 
-/** Where a person begins: a technician at the scan, whoever works at the desk at the fleet, a signed-out person at sign-in. */
+/** Where a person begins: a technician at the scan, whoever works at the desk at what needs them now, a signed-out person at sign-in. */
 export function firstScreenFor(access: Access | null): string {
   if (!access) return '/sign-in'
-  return worksAtDesk(access) ? '/fleet' : '/scan'
+  return worksAtDesk(access) ? '/now' : '/scan'
 }

@@ -15,9 +15,10 @@ export function raiseCommon(turn: Turn, before: CylinderState): void {
   raiseStanding(turn, before)
 }
 
-const DOUBTFUL_SKEW_S = 300
+/** A clock that is off by more is not to be trusted. Units: seconds. */
+export const DOUBTFUL_SKEW_S = 300
 /** A clock that is off by less counts as right, so a time held back by less raises no doubt. */
-const DOUBTFUL_CLAMP_MS = 60_000
+export const DOUBTFUL_CLAMP_MS = 60_000
 
 function raiseClock({ event, findings }: Turn): void {
   const clamped = unclampedTime(event) - event.effectiveAt >= DOUBTFUL_CLAMP_MS

@@ -7,11 +7,11 @@ const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => 
 
 describe('where a person can go', () => {
   it.each<[Role, string[]]>([
-    ['technician', ['Scan', 'Fleet', 'Refrigerants', 'Places', 'Rules', 'People']],
-    ['warehouse', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People']],
-    ['manager', ['Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People', 'Log']],
-    ['auditor', ['Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'Rules', 'People', 'Log']],
-    ['admin', ['Fleet', 'Refrigerants', 'Places', 'Rules', 'People', 'Mail']],
+    ['technician', ['Now', 'Scan', 'Fleet', 'Refrigerants', 'Places', 'Rules', 'People']],
+    ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People']],
+    ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People', 'Log']],
+    ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'Rules', 'People', 'Log']],
+    ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Rules', 'People', 'Mail']],
   ])('as %s', (role, labels) => {
     expect(words(role)).toEqual(labels)
   })
@@ -22,10 +22,10 @@ describe('where a person can go', () => {
 })
 
 describe('where a person begins', () => {
-  it('is the scan for a technician, the fleet for the desk, sign-in for anybody else', () => {
+  it('is the scan for a technician, what needs them now for the desk, sign-in for anybody else', () => {
     expect(firstScreenFor(access('technician'))).toBe('/scan')
-    expect(firstScreenFor(access('auditor'))).toBe('/fleet')
-    expect(firstScreenFor(access('technician', 'manager'))).toBe('/fleet')
+    expect(firstScreenFor(access('auditor'))).toBe('/now')
+    expect(firstScreenFor(access('technician', 'manager'))).toBe('/now')
     expect(firstScreenFor(null)).toBe('/sign-in')
   })
 })

@@ -1,0 +1,47 @@
+import type { InStatement } from '@libsql/client'
+import type { ListFacts, NowFacts } from '../../../utils/now/nowFacts'
+import { vanLoad } from '../../../utils/transport/vanLoad'
+import { cylinderRowsWhere } from '../custody/fleet'
+import type { Database } from '../database/database'
+import type { Directory } from '../directory/directory'
+import { materialsOf } from '../vans/materials'
+
+const DAY_MS = 86_400_000
+/** A shipment without a receipt is asked about after so many days: common practice, no source. */
+const SHIPMENT_WAITS_DAYS = 7
+/** A test lot that is not back is asked about after so many days: common practice, no source. */
+const LOT_WAITS_DAYS = 30
+/** Far beyond what a van can carry. */
+const MOST_ABOARD = 200
+
+type Lists = Pick<NowFacts, 'shipmentsAway' | 'lotsAway' | 'shipmentDrafts' | 'lotDrafts'>
+
+/** Shipments and test lots that are drafts, or that have been away for long. */
+export async function listFacts(db: Database, nowMs: number): Promise<Lists> {
+  const answers = await db.readClient.batch([
+    listed('shipments', 'dispatched_at', `state = 'dispatched' AND dispatched_at <= ?`, nowMs - SHIPMENT_WAITS_DAYS * DAY_MS),
+    listed('test_lots', 'sent_at', `state = 'sent' AND sent_at <= ?`, nowMs - LOT_WAITS_DAYS * DAY_MS),
+    listed('shipments', 'created_at', `state = 'draft' AND created_at <= ?`, nowMs),
+    listed('test_lots', 'created_at', `state = 'draft' AND created_at <= ?`, nowMs),
+  ], 'read')
+  const [shipmentsAway, lotsAway, shipmentDrafts, lotDrafts] = answers.map(({ rows: [row] }): ListFacts | undefined => row && {
+    id: row[0] as string, number: row[1] as number, since: row[2] as number, count: row[3] as number,
+  })
+  return { shipmentsAway, lotsAway, shipmentDrafts, lotDrafts }
+}
+
+/** The longest waiting one, and how many there are. */
+function listed(table: 'shipments' | 'test_lots', since: string, where: string, until: number): InStatement {
+  return { sql: `SELECT id, number, ${since}, count(*) OVER () FROM ${table} WHERE ${where} ORDER BY ${since}, id LIMIT 1`, args: [until] }
+}
+
+/** What a person's own van carries against what goes without a shipping paper; nothing where no van is theirs. */
+export async function vanFacts(db: Database, from: Directory, personId: string, nowMs: number): Promise<NowFacts['van']> {
+  const van = [...from.places.values()].find(place => place.kind === 'van' && place.active && place.technicianId === personId)
+  if (!van) return undefined
+  const [aboard, materials] = await Promise.all([
+    cylinderRowsWhere(db, { sql: 'c.place_id = ?', args: [van.id] }, MOST_ABOARD, nowMs),
+    materialsOf(db, van.id, from),
+  ])
+  return { name: van.name, load: vanLoad(aboard, materials?.grams ?? null) }
+}

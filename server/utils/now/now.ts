@@ -1,0 +1,46 @@
+import { can } from '../../../utils/access/permissions'
+import type { Access } from '../../../utils/access/roles'
+import type { NowAnswer } from '../../../utils/contract/now'
+import { fleetQuestions } from '../../../utils/now/fleetQuestions'
+import type { NowFacts } from '../../../utils/now/nowFacts'
+import { nowLines } from '../../../utils/now/nowLines'
+import { topicsFor, type NowTopic } from '../../../utils/now/nowTopics'
+import type { MassUnit } from '../../../utils/quantity/mass'
+import { dateBounds } from '../custody/dateBounds'
+import { logHead } from '../custody/logHead'
+import type { Database } from '../database/database'
+import { directory, type Directory } from '../directory/directory'
+import { cylinderFacts, fullFacts, unlabelledFacts, unseenFacts } from './cylinderFacts'
+import { listFacts, vanFacts } from './listFacts'
+import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts } from './recordFacts'
+
+/** What waits for a person, by their roles: nothing of another's is looked up. */
+export async function nowAnswer(db: Database, access: Access, unit: MassUnit, nowMs: number): Promise<NowAnswer> {
+  // Before all else: what is recorded meanwhile is then asked for once more.
+  const { seq } = await logHead(db)
+  const from = await directory(db)
+  const topics = topicsFor(access.roles)
+  const facts = await factsFor(db, from, topics, access.personId, nowMs)
+  const reader = { unit, now: nowMs, timeZone: from.timeZone, mayI: (permission: Parameters<typeof can>[1]) => can(access, permission) }
+  return { seq, asOf: new Date(nowMs).toISOString(), lines: nowLines(facts, topics, reader) }
+}
+
+async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTopic>, personId: string, nowMs: number): Promise<NowFacts> {
+  const bounds = dateBounds(from, nowMs)
+  const when = <T>(topic: NowTopic, look: () => Promise<T>) => topics.has(topic) ? look() : undefined
+  const [cylinders, unseen, full, unlabelled, van, lists, logCheck, entries, mailFailed] = await Promise.all([
+    cylinderFacts(db, fleetQuestions(topics, personId), bounds, nowMs),
+    when('not-seen', () => unseenFacts(db, from, bounds, nowMs)),
+    when('full', () => fullFacts(db, bounds)),
+    when('unlabelled', () => unlabelledFacts(db, nowMs)),
+    when('van-load', () => vanFacts(db, from, personId, nowMs)),
+    when('shipment-drafts', () => listFacts(db, nowMs)),
+    when('log-broken', () => logCheckFacts(db)),
+    when('corrections', () => entryFacts(db, nowMs)),
+    when('mail-failed', () => mailFacts(db)),
+  ])
+  return {
+    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, unlabelled, van, ...lists, logCheck, entries, mailFailed,
+    rule: ruleFacts(from, nowMs), ...peopleAndPlaces(from),
+  }
+}

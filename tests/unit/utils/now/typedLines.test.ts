@@ -1,0 +1,22 @@
+import { expect, it } from 'vitest'
+import { typedLines } from '../../../../utils/now/typedLines'
+import { whatWaits } from '../../../../utils/now/whatWaits'
+
+const ID = '01900000-0000-7000-8000-000000000001'
+
+it('leads back to each form that was typed and not recorded', () => {
+  expect(typedLines([`${ID} weighed`, 'registration', `dispatch ${ID}`, `return ${ID}`, `batch load ${ID}`, 'batch receive '].sort()).map(({ to }) => to)).toEqual([
+    `/c/${ID}/act/weighed`, '/batch?act=load&van=' + ID, '/batch?act=receive', `/shipments/${ID}`, '/fleet/register', `/retests/${ID}`,
+  ])
+})
+
+it('passes over what is no form', () => {
+  expect(typedLines(['label-printing', `${ID} danced`, 'K48213 weighed', `dispatch 7`])).toEqual([])
+})
+
+it('says how many things wait, and whether the first can hurt', () => {
+  expect(whatWaits([])).toBe('Nothing needs you now.')
+  expect(whatWaits([{ kind: 'stop' }])).toBe('1 thing')
+  expect(whatWaits([{ kind: 'stop' }, { kind: 'att' }])).toBe('2 things, the most dangerous first')
+  expect(whatWaits([{ kind: 'unk' }, { kind: 'att' }])).toBe('2 things, the most urgent first')
+})

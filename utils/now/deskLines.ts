@@ -1,0 +1,84 @@
+import { daysBetween, formatNear } from '../quantity/instant'
+import { formatMass } from '../quantity/mass'
+import { MATERIALS_OF_TRADE } from '../transport/vanLoad'
+import { cylinderName } from '../shipment/changedLines'
+import type { FullFacts, ListFacts, NowFacts } from './nowFacts'
+import type { DraftLine, NowReader } from './nowLines'
+import { counted, listed } from './phrase'
+
+/** The lines about what is aboard, full in the shop, on lists, and without a label. */
+export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
+  const { van, full = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
+  return [
+    van && vanLine(van, reader),
+    ...full.map(one => fullLine(one, reader)),
+    shipmentsAway && awayLine('shipments-away', shipmentsAway, reader),
+    lotsAway && awayLine('lots-away', lotsAway, reader),
+    shipmentDrafts && draftLine('shipment-drafts', shipmentDrafts, reader),
+    lotDrafts && draftLine('lot-drafts', lotDrafts, reader),
+    unlabelled && unlabelledLine(unlabelled),
+  ].filter(line => !!line)
+}
+
+function vanLine({ name, load }: NonNullable<NowFacts['van']>, { unit }: NowReader): DraftLine | null {
+  const shared = { topic: 'van-load', kind: 'att', verb: 'See what is aboard', to: '/van' } as const
+  if (load.isOver) {
+    return {
+      ...shared, number: 1,
+      sentence: `${name} carries ${formatMass(-load.leftGrams, unit, 'up')} too much.`,
+      reason: `More than ${formatMass(MATERIALS_OF_TRADE.togetherGrams, unit, 'nearest')} gross does not go without a shipping paper (${MATERIALS_OF_TRADE.source}(d)).`,
+    }
+  }
+  if (load.tooHeavy === 0) return null
+  return {
+    ...shared, number: load.tooHeavy,
+    sentence: `${counted(load.tooHeavy, 'cylinder', 'cylinders')} on ${name} ${load.tooHeavy === 1 ? 'is' : 'are'} too heavy.`,
+    reason: `One above ${formatMass(MATERIALS_OF_TRADE.eachGrams, unit, 'nearest')} gross does not go without a shipping paper (${MATERIALS_OF_TRADE.source}(a)(2)).`,
+  }
+}
+
+function fullLine({ refrigerant, netGrams, ids, places }: FullFacts, { unit }: NowReader): DraftLine {
+  return {
+    topic: 'full', which: refrigerant, kind: 'att', number: ids.length,
+    sentence: `${ids.length} full, ready to ship.`,
+    reason: `${formatMass(netGrams, unit, 'nearest')} of ${refrigerant} in ${listed(places)}.`,
+    verb: 'Start a shipment', to: `/shipments?with=${ids.join(',')}`,
+  }
+}
+
+function awayLine(topic: 'shipments-away' | 'lots-away', { count, id, number, since }: ListFacts, { now, timeZone, mayI }: NowReader): DraftLine {
+  const isShipment = topic === 'shipments-away'
+  const thing = isShipment ? counted(count, 'shipment has', 'shipments have') : counted(count, 'test lot is', 'test lots are')
+  const mayClear = mayI(isShipment ? 'shipments:receive' : 'lots:receive')
+  return {
+    topic, kind: 'att', number: count,
+    sentence: isShipment ? `${thing} no receipt yet.` : `${thing} not back yet.`,
+    reason: `${isShipment ? 'Shipment' : 'Test lot'} ${number} left ${daysBetween(since, now, timeZone)} days ago. Ask where it is${mayClear ? ', or record what came back' : ''}.`,
+    ...(count === 1
+      ? { verb: mayClear ? (isShipment ? 'Record the receipt' : 'Record the results') : 'Open it', to: `/${isShipment ? 'shipments' : 'retests'}/${id}` }
+      : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=dispatched' : '/retests' }),
+  }
+}
+
+function draftLine(topic: 'shipment-drafts' | 'lot-drafts', { count, id, number, since }: ListFacts, { now, timeZone }: NowReader): DraftLine {
+  const isShipment = topic === 'shipment-drafts'
+  return {
+    topic, kind: 'att', number: count,
+    sentence: isShipment ? `${counted(count, 'shipment is a draft', 'shipments are drafts')} still.` : `${counted(count, 'test lot is a draft', 'test lots are drafts')} still.`,
+    reason: `${isShipment ? 'Shipment' : 'Test lot'} ${number} was begun ${formatNear(since, timeZone, now)}. Its cylinders can go on no other list.`,
+    ...(count === 1
+      ? { verb: 'Go on with it', to: `/${isShipment ? 'shipments' : 'retests'}/${id}` }
+      : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=draft' : '/retests' }),
+  }
+}
+
+function unlabelledLine({ count, first }: NonNullable<NowFacts['unlabelled']>): DraftLine {
+  const names = first.map(row => [cylinderName({ ...row, labelCode: null }), row.place?.name].filter(Boolean).join(', '))
+  return {
+    topic: 'unlabelled', kind: 'att', number: count,
+    sentence: `${counted(count, 'cylinder wears', 'cylinders wear')} no label.`,
+    reason: `${names[0] ?? ''}. Without one it is found by its serial alone and may not be shipped.`,
+    verb: count === 1 ? 'Label it' : first.length < count ? `Label the first ${first.length}` : `Label the ${count}`,
+    to: `/labels?cylinders=${first.map(({ id }) => id).join(',')}`,
+  }
+}

@@ -1,0 +1,44 @@
+import { cylinderPath } from '../fleet/cylinderPath'
+import { daysBetween, formatNear } from '../quantity/instant'
+import { cylinderName } from '../shipment/changedLines'
+import type { EntryFacts, LogCheckFacts, NowFacts } from './nowFacts'
+import type { DraftLine, NowReader } from './nowLines'
+import { counted } from './phrase'
+
+/** The log is checked again after so many days: common practice, no source. */
+const CHECKED_FOR_DAYS = 7
+
+/** The lines about the custody log itself: whether it was checked, and what of this week wants a second look. */
+export function logLines({ logCheck, entries }: NowFacts, reader: NowReader): DraftLine[] {
+  return [
+    logCheck && checkLine(logCheck, reader),
+    entries && entryLine('doubtful-times', entries.doubtful, ['entry came from a clock that was off', 'entries came from clocks that were off'], 'Both times are kept; compare them with the paper.'),
+    entries && entryLine('late-entries', entries.late, ['entry was recorded', 'entries were recorded'], 'Compare with the paper of that day.', ' more than a day late'),
+    entries && entryLine('corrections', entries.corrected, ['entry was corrected', 'entries were corrected'], 'Each says its reason, and the first reading is kept.'),
+  ].filter(line => !!line)
+}
+
+function checkLine({ last, newEvents }: LogCheckFacts, { now, timeZone }: NowReader): DraftLine | null {
+  const shared = { number: 1, to: '/log' }
+  const since = newEvents === 0 ? 'Nothing was recorded since.' : `${counted(newEvents, 'line was', 'lines were')} recorded since.`
+  if (last === null) {
+    return newEvents === 0 ? null : { ...shared, topic: 'log-unchecked', kind: 'att', sentence: 'The custody log was never checked.', reason: `${counted(newEvents, 'line stands', 'lines stand')} in it.`, verb: 'Check the log' }
+  }
+  if (!last.isOk) {
+    return { ...shared, topic: 'log-broken', kind: 'stop', sentence: 'The custody log does not add up.', reason: `Found ${formatNear(last.at, timeZone, now)}: a line was changed or taken out after it was recorded.`, verb: 'See where' }
+  }
+  const days = daysBetween(last.at, now, timeZone)
+  return days < CHECKED_FOR_DAYS ? null : { ...shared, topic: 'log-unchecked', kind: 'att', sentence: `The custody log was last checked ${days} days ago.`, reason: `It added up then. ${since}`, verb: 'Check the log' }
+}
+
+function entryLine(
+  topic: 'doubtful-times' | 'late-entries' | 'corrections', { count, cylinders, newest }: EntryFacts, [one, many]: [string, string], why: string, how = '',
+): DraftLine | null {
+  if (count === 0 || newest === null) return null
+  return {
+    topic, kind: 'att', number: count,
+    sentence: `${counted(count, one, many)}${how} this week.`,
+    reason: `${cylinders === 1 ? `On ${cylinderName(newest)}` : `On ${cylinders} cylinders, the newest on ${cylinderName(newest)}`}. ${why}`,
+    verb: count === 1 ? 'Read it' : 'Read the newest', to: `${cylinderPath(newest)}/log`,
+  }
+}
