@@ -80,7 +80,7 @@ function readParts(rows: readonly ComponentRow[]): { composition: { component: s
     if (name === undefined && 'error' in share && share.error === 'empty') continue
     if (name === undefined) return { reason: 'Name each part that has a percentage.' }
     if (!('value' in share) || share.value > 100) return { reason: `Give ${name} as a percentage, such as 98.5.` }
-    if (composition.some(part => part.component === name)) return { reason: `${name} stands there twice.` }
+    if (composition.some(part => part.component.toUpperCase() === name.toUpperCase())) return { reason: `${name} stands there twice.` }
     composition.push({ component: name, massPercent: share.value })
   }
   const sum = composition.reduce((total, part) => total + part.massPercent, 0)

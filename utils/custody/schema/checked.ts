@@ -26,7 +26,7 @@ const composition = z.array(z.strictObject({
   massPercent: z.number('must be a number').nonnegative('must not be negative').max(100, 'must be at most 100 %'),
 }))
   .min(1, 'must name a component').max(MOST_COMPONENTS, `must be at most ${MOST_COMPONENTS} components`)
-  .refine(parts => new Set(parts.map(part => part.component)).size === parts.length, 'must name each component once')
+  .refine(parts => new Set(parts.map(part => part.component.toUpperCase())).size === parts.length, 'must name each component once')
   .refine(parts => parts.reduce((sum, part) => sum + part.massPercent, 0) <= MOST_PERCENT_TOGETHER, 'must not come to more than 100 %')
 
 /** An analysis by an instrument in the hand, or by a laboratory of a sample. */

@@ -60,6 +60,7 @@ describe('the form of an analysis', () => {
     expect(byAnalysis({ refrigerant: NOT_KNOWN })).toEqual({ reason: 'What cannot be named is not clean. Choose another condition.' })
     expect(byAnalysis({ parts: [{ component: 'R-22', percent: '' }] })).toEqual({ reason: 'Give R-22 as a percentage, such as 98.5.' })
     expect(byAnalysis({ parts: [{ component: '', percent: '3' }] })).toEqual({ reason: 'Name each part that has a percentage.' })
+    expect(byAnalysis({ parts: [{ component: 'R-134a', percent: '60' }, { component: 'r-134A', percent: '3' }] })).toEqual({ reason: 'r-134A stands there twice.' })
     const both = (percent: string) => byAnalysis({ parts: [{ component: 'R-22', percent: '60' }, { component: 'R-12', percent }] })
     expect(both('41')).toHaveProperty('details')
     expect(both('41.1')).toEqual({ reason: 'The parts come to more than 100 %.' })

@@ -60,5 +60,7 @@ describe('a check of the contents as sent', () => {
     expect(parts()).toEqual(['details.composition: must name a component'])
     const twice = [{ component: 'R-22', massPercent: 1 }, { component: 'R-22', massPercent: 2 }]
     expect(faults({ method: 'laboratory', verdict, composition: twice })).toEqual(['details.composition: must name each component once'])
+    const inTwoCases = [{ component: 'R-134a', massPercent: 1 }, { component: 'r-134A', massPercent: 2 }]
+    expect(faults({ method: 'identifier', verdict, composition: inTwoCases })).toEqual(['details.composition: must name each component once'])
   })
 })
