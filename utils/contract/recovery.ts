@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { APPLIANCES, CIRCUMSTANCES, MACHINE_MADE, type LevelVerdict, type RequiredLevel } from '../recovery/types'
 import { readingGrams } from '../quantity/mass'
-import { machineMadeBy } from '../recovery/machineMade'
+import { isMachineDate, machineMadeBy } from '../recovery/machineMade'
 import { BAROMETER_RANGE, MOST_READ } from '../recovery/reachedDraft'
 import type { OnGauges } from '../recovery/words'
 import { massInQuery } from './parts'
@@ -14,7 +14,7 @@ const chargeInQuery = massInQuery.refine(reading => readingGrams(reading) <= MOS
 
 const machineMade = z.union([
   z.enum(MACHINE_MADE),
-  z.string().regex(/^(19|20)\d{2}(-(0[1-9]|1[0-2])(-(0[1-9]|[12]\d|3[01]))?)?$/).transform(machineMadeBy),
+  z.string().refine(isMachineDate).transform(machineMadeBy),
 ], `must be ${MACHINE_MADE.join(', ')} or a date such as 2004, 1993-11 or 1993-11-15`)
 
 function reading(most: number, unit: string) {

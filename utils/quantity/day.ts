@@ -5,6 +5,13 @@ export type Day = string
 
 const MS_PER_DAY = 86_400_000
 
+/** Whether a text is a day that the calendar has. */
+export function isDay(text: string): boolean {
+  const midnight = new Date(`${text}T00:00:00Z`)
+  // The 31st of February is read as a day of March.
+  return !Number.isNaN(midnight.getTime()) && midnight.toISOString().startsWith(`${text}T`)
+}
+
 /** The day it is at an instant (UTC milliseconds) in a time zone. */
 export function dayOfInstant(ms: number, timeZone: string): Day {
   const { year, month, day } = wallClock(ms, timeZone)

@@ -1,5 +1,5 @@
 import { massText, parseMassText, readingGrams, type MassReading } from '../quantity/mass'
-import { machineMadeBy } from './machineMade'
+import { isMachineDate, machineMadeBy } from './machineMade'
 import { reachedDraft, reachedQuery, type ReachedDraft } from './reachedDraft'
 import { APPLIANCES, CIRCUMSTANCES, MACHINE_MADE, type Appliance, type Circumstances, type MachineMade } from './types'
 
@@ -53,7 +53,7 @@ export function chargeGramsOf({ charge }: LevelDraft): number | null {
 }
 
 function yearMade(text: string): MachineMade | '' {
-  return /^\d{4}(-\d{2}){0,2}$/.test(text) ? machineMadeBy(text) ?? '' : ''
+  return isMachineDate(text) ? machineMadeBy(text) ?? '' : ''
 }
 
 function oneOf<T extends string>(known: readonly T[], text: string): T | null {

@@ -1,6 +1,13 @@
+import { isDay } from '../quantity/day'
 import type { MachineMade } from './types'
 
 const LINE = '1993-11-15'
+const DATE = /^(19|20)\d{2}(-(0[1-9]|1[0-2])(-\d{2})?)?$/
+
+/** Whether a text is a date of a machine: a year, a month or a day that the calendar has. */
+export function isMachineDate(text: string): boolean {
+  return DATE.test(text) && (text.length < LINE.length || isDay(text))
+}
 
 /**
  * Which side of 15 November 1993 a date lies on, as far as it tells: a year or a month that holds that day tells nothing.

@@ -1,5 +1,12 @@
 import { describe, expect, it } from 'vitest'
-import { dayOfInstant, firstInstantOfDay } from '~~/utils/quantity/day'
+import { dayOfInstant, firstInstantOfDay, isDay } from '~~/utils/quantity/day'
+
+describe('a day of the calendar', () => {
+  it('is one that the month has, in leap years one more', () => {
+    expect(['1993-02-28', '1996-02-29', '2026-12-31'].map(isDay)).toEqual([true, true, true])
+    expect(['1993-02-29', '1993-02-31', '2026-04-31', '2026-12-32', '2026-13-01', '2026-12', ''].map(isDay)).toEqual([false, false, false, false, false, false, false])
+  })
+})
 
 describe('a day in the firm\'s time zone', () => {
   it('begins at its midnight there', () => {

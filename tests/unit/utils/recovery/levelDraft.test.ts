@@ -22,6 +22,8 @@ describe('the address of a question', () => {
   it('takes a date of the machine as the side that it lies on', () => {
     expect(levelDraft({ machineMade: '2004' }).machineMade).toBe('since-1993-11-15')
     expect(levelDraft({ machineMade: '1993' }).machineMade).toBe('')
+    expect(levelDraft({ machineMade: '1993-02-28' }).machineMade).toBe('before-1993-11-15')
+    expect(levelDraft({ machineMade: '1993-02-31' }).machineMade).toBe('')
   })
 
   it('holds what it cannot be as not known', () => {
