@@ -32,7 +32,8 @@ function byWeight(level: EvacuationLevel, { recoveredGrams, chargeGrams }: Extra
   if (chargeGrams <= 0) return unknown('Without the full charge no share of it can be told.')
   const percent = recoveredGrams / chargeGrams * 100
   const short = level.value - percent
-  const because = `${rounded(percent, 'down')} % of the charge came out, ${level.value} % is asked for.`
+  const doubt = percent > 100 + FLOAT_NOISE ? ' That is more than there was: look at the charge and at the scale.' : ''
+  const because = `${rounded(percent, percent > 100 ? 'up' : 'down')} % of the charge came out, ${level.value} % is asked for.${doubt}`
   return verdictOf(short, because, null)
 }
 

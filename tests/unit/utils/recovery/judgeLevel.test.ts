@@ -108,6 +108,12 @@ describe('90 % of a small appliance’s charge', () => {
     expect(judged(NINETY, { recoveredGrams: 10, chargeGrams: 0 }, four).verdict).toBe('unknown')
   })
 
+  it('is doubted in words where more came out than there was', () => {
+    expect(judged(NINETY, { recoveredGrams: 1000, chargeGrams: 1000 }, four).because).toBe('100.0 % of the charge came out, 90 % is asked for.')
+    expect(judged(NINETY, { recoveredGrams: 1001, chargeGrams: 1000 }, four).because)
+      .toBe('100.1 % of the charge came out, 90 % is asked for. That is more than there was: look at the charge and at the scale.')
+  })
+
   it('or by four inches of vacuum instead', () => {
     expect(judged(NINETY, { inHg: 4 }, four).verdict).toBe('reached')
     expect(judged(NINETY, { inHg: 3.9 }, four).verdict).toBe('not-reached')
