@@ -7,10 +7,14 @@ export const id = z.uuid('must be an id (a UUID)').transform(value => value.toLo
 /** The path of a thing by its id. */
 export const idParams = z.strictObject({ id })
 
-/** A line of text that a person typed: trimmed, without control characters. */
+// Some characters are there and show nothing: spaces of no width, marks of direction, the empty letter of Hangul, blank braille.
+const VISIBLE = /[^\p{Z}\p{C}\p{Default_Ignorable_Code_Point}\u2800]/u
+
+/** A line of text that a person typed: trimmed, with something to be seen in it, without control characters. */
 export function line(longest: number) {
   return z.string().trim().min(1, 'must not be empty').max(longest, `must be at most ${longest} characters`)
     .regex(/^[^\p{Cc}\p{Cs}\u202A-\u202E\u2066-\u2069]*$/u, 'must not hold control characters')
+    .refine(text => text === '' || VISIBLE.test(text), 'must hold a character that can be seen')
 }
 
 /** A page of a list: how many, and where the page before ended. */
