@@ -27,6 +27,6 @@ export type PressureCheckAnswer = PressureCheck & { refrigerant: string }
 
 function readingInQuery(field: PressureReadingField) {
   const { least, most, unit } = PRESSURE_READING_RANGES[field]
-  return z.string().regex(/^-?\d{1,6}(\.\d{1,20})?$/, `must be a number of ${unit}`).transform(Number)
+  return z.string().regex(/^-?\d{1,6}(\.\d{1,20})?$/, { message: `must be a number of ${unit}`, abort: true }).transform(Number)
     .pipe(z.number().min(least, `must be at least ${least} ${unit}`).max(most, `must be at most ${most} ${unit}`))
 }
