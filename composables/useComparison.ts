@@ -2,6 +2,7 @@ import { problemOf, useApi } from '~~/composables/useApi'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { FillLimitAnswer } from '~~/utils/contract/refrigerants'
 import { COMPARE_KEYS, compareFaults, type CompareQuery } from '~~/utils/picture/compareDraft'
+import { asListed } from '~~/utils/refrigerant/designation'
 
 /** What a stamp may take: of the refrigerant asked about, or why not, and of some others. */
 export interface Comparison {
@@ -27,14 +28,15 @@ export function useComparison(others: () => readonly string[]) {
     if (!isAsked.value) return null
     const faults = compareFaults(query.value)
     if (faults.length) return { answer: null, problem: { ...INCOMPLETE, errors: faults }, others: [] }
-    const { refrigerant: _, composition: __, ...stamp } = query.value
+    const { refrigerant, composition: _, ...stamp } = query.value
+    const asked = asListed(refrigerant ?? '', others())
     try {
       const [answer, ...rest] = await Promise.all([
         api.get<FillLimitAnswer>('/api/fill-limit', query.value),
-        ...others().filter(name => name !== query.value.refrigerant).map(async refrigerant => ({
-          refrigerant,
+        ...others().filter(name => name !== asked).map(async other => ({
+          refrigerant: other,
           // Why the stamp is refused stands with the first; here only the figures are wanted.
-          answer: await api.get<FillLimitAnswer>('/api/fill-limit', { ...stamp, refrigerant }).catch(() => null),
+          answer: await api.get<FillLimitAnswer>('/api/fill-limit', { ...stamp, refrigerant: other }).catch(() => null),
         })),
       ])
       return { answer, problem: null, others: rest }

@@ -30,6 +30,10 @@ describe('the level of evacuation', () => {
     expect((await level({ ...asked, charge: '199.9lb', machineMade: '2004' })).body.level).toEqual({ unit: 'inHg-vacuum', value: 10 })
   })
 
+  it('is asked for by a designation in any case', async () => {
+    expect((await level({ refrigerant: 'r-134A', charge: '200lb', machineMade: '2004' })).body).toMatchObject({ refrigerant: 'R-134a', level: { unit: 'inHg-vacuum', value: 15 } })
+  })
+
   it('is the deepest of all where nothing is said, and says what was taken for it', async () => {
     const { body } = await level({})
     expect(body).toMatchObject({ refrigerant: null, level: { unit: 'mmHg-absolute', value: 25 } })
@@ -68,7 +72,7 @@ describe('a question that cannot be answered', () => {
   })
 
   it.each<[string, Record<string, string>]>([
-    ['machineMade', { machineMade: '1993-13' }], ['charge', { charge: '12' }], ['inHg', { inHg: '-1' }], ['barometerInHg', { inHg: '1', barometerInHg: '14' }],
+    ['machineMade', { machineMade: '1993-13' }], ['machineMade', { machineMade: '1993-02-31' }], ['charge', { charge: '12' }], ['inHg', { inHg: '-1' }], ['barometerInHg', { inHg: '1', barometerInHg: '14' }],
     ['appliance', { appliance: 'large' }], ['level', { level: '10' }],
   ])('is malformed by its field: %s', async (path, query) => {
     const { status, body } = await level(query)

@@ -38,10 +38,19 @@ describe('the fill limit of a stamp', () => {
     expect((await fillLimit({ servicePressurePsig: '350' })).status).toBe(422)
   })
 
+  it('takes a designation in any case, and says it as the catalogue does', async () => {
+    expect((await fillLimit({ refrigerant: 'r-22' })).body).toMatchObject({ forRefrigerant: 'R-22', fillLimitGrams: 8_708 })
+    expect((await fillLimit({ refrigerant: 'r-407d' })).body.forRefrigerant).toBe('R-407D')
+  })
+
   it('takes a stricter share than the firm\'s and never a looser one', async () => {
     // 0.75 x 24.0 = 18.0 lb = 8164.66 g.
     expect((await fillLimit({ share: '0.75' })).body).toMatchObject({ share: 0.75, fillLimitGrams: 8_164 })
     expect((await fillLimit({ share: '0.81' })).status).toBe(400)
+    expect((await fillLimit({ share: '0.01' })).body.share).toBe(0.01)
+    const { status, body } = await fillLimit({ share: '0.0099' })
+    expect(status).toBe(400)
+    expect(body.errors).toEqual([{ path: 'share', message: 'must be at least 0.01' }])
   })
 
   it('gives no stop weight where something is not known, and names it', async () => {
@@ -131,6 +140,11 @@ describe('the fill limit of a composition', () => {
 
   it.each(['R-32', 'R-32:fifty', 'R-32:50;R-125:50', ''])('is refused as no composition: "%s"', async (composition) => {
     expect((await ofComposition(composition)).status).toBe(400)
+  })
+
+  it('takes its parts in any case, and a part in two cases as one', async () => {
+    expect((await ofComposition('r-32:50,r-125:50')).body).toMatchObject({ forRefrigerant: 'R-32/R-125 (50/50)', fillLimitGrams: 8_570 })
+    expect((await ofComposition('R-32:50,r-32:50')).status).toBe(422)
   })
 
   it('is asked for in place of a refrigerant: never with one, and not with neither', async () => {

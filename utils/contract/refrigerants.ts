@@ -99,7 +99,7 @@ export const fillLimitQuery = z.strictObject({
   gross: massInQuery.optional(),
   condition: z.enum(['clean', 'suspect', 'burnt', 'mixed', 'unknown'], 'must be clean, suspect, burnt, mixed or unknown').default('clean'),
   /** A stricter share than the firm's, to compare with. */
-  share: z.coerce.number('must be a share such as 0.75').positive('must be above 0').max(0.8, 'must be at most 0.80').optional(),
+  share: z.coerce.number('must be a share such as 0.75').min(0.01, 'must be at least 0.01').max(0.8, 'must be at most 0.80').optional(),
 })
 export type FillLimitQuery = z.output<typeof fillLimitQuery>
 

@@ -5,6 +5,7 @@ import { judgeLevel } from '~~/utils/recovery/judgeLevel'
 import type { Reached } from '~~/utils/recovery/types'
 import { onGauges } from '~~/utils/recovery/words'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
+import { asListed } from '~~/utils/refrigerant/designation'
 import type { Refrigerant } from '~~/utils/refrigerant/types'
 import { problem } from '../http/problem'
 
@@ -35,7 +36,7 @@ export function evacuationLevelAnswer(query: EvacuationLevelQuery): EvacuationLe
 
 function refrigerantOf(designation: string | undefined): Refrigerant | null {
   if (designation === undefined) return null
-  const found = CATALOGUE.refrigerants.get(designation)
+  const found = CATALOGUE.refrigerants.get(asListed(designation, CATALOGUE.refrigerants.keys()))
   if (!found) throw impossible('refrigerant', 'is not in the catalogue; leave it out where it is not known')
   return found
 }

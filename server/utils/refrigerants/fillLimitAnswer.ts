@@ -6,6 +6,7 @@ import { initialState, type CylinderState } from '~~/utils/custody/state'
 import { exactGrams, readingGrams, type MassReading } from '~~/utils/quantity/mass'
 import { scaleAccuracyGrams } from '~~/utils/quantity/scale'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
+import { asListed } from '~~/utils/refrigerant/designation'
 import { idealMixture } from '~~/utils/refrigerant/idealMixture'
 import type { Catalogue, Composition } from '~~/utils/refrigerant/types'
 import { mixtureName } from '~~/utils/refrigerant/words'
@@ -28,16 +29,20 @@ export function fillLimitAnswer(query: FillLimitQuery, firmPolicy: FillPolicy): 
   return { ...capacityInWords(capacity, state.stamp), netGrams }
 }
 
+const NAMES = [...CATALOGUE.refrigerants.keys(), ...CATALOGUE.compositions.keys()]
+
 /** The fluid asked about, and the catalogue that knows it: a composition is added to it under the name that the trade would write. */
 function fluidOf({ refrigerant, composition }: FillLimitQuery): { refrigerant: string, catalogue: Catalogue } {
   if (refrigerant !== undefined) {
     if (composition !== undefined) throw impossible('composition', 'cannot stand beside a refrigerant')
-    if (!CATALOGUE.refrigerants.has(refrigerant) && !CATALOGUE.compositions.has(refrigerant)) throw impossible('refrigerant', 'is not in the catalogue')
-    return { refrigerant, catalogue: CATALOGUE }
+    const listed = asListed(refrigerant, NAMES)
+    if (!NAMES.includes(listed)) throw impossible('refrigerant', 'is not in the catalogue')
+    return { refrigerant: listed, catalogue: CATALOGUE }
   }
   if (composition === undefined) throw impossible('refrigerant', 'must be named, or a composition')
-  const designation = mixtureName(composition)
-  const asked: Composition = { designation, components: composition, source: 'as asked' }
+  const components = composition.map(({ component, massPercent }) => ({ component: asListed(component, CATALOGUE.refrigerants.keys()), massPercent }))
+  const designation = mixtureName(components)
+  const asked: Composition = { designation, components, source: 'as asked' }
   const mixture = idealMixture(asked, CATALOGUE)
   if ('because' in mixture) throw impossible('composition', mixture.because)
   return { refrigerant: designation, catalogue: { ...CATALOGUE, compositions: new Map([...CATALOGUE.compositions, [designation, asked]]) } }

@@ -3,6 +3,7 @@ import type {
 } from '~~/utils/contract/refrigerants'
 import { celsiusFromFahrenheit } from '~~/utils/quantity/temperature'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
+import { asListed } from '~~/utils/refrigerant/designation'
 import { GWP_BASES, gwpOf, headlineGwp } from '~~/utils/refrigerant/gwp'
 import { pressureClassOf } from '~~/utils/refrigerant/pressureClass'
 import { isFlammable, isToxic } from '~~/utils/refrigerant/safety'
@@ -94,7 +95,6 @@ export function refrigerantNamed(designation: string): Refrigerant {
   return found
 }
 
-function named<T extends { designation: string }>(map: ReadonlyMap<string, T>, designation: string): T | undefined {
-  const wanted = designation.toUpperCase()
-  return map.get(designation) ?? [...map.values()].find(one => one.designation.toUpperCase() === wanted)
+function named<T>(map: ReadonlyMap<string, T>, designation: string): T | undefined {
+  return map.get(asListed(designation, map.keys()))
 }
