@@ -4,6 +4,7 @@ import type { ViewContext } from '../../../utils/custody/view'
 import type { RetestSettings } from '../../../utils/requalification/retestSettings'
 import type { Access } from '../../../utils/access/roles'
 import { CATALOGUE } from '../../../utils/refrigerant/allRefrigerants'
+import { asListed } from '../../../utils/refrigerant/designation'
 import { fillPolicyAt, retestAt, rulesInForceKey } from '../directory/datedRules'
 import { namesOf, type Directory } from '../directory/directory'
 
@@ -30,7 +31,7 @@ export function viewContext(from: Directory, more: {
     nowMs: more.nowMs,
     policyNow: fillPolicyAt(from.fillPolicies, more.nowMs),
     retest: retestAt(from.retests, more.nowMs),
-    askedRefrigerant: more.askedRefrigerant ?? null,
+    askedRefrigerant: more.askedRefrigerant ? asListed(more.askedRefrigerant, CATALOGUE.refrigerants.keys()) : null,
     access: more.access,
     codesOnTwo: more.codesOnTwo ?? new Set(),
     names: namesOf(from),
