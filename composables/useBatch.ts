@@ -20,6 +20,8 @@ export interface BatchPlan {
   expected: readonly ExpectedCylinder[] | null
   /** Who supervises, where the person is a trainee. */
   supervisorId: string | null
+  /** Where a cylinder comes to that does not come to the target like the others; null for those that do. */
+  otherTarget?: (cylinderId: string) => BatchTarget | null
 }
 
 /** Of a scan, what is kept on the device: the cylinder is looked up anew. */
@@ -163,12 +165,13 @@ export function useBatch(key: string, plan: () => BatchPlan) {
     finally {
       progress.value = null
     }
-    if (posted.length) posting.announceAll(posted, BATCH_WORDS[act].done(posted.length, target.name))
+    const moved = posted.filter(({ event }) => !plan().otherTarget?.(event.cylinderId))
+    if (posted.length) posting.announceAll(posted, BATCH_WORDS[act].done(moved.length, target.name))
   }
 
   function sealed(line: BatchLine, act: BatchAct, target: BatchTarget, supervisorId: string | null): CustodyEvent {
     const view = (line.found as { view: CylinderView }).view
-    const content = batchEvent(act, target, {
+    const content = batchEvent(act, plan().otherTarget?.(view.id) ?? target, {
       cylinderId: view.id, scannedAt: line.scannedAt, keepReason: line.keepReason, confirmed: line.verdict?.against ?? [],
     }, supervisorId)
     const event = line.sent ? { ...content, ...line.sent } : posting.seal(content)

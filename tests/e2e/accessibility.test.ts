@@ -106,7 +106,15 @@ const SCREENS: Record<string, Screen[]> = {
   'shipments/[id].vue': [...(['draft', 'dispatched', 'received'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
   'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
-  'van.vue': [{ as: technician, at: () => '/van' }],
+  'van.vue': [{ as: technician, at: () => '/van' }, { as: warehouse, at: () => '/van' }],
+  'vans/[id]/check-in.vue': [{ as: warehouse, at: demo => `/vans/${demo.van}/check-in` }],
+  'vans/[id]/index.vue': [{ as: manager, at: demo => `/vans/${demo.van}` }, { as: technician, at: demo => `/vans/${demo.van}` }],
+  'vans/index.vue': [{ as: manager, at: () => '/vans' }, { as: technician, at: () => '/vans' }],
+  'which-cylinder.vue': [
+    { as: technician, at: () => '/which-cylinder' },
+    { as: manager, at: demo => `/which-cylinder?refrigerant=R-410A&amount=9lb&van=${demo.van}` },
+    { as: technician, at: () => '/which-cylinder?refrigerant=R-22&amount=900lb' },
+  ],
 }
 
 /** What pages show only once something is pressed. */

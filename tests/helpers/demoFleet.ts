@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import type { CustodyLogAnswer, CylinderRow, FleetAnswer } from '../../utils/contract/custody'
 import type { MintAnswer } from '../../utils/contract/labels'
-import type { FirmsAnswer } from '../../utils/contract/places'
+import type { FirmsAnswer, PlacesAnswer } from '../../utils/contract/places'
 import type { ShipmentsAnswer, ShipmentState } from '../../utils/contract/shipments'
 import type { TestLotsAnswer, TestLotState, TestLotWithLines } from '../../utils/contract/testLots'
 import { DEMO_PASSWORD } from '../../server/utils/demo/cast'
@@ -22,6 +22,8 @@ export interface DemoFleet {
   event: string
   shipments: Record<Exclude<ShipmentState, 'cancelled'>, string>
   lots: Record<Exclude<TestLotState, 'cancelled'>, string>
+  /** The technician's van. */
+  van: string
   invitation: string
   setUpToken: string
 }
@@ -44,9 +46,11 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
   const usual = await codeOf('&lifecycle=in-service&refrigerant=R-22', row => row.worstFinding === null)
   const { codes: [onNone] } = await made<MintAnswer>(manager, '/api/labels', { count: 1 })
   const { items: events } = (await manager.get<CustodyLogAnswer>(`/api/cylinders/${usual}/events?limit=1`)).body
+  const { items: places } = (await manager.get<PlacesAnswer>('/api/places')).body
+  const van = places.find(({ technicianName }) => technicianName === 'Dayo Okafor')!.id
   await made(admin, '/api/people', INVITED)
   return {
-    people,
+    people, van,
     codes: {
       usual, onNone: onNone!.toLowerCase(),
       empty: await codeOf('&lifecycle=in-service', row => row.nothingInIt && row.worstFinding === null),
