@@ -106,7 +106,7 @@ export async function fillFleet(databaseFile: string, count: number, setting: Om
   try {
     const nowMs = Date.now()
     const ruledBy = rulesInForceKey(await directory(db), nowMs)
-    for (const statement of fleetRows(count, { ...setting, ruledBy, nowMs })) await db.write([statement])
+    await db.write(fleetRows(count, { ...setting, ruledBy, nowMs }))
   }
   finally {
     db.close()

@@ -53,8 +53,13 @@ export function lastInstantOfMonth(month: Month, timeZone: string): number {
 export function daysUntilEndOfMonth(month: Month, nowMs: number, timeZone: string): number {
   const next = monthCount(month) + 1
   const lastDay = Date.UTC(Math.floor(next / 12), next % 12, 0)
-  const today = dateIn(dateFormat(timeZone), nowMs)
-  return Math.round((lastDay - Date.UTC(today.year, today.month - 1, today.day)) / MS_PER_DAY)
+  return Math.round((lastDay - calendarDay(nowMs, timeZone)) / MS_PER_DAY)
+}
+
+/** The calendar day of an instant in a time zone, as the instant at which that day begins in UTC. Units: milliseconds. */
+export function calendarDay(ms: number, timeZone: string): number {
+  const { year, month, day } = dateIn(dateFormat(timeZone), ms)
+  return Date.UTC(year, month - 1, day)
 }
 
 /**
