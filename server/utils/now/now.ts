@@ -18,7 +18,8 @@ import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts } from
 export async function nowAnswer(db: Database, access: Access, unit: MassUnit, nowMs: number): Promise<NowAnswer> {
   // Before all else: what is recorded meanwhile is then asked for once more.
   const { seq } = await logHead(db)
-  const from = await directory(db)
+  // Read anew: who comes back from sending an invitation finds it here.
+  const from = await directory(db, true)
   const topics = topicsFor(access.roles)
   const facts = await factsFor(db, from, topics, access.personId, nowMs)
   const reader = { unit, now: nowMs, timeZone: from.timeZone, mayI: (permission: Parameters<typeof can>[1]) => can(access, permission) }
