@@ -53,13 +53,22 @@ export function lastInstantOfMonth(month: Month, timeZone: string): number {
 export function daysUntilEndOfMonth(month: Month, nowMs: number, timeZone: string): number {
   const next = monthCount(month) + 1
   const lastDay = Date.UTC(Math.floor(next / 12), next % 12, 0)
-  return Math.round((lastDay - calendarDay(nowMs, timeZone)) / MS_PER_DAY)
+  return Math.round((lastDay - calendarDayNow(nowMs, timeZone)) / MS_PER_DAY)
 }
 
 /** The calendar day of an instant in a time zone, as the instant at which that day begins in UTC. Units: milliseconds. */
 export function calendarDay(ms: number, timeZone: string): number {
   const { year, month, day } = dateIn(dateFormat(timeZone), ms)
   return Date.UTC(year, month - 1, day)
+}
+
+/** The same as {@link calendarDay}, for an instant that is asked about again and again, as the present one is for each row of a list. */
+export function calendarDayNow(nowMs: number, timeZone: string): number {
+  const last = lastDays.get(timeZone)
+  if (last?.ms === nowMs) return last.day
+  const day = calendarDay(nowMs, timeZone)
+  lastDays.set(timeZone, { ms: nowMs, day })
+  return day
 }
 
 /**
@@ -84,6 +93,7 @@ function monthOfCount(count: number): Month {
 
 // A format costs a hundred times its use, and every view asks for one; nothing but the time zone goes into it.
 const formats = new Map<string, Intl.DateTimeFormat>()
+const lastDays = new Map<string, { ms: number, day: number }>()
 
 function dateFormat(timeZone: string): Intl.DateTimeFormat {
   const format = formats.get(timeZone)
