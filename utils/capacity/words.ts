@@ -1,4 +1,4 @@
-import type { FillRule, TermStanding } from './types'
+import type { FillRule } from './types'
 
 /** The rules of the fill limit, as the end of "Limit by ...". */
 export const RULE_WORDS: Record<FillRule, string> = {
@@ -10,14 +10,6 @@ export const RULE_WORDS: Record<FillRule, string> = {
   'un-ratio': 'the UN filling ratio',
   'oily': 'oily refrigerant',
   'hot-pressure': 'the pressure at 131 °F and at 70 °F',
-}
-
-/** How a rule stands beside the one that governs. */
-export const STANDING_WORDS: Record<TermStanding, string> = {
-  'in-force': 'in force',
-  'compared': 'to compare',
-  'above-margin': 'above our margin',
-  'unsafe': 'unsafe for this refrigerant',
 }
 
 /**
