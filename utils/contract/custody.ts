@@ -54,14 +54,12 @@ export type FleetListQuery = z.output<typeof fleetListQuery>
 /** A page of the fleet, how many cylinders the whole list has, and the cursors of the pages beside it. */
 export interface FleetAnswer extends Page<CylinderRow> { prevCursor: string | null, total: number }
 
-/** What GET /api/fleet/summary answers: the figures of the strip above the fleet. */
+/** What GET /api/fleet/summary answers: the counts beside the fleet's filters, and what falls due when. */
 export interface FleetSummary {
   total: number
   stop: number
   caution: number
-  overfilled: { count: number, first: CylinderRow | null }
-  full: { count: number, netGrams: number }
-  withoutNumber: { count: number }
+  full: { count: number }
   notSeen: { count: number }
   late: number
   /** Twelve months from the present one, with the cylinders that fall due in each. */

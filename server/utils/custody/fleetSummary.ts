@@ -4,25 +4,22 @@ import { addMonths } from '../../../utils/quantity/month'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { dateBounds } from './dateBounds'
-import { cylinderRowsWhere } from './fleet'
 import { findingFilter, type FleetFilter } from './fleetFilter'
 
 const IN_USE = `c.lifecycle NOT IN ('condemned', 'retired')`
 const OURS = `c.lifecycle NOT IN ('at-reclaim', 'condemned', 'retired')`
 
-/** The figures above the fleet: what needs somebody now, and what falls due when. */
+/** The counts beside the fleet's filters, and what falls due when. */
 export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSummary> {
   const from = await directory(db)
   const bounds = dateBounds(from, nowMs)
-  const overfilled: FleetFilter = findingFilter('overfill', bounds)
   const late = findingFilter('retest-overdue', bounds)
   const lastMonth = addMonths(bounds.thisMonth, 11)
   const [counts, full, due, refrigerants, lateRows] = await db.readClient.batch([
     countsOf([
-      { sql: IN_USE, args: [] }, findingFilter('stop', bounds), findingFilter('caution', bounds), overfilled,
-      findingFilter('weight-not-known', bounds), findingFilter('not-seen', bounds),
+      { sql: IN_USE, args: [] }, findingFilter('stop', bounds), findingFilter('caution', bounds), findingFilter('not-seen', bounds),
     ]),
-    `SELECT count(*), coalesce(sum(c.net_grams), 0) FROM cylinders c
+    `SELECT count(*) FROM cylinders c
       WHERE c.finding_codes LIKE '% nearly-full %' AND c.finding_codes NOT LIKE '% overfill %' AND c.lifecycle = 'in-service'`,
     {
       sql: `SELECT c.due_month, count(*) FROM cylinders c WHERE c.retest_state = 'dated' AND c.due_month >= ? AND c.due_month <= ? AND ${IN_USE} GROUP BY c.due_month`,
@@ -33,15 +30,12 @@ export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSu
   ], 'read')
   const number = (index: number) => (counts?.rows[0]?.[index] as number | null) ?? 0
   const byMonth = new Map((due?.rows ?? []).map(row => [row[0] as string, row[1] as number]))
-  const first = number(3) > 0 ? await cylinderRowsWhere(db, overfilled, 1, nowMs) : []
   return {
     total: number(0),
     stop: number(1),
     caution: number(2),
-    overfilled: { count: number(3), first: first[0] ?? null },
-    full: { count: full?.rows[0]?.[0] as number, netGrams: full?.rows[0]?.[1] as number },
-    withoutNumber: { count: number(4) },
-    notSeen: { count: number(5) },
+    full: { count: full?.rows[0]?.[0] as number },
+    notSeen: { count: number(3) },
     late: lateRows?.rows[0]?.[0] as number,
     dueByMonth: Array.from({ length: 12 }, (_, index) => {
       const month = addMonths(bounds.thisMonth, index)
