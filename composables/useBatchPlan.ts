@@ -8,6 +8,7 @@ import type { ExpectedCylinder } from '~~/utils/batch/missing'
 import type { CylinderRow, CylinderView, FleetAnswer } from '~~/utils/contract/custody'
 import type { PeopleAnswer } from '~~/utils/contract/people'
 import type { PlacesAnswer } from '~~/utils/contract/places'
+import type { VanAnswer } from '~~/utils/contract/vans'
 
 const MOST_AT_ONCE = 200
 
@@ -52,7 +53,7 @@ export function useBatchPlan() {
     if (text('expect')) return Promise.all(text('expect').split(',').map(askedFor))
     return listedFrom.value ? standingAt(listedFrom.value) : null
   }, [listedFrom, () => route.query.expect])
-  const aboardRequest = useLoaded(`batch-aboard ${van.value}`, async () => act.value === 'load' && van.value ? standingAt(van.value) : [], [van])
+  const vanRequest = useLoaded(`batch-van ${van.value}`, async () => act.value === 'load' && van.value ? api.get<VanAnswer>(`/api/vans/${van.value}`) : null, [van])
 
   const plan = computed<BatchPlan>(() => ({
     act: act.value,
@@ -93,5 +94,5 @@ export function useBatchPlan() {
     return { id, labelCode, serial: stamp?.serial ?? null, place, holder }
   }
 
-  return { lists, places, act, van, to, from, plan, lacks, supervisorId, expectedProblem: expectedRequest.problem, aboard: aboardRequest.data }
+  return { lists, places, act, van, to, from, plan, lacks, supervisorId, expectedProblem: expectedRequest.problem, vanToLoad: vanRequest.data }
 }
