@@ -58,13 +58,14 @@ export async function unseenFacts(db: Database, from: Directory, bounds: DateBou
   }
 }
 
-/** Full cylinders in a shop that may leave and are on no list yet, by refrigerant, the most first. */
+/** Full cylinders in a shop that may leave and are on no list yet, by refrigerant, the most first; a rack goes by its shop. */
 export async function fullFacts(db: Database, bounds: DateBounds): Promise<FullFacts[]> {
   const full = findingFilter('nearly-full', bounds)
   const { rows } = await db.readClient.execute({
-    sql: `SELECT c.refrigerant, c.id, c.net_grams, p.name FROM cylinders c JOIN places p ON p.id = c.place_id
+    sql: `SELECT c.refrigerant, c.id, c.net_grams, coalesce(shop.name, p.name) AS place FROM cylinders c
+      JOIN places p ON p.id = c.place_id LEFT JOIN places shop ON shop.id = p.parent_id
       WHERE ${full.sql} AND c.severity < 2 AND c.lifecycle = 'in-service' AND c.label_code IS NOT NULL AND c.refrigerant IS NOT NULL
-        AND p.kind IN ('shop', 'rack') AND c.id NOT IN (SELECT o.cylinder_id FROM open_lines o) ORDER BY c.refrigerant, p.name, c.id`,
+        AND p.kind IN ('shop', 'rack') AND c.id NOT IN (SELECT o.cylinder_id FROM open_lines o) ORDER BY c.refrigerant, place, c.id`,
     args: full.args,
   })
   return [...new Set(rows.map(row => row[0] as string))].map((refrigerant) => {
