@@ -30,6 +30,8 @@ export default defineConfig(async () => ({
           name: 'component',
           include: ['tests/component/**/*.test.ts'],
           setupFiles: ['tests/helpers/nobodySignedIn.ts'],
+          // The framework's own start belongs to the first file's set-up.
+          hookTimeout: 60_000,
           environment: 'nuxt',
           environmentOptions: { nuxt: { domEnvironment: 'happy-dom' } },
         },
