@@ -23,7 +23,8 @@ export function usePrintSetting(codes: Ref<readonly string[]>, mayPrint: () => b
   const withAdvice = ref(false)
 
   const code = computed(() => codes.value[0] ?? EXAMPLE_CODE)
-  const payload = computed(() => labelUrl(address.data.value?.publicUrl ?? 'https://cylinders.example', code.value))
+  const here = useRequestURL().origin
+  const payload = computed(() => labelUrl(address.data.value?.publicUrl ?? here, code.value))
   const fitting = computed<Fitting>(() => ({ stock: LABEL_STOCKS[stock.value], dotsPerInch: printer.value.dotsPerInch, diameterMm: diameterMm.value }))
   const fit = computed(() => symbolFit(payload.value, fitting.value))
   const words = computed(() => symbolWords(fit.value, diameterMm.value))

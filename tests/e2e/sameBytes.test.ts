@@ -21,7 +21,7 @@ const QUERIES = fc.sample(fc.record({
   refrigerant: fc.constantFrom(...CATALOGUE.refrigerants.keys(), ...CATALOGUE.compositions.keys()),
   condition: anyCondition,
   gross: fc.option(readingAtDivision(1, 2500), { nil: undefined }),
-  share: fc.option(fc.integer({ min: 1, max: 800 }), { nil: undefined }),
+  share: fc.option(fc.integer({ min: 10, max: 800 }), { nil: undefined }),
 }), { seed: SEED, numRuns: 400 }).map(({ stamp, gross, share, ...named }) => queryOf(stamp, { ...named, gross, share }))
 
 type Asked = { refrigerant: string, condition: string, gross: MassReading | undefined, share: number | undefined }

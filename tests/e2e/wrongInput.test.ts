@@ -282,7 +282,7 @@ describe('a label that does not lead to a cylinder', () => {
     // Without a camera the field is there already.
     await type.or(page.getByText('This device has no camera')).first().waitFor()
     if (await type.isVisible()) await type.click()
-    await page.getByLabel('The label, or the last characters of the stamp').fill(typed)
+    await page.getByLabel('Nine characters of the label').fill(typed)
     await page.getByText(new RegExp(`The ninth character does not fit\\. Compare .*${group}.* with the label\\.`)).waitFor()
     await page.getByRole('button', { name: formatLabelCode(labelCode!) }).click()
     await page.getByRole('region', { name: `Cylinder ${formatLabelCode(labelCode!)}` }).waitFor()

@@ -38,8 +38,8 @@ describe('a cursor that no answer gave', () => {
   })
 
   it('finds nothing more than its own text where it holds SQL', async () => {
-    const cursor = inBase64(JSON.stringify(['~', 'x\' OR \'1\'=\'1']))
-    const { status, body } = await shop.manager.client.get<FleetAnswer>(`/api/cylinders?sort=code&cursor=${cursor}`)
+    const cursor = inBase64(JSON.stringify(['code', 'asc', 1, 0, '~', 'x\' OR \'1\'=\'1']))
+    const { status, body } = await shop.manager.client.get<FleetAnswer>(`/api/cylinders?sort=code&order=asc&cursor=${cursor}`)
     expect([status, body.items]).toEqual([200, []])
   })
 })

@@ -28,7 +28,6 @@ const NAMED_ONLY: Record<string, string> = {
   'vuejs.org': 'where an error of the framework is explained',
   'github.com': 'where a library is at home',
   'fastly.jsdelivr.net': 'where the decoder would be fetched; the scanner says to take the one of this server',
-  'api.iconify.design': 'where an icon would be fetched; ours are all in the bundle',
 }
 
 function filesIn(folder: string, fits: RegExp): string[] {
