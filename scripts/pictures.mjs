@@ -62,7 +62,7 @@ function picturesOf({ cylinder, overfilled, shipment }) {
 async function copyStamp(page) {
   const fields = {
     'Specification and service pressure': 'DOT-4BA400', 'Serial': 'K48213', 'Tare weight, TW, pounds': '27.5',
-    'Water capacity, WC, pounds': '47.6', 'Made': '03-21', 'Test mark 1, month and year': '04-25',
+    'Water capacity, WC, pounds': '47.6', 'Made': '03-21', 'Test mark 1, the mark, or its month and year': '04-25',
   }
   for (const [label, value] of Object.entries(fields)) await page.getByLabel(label, { exact: label === 'Serial' }).fill(value)
   const answer = page.getByRole('group', { name: 'Marked for flammables', exact: true }).getByRole('button', { name: 'no', exact: true })
