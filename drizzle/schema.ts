@@ -1,6 +1,7 @@
 import { sql } from 'drizzle-orm'
 import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import type { MassReading } from '../utils/quantity/mass'
+import type { ScaleStep } from '../utils/quantity/scale'
 
 // Instants are UTC milliseconds, masses whole grams, flags 0 or 1, months 'YYYY-MM', ids UUIDv7 in lower case.
 
@@ -35,7 +36,12 @@ export const people = sqliteTable('people', {
   name: text('name').notNull(),
   roles: text('roles', { mode: 'json' }).$type<string[]>().notNull(),
   trainee: integer('trainee', { mode: 'boolean' }).notNull().default(false),
+  /** What is written of a certification beside its type and number; from before these were asked for, all of it. */
   certification: text('certification'),
+  certificationType: text('certification_type', { enum: ['I', 'II', 'III', 'universal'] }),
+  certificationNumber: text('certification_number'),
+  /** Who usually supervises this trainee. */
+  supervisorId: text('supervisor_id'),
   units: text('units', { enum: ['lb', 'lb-oz', 'kg'] }).notNull(),
   /** null until the invitation is taken up. */
   passwordHash: text('password_hash'),
@@ -130,9 +136,13 @@ export const vanCheckIns = sqliteTable('van_check_ins', {
   checkedAt: integer('checked_at').notNull(),
 }, table => [index('van_check_ins_van').on(table.vanId, table.checkedAt)])
 
+/** The scales of the firm. A trigger refuses another accuracy: what was weighed on a scale rests on it. */
 export const scales = sqliteTable('scales', {
   id: text('id').primaryKey(),
   name: text('name').notNull(),
+  /** As it was entered; null where only whole grams are known. */
+  accuracyEntered: text('accuracy_entered', { mode: 'json' }).$type<ScaleStep>(),
+  /** Rounded up. */
   accuracyGrams: integer('accuracy_grams').notNull(),
   /** Hundredths of a percent of the reading. */
   accuracyBasisPoints: integer('accuracy_basis_points').notNull(),

@@ -4,6 +4,9 @@ import { exactGrams } from './mass'
 /** A scale of the firm, with how far its reading may be off: the larger of its grams and its percent. */
 export type Scale = { id: string, name: string, accuracyGrams: number, accuracyPercent: number, lastCheck: string | null }
 
+/** The smallest weight a scale is good to, as its data sheet has it. */
+export type ScaleStep = { unit: 'g' | 'oz' | 'lb' | 'kg', value: number }
+
 // From memory: what refrigerant charging scales commonly state, the larger of half an ounce and half a percent of the reading.
 const DEFAULT_ACCURACY: MassReading = { unit: 'lb-oz', lb: 0, oz: 0.5 }
 const DEFAULT_ACCURACY_PERCENT = 0.5
