@@ -68,12 +68,16 @@ function either(...filters: FleetFilter[]): FleetFilter {
   return { sql: filters.map(one => `(${one.sql})`).join(' OR '), args: filters.flatMap(one => one.args) }
 }
 
-/** By part of a code, of a serial, of a refrigerant or of a place's name. */
+/** By part of a code, of a serial, of a refrigerant or of a place's name. Codes and serials go by their characters: spaces and hyphens are how they were cut apart. */
 function searchFilter(text: string): FleetFilter {
-  const words = `%${text.replace(/[\\%_]/g, match => `\\${match}`)}%`
-  const squeezed = `%${text.replace(/[\s-]/g, '').replace(/[\\%_]/g, match => `\\${match}`)}%`
+  const words = partOf(text)
+  const characters = partOf(text.replace(/[\s-]/g, '') || text)
   return {
-    sql: `c.label_code LIKE ? ESCAPE '\\' OR c.serial LIKE ? ESCAPE '\\' OR c.refrigerant LIKE ? ESCAPE '\\' OR c.place_id IN (SELECT p.id FROM places p WHERE p.name LIKE ? ESCAPE '\\')`,
-    args: [squeezed, words, words, words],
+    sql: `c.label_code LIKE ? ESCAPE '\\' OR replace(replace(c.serial, ' ', ''), '-', '') LIKE ? ESCAPE '\\' OR c.refrigerant LIKE ? ESCAPE '\\' OR c.place_id IN (SELECT p.id FROM places p WHERE p.name LIKE ? ESCAPE '\\')`,
+    args: [characters, characters, words, words],
   }
+}
+
+function partOf(text: string): string {
+  return `%${text.replace(/[\\%_]/g, match => `\\${match}`)}%`
 }
