@@ -9,6 +9,7 @@ import { missingOf, type ExpectedCylinder } from '~~/utils/batch/missing'
 import type { CylinderView, FleetAnswer } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
+import { endsStamp } from '~~/utils/fleet/stampHits'
 
 const SAME_CODE_MS = 3_000
 
@@ -128,7 +129,7 @@ export function useBatch(key: string, plan: () => BatchPlan) {
   /** Says by the end of its serial which of two cylinders with one code is meant; gives whether one was found. */
   async function choose(reference: string, serialEnd: string): Promise<boolean> {
     const answer = await api.get<FleetAnswer>('/api/cylinders', { q: serialEnd, limit: 20 }).catch(() => null)
-    const fitting = answer?.items.filter(row => row.serial?.toUpperCase().endsWith(serialEnd.toUpperCase()) && row.findingCodes.includes('code-on-two')) ?? []
+    const fitting = answer?.items.filter(row => endsStamp(row.serial, serialEnd) && row.findingCodes.includes('code-on-two')) ?? []
     if (fitting.length !== 1) return false
     const view = await api.get<CylinderView>(`/api/cylinders/${fitting[0]!.id}`).catch(() => null)
     if (!view) return false

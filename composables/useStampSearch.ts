@@ -1,21 +1,20 @@
 import { problemOf, useApi } from '~~/composables/useApi'
-import type { CylinderRow, FleetAnswer } from '~~/utils/contract/custody'
+import type { FleetAnswer } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
-import { stampHits } from '~~/utils/fleet/stampHits'
+import { stampFound, type StampFound } from '~~/utils/fleet/stampHits'
 
 const MOST_ASKED = 200
-const MOST_FOUND = 20
 
 /** The cylinders whose stamp has some typed characters; null before they are asked for. */
 export function useStampSearch() {
   const api = useApi()
-  const found = ref<CylinderRow[] | null>(null)
+  const found = ref<StampFound | null>(null)
 
   /** Gives why it could not be asked, or null. */
   async function searchStamp(text: string): Promise<ProblemDetails | null> {
     try {
-      const { items } = await api.get<FleetAnswer>('/api/cylinders', { q: text, limit: MOST_ASKED })
-      found.value = stampHits(items, text).slice(0, MOST_FOUND)
+      const { items, total } = await api.get<FleetAnswer>('/api/cylinders', { q: text, limit: MOST_ASKED })
+      found.value = stampFound(items, text, total)
       return null
     }
     catch (error) {
