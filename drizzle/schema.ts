@@ -275,6 +275,38 @@ export const labelClaims = sqliteTable('label_claims', {
   deviceSeq: integer('device_seq').notNull(),
 }, table => [index('label_claims_code').on(table.code), index('label_claims_cylinder').on(table.cylinderId)])
 
+/**
+ * Photos that arrived, as they are kept: turned upright, of a bounded size, with nothing in them but the picture. The
+ * files lie under the hash. Append-only: triggers refuse UPDATE and DELETE.
+ */
+export const attachments = sqliteTable('attachments', {
+  /** Made by the phone, so that a photo sent twice is kept once. */
+  id: text('id').primaryKey(),
+  subject: text('subject', { enum: ['stamp', 'damage', 'scale', 'other'] }).notNull(),
+  /** As the phone's clock had it; null where it did not say. */
+  takenAt: integer('taken_at'),
+  sentBy: text('sent_by').notNull(),
+  arrivedAt: integer('arrived_at').notNull(),
+  /** SHA-256 (hexadecimal) of the file as received: by it a repetition is known. */
+  sourceHash: text('source_hash').notNull(),
+  /** SHA-256 (hexadecimal) of the picture as kept. */
+  contentHash: text('content_hash').notNull(),
+  bytes: integer('bytes').notNull(),
+  width: integer('width').notNull(),
+  height: integer('height').notNull(),
+})
+
+/**
+ * Photos put to an event after it was recorded; the event itself, and its hash, stay as they were. What an event names
+ * itself (`photoIds`) is not repeated here. Append-only, held by triggers.
+ */
+export const attachmentEvents = sqliteTable('attachment_events', {
+  attachmentId: text('attachment_id').notNull().references(() => attachments.id),
+  eventId: text('event_id').notNull(),
+  putBy: text('put_by').notNull(),
+  putAt: integer('put_at').notNull(),
+}, table => [primaryKey({ columns: [table.attachmentId, table.eventId] }), index('attachment_events_event').on(table.eventId)])
+
 export const shipments = sqliteTable('shipments', {
   id: text('id').primaryKey(),
   /** Counts up from 1: what people call it. */
