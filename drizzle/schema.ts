@@ -185,6 +185,18 @@ export const custodyEvents = sqliteTable('custody_events', {
   hash: text('hash').notNull(),
 }, table => [uniqueIndex('custody_events_cylinder_version').on(table.cylinderId, table.version)])
 
+/**
+ * Signed checkpoints of the custody log. Append-only like the log itself; the key that signs them is never in here.
+ */
+export const checkpoints = sqliteTable('checkpoints', {
+  /** Counts up from 1. */
+  number: integer('number').primaryKey(),
+  /** The signed note: all that a checkpoint says stands in it. */
+  note: text('note').notNull(),
+  /** Who asked for it; null for the daily one. */
+  askedBy: text('asked_by'),
+})
+
 /** A cache of the fold: one row a cylinder. Made again from the log by `npm run rebuild`. */
 export const cylinders = sqliteTable('cylinders', {
   id: text('id').primaryKey(),
