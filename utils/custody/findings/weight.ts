@@ -35,7 +35,7 @@ export function weightNotKnown(since: number | null): Finding {
 }
 
 /** An amount went in or out that no weight from before can tell. */
-export function amountNotKnown(verb: 'recovered' | 'drawn'): Finding {
+export function amountNotKnown(verb: 'recovered' | 'drawn' | 'transferred'): Finding {
   return {
     code: 'weight-not-known', severity: 'caution', source: OWN_RULE, since: null,
     text: `No weight is known from before, so how much was ${verb} is not known and counts in no total. Correct the event if the weight before is on paper.`,

@@ -6,7 +6,7 @@ import { retestOf } from '../retestOf'
 import type { Turn } from './turn'
 
 /** What spoke against putting a refrigerant in at the time of a fill: the plan would have been refused, the fact is kept. */
-export function againstFill(turn: Turn<'filled'>, refrigerant: string | null): Finding[] {
+export function againstFill(turn: Turn, refrigerant: string | null): Finding[] {
   const { state, context, event } = turn
   if (state.stamp === null) return []
   const fit = fitFindings({ stamp: state.stamp, refrigerant, catalogue: context.catalogue })
