@@ -6,6 +6,7 @@ import { psigFromKPa } from '../quantity/pressure'
 import { celsiusFromFahrenheit, fahrenheitFromCelsius } from '../quantity/temperature'
 import { hasLiquidAt, liquidDensityAt } from '../refrigerant/saturation'
 import type { Catalogue, Refrigerant } from '../refrigerant/types'
+import type { AxisMark } from './axisMark'
 import type { HeatQuestion } from './heatQuestion'
 import { liquidFullWords, volumeShare } from './heatWords'
 
@@ -27,8 +28,8 @@ export type HeatDrawing = {
   places: { x: number, y: number }[]
   /** Temperatures to look at: 77 F or 70 F, and 131 F. */
   marks: { x: number, y: number, temperature: string, value: string }[]
-  xTicks: { at: number, label: string }[]
-  yTicks: { at: number, label: string }[]
+  xTicks: AxisMark[]
+  yTicks: AxisMark[]
   /** From where on the cylinder is liquid-full; null where that is not within the picture. */
   fullFrom: number | null
 }

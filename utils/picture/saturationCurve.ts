@@ -1,11 +1,9 @@
 import { formatGauge, formatThermometer, gaugeFromKPa, thermometerFromCelsius, type GaugeUnit } from '../quantity/gauge'
 import type { Saturation } from '../refrigerant/saturation'
+import type { AxisMark } from './axisMark'
 
 /** A row of a saturation table. Units: C, kPa absolute. */
 export interface CurvePoint { tC: number, bubblePressureKPa: number, dewPressureKPa: number }
-
-/** A mark along an axis: where, in percent from the left or the top, and what is written at it. */
-export interface AxisMark { at: number, label: string }
 
 /** Pressure over temperature in a box of 100 by 100, from the left and from the top. */
 export interface SaturationDrawing {
