@@ -29,26 +29,6 @@ export function monthOfInstant(ms: number, timeZone: string): Month {
   return monthOfCount(year * 12 + month - 1)
 }
 
-/**
- * The last millisecond of a month in a time zone: up to it a test that falls due in that month may be done.
- *
- * Found by halving, so that a change of the clock at midnight cannot move it.
- */
-export function lastInstantOfMonth(month: Month, timeZone: string): number {
-  const wanted = monthCount(month)
-  const format = dateFormat(timeZone)
-  const nextMonthInUtc = Date.UTC(Math.floor((wanted + 1) / 12), (wanted + 1) % 12)
-  let within = nextMonthInUtc - MS_PER_DAY
-  let after = nextMonthInUtc + MS_PER_DAY
-  while (after - within > 1) {
-    const middle = Math.floor((within + after) / 2)
-    const date = dateIn(format, middle)
-    if (date.year * 12 + date.month - 1 > wanted) after = middle
-    else within = middle
-  }
-  return within
-}
-
 /** Calendar days from today to the last day of a month in a time zone: 0 on that day, negative after it. */
 export function daysUntilEndOfMonth(month: Month, nowMs: number, timeZone: string): number {
   const next = monthCount(month) + 1

@@ -23,11 +23,6 @@ export function readMonthMark(text: string, thisMonth: Month): Month | null {
   return monthOf(monthFirst[2]!.length === 4 ? year : fullYear(year, Number(thisMonth.slice(0, 4))), monthFirst[1]!)
 }
 
-/** A month as it is struck on a collar, '03-21'. */
-export function formatMonthMark(month: Month): string {
-  return `${month.slice(5)}-${month.slice(2, 4)}`
-}
-
 function fullYear(year: number, thisYear: number): number {
   const century = Math.floor(thisYear / 100) * 100
   const inThisCentury = century + year

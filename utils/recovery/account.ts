@@ -3,7 +3,8 @@ import type { PressureClassing } from '../refrigerant/pressureClass'
 import { SMALL_CHARGE_GRAMS, type TableCell } from './evacuationTable'
 import type { TableAnswer } from './tableLevel'
 import type { AccountLine, EvacuationInput, EvacuationLevel } from './types'
-import { CHARGE_BAND_WORDS, CIRCUMSTANCES_WORDS, formatCharge, levelWords, MACHINE_MADE_WORDS, PRESSURE_CLASS_WORDS } from './words'
+import { pressureClassInWords } from '../refrigerant/words'
+import { CHARGE_BAND_WORDS, CIRCUMSTANCES_WORDS, formatCharge, levelWords, MACHINE_MADE_WORDS } from './words'
 
 interface Found {
   input: EvacuationInput
@@ -35,15 +36,15 @@ function classLine({ input, classing, cell, matters }: Found): Line {
   const term = 'Pressure class'
   if (!input.refrigerant || !classing) {
     const assumption = matters.pressureClass ? 'The refrigerant is not known: taken as low pressure, the row that asks for most.' : null
-    return { term, value: 'refrigerant not known', note: `taken as ${PRESSURE_CLASS_WORDS[cell.pressureClass]}`, isAssumed: true, assumption }
+    return { term, value: 'refrigerant not known', note: `taken as ${pressureClassInWords(cell.pressureClass)}`, isAssumed: true, assumption }
   }
   const { designation } = input.refrigerant
-  const value = PRESSURE_CLASS_WORDS[cell.pressureClass]
+  const value = pressureClassInWords(cell.pressureClass)
   const at104F = 'aboveCritical' in classing.at104F
     ? `${designation} is above its critical temperature at 104 °F`
     : `${designation} stands at ${psia(classing.at104F.bubblePressureKPa)} psia at 104 °F`
   if (!classing.nearBound) return { term, value, note: `${at104F}; ${classing.source}`, isAssumed: false, assumption: null }
-  const between = `${at104F}, near the bound of ${Math.round(classing.nearBound.boundKPa / KPA_PER_PSI)} psia between ${PRESSURE_CLASS_WORDS[classing.pressureClass]} and ${PRESSURE_CLASS_WORDS[classing.nearBound.pressureClass]}`
+  const between = `${at104F}, near the bound of ${Math.round(classing.nearBound.boundKPa / KPA_PER_PSI)} psia between ${pressureClassInWords(classing.pressureClass)} and ${pressureClassInWords(classing.nearBound.pressureClass)}`
   if (!matters.pressureClass) return { term, value, note: `${between}; both ask for the same here`, isAssumed: false, assumption: null }
   return { term, value, note: `${between}; the one that asks for more counts`, isAssumed: true, assumption: `${between}: taken as ${value}, which asks for more.` }
 }
@@ -79,7 +80,7 @@ function circumstancesLine({ input, cell, level }: Found): Line | null {
 
 function rowName(cell: TableCell): string {
   const hasOneRow = cell.pressureClass === 'very-high' || cell.pressureClass === 'low'
-  const row = PRESSURE_CLASS_WORDS[cell.pressureClass]
+  const row = pressureClassInWords(cell.pressureClass)
   return `row “${row}${hasOneRow ? '' : `, ${CHARGE_BAND_WORDS[cell.charge]}`}”`
 }
 

@@ -1,16 +1,7 @@
 import { formatMass } from '../quantity/mass'
 import { inHgBelow, micronsFromMmHg } from '../quantity/vacuum'
-import type { PressureClass } from '../refrigerant/pressureClass'
 import { mostLeftMmHg, STANDARD_ATMOSPHERE_INHG } from './evacuationTable'
 import type { Appliance, ChargeBand, Circumstances, EvacuationLevel, MachineMade } from './types'
-
-/** The pressure classes of appliances, as the table says them. */
-export const PRESSURE_CLASS_WORDS: Record<PressureClass, string> = {
-  'very-high': 'very high pressure',
-  'high': 'high pressure',
-  'medium': 'medium pressure',
-  'low': 'low pressure',
-}
 
 /** What is opened. */
 export const APPLIANCE_WORDS: Record<Appliance, string> = {

@@ -6,6 +6,15 @@ export const PRESSURE_CLASS_NAMES: Record<PressureClass, string> = {
   'very-high': 'very high', 'high': 'high', 'medium': 'medium', 'low': 'low',
 }
 
+/**
+ * A pressure class in a sentence.
+ *
+ * @example pressureClassInWords('very-high') // 'very high pressure'
+ */
+export function pressureClassInWords(pressureClass: PressureClass): string {
+  return `${PRESSURE_CLASS_NAMES[pressureClass]} pressure`
+}
+
 /** What the basis of a GWP is called. */
 export const GWP_BASIS_WORDS: Record<GwpBasis, string> = {
   'AR4': 'IPCC, fourth report (2007)',

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { formatMonthMark, readMonthMark } from '../../../../utils/quantity/monthMark'
+import { readMonthMark } from '../../../../utils/quantity/monthMark'
 
 describe('a month as it is struck on a collar', () => {
   it.each([
@@ -19,9 +19,5 @@ describe('a month as it is struck on a collar', () => {
 
   it.each(['', '13-21', '00-21', 'March 21', '0321', '3-1'])('does not guess at “%s”', (typed) => {
     expect(readMonthMark(typed, '2026-12')).toBeNull()
-  })
-
-  it('is written as it is struck', () => {
-    expect(formatMonthMark('2021-03')).toBe('03-21')
   })
 })
