@@ -7,7 +7,7 @@ import { onGauges } from '~~/utils/recovery/words'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
 import { asListed } from '~~/utils/refrigerant/designation'
 import type { Refrigerant } from '~~/utils/refrigerant/types'
-import { problem } from '../http/problem'
+import { impossible } from '../http/impossible'
 
 /**
  * The level that an appliance must be evacuated to, and whether it was reached.
@@ -51,8 +51,4 @@ function reachedOf({ inHg, barometerInHg, microns, mmHgAbsolute, recovered, char
   if (recovered === undefined) return null
   if (!charge || exactGrams(charge) === 0) throw impossible('charge', 'must be known and more than nothing: what was recovered is a share of it')
   return { recoveredGrams: exactGrams(recovered), chargeGrams: exactGrams(charge) }
-}
-
-function impossible(path: string, message: string) {
-  return problem(422, 'This cannot be answered', 'Mend what is named.', [{ path, message }])
 }

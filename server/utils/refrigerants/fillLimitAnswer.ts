@@ -11,7 +11,7 @@ import { idealMixture } from '~~/utils/refrigerant/idealMixture'
 import type { Catalogue, Composition } from '~~/utils/refrigerant/types'
 import { mixtureName } from '~~/utils/refrigerant/words'
 import type { Requalification } from '~~/utils/requalification/requalification'
-import { problem } from '../http/problem'
+import { impossible } from '../http/impossible'
 
 /**
  * The capacity of a stamp for a refrigerant, by the firm's rule of today.
@@ -101,8 +101,4 @@ function netOf(gross: MassReading | undefined, tare: MassReading | undefined): n
   const net = readingGrams(gross) - readingGrams(tare)
   if (net >= 0) return net
   return -net <= scaleAccuracyGrams(readingGrams(gross)) ? 0 : null
-}
-
-function impossible(path: string, message: string) {
-  return problem(422, 'This cannot be computed', 'Mend what is named.', [{ path, message }])
 }
