@@ -2,7 +2,8 @@ import { useApi } from '~~/composables/useApi'
 import type { BatchPlan } from '~~/composables/useBatch'
 import { useLoaded } from '~~/composables/useLoaded'
 import { useSessionStore } from '~~/stores/session'
-import { supervisorsFor } from '~~/utils/access/supervisors'
+import { supervisorsFor, usualSupervisorId } from '~~/utils/access/supervisors'
+import { queryText } from '~~/utils/address/queryText'
 import { batchActOf, type BatchAct } from '~~/utils/batch/batchAct'
 import type { ExpectedCylinder } from '~~/utils/batch/missing'
 import type { CylinderRow, CylinderView, FleetAnswer } from '~~/utils/contract/custody'
@@ -20,14 +21,24 @@ export function useBatchPlan() {
   const api = useApi()
   const route = useRoute()
   const session = useSessionStore()
-  const supervisorId = ref('')
+  const chosenSupervisorId = ref<string | null>(null)
 
   const lists = useLoaded('batch-lists', async () => {
     const [places, people] = await Promise.all([
       api.get<PlacesAnswer>('/api/places', { active: true }),
       session.user?.trainee ? api.get<PeopleAnswer>('/api/people', { active: true }) : null,
     ])
-    return { places: places.items, supervisors: people && supervisorsFor(people.items, session.user!.id) }
+    return {
+      places: places.items,
+      supervisors: people && supervisorsFor(people.items, session.user!.id),
+      usualSupervisorId: usualSupervisorId(people?.items ?? [], session.user?.id ?? ''),
+    }
+  })
+  const supervisorId = computed({
+    get: () => chosenSupervisorId.value ?? lists.data.value?.usualSupervisorId ?? '',
+    set: (next) => {
+      chosenSupervisorId.value = next
+    },
   })
   const places = computed(() => lists.data.value?.places ?? [])
 
@@ -69,8 +80,7 @@ export function useBatchPlan() {
   })
 
   function text(name: string): string {
-    const value = route.query[name]
-    return typeof value === 'string' ? value : ''
+    return queryText(route.query, name)
   }
 
   function ask(changes: Record<string, string | undefined>) {

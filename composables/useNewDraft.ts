@@ -1,6 +1,7 @@
 import { v7 as uuidv7 } from 'uuid'
 import { useApi } from '~~/composables/useApi'
 import { useAttempt } from '~~/composables/useAttempt'
+import { queryList } from '~~/utils/address/queryText'
 
 /** Makes the draft of a shipment or of a test lot and opens its page; sent again for want of signal, it makes no second. */
 export function useNewDraft(kind: 'shipments' | 'test-lots', pages: string) {
@@ -10,7 +11,7 @@ export function useNewDraft(kind: 'shipments' | 'test-lots', pages: string) {
   let draftId = uuidv7()
 
   /** Ids of the cylinders chosen on another page. */
-  const chosen = computed(() => typeof route.query.with === 'string' ? route.query.with.split(',').filter(id => id !== '') : [])
+  const chosen = computed(() => queryList(route.query, 'with'))
 
   /** Says what is still to be chosen. */
   function refuse(title: string, detail: string) {

@@ -4,12 +4,13 @@ import { importsOf, projectFiles, type Import } from '../helpers/sources'
 /** Folders of utils/ and the other folders of utils/ that each may import. None may import what imports it. */
 const PURE: Record<string, readonly string[]> = {
   quantity: [],
+  address: [],
   access: [],
   label: [],
   refrigerant: ['quantity'],
   requalification: ['quantity'],
   capacity: ['quantity', 'refrigerant', 'requalification'],
-  recovery: ['quantity', 'refrigerant'],
+  recovery: ['quantity', 'refrigerant', 'address'],
   custody: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'access', 'label', 'registration'],
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
   contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'custody', 'access', 'label'],

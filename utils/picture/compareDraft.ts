@@ -1,3 +1,4 @@
+import { queryText, withoutEmpty } from '../address/queryText'
 import type { ProblemError } from '../contract/problem'
 import type { CylinderView } from '../custody/cylinderView'
 import { parseFigure } from '../quantity/figure'
@@ -30,7 +31,7 @@ export type CompareQuery = Partial<Record<CompareKey, string>>
 
 /** The fields of an address, whatever they hold. */
 export function compareDraft(query: Record<string, unknown>): CompareDraft {
-  const text = (key: CompareKey) => typeof query[key] === 'string' ? query[key] : ''
+  const text = (key: CompareKey) => queryText(query, key)
   return {
     refrigerant: text('refrigerant'),
     composition: componentsOf(text('composition')),
@@ -74,7 +75,7 @@ export function compareQuery(draft: CompareDraft, unit: MassUnit): CompareQuery 
     flammableMarked: draft.flammableMarked ? 'true' : '',
     share: draft.share.trim(),
   }
-  return filled(query)
+  return withoutEmpty(query)
 }
 
 /**
@@ -130,7 +131,7 @@ export function compareAddress({ stamp, contents, capacity }: Pick<CylinderView,
     condition: contents.nothingInIt || contents.condition === 'clean' ? '' : contents.condition,
     flammableMarked: stamp?.flammableMarked ? 'true' : '',
   }
-  return { path: '/fill-limit', query: filled(query) }
+  return { path: '/fill-limit', query: withoutEmpty(query) }
 }
 
 // The stamp as it was read, but the tare that a retest set where there is one.
@@ -146,8 +147,4 @@ function grossText(stamp: CylinderView['stamp'], { nothingInIt, netGrams }: Cyli
 
 function inKilograms(grams: number): string {
   return massText({ unit: 'kg', value: grams / 1000 })
-}
-
-function filled(query: CompareQuery): CompareQuery {
-  return Object.fromEntries(Object.entries(query).filter(([, value]) => value !== ''))
 }

@@ -1,3 +1,4 @@
+import { queryText, withoutEmpty } from '../address/queryText'
 import { massText, parseMassText, readingGrams, type MassReading } from '../quantity/mass'
 import { isMachineDate, machineMadeBy } from './machineMade'
 import { reachedDraft, reachedQuery, type ReachedDraft } from './reachedDraft'
@@ -18,7 +19,7 @@ type Query = Record<string, string>
 
 /** The draft that an address holds. What it does not hold, or holds wrongly, is not known. */
 export function levelDraft(query: Record<string, unknown>): LevelDraft {
-  const text = (key: string) => typeof query[key] === 'string' ? query[key] : ''
+  const text = (key: string) => queryText(query, key)
   return {
     refrigerant: text('refrigerant'),
     charge: parseMassText(text('charge')),
@@ -32,7 +33,7 @@ export function levelDraft(query: Record<string, unknown>): LevelDraft {
 
 /** What the server is asked; the other half of the address is {@link addressOf}. */
 export function levelQuery({ refrigerant, charge, machineMade, appliance, circumstances, compressorRuns }: LevelDraft): Query {
-  return filled({
+  return withoutEmpty({
     refrigerant,
     charge: charge === null ? '' : massText(charge),
     machineMade: appliance === 'mvac' ? '' : machineMade,
@@ -58,8 +59,4 @@ function yearMade(text: string): MachineMade | '' {
 
 function oneOf<T extends string>(known: readonly T[], text: string): T | null {
   return known.find(one => one === text) ?? null
-}
-
-function filled(query: Query): Query {
-  return Object.fromEntries(Object.entries(query).filter(([, value]) => value !== ''))
 }

@@ -1,3 +1,4 @@
+import { queryText } from '../address/queryText'
 import { parseFigure } from '../quantity/figure'
 import { exactGrams, massText, parseMassText, type MassReading } from '../quantity/mass'
 import type { EvacuationLevel, Reached } from './types'
@@ -37,7 +38,7 @@ export function gaugeFor({ gauge }: ReachedDraft, { unit }: EvacuationLevel): Ga
 
 /** What was read, of what an address holds; of an empty one, nothing. */
 export function reachedDraft(query: Record<string, unknown>): ReachedDraft {
-  const text = (key: string) => typeof query[key] === 'string' ? query[key] : ''
+  const text = (key: string) => queryText(query, key)
   const gauge = GAUGES.find(one => text(one) !== '') ?? ''
   return {
     gauge,
