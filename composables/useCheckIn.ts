@@ -4,7 +4,7 @@ import { useAttempt } from '~~/composables/useAttempt'
 import { useBatch } from '~~/composables/useBatch'
 import { useLoaded } from '~~/composables/useLoaded'
 import { useSessionStore } from '~~/stores/session'
-import { supervisorsFor } from '~~/utils/access/supervisors'
+import { supervisorsFor, usualSupervisorId } from '~~/utils/access/supervisors'
 import { isCounted } from '~~/utils/batch/batchLine'
 import type { CylinderRow } from '~~/utils/contract/custody'
 import type { PeopleAnswer } from '~~/utils/contract/people'
@@ -24,7 +24,7 @@ export function useCheckIn(vanId: string) {
   const { busy, problem: keepProblem, attempt } = useAttempt()
 
   const shopId = ref('')
-  const supervisorId = ref('')
+  const chosenSupervisorId = ref<string | null>(null)
   const stayingIds = ref(new Set<string>())
   const done = shallowRef<CheckedIn | null>(null)
   // Under one id however often it is sent.
@@ -39,7 +39,18 @@ export function useCheckIn(vanId: string) {
       session.user?.trainee ? api.get<PeopleAnswer>('/api/people', { active: true }) : null,
     ])
     const shops = places.items.filter(({ kind }) => kind === 'shop' || kind === 'rack')
-    return { answer, shops, supervisors: people && supervisorsFor(people.items, session.user!.id) }
+    return {
+      answer,
+      shops,
+      supervisors: people && supervisorsFor(people.items, session.user!.id),
+      usualSupervisorId: usualSupervisorId(people?.items ?? [], session.user?.id ?? ''),
+    }
+  })
+  const supervisorId = computed({
+    get: () => chosenSupervisorId.value ?? loaded.data.value?.usualSupervisorId ?? '',
+    set: (next) => {
+      chosenSupervisorId.value = next
+    },
   })
 
   const van = computed(() => loaded.data.value?.answer.van ?? null)

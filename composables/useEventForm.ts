@@ -22,13 +22,13 @@ interface Kept<Draft> {
 /**
  * The content of a form, kept until it is recorded: a lost network, a refusal or a closed page loses nothing.
  *
- * Shape: `key` names the form, by cylinder and kind.
+ * Shape: `key` names the form, by cylinder and kind; `supervisorId` is whom a trainee's form begins with, '' for nobody.
  */
-export function useEventForm<Draft extends object>(key: string, empty: () => Draft) {
+export function useEventForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string = () => '') {
   const posting = usePostingStore()
   const { restored: kept, keep: store } = useKept<Kept<Draft>>(key)
   const draft = ref(empty()) as Ref<Draft>
-  const envelope = ref<Envelope>({ at: '', supervisorId: '', note: '' })
+  const envelope = ref(emptyEnvelope())
   const sent = shallowRef<Kept<Draft>['sent']>(null)
   const restored = ref(false)
   const busy = ref(false)
@@ -45,13 +45,17 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
     watch([draft, envelope], keep, { deep: true })
   })
 
+  function emptyEnvelope(): Envelope {
+    return { at: '', supervisorId: supervisorId(), note: '' }
+  }
+
   function keep() {
     store({ draft: draft.value, envelope: envelope.value, sent: sent.value })
   }
 
   function startOver() {
     draft.value = empty()
-    envelope.value = { at: '', supervisorId: '', note: '' }
+    envelope.value = emptyEnvelope()
     sent.value = null
     restored.value = false
     problem.value = null

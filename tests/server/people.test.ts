@@ -1,7 +1,9 @@
 import { createClient } from '@libsql/client'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { InvitedAnswer, PeopleAnswer } from '../../utils/contract/people'
+import type { InvitedAnswer, PeopleAnswer, PersonAnswer } from '../../utils/contract/people'
 import type { MailAnswer } from '../../utils/contract/mail'
+import type { Place, PlacesAnswer } from '../../utils/contract/places'
+import type { ProblemDetails } from '../../utils/contract/problem'
 import { TestClient } from '../helpers/client'
 import { addMember, ADMIN, invitationToken, PASSWORD, setUpFirm, type Member } from '../helpers/firm'
 import { startServer, type TestServer } from '../helpers/server'
@@ -72,10 +74,98 @@ describe('the firm\'s people', () => {
     }
   })
 
+  it('have a certification by its type and number, or as it was written', async () => {
+    const { body } = await admin.client.patch<PersonAnswer>(`/api/people/${tech.id}`, { certificationType: 'II', certificationNumber: '4411' })
+    expect(body.person).toMatchObject({ certificationType: 'II', certificationNumber: '4411', certification: null })
+    expect((await tech.client.get('/api/session')).body).toMatchObject({ user: { certificationType: 'II', certificationNumber: '4411' } })
+    const noType = await admin.client.patch<ProblemDetails>(`/api/people/${tech.id}`, { certificationType: null })
+    expect([noType.status, noType.body.errors?.map(({ path }) => path)]).toEqual([422, ['certificationNumber']])
+    expect((await admin.client.patch(`/api/people/${tech.id}`, { certificationType: 'IV' })).status).toBe(400)
+    expect((await admin.client.patch(`/api/people/${tech.id}`, { certificationType: null, certificationNumber: null })).status).toBe(200)
+  })
+
   it('are 404 where unknown and 400 where the id is none', async () => {
     expect((await admin.client.patch('/api/people/01890000-0000-7000-8000-000000000000', { name: 'Nobody' })).status).toBe(404)
     expect((await admin.client.patch('/api/people/7', { name: 'Nobody' })).status).toBe(400)
     expect((await admin.client.patch('/api/people/%E0%A4%A', { name: 'Nobody' })).status).toBe(400)
+  })
+})
+
+describe('a trainee\'s usual supervisor', () => {
+  const change = (id: string, body: object) => admin.client.patch<PersonAnswer & ProblemDetails>(`/api/people/${id}`, body)
+
+  it('is a certified technician or manager in service, and no trainee', async () => {
+    const dan = await addMember(admin, 'Dan', ['technician'])
+    const tim = await addMember(admin, 'Tim', ['technician'], { trainee: true })
+    const uncertified = await change(tim.id, { supervisorId: dan.id })
+    expect([uncertified.status, uncertified.body.errors?.map(({ path }) => path)]).toEqual([422, ['supervisorId']])
+
+    await change(dan.id, { certificationType: 'universal' })
+    expect((await change(tim.id, { supervisorId: dan.id })).body.person.supervisor).toEqual({ id: dan.id, name: 'Dan' })
+    for (const other of [tim.id, auditor.id, '01890000-0000-7000-8000-000000000000']) {
+      expect((await change(tim.id, { supervisorId: other })).status).toBe(422)
+    }
+    // Everybody who signs in sees it: the trainee's own forms begin with it.
+    const seen = (await tim.client.get<PeopleAnswer>('/api/people')).body.items.find(({ id }) => id === tim.id)
+    expect(seen?.supervisor).toEqual({ id: dan.id, name: 'Dan' })
+  })
+
+  it('is nobody\'s who is no trainee, and ends with the training', async () => {
+    const dan = await addMember(admin, 'Dana', ['manager'])
+    await change(dan.id, { certificationType: 'I' })
+    const tom = await addMember(admin, 'Tom', ['technician'])
+    expect((await change(tom.id, { supervisorId: dan.id })).status).toBe(422)
+    expect((await change(tom.id, { trainee: true, supervisorId: dan.id })).body.person.supervisor?.name).toBe('Dana')
+    expect((await change(tom.id, { trainee: false })).body.person.supervisor).toBeNull()
+    expect((await change(tom.id, { trainee: true })).body.person.supervisor).toBeNull()
+  })
+})
+
+describe('a technician\'s van', () => {
+  const van = async (name: string) => (await admin.client.post<Place>('/api/places', { name, kind: 'van' })).body
+  const holderOf = async (id: string) => (await admin.client.get<PlacesAnswer>('/api/places')).body.items.find(each => each.id === id)?.technicianName
+  const change = (id: string, body: object) => admin.client.patch<PersonAnswer & ProblemDetails>(`/api/people/${id}`, body)
+
+  it('is the same from the person and from the place, and goes from one hand to the next', async () => {
+    const [one, other] = [await van('Van 11'), await van('Van 14')]
+    const [ole, pat] = [await addMember(admin, 'Ole', ['technician']), await addMember(admin, 'Pat', ['technician'])]
+    expect((await change(ole.id, { vanId: one.id })).body.person.vans).toEqual([{ id: one.id, name: 'Van 11' }])
+    expect(await holderOf(one.id)).toBe('Ole')
+
+    expect((await change(pat.id, { vanId: one.id })).body.person.vans.map(({ name }) => name)).toEqual(['Van 11'])
+    expect((await change(ole.id, { name: 'Ole' })).body.person.vans).toEqual([])
+
+    await change(pat.id, { vanId: other.id })
+    expect([await holderOf(one.id), await holderOf(other.id)]).toEqual([null, 'Pat'])
+    await change(pat.id, { vanId: null })
+    expect(await holderOf(other.id)).toBeNull()
+
+    await admin.client.patch(`/api/places/${one.id}`, { technicianId: ole.id })
+    expect((await change(ole.id, { name: 'Ole' })).body.person.vans).toEqual([{ id: one.id, name: 'Van 11' }])
+  })
+
+  it('is a van in use, of somebody who is a technician', async () => {
+    const shop = (await admin.client.post<Place>('/api/places', { name: 'Shop V', kind: 'shop' })).body
+    const sold = await van('Van 17')
+    await admin.client.patch(`/api/places/${sold.id}`, { active: false })
+    const uma = await addMember(admin, 'Uma', ['technician'])
+    for (const wrong of [shop.id, sold.id, '01890000-0000-7000-8000-000000000000']) {
+      expect((await change(uma.id, { vanId: wrong })).status).toBe(422)
+    }
+    expect((await change(auditor.id, { vanId: (await van('Van 20')).id })).body.errors?.map(({ path }) => path)).toEqual(['vanId'])
+  })
+
+  it('stays with its technician where the change beside it is refused', async () => {
+    const kept = await van('Van 23')
+    const refused = await change(admin.id, { roles: ['technician'], vanId: kept.id })
+    expect([refused.status, refused.body.type]).toEqual([409, 'last-admin'])
+    expect(await holderOf(kept.id)).toBeNull()
+  })
+
+  it('can be given with the invitation', async () => {
+    const given = await van('Van 26')
+    const { body } = await admin.client.post<InvitedAnswer>('/api/people', { name: 'Vic', email: 'vic@harbor.example', roles: ['technician'], vanId: given.id, certificationType: 'II' })
+    expect(body.person).toMatchObject({ vans: [{ id: given.id, name: 'Van 26' }], certificationType: 'II' })
   })
 })
 

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { CERTIFICATION_TYPES, type Certification } from '../access/certification'
 import { ROLES, type Role } from '../access/roles'
 import { id, line } from './parts'
 import { email, newPassword, units, type User } from './session'
@@ -6,22 +7,35 @@ import { email, newPassword, units, type User } from './session'
 const roles = z.array(z.enum(ROLES)).min(1, 'must name at least one role').max(ROLES.length)
   .refine(list => new Set(list).size === list.length, 'must name each role once')
 
-/** POST /api/people: makes a person and mails the invitation. 409 when the address is taken. */
+const workingLife = {
+  certification: line(80).nullish(),
+  certificationType: z.enum(CERTIFICATION_TYPES).nullish(),
+  certificationNumber: line(40).nullish(),
+  /** Who usually supervises a trainee. */
+  supervisorId: id.nullish(),
+  /** The van this technician has; whoever had it gives it up. null: none. */
+  vanId: id.nullish(),
+}
+
+/** POST /api/people: makes a person and mails the invitation. 409 when the address is taken, 422 for what does not fit together. */
 export const inviteBody = z.strictObject({
   name: line(80),
   email,
   roles,
   trainee: z.boolean().default(false),
-  certification: line(80).nullish(),
+  ...workingLife,
   units: units.optional(),
 })
 
-/** PATCH /api/people/{id}. A change of role or turning off ends that person's sessions. 409 for the last active admin. */
+/**
+ * PATCH /api/people/{id}. A change of role or turning off ends that person's sessions. 409 for the last active admin, 422 for
+ * what does not fit together. Who is no trainee any more has no supervisor.
+ */
 export const personChange = z.strictObject({
   name: line(80).optional(),
   roles: roles.optional(),
   trainee: z.boolean().optional(),
-  certification: line(80).nullish(),
+  ...workingLife,
   active: z.boolean().optional(),
 }).refine(change => Object.keys(change).length > 0, 'must change something')
 
@@ -29,14 +43,17 @@ export const personChange = z.strictObject({
 export const personParams = z.strictObject({ id })
 
 /** One line of GET /api/people. */
-export interface PersonLine {
+export interface PersonLine extends Certification {
   id: string
   name: string
   /** Only for who manages people and for the auditor; else null. */
   email: string | null
   roles: Role[]
   trainee: boolean
-  certification: string | null
+  /** Who usually supervises this trainee. */
+  supervisor: { id: string, name: string } | null
+  /** The vans that this person has, by name. */
+  vans: { id: string, name: string }[]
   active: boolean
   /** Has not yet chosen a password. */
   invited: boolean

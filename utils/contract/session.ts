@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import type { Certification } from '../access/certification'
 import type { Role } from '../access/roles'
 
 export const UNITS = ['lb', 'lb-oz', 'kg'] as const
@@ -30,13 +31,12 @@ export const passwordBody = z.strictObject({ current: z.string().min(1).max(512)
 export const unitsBody = z.strictObject({ units })
 
 /** Who is signed in. */
-export interface User {
+export interface User extends Certification {
   id: string
   name: string
   email: string
   roles: Role[]
   trainee: boolean
-  certification: string | null
   units: Units
 }
 

@@ -1,3 +1,4 @@
+import type { Certification } from '../../../utils/access/certification'
 import type { Access, Role } from '../../../utils/access/roles'
 import type { MassUnit } from '../../../utils/quantity/mass'
 import type { Random } from './random'
@@ -8,13 +9,13 @@ export const DEMO_PASSWORD = 'demo-cylinders-2026'
 export const DEMO_TIME_ZONE = 'America/Chicago'
 export const DEMO_FIRM = { name: 'Ferrowick Refrigeration', telephone: '(555) 010-0142', timeZone: DEMO_TIME_ZONE, units: 'lb' as MassUnit }
 
-export interface DemoPerson {
+export interface DemoPerson extends Certification {
   id: string
   email: string
   name: string
   roles: Role[]
   trainee: boolean
-  certification: string | null
+  supervisorId: string | null
   /** How this person reads a scale. */
   reads: MassUnit
 }
@@ -36,17 +37,21 @@ export interface Cast {
 /** The people, places and firms of the demo. */
 export function castOf(random: Random, startAt: number): Cast {
   const id = () => random.uuid(startAt)
-  const person = (email: string, name: string, roles: Role[], certification: string | null, reads: MassUnit, trainee = false): DemoPerson =>
-    ({ id: id(), email: `${email}@demo.example`, name, roles, trainee, certification, reads })
+  const person = (email: string, name: string, roles: Role[], reads: MassUnit, more: Partial<DemoPerson> = {}): DemoPerson => ({
+    id: id(), email: `${email}@demo.example`, name, roles, trainee: false, supervisorId: null,
+    certificationType: null, certificationNumber: null, certification: null, reads, ...more,
+  })
+  const technician = person('technician', 'Dayo Okafor', ['technician'], 'lb-oz', { certificationType: 'universal', certificationNumber: '555-20417' })
   const people: Cast['people'] = {
-    warehouse: person('warehouse', 'Walt Hadley', ['warehouse'], null, 'lb'),
-    technician: person('technician', 'Dayo Okafor', ['technician'], 'Universal, 40 CFR 82.161', 'lb-oz'),
-    second: person('technician2', 'Ines Vauclair', ['technician'], 'Type II, 40 CFR 82.161', 'lb'),
-    third: person('technician3', 'Tobias Renn', ['technician'], 'Universal, 40 CFR 82.161', 'kg'),
-    manager: person('manager', 'Maren Sorrel', ['manager'], 'Universal, 40 CFR 82.161', 'lb'),
-    auditor: person('auditor', 'Ruth Amberly', ['auditor'], null, 'lb'),
-    admin: person('admin', 'Kit Osgood', ['admin'], null, 'lb'),
-    trainee: person('trainee', 'Pia Lindmark', ['technician'], null, 'lb', true),
+    warehouse: person('warehouse', 'Walt Hadley', ['warehouse'], 'lb'),
+    technician,
+    second: person('technician2', 'Ines Vauclair', ['technician'], 'lb', { certificationType: 'II', certificationNumber: '555-31882' }),
+    // An old card, written down before types and numbers were asked for.
+    third: person('technician3', 'Tobias Renn', ['technician'], 'kg', { certification: 'Universal, card of 2009' }),
+    manager: person('manager', 'Maren Sorrel', ['manager'], 'lb', { certificationType: 'universal', certificationNumber: '555-10006' }),
+    auditor: person('auditor', 'Ruth Amberly', ['auditor'], 'lb'),
+    admin: person('admin', 'Kit Osgood', ['admin'], 'lb'),
+    trainee: person('trainee', 'Pia Lindmark', ['technician'], 'lb', { trainee: true, supervisorId: technician.id }),
   }
   const firm = (name: string, kind: DemoFirm['kind'], address: string, rin?: string): DemoFirm => {
     const mailbox = name.toLowerCase().replace(/[^a-z]+/g, '-')

@@ -1,3 +1,4 @@
+import { isCertified } from '../../../utils/access/certification'
 import { DOUBTFUL_CLAMP_MS, DOUBTFUL_SKEW_S } from '../../../utils/custody/fold/raiseCommon'
 import type { EntryFacts, NowFacts } from '../../../utils/now/nowFacts'
 import { lastVerification } from '../custody/lastVerification'
@@ -66,7 +67,7 @@ export function peopleAndPlaces(from: Directory): Pick<NowFacts, 'uncertified' |
   const places = [...from.places.values()].filter(({ active }) => active)
   const firms = [...from.firms.values()].filter(({ active }) => active)
   return {
-    uncertified: people.filter(one => one.roles.includes('technician') && !one.trainee && !one.certification).map(({ name }) => name).sort(),
+    uncertified: people.filter(one => one.roles.includes('technician') && !one.trainee && !isCertified(one)).map(({ name }) => name).sort(),
     notTakenUp: people.filter(({ passwordHash }) => passwordHash === null).map(({ name }) => name).sort(),
     missing: {
       shop: !places.some(({ kind }) => kind === 'shop'),

@@ -7,6 +7,7 @@ import { invitationPath, type Invitation, type InvitedAnswer, type inviteBody } 
 import type { User } from '../../../utils/contract/session'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
+import { directory } from '../directory/directory'
 import { useEnvironment } from '../environment'
 import { ownFirm } from '../firm'
 import { problem } from '../http/problem'
@@ -19,21 +20,29 @@ import { userOf } from '../session/person'
 import { endSessionsOf, newSession } from '../session/sessions'
 import { goodLink, INVITATION_DAYS, linkUnknown, newLink, stillGood, useUpLink } from './oneTimeLinks'
 import { personById } from './people'
+import { refuseMisfit } from './personFaults'
 import { personLine } from './personLine'
+import { giveVan } from './personVan'
 
 /**
  * Makes a person and invites them by mail.
  *
- * Errors: 409 when the address is taken.
+ * Errors: 409 when the address is taken; 422 for what does not fit together.
  */
 export async function invite(body: z.output<typeof inviteBody>, by: Access, now: number): Promise<InvitedAnswer> {
-  const { read, write } = useDatabase()
+  const db = useDatabase()
+  const { read, write } = db
   const id = uuid()
   const row = {
     id, name: body.name, email: body.email, roles: body.roles, trainee: body.trainee,
-    certification: body.certification ?? null, units: body.units ?? (await ownFirm()).units, createdAt: now,
+    certification: body.certification ?? null, certificationType: body.certificationType ?? null, certificationNumber: body.certificationNumber ?? null,
+    supervisorId: body.supervisorId ?? null, units: body.units ?? (await ownFirm()).units, createdAt: now,
   }
-  const [inserted] = await write([statement(read.insert(people).values(row).onConflictDoNothing().returning({ id: people.id }))])
+  refuseMisfit(await directory(db, true), row, body)
+  const [inserted] = await write([
+    statement(read.insert(people).values(row).onConflictDoNothing().returning({ id: people.id })),
+    ...(body.vanId ? giveVan(db, id, body.vanId, read.select({ id: people.id }).from(people).where(eq(people.id, id))) : []),
+  ])
   if (inserted?.rows.length === 0) {
     throw problem(409, 'The address is taken', 'Somebody has that address already.', [{ path: 'email', message: 'is taken' }], { type: 'email-taken' })
   }
@@ -58,7 +67,7 @@ export async function sendInvitation(personId: string, by: Access, now: number):
     link: useEnvironment().publicUrl + invitationPath(token),
     days: INVITATION_DAYS,
   }), now)
-  return { person: personLine(person, true), mail: outcome }
+  return { person: personLine(person, await directory(useDatabase(), true), true), mail: outcome }
 }
 
 /** Whose invitation a token is. Errors: 404. */

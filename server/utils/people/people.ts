@@ -6,19 +6,25 @@ import type { Access } from '../../../utils/access/roles'
 import type { PeopleAnswer, PersonLine, personChange } from '../../../utils/contract/people'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
+import { directory } from '../directory/directory'
 import { problem } from '../http/problem'
 import { securityEntry, type SecurityEvent } from '../securityLog'
 import { rolesOf } from '../session/person'
+import { isTrainee, refuseMisfit } from './personFaults'
 import { personLine } from './personLine'
+import { giveVan } from './personVan'
 
 type PersonRow = typeof people.$inferSelect
 type PersonChange = z.output<typeof personChange>
 
 /** The firm's people by name. */
 export async function listPeople(access: Access, active?: boolean): Promise<PeopleAnswer> {
-  const rows = await useDatabase().read.select().from(people)
-    .where(active === undefined ? undefined : eq(people.active, active)).orderBy(asc(people.name), asc(people.id))
-  return { items: rows.map(row => personLine(row, can(access, 'people:read-contact'))) }
+  const db = useDatabase()
+  const [rows, from] = await Promise.all([
+    db.read.select().from(people).where(active === undefined ? undefined : eq(people.active, active)).orderBy(asc(people.name), asc(people.id)),
+    directory(db),
+  ])
+  return { items: rows.map(row => personLine(row, from, can(access, 'people:read-contact'))) }
 }
 
 /**
@@ -33,14 +39,17 @@ export async function personById(id: string): Promise<PersonRow> {
 }
 
 /**
- * Changes a person. Another role or turning off ends that person's sessions in the same commit.
+ * Changes a person, and the van of theirs. Another role or turning off ends that person's sessions in the same commit.
  *
- * Errors: 404; 409 where nobody would be left who can manage people.
+ * Errors: 404; 409 where nobody would be left who can manage people; 422 for what does not fit together.
  */
-export async function changePerson(id: string, change: PersonChange, by: Access, now: number): Promise<PersonLine> {
+export async function changePerson(id: string, { vanId, ...told }: PersonChange, by: Access, now: number): Promise<PersonLine> {
   const before = await personById(id)
+  const db = useDatabase()
+  const { read, write } = db
+  refuseMisfit(await directory(db, true), { ...before, ...told, roles: told.roles ?? rolesOf(before) }, { supervisorId: told.supervisorId, vanId })
+  const change = isTrainee({ ...before, ...told }) ? told : { ...told, supervisorId: null }
   const after = { ...before, ...change, roles: change.roles ?? rolesOf(before) }
-  const { read, write } = useDatabase()
   const rights = !sameRoles(rolesOf(before), after.roles) || before.active !== after.active
   const stays = change.active !== false && (change.roles?.includes('admin') ?? true)
   // Only what is given: the rest may have been changed by somebody else meanwhile.
@@ -53,12 +62,13 @@ export async function changePerson(id: string, change: PersonChange, by: Access,
   const [updated] = await write([
     statement(update),
     ...(rights ? [statement(read.delete(sessions).where(inArray(sessions.personId, changed)))] : []),
+    ...(vanId === undefined ? [] : giveVan(db, id, vanId, changed)),
   ])
   if (updated?.rows.length === 0) {
     throw problem(409, 'The last administrator', 'Nobody would be left to manage people. Make another person administrator first.', undefined, { type: 'last-admin' })
   }
   await write([securityEntry({ what: happened(before, after), personId: by.personId, subject: id }, now)])
-  return personLine(await personById(id), true)
+  return personLine(await personById(id), await directory(db, true), true)
 }
 
 /** Holds where the person is no admin, or another admin can sign in. */

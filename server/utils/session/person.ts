@@ -18,6 +18,8 @@ export function userOf(row: PersonRow): User {
     roles: rolesOf(row),
     trainee: row.trainee,
     certification: row.certification,
+    certificationType: row.certificationType,
+    certificationNumber: row.certificationNumber,
     units: row.units,
   }
 }

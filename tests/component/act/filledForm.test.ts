@@ -46,7 +46,7 @@ registerEndpoint('/api/events', {
 
 async function openForm() {
   useSessionStore().set({
-    id: TECHNICIAN, name: 'A. Technician', email: 'a@firm.example', roles: ['technician'], trainee: false, certification: 'Universal', units: 'kg',
+    id: TECHNICIAN, name: 'A. Technician', email: 'a@firm.example', roles: ['technician'], trainee: false, certification: null, certificationType: 'universal', certificationNumber: null, units: 'kg',
   })
   usePreferencesStore().unit = 'kg'
   const page = await mountSuspended(ActPage, { route: `/c/${CODE.toLowerCase()}/act/filled` })

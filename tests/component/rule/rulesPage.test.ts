@@ -12,7 +12,7 @@ import { DEFAULT_RETEST_SETTINGS } from '~~/utils/requalification/retestSettings
 import { newRulePreview } from '~~/utils/rules/rulePreview'
 import { byRole } from '../../helpers/roles'
 
-const MANAGER: User = { id: 'p', name: 'M. Sorrel', email: 'sorrel@firm.example', roles: ['manager'], trainee: false, certification: null, units: 'lb' }
+const MANAGER: User = { id: 'p', name: 'M. Sorrel', email: 'sorrel@firm.example', roles: ['manager'], trainee: false, certification: null, certificationType: null, certificationNumber: null, units: 'lb' }
 const POLICY: PolicyAnswer = {
   asOf: 1_780_000_000_000, timeZone: 'America/Chicago', fillPolicies: [], retests: [], fillPolicy: DEFAULT_FILL_POLICY,
   retest: DEFAULT_RETEST_SETTINGS, rules: [], rowsBehind: 0, scales: [],

@@ -12,7 +12,7 @@ const ID = '01900000-0000-7000-8000-0000000000f1'
 const LINES = [['a', '0YHP9KRRT'], ['b', '7K3M9Q2TX']].map(([id, labelCode]): ShipmentLine => ({
   cylinder: cylinderRow({ id, labelCode }), version: 3, because: [], sent: null, received: null,
 }))
-const MANAGER: User = { id: 'p', name: 'M. Sorrel', email: 'sorrel@firm.example', roles: ['manager'], trainee: false, certification: null, units: 'lb' }
+const MANAGER: User = { id: 'p', name: 'M. Sorrel', email: 'sorrel@firm.example', roles: ['manager'], trainee: false, certification: null, certificationType: null, certificationNumber: null, units: 'lb' }
 
 function draft(lines: ShipmentLine[]) {
   return {
