@@ -267,7 +267,28 @@ export const movements = sqliteTable('movements', {
   apart: integer('apart', { mode: 'boolean' }).notNull(),
 }, table => [
   primaryKey({ columns: [table.cylinderId, table.eventId, table.ordinal] }),
-  index('movements_at').on(table.at),
+  // Holds all that a balance sums, in the order in which it groups.
+  index('movements_balance').on(table.refrigerant, table.ownerId, table.at, table.cause, table.apart, table.grams),
+])
+
+/** A cache of the fold: every change of what is held in stock, and of how surely that is known. */
+export const stockChanges = sqliteTable('stock_changes', {
+  cylinderId: text('cylinder_id').notNull(),
+  eventId: text('event_id').notNull(),
+  ordinal: integer('ordinal').notNull(),
+  refrigerant: text('refrigerant'),
+  ownerId: text('owner_id'),
+  grams: integer('grams').notNull(),
+  /** In the number of cylinders whose contents are not known. */
+  notKnown: integer('not_known').notNull(),
+  /** Squared grams: of the weights that the known contents rest on, and of the differences found by weighing. */
+  weighedVariance: integer('weighed_variance').notNull(),
+  foundVariance: integer('found_variance').notNull(),
+  at: integer('at').notNull(),
+  apart: integer('apart', { mode: 'boolean' }).notNull(),
+}, table => [
+  primaryKey({ columns: [table.cylinderId, table.eventId, table.ordinal] }),
+  index('stock_changes_balance').on(table.refrigerant, table.ownerId, table.at, table.apart, table.grams, table.notKnown, table.weighedVariance, table.foundVariance),
 ])
 
 /** Codes that were minted here. A code may be printed before it is on a cylinder. */

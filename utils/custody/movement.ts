@@ -7,6 +7,14 @@ export const MOVEMENT_CAUSES = [
 
 export type MovementCause = (typeof MOVEMENT_CAUSES)[number]
 
+/** Causes that say only that a weight or a tare differed: nobody knows why. */
+export const UNEXPLAINED_CAUSES = ['tare-change', 'weighing'] as const satisfies readonly MovementCause[]
+
+/** Whether a cause explains nothing. */
+export function isUnexplained(cause: MovementCause): boolean {
+  return (UNEXPLAINED_CAUSES as readonly MovementCause[]).includes(cause)
+}
+
 /** One signed change of net caused by one event, booked under one refrigerant and one owner. */
 export interface Movement {
   eventId: string
@@ -19,7 +27,7 @@ export interface Movement {
   ownerId: string | null
   /** Signed: in is positive. */
   grams: number
-  /** effectiveAt of the event, UTC milliseconds. */
+  /** effectiveAt of the event, UTC milliseconds; a registration counts from the cylinder's first event. */
   at: number
   /** The event was practice, or a trainee's without a countersignature: apart in reports. */
   apart: boolean

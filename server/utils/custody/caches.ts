@@ -4,6 +4,7 @@ import { fold, type FoldResult } from '../../../utils/custody/fold'
 import type { Movement } from '../../../utils/custody/movement'
 import { cacheRow } from '../../../utils/custody/row'
 import type { CylinderState } from '../../../utils/custody/state'
+import type { StockChange } from '../../../utils/custody/stockChange'
 import type { Directory } from '../directory/directory'
 import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
@@ -27,7 +28,7 @@ export function cacheStatements(group: Group): InStatement[] {
     const context = rowContext(group.directory, last.recorded_at, group.codesOnTwo(cylinderId))
     return [
       upsertCylinder(cylinderId, folded.state, context, guard),
-      ...movementStatements(cylinderId, folded, added, guard),
+      ...bookStatements(cylinderId, folded, added, guard),
       ...claimStatements(cylinderId, folded, added, guard),
     ]
   })
@@ -38,7 +39,7 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
   const folded = fold(events, foldContext(from))
   return [
     upsertCylinder(cylinderId, folded.state, rowContext(from, nowMs), NO_GUARD),
-    ...movementStatements(cylinderId, folded, null, NO_GUARD),
+    ...bookStatements(cylinderId, folded, null, NO_GUARD),
     ...claimStatements(cylinderId, folded, null, NO_GUARD),
   ]
 }
@@ -64,15 +65,23 @@ function upsertCylinder(cylinderId: string, state: CylinderState, context: Ruled
   }
 }
 
-/** Only the new events' movements where these came last in effect; all of the cylinder's where they changed what came after. */
-function movementStatements(cylinderId: string, folded: FoldResult, added: readonly LogRow[] | null, guard: Guard): InStatement[] {
+/**
+ * The books: movements, and changes of stock. Only the new events' where these came last in effect; all of the
+ * cylinder's where they changed what came after.
+ */
+function bookStatements(cylinderId: string, folded: FoldResult, added: readonly LogRow[] | null, guard: Guard): InStatement[] {
   if (added && cameLast(folded, added)) {
     const ids = new Set(added.map(row => row.id))
-    return folded.movements.filter(one => ids.has(one.eventId)).map(one => insertMovement(cylinderId, one, guard))
+    return [
+      ...folded.movements.filter(one => ids.has(one.eventId)).map(one => insertMovement(cylinderId, one, guard)),
+      ...folded.stockChanges.filter(one => ids.has(one.eventId)).map(one => insertStockChange(cylinderId, one, guard)),
+    ]
   }
   return [
     { sql: `DELETE FROM movements WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
+    { sql: `DELETE FROM stock_changes WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
     ...folded.movements.map(one => insertMovement(cylinderId, one, guard)),
+    ...folded.stockChanges.map(one => insertStockChange(cylinderId, one, guard)),
   ]
 }
 
@@ -86,6 +95,17 @@ function insertMovement(cylinderId: string, one: Movement, guard: Guard): InStat
   return {
     sql: `INSERT INTO movements (cylinder_id, event_id, ordinal, cause, refrigerant, owner_id, grams, at, apart) SELECT ?, ?, ?, ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
     args: [cylinderId, one.eventId, one.ordinal, one.cause, one.refrigerant, one.ownerId, one.grams, one.at, one.apart ? 1 : 0, ...guard.args],
+  }
+}
+
+function insertStockChange(cylinderId: string, one: StockChange, guard: Guard): InStatement {
+  return {
+    sql: `INSERT INTO stock_changes (cylinder_id, event_id, ordinal, refrigerant, owner_id, grams, not_known, weighed_variance, found_variance, at, apart)
+      SELECT ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
+    args: [
+      cylinderId, one.eventId, one.ordinal, one.refrigerant, one.ownerId, one.grams, one.notKnown, one.weighedVariance, one.foundVariance,
+      one.at, one.apart ? 1 : 0, ...guard.args,
+    ],
   }
 }
 

@@ -15,7 +15,7 @@ const PAGE_ROWS = 1_000
  */
 export async function rebuildCaches(db: Database, nowMs: number): Promise<{ cylinders: number, events: number }> {
   const from = await directory(db, true)
-  await db.write(['DELETE FROM movements', 'DELETE FROM label_claims', 'DELETE FROM cylinders'])
+  await db.write(['DELETE FROM movements', 'DELETE FROM stock_changes', 'DELETE FROM label_claims', 'DELETE FROM cylinders'])
   let cylinders = 0
   let events = 0
   let waiting: InStatement[] = []

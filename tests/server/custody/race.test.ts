@@ -15,7 +15,10 @@ beforeAll(async () => {
 })
 afterAll(() => log.close())
 
-const CACHES = ['SELECT * FROM cylinders ORDER BY id', 'SELECT * FROM movements ORDER BY cylinder_id, event_id, ordinal', 'SELECT * FROM label_claims ORDER BY event_id']
+const CACHES = [
+  'SELECT * FROM cylinders ORDER BY id', 'SELECT * FROM movements ORDER BY cylinder_id, event_id, ordinal',
+  'SELECT * FROM stock_changes ORDER BY cylinder_id, event_id, ordinal', 'SELECT * FROM label_claims ORDER BY event_id',
+]
 
 async function caches(): Promise<string> {
   const results = await log.db.readClient.batch(CACHES, 'read')

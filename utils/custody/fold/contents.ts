@@ -17,7 +17,8 @@ export function weigh(turn: Turn, gross: MassReading, cause: MovementCause, scal
   if (contents.nothingInIt && reading.isAboveTare) becomeUnknown(turn)
   const isEmptyBack = contents.backFromReclaim && reading.isAtTare
   const isEmpty = (contents.nothingInIt && reading.isAtTare) || isEmptyBack
-  changeNet(turn, isEmpty ? 0 : reading.netGrams, cause)
+  if (isEmpty) changeNet(turn, 0, cause)
+  else changeNet(turn, reading.netGrams, cause, reading.accuracyGrams)
   if (isEmptyBack) becomeNothing(turn, { evacuated: false })
   restOn(turn, reading)
   doubtReading(turn, reading)

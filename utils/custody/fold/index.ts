@@ -7,6 +7,7 @@ import type { EventKind } from '../kinds'
 import { lifecycleOf } from '../lifecycle'
 import type { Movement } from '../movement'
 import { initialState, type CylinderState } from '../state'
+import type { StockChange } from '../stockChange'
 import { checked } from './checked'
 import { corrected } from './corrected'
 import { drawn } from './drawn'
@@ -25,6 +26,7 @@ import { returned } from './returned'
 import { sentForReclaim } from './sentForReclaim'
 import { sentForTest } from './sentForTest'
 import { stand } from './standing'
+import { heldIn, stockChanges, type Held } from './stock'
 import type { FoldContext, Turn } from './turn'
 import { weighed } from './weighed'
 
@@ -57,6 +59,7 @@ export interface LabelClaim { eventId: string, code: string, effectiveAt: number
 export interface FoldResult {
   state: CylinderState
   movements: Movement[]
+  stockChanges: StockChange[]
   /** In order of effect. */
   steps: FoldStep[]
   labelClaims: LabelClaim[]
@@ -102,8 +105,10 @@ export function fold(events: readonly AnyRecordedEvent[], context: FoldContext):
   let state = initialState(events[0]?.cylinderId ?? '')
   const stepOf = new Map<string, FoldStep>()
   const movements: Movement[] = []
+  const stock: StockChange[] = []
+  let held: Held[] = []
   for (const standing of inTurn) {
-    const turn = takeTurn(state, standing, standing === beginning, context)
+    const turn = takeTurn(state, standing, standing === beginning ? firstAt(standings) : null, context)
     stepOf.set(standing.event.id, {
       eventId: standing.event.id,
       before: snapshot(state),
@@ -113,29 +118,43 @@ export function fold(events: readonly AnyRecordedEvent[], context: FoldContext):
       correction: standing.correction,
     })
     movements.push(...turn.movements)
+    if (!standing.isOut) {
+      const before = held
+      held = heldIn(turn.state)
+      stock.push(...stockChanges(before, held, turn))
+    }
     state = turn.state
   }
   return {
     state: withLastEvent(state, standings),
     movements,
+    stockChanges: stock,
     steps: standings.flatMap(({ event }) => stepOf.get(event.id) ?? []),
     labelClaims: standings.flatMap(labelClaim),
   }
 }
 
-function takeTurn(before: CylinderState, { event, isOut }: Standing, isBeginning: boolean, context: FoldContext): Turn {
-  const turn: Turn = { event, context, state: copyOf(before), movements: [], findings: [] }
+/** @param beginsAt when the cylinder's first event took effect, of the registration that it begins with; else null. */
+function takeTurn(before: CylinderState, { event, isOut }: Standing, beginsAt: number | null, context: FoldContext): Turn {
+  const turn: Turn = {
+    event, context, state: copyOf(before), at: beginsAt ?? event.effectiveAt, apart: event.practice || event.trainee,
+    movements: [], found: [], findings: [],
+  }
   turn.state.version = Math.max(before.version, event.version)
   if (isOut) return turn
   if (before.condemnedAt !== null && !PAPERWORK.includes(event.kind)) {
     turn.findings.push(afterEnd(before.condemnedAt))
     stand(turn, 'after-end')
   }
-  if (event.kind === 'registered' && !isBeginning) registeredAgain(turn as Turn<'registered'>)
+  if (event.kind === 'registered' && beginsAt === null) registeredAgain(turn as Turn<'registered'>)
   else foldByKind(turn)
   turn.state.hasHeldBurnt ||= turn.state.contents.burnt
   raiseCommon(turn, before)
   return turn
+}
+
+function firstAt(standings: readonly Standing[]): number | null {
+  return standings.find(({ isOut }) => !isOut)?.event.effectiveAt ?? null
 }
 
 function foldByKind<K extends EventKind>(turn: Turn<K>): void {

@@ -1,5 +1,5 @@
-import type { MovementCause } from '../movement'
-import type { Share } from '../state'
+import { isUnexplained, type MovementCause } from '../movement'
+import type { CylinderState, Share } from '../state'
 import type { Turn } from './turn'
 
 /**
@@ -7,14 +7,17 @@ import type { Turn } from './turn'
  *
  * A net that was not known enters whole as `opening`; one that becomes unknown leaves under the event's cause. What is
  * out of stock is counted but not booked.
+ *
+ * @param accuracyGrams of the reading that tells the net, where one does.
  */
-export function changeNet(turn: Turn, net: number | null, cause: MovementCause): void {
+export function changeNet(turn: Turn, net: number | null, cause: MovementCause, accuracyGrams?: number): void {
   const { contents } = turn.state
   const before = contents.netGrams
   if (before === null && net === null) return
   const change = (net ?? 0) - (before ?? 0)
   ensureOwner(turn)
   const parts = splitByShare(change, contents.shares)
+  if (before !== null && net !== null && accuracyGrams !== undefined && isUnexplained(cause)) findDifference(turn, accuracyGrams)
   for (const { ownerId, grams } of parts) book(turn, before === null ? 'opening' : cause, contents.refrigerant, ownerId, grams)
   if (net !== null) {
     contents.shares = before === null ? parts : prune(add(contents.shares, parts))
@@ -74,8 +77,8 @@ export function enterStock(turn: Turn): void {
 }
 
 /** Whose it is where no event says: the customer's in a customer's cylinder, else the contractor's. */
-export function ownerOfFound(turn: Turn): string | null {
-  return turn.state.ownership === 'customer' ? turn.state.ownerId : null
+export function ownerOfFound(state: CylinderState): string | null {
+  return state.ownership === 'customer' ? state.ownerId : null
 }
 
 /** Makes sure that an owner is on the books, with nothing yet. */
@@ -109,15 +112,29 @@ export function splitByShare(grams: number, shares: readonly Share[]): Share[] {
 }
 
 function ensureOwner(turn: Turn): void {
-  if (turn.state.contents.shares.length === 0) nameOwner(turn, ownerOfFound(turn))
+  if (turn.state.contents.shares.length === 0) nameOwner(turn, ownerOfFound(turn.state))
+}
+
+// The readings before and after were taken on like scales and may be off the same way: their uncertainties add. A net
+// that was reckoned rests on no reading and adds none.
+function findDifference({ state, found }: Turn, accuracyGrams: number): void {
+  const { inStock, refrigerant, shares, uncertaintyGrams } = state.contents
+  if (!inStock) return
+  const both = (uncertaintyGrams ?? 0) + accuracyGrams
+  for (const { ownerId, grams } of shares) found.push({ refrigerant, ownerId, uncertaintyGrams: partOf(both, grams, shares) })
+}
+
+/** One owner's part of a cylinder's uncertainty, by share. Rounding: up to the whole gram. */
+export function partOf(uncertaintyGrams: number, grams: number, shares: readonly Share[]): number {
+  const total = sum(shares)
+  return Math.ceil(total > 0 ? uncertaintyGrams * grams / total : uncertaintyGrams / shares.length)
 }
 
 function book(turn: Turn, cause: MovementCause, refrigerant: string | null, ownerId: string | null, grams: number): void {
-  const { event, movements, state } = turn
+  const { event, movements, state, at, apart } = turn
   if (grams === 0 || !state.contents.inStock) return
   movements.push({
-    eventId: event.id, ordinal: movements.length, cause, refrigerant, ownerId, grams, at: event.effectiveAt,
-    apart: event.practice || event.trainee,
+    eventId: event.id, ordinal: movements.length, cause, refrigerant, ownerId, grams, at, apart,
   })
 }
 

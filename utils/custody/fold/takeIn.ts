@@ -59,7 +59,8 @@ function startAnew(turn: Turn, { refrigerant }: Outcome, before: ScaleReading | 
 }
 
 function weighBefore(turn: Turn, before: ScaleReading): void {
-  changeNet(turn, before.netGrams, 'weighing')
+  changeNet(turn, before.netGrams, 'weighing', before.accuracyGrams)
+  restOn(turn, before)
   doubtReading(turn, before)
 }
 
@@ -87,7 +88,7 @@ function weighAfter(turn: Turn, { cause, refrigerant, grossAfter, scaleId, owner
   if (gainGrams !== null && gainGrams >= 0) putIn(turn, gainGrams, cause, refrigerant, ownerId)
   else {
     if (gainGrams !== null) findings.push(wrongWay('filling', -gainGrams, isConfirmed(turn, 'weigh-again')))
-    changeNet(turn, after.netGrams, 'weighing')
+    changeNet(turn, after.netGrams, 'weighing', after.accuracyGrams)
   }
   restOn(turn, after)
   doubtReading(turn, after)

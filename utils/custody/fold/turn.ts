@@ -20,13 +20,21 @@ export interface FoldContext {
   retestAt: (ms: number) => RetestRules
 }
 
+/** A weight that differs from the log, or agrees with it, without a cause: how far its two readings may be off together. */
+export interface Difference { refrigerant: string | null, ownerId: string | null, uncertaintyGrams: number }
+
 /** One event's turn: the state it finds and changes, and what it leaves in the books. */
 export interface Turn<K extends EventKind = EventKind> {
   readonly event: RecordedEvent<K>
   readonly context: FoldContext
   /** A copy of the cylinder's state, of this turn alone. */
   readonly state: CylinderState
+  /** When it counts in the books: its own time; the beginning's is never after the cylinder's first event. */
+  readonly at: number
+  /** Practice, or a trainee's without a countersignature. */
+  readonly apart: boolean
   readonly movements: Movement[]
+  readonly found: Difference[]
   readonly findings: Finding[]
 }
 
