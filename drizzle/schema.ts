@@ -291,6 +291,17 @@ export const stockChanges = sqliteTable('stock_changes', {
   index('stock_changes_balance').on(table.refrigerant, table.ownerId, table.at, table.apart, table.grams, table.notKnown, table.weighedVariance, table.foundVariance),
 ])
 
+/** A cache of the fold: each cylinder's halves of what happened between two. */
+export const halves = sqliteTable('halves', {
+  eventId: text('event_id').primaryKey(),
+  cylinderId: text('cylinder_id').notNull(),
+  /** The cylinder that it names; it need not be known. */
+  otherId: text('other_id').notNull(),
+  /** In order of effect within the cylinder, from 0. */
+  position: integer('position').notNull(),
+  half: text('half', { mode: 'json' }).notNull(),
+}, table => [index('halves_cylinder').on(table.cylinderId, table.position), index('halves_other').on(table.otherId, table.cylinderId, table.position)])
+
 /** Codes that were minted here. A code may be printed before it is on a cylinder. */
 export const labels = sqliteTable('labels', {
   code: text('code').primaryKey(),
