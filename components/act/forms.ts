@@ -5,12 +5,15 @@ import { DRAWN } from '~~/utils/custody/draft/drawn'
 import { EMPTIED } from '~~/utils/custody/draft/emptied'
 import { FILLED } from '~~/utils/custody/draft/filled'
 import { isFormKind, type FormKind } from '~~/utils/custody/draft/formKinds'
+import { INSPECTED } from '~~/utils/custody/draft/inspected'
 import { HANDED_OVER } from '~~/utils/custody/draft/handedOver'
 import { LABELLED } from '~~/utils/custody/draft/labelled'
 import { LOST } from '~~/utils/custody/draft/lost'
+import { FOUND, MISSING } from '~~/utils/custody/draft/missing'
 import { MOVED } from '~~/utils/custody/draft/moved'
 import { REGISTERED } from '~~/utils/custody/draft/registered'
 import { RECEIVED, RETURNED } from '~~/utils/custody/draft/received'
+import { QUARANTINED, RELEASED } from '~~/utils/custody/draft/setApart'
 import { WEIGHED } from '~~/utils/custody/draft/weighed'
 import type { EventKind } from '~~/utils/custody/kinds'
 import type { CautionTopic } from '~~/utils/document/cautions'
@@ -18,12 +21,17 @@ import CheckedForm from './CheckedForm.vue'
 import DrawnForm from './DrawnForm.vue'
 import EmptiedForm from './EmptiedForm.vue'
 import FilledForm from './FilledForm.vue'
+import FoundForm from './FoundForm.vue'
 import HandedOverForm from './HandedOverForm.vue'
+import InspectedForm from './InspectedForm.vue'
 import LabelledForm from './LabelledForm.vue'
 import LostForm from './LostForm.vue'
+import MissingForm from './MissingForm.vue'
 import MovedForm from './MovedForm.vue'
+import QuarantinedForm from './QuarantinedForm.vue'
 import ReceivedForm from './ReceivedForm.vue'
 import RegisteredForm from './RegisteredForm.vue'
+import ReleasedForm from './ReleasedForm.vue'
 import ReturnedForm from './ReturnedForm.vue'
 import WeighedForm from './WeighedForm.vue'
 
@@ -52,6 +60,11 @@ export const ACT_FORMS = {
   'emptied': { component: EmptiedForm, draft: EMPTIED, title: 'Emptied', verb: 'Record that it is empty', cautions: ['handling'] },
   'lost': { component: LostForm, draft: LOST, title: 'A loss', verb: 'Record the loss', cautions: ['handling'] },
   'labelled': { component: LabelledForm, draft: LABELLED, title: 'A label', verb: 'Record the label', cautions: [] },
+  'inspected': { component: InspectedForm, draft: INSPECTED, title: 'An outside look', verb: 'Record the look', cautions: [] },
+  'quarantined': { component: QuarantinedForm, draft: QUARANTINED, title: 'Set apart', verb: 'Set it apart', cautions: ['storing'] },
+  'released': { component: ReleasedForm, draft: RELEASED, title: 'Released', verb: 'Release it', cautions: [] },
+  'missing': { component: MissingForm, draft: MISSING, title: 'Missing', verb: 'Report it missing', cautions: [] },
+  'found': { component: FoundForm, draft: FOUND, title: 'Found', verb: 'Record that it was found', cautions: [] },
 } satisfies Record<FormKind, ActForm>
 
 /** The form that mends a recorded event of a kind, or null where it can only be taken out and recorded anew. */

@@ -1,4 +1,5 @@
 import type { DetailsOf } from '~~/utils/custody/schema'
+import { damageInWords } from '~~/utils/custody/damage'
 import type { LogLine } from '~~/utils/custody/cylinderView'
 import type { EventKind } from '~~/utils/custody/kinds'
 import { CONDITION_WORDS, KIND_WORDS } from '~~/utils/custody/words'
@@ -61,6 +62,13 @@ const LINES: { [K in EventKind]: Say<K> } = {
     what: `${LOSSES[cause]}${unavoidable ? ', could not be avoided' : ''}`,
     gross: grossAfter ?? null,
   }),
+  'inspected': details => ({
+    what: details.result === 'sound' ? 'no damage seen outside' : ['damaged', damageInWords(details.reasons ?? [])].filter(Boolean).join(': '),
+  }),
+  'quarantined': ({ reason }) => ({ what: reason }),
+  'released': ({ reason }) => ({ what: reason }),
+  'missing': ({ lastSeen }) => ({ what: lastSeen === undefined ? 'nobody finds it' : `last seen: ${lastSeen}` }),
+  'found': ({ placeId }, names) => placeId === undefined ? { what: 'where the log had it' } : { what: `at ${named(placeId, names)}`, to: named(placeId, names) },
   'sent-for-reclaim': ({ gross }) => ({ what: 'left with a shipment', gross }),
   'reclaimed': ({ theirGross, acceptedNet, grade }) => ({
     what: ['taken over by the reclaimer', acceptedNet && `accepted ${formatReading(acceptedNet)} net`, grade].filter(Boolean).join(', '),

@@ -15,7 +15,7 @@ import type { Finding } from './finding'
 import { holdFinding } from './findings/holds'
 import { notEvacuatedFor } from './findings/mixing'
 import { urgencyOrder } from './findings/order'
-import { afterEnd, away } from './findings/record'
+import { afterEnd, away, nowhere } from './findings/record'
 import { retestOverdue, retestUnknown } from './findings/retest'
 import { standingFinding } from './findings/standing'
 import type { CylinderState } from './state'
@@ -97,7 +97,7 @@ const NO_STAMP: FillLimit = {
 
 /** Everything that keeps a cylinder from being filled now; an overfill is not among it, for that shows as room. */
 function refusalsOfFill(state: CylinderState, retest: Requalification, refrigerant: string | null, catalogue: Catalogue): Finding[] {
-  const { stamp, away: where, condemnedAt } = state
+  const { stamp, away: where, missing, condemnedAt } = state
   const fit = stamp === null ? [] : fitFindings({ stamp, refrigerant, catalogue })
   return [
     ...fit.filter(({ severity }) => severity === 'stop').map(finding => ({ ...finding, since: null })),
@@ -106,6 +106,7 @@ function refusalsOfFill(state: CylinderState, retest: Requalification, refrigera
     ...state.holds.map(holdFinding),
     ...(retest.state === 'overdue' && retest.dueMonth !== null ? [retestOverdue(retest.dueMonth, { severity: 'stop', nothingInIt: state.contents.nothingInIt })] : []),
     ...(retest.state === 'unknown' ? [retestUnknown()] : []),
+    ...(missing ? [nowhere(missing)] : []),
     ...(where ? [away(where.at, where.since)] : []),
     ...(condemnedAt === null ? [] : [afterEnd(condemnedAt)]),
   ].sort(urgencyOrder)

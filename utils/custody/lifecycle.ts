@@ -4,6 +4,7 @@ import type { CylinderState } from './state'
 /** What a cylinder shows as: its end, else where it has gone, else its hold, else in service. */
 export function lifecycleOf(state: CylinderState): Lifecycle {
   if (state.condemnedAt !== null) return 'condemned'
+  if (state.missing) return 'missing'
   if (state.away) return state.away.at
-  return state.holds.some(({ hold }) => hold === 'rejected') ? 'rejected' : 'in-service'
+  return (['rejected', 'quarantined'] as const).find(hold => state.holds.some(one => one.hold === hold)) ?? 'in-service'
 }

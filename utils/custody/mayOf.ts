@@ -26,6 +26,9 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
   switch (kind) {
     case 'registered': return view.stamp === null ? null : 'It is registered already; correct that entry instead.'
     case 'reclaimed': return view.lifecycle === 'at-reclaim' ? null : 'It is not at a reclaimer.'
+    case 'released': return view.holds.includes('quarantined') ? null : 'It is not set apart.'
+    case 'missing': return view.lifecycle === 'missing' ? 'It is missing already.' : null
+    case 'found': return view.lifecycle === 'missing' ? null : 'It is not missing.'
     case 'filled': return reason(mayFill(view))
     case 'drawn': return reason(mayDraw(view))
     case 'checked': return view.contents.nothingInIt ? 'By the log nothing is in it.' : reason(mayCheck(view))

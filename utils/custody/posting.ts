@@ -3,6 +3,7 @@ import { EVENT_KINDS, type EventKind } from './kinds'
 
 const TECHNICIAN = [
   'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost', 'labelled', 'returned',
+  'inspected', 'quarantined', 'missing', 'found',
 ] as const satisfies readonly EventKind[]
 
 /** Which kinds each role may record. The kinds of a dispatch are a manager's, and come with its papers only. */

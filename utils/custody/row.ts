@@ -147,7 +147,7 @@ function retestOnNoDay(state: CylinderState, context: RowContext) {
 
 const STOPS: ReadonlySet<FindingCode> = new Set<FindingCode>([
   'overfill', 'pressure-class', 'spec-not-for-gas', 'not-refillable', 'not-marked-flammable', 'second-refrigerant',
-  'unknown-onto-known', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'code-on-two', 'unsupervised', 'after-end',
+  'unknown-onto-known', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'quarantined', 'code-on-two', 'unsupervised', 'after-end',
 ])
 
 function cachedFindings({ findingCodes }: CachedRow): { code: FindingCode, severity: Severity }[] {

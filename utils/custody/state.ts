@@ -30,8 +30,8 @@ export interface ContentsState {
   backFromReclaim: boolean
 }
 
-/** A hold that an event of today's kinds can put on. */
-export type StateHold = Exclude<Hold, 'quarantined'>
+/** What keeps the cylinder from use, and since when. Several events for one hold add their reasons: a text, or what an outside look found. */
+export interface StateHold { hold: Hold, since: number, reasons: string[] }
 
 /** Findings that an event raises and that then stand until another event ends them. */
 export const STANDING_CODES = ['second-refrigerant', 'unknown-onto-known', 'registered-twice', 'unsigned', 'unsupervised', 'after-end'] as const
@@ -59,8 +59,10 @@ export interface CylinderState {
   placeId: string | null
   holderId: string | null
   away: { at: 'at-reclaim' | 'at-test', since: number, listId: string } | null
+  /** Nobody knows where it is; `lastSeen` in words. */
+  missing: { since: number, lastSeen: string | null } | null
   condemnedAt: number | null
-  holds: { hold: StateHold, since: number }[]
+  holds: StateHold[]
   contents: ContentsState
   /** Burnt refrigerant was in it at any time, whatever was done since. */
   hasHeldBurnt: boolean
@@ -93,6 +95,7 @@ export function initialState(id: string): CylinderState {
     placeId: null,
     holderId: null,
     away: null,
+    missing: null,
     condemnedAt: null,
     holds: [],
     contents: {

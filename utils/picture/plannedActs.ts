@@ -15,13 +15,17 @@ export interface PlannedActs {
 }
 
 // What a hand does most often comes first; the primary one is apart.
-const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned']
+const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'inspected', 'quarantined', 'released', 'missing', 'found']
+
+// Where there is nothing to lift or to find, these are not so much refused as without a meaning.
+const ONLY_WHERE_PLANNED: readonly EventKind[] = ['released', 'missing', 'found']
 
 /** What may be recorded of a cylinder by this person, the likeliest apart, where `verdict` is the kind of its first line. */
 export function plannedActs(view: CylinderView, verdict: StatusKind, access: Access | null): PlannedActs {
   const { nothingInIt } = view.contents
   const refusals = Object.fromEntries(view.mayNot.map(each => [each.kind, each.because])) as Partial<Record<EventKind, string>>
   const planned: { kind: EventKind, text: string }[] = [
+    ...(view.lifecycle === 'missing' ? [{ kind: 'found' as const, text: 'It was found' }] : []),
     // Which refrigerant goes into an empty one is asked by the form as well.
     ...(verdict !== 'stop' && (!refusals.filled || (nothingInIt && !view.capacity.forRefrigerant)) ? [{ kind: 'filled' as const, text: 'Record a recovery' }] : []),
     ...(refusals.moved ? [] : [{ kind: 'moved' as const, text: 'Move it' }]),
@@ -31,5 +35,6 @@ export function plannedActs(view: CylinderView, verdict: StatusKind, access: Acc
   // Nothing more is to be done with what ended its life and has nothing in it.
   const isDone = nothingInIt && ['condemned', 'retired'].includes(view.lifecycle)
   const primary = isDone ? null : planned.find(plan => mayPost(access, plan.kind)) ?? null
-  return { primary, others: ACTS.filter(kind => mayPost(access, kind) && kind !== primary?.kind), refusals }
+  const isMeant = (kind: EventKind) => refusals[kind] === undefined || !ONLY_WHERE_PLANNED.includes(kind)
+  return { primary, others: ACTS.filter(kind => mayPost(access, kind) && kind !== primary?.kind && isMeant(kind)), refusals }
 }

@@ -1,5 +1,5 @@
 import type { CylinderView } from '../custody/cylinderView'
-import { FINDING_WORDS, MISSING_WORDS } from '../custody/words'
+import { FINDING_WORDS, LIFECYCLE_WORDS, MISSING_WORDS } from '../custody/words'
 import { formatMass, type MassUnit } from '../quantity/mass'
 import type { StatusKind } from './status'
 
@@ -27,7 +27,7 @@ export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
   const condemned = view.findings.find(finding => finding.code === 'condemned')
   if (condemned) return { kind: 'stop', text: 'Condemned: never fill it again', reason: condemned.text, source: condemned.source }
   const refusal = capacity.refusals[0]
-  if (refusal) return { kind: 'stop', text: `Do not fill: ${FINDING_WORDS[refusal.code]}`, reason: refusal.text, source: refusal.source }
+  if (refusal) return { kind: 'stop', text: `Do not fill: ${refusal.code === 'away' ? LIFECYCLE_WORDS[view.lifecycle] : FINDING_WORDS[refusal.code]}`, reason: refusal.text, source: refusal.source }
   if (!contents.nothingInIt && contents.refrigerant === null) {
     if (contents.condition === 'mixed') {
       return { kind: 'stop', text: 'Do not fill: contents mixed', reason: 'More than one refrigerant is in it. Nothing goes in until it is emptied to a deep vacuum.', source: null }

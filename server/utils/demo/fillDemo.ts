@@ -6,6 +6,7 @@ import { directory } from '../directory/directory'
 import { DAY, workingMorning } from './calendar'
 import { castOf } from './cast'
 import { playChecks } from './checks'
+import { playCare } from './care'
 import { playIncidents } from './incidents'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { seededRandom } from './random'
@@ -36,6 +37,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   }
   playLives(stage)
   playIncidents(stage)
+  playCare(stage)
   playChecks(stage)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(listTables(db, stage))

@@ -1,5 +1,5 @@
 import type { Finding } from '../finding'
-import { COMMON_PRACTICE, OWN_RULE, sinceText } from './words'
+import { COMMON_PRACTICE, OWN_RULE, sentence, sinceText } from './words'
 
 /** Nobody has entered the stamp. */
 export function notRegistered(since: number | null): Finding {
@@ -70,6 +70,30 @@ export function away(where: 'at-reclaim' | 'at-test', since: number): Finding {
   return {
     code: 'away', severity: 'stop', source: OWN_RULE, since: sinceText(since),
     text: `By the log it is ${place}. Check the serial; if it is back, record its return.`,
+  }
+}
+
+/** Nobody knows where it is. */
+export function nowhere({ since, lastSeen }: { since: number, lastSeen: string | null }): Finding {
+  return {
+    code: 'away', severity: 'stop', source: OWN_RULE, since: sinceText(since),
+    text: `By the log it is missing.${lastSeen === null ? '' : ` Last seen: ${sentence(lastSeen)}`} If it stands before you, record that it was found.`,
+  }
+}
+
+/** Something was recorded of a cylinder that nobody could find. */
+export function foundByUse(since: number): Finding {
+  return {
+    code: 'found-by-use', severity: 'caution', source: OWN_RULE, since: sinceText(since),
+    text: 'By the log it was missing; this ends that. Check the serial, and say where it is now.',
+  }
+}
+
+/** Somebody set it apart. */
+export function setApart(since: number, reasons: readonly string[]): Finding {
+  return {
+    code: 'quarantined', severity: 'stop', source: OWN_RULE, since: sinceText(since),
+    text: `Set apart: ${reasons.map(sentence).join(' ')} Put nothing in until a manager releases it.`,
   }
 }
 

@@ -1,4 +1,5 @@
 import { formatMonth, type Month } from '../../quantity/month'
+import { DAMAGE_REASONS, damageInWords } from '../damage'
 import type { Finding } from '../finding'
 import { COMMON_PRACTICE, massWords, sinceText } from './words'
 
@@ -27,10 +28,11 @@ export function retestUnknown(): Finding {
 }
 
 /** Damage asks for a test whatever the date. */
-export function damaged(since: number): Finding {
+export function damaged(since: number, reasons: readonly string[]): Finding {
+  const found = damageInWords(DAMAGE_REASONS.filter(reason => reasons.includes(reason)))
   return {
     code: 'early-test', severity: 'stop', source: '49 CFR 180.205(d)', since: sinceText(since),
-    text: 'Damaged, or it has leaked. Put nothing in; it must be tested before it is filled again, whatever its date.',
+    text: `${found === '' ? 'Damaged' : `Damaged: ${found}`}. Put nothing in; it must be tested before it is filled again, whatever its date.`,
   }
 }
 

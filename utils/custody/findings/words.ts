@@ -11,6 +11,11 @@ export function massWords(grams: number, rounding: MassRounding): string {
   return `${formatMass(grams, 'lb', rounding)} (${formatMass(grams, 'kg', rounding)})`
 }
 
+/** What somebody typed, closed like a sentence. */
+export function sentence(typed: string): string {
+  return /[.!?]$/.test(typed) ? typed : `${typed}.`
+}
+
 /** The instant since when a finding stands, or null. */
 export function sinceText(ms: number | null): string | null {
   return ms === null ? null : new Date(ms).toISOString()

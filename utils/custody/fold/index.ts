@@ -13,14 +13,19 @@ import { corrected } from './corrected'
 import { drawn } from './drawn'
 import { emptied } from './emptied'
 import { filled } from './filled'
+import { found } from './found'
 import { handedOver } from './handedOver'
+import { inspected } from './inspected'
 import { raiseCommon } from './raiseCommon'
 import { labelled, labelledCode } from './labelled'
 import { lost } from './lost'
+import { missing } from './missing'
 import { moved } from './moved'
+import { quarantined } from './quarantined'
 import { received } from './received'
 import { reclaimed } from './reclaimed'
 import { registered, registeredAgain } from './registered'
+import { released } from './released'
 import { retested } from './retested'
 import { returned } from './returned'
 import { sentForReclaim } from './sentForReclaim'
@@ -29,12 +34,14 @@ import { stand } from './standing'
 import { heldIn, stockChanges, type Held } from './stock'
 import type { FoldContext, Turn } from './turn'
 import { weighed } from './weighed'
+import { noLongerMissing } from './whereabouts'
 
 export type { FoldContext } from './turn'
 
 /** How the cylinder stood before or after one event. */
 export interface Snapshot {
   netGrams: number | null
+  inStock: boolean
   refrigerant: string | null
   condition: CylinderState['contents']['condition']
   placeId: string | null
@@ -78,6 +85,11 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
   'checked': checked,
   'emptied': emptied,
   'lost': lost,
+  'inspected': inspected,
+  'quarantined': quarantined,
+  'released': released,
+  'missing': missing,
+  'found': found,
   'sent-for-reclaim': sentForReclaim,
   'reclaimed': reclaimed,
   'returned': returned,
@@ -87,9 +99,11 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
 }
 
 /** Kinds that say nothing of where the cylinder is. */
-const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed']
+const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed', 'missing']
 /** Kinds that handle no cylinder, so that they need no signature and may follow its end. */
 const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected']
+/** Kinds that leave a missing cylinder missing. */
+const LEAVES_MISSING: readonly EventKind[] = ['labelled', 'missing', 'corrected']
 
 /**
  * One cylinder from its events, in whatever order they arrived.
@@ -146,6 +160,7 @@ function takeTurn(before: CylinderState, { event, isOut }: Standing, beginsAt: n
     turn.findings.push(afterEnd(before.condemnedAt))
     stand(turn, 'after-end')
   }
+  if (!LEAVES_MISSING.includes(event.kind)) noLongerMissing(turn)
   if (event.kind === 'registered' && beginsAt === null) registeredAgain(turn as Turn<'registered'>)
   else foldByKind(turn)
   turn.state.hasHeldBurnt ||= turn.state.contents.burnt
@@ -187,6 +202,6 @@ function copyOf(state: CylinderState): CylinderState {
 }
 
 function snapshot(state: CylinderState): Snapshot {
-  const { netGrams, refrigerant, condition } = state.contents
-  return { netGrams, refrigerant, condition, placeId: state.placeId, holderId: state.holderId, lifecycle: lifecycleOf(state) }
+  const { netGrams, inStock, refrigerant, condition } = state.contents
+  return { netGrams, inStock, refrigerant, condition, placeId: state.placeId, holderId: state.holderId, lifecycle: lifecycleOf(state) }
 }

@@ -12,5 +12,5 @@ export function lost(turn: Turn<'lost'>): void {
   else if (!contents.nothingInIt) loseNet(turn, 'lost')
   // What lets gas out lets air in.
   contents.evacuated = false
-  if (cause === 'leak' || cause === 'accident') holdBack(turn, 'damaged')
+  if (cause === 'leak' || cause === 'accident') holdBack(turn, 'damaged', cause)
 }

@@ -1,4 +1,5 @@
-import type { StandingCode, StateHold } from '../state'
+import type { Hold } from '../cylinderView'
+import type { StandingCode } from '../state'
 import type { Turn } from './turn'
 
 /** A finding stands from this event on; one that stands already keeps its beginning. */
@@ -12,13 +13,15 @@ export function endStanding(turn: Turn, ...codes: StandingCode[]): void {
   turn.state.standing = turn.state.standing.filter(({ code }) => !codes.includes(code))
 }
 
-/** Puts a hold on the cylinder; one that is on already keeps its beginning. */
-export function holdBack(turn: Turn, hold: StateHold): void {
+/** Puts a hold on the cylinder; one that is on already keeps its beginning, and takes the reasons that are new. */
+export function holdBack(turn: Turn, hold: Hold, ...reasons: string[]): void {
   const { holds } = turn.state
-  if (!holds.some(one => one.hold === hold)) holds.push({ hold, since: turn.event.effectiveAt })
+  const known = holds.find(one => one.hold === hold)
+  if (known) known.reasons.push(...reasons.filter(reason => !known.reasons.includes(reason)))
+  else holds.push({ hold, since: turn.event.effectiveAt, reasons })
 }
 
 /** Lifts holds. */
-export function lift(turn: Turn, ...holds: StateHold[]): void {
+export function lift(turn: Turn, ...holds: Hold[]): void {
   turn.state.holds = turn.state.holds.filter(({ hold }) => !holds.includes(hold))
 }

@@ -1,4 +1,4 @@
-import { away } from '../findings/record'
+import { away, foundByUse } from '../findings/record'
 import { enterStock } from './ledger'
 import type { Turn } from './turn'
 
@@ -6,6 +6,14 @@ import type { Turn } from './turn'
 export function putAt(turn: Turn, placeId: string | null, holderId: string | null = null): void {
   turn.state.placeId = placeId
   turn.state.holderId = holderId
+}
+
+/** A missing cylinder is there again: because somebody says so, or because something was done with it. */
+export function noLongerMissing(turn: Turn): void {
+  const { state, event } = turn
+  if (!state.missing) return
+  if (event.kind !== 'found') turn.findings.push(foundByUse(state.missing.since))
+  state.missing = null
 }
 
 /** Something was done with a cylinder that should have been away: it is back, with what it left with. */

@@ -5,13 +5,18 @@ import { details as corrected } from './corrected'
 import { details as drawn } from './drawn'
 import { details as emptied } from './emptied'
 import { details as filled } from './filled'
+import { details as found } from './found'
 import { details as handedOver } from './handedOver'
+import { details as inspected } from './inspected'
 import { details as labelled } from './labelled'
 import { details as lost } from './lost'
+import { details as missing } from './missing'
 import { details as moved } from './moved'
+import { details as quarantined } from './quarantined'
 import { details as received } from './received'
 import { details as reclaimed } from './reclaimed'
 import { details as registered } from './registered'
+import { details as released } from './released'
 import { details as retested } from './retested'
 import { details as returned } from './returned'
 import { details as sentForReclaim } from './sentForReclaim'
@@ -31,6 +36,11 @@ export const DETAILS = {
   'checked': checked,
   'emptied': emptied,
   'lost': lost,
+  'inspected': inspected,
+  'quarantined': quarantined,
+  'released': released,
+  'missing': missing,
+  'found': found,
   'sent-for-reclaim': sentForReclaim,
   'reclaimed': reclaimed,
   'returned': returned,

@@ -20,6 +20,18 @@ describe('the likeliest act with a cylinder', () => {
     expect(plannedActs(overfilled, 'stop', access).primary).toEqual({ kind: 'drawn', text: 'Draw it down' })
   })
 
+  it('is that it was found where it is missing; a release and a find are only offered where there is something to release or to find', () => {
+    const missing = viewAfter([registered(), did('missing', {})])
+    expect(plannedActs(missing, 'stop', access)).toMatchObject({ primary: { kind: 'found', text: 'It was found' } })
+    expect(plannedActs(missing, 'stop', access).others).not.toContain('missing')
+    const manager = { personId: TECHNICIAN, roles: ['manager' as const], trainee: false }
+    const apart = viewAfter([registered(), did('quarantined', { reason: 'no label' })], { access: manager })
+    expect(plannedActs(apart, 'stop', manager).others).toContain('released')
+    expect(plannedActs(apart, 'stop', access).others).not.toContain('released')
+    expect(plannedActs(viewAfter([registered()], { access: manager }), 'ok', manager).others).not.toContain('released')
+    expect(plannedActs(apart, 'stop', manager).others).not.toContain('found')
+  })
+
   it('is none once it is condemned and empty, though what happened may still be recorded', () => {
     const condemned = did('retested', { month: '2026-07', method: 'visual', result: 'condemned', requalifierId: REQUALIFIER })
     const { primary, others } = plannedActs(viewAfter([registered(), condemned]), 'stop', access)
@@ -29,7 +41,7 @@ describe('the likeliest act with a cylinder', () => {
 
   it('is never offered twice, nor to somebody who records nothing', () => {
     const view = viewAfter([registered(), filled('R-22', 20), weighed(20)])
-    expect(plannedActs(view, 'ok', access).others).toEqual(['weighed', 'drawn', 'moved', 'handed-over', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned'])
+    expect(plannedActs(view, 'ok', access).others).toEqual(['weighed', 'drawn', 'moved', 'handed-over', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'inspected', 'quarantined', 'missing'])
     expect(plannedActs(view, 'ok', { personId: TECHNICIAN, roles: ['auditor'], trainee: false })).toMatchObject({ primary: null, others: [] })
     expect(plannedActs(view, 'ok', null)).toMatchObject({ primary: null, others: [] })
   })

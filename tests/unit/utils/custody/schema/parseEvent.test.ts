@@ -153,3 +153,34 @@ describe('the other kinds', () => {
     expect(faults({ kind: 'emptied', details: { vacuum: { microns: -1 } } })).toHaveLength(1)
   })
 })
+
+describe('the care of a cylinder', () => {
+  it('is set apart and released for a reason', () => {
+    for (const kind of ['quarantined', 'released']) {
+      expect(faults({ kind, details: { reason: 'oil at the valve' } }), kind).toEqual([])
+      expect(faults({ kind, details: { reason: 'x'.repeat(300) } }), kind).toEqual([])
+      expect(faults({ kind, details: { reason: 'x'.repeat(301) } }), kind).toEqual(['details.reason: must be at most 300 characters'])
+      expect(faults({ kind, details: { reason: '  ' } }), kind).toEqual(['details.reason: must not be empty'])
+      expect(faults({ kind, details: {} }), kind).toEqual(['details.reason: is missing'])
+    }
+  })
+
+  it('is looked over with a result, and with what was found only where something was', () => {
+    expect(faults({ kind: 'inspected', details: { result: 'sound' } })).toEqual([])
+    expect(faults({ kind: 'inspected', details: { result: 'damaged' } })).toEqual([])
+    expect(faults({ kind: 'inspected', details: { result: 'damaged', reasons: ['dent', 'leak'] } })).toEqual([])
+    expect(faults({ kind: 'inspected', details: { result: 'damaged', reasons: ['dent', 'dent'] } })).toEqual(['details.reasons: must name each once'])
+    expect(faults({ kind: 'inspected', details: { result: 'damaged', reasons: [] } })).toEqual(['details.reasons: must name what was found'])
+    expect(faults({ kind: 'inspected', details: { result: 'damaged', reasons: ['rust'] } })[0]).toMatch(/^details\.reasons\.0: must be one of dent, /)
+    expect(faults({ kind: 'inspected', details: { result: 'sound', reasons: ['dent'] } })).toEqual(['details.reasons: is not a field that can be given here'])
+    expect(faults({ kind: 'inspected', details: { result: 'fine' } })).toEqual(['details.result: must have a result: sound or damaged'])
+  })
+
+  it('is missed and found, with a place or without', () => {
+    expect(faults({ kind: 'missing', details: {} })).toEqual([])
+    expect(faults({ kind: 'missing', details: { lastSeen: 'on the roof' } })).toEqual([])
+    expect(faults({ kind: 'found', details: {} })).toEqual([])
+    expect(faults({ kind: 'found', details: { placeId: SHOP } })).toEqual([])
+    expect(faults({ kind: 'found', details: { placeId: 'roof' } })).toEqual(['details.placeId: must be an id (a UUID)'])
+  })
+})

@@ -1,0 +1,51 @@
+import { DAY, HOUR, MINUTE } from './calendar'
+import { daysAgo, fill, made } from './incidents'
+import type { Stage } from './lives'
+
+/** Cylinders that were looked over, set apart, missed and found again. */
+export function playCare(stage: Stage): void {
+  looks(stage)
+  apart(stage)
+  missed(stage)
+}
+
+function looks(stage: Stage): void {
+  const { script, cast } = stage
+  const { second, third, warehouse } = cast.people
+  const dented = made(stage, 6).steel
+  fill(stage, dented, { refrigerant: 'R-22', pounds: 6, days: 38 })
+  script.add(warehouse, daysAgo(stage, 29), dented.id, 'inspected', { result: 'damaged', reasons: ['dent', 'corrosion'] }, { note: 'dent at the foot ring, a hand wide' })
+  const sound = made(stage, 6).steel
+  script.add(third, daysAgo(stage, 9), sound.id, 'inspected', { result: 'sound' })
+  script.add(second, daysAgo(stage, 8), made(stage, 5, 'small').steel.id, 'inspected', { result: 'damaged', reasons: ['valve'] })
+}
+
+function apart(stage: Stage): void {
+  const { script, cast } = stage
+  const { second, warehouse, manager } = cast.people
+  const held = made(stage, 5).steel
+  fill(stage, held, { refrigerant: 'R-410A', pounds: 12, days: 21 })
+  script.add(second, daysAgo(stage, 15), held.id, 'quarantined', { reason: 'smells burnt, waits for the identifier' })
+  script.add(warehouse, daysAgo(stage, 14), held.id, 'quarantined', { reason: 'oil at the valve' })
+  script.add(warehouse, daysAgo(stage, 14) + HOUR, held.id, 'moved', { toPlaceId: cast.racks[2]!.id })
+  const cleared = made(stage, 5).steel
+  fill(stage, cleared, { refrigerant: 'R-134a', pounds: 10, days: 36 })
+  script.add(warehouse, daysAgo(stage, 32), cleared.id, 'quarantined', { reason: 'label half torn off, contents doubted' }, { lateMs: 5 * MINUTE })
+  script.add(manager, daysAgo(stage, 30), cleared.id, 'released', { reason: 'identifier read R-134a, label is on again' }, { decides: true, lateMs: 3 * MINUTE })
+}
+
+function missed(stage: Stage): void {
+  const { script, cast } = stage
+  const { technician, third, warehouse } = cast.people
+  const gone = made(stage, 7).steel
+  fill(stage, gone, { by: 'third', refrigerant: 'R-410A', pounds: 8, days: 64 })
+  script.add(warehouse, daysAgo(stage, 26), gone.id, 'missing', { lastSeen: 'on the roof of the cold store, after the job two months ago' })
+  const back = made(stage, 6).steel
+  const missedAt = daysAgo(stage, 45)
+  script.add(warehouse, missedAt, back.id, 'missing', {}, { lateMs: 6 * MINUTE })
+  script.add(third, missedAt + 3 * DAY, back.id, 'found', { placeId: cast.racks[3]!.id }, { lateMs: 6 * MINUTE })
+  const used = made(stage, 6).steel
+  script.add(warehouse, daysAgo(stage, 24), used.id, 'missing', { lastSeen: 'lent to the creamery' }, { lateMs: 8 * MINUTE })
+  const van = cast.vans.find(({ technicianId }) => technicianId === technician.id)!
+  script.add(technician, daysAgo(stage, 19), used.id, 'moved', { toPlaceId: van.id, toHolderId: technician.id }, { lateMs: 8 * MINUTE })
+}
