@@ -1,6 +1,6 @@
 import { useAttempt } from '~~/composables/useAttempt'
 import type { FleetQuery } from '~~/utils/contract/custody'
-import type { FleetLayout } from '~~/utils/contract/fleetViews'
+import type { FleetLayout } from '~~/utils/contract/fleetLayout'
 import { fleetRequest } from '~~/utils/fleet/fleetAddress'
 import type { MassUnit } from '~~/utils/quantity/mass'
 

@@ -1,7 +1,7 @@
 import { useApi } from '~~/composables/useApi'
 import { useAttempt } from '~~/composables/useAttempt'
 import { useLoaded } from '~~/composables/useLoaded'
-import { FIRST_LAYOUT, type FleetLayout } from '~~/utils/contract/fleetViews'
+import { FIRST_LAYOUT, type FleetLayout } from '~~/utils/contract/fleetLayout'
 
 /** How this person has the table of the fleet, kept on the server so that it is the same on each of their screens. */
 export function useFleetLayout() {

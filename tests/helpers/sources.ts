@@ -14,23 +14,24 @@ export function projectFiles(fits: RegExp, folder = ''): string[] {
 }
 
 /** What a file imports: a path from the root (no ending) for ours, 'package:name' for others, '(computed)' where it cannot be read. */
-export interface Import { to: string, line: number, /** Leaves nothing at run time. */ typeOnly: boolean }
+export interface Import { to: string, line: number, /** Leaves nothing at run time. */ typeOnly: boolean, /** Fetched only once it is asked for. */ isLazy: boolean }
 
 /** Static and dynamic imports of a .ts or .vue source, of types too. */
 export function importsOf(path: string, text = readFileSync(path, 'utf8')): Import[] {
   const script = path.endsWith('.vue') ? scriptsOf(text) : text
   const source = ts.createSourceFile(`${path}.ts`, script, ts.ScriptTarget.Latest, true)
   const found: Import[] = []
-  const add = (at: ts.Node, specifier: ts.Node | undefined, typeOnly = false) => found.push({
+  const add = (at: ts.Node, specifier: ts.Node | undefined, { typeOnly = false, isLazy = false } = {}) => found.push({
     typeOnly,
+    isLazy,
     to: specifier && ts.isStringLiteralLike(specifier) ? targetOf(path, specifier.text) : '(computed)',
     line: source.getLineAndCharacterOfPosition(at.getStart()).line + 1,
   })
   const visit = (node: ts.Node): void => {
-    if (ts.isImportDeclaration(node)) add(node, node.moduleSpecifier, isErased(node.importClause))
-    else if (ts.isExportDeclaration(node) && node.moduleSpecifier) add(node, node.moduleSpecifier, node.isTypeOnly)
-    else if (ts.isImportTypeNode(node)) add(node, ts.isLiteralTypeNode(node.argument) ? node.argument.literal : undefined, true)
-    else if (ts.isCallExpression(node) && isLoading(node.expression)) add(node, node.arguments[0])
+    if (ts.isImportDeclaration(node)) add(node, node.moduleSpecifier, { typeOnly: isErased(node.importClause) })
+    else if (ts.isExportDeclaration(node) && node.moduleSpecifier) add(node, node.moduleSpecifier, { typeOnly: node.isTypeOnly })
+    else if (ts.isImportTypeNode(node)) add(node, ts.isLiteralTypeNode(node.argument) ? node.argument.literal : undefined, { typeOnly: true })
+    else if (ts.isCallExpression(node) && isLoading(node.expression)) add(node, node.arguments[0], { isLazy: node.expression.kind === ts.SyntaxKind.ImportKeyword })
     ts.forEachChild(node, visit)
   }
   visit(source)

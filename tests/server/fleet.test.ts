@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { FleetAnswer } from '../../utils/contract/custody'
-import { FIRST_LAYOUT, MOST_VIEWS, type FleetLayout, type FleetView, type FleetViewsAnswer } from '../../utils/contract/fleetViews'
+import { FIRST_LAYOUT, type FleetLayout } from '../../utils/contract/fleetLayout'
+import { MOST_VIEWS, type FleetView, type FleetViewsAnswer } from '../../utils/contract/fleetViews'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import { TestClient } from '../helpers/client'
 import { made, openShop, registered, type Shop } from '../helpers/fleet'

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
 import type { ProblemDetails } from './problem'
+import { FLEET_CHOICES, FLEET_TEXTS } from './fleetQuestion'
 import { fleetColumns } from './fleetViews'
 import { MOST_EVENTS } from './mostEvents'
 import { id, page, type Page } from './parts'
@@ -23,23 +24,22 @@ export interface EventResult {
 /** What POST /api/events answers: results in the order sent, and each cylinder touched as it now stands. */
 export interface EventsAnswer { results: EventResult[], cylinders: CylinderView[] }
 
-export const SORTS = ['urgency', 'code', 'serial', 'refrigerant', 'condition', 'lifecycle', 'net', 'room', 'stop', 'due', 'place', 'last-event'] as const
-
 /** The query of GET /api/cylinders. */
 export const fleetQuery = z.strictObject({
-  ...page,
-  q: z.string().trim().max(80).optional(),
+  limit: page.limit,
+  cursor: z.string().max(FLEET_TEXTS.cursor).optional(),
+  q: z.string().trim().max(FLEET_TEXTS.q).optional(),
   place: id.optional(),
   holder: id.optional(),
-  refrigerant: z.string().max(40).optional(),
-  condition: z.enum(['clean', 'suspect', 'burnt', 'mixed', 'unknown']).optional(),
-  lifecycle: z.enum(['in-service', 'quarantined', 'rejected', 'at-reclaim', 'at-test', 'missing', 'condemned', 'retired']).optional(),
+  refrigerant: z.string().max(FLEET_TEXTS.refrigerant).optional(),
+  condition: z.enum(FLEET_CHOICES.condition).optional(),
+  lifecycle: z.enum(FLEET_CHOICES.lifecycle).optional(),
   dueBefore: z.string().regex(/^\d{4}-(0[1-9]|1[0-2])$/).optional(),
-  finding: z.string().max(40).optional(),
+  finding: z.string().max(FLEET_TEXTS.finding).optional(),
   owner: id.optional(),
-  label: z.string().max(20).optional(),
-  sort: z.enum(SORTS).default('urgency'),
-  order: z.enum(['asc', 'desc']).default('asc'),
+  label: z.string().max(FLEET_TEXTS.label).optional(),
+  sort: z.enum(FLEET_CHOICES.sort).default('urgency'),
+  order: z.enum(FLEET_CHOICES.order).default('asc'),
 })
 
 export type FleetQuery = z.output<typeof fleetQuery>

@@ -1,14 +1,12 @@
 import { z } from 'zod'
 import type { Certification } from '../access/certification'
 import type { Role } from '../access/roles'
+import { PASSWORD_LENGTH } from './passwordLength'
 
 export const UNITS = ['lb', 'lb-oz', 'kg'] as const
 /** The units a person or a firm reads weights in. */
 export const units = z.enum(UNITS)
 export type Units = z.output<typeof units>
-
-/** Fewest and most characters of a password that is being chosen; nothing else is asked of its make-up. */
-export const PASSWORD_LENGTH = { least: 12, most: 128 } as const
 
 /** A password that is being chosen. Common ones and one's own address are refused by the server (422). */
 export const newPassword = z.string()

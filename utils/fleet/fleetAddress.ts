@@ -1,4 +1,6 @@
-import { fleetQuery, type FleetQuery } from '../contract/custody'
+import type { FleetQuery } from '../contract/custody'
+import { FLEET_CHOICES, FLEET_IDS, FLEET_TEXTS } from '../contract/fleetQuestion'
+import { isMonth } from '../quantity/month'
 
 /** Cylinders on one page of the fleet. */
 export const FLEET_PAGE = 100
@@ -10,14 +12,26 @@ export type AddressQuery = Record<string, string | null | undefined | (string | 
 export const FLEET_FILTERS = ['q', 'place', 'holder', 'refrigerant', 'condition', 'lifecycle', 'dueBefore', 'finding', 'owner', 'label'] as const
 export type FleetFilter = (typeof FLEET_FILTERS)[number]
 
-/** The question that a fleet address asks. A part that cannot be read is left out, so that an old address still opens the fleet. */
+const ID = /^[\da-f]{8}-[\da-f]{4}-[1-8][\da-f]{3}-[89ab][\da-f]{3}-[\da-f]{12}$/
+
+/**
+ * The question that a fleet address asks. A part that cannot be read is left out, so that an old address still opens the fleet.
+ *
+ * Read here without the schema of the route, which the browser would have to fetch.
+ */
 export function readFleetAddress(address: AddressQuery): FleetQuery {
-  const known: Record<string, unknown> = { limit: FLEET_PAGE }
-  for (const [key, schema] of Object.entries(fleetQuery.shape)) {
+  const parts: [key: string, read: (text: string) => string | null][] = [
+    ...Object.entries(FLEET_TEXTS).map(([key, longest]): typeof parts[number] => [key, text => text.length <= longest ? text : null]),
+    ...Object.entries(FLEET_CHOICES).map(([key, known]): typeof parts[number] => [key, text => (known as readonly string[]).includes(text) ? text : null]),
+    ...FLEET_IDS.map((key): typeof parts[number] => [key, text => ID.test(text.toLowerCase()) ? text.toLowerCase() : null]),
+    ['dueBefore', text => isMonth(text) ? text : null],
+  ]
+  const known = parts.flatMap(([key, read]) => {
     const value = address[key]
-    if (key !== 'limit' && typeof value === 'string' && value !== '' && schema.safeParse(value).success) known[key] = value
-  }
-  return fleetQuery.parse(known)
+    const text = typeof value === 'string' ? read(value.trim()) : null
+    return text ? [[key, text] as const] : []
+  })
+  return { limit: FLEET_PAGE, sort: 'urgency', order: 'asc', ...Object.fromEntries(known) }
 }
 
 /** The address with something changed: a null clears its part, and any change but of the page begins at the first page again. */

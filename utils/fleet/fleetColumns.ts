@@ -1,5 +1,5 @@
 import type { FleetQuery } from '../contract/custody'
-import type { FleetColumn } from '../contract/fleetViews'
+import type { FleetColumn } from '../contract/fleetLayout'
 import { columnUnit } from '../quantity/columnFigure'
 import type { MassUnit } from '../quantity/mass'
 

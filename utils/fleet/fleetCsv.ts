@@ -1,5 +1,5 @@
 import { RULE_WORDS } from '../capacity/words'
-import type { FleetColumn } from '../contract/fleetViews'
+import type { FleetColumn } from '../contract/fleetLayout'
 import type { CylinderRow } from '../custody/cylinderView'
 import { CONDITION_WORDS, KIND_WORDS, LIFECYCLE_WORDS } from '../custody/words'
 import { formatLabelCode } from '../label/code'

@@ -1,9 +1,9 @@
 import { KPA_PER_PSI } from '../quantity/pressure'
 import type { PressureClassing } from '../refrigerant/pressureClass'
+import { pressureClassInWords } from '../refrigerant/words'
 import { SMALL_CHARGE_GRAMS, type TableCell } from './evacuationTable'
 import type { TableAnswer } from './tableLevel'
 import type { AccountLine, EvacuationInput, EvacuationLevel } from './types'
-import { pressureClassInWords } from '../refrigerant/words'
 import { CHARGE_BAND_WORDS, CIRCUMSTANCES_WORDS, formatCharge, levelWords, MACHINE_MADE_WORDS } from './words'
 
 interface Found {

@@ -1,6 +1,6 @@
 import type { Readable } from 'node:stream'
 import type { FleetListQuery } from '../../../utils/contract/custody'
-import { FIRST_LAYOUT } from '../../../utils/contract/fleetViews'
+import { FIRST_LAYOUT } from '../../../utils/contract/fleetLayout'
 import { fleetCsvHeads, fleetCsvRow } from '../../../utils/fleet/fleetCsv'
 import { csvStream, type CsvLine } from '../csv/csvStream'
 import type { Database } from '../database/database'

@@ -1,6 +1,7 @@
 import { and, eq } from 'drizzle-orm'
 import { tableLayouts } from '~~/drizzle/schema'
-import { FIRST_LAYOUT, fleetLayoutBody, type FleetLayout } from '~~/utils/contract/fleetViews'
+import { FIRST_LAYOUT, type FleetLayout } from '~~/utils/contract/fleetLayout'
+import { fleetLayoutBody } from '~~/utils/contract/fleetViews'
 import { statement, type Database } from '../database/database'
 
 /** How a person has the table of the fleet; as it is at first where they chose nothing that still can be. */

@@ -1,7 +1,7 @@
 import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
 import FleetColumns from '~~/components/fleet/FleetColumns.vue'
-import type { FleetLayout } from '~~/utils/contract/fleetViews'
+import type { FleetLayout } from '~~/utils/contract/fleetLayout'
 
 const LAYOUT: FleetLayout = { columns: ['code', 'verdict', 'room', 'stop'], density: 'compact' }
 

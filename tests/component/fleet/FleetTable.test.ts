@@ -1,7 +1,7 @@
 import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
 import FleetTable from '~~/components/fleet/FleetTable.vue'
-import { FIRST_LAYOUT } from '~~/utils/contract/fleetViews'
+import { FIRST_LAYOUT } from '~~/utils/contract/fleetLayout'
 import type { CylinderRow } from '~~/utils/custody/cylinderView'
 import { cylinderRow } from '../../helpers/cylinderRow'
 import { allByRole, byRole } from '../../helpers/roles'

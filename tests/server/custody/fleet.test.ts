@@ -7,7 +7,8 @@ import { rowColumns } from '../../../server/utils/custody/listedRows'
 import { statement } from '../../../server/utils/database/database'
 import { directory } from '../../../server/utils/directory/directory'
 import { rulesInForceKey } from '../../../server/utils/directory/datedRules'
-import { fleetQuery, SORTS, type CylinderRow, type FleetQuery } from '../../../utils/contract/custody'
+import { fleetQuery, type CylinderRow, type FleetQuery } from '../../../utils/contract/custody'
+import { FLEET_CHOICES } from '../../../utils/contract/fleetQuestion'
 import { fleetRows } from '../../helpers/fleetRows'
 import { openLogDatabase, type LogDatabase } from '../../helpers/logDatabase'
 
@@ -94,7 +95,7 @@ describe('each order of the fleet', () => {
 })
 
 describe('the pages of the fleet', () => {
-  it.each(SORTS.flatMap(sort => ['asc', 'desc'].map(order => [sort, order])))('by %s %s lead forth and back over the same cylinders', async (sort, order) => {
+  it.each(FLEET_CHOICES.sort.flatMap(sort => ['asc', 'desc'].map(order => [sort, order])))('by %s %s lead forth and back over the same cylinders', async (sort, order) => {
     const first = await page({ sort, order, limit: 90 })
     const second = await page({ sort, order, limit: 90, cursor: first.nextCursor })
     const third = await page({ sort, order, limit: 90, cursor: second.nextCursor })
@@ -208,7 +209,7 @@ describe('the plan of a page', () => {
   })
 
   it('reads every order along its index without sorting the fleet, but for the name of a place', async () => {
-    for (const sort of SORTS) {
+    for (const sort of FLEET_CHOICES.sort) {
       for (const order of ['asc', 'desc']) {
         const sorts = (await planOf({ sort, order })).filter(step => step.includes('USE TEMP B-TREE'))
         expect(sorts.length > 0, `${sort} ${order}`).toBe(sort === 'place')

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { contentsTagPath, contentsTagQuery, labelsPdfPath, labelsQuery, printerOf, testPagePath, testPageQuery, type PrintSetting } from '~~/utils/contract/labels'
+import { contentsTagQuery, labelsQuery, printerOf, testPageQuery } from '~~/utils/contract/labels'
+import { contentsTagPath, labelsPdfPath, testPagePath, type PrintSetting } from '~~/utils/contract/printing'
 import { usualPrinter } from '~~/utils/label/printer'
 import { LABEL_STOCKS } from '~~/utils/label/stock'
 

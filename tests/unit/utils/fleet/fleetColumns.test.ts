@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
-import { FIRST_LAYOUT, FIXED_COLUMNS, FLEET_COLUMNS, fleetColumns } from '../../../../utils/contract/fleetViews'
-import { SORTS } from '../../../../utils/contract/custody'
+import { FIRST_LAYOUT, FIXED_COLUMNS, FLEET_COLUMNS } from '../../../../utils/contract/fleetLayout'
+import { fleetColumns } from '../../../../utils/contract/fleetViews'
+import { FLEET_CHOICES } from '../../../../utils/contract/fleetQuestion'
 import { columnHead, columnMoved, columnOfSort } from '../../../../utils/fleet/fleetColumns'
 
 describe('the columns of the fleet', () => {
@@ -11,9 +12,9 @@ describe('the columns of the fleet', () => {
   })
 
   it('show every order of the list at one head', () => {
-    const heads = SORTS.map(columnOfSort)
+    const heads = FLEET_CHOICES.sort.map(columnOfSort)
     expect(heads).not.toContain(null)
-    expect(new Set(heads).size).toBe(SORTS.length)
+    expect(new Set(heads).size).toBe(FLEET_CHOICES.sort.length)
   })
 
   it('move a step at a time, never among the two that stand first and never off the end', () => {
