@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { filesBeside, readFilesUrl, type FilesPlace } from './files/filesUrl'
 
 /** Shorter ones can be guessed; the seal of the session cookie asks for 32 as well. */
 const LEAST_SESSION_PASSWORD = 32
@@ -9,11 +10,22 @@ const databaseUrl = z.string()
   .refine(value => /^(file:.|libsql:\/\/|wss?:\/\/|https?:\/\/)/.test(value), 'must begin with file:, libsql:// or https://')
   .refine(value => !/^(http|ws):/.test(value) || isLoopback(value), 'must be encrypted (libsql:// or https://) unless it is on this machine')
 
+/** 32 bytes in base64, as `openssl rand -base64 32` gives them. */
+const CHECKPOINT_KEY = /^[A-Za-z0-9+/]{43}=$/
+/** As C2SP signed-note writes a public key: name, id, key. */
+const PUBLIC_KEY = /^[^\s+]+\+[0-9a-f]{8}\+[A-Za-z0-9+/]{44}$/
+
 const schema = z.object({
   PORT: z.coerce.number('must be a number').int().min(0).max(65_535).default(3000),
   HOST: z.string().optional(),
   DATABASE_URL: databaseUrl.default('file:./data/collarbook.db'),
   DATABASE_AUTH_TOKEN: z.string().optional(),
+  FILES_URL: z.string().transform((value, context) => {
+    const place = readFilesUrl(value, isLoopback)
+    if (typeof place !== 'string') return place
+    context.addIssue({ code: 'custom', message: place })
+    return z.NEVER
+  }).optional(),
   SMTP_URL: z.string().regex(/^smtps?:\/\/[^/]+/, 'must begin with smtp:// or smtps://').optional(),
   MAIL_FROM: z.string().regex(/@/, 'must be an email address').optional(),
   PUBLIC_URL: z.string().refine(isOrigin, 'must be http(s)://host[:port] without a path').default('http://localhost:3000')
@@ -24,6 +36,9 @@ const schema = z.object({
     .min(LEAST_SESSION_PASSWORD, `must have at least ${LEAST_SESSION_PASSWORD} characters`)
     .refine(value => !/example|change|replace|password|secret/i.test(value), 'is an example: make one, for instance with `openssl rand -hex 32`')
     .refine(value => new Set(value).size >= LEAST_DISTINCT_CHARACTERS, 'repeats itself: make one, for instance with `openssl rand -hex 32`'),
+  CHECKPOINT_KEY: z.string().regex(CHECKPOINT_KEY, 'must be 32 bytes in base64: make one with `openssl rand -base64 32`').optional(),
+  CHECKPOINT_FORMER_KEYS: z.string().default('').transform(value => value.split(/[\s,]+/).filter(key => key !== ''))
+    .refine(keys => keys.every(key => PUBLIC_KEY.test(key)), 'must be public keys as the log shows them, with spaces between'),
   COLLARBOOK_DEMO: z.enum(['0', '1'], 'must be 0 or 1').default('0'),
 }).refine(values => !values.SMTP_URL || values.MAIL_FROM, { path: ['MAIL_FROM'], message: 'must be set where SMTP_URL is' })
 
@@ -31,6 +46,8 @@ const schema = z.object({
 export interface Environment {
   databaseUrl: string
   databaseAuthToken: string | undefined
+  /** Where photos are kept. */
+  files: FilesPlace
   smtpUrl: string | undefined
   mailFrom: string | undefined
   /** Where people reach the server, without a slash at the end. */
@@ -40,6 +57,10 @@ export interface Environment {
   /** Whether passwords go over a network in clear. */
   unprotected: boolean
   proxyHops: number
+  /** Signs the checkpoints of the log; undefined where the key is kept in a file. */
+  checkpointKey: string | undefined
+  /** Public keys that signed checkpoints before. */
+  formerCheckpointKeys: string[]
   demo: boolean
 }
 
@@ -61,12 +82,15 @@ export function readEnvironment(variables: Record<string, string | undefined>): 
   return {
     databaseUrl: values.DATABASE_URL,
     databaseAuthToken: values.DATABASE_AUTH_TOKEN,
+    files: values.FILES_URL ?? filesBeside(values.DATABASE_URL),
     smtpUrl: values.SMTP_URL,
     mailFrom: values.MAIL_FROM,
     publicUrl: values.PUBLIC_URL,
     secure: values.PUBLIC_URL.startsWith('https:'),
     unprotected: values.PUBLIC_URL.startsWith('http:') && !isLoopback(values.PUBLIC_URL),
     proxyHops: values.PROXY_HOPS,
+    checkpointKey: values.CHECKPOINT_KEY,
+    formerCheckpointKeys: values.CHECKPOINT_FORMER_KEYS,
     demo: values.COLLARBOOK_DEMO === '1',
   }
 }

@@ -7,7 +7,7 @@ import { custodyLog } from '../../server/utils/custody/custodyLog'
 import { fleet } from '../../server/utils/custody/fleet'
 import { rebuildCaches } from '../../server/utils/custody/rebuild'
 import { rowsBehind } from '../../server/utils/custody/rowsByRule'
-import { verifyLog } from '../../server/utils/custody/verify'
+import { verifyLog } from '../../server/utils/proof/verifyLog'
 import { openDatabase, type Database } from '../../server/utils/database/database'
 import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
@@ -23,7 +23,7 @@ const RAISED: FindingCode[] = [
   'overfill', 'nearly-full', 'pressure-class', 'spec-not-for-gas', 'not-refillable', 'not-marked-flammable', 'toxic', 'second-refrigerant',
   'unknown-onto-known', 'retest-overdue', 'retest-soon', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'weight-not-known',
   'not-registered', 'registered-twice', 'old-tare-on-label', 'code-on-two', 'unsigned', 'unsupervised', 'not-seen', 'two-owners', 'weigh-again',
-  'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full',
+  'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full', 'quarantined', 'found-by-use',
 ]
 
 let folder: string
@@ -116,7 +116,7 @@ describe('the demo firm', () => {
   })
 
   it('verifies, and is filled once', async () => {
-    expect(await verifyLog(db, NOW)).toMatchObject({ ok: true })
+    expect(await verifyLog(db, { now: NOW, sealing: null })).toMatchObject({ ok: true })
     expect(await fillDemo(db, 'no password', NOW)).toBe(false)
   })
 })

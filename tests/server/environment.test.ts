@@ -57,6 +57,20 @@ describe('the settings of the server', () => {
     expect(refusal({ DATABASE_URL: url })).toBe('')
   })
 
+  it('take a key for checkpoints of 32 bytes, and never print one that is not', () => {
+    const key = 'nWGxne/9WmC6hEr0kuwsxERJxXN7MmkZcDusAxyuf2A='
+    expect(readEnvironment({ ...GOOD, CHECKPOINT_KEY: key }).checkpointKey).toBe(key)
+    expect(refusal({ CHECKPOINT_KEY: key.slice(4) })).toMatch(/^CHECKPOINT_KEY must be 32 bytes/)
+    expect(refusal({ CHECKPOINT_KEY: key.slice(4) })).not.toContain(key.slice(4))
+  })
+
+  it('take the public keys of earlier checkpoints, and refuse what is none', () => {
+    const key = 'custody-log/one+c74f20a3+ARpc2QcUPDhMQegwxbzhKqiBfsVkmqq/LDE4izWy10TW'
+    expect(readEnvironment({ ...GOOD, CHECKPOINT_FORMER_KEYS: `${key}, ${key}` }).formerCheckpointKeys).toEqual([key, key])
+    expect(readEnvironment(GOOD).formerCheckpointKeys).toEqual([])
+    expect(refusal({ CHECKPOINT_FORMER_KEYS: `${key} other` })).toMatch(/^CHECKPOINT_FORMER_KEYS must be public keys/)
+  })
+
   it('name every wrong one at once', () => {
     const told = refusal({ PORT: 'http', PUBLIC_URL: 'cylinders.example', COLLARBOOK_DEMO: 'yes', SMTP_URL: 'mail.example' })
     for (const name of ['PORT', 'PUBLIC_URL', 'COLLARBOOK_DEMO', 'SMTP_URL']) expect(told).toContain(name)

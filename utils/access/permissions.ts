@@ -10,8 +10,10 @@ export type Permission
     | 'lots:read' | 'lots:prepare' | 'lots:dispatch' | 'lots:receive'
     | 'places:read' | 'places:manage'
     | 'firms:read' | 'firms:manage'
+    | 'scales:read' | 'scales:manage'
     | 'people:read' | 'people:read-contact' | 'people:manage'
-    | 'log:verify' | 'log:export'
+    /** A checkpoint is no event: who only reads may ask for one. */
+    | 'log:verify' | 'log:export' | 'log:checkpoint'
     | 'settings:read' | 'settings:manage'
     /** Reminders and test choices; the fill rule asks for its own besides. */
     | 'rules:set' | 'fill-rule:set'
@@ -20,7 +22,8 @@ export type Permission
     | 'account:own'
 
 const EVERYONE = [
-  'account:own', 'fleet:read', 'firms:read', 'people:read', 'places:read', 'refrigerants:read', 'settings:read',
+  'account:own', 'fleet:read', 'firms:read', 'people:read', 'places:read', 'refrigerants:read',
+  'scales:read', 'settings:read',
 ] as const satisfies readonly Permission[]
 
 const WAREHOUSE = [
@@ -34,10 +37,10 @@ export const PERMISSIONS = {
   technician: [...EVERYONE, 'events:post'],
   manager: [
     ...WAREHOUSE, 'events:correct-any', 'shipments:dispatch', 'shipments:receive', 'lots:dispatch', 'lots:receive',
-    'rules:set', 'fill-rule:set', 'log:verify',
+    'rules:set', 'fill-rule:set', 'log:verify', 'log:export', 'log:checkpoint', 'scales:manage',
   ],
-  auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'people:read-contact', 'log:verify', 'log:export'],
-  admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'settings:manage', 'rules:set', 'mail:read'],
+  auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'people:read-contact', 'log:verify', 'log:export', 'log:checkpoint'],
+  admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'scales:manage', 'settings:manage', 'rules:set', 'mail:read', 'log:checkpoint'],
 } as const satisfies Record<Role, readonly Permission[]>
 
 /** What a permission is asked about, where it depends on that. */

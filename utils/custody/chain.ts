@@ -34,10 +34,22 @@ export function hashEvent(columns: HashedColumns, sha256: Sha256): string {
 /** What a line must follow: the version and the hash of the line before it; 0 and '' before the first. */
 export interface ChainHead { version: number, hash: string }
 
-/** What is wrong with a line after the one before it, in words; null where nothing is. */
-export function verifyStep(line: HashedColumns & { hash: string }, before: ChainHead, sha256: Sha256): string | null {
-  if (line.version !== before.version + 1) return 'a line before it is missing, or its version was changed'
-  if (line.prev_hash !== before.hash) return 'it does not follow the line before it'
-  if (hashEvent(line, sha256) !== line.hash) return 'one of its columns was changed'
-  return null
+/** What may be wrong with a line after the one before it. */
+export type ChainFault = 'missing-before' | 'unlinked' | 'changed'
+
+/** What is wrong with a line after the one before it; null where nothing is. */
+export function verifyStep(line: HashedColumns & { hash: string }, before: ChainHead, sha256: Sha256): ChainFault | null {
+  if (line.version !== before.version + 1) return 'missing-before'
+  if (line.prev_hash !== before.hash) return 'unlinked'
+  return isClosed(line, sha256) ? null : 'changed'
+}
+
+// A value that no line can have is a change as well.
+function isClosed(line: HashedColumns & { hash: string }, sha256: Sha256): boolean {
+  try {
+    return hashEvent(line, sha256) === line.hash
+  }
+  catch {
+    return false
+  }
 }

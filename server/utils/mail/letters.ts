@@ -29,3 +29,19 @@ export function newPasswordLetter({ recipient, name, firmName, link, days }: Lin
     ].join('\n'),
   }
 }
+
+interface CheckpointLetter { recipient: string, name: string, firmName: string, note: string, number: number, events: number, publicKey: string }
+
+/** The letter that brings an auditor a checkpoint, so that a copy of it is where nobody of the firm can change it. */
+export function checkpointLetter({ recipient, name, firmName, note, number, events, publicKey }: CheckpointLetter): Letter {
+  return {
+    recipient,
+    subject: `${firmName}: checkpoint ${number} of the custody log, ${events.toLocaleString('en-US')} events`,
+    body: [
+      `Hello ${name},`, '',
+      'this is how the custody log stood when it was signed. Keep this letter: if the log is ever changed before this point, this text will no longer fit it.', '',
+      note,
+      `Signed with the key ${publicKey}`, '',
+    ].join('\n'),
+  }
+}

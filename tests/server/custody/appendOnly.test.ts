@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { LOG_COLUMNS, SELECT_LOG, type LogRow, logRow } from '../../../server/utils/custody/logRow'
-import { verifyLog } from '../../../server/utils/custody/verify'
+import { verifyLog } from '../../../server/utils/proof/verifyLog'
 import { lb } from '../../helpers/stamps'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../../helpers/logDatabase'
 
@@ -27,7 +27,7 @@ describe('the log as a table', () => {
     'DELETE FROM custody_events WHERE version = 1',
   ])('refuses %s', async (sql) => {
     await expect(log.db.write([sql])).rejects.toThrow('append-only')
-    expect(await verifyLog(log.db, 0)).toMatchObject({ ok: true, checked: 24 })
+    expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true, checked: 24 })
   })
 
   it('keeps its row against INSERT OR REPLACE, by seq, by id and by version', async () => {
@@ -48,7 +48,7 @@ describe('the log as a table', () => {
 
 describe('verifying', () => {
   it(`finds each of ${DRAWS} changed bytes, in whatever column of whatever event`, { timeout: 120_000 }, async () => {
-    expect(await verifyLog(log.db, 0)).toMatchObject({ ok: true, checked: 24, cylinders: 6 })
+    expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true, checked: 24, cylinders: 6 })
     const rows = (await log.db.readClient.execute(SELECT_LOG)).rows.map(logRow)
     const drawn = new Set<string>()
     // The owner of the file can drop the triggers: that is the attacker this is about.
@@ -70,13 +70,13 @@ describe('verifying', () => {
       const written = await log.db.write([{ sql: `UPDATE OR IGNORE custody_events SET ${column} = ? WHERE rowid = ?`, args: [changed, row.seq] }])
       if (written[0]!.rowsAffected === 0) continue
       changes++
-      const verdict = await verifyLog(log.db, 0)
+      const verdict = await verifyLog(log.db, { now: 0, sealing: null })
       if (verdict.ok) missed.push(`${column} of ${row.id}: ${String(row[column])} -> ${String(changed)}`)
       await log.db.write([{ sql: `UPDATE custody_events SET ${column} = ? WHERE rowid = ?`, args: [row[column], column === 'seq' ? changed : row.seq] }])
     }
     expect(missed).toEqual([])
     expect([...drawn].sort()).toEqual([...LOG_COLUMNS].sort())
-    expect(await verifyLog(log.db, 0)).toMatchObject({ ok: true, checked: 24 })
+    expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true, checked: 24 })
   })
 })
 

@@ -5,7 +5,7 @@ import { parsePost } from '../../../server/utils/custody/judge'
 import { insertLogRow, recordedEvent } from '../../../server/utils/custody/logRow'
 import { rebuildCaches } from '../../../server/utils/custody/rebuild'
 import { sealedRow } from '../../../server/utils/custody/sealedRow'
-import { verifyLog } from '../../../server/utils/custody/verify'
+import { verifyLog } from '../../../server/utils/proof/verifyLog'
 import { lb } from '../../helpers/stamps'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../../helpers/logDatabase'
 
@@ -40,7 +40,7 @@ describe('two writers on one log', () => {
     const answers = await log.db.write([insertLogRow(row, read.newest!.id), ...cacheStatements(read)])
     expect(answers[0]!.rows).toHaveLength(0)
     expect(await caches()).toBe(before)
-    expect(await verifyLog(log.db, 0)).toMatchObject({ ok: true })
+    expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true })
   })
 
   it('records everything of both when they post at once, each event once', async () => {
@@ -49,7 +49,7 @@ describe('two writers on one log', () => {
     const posts = Array.from({ length: 60 }, (_, index) => record(index % 2 ? log.db : other, log.technician, [sent(ids[index % 3]!, 'weighed', { gross: lb(27.5 + index / 10) }, { deviceSeq: index })]))
     const outcomes = (await Promise.all(posts)).flat().map(result => result.outcome)
     expect(outcomes).toEqual(Array(60).fill('accepted'))
-    expect(await verifyLog(log.db, 0)).toMatchObject({ ok: true })
+    expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true })
   })
 
   it('rebuilds the caches to what they were, byte for byte', async () => {

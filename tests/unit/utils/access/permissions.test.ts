@@ -13,7 +13,8 @@ const MATRIX: Record<Permission, string> = {
   'firms:read': 'W T M A D',
   'fleet:read': 'W T M A D',
   'labels:mint': 'W M',
-  'log:export': 'A',
+  'log:checkpoint': 'M A D',
+  'log:export': 'M A',
   'log:verify': 'M A',
   'lots:dispatch': 'M',
   'lots:prepare': 'W M',
@@ -27,6 +28,8 @@ const MATRIX: Record<Permission, string> = {
   'places:read': 'W T M A D',
   'refrigerants:read': 'W T M A D',
   'rules:set': 'M D',
+  'scales:manage': 'M D',
+  'scales:read': 'W T M A D',
   'settings:manage': 'D',
   'settings:read': 'W T M A D',
   'shipments:dispatch': 'M',
@@ -60,7 +63,7 @@ describe('the table', () => {
   })
 
   it('lets the auditor write nothing', () => {
-    const writing = PERMISSIONS.auditor.filter(name => !/:(read|read-contact|verify|export|own)$/.test(name))
+    const writing = PERMISSIONS.auditor.filter(name => !/:(read|read-contact|verify|export|checkpoint|own)$/.test(name))
     expect(writing).toEqual([])
   })
 

@@ -34,8 +34,12 @@ describe('the chain of a cylinder', () => {
   })
 
   it('finds a line that is missing and a line that was put in', () => {
-    expect(verifyStep(closed, { version: 1, hash: '' }, sha256)).toContain('missing')
-    expect(verifyStep({ ...closed, version: 2 }, { version: 1, hash: 'another' }, sha256)).toContain('does not follow')
+    expect(verifyStep(closed, { version: 1, hash: '' }, sha256)).toBe('missing-before')
+    expect(verifyStep({ ...closed, version: 2 }, { version: 1, hash: 'another' }, sha256)).toBe('unlinked')
+  })
+
+  it('finds a value that no line can have', () => {
+    expect(verifyStep({ ...closed, seq: 1.5 }, BEGINNING, sha256)).toBe('changed')
   })
 
   it('tells a text from the number it looks like, and takes nothing else', () => {

@@ -1,0 +1,24 @@
+/** What may be wrong with a log, its checkpoints, or what is made from it. */
+export const DAMAGE_KINDS = [
+  'changed', 'missing-before', 'unlinked', 'missing-number', 'unreadable',
+  'fewer-than-checkpointed', 'not-as-checkpointed', 'checkpoint-missing', 'checkpoint-forged', 'checkpoint-other-key',
+  'row-differs', 'movements-differ', 'labels-differ',
+] as const
+export type DamageKind = (typeof DAMAGE_KINDS)[number]
+
+/** What each kind of damage says, as the end of a sentence about a line, a checkpoint or a cylinder. */
+export const DAMAGE_WORDS: Record<DamageKind, string> = {
+  'changed': 'one of its columns was changed',
+  'missing-before': 'a line before it is missing, or its version was changed',
+  'unlinked': 'it does not follow the line before it',
+  'missing-number': 'lines with these numbers are missing: the end of a cylinder’s log, or all of it',
+  'unreadable': 'it cannot be read as what the log writes',
+  'fewer-than-checkpointed': 'the log holds fewer lines than when it was signed: the end of a cylinder’s log, or all of it, is missing',
+  'not-as-checkpointed': 'the log no longer ends, cylinder by cylinder, as it did when it was signed: something before it was written anew',
+  'checkpoint-missing': 'it is missing, or the one before it was exchanged',
+  'checkpoint-forged': 'its text is not what was signed',
+  'checkpoint-other-key': 'it is signed by a key that this server does not know',
+  'row-differs': 'its row in the fleet is not what its log gives',
+  'movements-differ': 'its movements are not what its log gives',
+  'labels-differ': 'its labels are not what its log gives',
+}
