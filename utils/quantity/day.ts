@@ -12,6 +12,16 @@ export function isDay(text: string): boolean {
   return !Number.isNaN(midnight.getTime()) && midnight.toISOString().startsWith(`${text}T`)
 }
 
+/** The next day of the calendar. */
+export function dayAfter(day: Day): Day {
+  return shifted(day, 1)
+}
+
+/** The day of the calendar before. */
+export function dayBefore(day: Day): Day {
+  return shifted(day, -1)
+}
+
 /** The day it is at an instant (UTC milliseconds) in a time zone. */
 export function dayOfInstant(ms: number, timeZone: string): Day {
   const { year, month, day } = wallClock(ms, timeZone)
@@ -33,6 +43,10 @@ export function firstInstantOfDay(day: Day, timeZone: string): number {
     else within = middle
   }
   return within
+}
+
+function shifted(day: Day, days: number): Day {
+  return new Date(Date.parse(`${day}T00:00:00Z`) + days * MS_PER_DAY).toISOString().slice(0, 10)
 }
 
 function two(value: number): string {
