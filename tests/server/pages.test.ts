@@ -31,7 +31,7 @@ function pageOf(client: TestClient, path: string): Promise<Answer<string>> {
 /** The page of the cylinder, and pages that show people, papers and settings: whatever a person can open. */
 function pagesOf(): string[] {
   return [
-    '/account', '/fleet', '/fleet/register', '/labels', '/log', '/mail', '/now', '/people', '/places', '/pressure-check', '/retests', '/rules', '/scan', '/shipments', '/van', '/vans', '/which-cylinder',
+    '/account', '/fleet', '/fleet/register', '/labels', '/log', '/mail', '/now', '/people', '/places', '/pressure-check', '/retests', '/rules', '/scales', '/scan', '/shipments', '/van', '/vans', '/which-cylinder',
     `/c/${cylinder.id}`, `/c/${cylinder.id}/log`, `/c/${cylinder.id}/act/filled`,
   ]
 }

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { FillPolicy } from '../capacity/types'
 import type { CylinderRow } from '../custody/cylinderView'
 import { CHOICE_PARAGRAPHS } from '../requalification/ownerChoice'
+import type { Scale } from '../quantity/scale'
 import type { RetestSettings } from '../requalification/retestSettings'
 import { eachOnce, id, line } from './parts'
 
@@ -75,7 +76,8 @@ export interface PolicyAnswer {
   rules: FirmRule[]
   /** Rows of the fleet that do not yet rest on the rules in force; they follow within the minute. */
   rowsBehind: number
-  scales: { id: string, name: string, accuracyGrams: number, accuracyPercent: number, lastCheck: string | null }[]
+  /** Those turned off too: the log names them. */
+  scales: (Scale & { active: boolean })[]
 }
 
 /** One cylinder that a rule would change, before and after it. */

@@ -1,13 +1,17 @@
 import type { Certification } from '../../../utils/access/certification'
 import type { Access, Role } from '../../../utils/access/roles'
 import type { MassUnit } from '../../../utils/quantity/mass'
-import type { Random } from './random'
+import type { ScaleStep } from '../../../utils/quantity/scale'
+import { DAY } from './calendar'
+import { seededRandom, type Random } from './random'
 
 // Everybody and every firm here is invented.
 
 export const DEMO_PASSWORD = 'demo-cylinders-2026'
 export const DEMO_TIME_ZONE = 'America/Chicago'
 export const DEMO_FIRM = { name: 'Ferrowick Refrigeration', telephone: '(555) 010-0142', timeZone: DEMO_TIME_ZONE, units: 'lb' as MassUnit }
+
+const SCALES_SEED = 20_261_202
 
 export interface DemoPerson extends Certification {
   id: string
@@ -23,12 +27,15 @@ export interface DemoPerson extends Certification {
 export interface DemoPlace { id: string, name: string, kind: 'shop' | 'rack' | 'van' | 'site' | 'firm', parentId?: string, firmId?: string, technicianId?: string }
 export interface DemoFirm { id: string, name: string, kind: 'reclaimer' | 'requalifier' | 'supplier' | 'customer' | 'carrier', telephone: string, email: string, address: string, rin?: string }
 
+export interface DemoScale { id: string, name: string, accuracyEntered: ScaleStep, accuracyPercent: number, lastCheckOn: string | null }
+
 export interface Cast {
   people: Record<'warehouse' | 'technician' | 'second' | 'third' | 'manager' | 'auditor' | 'admin' | 'trainee', DemoPerson>
   shops: [DemoPlace, DemoPlace]
   racks: DemoPlace[]
   vans: DemoPlace[]
   sites: DemoPlace[]
+  scales: Record<'shop' | 'south' | 'dock', DemoScale>
   firms: Record<'reclaimer' | 'otherReclaimer' | 'requalifier' | 'supplier' | 'dairy' | 'store', DemoFirm>
   placeOf: (firm: DemoFirm) => DemoPlace
   firmPlaces: DemoPlace[]
@@ -75,9 +82,21 @@ export function castOf(random: Random, startAt: number): Cast {
   const vans = Array.from({ length: 6 }, (_, index) => place(`Van ${String(index * 3 + 2).padStart(2, '0')}`, 'van', { technicianId: drivers[index]?.id }))
   const firmPlaces = Object.values(firms).map(one => place(one.name, 'firm', { firmId: one.id }))
   return {
-    people, shops, racks, vans, firms, firmPlaces,
+    people, shops, racks, vans, firms, firmPlaces, scales: scalesOf(startAt),
     sites: [place('Creamery plant room', 'site'), place('Harbour cold store, roof', 'site')],
     placeOf: one => firmPlaces.find(spot => spot.firmId === one.id)!,
+  }
+}
+
+/** One scale checked lately, one over a year before the story's end, one of which nobody knows. */
+function scalesOf(startAt: number): Cast['scales'] {
+  // Of their own, so that the story stays as it is whatever scales there are.
+  const { uuid } = seededRandom(SCALES_SEED)
+  const day = (days: number) => new Date(startAt + days * DAY).toISOString().slice(0, 10)
+  return {
+    shop: { id: uuid(startAt), name: 'North shop scale', accuracyEntered: { unit: 'oz', value: 0.5 }, accuracyPercent: 0.25, lastCheckOn: day(500) },
+    south: { id: uuid(startAt), name: 'South shop scale', accuracyEntered: { unit: 'oz', value: 1 }, accuracyPercent: 0.5, lastCheckOn: day(150) },
+    dock: { id: uuid(startAt), name: 'Dock platform', accuracyEntered: { unit: 'lb', value: 0.2 }, accuracyPercent: 0, lastCheckOn: null },
   }
 }
 

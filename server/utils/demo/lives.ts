@@ -68,10 +68,16 @@ function playLife(stage: Stage, refrigerant: string, size: SteelSize): Steel {
 }
 
 /** The warehouse's count: most of what stands idle at the story's end was on the scale within the last weeks. */
-function countLately({ random, script, cast, endAt }: Stage, steel: Steel, since: number, shopId: string): Steel {
+function countLately(stage: Stage, steel: Steel, since: number, shopId: string): Steel {
+  const { random, script, cast, endAt } = stage
   const at = workingTime(endAt, -random.between(3, 24), random)
-  if (at > since + 2 * DAY && random.chance(0.85)) script.add(cast.people.warehouse, at, steel.id, 'weighed', { gross: weigh(steel, 'lb') }, { placeId: shopId })
+  if (at > since + 2 * DAY && random.chance(0.85)) script.add(cast.people.warehouse, at, steel.id, 'weighed', { gross: weigh(steel, 'lb'), scaleId: scaleAt(stage, shopId) }, { placeId: shopId })
   return steel
+}
+
+/** The scale of a shop. */
+function scaleAt({ cast: { shops, scales } }: Stage, shopId: string): string {
+  return shopId === shops[0].id ? scales.shop.id : scales.south.id
 }
 
 /** Registered from the stamp and labelled within the quarter of an hour. */
@@ -132,7 +138,7 @@ function bringBack(stage: Stage, steel: Steel, out: { at: number, by: DemoPerson
   if (at > endAt) return at
   const signed = out.by.trainee ? { supervisorId: stage.supervisor.id } : {}
   script.add(out.by, at, steel.id, 'moved', { toPlaceId: shopId }, signed)
-  if (random.chance(0.45) && at + 3 * HOUR < endAt) script.add(cast.people.warehouse, at + 3 * HOUR, steel.id, 'weighed', { gross: weigh(steel, 'lb') }, { placeId: shopId })
+  if (random.chance(0.45) && at + 3 * HOUR < endAt) script.add(cast.people.warehouse, at + 3 * HOUR, steel.id, 'weighed', { gross: weigh(steel, 'lb'), scaleId: scaleAt(stage, shopId) }, { placeId: shopId })
   return at
 }
 

@@ -2,6 +2,7 @@ import type { InStatement } from '@libsql/client'
 import { firm, firms, labels, openLines, people, places, scales, settings, shipmentLines, shipments, testLotLines, testLots } from '../../../drizzle/schema'
 import { DEFAULT_FILL_POLICY } from '../../../utils/capacity/types'
 import { readingGrams } from '../../../utils/quantity/mass'
+import { stepGrams } from '../../../utils/quantity/scale'
 import { statement, type Database } from '../database/database'
 import { DAY, workingMorning } from './calendar'
 import { DEMO_FIRM, type Cast } from './cast'
@@ -9,7 +10,7 @@ import type { DemoLot, DemoShipment, Stage } from './lives'
 
 const CAREFUL_DAYS = 150
 
-/** The firm, its people, places and firms, one scale and the firm's rules. */
+/** The firm, its people, places and firms, its scales and rules. */
 export function castTables({ read }: Database, cast: Cast, passwordHash: string, at: number, uuid: (ms: number) => string): InStatement[] {
   const created = { createdAt: at }
   return [
@@ -17,7 +18,9 @@ export function castTables({ read }: Database, cast: Cast, passwordHash: string,
     ...Object.values(cast.people).map(({ reads, ...one }) => statement(read.insert(people).values({ ...one, units: reads, passwordHash, active: true, ...created }))),
     ...Object.values(cast.firms).map(one => statement(read.insert(firms).values({ ...one, ...created }))),
     ...[...cast.shops, ...cast.racks, ...cast.firmPlaces, ...cast.vans, ...cast.sites].map(one => statement(read.insert(places).values({ ...one, ...created }))),
-    statement(read.insert(scales).values({ id: uuid(at), name: 'Shop scale', accuracyGrams: 14, accuracyBasisPoints: 25, lastCheckOn: new Date(at).toISOString().slice(0, 10) })),
+    ...Object.values(cast.scales).map(({ accuracyPercent, ...one }) => statement(read.insert(scales).values({
+      ...one, accuracyGrams: stepGrams(one.accuracyEntered), accuracyBasisPoints: Math.round(accuracyPercent * 100),
+    }))),
     ...firmRules(cast, at).map(rule => statement(read.insert(settings).values({ id: uuid(rule.fromAt), ...rule, setAt: rule.fromAt }))),
   ]
 }

@@ -13,7 +13,8 @@ export interface Directory extends DatedRules {
   people: ReadonlyMap<string, typeof people.$inferSelect>
   /** By the id of its firm. */
   placeOfFirm: ReadonlyMap<string, string>
-  scales: ReadonlyMap<string, Scale>
+  /** Those turned off too: the log names them. */
+  scales: ReadonlyMap<string, Scale & { active: boolean }>
   /** Every rule that was ever set or withdrawn, in order of its beginning. */
   settings: readonly SettingRow[]
   readAt: number
@@ -63,6 +64,7 @@ async function readDirectory(db: Database): Promise<Directory> {
       accuracyGrams: row.accuracyGrams,
       accuracyPercent: row.accuracyBasisPoints / 100,
       lastCheck: row.lastCheckOn,
+      active: row.active,
     }])),
     settings: settingRows,
     readAt: Date.now(),

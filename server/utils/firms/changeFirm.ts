@@ -3,6 +3,7 @@ import { firms, places } from '~~/drizzle/schema'
 import type { Firm, FirmChange } from '~~/utils/contract/places'
 import { statement, type Database } from '../database/database'
 import { directory } from '../directory/directory'
+import { refuseTakenName } from '../directory/takenName'
 import { problem } from '../http/problem'
 import { refuseStrayRin } from './createFirm'
 import { firmById } from './firms'
@@ -10,7 +11,7 @@ import { firmById } from './firms'
 /**
  * Changes a firm; its place keeps the same name and is turned off and on with it.
  *
- * Errors: 404; 409 for turning off a firm where cylinders stand; 422 for a RIN on a firm that is no requalifier.
+ * Errors: 404; 409 for turning off a firm where cylinders stand, and for a name that is taken; 422 for a RIN on a firm that is no requalifier.
  */
 export async function changeFirm(db: Database, id: string, change: FirmChange): Promise<Firm> {
   // What is checked here must still hold when it is written.
@@ -21,6 +22,7 @@ export async function changeFirm(db: Database, id: string, change: FirmChange): 
       throw problem(409, 'Cylinders stand there', `Bring the ${firm.cylinders} back first; then it can be turned off.`)
     }
     refuseStrayRin(firm.kind, change.rin ?? null)
+    if (change.name !== undefined && change.name !== firm.name) refuseTakenName((await directory(db, true)).firms.values(), { id, name: change.name })
     const { name = firm.name, active = firm.active } = change
     await commit([
       statement(db.read.update(firms).set({ ...change, name, active }).where(eq(firms.id, id))),

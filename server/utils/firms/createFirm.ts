@@ -3,14 +3,15 @@ import { firms } from '~~/drizzle/schema'
 import type { Firm, NewFirm } from '~~/utils/contract/places'
 import { statement, type Database } from '../database/database'
 import { directory } from '../directory/directory'
+import { refuseTakenName } from '../directory/takenName'
 import { problem } from '../http/problem'
 import { firmById } from './firms'
 
 /**
  * A new firm and, in the same commit, the place where its cylinders stand.
  *
- * Errors: 422 for a RIN on a firm that is no requalifier; 409 where another firm has this id. The same firm sent again
- * is answered as it stands.
+ * Errors: 422 for a RIN on a firm that is no requalifier; 409 for a name that is taken, and where another firm has this
+ * id. The same firm sent again is answered as it stands.
  */
 export async function createFirm(db: Database, body: NewFirm, now: number): Promise<Firm> {
   const row = {
@@ -23,15 +24,21 @@ export async function createFirm(db: Database, body: NewFirm, now: number): Prom
     rin: body.rin ?? null,
   }
   refuseStrayRin(row.kind, row.rin)
-  await db.write([
-    statement(db.read.insert(firms).values({ ...row, createdAt: now }).onConflictDoNothing()),
-    {
-      sql: `INSERT INTO places (id, name, kind, firm_id, active, created_at)
-        SELECT ?, name, 'firm', id, 1, created_at FROM firms WHERE id = ?
-          AND NOT EXISTS (SELECT 1 FROM places WHERE firm_id = ?)`,
-      args: [uuid(), row.id, row.id],
-    },
-  ])
+  // The name that is free now must still be free when it is written.
+  await db.exclusive(async (commit) => {
+    const known = (await directory(db, true)).firms
+    if (known.has(row.id)) return
+    refuseTakenName(known.values(), row)
+    await commit([
+      statement(db.read.insert(firms).values({ ...row, createdAt: now }).onConflictDoNothing()),
+      {
+        sql: `INSERT INTO places (id, name, kind, firm_id, active, created_at)
+          SELECT ?, name, 'firm', id, 1, created_at FROM firms WHERE id = ?
+            AND NOT EXISTS (SELECT 1 FROM places WHERE firm_id = ?)`,
+        args: [uuid(), row.id, row.id],
+      },
+    ])
+  })
   await directory(db, true)
   const firm = await firmById(db, row.id)
   const isTheSame = firm !== null && (Object.keys(row) as (keyof typeof row)[]).every(key => firm[key] === row[key])
