@@ -24,6 +24,7 @@ export default defineConfig(async () => ({
       nodeProject('reference'),
       nodeProject('server', served),
       nodeProject('e2e', served),
+      nodeProject('faults', served),
       await defineVitestProject({
         resolve: { alias },
         test: {
