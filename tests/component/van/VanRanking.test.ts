@@ -18,6 +18,18 @@ async function shown(items: RankedLine[], pair: RankingAnswer['pair'] = null) {
 }
 
 describe('the choice of a cylinder on the screen', () => {
+  it('keeps those that do not go folded away, and says how many they are', async () => {
+    const refused = (id: string) => line(id, { fit: 'refused', roomGrams: null, exactStopWeightGrams: null, reasons: ['holds R-22'] })
+    const root = await shown([line('A', {}), refused('D'), refused('E')])
+    const fold = byRole(root, 'region', 'Not these').querySelector('details')!
+    expect(fold.open).toBe(false)
+    expect(fold.querySelector('summary')!.textContent).toContain('Not these: 2 cylinders')
+    wrapper?.unmount()
+    expect((await shown([refused('D')])).querySelector('summary')!.textContent).toContain('Not these: 1 cylinder')
+    wrapper?.unmount()
+    expect((await shown([line('A', {})])).querySelector('details')).toBeNull()
+  })
+
   it('parts those that take all of it from the others, each with its reasons', async () => {
     const root = await shown([
       line('A', {}), line('B', { fit: 'part', roomGrams: 1_000 }),
