@@ -13,6 +13,7 @@ import { FOUND, MISSING } from '~~/utils/custody/draft/missing'
 import { MOVED } from '~~/utils/custody/draft/moved'
 import { REGISTERED } from '~~/utils/custody/draft/registered'
 import { RECEIVED, RETURNED } from '~~/utils/custody/draft/received'
+import { RETIRED } from '~~/utils/custody/draft/retired'
 import { QUARANTINED, RELEASED } from '~~/utils/custody/draft/setApart'
 import { WEIGHED } from '~~/utils/custody/draft/weighed'
 import type { EventKind } from '~~/utils/custody/kinds'
@@ -32,6 +33,7 @@ import QuarantinedForm from './QuarantinedForm.vue'
 import ReceivedForm from './ReceivedForm.vue'
 import RegisteredForm from './RegisteredForm.vue'
 import ReleasedForm from './ReleasedForm.vue'
+import RetiredForm from './RetiredForm.vue'
 import ReturnedForm from './ReturnedForm.vue'
 import WeighedForm from './WeighedForm.vue'
 
@@ -65,6 +67,7 @@ export const ACT_FORMS = {
   'released': { component: ReleasedForm, draft: RELEASED, title: 'Released', verb: 'Release it', cautions: [] },
   'missing': { component: MissingForm, draft: MISSING, title: 'Missing', verb: 'Report it missing', cautions: [] },
   'found': { component: FoundForm, draft: FOUND, title: 'Found', verb: 'Record that it was found', cautions: [] },
+  'retired': { component: RetiredForm, draft: RETIRED, title: 'Retired', verb: 'Retire it', cautions: ['handling'] },
 } satisfies Record<FormKind, ActForm>
 
 /** The form that mends a recorded event of a kind, or null where it can only be taken out and recorded anew. */

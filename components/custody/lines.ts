@@ -69,6 +69,9 @@ const LINES: { [K in EventKind]: Say<K> } = {
   'released': ({ reason }) => ({ what: reason }),
   'missing': ({ lastSeen }) => ({ what: lastSeen === undefined ? 'nobody finds it' : `last seen: ${lastSeen}` }),
   'found': ({ placeId }, names) => placeId === undefined ? { what: 'where the log had it' } : { what: `at ${named(placeId, names)}`, to: named(placeId, names) },
+  'retired': ({ reason, proof }) => ({
+    what: [reason, proof?.text, proof?.certificate && `certificate ${proof.certificate}`, proof?.photoIds && photosInWords(proof.photoIds.length)].filter(Boolean).join('; '),
+  }),
   'sent-for-reclaim': ({ gross }) => ({ what: 'left with a shipment', gross }),
   'reclaimed': ({ theirGross, acceptedNet, grade }) => ({
     what: ['taken over by the reclaimer', acceptedNet && `accepted ${formatReading(acceptedNet)} net`, grade].filter(Boolean).join(', '),
@@ -92,6 +95,10 @@ export function lineWords(line: LogLine): LineWords {
 /** The word of a line's kind. */
 export function lineVerb(line: LogLine): string {
   return KIND_WORDS[line.kind]?.done ?? line.kind
+}
+
+function photosInWords(count: number): string {
+  return count === 1 ? 'a photo' : `${count} photos`
 }
 
 function named(id: string, names: Names): string {

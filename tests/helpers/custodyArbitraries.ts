@@ -46,6 +46,7 @@ const happenings: fc.Arbitrary<Told>[] = [
   fc.constantFrom('an oily valve', 'waits for a look').map(reason => did('quarantined', { reason })),
   fc.constant(did('released', { reason: 'looked at' })),
   fc.constantFrom(undefined, 'on a roof').map(lastSeen => did('missing', { lastSeen })),
+  fc.constantFrom(undefined, { certificate: 'S-114' }).map(proof => did('retired', { reason: 'scrapped', proof })),
   fc.constantFrom(undefined, SHOP, RECLAIMER_PLACE).map(placeId => did('found', { placeId })),
   gross.map(reading => did('sent-for-reclaim', { shipmentId: SHIPMENT, gross: reading }, { placeId: RECLAIMER_PLACE })),
   fc.constant(did('reclaimed', { shipmentId: SHIPMENT })),

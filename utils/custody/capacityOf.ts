@@ -11,11 +11,12 @@ import { exactGrams } from '../quantity/mass'
 import type { Catalogue } from '../refrigerant/types'
 import type { Requalification } from '../requalification/requalification'
 import type { CapacityView, Missing } from './cylinderView'
+import { endOf } from './endOf'
 import type { Finding } from './finding'
 import { holdFinding } from './findings/holds'
 import { notEvacuatedFor } from './findings/mixing'
 import { urgencyOrder } from './findings/order'
-import { afterEnd, away, nowhere } from './findings/record'
+import { away, ended, nowhere } from './findings/record'
 import { retestOverdue, retestUnknown } from './findings/retest'
 import { standingFinding } from './findings/standing'
 import type { CylinderState } from './state'
@@ -97,7 +98,8 @@ const NO_STAMP: FillLimit = {
 
 /** Everything that keeps a cylinder from being filled now; an overfill is not among it, for that shows as room. */
 function refusalsOfFill(state: CylinderState, retest: Requalification, refrigerant: string | null, catalogue: Catalogue): Finding[] {
-  const { stamp, away: where, missing, condemnedAt } = state
+  const { stamp, away: where, missing } = state
+  const end = endOf(state)
   const fit = stamp === null ? [] : fitFindings({ stamp, refrigerant, catalogue })
   return [
     ...fit.filter(({ severity }) => severity === 'stop').map(finding => ({ ...finding, since: null })),
@@ -108,7 +110,7 @@ function refusalsOfFill(state: CylinderState, retest: Requalification, refrigera
     ...(retest.state === 'unknown' ? [retestUnknown()] : []),
     ...(missing ? [nowhere(missing)] : []),
     ...(where ? [away(where.at, where.since)] : []),
-    ...(condemnedAt === null ? [] : [afterEnd(condemnedAt)]),
+    ...(end === null ? [] : [ended(end)]),
   ].sort(urgencyOrder)
 }
 

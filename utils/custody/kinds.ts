@@ -4,7 +4,7 @@
  */
 export const EVENT_KINDS = [
   'registered', 'labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost',
-  'inspected', 'quarantined', 'released', 'missing', 'found',
+  'inspected', 'quarantined', 'released', 'missing', 'found', 'retired',
   'sent-for-reclaim', 'reclaimed', 'returned', 'sent-for-test', 'retested', 'corrected',
 ] as const
 
@@ -14,4 +14,4 @@ export type EventKind = (typeof EVENT_KINDS)[number]
 export const DISPATCH_KINDS = ['sent-for-reclaim', 'sent-for-test'] as const satisfies readonly EventKind[]
 
 /** Kinds that are decisions: their author must name the version of the cylinder that was looked at. */
-export const DECISION_KINDS = ['released', 'reclaimed', 'corrected'] as const satisfies readonly EventKind[]
+export const DECISION_KINDS = ['released', 'retired', 'reclaimed', 'corrected'] as const satisfies readonly EventKind[]

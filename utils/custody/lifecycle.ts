@@ -3,6 +3,7 @@ import type { CylinderState } from './state'
 
 /** What a cylinder shows as: its end, else where it has gone, else its hold, else in service. */
 export function lifecycleOf(state: CylinderState): Lifecycle {
+  if (state.retired) return 'retired'
   if (state.condemnedAt !== null) return 'condemned'
   if (state.missing) return 'missing'
   if (state.away) return state.away.at

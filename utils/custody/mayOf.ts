@@ -1,7 +1,8 @@
 import type { Access } from '../access/roles'
+import { contentsInWords } from './contentsInWords'
 import type { CylinderView } from './cylinderView'
 import { DISPATCH_KINDS, EVENT_KINDS, type EventKind } from './kinds'
-import { mayCheck, mayDraw, mayFill, mayTake, type PlanAnswer, type Planned } from './plan'
+import { isEmptyByScale, mayCheck, mayDraw, mayFill, mayTake, type PlanAnswer, type Planned } from './plan'
 import { mayPost } from './posting'
 import { MISSING_WORDS } from './words'
 
@@ -29,6 +30,7 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
     case 'released': return view.holds.includes('quarantined') ? null : 'It is not set apart.'
     case 'missing': return view.lifecycle === 'missing' ? 'It is missing already.' : null
     case 'found': return view.lifecycle === 'missing' ? null : 'It is not missing.'
+    case 'retired': return whyNotRetired(view)
     case 'filled': return reason(mayFill(view))
     case 'drawn': return reason(mayDraw(view))
     case 'checked': return view.contents.nothingInIt ? 'By the log nothing is in it.' : reason(mayCheck(view))
@@ -36,6 +38,11 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
     case 'handed-over': return reason(mayTake(view))
     default: return null
   }
+}
+
+function whyNotRetired(view: Planned): string | null {
+  if (view.lifecycle === 'retired') return 'It is retired already.'
+  return isEmptyByScale(view) ? null : `${contentsInWords(view)} Draw it or ship it first.`
 }
 
 function reason({ allowed, because, missing }: PlanAnswer): string | null {

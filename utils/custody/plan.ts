@@ -52,14 +52,17 @@ export function mayShip(view: Planned): PlanAnswer {
 
 /** Whether it may leave for its requalification: never with contents. */
 export function mayTest(view: Planned): PlanAnswer {
-  const { nothingInIt, netGrams, uncertaintyGrams } = view.contents
-  const isEmpty = nothingInIt || (netGrams !== null && netGrams <= (uncertaintyGrams ?? 0))
   return answer([
-    ...(isEmpty ? [] : [...standing(view, 'retest-overdue'), hasContents(netGrams)]),
+    ...(isEmptyByScale(view) ? [] : [...standing(view, 'retest-overdue'), hasContents(view.contents.netGrams)]),
     ...standing(view, 'not-registered'),
     ...gone(view),
     ...ended(view),
   ])
+}
+
+/** Whether the scale cannot tell what is in it from nothing. */
+export function isEmptyByScale({ contents: { nothingInIt, netGrams, uncertaintyGrams } }: Planned): boolean {
+  return nothingInIt || (netGrams !== null && netGrams <= (uncertaintyGrams ?? 0))
 }
 
 function answer(because: Finding[], missing: Missing[] = []): PlanAnswer {
@@ -75,5 +78,6 @@ function gone(view: Planned): Finding[] {
 }
 
 function ended(view: Planned): Finding[] {
-  return standing(view, 'condemned')
+  const condemned = standing(view, 'condemned')
+  return condemned.length > 0 ? condemned : view.capacity.refusals.filter(({ code }) => code === 'after-end')
 }

@@ -6,6 +6,7 @@ import type { RetestRules } from '../requalification/ownerChoice'
 import { capacityOf } from './capacityOf'
 import type { CylinderRow, Lifecycle } from './cylinderView'
 import { dateFindings, isOverdue, type Day } from './dateFindings'
+import { endOf } from './endOf'
 import type { FindingCode, Severity } from './finding'
 import { urgencyOrder } from './findings/order'
 import { retestUnknown } from './findings/retest'
@@ -74,7 +75,7 @@ export function cacheRow(state: CylinderState, context: RowContext): RowColumns 
   const capacity = capacityOf(state, undated, context)
   const findings = [
     ...stateFindings(state, capacity.fillLimitGrams, { ...context, codesOnTwo: context.codesOnTwo ?? new Set() }),
-    ...(retest.state === 'unknown' && state.condemnedAt === null ? [retestUnknown()] : []),
+    ...(retest.state === 'unknown' && endOf(state) === null ? [retestUnknown()] : []),
   ].sort(urgencyOrder)
   const codes = [...new Set(findings.map(({ code }) => code))]
   return {

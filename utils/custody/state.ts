@@ -62,6 +62,7 @@ export interface CylinderState {
   /** Nobody knows where it is; `lastSeen` in words. */
   missing: { since: number, lastSeen: string | null } | null
   condemnedAt: number | null
+  retired: { since: number } | null
   holds: StateHold[]
   contents: ContentsState
   /** Burnt refrigerant was in it at any time, whatever was done since. */
@@ -97,6 +98,7 @@ export function initialState(id: string): CylinderState {
     away: null,
     missing: null,
     condemnedAt: null,
+    retired: null,
     holds: [],
     contents: {
       refrigerant: null,

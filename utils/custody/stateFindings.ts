@@ -1,6 +1,7 @@
 import { fitFindings } from '../capacity/fit'
 import type { FillPolicy } from '../capacity/types'
 import type { Catalogue } from '../refrigerant/types'
+import { endOf } from './endOf'
 import type { Finding } from './finding'
 import { holdFinding } from './findings/holds'
 import { twoOwners } from './findings/mixing'
@@ -32,7 +33,7 @@ export function stateFindings(state: CylinderState, fillLimitGrams: number | nul
     ...state.standing.filter(({ code }) => OF_CONTENTS.includes(code)).map(standingFinding),
     ...(ownersIn(state) > 1 ? [twoOwners()] : []),
   ]
-  if (state.condemnedAt !== null) return [condemned(state.condemnedAt), ...ofContents]
+  if (endOf(state) !== null) return [...(state.condemnedAt === null ? [] : [condemned(state.condemnedAt)]), ...ofContents]
   return [
     ...ofContents,
     ...state.holds.map(holdFinding),

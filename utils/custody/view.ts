@@ -7,6 +7,7 @@ import type { RetestRules } from '../requalification/ownerChoice'
 import { capacityInWords, capacityOf } from './capacityOf'
 import type { CylinderView, Named, RequalificationView } from './cylinderView'
 import { dateFindings } from './dateFindings'
+import { endOf } from './endOf'
 import { urgencyOrder } from './findings/order'
 import { retestUnknown } from './findings/retest'
 import { lifecycleOf } from './lifecycle'
@@ -50,7 +51,7 @@ export function view(state: CylinderState, context: ViewContext): CylinderView {
   const { nothingInIt } = state.contents
   const findings = [
     ...stateFindings(state, capacity.fillLimitGrams, context),
-    ...(retest.state === 'unknown' && state.condemnedAt === null ? [retestUnknown()] : []),
+    ...(retest.state === 'unknown' && endOf(state) === null ? [retestUnknown()] : []),
     ...dateFindings({ lifecycle, nothingInIt, dueMonth: retest.dueMonth, lastSeenAt: state.lastSeenAt }, context),
   ].sort(urgencyOrder)
   const shown = {

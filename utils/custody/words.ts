@@ -28,6 +28,7 @@ export const KIND_WORDS: Record<EventKind, KindWords> = {
   'released': { act: 'Release', done: 'Released' },
   'missing': { act: 'Report it missing', done: 'Missing' },
   'found': { act: 'Found it', done: 'Found' },
+  'retired': { act: 'Retire', done: 'Retired' },
   'sent-for-reclaim': { act: 'Ship for reclaim', done: 'Sent for reclaim' },
   'reclaimed': { act: 'Reclaimed', done: 'Reclaimed' },
   'returned': { act: 'Return', done: 'Returned' },

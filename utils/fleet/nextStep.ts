@@ -16,8 +16,9 @@ export function nextStep(row: CylinderRow): NextStep | null {
   const has = (code: CylinderRow['findingCodes'][number]) => row.findingCodes.includes(code)
   if (row.lifecycle === 'retired' || row.lifecycle === 'condemned') return null
   if (row.lifecycle === 'at-reclaim' || row.lifecycle === 'at-test') return { word: 'Await it', screen: 'cylinder' }
+  if (row.lifecycle === 'missing') return { word: 'Look for it', screen: 'cylinder' }
   if (has('overfill')) return { word: 'Draw it down', screen: 'cylinder' }
-  if (has('not-seen') || row.lifecycle === 'missing') return { word: 'Look for it', screen: 'cylinder' }
+  if (has('not-seen')) return { word: 'Look for it', screen: 'cylinder' }
   if (row.lifecycle === 'rejected') return { word: 'Open it', screen: 'cylinder' }
   if (!row.nothingInIt && row.refrigerant === null) return { word: 'Identify it', screen: 'cylinder' }
   if (has('retest-overdue') || has('early-test') || has('retest-unknown')) {

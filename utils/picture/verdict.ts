@@ -26,6 +26,8 @@ export function verdictOf(view: CylinderView, unit: MassUnit): Verdict {
 
   const condemned = view.findings.find(finding => finding.code === 'condemned')
   if (condemned) return { kind: 'stop', text: 'Condemned: never fill it again', reason: condemned.text, source: condemned.source }
+  const retired = view.lifecycle === 'retired' ? capacity.refusals.find(({ code }) => code === 'after-end') : undefined
+  if (retired) return { kind: 'stop', text: 'Retired: never fill it again', reason: retired.text, source: retired.source }
   const refusal = capacity.refusals[0]
   if (refusal) return { kind: 'stop', text: `Do not fill: ${refusal.code === 'away' ? LIFECYCLE_WORDS[view.lifecycle] : FINDING_WORDS[refusal.code]}`, reason: refusal.text, source: refusal.source }
   if (!contents.nothingInIt && contents.refrigerant === null) {

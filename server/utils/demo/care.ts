@@ -7,6 +7,7 @@ export function playCare(stage: Stage): void {
   looks(stage)
   apart(stage)
   missed(stage)
+  ended(stage)
 }
 
 function looks(stage: Stage): void {
@@ -32,6 +33,22 @@ function apart(stage: Stage): void {
   fill(stage, cleared, { refrigerant: 'R-134a', pounds: 10, days: 36 })
   script.add(warehouse, daysAgo(stage, 32), cleared.id, 'quarantined', { reason: 'label half torn off, contents doubted' }, { lateMs: 5 * MINUTE })
   script.add(manager, daysAgo(stage, 30), cleared.id, 'released', { reason: 'identifier read R-134a, label is on again' }, { decides: true, lateMs: 3 * MINUTE })
+}
+
+function ended(stage: Stage): void {
+  const { script, cast, random } = stage
+  const { manager, warehouse } = cast.people
+  const old = made(stage, 9).steel
+  script.add(warehouse, daysAgo(stage, 70), old.id, 'inspected', { result: 'damaged', reasons: ['crack'] }, { lateMs: 5 * MINUTE })
+  script.add(manager, daysAgo(stage, 66), old.id, 'retired', {
+    reason: 'cracked at the collar weld, not worth a repair', proof: { text: 'valve out, hole drilled, handed to the scrap yard', certificate: `S-${random.whole(1000, 9999)}` },
+  }, { decides: true, lateMs: 5 * MINUTE })
+  const gone = made(stage, 11, 'small').steel
+  script.add(warehouse, daysAgo(stage, 140), gone.id, 'missing', {}, { lateMs: 5 * MINUTE })
+  script.add(manager, daysAgo(stage, 47), gone.id, 'retired', { reason: 'not found in a quarter of a year, written off' }, { decides: true, lateMs: 5 * MINUTE })
+  const used = made(stage, 9).steel
+  script.add(manager, daysAgo(stage, 61), used.id, 'retired', { reason: 'given up with the old valves' }, { decides: true, lateMs: 5 * MINUTE })
+  fill(stage, used, { refrigerant: 'R-22', pounds: 3, days: 27, options: { confirmed: ['after-end'] } })
 }
 
 function missed(stage: Stage): void {

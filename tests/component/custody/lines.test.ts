@@ -40,4 +40,9 @@ describe('the care of a cylinder in the custody log', () => {
     expect(read('found', {}).what).toBe('where the log had it')
     expect(read('found', { placeId: 'p' }, { p: 'South shop' })).toMatchObject({ what: 'at South shop', to: 'South shop' })
   })
+
+  it('reads with why it was retired and what proves it', () => {
+    expect(read('retired', { reason: 'scrapped' }).what).toBe('scrapped')
+    expect(read('retired', { reason: 'scrapped', proof: { text: 'hole drilled', certificate: 'S-114', photoIds: ['a', 'b'] } }).what).toBe('scrapped; hole drilled; certificate S-114; 2 photos')
+  })
 })

@@ -3,7 +3,7 @@ import type { EventKind } from '../kinds'
 /** Kinds that have a form of their own at the cylinder; the others are written by their papers, or by a correction. */
 export const FORM_KINDS = [
   'filled', 'weighed', 'moved', 'handed-over', 'received', 'returned', 'drawn', 'checked', 'emptied', 'lost', 'labelled',
-  'inspected', 'quarantined', 'released', 'missing', 'found',
+  'inspected', 'quarantined', 'released', 'missing', 'found', 'retired',
 ] as const satisfies readonly EventKind[]
 
 export type FormKind = (typeof FORM_KINDS)[number]

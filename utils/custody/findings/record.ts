@@ -1,3 +1,4 @@
+import type { End } from '../endOf'
 import type { Finding } from '../finding'
 import { COMMON_PRACTICE, OWN_RULE, sentence, sinceText } from './words'
 
@@ -100,8 +101,16 @@ export function setApart(since: number, reasons: readonly string[]): Finding {
 /** Something was recorded of a cylinder that has ended. */
 export function afterEnd(since: number): Finding {
   return {
-    code: 'after-end', severity: 'stop', source: '49 CFR 180.205(i)', since: sinceText(since),
-    text: 'It was condemned before this. Take it out of use and draw what is in it.',
+    code: 'after-end', severity: 'stop', source: OWN_RULE, since: sinceText(since),
+    text: 'It had been condemned or retired before this. Take it out of use, draw what is in it, and find out why it was used.',
+  }
+}
+
+/** Nothing goes into a cylinder that has ended. */
+export function ended({ how, since }: End): Finding {
+  return {
+    code: 'after-end', severity: 'stop', source: how === 'condemned' ? '49 CFR 180.205(i)' : OWN_RULE, since: sinceText(since),
+    text: how === 'condemned' ? 'It was condemned. It is never filled or shipped again.' : 'It was retired. Nothing goes into it, and it leaves with nobody.',
   }
 }
 

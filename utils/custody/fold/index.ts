@@ -1,4 +1,5 @@
 import type { Lifecycle } from '../cylinderView'
+import { endOf } from '../endOf'
 import { applyCorrections, type Correction, type Standing } from '../corrections'
 import type { AnyRecordedEvent, RecordedEvent } from '../event'
 import type { Finding } from '../finding'
@@ -27,6 +28,7 @@ import { reclaimed } from './reclaimed'
 import { registered, registeredAgain } from './registered'
 import { released } from './released'
 import { retested } from './retested'
+import { retired } from './retired'
 import { returned } from './returned'
 import { sentForReclaim } from './sentForReclaim'
 import { sentForTest } from './sentForTest'
@@ -90,6 +92,7 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
   'released': released,
   'missing': missing,
   'found': found,
+  'retired': retired,
   'sent-for-reclaim': sentForReclaim,
   'reclaimed': reclaimed,
   'returned': returned,
@@ -101,9 +104,9 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
 /** Kinds that say nothing of where the cylinder is. */
 const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed', 'missing']
 /** Kinds that handle no cylinder, so that they need no signature and may follow its end. */
-const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected']
+const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected', 'retired']
 /** Kinds that leave a missing cylinder missing. */
-const LEAVES_MISSING: readonly EventKind[] = ['labelled', 'missing', 'corrected']
+const LEAVES_MISSING: readonly EventKind[] = ['labelled', 'missing', 'corrected', 'retired']
 
 /**
  * One cylinder from its events, in whatever order they arrived.
@@ -156,8 +159,9 @@ function takeTurn(before: CylinderState, { event, isOut }: Standing, beginsAt: n
   }
   turn.state.version = Math.max(before.version, event.version)
   if (isOut) return turn
-  if (before.condemnedAt !== null && !PAPERWORK.includes(event.kind)) {
-    turn.findings.push(afterEnd(before.condemnedAt))
+  const end = endOf(before)
+  if (end !== null && !PAPERWORK.includes(event.kind)) {
+    turn.findings.push(afterEnd(end.since))
     stand(turn, 'after-end')
   }
   if (!LEAVES_MISSING.includes(event.kind)) noLongerMissing(turn)

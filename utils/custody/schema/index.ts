@@ -17,6 +17,7 @@ import { details as received } from './received'
 import { details as reclaimed } from './reclaimed'
 import { details as registered } from './registered'
 import { details as released } from './released'
+import { details as retired } from './retired'
 import { details as retested } from './retested'
 import { details as returned } from './returned'
 import { details as sentForReclaim } from './sentForReclaim'
@@ -41,6 +42,7 @@ export const DETAILS = {
   'released': released,
   'missing': missing,
   'found': found,
+  'retired': retired,
   'sent-for-reclaim': sentForReclaim,
   'reclaimed': reclaimed,
   'returned': returned,

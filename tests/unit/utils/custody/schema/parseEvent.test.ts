@@ -183,4 +183,17 @@ describe('the care of a cylinder', () => {
     expect(faults({ kind: 'found', details: { placeId: SHOP } })).toEqual([])
     expect(faults({ kind: 'found', details: { placeId: 'roof' } })).toEqual(['details.placeId: must be an id (a UUID)'])
   })
+
+  it('ends with a reason, and with a proof that holds something where one is given', () => {
+    const proof = (value: unknown) => faults({ kind: 'retired', details: { reason: 'scrapped', proof: value } })
+    expect(faults({ kind: 'retired', details: { reason: 'scrapped' } })).toEqual([])
+    expect(faults({ kind: 'retired', details: {} })).toEqual(['details.reason: is missing'])
+    expect(proof({ certificate: 'S-114' })).toEqual([])
+    expect(proof({ text: 'valve out,\nhole drilled' })).toEqual([])
+    expect(proof({ photoIds: [idOf(7)] })).toEqual([])
+    expect(proof({})).toEqual(['details.proof: must hold a text, a certificate or photos'])
+    expect(proof({ photoIds: [] })).toEqual(['details.proof.photoIds: must name a photo'])
+    expect(proof({ photoIds: Array.from({ length: 21 }, (_, index) => idOf(index)) })).toEqual(['details.proof.photoIds: must be at most 20 photos'])
+    expect(proof({ certificate: 'two\nlines' })).toEqual(['details.proof.certificate: must not hold control characters'])
+  })
 })
