@@ -58,6 +58,7 @@ export function useActContext(view: () => CylinderView | null | undefined, asked
       places: request.data.value.lists.places,
       asked: asked(),
       lastGross: lastGross(cylinder, request.data.value.log),
+      scaleId: request.data.value.lists.scales.find(scale => scale.active && scale.id === preferences.lastScaleId)?.id,
     }
   })
 

@@ -15,6 +15,8 @@ export const usePreferencesStore = defineStore('preferences', () => {
   const scanSounds = useCookie<boolean>('scan-sounds', { ...cookie, default: () => true })
   /** Whether a single key, such as the slash that goes to the search, does something. */
   const keyShortcuts = useCookie<boolean>('key-shortcuts', { ...cookie, default: () => true })
+  /** The scale that a weight was last recorded with; '' for none that is named. */
+  const lastScaleId = useCookie<string>('last-scale', { ...cookie, default: () => '' })
   const recentRefrigerants = useCookie<string[]>('recent-refrigerants', { ...cookie, default: () => [] })
 
   const unit = computed<MassUnit>({
@@ -30,5 +32,5 @@ export const usePreferencesStore = defineStore('preferences', () => {
     recentRefrigerants.value = [designation, ...others].slice(0, MOST_RECENT)
   }
 
-  return { unit, bigKeys, scanSounds, keyShortcuts, recentRefrigerants, remember }
+  return { unit, bigKeys, scanSounds, keyShortcuts, lastScaleId, recentRefrigerants, remember }
 })

@@ -17,6 +17,11 @@ const CODE = '7K3M9Q2TX'
 const EVENTS = recorded(registered(), did('labelled', { code: CODE }), filled('R-22', 20))
 const CYLINDER_VIEW = view(fold(EVENTS, FOLD_CONTEXT).state, { ...VIEW_CONTEXT, nowMs: Date.now() })
 
+const SCALES = [
+  { id: '0190a3c4-0000-7000-8000-000000000001', name: 'Bench', accuracyGrams: 5, accuracyPercent: 0, lastCheck: null, active: true },
+  { id: '0190a3c4-0000-7000-8000-000000000002', name: 'Dock', accuracyGrams: 90, accuracyPercent: 0, lastCheck: null, active: true },
+]
+
 const sent: CustodyEvent[] = []
 let isDown = false
 
@@ -31,7 +36,7 @@ registerEndpoint('/api/firms', list([]))
 registerEndpoint('/api/people', list([]))
 registerEndpoint('/api/refrigerants', list([{ designation: 'R-22' }, { designation: 'R-410A' }]))
 registerEndpoint('/api/policy', () => ({
-  timeZone: 'America/Chicago', fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }], retests: [], scales: [],
+  timeZone: 'America/Chicago', fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }], retests: [], scales: SCALES,
   retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] },
 }))
 registerEndpoint('/api/events', {
@@ -108,6 +113,21 @@ describe('the form of a recovery', () => {
     expect(sent[0]!.confirmed).toContain('overfill')
     expect(sent[0]!.details).toMatchObject({ refrigerant: 'R-22', grossAfter: { unit: 'kg', value: 28.5 } })
     await shows(page, 'Recorded: filled')
+  })
+
+  it('begins with the scale last used on this device, and keeps the one that was used now', async () => {
+    usePreferencesStore().lastScaleId = SCALES[0]!.id
+    const page = await openForm()
+    const scale = (name: string) => byRole(page.element.parentElement!, 'button', name)
+    expect(scale('Bench').getAttribute('aria-pressed')).toBe('true')
+    scale('Dock').click()
+    await flushPromises()
+    await type(page, 'Scale after, kilograms', '24')
+    await pressRecord(page)
+    await vi.waitFor(() => expect(sent).toHaveLength(1))
+    expect(sent[0]!.details).toMatchObject({ scaleId: SCALES[1]!.id })
+    await vi.waitFor(() => expect(usePreferencesStore().lastScaleId).toBe(SCALES[1]!.id))
+    usePreferencesStore().lastScaleId = ''
   })
 
   it('asks for nothing where nothing is found', async () => {

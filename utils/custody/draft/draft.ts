@@ -20,6 +20,8 @@ export interface DraftContext {
   asked: string | null
   /** The last gross in the log, as entered, where it still tells what is in the cylinder. */
   lastGross: MassReading | null
+  /** The scale that was last used on this device; left out where none was, or it is out of use. */
+  scaleId?: string
 }
 
 /** The details of an event as its form gives them, or what is still missing, in words. */

@@ -27,7 +27,7 @@ export interface FilledDraft {
 
 /** The form of a recovery. */
 export const FILLED: DraftKind<'filled', FilledDraft> = {
-  empty: ({ view, asked }) => ({
+  empty: ({ view, asked, scaleId = '' }) => ({
     refrigerant: refrigerantToBegin(view, asked),
     condition: '',
     grossBefore: null,
@@ -36,7 +36,7 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     otherMethod: '',
     ownerId: '',
     looked: false,
-    scaleId: '',
+    scaleId,
   }),
   read: (draft) => {
     if (draft.refrigerant === '') return { reason: 'Choose the refrigerant that went in.' }

@@ -5,7 +5,7 @@ export interface WeighedDraft { gross: MassReading | null, scaleId: string }
 
 /** The form of a weighing. */
 export const WEIGHED: DraftKind<'weighed', WeighedDraft> = {
-  empty: () => ({ gross: null, scaleId: '' }),
+  empty: ({ scaleId = '' }) => ({ gross: null, scaleId }),
   read: ({ gross, scaleId }) => gross
     ? { details: { gross, ...(scaleId && { scaleId }) } }
     : { reason: 'Type what the scale shows.' },
