@@ -14,6 +14,7 @@ export type Permission
     | 'people:read' | 'people:read-contact' | 'people:manage'
     /** A checkpoint is no event: who only reads may ask for one. */
     | 'log:verify' | 'log:export' | 'log:checkpoint'
+    | 'reports:read'
     | 'settings:read' | 'settings:manage'
     /** Reminders and test choices; the fill rule asks for its own besides. */
     | 'rules:set' | 'fill-rule:set'
@@ -28,7 +29,7 @@ const EVERYONE = [
 
 const WAREHOUSE = [
   ...EVERYONE, 'events:post', 'cylinders:register', 'labels:mint',
-  'shipments:read', 'shipments:prepare', 'lots:read', 'lots:prepare',
+  'shipments:read', 'shipments:prepare', 'lots:read', 'lots:prepare', 'reports:read',
 ] as const satisfies readonly Permission[]
 
 /** What each role may do. A person with several roles may do what any of them may. */
@@ -39,7 +40,7 @@ export const PERMISSIONS = {
     ...WAREHOUSE, 'events:correct-any', 'shipments:dispatch', 'shipments:receive', 'lots:dispatch', 'lots:receive',
     'rules:set', 'fill-rule:set', 'log:verify', 'log:export', 'log:checkpoint', 'scales:manage',
   ],
-  auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'people:read-contact', 'log:verify', 'log:export', 'log:checkpoint'],
+  auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'reports:read', 'people:read-contact', 'log:verify', 'log:export', 'log:checkpoint'],
   admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'scales:manage', 'settings:manage', 'rules:set', 'mail:read', 'log:checkpoint'],
 } as const satisfies Record<Role, readonly Permission[]>
 

@@ -3,6 +3,7 @@ import type { FleetColumn } from '../contract/fleetLayout'
 import type { CylinderRow } from '../custody/cylinderView'
 import { CONDITION_WORDS, KIND_WORDS, LIFECYCLE_WORDS } from '../custody/words'
 import { formatLabelCode } from '../label/code'
+import { csvText } from '../picture/csvText'
 import { formatFigure, type MassRounding, type MassUnit } from '../quantity/mass'
 import { FLEET_COLUMN_WORDS } from './fleetColumns'
 import { rowVerdict } from './rowVerdict'
@@ -12,9 +13,6 @@ type Cell = string | number | null
 
 /** In a table of values pounds and ounces would be two figures in one cell: they are written as pounds. */
 type CsvUnit = 'lb' | 'kg'
-
-/** A text that a spreadsheet would take for a sum to reckon. */
-const RECKONED = /^[=+\-@\t\r\uFF0B\uFF0D\uFF1D\uFF20]/
 
 /** The heads of a table of values with these columns; each mass names its unit. */
 export function fleetCsvHeads(columns: readonly FleetColumn[], unit: MassUnit): string[] {
@@ -34,7 +32,7 @@ export function fleetCsvHeads(columns: readonly FleetColumn[], unit: MassUnit): 
  * Rounding: net and tare to the nearest division; limit, room and stop weight down, also below zero.
  */
 export function fleetCsvRow(row: CylinderRow, columns: readonly FleetColumn[], unit: MassUnit, now: number): Cell[] {
-  return columns.flatMap(column => cells(row, column, csvUnit(unit), now)).map(cell => typeof cell === 'string' && RECKONED.test(cell) ? `'${cell}` : cell)
+  return columns.flatMap(column => cells(row, column, csvUnit(unit), now)).map(cell => typeof cell === 'string' ? csvText(cell) : cell)
 }
 
 function cells(row: CylinderRow, column: FleetColumn, unit: CsvUnit, now: number): Cell[] {

@@ -1,12 +1,14 @@
 import type { Movement, MovementCause } from '../custody/movement'
 import type { StockChange } from '../custody/stockChange'
 
-/** Movements of one refrigerant, owner and cause, summed: those before a period, or those in it. */
+/** Movements of one refrigerant and owner summed: all of those before a period, or those in it of one cause. */
 export interface BookSum {
   refrigerant: string | null
   ownerId: string | null
   isBefore: boolean
-  cause: MovementCause
+  /** null of what came before the period, whatever its cause. */
+  cause: MovementCause | null
+  /** Likewise false of what came before. */
   apart: boolean
   grams: number
   movements: number
@@ -17,6 +19,7 @@ export interface StockSum {
   refrigerant: string | null
   ownerId: string | null
   isBefore: boolean
+  /** false of what came before the period. */
   apart: boolean
   grams: number
   notKnown: number
@@ -30,9 +33,10 @@ export interface Span { fromMs: number, untilMs: number }
 /** Movements summed for a period; what comes after it counts for nothing. */
 export function bookSums(movements: readonly Movement[], { fromMs, untilMs }: Span): BookSum[] {
   const sums = new Map<string, BookSum>()
-  for (const { refrigerant, ownerId, cause, apart, grams, at } of movements) {
+  for (const { refrigerant, ownerId, grams, at, ...movement } of movements) {
     if (at >= untilMs) continue
     const isBefore = at < fromMs
+    const { cause, apart } = isBefore ? { cause: null, apart: false } : movement
     const sum = entry(sums, [refrigerant, ownerId, isBefore, cause, apart], { refrigerant, ownerId, isBefore, cause, apart, grams: 0, movements: 0 })
     sum.grams += grams
     sum.movements += 1
@@ -45,8 +49,9 @@ export function stockSums(changes: readonly StockChange[], { fromMs, untilMs }: 
   const sums = new Map<string, StockSum>()
   for (const change of changes) {
     if (change.at >= untilMs) continue
-    const { refrigerant, ownerId, apart } = change
+    const { refrigerant, ownerId } = change
     const isBefore = change.at < fromMs
+    const apart = change.apart && !isBefore
     const sum = entry(sums, [refrigerant, ownerId, isBefore, apart], { refrigerant, ownerId, isBefore, apart, grams: 0, notKnown: 0, weighedVariance: 0, foundVariance: 0 })
     sum.grams += change.grams
     sum.notKnown += change.notKnown

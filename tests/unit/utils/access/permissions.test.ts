@@ -27,6 +27,7 @@ const MATRIX: Record<Permission, string> = {
   'places:manage': 'D',
   'places:read': 'W T M A D',
   'refrigerants:read': 'W T M A D',
+  'reports:read': 'W M A',
   'rules:set': 'M D',
   'scales:manage': 'M D',
   'scales:read': 'W T M A D',

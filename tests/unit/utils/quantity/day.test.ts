@@ -1,10 +1,17 @@
 import { describe, expect, it } from 'vitest'
-import { dayOfInstant, firstInstantOfDay, isDay } from '~~/utils/quantity/day'
+import { dayAfter, dayBefore, dayOfInstant, firstInstantOfDay, isDay } from '~~/utils/quantity/day'
 
 describe('a day of the calendar', () => {
   it('is one that the month has, in leap years one more', () => {
     expect(['1993-02-28', '1996-02-29', '2026-12-31'].map(isDay)).toEqual([true, true, true])
     expect(['1993-02-29', '1993-02-31', '2026-04-31', '2026-12-32', '2026-13-01', '2026-12', ''].map(isDay)).toEqual([false, false, false, false, false, false, false])
+  })
+})
+
+describe('the day before and after', () => {
+  it('goes over the ends of months and years, and over a leap day', () => {
+    expect([dayAfter('2026-12-31'), dayAfter('2028-02-28'), dayAfter('2026-02-28')]).toEqual(['2027-01-01', '2028-02-29', '2026-03-01'])
+    expect([dayBefore('2027-01-01'), dayBefore('2028-03-01'), dayBefore('2026-03-01')]).toEqual(['2026-12-31', '2028-02-29', '2026-02-28'])
   })
 })
 
