@@ -268,7 +268,7 @@ export const movements = sqliteTable('movements', {
 }, table => [
   primaryKey({ columns: [table.cylinderId, table.eventId, table.ordinal] }),
   // Holds all that a balance sums, in the order in which it groups.
-  index('movements_balance').on(table.refrigerant, table.ownerId, table.at, table.cause, table.apart, table.grams),
+  index('movements_balance').on(table.refrigerant, table.ownerId, table.cause, table.apart, table.at, table.grams),
 ])
 
 /** A cache of the fold: every change of what is held in stock, and of how surely that is known. */
@@ -288,7 +288,7 @@ export const stockChanges = sqliteTable('stock_changes', {
   apart: integer('apart', { mode: 'boolean' }).notNull(),
 }, table => [
   primaryKey({ columns: [table.cylinderId, table.eventId, table.ordinal] }),
-  index('stock_changes_balance').on(table.refrigerant, table.ownerId, table.at, table.apart, table.grams, table.notKnown, table.weighedVariance, table.foundVariance),
+  index('stock_changes_balance').on(table.refrigerant, table.ownerId, table.apart, table.at, table.grams, table.notKnown, table.weighedVariance, table.foundVariance),
 ])
 
 /** A cache of the fold: each cylinder's halves of what happened between two. */

@@ -13,6 +13,6 @@ CREATE TABLE `stock_changes` (
 	PRIMARY KEY(`cylinder_id`, `event_id`, `ordinal`)
 );
 --> statement-breakpoint
-CREATE INDEX `stock_changes_balance` ON `stock_changes` (`refrigerant`,`owner_id`,`at`,`apart`,`grams`,`not_known`,`weighed_variance`,`found_variance`);--> statement-breakpoint
+CREATE INDEX `stock_changes_balance` ON `stock_changes` (`refrigerant`,`owner_id`,`apart`,`at`,`grams`,`not_known`,`weighed_variance`,`found_variance`);--> statement-breakpoint
 DROP INDEX `movements_at`;--> statement-breakpoint
-CREATE INDEX `movements_balance` ON `movements` (`refrigerant`,`owner_id`,`at`,`cause`,`apart`,`grams`);
+CREATE INDEX `movements_balance` ON `movements` (`refrigerant`,`owner_id`,`cause`,`apart`,`at`,`grams`);
