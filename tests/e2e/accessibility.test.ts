@@ -86,6 +86,7 @@ const SCREENS: Record<string, Screen[]> = {
   'mail.vue': [{ as: admin, at: () => '/mail' }],
   'now.vue': [...([technician, warehouse, manager, auditor, admin] as const).map(as => ({ as, at: () => '/now' }))],
   'people.vue': [{ as: admin, at: () => '/people' }],
+  'firms.vue': [{ as: admin, at: () => '/firms' }, { as: warehouse, at: () => '/firms?kind=carrier' }],
   'scales.vue': [{ as: manager, at: () => '/scales' }, { as: technician, at: () => '/scales' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
   'pressure-check.vue': [

@@ -31,7 +31,7 @@ function pageOf(client: TestClient, path: string): Promise<Answer<string>> {
 /** The page of the cylinder, and pages that show people, papers and settings: whatever a person can open. */
 function pagesOf(): string[] {
   return [
-    '/account', '/fleet', '/fleet/register', '/labels', '/log', '/mail', '/now', '/people', '/places', '/pressure-check', '/retests', '/rules', '/scales', '/scan', '/shipments', '/van', '/vans', '/which-cylinder',
+    '/account', '/firms', '/fleet', '/fleet/register', '/labels', '/log', '/mail', '/now', '/people', '/places', '/pressure-check', '/retests', '/rules', '/scales', '/scan', '/shipments', '/van', '/vans', '/which-cylinder',
     `/c/${cylinder.id}`, `/c/${cylinder.id}/log`, `/c/${cylinder.id}/act/filled`,
   ]
 }
@@ -39,7 +39,7 @@ function pagesOf(): string[] {
 const people = () => [shop.admin, shop.warehouse, shop.technician, shop.manager, shop.auditor]
 
 describe('a page', () => {
-  it.each(['/sign-in', '/account', '/fleet', '/scan', '/c/7k3m9q2tx'])('has the headers that keep it to itself: %s', async (path) => {
+  it.each(['/sign-in', '/account', '/firms', '/fleet', '/scan', '/c/7k3m9q2tx'])('has the headers that keep it to itself: %s', async (path) => {
     for (const client of [nobody, shop.manager.client]) {
       const { headers } = await pageOf(client, path)
       expect(headers.get('x-powered-by')).toBeNull()

@@ -124,6 +124,21 @@ describe('firms', () => {
     expect(places.items.filter(one => one.firmId === body.id)).toHaveLength(1)
   })
 
+  it('have a name of their own, whatever its capitals and spaces, also against one that is turned off', async () => {
+    const { client } = firm.admin
+    const taken = await client.post<ProblemDetails>('/api/firms', { name: 'tarnvale  RECLAIM', kind: 'supplier' })
+    expect([taken.status, taken.body.type, taken.body.errors?.map(({ path }) => path)]).toEqual([409, 'name-taken', ['name']])
+    expect(taken.body.detail).toContain('Tarnvale Reclaim is there already')
+    const other = await made<Firm>(client, '/api/firms', { name: 'Marl Carriers', kind: 'carrier' })
+    expect((await client.patch(`/api/firms/${other.id}`, { name: 'Tarnvale Reclaim' })).status).toBe(409)
+    expect((await client.patch<Firm>(`/api/firms/${other.id}`, { name: 'MARL Carriers' })).body.name).toBe('MARL Carriers')
+    await client.patch(`/api/firms/${other.id}`, { active: false })
+    expect((await client.post<ProblemDetails>('/api/firms', { name: 'Marl Carriers', kind: 'carrier' })).body.detail).toContain('turned off')
+    // Two at once: one of them is first.
+    const both = await Promise.all([1, 2].map(() => client.post('/api/firms', { name: 'Race Supply', kind: 'supplier' })))
+    expect(both.map(({ status }) => status).sort()).toEqual([201, 409])
+  })
+
   it('have a RIN only where they requalify cylinders', async () => {
     expect(firm.requalifier.rin).toBe('A123')
     expect((await firm.admin.client.post('/api/firms', { name: 'R', kind: 'reclaimer', rin: 'A123' })).status).toBe(422)

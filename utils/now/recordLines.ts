@@ -37,11 +37,11 @@ function ruleLine({ fromAt, isFillRule, count }: NonNullable<NowFacts['rule']>, 
 }
 
 function missingLines({ shop, reclaimer, testStation, vansWithoutTechnician }: NonNullable<NowFacts['missing']>): DraftLine[] {
-  const add = { kind: 'att', number: 1, verb: 'Add one', to: '/places' } as const
+  const add = { kind: 'att', number: 1, verb: 'Add one' } as const
   return [
-    shop && { ...add, topic: 'no-shop' as const, sentence: 'No shop is known yet.', reason: 'A cylinder is registered where it stands.' },
-    reclaimer && { ...add, topic: 'no-reclaimer' as const, sentence: 'No reclaimer is known yet.', reason: 'No shipment can be prepared without one.' },
-    testStation && { ...add, topic: 'no-test-station' as const, sentence: 'No test station is known yet.', reason: 'No test lot can be prepared without one.' },
+    shop && { ...add, topic: 'no-shop' as const, to: '/places', sentence: 'No shop is known yet.', reason: 'A cylinder is registered where it stands.' },
+    reclaimer && { ...add, topic: 'no-reclaimer' as const, to: '/firms?kind=reclaimer', sentence: 'No reclaimer is known yet.', reason: 'No shipment can be prepared without one.' },
+    testStation && { ...add, topic: 'no-test-station' as const, to: '/firms?kind=requalifier', sentence: 'No test station is known yet.', reason: 'No test lot can be prepared without one.' },
     vansWithoutTechnician.length > 0 && {
       topic: 'vans-without-technician' as const, kind: 'att' as const, number: vansWithoutTechnician.length,
       sentence: `${counted(vansWithoutTechnician.length, 'van has', 'vans have')} no technician.`,
