@@ -44,9 +44,14 @@ export default defineNuxtConfig({
     esbuild: { options: { target: 'es2022' } },
     typescript: { tsConfig: { include: ['../types/auth.d.ts'] } },
     hooks: {
-      // Nitro traces packages, not our migration files.
+      // Nitro traces packages, not our migration files, nor what runs in a thread of its own.
       compiled(nitro) {
-        cpSync('drizzle/migrations', join(nitro.options.output.serverDir, 'drizzle/migrations'), { recursive: true })
+        const output = (path: string) => join(nitro.options.output.serverDir, path)
+        cpSync('drizzle/migrations', output('drizzle/migrations'), { recursive: true })
+        cpSync('server/workers', output('workers'), { recursive: true })
+        for (const file of ['package.json', 'THIRD-PARTY-NOTICES.md', 'lib/vips-node.mjs', 'lib/vips.wasm']) {
+          cpSync(`node_modules/wasm-vips/${file}`, output(`node_modules/wasm-vips/${file}`))
+        }
       },
     },
   },

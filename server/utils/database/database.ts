@@ -1,10 +1,10 @@
 import { mkdirSync, statSync } from 'node:fs'
 import { dirname } from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
-import { fileURLToPath } from 'node:url'
 import { createClient, type Client, type InStatement, type ResultSet } from '@libsql/client'
 import { drizzle, type LibSQLDatabase } from 'drizzle-orm/libsql'
 import * as schema from '../../../drizzle/schema'
+import { localPath } from './localPath'
 import { StorageUnavailable, storageFailure } from './storageFailure'
 
 /** The custody database: any number of readers, one writer. */
@@ -140,11 +140,6 @@ function sameFile(file: string): () => void {
 async function migrateTo(client: Client, migrationsFolder: string): Promise<void> {
   const { migrate } = await import('drizzle-orm/libsql/migrator')
   await migrate(drizzle(client), { migrationsFolder })
-}
-
-function localPath(url: string): string {
-  if (url.startsWith('file://')) return fileURLToPath(url)
-  return url.slice('file:'.length).split('?')[0] ?? ''
 }
 
 /** Whether another holder of the file's write lock was in the way. */

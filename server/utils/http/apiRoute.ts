@@ -5,6 +5,7 @@ import type { Permission } from '../../../utils/access/permissions'
 import type { User } from '../../../utils/contract/session'
 import { accessOf, currentUser } from '../session/currentUser'
 import { asProblem } from './asProblem'
+import { readFormBody } from './formBody'
 import { insistOn } from './insistOn'
 import { readJsonBody } from './jsonBody'
 import { problem, sendProblem } from './problem'
@@ -13,29 +14,32 @@ import { queryOf, validate } from './validate'
 /** Who may call a route: anybody, anybody signed in, or who holds a permission. */
 export type RoutePermission = Permission | 'public' | 'signed-in'
 
-export interface RouteOptions<Who extends RoutePermission, P, Q, B> {
+export interface RouteOptions<Who extends RoutePermission, P, Q, B, F = undefined> {
   permission: Who
   /** Strict schemas. A route without one takes no parameters of that sort: a query is then refused. */
   params?: P
   query?: Q
   body?: B
+  /** Of a body that comes as multipart/form-data, with a file in it, in place of JSON. */
+  form?: F
   /** Of the answer; 200 unless given. */
   status?: number
 }
 
 /** What a route says of itself: who may call it and what it takes. */
-export type RouteDescription = RouteOptions<RoutePermission, z.ZodType | undefined, z.ZodType | undefined, z.ZodType | undefined>
+export type RouteDescription = RouteOptions<RoutePermission, z.ZodType | undefined, z.ZodType | undefined, z.ZodType | undefined, z.ZodType | undefined>
 
 type Parsed<S> = S extends z.ZodType ? z.output<S> : undefined
 
 /** What a route's handler is given. A public route knows nobody: it must work without the database. */
-export interface RouteContext<Who extends RoutePermission, P, Q, B> {
+export interface RouteContext<Who extends RoutePermission, P, Q, B, F = undefined> {
   event: H3Event
   access: Who extends 'public' ? null : Access
   person: Who extends 'public' ? null : User
   params: Parsed<P>
   query: Parsed<Q>
   body: Parsed<B>
+  form: Parsed<F>
 }
 
 /**
@@ -49,9 +53,10 @@ export function apiRoute<
   P extends z.ZodType | undefined = undefined,
   Q extends z.ZodType | undefined = undefined,
   B extends z.ZodType | undefined = undefined,
+  F extends z.ZodType | undefined = undefined,
 >(
-  options: RouteOptions<Who, P, Q, B>,
-  handler: (context: RouteContext<Who, P, Q, B>) => R | Promise<R>,
+  options: RouteOptions<Who, P, Q, B, F>,
+  handler: (context: RouteContext<Who, P, Q, B, F>) => R | Promise<R>,
 ): EventHandler<EventHandlerRequest, Promise<R>> & { described: RouteDescription } {
   const handle = defineEventHandler(async (event): Promise<R> => {
     try {
@@ -63,7 +68,8 @@ export function apiRoute<
         params: options.params && validate(options.params, pathOf(event), 'path'),
         query: readQuery(event, options.query),
         body: options.body && validate(options.body, await readJsonBody(event), 'body'),
-      } as RouteContext<Who, P, Q, B>
+        form: options.form && validate(options.form, await readFormBody(event), 'body'),
+      } as RouteContext<Who, P, Q, B, F>
       const answer = await handler(context)
       if (options.status) setResponseStatus(event, options.status)
       return answer

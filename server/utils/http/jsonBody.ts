@@ -1,5 +1,5 @@
-import type { Readable } from 'node:stream'
 import { getRequestHeader, type H3Event } from 'h3'
+import { boundedBody } from './boundedBody'
 import { problem } from './problem'
 
 /** The largest body of JSON that is read, in bytes. */
@@ -26,16 +26,6 @@ export function isJson(contentType: string | undefined): boolean {
   return /^application\/json\s*(;\s*charset="?utf-8"?\s*)?$/i.test(contentType ?? '')
 }
 
-/** Whether a declared length is above the limit. */
-export function isTooLarge(contentLength: string | undefined): boolean {
-  return contentLength !== undefined && Number(contentLength) > LARGEST_BODY
-}
-
-/** The refusal of a body above the limit. */
-export function tooLarge() {
-  return problem(413, 'Too large', `A body may have at most ${LARGEST_BODY / 1024} KiB.`, undefined, { headers: { Connection: 'close' } })
-}
-
 /**
  * Parses JSON that may come from anybody.
  *
@@ -56,30 +46,13 @@ function refusePrototype(key: string, value: unknown): unknown {
 }
 
 async function readText(event: H3Event): Promise<string> {
-  if (isTooLarge(getRequestHeader(event, 'content-length'))) throw tooLarge()
-  const bytes = await readBytes(event.node.req)
+  const bytes = await boundedBody(event, LARGEST_BODY)
   try {
     return new TextDecoder('utf-8', { fatal: true }).decode(bytes)
   }
   catch {
     throw malformed('The body is not UTF-8.')
   }
-}
-
-/** Counts while it reads. What is too large is let run off unread, so that the refusal still reaches its sender. */
-function readBytes(request: Readable): Promise<Buffer> {
-  return new Promise((done, failed) => {
-    const chunks: Buffer[] = []
-    let size = 0
-    request.on('data', (chunk: Buffer) => {
-      size += chunk.length
-      if (size <= LARGEST_BODY) chunks.push(chunk)
-      else failed(tooLarge())
-    })
-    request.once('end', () => done(Buffer.concat(chunks)))
-    request.once('error', failed)
-    request.once('close', () => failed(malformed('The body broke off.')))
-  })
 }
 
 function malformed(detail: string) {

@@ -1,7 +1,12 @@
-import { isJson, isTooLarge, tooLarge } from './jsonBody'
+import { isTooLarge, tooLarge } from './boundedBody'
+import { isForm, LARGEST_FORM } from './formBody'
+import { isJson, LARGEST_BODY } from './jsonBody'
 import { problem, type Problem } from './problem'
 
 const SAFE_METHODS = new Set(['GET', 'HEAD', 'OPTIONS'])
+
+/** The one route that takes a file, and so a form in place of JSON. */
+const TAKES_FORM = /^\/api\/uploads(\?|$)/
 
 /** What the gate looks at; header names in lower case. */
 export interface GateRequest {
@@ -12,7 +17,7 @@ export interface GateRequest {
 
 /**
  * Why a request is turned away before anything looks at it, or null. What changes something must come from our own
- * pages (Fetch Metadata, else the Origin), and hold nothing but JSON of a bounded size.
+ * pages (Fetch Metadata, else the Origin), and hold nothing but JSON, or the form of a photo, of a bounded size.
  */
 export function refusalAtGate({ method, path, headers }: GateRequest): Problem | null {
   // The session package's own routes hand out and clear sessions without our rows.
@@ -21,8 +26,13 @@ export function refusalAtGate({ method, path, headers }: GateRequest): Problem |
   if (!isOwnPage(headers)) return problem(403, 'From elsewhere', 'This may be asked only by our own pages.', undefined, { type: 'cross-site' })
   if (!path.startsWith('/api/')) return problem(404, 'Not known', 'There is nothing here.')
   if (!hasBody(headers)) return null
-  if (isTooLarge(one(headers['content-length']))) return tooLarge()
-  if (!isJson(one(headers['content-type']))) return problem(415, 'Not JSON', 'The body must be sent as application/json.')
+  const [length, type] = [one(headers['content-length']), one(headers['content-type'])]
+  if (TAKES_FORM.test(path)) {
+    if (isTooLarge(length, LARGEST_FORM)) return tooLarge(LARGEST_FORM)
+    return isForm(type) ? null : problem(415, 'Not a form', 'A photo must be sent as multipart/form-data.')
+  }
+  if (isTooLarge(length, LARGEST_BODY)) return tooLarge(LARGEST_BODY)
+  if (!isJson(type)) return problem(415, 'Not JSON', 'The body must be sent as application/json.')
   return null
 }
 

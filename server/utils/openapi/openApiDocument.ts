@@ -48,13 +48,14 @@ export function openApiDocument(routes: readonly DescribedRoute[], version: stri
 }
 
 function operation({ path, method, described }: DescribedRoute) {
-  const { permission, params, query, body, status = 200 } = described
+  const { permission, params, query, body, form, status = 200 } = described
   return {
     'operationId': operationId(method, path),
     'x-permission': permission,
     'security': permission === 'public' ? [] : [{ session: [] }],
     'parameters': [...parameters(params, 'path'), ...parameters(query, 'query')],
     ...(body && { requestBody: { required: true, content: { 'application/json': { schema: schemaOf(body) } } } }),
+    ...(form && { requestBody: { required: true, content: { 'multipart/form-data': { schema: schemaOf(form) } } } }),
     'responses': {
       [status]: { description: 'Done.' },
       default: {

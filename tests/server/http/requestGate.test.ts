@@ -51,6 +51,15 @@ describe('the gate', () => {
     expect(status('POST', { ...OWN, ...JSON_BODY, 'content-length': '524289' })).toBe(413)
   })
 
+  it('takes a form where a photo is sent, of 8 MiB and what stands beside it, and nowhere else', () => {
+    const form = { ...OWN, 'content-type': 'multipart/form-data; boundary=x', 'content-length': '8454144' }
+    expect(status('POST', form, '/api/uploads')).toBeNull()
+    expect(status('POST', { ...form, 'content-length': '8454145' }, '/api/uploads')).toBe(413)
+    expect(status('POST', { ...OWN, ...JSON_BODY }, '/api/uploads')).toBe(415)
+    expect(status('POST', { ...form, 'sec-fetch-site': 'cross-site' }, '/api/uploads')).toBe(403)
+    expect(status('POST', { ...form, 'content-length': '20' }, '/api/uploadsx')).toBe(415)
+  })
+
   it('lets no page be posted to', () => {
     expect(status('POST', { ...OWN, ...JSON_BODY }, '/sign-in')).toBe(404)
   })
