@@ -1,12 +1,11 @@
 import { firm, people } from '../../../drizzle/schema'
 import type { CheckpointLine } from '../../../utils/contract/log'
 import type { Database } from '../database/database'
-import { problem } from '../http/problem'
 import { checkpointLetter } from '../mail/letters'
 import { sendMail } from '../mail/mail'
 import { rolesOf } from '../session/person'
 import { checkpointLine, makeCheckpoint, type StoredCheckpoint } from './checkpoints'
-import { sealing, type Sealing } from './sealing'
+import { sealingNow, type Sealing } from './sealing'
 
 /**
  * Makes a checkpoint and writes it to every auditor.
@@ -15,8 +14,7 @@ import { sealing, type Sealing } from './sealing'
  * Errors: 404 before the set-up.
  */
 export async function checkpointNow(db: Database, now: number, askedBy: string | null): Promise<CheckpointLine> {
-  const seal = await sealing(db)
-  if (!seal) throw problem(404, 'Not set up', 'This Collarbook has not been set up yet.', undefined, { type: 'not-set-up' })
+  const seal = await sealingNow(db)
   const made = await makeCheckpoint(db, seal, now, askedBy)
   await sendToAuditors(db, seal, made, now)
   return (await checkpointLine(db, made))!

@@ -78,9 +78,8 @@ export async function checkpointNote(db: Database, number: number): Promise<stri
   return row.note
 }
 
-/** The checkpoints, newest first, a page at a time. Errors: 400 for a cursor that is none of ours; 404 before the set-up. */
-export async function listCheckpoints(db: Database, sealing: Sealing | null, { limit, cursor }: { limit: number, cursor?: string }): Promise<CheckpointsAnswer> {
-  if (!sealing) throw problem(404, 'Not set up', 'This Collarbook has not been set up yet.', undefined, { type: 'not-set-up' })
+/** The checkpoints, newest first, a page at a time. Errors: 400 for a cursor that is none of ours. */
+export async function listCheckpoints(db: Database, sealing: Sealing, { limit, cursor }: { limit: number, cursor?: string }): Promise<CheckpointsAnswer> {
   if (cursor !== undefined && !/^\d{1,15}$/.test(cursor)) throw foreignCursor()
   const older = cursor === undefined ? undefined : lt(checkpoints.number, Number(cursor))
   const rows = await db.read.select().from(checkpoints).where(older).orderBy(desc(checkpoints.number)).limit(limit + 1)

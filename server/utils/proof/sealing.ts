@@ -5,6 +5,7 @@ import { firm } from '../../../drizzle/schema'
 import { originOf } from '../../../utils/proof/checkpoint'
 import type { Database } from '../database/database'
 import { useEnvironment } from '../environment'
+import { problem } from '../http/problem'
 import { signerOf, type Signer } from './signingKey'
 
 /** What signs a firm's checkpoints, what is believed of them, and where their copies are kept. */
@@ -35,6 +36,13 @@ export async function sealing(db: Database, settings: SealingSettings = useEnvir
   const origin = originOf(row.id)
   const signer = signerOf(origin, settings.checkpointKey === undefined ? keyFromFile(`${beside}.key`) : Buffer.from(settings.checkpointKey, 'base64'))
   return { origin, signer, trusted: [signer.publicKey, ...settings.formerCheckpointKeys], copies: `${beside}.checkpoints` }
+}
+
+/** The same where it is needed. Errors: 404 before the set-up. */
+export async function sealingNow(db: Database): Promise<Sealing> {
+  const seal = await sealing(db)
+  if (!seal) throw problem(404, 'Not set up', 'This Collarbook has not been set up yet.', undefined, { type: 'not-set-up' })
+  return seal
 }
 
 /** Errors: throws where the file holds no key. */

@@ -1,17 +1,15 @@
-import { setImmediate as nextTurn } from 'node:timers/promises'
-import type { ResultSet } from '@libsql/client'
 import type { LogVerification, VerifyProgress } from '../../../utils/contract/log'
-import { LOG_COLUMNS, type LogRow } from '../custody/logRow'
+import type { LogRow } from '../custody/logRow'
 import type { Database } from '../database/database'
 import { allCheckpoints, type StoredCheckpoint } from './checkpoints'
 import { damageList, type DamageList } from './damageList'
-import { headsAt, type Head } from './heads'
+import { headsAt } from './heads'
 import { keptCopies } from './copies'
 import { judgeAgainstLog, judgeChain, judgeCopies } from './judgeCheckpoints'
+import { linesBetween } from './lines'
 import type { Sealing } from './sealing'
 import { streamWalk, type StreamWalk } from './streamWalk'
 
-const LINES_AT_ONCE = 1_000
 /** Numbers that are missing are looked up one by one, but not without end. */
 const GAPS_TOLD = 20
 
@@ -124,24 +122,6 @@ async function* walkSince(db: Database, walk: StreamWalk, seq: number, reach: nu
 
 async function* flattened(pages: AsyncIterable<LogRow[]>): AsyncGenerator<LogRow, undefined> {
   for await (const rows of pages) yield* rows
-}
-
-async function* linesBetween(db: Database, after: number, reach: number): AsyncGenerator<LogRow[]> {
-  let last: Pick<Head, 'cylinderId' | 'version'> | null = null
-  for (;;) {
-    const { rows }: ResultSet = await db.readClient.execute({
-      // The index holds the numbers too, so what lies outside costs no look at the table.
-      sql: `SELECT ${LOG_COLUMNS.join(', ')} FROM custody_events INDEXED BY custody_events_cylinder_version
-        WHERE seq > ? AND seq <= ? ${last ? 'AND (cylinder_id, version) > (?, ?)' : ''} ORDER BY cylinder_id, version LIMIT ${LINES_AT_ONCE}`,
-      args: [after, reach, ...(last ? [last.cylinderId, last.version] : [])],
-    })
-    // The driver's rows are read by name, as they are: a copy of each would cost more than its hash.
-    const lines = rows as unknown as LogRow[]
-    if (lines.length > 0) yield lines
-    if (lines.length < LINES_AT_ONCE) return
-    last = { cylinderId: lines.at(-1)!.cylinder_id, version: lines.at(-1)!.version }
-    await nextTurn()
-  }
 }
 
 async function linesUpTo(db: Database, seq: number): Promise<number> {
