@@ -82,6 +82,7 @@ const LINES: { [K in EventKind]: Say<K> } = {
   'retested': ({ month, method, result, requalifierId, suffix, newTare }, names) => ({
     what: `${result}, ${method}, ${formatMonth(month)}${suffix ? `, marked ${suffix}` : ''}, by ${named(requalifierId, names)}${newTare ? `, new tare ${formatReading(newTare)}` : ''}`,
   }),
+  'countersigned': () => ({ what: 'signs a trainee’s entry' }),
   'corrected': ({ reason, instead }) => ({ what: `${instead ? 'other details' : 'taken out'}: ${reason}` }),
 }
 

@@ -57,6 +57,8 @@ const happenings: fc.Arbitrary<Told>[] = [
     result: fc.constantFrom('passed' as const, 'passed' as const, 'rejected' as const, 'condemned' as const),
     newTare: fc.constantFrom(undefined, kg(11.9), kg(11)),
   }).map(details => did('retested', { month: '2026-07', requalifierId: REQUALIFIER, ...details })),
+  someId.map(eventId => did('countersigned', { eventId })),
+  fc.record({ eventId: someId, instead: someId }).map(({ eventId, instead }) => did('corrected', { eventId, reason: 'another line', instead: { eventId: instead } })),
   someId.map(eventId => did('corrected', { eventId, reason: 'a slip' })),
   fc.record({ eventId: someId, reading: gross }).map(({ eventId, reading }) => did('corrected', { eventId, reason: 'a slip', instead: { gross: reading } })),
 ]

@@ -4,6 +4,7 @@ import type { FillRule, FillTermInWords, Stamp } from '../capacity/types'
 import type { OwnerChoice } from '../requalification/ownerChoice'
 import type { EventKind } from './kinds'
 import type { Finding, FindingCode, Severity } from './finding'
+import type { Signature } from './signatures'
 
 export type Condition = 'clean' | 'suspect' | 'burnt' | 'mixed' | 'unknown'
 export type Lifecycle
@@ -91,6 +92,8 @@ export interface CylinderView {
   capacity: CapacityView
   requalification: RequalificationView
   findings: Finding[]
+  /** Persons whose signature something here waits for, by id. */
+  waitsForSignatureOf: string[]
   may: EventKind[]
   mayNot: { kind: EventKind, because: string }[]
   lastEventAt: string | null
@@ -148,4 +151,6 @@ export interface LogLine {
   findings: Finding[]
   /** What a correction did to this event; null when it stands as recorded. */
   correction: { eventId: string, reason: string, takenOut: boolean } | null
+  /** The supervisor's signature on a trainee's entry: by which event, null while it waits; null where it needs none. */
+  signature: Signature | null
 }

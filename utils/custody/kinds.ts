@@ -5,7 +5,7 @@
 export const EVENT_KINDS = [
   'registered', 'labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost',
   'inspected', 'quarantined', 'released', 'missing', 'found', 'retired',
-  'sent-for-reclaim', 'reclaimed', 'returned', 'sent-for-test', 'retested', 'corrected',
+  'sent-for-reclaim', 'reclaimed', 'returned', 'sent-for-test', 'retested', 'corrected', 'countersigned',
 ] as const
 
 export type EventKind = (typeof EVENT_KINDS)[number]

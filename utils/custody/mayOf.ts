@@ -20,6 +20,7 @@ export function mayOf(view: Planned, access: Access | null): Pick<CylinderView, 
 }
 
 function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
+  if (kind === 'countersigned') return view.waitsForSignatureOf.includes(access.personId) && !access.trainee ? null : 'Nothing here waits for your signature.'
   if (!mayPost(access, kind)) return 'Another role records this.'
   if ((DISPATCH_KINDS as readonly EventKind[]).includes(kind)) {
     return kind === 'sent-for-reclaim' ? 'It leaves with a shipment and its papers.' : 'It leaves with a test lot and its list.'

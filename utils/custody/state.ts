@@ -73,6 +73,8 @@ export interface CylinderState {
   lastPutInAt: number | null
   overfilledAt: number | null
   standing: { code: StandingCode, since: number }[]
+  /** Supervisors who have not signed all that trainees recorded under them. */
+  waitsForSignatureOf: string[]
   firstEventAt: number | null
   lastEventAt: number | null
   lastEventKind: EventKind | null
@@ -122,6 +124,7 @@ export function initialState(id: string): CylinderState {
     lastPutInAt: null,
     overfilledAt: null,
     standing: [],
+    waitsForSignatureOf: [],
     firstEventAt: null,
     lastEventAt: null,
     lastEventKind: null,

@@ -72,6 +72,7 @@ export function view(state: CylinderState, context: ViewContext): CylinderView {
     capacity,
     requalification: requalificationOf(retest),
     findings,
+    waitsForSignatureOf: state.waitsForSignatureOf,
     lastEventAt: instant(state.lastEventAt),
   }
   return { ...shown, ...mayOf(shown, context.access) }

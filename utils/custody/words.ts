@@ -35,6 +35,7 @@ export const KIND_WORDS: Record<EventKind, KindWords> = {
   'sent-for-test': { act: 'Send to test', done: 'Sent for test' },
   'retested': { act: 'Retest', done: 'Retested' },
   'corrected': { act: 'Correct', done: 'Corrected' },
+  'countersigned': { act: 'Countersign', done: 'Countersigned' },
 }
 
 /** The conditions of what is in a cylinder, best first. */

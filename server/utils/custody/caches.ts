@@ -55,8 +55,13 @@ export function refreshedRow(cylinderId: string, state: CylinderState, context: 
   })
 }
 
+/** The row of a cylinder by column. */
+export function cylinderColumns(cylinderId: string, state: CylinderState, context: RuledRowContext): Record<string, InValue> {
+  return { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state), ruled_by: context.ruledBy }
+}
+
 function upsertCylinder(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard): InStatement {
-  const columns: Record<string, InValue> = { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state), ruled_by: context.ruledBy }
+  const columns = cylinderColumns(cylinderId, state, context)
   const names = Object.keys(columns)
   return {
     sql: `INSERT INTO cylinders (${names.join(', ')}) SELECT ${names.map(() => '?').join(', ')} WHERE ${guard.sql}
@@ -85,8 +90,11 @@ function bookStatements(cylinderId: string, folded: FoldResult, added: readonly 
   ]
 }
 
+/** Kinds that change what other events put into the books: what they say, where they stand, or that they count. */
+const CHANGES_EARLIER: readonly string[] = ['corrected', 'registered', 'countersigned']
+
 function cameLast(folded: FoldResult, added: readonly LogRow[]): boolean {
-  if (added.some(row => row.kind === 'corrected' || row.kind === 'registered')) return false
+  if (added.some(row => CHANGES_EARLIER.includes(row.kind))) return false
   const ids = new Set(added.map(row => row.id))
   return folded.steps.slice(-added.length).every(step => ids.has(step.eventId))
 }

@@ -46,6 +46,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
       netAfterGrams: step.after.netGrams,
       findings: step.findings,
       correction: step.correction,
+      signature: step.signature,
     }]
   }).reverse()
   const start = page.cursor === undefined ? 0 : lines.findIndex(line => line.id === page.cursor) + 1

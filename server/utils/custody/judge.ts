@@ -50,6 +50,9 @@ const ID_FIELDS: Record<string, Known | 'job'> = {
   scaleId: 'scale', shipmentId: 'shipment', lotId: 'testLot', jobId: 'job',
 }
 
+/** Kinds of which no role decides, but the entry that they name. */
+const JUDGED_BY_EVENT = ['corrected', 'countersigned'] as const satisfies readonly EventKind[]
+
 /** The ids that an event names and that nobody knows, as paths. */
 export function unknownIds(event: AnyCustodyEvent, known: KnownIds): { path: string, message: string }[] {
   const errors: { path: string, message: string }[] = []
@@ -81,12 +84,21 @@ export function refusalOf(
   if (!isDispatch && (DISPATCH_KINDS as readonly EventKind[]).includes(event.kind)) {
     return refuse(403, 'Only a dispatch writes this', 'Send the cylinder off with its shipment or its test lot.')
   }
-  if (!isDispatch && event.kind !== 'corrected' && !mayPost(access, event.kind)) {
+  if (!isDispatch && !(JUDGED_BY_EVENT as readonly EventKind[]).includes(event.kind) && !mayPost(access, event.kind)) {
     return refuse(403, 'Not yours to record', `Your role may not record "${event.kind}".`)
   }
   const unknown = unknownIds(event, known)
   if (unknown.length > 0) return refuse(422, 'It names what nobody knows', 'Choose again from the list.', unknown)
-  return event.kind === 'corrected' ? refusalOfCorrection(event, access, events, now) : wrongVersion(event, events)
+  if (event.kind === 'corrected') return refusalOfCorrection(event, access, events, now)
+  return (event.kind === 'countersigned' ? refusalOfSignature(event, access, events) : null) ?? wrongVersion(event, events)
+}
+
+// An entry that has not arrived yet may still prove to name this person.
+function refusalOfSignature(event: CustodyEvent<'countersigned'>, access: Access, events: readonly AnyRecordedEvent[]): Refusal | null {
+  const target = events.find(other => other.id === event.details.eventId)
+  const isTheirs = !target || (target.supervisorId === access.personId && target.actorId !== access.personId)
+  if (isTheirs && !access.trainee && mayPost(access, 'weighed')) return null
+  return refuse(403, 'Not yours to sign', 'Only the supervisor whom the entry names signs it.')
 }
 
 function refusalOfCorrection(

@@ -10,6 +10,14 @@ export function playCare(stage: Stage): void {
   ended(stage)
 }
 
+/** A supervisor reads what the trainee recorded, within two days; what is of this week still waits. */
+export function playSignatures({ script, random, endAt, supervisor }: Stage): void {
+  const waits = script.events.filter(({ author, body, recordedAt }) => author.trainee && body.supervisorId === supervisor.id && recordedAt < endAt - 6 * DAY)
+  for (const { id, cylinderId, recordedAt } of waits) {
+    script.add(supervisor, recordedAt + random.whole(2, 44) * HOUR, cylinderId, 'countersigned', { eventId: id }, { lateMs: MINUTE })
+  }
+}
+
 function looks(stage: Stage): void {
   const { script, cast } = stage
   const { second, third, warehouse } = cast.people

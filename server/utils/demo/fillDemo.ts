@@ -6,13 +6,14 @@ import { directory } from '../directory/directory'
 import { DAY, workingMorning } from './calendar'
 import { castOf } from './cast'
 import { playChecks } from './checks'
-import { playCare } from './care'
+import { playCare, playSignatures } from './care'
 import { playIncidents } from './incidents'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { seededRandom } from './random'
 import { recordScript } from './record'
 import { newScript } from './script'
 import { castTables, labelTables, listTables } from './tables'
+import { vanTables } from './vans'
 
 const SEED = 20_261_201
 const HISTORY_DAYS = 548
@@ -39,11 +40,13 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   playIncidents(stage)
   playCare(stage)
   playChecks(stage)
+  playSignatures(stage)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(listTables(db, stage))
   await directory(db, true)
   await recordScript(db, stage.script.events)
   await followRules(db, () => now)
+  await db.write(await vanTables(db, cast, now))
   await db.write(labelTables(db, stage, codesOf(stage), Array.from({ length: 10 }, () => drawLabelCode(random.bytes))))
   await db.write([statement(db.read.insert(meta).values({ key: 'demo', value: new Date(now).toISOString() }))])
   await directory(db, true)

@@ -7,10 +7,12 @@ import { afterEnd } from '../findings/record'
 import type { EventKind } from '../kinds'
 import { lifecycleOf } from '../lifecycle'
 import type { Movement } from '../movement'
+import { needsSignature, signaturesOf, type Signature } from '../signatures'
 import { initialState, type CylinderState } from '../state'
 import type { StockChange } from '../stockChange'
 import { checked } from './checked'
 import { corrected } from './corrected'
+import { countersigned } from './countersigned'
 import { drawn } from './drawn'
 import { emptied } from './emptied'
 import { filled } from './filled'
@@ -59,6 +61,8 @@ export interface FoldStep {
   findings: Finding[]
   movements: Movement[]
   correction: Correction | null
+  /** null where it needs none. */
+  signature: Signature | null
 }
 
 /** A label code that an event of this cylinder claims. */
@@ -99,14 +103,15 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
   'sent-for-test': sentForTest,
   'retested': retested,
   'corrected': corrected,
+  'countersigned': countersigned,
 }
 
 /** Kinds that say nothing of where the cylinder is. */
-const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed', 'missing']
-/** Kinds that handle no cylinder, so that they need no signature and may follow its end. */
-const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected', 'retired']
+const UNSEEN: readonly EventKind[] = ['labelled', 'corrected', 'reclaimed', 'missing', 'countersigned']
+/** Kinds that handle no cylinder, so that they may follow its end. */
+const PAPERWORK: readonly EventKind[] = ['labelled', 'corrected', 'retired', 'countersigned']
 /** Kinds that leave a missing cylinder missing. */
-const LEAVES_MISSING: readonly EventKind[] = ['labelled', 'missing', 'corrected', 'retired']
+const LEAVES_MISSING: readonly EventKind[] = ['labelled', 'missing', 'corrected', 'retired', 'countersigned']
 
 /**
  * One cylinder from its events, in whatever order they arrived.
@@ -120,12 +125,14 @@ export function fold(events: readonly AnyRecordedEvent[], context: FoldContext):
   const beginning = standings.find(({ event, isOut }) => event.kind === 'registered' && !isOut)
   const inTurn = beginning ? [beginning, ...standings.filter(standing => standing !== beginning)] : standings
   let state = initialState(events[0]?.cylinderId ?? '')
+  const signatures = signaturesOf(standings)
   const stepOf = new Map<string, FoldStep>()
   const movements: Movement[] = []
   const stock: StockChange[] = []
   let held: Held[] = []
   for (const standing of inTurn) {
-    const turn = takeTurn(state, standing, standing === beginning ? firstAt(standings) : null, context)
+    const signature = signatureOn(standing, signatures)
+    const turn = takeTurn(state, standing, { beginsAt: standing === beginning ? firstAt(standings) : null, signature, context })
     stepOf.set(standing.event.id, {
       eventId: standing.event.id,
       before: snapshot(state),
@@ -133,6 +140,7 @@ export function fold(events: readonly AnyRecordedEvent[], context: FoldContext):
       findings: turn.findings,
       movements: turn.movements,
       correction: standing.correction,
+      signature,
     })
     movements.push(...turn.movements)
     if (!standing.isOut) {
@@ -152,9 +160,13 @@ export function fold(events: readonly AnyRecordedEvent[], context: FoldContext):
 }
 
 /** @param beginsAt when the cylinder's first event took effect, of the registration that it begins with; else null. */
-function takeTurn(before: CylinderState, { event, isOut }: Standing, beginsAt: number | null, context: FoldContext): Turn {
+function takeTurn(
+  before: CylinderState, { event, isOut }: Standing,
+  { beginsAt, signature, context }: { beginsAt: number | null, signature: Signature | null, context: FoldContext },
+): Turn {
   const turn: Turn = {
-    event, context, state: copyOf(before), at: beginsAt ?? event.effectiveAt, apart: event.practice || event.trainee,
+    event, context, state: copyOf(before), at: beginsAt ?? event.effectiveAt, apart: event.practice || signature?.by === null,
+    signature,
     movements: [], found: [], findings: [],
   }
   turn.state.version = Math.max(before.version, event.version)
@@ -170,6 +182,10 @@ function takeTurn(before: CylinderState, { event, isOut }: Standing, beginsAt: n
   turn.state.hasHeldBurnt ||= turn.state.contents.burnt
   raiseCommon(turn, before)
   return turn
+}
+
+function signatureOn({ event, isOut }: Standing, signatures: ReadonlyMap<string, string>): Signature | null {
+  return isOut || !needsSignature(event) ? null : { by: signatures.get(event.id) ?? null }
 }
 
 function firstAt(standings: readonly Standing[]): number | null {

@@ -26,9 +26,10 @@ function raiseClock({ event, findings }: Turn): void {
 }
 
 function raiseTrainee(turn: Turn): void {
-  const { event } = turn
-  if (!event.trainee || event.kind === 'corrected') return
+  const { event, signature } = turn
+  if (signature === null || signature.by !== null) return
   stand(turn, 'unsigned')
+  if (event.supervisorId !== null) turn.state.waitsForSignatureOf = [...new Set([...turn.state.waitsForSignatureOf, event.supervisorId])]
   if (event.supervisorId === null) stand(turn, 'unsupervised')
 }
 

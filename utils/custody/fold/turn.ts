@@ -6,6 +6,7 @@ import type { RecordedEvent } from '../event'
 import type { Finding } from '../finding'
 import type { EventKind } from '../kinds'
 import type { Movement } from '../movement'
+import type { Signature } from '../signatures'
 import type { CylinderState } from '../state'
 
 /** What the fold takes from outside the log. */
@@ -33,6 +34,8 @@ export interface Turn<K extends EventKind = EventKind> {
   readonly at: number
   /** Practice, or a trainee's without a countersignature. */
   readonly apart: boolean
+  /** Of the supervisor, on a trainee's entry; null where it needs none. */
+  readonly signature: Signature | null
   readonly movements: Movement[]
   readonly found: Difference[]
   readonly findings: Finding[]

@@ -2,6 +2,7 @@ import type { z } from 'zod'
 import type { EventKind } from '../kinds'
 import { details as checked } from './checked'
 import { details as corrected } from './corrected'
+import { details as countersigned } from './countersigned'
 import { details as drawn } from './drawn'
 import { details as emptied } from './emptied'
 import { details as filled } from './filled'
@@ -49,6 +50,7 @@ export const DETAILS = {
   'sent-for-test': sentForTest,
   'retested': retested,
   'corrected': corrected,
+  'countersigned': countersigned,
 } satisfies Record<EventKind, z.ZodType>
 
 /** What an event of a kind says. */

@@ -196,4 +196,10 @@ describe('the care of a cylinder', () => {
     expect(proof({ photoIds: Array.from({ length: 21 }, (_, index) => idOf(index)) })).toEqual(['details.proof.photoIds: must be at most 20 photos'])
     expect(proof({ certificate: 'two\nlines' })).toEqual(['details.proof.certificate: must not hold control characters'])
   })
+
+  it('is countersigned by naming an entry', () => {
+    expect(faults({ kind: 'countersigned', details: { eventId: idOf(3) } })).toEqual([])
+    expect(faults({ kind: 'countersigned', details: { eventId: 3 } })).toEqual(['details.eventId: must be an id (a UUID)'])
+    expect(faults({ kind: 'countersigned', details: {} })).toEqual(['details.eventId: is missing'])
+  })
 })
