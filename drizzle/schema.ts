@@ -183,7 +183,10 @@ export const custodyEvents = sqliteTable('custody_events', {
   /** hash of the cylinder's version before this one; '' for the first. */
   prevHash: text('prev_hash').notNull(),
   hash: text('hash').notNull(),
-}, table => [uniqueIndex('custody_events_cylinder_version').on(table.cylinderId, table.version)])
+}, table => [
+  uniqueIndex('custody_events_cylinder_version').on(table.cylinderId, table.version),
+  index('custody_events_supervised').on(table.supervisorId).where(sql`trainee = 1`),
+])
 
 /**
  * Signed checkpoints of the custody log. Append-only like the log itself; the key that signs them is never in here.

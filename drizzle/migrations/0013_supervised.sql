@@ -1,0 +1,1 @@
+CREATE INDEX `custody_events_supervised` ON `custody_events` (`supervisor_id`) WHERE trainee = 1;
