@@ -19,6 +19,6 @@ export const DAMAGE_WORDS: Record<DamageKind, string> = {
   'checkpoint-forged': 'its text is not what was signed',
   'checkpoint-other-key': 'it is signed by a key that this server does not know',
   'row-differs': 'its row in the fleet is not what its log gives',
-  'movements-differ': 'its movements are not what its log gives',
+  'movements-differ': 'its movements or its stock are not what its log gives',
   'labels-differ': 'its labels are not what its log gives',
 }
