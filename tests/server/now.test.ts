@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { FleetAnswer } from '../../utils/contract/custody'
 import type { NowAnswer, NowLine } from '../../utils/contract/now'
@@ -37,7 +38,7 @@ const lineOf = async (member: Member, topic: string, query = '') => (await lines
 
 describe('what needs each person now', () => {
   it('is for the manager what is overfilled and what is full, and nothing of the warehouse\'s labels', async () => {
-    expect(await topicsOf(firm.manager)).toEqual(['overfilled', 'full'])
+    expect(await topicsOf(firm.manager)).toEqual(['overfilled', 'full', 'few-empty'])
     expect(await lineOf(firm.manager, 'overfilled')).toMatchObject({
       kind: 'stop', number: 1, sentence: '1 cylinder is overfilled, by 2.5\u00A0lb.', to: `/c/${overfilled.labelCode!.toLowerCase()}/act/drawn`,
     })
@@ -45,7 +46,7 @@ describe('what needs each person now', () => {
   })
 
   it('is for the warehouse also the label that is missing', async () => {
-    expect(await topicsOf(firm.warehouse)).toEqual(['overfilled', 'full', 'unlabelled'])
+    expect(await topicsOf(firm.warehouse)).toEqual(['overfilled', 'full', 'few-empty', 'unlabelled'])
   })
 
   it('is said in the unit that is asked for', async () => {
@@ -74,6 +75,25 @@ describe('what needs each person now', () => {
     expect(await lineOf(firm.manager, 'shipment-drafts')).toMatchObject({ number: 1, verb: 'Go on with it', to: `/shipments/${draft.id}` })
   })
 
+  it('is for warehouse and manager what a van came back without, until it is seen again', async () => {
+    const lost = await registered(firm)
+    const van = await made<Place>(firm.admin.client, '/api/places', { name: 'Van 3', kind: 'van' })
+    await made(firm.warehouse.client, `/api/vans/${van.id}/check-ins`, { id: randomUUID(), found: [], missing: [lost.id] })
+    expect(await lineOf(firm.warehouse, 'vans-short')).toMatchObject({ kind: 'unk', number: 1, sentence: 'Van 3 came back 1 short.', to: `/vans/${van.id}` })
+    expect(await topicsOf(firm.technician)).not.toContain('vans-short')
+    await posted(firm.warehouse.client, [{ ...eventOf(lost.id, 'weighed'), details: { gross: lb(40) } }])
+    expect(await lineOf(firm.manager, 'vans-short')).toBeUndefined()
+  })
+
+  it('is a shop with fewer than three empty cylinders that may be filled', async () => {
+    const empty = () => registered(firm, { contents: 'evacuated' })
+    await Promise.all([empty(), empty(), registered(firm, { contents: 'evacuated', marks: [{ month: '2019-01' }] })])
+    // One of the three is late for its retest and does not count.
+    expect(await lineOf(firm.manager, 'few-empty')).toMatchObject({ number: 1, sentence: 'North shop has 2 empty cylinders that may be filled.', to: `/fleet?place=${firm.shop.id}` })
+    await empty()
+    expect(await lineOf(firm.manager, 'few-empty')).toBeUndefined()
+  })
+
   it('is for the auditor the log that was never checked, until it is', async () => {
     expect(await topicsOf(firm.auditor)).toEqual(['log-unchecked'])
     expect((await firm.auditor.client.get('/api/log/verify')).status).toBe(200)
@@ -94,6 +114,19 @@ describe('what needs each person now', () => {
     expect(await topicsOf(firm.admin)).toEqual(['uncertified', 'not-taken-up'])
     expect(await lineOf(firm.admin, 'uncertified')).toMatchObject({ number: 2, reason: expect.stringMatching(/^Theo and Tina\. .*40 CFR 82\.161/) })
     expect(await topicsOf(firm.manager)).toContain('not-taken-up')
+  })
+
+  it('is for the supervisor what a trainee recorded, for the manager who has it to sign, until it is taken back', async () => {
+    const trainee = await addMember(firm.admin, 'Tom', ['technician'], { trainee: true })
+    const weighed = await registered(firm)
+    const weighing = { ...eventOf(weighed.id, 'weighed'), supervisorId: firm.technician.id, details: { gross: lb(40) } }
+    const [{ version }] = await posted(trainee.client, [weighing]) as [CylinderView]
+    expect(await lineOf(firm.technician, 'to-countersign')).toMatchObject({ number: 1, to: `/c/${weighed.labelCode!.toLowerCase()}/log` })
+    expect(await topicsOf(other)).not.toContain('to-countersign')
+    expect(await lineOf(firm.manager, 'unsigned')).toMatchObject({ number: 1, reason: expect.stringMatching(/^1 with Tina\./) })
+    await posted(firm.manager.client, [{ ...eventOf(weighed.id, 'corrected'), expects: version, details: { eventId: weighing.id, reason: 'another cylinder' } }])
+    expect(await lineOf(firm.technician, 'to-countersign')).toBeUndefined()
+    expect(await lineOf(firm.manager, 'unsigned')).toBeUndefined()
   })
 
   it('says how far the log had come, and is nobody\'s who is not signed in', async () => {

@@ -2,16 +2,18 @@ import { daysBetween, formatNear } from '../quantity/instant'
 import { formatMass } from '../quantity/mass'
 import { MATERIALS_OF_TRADE } from '../transport/vanLoad'
 import { cylinderName } from '../shipment/changedLines'
-import type { FullFacts, ListFacts, NowFacts } from './nowFacts'
+import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type ShortVanFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
 
-/** The lines about what is aboard, full in the shop, on lists, and without a label. */
+/** The lines about what is aboard, full or lacking in the shop, on lists, and without a label. */
 export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
-  const { van, full = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
+  const { van, shortVans = [], full = [], fewEmpty = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
   return [
     van && vanLine(van, reader),
+    shortVansLine(shortVans, reader),
     ...full.map(one => fullLine(one, reader)),
+    fewEmptyLine(fewEmpty),
     shipmentsAway && awayLine('shipments-away', shipmentsAway, reader),
     lotsAway && awayLine('lots-away', lotsAway, reader),
     shipmentDrafts && draftLine('shipment-drafts', shipmentDrafts, reader),
@@ -34,6 +36,30 @@ function vanLine({ name, load }: NonNullable<NowFacts['van']>, { unit }: NowRead
     ...shared, number: load.tooHeavy,
     sentence: `${counted(load.tooHeavy, 'cylinder', 'cylinders')} on ${name} ${load.tooHeavy === 1 ? 'is' : 'are'} too heavy.`,
     reason: `One above ${formatMass(MATERIALS_OF_TRADE.eachGrams, unit, 'nearest')} gross does not go without a shipping paper (${MATERIALS_OF_TRADE.source}(a)(2)).`,
+  }
+}
+
+function shortVansLine(vans: readonly ShortVanFacts[], { now, timeZone }: NowReader): DraftLine | null {
+  const [van] = vans
+  if (!van) return null
+  const number = vans.reduce((sum, { names }) => sum + names.length, 0)
+  return {
+    topic: 'vans-short', kind: 'unk', number,
+    sentence: `${vans.length === 1 ? van.name : `${vans.length} vans`} came back ${number} short.`,
+    reason: `${vans.map(({ name, names, checkedAt }) => `${listed(names)} not found on ${name} ${formatNear(checkedAt, timeZone, now)}`).join('; ')}. Not seen since.`,
+    verb: 'See what to look for', to: vans.length === 1 ? `/vans/${van.id}` : '/vans',
+  }
+}
+
+function fewEmptyLine(shops: readonly FewEmptyFacts[]): DraftLine | null {
+  const [shop] = shops
+  if (!shop) return null
+  const few = `Fewer than ${FEW_EMPTY} leave little to recover into: evacuate some, or have some come back.`
+  return {
+    topic: 'few-empty', kind: 'att', number: shops.length,
+    ...shops.length === 1
+      ? { sentence: `${shop.name} has ${counted(shop.count, 'empty cylinder', 'empty cylinders')} that may be filled.`, reason: few, verb: 'See what stands there', to: `/fleet?place=${shop.id}` }
+      : { sentence: `${shops.length} shops have few empty cylinders.`, reason: `${listed(shops.map(({ name, count }) => `${name} ${count}`))} that may be filled. ${few}`, verb: 'See the places', to: '/places' },
   }
 }
 

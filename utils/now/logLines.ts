@@ -1,21 +1,52 @@
 import { cylinderPath } from '../fleet/cylinderPath'
 import { daysBetween, formatNear } from '../quantity/instant'
 import { cylinderName } from '../shipment/changedLines'
-import type { EntryFacts, LogCheckFacts, NowFacts } from './nowFacts'
+import { fleetPath } from './cylinderLines'
+import type { EntryFacts, LogCheckFacts, NowFacts, UnsignedFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
-import { counted } from './phrase'
+import { counted, listed } from './phrase'
 
 /** The log is checked again after so many days: common practice, no source. */
 const CHECKED_FOR_DAYS = 7
 
-/** The lines about the custody log itself: whether it was checked, and what of this week wants a second look. */
-export function logLines({ logCheck, entries }: NowFacts, reader: NowReader): DraftLine[] {
+/** The lines about the custody log itself: what waits for a signature, whether it was checked, and what of this week wants a second look. */
+export function logLines({ toCountersign, unsigned = [], logCheck, entries }: NowFacts, reader: NowReader): DraftLine[] {
   return [
+    toCountersign && toCountersignLine(toCountersign),
+    unsignedLine(unsigned),
     logCheck && checkLine(logCheck, reader),
     entries && entryLine('doubtful-times', entries.doubtful, ['entry came from a clock that was off', 'entries came from clocks that were off'], 'Both times are kept; compare them with the paper.'),
     entries && entryLine('late-entries', entries.late, ['entry was recorded', 'entries were recorded'], 'Compare with the paper of that day.', ' more than a day late'),
     entries && entryLine('corrections', entries.corrected, ['entry was corrected', 'entries were corrected'], 'Each says its reason, and the first reading is kept.'),
   ].filter(line => !!line)
+}
+
+function toCountersignLine({ count, cylinders }: UnsignedFacts): DraftLine {
+  return {
+    topic: 'to-countersign', kind: 'att', number: count,
+    sentence: `${counted(count, 'entry of a trainee waits', 'entries of trainees wait')} for your signature.`,
+    reason: `${listed(cylinders.map(cylinderName))}. Until you sign, no total that the law asks for counts ${count === 1 ? 'it' : 'them'}.`,
+    ...whereUnsigned(cylinders),
+  }
+}
+
+function unsignedLine(all: readonly UnsignedFacts[]): DraftLine | null {
+  const number = all.reduce((sum, { count }) => sum + count, 0)
+  const cylinders = all.flatMap(one => one.cylinders)
+  if (number === 0) return null
+  return {
+    topic: 'unsigned', kind: 'att', number,
+    sentence: `${counted(number, 'entry of a trainee is', 'entries of trainees are')} not countersigned.`,
+    reason: `${listed(all.map(({ supervisor, count }) => supervisor === null ? `${count} without a supervisor` : `${count} with ${supervisor}`))}. No total that the law asks for counts ${number === 1 ? 'it' : 'them'}.`,
+    ...whereUnsigned(cylinders),
+  }
+}
+
+function whereUnsigned(cylinders: UnsignedFacts['cylinders']): Pick<DraftLine, 'verb' | 'to'> {
+  const [first] = cylinders
+  return first && new Set(cylinders.map(({ id }) => id)).size === 1
+    ? { verb: 'Read it', to: `${cylinderPath(first)}/log` }
+    : { verb: 'Show the cylinders', to: fleetPath({ finding: 'unsigned' }) }
 }
 
 function checkLine({ last, newEvents }: LogCheckFacts, { now, timeZone }: NowReader): DraftLine | null {

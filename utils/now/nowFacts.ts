@@ -23,6 +23,18 @@ export interface ListFacts { count: number, id: string, number: number, since: n
 /** Lines of the custody log of the last days that an auditor looks at. */
 export interface EntryFacts { count: number, cylinders: number, newest: Pick<CylinderRow, 'id' | 'labelCode' | 'serial'> | null }
 
+/** Cylinders that the last check-in of a van did not find, and that nobody has seen since; `checkedAt` in UTC milliseconds. */
+export interface ShortVanFacts { id: string, name: string, names: string[], checkedAt: number }
+
+/** Fewer empty cylinders than this that may be filled are told of, in each shop: common practice, no source. */
+export const FEW_EMPTY = 3
+
+/** A shop with few empty cylinders that may be filled, its racks among it. */
+export interface FewEmptyFacts { id: string, name: string, count: number }
+
+/** What trainees recorded that waits for the signature of one supervisor. */
+export interface UnsignedFacts { supervisor: string | null, count: number, cylinders: Pick<CylinderRow, 'id' | 'labelCode' | 'serial'>[] }
+
 /** How the last check of the custody log went; `at` in UTC milliseconds. */
 export interface LogCheckFacts { last: { at: number, isOk: boolean } | null, newEvents: number }
 
@@ -43,6 +55,12 @@ export interface NowFacts {
   lotDrafts?: ListFacts
   /** The next rule of the firm that begins soon. */
   rule?: { fromAt: number, isFillRule: boolean, count: number }
+  shortVans?: ShortVanFacts[]
+  fewEmpty?: FewEmptyFacts[]
+  /** What waits for the signature of the person who reads. */
+  toCountersign?: UnsignedFacts
+  /** What waits for anybody's, the most first. */
+  unsigned?: UnsignedFacts[]
   logCheck?: LogCheckFacts
   entries?: { doubtful: EntryFacts, late: EntryFacts, corrected: EntryFacts }
   mailFailed?: { count: number, recipient: string }

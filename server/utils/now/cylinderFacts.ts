@@ -1,9 +1,9 @@
 import type { InStatement } from '@libsql/client'
 import type { FleetQuestion, FleetTopic } from '../../../utils/now/fleetQuestions'
-import type { CylinderFacts, FullFacts, NowFacts } from '../../../utils/now/nowFacts'
+import { FEW_EMPTY, type CylinderFacts, type FewEmptyFacts, type FullFacts, type NowFacts } from '../../../utils/now/nowFacts'
 import type { DateBounds } from '../custody/dateBounds'
 import { cylinderRowsWhere } from '../custody/fleet'
-import { findingFilter, fleetFilter, type FleetFilter } from '../custody/fleetFilter'
+import { findingFilter, fleetFilter, isOverdue, type FleetFilter } from '../custody/fleetFilter'
 import type { Database } from '../database/database'
 import { retestAt } from '../directory/datedRules'
 import { namesOf, type Directory } from '../directory/directory'
@@ -77,6 +77,20 @@ export async function fullFacts(db: Database, bounds: DateBounds): Promise<FullF
       places: [...new Set(some.map(row => row[3] as string))],
     }
   }).sort((a, b) => b.netGrams - a.netGrams)
+}
+
+/** Shops, with their racks, in which few empty cylinders may be filled and are on no list, the fewest first; nothing while there are no cylinders. */
+export async function fewEmptyFacts(db: Database, bounds: DateBounds): Promise<FewEmptyFacts[]> {
+  const overdue = isOverdue(bounds)
+  const { rows } = await db.readClient.execute({
+    sql: `SELECT shop.id, shop.name, count(c.id) AS empty FROM places shop JOIN places p ON p.id = shop.id OR p.parent_id = shop.id
+      LEFT JOIN cylinders c ON c.place_id = p.id AND c.nothing_in_it = 1 AND c.lifecycle = 'in-service' AND c.severity < 2
+        AND (${overdue.sql}) IS NOT TRUE AND c.id NOT IN (SELECT o.cylinder_id FROM open_lines o)
+      WHERE shop.kind = 'shop' AND shop.active = 1 AND EXISTS (SELECT 1 FROM cylinders any_one WHERE any_one.lifecycle = 'in-service')
+      GROUP BY shop.id HAVING empty < ? ORDER BY empty, shop.name, shop.id`,
+    args: [...overdue.args, FEW_EMPTY],
+  })
+  return rows.map(row => ({ id: row[0] as string, name: row[1] as string, count: row[2] as number }))
 }
 
 /** Cylinders in use that wear no label, and the first of them. */

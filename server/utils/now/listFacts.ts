@@ -1,9 +1,11 @@
 import type { InStatement } from '@libsql/client'
-import type { ListFacts, NowFacts } from '../../../utils/now/nowFacts'
+import type { ListFacts, NowFacts, ShortVanFacts } from '../../../utils/now/nowFacts'
+import { cylinderName } from '../../../utils/shipment/changedLines'
 import { vanLoad } from '../../../utils/transport/vanLoad'
 import { cylinderRowsWhere } from '../custody/fleet'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
+import { lastCheckIn, toLookFor } from '../vans/checkIns'
 import { materialsOf } from '../vans/materials'
 
 const DAY_MS = 86_400_000
@@ -44,4 +46,15 @@ export async function vanFacts(db: Database, from: Directory, personId: string, 
     materialsOf(db, van.id, from),
   ])
   return { name: van.name, load: vanLoad(aboard, materials?.grams ?? null) }
+}
+
+/** Vans in use whose last check-in did not find what nobody has seen since, the latest first. */
+export async function shortVanFacts(db: Database, from: Directory, nowMs: number): Promise<ShortVanFacts[]> {
+  const vans = [...from.places.values()].filter(({ kind, active }) => kind === 'van' && active)
+  const found = await Promise.all(vans.map(async ({ id, name }): Promise<ShortVanFacts | null> => {
+    const checkIn = await lastCheckIn(db, id)
+    const lines = await toLookFor(db, checkIn, from, nowMs)
+    return checkIn && lines.length > 0 ? { id, name, names: lines.map(({ cylinder }) => cylinderName(cylinder)), checkedAt: checkIn.checkedAt } : null
+  }))
+  return found.filter(each => each !== null).sort((a, b) => b.checkedAt - a.checkedAt)
 }

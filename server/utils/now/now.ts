@@ -10,9 +10,10 @@ import { dateBounds } from '../custody/dateBounds'
 import { logHead } from '../custody/logHead'
 import type { Database } from '../database/database'
 import { directory, type Directory } from '../directory/directory'
-import { cylinderFacts, fullFacts, unlabelledFacts, unseenFacts } from './cylinderFacts'
-import { listFacts, vanFacts } from './listFacts'
+import { cylinderFacts, fewEmptyFacts, fullFacts, unlabelledFacts, unseenFacts } from './cylinderFacts'
+import { listFacts, shortVanFacts, vanFacts } from './listFacts'
 import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts } from './recordFacts'
+import { unsignedFacts } from './signatureFacts'
 
 /** What waits for a person, by their roles: nothing of another's is looked up. */
 export async function nowAnswer(db: Database, access: Access, unit: MassUnit, nowMs: number): Promise<NowAnswer> {
@@ -29,19 +30,23 @@ export async function nowAnswer(db: Database, access: Access, unit: MassUnit, no
 async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTopic>, personId: string, nowMs: number): Promise<NowFacts> {
   const bounds = dateBounds(from, nowMs)
   const when = <T>(topic: NowTopic, look: () => Promise<T>) => topics.has(topic) ? look() : undefined
-  const [cylinders, unseen, full, unlabelled, van, lists, logCheck, entries, mailFailed] = await Promise.all([
+  const [cylinders, unseen, full, fewEmpty, unlabelled, van, shortVans, lists, toCountersign, unsigned, logCheck, entries, mailFailed] = await Promise.all([
     cylinderFacts(db, fleetQuestions(topics, personId), bounds, nowMs),
     when('not-seen', () => unseenFacts(db, from, bounds, nowMs)),
     when('full', () => fullFacts(db, bounds)),
+    when('few-empty', () => fewEmptyFacts(db, bounds)),
     when('unlabelled', () => unlabelledFacts(db, nowMs)),
     when('van-load', () => vanFacts(db, from, personId, nowMs)),
+    when('vans-short', () => shortVanFacts(db, from, nowMs)),
     when('shipment-drafts', () => listFacts(db, nowMs)),
+    when('to-countersign', () => unsignedFacts(db, from, personId)),
+    when('unsigned', () => unsignedFacts(db, from)),
     when('log-broken', () => logCheckFacts(db)),
     when('corrections', () => entryFacts(db, nowMs)),
     when('mail-failed', () => mailFacts(db)),
   ])
   return {
-    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, unlabelled, van, ...lists, logCheck, entries, mailFailed,
+    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, fewEmpty, unlabelled, van, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, logCheck, entries, mailFailed,
     rule: ruleFacts(from, nowMs), ...peopleAndPlaces(from),
   }
 }

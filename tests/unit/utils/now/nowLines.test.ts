@@ -174,3 +174,60 @@ describe('lists and records', () => {
     expect(linesFor('admin', { missing: { shop: false, reclaimer: false, testStation: false, vansWithoutTechnician: [] }, uncertified: [], notTakenUp: [] })).toEqual([])
   })
 })
+
+describe('what a van did not bring back', () => {
+  const van = { id: ID, name: 'Van 12', names: ['7K3 M9Q 2TX', 'serial K1044'], checkedAt: NOON - DAY }
+
+  it('names what is missing, and leads to that van', () => {
+    expect(linesFor('warehouse', { shortVans: [van] })).toEqual([expect.objectContaining({
+      kind: 'unk', number: 2, sentence: 'Van 12 came back 2 short.',
+      reason: '7K3 M9Q 2TX and serial K1044 not found on Van 12 yesterday 12:00. Not seen since.', to: `/vans/${ID}`,
+    })])
+  })
+
+  it('leads from several vans to all of them', () => {
+    expect(linesFor('manager', { shortVans: [van, { ...van, name: 'Van 2', names: ['K7'] }] })[0]).toMatchObject({ number: 3, sentence: '2 vans came back 3 short.', to: '/vans' })
+  })
+
+  it('is no line where every van brought back all, and nothing of a technician\'s', () => {
+    expect(linesFor('manager', { shortVans: [] })).toEqual([])
+    expect(linesFor('technician', { shortVans: [van] })).toEqual([])
+  })
+})
+
+describe('a shop with few empty cylinders', () => {
+  it('says how many it has, also where it has none', () => {
+    expect(linesFor('warehouse', { fewEmpty: [{ id: ID, name: 'North shop', count: 0 }] })).toEqual([expect.objectContaining({
+      kind: 'att', number: 1, sentence: 'North shop has 0 empty cylinders that may be filled.', to: `/fleet?place=${ID}`,
+    })])
+  })
+
+  it('stands with the others in one line', () => {
+    expect(linesFor('manager', { fewEmpty: [{ id: ID, name: 'North shop', count: 1 }, { id: ID, name: 'South shop', count: 2 }] })[0]).toMatchObject({
+      number: 2, sentence: '2 shops have few empty cylinders.', reason: expect.stringContaining('North shop 1 and South shop 2 that may be filled. Fewer than 3 leave'),
+    })
+  })
+})
+
+describe('what a trainee recorded and nobody has countersigned', () => {
+  const cylinder = { id: ID, labelCode: '7K3M9Q2TX', serial: null }
+  const mine = { supervisor: 'Tina', count: 2, cylinders: [cylinder] }
+
+  it('waits for the supervisor it names, and leads to the log of the cylinder', () => {
+    expect(linesFor('technician', { toCountersign: mine })).toEqual([expect.objectContaining({
+      topic: 'to-countersign', kind: 'att', number: 2, sentence: '2 entries of trainees wait for your signature.', to: '/c/7k3m9q2tx/log',
+    })])
+  })
+
+  it('is told to the manager by supervisor, and the cylinders are listed where there are several', () => {
+    const nobodys = { supervisor: null, count: 1, cylinders: [{ id: 'other', labelCode: null, serial: 'K1044' }] }
+    expect(linesFor('manager', { unsigned: [mine, nobodys] })).toEqual([expect.objectContaining({
+      topic: 'unsigned', number: 3, sentence: '3 entries of trainees are not countersigned.',
+      reason: '2 with Tina and 1 without a supervisor. No total that the law asks for counts them.', to: '/fleet?finding=unsigned',
+    })])
+  })
+
+  it('is no line where all is signed', () => {
+    expect(linesFor('manager', { unsigned: [] })).toEqual([])
+  })
+})
