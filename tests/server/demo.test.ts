@@ -12,6 +12,7 @@ import { openDatabase, type Database } from '../../server/utils/database/databas
 import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
+import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
 import type { FindingCode } from '../../utils/custody/finding'
@@ -53,6 +54,16 @@ describe('the demo firm', () => {
     const [last] = await column('SELECT max(recorded_at) FROM custody_events')
     expect(first).toBeLessThan(NOW - 500 * 86_400_000)
     expect(last).toBeLessThanOrEqual(NOW)
+  })
+
+  it('has one van that came back without what its technician held last, and two that say what else they carry', async () => {
+    const vans = await listVans(db, NOW)
+    const short = vans.filter(({ toLookFor }) => toLookFor.length > 0)
+    expect(short).toHaveLength(1)
+    expect(short[0]!.toLookFor.length).toBeGreaterThan(0)
+    expect(new Set(short[0]!.toLookFor.map(({ cylinder }) => cylinder.holder?.name))).toEqual(new Set([short[0]!.van.technicianName]))
+    expect(short[0]!.aboard.length).toBeGreaterThan(short[0]!.toLookFor.length)
+    expect(vans.filter(({ materials }) => materials !== null)).toHaveLength(2)
   })
 
   it('shows every finding that these kinds of event can raise', async () => {
