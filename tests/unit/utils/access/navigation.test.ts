@@ -1,23 +1,43 @@
 import { describe, expect, it } from 'vitest'
 import type { Role } from '../../../../utils/access/roles'
-import { firstScreenFor, navigationFor, worksAtDesk } from '../../../../utils/access/navigation'
+import { firstScreenFor, itemAt, navigationFor, worksAtDesk } from '../../../../utils/access/navigation'
 
 const access = (...roles: Role[]) => ({ personId: 'p', roles, trainee: false })
 const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => item.label)
 
 describe('where a person can go', () => {
   it.each<[Role, string[]]>([
-    ['technician', ['Now', 'Scan', 'Fleet', 'Refrigerants', 'Places', 'Rules', 'People']],
-    ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People']],
-    ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Rules', 'People', 'Log']],
-    ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'Rules', 'People', 'Log']],
-    ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Rules', 'People', 'Mail']],
+    ['technician', ['Now', 'Scan', 'Fleet', 'Refrigerants', 'Places', 'Settings']],
+    ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Settings']],
+    ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Log', 'Settings']],
+    ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'Log', 'Settings']],
+    ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Settings']],
   ])('as %s', (role, labels) => {
     expect(words(role)).toEqual(labels)
   })
 
   it('is nowhere without signing in', () => {
     expect(navigationFor(null)).toEqual([])
+  })
+
+  it.each<[Role, string[]]>([
+    ['technician', ['Rules', 'Scales', 'People', 'Firms']],
+    ['manager', ['Rules', 'Scales', 'People', 'Firms']],
+    ['admin', ['Rules', 'Scales', 'People', 'Firms', 'Mail']],
+  ])('among the settings as %s', (role, labels) => {
+    const settings = navigationFor(access(role)).at(-1)
+    expect(settings).toMatchObject({ label: 'Settings', to: '/rules' })
+    expect(settings?.within?.map(({ label }) => label)).toEqual(labels)
+  })
+})
+
+describe('where a person is', () => {
+  const items = [{ label: 'Start', to: '/' }, { label: 'Fleet', to: '/fleet' }, { label: 'Settings', to: '/rules', within: [{ label: 'Rules', to: '/rules' }, { label: 'People', to: '/people' }] }]
+
+  it.each([
+    ['/', 'Start'], ['/fleet', 'Fleet'], ['/fleet/register', 'Fleet'], ['/fleets', undefined], ['/rules', 'Settings'], ['/people', 'Settings'], ['/mail', undefined],
+  ])('at %s is %s', (path, label) => {
+    expect(itemAt(items, path)?.label).toBe(label)
   })
 })
 
