@@ -55,7 +55,8 @@ export interface CylinderState {
   /** The tare in force, unrounded; null where none can be read. */
   tare: { exactGrams: number, since: number, isWeighedAnew: boolean } | null
   labelCode: string | null
-  labels: { code: string, firstAt: number, lastAt: number }[]
+  /** `replacedAt`: since when another stands in its place; left out for one that is on it still. */
+  labels: { code: string, firstAt: number, lastAt: number, replacedAt?: number }[]
   placeId: string | null
   holderId: string | null
   away: { at: 'at-reclaim' | 'at-test', since: number, listId: string } | null

@@ -45,7 +45,7 @@ const WORDS: Record<FleetTopic, Words> = {
   },
   'code-on-two': {
     kind: 'stop', verb: 'See which', sentence: found => `${cylinders(found.count, 'shares its label', 'share their labels')} with another.`,
-    reason: found => `${whatAndWhere(found)}. Compare the serials and print a new label for one of each two.`,
+    reason: found => `${whatAndWhere(found)}. Compare the serials, and put a new label on the one of each two that had it later.`,
   },
   'late': {
     kind: 'stop', verb: 'Open it', sentence: found => `${counted(found.count, 'retest is', 'retests are')} late.`, reason: lateReason,

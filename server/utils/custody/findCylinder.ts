@@ -26,10 +26,20 @@ export async function findCylinder(db: Database, ref: string): Promise<string | 
   return bySerial.rows.length === 1 ? bySerial.rows[0]![0] as string : null
 }
 
-/** Codes of cylinders that another cylinder claims too; a list of the cylinders' ids follows. */
+/** The cylinder that the code of a claim `mine` belongs to. */
+const ITS_OWNER = `(SELECT first.cylinder_id FROM label_claims first WHERE first.code = mine.code ORDER BY ${CLAIM_ORDER} LIMIT 1)`
+
+/**
+ * Codes of cylinders that are on another cylinder too; a list of the cylinders' ids follows.
+ *
+ * A code belongs to the cylinder that had it first. Once a new label has taken its place on the other, it is on one again.
+ */
 export const SHARED_CODES = `SELECT DISTINCT mine.cylinder_id, mine.code FROM label_claims mine
   JOIN label_claims other ON other.code = mine.code AND other.cylinder_id <> mine.cylinder_id
-  WHERE mine.cylinder_id IN`
+  WHERE NOT EXISTS (SELECT 1 FROM cylinders c, json_each(c.state, '$.labels') label
+    WHERE c.id = iif(mine.cylinder_id = ${ITS_OWNER}, other.cylinder_id, mine.cylinder_id)
+      AND label.value ->> 'code' = mine.code AND label.value ->> 'replacedAt' IS NOT NULL)
+  AND mine.cylinder_id IN`
 
 /** The answer of {@link SHARED_CODES}, by cylinder. */
 export function sharedCodes(rows: readonly Row[]): Map<string, Set<string>> {

@@ -22,7 +22,7 @@ export function registeredTwice(since: number): Finding {
 export function codeOnTwo(code: string): Finding {
   return {
     code: 'code-on-two', severity: 'stop', source: OWN_RULE, since: null,
-    text: `The label code ${code} is on another cylinder too. Check the serial on the collar, then relabel one of them.`,
+    text: `The label code ${code} is on another cylinder too. Check the serial on the collar. The code stays with the cylinder that had it first; the other gets a new label in its place.`,
   }
 }
 

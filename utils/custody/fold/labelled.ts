@@ -6,8 +6,15 @@ export function labelled({ state, event }: Turn<'labelled'>): void {
   const code = labelledCode(event.details)
   const at = event.effectiveAt
   const known = state.labels.find(label => label.code === code)
-  if (known) known.lastAt = at
+  if (known) {
+    known.lastAt = at
+    delete known.replacedAt
+  }
   else state.labels.push({ code, firstAt: at, lastAt: at })
+  const replaced = event.details.replaces && normaliseLabelCode(event.details.replaces)
+  if (replaced && replaced !== code) {
+    for (const label of state.labels) if (label.code === replaced) label.replacedAt = at
+  }
   state.labelCode = code
 }
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { codes, corrected, did, folded, idOf, kg, registered, REQUALIFIER, START, viewAfter } from '~~/tests/helpers/custody'
+import { codes, corrected, did, folded, idOf, kg, registered, REQUALIFIER, START, viewAfter, type Told } from '~~/tests/helpers/custody'
 
 const OLD = '7K3M9Q2TX'
 const NEW = '000000000'
@@ -23,6 +23,16 @@ describe('a labelled cylinder', () => {
     const story = [registered(), did('labelled', { code: OLD }), did('labelled', { code: NEW })]
     expect(codes(viewAfter(story, { codesOnTwo: new Set([OLD]) }))).toEqual(['code-on-two'])
     expect(codes(viewAfter(story, { codesOnTwo: new Set(['7K3M9Q2T0']) }))).toEqual([])
+  })
+
+  it('knows which of its codes another has taken the place of, and that one stuck on again is on it', () => {
+    const labels = (...story: Told[]) => folded(registered(), ...story).state.labels.map(({ code, replacedAt }) => [code, replacedAt ?? null])
+    const [old, beside, instead, again] = [
+      did('labelled', { code: OLD }), did('labelled', { code: NEW }), did('labelled', { code: NEW, replaces: '7k3 m9q 2tx' }), did('labelled', { code: OLD }),
+    ]
+    expect(labels(old, beside)).toEqual([[OLD, null], [NEW, null]])
+    expect(labels(old, instead)).toEqual([[OLD, START + 2 * 3_600_000], [NEW, null]])
+    expect(labels(old, instead, again)).toEqual([[OLD, null], [NEW, null]])
   })
 
   it('is to be labelled again after a retest has set a new tare', () => {
