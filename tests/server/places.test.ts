@@ -89,6 +89,21 @@ describe('places', () => {
     expect((await client.patch(`/api/places/${randomUUID()}`, { name: 'X' })).status).toBe(404)
   })
 
+  it('stand in no van, no firm and nothing that is closed: a van\'s load is what stands in the van itself', async () => {
+    const { client } = firm.admin
+    const van = await made<Place>(client, '/api/places', { name: 'Van with a rack', kind: 'van' })
+    const closed = await made<Place>(client, '/api/places', { name: 'Old shed', kind: 'rack' })
+    await client.patch(`/api/places/${closed.id}`, { active: false })
+    const rack = await made<Place>(client, '/api/places', { name: 'Rack D', kind: 'rack', parentId: firm.shop.id })
+    for (const parentId of [van.id, closed.id, firm.reclaimer.placeId]) {
+      const errors = [{ path: 'parentId', message: 'must be in use, and no van and no firm' }]
+      const answers = [
+        await client.post<ProblemDetails>('/api/places', { name: 'Rack E', kind: 'rack', parentId }), await client.patch<ProblemDetails>(`/api/places/${rack.id}`, { parentId }),
+      ]
+      expect(answers.map(({ status, body }) => [status, body.errors])).toEqual([[422, errors], [422, errors]])
+    }
+  })
+
   it('are made by an admin and read by everyone', async () => {
     for (const person of [firm.warehouse, firm.technician, firm.manager, firm.auditor]) {
       expect((await person.client.post('/api/places', { name: 'Den', kind: 'shop' })).status).toBe(403)

@@ -2,10 +2,15 @@ import type { Place } from '~~/utils/contract/places'
 import type { ProblemError } from '~~/utils/contract/problem'
 import type { Directory } from '../directory/directory'
 
-/** Why a place cannot be as told: who or what it names must be there, and no place stands inside itself. */
+/**
+ * Why a place cannot be as told: who or what it names must be there, and no place stands inside itself, a closed place,
+ * a firm's or a van. What a van carries is reckoned from what stands in the van itself.
+ */
 export function placeErrors(from: Directory, place: Pick<Place, 'id' | 'kind' | 'parentId' | 'technicianId'>): ProblemError[] {
   const errors: ProblemError[] = []
-  if (place.parentId !== null && !from.places.has(place.parentId)) errors.push({ path: 'parentId', message: 'no such place' })
+  const parent = place.parentId === null ? null : from.places.get(place.parentId)
+  if (parent === undefined) errors.push({ path: 'parentId', message: 'no such place' })
+  else if (parent !== null && (!parent.active || parent.kind === 'van' || parent.kind === 'firm')) errors.push({ path: 'parentId', message: 'must be in use, and no van and no firm' })
   else if (isInside(from, place.parentId, place.id)) errors.push({ path: 'parentId', message: 'a place cannot stand inside itself' })
   if (place.technicianId !== null) {
     if (!from.people.has(place.technicianId)) errors.push({ path: 'technicianId', message: 'no such person' })
