@@ -90,6 +90,14 @@ describe('which cylinder', () => {
     expect(body.items.filter(({ fit }) => fit === 'refused').map(({ reasons }) => reasons[0])).toContain('holds R-22')
   })
 
+  it('is none in a shop that waits for a shipment', async () => {
+    const waiting = await registered(firm, { contents: { refrigerant: 'R-32', condition: 'clean' }, stamp: { flammableMarked: true }, gross: lb(36) })
+    const ranked = async () => (await ask('refrigerant=R-32&amount=5lb')).body.items.some(({ id }) => id === waiting.id)
+    expect(await ranked()).toBe(true)
+    await made(firm.warehouse.client, '/api/shipments', { toFirmId: firm.reclaimer.id, cylinderIds: [waiting.id] })
+    expect(await ranked()).toBe(false)
+  })
+
   it('is refused an amount of nothing, an unknown refrigerant and a van that is none', async () => {
     expect((await ask('refrigerant=R-32&amount=0lb')).status).toBe(400)
     expect((await ask('refrigerant=R-9999&amount=5lb')).status).toBe(404)

@@ -1,5 +1,6 @@
 import { FITS, REACHES, type Fit, type Reach } from '../contract/ranking'
 import type { CylinderView } from '../custody/cylinderView'
+import type { FindingCode } from '../custody/finding'
 import { mayFill } from '../custody/plan'
 import { FINDING_WORDS, MISSING_WORDS } from '../custody/words'
 
@@ -24,8 +25,9 @@ export type FillPair = [{ cylinder: RankedCylinder, grams: number }, { cylinder:
 export interface Asked { refrigerant: string, grams: number }
 
 /**
- * The cylinders in the order in which they serve: whole amounts first, then what is nearest, in date for long, already
- * holding it, kept for it, evacuated, and of those the one with the smallest room that suffices.
+ * The cylinders in the order in which they serve: whole amounts first, then those about which nothing is to be settled,
+ * what is nearest, in date for long, already holding it, kept for it, evacuated, and of those the one with the smallest
+ * room that suffices.
  *
  * One whose weight is not known has no room to promise: it stands behind those that have, and is to be weighed first.
  */
@@ -34,7 +36,7 @@ export function rankCylinders(candidates: readonly Candidate[], asked: Asked): R
 }
 
 /**
- * The two that together take what no single one does: nearest, in date for long, and with the least room to spare; null
+ * The two that together take what no single one does: with the least to be settled, nearest, in date for long, and with the least room to spare; null
  * where one suffices or no two do.
  */
 export function fillPair(cylinders: readonly RankedCylinder[], asked: Asked): FillPair | null {
@@ -45,7 +47,7 @@ export function fillPair(cylinders: readonly RankedCylinder[], asked: Asked): Fi
     for (const other of parts.slice(at + 1)) {
       const room = one.roomGrams! + other.roomGrams!
       if (room < asked.grams) continue
-      const order = [REACHES.indexOf(one.reach) + REACHES.indexOf(other.reach), Number(isDueSoon(one)) + Number(isDueSoon(other)), room]
+      const order = [Number(isDoubtful(one)) + Number(isDoubtful(other)), REACHES.indexOf(one.reach) + REACHES.indexOf(other.reach), Number(isDueSoon(one)) + Number(isDueSoon(other)), room]
       if (best === null || firstDifference(order, best.order) < 0) best = { pair: [one, other], order }
     }
   }
@@ -58,7 +60,11 @@ function ranked({ view, reach }: Candidate, asked: Asked): RankedCylinder {
   const against = whyNot(view, asked.refrigerant)
   if (against !== null) return { view, reach, fit: 'refused', roomGrams: null, reasons: [against] }
   const { roomGrams } = view.capacity
-  const also = [...(isDueSoon({ view }) ? ['retest soon'] : []), ...(view.ownership === 'customer' ? ['a customer\'s: ask its owner first'] : [])]
+  const also = [
+    ...toSettle(view),
+    ...(isDueSoon({ view }) ? ['retest soon'] : []),
+    ...(view.ownership === 'customer' ? ['a customer\'s: ask its owner first'] : []),
+  ]
   const reasons = [standingOf(view, asked.refrigerant).words, ...also]
   if (roomGrams === null) return { view, reach, fit: 'not-weighed', roomGrams, reasons: ['not weighed: weigh it first', ...reasons] }
   return { view, reach, fit: roomGrams >= asked.grams ? 'whole' : 'part', roomGrams, reasons }
@@ -89,6 +95,20 @@ function standingOf({ contents, stamp }: CylinderView, refrigerant: string): { o
   return contents.evacuated ? { order: 2, words: 'empty, evacuated' } : { order: 3, words: 'empty, not evacuated' }
 }
 
+/** Findings that refuse no fill and are seen to before one all the same. */
+const TO_SETTLE: readonly FindingCode[] = ['code-on-two', 'unsupervised', 'two-owners']
+
+/** What is to be settled before anything goes in, in words. */
+function toSettle({ findings, contents }: CylinderView): string[] {
+  const words = TO_SETTLE.filter(code => findings.some(finding => finding.code === code)).map(code => FINDING_WORDS[code])
+  const isAnothers = contents.owners.length === 1 && contents.owners[0]!.ownerId !== null
+  return isAnothers ? [...words, 'what is in it is not ours: only the same owner\'s may go on top'] : words
+}
+
+function isDoubtful({ view }: Pick<RankedCylinder, 'view'>): boolean {
+  return toSettle(view).length > 0
+}
+
 function isDueSoon({ view }: Pick<RankedCylinder, 'view'>): boolean {
   return view.findings.some(({ code }) => code === 'retest-soon')
 }
@@ -98,7 +118,7 @@ function orderOf(cylinder: RankedCylinder, { refrigerant }: Asked): (number | st
   // Of those that take all of it the smallest room that suffices; of those that take a part the largest.
   const room = roomGrams === null ? 0 : fit === 'part' ? -roomGrams : roomGrams
   return [
-    FITS.indexOf(fit), REACHES.indexOf(reach), Number(isDueSoon(cylinder)),
+    FITS.indexOf(fit), Number(fit !== 'refused' && isDoubtful(cylinder)), REACHES.indexOf(reach), Number(isDueSoon(cylinder)),
     fit === 'refused' ? 0 : standingOf(view, refrigerant).order, room, view.labelCode ?? '', view.id,
   ]
 }

@@ -14,7 +14,7 @@ const MOST_COMPARED = 400
 
 /**
  * Which cylinders take an amount of a refrigerant, from a van: those aboard, those its technician holds elsewhere, and
- * in the shops those that are empty or hold the same.
+ * in the shops those that are empty or hold the same and wait for no shipment and no test.
  *
  * Errors: 404 where there is no such van or refrigerant.
  */
@@ -54,7 +54,8 @@ function vanOf(from: Directory, id: string | undefined, personId: string) {
 async function inTheShops(db: Database, refrigerant: string, personId: string): Promise<{ ids: string[], leftOut: number }> {
   const filter: FleetFilter = {
     sql: `c.place_id IN (SELECT p.id FROM places p WHERE p.kind IN ('shop', 'rack')) AND c.lifecycle = 'in-service'
-      AND (c.nothing_in_it = 1 OR c.refrigerant = ?) AND (c.holder_id IS NULL OR c.holder_id = ?)`,
+      AND (c.nothing_in_it = 1 OR c.refrigerant = ?) AND (c.holder_id IS NULL OR c.holder_id = ?)
+      AND c.id NOT IN (SELECT o.cylinder_id FROM open_lines o)`,
     args: [refrigerant, personId],
   }
   const ids = await idsWhere(db, filter)

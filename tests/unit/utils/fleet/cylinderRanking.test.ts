@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { did, filled, registered, STAMP, viewAfter, type Told } from '~~/tests/helpers/custody'
+import { CUSTOMER, did, filled, registered, STAMP, viewAfter, type Told } from '~~/tests/helpers/custody'
 import type { Reach } from '~~/utils/contract/ranking'
 import { fillPair, rankCylinders, type Candidate } from '~~/utils/fleet/cylinderRanking'
 
@@ -63,6 +63,22 @@ describe('which cylinder takes 4 kg of R-22', () => {
     const burnt = [registered(), filled('R-22', 20, { condition: 'burnt' })]
     expect(ids(ranking(candidate('burnt', burnt), candidate('evacuated', empty)))).toEqual(['evacuated', 'burnt'])
     expect(only(burnt).reasons[0]).toBe('holds burnt R-22')
+  })
+})
+
+describe('a cylinder about which something is to be settled', () => {
+  const anothers = [registered(), filled('R-22', 20, { ownerOfRefrigerantId: CUSTOMER })]
+  const twoOwners = [...anothers, filled('R-22', 21)]
+  const onTwo: Candidate = { view: { ...viewAfter([registered(), did('labelled', { code: '7K3M9Q2TX' })], { codesOnTwo: new Set(['7K3M9Q2TX']), askedRefrigerant: 'R-22' }), id: 'on two' }, reach: 'van' }
+
+  it.each([
+    ['holds another owner\'s', candidate('it', anothers), 'what is in it is not ours: only the same owner\'s may go on top'],
+    ['holds two owners\'', candidate('it', twoOwners), 'two owners'],
+    ['shares its code', onTwo, 'one code on two'],
+  ] as [string, Candidate, string][])('says so, and stands behind one in the shop that needs nothing: it %s', (_, it, why) => {
+    const [first, last] = ranking(it, candidate('shop', at(20), 'shop'))
+    expect(first).toMatchObject({ fit: 'whole', view: { id: 'shop' }, reasons: ['holds R-22'] })
+    expect(last).toMatchObject({ fit: 'whole', reasons: expect.arrayContaining([why]) })
   })
 })
 
