@@ -68,6 +68,15 @@ describe('the contents tag of a cylinder', () => {
     }
   })
 
+  it('bears the day of its fill, however much was recorded after it', async () => {
+    const { id } = await filledWith('R-22')
+    for (const count of [200, 1]) {
+      await posted(firm.technician.client, Array.from({ length: count }, () => ({ ...eventOf(id, 'weighed'), details: { gross: lb(41.5) } })))
+    }
+    const { body } = await firm.technician.client.get<ContentsTagAnswer>(`/api/cylinders/${id}/contents-tag`)
+    expect(body.tag).toMatchObject({ refrigerant: 'R-22', kind: 'Recovered', technician: 'Tina' })
+  })
+
   it('is not printed on labels too small for it', async () => {
     const { id } = await filledWith('R-22')
     expect((await firm.technician.client.get(`/api/cylinders/${id}/contents-tag.pdf?stock=roll-2x1`)).status).toBe(400)

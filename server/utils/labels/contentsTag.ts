@@ -16,16 +16,13 @@ import { problem } from '../http/problem'
 import { labelFonts } from '../pdf/fonts'
 import { labelSheetPdf } from '../pdf/labelSheetPdf'
 
-/** Lines of the log in which the last fill is looked for. */
-const LINES_LOOKED_AT = 200
-
 /** Who asks, when, and where symbols lead. */
 export interface AskingForTag { access: Access, nowMs: number, publicUrl: string }
 
 /** What the contents tag of a cylinder says, or in words why it gets none. */
 export async function contentsTagOf(db: Database, id: string, { access, nowMs, publicUrl }: AskingForTag): Promise<ContentsTagAnswer> {
   const [view, log, { timeZone }] = await Promise.all([
-    cylinderView(db, id, { access, nowMs }), custodyLog(db, id, { limit: LINES_LOOKED_AT }), directory(db),
+    cylinderView(db, id, { access, nowMs }), custodyLog(db, id, { limit: Infinity }), directory(db),
   ])
   if (!view) throw problem(404, 'No such cylinder', 'No cylinder has this code, serial or id.')
   const refusal = noTagBecause(view)
