@@ -1,3 +1,4 @@
+import { dayOfInstant, firstInstantOfDay } from '../../../utils/quantity/day'
 import { addMonths, daysUntilEndOfMonth, monthOfInstant, type Month } from '../../../utils/quantity/month'
 import { retestAt } from '../directory/datedRules'
 import type { Directory } from '../directory/directory'
@@ -12,6 +13,8 @@ export interface DateBounds {
   lastSoonMonth: Month
   /** A cylinder last seen before it (UTC milliseconds) has not been seen for the firm's number of days. */
   notSeenBefore: number
+  /** One last seen before it may be missing. */
+  missingBefore: number
 }
 
 /** The bounds of a day, in the firm's time zone and by the firm's reminders. */
@@ -23,13 +26,21 @@ export function dateBounds(from: Pick<Directory, 'timeZone' | 'retests'>, nowMs:
   return {
     thisMonth,
     lastSoonMonth,
-    notSeenBefore: startOfDay(nowMs, from.timeZone) - (retest.notSeenDays - 1) * MS_PER_DAY,
+    notSeenBefore: startOfDayAgo(retest.notSeenDays - 1, nowMs, from.timeZone),
+    missingBefore: startOfDayAgo(retest.missingDays - 1, nowMs, from.timeZone),
   }
 }
 
-/** The first instant of the calendar day in a time zone. */
-function startOfDay(ms: number, timeZone: string): number {
-  const parts = new Intl.DateTimeFormat('en-US', { timeZone, hour: 'numeric', minute: 'numeric', second: 'numeric', hourCycle: 'h23' }).formatToParts(ms)
-  const part = (type: string) => Number(parts.find(one => one.type === type)?.value ?? 0)
-  return ms - ((part('hour') * 60 + part('minute')) * 60 + part('second')) * 1000 - (ms % 1000)
+/** The first instants of days that were asked for: every page of the fleet asks for the same. */
+const firstInstants = new Map<string, number>()
+const MOST_KEPT = 100
+
+/** The first instant of the calendar day so many days ago; no day need be 24 hours long. */
+function startOfDayAgo(days: number, nowMs: number, timeZone: string): number {
+  const day = new Date(Date.parse(dayOfInstant(nowMs, timeZone)) - days * MS_PER_DAY).toISOString().slice(0, 10)
+  const key = `${day} ${timeZone}`
+  const first = firstInstants.get(key) ?? firstInstantOfDay(day, timeZone)
+  if (firstInstants.size >= MOST_KEPT) firstInstants.clear()
+  firstInstants.set(key, first)
+  return first
 }

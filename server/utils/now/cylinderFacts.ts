@@ -8,7 +8,6 @@ import type { Database } from '../database/database'
 import { retestAt } from '../directory/datedRules'
 import { namesOf, type Directory } from '../directory/directory'
 
-const DAY_MS = 86_400_000
 /** How many get a new label in one go: each is fetched on its own by the labels' page. */
 const MOST_LABELS = 24
 /** Far more than one truck takes. */
@@ -48,7 +47,7 @@ export async function unseenFacts(db: Database, from: Directory, bounds: DateBou
   const filter = findingFilter('not-seen', bounds)
   const { rows } = await db.readClient.execute({
     sql: `SELECT c.holder_id, count(*), sum(CASE WHEN c.last_seen_at < ? THEN 1 ELSE 0 END) FROM cylinders c WHERE ${filter.sql} GROUP BY c.holder_id ORDER BY count(*) DESC, c.holder_id`,
-    args: [bounds.notSeenBefore - (missingDays - notSeenDays) * DAY_MS, ...filter.args],
+    args: [bounds.missingBefore, ...filter.args],
   })
   const { person } = namesOf(from)
   return {
