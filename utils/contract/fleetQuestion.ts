@@ -1,5 +1,5 @@
 /** How long each part of a question to the fleet may be that is free text. */
-export const FLEET_TEXTS = { q: 80, refrigerant: 40, finding: 40, label: 20, cursor: 400 } as const
+export const FLEET_TEXTS = { q: 80, refrigerant: 40, finding: 40, label: 20, cursor: 600 } as const
 
 /** What each part of it takes that is chosen from a list. */
 export const FLEET_CHOICES = {

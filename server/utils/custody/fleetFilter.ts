@@ -1,6 +1,6 @@
 import type { InValue } from '@libsql/client'
 import type { FleetQuery } from '../../../utils/contract/custody'
-import { normaliseLabelCode } from '../../../utils/label/code'
+import { normaliseLabelCode, readAsSymbols } from '../../../utils/label/code'
 import type { DateBounds } from './dateBounds'
 
 /** A condition over `cylinders c`. */
@@ -68,13 +68,13 @@ function either(...filters: FleetFilter[]): FleetFilter {
   return { sql: filters.map(one => `(${one.sql})`).join(' OR '), args: filters.flatMap(one => one.args) }
 }
 
-/** By part of a code, of a serial, of a refrigerant or of a place's name. Codes and serials go by their characters: spaces and hyphens are how they were cut apart. */
+/** By part of a code, of a serial, of a refrigerant or of a place's name. Codes and serials go by their characters: spaces and hyphens are how they were cut apart, and in a code an O is read as 0. */
 function searchFilter(text: string): FleetFilter {
   const words = partOf(text)
   const characters = partOf(text.replace(/[\s-]/g, '') || text)
   return {
     sql: `c.label_code LIKE ? ESCAPE '\\' OR replace(replace(c.serial, ' ', ''), '-', '') LIKE ? ESCAPE '\\' OR c.refrigerant LIKE ? ESCAPE '\\' OR c.place_id IN (SELECT p.id FROM places p WHERE p.name LIKE ? ESCAPE '\\')`,
-    args: [characters, characters, words, words],
+    args: [partOf(readAsSymbols(text) || text), characters, words, words],
   }
 }
 

@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { places } from '../../../drizzle/schema'
 import { dateBounds } from '../../../server/utils/custody/dateBounds'
 import { fleet, fleetPage } from '../../../server/utils/custody/fleet'
+import { fleetCursorText } from '../../../server/utils/custody/fleetCursor'
 import { rowColumns } from '../../../server/utils/custody/listedRows'
 import { statement } from '../../../server/utils/database/database'
 import { directory } from '../../../server/utils/directory/directory'
@@ -130,6 +131,11 @@ describe('the pages of the fleet', () => {
     other.close()
   })
 
+  it('go on behind a place of the longest name', () => {
+    const cursor = fleetCursorText({ isBackward: false, stretch: 0, value: '\u51B7'.repeat(80), id: randomUUID() }, { sort: 'last-event', order: 'desc' })
+    expect(fleetQuery.safeParse({ cursor }).success).toBe(true)
+  })
+
   it('refuse a cursor of another order, and one that nobody gave', async () => {
     const { nextCursor } = await page({ sort: 'net', limit: 10 })
     for (const query of [{ sort: 'due', cursor: nextCursor }, { sort: 'net', order: 'desc', cursor: nextCursor }, { cursor: 'abc' }, { cursor: Buffer.from('["net","asc",1,9,0,"x"]').toString('base64url'), sort: 'net' }]) {
@@ -176,6 +182,12 @@ describe('each filter of the fleet', () => {
     const [first] = (await page({ sort: 'code', limit: 1 })).items
     const spelled = `${first!.labelCode!.slice(0, 3)} ${first!.labelCode!.slice(3).toLowerCase()}`
     expect((await page({ label: spelled })).items.map(row => row.id)).toEqual([first!.id])
+  })
+
+  it('finds a code by a part of it, an O read as 0', async () => {
+    const coded = (await whole({ sort: 'code' })).find(row => row.labelCode?.includes('0'))!
+    const found = await page({ q: ` ${coded.labelCode!.slice(0, 5)}-${coded.labelCode!.slice(5)}`.replaceAll('0', 'o') })
+    expect(found.items.map(row => row.id)).toContain(coded.id)
   })
 
   it('goes together with the others', async () => {
