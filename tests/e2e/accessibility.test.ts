@@ -51,6 +51,12 @@ const SCREENS: Record<string, Screen[]> = {
     { as: 'trainee', at: demo => `/c/${demo.codes.usual}/act/weighed` },
   ],
   'c/[ref]/act/corrected.vue': [{ as: manager, at: demo => `/c/${demo.codes.usual}/act/corrected?event=${demo.event}` }],
+  'c/[ref]/act/countersigned.vue': [{ as: technician, at: demo => `/c/${demo.codes.usual}/act/countersigned` }],
+  'countersign.vue': [
+    { as: technician, at: () => '/countersign' },
+    { as: manager, at: () => '/countersign' },
+    { as: 'trainee', at: () => '/countersign' },
+  ],
   'c/[ref]/working.vue': [
     ...(['usual', 'empty', 'overfilled', 'onTwo'] as const).map(code => ({ as: technician, at: (demo: DemoFleet) => `/c/${demo.codes[code]}/working` })),
     { as: manager, at: demo => `/c/${demo.codes.empty}/working?refrigerant=R-22` },

@@ -15,10 +15,10 @@ export interface PlannedActs {
 }
 
 // What a hand does most often comes first; the primary one is apart.
-const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'inspected', 'quarantined', 'released', 'missing', 'found', 'retired']
+const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'inspected', 'quarantined', 'released', 'missing', 'found', 'retired', 'countersigned']
 
-// Where there is nothing to lift or to find, these are not so much refused as without a meaning.
-const ONLY_WHERE_PLANNED: readonly EventKind[] = ['released', 'missing', 'found']
+// Where there is nothing to lift, to find or to sign, these are not so much refused as without a meaning.
+const ONLY_WHERE_PLANNED: readonly EventKind[] = ['released', 'missing', 'found', 'countersigned']
 
 /** What may be recorded of a cylinder by this person, the likeliest apart, where `verdict` is the kind of its first line. */
 export function plannedActs(view: CylinderView, verdict: StatusKind, access: Access | null): PlannedActs {
@@ -35,6 +35,8 @@ export function plannedActs(view: CylinderView, verdict: StatusKind, access: Acc
   // Nothing more is to be done with what ended its life and has nothing in it.
   const isDone = nothingInIt && ['condemned', 'retired'].includes(view.lifecycle)
   const primary = isDone ? null : planned.find(plan => mayPost(access, plan.kind)) ?? null
+  // No role signs: the entry names who does.
+  const mayRecord = (kind: EventKind) => kind === 'countersigned' ? view.may.includes(kind) : mayPost(access, kind)
   const isMeant = (kind: EventKind) => refusals[kind] === undefined || !ONLY_WHERE_PLANNED.includes(kind)
-  return { primary, others: ACTS.filter(kind => mayPost(access, kind) && kind !== primary?.kind && isMeant(kind)), refusals }
+  return { primary, others: ACTS.filter(kind => mayRecord(kind) && kind !== primary?.kind && isMeant(kind)), refusals }
 }

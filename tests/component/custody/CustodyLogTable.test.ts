@@ -10,7 +10,7 @@ function line(version: number, at: string, more: Partial<LogLine>): LogLine {
   return {
     id: `line-${version}`, seq: version, version, kind: 'weighed', occurredAt: at, effectiveAt: at, recordedAt: at, clockSkewSeconds: 0,
     author: DAYO, postedBy: DAYO, supervisor: null, place: null, note: null, practice: false, confirmed: [], details: {}, names: {},
-    netBeforeGrams: null, netAfterGrams: null, findings: [], correction: null, ...more,
+    netBeforeGrams: null, netAfterGrams: null, findings: [], correction: null, signature: null, ...more,
   }
 }
 
@@ -32,8 +32,27 @@ const LINES = [
 const mount = (more: object = {}) => mountSuspended(CustodyLogTable, {
   props: {
     lines: LINES, unit: 'lb', timeZone: 'America/Phoenix', nowMs: Date.parse('2026-07-20T12:00:00Z'), correctable: new Set(['line-3']),
-    correctTo: '/c/7k3m9q2tx/act/corrected', whole: true, ...more,
+    correctTo: '/c/7k3m9q2tx/act/corrected', readerId: 'r', signTo: '/countersign?cylinder=c', whole: true, ...more,
   },
+})
+
+describe('a trainee\'s entry in the custody log', () => {
+  const entry = (by: string | null) => line(2, '2026-07-14T15:20:00Z', { supervisor: { id: 's', name: 'S. Supervisor' }, signature: { by } })
+  const signature = line(3, '2026-07-15T15:20:00Z', { kind: 'countersigned', details: { eventId: 'line-2' } })
+  const linksOf = async (lines: LogLine[], readerId: string) => [...((await mount({ lines, readerId })).element as HTMLElement).querySelectorAll('a')]
+    .map(link => `${link.textContent?.trim()} > ${link.getAttribute('href')}`)
+
+  it('waits for the signature of the supervisor it names, and of nobody else', async () => {
+    expect(await linksOf([entry(null)], 's')).toContain('Waits for your signature > /countersign?cylinder=c')
+    expect(await linksOf([entry(null)], 'd')).toEqual([])
+  })
+
+  it('leads to the line that signed it, and that line back to it', async () => {
+    const links = await linksOf([signature, entry('line-3')], 's')
+    expect(links).toContain('countersigned by line 3 > #line-3')
+    expect(links).toContain('signs line 2 > #line-2')
+    expect(links.join()).not.toContain('Waits for your signature')
+  })
 })
 
 describe('the custody log as a table', () => {

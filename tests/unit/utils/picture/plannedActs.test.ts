@@ -32,6 +32,14 @@ describe('the likeliest act with a cylinder', () => {
     expect(plannedActs(apart, 'stop', manager).others).not.toContain('found')
   })
 
+  it('is a signature only for the supervisor it waits for', () => {
+    const entry = { ...weighed(12), more: { trainee: true, supervisorId: TECHNICIAN, actorId: 'trainee' } }
+    expect(plannedActs(viewAfter([registered(), entry]), 'ok', access).others).toContain('countersigned')
+    expect(plannedActs(viewAfter([registered()]), 'ok', access).others).not.toContain('countersigned')
+    const manager = { personId: 'm', roles: ['manager' as const], trainee: false }
+    expect(plannedActs(viewAfter([registered(), entry], { access: manager }), 'ok', manager).others).not.toContain('countersigned')
+  })
+
   it('is none once it is condemned and empty, though what happened may still be recorded', () => {
     const condemned = did('retested', { month: '2026-07', method: 'visual', result: 'condemned', requalifierId: REQUALIFIER })
     const { primary, others } = plannedActs(viewAfter([registered(), condemned]), 'stop', access)

@@ -1,0 +1,11 @@
+import { countersigningQuery } from '~~/utils/contract/countersigning'
+import { theCylinder } from '../utils/custody/theCylinder'
+import { waitingSignatures } from '../utils/custody/waitingSignatures'
+import { useDatabase } from '../utils/database/currentDatabase'
+import { apiRoute } from '../utils/http/apiRoute'
+
+/** GET /api/countersigning: what trainees recorded under this person that waits for their signature. Changes nothing. */
+export default apiRoute({ permission: 'events:post', query: countersigningQuery }, async ({ access, query: { cylinder, ...page } }) => {
+  const db = useDatabase()
+  return waitingSignatures(db, access.personId, { ...page, ...(cylinder === undefined ? {} : { cylinderId: await theCylinder(db, cylinder) }) })
+})
