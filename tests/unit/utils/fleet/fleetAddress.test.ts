@@ -38,7 +38,7 @@ describe('a part of a fleet address', () => {
     label: { read: ['K7Q2M4XW'], leftOut: ['K'.repeat(21)] },
     sort: { read: ['net', 'last-event'], leftOut: ['colour'] },
     order: { read: ['desc'], leftOut: ['up'] },
-    cursor: { read: ['c'.repeat(400)], leftOut: ['c'.repeat(401)] },
+    cursor: { read: ['c'.repeat(600)], leftOut: ['c'.repeat(601)] },
   }
 
   it('is tried here for each that the route takes, but for how many', () => {
