@@ -1,4 +1,4 @@
-import { useAttempt } from '~~/composables/useAttempt'
+import { useCsvFile } from '~~/composables/useCsvFile'
 import type { FleetQuery } from '~~/utils/contract/custody'
 import type { FleetLayout } from '~~/utils/contract/fleetLayout'
 import { fleetRequest } from '~~/utils/fleet/fleetAddress'
@@ -6,21 +6,11 @@ import type { MassUnit } from '~~/utils/quantity/mass'
 
 /** Saves the whole list as the table shows it: its filters, order, columns and unit. */
 export function useFleetCsv() {
-  const { busy, problem, attempt } = useAttempt()
+  const { busy, problem, save } = useCsvFile()
 
   function download(query: FleetQuery, { columns }: FleetLayout, unit: MassUnit, day: string) {
-    return attempt(async () => {
-      const { cursor: _page, limit: _length, ...list } = fleetRequest(query)
-      const csv = await $fetch<Blob>('/api/cylinders', {
-        query: { ...list, columns: columns.join(','), unit }, headers: { accept: 'text/csv' }, responseType: 'blob', retry: false,
-      })
-      const link = document.createElement('a')
-      link.href = URL.createObjectURL(csv)
-      link.download = `fleet-${day}.csv`
-      link.click()
-      // The browser has taken it by the next turn.
-      setTimeout(() => URL.revokeObjectURL(link.href))
-    })
+    const { cursor: _page, limit: _length, ...list } = fleetRequest(query)
+    return save('/api/cylinders', { ...list, columns: columns.join(','), unit }, `fleet-${day}.csv`)
   }
 
   return { busy, problem, download }

@@ -31,6 +31,15 @@ const [technician, manager, admin, auditor, warehouse] = ['technician', 'manager
 /** Every page by its file: who would open it, and where it has states that differ, each of them. */
 const SCREENS: Record<string, Screen[]> = {
   'account.vue': [{ as: technician, at: () => '/account' }],
+  'balance/index.vue': [
+    { as: manager, at: () => '/balance?period=this-year' },
+    { as: auditor, at: () => '/balance?from=2026-01-01&to=2026-01-02&owner=own' },
+    { as: technician, at: () => '/balance' },
+  ],
+  'balance/movements.vue': [
+    { as: manager, at: () => '/balance/movements?period=this-year&line=recovered' },
+    { as: auditor, at: () => '/balance/movements?period=this-month&line=found' },
+  ],
   'batch.vue': [
     { as: technician, at: () => '/batch' },
     { as: warehouse, at: () => '/batch?act=unload' },

@@ -12,6 +12,7 @@ const SCREENS: readonly Screen[] = [
   { label: 'Fleet', to: '/fleet', permission: 'fleet:read' },
   { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
   { label: 'Retests', to: '/retests', permission: 'lots:read' },
+  { label: 'Balance', to: '/balance', permission: 'reports:read' },
   { label: 'Refrigerants', to: '/refrigerants', permission: 'refrigerants:read' },
   { label: 'Labels', to: '/labels', permission: 'labels:mint' },
   { label: 'Places', to: '/places', permission: 'places:read' },

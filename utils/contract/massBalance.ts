@@ -1,16 +1,12 @@
 import { z } from 'zod'
 import type { Named } from '../custody/cylinderView'
 import type { EventKind } from '../custody/kinds'
-import { MOVEMENT_CAUSES, type MovementCause } from '../custody/movement'
+import type { MovementCause } from '../custody/movement'
 import { isDay } from '../quantity/day'
+import { BALANCE_LINES, OWN } from './balanceLines'
 import { id, page, type Page } from './parts'
 
 const day = z.string().regex(/^(19|20|21)\d{2}-\d{2}-\d{2}$/, 'must be a day such as 2026-03-31').refine(isDay, 'must be a day that the calendar has')
-
-/** The contractor's own refrigerant, in a query. */
-export const OWN = 'own'
-/** Refrigerant that nobody can name, and mixed, in a query. */
-export const UNKNOWN = 'unknown'
 
 const asked = {
   from: day.optional(),
@@ -27,10 +23,6 @@ const asked = {
  */
 export const massBalanceQuery = z.strictObject(asked)
 export type MassBalanceQuery = z.output<typeof massBalanceQuery>
-
-/** A line of the balance that has movements behind it: a cause, or all that is apart. */
-export const BALANCE_LINES = [...MOVEMENT_CAUSES, 'apart'] as const
-export type BalanceLine = (typeof BALANCE_LINES)[number]
 
 /** GET /api/reports/mass-balance/movements: what is behind one line, newest first. */
 export const balanceMovementsQuery = z.strictObject({ ...asked, ...page, line: z.enum(BALANCE_LINES) })
@@ -94,6 +86,8 @@ export interface MassBalanceAnswer {
 /** One movement behind a line. */
 export interface BalanceMovement {
   eventId: string
+  /** Position among the movements of the same event. */
+  ordinal: number
   at: string
   kind: EventKind
   cylinder: { id: string, labelCode: string | null, serial: string | null }

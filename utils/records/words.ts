@@ -1,4 +1,6 @@
-import type { BalanceLine } from '../contract/massBalance'
+import type { BalanceLine } from '../contract/balanceLines'
+import { formatDay } from '../quantity/instant'
+import type { Days } from './period'
 
 /** A line of the balance as people say it, and what it takes in where that is not plain. */
 export interface LineWords { words: string, note?: string }
@@ -46,4 +48,17 @@ export function ownerWords(owner: { name: string } | null): string {
 /** Whether what no cause explains is more than the scales can tell apart. */
 export function verdictWords({ isMore }: { isMore: boolean }): string {
   return isMore ? 'more than the scales can tell apart' : 'within what the scales can tell apart'
+}
+
+/** The days of a period. @example periodWords({ from: '2026-11-01', to: '2026-12-01' }) // '1 Nov to 1 Dec 2026' */
+export function periodWords({ from, to }: Days): string {
+  const last = `${dayWords(to)} ${to.slice(0, 4)}`
+  if (from === to) return last
+  const isOneYear = from.slice(0, 4) === to.slice(0, 4)
+  return `${dayWords(from)}${isOneYear ? '' : ` ${from.slice(0, 4)}`} to ${last}`
+}
+
+// A day of the calendar is the same in every time zone.
+function dayWords(day: string): string {
+  return formatDay(Date.parse(`${day}T00:00:00Z`), 'UTC')
 }

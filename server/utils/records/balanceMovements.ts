@@ -41,6 +41,7 @@ export async function balanceMovements(db: Database, query: BalanceMovementsQuer
 function movementOf(row: Row, firm: ReturnType<typeof namesOf>['firm']): BalanceMovement {
   return {
     eventId: row.event_id as string,
+    ordinal: row.ordinal as number,
     at: new Date(row.at as number).toISOString(),
     kind: row.kind as EventKind,
     cylinder: { id: row.cylinder_id as string, labelCode: row.label_code as string | null, serial: row.serial as string | null },

@@ -1,4 +1,5 @@
-import { OWN, UNKNOWN, type MassBalanceAnswer, type MassBalanceQuery } from '../../../utils/contract/massBalance'
+import { OWN, UNKNOWN } from '../../../utils/contract/balanceLines'
+import type { MassBalanceAnswer, MassBalanceQuery } from '../../../utils/contract/massBalance'
 import { CATALOGUE } from '../../../utils/refrigerant/allRefrigerants'
 import { asListed } from '../../../utils/refrigerant/designation'
 import type { Span } from '../../../utils/records/books'

@@ -8,9 +8,9 @@ const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => 
 describe('where a person can go', () => {
   it.each<[Role, string[]]>([
     ['technician', ['Now', 'Scan', 'Fleet', 'Refrigerants', 'Places', 'Settings']],
-    ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Settings']],
-    ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Labels', 'Places', 'Log', 'Settings']],
-    ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Refrigerants', 'Places', 'Log', 'Settings']],
+    ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Settings']],
+    ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Log', 'Settings']],
+    ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Places', 'Log', 'Settings']],
     ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Settings']],
   ])('as %s', (role, labels) => {
     expect(words(role)).toEqual(labels)
