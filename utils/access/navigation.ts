@@ -16,7 +16,7 @@ const SCREENS: readonly Screen[] = [
   { label: 'Refrigerants', to: '/refrigerants', permission: 'refrigerants:read' },
   { label: 'Labels', to: '/labels', permission: 'labels:mint' },
   { label: 'Places', to: '/places', permission: 'places:read' },
-  { label: 'Log', to: '/log', permission: 'log:verify' },
+  { label: 'Log', to: '/log', permission: 'log:checkpoint' },
 ]
 
 /** What is set once and looked at now and then: who and what there is, and by which rules. */

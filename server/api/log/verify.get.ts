@@ -10,7 +10,7 @@ import { verifyScope, withProgress } from '../../utils/proof/verifyScope'
  * GET /api/log/verify: computes the log again and compares. Changes nothing but when that was last done, and with what
  * result. With Accept: application/x-ndjson it says how far it has come, line by line, the result in the last.
  */
-export default apiRoute({ permission: 'log:verify', query: verifyQuery }, ({ event, query }) => {
+export default apiRoute({ permission: 'log:verify', query: verifyQuery }, async ({ event, query }) => {
   const steps = verifyScope(useDatabase(), query.scope, Date.now())
   setResponseHeader(event, 'Vary', 'Accept')
   if (!getRequestHeader(event, 'accept')?.includes('application/x-ndjson')) return resultOf(steps)

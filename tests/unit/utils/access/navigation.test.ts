@@ -11,7 +11,7 @@ describe('where a person can go', () => {
     ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Settings']],
     ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Log', 'Settings']],
     ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Places', 'Log', 'Settings']],
-    ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Settings']],
+    ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Log', 'Settings']],
   ])('as %s', (role, labels) => {
     expect(words(role)).toEqual(labels)
   })
