@@ -9,6 +9,7 @@ export function cylinderRow(change: Partial<CylinderRow> = {}): CylinderRow {
     spec: 'DOT-4BA',
     place: { id: '01900000-0000-7000-8000-0000000000a1', name: 'Van 12' },
     holder: null,
+    owner: null,
     refrigerant: 'R-410A',
     condition: 'clean',
     lifecycle: 'in-service',

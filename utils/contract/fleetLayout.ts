@@ -1,6 +1,6 @@
 /** The columns that the fleet's table can show, as they stand until somebody chooses: the code always names its row. */
 export const FLEET_COLUMNS = [
-  'code', 'verdict', 'refrigerant', 'net', 'rule', 'room', 'stop', 'retest', 'place', 'last', 'serial', 'spec', 'condition', 'lifecycle', 'tare', 'holder',
+  'code', 'verdict', 'refrigerant', 'net', 'rule', 'room', 'stop', 'retest', 'place', 'last', 'serial', 'spec', 'condition', 'lifecycle', 'tare', 'holder', 'owner',
 ] as const
 export type FleetColumn = (typeof FLEET_COLUMNS)[number]
 

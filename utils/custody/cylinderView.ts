@@ -107,6 +107,8 @@ export interface CylinderRow {
   spec: string | null
   place: Named | null
   holder: Named | null
+  /** null: no other than the contractor is named. */
+  owner: Named | null
   refrigerant: string | null
   condition: Condition
   lifecycle: Lifecycle

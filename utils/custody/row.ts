@@ -120,6 +120,7 @@ export function rowToday(cached: CachedRow, day: RowDay): CylinderRow {
     spec: cached.spec,
     place: cached.placeId === null ? null : day.names.place(cached.placeId),
     holder: cached.holderId === null ? null : day.names.person(cached.holderId),
+    owner: cached.ownerId === null ? null : day.names.firm(cached.ownerId),
     refrigerant: cached.refrigerant,
     condition: cached.condition,
     lifecycle: cached.lifecycle,

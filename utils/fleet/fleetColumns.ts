@@ -29,6 +29,7 @@ export const FLEET_COLUMN_WORDS: Record<FleetColumn, ColumnWords> = {
   lifecycle: { head: 'Stage of life', sort: 'lifecycle' },
   tare: { head: 'TW', sort: null, isMass: true },
   holder: { head: 'Holder', sort: null },
+  owner: { head: 'Owner', sort: null },
 }
 
 /** The head of a column as it stands over figures in one unit. */

@@ -53,6 +53,7 @@ function cells(row: CylinderRow, column: FleetColumn, unit: CsvUnit, now: number
     case 'lifecycle': return [LIFECYCLE_WORDS[row.lifecycle]]
     case 'tare': return [figure(row.tareWeightGrams, unit, 'nearest')]
     case 'holder': return [row.holder?.name ?? null]
+    case 'owner': return [row.owner?.name ?? null]
   }
 }
 

@@ -40,6 +40,13 @@ describe('the fleet', () => {
     expect(cellsOf(wrapper.element, '7K3 M9Q 2TX')).toContain('Usable')
   })
 
+  it('names another owner, and says where none is named', async () => {
+    const theirs = cylinderRow({ id: 'theirs', labelCode: '0YHP9KRRT', owner: { id: 'd', name: 'Dunmarrow Dairy' } })
+    const wrapper = await mount([theirs, cylinderRow()], { columns: ['code', 'verdict', 'owner'] })
+    expect(cellsOf(wrapper.element, '0YH P9K RRT')).toContain('Dunmarrow Dairy')
+    expect(cellsOf(wrapper.element, '7K3 M9Q 2TX')).toContain('no other')
+  })
+
   // 10251 g are 22.6 lb; 17272 g are 38.08 lb; 29746.6 g are 65.58 lb, and 7021 g are 15.48 lb: the last three go down.
   it('writes weights under a head that names the unit, limits rounded down', async () => {
     const wrapper = await mount([cylinderRow()])

@@ -33,7 +33,7 @@ describe('the unit of weights', () => {
 
   it.each([['field', FieldFrame, {}], ['desk', DeskFrame, { items, person }]])('is chosen in the band of every screen of the %s, and kept with the person', async (_name, Frame, props) => {
     useSessionStore().set(MEMBER)
-    const wrapper = await mountSuspended(Frame as typeof PlainFrame, { props })
+    const wrapper = await mountSuspended(Frame as unknown as typeof PlainFrame, { props })
     const choice = byRole(wrapper.element, 'combobox', 'Weights in') as HTMLSelectElement
     expect(choice.value).toBe('lb')
     choice.value = 'kg'

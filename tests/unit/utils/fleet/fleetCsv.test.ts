@@ -27,6 +27,13 @@ describe('the fleet as a table of values', () => {
     expect(fleetCsvRow(empty, ['refrigerant', 'net', 'rule', 'room', 'stop'], 'lb', NOW)).toEqual(['none', 0, null, 'by refrigerant', null, null])
   })
 
+  it('names the owner where it is another, and leaves the cell empty where none is named', () => {
+    expect(fleetCsvHeads(['holder', 'owner'], 'lb')).toEqual(['Holder', 'Owner'])
+    const dairy = { id: 'd', name: 'Dunmarrow Dairy' }
+    expect(fleetCsvRow(cylinderRow({ owner: dairy }), ['holder', 'owner'], 'lb', NOW)).toEqual([null, 'Dunmarrow Dairy'])
+    expect(fleetCsvRow(cylinderRow(), ['owner'], 'lb', NOW)).toEqual([null])
+  })
+
   it('keeps a text from being reckoned by a spreadsheet', () => {
     for (const serial of ['=1+1', '+44', '-5', '@A1', '\tx', '\uFF1D1']) {
       expect(fleetCsvRow(cylinderRow({ serial }), ['serial'], 'lb', NOW)).toEqual([`'${serial}`])
