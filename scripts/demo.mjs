@@ -31,7 +31,7 @@ if (!existsSync(SERVER) || newestChange(SERVER) < Math.max(...SOURCES.map(newest
 }
 
 mkdirSync('data', { recursive: true })
-if (process.argv.includes('--fresh')) for (const end of ['', '-wal', '-shm']) rmSync(DATABASE + end, { force: true })
+if (process.argv.includes('--fresh')) for (const end of ['', '-wal', '-shm', '.checkpoints']) rmSync(DATABASE + end, { force: true })
 if (!existsSync(SECRET)) writeFileSync(SECRET, randomBytes(32).toString('hex'), { mode: 0o600 })
 
 const port = process.env.PORT ?? '3000'
