@@ -21,22 +21,22 @@ export function useRegistration() {
   const problem = ref<ProblemDetails | null>(null)
   let sealed: { key: string, events: CustodyEvent[], code: string | null } | null = null
 
-  async function seal(details: RegistrationDetails, placeId: string, label: Label) {
+  async function seal(details: RegistrationDetails, placeId: string, label: Label, photoIds: string[]) {
     const code = label.choice === 'new'
       ? (await api.post<MintAnswer>('/api/labels', { count: 1 })).codes[0]!
       : label.choice === 'blank' ? label.code : null
     const common = { cylinderId: uuidv7(), occurredAt: deviceNow(), placeId }
-    const events: CustodyEvent[] = [posting.seal<'registered'>({ ...common, kind: 'registered', details }) as CustodyEvent]
+    const events: CustodyEvent[] = [posting.seal<'registered'>({ ...common, kind: 'registered', ...(photoIds.length > 0 && { photoIds }), details }) as CustodyEvent]
     if (code !== null) events.push(posting.seal<'labelled'>({ ...common, kind: 'labelled', details: { code } }) as CustodyEvent)
-    return { key: JSON.stringify([details, placeId, label]), events, code }
+    return { key: JSON.stringify([details, placeId, label, photoIds]), events, code }
   }
 
-  async function register(details: RegistrationDetails, placeId: string, label: Label): Promise<Registered | null> {
+  async function register(details: RegistrationDetails, placeId: string, label: Label, photoIds: string[]): Promise<Registered | null> {
     busy.value = true
     problem.value = null
     try {
-      const key = JSON.stringify([details, placeId, label])
-      if (sealed?.key !== key) sealed = await seal(details, placeId, label)
+      const key = JSON.stringify([details, placeId, label, photoIds])
+      if (sealed?.key !== key) sealed = await seal(details, placeId, label, photoIds)
       const { events, code } = sealed
       const { results } = await api.post<EventsAnswer>('/api/events', { events, deviceNow: deviceNow() })
       if (results[0]?.outcome === 'refused') throw new ApiError(results[0].problem ?? problemOf(undefined))

@@ -12,8 +12,9 @@ const PURE: Record<string, readonly string[]> = {
   capacity: ['quantity', 'refrigerant', 'requalification'],
   recovery: ['quantity', 'refrigerant', 'address'],
   custody: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'access', 'label', 'registration'],
+  photo: ['quantity'],
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
-  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'custody', 'access', 'label'],
+  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label'],
 }
 
 /** What else in utils/ draws, prints and plans: all of the above. */

@@ -105,6 +105,15 @@ describe('the photos of an event', () => {
     }] }])
   })
 
+  it('are also those that prove the end of a cylinder', async () => {
+    const proof = photo({ subject: 'other' })
+    const event = sent(cylinderId, 'retired', { reason: 'scrapped', proof: { photoIds: [proof.id] } }, { expects: 1 })
+    expect((await record(log.db, log.manager, [event]))[0]).toMatchObject({ outcome: 'accepted' })
+    expect(await photos()).toEqual([{ eventId: event.id, photos: [], onTheWay: 1 }])
+    await keep(proof, log.manager)
+    expect(await photos()).toMatchObject([{ eventId: event.id, onTheWay: 0, photos: [{ id: proof.id }] }])
+  })
+
   it('are none of a person who is not its author, though they guessed the id', async () => {
     const upload = photo()
     const eventId = await weighed({ photoIds: [upload.id] })
