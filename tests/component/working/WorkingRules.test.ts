@@ -41,3 +41,14 @@ it('says why a rule has none', async () => {
   expect(wrapper.text()).toContain('no figure')
   expect(wrapper.text()).toContain('the table does not name R-410A.')
 })
+
+it('folds the sum of a rule that does not govern away on a phone, until it is asked for', async () => {
+  const wrapper = await mounted([{ ...WATER, rule: 'liquid-77F', limitGrams: 17_000 }, WATER], 'water-weight')
+  const [first, second] = wrapper.findAll('li')
+  expect(first!.find('button').exists()).toBe(false)
+  const folded = () => second!.find('table').element.parentElement!.classList.contains('hidden')
+  const key = second!.find('button')
+  expect([folded(), key.attributes('aria-expanded'), key.text()]).toEqual([true, 'false', 'Show its sum: liquid at 77 °F'])
+  await key.trigger('click')
+  expect([folded(), key.attributes('aria-expanded'), key.text()]).toEqual([false, 'true', 'Hide its sum: liquid at 77 °F'])
+})
