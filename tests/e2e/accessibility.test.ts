@@ -146,6 +146,22 @@ const PRESSED: Record<string, Screen> = {
     await page.getByText('With heat').click()
     await page.getByRole('slider').waitFor()
   } },
+  'the columns of the fleet': { as: manager, at: () => '/fleet', after: async (page) => {
+    await page.getByRole('button', { name: 'Columns' }).click()
+    await page.getByRole('dialog').waitFor()
+  } },
+  'a view of the fleet that is being named': { as: manager, at: () => '/fleet?refrigerant=R-22', after: async (page) => {
+    await page.getByRole('button', { name: 'Save this view' }).click()
+    await page.getByLabel('Name of the view').waitFor()
+  } },
+  'cylinders of the fleet that are chosen': { as: warehouse, at: () => '/fleet', after: async (page) => {
+    await page.getByLabel(/^Choose (?!all)/).first().check()
+    await page.getByText('1 chosen').waitFor()
+  } },
+  'the sum of a rule that does not govern': { as: technician, at: demo => `/c/${demo.codes.usual}/working`, after: async (page) => {
+    const sums = page.getByRole('button', { name: /^Show its sum/ })
+    if (await sums.first().isVisible()) await sums.first().click()
+  } },
   'what a fill rule would change': { as: manager, at: () => '/rules', after: async (page) => {
     await page.getByRole('button', { name: 'Set a fill rule' }).click()
     await page.getByLabel('Liquid at 131 °F, at most').fill('75')

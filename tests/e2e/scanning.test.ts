@@ -7,7 +7,7 @@ import type { CylinderView } from '../../utils/custody/cylinderView'
 import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser, listenForErrors } from '../helpers/browser'
 import type { TestClient } from '../helpers/client'
-import { eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
+import { cylinderNow, eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
 import { FRENCH, GERMAN, handScanner } from '../helpers/handScanner'
 import { startServer, type TestServer } from '../helpers/server'
 import { lb } from '../helpers/stamps'
@@ -108,6 +108,24 @@ describe('loading a van with twelve from a rack', () => {
     await again.getByRole('button', { name: 'Take it back' }).click()
     await again.getByText('All 11 taken back.').waitFor()
     expect(await atPlace(rack)).toHaveLength(12)
+    expect(said).toEqual([])
+    await context.close()
+  })
+
+  it('checks against the very cylinders that it was asked for, by code and by id', async () => {
+    const [one, two] = await onTheRack(2)
+    const { page, context, said } = await onPage(shop.warehouse.client, `/batch?act=move&to=${shop.shop.id}&expect=${one!.labelCode},${two!.id}`)
+    const scanner = await handScanner(page)
+    await page.getByText('Expected 2: 0 scanned, 2 missing').waitFor()
+    await scanner.scan(addressOf(stray.labelCode!), { enter: true })
+    await page.getByRole('alert').filter({ hasText: 'It is not on the list.' }).waitFor()
+    await lineOf(page, stray).getByRole('button', { name: 'Take it off' }).click()
+    await scanner.scan(addressOf(two!.labelCode!), { enter: true })
+    await page.getByText('Expected 2: 1 scanned, 1 missing').waitFor()
+    expect(await page.getByRole('list', { name: 'Missing' }).innerText()).toContain(formatLabelCode(one!.labelCode!))
+    await page.getByRole('button', { name: 'Move 1 to North shop' }).click()
+    await page.getByText('1 moved to North shop').waitFor()
+    expect(await Promise.all([one!, two!].map(async ({ id }) => (await cylinderNow(shop.manager.client, id)).place?.id))).toEqual([rack.id, shop.shop.id])
     expect(said).toEqual([])
     await context.close()
   })
