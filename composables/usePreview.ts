@@ -51,14 +51,14 @@ export function usePreview(input: { content: () => PreviewContent | null, at: ()
       return
     }
     try {
-      const [{ catalogue, preview }, policy, { events, codesOnTwo }] = await Promise.all([load(), rules.load(), foldInput(content.cylinderId)])
+      const [{ catalogue, preview }, policy, known] = await Promise.all([load(), rules.load(), foldInput(content.cylinderId)])
       if (mine !== turn) return
       const at = input.at()
       const draft = {
         ...content, id: DRAFT_ID, deviceId: '', deviceSeq: Number.MAX_SAFE_INTEGER,
         occurredAt: at === '' ? deviceNow() : deviceNow(new Date(at).getTime()),
       } as AnyCustodyEvent
-      findings.value = preview(events, draft, viewContext(policy, catalogue, session.access, codesOnTwo)).findings
+      findings.value = preview(known.events, draft, viewContext(policy, catalogue, session.access, known)).findings
     }
     catch {
       if (mine === turn) findings.value = []
@@ -76,7 +76,7 @@ export function usePreview(input: { content: () => PreviewContent | null, at: ()
   return { findings, asks }
 }
 
-function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], access: ViewContext['access'], codesOnTwo: string[]): ViewContext {
+function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], access: ViewContext['access'], { codesOnTwo, otherHalves }: FoldInput): ViewContext {
   const nowMs = Date.now()
   const policyAt = (ms: number) => policy.fillPolicies.findLast(entry => entry.fromAt <= ms)?.policy ?? DEFAULT_FILL_POLICY
   const retestAt = (ms: number) => policy.retests.findLast(entry => entry.fromAt <= ms)?.retest ?? DEFAULT_RETEST_SETTINGS
@@ -92,6 +92,9 @@ function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], 
     retestAt,
     access,
     codesOnTwo: new Set(codesOnTwo),
+    otherHalves,
+    // Only the findings are shown, not where it stands.
+    placeOfFirm: () => null,
     // Nobody reads names here: only the findings are shown.
     names: { place: itself, person: itself, firm: itself },
   }

@@ -3,6 +3,7 @@ import { damageInWords } from '~~/utils/custody/damage'
 import type { LogLine } from '~~/utils/custody/cylinderView'
 import type { EventKind } from '~~/utils/custody/kinds'
 import { CONDITION_WORDS, KIND_WORDS } from '~~/utils/custody/words'
+import { cylinderPath } from '~~/utils/fleet/cylinderPath'
 import { formatLabelCode } from '~~/utils/label/code'
 import { formatBarometer, formatGauge, formatThermometer } from '~~/utils/quantity/gauge'
 import { formatReading, type MassReading } from '~~/utils/quantity/mass'
@@ -15,6 +16,8 @@ export interface LineWords {
   /** Where to, whom to, or which firm; null where nothing moved. */
   to: string | null
   gross: MassReading | null
+  /** The other cylinder of what happened between two, and its page; null where there is none. */
+  other: { text: string, to: string | null } | null
 }
 
 type Names = Record<string, string>
@@ -56,6 +59,15 @@ const LINES: { [K in EventKind]: Say<K> } = {
     what: `${PURPOSES[purpose]}${phase ? `, ${phase === 'vapour' ? 'vapor' : phase}` : ''}`,
     gross: grossAfter,
   }),
+  'transferred': ({ direction, refrigerant, condition, grossBefore, grossAfter, ownerOfRefrigerantId }, names) => ({
+    what: [
+      `${refrigerant ?? 'refrigerant not known,'} went ${direction}`,
+      condition !== 'clean' && CONDITION_WORDS[condition],
+      ownerOfRefrigerantId && `of ${named(ownerOfRefrigerantId, names)}`,
+      grossBefore && `from ${formatReading(grossBefore)}`,
+    ].filter(Boolean).join(', '),
+    gross: grossAfter,
+  }),
   'checked': details => ({ what: checkInWords(details) }),
   'emptied': ({ grossAfter, vacuum }) => ({ what: vacuum ? vacuumInWords(vacuum) : 'a heel is left', gross: grossAfter ?? null }),
   'lost': ({ grossAfter, cause, unavoidable }) => ({
@@ -78,6 +90,10 @@ const LINES: { [K in EventKind]: Say<K> } = {
     gross: theirGross ?? null,
   }),
   'returned': ({ fromFirmId, gross }, names) => ({ what: `from ${named(fromFirmId, names)}`, gross: gross ?? null }),
+  'exchanged': ({ direction, firmId }, names) => ({
+    what: direction === 'out' ? `went to ${named(firmId, names)}` : `came from ${named(firmId, names)}`,
+    to: direction === 'out' ? named(firmId, names) : null,
+  }),
   'sent-for-test': () => ({ what: 'left with a test lot' }),
   'retested': ({ month, method, result, requalifierId, suffix, newTare }, names) => ({
     what: `${result}, ${method}, ${formatMonth(month)}${suffix ? `, marked ${suffix}` : ''}, by ${named(requalifierId, names)}${newTare ? `, new tare ${formatReading(newTare)}` : ''}`,
@@ -90,7 +106,16 @@ const LINES: { [K in EventKind]: Say<K> } = {
 export function lineWords(line: LogLine): LineWords {
   const say = LINES[line.kind] as Say<EventKind> | undefined
   const words = say?.(line.details as DetailsOf<EventKind>, line.names) ?? { what: line.kind }
-  return { what: words.what ?? '', to: words.to ?? line.place?.name ?? null, gross: words.gross ?? null }
+  return { what: words.what ?? '', to: words.to ?? line.place?.name ?? null, gross: words.gross ?? null, other: otherCylinder(line) }
+}
+
+function otherCylinder({ kind, details, otherCylinder: cylinder }: LogLine): LineWords['other'] {
+  if (kind !== 'transferred' && kind !== 'exchanged') return null
+  const { direction } = details as DetailsOf<typeof kind>
+  const before = kind === 'transferred' ? (direction === 'out' ? 'into ' : 'out of ') : 'in exchange for '
+  if (!cylinder) return { text: `${before}a cylinder that is not in the log`, to: null }
+  const { labelCode, serial } = cylinder
+  return { text: `${before}${labelCode ? formatLabelCode(labelCode) : serial === null ? 'a cylinder without a label' : `SN ${serial}`}`, to: cylinderPath(cylinder) }
 }
 
 /** The word of a line's kind. */

@@ -5,6 +5,7 @@ import type { FindingCode } from '~~/utils/custody/finding'
 import { fold, type FoldContext, type FoldResult } from '~~/utils/custody/fold'
 import type { EventKind } from '~~/utils/custody/kinds'
 import type { DetailsOf } from '~~/utils/custody/schema'
+import { NOTHING_SAID } from '~~/utils/custody/saidByOthers'
 import { view, type ViewContext } from '~~/utils/custody/view'
 import type { MassReading } from '~~/utils/quantity/mass'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
@@ -19,6 +20,7 @@ export const SHOP = '0198f000-0000-7000-8000-0000000000a1'
 export const VAN = '0198f000-0000-7000-8000-0000000000a2'
 export const RECLAIMER_PLACE = '0198f000-0000-7000-8000-0000000000a3'
 export const TEST_PLACE = '0198f000-0000-7000-8000-0000000000a4'
+export const SUPPLIER_PLACE = '0198f000-0000-7000-8000-0000000000a5'
 export const TECHNICIAN = '0198f000-0000-7000-8000-0000000000b1'
 export const SUPERVISOR = '0198f000-0000-7000-8000-0000000000b2'
 export const CUSTOMER = '0198f000-0000-7000-8000-0000000000f1'
@@ -120,6 +122,7 @@ export const FOLD_CONTEXT: FoldContext = {
   policyAt: () => DEFAULT_FILL_POLICY,
   timeZone: 'America/Chicago',
   retestAt: () => ({ intervalMonths: null, ownerChoices: [] }),
+  placeOfFirm: firmId => firmId === SUPPLIER ? SUPPLIER_PLACE : null,
 }
 
 export const VIEW_CONTEXT: ViewContext = {
@@ -128,7 +131,7 @@ export const VIEW_CONTEXT: ViewContext = {
   policyNow: DEFAULT_FILL_POLICY,
   retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] },
   access: { personId: TECHNICIAN, roles: ['technician'], trainee: false },
-  codesOnTwo: new Set(),
+  ...NOTHING_SAID,
   names: {
     place: id => ({ id, name: `place ${id.slice(-2)}` }),
     person: id => ({ id, name: `person ${id.slice(-2)}` }),

@@ -24,7 +24,7 @@ const RAISED: FindingCode[] = [
   'overfill', 'nearly-full', 'pressure-class', 'spec-not-for-gas', 'not-refillable', 'not-marked-flammable', 'toxic', 'second-refrigerant',
   'unknown-onto-known', 'retest-overdue', 'retest-soon', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'weight-not-known',
   'not-registered', 'registered-twice', 'old-tare-on-label', 'code-on-two', 'unsigned', 'unsupervised', 'not-seen', 'two-owners', 'weigh-again',
-  'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full', 'quarantined', 'found-by-use',
+  'half-transfer', 'transfer-unbalanced', 'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full', 'quarantined', 'found-by-use',
 ]
 
 let folder: string

@@ -1,6 +1,7 @@
 import { z } from 'zod'
 import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
+import type { Half } from '../custody/half'
 import type { ProblemDetails } from './problem'
 import { FLEET_CHOICES, FLEET_TEXTS } from './fleetQuestion'
 import { fleetColumns } from './fleetViews'
@@ -76,6 +77,7 @@ export interface CustodyLogAnswer extends Page<LogLine> {
 export interface FoldInput {
   events: AnyRecordedEvent[]
   codesOnTwo: string[]
+  otherHalves: Half[]
 }
 
 export type { CylinderRow, CylinderView, LogLine }

@@ -148,6 +148,8 @@ export interface LogLine {
   details: unknown
   /** Names of the ids inside details, by id. */
   names: Record<string, string>
+  /** The other cylinder of what happened between two; null where there is none, or where the log knows none by that id. */
+  otherCylinder: { id: string, labelCode: string | null, serial: string | null } | null
   netBeforeGrams: number | null
   netAfterGrams: number | null
   findings: Finding[]

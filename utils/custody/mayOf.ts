@@ -33,9 +33,11 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
     case 'found': return view.lifecycle === 'missing' ? null : 'It is not missing.'
     case 'retired': return whyNotRetired(view)
     case 'filled': return reason(mayFill(view))
-    case 'drawn': return reason(mayDraw(view))
+    case 'drawn':
+    case 'transferred': return reason(mayDraw(view))
     case 'checked': return view.contents.nothingInIt ? 'By the log nothing is in it.' : reason(mayCheck(view))
     case 'moved':
+    case 'exchanged':
     case 'handed-over': return reason(mayTake(view))
     default: return null
   }

@@ -2,7 +2,7 @@ import type { Access, Role } from '../access/roles'
 import { EVENT_KINDS, type EventKind } from './kinds'
 
 const TECHNICIAN = [
-  'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost', 'labelled', 'returned',
+  'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'transferred', 'exchanged', 'checked', 'emptied', 'lost', 'labelled', 'returned',
   'inspected', 'quarantined', 'missing', 'found',
 ] as const satisfies readonly EventKind[]
 

@@ -13,18 +13,18 @@ import { retestUnknown } from './findings/retest'
 import type { EventKind } from './kinds'
 import { lifecycleOf } from './lifecycle'
 import { retestOf } from './retestOf'
+import type { SaidByOthers } from './saidByOthers'
 import type { CylinderState } from './state'
 import { stateFindings } from './stateFindings'
 import type { Names } from './view'
 
 /** What the columns of a cylinder depend on beside its events; the date is not among it, only the rule in force. */
-export interface RowContext {
+export interface RowContext extends SaidByOthers {
   policyNow: FillPolicy
   policyAt: (ms: number) => FillPolicy
   catalogue: Catalogue
   timeZone: string
   retest: RetestRules
-  codesOnTwo?: ReadonlySet<string>
 }
 
 /** The columns that lists filter and sort by. */
@@ -74,7 +74,7 @@ export function cacheRow(state: CylinderState, context: RowContext): RowColumns 
   const undated = retest.state === 'unknown' || retest.state === 'not-required' ? retest : { ...retest, state: 'in-date' as const }
   const capacity = capacityOf(state, undated, context)
   const findings = [
-    ...stateFindings(state, capacity.fillLimitGrams, { ...context, codesOnTwo: context.codesOnTwo ?? new Set() }),
+    ...stateFindings(state, capacity.fillLimitGrams, context),
     ...(retest.state === 'unknown' && endOf(state) === null ? [retestUnknown()] : []),
   ].sort(urgencyOrder)
   const codes = [...new Set(findings.map(({ code }) => code))]

@@ -1,5 +1,6 @@
 import type { Stamp } from '../capacity/types'
 import type { Condition, Hold, Ownership, RetestMark } from './cylinderView'
+import type { Half } from './half'
 import type { EventKind } from './kinds'
 
 /** How much of the contents belongs to whom; null = the contractor itself. While the net is unknown only the proportion counts. */
@@ -30,6 +31,9 @@ export interface ContentsState {
   backFromReclaim: boolean
 }
 
+/** Where a cylinder may be that has gone from us. */
+export type AwayAt = 'at-reclaim' | 'at-test' | 'given-away'
+
 /** What keeps the cylinder from use, and since when. Several events for one hold add their reasons: a text, or what an outside look found. */
 export interface StateHold { hold: Hold, since: number, reasons: string[] }
 
@@ -59,7 +63,8 @@ export interface CylinderState {
   labels: { code: string, firstAt: number, lastAt: number, replacedAt?: number }[]
   placeId: string | null
   holderId: string | null
-  away: { at: 'at-reclaim' | 'at-test', since: number, listId: string } | null
+  /** Where it has gone, and the shipment, the lot or the exchange it went with. */
+  away: { at: AwayAt, since: number, listId: string } | null
   /** Nobody knows where it is; `lastSeen` in words. */
   missing: { since: number, lastSeen: string | null } | null
   condemnedAt: number | null
@@ -74,6 +79,8 @@ export interface CylinderState {
   lastPutInAt: number | null
   overfilledAt: number | null
   standing: { code: StandingCode, since: number }[]
+  /** Its halves of what happened between two cylinders, in order of effect. */
+  halves: Half[]
   /** Supervisors who have not signed all that trainees recorded under them. */
   waitsForSignatureOf: string[]
   firstEventAt: number | null
@@ -125,6 +132,7 @@ export function initialState(id: string): CylinderState {
     lastPutInAt: null,
     overfilledAt: null,
     standing: [],
+    halves: [],
     waitsForSignatureOf: [],
     firstEventAt: null,
     lastEventAt: null,

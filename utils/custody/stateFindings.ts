@@ -5,19 +5,20 @@ import { endOf } from './endOf'
 import type { Finding } from './finding'
 import { holdFinding } from './findings/holds'
 import { twoOwners } from './findings/mixing'
+import { pairFindings } from './findings/pairs'
 import { codeOnTwo, notRegistered } from './findings/record'
 import { condemned, oldTareOnLabel } from './findings/retest'
 import { standingFinding } from './findings/standing'
 import { nearlyFull, overfill, weightNotKnown } from './findings/weight'
+import type { SaidByOthers } from './saidByOthers'
 import { judgedLimitGrams, judgedNetGrams, overfillGrams } from './judgedLimit'
 import type { CylinderState, StandingCode } from './state'
 
 /** What the standing findings depend on beside the cylinder; nothing of it is the date. */
-export interface FindingContext {
+export interface FindingContext extends SaidByOthers {
   policyNow: FillPolicy
   policyAt: (ms: number) => FillPolicy
   catalogue: Catalogue
-  codesOnTwo: ReadonlySet<string>
 }
 
 const OF_CONTENTS: readonly StandingCode[] = ['second-refrigerant', 'unknown-onto-known', 'after-end']
@@ -38,7 +39,7 @@ export function stateFindings(state: CylinderState, fillLimitGrams: number | nul
     ...ofContents,
     ...state.holds.map(holdFinding),
     ...state.standing.filter(({ code }) => !OF_CONTENTS.includes(code)).map(standingFinding),
-    ...ofRecord(state, context.codesOnTwo),
+    ...ofRecord(state, context),
   ]
 }
 
@@ -63,13 +64,14 @@ function ofFit({ stamp, contents, filledHere }: CylinderState, catalogue: Catalo
     .map(finding => ({ ...finding, since: null }))
 }
 
-function ofRecord(state: CylinderState, codesOnTwo: ReadonlySet<string>): Finding[] {
+function ofRecord(state: CylinderState, { codesOnTwo, otherHalves }: SaidByOthers): Finding[] {
   const { registeredAt, firstEventAt, labels, labelCode, tare } = state
   const label = labels.find(({ code }) => code === labelCode)
   const isLabelOld = tare !== null && tare.isWeighedAnew && label !== undefined && label.lastAt < tare.since
   return [
     ...(registeredAt === null ? [notRegistered(firstEventAt)] : []),
     ...labels.filter(({ code }) => codesOnTwo.has(code)).map(({ code }) => codeOnTwo(code)),
+    ...pairFindings(state.halves, otherHalves),
     ...(isLabelOld ? [oldTareOnLabel(tare.since)] : []),
   ]
 }

@@ -10,9 +10,11 @@ import { dateFindings } from './dateFindings'
 import { endOf } from './endOf'
 import { urgencyOrder } from './findings/order'
 import { retestUnknown } from './findings/retest'
+import type { FoldContext } from './fold'
 import { lifecycleOf } from './lifecycle'
 import { mayOf } from './mayOf'
 import { retestOf } from './retestOf'
+import type { SaidByOthers } from './saidByOthers'
 import type { CylinderState } from './state'
 import { stateFindings } from './stateFindings'
 
@@ -24,7 +26,7 @@ export interface Names {
 }
 
 /** What a view takes from outside the log: today, the firm's rules, and who is asking. */
-export interface ViewContext {
+export interface ViewContext extends SaidByOthers {
   nowMs: number
   timeZone: string
   policyNow: FillPolicy
@@ -34,10 +36,10 @@ export interface ViewContext {
   retest: RetestRules & { soonDays: number, notSeenDays: number, missingDays: number }
   /** What the owner had settled about tests at an instant. */
   retestAt: (ms: number) => RetestRules
+  placeOfFirm: FoldContext['placeOfFirm']
   askedRefrigerant?: string | null
   /** null shows the cylinder to nobody in particular: nothing may be done. */
   access: Access | null
-  codesOnTwo: ReadonlySet<string>
   names: Names
 }
 

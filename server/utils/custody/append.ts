@@ -112,7 +112,7 @@ async function commitGroup(db: Database, part: Waiting[], commit: Database['writ
     if (written.length === 0) return judged.map(one => one.results)
 
     const statements = logStatements(written, newestBefore?.id ?? null)
-    statements.push(...cacheStatements(now))
+    statements.push(...await cacheStatements(db, now))
     const dispatch = part[0]?.posting.dispatch
     if (dispatch) statements.push(...dispatch.alongside(everyOf(written)))
     const answers = await commit(statements)

@@ -1,37 +1,77 @@
 import type { InStatement, InValue } from '@libsql/client'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold, type FoldResult } from '../../../utils/custody/fold'
+import type { Half } from '../../../utils/custody/half'
 import type { Movement } from '../../../utils/custody/movement'
 import { cacheRow } from '../../../utils/custody/row'
 import type { CylinderState } from '../../../utils/custody/state'
 import type { StockChange } from '../../../utils/custody/stockChange'
+import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
+import { cylinderStates } from './cylinderViews'
 import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
 import type { LogRow } from './logRow'
 import type { Guard } from './posting'
+import { saidByOthers } from './saidByOthers'
 
 const NO_GUARD: Guard = { sql: '1', args: [] }
+
+/** A cylinder that a group of events touched, as its log makes it now. */
+interface Touched { cylinderId: string, added: readonly LogRow[], folded: FoldResult, guard: Guard }
 
 /**
  * What the caches must hold after a group of events. Every statement stands under the condition that the last event of
  * its cylinder was written: the loser of a race changes no cache.
  */
-export function cacheStatements(group: Group): InStatement[] {
-  return group.touched().flatMap(({ cylinderId, events, added }) => {
-    const last = added.at(-1)!
-    const guard: Guard = {
-      sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)',
-      args: [last.id, last.cylinder_id, last.version, last.hash],
-    }
-    const folded = fold(events, foldContext(group.directory))
-    const context = rowContext(group.directory, last.recorded_at, group.codesOnTwo(cylinderId))
+export async function cacheStatements(db: Database, group: Group): Promise<InStatement[]> {
+  const touched = group.touched().map(({ cylinderId, events, added }): Touched => ({
+    cylinderId, added, folded: fold(events, foldContext(group.directory)), guard: wasWritten(added.at(-1)!),
+  }))
+  const halvesNow = new Map(touched.map(({ cylinderId, folded }) => [cylinderId, folded.state.halves]))
+  const statements = touched.flatMap(({ cylinderId, added, folded, guard }) => {
+    const { own, naming } = group.halvesBefore(cylinderId)
+    const said = { codesOnTwo: group.codesOnTwo(cylinderId), otherHalves: withThoseOf(halvesNow, naming, cylinderId) }
+    const context = rowContext(group.directory, added.at(-1)!.recorded_at, said)
     return [
       upsertCylinder(cylinderId, folded.state, context, guard),
       ...bookStatements(cylinderId, folded, added, guard),
       ...claimStatements(cylinderId, folded, added, guard),
+      ...(areSame(own, folded.state.halves) ? [] : halfStatements(cylinderId, folded, guard)),
     ]
   })
+  return [...statements, ...await otherRows(db, group, touched, halvesNow)]
+}
+
+/** The rows of cylinders outside the group that a changed half names, or named before: what it says shows on both. */
+async function otherRows(db: Database, group: Group, touched: readonly Touched[], halvesNow: ReadonlyMap<string, Half[]>): Promise<InStatement[]> {
+  const changed = touched.filter(({ cylinderId, folded }) => !areSame(group.halvesBefore(cylinderId).own, folded.state.halves))
+  const named = changed.flatMap(({ cylinderId, folded }) => [...group.halvesBefore(cylinderId).own, ...folded.state.halves].map(({ otherId }) => otherId))
+  const ids = [...new Set(named)].filter(id => !halvesNow.has(id))
+  if (ids.length === 0) return []
+  const { guard, added } = changed.at(-1)!
+  const [states, said] = await Promise.all([cylinderStates(db, ids), saidByOthers(db, ids)])
+  return [...states].map(([id, state]) => {
+    const otherHalves = withThoseOf(halvesNow, said(id).otherHalves, id)
+    return refreshedRow(id, state, rowContext(group.directory, added.at(-1)!.recorded_at, { ...said(id), otherHalves }), guard)
+  })
+}
+
+/** The halves that name a cylinder, with those of the touched cylinders as they are now. */
+function withThoseOf(halvesNow: ReadonlyMap<string, Half[]>, before: readonly Half[], cylinderId: string): Half[] {
+  const now = [...halvesNow.values()].flat().filter(({ otherId }) => otherId === cylinderId)
+  return [...before.filter(half => !halvesNow.has(half.cylinderId)), ...now]
+}
+
+function areSame(before: readonly Half[], now: readonly Half[]): boolean {
+  return JSON.stringify(before) === JSON.stringify(now)
+}
+
+function wasWritten(row: LogRow): Guard {
+  return {
+    sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)',
+    args: [row.id, row.cylinder_id, row.version, row.hash],
+  }
 }
 
 /** The caches of one cylinder, made from its whole log and under no condition: for a rebuild. */
@@ -41,6 +81,7 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
     upsertCylinder(cylinderId, folded.state, rowContext(from, nowMs), NO_GUARD),
     ...bookStatements(cylinderId, folded, null, NO_GUARD),
     ...claimStatements(cylinderId, folded, null, NO_GUARD),
+    ...halfStatements(cylinderId, folded, NO_GUARD),
   ]
 }
 
@@ -48,10 +89,10 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
  * The row of a cylinder from its cached state, where something outside its events has changed. A row that another
  * process has meanwhile made of a later event stays.
  */
-export function refreshedRow(cylinderId: string, state: CylinderState, context: RuledRowContext): InStatement {
+export function refreshedRow(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard = NO_GUARD): InStatement {
   return upsertCylinder(cylinderId, state, context, {
-    sql: 'EXISTS (SELECT 1 FROM cylinders WHERE id = ? AND version = ?)',
-    args: [cylinderId, state.version],
+    sql: `EXISTS (SELECT 1 FROM cylinders WHERE id = ? AND version = ?) AND ${guard.sql}`,
+    args: [cylinderId, state.version, ...guard.args],
   })
 }
 
@@ -125,6 +166,16 @@ function claimStatements(cylinderId: string, { labelClaims }: FoldResult, added:
     ...labelClaims.map(claim => ({
       sql: `INSERT INTO label_claims (event_id, code, cylinder_id, effective_at, device_id, device_seq) SELECT ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
       args: [claim.eventId, claim.code, cylinderId, claim.effectiveAt, claim.deviceId, claim.deviceSeq, ...guard.args],
+    })),
+  ]
+}
+
+function halfStatements(cylinderId: string, { state }: FoldResult, guard: Guard): InStatement[] {
+  return [
+    { sql: `DELETE FROM halves WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
+    ...state.halves.map((half, position) => ({
+      sql: `INSERT INTO halves (event_id, cylinder_id, other_id, position, half) SELECT ?, ?, ?, ?, ? WHERE ${guard.sql}`,
+      args: [half.eventId, cylinderId, half.otherId, position, JSON.stringify(half), ...guard.args],
     })),
   ]
 }

@@ -2,12 +2,13 @@ import type { CustodyLogAnswer, FoldInput } from '../../../utils/contract/custod
 import type { LogLine, Named } from '../../../utils/custody/cylinderView'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold } from '../../../utils/custody/fold'
+import { otherCylinderOf } from '../../../utils/custody/half'
 import type { Database } from '../database/database'
 import { directory, namesOf } from '../directory/directory'
 import { foreignCursor } from '../http/cursor'
-import { codesOnTwo } from './findCylinder'
 import { foldContext } from './foldContext'
 import { logRow, recordedEvent, SELECT_LOG } from './logRow'
+import { saidByOthers } from './saidByOthers'
 
 /** A cylinder's recorded events, in the order of recording. */
 export async function recordedEvents(db: Database, cylinderId: string): Promise<AnyRecordedEvent[]> {
@@ -42,6 +43,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
       confirmed: event.confirmed,
       details: event.details,
       names: namesInside(event.details as Record<string, unknown>, names),
+      otherCylinder: null,
       netBeforeGrams: step.before.netGrams,
       netAfterGrams: step.after.netGrams,
       findings: step.findings,
@@ -51,7 +53,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
   }).reverse()
   const start = page.cursor === undefined ? 0 : lines.findIndex(line => line.id === page.cursor) + 1
   if (page.cursor !== undefined && start === 0) throw foreignCursor()
-  const items = lines.slice(start, start + page.limit)
+  const items = await withOtherCylinders(db, lines.slice(start, start + page.limit))
   return {
     items,
     nextCursor: start + page.limit < lines.length ? items.at(-1)?.id ?? null : null,
@@ -60,10 +62,21 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
   }
 }
 
+/** The lines, each with how the other cylinder is known where it has one. */
+async function withOtherCylinders(db: Database, lines: LogLine[]): Promise<LogLine[]> {
+  const otherIds = lines.map(line => otherCylinderOf(line.kind, line.details))
+  const ids = [...new Set(otherIds.filter(id => id !== null))]
+  if (ids.length === 0) return lines
+  const { rows } = await db.readClient.execute({ sql: `SELECT id, label_code, serial FROM cylinders WHERE id IN (${ids.map(() => '?').join(', ')})`, args: ids })
+  const known = new Map(rows.map(row => [row[0] as string, { id: row[0] as string, labelCode: row[1] as string | null, serial: row[2] as string | null }]))
+  return lines.map((line, index) => ({ ...line, otherCylinder: known.get(otherIds[index] ?? '') ?? null }))
+}
+
 /** What a browser needs to judge a draft event by the same rules as the server. */
 export async function foldInput(db: Database, cylinderId: string): Promise<FoldInput> {
-  const [events, shared] = await Promise.all([recordedEvents(db, cylinderId), codesOnTwo(db, [cylinderId])])
-  return { events, codesOnTwo: [...shared.get(cylinderId) ?? []] }
+  const [events, said] = await Promise.all([recordedEvents(db, cylinderId), saidByOthers(db, [cylinderId])])
+  const { codesOnTwo, otherHalves } = said(cylinderId)
+  return { events, codesOnTwo: [...codesOnTwo], otherHalves: [...otherHalves] }
 }
 
 /** The instant in the offset in which its author wrote it. */

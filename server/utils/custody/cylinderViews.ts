@@ -4,8 +4,8 @@ import type { CylinderState } from '../../../utils/custody/state'
 import { view } from '../../../utils/custody/view'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
-import { codesOnTwo } from './findCylinder'
 import { viewContext } from './foldContext'
+import { saidByOthers } from './saidByOthers'
 
 /** Who asks, when, and of which refrigerant where nothing is in the cylinder. */
 export interface Asking { access: Access | null, nowMs: number, askedRefrigerant?: string | null }
@@ -13,11 +13,11 @@ export interface Asking { access: Access | null, nowMs: number, askedRefrigerant
 /** What is to be said of cylinders today, in the order asked; ids without a cylinder are left out. */
 export async function cylinderViews(db: Database, ids: readonly string[], asking: Asking): Promise<CylinderView[]> {
   if (ids.length === 0) return []
-  const [from, shared, states] = await Promise.all([directory(db), codesOnTwo(db, ids), cylinderStates(db, ids)])
+  const [from, said, states] = await Promise.all([directory(db), saidByOthers(db, ids), cylinderStates(db, ids)])
   return ids.flatMap((id) => {
     const state = states.get(id)
     if (!state) return []
-    return [view(state, viewContext(from, { ...asking, codesOnTwo: shared.get(id) }))]
+    return [view(state, viewContext(from, { ...asking, saidByOthers: said(id) }))]
   })
 }
 

@@ -50,10 +50,3 @@ export function sharedCodes(rows: readonly Row[]): Map<string, Set<string>> {
   }
   return answer
 }
-
-/** The codes among these cylinders' that more than one cylinder claims, by cylinder. */
-export async function codesOnTwo(db: Database, cylinderIds: readonly string[]): Promise<Map<string, Set<string>>> {
-  if (cylinderIds.length === 0) return new Map()
-  const result = await db.readClient.execute({ sql: `${SHARED_CODES} (${cylinderIds.map(() => '?').join(', ')})`, args: [...cylinderIds] })
-  return sharedCodes(result.rows)
-}

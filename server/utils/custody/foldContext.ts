@@ -1,5 +1,6 @@
 import type { FoldContext } from '../../../utils/custody/fold'
 import type { RowContext } from '../../../utils/custody/row'
+import { NOTHING_SAID, type SaidByOthers } from '../../../utils/custody/saidByOthers'
 import type { ViewContext } from '../../../utils/custody/view'
 import type { RetestSettings } from '../../../utils/requalification/retestSettings'
 import type { Access } from '../../../utils/access/roles'
@@ -16,6 +17,7 @@ export function foldContext(from: Directory): FoldContext {
     policyAt: at => fillPolicyAt(from.fillPolicies, at),
     retestAt: at => retestAt(from.retests, at),
     timeZone: from.timeZone,
+    placeOfFirm: id => from.placeOfFirm.get(id) ?? null,
   }
 }
 
@@ -23,7 +25,7 @@ export function foldContext(from: Directory): FoldContext {
 export function viewContext(from: Directory, more: {
   nowMs: number
   access: Access | null
-  codesOnTwo?: ReadonlySet<string>
+  saidByOthers?: SaidByOthers
   askedRefrigerant?: string | null
 }): ViewContext {
   return {
@@ -33,7 +35,7 @@ export function viewContext(from: Directory, more: {
     retest: retestAt(from.retests, more.nowMs),
     askedRefrigerant: more.askedRefrigerant ? asListed(more.askedRefrigerant, CATALOGUE.refrigerants.keys()) : null,
     access: more.access,
-    codesOnTwo: more.codesOnTwo ?? new Set(),
+    ...(more.saidByOthers ?? NOTHING_SAID),
     names: namesOf(from),
   }
 }
@@ -45,7 +47,7 @@ export interface RuledRowContext extends RowContext {
 }
 
 /** What the cached columns take from outside the log: the rules in force, but not the day. */
-export function rowContext(from: Directory, nowMs: number, codesOnTwo: ReadonlySet<string> = new Set()): RuledRowContext {
+export function rowContext(from: Directory, nowMs: number, saidByOthers: SaidByOthers = NOTHING_SAID): RuledRowContext {
   return {
     ruledBy: rulesInForceKey(from, nowMs),
     policyNow: fillPolicyAt(from.fillPolicies, nowMs),
@@ -53,6 +55,6 @@ export function rowContext(from: Directory, nowMs: number, codesOnTwo: ReadonlyS
     catalogue: CATALOGUE,
     timeZone: from.timeZone,
     retest: retestAt(from.retests, nowMs),
-    codesOnTwo,
+    ...saidByOthers,
   }
 }

@@ -1,8 +1,10 @@
 import type { InStatement } from '@libsql/client'
 import type { AnyCustodyEvent, AnyRecordedEvent } from '../../../utils/custody/event'
+import type { Half } from '../../../utils/custody/half'
 import { directory, type Directory } from '../directory/directory'
 import type { Database } from '../database/database'
 import { SHARED_CODES, sharedCodes } from './findCylinder'
+import { halvesFrom, halvesOf } from './saidByOthers'
 import { unknownIds, type KnownIds } from './judge'
 import { logRow, recordedEvent, SELECT_LOG, type LogRow } from './logRow'
 import type { ChainHead } from './sealedRow'
@@ -20,6 +22,8 @@ export interface Group {
   add: (row: LogRow, event: AnyRecordedEvent) => void
   /** Codes of a cylinder that another one claims too. */
   codesOnTwo: (cylinderId: string) => ReadonlySet<string>
+  /** The halves of a cylinder, and those of others that name it, as they stood before. */
+  halvesBefore: (cylinderId: string) => { own: Half[], naming: Half[] }
   /** Cylinders that an accepted event has touched, with the lines added to each. */
   touched: () => { cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] }[]
   mark: () => number
@@ -34,13 +38,15 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
   const ids = [...new Set(events.map(event => event.id))]
   const cylinderIds = [...new Set(events.map(event => event.cylinderId))]
   const named = idsIn(events)
-  const [newestRows, storedRows, logRows, shipmentRows, lotRows, sharedRows] = await db.readClient.batch([
+  const [newestRows, storedRows, logRows, shipmentRows, lotRows, sharedRows, ownHalves, namingHalves] = await db.readClient.batch([
     'SELECT seq, id FROM custody_events ORDER BY seq DESC LIMIT 1',
     inList('SELECT id, content_hash, seq, version FROM custody_events WHERE id IN', ids),
     inList(`${SELECT_LOG} WHERE cylinder_id IN`, cylinderIds, 'ORDER BY cylinder_id, version'),
     inList('SELECT id FROM shipments WHERE id IN', named.shipments),
     inList('SELECT id FROM test_lots WHERE id IN', named.testLots),
     inList(SHARED_CODES, cylinderIds),
+    halvesOf('cylinder_id', cylinderIds),
+    halvesOf('other_id', cylinderIds),
   ], 'read')
 
   const newestRow = newestRows?.rows[0]
@@ -58,6 +64,8 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
   const shipments = new Set((shipmentRows?.rows ?? []).map(row => row[0] as string))
   const testLots = new Set((lotRows?.rows ?? []).map(row => row[0] as string))
   const shared = sharedCodes(sharedRows?.rows ?? [])
+  const own = halvesFrom(ownHalves?.rows ?? [])
+  const naming = halvesFrom(namingHalves?.rows ?? [])
   const { from, known } = await knownIds(db, events, shipments, testLots)
 
   const added: { row: LogRow, event: AnyRecordedEvent }[] = []
@@ -68,6 +76,9 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
     directory: from,
     known,
     codesOnTwo: cylinderId => shared.get(cylinderId) ?? NONE,
+    halvesBefore: cylinderId => ({
+      own: own.filter(half => half.cylinderId === cylinderId), naming: naming.filter(half => half.otherId === cylinderId),
+    }),
     stored(eventId) {
       const now = added.find(one => one.row.id === eventId)
       return now ? { contentHash: now.row.content_hash, seq: now.row.seq, version: now.row.version } : stored.get(eventId)

@@ -5,8 +5,8 @@ import type { CylinderState } from '../../../utils/custody/state'
 import type { Database } from '../database/database'
 import { retestAt, rulesInForceKey } from '../directory/datedRules'
 import { namesOf, type Directory } from '../directory/directory'
-import { codesOnTwo } from './findCylinder'
 import { rowContext } from './foldContext'
+import { saidByOthers } from './saidByOthers'
 
 /** A row of the fleet as lists show it, and the version of its cylinder. */
 export interface ListedRow { row: CylinderRow, version: number }
@@ -34,12 +34,12 @@ export function rowColumns(from: Directory, nowMs: number): { sql: string, args:
  */
 export async function listedRows(db: Database, rows: readonly Row[], from: Directory, nowMs: number): Promise<ListedRow[]> {
   const behind = rows.filter(row => row['state_behind'] !== null).map(row => row['id'] as string)
-  const shared = await codesOnTwo(db, behind)
+  const said = await saidByOthers(db, behind)
   const today = { nowMs, timeZone: from.timeZone, retest: retestAt(from.retests, nowMs), names: namesOf(from) }
   return rows.map((row) => {
     const cached = row['state_behind'] === null
       ? cachedRow(row)
-      : madeAnew(row['state_behind'] as string, rowContext(from, nowMs, shared.get(row['id'] as string)))
+      : madeAnew(row['state_behind'] as string, rowContext(from, nowMs, said(row['id'] as string)))
     return { row: rowToday(cached, today), version: cached.version }
   })
 }

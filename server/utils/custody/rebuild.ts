@@ -4,7 +4,7 @@ import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { rebuiltCache } from './caches'
 import { logRow, recordedEvent, SELECT_LOG } from './logRow'
-import { sharedCodeRows } from './sharedCodeRows'
+import { refreshedRows } from './refreshedRows'
 
 const PAGE_ROWS = 1_000
 
@@ -15,7 +15,7 @@ const PAGE_ROWS = 1_000
  */
 export async function rebuildCaches(db: Database, nowMs: number): Promise<{ cylinders: number, events: number }> {
   const from = await directory(db, true)
-  await db.write(['DELETE FROM movements', 'DELETE FROM stock_changes', 'DELETE FROM label_claims', 'DELETE FROM cylinders'])
+  await db.write(['DELETE FROM movements', 'DELETE FROM stock_changes', 'DELETE FROM label_claims', 'DELETE FROM halves', 'DELETE FROM cylinders'])
   let cylinders = 0
   let events = 0
   let waiting: InStatement[] = []
@@ -44,7 +44,14 @@ export async function rebuildCaches(db: Database, nowMs: number): Promise<{ cyli
     waiting = []
     if (result.rows.length < PAGE_ROWS) break
   }
-  const shared = await db.readClient.execute('SELECT DISTINCT a.cylinder_id FROM label_claims a JOIN label_claims b ON a.code = b.code AND a.cylinder_id <> b.cylinder_id')
-  if (shared.rows.length > 0) await db.write(await sharedCodeRows(db, shared.rows.map(row => row[0] as string), nowMs))
+  await refreshBothSides(db, nowMs)
   return { cylinders, events }
+}
+
+/** Once every log was read, the rows that rest on what other cylinders' logs say: one code on two, and halves of a pair. */
+async function refreshBothSides(db: Database, nowMs: number): Promise<void> {
+  const both = await db.readClient.execute(`SELECT a.cylinder_id FROM label_claims a JOIN label_claims b ON a.code = b.code AND a.cylinder_id <> b.cylinder_id
+    UNION SELECT cylinder_id FROM halves`)
+  const ids = both.rows.map(row => row[0] as string)
+  for (let from = 0; from < ids.length; from += PAGE_ROWS) await db.write(await refreshedRows(db, ids.slice(from, from + PAGE_ROWS), nowMs))
 }

@@ -5,8 +5,8 @@ import type { Database } from '../database/database'
 import { nextBeginning, rulesInForceKey } from '../directory/datedRules'
 import { directory } from '../directory/directory'
 import { refreshedRow } from './caches'
-import { codesOnTwo } from './findCylinder'
 import { rowContext } from './foldContext'
+import { saidByOthers } from './saidByOthers'
 
 /** Rows made anew in one turn of the writer's queue: what is posted meanwhile waits for no more than these. */
 const ROWS_AT_ONCE = 100
@@ -74,10 +74,10 @@ async function followAll(db: Database, clock: () => number): Promise<number> {
 async function followSome(db: Database, commit: Database['write'], nowMs: number): Promise<number> {
   const from = await directory(db)
   const found = await db.readClient.execute(behind('id, state', rulesInForceKey(from, nowMs), ROWS_AT_ONCE))
-  const shared = await codesOnTwo(db, found.rows.map(row => row[0] as string))
+  const said = await saidByOthers(db, found.rows.map(row => row[0] as string))
   await commit(found.rows.map((row) => {
     const state = JSON.parse(row[1] as string) as CylinderState
-    return refreshedRow(state.id, state, rowContext(from, nowMs, shared.get(state.id)))
+    return refreshedRow(state.id, state, rowContext(from, nowMs, said(state.id)))
   }))
   return found.rows.length
 }

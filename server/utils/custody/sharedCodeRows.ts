@@ -1,10 +1,6 @@
 import type { InStatement } from '@libsql/client'
 import type { Database } from '../database/database'
-import { directory } from '../directory/directory'
-import { refreshedRow } from './caches'
-import { cylinderStates } from './cylinderViews'
-import { codesOnTwo } from './findCylinder'
-import { rowContext } from './foldContext'
+import { refreshedRows } from './refreshedRows'
 
 /**
  * The rows of every cylinder that shares a code with one of these, as they must read once a label was stuck on or taken
@@ -17,7 +13,5 @@ export async function sharedCodeRows(db: Database, cylinderIds: readonly string[
       UNION SELECT id FROM cylinders WHERE finding_codes LIKE '% code-on-two %'`,
     args: [...cylinderIds],
   })
-  const ids = others.rows.map(row => row[0] as string)
-  const [from, shared, states] = await Promise.all([directory(db), codesOnTwo(db, ids), cylinderStates(db, ids)])
-  return [...states].map(([id, state]) => refreshedRow(id, state, rowContext(from, nowMs, shared.get(id))))
+  return refreshedRows(db, others.rows.map(row => row[0] as string), nowMs)
 }

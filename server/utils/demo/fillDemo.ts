@@ -8,6 +8,7 @@ import { castOf } from './cast'
 import { playChecks } from './checks'
 import { playCare, playSignatures } from './care'
 import { playIncidents } from './incidents'
+import { playPairs } from './pairs'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { seededRandom } from './random'
 import { recordScript } from './record'
@@ -40,6 +41,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   playIncidents(stage)
   playCare(stage)
   playChecks(stage)
+  playPairs(stage)
   playSignatures(stage)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(listTables(db, stage))

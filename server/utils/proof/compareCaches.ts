@@ -2,10 +2,11 @@ import { setImmediate as nextTurn } from 'node:timers/promises'
 import type { InValue, Row } from '@libsql/client'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold, type FoldResult } from '../../../utils/custody/fold'
+import type { SaidByOthers } from '../../../utils/custody/saidByOthers'
 import { cylinderColumns } from '../custody/caches'
-import { codesOnTwo } from '../custody/findCylinder'
 import { foldContext, rowContext } from '../custody/foldContext'
 import { LOG_COLUMNS, logRow, recordedEvent } from '../custody/logRow'
+import { saidByOthers } from '../custody/saidByOthers'
 import type { Database } from '../database/database'
 import { rulesInForceKey } from '../directory/datedRules'
 import { directory, type Directory } from '../directory/directory'
@@ -19,7 +20,7 @@ const STOCK_COLUMNS = ['event_id', 'ordinal', 'refrigerant', 'owner_id', 'grams'
 const CLAIM_COLUMNS = ['event_id', 'code', 'effective_at', 'device_id', 'device_seq'] as const
 
 /** What one cylinder has in the log and in everything that is made from it, read at one instant. */
-interface Cylinder { id: string, events: AnyRecordedEvent[] | null, row: Row | null, movements: Row[], stock: Row[], claims: Row[] }
+interface Cylinder { id: string, events: AnyRecordedEvent[] | null, row: Row | null, movements: Row[], stock: Row[], claims: Row[], halves: Row[] }
 
 /**
  * Folds each cylinder again and compares: its row in the fleet, its movements, what it changed in stock, its labels.
@@ -35,9 +36,9 @@ export async function* comparingCaches(db: Database, now: number): VerifySteps {
   let cylinders = 0
   for (let after: string | null = ''; after !== null;) {
     const page: Cylinder[] = await cylindersAfter(db, after)
-    const shared = await codesOnTwo(db, page.map(({ id }) => id))
+    const said = await saidByOthers(db, page.map(({ id }) => id))
     for (const cylinder of page) {
-      compare(cylinder, from, now, shared.get(cylinder.id), damage)
+      compare(cylinder, from, now, said(cylinder.id), damage)
       checked += cylinder.events?.length ?? 0
       cylinders++
     }
@@ -52,12 +53,13 @@ export async function* comparingCaches(db: Database, now: number): VerifySteps {
   }
 }
 
-function compare({ id, events, row, movements, stock, claims }: Cylinder, from: Directory, now: number, shared: ReadonlySet<string> | undefined, damage: DamageList): void {
+function compare({ id, events, row, movements, stock, claims, halves }: Cylinder, from: Directory, now: number, said: SaidByOthers, damage: DamageList): void {
   if (events === null) return damage.add('unreadable', { cylinderId: id })
   if (events.length === 0) return damage.add('row-differs', { cylinderId: id })
   const folded = fold(events, foldContext(from))
   const isBehind = row !== null && row.ruled_by !== rulesInForceKey(from, now)
-  if (!isBehind && !isSameRow(row, cylinderColumns(id, folded.state, rowContext(from, now, shared)))) damage.add('row-differs', { cylinderId: id })
+  if (!isBehind && !isSameRow(row, cylinderColumns(id, folded.state, rowContext(from, now, said)))) damage.add('row-differs', { cylinderId: id })
+  if (halves.map(one => one.half).join('\n') !== folded.state.halves.map(one => JSON.stringify(one)).join('\n')) damage.add('row-differs', { cylinderId: id })
   if (!isSameTable(movements, MOVEMENT_COLUMNS, folded.movements) || !isSameTable(stock, STOCK_COLUMNS, folded.stockChanges)) {
     damage.add('movements-differ', { cylinderId: id })
   }
@@ -87,18 +89,19 @@ async function cylindersAfter(db: Database, after: string): Promise<Cylinder[]> 
   if (ids.length === 0) return []
   const range = [ids[0]![0] as string, ids.at(-1)![0] as string]
   // One transaction: what is recorded meanwhile is in all of these, or in none.
-  const [log, fleet, movements, stock, claims] = await db.readClient.batch([
+  const [log, fleet, movements, stock, claims, halves] = await db.readClient.batch([
     { sql: `SELECT ${LOG_COLUMNS.join(', ')} FROM custody_events WHERE cylinder_id BETWEEN ? AND ? ORDER BY cylinder_id, version`, args: range },
     { sql: 'SELECT * FROM cylinders WHERE id BETWEEN ? AND ?', args: range },
     { sql: `SELECT cylinder_id, ${MOVEMENT_COLUMNS.join(', ')} FROM movements WHERE cylinder_id BETWEEN ? AND ?`, args: range },
     { sql: `SELECT cylinder_id, ${STOCK_COLUMNS.join(', ')} FROM stock_changes WHERE cylinder_id BETWEEN ? AND ?`, args: range },
     { sql: `SELECT cylinder_id, ${CLAIM_COLUMNS.join(', ')} FROM label_claims WHERE cylinder_id BETWEEN ? AND ?`, args: range },
+    { sql: 'SELECT cylinder_id, half FROM halves WHERE cylinder_id BETWEEN ? AND ? ORDER BY cylinder_id, position', args: range },
   ], 'read')
   const rowOf = new Map(fleet!.rows.map(row => [row.id as string, row]))
-  const [lines, moved, held, claimed] = [log!, movements!, stock!, claims!].map(({ rows }) => byCylinder(rows))
+  const [lines, moved, held, claimed, halved] = [log!, movements!, stock!, claims!, halves!].map(({ rows }) => byCylinder(rows))
   return ids.map(row => row[0] as string).map(id => ({
     id, events: eventsOf(lines!.get(id) ?? []), row: rowOf.get(id) ?? null,
-    movements: moved!.get(id) ?? [], stock: held!.get(id) ?? [], claims: claimed!.get(id) ?? [],
+    movements: moved!.get(id) ?? [], stock: held!.get(id) ?? [], claims: claimed!.get(id) ?? [], halves: halved!.get(id) ?? [],
   }))
 }
 

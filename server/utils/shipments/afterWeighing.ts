@@ -8,8 +8,8 @@ import { preview } from '~~/utils/custody/preview'
 import { view } from '~~/utils/custody/view'
 import { readingGrams } from '~~/utils/quantity/mass'
 import { recordedEvents } from '../custody/custodyLog'
-import { codesOnTwo } from '../custody/findCylinder'
 import { viewContext } from '../custody/foldContext'
+import { saidByOthers } from '../custody/saidByOthers'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 
@@ -20,10 +20,10 @@ type Line = ShipmentDispatch['lines'][number]
 
 /** Each line judged as its cylinder stands once the weight just read is known. */
 export async function afterWeighing(db: Database, lines: readonly Line[], access: Access, nowMs: number): Promise<WeighedLine[]> {
-  const [from, shared] = await Promise.all([directory(db), codesOnTwo(db, lines.map(line => line.cylinderId))])
+  const [from, said] = await Promise.all([directory(db), saidByOthers(db, lines.map(line => line.cylinderId))])
   return Promise.all(lines.map(async (line) => {
     const { cylinderId, gross } = line
-    const context = viewContext(from, { access, nowMs, codesOnTwo: shared.get(cylinderId) })
+    const context = viewContext(from, { access, nowMs, saidByOthers: said(cylinderId) })
     const events = await recordedEvents(db, cylinderId)
     const before = view(fold(events, context).state, context)
     const { view: weighed } = preview(events, weighing(line, nowMs), context)

@@ -28,7 +28,7 @@ let isDown = false
 const list = (items: unknown[]) => () => ({ items, nextCursor: null, total: items.length })
 for (const ref of [CODE.toLowerCase(), CYLINDER]) {
   registerEndpoint(`/api/cylinders/${ref}`, () => CYLINDER_VIEW)
-  registerEndpoint(`/api/cylinders/${ref}/fold`, () => ({ events: EVENTS, codesOnTwo: [] }))
+  registerEndpoint(`/api/cylinders/${ref}/fold`, () => ({ events: EVENTS, codesOnTwo: [], otherHalves: [] }))
   registerEndpoint(`/api/cylinders/${ref}/events`, list([]))
 }
 registerEndpoint('/api/places', list([]))

@@ -9,7 +9,7 @@ const DAYO = { id: 'd', name: 'D. Author' }
 function line(version: number, at: string, more: Partial<LogLine>): LogLine {
   return {
     id: `line-${version}`, seq: version, version, kind: 'weighed', occurredAt: at, effectiveAt: at, recordedAt: at, clockSkewSeconds: 0,
-    author: DAYO, postedBy: DAYO, supervisor: null, place: null, note: null, practice: false, confirmed: [], details: {}, names: {},
+    author: DAYO, postedBy: DAYO, supervisor: null, place: null, note: null, practice: false, confirmed: [], details: {}, names: {}, otherCylinder: null,
     netBeforeGrams: null, netAfterGrams: null, findings: [], correction: null, signature: null, ...more,
   }
 }

@@ -17,7 +17,7 @@ afterAll(() => log.close())
 
 const CACHES = [
   'SELECT * FROM cylinders ORDER BY id', 'SELECT * FROM movements ORDER BY cylinder_id, event_id, ordinal',
-  'SELECT * FROM stock_changes ORDER BY cylinder_id, event_id, ordinal', 'SELECT * FROM label_claims ORDER BY event_id',
+  'SELECT * FROM stock_changes ORDER BY cylinder_id, event_id, ordinal', 'SELECT * FROM label_claims ORDER BY event_id', 'SELECT * FROM halves ORDER BY event_id',
 ]
 
 async function caches(): Promise<string> {
@@ -37,7 +37,7 @@ describe('two writers on one log', () => {
     const other = await log.openAgain()
     await record(other, log.technician, [sent(id, 'filled', { refrigerant: 'R-22', condition: 'clean', grossBefore: lb(27.5), grossAfter: lb(33), looked: true })])
     const before = await caches()
-    const answers = await log.db.write([insertLogRow(row, read.newest!.id), ...cacheStatements(read)])
+    const answers = await log.db.write([insertLogRow(row, read.newest!.id), ...await cacheStatements(log.db, read)])
     expect(answers[0]!.rows).toHaveLength(0)
     expect(await caches()).toBe(before)
     expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true })

@@ -1,5 +1,6 @@
 import type { End } from '../endOf'
 import type { Finding } from '../finding'
+import type { AwayAt } from '../state'
 import { COMMON_PRACTICE, OWN_RULE, sentence, sinceText } from './words'
 
 /** Nobody has entered the stamp. */
@@ -65,12 +66,15 @@ export function lookBeforeFill(): Finding {
   }
 }
 
+const AWAY_WORDS: Record<AwayAt, string> = {
+  'at-reclaim': 'is at the reclaimer', 'at-test': 'is at its test', 'given-away': 'was given away in an exchange',
+}
+
 /** Something was recorded while the cylinder should have been elsewhere. */
-export function away(where: 'at-reclaim' | 'at-test', since: number): Finding {
-  const place = where === 'at-reclaim' ? 'at the reclaimer' : 'at its test'
+export function away(where: AwayAt, since: number): Finding {
   return {
     code: 'away', severity: 'stop', source: OWN_RULE, since: sinceText(since),
-    text: `By the log it is ${place}. Check the serial; if it is back, record its return.`,
+    text: `By the log it ${AWAY_WORDS[where]}. Check the serial; if it is back, record its return.`,
   }
 }
 

@@ -15,6 +15,7 @@ import { corrected } from './corrected'
 import { countersigned } from './countersigned'
 import { drawn } from './drawn'
 import { emptied } from './emptied'
+import { exchanged } from './exchanged'
 import { filled } from './filled'
 import { found } from './found'
 import { handedOver } from './handedOver'
@@ -36,6 +37,7 @@ import { sentForReclaim } from './sentForReclaim'
 import { sentForTest } from './sentForTest'
 import { stand } from './standing'
 import { heldIn, stockChanges, type Held } from './stock'
+import { transferred } from './transferred'
 import type { FoldContext, Turn } from './turn'
 import { weighed } from './weighed'
 import { noLongerMissing } from './whereabouts'
@@ -88,6 +90,7 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
   'weighed': weighed,
   'filled': filled,
   'drawn': drawn,
+  'transferred': transferred,
   'checked': checked,
   'emptied': emptied,
   'lost': lost,
@@ -100,6 +103,7 @@ const FOLDS: { [K in EventKind]: (turn: Turn<K>) => void } = {
   'sent-for-reclaim': sentForReclaim,
   'reclaimed': reclaimed,
   'returned': returned,
+  'exchanged': exchanged,
   'sent-for-test': sentForTest,
   'retested': retested,
   'corrected': corrected,
@@ -207,7 +211,8 @@ function withLastEvent(state: CylinderState, standings: readonly Standing[]): Cy
     firstEventAt: counting[0]?.effectiveAt ?? null,
     lastEventAt: last?.effectiveAt ?? null,
     lastEventKind: last?.kind ?? null,
-    lastSeenAt: seen?.effectiveAt ?? null,
+    // What was given away is no longer ours to look for.
+    lastSeenAt: state.away?.at === 'given-away' ? null : seen?.effectiveAt ?? null,
   }
 }
 

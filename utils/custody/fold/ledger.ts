@@ -58,11 +58,11 @@ export function rename(turn: Turn, refrigerant: string | null, ownerId?: string 
   contents.shares = shares
 }
 
-/** Takes the known net out of stock, booked as shipped. */
-export function leaveStock(turn: Turn): void {
+/** Takes the known net out of stock, booked under a cause. */
+export function leaveStock(turn: Turn, cause: 'shipped' | 'returned-with'): void {
   const { contents } = turn.state
   if (contents.netGrams !== null) {
-    for (const share of contents.shares) book(turn, 'shipped', contents.refrigerant, share.ownerId, -share.grams)
+    for (const share of contents.shares) book(turn, cause, contents.refrigerant, share.ownerId, -share.grams)
   }
   contents.inStock = false
 }
@@ -74,6 +74,21 @@ export function enterStock(turn: Turn): void {
   contents.inStock = true
   if (contents.netGrams === null) return
   for (const share of contents.shares) book(turn, 'opening', contents.refrigerant, share.ownerId, share.grams)
+}
+
+/**
+ * What is known to be in a cylinder came with it, and is the contractor's from now on: what was booked as found in it
+ * leaves the books as that, and enters them as received.
+ */
+export function receiveAnew(turn: Turn): void {
+  const { contents } = turn.state
+  if (contents.shares.length === 0) return
+  const total = sum(contents.shares)
+  if (contents.netGrams !== null) {
+    for (const share of contents.shares) book(turn, 'opening', contents.refrigerant, share.ownerId, -share.grams)
+    book(turn, 'received-with', contents.refrigerant, null, total)
+  }
+  contents.shares = [{ ownerId: null, grams: total }]
 }
 
 /** Whose it is where no event says: the customer's in a customer's cylinder, else the contractor's. */

@@ -12,18 +12,18 @@ export function returned(turn: Turn<'returned'>): void {
 }
 
 /**
- * The cylinder is with us again. From a reclaimer nobody knows what it comes back with: the net is unknown until it is
- * weighed, and something may be in it until that weight is its tare.
+ * The cylinder is with us again. From a reclaimer, or from whom it was given to, nobody knows what it comes back with: the
+ * net is unknown until it is weighed, and something may be in it until that weight is its tare.
  */
 export function comeBack(turn: Turn): void {
   const { state } = turn
   const { contents } = state
-  if (state.away?.at === 'at-reclaim') {
+  if (state.away?.at === 'at-reclaim' || state.away?.at === 'given-away') {
     becomeUnknown(turn)
     contents.shares = []
     contents.backFromReclaim = true
     const hasWeight = 'gross' in turn.event.details && turn.event.details.gross !== undefined
-    // What left was booked when it was shipped, so the books start again from nothing.
+    // What left was booked when it went, so the books start again from nothing.
     contents.netGrams = hasWeight ? 0 : null
     contents.inStock = true
     restOnNothing(turn)

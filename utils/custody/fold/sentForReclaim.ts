@@ -11,7 +11,7 @@ export function sentForReclaim(turn: Turn<'sent-for-reclaim'>): void {
   // A reading that tells no net cannot be set against the log: what was known of it is what left.
   const isReadable = readScale(turn, event.details.gross).netGrams !== null
   weigh(turn, event.details.gross, isReadable ? 'weighing' : 'shipped')
-  leaveStock(turn)
+  leaveStock(turn, 'shipped')
   state.away = { at: 'at-reclaim', since: event.effectiveAt, listId: event.details.shipmentId }
   putAt(turn, event.placeId)
 }

@@ -19,6 +19,8 @@ export interface FoldContext {
   timeZone: string
   /** What the owner had settled about tests at an instant. */
   retestAt: (ms: number) => RetestRules
+  /** The one place of a firm; null where it has none. */
+  placeOfFirm: (firmId: string) => string | null
 }
 
 /** A weight that differs from the log, or agrees with it, without a cause: how far its two readings may be off together. */

@@ -5,6 +5,7 @@ import { details as corrected } from './corrected'
 import { details as countersigned } from './countersigned'
 import { details as drawn } from './drawn'
 import { details as emptied } from './emptied'
+import { details as exchanged } from './exchanged'
 import { details as filled } from './filled'
 import { details as found } from './found'
 import { details as handedOver } from './handedOver'
@@ -23,6 +24,7 @@ import { details as retested } from './retested'
 import { details as returned } from './returned'
 import { details as sentForReclaim } from './sentForReclaim'
 import { details as sentForTest } from './sentForTest'
+import { details as transferred } from './transferred'
 import { details as weighed } from './weighed'
 
 /** The schema of each kind's details. */
@@ -35,6 +37,7 @@ export const DETAILS = {
   'weighed': weighed,
   'filled': filled,
   'drawn': drawn,
+  'transferred': transferred,
   'checked': checked,
   'emptied': emptied,
   'lost': lost,
@@ -47,6 +50,7 @@ export const DETAILS = {
   'sent-for-reclaim': sentForReclaim,
   'reclaimed': reclaimed,
   'returned': returned,
+  'exchanged': exchanged,
   'sent-for-test': sentForTest,
   'retested': retested,
   'corrected': corrected,

@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { AnyCustodyEvent } from '../event'
+import { otherCylinderOf } from '../half'
 import { EVENT_KINDS, type EventKind } from '../kinds'
 import { DETAILS } from '.'
 import { deviceName, instant, line, prose, uuid } from './parts'
@@ -46,6 +47,10 @@ export function parseEvent(raw: unknown): EventParse {
   ]
   if (kind !== null && NEEDS_PLACE.includes(kind) && outer.data?.placeId === undefined && !errors.some(error => error.path === 'placeId')) {
     errors.push({ path: 'placeId', message: 'is missing: say where the cylinder is now' })
+  }
+  const other = inner?.success && kind !== null ? otherCylinderOf(kind, inner.data) : null
+  if (other !== null && other === outer.data?.cylinderId) {
+    errors.push({ path: kind === 'transferred' ? 'details.counterpartId' : 'details.otherCylinderId', message: 'must be another cylinder' })
   }
   if (errors.length > 0 || !outer.success || !inner?.success) return { ok: false, id: idOf(raw), errors }
   // The details were parsed by the schema of this very kind, which the compiler cannot follow.

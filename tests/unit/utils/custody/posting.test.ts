@@ -7,7 +7,7 @@ const kindsOf = (...roles: Role[]) => EVENT_KINDS.filter(kind => mayPost({ perso
 
 describe('who may record what', () => {
   it('lets a technician record what is done in the field', () => {
-    expect(kindsOf('technician')).toEqual(['labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost', 'inspected', 'quarantined', 'missing', 'found', 'returned'])
+    expect(kindsOf('technician')).toEqual(['labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'transferred', 'checked', 'emptied', 'lost', 'inspected', 'quarantined', 'missing', 'found', 'returned', 'exchanged'])
   })
 
   it('lets the warehouse also register', () => {

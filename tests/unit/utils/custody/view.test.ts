@@ -112,7 +112,7 @@ describe('a cylinder that nobody has seen', () => {
 describe('what somebody may do', () => {
   it('holds every kind once, as allowed or not, for who may record at all', () => {
     const { may, mayNot } = viewAfter([registered(), filled('R-22', 20)])
-    expect(may).toEqual(['labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'checked', 'emptied', 'lost', 'inspected', 'quarantined', 'missing', 'returned'])
+    expect(may).toEqual(['labelled', 'received', 'moved', 'handed-over', 'weighed', 'filled', 'drawn', 'transferred', 'checked', 'emptied', 'lost', 'inspected', 'quarantined', 'missing', 'returned', 'exchanged'])
     expect(mayNot.map(({ kind }) => kind)).toEqual(['registered', 'released', 'found', 'retired', 'sent-for-reclaim', 'reclaimed', 'sent-for-test', 'retested', 'corrected', 'countersigned'])
   })
 

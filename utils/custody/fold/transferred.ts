@@ -1,0 +1,48 @@
+import { readingGrams } from '../../quantity/mass'
+import { scaleAccuracyGrams } from '../../quantity/scale'
+import type { HalfTransfer } from '../half'
+import { amountNotKnown } from '../findings/weight'
+import { weigh, weighAfterOutflow } from './contents'
+import { takeIn } from './takeIn'
+import type { Turn } from './turn'
+import { backByUse } from './whereabouts'
+
+/** Refrigerant goes from this cylinder into another, or comes from another into this one. */
+export function transferred(turn: Turn<'transferred'>): void {
+  const { state, event } = turn
+  const { direction, counterpartId, transferId, ...weights } = event.details
+  const transfer = halfOf(turn)
+  if (state.away) backByUse(turn)
+  if (direction === 'out') goOut(turn)
+  else takeIn(turn, { ...weights, cause: 'transferred-in', ownerId: weights.ownerOfRefrigerantId ?? null })
+  state.halves.push({
+    eventId: event.id, kind: 'transferred', pairId: transferId, cylinderId: event.cylinderId, otherId: counterpartId, direction,
+    at: event.effectiveAt, transfer,
+  })
+}
+
+// The name stays: what the half calls it is held against the other half, never against the steel.
+function goOut(turn: Turn<'transferred'>): void {
+  const { grossBefore, grossAfter } = turn.event.details
+  if (grossBefore) weigh(turn, grossBefore, 'weighing')
+  if (turn.state.contents.netGrams === null) turn.findings.push(amountNotKnown('transferred'))
+  weighAfterOutflow(turn, grossAfter, 'transferred-out')
+}
+
+/** What went over by the scale alone; where nobody weighed before, by the reading that the net rested on. */
+function halfOf({ state, event }: Turn<'transferred'>): HalfTransfer {
+  const { direction, refrigerant, grossBefore, grossAfter } = event.details
+  const after = readingGrams(grossAfter)
+  const { grossGrams, uncertaintyGrams } = state.contents
+  const known = grossGrams === null || uncertaintyGrams === null ? null : { grams: grossGrams, accuracyGrams: uncertaintyGrams }
+  const before = grossBefore ? weightOf(readingGrams(grossBefore)) : known
+  return {
+    refrigerant,
+    grams: before === null ? null : direction === 'out' ? before.grams - after : after - before.grams,
+    accuracyGrams: (before?.accuracyGrams ?? 0) + weightOf(after).accuracyGrams,
+  }
+}
+
+function weightOf(grams: number): { grams: number, accuracyGrams: number } {
+  return { grams, accuracyGrams: scaleAccuracyGrams(grams) }
+}
