@@ -15,21 +15,28 @@ type Matrix = readonly [number, number, number, number, number, number]
 /** The filled shapes of every page of a PDF, read from the file's own drawing operators. */
 export function drawnPages(pdf: Buffer): DrawnPage[] {
   const source = pdf.toString('latin1')
-  const kids = /\/Kids \[([^\]]*)\]/.exec(source)?.[1] ?? ''
-  return [...kids.matchAll(/(\d+) 0 R/g)].map(([, id]) => {
-    const page = objectText(source, id!)
+  return pageIds(source).map((id) => {
+    const page = objectText(source, id)
     const [, , width, height] = /\/MediaBox \[([^\]]*)\]/.exec(page)![1]!.trim().split(/\s+/).map(Number)
     const contents = /\/Contents (\d+) 0 R/.exec(page)![1]!
     return { width: width!, height: height!, fills: filledOutlines(streamText(source, contents), height!) }
   })
 }
 
-function objectText(source: string, id: string): string {
+/** The numbers of the objects that are a file's pages, in their order. */
+export function pageIds(source: string): string[] {
+  const kids = /\/Kids \[([^\]]*)\]/.exec(source)?.[1] ?? ''
+  return [...kids.matchAll(/(\d+) 0 R/g)].map(([, id]) => id!)
+}
+
+/** What stands in an object of a file. */
+export function objectText(source: string, id: string): string {
   const start = source.indexOf(`\n${id} 0 obj\n`)
   return source.slice(start, source.indexOf('endobj', start))
 }
 
-function streamText(source: string, id: string): string {
+/** The content of a stream, inflated where it is packed. */
+export function streamText(source: string, id: string): string {
   const object = objectText(source, id)
   const begin = object.indexOf('stream\n') + 'stream\n'.length
   const length = Number(/\/Length (\d+)/.exec(object)![1])
