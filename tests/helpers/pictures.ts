@@ -24,19 +24,8 @@ function chunk(type: string, data: Buffer): Buffer {
   const named = Buffer.concat([Buffer.from(type, 'latin1'), data])
   const [length, check] = [Buffer.alloc(4), Buffer.alloc(4)]
   length.writeUInt32BE(data.length)
-  check.writeUInt32BE(crc32Of(named))
+  check.writeUInt32BE(crc32(named))
   return Buffer.concat([length, named, check])
-}
-
-// Node 20 may lack the function of zlib.
-function crc32Of(bytes: Buffer): number {
-  if (typeof crc32 === 'function') return crc32(bytes)
-  let value = 0xFFFFFFFF
-  for (const byte of bytes) {
-    value ^= byte
-    for (let bit = 0; bit < 8; bit++) value = value & 1 ? (value >>> 1) ^ 0xEDB88320 : value >>> 1
-  }
-  return (value ^ 0xFFFFFFFF) >>> 0
 }
 
 /** A picture whose left half is red and whose right half is blue. */

@@ -12,6 +12,7 @@ import { openDatabase, type Database } from '../../server/utils/database/databas
 import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
+import { keepDemoPhotos } from '../../server/utils/demo/photos'
 import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
@@ -54,6 +55,17 @@ describe('the demo firm', () => {
     const [last] = await column('SELECT max(recorded_at) FROM custody_events')
     expect(first).toBeLessThan(NOW - 500 * 86_400_000)
     expect(last).toBeLessThanOrEqual(NOW)
+  })
+
+  it('has photos of stamps and scales beside their lines, one of them put there later, and one still on its way', async () => {
+    const files = new Map<string, Uint8Array>()
+    await keepDemoPhotos(db, { keep: async (name, bytes) => void files.set(name, bytes), read: async () => null, probe: async () => undefined })
+    const named = Number((await column('SELECT sum(json_array_length(body, \'$.photoIds\')) FROM custody_events'))[0])
+    const arrived = await column('SELECT a.subject FROM attachments a JOIN custody_events e ON e.actor_id = a.sent_by AND a.id = json_extract(e.body, \'$.photoIds[0]\')')
+    expect(arrived).toEqual(expect.arrayContaining(['stamp', 'scale']))
+    expect(named - arrived.length).toBe(1)
+    expect(await column('SELECT count(*) FROM attachment_events')).toEqual([1])
+    expect(files.size).toBe(2 * (arrived.length + 1))
   })
 
   it('has one van that came back without what its technician held last, and two that say what else they carry', async () => {

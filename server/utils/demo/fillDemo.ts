@@ -10,6 +10,7 @@ import { playCare, playSignatures } from './care'
 import { playIncidents } from './incidents'
 import { playPairs } from './pairs'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
+import { namePhotos } from './photos'
 import { seededRandom } from './random'
 import { recordScript } from './record'
 import { newScript } from './script'
@@ -43,6 +44,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   playChecks(stage)
   playPairs(stage)
   playSignatures(stage)
+  namePhotos(stage.script)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(listTables(db, stage))
   await directory(db, true)
