@@ -40,15 +40,24 @@ export class TestClient {
     return this.cookies.get('collarbook') ?? ''
   }
 
-  async send<T>(method: string, path: string, body?: unknown, headers: Record<string, string> = {}): Promise<Answer<T>> {
+  send<T>(method: string, path: string, body?: unknown, headers: Record<string, string> = {}): Promise<Answer<T>> {
+    if (body === undefined) return this.ask<T>(method, path, undefined, headers)
+    return this.ask<T>(method, path, JSON.stringify(body), { 'content-type': 'application/json', ...headers })
+  }
+
+  /** Posts a body as it is; its type stands among the headers. */
+  sendBytes<T = unknown>(path: string, body: Buffer, headers: Record<string, string>): Promise<Answer<T>> {
+    return this.ask<T>('POST', path, new Uint8Array(body), headers)
+  }
+
+  private async ask<T>(method: string, path: string, body: BodyInit | undefined, headers: Record<string, string>): Promise<Answer<T>> {
     const response = await fetch(this.baseUrl + path, {
       method,
       redirect: 'manual',
-      body: body === undefined ? undefined : JSON.stringify(body),
+      body,
       headers: {
         'accept': 'application/json',
         'sec-fetch-site': 'same-origin',
-        ...(body === undefined ? {} : { 'content-type': 'application/json' }),
         ...(this.cookies.size > 0 ? { cookie: [...this.cookies].map(([name, value]) => `${name}=${value}`).join('; ') } : {}),
         ...headers,
       },
