@@ -1,0 +1,7 @@
+export { LOG_COLUMNS } from '../../server/utils/custody/logRow'
+export { sha256 } from '../../server/utils/custody/sha256'
+export { openDatabase } from '../../server/utils/database/database'
+export { makeCheckpoint } from '../../server/utils/proof/checkpoints'
+export { verifyLog } from '../../server/utils/proof/verifyLog'
+export { testSealing } from '../../tests/helpers/sealing'
+export { hashEvent } from '../../utils/custody/chain'
