@@ -87,11 +87,14 @@ describe('GET /api/reports/mass-balance', () => {
     customerId = customer.body.id
     const [view] = [await registered(shop, { contents: 'evacuated' })]
     // TW 27.5 lb: 6 lb ours, then 3 lb the customer's, then 1 lb less than the log says.
-    await posted(shop.technician.client, [
+    const happened = [
       { ...eventOf(view.id, 'filled'), details: { refrigerant: 'R-22', grossAfter: lb(33.5), looked: true } },
       { ...eventOf(view.id, 'filled'), details: { refrigerant: 'R-22', grossAfter: lb(36.5), looked: true, ownerOfRefrigerantId: customerId } },
       { ...eventOf(view.id, 'weighed'), details: { gross: lb(35.5) } },
-    ])
+    ]
+    // All within a moment: the device's count keeps them in order.
+    const { occurredAt } = happened[2]!
+    await posted(shop.technician.client, happened.map((event, index) => ({ ...event, occurredAt, deviceId: 'phone-1', deviceSeq: index + 1 })))
     await registered(shop, { contents: { refrigerant: 'R-410A', condition: 'clean' }, gross: lb(30) })
   }, 120_000)
   afterAll(() => server.stop())
