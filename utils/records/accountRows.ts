@@ -10,33 +10,34 @@ export interface AccountRow {
   note: string | null
   /** Under a head that names the unit. */
   figure: string
-  /** What its movements are listed by; null for the stock at either end, and where nothing moved. */
+  /** What its movements are listed by; null for the stock at either end. */
   line: BalanceLine | null
   movements: number
-  /** Nothing moved by this cause. */
-  isIdle: boolean
-  /** Stock at the beginning or the end. */
-  isStock: boolean
+}
+
+/** An account as a screen draws it: every cause stands in it once. */
+export interface AccountRows {
+  opening: AccountRow
+  moved: AccountRow[]
+  /** The causes by which nothing moved, in words. */
+  idle: string[]
+  closing: AccountRow
 }
 
 /**
- * An account line by line, from the opening stock over every cause to the closing stock.
+ * An account line by line, from the opening stock over what moved to the closing stock.
  *
  * Rounding: each figure to the nearest division on its own; the sum is kept to the gram.
  */
-export function accountRows({ openingGrams, causes, apart, closingGrams }: BalanceAccount, unit: MassUnit): AccountRow[] {
-  const stock = (words: string, grams: number): AccountRow =>
-    ({ words, note: null, figure: columnFigure(grams, unit, 'nearest'), line: null, movements: 0, isIdle: false, isStock: true })
-  const moved = (line: BalanceLine, { grams, movements }: { grams: number, movements: number }): AccountRow => ({
-    words: BALANCE_LINE_WORDS[line].words,
-    note: BALANCE_LINE_WORDS[line].note ?? null,
-    figure: signedColumnFigure(grams, unit),
-    line: movements > 0 ? line : null,
-    movements,
-    isIdle: movements === 0,
-    isStock: false,
-  })
-  return [
-    stock(OPENING_WORDS, openingGrams), ...causes.map(cause => moved(cause.cause, cause)), moved('apart', apart), stock(CLOSING_WORDS, closingGrams),
-  ]
+export function accountRows({ openingGrams, causes, apart, closingGrams }: BalanceAccount, unit: MassUnit): AccountRows {
+  const stock = (words: string, grams: number): AccountRow => ({ words, note: null, figure: columnFigure(grams, unit, 'nearest'), line: null, movements: 0 })
+  const lines = [...causes.map(({ cause, ...sum }) => ({ line: cause, ...sum })), { line: 'apart' as const, ...apart }]
+  return {
+    opening: stock(OPENING_WORDS, openingGrams),
+    moved: lines.filter(({ movements }) => movements > 0).map(({ line, grams, movements }) => ({
+      words: BALANCE_LINE_WORDS[line].words, note: BALANCE_LINE_WORDS[line].note ?? null, figure: signedColumnFigure(grams, unit), line, movements,
+    })),
+    idle: lines.filter(({ movements }) => movements === 0).map(({ line }) => BALANCE_LINE_WORDS[line].words),
+    closing: stock(CLOSING_WORDS, closingGrams),
+  }
 }

@@ -5,8 +5,6 @@ import type { Days } from './period'
 /** A line of the balance as people say it, and what it takes in where that is not plain. */
 export interface LineWords { words: string, note?: string }
 
-const MOVES_NOTHING = 'moves nothing: it counts where it was'
-
 /** The words of each line that has movements behind it. */
 export const BALANCE_LINE_WORDS: Record<BalanceLine, LineWords> = {
   'opening': { words: 'First known', note: 'contents that nobody had weighed, or that came back into stock' },
@@ -23,8 +21,9 @@ export const BALANCE_LINE_WORDS: Record<BalanceLine, LineWords> = {
   'shipped': { words: 'Shipped for reclaim' },
   'lost': { words: 'Lost' },
   'emptied-loss': { words: 'Lost in emptying' },
-  'missing': { words: 'Missing', note: MOVES_NOTHING },
-  'found': { words: 'Found', note: MOVES_NOTHING },
+  // Both move nothing: a missing cylinder counts as what it held when it was last seen.
+  'missing': { words: 'Missing' },
+  'found': { words: 'Found' },
   'tare-change': { words: 'New tare weights' },
   'weighing': { words: 'Weighed otherwise than the log' },
   'apart': { words: 'Practice and not countersigned', note: 'left out of regulatory totals' },
