@@ -22,7 +22,7 @@ afterAll(() => server.stop())
 async function post(by: Member, kind: string, details: object, more: object = {}) {
   const event = { id: randomUUID(), cylinderId: cylinder.id, kind, occurredAt: new Date().toISOString(), ...more, details }
   const { body } = await by.client.post<EventsAnswer>('/api/events', { events: [event] })
-  return { id: event.id, ...body.results[0]!, view: body.cylinders[0] }
+  return { ...body.results[0]!, view: body.cylinders[0] }
 }
 
 const waiting = async (by: Member, query = '') => (await by.client.get<CountersigningAnswer>(`/api/countersigning${query}`)).body

@@ -19,7 +19,7 @@ const ENTRY: WaitingEntry = {
       { code: 'look-before-fill', severity: 'caution', text: 'not looked at', source: '', since: null },
     ],
     correction: null, signature: { by: null },
-  },
+  } as WaitingEntry['line'],
 }
 
 const mount = async (more: object = {}) => (await mountSuspended(SignEntry, {
