@@ -184,7 +184,7 @@ const FIELDS = {
   'weighed': 'gross! scaleId',
   'filled': 'refrigerant! condition grossBefore grossAfter! method jobId ownerOfRefrigerantId scaleId looked readings',
   'drawn': 'grossAfter! purpose! jobId phase',
-  'transferred': 'direction! counterpartId! transferId! refrigerant! condition ownerOfRefrigerantId grossBefore grossAfter! scaleId',
+  'transferred': 'direction! counterpartId! transferId! refrigerant! condition! ownerOfRefrigerantId grossBefore grossAfter!',
   'lost': 'grossAfter cause! unavoidable',
   'checked': 'method! pressureKPa temperatureC barometerKPa gaugeErrorKPa thermometerErrorC composition verdict',
   'emptied': 'grossAfter vacuum',
@@ -279,7 +279,7 @@ function corrected(events) {
 }
 
 /** The net in grams after the events; null where nobody can know it. */
-function netOf(events, scales) {
+function netOf(events, scales, firmPlaces) {
   const standing = corrected(events)
   const first = standing.find(({ kind }) => kind === 'registered')
   const now = {
@@ -334,7 +334,8 @@ function netOf(events, scales) {
     restOn(after)
   }
   function comeBack(event) {
-    if (now.away?.at === 'reclaim') {
+    // Nobody knows what it comes back with.
+    if (now.away?.at === 'reclaim' || now.away?.at === 'given') {
       now.isNothing = false
       now.isBack = true
       now.net = null
@@ -391,7 +392,16 @@ function netOf(events, scales) {
     else if (kind === 'moved') now.place = String(details.toPlaceId).toLowerCase()
     else if (kind === 'weighed') weigh(details.gross, details.scaleId)
     else if (kind === 'filled' || (kind === 'transferred' && details.direction === 'in')) takeIn(details)
-    else if (kind === 'drawn' || kind === 'transferred') weigh(details.grossAfter, details.scaleId)
+    else if (kind === 'drawn') weigh(details.grossAfter)
+    else if (kind === 'transferred') {
+      if (details.grossBefore) weigh(details.grossBefore)
+      weigh(details.grossAfter)
+    }
+    else if (kind === 'exchanged' && details.direction === 'in') comeBack(event)
+    else if (kind === 'exchanged') {
+      now.away = { at: 'given' }
+      now.place = firmPlaces.get(String(details.firmId).toLowerCase()) ?? null
+    }
     else if (kind === 'emptied') emptied(details)
     else if (kind === 'retested') retested(details)
     else if (kind === 'lost') {
@@ -426,13 +436,13 @@ function netOf(events, scales) {
   return now.net
 }
 
-function checkNet(rows, told, scales) {
+function checkNet(rows, told) {
   const name = `cylinder ${told.id}`
   const strange = rows.find(({ kind }) => FIELDS[kind] === undefined)
   if (strange) return fault(`${name}: this program does not know the kind of event "${strange.kind}", so its net was not compared`)
   const grams = value => value === null ? 'not known' : `${value} g`
   try {
-    const net = netOf(rows.map(eventOf), scales)
+    const net = netOf(rows.map(eventOf), scales, firmPlaces)
     if (net !== told.netGrams) fault(`${name}: its events give a net of ${grams(net)}, the firm's list says ${grams(told.netGrams)}`)
   }
   catch (error) {
@@ -453,6 +463,7 @@ let cylinders = 0
 let end = null
 const checkpoints = []
 const scales = new Map()
+const firmPlaces = new Map()
 
 function begin(line) {
   if (line.format !== 'custody-log' || line.version !== 1) giveUp('This is no export of a custody log in the form that this program knows (version 1).')
@@ -486,7 +497,7 @@ function takeCylinder(told) {
   if (rows.length === 0 || rows[0].cylinder_id !== told.id) return fault(`cylinder ${told.id}: its lines are missing`)
   checkChain(rows)
   addToTrees(rows, checkpoints)
-  checkNet(rows, told, scales)
+  checkNet(rows, told)
   rows = []
 }
 
@@ -501,6 +512,7 @@ for await (const text of createInterface({ input: createReadStream(file).on('err
   }
   if (!header) begin(line)
   else if (line.scale) scales.set(line.scale.id, line.scale)
+  else if (line.firm) firmPlaces.set(line.firm.id, line.firm.placeId)
   else if (line.checkpoint) checkpoints.push(readCheckpoint(line.checkpoint, keys))
   else if (line.event) takeEvent(line.event)
   else if (line.cylinder) takeCylinder(line.cylinder)

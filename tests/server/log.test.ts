@@ -29,12 +29,12 @@ beforeAll(async () => {
 })
 afterAll(() => server?.stop())
 
-async function register(serial: string) {
+async function register(serial: string, by = warehouse, placeId = shopId) {
   const event = {
-    id: randomUUID(), cylinderId: randomUUID(), kind: 'registered', occurredAt: new Date().toISOString(), placeId: shopId,
+    id: randomUUID(), cylinderId: randomUUID(), kind: 'registered', occurredAt: new Date().toISOString(), placeId,
     details: { stamp: stampOf({ serial }), ownership: 'own', contents: 'evacuated', gross: lb(27.5) },
   }
-  const { body } = await warehouse.client.post<{ results: { outcome: string }[] }>('/api/events', { events: [event] })
+  const { body } = await by.client.post<{ results: { outcome: string }[] }>('/api/events', { events: [event] })
   expect(body.results[0]?.outcome).toBe('accepted')
 }
 
@@ -147,11 +147,16 @@ describe('the daily checkpoint', () => {
   })
 
   it('is made at the start of a server whose log holds events and has none', async () => {
-    const demo = await startServer({ env: { COLLARBOOK_DEMO: '1' } })
-    const head = async () => (await fetch(`${demo.baseUrl}/api/health`)).ok && existsSync(`${demo.databaseFile}.checkpoints`)
-    await expect.poll(head, { timeout: 60_000 }).toBe(true)
-    const [note] = readFileSync(`${demo.databaseFile}.checkpoints`, 'utf8').trimEnd().split('\n').map(line => JSON.parse(line) as string)
-    expect(note).toContain('\nnumber 1\n')
-    await demo.stop()
+    const other = await startServer()
+    const owner = await setUpFirm(other)
+    const keeper = await addMember(owner, 'Wim', ['warehouse'])
+    const { id: placeId } = (await owner.client.post<{ id: string }>('/api/places', { name: 'Shop', kind: 'shop' })).body
+    await register('B1', keeper, placeId)
+    const newest = async () => (await owner.client.get<LogHead>('/api/log/head')).body.checkpoint
+    expect(await newest()).toBeNull()
+    await other.restart()
+    await owner.client.signIn(owner.email, owner.password)
+    await expect.poll(newest, { timeout: 20_000 }).toMatchObject({ number: 1, events: 1, askedBy: null })
+    await other.stop()
   })
 })

@@ -11,8 +11,8 @@ import type { Sealing } from './sealing'
 const FORMAT = { format: 'custody-log', version: 1 }
 
 /**
- * The whole log as lines of JSON, for somebody who trusts neither this server nor its database: what it is, the scales,
- * the checkpoints, then for each cylinder its lines in the order of recording and the net that the fleet shows for it.
+ * The whole log as lines of JSON, for somebody who trusts neither this server nor its database: what it is, the scales
+ * and the places of the firms that contents depend on, the checkpoints, then for each cylinder its lines in the order of recording and the net that the fleet shows for it.
  *
  * A line holds the columns of the log in the order that the first one names; its hash is taken of them. The log is given
  * as it stood when the export began.
@@ -25,6 +25,7 @@ export async function* exportedLog(db: Database, { origin, trusted }: Sealing, f
   yield textOf([
     { ...FORMAT, origin, publicKey, formerKeys, exportedAt: new Date(now).toISOString(), seq, events, columns: LOG_COLUMNS },
     ...[...from.scales.values()].map(({ id, accuracyGrams, accuracyPercent }) => ({ scale: { id, accuracyGrams, accuracyPercent } })),
+    ...[...from.placeOfFirm].map(([id, placeId]) => ({ firm: { id, placeId } })),
     ...checkpoints.map(({ note }) => ({ checkpoint: note })),
   ])
   let open: LogRow[] = []
