@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import {
-  CUSTOMER, did, filled, HOUR, idOf, kg, LOT, RECLAIMER_PLACE, REQUALIFIER, SHIPMENT, SHOP, START, SUPPLIER, TECHNICIAN, TEST_PLACE, VAN,
+  CUSTOMER, did, filled, HOUR, idOf, kg, LOT, OTHER_CYLINDER, RECLAIMER_PLACE, REQUALIFIER, SHIPMENT, SHOP, START, SUPPLIER, TECHNICIAN, TEST_PLACE, VAN,
   registered, type Told,
 } from './custody'
 
@@ -10,6 +10,9 @@ const maybeGross = fc.option(gross, { nil: undefined })
 const refrigerant = fc.constantFrom('R-22', 'R-410A', 'R-454B', 'R-744', 'R-9999')
 const ofFill = fc.oneof(refrigerant, fc.constant(null))
 const condition = fc.constantFrom('clean', 'suspect', 'burnt', 'mixed', 'unknown') as fc.Arbitrary<'clean' | 'suspect' | 'burnt' | 'mixed' | 'unknown'>
+
+const direction = fc.constantFrom('out' as const, 'in' as const)
+const pairId = fc.constantFrom('0198f000-0000-7000-8000-0000000000d1', '0198f000-0000-7000-8000-0000000000d2')
 
 /** An event id among the first of a story. */
 const someId = fc.integer({ min: 0, max: 11 }).map(idOf)
@@ -50,6 +53,9 @@ const happenings: fc.Arbitrary<Told>[] = [
   fc.constantFrom(undefined, SHOP, RECLAIMER_PLACE).map(placeId => did('found', { placeId })),
   gross.map(reading => did('sent-for-reclaim', { shipmentId: SHIPMENT, gross: reading }, { placeId: RECLAIMER_PLACE })),
   fc.constant(did('reclaimed', { shipmentId: SHIPMENT })),
+  fc.record({ direction, refrigerant: ofFill, condition, grossBefore: maybeGross, grossAfter: gross, ownerOfRefrigerantId: fc.constantFrom(undefined, CUSTOMER), transferId: pairId })
+    .map(details => did('transferred', { counterpartId: OTHER_CYLINDER, ...details })),
+  fc.record({ direction, exchangeId: pairId }).map(details => did('exchanged', { otherCylinderId: OTHER_CYLINDER, firmId: SUPPLIER, ...details }, { placeId: SHOP })),
   maybeGross.map(reading => did('returned', { fromFirmId: SUPPLIER, gross: reading }, { placeId: SHOP })),
   fc.constant(did('sent-for-test', { lotId: LOT }, { placeId: TEST_PLACE })),
   fc.record({

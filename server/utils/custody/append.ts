@@ -1,15 +1,15 @@
 import { setImmediate as nextTurn } from 'node:timers/promises'
 import type { InStatement } from '@libsql/client'
-import type { AnyRecordedEvent } from '../../../utils/custody/event'
+import { requestUnits } from '../../../utils/custody/requestUnits'
 import type { EventResult } from '../../../utils/contract/custody'
 import type { Database } from '../database/database'
 import { StorageUnavailable, storageFailure } from '../database/storageFailure'
 import { cacheStatements } from './caches'
-import { group, type Group } from './group'
-import { parsePost, refuse, refusalOf, type ParsedPost, type Refusal } from './judge'
-import { insertLogRow, recordedEvent, type LogRow } from './logRow'
+import { group } from './group'
+import { parsePost, refuse } from './judge'
+import { idOf, judgePosting, resultOf, type ReadPosting } from './judgePosting'
+import { insertLogRow, type LogRow } from './logRow'
 import type { Guard, Posting } from './posting'
-import { sealedRow } from './sealedRow'
 import { sharedCodeRows } from './sharedCodeRows'
 
 /** Most events in one commit. */
@@ -17,9 +17,7 @@ const GROUP_EVENTS = 200
 /** How often a group is computed again after another process wrote first. */
 const RACE_RETRIES = 20
 
-interface Waiting {
-  posting: Posting
-  parsed: (ParsedPost | Refusal)[]
+interface Waiting extends ReadPosting {
   done: (results: EventResult[]) => void
   failed: (error: unknown) => void
 }
@@ -39,7 +37,7 @@ export function append(db: Database, posting: Posting): Promise<EventResult[]> {
   const waiting = queues.get(db) ?? []
   queues.set(db, waiting)
   return new Promise((done, failed) => {
-    waiting.push({ posting, parsed: posting.events.map(parsePost), done, failed })
+    waiting.push({ posting, parsed: posting.events.map(parsePost), units: requestUnits(posting.events), done, failed })
     if (waiting.length === 1) void db.exclusive(commit => drain(db, waiting, commit))
   })
 }
@@ -70,7 +68,10 @@ function groupsOf(taken: Waiting[]): Waiting[][] {
   return groups
 }
 
-/** Commits a group; where it fails, each request alone; where that fails, each event alone: a bad one refuses only itself. */
+/**
+ * Commits a group; where it fails, each request alone; where that fails, each event alone: a bad one refuses only itself,
+ * and the other half of its pair.
+ */
 async function commitOrSplit(db: Database, part: Waiting[], commit: Database['write']): Promise<void> {
   try {
     const answers = await commitGroup(db, part, commit)
@@ -86,28 +87,29 @@ async function commitOrSplit(db: Database, part: Waiting[], commit: Database['wr
 
 async function commitEachAlone(db: Database, one: Waiting, commit: Database['write'], error: unknown): Promise<void> {
   if (one.posting.dispatch) return one.failed(error)
-  const results: EventResult[] = []
-  for (const [index, parsed] of one.parsed.entries()) {
-    const alone = { ...one, posting: { ...one.posting, events: [one.posting.events[index]] }, parsed: [parsed] }
+  const results = new Map<number, EventResult>()
+  for (const unit of one.units) {
+    const events = unit.map(at => one.posting.events[at])
+    const alone = { ...one, posting: { ...one.posting, events }, parsed: unit.map(at => one.parsed[at]!), units: [events.map((_, at) => at)] }
     try {
       const [answers] = await commitGroup(db, [alone], commit)
-      results.push(...(answers ?? []))
+      answers?.forEach((answer, index) => results.set(unit[index]!, answer))
     }
     catch (ownError) {
       const failure = storageFailure(ownError)
       if (failure) return one.failed(failure)
-      console.error('event refused by an unexpected error', { id: idOf(one.posting.events[index]), error: String(ownError) })
-      results.push(resultOf(one.posting.events[index], refuse(500, 'This event could not be stored', 'Keep it; the fault is ours.')))
+      console.error('event refused by an unexpected error', { ids: events.map(idOf), error: String(ownError) })
+      unit.forEach((at, index) => results.set(at, resultOf(events[index], refuse(500, 'This event could not be stored', 'Keep it; the fault is ours.'))))
     }
   }
-  one.done(results)
+  one.done(one.parsed.flatMap((_, at) => results.get(at) ?? []))
 }
 
 async function commitGroup(db: Database, part: Waiting[], commit: Database['write']): Promise<EventResult[][]> {
   for (let attempt = 0; attempt < RACE_RETRIES; attempt++) {
     const now = await group(db, part.flatMap(one => one.parsed.flatMap(post => 'event' in post ? [post.event] : [])))
     const newestBefore = now.newest
-    const judged = part.map(one => judgeAll(one, now))
+    const judged = part.map(one => judgePosting(one, now))
     const written = judged.flatMap(one => one.rows)
     if (written.length === 0) return judged.map(one => one.results)
 
@@ -129,57 +131,8 @@ function logStatements(rows: LogRow[], newestId: string | null): InStatement[] {
   return rows.map((row, index) => insertLogRow(row, index === 0 ? newestId : rows[index - 1]!.id))
 }
 
-/** Judges the events of one posting in their order, each on what the ones before it have made of the cylinder. */
-function judgeAll(one: Waiting, now: Group): { results: EventResult[], rows: LogRow[] } {
-  const results: EventResult[] = []
-  const rows: LogRow[] = []
-  const before = now.mark()
-  for (const [index, post] of one.parsed.entries()) {
-    const raw = one.posting.events[index]
-    if ('refused' in post) {
-      results.push(resultOf(raw, post))
-      continue
-    }
-    const { event } = post
-    const stored = now.stored(event.id)
-    if (stored) {
-      results.push(stored.contentHash === post.contentHash
-        ? { id: event.id, outcome: 'duplicate', seq: stored.seq, version: stored.version }
-        : resultOf(raw, refuse(409, 'Another event has this id', 'The log keeps what was recorded first. Record this as a new event.')))
-      continue
-    }
-    const events = now.eventsOf(event.cylinderId)
-    const refusal = refusalOf(event, one.posting.access, events, now.known, one.posting.now, one.posting.dispatch !== undefined)
-    if (refusal) {
-      results.push(resultOf(raw, refusal))
-      continue
-    }
-    const row = sealedRow(post, one.posting, now.headOf(event.cylinderId), now.nextSeq())
-    now.add(row, recordedEvent(row) as AnyRecordedEvent)
-    rows.push(row)
-    results.push({ id: event.id, outcome: 'accepted', seq: row.seq, version: row.version })
-  }
-  // A dispatch leaves whole or not at all.
-  if (one.posting.dispatch && results.some(result => result.outcome === 'refused')) {
-    now.backTo(before)
-    return { results: results.map(result => result.outcome === 'accepted' ? { id: result.id, outcome: 'refused', problem: HELD_BACK } : result), rows: [] }
-  }
-  return { results, rows }
-}
-
-const HELD_BACK = refuse(409, 'Held back', 'Another line of the same dispatch was refused, so none was recorded.').refused
-
 function everyOf(rows: LogRow[]): Guard {
   const last = rows.at(-1)!
   // Each line is written only after the one before it, so the last stands for all.
   return { sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)', args: [last.id, last.cylinder_id, last.version, last.hash] }
-}
-
-function resultOf(raw: unknown, refusal: Refusal): EventResult {
-  return { id: idOf(raw), outcome: 'refused', problem: refusal.refused }
-}
-
-function idOf(raw: unknown): string {
-  const id = (raw as { id?: unknown } | null)?.id
-  return typeof id === 'string' ? id.slice(0, 100) : ''
 }

@@ -1,13 +1,12 @@
 import { describe, expect, it } from 'vitest'
 import {
-  codes, contentsAfter, CUSTOMER, DAY, did, filled, folded, kg, lastFindings, lastMovements, registered, SHIPMENT, SHOP, START, SUPPLIER, SUPPLIER_PLACE, TECHNICIAN, VAN,
+  codes, contentsAfter, CUSTOMER, DAY, did, filled, folded, kg, lastFindings, lastMovements, OTHER_CYLINDER, registered, SHIPMENT, SHOP, START, SUPPLIER, SUPPLIER_PLACE, TECHNICIAN, VAN,
   viewAfter, weighed, type Told,
 } from '~~/tests/helpers/custody'
 
-const OTHER = '0198f000-0000-7000-8000-0000000000c2'
 const EXCHANGE = '0198f000-0000-7000-8000-0000000000d2'
-const went = (more: Told['more'] = {}) => did('exchanged', { direction: 'out', otherCylinderId: OTHER, exchangeId: EXCHANGE, firmId: SUPPLIER }, more)
-const came = (more: Told['more'] = {}) => did('exchanged', { direction: 'in', otherCylinderId: OTHER, exchangeId: EXCHANGE, firmId: SUPPLIER }, { placeId: SHOP, ...more })
+const went = (more: Told['more'] = {}) => did('exchanged', { direction: 'out', otherCylinderId: OTHER_CYLINDER, exchangeId: EXCHANGE, firmId: SUPPLIER }, more)
+const came = (more: Told['more'] = {}) => did('exchanged', { direction: 'in', otherCylinderId: OTHER_CYLINDER, exchangeId: EXCHANGE, firmId: SUPPLIER }, { placeId: SHOP, ...more })
 
 describe('a cylinder that goes to a firm in exchange', () => {
   const story = [registered(), did('moved', { toPlaceId: VAN, toHolderId: TECHNICIAN }), filled('R-22', 15), went({ placeId: SHOP })]

@@ -1,15 +1,14 @@
 import { describe, expect, it } from 'vitest'
 import {
-  codes, contentsAfter, CUSTOMER, did, filled, folded, idOf, kg, lastFindings, lastMovements, registered, SHIPMENT, START, viewAfter, type Told,
+  codes, contentsAfter, CUSTOMER, did, filled, folded, idOf, kg, lastFindings, lastMovements, OTHER_CYLINDER, registered, SHIPMENT, START, viewAfter, type Told,
 } from '~~/tests/helpers/custody'
 import type { DetailsOf } from '~~/utils/custody/schema'
 import type { Half } from '~~/utils/custody/half'
 
-const OTHER = '0198f000-0000-7000-8000-0000000000c2'
 const TRANSFER = '0198f000-0000-7000-8000-0000000000d1'
 
 const half = (direction: 'out' | 'in', afterKg: number, details: Partial<DetailsOf<'transferred'>> = {}, more: Told['more'] = {}) => did('transferred', {
-  direction, counterpartId: OTHER, transferId: TRANSFER, refrigerant: 'R-22', condition: 'clean', grossAfter: kg(afterKg), ...details,
+  direction, counterpartId: OTHER_CYLINDER, transferId: TRANSFER, refrigerant: 'R-22', condition: 'clean', grossAfter: kg(afterKg), ...details,
 }, more)
 const out = (afterKg: number, details: Partial<DetailsOf<'transferred'>> = {}) => half('out', afterKg, details)
 const into = (afterKg: number, details: Partial<DetailsOf<'transferred'>> = {}) => half('in', afterKg, details)
@@ -108,7 +107,7 @@ describe('the half that a transfer leaves in the log', () => {
   it('says what went over by its two weights, and how far they may be off', () => {
     // 0.5 % of 20,000 g and of 15,000 g.
     expect(halvesOf(holding('R-22'), out(15, { grossBefore: kg(20) }))).toEqual([{
-      eventId: idOf(1), kind: 'transferred', pairId: TRANSFER, cylinderId: expect.any(String), otherId: OTHER, direction: 'out', at: START + 3_600_000,
+      eventId: idOf(1), kind: 'transferred', pairId: TRANSFER, cylinderId: expect.any(String), otherId: OTHER_CYLINDER, direction: 'out', at: START + 3_600_000,
       transfer: { refrigerant: 'R-22', grams: 5000, accuracyGrams: 175 },
     } satisfies Half])
   })

@@ -1,0 +1,85 @@
+import type { AnyRecordedEvent } from '../../../utils/custody/event'
+import type { Group } from './group'
+import { refuse, refusalOf, type ParsedPost, type Refusal } from './judge'
+import { recordedEvent, type LogRow } from './logRow'
+import type { EventResult, Posting } from './posting'
+import { sealedRow } from './sealedRow'
+
+/** A posting as it was read. */
+export interface ReadPosting {
+  posting: Posting
+  parsed: (ParsedPost | Refusal)[]
+  /** Which of its events are stored or refused together, by position. */
+  units: number[][]
+}
+
+/** What becomes of each event, and the lines that are to be written. */
+export interface Judged { results: EventResult[], rows: LogRow[] }
+
+/**
+ * Judges the events of one posting in their order, each on what the ones before it have made of the cylinder. Where half
+ * of a pair is refused, all are judged again without its other half, and so on.
+ */
+export function judgePosting(one: ReadPosting, now: Group): Judged {
+  const before = now.mark()
+  const heldBack = new Set<number>()
+  for (;;) {
+    const judged = judgeOnce(one, now, heldBack)
+    const torn = one.units.filter(unit => ['accepted', 'refused'].every(outcome => unit.some(at => judged.results[at]?.outcome === outcome)))
+    if (torn.length === 0) return judged
+    torn.flat().forEach(at => heldBack.add(at))
+    now.backTo(before)
+  }
+}
+
+/** @param heldBack positions of events that are not to be stored, for the other half of their pair is refused. */
+function judgeOnce(one: ReadPosting, now: Group, heldBack: ReadonlySet<number>): Judged {
+  const results: EventResult[] = []
+  const rows: LogRow[] = []
+  const before = now.mark()
+  for (const [index, post] of one.parsed.entries()) {
+    const raw = one.posting.events[index]
+    if ('refused' in post) {
+      results.push(resultOf(raw, post))
+      continue
+    }
+    const { event } = post
+    const stored = now.stored(event.id)
+    if (stored) {
+      results.push(stored.contentHash === post.contentHash
+        ? { id: event.id, outcome: 'duplicate', seq: stored.seq, version: stored.version }
+        : resultOf(raw, refuse(409, 'Another event has this id', 'The log keeps what was recorded first. Record this as a new event.')))
+      continue
+    }
+    const events = now.eventsOf(event.cylinderId)
+    const refusal = refusalOf(event, one.posting.access, events, now.known, one.posting.now, one.posting.dispatch !== undefined)
+    if (refusal ?? heldBack.has(index)) {
+      results.push(resultOf(raw, refusal ?? OTHER_HALF_REFUSED))
+      continue
+    }
+    const row = sealedRow(post, one.posting, now.headOf(event.cylinderId), now.nextSeq())
+    now.add(row, recordedEvent(row) as AnyRecordedEvent)
+    rows.push(row)
+    results.push({ id: event.id, outcome: 'accepted', seq: row.seq, version: row.version })
+  }
+  // A dispatch leaves whole or not at all.
+  if (one.posting.dispatch && results.some(result => result.outcome === 'refused')) {
+    now.backTo(before)
+    return { results: results.map(result => result.outcome === 'accepted' ? { id: result.id, outcome: 'refused', problem: HELD_BACK } : result), rows: [] }
+  }
+  return { results, rows }
+}
+
+const OTHER_HALF_REFUSED = refuse(409, 'Its other half was refused', 'Half of what happened between two cylinders is not recorded alone. Mend the other half and send both again.')
+const HELD_BACK = refuse(409, 'Held back', 'Another line of the same dispatch was refused, so none was recorded.').refused
+
+/** The answer to a refused event. */
+export function resultOf(raw: unknown, refusal: Refusal): EventResult {
+  return { id: idOf(raw), outcome: 'refused', problem: refusal.refused }
+}
+
+/** The id of an event as it was sent; '' where it has none. */
+export function idOf(raw: unknown): string {
+  const id = (raw as { id?: unknown } | null)?.id
+  return typeof id === 'string' ? id.slice(0, 100) : ''
+}
