@@ -25,6 +25,7 @@ export function cylinderRow(change: Partial<CylinderRow> = {}): CylinderRow {
     dueMonth: '2029-03',
     lastEventAt: '2026-11-30T16:00:00Z',
     lastEventKind: 'filled',
+    unseen: null,
     worstFinding: null,
     findingCodes: [],
     ...change,

@@ -124,6 +124,8 @@ export interface CylinderRow {
   dueMonth: Month | null
   lastEventAt: string | null
   lastEventKind: EventKind | null
+  /** null while it was seen lately, or need not be seen here; `isLong`: for so long that it may be missing. */
+  unseen: { days: number, isLong: boolean } | null
   worstFinding: { code: FindingCode, severity: Severity } | null
   findingCodes: FindingCode[]
 }

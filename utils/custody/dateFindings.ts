@@ -41,8 +41,14 @@ function ofRetest({ dueMonth, nothingInIt }: Dated, day: Day): Finding[] {
   return daysUntilEndOfMonth(dueMonth, day.nowMs, day.timeZone) <= day.retest.soonDays ? [retestSoon(dueMonth)] : []
 }
 
-function ofSight({ lifecycle, lastSeenAt }: Dated, { nowMs, timeZone, retest }: Day): Finding[] {
-  if (lastSeenAt === null || ELSEWHERE.includes(lifecycle)) return []
+/** Calendar days for which nobody has seen a cylinder that ought to be here; null while these are not too many. */
+export function unseenDays({ lifecycle, lastSeenAt }: Pick<Dated, 'lifecycle' | 'lastSeenAt'>, { nowMs, timeZone, retest }: Day): number | null {
+  if (lastSeenAt === null || ENDED.includes(lifecycle) || ELSEWHERE.includes(lifecycle)) return null
   const days = daysSince(lastSeenAt, nowMs, timeZone)
-  return days >= retest.notSeenDays ? [notSeen(days, lastSeenAt, retest.missingDays)] : []
+  return days >= retest.notSeenDays ? days : null
+}
+
+function ofSight(dated: Dated, day: Day): Finding[] {
+  const days = unseenDays(dated, day)
+  return days === null ? [] : [notSeen(days, dated.lastSeenAt!, day.retest.missingDays)]
 }

@@ -5,7 +5,7 @@ import type { Catalogue } from '../refrigerant/types'
 import type { RetestRules } from '../requalification/ownerChoice'
 import { capacityOf } from './capacityOf'
 import type { CylinderRow, Lifecycle } from './cylinderView'
-import { dateFindings, isOverdue, type Day } from './dateFindings'
+import { dateFindings, isOverdue, unseenDays, type Day } from './dateFindings'
 import { endOf } from './endOf'
 import type { FindingCode, Severity } from './finding'
 import { urgencyOrder } from './findings/order'
@@ -113,6 +113,7 @@ export function rowToday(cached: CachedRow, day: RowDay): CylinderRow {
   const overdue = isOverdue(cached.dueMonth, day)
   const findings = [...cachedFindings(cached), ...dateFindings(cached, day)].sort(urgencyOrder)
   const worst = findings[0]
+  const days = unseenDays(cached, day)
   return {
     id: cached.id,
     labelCode: cached.labelCode,
@@ -136,6 +137,7 @@ export function rowToday(cached: CachedRow, day: RowDay): CylinderRow {
     dueMonth: cached.dueMonth,
     lastEventAt: cached.lastEventAt === null ? null : new Date(cached.lastEventAt).toISOString(),
     lastEventKind: cached.lastEventKind,
+    unseen: days === null ? null : { days, isLong: days >= day.retest.missingDays },
     worstFinding: worst ? { code: worst.code, severity: worst.severity } : null,
     findingCodes: [...new Set(findings.map(({ code }) => code))],
   }

@@ -31,14 +31,14 @@ export function fleetCsvHeads(columns: readonly FleetColumn[], unit: MassUnit): 
  * Units: masses in the heads' unit; months YYYY-MM, instants ISO 8601.
  * Rounding: net and tare to the nearest division; limit, room and stop weight down, also below zero.
  */
-export function fleetCsvRow(row: CylinderRow, columns: readonly FleetColumn[], unit: MassUnit, now: number): Cell[] {
-  return columns.flatMap(column => cells(row, column, csvUnit(unit), now)).map(cell => typeof cell === 'string' ? csvText(cell) : cell)
+export function fleetCsvRow(row: CylinderRow, columns: readonly FleetColumn[], unit: MassUnit): Cell[] {
+  return columns.flatMap(column => cells(row, column, csvUnit(unit))).map(cell => typeof cell === 'string' ? csvText(cell) : cell)
 }
 
-function cells(row: CylinderRow, column: FleetColumn, unit: CsvUnit, now: number): Cell[] {
+function cells(row: CylinderRow, column: FleetColumn, unit: CsvUnit): Cell[] {
   switch (column) {
     case 'code': return [row.labelCode && formatLabelCode(row.labelCode)]
-    case 'verdict': return [rowVerdict(row, now).text]
+    case 'verdict': return [rowVerdict(row).text]
     case 'refrigerant': return [row.refrigerant ?? (row.nothingInIt ? 'none' : 'unknown')]
     case 'net': return [figure(row.netGrams, unit, 'nearest'), figure(row.fillLimitGrams, unit, 'down')]
     case 'rule': return [row.governingRule ? RULE_WORDS[row.governingRule] : row.nothingInIt ? 'by refrigerant' : null]

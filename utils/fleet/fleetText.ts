@@ -31,7 +31,7 @@ export interface Reader { unit: MassUnit, now: number, timeZone: string }
 export function fleetText(row: CylinderRow, reader: Reader): FleetText {
   const { unit, now, timeZone } = reader
   return {
-    verdict: rowVerdict(row, now),
+    verdict: rowVerdict(row),
     refrigerant: row.refrigerant ?? (row.nothingInIt ? 'none' : 'unknown'),
     netReason: netReason(row, unit),
     rule: row.governingRule ? shortRule(row.governingRule) : row.nothingInIt ? 'by refrigerant' : '–',

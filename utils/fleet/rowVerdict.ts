@@ -6,8 +6,6 @@ import { scaleAccuracyGrams } from '../quantity/scale'
 /** A status of the screen and the word beside its shape. */
 export interface RowVerdict { kind: StatusKind, text: string }
 
-const DAY_MS = 86_400_000
-
 const LIFECYCLE_VERDICTS: Partial<Record<Lifecycle, RowVerdict>> = {
   condemned: { kind: 'stop', text: 'Condemned' },
   rejected: { kind: 'stop', text: 'Rejected at its test' },
@@ -53,10 +51,9 @@ const CAUTION_ORDER = Object.keys(CAUTION_WORDS) as FindingCode[]
 /**
  * The one line that the fleet says of a cylinder: the gravest thing known of it, in words.
  *
- * Order: an end of its life, a stop, what is not known, a caution, and only then that it may be used. `now` is the
- * present instant in milliseconds, from which the days without an event are counted.
+ * Order: an end of its life, a stop, what is not known, a caution, and only then that it may be used.
  */
-export function rowVerdict(row: CylinderRow, now: number): RowVerdict {
+export function rowVerdict(row: CylinderRow): RowVerdict {
   const ended = LIFECYCLE_VERDICTS[row.lifecycle]
   if (ended) return ended
   const away = awayWord(row)
@@ -65,7 +62,7 @@ export function rowVerdict(row: CylinderRow, now: number): RowVerdict {
     return { kind: 'stop', text: away ? `${away}, ${lowerFirst(word)}` : word }
   }
   if (away) return { kind: 'away', text: away }
-  return notKnown(row, now) ?? caution(row) ?? mayBeUsed(row)
+  return notKnown(row) ?? caution(row) ?? mayBeUsed(row)
 }
 
 /** Whether a cylinder is full on the screen: less room in it than the scale can tell. */
@@ -76,23 +73,15 @@ export function isFull(row: CylinderRow): boolean {
   return room >= 0 && room < scaleAccuracyGrams(row.tareWeightGrams + row.netGrams)
 }
 
-/** Whole days since the last event of a cylinder; null where it has none. */
-export function daysSinceLastEvent(row: CylinderRow, now: number): number | null {
-  return row.lastEventAt === null ? null : Math.max(0, Math.floor((now - Date.parse(row.lastEventAt)) / DAY_MS))
-}
-
 function awayWord(row: CylinderRow): string | null {
   if (row.lifecycle === 'at-reclaim') return 'At reclaim'
   if (row.lifecycle === 'at-test') return 'At test'
   return null
 }
 
-function notKnown(row: CylinderRow, now: number): RowVerdict | null {
+function notKnown(row: CylinderRow): RowVerdict | null {
   if (!row.nothingInIt && row.refrigerant === null) return { kind: 'unk', text: row.condition === 'mixed' ? 'Mixed, no limit' : 'Unknown, no limit' }
-  if (row.findingCodes.includes('not-seen')) {
-    const days = daysSinceLastEvent(row, now)
-    return { kind: 'unk', text: days === null ? 'Not seen' : days >= 90 ? `Missing? ${days} days` : `Not seen for ${days} days` }
-  }
+  if (row.unseen) return { kind: 'unk', text: row.unseen.isLong ? `Missing? ${row.unseen.days} days` : `Not seen for ${row.unseen.days} days` }
   if (row.tareWeightGrams === null || row.waterCapacityGrams === null) return { kind: 'unk', text: 'Stamp unknown, no limit' }
   if (!row.nothingInIt && row.netGrams === null) return { kind: 'unk', text: 'Not weighed' }
   return null

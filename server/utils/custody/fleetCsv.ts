@@ -14,7 +14,7 @@ export async function fleetCsv(db: Database, query: FleetListQuery, nowMs: numbe
   const first = await fleet(db, { ...list, cursor: undefined, limit: ROWS_AT_ONCE }, nowMs)
   async function* blocks(): AsyncGenerator<CsvLine[]> {
     for (let page = first; ;) {
-      yield page.items.map(row => fleetCsvRow(row, columns, unit, nowMs))
+      yield page.items.map(row => fleetCsvRow(row, columns, unit))
       if (page.nextCursor === null) return
       page = await fleet(db, { ...list, cursor: page.nextCursor, limit: ROWS_AT_ONCE }, nowMs)
     }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { did, filled, folded, kg, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, type Told } from '~~/tests/helpers/custody'
+import { DAY, did, filled, folded, kg, registered, REQUALIFIER, STAMP, START, VIEW_CONTEXT, type Told } from '~~/tests/helpers/custody'
 import { cacheRow, rowToday } from '~~/utils/custody/row'
 import { view } from '~~/utils/custody/view'
 import type { ChoiceParagraph } from '~~/utils/requalification/ownerChoice'
@@ -50,6 +50,12 @@ describe('a line of the fleet', () => {
     for (const paragraphs of [[], ['180.209(e)'], ['180.209(g)', '180.209(b)']] as ChoiceParagraph[][]) {
       expect(view(state, context(paragraphs)).requalification.dueMonth).toBe(cacheRow(state, context(paragraphs)).dueMonth)
     }
+  })
+
+  it('counts from when it was seen: a label stuck on is no sight of it', () => {
+    const story = [registered(), did('labelled', { code: '7K3M9Q2TX' }, { occurredAt: START + 20 * DAY })]
+    const on = (days: number) => row(story, START + days * DAY).unseen
+    expect([29, 30, 89, 90].map(on)).toEqual([null, { days: 30, isLong: false }, { days: 89, isLong: false }, { days: 90, isLong: true }])
   })
 
   it('keeps a net of nothing apart from a net that nobody knows', () => {

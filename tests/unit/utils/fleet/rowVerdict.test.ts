@@ -2,54 +2,52 @@ import { describe, expect, it } from 'vitest'
 import { isFull, rowVerdict } from '../../../../utils/fleet/rowVerdict'
 import { cylinderRow } from '../../../helpers/cylinderRow'
 
-const NOW = Date.parse('2026-12-01T12:00:00Z')
-
 describe('the word that the fleet says of a cylinder', () => {
   it('is that it may be used where nothing speaks against it', () => {
-    expect(rowVerdict(cylinderRow(), NOW)).toEqual({ kind: 'ok', text: 'Usable' })
-    expect(rowVerdict(cylinderRow({ nothingInIt: true, netGrams: null }), NOW)).toEqual({ kind: 'ok', text: 'Empty, usable' })
+    expect(rowVerdict(cylinderRow())).toEqual({ kind: 'ok', text: 'Usable' })
+    expect(rowVerdict(cylinderRow({ nothingInIt: true, netGrams: null }))).toEqual({ kind: 'ok', text: 'Empty, usable' })
   })
 
   it('is the stop, before any caution', () => {
     const row = cylinderRow({ worstFinding: { code: 'overfill', severity: 'stop' }, findingCodes: ['overfill', 'retest-soon'] })
-    expect(rowVerdict(row, NOW)).toEqual({ kind: 'stop', text: 'Overfilled' })
+    expect(rowVerdict(row)).toEqual({ kind: 'stop', text: 'Overfilled' })
   })
 
   it('is that something unknown is in it, never that it is usable', () => {
-    expect(rowVerdict(cylinderRow({ refrigerant: null }), NOW)).toEqual({ kind: 'unk', text: 'Unknown, no limit' })
-    expect(rowVerdict(cylinderRow({ refrigerant: null, condition: 'mixed' }), NOW)).toEqual({ kind: 'unk', text: 'Mixed, no limit' })
-    expect(rowVerdict(cylinderRow({ netGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Not weighed' })
-    expect(rowVerdict(cylinderRow({ waterCapacityGrams: null }), NOW)).toEqual({ kind: 'unk', text: 'Stamp unknown, no limit' })
+    expect(rowVerdict(cylinderRow({ refrigerant: null }))).toEqual({ kind: 'unk', text: 'Unknown, no limit' })
+    expect(rowVerdict(cylinderRow({ refrigerant: null, condition: 'mixed' }))).toEqual({ kind: 'unk', text: 'Mixed, no limit' })
+    expect(rowVerdict(cylinderRow({ netGrams: null }))).toEqual({ kind: 'unk', text: 'Not weighed' })
+    expect(rowVerdict(cylinderRow({ waterCapacityGrams: null }))).toEqual({ kind: 'unk', text: 'Stamp unknown, no limit' })
   })
 
   it('is never that it is usable where a limit is known and no stop weight can be given', () => {
     const barred = { stopWeightGrams: null, exactStopWeightGrams: null, roomGrams: null }
-    expect(rowVerdict(cylinderRow(barred), NOW)).toEqual({ kind: 'unk', text: 'No stop weight' })
-    expect(rowVerdict(cylinderRow({ ...barred, findingCodes: ['retest-soon'] }), NOW).text).toBe('No stop weight')
-    expect(rowVerdict(cylinderRow({ ...barred, findingCodes: ['retest-overdue'] }), NOW).text).toBe('Retest overdue')
-    expect(rowVerdict(cylinderRow({ findingCodes: ['retest-soon'] }), NOW)).toEqual({ kind: 'att', text: 'Usable, retest soon' })
+    expect(rowVerdict(cylinderRow(barred))).toEqual({ kind: 'unk', text: 'No stop weight' })
+    expect(rowVerdict(cylinderRow({ ...barred, findingCodes: ['retest-soon'] })).text).toBe('No stop weight')
+    expect(rowVerdict(cylinderRow({ ...barred, findingCodes: ['retest-overdue'] })).text).toBe('Retest overdue')
+    expect(rowVerdict(cylinderRow({ findingCodes: ['retest-soon'] }))).toEqual({ kind: 'att', text: 'Usable, retest soon' })
   })
 
   it('counts a net of nothing as a weight', () => {
-    expect(rowVerdict(cylinderRow({ netGrams: 0 }), NOW).text).toBe('Usable')
+    expect(rowVerdict(cylinderRow({ netGrams: 0 })).text).toBe('Usable')
   })
 
-  it('asks whether it is missing from the ninetieth day on', () => {
-    const unseen = (lastEventAt: string) => rowVerdict(cylinderRow({ lastEventAt, findingCodes: ['not-seen'] }), NOW).text
-    expect(unseen('2026-09-03T12:00:00Z')).toBe('Not seen for 89 days')
-    expect(unseen('2026-09-02T12:00:00Z')).toBe('Missing? 90 days')
+  it('says for how long nobody has seen it, and asks whether it is missing, whatever paper was written since', () => {
+    const unseen = (days: number, isLong: boolean) => rowVerdict(cylinderRow({ lastEventKind: 'labelled', unseen: { days, isLong }, findingCodes: ['not-seen'] })).text
+    expect(unseen(45, false)).toBe('Not seen for 45 days')
+    expect(unseen(60, true)).toBe('Missing? 60 days')
   })
 
   it('says where a cylinder is that is away, and the stop that stands on it', () => {
-    expect(rowVerdict(cylinderRow({ lifecycle: 'at-test' }), NOW)).toEqual({ kind: 'away', text: 'At test' })
+    expect(rowVerdict(cylinderRow({ lifecycle: 'at-test' }))).toEqual({ kind: 'away', text: 'At test' })
     const late = cylinderRow({ lifecycle: 'at-test', worstFinding: { code: 'retest-overdue', severity: 'stop' }, findingCodes: ['retest-overdue'] })
-    expect(rowVerdict(late, NOW)).toEqual({ kind: 'stop', text: 'At test, retest overdue' })
+    expect(rowVerdict(late)).toEqual({ kind: 'stop', text: 'At test, retest overdue' })
   })
 
   it('shows a late retest before a near one and a full cylinder as full', () => {
-    expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full', 'retest-overdue'] }), NOW).text).toBe('Retest overdue')
-    expect(rowVerdict(cylinderRow({ findingCodes: ['retest-soon', 'nearly-full'], netGrams: 16_500, roomGrams: 772 }), NOW).text).toBe('Nearly full')
-    expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full'], netGrams: 17_200, roomGrams: 72 }), NOW).text).toBe('Full')
+    expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full', 'retest-overdue'] })).text).toBe('Retest overdue')
+    expect(rowVerdict(cylinderRow({ findingCodes: ['retest-soon', 'nearly-full'], netGrams: 16_500, roomGrams: 772 })).text).toBe('Nearly full')
+    expect(rowVerdict(cylinderRow({ findingCodes: ['nearly-full'], netGrams: 17_200, roomGrams: 72 })).text).toBe('Full')
   })
 })
 

@@ -2,11 +2,18 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { DAY, FOLD_CONTEXT, recorded, START, VIEW_CONTEXT } from '~~/tests/helpers/custody'
 import { anyStory } from '~~/tests/helpers/custodyArbitraries'
+import type { Finding } from '~~/utils/custody/finding'
 import { fold } from '~~/utils/custody/fold'
 import { cacheRow, rowToday } from '~~/utils/custody/row'
 import { view } from '~~/utils/custody/view'
 
 const RUNS = { numRuns: 200 }
+
+/** What a row says in numbers of what the cylinder's page says in words. */
+function unseenIn(findings: readonly Finding[]) {
+  const text = findings.find(({ code }) => code === 'not-seen')?.text
+  return text === undefined ? null : { days: Number(/for (\d+) days/.exec(text)![1]), isLong: text.startsWith('Missing?') }
+}
 
 describe('any story', () => {
   it('gives the same cylinder, movements and findings in whatever order it arrives', () => {
@@ -85,6 +92,7 @@ describe('any story', () => {
         spec: shown.stamp?.spec ?? null,
         place: shown.place,
         holder: shown.holder,
+        owner: shown.owner,
         refrigerant: shown.contents.refrigerant,
         condition: shown.contents.condition,
         lifecycle: shown.lifecycle,
@@ -100,6 +108,7 @@ describe('any story', () => {
         dueMonth: shown.requalification.dueMonth,
         lastEventAt: shown.lastEventAt,
         lastEventKind: state.lastEventKind,
+        unseen: unseenIn(shown.findings),
         worstFinding: shown.findings[0] ? { code: shown.findings[0].code, severity: shown.findings[0].severity } : null,
         findingCodes: [...new Set(shown.findings.map(({ code }) => code))],
       })
