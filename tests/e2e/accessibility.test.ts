@@ -230,8 +230,8 @@ const PRESSED: Record<string, Screen> = {
     await page.getByRole('dialog').waitFor()
   } },
   'a log that was verified': { as: auditor, at: () => '/log', after: async (page) => {
-    await page.getByRole('button', { name: 'Verify the log' }).click()
-    await page.getByRole('button', { name: 'Verify again' }).waitFor()
+    await page.getByRole('button', { name: 'Verify all' }).click()
+    await page.getByText('Unbroken').waitFor()
   } },
 }
 

@@ -157,8 +157,8 @@ describe('a cylinder from its label to the auditor', () => {
     for (const text of texts) expect(text.match(/\d{1,2}:\d\d/g)?.length).toBeGreaterThanOrEqual(2)
 
     await page.goto(`${server.baseUrl}/log`, { waitUntil: 'networkidle' })
-    await page.getByRole('button', { name: 'Verify the log' }).click()
-    await page.getByText(/6 events/).first().waitFor()
+    await page.getByRole('button', { name: 'Verify all' }).click()
+    await page.getByText(/Checked 6 events/).first().waitFor()
     const verdict = await shop.auditor.client.get('/api/log/verify')
     expect(verdict.body).toMatchObject({ ok: true, checked: 6, cylinders: 1 })
     await context.close()
