@@ -1,4 +1,4 @@
-import { wallClock } from './instant'
+import { formatDay, wallClock } from './instant'
 
 /** A calendar day as 'YYYY-MM-DD'. */
 export type Day = string
@@ -26,6 +26,12 @@ export function dayBefore(day: Day): Day {
 export function dayOfInstant(ms: number, timeZone: string): Day {
   const { year, month, day } = wallClock(ms, timeZone)
   return `${String(year).padStart(4, '0')}-${two(month)}-${two(day)}`
+}
+
+/** A day with its year. @example formatWholeDay('2026-10-14') // '14 Oct 2026' */
+export function formatWholeDay(day: Day): string {
+  // A day has no zone: its midnight is written and read in the same one.
+  return `${formatDay(Date.parse(`${day}T00:00:00Z`), 'UTC')} ${Number(day.slice(0, 4))}`
 }
 
 /**

@@ -2,7 +2,7 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
 import ScaleTable from '~~/components/scale/ScaleTable.vue'
 import type { ScaleLine } from '~~/utils/contract/scales'
-import { allByRole } from '../../helpers/roles'
+import { allByRole, byRole } from '../../helpers/roles'
 
 const scale = (id: string, changes: Partial<ScaleLine>): ScaleLine => ({
   id, name: `Scale ${id}`, accuracy: { unit: 'oz', value: 0.5 }, accuracyPercent: 0.5, lastCheckOn: null, active: true, ...changes,
@@ -14,7 +14,7 @@ describe('the list of scales', () => {
     const table = await mountSuspended(ScaleTable, { props: { scales, today: '2026-12-01', mayManage: false } })
     const rows = table.findAll('tbody tr').map(row => row.text())
     expect(rows[0]).not.toContain('over a year ago')
-    expect(rows[1]).toContain('over a year ago')
+    expect(rows[1]).toContain('15 Jun 2024, over a year ago')
     expect(rows[2]).toContain('not known')
     expect(allByRole(table.element, 'button')).toHaveLength(0)
   })
@@ -22,7 +22,7 @@ describe('the list of scales', () => {
   it('lets who may change one and turn it off', async () => {
     const shop = scale('a', {})
     const table = await mountSuspended(ScaleTable, { props: { scales: [shop, scale('b', { active: false })], today: '2026-12-01', mayManage: true } })
-    const [change, off, , again] = allByRole(table.element, 'button')
+    const [change, off, , again] = allByRole(byRole(table.element, 'table'), 'button')
     change!.click()
     off!.click()
     expect(again!.textContent).toContain('Use again')

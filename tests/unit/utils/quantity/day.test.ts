@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { dayAfter, dayBefore, dayOfInstant, firstInstantOfDay, isDay } from '~~/utils/quantity/day'
+import { dayAfter, dayBefore, dayOfInstant, firstInstantOfDay, formatWholeDay, isDay } from '~~/utils/quantity/day'
 
 describe('a day of the calendar', () => {
   it('is one that the month has, in leap years one more', () => {
@@ -32,4 +32,9 @@ describe('a day in the firm\'s time zone', () => {
     expect(dayOfInstant(midnight - 1, 'America/Chicago')).toBe('2026-12-14')
     expect(dayOfInstant(midnight, 'America/Chicago')).toBe('2026-12-15')
   })
+})
+
+it('is written with its year', () => {
+  expect(formatWholeDay('2026-10-14')).toBe('14 Oct 2026')
+  expect(formatWholeDay('2025-01-01')).toBe('1 Jan 2025')
 })
