@@ -4,6 +4,7 @@ export const ICONS = {
   'arrow-out': 'M12 16V4M7 9l5-5 5 5M5 20h14',
   'arrow-right': 'M4 12h15M13 6l6 6-6 6',
   'box': 'M4 9l2-5h12l2 5v11H4zM4 9h16M10 14h4',
+  'fold': 'M5 9l7 7 7-7',
   'gauge': 'M5 18a9 9 0 1 1 14 0M12 13l4-4',
   'barrier': 'M3 7h18v6H3zM9 7l-3 6M15 7l-3 6M21 7l-3 6M6 13v7M18 13v7',
   'camera': 'M3 7h5l2-3h4l2 3h5v13H3zM12 9.5a4 4 0 1 0 0 8a4 4 0 1 0 0-8',

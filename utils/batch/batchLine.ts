@@ -2,6 +2,7 @@ import type { CylinderView } from '../custody/cylinderView'
 import type { CustodyEvent } from '../custody/event'
 import type { ProblemDetails } from '../contract/problem'
 import { formatLabelCode, isLabelCode } from '../label/code'
+import { codeOrSerial } from '../label/codeOrSerial'
 import type { MassUnit } from '../quantity/mass'
 import { batchVerdict, type BatchQuestion, type BatchVerdict } from './batchVerdict'
 
@@ -43,7 +44,7 @@ export function batchLine(scan: BatchScan, question: Omit<BatchQuestion, 'keepRe
   const { labelCode, stamp } = found.view
   return {
     ...scan,
-    name: labelCode && !isChosen ? formatLabelCode(labelCode) : `SN ${stamp?.serial ?? '–'}`,
+    name: codeOrSerial({ labelCode: isChosen ? null : labelCode, serial: stamp?.serial ?? null }),
     verdict: batchVerdict(found.view, { ...question, keepReason, isChosen }, unit),
   }
 }
