@@ -3,6 +3,7 @@ import { foldContext } from '../custody/foldContext'
 import { LOG_COLUMNS, recordedEvent, type LogRow } from '../custody/logRow'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
+import { exportedPhotos } from '../files/exportedPhotos'
 import { allCheckpoints } from './checkpoints'
 import { linesBetween } from './lines'
 import type { Sealing } from './sealing'
@@ -15,7 +16,8 @@ const FORMAT = { format: 'custody-log', version: 1 }
  * and the places of the firms that contents depend on, the checkpoints, then for each cylinder its lines in the order of recording and the net that the fleet shows for it.
  *
  * A line holds the columns of the log in the order that the first one names; its hash is taken of them. The log is given
- * as it stood when the export began.
+ * as it stood when the export began. Before its end stand the photos with the hashes of their files; they are no part of
+ * the chains.
  */
 export async function* exportedLog(db: Database, { origin, trusted }: Sealing, from: Directory, now: number): AsyncGenerator<string> {
   const checkpoints = await allCheckpoints(db)
@@ -53,6 +55,7 @@ export async function* exportedLog(db: Database, { origin, trusted }: Sealing, f
     yield textOf([{ cylinder: netOf(open, nets, from) }])
     cylinders++
   }
+  for await (const lines of exportedPhotos(db)) yield textOf(lines)
   yield textOf([{ end: { events, cylinders, checkpoints: checkpoints.length } }])
 }
 

@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { cylinderPhotos } from '../../../server/utils/files/cylinderPhotos'
+import { exportedPhotos } from '../../../server/utils/files/exportedPhotos'
 import { keepPhoto } from '../../../server/utils/files/keepPhoto'
 import type { PhotoFiles } from '../../../server/utils/files/photoFiles'
 import type { Upload } from '../../../utils/contract/uploads'
@@ -129,6 +130,21 @@ describe('the photos of an event', () => {
     expect((await photos())[0]!.photos.map(({ subject, putAt, by }) => [subject, putAt, by.name])).toEqual([
       ['scale', '1970-01-01T00:00:05.000Z', 'Person 1'], ['damage', '1970-01-01T00:00:07.000Z', 'Person 2'],
     ])
+  })
+
+  it('go with the export of the log, each with the hash of its file', async () => {
+    const eventId = await weighed()
+    const [one, two] = [photo(), photo({ eventId, file: redAndBlue(80, 40) })]
+    const { contentHash } = await keep(one)
+    await keep(two, log.technician, 7_000)
+    const lines: object[] = []
+    for await (const some of exportedPhotos(log.db)) lines.push(...some)
+    expect(lines).toMatchObject([
+      { photo: { id: one.id, contentHash, sentBy: log.technician.personId, arrivedAt: 1_000 } },
+      { photo: { id: two.id } },
+      { photoPut: { photoId: two.id, eventId, putBy: log.technician.personId, putAt: 7_000 } },
+    ])
+    expect(lines[0]).not.toHaveProperty('photo.rowid')
   })
 
   it('belong to an event that there is', async () => {
