@@ -39,7 +39,7 @@ export interface LogHead { seq: number, events: number, checkpoint: CheckpointLi
 
 /** Something that verifying found. */
 export interface LogDamage {
-  /** One of `DAMAGE_KINDS`. */
+  /** A code: what is wrong. */
   kind: string
   cylinderId: string | null
   version: number | null

@@ -1,13 +1,5 @@
-/** What may be wrong with a log, its checkpoints, or what is made from it. */
-export const DAMAGE_KINDS = [
-  'changed', 'missing-before', 'unlinked', 'missing-number', 'unreadable',
-  'fewer-than-checkpointed', 'not-as-checkpointed', 'checkpoint-missing', 'checkpoint-forged', 'checkpoint-other-key',
-  'row-differs', 'movements-differ', 'labels-differ',
-] as const
-export type DamageKind = (typeof DAMAGE_KINDS)[number]
-
-/** What each kind of damage says, as the end of a sentence about a line, a checkpoint or a cylinder. */
-export const DAMAGE_WORDS: Record<DamageKind, string> = {
+/** What may be wrong with a log, its checkpoints, or what is made from it: each as the end of a sentence about a line, a checkpoint or a cylinder. */
+export const DAMAGE_WORDS = {
   'changed': 'one of its columns was changed',
   'missing-before': 'a line before it is missing, or its version was changed',
   'unlinked': 'it does not follow the line before it',
@@ -21,4 +13,6 @@ export const DAMAGE_WORDS: Record<DamageKind, string> = {
   'row-differs': 'its row in the fleet is not what its log gives',
   'movements-differ': 'its movements or its stock are not what its log gives',
   'labels-differ': 'its labels are not what its log gives',
-}
+} as const satisfies Record<string, string>
+
+export type DamageKind = keyof typeof DAMAGE_WORDS

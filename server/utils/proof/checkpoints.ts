@@ -54,10 +54,20 @@ async function make(db: Database, sealing: Sealing, now: number, askedBy: string
       args: [number, note, askedBy, before?.number ?? null],
     }])
     if (written!.rows.length === 0) continue
-    keepCopy(sealing.copies, note)
+    copyOrSay(sealing.copies, number, note)
     return stored({ number, note, askedBy })
   }
   throw problem(503, 'Try again', 'Other checkpoints were being made at the same time.')
+}
+
+// It is signed and stored: that its copy could not be kept must not make it look as if it were not.
+function copyOrSay(file: string, number: number, note: string): void {
+  try {
+    keepCopy(file, note)
+  }
+  catch (error) {
+    console.error(`No copy of checkpoint ${number} could be kept beside the database:`, String(error))
+  }
 }
 
 /** Every checkpoint, oldest first. */
