@@ -114,7 +114,7 @@ describe('loading a van with twelve from a rack', () => {
 
   it('checks against the very cylinders that it was asked for, by code and by id', async () => {
     const [one, two] = await onTheRack(2)
-    const { page, context, said } = await onPage(shop.warehouse.client, `/batch?act=move&to=${shop.shop.id}&expect=${one!.labelCode},${two!.id}`)
+    const { page, context, said } = await onPage(shop.warehouse.client, `/batch?act=move&to=${van.id}&expect=${one!.labelCode},${two!.id}`)
     const scanner = await handScanner(page)
     await page.getByText('Expected 2: 0 scanned, 2 missing').waitFor()
     await scanner.scan(addressOf(stray.labelCode!), { enter: true })
@@ -123,9 +123,9 @@ describe('loading a van with twelve from a rack', () => {
     await scanner.scan(addressOf(two!.labelCode!), { enter: true })
     await page.getByText('Expected 2: 1 scanned, 1 missing').waitFor()
     expect(await page.getByRole('list', { name: 'Missing' }).innerText()).toContain(formatLabelCode(one!.labelCode!))
-    await page.getByRole('button', { name: 'Move 1 to North shop' }).click()
-    await page.getByText('1 moved to North shop').waitFor()
-    expect(await Promise.all([one!, two!].map(async ({ id }) => (await cylinderNow(shop.manager.client, id)).place?.id))).toEqual([rack.id, shop.shop.id])
+    await page.getByRole('button', { name: 'Move 1 to Van 3' }).click()
+    await page.getByText('1 moved to Van 3').waitFor()
+    expect(await Promise.all([one!, two!].map(async ({ id }) => (await cylinderNow(shop.manager.client, id)).place?.id))).toEqual([rack.id, van.id])
     expect(said).toEqual([])
     await context.close()
   })

@@ -121,7 +121,7 @@ describe('what needs each person now', () => {
     const weighed = await registered(firm)
     const weighing = { ...eventOf(weighed.id, 'weighed'), supervisorId: firm.technician.id, details: { gross: lb(40) } }
     const [{ version }] = await posted(trainee.client, [weighing]) as [CylinderView]
-    expect(await lineOf(firm.technician, 'to-countersign')).toMatchObject({ number: 1, to: `/c/${weighed.labelCode!.toLowerCase()}/log` })
+    expect(await lineOf(firm.technician, 'to-countersign')).toMatchObject({ number: 1, to: '/countersign' })
     expect(await topicsOf(other)).not.toContain('to-countersign')
     expect(await lineOf(firm.manager, 'unsigned')).toMatchObject({ number: 1, reason: expect.stringMatching(/^1 with Tina\./) })
     await posted(firm.manager.client, [{ ...eventOf(weighed.id, 'corrected'), expects: version, details: { eventId: weighing.id, reason: 'another cylinder' } }])

@@ -26,27 +26,23 @@ function toCountersignLine({ count, cylinders }: UnsignedFacts): DraftLine {
     topic: 'to-countersign', kind: 'att', number: count,
     sentence: `${counted(count, 'entry of a trainee waits', 'entries of trainees wait')} for your signature.`,
     reason: `${listed(cylinders.map(cylinderName))}. Until you sign, no total that the law asks for counts ${count === 1 ? 'it' : 'them'}.`,
-    ...whereUnsigned(cylinders),
+    verb: count === 1 ? 'Read and sign it' : 'Read and sign them', to: '/countersign',
   }
 }
 
 function unsignedLine(all: readonly UnsignedFacts[]): DraftLine | null {
   const number = all.reduce((sum, { count }) => sum + count, 0)
   const cylinders = all.flatMap(one => one.cylinders)
+  const [first] = cylinders
   if (number === 0) return null
   return {
     topic: 'unsigned', kind: 'att', number,
     sentence: `${counted(number, 'entry of a trainee is', 'entries of trainees are')} not countersigned.`,
     reason: `${listed(all.map(({ supervisor, count }) => supervisor === null ? `${count} without a supervisor` : `${count} with ${supervisor}`))}. No total that the law asks for counts ${number === 1 ? 'it' : 'them'}.`,
-    ...whereUnsigned(cylinders),
+    ...first && new Set(cylinders.map(({ id }) => id)).size === 1
+      ? { verb: 'Read it', to: `${cylinderPath(first)}/log` }
+      : { verb: 'Show the cylinders', to: fleetPath({ finding: 'unsigned' }) },
   }
-}
-
-function whereUnsigned(cylinders: UnsignedFacts['cylinders']): Pick<DraftLine, 'verb' | 'to'> {
-  const [first] = cylinders
-  return first && new Set(cylinders.map(({ id }) => id)).size === 1
-    ? { verb: 'Read it', to: `${cylinderPath(first)}/log` }
-    : { verb: 'Show the cylinders', to: fleetPath({ finding: 'unsigned' }) }
 }
 
 function checkLine({ last, newEvents }: LogCheckFacts, { now, timeZone }: NowReader): DraftLine | null {

@@ -213,10 +213,14 @@ describe('what a trainee recorded and nobody has countersigned', () => {
   const cylinder = { id: ID, labelCode: '7K3M9Q2TX', serial: null }
   const mine = { supervisor: 'Tina', count: 2, cylinders: [cylinder] }
 
-  it('waits for the supervisor it names, and leads to the log of the cylinder', () => {
+  it('waits for the supervisor it names, and leads to where it is signed', () => {
     expect(linesFor('technician', { toCountersign: mine })).toEqual([expect.objectContaining({
-      topic: 'to-countersign', kind: 'att', number: 2, sentence: '2 entries of trainees wait for your signature.', to: '/c/7k3m9q2tx/log',
+      topic: 'to-countersign', kind: 'att', number: 2, sentence: '2 entries of trainees wait for your signature.', verb: 'Read and sign them', to: '/countersign',
     })])
+  })
+
+  it('leads the manager to the log where it is all of one cylinder', () => {
+    expect(linesFor('manager', { unsigned: [mine] })[0]).toMatchObject({ number: 2, to: '/c/7k3m9q2tx/log' })
   })
 
   it('is told to the manager by supervisor, and the cylinders are listed where there are several', () => {
