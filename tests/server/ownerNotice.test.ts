@@ -45,8 +45,9 @@ describe('the notice to the owner', () => {
 
   it('of a rejected one names the last test that rejected it, as a correction left it', async () => {
     const { id, labelCode } = await registered(firm, { contents: 'evacuated' })
+    const first = { ...tested(id, 'rejected', '2026-05'), occurredAt: new Date(Date.now() - 3_600_000).toISOString() }
     const second = tested(id, 'rejected', '2026-06')
-    const [view] = await posted(firm.manager.client, [tested(id, 'rejected', '2026-05'), second])
+    const [view] = await posted(firm.manager.client, [second, first])
     await posted(firm.manager.client, [{ ...eventOf(id, 'corrected'), expects: view!.version, details: { eventId: second.id, reason: 'the month was April', instead: { ...second.details, month: '2026-04' } } }])
     const text = pdfTexts((await print(firm.auditor, labelCode!)).pdf).join('\n')
     expect(text).toContain('cylinder rejected at its test')
