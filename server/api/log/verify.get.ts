@@ -3,7 +3,7 @@ import { getRequestHeader, setResponseHeader } from 'h3'
 import { verifyQuery } from '../../../utils/contract/log'
 import { useDatabase } from '../../utils/database/currentDatabase'
 import { apiRoute } from '../../utils/http/apiRoute'
-import { resultOf } from '../../utils/proof/verifyLog'
+import { verdictOf } from '../../utils/proof/verifyLog'
 import { verifyScope, withProgress } from '../../utils/proof/verifyScope'
 
 /**
@@ -13,7 +13,7 @@ import { verifyScope, withProgress } from '../../utils/proof/verifyScope'
 export default apiRoute({ permission: 'log:verify', query: verifyQuery }, async ({ event, query }) => {
   const steps = verifyScope(useDatabase(), query.scope, Date.now())
   setResponseHeader(event, 'Vary', 'Accept')
-  if (!getRequestHeader(event, 'accept')?.includes('application/x-ndjson')) return resultOf(steps)
+  if (!getRequestHeader(event, 'accept')?.includes('application/x-ndjson')) return verdictOf(steps)
   setResponseHeader(event, 'Content-Type', 'application/x-ndjson; charset=utf-8')
   return Readable.from(withProgress(steps), { objectMode: false })
 })

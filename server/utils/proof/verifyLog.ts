@@ -67,11 +67,11 @@ export async function* verifying(db: Database, { now, sealing, since = null }: V
 
 /** The same without telling how far it has come. */
 export function verifyLog(db: Database, options: VerifyOptions): Promise<LogVerification> {
-  return resultOf(verifying(db, options))
+  return verdictOf(verifying(db, options))
 }
 
 /** What a verification found, once it is through. */
-export async function resultOf(steps: VerifySteps): Promise<LogVerification> {
+export async function verdictOf(steps: VerifySteps): Promise<LogVerification> {
   for (;;) {
     const step = await steps.next()
     if (step.done) return step.value

@@ -51,7 +51,7 @@ beforeAll(async () => {
   await makeCheckpoint(db, seal, NOW, null)
   await makeCheckpoint(db, seal, NOW + DAY, null)
   whole = await exportedLines(db, seal)
-}, 120_000)
+}, 300_000)
 afterAll(() => {
   db.close()
   rmSync(folder, { recursive: true, force: true })
@@ -82,7 +82,7 @@ function placeOf(sort: 'event' | 'cylinder' | 'checkpoint' | 'end', nth = 0): nu
   return whole.flatMap((line, at) => line.startsWith(`{"${sort}":`) ? [at] : [])[nth]!
 }
 
-describe('the checker of exports', { timeout: 60_000 }, () => {
+describe('the checker of exports', { timeout: 120_000 }, () => {
   it('finds no fault in the demo firm\'s, and every cylinder\'s net by its own reckoning', async () => {
     const { code, printed } = await check(whole)
     expect(printed.at(-1)).toMatch(/^[\d,]+ events of \d+ cylinders, 2 checkpoints: no fault found\.$/)

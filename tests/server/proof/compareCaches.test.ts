@@ -1,6 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { comparingCaches } from '../../../server/utils/proof/compareCaches'
-import { resultOf, verifyLog } from '../../../server/utils/proof/verifyLog'
+import { verdictOf, verifyLog } from '../../../server/utils/proof/verifyLog'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../../helpers/logDatabase'
 import { lb } from '../../helpers/stamps'
 
@@ -19,7 +19,7 @@ beforeAll(async () => {
 afterAll(() => log.close())
 
 function compare() {
-  return resultOf(comparingCaches(log.db, Date.now()))
+  return verdictOf(comparingCaches(log.db, Date.now()))
 }
 
 describe('what is made from the log, against the log', () => {
