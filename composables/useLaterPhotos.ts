@@ -20,8 +20,9 @@ export function useLaterPhotos() {
     },
   })
 
-  function mayAdd({ author }: LogLine): boolean {
-    return session.mayI('events:post') && (author.id === session.user?.id || can(session.access, 'events:correct-any'))
+  /** A signature and a correction saw nothing that could be shown. */
+  function mayAdd({ author, kind }: LogLine): boolean {
+    return kind !== 'countersigned' && kind !== 'corrected' && session.mayI('events:post') && (author.id === session.user?.id || can(session.access, 'events:correct-any'))
   }
 
   async function send() {

@@ -52,7 +52,7 @@ describe('a photo of the scale', () => {
     await page.locator('#act input[inputmode="decimal"]').first().fill('39')
     await page.getByRole('button', { name: /^Record/ }).click()
     await page.getByText('Recorded: weighed').first().waitFor()
-    await page.getByText('1 photo waits on this phone and goes when there is signal.').waitFor()
+    await page.getByText('1 photo waits on this device and goes when there is signal.').waitFor()
     expect(await photosOf(client, cylinder.id)).toMatchObject([{ photos: [], onTheWay: 1 }])
 
     await page.goto(`${server.baseUrl}/c/${cylinder.id}/log`, { waitUntil: 'networkidle' })
@@ -88,7 +88,7 @@ describe('a photo of the scale', () => {
     const dialog = page.getByRole('dialog')
     await dialog.getByLabel('Choose photos').setInputFiles([LARGE])
     await dialog.getByLabel('What photo 1 shows').selectOption({ label: 'Damage' })
-    await dialog.getByRole('button', { name: 'Send 1 photo' }).click()
+    await dialog.getByRole('button', { name: 'Send the photo' }).click()
     await page.locator('img[alt^="Photo of the damage"] >> visible=true').first().click()
     await page.getByRole('dialog').getByText('after it was recorded').waitFor()
     const [item] = await photosOf(shop.manager.client, cylinder.id)

@@ -16,7 +16,7 @@ describe('photos on their way', () => {
   it('say that nothing waits for them, and without signal that they wait here', async () => {
     expect((await mountSuspended(PhotoSending, { props: { ...STILL, waiting: 2, busy: true } })).text()).toBe('Sending 2 photos. What was recorded does not wait for them.')
     const waits = await mountSuspended(PhotoSending, { props: { ...STILL, waiting: 1, unreached: true } })
-    expect(waits.text()).toContain('1 photo waits on this phone and goes when there is signal.')
+    expect(waits.text()).toContain('1 photo waits on this device and goes when there is signal.')
     await waits.get('button').trigger('click')
     expect(waits.emitted('retry')).toHaveLength(1)
   })
