@@ -77,7 +77,7 @@ describe('what needs each person now', () => {
 
   it('is for warehouse and manager what a van came back without, until it is seen again', async () => {
     const lost = await registered(firm)
-    const van = await made<Place>(firm.admin.client, '/api/places', { name: 'Van 3', kind: 'van' })
+    const van = await made<Place>(firm.admin.client, '/api/places', { name: 'Van 3', kind: 'van', technicianId: other.id })
     await made(firm.warehouse.client, `/api/vans/${van.id}/check-ins`, { id: randomUUID(), found: [], missing: [lost.id] })
     expect(await lineOf(firm.warehouse, 'vans-short')).toMatchObject({ kind: 'unk', number: 1, sentence: 'Van 3 came back 1 short.', to: `/vans/${van.id}` })
     expect(await topicsOf(firm.technician)).not.toContain('vans-short')
