@@ -13,6 +13,7 @@ import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
 import { keepDemoPhotos } from '../../server/utils/demo/photos'
+import { massBalance } from '../../server/utils/records/massBalance'
 import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
@@ -126,6 +127,25 @@ describe('the demo firm', () => {
       if (view.contents.netGrams === null) continue
       expect(sums.get(view.id) ?? 0, view.labelCode ?? view.id).toBe(view.contents.inStock ? view.contents.netGrams : 0)
     }
+  })
+
+  it('closes the balance of every refrigerant with what the cylinders hold, and says how many are not known', async () => {
+    const { balances } = await massBalance(db, { from: '2026-01-01', to: '2026-12-01' }, NOW)
+    expect(balances.filter(({ account }) => !account.agrees)).toEqual([])
+    const held = new Map<string | null, number>()
+    const notKnown = new Map<string | null, number>()
+    for (const { contents } of await cylinderViews(db, await column('SELECT id FROM cylinders') as string[], { access: null, nowMs: NOW })) {
+      if (!contents.inStock || contents.nothingInIt) continue
+      const counted = contents.netGrams === null ? notKnown : held
+      counted.set(contents.refrigerant, (counted.get(contents.refrigerant) ?? 0) + (contents.netGrams ?? 1))
+    }
+    expect(held.size).toBeGreaterThan(5)
+    for (const { refrigerant, account } of balances) {
+      expect([refrigerant, account.closingGrams, account.stock.closing.notKnown]).toEqual([refrigerant, held.get(refrigerant) ?? 0, notKnown.get(refrigerant) ?? 0])
+    }
+    const causes = balances.flatMap(({ account }) => account.causes.filter(({ movements }) => movements > 0).map(({ cause }) => cause))
+    expect([...new Set(causes)]).toEqual(expect.arrayContaining(['recovered', 'drawn-same-system', 'renamed', 'shipped', 'lost', 'weighing']))
+    expect(balances.some(({ account }) => account.apart.movements > 0)).toBe(true)
   })
 
   it('has set its fill rule anew once, with a reason, and each row rests on the one in force', async () => {
