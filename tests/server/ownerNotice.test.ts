@@ -50,7 +50,7 @@ describe('the notice to the owner', () => {
     const [view] = await posted(firm.manager.client, [second, first])
     await posted(firm.manager.client, [{ ...eventOf(id, 'corrected'), expects: view!.version, details: { eventId: second.id, reason: 'the month was April', instead: { ...second.details, month: '2026-04' } } }])
     const text = pdfTexts((await print(firm.auditor, labelCode!)).pdf).join('\n')
-    expect(text).toContain('cylinder rejected at its test')
+    expect(text).toContain('Notice to the owner: cylinder rejected')
     expect(text).toContain('April 2026')
     expect(text).not.toContain('May 2026')
   })

@@ -38,7 +38,7 @@ export function ownerNotice(view: CylinderView, facts: NoticeFacts): Paper {
     foot: `Notice to the owner, ${nameOf(view)}, ${day}`,
     blocks: [
       { kind: 'text', text: ['To the owner:', owner.name, ...(owner.address === null ? [] : [owner.address])].join('\n') },
-      { kind: 'title', text: isCondemned ? 'Notice to the owner: cylinder condemned' : 'Notice to the owner: cylinder rejected at its test' },
+      { kind: 'title', text: isCondemned ? 'Notice to the owner: cylinder condemned' : 'Notice to the owner: cylinder rejected' },
       { kind: 'text', text: `The cylinder below is yours by our record. At its requalification it was ${isCondemned ? 'condemned' : 'rejected'}. Its owner is told of that in writing (49 CFR 180.205).` },
       { kind: 'facts', rows: cylinderRows(view) },
       { kind: 'heading', text: 'The test' },

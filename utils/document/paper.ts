@@ -52,7 +52,7 @@ export function paperPages({ sender, blocks, foot }: Paper): LabelDrawing[] {
 
 function rowsOf(block: PaperBlock): Row[] {
   switch (block.kind) {
-    case 'title': return [...wrapped(block.text, { size: SIZES.title, bold: true }), gap(GAP)]
+    case 'title': return [gap(GAP * 2, true), ...wrapped(block.text, { size: SIZES.title, bold: true }), gap(GAP)]
     case 'heading': return [gap(GAP, true), ...wrapped(block.text, { size: SIZES.heading, bold: true }).map(row => ({ ...row, keepsNext: true }))]
     case 'text': return [...wrapped(block.text, { size: SIZES.text }), gap(GAP)]
     case 'item': return [...wrapped(block.text, { size: SIZES.item, mark: '\u2013' }), gap(GAP / 2)]

@@ -94,11 +94,16 @@ export function foundByUse(since: number): Finding {
   }
 }
 
+/** A text that somebody typed, to stand within a sentence. */
+function withoutStop(typed: string): string {
+  return typed.replace(/\.+$/, '')
+}
+
 /** Somebody set it apart. */
 export function setApart(since: number, reasons: readonly string[]): Finding {
   return {
     code: 'quarantined', severity: 'stop', source: OWN_RULE, since: sinceText(since),
-    text: `Set apart: ${reasons.map(sentence).join(' ')} Put nothing in until a manager releases it.`,
+    text: `Set apart: ${sentence(reasons.map(withoutStop).join('; '))} Put nothing in until a manager releases it.`,
   }
 }
 

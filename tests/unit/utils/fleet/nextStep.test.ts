@@ -7,6 +7,11 @@ describe('what to do with a cylinder next', () => {
     expect(nextStep(cylinderRow({ findingCodes: ['overfill', 'retest-overdue'] }))?.word).toBe('Draw it down')
   })
 
+  it('is to look for one that is missing, though it is overfilled: nobody draws down what nobody has', () => {
+    expect(nextStep(cylinderRow({ lifecycle: 'missing', findingCodes: ['overfill'] }))?.word).toBe('Look for it')
+    expect(nextStep(cylinderRow({ lifecycle: 'retired', findingCodes: ['overfill'] }))).toBeNull()
+  })
+
   it('is never to test a cylinder with something in it', () => {
     expect(nextStep(cylinderRow({ findingCodes: ['retest-overdue'] }))).toEqual({ word: 'Empty or ship it', screen: 'shipment' })
     expect(nextStep(cylinderRow({ findingCodes: ['retest-overdue'], nothingInIt: true, refrigerant: null }))).toEqual({ word: 'Send to test', screen: 'test-lot' })

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { contentsWord, verdictOf, verdictOfScan } from '../../../../utils/picture/verdict'
 import { fold } from '../../../../utils/custody/fold'
 import { view } from '../../../../utils/custody/view'
-import { did, filled, FOLD_CONTEXT, recorded, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, weighed, type Told } from '../../../helpers/custody'
+import { did, filled, FOLD_CONTEXT, LOT, recorded, registered, REQUALIFIER, STAMP, VIEW_CONTEXT, weighed, type Told } from '../../../helpers/custody'
 
 // Tare 12 kg, water capacity 20 kg: room for 16 kg of R-22 in the empty cylinder.
 function verdict(story: Told[], context: Partial<typeof VIEW_CONTEXT> = {}) {
@@ -56,6 +56,14 @@ describe('the first line said of a cylinder', () => {
   it('names the end of a condemned cylinder before all else that keeps it from being filled', () => {
     const condemned = did('retested', { month: '2026-07', method: 'visual', result: 'condemned', requalifierId: REQUALIFIER })
     expect(verdict([registered(), condemned, weighed(12)])).toMatchObject({ kind: 'stop', text: 'Condemned: never fill it again' })
+  })
+
+  it('says where it is not, and that it is set apart or retired', () => {
+    const said = (...told: Told[]) => verdict([registered(), filled('R-22', 20), ...told]).text
+    expect(said(did('missing', {}))).toBe('Do not fill: missing')
+    expect(said(did('sent-for-test', { lotId: LOT }))).toBe('Do not fill: at the test station')
+    expect(said(did('quarantined', { reason: 'no label' }))).toBe('Do not fill: set apart')
+    expect(said(did('quarantined', { reason: 'no label' }), did('retired', { reason: 'scrapped' }))).toBe('Retired: never fill it again')
   })
 
   it('names what is missing from the stamp', () => {

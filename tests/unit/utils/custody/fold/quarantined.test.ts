@@ -15,10 +15,10 @@ describe('a cylinder set apart', () => {
   })
 
   it('twice is held once, since the first time, for both reasons and no reason twice', () => {
-    const held = viewAfter([...full, apart('oil at the valve'), apart('smells burnt'), apart('oil at the valve')])
+    const held = viewAfter([...full, apart('oil at the valve.'), apart('smells burnt'), apart('oil at the valve.')])
     expect(held.holds).toEqual(['quarantined'])
     expect(held.findings[0]).toMatchObject({
-      text: 'Set apart: oil at the valve. smells burnt. Put nothing in until a manager releases it.', since: new Date(START + 2 * HOUR).toISOString(),
+      text: 'Set apart: oil at the valve; smells burnt. Put nothing in until a manager releases it.', since: new Date(START + 2 * HOUR).toISOString(),
     })
   })
 
