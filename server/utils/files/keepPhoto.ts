@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto'
 import type { InStatement } from '@libsql/client'
 import { eq } from 'drizzle-orm'
 import { attachments } from '../../../drizzle/schema'
@@ -9,7 +8,7 @@ import { pictureKind, type PictureKind } from '../../../utils/photo/pictureKind'
 import { HEIC_ADVICE } from '../../../utils/photo/words'
 import { statement, type Database } from '../database/database'
 import { problem } from '../http/problem'
-import { pictureName, thumbName } from './names'
+import { hashOf, pictureName, thumbName } from './names'
 import type { PhotoFiles } from './photoFiles'
 import { redrawPhoto } from './redrawPhoto'
 
@@ -24,7 +23,7 @@ type Attachment = typeof attachments.$inferSelect
  */
 export async function keepPhoto(db: Database, files: PhotoFiles, upload: Upload, access: Access, now: number): Promise<UploadAnswer> {
   const kind = takenKind(upload.file)
-  const sourceHash = sha256(upload.file)
+  const sourceHash = hashOf(upload.file)
   if (upload.eventId) await insistOnEvent(db, upload.eventId, access)
   const known = await sameAs(db, upload, sourceHash, access)
   const row = known ?? await draw(files, upload, kind, sourceHash, access, now)
@@ -73,7 +72,7 @@ async function sameAs(db: Database, upload: Upload, sourceHash: string, access: 
 
 async function draw(files: PhotoFiles, upload: Upload, kind: PictureKind, sourceHash: string, access: Access, now: number): Promise<Attachment> {
   const { picture, thumb, width, height } = await redrawPhoto({ bytes: upload.file, kind })
-  const contentHash = sha256(picture)
+  const contentHash = hashOf(picture)
   await files.keep(thumbName(contentHash), thumb)
   await files.keep(pictureName(contentHash), picture)
   return {
@@ -85,8 +84,4 @@ async function draw(files: PhotoFiles, upload: Upload, kind: PictureKind, source
 
 function answerOf({ id, contentHash, bytes, width, height }: Attachment): UploadAnswer {
   return { id, contentHash, bytes, width, height }
-}
-
-function sha256(bytes: Uint8Array): string {
-  return createHash('sha256').update(bytes).digest('hex')
 }

@@ -1,9 +1,8 @@
-import { createHash } from 'node:crypto'
 import { eq } from 'drizzle-orm'
 import { attachments } from '../../../drizzle/schema'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { pictureName, thumbName } from './names'
+import { hashOf, pictureName, thumbName } from './names'
 import type { PhotoFiles } from './photoFiles'
 
 /**
@@ -16,7 +15,7 @@ export async function photoFile(db: Database, files: PhotoFiles, id: string, siz
   if (!row) throw problem(404, 'Not known', 'There is no such photo.')
   const bytes = await files.read(size === 'thumb' ? thumbName(row.contentHash) : pictureName(row.contentHash))
   if (!bytes) throw problem(404, 'Its file is gone', 'The photo is in the book, and its file is not in the store of photos.', undefined, { type: 'file-gone' })
-  if (size === 'whole' && createHash('sha256').update(bytes).digest('hex') !== row.contentHash) {
+  if (size === 'whole' && hashOf(bytes) !== row.contentHash) {
     throw problem(500, 'Its file was changed', 'The file in the store of photos is not the one that was kept.', undefined, { type: 'file-changed' })
   }
   return bytes
