@@ -25,22 +25,28 @@ const ASKED: readonly FindingCode[] = ['weigh-again', 'not-registered']
  *
  * Where it cannot be judged here (no network for the log of the cylinder), it is judged after sending as always.
  */
-export function usePreview(input: { content: () => PreviewContent | null, at: () => string }) {
+export function usePreview(input: {
+  content: () => PreviewContent | null
+  at: () => string
+  /** The other half, where the event is one of what happens between two cylinders. */
+  counter?: () => PreviewContent | null
+}) {
   const api = useApi()
   const session = useSessionStore()
   const rules = useFirmRulesStore()
   const posting = usePostingStore()
   const load = useCatalogue()
   const findings = shallowRef<Finding[]>([])
-  let known: { cylinderId: string, recorded: number, input: FoldInput } | null = null
+  const known = new Map<string, { recorded: number, input: FoldInput }>()
   let timer: ReturnType<typeof setTimeout> | undefined
   let turn = 0
 
   async function foldInput(cylinderId: string): Promise<FoldInput> {
-    if (known?.cylinderId !== cylinderId || known.recorded !== posting.recorded) {
-      known = { cylinderId, recorded: posting.recorded, input: await api.get<FoldInput>(`/api/cylinders/${cylinderId}/fold`) }
-    }
-    return known.input
+    const before = known.get(cylinderId)
+    if (before?.recorded === posting.recorded) return before.input
+    const asked = { recorded: posting.recorded, input: await api.get<FoldInput>(`/api/cylinders/${cylinderId}/fold`) }
+    known.set(cylinderId, asked)
+    return asked.input
   }
 
   async function judge() {
@@ -51,22 +57,29 @@ export function usePreview(input: { content: () => PreviewContent | null, at: ()
       return
     }
     try {
-      const [{ catalogue, preview }, policy, known] = await Promise.all([load(), rules.load(), foldInput(content.cylinderId)])
+      const other = input.counter?.() ?? null
+      const [{ catalogue, preview }, policy, mineKnown, otherKnown] = await Promise.all([
+        load(), rules.load(), foldInput(content.cylinderId), other && foldInput(other.cylinderId),
+      ])
       if (mine !== turn) return
-      const at = input.at()
-      const draft = {
-        ...content, id: DRAFT_ID, deviceId: '', deviceSeq: Number.MAX_SAFE_INTEGER,
-        occurredAt: at === '' ? deviceNow() : deviceNow(new Date(at).getTime()),
-      } as AnyCustodyEvent
-      findings.value = preview(known.events, draft, viewContext(policy, catalogue, session.access, known)).findings
+      const counter = other && otherKnown ? { events: otherKnown.events, draft: draftOf(other) } : undefined
+      findings.value = preview(mineKnown.events, draftOf(content), viewContext(policy, catalogue, session.access, mineKnown), counter).findings
     }
     catch {
       if (mine === turn) findings.value = []
     }
   }
 
+  function draftOf(content: PreviewContent): AnyCustodyEvent {
+    const at = input.at()
+    return {
+      ...content, id: DRAFT_ID, deviceId: '', deviceSeq: Number.MAX_SAFE_INTEGER,
+      occurredAt: at === '' ? deviceNow() : deviceNow(new Date(at).getTime()),
+    } as AnyCustodyEvent
+  }
+
   // The same content drawn anew is not judged anew.
-  onMounted(() => watch(() => JSON.stringify([input.content(), input.at()]), () => {
+  onMounted(() => watch(() => JSON.stringify([input.content(), input.counter?.(), input.at()]), () => {
     clearTimeout(timer)
     timer = setTimeout(judge, WAIT_MS)
   }, { immediate: true }))

@@ -59,6 +59,8 @@ const SCREENS: Record<string, Screen[]> = {
     ...FORM_KINDS.map(kind => ({ as: warehouse, at: (demo: DemoFleet) => `/c/${demo.codes.usual}/act/${kind}` })),
     { as: 'trainee', at: demo => `/c/${demo.codes.usual}/act/weighed` },
   ],
+  'c/[ref]/act/transferred.vue': [{ as: technician, at: demo => `/c/${demo.codes.usual}/act/transferred` }],
+  'c/[ref]/act/exchanged.vue': [{ as: warehouse, at: demo => `/c/${demo.codes.usual}/act/exchanged` }],
   'c/[ref]/act/corrected.vue': [{ as: manager, at: demo => `/c/${demo.codes.usual}/act/corrected?event=${demo.event}` }],
   'c/[ref]/act/countersigned.vue': [{ as: technician, at: demo => `/c/${demo.codes.usual}/act/countersigned` }],
   'countersign.vue': [

@@ -1,6 +1,7 @@
 import type { AnyCustodyEvent, AnyRecordedEvent } from './event'
 import type { CylinderView } from './cylinderView'
 import type { Finding } from './finding'
+import type { Half } from './half'
 import { urgencyOrder } from './findings/order'
 import { fold } from './fold'
 import { view, type ViewContext } from './view'
@@ -16,14 +17,25 @@ export interface Preview {
  * Judges a draft as it would be judged once recorded, by the same rules, here or on the server.
  *
  * The author's clock is taken as right, for it is only measured when the event is sent.
+ *
+ * @param counter the other cylinder's events and its half, where the draft is one half of what happens between two.
  */
-export function preview(events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, context: ViewContext): Preview {
+export function preview(
+  events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, outside: ViewContext, counter?: { events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent },
+): Preview {
+  const context = counter ? { ...outside, otherHalves: halvesWith(counter, outside) } : outside
   const now = view(fold(events, context).state, context)
   const { state, steps } = fold([...events, recordedNow(events, draft, context)], context)
   const then = view(state, context)
   const raised = then.findings.filter(finding => !now.findings.some(({ code, severity }) => code === finding.code && severity === finding.severity))
   const told = steps.find(({ eventId }) => eventId === draft.id)?.findings ?? []
   return { view: then, findings: [...told, ...raised.filter(({ code }) => !told.some(other => other.code === code))].sort(urgencyOrder) }
+}
+
+/** What other cylinders say, with the half that is recorded of one of them at the same time. */
+function halvesWith({ events, draft }: { events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent }, context: ViewContext): Half[] {
+  const { halves } = fold([...events, recordedNow(events, draft, context)], context).state
+  return [...context.otherHalves.filter(({ cylinderId }) => cylinderId !== draft.cylinderId), ...halves]
 }
 
 function recordedNow(events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, { access, nowMs }: ViewContext): AnyRecordedEvent {

@@ -15,7 +15,7 @@ export interface PlannedActs {
 }
 
 // What a hand does most often comes first; the primary one is apart.
-const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'inspected', 'quarantined', 'released', 'missing', 'found', 'retired', 'countersigned']
+const ACTS: readonly EventKind[] = ['weighed', 'drawn', 'moved', 'handed-over', 'filled', 'transferred', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'exchanged', 'inspected', 'quarantined', 'released', 'missing', 'found', 'retired', 'countersigned']
 
 // Where there is nothing to lift, to find or to sign, these are not so much refused as without a meaning.
 const ONLY_WHERE_PLANNED: readonly EventKind[] = ['released', 'missing', 'found', 'countersigned']

@@ -13,7 +13,7 @@ const ENTRY: WaitingEntry = {
   line: {
     id: 'e', seq: 7, version: 2, kind: 'filled', occurredAt: at, effectiveAt: at, recordedAt: at, clockSkewSeconds: 0,
     author: TRAINEE, postedBy: TRAINEE, supervisor: { id: 's', name: 'S. Supervisor' }, place: null, note: 'at the creamery', practice: false, confirmed: [],
-    details: { refrigerant: 'R-410A', grossAfter: { unit: 'lb', value: 54.5 } }, names: {}, netBeforeGrams: 9072, netAfterGrams: 12_247,
+    details: { refrigerant: 'R-410A', grossAfter: { unit: 'lb', value: 54.5 } }, names: {}, otherCylinder: null, netBeforeGrams: 9072, netAfterGrams: 12_247,
     findings: [
       { code: 'unsigned', severity: 'caution', text: 'waits', source: '', since: null },
       { code: 'look-before-fill', severity: 'caution', text: 'not looked at', source: '', since: null },

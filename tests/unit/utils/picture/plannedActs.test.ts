@@ -49,7 +49,7 @@ describe('the likeliest act with a cylinder', () => {
 
   it('is never offered twice, nor to somebody who records nothing', () => {
     const view = viewAfter([registered(), filled('R-22', 20), weighed(20)])
-    expect(plannedActs(view, 'ok', access).others).toEqual(['weighed', 'drawn', 'moved', 'handed-over', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'inspected', 'quarantined', 'missing'])
+    expect(plannedActs(view, 'ok', access).others).toEqual(['weighed', 'drawn', 'moved', 'handed-over', 'transferred', 'checked', 'emptied', 'lost', 'labelled', 'received', 'returned', 'exchanged', 'inspected', 'quarantined', 'missing'])
     expect(plannedActs(view, 'ok', { personId: TECHNICIAN, roles: ['auditor'], trainee: false })).toMatchObject({ primary: null, others: [] })
     expect(plannedActs(view, 'ok', null)).toMatchObject({ primary: null, others: [] })
   })
