@@ -6,7 +6,6 @@ import { launchBrowser, listenForErrors } from '../helpers/browser'
 import { cylinderNow, openShop, registered, type Shop } from '../helpers/fleet'
 import { handScanner } from '../helpers/handScanner'
 import { startServer, type TestServer } from '../helpers/server'
-import { lb } from '../helpers/stamps'
 import { visit } from '../helpers/visit'
 
 let server: TestServer
