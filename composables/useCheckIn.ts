@@ -1,7 +1,7 @@
-import { v7 as uuidv7 } from 'uuid'
 import { useApi } from '~~/composables/useApi'
 import { useAttempt } from '~~/composables/useAttempt'
 import { useBatch } from '~~/composables/useBatch'
+import { useEventIds } from '~~/composables/useEventIds'
 import { useLoaded } from '~~/composables/useLoaded'
 import { useSessionStore } from '~~/stores/session'
 import { supervisorsFor, usualSupervisorId } from '~~/utils/access/supervisors'
@@ -27,8 +27,8 @@ export function useCheckIn(vanId: string) {
   const chosenSupervisorId = ref<string | null>(null)
   const stayingIds = ref(new Set<string>())
   const done = shallowRef<CheckedIn | null>(null)
-  // Under one id however often it is sent.
-  const id = uuidv7()
+  // The same under one id however often it is sent; what is found after all makes it another.
+  const checkInId = useEventIds()
   const foundIds = new Set<string>()
 
   // As it was when the check began: what comes off the van meanwhile was still expected.
@@ -92,7 +92,8 @@ export function useCheckIn(vanId: string) {
     const notFound = missing.value
     await batch.record()
     if (batch.problem.value || batch.counted.value.length > 0) return
-    const kept = await attempt(() => api.post(`/api/vans/${vanId}/check-ins`, { id, found: [...foundIds], missing: notFound.map(each => each.id) }))
+    const said = { found: [...foundIds], missing: notFound.map(each => each.id) }
+    const kept = await attempt(() => api.post(`/api/vans/${vanId}/check-ins`, { id: checkInId(JSON.stringify(said)), ...said }))
     if (!kept) return
     batch.startOver()
     const aboard = [...foundIds].filter(each => stayingIds.value.has(each)).length

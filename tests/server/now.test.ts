@@ -129,6 +129,31 @@ describe('what needs each person now', () => {
     expect(await lineOf(firm.manager, 'unsigned')).toBeUndefined()
   })
 
+  it('waits for the supervisor again once the signature was taken back', async () => {
+    const trainee = await addMember(firm.admin, 'Tess', ['technician'], { trainee: true })
+    const { id } = await registered(firm)
+    const weighing = { ...eventOf(id, 'weighed'), supervisorId: other.id, details: { gross: lb(40) } }
+    const signature = { ...eventOf(id, 'countersigned'), details: { eventId: weighing.id } }
+    await posted(trainee.client, [weighing])
+    expect(await lineOf(other, 'to-countersign')).toMatchObject({ number: 1 })
+    const [{ version }] = await posted(other.client, [signature]) as [CylinderView]
+    expect(await lineOf(other, 'to-countersign')).toBeUndefined()
+    await posted(other.client, [{ ...eventOf(id, 'corrected'), expects: version, details: { eventId: signature.id, reason: 'signed the wrong one' } }])
+    expect(await lineOf(other, 'to-countersign')).toMatchObject({ number: 1 })
+  })
+
+  it('is for manager and administrator a scale whose last check is over a year ago, while it is in use', async () => {
+    const scale = { accuracy: { unit: 'oz', value: 0.5 }, accuracyPercent: 0.25 }
+    const dayAgo = (days: number) => new Date(Date.now() - days * 86_400_000).toISOString().slice(0, 10)
+    await made(firm.manager.client, '/api/scales', { name: 'Dock', ...scale, lastCheckOn: dayAgo(360) })
+    expect(await topicsOf(firm.manager)).not.toContain('scale-checks')
+    const bench = await made<{ id: string }>(firm.manager.client, '/api/scales', { name: 'Bench', ...scale, lastCheckOn: dayAgo(370) })
+    for (const who of [firm.manager, firm.admin]) expect(await lineOf(who, 'scale-checks')).toMatchObject({ number: 1, reason: expect.stringMatching(/^Last check of Bench /), to: '/scales' })
+    expect(await topicsOf(firm.warehouse)).not.toContain('scale-checks')
+    await firm.manager.client.patch(`/api/scales/${bench.id}`, { active: false })
+    expect(await topicsOf(firm.manager)).not.toContain('scale-checks')
+  })
+
   it('says how far the log had come, and is nobody\'s who is not signed in', async () => {
     const { body: head } = await firm.manager.client.get<LogHead>('/api/log/head')
     expect((await firm.manager.client.get<NowAnswer>('/api/now')).body.seq).toBe(head.seq)

@@ -6,7 +6,7 @@ import type { VanAnswer, VansAnswer } from '../../utils/contract/vans'
 import type { CylinderView } from '../../utils/custody/cylinderView'
 import { eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
 import { startServer, type TestServer } from '../helpers/server'
-import { lb } from '../helpers/stamps'
+import { lb, stampOf } from '../helpers/stamps'
 
 let server: TestServer
 let firm: Shop
@@ -54,6 +54,39 @@ describe('a van', () => {
   })
 })
 
+describe('what is sent about a van under an id that is taken', () => {
+  it('is refused where it says something else or is of another van, and kept once where it is the same', async () => {
+    const other = await made<Place>(firm.admin.client, '/api/places', { name: 'Van 8', kind: 'van' })
+    const cylinder = await registered(firm)
+    const sent: [string, object, object][] = [
+      ['check-ins', { id: randomUUID(), found: [], missing: [] }, { found: [cylinder.id] }],
+      ['materials', { id: randomUUID(), gross: lb(80), note: '' }, { gross: lb(81) }],
+    ]
+    for (const [what, body, otherwise] of sent) {
+      const answered = async (place: Place, change: object = {}) => (await firm.technician.client.post(`/api/vans/${place.id}/${what}`, { ...body, ...change })).status
+      expect([await answered(other), await answered(other), await answered(other, otherwise), await answered(van)]).toEqual([201, 201, 409, 409])
+    }
+    expect((await shown(other.id)).materials).toMatchObject({ gross: { unit: 'lb', value: 80 } })
+  })
+})
+
+describe('a van with more cylinders than anybody would put there', () => {
+  it('is shown, summed and checked in with all of them', async () => {
+    const crowded = await made<Place>(firm.admin.client, '/api/places', { name: 'Van 9', kind: 'van' })
+    const ids = Array.from({ length: 201 }, () => randomUUID())
+    const registration = (id: string) => ({
+      ...eventOf(id, 'registered'), placeId: crowded.id,
+      details: { stamp: stampOf({ serial: `C${id.slice(0, 8)}` }), marks: [{ month: '2025-06' }], ownership: 'own', contents: 'evacuated' },
+    })
+    for (const some of [ids.slice(0, 150), ids.slice(150)]) await posted(firm.warehouse.client, some.map(registration))
+    expect((await shown(crowded.id)).aboard).toHaveLength(201)
+    const { body: all } = await firm.manager.client.get<VansAnswer>('/api/vans')
+    expect(all.items.find(line => line.van.id === crowded.id)!.aboard).toHaveLength(201)
+    await made(firm.warehouse.client, `/api/vans/${crowded.id}/check-ins`, { id: randomUUID(), found: [], missing: ids })
+    expect((await shown(crowded.id)).toLookFor).toHaveLength(201)
+  })
+})
+
 describe('a check-in', () => {
   it('names what it has missed until somebody has seen it', async () => {
     const [there, lost] = [await aboard(), await aboard()]
@@ -88,6 +121,15 @@ describe('which cylinder', () => {
     expect(body.items[0]).toMatchObject({ id: holds.id, reach: 'van', fit: 'whole', reasons: ['holds R-32'] })
     expect(body.items.find(({ id }) => id === inShop.id)).toMatchObject({ reach: 'shop', fit: 'whole', reasons: ['empty, evacuated'] })
     expect(body.items.filter(({ fit }) => fit === 'refused').map(({ reasons }) => reasons[0])).toContain('holds R-22')
+  })
+
+  it('is also asked of a second van of the same technician', async () => {
+    const second = await made<Place>(firm.admin.client, '/api/places', { name: 'Van 7b', kind: 'van', technicianId: firm.technician.id })
+    const { id } = await registered(firm, { contents: 'evacuated' })
+    await posted(firm.warehouse.client, [{ ...eventOf(id, 'moved'), details: { toPlaceId: second.id, toHolderId: firm.warehouse.id } }])
+    const { body } = await ask('refrigerant=R-32&amount=5lb')
+    expect(body.van).toMatchObject({ name: 'Van 7' })
+    expect(body.items.find(line => line.id === id)).toMatchObject({ reach: 'held', place: { name: 'Van 7b' } })
   })
 
   it('is none in a shop that waits for a shipment', async () => {

@@ -30,6 +30,12 @@ export function signaturesOf(standings: readonly Standing[]): ReadonlyMap<string
   return signedBy
 }
 
+/** The entries that wait for a signature. Shape: `standings` in order of effect. */
+export function waitingEntries(standings: readonly Standing[]): AnyRecordedEvent[] {
+  const signed = signaturesOf(standings)
+  return standings.filter(({ event, isOut }) => !isOut && needsSignature(event) && !signed.has(event.id)).map(({ event }) => event)
+}
+
 function mayHaveSigned(signature: AnyRecordedEvent, signed: AnyRecordedEvent): boolean {
   return needsSignature(signed) && !signature.trainee && signature.actorId === signed.supervisorId && signature.actorId !== signed.actorId
 }

@@ -2,15 +2,15 @@ import { daysBetween, formatNear } from '../quantity/instant'
 import { formatMass } from '../quantity/mass'
 import { MATERIALS_OF_TRADE } from '../transport/vanLoad'
 import { cylinderName } from '../shipment/changedLines'
-import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type ShortVanFacts } from './nowFacts'
+import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type ShortVanFacts, type VanFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
 
 /** The lines about what is aboard, full or lacking in the shop, on lists, and without a label. */
 export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
-  const { van, shortVans = [], full = [], fewEmpty = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
+  const { vans = [], shortVans = [], full = [], fewEmpty = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
   return [
-    van && vanLine(van, reader),
+    ...vans.map(van => vanLine(van, vans.length === 1, reader)),
     shortVansLine(shortVans, reader),
     ...full.map(one => fullLine(one, reader)),
     fewEmptyLine(fewEmpty),
@@ -22,8 +22,8 @@ export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
   ].filter(line => !!line)
 }
 
-function vanLine({ name, load }: NonNullable<NowFacts['van']>, { unit }: NowReader): DraftLine | null {
-  const shared = { topic: 'van-load', kind: 'att', verb: 'See what is aboard', to: '/van' } as const
+function vanLine({ id, name, load }: VanFacts, isOnly: boolean, { unit }: NowReader): DraftLine | null {
+  const shared = { topic: 'van-load', kind: 'att', verb: 'See what is aboard', ...isOnly ? { to: '/van' } : { which: id, to: `/vans/${id}` } } as const
   if (load.isOver) {
     return {
       ...shared, number: 1,

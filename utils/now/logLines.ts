@@ -34,14 +34,15 @@ function unsignedLine(all: readonly UnsignedFacts[]): DraftLine | null {
   const number = all.reduce((sum, { count }) => sum + count, 0)
   const cylinders = all.flatMap(one => one.cylinders)
   const [first] = cylinders
+  const many = new Set(cylinders.map(({ id }) => id)).size
   if (number === 0) return null
   return {
     topic: 'unsigned', kind: 'att', number,
-    sentence: `${counted(number, 'entry of a trainee is', 'entries of trainees are')} not countersigned.`,
+    sentence: `${counted(number, 'entry of a trainee is', 'entries of trainees are')} not countersigned${many > 1 ? `, on ${many} cylinders` : ''}.`,
     reason: `${listed(all.map(({ supervisor, count }) => supervisor === null ? `${count} without a supervisor` : `${count} with ${supervisor}`))}. No total that the law asks for counts ${number === 1 ? 'it' : 'them'}.`,
-    ...first && new Set(cylinders.map(({ id }) => id)).size === 1
+    ...first && many === 1
       ? { verb: 'Read it', to: `${cylinderPath(first)}/log` }
-      : { verb: 'Show the cylinders', to: fleetPath({ finding: 'unsigned' }) },
+      : { verb: `Show the ${many} cylinders`, to: fleetPath({ finding: 'unsigned' }) },
   }
 }
 

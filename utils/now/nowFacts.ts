@@ -1,4 +1,5 @@
 import type { CylinderRow } from '../custody/cylinderView'
+import type { Day } from '../quantity/day'
 import type { Month } from '../quantity/month'
 import type { VanLoad } from '../transport/vanLoad'
 import type { FleetQuestion, FleetTopic } from './fleetQuestions'
@@ -23,6 +24,12 @@ export interface ListFacts { count: number, id: string, number: number, since: n
 /** Lines of the custody log of the last days that an auditor looks at. */
 export interface EntryFacts { count: number, cylinders: number, newest: Pick<CylinderRow, 'id' | 'labelCode' | 'serial'> | null }
 
+/** What a person's own van carries. */
+export interface VanFacts { id: string, name: string, load: VanLoad }
+
+/** A scale that wants a check: its last one is over a year old, or known to nobody. */
+export interface ScaleFacts { name: string, lastCheckOn: Day | null }
+
 /** Cylinders that the last check-in of a van did not find, and that nobody has seen since; `checkedAt` in UTC milliseconds. */
 export interface ShortVanFacts { id: string, name: string, names: string[], checkedAt: number }
 
@@ -45,7 +52,7 @@ export interface NowFacts {
   unseen?: { days: number, longDays: number, longCount: number, holders: { name: string | null, count: number }[] }
   /** The last month within the firm's warning time. */
   lastSoonMonth: Month
-  van?: { name: string, load: VanLoad }
+  vans?: VanFacts[]
   full?: FullFacts[]
   /** Cylinders in use that wear no label. */
   unlabelled?: { count: number, first: CylinderRow[] }
@@ -56,6 +63,7 @@ export interface NowFacts {
   /** The next rule of the firm that begins soon. */
   rule?: { fromAt: number, isFillRule: boolean, count: number }
   shortVans?: ShortVanFacts[]
+  scaleChecks?: ScaleFacts[]
   fewEmpty?: FewEmptyFacts[]
   /** What waits for the signature of the person who reads. */
   toCountersign?: UnsignedFacts

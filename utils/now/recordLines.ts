@@ -1,11 +1,13 @@
+import { formatWholeDay } from '../quantity/day'
 import { formatNear } from '../quantity/instant'
-import type { NowFacts } from './nowFacts'
+import type { NowFacts, ScaleFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
 
-/** The lines about the firm's rules, people, letters and places. */
-export function recordLines({ rule, mailFailed, uncertified = [], notTakenUp = [], missing }: NowFacts, reader: NowReader): DraftLine[] {
+/** The lines about the firm's scales, rules, people, letters and places. */
+export function recordLines({ scaleChecks = [], rule, mailFailed, uncertified = [], notTakenUp = [], missing }: NowFacts, reader: NowReader): DraftLine[] {
   return [
+    scaleChecks.length > 0 && scaleLine(scaleChecks),
     rule && ruleLine(rule, reader),
     mailFailed && {
       topic: 'mail-failed' as const, kind: 'att' as const, number: mailFailed.count,
@@ -24,6 +26,17 @@ export function recordLines({ rule, mailFailed, uncertified = [], notTakenUp = [
     },
     ...missing ? missingLines(missing) : [],
   ].filter(line => !!line)
+}
+
+function scaleLine(scales: readonly ScaleFacts[]): DraftLine {
+  const number = scales.length
+  const lastChecks = scales.map(({ name, lastCheckOn }) => `${name} (${lastCheckOn === null ? 'not known' : formatWholeDay(lastCheckOn)})`)
+  return {
+    topic: 'scale-checks', kind: 'att', number,
+    sentence: `${counted(number, 'scale was', 'scales were')} not checked within a year.`,
+    reason: `Last check of ${listed(lastChecks)}. Every net rests on a scale; set test weights on ${number === 1 ? 'it' : 'each'} and write the day down.`,
+    verb: number === 1 ? 'Write its check down' : 'See which', to: '/scales',
+  }
 }
 
 function ruleLine({ fromAt, isFillRule, count }: NonNullable<NowFacts['rule']>, { now, timeZone }: NowReader): DraftLine {

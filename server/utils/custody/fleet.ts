@@ -74,13 +74,14 @@ export async function cylinderRows(db: Database, ids: readonly string[], nowMs: 
   return new Map((await listedRows(db, result.rows, from, nowMs)).map(listed => [listed.row.id, listed]))
 }
 
-/** Rows of the fleet that a filter lets through, at most `limit`, in the order of their ids. */
-export async function cylinderRowsWhere(db: Database, filter: FleetFilter, limit: number, nowMs: number): Promise<CylinderRow[]> {
+/** Rows of the fleet that a filter lets through, at most `limit` where there is one, in the order of their ids. */
+export async function cylinderRowsWhere(db: Database, filter: FleetFilter, limit: number | null, nowMs: number): Promise<CylinderRow[]> {
   const from = await directory(db)
   const columns = rowColumns(from, nowMs)
   const result = await db.readClient.execute({
     sql: `SELECT ${columns.sql} FROM cylinders c WHERE ${filter.sql} ORDER BY c.id LIMIT ?`,
-    args: [...columns.args, ...filter.args, limit],
+    // For the database a limit below nothing is none.
+    args: [...columns.args, ...filter.args, limit ?? -1],
   })
   return (await listedRows(db, result.rows, from, nowMs)).map(({ row }) => row)
 }

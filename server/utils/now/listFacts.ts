@@ -1,20 +1,19 @@
 import type { InStatement } from '@libsql/client'
-import type { ListFacts, NowFacts, ShortVanFacts } from '../../../utils/now/nowFacts'
+import type { ListFacts, NowFacts, ShortVanFacts, VanFacts } from '../../../utils/now/nowFacts'
 import { cylinderName } from '../../../utils/shipment/changedLines'
 import { vanLoad } from '../../../utils/transport/vanLoad'
-import { cylinderRowsWhere } from '../custody/fleet'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
 import { lastCheckIn, toLookFor } from '../vans/checkIns'
 import { materialsOf } from '../vans/materials'
+import { ownVans } from '../vans/ownVans'
+import { standingIn } from '../vans/standingIn'
 
 const DAY_MS = 86_400_000
 /** A shipment without a receipt is asked about after so many days: common practice, no source. */
 const SHIPMENT_WAITS_DAYS = 7
 /** A test lot that is not back is asked about after so many days: common practice, no source. */
 const LOT_WAITS_DAYS = 30
-/** Far beyond what a van can carry. */
-const MOST_ABOARD = 200
 
 type Lists = Pick<NowFacts, 'shipmentsAway' | 'lotsAway' | 'shipmentDrafts' | 'lotDrafts'>
 
@@ -37,15 +36,12 @@ function listed(table: 'shipments' | 'test_lots', since: string, where: string, 
   return { sql: `SELECT id, number, ${since}, count(*) OVER () FROM ${table} WHERE ${where} ORDER BY ${since}, id LIMIT 1`, args: [until] }
 }
 
-/** What a person's own van carries against what goes without a shipping paper; nothing where no van is theirs. */
-export async function vanFacts(db: Database, from: Directory, personId: string, nowMs: number): Promise<NowFacts['van']> {
-  const van = [...from.places.values()].find(place => place.kind === 'van' && place.active && place.technicianId === personId)
-  if (!van) return undefined
-  const [aboard, materials] = await Promise.all([
-    cylinderRowsWhere(db, { sql: 'c.place_id = ?', args: [van.id] }, MOST_ABOARD, nowMs),
-    materialsOf(db, van.id, from),
-  ])
-  return { name: van.name, load: vanLoad(aboard, materials?.grams ?? null) }
+/** What each of a person's own vans carries against what goes without a shipping paper. */
+export function vanFacts(db: Database, from: Directory, personId: string, nowMs: number): Promise<VanFacts[]> {
+  return Promise.all(ownVans(from, personId).map(async ({ id, name }) => {
+    const [aboard, materials] = await Promise.all([standingIn(db, id, nowMs), materialsOf(db, id, from)])
+    return { id, name, load: vanLoad(aboard, materials?.grams ?? null) }
+  }))
 }
 
 /** Vans in use whose last check-in did not find what nobody has seen since, the latest first. */

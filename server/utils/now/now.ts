@@ -12,7 +12,7 @@ import type { Database } from '../database/database'
 import { directory, type Directory } from '../directory/directory'
 import { cylinderFacts, fewEmptyFacts, fullFacts, unlabelledFacts, unseenFacts } from './cylinderFacts'
 import { listFacts, shortVanFacts, vanFacts } from './listFacts'
-import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts } from './recordFacts'
+import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts, scaleFacts } from './recordFacts'
 import { unsignedFacts } from './signatureFacts'
 
 /** What waits for a person, by their roles: nothing of another's is looked up. */
@@ -30,7 +30,7 @@ export async function nowAnswer(db: Database, access: Access, unit: MassUnit, no
 async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTopic>, personId: string, nowMs: number): Promise<NowFacts> {
   const bounds = dateBounds(from, nowMs)
   const when = <T>(topic: NowTopic, look: () => Promise<T>) => topics.has(topic) ? look() : undefined
-  const [cylinders, unseen, full, fewEmpty, unlabelled, van, shortVans, lists, toCountersign, unsigned, logCheck, entries, mailFailed] = await Promise.all([
+  const [cylinders, unseen, full, fewEmpty, unlabelled, vans, shortVans, lists, toCountersign, unsigned, logCheck, entries, mailFailed] = await Promise.all([
     cylinderFacts(db, fleetQuestions(topics, personId), bounds, nowMs),
     when('not-seen', () => unseenFacts(db, from, bounds, nowMs)),
     when('full', () => fullFacts(db, bounds)),
@@ -46,7 +46,7 @@ async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTo
     when('mail-failed', () => mailFacts(db)),
   ])
   return {
-    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, fewEmpty, unlabelled, van, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, logCheck, entries, mailFailed,
-    rule: ruleFacts(from, nowMs), ...peopleAndPlaces(from),
+    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, fewEmpty, unlabelled, vans, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, logCheck, entries, mailFailed,
+    rule: ruleFacts(from, nowMs), scaleChecks: scaleFacts(from, nowMs), ...peopleAndPlaces(from),
   }
 }

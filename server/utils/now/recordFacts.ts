@@ -1,6 +1,8 @@
 import { isCertified } from '../../../utils/access/certification'
 import { DOUBTFUL_CLAMP_MS, DOUBTFUL_SKEW_S } from '../../../utils/custody/fold/raiseCommon'
-import type { EntryFacts, NowFacts } from '../../../utils/now/nowFacts'
+import type { EntryFacts, NowFacts, ScaleFacts } from '../../../utils/now/nowFacts'
+import { dayOfInstant } from '../../../utils/quantity/day'
+import { scaleCheck } from '../../../utils/quantity/scaleCheck'
 import { lastVerification } from '../custody/lastVerification'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
@@ -59,6 +61,15 @@ export function ruleFacts(from: Directory, nowMs: number): NowFacts['rule'] {
     .filter(({ fromAt }) => fromAt > nowMs && fromAt <= nowMs + RULE_TOLD_DAYS * DAY_MS)
     .sort((a, b) => a.fromAt - b.fromAt)
   return coming[0] && { ...coming[0], count: coming.length }
+}
+
+/** Scales in use whose last check is over a year old or known to nobody. */
+export function scaleFacts(from: Directory, nowMs: number): ScaleFacts[] {
+  const today = dayOfInstant(nowMs, from.timeZone)
+  return [...from.scales.values()]
+    .filter(({ active, lastCheck }) => active && scaleCheck(lastCheck, today) !== 'in-date')
+    .map(({ name, lastCheck }) => ({ name, lastCheckOn: lastCheck }))
+    .sort((a, b) => a.name.localeCompare(b.name, 'en'))
 }
 
 /** What is still to be written down of people and places. */

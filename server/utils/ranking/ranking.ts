@@ -7,13 +7,14 @@ import type { FleetFilter } from '../custody/fleetFilter'
 import type { Database } from '../database/database'
 import { directory, type Directory } from '../directory/directory'
 import { problem } from '../http/problem'
+import { ownVans } from '../vans/ownVans'
 import { CATALOGUE } from '../../../utils/refrigerant/allRefrigerants'
 
-/** More than this nobody walks along a rack for. */
+/** Of the shops' cylinders: along more than this nobody walks for one. */
 const MOST_COMPARED = 400
 
 /**
- * Which cylinders take an amount of a refrigerant, from a van: those aboard, those its technician holds elsewhere, and
+ * Which cylinders take an amount of a refrigerant, from a van: those aboard, those its technician holds or drives elsewhere, and
  * in the shops those that are empty or hold the same and wait for no shipment and no test.
  *
  * Errors: 404 where there is no such van or refrigerant.
@@ -25,8 +26,12 @@ export async function cylinderRanking(db: Database, query: RankingQuery, access:
   const van = vanOf(from, query.van, access.personId)
   const personId = van?.technicianId ?? access.personId
 
-  const aboard = van ? await idsWhere(db, { sql: 'c.place_id = ?', args: [van.id] }) : []
-  const held = await idsWhere(db, { sql: 'c.holder_id = ? AND c.place_id IS NOT ?', args: [personId, van?.id ?? null] })
+  const aboard = van ? await idsWhere(db, { sql: 'c.place_id = ?', args: [van.id] }, null) : []
+  const otherVans = ownVans(from, personId).filter(other => other.id !== van?.id)
+  const held = await idsWhere(db, {
+    sql: `(c.holder_id = ? AND c.place_id IS NOT ?) OR c.place_id IN (${otherVans.map(() => '?').join(', ')})`,
+    args: [personId, van?.id ?? null, ...otherVans.map(other => other.id)],
+  }, null)
   const { ids: inShops, leftOut } = await inTheShops(db, refrigerant, personId)
 
   const reaches = new Map<string, Reach>([
@@ -45,7 +50,7 @@ export async function cylinderRanking(db: Database, query: RankingQuery, access:
 }
 
 function vanOf(from: Directory, id: string | undefined, personId: string) {
-  if (id === undefined) return [...from.places.values()].find(place => place.kind === 'van' && place.active && place.technicianId === personId) ?? null
+  if (id === undefined) return ownVans(from, personId)[0] ?? null
   const van = from.places.get(id)
   if (van?.kind !== 'van') throw problem(404, 'No such van', 'It may have been written wrongly.')
   return van
@@ -58,16 +63,17 @@ async function inTheShops(db: Database, refrigerant: string, personId: string): 
       AND c.id NOT IN (SELECT o.cylinder_id FROM open_lines o)`,
     args: [refrigerant, personId],
   }
-  const ids = await idsWhere(db, filter)
+  const ids = await idsWhere(db, filter, MOST_COMPARED)
   if (ids.length < MOST_COMPARED) return { ids, leftOut: 0 }
   const counted = await db.readClient.execute({ sql: `SELECT count(*) FROM cylinders c WHERE ${filter.sql}`, args: filter.args })
   return { ids, leftOut: (counted.rows[0]![0] as number) - ids.length }
 }
 
-async function idsWhere(db: Database, filter: FleetFilter): Promise<string[]> {
+async function idsWhere(db: Database, filter: FleetFilter, limit: number | null): Promise<string[]> {
   const found = await db.readClient.execute({
     sql: `SELECT c.id FROM cylinders c WHERE ${filter.sql} ORDER BY c.water_capacity_grams, c.id LIMIT ?`,
-    args: [...filter.args, MOST_COMPARED],
+    // For the database a limit below nothing is none.
+    args: [...filter.args, limit ?? -1],
   })
   return found.rows.map(row => row[0] as string)
 }

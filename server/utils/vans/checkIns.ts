@@ -4,6 +4,7 @@ import type { NewVanCheckIn, ToLookFor } from '../../../utils/contract/vans'
 import { cylinderRowsWhere } from '../custody/fleet'
 import { statement, type Database } from '../database/database'
 import { namesOf, type Directory } from '../directory/directory'
+import { refuseOther } from './refuseOther'
 
 type CheckIn = typeof vanCheckIns.$inferSelect
 
@@ -14,10 +15,14 @@ export async function lastCheckIn(db: Database, vanId: string): Promise<CheckIn 
   return row ?? null
 }
 
-/** Keeps what a van came back with; under the same id once. */
+/** Keeps what a van came back with; the same sent again is kept once. Errors: 409 where another check-in has the id. */
 export async function keepCheckIn(db: Database, vanId: string, body: NewVanCheckIn, personId: string, now: number): Promise<void> {
-  const row = { ...body, vanId, checkedBy: personId, checkedAt: now }
+  const said = { vanId, found: body.found, missing: body.missing }
+  const row = { id: body.id, ...said, checkedBy: personId, checkedAt: now }
   await db.write([statement(db.read.insert(vanCheckIns).values(row).onConflictDoNothing())])
+  const [kept] = await db.read.select({ vanId: vanCheckIns.vanId, found: vanCheckIns.found, missing: vanCheckIns.missing })
+    .from(vanCheckIns).where(eq(vanCheckIns.id, body.id))
+  refuseOther('A check-in', kept, said)
 }
 
 /** The cylinders that a check-in missed and that nobody has seen since. */

@@ -4,6 +4,7 @@ import type { NewVanMaterials, VanMaterials } from '../../../utils/contract/vans
 import { readingGrams } from '../../../utils/quantity/mass'
 import { statement, type Database } from '../database/database'
 import { namesOf, type Directory } from '../directory/directory'
+import { refuseOther } from './refuseOther'
 
 /** What each van was last said to carry beside cylinders, by the van's id. */
 export async function materialsByVan(db: Database, from: Directory): Promise<Map<string, VanMaterials>> {
@@ -20,10 +21,14 @@ export async function materialsOf(db: Database, vanId: string, from: Directory):
   return row ? shown(row, from) : null
 }
 
-/** Keeps what a van carries beside cylinders; under the same id once. */
+/** Keeps what a van carries beside cylinders; the same said again is kept once. Errors: 409 where something else has the id. */
 export async function sayMaterials(db: Database, vanId: string, body: NewVanMaterials, personId: string, now: number): Promise<void> {
-  const row = { id: body.id, vanId, gross: body.gross, note: body.note, saidBy: personId, saidAt: now }
+  const said = { vanId, gross: body.gross, note: body.note }
+  const row = { id: body.id, ...said, saidBy: personId, saidAt: now }
   await db.write([statement(db.read.insert(vanMaterials).values(row).onConflictDoNothing())])
+  const [kept] = await db.read.select({ vanId: vanMaterials.vanId, gross: vanMaterials.gross, note: vanMaterials.note })
+    .from(vanMaterials).where(eq(vanMaterials.id, body.id))
+  refuseOther('What is carried', kept, said)
 }
 
 function shown(row: typeof vanMaterials.$inferSelect, from: Directory): VanMaterials {

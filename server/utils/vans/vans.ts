@@ -7,18 +7,16 @@ import { problem } from '../http/problem'
 import { listPlaces, placeById } from '../places/places'
 import { lastCheckIn, toLookFor } from './checkIns'
 import { materialsByVan, materialsOf } from './materials'
-
-/** Far beyond what a van can carry. */
-const MOST_ABOARD = 200
+import { standingIn } from './standingIn'
 
 /** Everything about one van. Errors: 404 where there is no van of this id. */
 export async function vanAnswer(db: Database, id: string, now: number): Promise<VanAnswer> {
   const [van, from, checkIn] = await Promise.all([theVan(db, id), directory(db), lastCheckIn(db, id)])
   const [aboard, heldElsewhere, materials, missing] = await Promise.all([
-    cylinderRowsWhere(db, { sql: 'c.place_id = ?', args: [id] }, MOST_ABOARD, now),
+    standingIn(db, id, now),
     van.technicianId === null
       ? []
-      : cylinderRowsWhere(db, { sql: 'c.holder_id = ? AND c.place_id IS NOT ?', args: [van.technicianId, id] }, MOST_ABOARD, now),
+      : cylinderRowsWhere(db, { sql: 'c.holder_id = ? AND c.place_id IS NOT ?', args: [van.technicianId, id] }, null, now),
     materialsOf(db, id, from),
     toLookFor(db, checkIn, from, now),
   ])
@@ -34,7 +32,7 @@ export async function listVans(db: Database, now: number): Promise<VanSummary[]>
     materialsByVan(db, from),
   ])
   return Promise.all(vans.map(async (van) => {
-    const aboard = await cylinderRowsWhere(db, { sql: 'c.place_id = ?', args: [van.id] }, MOST_ABOARD, now)
+    const aboard = await standingIn(db, van.id, now)
     return {
       van,
       aboard: aboard.map(({ tareWeightGrams, netGrams }) => ({ tareWeightGrams, netGrams })),

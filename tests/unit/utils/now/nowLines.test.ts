@@ -76,16 +76,22 @@ describe('what a technician holds', () => {
   it('is too much for the van above 440 lb gross, and not at it', () => {
     // 440 lb = 199,580.6 g.
     const aboard = (grams: number) => [66_000, 66_000, grams - 132_000].map(tareWeightGrams => ({ tareWeightGrams, netGrams: 0 }))
-    const lines = (grams: number) => linesFor('technician', { van: { name: 'Van 12', load: vanLoad(aboard(grams)) } })
+    const lines = (grams: number) => linesFor('technician', { vans: [{ id: ID, name: 'Van 12', load: vanLoad(aboard(grams)) }] })
     expect(lines(199_580)).toEqual([])
     expect(lines(200_034)[0]).toMatchObject({ topic: 'van-load', sentence: 'Van 12 carries 1.0\u00A0lb too much.', to: '/van' })
   })
 
   it('is too heavy for the van above 220 lb in one', () => {
     // 220 lb = 99,790.3 g.
-    const lines = (grams: number) => linesFor('technician', { van: { name: 'Van 12', load: vanLoad([{ tareWeightGrams: grams, netGrams: 0 }]) } })
+    const lines = (grams: number) => linesFor('technician', { vans: [{ id: ID, name: 'Van 12', load: vanLoad([{ tareWeightGrams: grams, netGrams: 0 }]) }] })
     expect(lines(99_790)).toEqual([])
     expect(lines(99_791)[0]!.sentence).toBe('1 cylinder on Van 12 is too heavy.')
+  })
+
+  it('is told of each of two vans, and leads to the one it is about', () => {
+    const load = vanLoad([{ tareWeightGrams: 99_791, netGrams: 0 }])
+    const lines = linesFor('technician', { vans: [{ id: 'first', name: 'Van 12', load: vanLoad([]) }, { id: 'second', name: 'Van 14', load }] })
+    expect(lines).toEqual([expect.objectContaining({ key: 'van-load second', sentence: '1 cylinder on Van 14 is too heavy.', to: '/vans/second' })])
   })
 })
 
@@ -209,6 +215,28 @@ describe('a shop with few empty cylinders', () => {
   })
 })
 
+describe('a scale that was not checked within a year', () => {
+  it('is named with its last check, for manager and administrator, and leads to where the next is written down', () => {
+    for (const role of ['manager', 'admin'] as const) {
+      expect(linesFor(role, { scaleChecks: [{ name: 'Floor scale', lastCheckOn: '2025-11-30' }] })).toEqual([expect.objectContaining({
+        topic: 'scale-checks', kind: 'att', number: 1, sentence: '1 scale was not checked within a year.',
+        reason: expect.stringMatching(/^Last check of Floor scale \(30 Nov 2025\)\./), to: '/scales',
+      })])
+    }
+  })
+
+  it('stands with one of which no check is known', () => {
+    expect(linesFor('manager', { scaleChecks: [{ name: 'Bench', lastCheckOn: null }, { name: 'Floor scale', lastCheckOn: '2025-11-30' }] })[0]).toMatchObject({
+      number: 2, reason: expect.stringContaining('Last check of Bench (not known) and Floor scale (30 Nov 2025).'), verb: 'See which',
+    })
+  })
+
+  it('is no line where every scale was, and nothing of the warehouse\'s', () => {
+    expect(linesFor('manager', { scaleChecks: [] })).toEqual([])
+    expect(linesFor('warehouse', { scaleChecks: [{ name: 'Bench', lastCheckOn: null }] })).toEqual([])
+  })
+})
+
 describe('what a trainee recorded and nobody has countersigned', () => {
   const cylinder = { id: ID, labelCode: '7K3M9Q2TX', serial: null }
   const mine = { supervisor: 'Tina', count: 2, cylinders: [cylinder] }
@@ -226,8 +254,8 @@ describe('what a trainee recorded and nobody has countersigned', () => {
   it('is told to the manager by supervisor, and the cylinders are listed where there are several', () => {
     const nobodys = { supervisor: null, count: 1, cylinders: [{ id: 'other', labelCode: null, serial: 'K1044' }] }
     expect(linesFor('manager', { unsigned: [mine, nobodys] })).toEqual([expect.objectContaining({
-      topic: 'unsigned', number: 3, sentence: '3 entries of trainees are not countersigned.',
-      reason: '2 with Tina and 1 without a supervisor. No total that the law asks for counts them.', to: '/fleet?finding=unsigned',
+      topic: 'unsigned', number: 3, sentence: '3 entries of trainees are not countersigned, on 2 cylinders.',
+      reason: '2 with Tina and 1 without a supervisor. No total that the law asks for counts them.', verb: 'Show the 2 cylinders', to: '/fleet?finding=unsigned',
     })])
   })
 
