@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import type { FleetAnswer } from '../../utils/contract/custody'
+import type { FleetAnswer, FleetSummary } from '../../utils/contract/custody'
 import { FIRST_LAYOUT, type FleetLayout } from '../../utils/contract/fleetLayout'
 import { MOST_VIEWS, type FleetView, type FleetViewsAnswer } from '../../utils/contract/fleetViews'
 import type { ProblemDetails } from '../../utils/contract/problem'
@@ -46,6 +46,15 @@ describe('the list of the fleet', () => {
     const before = await total()
     await registered(shop)
     expect(await total()).toBe(before + 1)
+  })
+
+  it('counts beside each refrigerant what choosing it then shows, those away and ended among them', async () => {
+    const { client } = shop.manager
+    const { body: { refrigerants } } = await client.get<FleetSummary>('/api/fleet/summary')
+    for (const { refrigerant, count } of refrigerants) {
+      expect((await client.get<FleetAnswer>(`/api/cylinders?refrigerant=${refrigerant}&limit=1`)).body.total, refrigerant).toBe(count)
+    }
+    expect((await client.get<FleetAnswer>('/api/cylinders?lifecycle=at-reclaim&refrigerant=R-22&limit=1')).body.total).toBeGreaterThan(0)
   })
 
   it('finds a serial by its characters, however it is cut apart on the collar and in the question', async () => {

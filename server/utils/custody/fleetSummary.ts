@@ -7,7 +7,6 @@ import { dateBounds } from './dateBounds'
 import { findingFilter, type FleetFilter } from './fleetFilter'
 
 const IN_USE = `c.lifecycle NOT IN ('condemned', 'retired')`
-const OURS = `c.lifecycle NOT IN ('at-reclaim', 'condemned', 'retired')`
 
 /** The counts beside the fleet's filters, and what falls due when. */
 export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSummary> {
@@ -25,7 +24,8 @@ export async function fleetSummary(db: Database, nowMs: number): Promise<FleetSu
       sql: `SELECT c.due_month, count(*) FROM cylinders c WHERE c.retest_state = 'dated' AND c.due_month >= ? AND c.due_month <= ? AND ${IN_USE} GROUP BY c.due_month`,
       args: [bounds.thisMonth, lastMonth],
     },
-    `SELECT c.refrigerant, count(*) FROM cylinders c WHERE c.refrigerant IS NOT NULL AND ${OURS} GROUP BY c.refrigerant ORDER BY count(*) DESC, c.refrigerant`,
+    // As many as the filter of the list then finds: those away and ended too.
+    'SELECT c.refrigerant, count(*) FROM cylinders c WHERE c.refrigerant IS NOT NULL GROUP BY c.refrigerant ORDER BY count(*) DESC, c.refrigerant',
     { sql: `SELECT count(*) FROM cylinders c WHERE ${late.sql}`, args: late.args },
   ], 'read')
   const number = (index: number) => (counts?.rows[0]?.[index] as number | null) ?? 0
