@@ -1,5 +1,5 @@
-import { readFileSync } from 'node:fs'
-import { LABEL_FONT_FILES, type LabelFonts } from '../../server/utils/pdf/fonts'
+import { readFile } from 'node:fs/promises'
+import { facesFrom } from '../../server/utils/pdf/fonts'
 import { labelSheetPdf } from '../../server/utils/pdf/labelSheetPdf'
 import type { IdentityLabelContent, LabelledStamp } from '../../utils/label/identityContent'
 import { identityLabel } from '../../utils/label/identityLabel'
@@ -8,9 +8,7 @@ import { sheet } from '../../utils/label/sheet'
 import { LABEL_STOCKS, type LabelStockId } from '../../utils/label/stock'
 
 /** The faces of the papers, read from the folder that the build takes them from. */
-export const fonts = Object.fromEntries(Object.entries(LABEL_FONT_FILES).map(
-  ([face, file]) => [face, readFileSync(new URL(`../../server/assets/fonts/${file}`, import.meta.url))],
-)) as LabelFonts
+export const fonts = await facesFrom(file => readFile(new URL(`../../server/assets/fonts/${file}`, import.meta.url)))
 
 /** The collar of an invented cylinder. */
 export const STAMP: LabelledStamp = {

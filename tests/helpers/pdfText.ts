@@ -7,8 +7,27 @@ export function pdfTexts(pdf: Buffer): string[] {
     const page = objectText(source, id)
     const resources = objectText(source, /\/Resources (\d+) 0 R/.exec(page)![1]!)
     const fonts = new Map([...resources.matchAll(/\/(F\d+) (\d+) 0 R/g)].map(([, name, font]) => [name!, lettersOf(source, font!)]))
-    return linesOf(streamText(source, /\/Contents (\d+) 0 R/.exec(page)![1]!), fonts).join('\n')
+    return linesOf(contentOf(source, page), fonts).join('\n')
   })
+}
+
+/** The drawing of each page of a PDF, as its operators. */
+export function pageContents(pdf: Buffer): string[] {
+  const source = pdf.toString('latin1')
+  return pageIds(source).map(id => contentOf(source, objectText(source, id)))
+}
+
+/** Every glyph that the pages of a PDF draw, by its number in its font in four hexadecimal figures. */
+export function drawnGlyphs(pdf: Buffer): string[] {
+  return pageContents(pdf).flatMap(content => [...content.matchAll(/\[([^\]]*)\] TJ/g)].flatMap(([, shown]) => glyphsOf(shown!)))
+}
+
+function contentOf(source: string, page: string): string {
+  return streamText(source, /\/Contents (\d+) 0 R/.exec(page)![1]!)
+}
+
+function glyphsOf(shown: string): string[] {
+  return [...shown.matchAll(/<([0-9a-f]*)>/gi)].flatMap(([, hex]) => hex!.match(/.{4}/g) ?? [])
 }
 
 function linesOf(content: string, fonts: Map<string, Map<number, string>>): string[] {
@@ -16,7 +35,7 @@ function linesOf(content: string, fonts: Map<string, Map<number, string>>): stri
   let letters = new Map<number, string>()
   for (const [, font, shown] of content.matchAll(/\/(F\d+) [\d.]+ Tf|\[([^\]]*)\] TJ/g)) {
     if (font) letters = fonts.get(font) ?? new Map()
-    else lines.push([...shown!.matchAll(/<([0-9a-f]*)>/gi)].flatMap(([, hex]) => hex!.match(/.{4}/g) ?? []).map(glyph => letters.get(Number.parseInt(glyph, 16)) ?? '\uFFFD').join(''))
+    else lines.push(glyphsOf(shown!).map(glyph => letters.get(Number.parseInt(glyph, 16)) ?? '\uFFFD').join(''))
   }
   return lines
 }

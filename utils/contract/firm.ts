@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { line } from './parts'
+import { printedLine } from './parts'
 import { units, type Units } from './session'
 import { timeZone } from './setUp'
 
@@ -8,8 +8,8 @@ export interface OwnFirm { name: string, telephone: string, timeZone: string, un
 
 /** PATCH /api/firm: answers OwnFirm. */
 export const ownFirmChange = z.strictObject({
-  name: line(120).optional(),
-  telephone: line(40).optional(),
+  name: printedLine(120).optional(),
+  telephone: printedLine(40).optional(),
   timeZone: timeZone.optional(),
   units: units.optional(),
 })

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { unprintable } from '../label/printable'
 import { parseMassText, readingGrams } from '../quantity/mass'
 
 /** A UUID in lower case. */
@@ -15,6 +16,14 @@ export function line(longest: number) {
   return z.string().trim().min(1, 'must not be empty').max(longest, `must be at most ${longest} characters`)
     .regex(/^[^\p{Cc}\p{Cs}\u202A-\u202E\u2066-\u2069]*$/u, 'must not hold control characters')
     .refine(text => text === '' || VISIBLE.test(text), 'must hold a character that can be seen')
+}
+
+/** A line that stands on labels and papers too, as a name does. */
+export function printedLine(longest: number) {
+  return line(longest).superRefine((text, context) => {
+    const not = unprintable(text)
+    if (not.length > 0) context.addIssue({ code: 'custom', message: `cannot be printed with ${not.slice(0, 5).join(' ')}: labels take Latin, Greek and Cyrillic letters` })
+  })
 }
 
 /** A page of a list: how many, and where the page before ended. */

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { CERTIFICATION_TYPES, type Certification } from '../access/certification'
 import { ROLES, type Role } from '../access/roles'
-import { id, line } from './parts'
+import { id, line, printedLine } from './parts'
 import { email, newPassword, units, type User } from './session'
 
 const roles = z.array(z.enum(ROLES)).min(1, 'must name at least one role').max(ROLES.length)
@@ -19,7 +19,7 @@ const workingLife = {
 
 /** POST /api/people: makes a person and mails the invitation. 409 when the address is taken, 422 for what does not fit together. */
 export const inviteBody = z.strictObject({
-  name: line(80),
+  name: printedLine(80),
   email,
   roles,
   trainee: z.boolean().default(false),
@@ -32,7 +32,7 @@ export const inviteBody = z.strictObject({
  * what does not fit together. Who is no trainee any more has no supervisor.
  */
 export const personChange = z.strictObject({
-  name: line(80).optional(),
+  name: printedLine(80).optional(),
   roles: roles.optional(),
   trainee: z.boolean().optional(),
   ...workingLife,

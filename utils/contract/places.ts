@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { RIN } from '../requalification/struckMark'
-import { id, line, type Page } from './parts'
+import { id, line, printedLine, type Page } from './parts'
 
 export const PLACE_KINDS = ['shop', 'rack', 'van', 'site', 'firm'] as const
 export const FIRM_KINDS = ['reclaimer', 'requalifier', 'supplier', 'customer', 'carrier'] as const
@@ -59,11 +59,11 @@ export interface Place {
 /** POST /api/firms: makes the firm and its place. A RIN belongs to a requalifier. */
 export const firmBody = z.strictObject({
   id: id.optional(),
-  name: line(120),
+  name: printedLine(120),
   kind: z.enum(FIRM_KINDS),
-  telephone: line(40).nullish(),
+  telephone: printedLine(40).nullish(),
   email: z.email().max(200).nullish(),
-  address: line(300).nullish(),
+  address: printedLine(300).nullish(),
   rin: z.string().regex(RIN, 'a RIN has four letters or figures').nullish(),
 })
 /** PATCH /api/firms/{id}. */

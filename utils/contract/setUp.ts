@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import type { LabelAddress } from './labels'
-import { line } from './parts'
+import { printedLine } from './parts'
 import { email, newPassword, units } from './session'
 
 const token = z.string().regex(/^[\w-]{43}$/, 'is not a set-up link')
@@ -15,8 +15,8 @@ export interface SetUpOpen { open: true, expiresAt: string, labels: LabelAddress
 /** POST /api/setup: makes the firm and its first admin, and signs that person in (201, SessionAnswer). */
 export const setUpBody = z.strictObject({
   token,
-  firm: z.strictObject({ name: line(120), telephone: line(40), timeZone, units }),
-  admin: z.strictObject({ name: line(80), email, password: newPassword }),
+  firm: z.strictObject({ name: printedLine(120), telephone: printedLine(40), timeZone, units }),
+  admin: z.strictObject({ name: printedLine(80), email, password: newPassword }),
 })
 export type SetUp = z.output<typeof setUpBody>
 
