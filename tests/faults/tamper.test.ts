@@ -6,16 +6,16 @@ import type { Sealing } from '../../server/utils/proof/sealing'
 import { signerOf } from '../../server/utils/proof/signingKey'
 import { verifyLog } from '../../server/utils/proof/verifyLog'
 import { checkpointText } from '../../utils/proof/checkpoint'
+import { IN_FULL } from '../helpers/inFull'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../helpers/logDatabase'
 import { testSealing } from '../helpers/sealing'
 import { lb } from '../helpers/stamps'
 import { changedByte, dropGuards, putLines, rechained, seededChance, storedLog, streamsOf, takeOut } from '../helpers/tampering'
 
 // The attacker of this file has the whole database in hand, but not the key, nor the copies of the checkpoints.
-const IS_FULL = process.env.FAULTS_FULL === '1'
 const CHANGED_BYTES = 1_000
 const ATTACKS = 200
-const CYLINDERS = IS_FULL ? 60 : 12
+const CYLINDERS = IN_FULL ? 60 : 12
 
 const NOW = Date.parse('2026-07-01T17:00:00Z')
 const DAY = 86_400_000

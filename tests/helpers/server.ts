@@ -18,6 +18,10 @@ export interface TestServer {
   output: () => string
   /** The first set-up link it printed. */
   setUpToken: () => string
+  /** The id of its process. */
+  pid: () => number
+  /** Ends it at once (SIGKILL), and leaves its folder. */
+  kill: () => Promise<void>
   stop: () => Promise<void>
   /** Starts it again on the same database. */
   restart: () => Promise<void>
@@ -27,10 +31,12 @@ export interface StartOptions {
   env?: Record<string, string>
   /** An existing folder with its database, to go on with. */
   folder?: string
+  /** A command that it is started by, with its arguments: one that takes rights away. */
+  by?: readonly string[]
 }
 
 /** Starts the built server on a free port and waits until it is healthy. */
-export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir(), 'collarbook-')) }: StartOptions = {}): Promise<TestServer> {
+export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir(), 'collarbook-')), by = [] }: StartOptions = {}): Promise<TestServer> {
   const port = await getPort({ host: '127.0.0.1', random: true })
   const baseUrl = `http://localhost:${port}`
   const databaseFile = join(folder, 'collarbook.db')
@@ -39,7 +45,7 @@ export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir()
   let child: ChildProcess
 
   async function launch(): Promise<void> {
-    child = spawnServer(settings)
+    child = spawnServer(settings, by)
     child.stdout?.on('data', data => printed += data)
     child.stderr?.on('data', data => printed += data)
     await healthy(baseUrl, child, () => printed)
@@ -57,6 +63,8 @@ export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir()
     folder,
     databaseFile,
     output: () => printed,
+    pid: () => child.pid ?? 0,
+    kill: end,
     setUpToken: () => /setup\?token=([\w-]{43})/.exec(printed)?.[1] ?? '',
     async stop() {
       await end()
@@ -87,9 +95,10 @@ function serverSettings(env: Record<string, string>): NodeJS.ProcessEnv {
   return { PATH: process.env.PATH, HOME: process.env.HOME, NODE_ENV: 'production', NUXT_SESSION_PASSWORD: SESSION_PASSWORD, ...env } as NodeJS.ProcessEnv
 }
 
-function spawnServer(env: NodeJS.ProcessEnv): ChildProcess {
+function spawnServer(env: NodeJS.ProcessEnv, by: readonly string[] = []): ChildProcess {
   if (!existsSync(BUILT)) throw new Error('There is no built server in .output: run `npm run build` first.')
-  return spawn(process.execPath, [BUILT], { env, stdio: ['ignore', 'pipe', 'pipe'] })
+  const [command, ...args] = [...by, process.execPath, BUILT] as [string, ...string[]]
+  return spawn(command, args, { env, stdio: ['ignore', 'pipe', 'pipe'] })
 }
 
 async function healthy(baseUrl: string, child: ChildProcess, printed: () => string): Promise<void> {
