@@ -1,4 +1,4 @@
-// Makes the caches of the custody log (cylinders, movements, label claims) again from the log, with the server stopped.
+// Makes the caches of the custody log (cylinders, movements, changes of stock, label claims, halves of pairs) again from the log.
 import { dirname, resolve } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { createJiti } from 'jiti'

@@ -4,6 +4,7 @@ import { fold, type FoldResult } from '../../../utils/custody/fold'
 import type { Half } from '../../../utils/custody/half'
 import type { Movement } from '../../../utils/custody/movement'
 import { cacheRow } from '../../../utils/custody/row'
+import type { SaidByOthers } from '../../../utils/custody/saidByOthers'
 import type { CylinderState } from '../../../utils/custody/state'
 import type { StockChange } from '../../../utils/custody/stockChange'
 import type { Database } from '../database/database'
@@ -74,14 +75,24 @@ function wasWritten(row: LogRow): Guard {
   }
 }
 
-/** The caches of one cylinder, made from its whole log and under no condition: for a rebuild. */
-export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], from: Directory, nowMs: number): InStatement[] {
+/** The caches that hold something for each cylinder, and the column that names it. */
+export const CYLINDER_CACHES = [
+  { table: 'movements', key: 'cylinder_id' }, { table: 'stock_changes', key: 'cylinder_id' }, { table: 'label_claims', key: 'cylinder_id' },
+  { table: 'halves', key: 'cylinder_id' }, { table: 'cylinders', key: 'id' },
+] as const
+
+/** The caches of one cylinder, made from its whole log: for a rebuild. They stand unless another process has recorded a later event. */
+export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEvent[], from: Directory, nowMs: number, said: SaidByOthers): InStatement[] {
   const folded = fold(events, foldContext(from))
+  const guard: Guard = {
+    sql: 'NOT EXISTS (SELECT 1 FROM custody_events WHERE cylinder_id = ? AND version > ?)',
+    args: [cylinderId, events.at(-1)?.version ?? 0],
+  }
   return [
-    upsertCylinder(cylinderId, folded.state, rowContext(from, nowMs), NO_GUARD),
-    ...bookStatements(cylinderId, folded, null, NO_GUARD),
-    ...claimStatements(cylinderId, folded, null, NO_GUARD),
-    ...halfStatements(cylinderId, folded, NO_GUARD),
+    upsertCylinder(cylinderId, folded.state, rowContext(from, nowMs, said), guard),
+    ...bookStatements(cylinderId, folded, null, guard),
+    ...claimStatements(cylinderId, folded, null, guard),
+    ...halfStatements(cylinderId, folded, guard),
   ]
 }
 

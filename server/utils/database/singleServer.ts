@@ -31,6 +31,11 @@ export async function holdDatabaseFile(file: string): Promise<Server> {
   return server
 }
 
+/** Whether a process serves a database file just now. */
+export function isFileHeld(file: string): Promise<boolean> {
+  return staysHeld(socketPath(file))
+}
+
 async function staysHeld(path: string): Promise<boolean> {
   for (let waited = 0; await answers(path); waited += LOOK_EVERY_MS) {
     if (waited >= PATIENCE_MS) return true

@@ -1,5 +1,6 @@
 import { existsSync } from 'node:fs'
 import { dirname, resolve } from 'node:path'
+import { bringCachesToShape } from '../custody/cacheShape'
 import type { Environment } from '../environment'
 import { setDatabase } from './currentDatabase'
 import { openDatabase, type Database } from './database'
@@ -7,7 +8,7 @@ import { holdDatabaseFile } from './singleServer'
 
 let started: Promise<Database> | null = null
 
-/** Opens the database, makes sure that this process alone serves it, and brings its tables up to date; once a process. */
+/** Opens the database, makes sure that this process alone serves it, and brings its tables and caches up to date; once a process. */
 export function startDatabase(environment: Environment): Promise<Database> {
   started ??= start(environment)
   return started
@@ -17,6 +18,7 @@ async function start(environment: Environment): Promise<Database> {
   const database = await openDatabase(environment.databaseUrl, environment.databaseAuthToken)
   if (database.file) await holdDatabaseFile(database.file)
   await database.migrate(migrationsFolder())
+  await bringCachesToShape(database)
   setDatabase(database)
   return database
 }
