@@ -1,6 +1,6 @@
 import type { LabelFace } from '~~/utils/label/drawing'
-import type { LabelFonts } from './fonts'
 import { spelled } from '~~/utils/label/printable'
+import type { LabelFonts } from './fonts'
 
 /** A piece of a text that one font file has all letters of; `font` is its name in the document. */
 export interface FaceRun { text: string, font: string }

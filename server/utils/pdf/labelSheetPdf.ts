@@ -1,6 +1,6 @@
 import PDFDocument from 'pdfkit'
-import { forPrint } from '~~/utils/label/printable'
 import type { LabelQr, LabelText } from '~~/utils/label/drawing'
+import { forPrint } from '~~/utils/label/printable'
 import type { LabelSheet, PlacedLabel } from '~~/utils/label/sheet'
 import { faceRuns, type FaceRun } from './faceText'
 import type { LabelFonts } from './fonts'

@@ -18,6 +18,17 @@ describe('which labels are to be printed', () => {
     expect((await shown()).text()).toContain('None yet.')
   })
 
+  it('are all listed where they are more than one PDF takes, and go on with the rest once the first are printed', async () => {
+    const codes = Array.from({ length: 101 }, (_, index) => `CODE${String(index).padStart(5, '0')}`)
+    const card = await shown(codes.slice(0, 100))
+    expect(card.text()).not.toContain('One PDF takes')
+    await card.setProps({ codes })
+    expect(card.text()).toContain('One PDF takes 100. 1 more waits for the next: COD E00 100')
+    expect(card.findAll('ul[aria-label="Codes to be printed"] li')).toHaveLength(100)
+    await card.findAll('button').find(button => button.text() === 'These are printed, go on with the last')!.trigger('click')
+    expect(card.emitted('setAside')).toEqual([[codes.slice(0, 100)]])
+  })
+
   it.each([['1', 1], ['100', 100]])('gains %s blank ones when that many are asked for', async (typed, count) => {
     const card = await shown()
     await card.find('input').setValue(typed)
