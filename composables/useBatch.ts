@@ -1,15 +1,15 @@
 import { problemOf, useApi } from '~~/composables/useApi'
 import { useKept } from '~~/composables/useKept'
 import { useScanSignal } from '~~/composables/useScanSignal'
+import { useSharedCode } from '~~/composables/useSharedCode'
 import { deviceNow, usePostingStore, type Posted, type Settled } from '~~/stores/posting'
 import { usePreferencesStore } from '~~/stores/preferences'
 import { BATCH_WORDS, batchEvent, type BatchAct, type BatchTarget } from '~~/utils/batch/batchAct'
 import { batchLine, isCounted, type BatchLine, type BatchScan } from '~~/utils/batch/batchLine'
 import { missingOf, type ExpectedCylinder } from '~~/utils/batch/missing'
-import type { CylinderView, FleetAnswer } from '~~/utils/contract/custody'
+import type { CylinderView } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
-import { endsStamp } from '~~/utils/fleet/stampHits'
 
 const SAME_CODE_MS = 3_000
 
@@ -39,7 +39,8 @@ export function useBatch(key: string, plan: () => BatchPlan) {
   const posting = usePostingStore()
   const preferences = usePreferencesStore()
   const signal = useScanSignal()
-  const { restored: kept, keep: store } = useKept<KeptScan[]>(`batch ${key}`, 'device')
+  const { restored: kept, keep: store, followOtherTabs } = useKept<KeptScan[]>(`batch ${key}`, 'device')
+  const { ofCode } = useSharedCode()
 
   const scans = ref<BatchScan[]>([]) as Ref<BatchScan[]>
   const pendingRef = ref<string | null>(null)
@@ -128,11 +129,8 @@ export function useBatch(key: string, plan: () => BatchPlan) {
 
   /** Says by the end of its serial which of two cylinders with one code is meant; gives whether one was found. */
   async function choose(reference: string, serialEnd: string): Promise<boolean> {
-    const answer = await api.get<FleetAnswer>('/api/cylinders', { q: serialEnd, limit: 20 }).catch(() => null)
-    const fitting = answer?.items.filter(row => endsStamp(row.serial, serialEnd) && row.findingCodes.includes('code-on-two')) ?? []
-    if (fitting.length !== 1) return false
-    const view = await api.get<CylinderView>(`/api/cylinders/${fitting[0]!.id}`).catch(() => null)
-    if (!view) return false
+    const [view, another] = await ofCode(reference, serialEnd).catch(() => [])
+    if (view === undefined || another !== undefined) return false
     // From now on it stands by its own name: its label would find the other one.
     drop(view.id)
     change(reference, { ref: view.id, found: { is: 'known', view }, isChosen: true })
@@ -204,6 +202,17 @@ export function useBatch(key: string, plan: () => BatchPlan) {
       scans.value = [...scans.value, ...before]
     }
   }
+
+  /** The list is one in all tabs; what went off it in another one after it was sent, was recorded there. */
+  followOtherTabs(async (others) => {
+    const list = others ?? []
+    const before = new Map(scans.value.map(scan => [scan.ref, scan]))
+    const gone = scans.value.filter(scan => scan.sent !== null && !list.some(one => one.ref === scan.ref))
+    recordedIds.value.push(...gone.flatMap(({ found }) => found.is === 'known' ? [found.view.id] : []))
+    scans.value = list.map(scan => ({ found: { is: 'looking' }, problem: null, ...before.get(scan.ref), ...scan }))
+    if (!list.some(scan => scan.ref === pendingRef.value)) pendingRef.value = null
+    for (const { ref: reference } of list) if (!before.has(reference)) await lookUp(reference)
+  })
 
   onMounted(async () => {
     scans.value = (kept.value ?? []).map(scan => ({ ...scan, found: { is: 'looking' }, problem: null }))

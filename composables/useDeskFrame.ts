@@ -1,9 +1,9 @@
+import { openCylinder, useScanToOpen } from '~~/composables/useScanToOpen'
 import { useWedge } from '~~/composables/useWedge'
-import { usePostingStore } from '~~/stores/posting'
 import { usePreferencesStore } from '~~/stores/preferences'
 import { useSessionStore } from '~~/stores/session'
 import { navigationFor } from '~~/utils/access/navigation'
-import { formatLabelCode, readScannedText } from '~~/utils/label/code'
+import { readScannedText } from '~~/utils/label/code'
 
 const LONGEST_BURST_GAP_MS = 60
 
@@ -16,19 +16,10 @@ const LONGEST_BURST_GAP_MS = 60
 export function useDeskFrame(title: string | (() => string), onScan?: (code: string) => unknown) {
   const session = useSessionStore()
   const preferences = usePreferencesStore()
-  const posting = usePostingStore()
   let lastKeyAt = -Infinity
   useHead({ title })
-  useWedge((code, field) => {
-    if (onScan) return void onScan(code)
-    // Whoever fills in a form is not led away from it.
-    if (field && !field.matches('[data-search], [data-code-field]')) return posting.say(`${formatLabelCode(code)} was scanned. Leave the field, then scan to open it.`)
-    void openCylinder(code)
-  })
-
-  function openCylinder(code: string) {
-    return navigateTo(`/c/${code.toLowerCase()}`)
-  }
+  if (onScan) useWedge(code => void onScan(code))
+  else useScanToOpen()
 
   function openCode(typed: string) {
     const found = readScannedText(typed)

@@ -27,7 +27,16 @@ export function useKept<T extends object>(key: string, where: Kept = 'tab') {
     nextTick(() => keep(null))
   }
 
-  return { restored, keep, forget }
+  /** Calls back with what another tab keeps on the device from now on; null where it has forgotten it. */
+  function followOtherTabs(changed: (entry: T | null) => void) {
+    const hear = ({ key: about }: StorageEvent) => {
+      if (about === storageKey) changed(read<T>(where, storageKey))
+    }
+    onMounted(() => window.addEventListener('storage', hear))
+    onBeforeUnmount(() => window.removeEventListener('storage', hear))
+  }
+
+  return { restored, keep, forget, followOtherTabs }
 }
 
 /** What the names of all that is kept for a person begin with. */
