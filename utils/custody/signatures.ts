@@ -13,18 +13,22 @@ export function needsSignature(event: Pick<AnyRecordedEvent, 'kind' | 'trainee'>
  * The signatures on trainees' entries: by the id of the entry, the id of the event that signed it first.
  *
  * Only the supervisor that the entry names signs it, never its author nor a trainee, before or after it in effect. What
- * a trainee has since corrected was not what was signed, and is signed anew. Shape: `standings` in order of effect.
+ * a trainee has since changed was not what was signed, and is signed anew, unless somebody else has corrected it after
+ * that. Shape: `standings` in order of effect.
  */
 export function signaturesOf(standings: readonly Standing[]): ReadonlyMap<string, string> {
   const placeOf = new Map(standings.map(({ event }, index) => [event.id, index]))
+  const changedAt = traineesChanges(standings, placeOf)
   const signedBy = new Map<string, string>()
   standings.forEach(({ event: signature, isOut }, index) => {
     if (isOut || !isSignature(signature)) return
     const { eventId } = signature.details
     const signed = standings[placeOf.get(eventId) ?? -1]
     if (signed === undefined || signedBy.has(eventId) || !mayHaveSigned(signature, signed.event)) return
-    const mendedAt = signed.correction === null ? -1 : placeOf.get(signed.correction.eventId) ?? -1
-    if (mendedAt > index && standings[mendedAt]!.event.trainee) return
+    const changed = changedAt.get(eventId) ?? -1
+    const mended = signed.correction === null ? -1 : placeOf.get(signed.correction.eventId) ?? -1
+    const isOthersWord = mended > changed && !standings[mended]!.event.trainee
+    if (changed > index && !isOthersWord) return
     signedBy.set(eventId, signature.id)
   })
   return signedBy
@@ -36,10 +40,34 @@ export function waitingEntries(standings: readonly Standing[]): AnyRecordedEvent
   return standings.filter(({ event, isOut }) => !isOut && needsSignature(event) && !signed.has(event.id)).map(({ event }) => event)
 }
 
+/**
+ * Where a trainee last changed an entry, by the entry's id: by correcting it, or by correcting or taking out a correction
+ * of it, however many there are in a row.
+ */
+function traineesChanges(standings: readonly Standing[], placeOf: ReadonlyMap<string, number>): ReadonlyMap<string, number> {
+  const changes = new Map<string, number>()
+  standings.forEach(({ event, isOut }, index) => {
+    if (isOut || !event.trainee || !isCorrection(event)) return
+    const passed = new Set<string>()
+    let named = event.details.eventId
+    while (!passed.has(named)) {
+      passed.add(named)
+      const next = standings[placeOf.get(named) ?? -1]?.event
+      if (next && isCorrection(next)) named = next.details.eventId
+    }
+    changes.set(named, index)
+  })
+  return changes
+}
+
 function mayHaveSigned(signature: AnyRecordedEvent, signed: AnyRecordedEvent): boolean {
   return needsSignature(signed) && !signature.trainee && signature.actorId === signed.supervisorId && signature.actorId !== signed.actorId
 }
 
 function isSignature(event: AnyRecordedEvent): event is RecordedEvent<'countersigned'> {
   return event.kind === 'countersigned'
+}
+
+function isCorrection(event: AnyRecordedEvent): event is RecordedEvent<'corrected'> {
+  return event.kind === 'corrected'
 }

@@ -29,8 +29,10 @@ function raiseTrainee(turn: Turn): void {
   const { event, signature } = turn
   if (signature === null || signature.by !== null) return
   stand(turn, 'unsigned')
-  if (event.supervisorId !== null) turn.state.waitsForSignatureOf = [...new Set([...turn.state.waitsForSignatureOf, event.supervisorId])]
-  if (event.supervisorId === null) stand(turn, 'unsupervised')
+  // Who names themselves had nobody.
+  const supervisorId = event.supervisorId === event.actorId ? null : event.supervisorId
+  if (supervisorId === null) stand(turn, 'unsupervised')
+  else turn.state.waitsForSignatureOf = [...new Set([...turn.state.waitsForSignatureOf, supervisorId])]
 }
 
 function raiseOverfill(turn: Turn, before: CylinderState): void {

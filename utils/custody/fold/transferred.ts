@@ -1,6 +1,7 @@
 import { readingGrams } from '../../quantity/mass'
 import { scaleAccuracyGrams } from '../../quantity/scale'
 import type { HalfTransfer } from '../half'
+import type { CylinderState } from '../state'
 import { amountNotKnown } from '../findings/weight'
 import { weigh, weighAfterOutflow } from './contents'
 import { takeIn } from './takeIn'
@@ -29,18 +30,25 @@ function goOut(turn: Turn<'transferred'>): void {
   weighAfterOutflow(turn, grossAfter, 'transferred-out')
 }
 
-/** What went over by the scale alone; where nobody weighed before, by the reading that the net rested on. */
+/**
+ * What went over by the scale alone; where nobody weighed before, by the reading that the net rested on, or by the tare
+ * of a cylinder with nothing in it.
+ */
 function halfOf({ state, event }: Turn<'transferred'>): HalfTransfer {
   const { direction, refrigerant, grossBefore, grossAfter } = event.details
   const after = readingGrams(grossAfter)
-  const { grossGrams, uncertaintyGrams } = state.contents
-  const known = grossGrams === null || uncertaintyGrams === null ? null : { grams: grossGrams, accuracyGrams: uncertaintyGrams }
-  const before = grossBefore ? weightOf(readingGrams(grossBefore)) : known
+  const before = grossBefore ? weightOf(readingGrams(grossBefore)) : weightBefore(state)
   return {
     refrigerant,
     grams: before === null ? null : direction === 'out' ? before.grams - after : after - before.grams,
     accuracyGrams: (before?.accuracyGrams ?? 0) + weightOf(after).accuracyGrams,
   }
+}
+
+function weightBefore({ contents, tare }: CylinderState): { grams: number, accuracyGrams: number } | null {
+  const { grossGrams, uncertaintyGrams, nothingInIt, netGrams } = contents
+  if (grossGrams !== null && uncertaintyGrams !== null) return { grams: grossGrams, accuracyGrams: uncertaintyGrams }
+  return nothingInIt && netGrams === 0 && tare !== null ? weightOf(Math.round(tare.exactGrams)) : null
 }
 
 function weightOf(grams: number): { grams: number, accuracyGrams: number } {

@@ -38,7 +38,8 @@ describe('a countersignature', () => {
       expect(aparts(...story, other)).toEqual([true])
     }
     const alone = filled('R-22', 20, {}, { trainee: true, supervisorId: TECHNICIAN, actorId: TECHNICIAN })
-    expect(codes(viewAfter([registered(), alone, signed(1, { actorId: TECHNICIAN })]))).toEqual(['unsigned'])
+    expect(codes(viewAfter([registered(), alone, signed(1, { actorId: TECHNICIAN })]))).toEqual(['unsupervised', 'unsigned'])
+    expect(viewAfter([registered(), alone]).waitsForSignatureOf).toEqual([])
   })
 
   it('cannot stand in for a supervisor who was never named', () => {
@@ -72,6 +73,21 @@ describe('a countersignature', () => {
     expect(signatureOf(1, ...mended, signed(1))).toEqual({ by: idOf(4) })
     expect(codes(viewAfter([...story, signed(1), corrected(idOf(1), other, { actorId: SUPERVISOR })]))).toEqual([])
     expect(codes(viewAfter([...story, corrected(idOf(1), other, { trainee: true }), signed(1)]))).toEqual([])
+  })
+
+  it('is given anew where the trainee has changed or taken out a correction that was signed', () => {
+    const saying = (grossAfter: number) => ({ refrigerant: 'R-22', grossAfter: kg(grossAfter), looked: true })
+    const signedAt21 = [...story, corrected(idOf(1), saying(21), { trainee: true }), signed(1)]
+    const at25 = corrected(idOf(2), { eventId: idOf(1), reason: 'more', instead: saying(25) }, { trainee: true })
+    const takenOut = corrected(idOf(2), undefined, { trainee: true })
+    for (const change of [at25, takenOut]) {
+      expect(codes(viewAfter([...signedAt21, change]))).toEqual(['unsigned'])
+      expect(codes(viewAfter([...signedAt21, change, signed(1)]))).toEqual([])
+      expect(codes(viewAfter([...signedAt21, change, corrected(idOf(1), saying(22), { actorId: SUPERVISOR })]))).toEqual([])
+    }
+    // What was changed and taken back by somebody else stands as it was signed.
+    const changed = corrected(idOf(1), saying(25), { trainee: true })
+    expect(codes(viewAfter([...story, signed(1), changed, corrected(idOf(3), undefined, { actorId: SUPERVISOR })]))).toEqual([])
   })
 
   it('leaves practice apart', () => {

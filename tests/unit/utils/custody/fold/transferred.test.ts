@@ -114,7 +114,12 @@ describe('the half that a transfer leaves in the log', () => {
 
   it('takes the reading that the net rests on where nobody weighed before', () => {
     expect(halvesOf(holding('R-22'), out(15))[0]!.transfer).toEqual({ refrigerant: 'R-22', grams: 5000, accuracyGrams: 175 })
-    expect(halvesOf(registered(), into(17))[0]!.transfer).toMatchObject({ grams: null })
+    expect(halvesOf(registered({ contents: 'unknown' }), into(17))[0]!.transfer).toMatchObject({ grams: null })
+  })
+
+  it('takes the tare where nothing was in it and nobody weighed it: a scale is good to 60 g there', () => {
+    // 12.00 kg of tare to 17.00 kg; 60 g and 85 g.
+    expect(halvesOf(registered(), into(17))[0]!.transfer).toEqual({ refrigerant: 'R-22', grams: 5000, accuracyGrams: 145 })
   })
 
   it('is gone with an event that was taken out, and changed with one that was corrected', () => {
