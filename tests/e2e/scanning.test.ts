@@ -100,6 +100,8 @@ describe('loading a van with twelve from a rack', () => {
 
     await again.getByRole('button', { name: 'Put 11 on Van 3' }).click()
     await again.getByText('11 put on Van 3').waitFor()
+    // Whoever works by the keyboard goes on from the list, not from the top of the page.
+    expect(await again.evaluate(() => document.activeElement!.textContent!.trim())).toBe('0 on the list')
     expect(await atPlace(van)).toEqual(present.map(({ id }) => id).sort())
     expect(await atPlace(rack)).toEqual([lost!.id])
     const aboard = (await shop.manager.client.get<CylinderView>(`/api/cylinders/${present[0]!.id}`)).body

@@ -69,6 +69,7 @@ describe('a van that returns', () => {
     await page.getByLabel(`${formatLabelCode(stays!.labelCode!)} stays aboard`).check()
     await page.getByRole('button', { name: 'Check in without 1' }).click()
     await page.getByText('Van 3 is checked in').waitFor()
+    expect(await page.evaluate(() => document.activeElement!.id)).toBe('main')
     expect(await page.getByRole('list', { name: 'Missing' }).innerText()).toContain('last held by Tina')
     expect(await atPlace(van)).toEqual([lost!.id, stays!.id].sort())
     expect(await atPlace(shop.shop)).toEqual(expect.arrayContaining(back.map(({ id }) => id)))

@@ -5,7 +5,7 @@ import AccountPage from '~~/pages/account.vue'
 import { usePostingStore } from '~~/stores/posting'
 import { useSessionStore } from '~~/stores/session'
 import type { User } from '~~/utils/contract/session'
-import { burst, press } from '../../helpers/handScanner'
+import { burst, press } from '../../helpers/keyBurst'
 
 const TINA: User = { id: 'p', name: 'Tina', email: 't@firm.example', roles: ['technician'], trainee: false, certification: null, certificationType: null, certificationNumber: null, units: 'lb' }
 registerEndpoint('/api/session', () => ({ user: TINA }))

@@ -2,7 +2,7 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { defineComponent, h, ref } from 'vue'
 import { useWedge } from '~~/composables/useWedge'
-import { burst, press } from '../../helpers/handScanner'
+import { burst, press } from '../../helpers/keyBurst'
 
 const CODE = '7K3M9Q2TX'
 
