@@ -7,6 +7,7 @@ import { FLEET_CHOICES, FLEET_TEXTS } from './fleetQuestion'
 import { fleetColumns } from './fleetViews'
 import { MOST_EVENTS } from './mostEvents'
 import { id, page, type Page } from './parts'
+import { pastQuery } from './past'
 
 /** The envelope of POST /api/events. Each event in it is parsed on its own, so that a bad one refuses only itself. */
 export const eventsBody = z.strictObject({
@@ -41,6 +42,7 @@ export const fleetQuery = z.strictObject({
   label: z.string().max(FLEET_TEXTS.label).optional(),
   sort: z.enum(FLEET_CHOICES.sort).default('urgency'),
   order: z.enum(FLEET_CHOICES.order).default('asc'),
+  ...pastQuery,
 })
 
 export type FleetQuery = z.output<typeof fleetQuery>

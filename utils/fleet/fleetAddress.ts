@@ -12,6 +12,10 @@ export type AddressQuery = Record<string, string | null | undefined | (string | 
 export const FLEET_FILTERS = ['q', 'place', 'holder', 'refrigerant', 'condition', 'lifecycle', 'dueBefore', 'finding', 'owner', 'label'] as const
 export type FleetFilter = (typeof FLEET_FILTERS)[number]
 
+/** The parts that ask for the fleet of a past instant. */
+export const PAST_PARTS = ['asOf', 'knownAt'] as const
+
+const INSTANT = /^\d{4}-\d{2}-\d{2}T\d{2}:\d{2}:\d{2}(\.\d+)?(Z|[+-]\d{2}:\d{2})$/
 const ID = /^[\da-f]{8}-[\da-f]{4}-[1-8][\da-f]{3}-[89ab][\da-f]{3}-[\da-f]{12}$/
 
 /**
@@ -25,6 +29,7 @@ export function readFleetAddress(address: AddressQuery): FleetQuery {
     ...Object.entries(FLEET_CHOICES).map(([key, known]): typeof parts[number] => [key, text => (known as readonly string[]).includes(text) ? text : null]),
     ...FLEET_IDS.map((key): typeof parts[number] => [key, text => ID.test(text.toLowerCase()) ? text.toLowerCase() : null]),
     ['dueBefore', text => isMonth(text) ? text : null],
+    ...PAST_PARTS.map((key): typeof parts[number] => [key, text => INSTANT.test(text) && !Number.isNaN(Date.parse(text)) ? text : null]),
   ]
   const known = parts.flatMap(([key, read]) => {
     const value = address[key]
@@ -38,7 +43,7 @@ export function readFleetAddress(address: AddressQuery): FleetQuery {
 export function changeFleetAddress(address: AddressQuery, change: Partial<Record<keyof FleetQuery, string | null>>): Record<string, string> {
   const query = readFleetAddress(address)
   const next: Record<string, string | null | undefined> = {
-    ...Object.fromEntries(FLEET_FILTERS.map(name => [name, query[name]])),
+    ...Object.fromEntries([...FLEET_FILTERS, ...PAST_PARTS].map(name => [name, query[name]])),
     sort: query.sort === 'urgency' ? null : query.sort,
     order: query.order === 'asc' ? null : query.order,
     ...change,

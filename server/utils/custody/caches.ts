@@ -96,6 +96,15 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
   ]
 }
 
+/** What the fleet of a past instant holds of one cylinder: its row, its labels and its halves; no books. */
+export function pastCache(cylinderId: string, folded: FoldResult, from: Directory, atMs: number): InStatement[] {
+  return [
+    upsertCylinder(cylinderId, folded.state, rowContext(from, atMs), NO_GUARD),
+    ...claimStatements(cylinderId, folded, null, NO_GUARD),
+    ...halfStatements(cylinderId, folded, NO_GUARD),
+  ]
+}
+
 /**
  * The row of a cylinder from its cached state, where something outside its events has changed. A row that another
  * process has meanwhile made of a later event stays.

@@ -1,4 +1,5 @@
 import type { CustodyLogAnswer, FoldInput } from '../../../utils/contract/custody'
+import { foldAsItStood, type Past } from '../../../utils/custody/asItStood'
 import type { LogLine, Named } from '../../../utils/custody/cylinderView'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold } from '../../../utils/custody/fold'
@@ -8,6 +9,7 @@ import { directory, namesOf } from '../directory/directory'
 import { foreignCursor } from '../http/cursor'
 import { foldContext } from './foldContext'
 import { logRow, recordedEvent, SELECT_LOG } from './logRow'
+import { notYetThere } from './pastCylinder'
 import { saidByOthers } from './saidByOthers'
 
 /** A cylinder's recorded events, in the order of recording. */
@@ -16,10 +18,17 @@ export async function recordedEvents(db: Database, cylinderId: string): Promise<
   return result.rows.map(row => recordedEvent(logRow(row)))
 }
 
-/** A cylinder's custody log for people: in order of effect, newest first, each line numbered by recording. Errors: 400 for a cursor that is none of ours. */
-export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }): Promise<CustodyLogAnswer> {
+/**
+ * A cylinder's custody log for people: in order of effect, newest first, each line numbered by recording; of a past
+ * instant the lines that had happened, or were known, by then.
+ *
+ * Errors: 400 for a cursor that is none of ours; 404 where nothing had happened by then.
+ */
+export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }, past: Past | null = null): Promise<CustodyLogAnswer> {
   const [events, from] = await Promise.all([recordedEvents(db, cylinderId), directory(db)])
-  const { state, steps } = fold(events, foldContext(from))
+  const folded = past === null ? fold(events, foldContext(from)) : foldAsItStood(events, foldContext(from), past)
+  if (folded === null) throw notYetThere()
+  const { state, steps } = folded
   const byId = new Map(events.map(event => [event.id, event]))
   const names = namesOf(from)
   const lines = steps.flatMap((step): LogLine[] => {
@@ -58,7 +67,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
     items,
     nextCursor: start + page.limit < lines.length ? items.at(-1)?.id ?? null : null,
     total: lines.length,
-    cylinder: { id: cylinderId, labelCode: state.labelCode, serial: state.stamp?.serial ?? null, version: events.at(-1)?.version ?? 0 },
+    cylinder: { id: cylinderId, labelCode: state.labelCode, serial: state.stamp?.serial ?? null, version: state.version },
   }
 }
 

@@ -1,20 +1,22 @@
 import { setImmediate as nextTurn } from 'node:timers/promises'
 import type { InStatement } from '@libsql/client'
-import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import type { Database } from '../database/database'
 import { StorageUnavailable } from '../database/storageFailure'
 import { directory } from '../directory/directory'
 import { CYLINDER_CACHES, rebuiltCache } from './caches'
-import { logRow, recordedEvent, SELECT_LOG } from './logRow'
+import { cylindersAfter, logsOf } from './logPages'
 import type { Guard } from './posting'
 import { refreshedRows } from './refreshedRows'
 import { saidByOthers } from './saidByOthers'
 
-/** What one turn of the writer's queue makes again at most: what is posted meanwhile waits for no more than these. */
-const CYLINDERS_AT_ONCE = 200
-const EVENTS_AT_ONCE = 1_000
+/** Rows refreshed in one turn of the writer's queue: what is posted meanwhile waits for no more than these. */
+const ROWS_AT_ONCE = 200
 /** How often a turn is taken again after another process wrote first. */
 const RACE_RETRIES = 20
+
+/** Cylinders of which another one's log says something, or has said it. */
+export const SAID_OF = `SELECT a.cylinder_id FROM label_claims a JOIN label_claims b ON a.code = b.code AND a.cylinder_id <> b.cylinder_id
+  UNION SELECT cylinder_id FROM halves UNION SELECT other_id FROM halves UNION SELECT id FROM cylinders WHERE finding_codes LIKE '% code-on-two %'`
 
 const NEWEST = 'SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1'
 
@@ -37,7 +39,7 @@ export async function rebuildCaches(db: Database, nowMs: number, tell: (progress
   for (let after: string | null = ''; after !== null;) {
     const before: string = after
     after = await db.exclusive(async (commit) => {
-      const page = await pageAfter(db, before)
+      const page = await cylindersAfter(db, before)
       await commit(CYLINDER_CACHES.map(table => strangers(table, before, page.last)))
       done.events += await rebuildSome(db, page.ids, nowMs, commit)
       done.cylinders += page.ids.length
@@ -48,18 +50,6 @@ export async function rebuildCaches(db: Database, nowMs: number, tell: (progress
   }
   await refreshBothSides(db, nowMs)
   return done
-}
-
-/** The next cylinders of the log in the order of their ids; `last` is null where none follow. */
-async function pageAfter(db: Database, after: string): Promise<{ ids: string[], last: string | null }> {
-  const { rows } = await db.readClient.execute({
-    sql: 'SELECT cylinder_id, count(*) FROM custody_events WHERE cylinder_id > ? GROUP BY cylinder_id ORDER BY cylinder_id LIMIT ?',
-    args: [after, CYLINDERS_AT_ONCE],
-  })
-  let events = 0
-  const some = rows.findIndex(row => (events += row[1] as number) > EVENTS_AT_ONCE)
-  const ids = rows.slice(0, some === -1 ? rows.length : Math.max(1, some)).map(row => row[0] as string)
-  return { ids, last: ids.length < rows.length || rows.length === CYLINDERS_AT_ONCE ? ids.at(-1)! : null }
 }
 
 /** What a cache holds, within a stretch of cylinders, of those that the log does not know. */
@@ -80,7 +70,7 @@ async function rebuildSome(db: Database, ids: readonly string[], nowMs: number, 
     const [from, said, logs] = await Promise.all([directory(db), saidByOthers(db, left), logsOf(db, left)])
     const statements = [...logs].flatMap(([id, log]) => rebuiltCache(id, log, from, nowMs, said(id)))
     const [versions] = await commit([
-      { sql: `SELECT cylinder_id, max(version) FROM custody_events WHERE cylinder_id IN (${marks(left)}) GROUP BY cylinder_id`, args: [...left] },
+      { sql: `SELECT cylinder_id, max(version) FROM custody_events WHERE cylinder_id IN (${left.map(() => '?').join(', ')}) GROUP BY cylinder_id`, args: [...left] },
       ...statements,
     ])
     // Another process has recorded meanwhile: what it wrote rests on caches that were not made again yet.
@@ -91,24 +81,11 @@ async function rebuildSome(db: Database, ids: readonly string[], nowMs: number, 
   return events
 }
 
-async function logsOf(db: Database, ids: readonly string[]): Promise<Map<string, AnyRecordedEvent[]>> {
-  const { rows } = await db.readClient.execute({ sql: `${SELECT_LOG} WHERE cylinder_id IN (${marks(ids)}) ORDER BY cylinder_id, version`, args: [...ids] })
-  const logs = new Map<string, AnyRecordedEvent[]>()
-  for (const event of rows.map(row => recordedEvent(logRow(row)))) {
-    const log = logs.get(event.cylinderId)
-    if (log) log.push(event)
-    else logs.set(event.cylinderId, [event])
-  }
-  return logs
-}
-
 /** Once every log was read, the rows that rest on what other cylinders' logs say: one code on two, and halves of a pair. */
 async function refreshBothSides(db: Database, nowMs: number): Promise<void> {
-  const both = await db.readClient.execute(`SELECT a.cylinder_id FROM label_claims a JOIN label_claims b ON a.code = b.code AND a.cylinder_id <> b.cylinder_id
-    UNION SELECT cylinder_id FROM halves UNION SELECT id FROM cylinders WHERE finding_codes LIKE '% code-on-two %'`)
-  const ids = both.rows.map(row => row[0] as string)
-  for (let at = 0; at < ids.length; at += CYLINDERS_AT_ONCE) {
-    await db.exclusive(commit => refreshSome(db, ids.slice(at, at + CYLINDERS_AT_ONCE), nowMs, commit))
+  const ids = (await db.readClient.execute(SAID_OF)).rows.map(row => row[0] as string)
+  for (let at = 0; at < ids.length; at += ROWS_AT_ONCE) {
+    await db.exclusive(commit => refreshSome(db, ids.slice(at, at + ROWS_AT_ONCE), nowMs, commit))
     await nextTurn()
   }
 }
@@ -121,8 +98,4 @@ async function refreshSome(db: Database, ids: readonly string[], nowMs: number, 
     if (now!.rows[0]?.[0] === newest) return
   }
   throw new StorageUnavailable('The custody log is written by others faster than its caches can follow')
-}
-
-function marks(values: readonly unknown[]): string {
-  return values.map(() => '?').join(', ')
 }

@@ -123,9 +123,11 @@ const LEAVES_MISSING: readonly EventKind[] = ['labelled', 'missing', 'corrected'
  * Nothing is refused: an event that breaks a rule counts, with a finding. The first registration in effect is the
  * beginning, whatever its time; an event that a correction took out counts for nothing but its line in the log.
  * The movements of a step are exactly its change of what is in stock.
+ *
+ * @param until leaves out what took effect later (UTC milliseconds). Corrections count whenever they were made.
  */
-export function fold(events: readonly AnyRecordedEvent[], context: FoldContext): FoldResult {
-  const standings = applyCorrections(events)
+export function fold(events: readonly AnyRecordedEvent[], context: FoldContext, until = Infinity): FoldResult {
+  const standings = inEffectBy(until, applyCorrections(events))
   const beginning = standings.find(({ event, isOut }) => event.kind === 'registered' && !isOut)
   const inTurn = beginning ? [beginning, ...standings.filter(standing => standing !== beginning)] : standings
   let state = initialState(events[0]?.cylinderId ?? '')
@@ -155,12 +157,20 @@ export function fold(events: readonly AnyRecordedEvent[], context: FoldContext):
     state = turn.state
   }
   return {
-    state: withLastEvent(state, standings),
+    state: withLastEvent(state, standings.filter(({ event }) => event.effectiveAt <= until)),
     movements,
     stockChanges: stock,
     steps: standings.flatMap(({ event }) => stepOf.get(event.id) ?? []),
     labelClaims: standings.flatMap(labelClaim),
   }
+}
+
+/** What had taken effect by an instant; the registration is the beginning, and so it had once anything had happened. */
+function inEffectBy(until: number, standings: Standing[]): Standing[] {
+  if (until === Infinity) return standings
+  const beginning = standings.find(({ event, isOut }) => event.kind === 'registered' && !isOut)
+  const hasBegun = standings.some(({ event, isOut }) => event.effectiveAt <= until && !isOut)
+  return standings.filter(standing => standing.event.effectiveAt <= until || (standing === beginning && hasBegun))
 }
 
 /** @param beginsAt when the cylinder's first event took effect, of the registration that it begins with; else null. */

@@ -17,6 +17,12 @@ describe('the address of a fleet list', () => {
       .toEqual({ refrigerant: 'R-22', sort: 'net', finding: 'not-seen' })
   })
 
+  it('stays in the past while the question changes, until that is cleared', () => {
+    const past = { asOf: '2026-12-01T15:30:00Z' }
+    expect(changeFleetAddress({ ...past, refrigerant: 'R-22' }, { refrigerant: null })).toEqual(past)
+    expect(changeFleetAddress(past, { asOf: null })).toEqual({})
+  })
+
   it('clears one filter, and turns the page', () => {
     expect(changeFleetAddress({ refrigerant: 'R-22', q: 'K48' }, { q: null })).toEqual({ refrigerant: 'R-22' })
     expect(changeFleetAddress({ refrigerant: 'R-22' }, { cursor: 'next' })).toEqual({ refrigerant: 'R-22', cursor: 'next' })
@@ -38,6 +44,8 @@ describe('a part of a fleet address', () => {
     label: { read: ['K7Q2M4XW'], leftOut: ['K'.repeat(21)] },
     sort: { read: ['net', 'last-event'], leftOut: ['colour'] },
     order: { read: ['desc'], leftOut: ['up'] },
+    asOf: { read: ['2026-12-01T09:30:00-06:00', '2026-12-01T15:30:00Z'], leftOut: ['2026-12-01', '2026-12-01T15:30Z', '2026-12-01T09:30:00', 'noon'] },
+    knownAt: { read: ['2026-12-01T15:30:00.123Z'], leftOut: ['2026-13-01T00:00:00Z'] },
     cursor: { read: ['c'.repeat(600)], leftOut: ['c'.repeat(601)] },
   }
 

@@ -1,0 +1,134 @@
+import { randomBytes, randomUUID } from 'node:crypto'
+import { readdirSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { askedPast } from '../../../server/utils/custody/askedPast'
+import { custodyLog } from '../../../server/utils/custody/custodyLog'
+import { cylinderView } from '../../../server/utils/custody/cylinderViews'
+import { fleet } from '../../../server/utils/custody/fleet'
+import { pastCylinder } from '../../../server/utils/custody/pastCylinder'
+import { pastFleet, pastProgress } from '../../../server/utils/custody/pastFleet'
+import { fleetQuery, type FleetAnswer } from '../../../utils/contract/custody'
+import type { Past } from '../../../utils/custody/asItStood'
+import { drawLabelCode } from '../../../utils/label/code'
+import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../../helpers/logDatabase'
+import { lb } from '../../helpers/stamps'
+
+const HOUR = 3_600_000
+const NOW = Date.now()
+const hoursAgo = (hours: number) => NOW - hours * HOUR
+const happened = (hours: number) => ({ occurredAt: new Date(hoursAgo(hours)).toISOString() })
+
+let log: LogDatabase
+let filled: string
+let other: string
+const code = drawLabelCode(randomBytes)
+
+async function take(events: object[], hours: number) {
+  const results = await record(log.db, log.technician, events, { now: hoursAgo(hours) })
+  expect(results.map(({ outcome }) => outcome)).toEqual(events.map(() => 'accepted'))
+}
+
+beforeAll(async () => {
+  log = await openLogDatabase()
+  filled = await newCylinder(log)
+  other = await newCylinder(log)
+  // Both were registered just now, so nothing of before is known; what they say happened before.
+  await take([sent(filled, 'filled', { refrigerant: 'R-22', grossAfter: lb(40), looked: true }, happened(50))], 50)
+  await take([sent(filled, 'labelled', { code }, happened(40))], 40)
+  await take([sent(other, 'labelled', { code }, happened(30))], 30)
+  await take([sent(filled, 'weighed', { gross: lb(36) }, happened(45))], 20)
+})
+afterAll(() => log.close())
+
+const asOf = (hours: number): Past => ({ asOf: hoursAgo(hours), knownAt: null })
+
+async function listed(past: Past, query: object = {}, isNextPage = false): Promise<FleetAnswer> {
+  const { db, atMs, giveBack } = await pastFleet(log.db, past, isNextPage)
+  return fleet(db, fleetQuery.parse(query), atMs).finally(giveBack)
+}
+
+describe('one cylinder as it stood', () => {
+  it('has the weight, the label and the findings of that instant', async () => {
+    const at = (hours: number) => pastCylinder(log.db, filled, asOf(hours))
+    // 40 lb is 18,144 g and 36 lb 16,329 g, less the tare of 27.5 lb, 12,474 g.
+    expect((await at(46)).contents.netGrams).toBe(5_670)
+    expect((await at(44)).contents.netGrams).toBe(3_855)
+    expect([(await at(41)).labelCode, (await at(39)).labelCode]).toEqual([null, code])
+    expect([(await at(31)).findings, (await at(29)).findings].map(all => all.some(({ code: word }) => word === 'code-on-two'))).toEqual([false, true])
+  })
+
+  it('says what was known then, and offers nothing to do', async () => {
+    const then = await pastCylinder(log.db, filled, { asOf: hoursAgo(44), knownAt: hoursAgo(21) })
+    expect([then.contents.netGrams, then.labelCode]).toEqual([null, null])
+    expect(then.findings.map(({ code: word }) => word)).toContain('not-registered')
+    expect(then.may).toEqual([])
+  })
+
+  it('is the present one at the present instant', async () => {
+    const present = (await cylinderView(log.db, filled, { access: null, nowMs: NOW + 60_000 }))!
+    expect(await pastCylinder(log.db, filled, { asOf: NOW + 60_000, knownAt: null })).toEqual(present)
+  })
+
+  it('was not there before its first event', async () => {
+    await expect(pastCylinder(log.db, filled, asOf(51))).rejects.toThrow('404')
+    await expect(custodyLog(log.db, filled, { limit: 10 }, asOf(51))).rejects.toThrow('404')
+  })
+
+  it('has in its log the lines of then', async () => {
+    const kinds = async (past: Past) => (await custodyLog(log.db, filled, { limit: 10 }, past)).items.map(({ kind }) => kind)
+    expect(await kinds(asOf(44))).toEqual(['registered', 'weighed', 'filled'])
+    expect(await kinds({ asOf: null, knownAt: hoursAgo(21) })).toEqual(['labelled', 'filled'])
+  })
+})
+
+describe('the fleet as it stood', () => {
+  it('is filtered, sorted and paged as it was, each row equal to its page', async () => {
+    const [early, late] = [await listed(asOf(46), { sort: 'net' }), await listed(asOf(44), { sort: 'net' })]
+    expect([early, late].map(({ items }) => items.map(({ netGrams }) => netGrams))).toEqual([[5_670], [3_855]])
+    expect((await listed(asOf(29), { finding: 'code-on-two' })).total).toBe(2)
+    expect((await listed(asOf(31), { finding: 'code-on-two' })).total).toBe(0)
+    expect((await listed(asOf(29), { q: code })).items).toHaveLength(2)
+    const page = await listed(asOf(29), { limit: 1, sort: 'code' })
+    const next = await listed(asOf(29), { limit: 1, sort: 'code', cursor: page.nextCursor }, true)
+    expect([page, next].flatMap(({ items }) => items.map(({ id }) => id)).sort()).toEqual([filled, other].sort())
+    for (const row of (await listed(asOf(29))).items) {
+      const view = await pastCylinder(log.db, row.id, asOf(29))
+      expect([row.netGrams, row.labelCode, row.stopWeightGrams, row.worstFinding?.code]).toEqual(
+        [view.contents.netGrams, view.labelCode, view.capacity.stopWeightGrams, view.findings[0]?.code])
+    }
+  })
+
+  it('is the present fleet at the present instant', async () => {
+    const present = await fleet(log.db, fleetQuery.parse({}), NOW + 60_000)
+    const past = await listed({ asOf: NOW + 60_000, knownAt: null })
+    expect(past.items).toEqual(present.items)
+  })
+
+  it('takes in what comes late for the past, but not between two pages', async () => {
+    const past = asOf(10)
+    const before = await listed(past, { limit: 1, sort: 'serial' })
+    expect(pastProgress(log.db, past)).toEqual({ done: 6, of: 6, isReady: true })
+    await take([sent(randomUUID(), 'weighed', { gross: lb(30) }, happened(11))], 0)
+    expect((await listed(past, { limit: 1, sort: 'serial', cursor: before.nextCursor }, true)).total).toBe(2)
+    expect((await listed(past)).total).toBe(3)
+    expect((await listed({ asOf: hoursAgo(10), knownAt: hoursAgo(5) })).total).toBe(2)
+  })
+
+  it('leaves at most two of its files behind, whatever was asked', async () => {
+    const pastFiles = () => readdirSync(tmpdir()).filter(name => name.startsWith('collarbook-past-')).length
+    const before = pastFiles()
+    for (let hours = 1; hours < 9; hours++) await listed(asOf(hours))
+    // The one that was asked for last, and the two before it.
+    expect(pastFiles()).toBeLessThanOrEqual(before + 3)
+  })
+})
+
+describe('a question about the past', () => {
+  it('asks for no instant that is still to come', () => {
+    expect(() => askedPast({ asOf: new Date(NOW + 1).toISOString() }, NOW)).toThrow('422')
+    expect(() => askedPast({ knownAt: new Date(NOW + 1).toISOString() }, NOW)).toThrow('422')
+    expect(askedPast({ asOf: new Date(NOW).toISOString() }, NOW)).toEqual({ asOf: NOW, knownAt: null })
+    expect(askedPast({}, NOW)).toBeNull()
+  })
+})
