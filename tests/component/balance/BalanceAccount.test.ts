@@ -55,6 +55,10 @@ describe('the account of a refrigerant', () => {
     expect(rows[4]!.split('; ')).toHaveLength(18 - 3 + 1)
   })
 
+  it('says in one word where nothing moved at all', async () => {
+    expect((await mount(account(pounds(20), {}))).rows).toEqual(['Opening stock | 20.0', 'By any cause | nothing', 'Closing stock | 20.0'])
+  })
+
   it('leads from a cause that moved something to its movements, and from no other', async () => {
     expect((await mount(usual)).links).toEqual(['/behind/recovered', '/behind/shipped', '/behind/weighing'])
   })

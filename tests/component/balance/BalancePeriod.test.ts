@@ -20,7 +20,7 @@ it('asks for a named period at once', async () => {
 
 it('begins two days with those that are shown, and asks for them when both are given in order', async () => {
   const { wrapper, press, days } = await mount()
-  await press('Two days')
+  await press('Between two days')
   expect(days().map(input => input.element.value)).toEqual(['2026-12-01', '2026-12-09'])
   await days()[0]!.setValue('2026-12-10')
   await wrapper.find('form').trigger('submit')
