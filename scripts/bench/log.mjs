@@ -1,115 +1,123 @@
-// What verifying the custody log costs over reading its columns by the same client and hashing them: `npm run bench:log`.
-import { createHash, randomUUID } from 'node:crypto'
-import { mkdir, mkdtemp, rm, writeFile } from 'node:fs/promises'
-import { availableParallelism, cpus, tmpdir } from 'node:os'
+// What recording events, making the caches again and verifying cost over the barest way to the same: `npm run bench:log`.
+//
+// The log is made once and kept in the system's temporary folder. `--small` makes a small one for a quick look; further
+// words choose what is measured: verify, rebuild, split, single, large.
+import { existsSync } from 'node:fs'
+import { copyFile, mkdir, mkdtemp, rename, rm } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import process from 'node:process'
-import { fileURLToPath, pathToFileURL } from 'node:url'
-import { build } from 'vite'
+import { bundled } from './bundle.mjs'
+import { rowsWritten } from './logRows.mjs'
+import { eventMaker, largePosts, singlePosts } from './logPosts.mjs'
+import { rebuilding } from './logRebuild.mjs'
+import { stepsOfRecording } from './logSplit.mjs'
+import { verifying } from './logVerify.mjs'
+import { machine, quiet, startBare, startBuilt, stop, stopAll } from './measured.mjs'
 
-const EVENTS = Number(process.env.BENCH_EVENTS ?? 1_000_000)
-const EVENTS_A_CYLINDER = 10
-const CHECKPOINTS = 30
-const ROUNDS = 5
-const VERIFY_BOUND = 2
-const PAGE = 1_000
+const SINGLE_BOUND = 5
+const LARGE_BOUND = 2.5
+const HALF_THE_SPEED = 2
+const POST_ROUNDS = 9
 
-const here = fileURLToPath(new URL('.', import.meta.url))
-const { LOG_COLUMNS, hashEvent, makeCheckpoint, openDatabase, sha256, testSealing, verifyLog } = await parts()
+const words = process.argv.slice(2)
+const isSmall = words.includes('--small')
+const isWanted = what => words.every(word => word.startsWith('--')) || words.includes(what)
+const CYLINDERS = isSmall ? 2_000 : 100_000
+const WALK_ROUNDS = isSmall ? 5 : 3
 
-/** Our own modules as the server has them, in one bundle that finds its packages beside it. */
-async function parts() {
-  const bundle = await build({
-    configFile: false, logLevel: 'warn', root: here, resolve: { alias: { '~~': fileURLToPath(new URL('../..', import.meta.url)) } },
-    build: { ssr: 'logParts.mjs', write: false, minify: false, target: 'node20', rollupOptions: { output: { inlineDynamicImports: true } } },
-  })
-  const folder = fileURLToPath(new URL('../../node_modules/.cache/collarbook-bench', import.meta.url))
+const parts = await bundled('logParts.mjs')
+const { ADMIN, addMember, EVENTS_A_CYLINDER, LOG_COLUMNS, makeLog, openDatabase, PASSWORD, setUpFirm, TestClient, testSealing } = parts
+const EVENTS = CYLINDERS * EVENTS_A_CYLINDER
+
+/** The file of a firm with a log of that size; made where it is not there yet. */
+async function keptLog() {
+  const folder = join(tmpdir(), 'collarbook-bench')
+  const kept = join(folder, `log-${EVENTS}.db`)
+  if (existsSync(kept)) return kept
   await mkdir(folder, { recursive: true })
-  const path = join(folder, 'logParts.mjs')
-  await writeFile(path, bundle.output[0].code)
-  return import(pathToFileURL(path).href)
+  const making = await mkdtemp(join(folder, 'making-'))
+  const file = join(making, 'log.db')
+  const server = await startBuilt(file)
+  const admin = await setUpFirm(server)
+  await addMember(admin, 'Wren', ['warehouse'])
+  for (const [name, kind] of [['Shop', 'shop'], ['Van 1', 'van']]) await admin.client.post('/api/places', { name, kind })
+  await stop(server)
+  const db = await openDatabase(`file:${file}`)
+  await makeLog(db, CYLINDERS, { ...await setting(db), nowMs: Date.now() }, await testSealing(db), what => console.info(`Making the log: ${what}`))
+  await db.readClient.execute('PRAGMA wal_checkpoint(TRUNCATE)')
+  db.close()
+  await rename(file, kept)
+  await rm(making, { recursive: true })
+  return kept
 }
 
-/** Writes a log of so many weighings, cylinder after cylinder in turn, with a checkpoint now and then. */
-async function fillLog(db, sealing) {
-  const heads = Array.from({ length: Math.ceil(EVENTS / EVENTS_A_CYLINDER) }, () => ({ cylinderId: randomUUID(), version: 0, hash: '' }))
-  const actor = randomUUID()
-  const begin = Date.UTC(2025, 0, 1)
-  for (let seq = 1; seq <= EVENTS;) {
-    const statements = []
-    for (; statements.length < PAGE && seq <= EVENTS; seq++) {
-      const head = heads[seq % heads.length]
-      const at = begin + seq * 1_000
-      const row = {
-        seq, id: randomUUID(), cylinder_id: head.cylinderId, version: head.version + 1, device_id: 'phone-1', device_seq: seq, kind: 'weighed', occurred_at: at,
-        occurred_offset_minutes: -300, clock_skew_seconds: 0, effective_at: at, recorded_at: at, actor_id: actor, posted_by: actor, supervisor_id: null,
-        trainee: 0, place_id: null, body: JSON.stringify({ details: { gross: { unit: 'lb', value: 30 + seq % 300 / 10 } }, note: 'plant room, third floor' }),
-        content_hash: sha256(String(seq)), prev_hash: head.hash,
-      }
-      row.hash = hashEvent(row, sha256)
-      Object.assign(head, { version: row.version, hash: row.hash })
-      statements.push({ sql: `INSERT INTO custody_events (${LOG_COLUMNS.join(', ')}) VALUES (${LOG_COLUMNS.map(() => '?').join(', ')})`, args: LOG_COLUMNS.map(column => row[column]) })
-    }
-    await db.write(statements)
-    if (Math.floor(seq / EVENTS * CHECKPOINTS) > Math.floor((seq - PAGE) / EVENTS * CHECKPOINTS)) await makeCheckpoint(db, sealing, begin + seq * 1_000, null)
-  }
+/** Where things happen in the made log, and who records them. */
+async function setting(db) {
+  const { rows: places } = await db.readClient.execute('SELECT kind, id FROM places WHERE kind IN (\'shop\', \'van\')')
+  const { rows: people } = await db.readClient.execute('SELECT id FROM people WHERE roles LIKE \'%warehouse%\'')
+  return { ...Object.fromEntries(places.map(row => [row[0], row[1]])), access: { personId: people[0][0], roles: ['warehouse'], trainee: false } }
 }
 
-/** Reads the same columns in the same order by the same client, and hashes each row: what no verifying can do without. */
-async function readAndHash(db) {
-  let after = ['', 0]
-  let kept = 0
-  for (;;) {
-    const { rows } = await db.readClient.execute({
-      sql: `SELECT ${LOG_COLUMNS.join(', ')} FROM custody_events WHERE (cylinder_id, version) > (?, ?) ORDER BY cylinder_id, version LIMIT ${PAGE}`, args: after,
-    })
-    for (const row of rows) kept += createHash('sha256').update(JSON.stringify(Array.from({ length: LOG_COLUMNS.length }, (_, index) => row[index]))).digest()[0]
-    if (rows.length < PAGE) return kept
-    after = [rows.at(-1)[2], rows.at(-1)[3]]
-  }
+/** Every cylinder, neighbours far apart. */
+async function scatteredCylinders(db) {
+  const { rows } = await db.readClient.execute('SELECT id FROM cylinders ORDER BY id')
+  return rows.map((_, index) => rows[index * 7_919 % rows.length][0])
 }
 
-/** Units: seconds of the processor. */
-async function cpuOf(work) {
-  const begin = process.cpuUsage()
-  const result = await work()
-  const { user, system } = process.cpuUsage(begin)
-  return { seconds: (user + system) / 1e6, result }
+function tell(what, { ours, bare }, unit, bound) {
+  const ratio = ours / bare
+  console.info(`${what}: ${unit(ours)} over ${unit(bare)}: ${ratio.toFixed(2)}, at most ${bound}`)
+  if (ratio > bound) process.exitCode = 1
 }
 
-function median(values) {
-  return [...values].sort((a, b) => a - b)[Math.floor(values.length / 2)]
-}
+const microseconds = cost => `${cost.toFixed(0)} µs`
+const anEvent = seconds => `${(seconds / EVENTS * 1e6).toFixed(1)} µs`
 
+const kept = await keptLog()
 const folder = await mkdtemp(join(tmpdir(), 'collarbook-bench-'))
 try {
-  const db = await openDatabase(`file:${join(folder, 'log.db')}`)
-  await db.migrate(fileURLToPath(new URL('../../drizzle/migrations', import.meta.url)))
-  await db.write(['INSERT INTO firm (id, name, telephone, time_zone, units, created_at) VALUES (\'0198f000-0000-7000-8000-0000000000f1\', \'Bench\', \'555-0100\', \'UTC\', \'lb\', 0)'])
-  const sealing = await testSealing(db)
-  await fillLog(db, sealing)
-  const floors = []
-  const times = []
-  let found
-  for (let round = 0; round < ROUNDS; round++) {
-    const floor = await cpuOf(() => readAndHash(db))
-    if (!Number.isFinite(floor.result)) throw new Error('Nothing was hashed')
-    floors.push(floor.seconds)
-    const verified = await cpuOf(() => verifyLog(db, { now: 0, sealing }))
-    if (!verified.result.ok || verified.result.checked !== EVENTS) throw new Error(`The log is not whole: ${JSON.stringify(verified.result)}`)
-    times.push(verified.seconds)
-    found = verified.result
+  const file = join(folder, 'ours.db')
+  await copyFile(kept, file)
+  const db = await openDatabase(`file:${file}`)
+  const around = await setting(db)
+  const nextEvent = eventMaker(parts, await scatteredCylinders(db), around)
+  console.info(`CPU: ${machine()}`)
+  console.info(`${CYLINDERS.toLocaleString('en-US')} cylinders, ${EVENTS.toLocaleString('en-US')} events; processor time, medians in turn`)
+
+  if (isWanted('verify')) {
+    const { found, ...costs } = await verifying({ db, parts, sealing: await testSealing(db), rounds: WALK_ROUNDS, events: EVENTS })
+    tell(`Verifying with ${found.checkpoints} checkpoints over reading the columns and hashing them, an event`, costs, anEvent, HALF_THE_SPEED)
   }
-  const perEvent = seconds => `${(seconds / EVENTS * 1e6).toFixed(2)} µs`
-  const ratio = median(times) / median(floors)
-  console.info(`CPU: ${cpus()[0]?.model ?? 'not known'}, ${availableParallelism()} cores; Node ${process.version}`)
-  console.info(`${found.checked.toLocaleString('en-US')} events of ${found.cylinders.toLocaleString('en-US')} cylinders, ${found.checkpoints} checkpoints; medians of ${ROUNDS} rounds in turn, processor time an event`)
-  console.info(`Reading the columns and hashing them: ${perEvent(median(floors))}`)
-  console.info(`Verifying chains, numbers, signatures, and the root at every checkpoint: ${perEvent(median(times))}`)
-  console.info(`Ratio: ${ratio.toFixed(2)}, at most ${VERIFY_BOUND}`)
+  if (isWanted('rebuild')) {
+    const costs = await rebuilding({ db, parts, rounds: WALK_ROUNDS, events: EVENTS })
+    tell('Making the caches again over a plain loop that scans, parses, folds and writes the same rows, an event', costs, anEvent, HALF_THE_SPEED)
+  }
+  if (isWanted('split')) {
+    const steps = await stepsOfRecording({ db, parts, nextEvent, access: around.access })
+    console.info(`Recording by steps, an event in a commit of twenty: ${steps.map(({ step, cost }) => `${step} ${microseconds(cost)}`).join(', ')}`)
+  }
+  if (isWanted('single') || isWanted('large')) {
+    const bareFile = join(folder, 'bare.db')
+    await copyFile(kept, bareFile)
+    const server = await startBuilt(file)
+    const client = new TestClient(server.baseUrl)
+    await client.signIn(`wren@${ADMIN.email.split('@')[1]}`, PASSWORD)
+    const cookie = [...client.cookies].map(([name, value]) => `${name}=${value}`).join('; ')
+    const ours = { ...server, path: '/api/events', headers: { cookie } }
+    const bare = { ...await startBare('bareEvents.mjs', [bareFile, JSON.stringify(LOG_COLUMNS)]), headers: {} }
+    await quiet(ours)
+    if (isWanted('single')) {
+      tell('POST /api/events over a bare insert, one event a post, twenty at once', await singlePosts({ ours, bare, nextEvent, rounds: POST_ROUNDS }), microseconds, SINGLE_BOUND)
+    }
+    if (isWanted('large')) {
+      const { rows, ...costs } = await largePosts({ ours, bare, nextEvent, rowsWritten: since => rowsWritten(db, LOG_COLUMNS, since), rounds: POST_ROUNDS })
+      tell(`A post of 50 events over a bare batch of the same ${rows} rows`, costs, microseconds, LARGE_BOUND)
+    }
+  }
   db.close()
-  process.exitCode = ratio <= VERIFY_BOUND ? 0 : 1
 }
 finally {
+  stopAll()
   await rm(folder, { recursive: true, force: true })
 }

@@ -1,5 +1,5 @@
 import { eventsBody, type EventsAnswer } from '../../utils/contract/custody'
-import { append } from '../utils/custody/append'
+import { appendTelling } from '../utils/custody/append'
 import { cylinderViews } from '../utils/custody/cylinderViews'
 import { cylindersOf } from '../utils/custody/cylindersOf'
 import { useDatabase } from '../utils/database/currentDatabase'
@@ -13,6 +13,6 @@ export default apiRoute({ permission: 'events:post', body: eventsBody }, async (
   const db = useDatabase()
   const now = Date.now()
   const deviceNow = body.deviceNow ? Date.parse(body.deviceNow) : null
-  const results = await append(db, { events: body.events, access, now, deviceNow })
-  return { results, cylinders: await cylinderViews(db, cylindersOf(body.events, results), { access, nowMs: now }) }
+  const { results, standing } = await appendTelling(db, { events: body.events, access, now, deviceNow })
+  return { results, cylinders: await cylinderViews(db, cylindersOf(body.events, results), { access, nowMs: now }, standing) }
 })

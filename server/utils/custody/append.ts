@@ -1,15 +1,14 @@
 import { setImmediate as nextTurn } from 'node:timers/promises'
-import type { InStatement } from '@libsql/client'
 import { requestUnits } from '../../../utils/custody/requestUnits'
 import type { EventResult } from '../../../utils/contract/custody'
 import type { Database } from '../database/database'
 import { StorageUnavailable, storageFailure } from '../database/storageFailure'
-import { cacheStatements } from './caches'
+import { groupCaches, wereWritten, type Standing } from './caches'
 import { group } from './group'
 import { parsePost, refuse } from './judge'
 import { idOf, judgePosting, resultOf, type ReadPosting } from './judgePosting'
-import { insertLogRow, type LogRow } from './logRow'
-import type { Guard, Posting } from './posting'
+import { insertLogRows } from './logRow'
+import type { Posting } from './posting'
 import { sharedCodeRows } from './sharedCodeRows'
 
 /** Most events in one commit. */
@@ -17,10 +16,20 @@ const GROUP_EVENTS = 200
 /** How often a group is computed again after another process wrote first. */
 const RACE_RETRIES = 20
 
+/** What became of a posting. */
+export interface Appended {
+  /** In the order sent. */
+  results: EventResult[]
+  /** Cylinders as its events have made them, as far as that is known without reading them again. */
+  standing: ReadonlyMap<string, Standing>
+}
+
 interface Waiting extends ReadPosting {
-  done: (results: EventResult[]) => void
+  done: (appended: Appended) => void
   failed: (error: unknown) => void
 }
+
+const NOBODY: Appended['standing'] = new Map()
 
 const queues = new WeakMap<Database, Waiting[]>()
 
@@ -33,13 +42,18 @@ const queues = new WeakMap<Database, Waiting[]>()
  * Errors: rejects with {@link StorageUnavailable} where the database takes nothing (full, read-only, gone); then
  * nothing of the posting is stored, or it was stored and sending it again answers `duplicate`.
  */
-export function append(db: Database, posting: Posting): Promise<EventResult[]> {
+export function appendTelling(db: Database, posting: Posting): Promise<Appended> {
   const waiting = queues.get(db) ?? []
   queues.set(db, waiting)
   return new Promise((done, failed) => {
     waiting.push({ posting, parsed: posting.events.map(parsePost), units: requestUnits(posting.events), done, failed })
     if (waiting.length === 1) void db.exclusive(commit => drain(db, waiting, commit))
   })
+}
+
+/** The same for whoever wants no more than what became of each event. */
+export async function append(db: Database, posting: Posting): Promise<EventResult[]> {
+  return (await appendTelling(db, posting)).results
 }
 
 /** Takes what is waiting now; what comes meanwhile asks for a turn of its own. */
@@ -75,7 +89,7 @@ function groupsOf(taken: Waiting[]): Waiting[][] {
 async function commitOrSplit(db: Database, part: Waiting[], commit: Database['write']): Promise<void> {
   try {
     const answers = await commitGroup(db, part, commit)
-    part.forEach((one, index) => one.done(answers[index] ?? []))
+    part.forEach((one, index) => one.done(answers[index]!))
   }
   catch (error) {
     const failure = storageFailure(error)
@@ -93,7 +107,7 @@ async function commitEachAlone(db: Database, one: Waiting, commit: Database['wri
     const alone = { ...one, posting: { ...one.posting, events }, parsed: unit.map(at => one.parsed[at]!), units: [events.map((_, at) => at)] }
     try {
       const [answers] = await commitGroup(db, [alone], commit)
-      answers?.forEach((answer, index) => results.set(unit[index]!, answer))
+      answers?.results.forEach((answer, index) => results.set(unit[index]!, answer))
     }
     catch (ownError) {
       const failure = storageFailure(ownError)
@@ -102,37 +116,29 @@ async function commitEachAlone(db: Database, one: Waiting, commit: Database['wri
       unit.forEach((at, index) => results.set(at, resultOf(events[index], refuse(500, 'This event could not be stored', 'Keep it; the fault is ours.'))))
     }
   }
-  one.done(one.parsed.flatMap((_, at) => results.get(at) ?? []))
+  one.done({ results: one.parsed.flatMap((_, at) => results.get(at) ?? []), standing: NOBODY })
 }
 
-async function commitGroup(db: Database, part: Waiting[], commit: Database['write']): Promise<EventResult[][]> {
+async function commitGroup(db: Database, part: Waiting[], commit: Database['write']): Promise<Appended[]> {
   for (let attempt = 0; attempt < RACE_RETRIES; attempt++) {
     const now = await group(db, part.flatMap(one => one.parsed.flatMap(post => 'event' in post ? [post.event] : [])))
     const newestBefore = now.newest
     const judged = part.map(one => judgePosting(one, now))
     const written = judged.flatMap(one => one.rows)
-    if (written.length === 0) return judged.map(one => one.results)
+    if (written.length === 0) return judged.map(({ results }) => ({ results, standing: NOBODY }))
 
-    const statements = logStatements(written, newestBefore?.id ?? null)
-    statements.push(...await cacheStatements(db, now))
-    const dispatch = part[0]?.posting.dispatch
-    if (dispatch) statements.push(...dispatch.alongside(everyOf(written)))
-    const answers = await commit(statements)
+    const lines = insertLogRows(written, newestBefore?.id ?? null)
+    const caches = await groupCaches(db, now)
+    const along = part[0]?.posting.dispatch?.alongside(wereWritten(written)) ?? []
+    const answers = await commit([...lines, ...caches.statements, ...along])
     // The driver answers one row for each line that was written; another process that was first leaves none.
-    if (!written.every((_, index) => (answers[index]?.rows.length ?? 0) === 1)) continue
+    const answered = answers.slice(0, lines.length).reduce((sum, { rows }) => sum + rows.length, 0)
+    if (answered !== written.length) continue
     const relabelled = written.filter(row => row.kind === 'labelled' || row.kind === 'corrected')
-    if (relabelled.length > 0) await commit(await sharedCodeRows(db, [...new Set(relabelled.map(row => row.cylinder_id))], Math.max(...written.map(row => row.recorded_at))))
-    return judged.map(one => one.results)
+    if (relabelled.length === 0) return judged.map(({ results }) => ({ results, standing: caches.standing }))
+    await commit(await sharedCodeRows(db, [...new Set(relabelled.map(row => row.cylinder_id))], Math.max(...written.map(row => row.recorded_at))))
+    // What others say of these cylinders may be another now.
+    return judged.map(({ results }) => ({ results, standing: NOBODY }))
   }
   throw new StorageUnavailable('The custody log is written by others faster than this process can follow')
-}
-
-function logStatements(rows: LogRow[], newestId: string | null): InStatement[] {
-  return rows.map((row, index) => insertLogRow(row, index === 0 ? newestId : rows[index - 1]!.id))
-}
-
-function everyOf(rows: LogRow[]): Guard {
-  const last = rows.at(-1)!
-  // Each line is written only after the one before it, so the last stands for all.
-  return { sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)', args: [last.id, last.cylinder_id, last.version, last.hash] }
 }

@@ -9,6 +9,7 @@ import type { CylinderState } from '../../../utils/custody/state'
 import type { StockChange } from '../../../utils/custody/stockChange'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
+import { changeStatements, insertRows, type CacheChange, type Columns } from './cacheChanges'
 import { cylinderStates } from './cylinderViews'
 import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
@@ -19,38 +20,41 @@ import { saidByOthers } from './saidByOthers'
 const NO_GUARD: Guard = { sql: '1', args: [] }
 
 /** A cylinder that a group of events touched, as its log makes it now. */
-interface Touched { cylinderId: string, added: readonly LogRow[], folded: FoldResult, guard: Guard }
+interface Touched { cylinderId: string, added: readonly LogRow[], folded: FoldResult }
+
+/** A cylinder as it stands, and what other cylinders' logs say of it. */
+export interface Standing { state: CylinderState, said: SaidByOthers }
+
+/** What the caches must hold after a group of events, and its cylinders as they then stand. */
+export interface GroupCaches { statements: InStatement[], standing: ReadonlyMap<string, Standing> }
 
 /**
- * What the caches must hold after a group of events. Every statement stands under the condition that the last event of
- * its cylinder was written: the loser of a race changes no cache.
+ * What the caches must hold after a group of events. Every statement stands under the condition that the last line of
+ * the group was written, and so all of them: the loser of a race changes no cache.
  */
-export async function cacheStatements(db: Database, group: Group): Promise<InStatement[]> {
-  const touched = group.touched().map(({ cylinderId, events, added }): Touched => ({
-    cylinderId, added, folded: fold(events, foldContext(group.directory)), guard: wasWritten(added.at(-1)!),
-  }))
+export async function groupCaches(db: Database, group: Group): Promise<GroupCaches> {
+  const context = foldContext(group.directory)
+  const touched = group.touched().map(({ cylinderId, events, added }): Touched => ({ cylinderId, added, folded: fold(events, context) }))
   const halvesNow = new Map(touched.map(({ cylinderId, folded }) => [cylinderId, folded.state.halves]))
-  const statements = touched.flatMap(({ cylinderId, added, folded, guard }) => {
+  const standing = new Map<string, Standing>()
+  const changes = touched.map(({ cylinderId, added, folded }): CacheChange => {
     const { own, naming } = group.halvesBefore(cylinderId)
     const said = { codesOnTwo: group.codesOnTwo(cylinderId), otherHalves: withThoseOf(halvesNow, naming, cylinderId) }
-    const context = rowContext(group.directory, added.at(-1)!.recorded_at, said)
-    return [
-      upsertCylinder(cylinderId, folded.state, context, guard),
-      ...bookStatements(cylinderId, folded, added, guard),
-      ...claimStatements(cylinderId, folded, added, guard),
-      ...(areSame(own, folded.state.halves) ? [] : halfStatements(cylinderId, folded, guard)),
-    ]
+    standing.set(cylinderId, { state: folded.state, said })
+    const row = cylinderColumns(cylinderId, folded.state, rowContext(group.directory, added.at(-1)!.recorded_at, said))
+    return changeOf(cylinderId, row, [books(cylinderId, folded, added), claims(cylinderId, folded, added), ...(areSame(own, folded.state.halves) ? [] : [halfLines(cylinderId, folded)])])
   })
-  return [...statements, ...await otherRows(db, group, touched, halvesNow)]
+  const guard = wereWritten(touched.flatMap(({ added }) => added))
+  return { statements: [...changeStatements(changes, guard), ...await otherRows(db, group, touched, halvesNow, guard)], standing }
 }
 
 /** The rows of cylinders outside the group that a changed half names, or named before: what it says shows on both. */
-async function otherRows(db: Database, group: Group, touched: readonly Touched[], halvesNow: ReadonlyMap<string, Half[]>): Promise<InStatement[]> {
+async function otherRows(db: Database, group: Group, touched: readonly Touched[], halvesNow: ReadonlyMap<string, Half[]>, guard: Guard): Promise<InStatement[]> {
   const changed = touched.filter(({ cylinderId, folded }) => !areSame(group.halvesBefore(cylinderId).own, folded.state.halves))
   const named = changed.flatMap(({ cylinderId, folded }) => [...group.halvesBefore(cylinderId).own, ...folded.state.halves].map(({ otherId }) => otherId))
   const ids = [...new Set(named)].filter(id => !halvesNow.has(id))
   if (ids.length === 0) return []
-  const { guard, added } = changed.at(-1)!
+  const { added } = changed.at(-1)!
   const [states, said] = await Promise.all([cylinderStates(db, ids), saidByOthers(db, ids)])
   return [...states].map(([id, state]) => {
     const otherHalves = withThoseOf(halvesNow, said(id).otherHalves, id)
@@ -68,10 +72,12 @@ function areSame(before: readonly Half[], now: readonly Half[]): boolean {
   return JSON.stringify(before) === JSON.stringify(now)
 }
 
-function wasWritten(row: LogRow): Guard {
+/** The condition that every line of a group is in the log: each is written only after the one before it, so the last stands for all. */
+export function wereWritten(rows: readonly LogRow[]): Guard {
+  const last = rows.reduce((one, other) => other.seq > one.seq ? other : one)
   return {
     sql: 'EXISTS (SELECT 1 FROM custody_events WHERE id = ? AND cylinder_id = ? AND version = ? AND hash = ?)',
-    args: [row.id, row.cylinder_id, row.version, row.hash],
+    args: [last.id, last.cylinder_id, last.version, last.hash],
   }
 }
 
@@ -88,21 +94,14 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
     sql: 'NOT EXISTS (SELECT 1 FROM custody_events WHERE cylinder_id = ? AND version > ?)',
     args: [cylinderId, events.at(-1)?.version ?? 0],
   }
-  return [
-    upsertCylinder(cylinderId, folded.state, rowContext(from, nowMs, said), guard),
-    ...bookStatements(cylinderId, folded, null, guard),
-    ...claimStatements(cylinderId, folded, null, guard),
-    ...halfStatements(cylinderId, folded, guard),
-  ]
+  const row = cylinderColumns(cylinderId, folded.state, rowContext(from, nowMs, said))
+  return changeStatements([changeOf(cylinderId, row, [books(cylinderId, folded, null), claims(cylinderId, folded, null), halfLines(cylinderId, folded)])], guard)
 }
 
 /** What the fleet of a past instant holds of one cylinder: its row, its labels and its halves; no books. */
 export function pastCache(cylinderId: string, folded: FoldResult, from: Directory, atMs: number): InStatement[] {
-  return [
-    upsertCylinder(cylinderId, folded.state, rowContext(from, atMs), NO_GUARD),
-    ...claimStatements(cylinderId, folded, null, NO_GUARD),
-    ...halfStatements(cylinderId, folded, NO_GUARD),
-  ]
+  const row = cylinderColumns(cylinderId, folded.state, rowContext(from, atMs))
+  return changeStatements([changeOf(cylinderId, row, [claims(cylinderId, folded, null), halfLines(cylinderId, folded)])], NO_GUARD)
 }
 
 /**
@@ -110,45 +109,38 @@ export function pastCache(cylinderId: string, folded: FoldResult, from: Director
  * process has meanwhile made of a later event stays.
  */
 export function refreshedRow(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard = NO_GUARD): InStatement {
-  return upsertCylinder(cylinderId, state, context, {
+  return insertRows('cylinders', [cylinderColumns(cylinderId, state, context)], {
     sql: `EXISTS (SELECT 1 FROM cylinders WHERE id = ? AND version = ?) AND ${guard.sql}`,
     args: [cylinderId, state.version, ...guard.args],
-  })
+  }, { orReplaceBy: 'id' })[0]!
 }
 
 /** The row of a cylinder by column. */
-export function cylinderColumns(cylinderId: string, state: CylinderState, context: RuledRowContext): Record<string, InValue> {
+export function cylinderColumns(cylinderId: string, state: CylinderState, context: RuledRowContext): Columns {
   return { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state), ruled_by: context.ruledBy }
 }
 
-function upsertCylinder(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard): InStatement {
-  const columns = cylinderColumns(cylinderId, state, context)
-  const names = Object.keys(columns)
-  return {
-    sql: `INSERT INTO cylinders (${names.join(', ')}) SELECT ${names.map(() => '?').join(', ')} WHERE ${guard.sql}
-      ON CONFLICT (id) DO UPDATE SET ${names.filter(name => name !== 'id').map(name => `${name} = excluded.${name}`).join(', ')}`,
-    args: [...Object.values(columns), ...guard.args],
-  }
+/** What one part of a cylinder's caches loses and gets. */
+type Lines = Pick<CacheChange, 'cleared' | 'added'>
+
+function changeOf(cylinderId: string, row: Columns, lines: readonly Lines[]): CacheChange {
+  return { cylinderId, row, cleared: lines.flatMap(({ cleared }) => cleared), added: Object.assign({}, ...lines.map(({ added }) => added)) as Lines['added'] }
 }
 
 /**
  * The books: movements, and changes of stock. Only the new events' where these came last in effect; all of the
  * cylinder's where they changed what came after.
  */
-function bookStatements(cylinderId: string, folded: FoldResult, added: readonly LogRow[] | null, guard: Guard): InStatement[] {
-  if (added && cameLast(folded, added)) {
-    const ids = new Set(added.map(row => row.id))
-    return [
-      ...folded.movements.filter(one => ids.has(one.eventId)).map(one => insertMovement(cylinderId, one, guard)),
-      ...folded.stockChanges.filter(one => ids.has(one.eventId)).map(one => insertStockChange(cylinderId, one, guard)),
-    ]
+function books(cylinderId: string, folded: FoldResult, added: readonly LogRow[] | null): Lines {
+  const areLast = added !== null && cameLast(folded, added)
+  const ids = areLast ? new Set(added.map(row => row.id)) : null
+  return {
+    cleared: areLast ? [] : ['movements', 'stock_changes'],
+    added: {
+      movements: folded.movements.filter(one => ids?.has(one.eventId) ?? true).map(one => movementLine(cylinderId, one)),
+      stock_changes: folded.stockChanges.filter(one => ids?.has(one.eventId) ?? true).map(one => stockLine(cylinderId, one)),
+    },
   }
-  return [
-    { sql: `DELETE FROM movements WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
-    { sql: `DELETE FROM stock_changes WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
-    ...folded.movements.map(one => insertMovement(cylinderId, one, guard)),
-    ...folded.stockChanges.map(one => insertStockChange(cylinderId, one, guard)),
-  ]
 }
 
 /** Kinds that change what other events put into the books: what they say, where they stand, or that they count. */
@@ -160,49 +152,51 @@ function cameLast(folded: FoldResult, added: readonly LogRow[]): boolean {
   return folded.steps.slice(-added.length).every(step => ids.has(step.eventId))
 }
 
-function insertMovement(cylinderId: string, one: Movement, guard: Guard): InStatement {
+function movementLine(cylinderId: string, one: Movement): Columns {
   return {
-    sql: `INSERT INTO movements (cylinder_id, event_id, ordinal, cause, refrigerant, owner_id, grams, at, apart) SELECT ?, ?, ?, ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
-    args: [cylinderId, one.eventId, one.ordinal, one.cause, one.refrigerant, one.ownerId, one.grams, one.at, one.apart ? 1 : 0, ...guard.args],
+    cylinder_id: cylinderId, event_id: one.eventId, ordinal: one.ordinal, cause: one.cause, refrigerant: one.refrigerant, owner_id: one.ownerId,
+    grams: one.grams, at: one.at, apart: Number(one.apart),
   }
 }
 
-function insertStockChange(cylinderId: string, one: StockChange, guard: Guard): InStatement {
+function stockLine(cylinderId: string, one: StockChange): Columns {
   return {
-    sql: `INSERT INTO stock_changes (cylinder_id, event_id, ordinal, refrigerant, owner_id, grams, not_known, weighed_variance, found_variance, at, apart)
-      SELECT ?, ?, ?, ?, ?, ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
-    args: [
-      cylinderId, one.eventId, one.ordinal, one.refrigerant, one.ownerId, one.grams, one.notKnown, one.weighedVariance, one.foundVariance,
-      one.at, one.apart ? 1 : 0, ...guard.args,
-    ],
+    cylinder_id: cylinderId, event_id: one.eventId, ordinal: one.ordinal, refrigerant: one.refrigerant, owner_id: one.ownerId, grams: one.grams,
+    not_known: one.notKnown, weighed_variance: one.weighedVariance, found_variance: one.foundVariance, at: one.at, apart: Number(one.apart),
   }
 }
 
 /** The codes that the cylinder's `labelled` events claim, where a new event can have changed them. */
-function claimStatements(cylinderId: string, { labelClaims }: FoldResult, added: readonly LogRow[] | null, guard: Guard): InStatement[] {
-  if (added && !added.some(row => row.kind === 'labelled' || row.kind === 'corrected')) return []
-  return [
-    { sql: `DELETE FROM label_claims WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
-    ...labelClaims.map(claim => ({
-      sql: `INSERT INTO label_claims (event_id, code, cylinder_id, effective_at, device_id, device_seq) SELECT ?, ?, ?, ?, ?, ? WHERE ${guard.sql}`,
-      args: [claim.eventId, claim.code, cylinderId, claim.effectiveAt, claim.deviceId, claim.deviceSeq, ...guard.args],
-    })),
-  ]
+function claims(cylinderId: string, { labelClaims }: FoldResult, added: readonly LogRow[] | null): Lines {
+  if (added && !added.some(row => row.kind === 'labelled' || row.kind === 'corrected')) return { cleared: [], added: {} }
+  return {
+    cleared: ['label_claims'],
+    added: {
+      label_claims: labelClaims.map(claim => ({
+        event_id: claim.eventId, code: claim.code, cylinder_id: cylinderId, effective_at: claim.effectiveAt, device_id: claim.deviceId, device_seq: claim.deviceSeq,
+      })),
+    },
+  }
 }
 
-function halfStatements(cylinderId: string, { state }: FoldResult, guard: Guard): InStatement[] {
-  return [
-    { sql: `DELETE FROM halves WHERE cylinder_id = ? AND ${guard.sql}`, args: [cylinderId, ...guard.args] },
-    ...state.halves.map((half, position) => ({
-      sql: `INSERT INTO halves (event_id, cylinder_id, other_id, position, half) SELECT ?, ?, ?, ?, ? WHERE ${guard.sql}`,
-      args: [half.eventId, cylinderId, half.otherId, position, JSON.stringify(half), ...guard.args],
-    })),
-  ]
+function halfLines(cylinderId: string, { state }: FoldResult): Lines {
+  return {
+    cleared: ['halves'],
+    added: { halves: state.halves.map((half, position) => ({ event_id: half.eventId, cylinder_id: cylinderId, other_id: half.otherId, position, half: JSON.stringify(half) })) },
+  }
 }
 
-function snakeCase(columns: object): Record<string, InValue> {
-  return Object.fromEntries(Object.entries(columns).map(([key, value]) => [
-    key.replace(/[A-Z]/g, letter => `_${letter.toLowerCase()}`),
-    typeof value === 'boolean' ? Number(value) : value as InValue,
-  ]))
+const COLUMN_NAMES = new Map<string, string>()
+
+/** The name of a column in the database. */
+function columnName(key: string): string {
+  const known = COLUMN_NAMES.get(key)
+  if (known !== undefined) return known
+  const name = key.replace(/[A-Z]/g, letter => `_${letter.toLowerCase()}`)
+  COLUMN_NAMES.set(key, name)
+  return name
+}
+
+function snakeCase(columns: object): Columns {
+  return Object.fromEntries(Object.entries(columns).map(([key, value]) => [columnName(key), typeof value === 'boolean' ? Number(value) : value as InValue]))
 }

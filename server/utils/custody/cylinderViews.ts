@@ -4,20 +4,25 @@ import type { CylinderState } from '../../../utils/custody/state'
 import { view } from '../../../utils/custody/view'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
+import type { Standing } from './caches'
 import { viewContext } from './foldContext'
 import { saidByOthers } from './saidByOthers'
 
 /** Who asks, when, and of which refrigerant where nothing is in the cylinder. */
 export interface Asking { access: Access | null, nowMs: number, askedRefrigerant?: string | null }
 
-/** What is to be said of cylinders today, in the order asked; ids without a cylinder are left out. */
-export async function cylinderViews(db: Database, ids: readonly string[], asking: Asking): Promise<CylinderView[]> {
-  if (ids.length === 0) return []
-  const [from, said, states] = await Promise.all([directory(db), saidByOthers(db, ids), cylinderStates(db, ids)])
+/**
+ * What is to be said of cylinders today, in the order asked; ids without a cylinder are left out.
+ *
+ * @param known how some of them stand, which then are not read.
+ */
+export async function cylinderViews(db: Database, ids: readonly string[], asking: Asking, known: ReadonlyMap<string, Standing> = new Map()): Promise<CylinderView[]> {
+  const unknown = ids.filter(id => !known.has(id))
+  const [from, said, states] = await Promise.all([directory(db), saidByOthers(db, unknown), cylinderStates(db, unknown)])
   return ids.flatMap((id) => {
-    const state = states.get(id)
-    if (!state) return []
-    return [view(state, viewContext(from, { ...asking, saidByOthers: said(id) }))]
+    const read = states.get(id)
+    const standing = known.get(id) ?? (read && { state: read, said: said(id) })
+    return standing ? [view(standing.state, viewContext(from, { ...asking, saidByOthers: standing.said }))] : []
   })
 }
 

@@ -78,15 +78,22 @@ export function recordedEvent(row: LogRow): AnyRecordedEvent {
   } as AnyRecordedEvent
 }
 
+/** Many to a statement, for the driver prepares each anew; few enough for the arguments that one may have. */
+const LINES_A_STATEMENT = 200
+
 /**
- * Writes a line if, and only if, the log still ends with the line that it was computed after.
- * Answers a row when it was written and none when another process was first.
+ * Writes lines, in their order, if, and only if, the log still ends with the line that they were computed after.
+ * Each statement answers a row for each of its lines when they were written, and none when another process was first.
  */
-export function insertLogRow(row: LogRow, newestId: string | null): InStatement {
-  return {
-    sql: `INSERT INTO custody_events (${LOG_COLUMNS.join(', ')}) SELECT ${LOG_COLUMNS.map(() => '?').join(', ')}
-      WHERE (SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1) IS ?
-      ON CONFLICT DO NOTHING RETURNING seq`,
-    args: [...LOG_COLUMNS.map(column => row[column]), newestId],
-  }
+export function insertLogRows(rows: readonly LogRow[], newestId: string | null): InStatement[] {
+  const one = `(${LOG_COLUMNS.map(() => '?').join(', ')})`
+  return Array.from({ length: Math.ceil(rows.length / LINES_A_STATEMENT) }, (_, part) => {
+    const some = rows.slice(part * LINES_A_STATEMENT, (part + 1) * LINES_A_STATEMENT)
+    return {
+      sql: `INSERT INTO custody_events (${LOG_COLUMNS.join(', ')}) SELECT * FROM (VALUES ${some.map(() => one).join(', ')})
+        WHERE (SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1) IS ?
+        ON CONFLICT DO NOTHING RETURNING seq`,
+      args: [...some.flatMap(row => LOG_COLUMNS.map(column => row[column])), part === 0 ? newestId : rows[part * LINES_A_STATEMENT - 1]!.id],
+    }
+  })
 }

@@ -12,11 +12,33 @@ export function configureSessionCookie({ secure }: Environment): void {
   process.env.NUXT_SESSION_COOKIE_SECURE = String(secure)
 }
 
-/** The secret in the request's sealed cookie, or null. Without a cookie nothing is unsealed and none is set. */
+/** How long what a cookie holds is known without unsealing it again, and of how many cookies. */
+const KEPT_MS = 60_000
+const MOST_KEPT = 1_000
+
+const unsealed = new Map<string, { sid: string, until: number }>()
+
+/**
+ * The secret in the request's sealed cookie, or null. Without a cookie nothing is unsealed and none is set.
+ *
+ * Whoever posts event after event sends the same cookie: it is unsealed once a minute, for that costs more than the
+ * rest of the sign-in. Whether the secret still opens a session is looked up each time.
+ */
 export async function readSessionSecret(event: H3Event): Promise<string | null> {
-  if (!getCookie(event, ownName())) return null
+  const cookie = getCookie(event, ownName())
+  if (!cookie) return null
+  const kept = unsealed.get(cookie)
+  if (kept && Date.now() < kept.until) return kept.sid
   const { secure } = await getUserSession(event)
-  return typeof secure?.sid === 'string' ? secure.sid : null
+  if (typeof secure?.sid !== 'string') return null
+  keep(cookie, secure.sid)
+  return secure.sid
+}
+
+function keep(cookie: string, sid: string): void {
+  unsealed.delete(cookie)
+  unsealed.set(cookie, { sid, until: Date.now() + KEPT_MS })
+  if (unsealed.size > MOST_KEPT) unsealed.delete(unsealed.keys().next().value!)
 }
 
 /** Seals a secret into a new cookie. */

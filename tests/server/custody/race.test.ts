@@ -1,8 +1,8 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { cacheStatements } from '../../../server/utils/custody/caches'
+import { groupCaches } from '../../../server/utils/custody/caches'
 import { group } from '../../../server/utils/custody/group'
 import { parsePost } from '../../../server/utils/custody/judge'
-import { insertLogRow, recordedEvent } from '../../../server/utils/custody/logRow'
+import { insertLogRows, recordedEvent } from '../../../server/utils/custody/logRow'
 import { rebuildCaches } from '../../../server/utils/custody/rebuild'
 import { sealedRow } from '../../../server/utils/custody/sealedRow'
 import { verifyLog } from '../../../server/utils/proof/verifyLog'
@@ -37,7 +37,7 @@ describe('two writers on one log', () => {
     const other = await log.openAgain()
     await record(other, log.technician, [sent(id, 'filled', { refrigerant: 'R-22', condition: 'clean', grossBefore: lb(27.5), grossAfter: lb(33), looked: true })])
     const before = await caches()
-    const answers = await log.db.write([insertLogRow(row, read.newest!.id), ...await cacheStatements(log.db, read)])
+    const answers = await log.db.write([...insertLogRows([row], read.newest!.id), ...(await groupCaches(log.db, read)).statements])
     expect(answers[0]!.rows).toHaveLength(0)
     expect(await caches()).toBe(before)
     expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true })

@@ -232,8 +232,16 @@ function labelClaim({ event, isOut }: Standing): LabelClaim[] {
   return [{ eventId: id, code: labelledCode((event as RecordedEvent<'labelled'>).details), effectiveAt, deviceId, deviceSeq }]
 }
 
-function copyOf(state: CylinderState): CylinderState {
-  return JSON.parse(JSON.stringify(state)) as CylinderState
+/** A copy that shares nothing, as JSON would make it; several times as fast. */
+function copyOf<T>(value: T): T {
+  if (typeof value !== 'object' || value === null) return value
+  if (Array.isArray(value)) return value.map(copyOf) as T
+  const copy: Record<string, unknown> = {}
+  for (const key of Object.keys(value)) {
+    const inner = (value as Record<string, unknown>)[key]
+    if (inner !== undefined) copy[key] = copyOf(inner)
+  }
+  return copy as T
 }
 
 function snapshot(state: CylinderState): Snapshot {
