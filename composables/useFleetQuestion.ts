@@ -1,5 +1,6 @@
 import { useApi } from '~~/composables/useApi'
 import { useLoaded } from '~~/composables/useLoaded'
+import { usePast } from '~~/composables/usePast'
 import { useRefreshOnFocus } from '~~/composables/useRefreshOnFocus'
 import type { FleetAnswer, FleetQuery, FleetSummary } from '~~/utils/contract/custody'
 import type { PeopleAnswer } from '~~/utils/contract/people'
@@ -15,8 +16,11 @@ export function useFleetQuestion() {
 
   const query = computed(() => readFleetAddress(route.query as AddressQuery))
   const address = computed(() => changeFleetAddress(route.query as AddressQuery, {}))
-  const fleet = useLoaded('fleet', () => api.get<FleetAnswer>('/api/cylinders', fleetRequest(query.value)), [query])
-  const summary = useLoaded('fleet-summary', () => api.get<FleetSummary>('/api/fleet/summary'))
+  const { past, asked } = usePast()
+  // A fleet of the past may take its time: the browser asks for it, and shows how far it has come.
+  const isLater = () => import.meta.server && past.value !== null
+  const fleet = useLoaded('fleet', async () => isLater() ? null : await api.get<FleetAnswer>('/api/cylinders', fleetRequest(query.value)), [query])
+  const summary = useLoaded('fleet-summary', async () => isLater() ? null : await api.get<FleetSummary>('/api/fleet/summary', asked.value), [() => JSON.stringify(asked.value)])
   const places = useLoaded('places-in-use', () => api.get<PlacesAnswer>('/api/places', { active: 'true' }))
   const people = useLoaded('people-in-use', () => api.get<PeopleAnswer>('/api/people', { active: 'true' }))
   const firms = useLoaded('firms-in-use', () => api.get<FirmsAnswer>('/api/firms', { active: 'true' }))
@@ -51,7 +55,9 @@ export function useFleetQuestion() {
     void summary.refresh()
   }
 
-  useRefreshOnFocus(refresh)
+  onMounted(() => past.value !== null && fleet.data.value === null && refresh())
+  // The past does not change while one looks away.
+  useRefreshOnFocus(() => past.value === null && refresh())
 
-  return { query, address, fleet, summary, names, filters, pickedMonth, change, showFinding, sortBy, pickMonth, refresh }
+  return { query, address, past, fleet, summary, names, filters, pickedMonth, change, showFinding, sortBy, pickMonth, refresh }
 }

@@ -13,6 +13,9 @@ const NARROW = { width: 320, height: 800 }
 /** Row height of a screen that is used with gloves, in CSS px. */
 const THUMB = 48
 
+/** An instant that the demo firm's history covers. */
+const LAST_MONTH = new Date(Date.now() - 30 * 86_400_000).toISOString()
+
 type Who = keyof DemoFleet['people'] | 'nobody'
 
 /** A page as somebody meets it; `empty` is a server that is not set up yet. */
@@ -55,6 +58,11 @@ const SCREENS: Record<string, Screen[]> = {
     { as: technician, at: demo => `/c/${demo.codes.onNone}`, answers: 404 },
     { as: manager, at: demo => `/c/${demo.codes.usual}` },
   ],
+  'c/[ref]/as-it-stood.vue': [
+    { as: technician, at: demo => `/c/${demo.codes.usual}/as-it-stood` },
+    { as: manager, at: demo => `/c/${demo.codes.usual}/as-it-stood?asOf=${LAST_MONTH}` },
+    { as: auditor, at: demo => `/c/${demo.codes.usual}/as-it-stood?knownAt=${LAST_MONTH}` },
+  ],
   'c/[ref]/act/[kind].vue': [
     ...FORM_KINDS.map(kind => ({ as: warehouse, at: (demo: DemoFleet) => `/c/${demo.codes.usual}/act/${kind}` })),
     { as: 'trainee', at: demo => `/c/${demo.codes.usual}/act/weighed` },
@@ -89,7 +97,7 @@ const SCREENS: Record<string, Screen[]> = {
     { as: manager, at: () => '/fill-limit?composition=R-32:50&waterCapacity=fortyseven&spec=DOT-9X' },
     { as: manager, at: () => '/fill-limit?refrigerant=R-744&waterCapacity=47.7lb&tareWeight=97.9lb&spec=DOT-3AA1800' },
   ],
-  'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }],
+  'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }, { as: manager, at: () => `/fleet?asOf=${LAST_MONTH}` }],
   'fleet/register.vue': [{ as: warehouse, at: () => '/fleet/register' }],
   'invitation/[token].vue': [
     { as: 'nobody', at: demo => `/invitation/${demo.invitation}` },

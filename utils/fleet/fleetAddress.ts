@@ -1,5 +1,6 @@
 import type { FleetQuery } from '../contract/custody'
 import { FLEET_CHOICES, FLEET_IDS, FLEET_TEXTS } from '../contract/fleetQuestion'
+import { readInstant } from '../address/queryInstant'
 import { isMonth } from '../quantity/month'
 
 /** Cylinders on one page of the fleet. */
@@ -15,7 +16,6 @@ export type FleetFilter = (typeof FLEET_FILTERS)[number]
 /** The parts that ask for the fleet of a past instant. */
 export const PAST_PARTS = ['asOf', 'knownAt'] as const
 
-const INSTANT = /^\d{4}-\d{2}-\d{2}T\d{2}:\d{2}:\d{2}(\.\d+)?(Z|[+-]\d{2}:\d{2})$/
 const ID = /^[\da-f]{8}-[\da-f]{4}-[1-8][\da-f]{3}-[89ab][\da-f]{3}-[\da-f]{12}$/
 
 /**
@@ -29,7 +29,7 @@ export function readFleetAddress(address: AddressQuery): FleetQuery {
     ...Object.entries(FLEET_CHOICES).map(([key, known]): typeof parts[number] => [key, text => (known as readonly string[]).includes(text) ? text : null]),
     ...FLEET_IDS.map((key): typeof parts[number] => [key, text => ID.test(text.toLowerCase()) ? text.toLowerCase() : null]),
     ['dueBefore', text => isMonth(text) ? text : null],
-    ...PAST_PARTS.map((key): typeof parts[number] => [key, text => INSTANT.test(text) && !Number.isNaN(Date.parse(text)) ? text : null]),
+    ...PAST_PARTS.map((key): typeof parts[number] => [key, readInstant]),
   ]
   const known = parts.flatMap(([key, read]) => {
     const value = address[key]
