@@ -1,4 +1,4 @@
-import { mkdirSync, statSync } from 'node:fs'
+import { accessSync, constants, mkdirSync, statSync } from 'node:fs'
 import { dirname } from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { createClient, type Client, type InStatement, type ResultSet } from '@libsql/client'
@@ -96,6 +96,10 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
         return await writer.batch(statements, 'write')
       }
       catch (error) {
+        if (attempt === 1 && mayWriteAgain(error, file)) {
+          await writer.reconnect()
+          continue
+        }
         if (!isBusy(error)) throw error
         await writer.reconnect()
         if (Date.now() >= until) throw error
@@ -106,7 +110,7 @@ export async function openDatabase(url: string, authToken?: string): Promise<Dat
 
   async function probe(): Promise<void> {
     refuseIfGone()
-    await readClient.execute('SELECT count(*) FROM firm')
+    await readClient.batch(['SELECT count(*) FROM firm', 'SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1'], 'read')
     if (failedAt === null) return
     if (Date.now() - failedAt < FAILURE_COUNTS_MS) throw new StorageUnavailable('A write has failed just now')
     await enqueue(() => commit(['UPDATE firm SET name = name']))
@@ -140,6 +144,18 @@ function sameFile(file: string): () => void {
 async function migrateTo(client: Client, migrationsFolder: string): Promise<void> {
   const { migrate } = await import('drizzle-orm/libsql/migrator')
   await migrate(drizzle(client), { migrationsFolder })
+}
+
+/** Whether a connection was made while its file was read-only, which it stays, and the file is no longer. */
+function mayWriteAgain(error: unknown, file: string | null): boolean {
+  if (file === null || !(error as { code?: string }).code?.startsWith('SQLITE_READONLY')) return false
+  try {
+    accessSync(file, constants.W_OK)
+    return true
+  }
+  catch {
+    return false
+  }
 }
 
 /** Whether another holder of the file's write lock was in the way. */
