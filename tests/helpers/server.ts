@@ -35,7 +35,7 @@ export interface StartOptions {
   by?: readonly string[]
 }
 
-/** Starts the built server on a free port and waits until it is healthy. */
+/** Starts the built server on a free port and waits until it answers. */
 export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir(), 'collarbook-')), by = [] }: StartOptions = {}): Promise<TestServer> {
   const port = await getPort({ host: '127.0.0.1', random: true })
   const baseUrl = `http://localhost:${port}`
@@ -48,7 +48,7 @@ export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir()
     child = spawnServer(settings, by)
     child.stdout?.on('data', data => printed += data)
     child.stderr?.on('data', data => printed += data)
-    await healthy(baseUrl, child, () => printed)
+    await answering(baseUrl, child, () => printed)
   }
   async function end(): Promise<void> {
     if (child.exitCode !== null || child.signalCode !== null) return
@@ -101,14 +101,13 @@ function spawnServer(env: NodeJS.ProcessEnv, by: readonly string[] = []): ChildP
   return spawn(command, args, { env, stdio: ['ignore', 'pipe', 'pipe'] })
 }
 
-async function healthy(baseUrl: string, child: ChildProcess, printed: () => string): Promise<void> {
+async function answering(baseUrl: string, child: ChildProcess, printed: () => string): Promise<void> {
   const until = Date.now() + START_PATIENCE_MS
   while (Date.now() < until) {
     if (child.exitCode !== null) throw new Error(`The server ended with code ${child.exitCode}:\n${printed()}`)
-    const answer = await fetch(`${baseUrl}/api/health`).catch(() => null)
-    if (answer?.ok) return
+    if (await fetch(`${baseUrl}/api/health`).catch(() => null)) return
     await wait(50)
   }
   child.kill('SIGKILL')
-  throw new Error(`The server was not healthy in ${START_PATIENCE_MS / 1000} s:\n${printed()}`)
+  throw new Error(`The server did not answer in ${START_PATIENCE_MS / 1000} s:\n${printed()}`)
 }
