@@ -164,13 +164,13 @@ function accuracy(grossGrams, scale) {
 }
 
 function isMass(value) {
-  const isFigure = (part, most) => typeof part === 'number' && part >= 0 && part <= most
+  const isUpTo = (part, most) => typeof part === 'number' && part >= 0 && part <= most
   if (typeof value !== 'object' || value === null) return false
   const { unit, ...rest } = value
   const names = Object.keys(rest).sort().join(' ')
-  if (unit === 'lb') return names === 'value' && isFigure(rest.value, 100_000)
-  if (unit === 'kg') return names === 'value' && isFigure(rest.value, 45_000)
-  return unit === 'lb-oz' && names === 'lb oz' && isFigure(rest.lb, 100_000) && Number.isInteger(rest.lb) && isFigure(rest.oz, 16) && rest.oz < 16
+  if (unit === 'lb') return names === 'value' && isUpTo(rest.value, 100_000)
+  if (unit === 'kg') return names === 'value' && isUpTo(rest.value, 45_000)
+  return unit === 'lb-oz' && names === 'lb oz' && isUpTo(rest.lb, 100_000) && Number.isInteger(rest.lb) && isUpTo(rest.oz, 16) && rest.oz < 16
 }
 
 // The fields of each kind's details; those with an exclamation mark must be there.
@@ -203,11 +203,67 @@ const FIELDS = {
   'corrected': 'eventId! reason! instead',
 }
 const MASSES = ['gross', 'grossBefore', 'grossAfter', 'newTare', 'theirGross', 'acceptedNet']
-const WORDS = {
-  purpose: ['same-system', 'same-owner', 'sampling', 'other'],
-  cause: ['leak', 'relief', 'hose', 'accident', 'unknown'],
-  direction: ['out', 'in'],
-  ownership: ['own', 'rental', 'deposit', 'customer'],
+
+const UUID = /^(?:[0-9a-f]{8}-[0-9a-f]{4}-[1-8][0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}|0{8}-0{4}-0{4}-0{4}-0{12}|f{8}-f{4}-f{4}-f{4}-f{12})$/i
+const isId = value => typeof value === 'string' && UUID.test(value)
+const isOneOf = (...words) => value => words.includes(value)
+const isLine = longest => value => typeof value === 'string' && value.trim() !== '' && value.trim().length <= longest
+  && !/[\p{Cc}\p{Cs}\u202A-\u202E\u2066-\u2069]/u.test(value.trim())
+const isFigure = (least, most) => value => typeof value === 'number' && value >= least && value <= most
+const isName = value => typeof value === 'string' && value.length <= 20 && /^R[A-Z]{0,2}-\d{1,4}[A-Za-z0-9]*(?:\([EZ]\))?$/.test(value)
+const isCondition = isOneOf('clean', 'suspect', 'burnt', 'mixed', 'unknown')
+const isInstant = value => typeof value === 'string' && /^\d{4}-\d\d-\d\dT\d\d:\d\d(?::\d\d(?:\.\d+)?)?(?:Z|[+-]\d\d:\d\d)$/.test(value) && Number.isFinite(Date.parse(value))
+const isMonth = value => typeof value === 'string' && /^(?:19|20|21)\d\d-(?:0[1-9]|1[0-2])$/.test(value)
+/** Whether a value is an object with these fields and no others; those with a question mark may be left out. */
+const isObject = fields => value => typeof value === 'object' && value !== null && !Array.isArray(value)
+  && Object.keys(value).every(name => Object.hasOwn(fields, name) || Object.hasOwn(fields, `${name}?`))
+  && Object.entries(fields).every(([name, isRight]) => name.endsWith('?')
+    ? value[name.slice(0, -1)] === undefined || isRight(value[name.slice(0, -1)])
+    : isRight(value[name]))
+const isVacuum = value => isObject({ microns: isFigure(0, 1_000_000) })(value) || isObject({ 'inHg': isFigure(0, 32), 'barometerInHg?': isFigure(15, 32) })(value)
+const isVerdict = value => isObject({ refrigerant: name => name === null || isName(name), condition: isCondition })(value)
+  && (value.refrigerant !== null || value.condition !== 'clean')
+const isReadings = value => Array.isArray(value) && value.length <= 200 && value.every(isObject({ at: isInstant, gross: isMass }))
+const isContents = value => value === 'evacuated' || value === 'unknown' || isObject({ refrigerant: isName, condition: isCondition })(value)
+const isStamped = value => value === null || (isMass(value) && Math.round(exactGrams(value)) > 0)
+const isStamp = value => typeof value === 'object' && value !== null && isStamped(value.tareWeight) && isStamped(value.waterCapacity)
+  && [undefined, true, false].includes(value.tareIncludesValve)
+
+/** What a field holds wherever it stands, of the kinds that bear on what is in a cylinder. */
+const FORMS = {
+  ...Object.fromEntries(MASSES.map(name => [name, isMass])),
+  ...Object.fromEntries([
+    'fromFirmId', 'ownerId', 'toPlaceId', 'toHolderId', 'scaleId', 'jobId', 'ownerOfRefrigerantId', 'counterpartId', 'transferId', 'placeId', 'shipmentId',
+    'lotId', 'requalifierId', 'otherCylinderId', 'exchangeId', 'firmId',
+  ].map(name => [name, isId])),
+  newTare: value => isMass(value) && isStamped(value),
+  refrigerant: value => value === null || isName(value),
+  dedicatedTo: isName,
+  condition: isCondition,
+  contents: isContents,
+  stamp: isStamp,
+  vacuum: isVacuum,
+  verdict: isVerdict,
+  readings: isReadings,
+  purpose: isOneOf('same-system', 'same-owner', 'sampling', 'other'),
+  phase: isOneOf('liquid', 'vapour'),
+  cause: isOneOf('leak', 'relief', 'hose', 'accident', 'unknown'),
+  direction: isOneOf('out', 'in'),
+  ownership: isOneOf('own', 'rental', 'deposit', 'customer'),
+  looked: isOneOf(true),
+  unavoidable: isOneOf(true, false),
+  paper: isLine(120),
+  grade: isLine(80),
+  suffix: isLine(3),
+  rin: value => typeof value === 'string' && /^[A-Z0-9]{4}$/.test(value),
+  price: isFigure(0, 1_000_000_000),
+  month: isMonth,
+}
+/** Fields that hold something else in one kind than in another. */
+const FORMS_OF = {
+  filled: { method: isLine(40) },
+  checked: { method: isOneOf('pressure', 'identifier', 'laboratory') },
+  retested: { method: isOneOf('volumetric', 'proof', 'visual'), result: isOneOf('passed', 'rejected', 'condemned') },
 }
 
 /** Whether details could be those of a kind: what a correction puts in place counts only then. */
@@ -215,12 +271,11 @@ function fits(kind, details) {
   if (typeof details !== 'object' || details === null || Array.isArray(details)) return false
   const fields = FIELDS[kind].split(' ')
   const names = fields.map(field => field.replace('!', ''))
+  const forms = { ...FORMS, ...FORMS_OF[kind] }
   return fields.every(field => !field.endsWith('!') || details[field.slice(0, -1)] !== undefined)
     && Object.keys(details).every(name => names.includes(name))
-    && MASSES.every(name => details[name] === undefined || isMass(details[name]))
-    && Object.entries(WORDS).every(([name, words]) => details[name] === undefined || words.includes(details[name]))
-    && (kind !== 'checked' || ['pressure', 'identifier', 'laboratory'].includes(details.method))
-    && (kind !== 'retested' || ['volumetric', 'proof', 'visual'].includes(details.method))
+    && Object.entries(details).every(([name, value]) => value === undefined || !Object.hasOwn(forms, name) || forms[name](value))
+    && (kind !== 'checked' || (details.method === 'pressure') === (details.verdict === undefined))
 }
 
 function eventOf(row) {
@@ -466,7 +521,11 @@ const scales = new Map()
 const firmPlaces = new Map()
 
 function begin(line) {
-  if (line.format !== 'custody-log' || line.version !== 1) giveUp('This is no export of a custody log in the form that this program knows (version 1).')
+  const isText = value => typeof value === 'string'
+  const isOurs = line.format === 'custody-log' && line.version === 1 && isText(line.origin) && isText(line.publicKey)
+    && Array.isArray(line.formerKeys) && line.formerKeys.every(isText)
+    && Array.isArray(line.columns) && [...HASHED, 'hash'].every(column => line.columns.includes(column))
+  if (!isOurs) giveUp('This is no export of a custody log in the form that this program knows (version 1).')
   if (!Number.isSafeInteger(line.events) || line.events < 0 || line.events > MOST_EVENTS) giveUp('The export does not say how many events it holds.')
   header = line
   const trusted = given.length > 0 ? given : [line.publicKey, ...line.formerKeys]
@@ -477,6 +536,8 @@ function begin(line) {
 }
 
 function takeEvent(values) {
+  const isRow = Array.isArray(values) && values.length === header.columns.length && values.every(value => value === null || typeof value !== 'object')
+  if (!isRow) return fault('A line of the log does not have its columns.')
   const row = Object.fromEntries(header.columns.map((column, index) => [column, values[index]]))
   if (rows.length > 0 && rows[0].cylinder_id !== row.cylinder_id) fault(`cylinder ${rows[0].cylinder_id}: its net is missing`)
   if (rows.length > 0 && rows[0].cylinder_id !== row.cylinder_id) rows = []
@@ -510,10 +571,12 @@ for await (const text of createInterface({ input: createReadStream(file).on('err
     fault('A line of the file is no JSON.')
     continue
   }
-  if (!header) begin(line)
+  if (typeof line !== 'object' || line === null) fault('A line of the file says nothing.')
+  else if (!header) begin(line)
   else if (line.scale) scales.set(line.scale.id, line.scale)
   else if (line.firm) firmPlaces.set(line.firm.id, line.firm.placeId)
-  else if (line.checkpoint) checkpoints.push(readCheckpoint(line.checkpoint, keys))
+  else if (typeof line.checkpoint === 'string') checkpoints.push(readCheckpoint(line.checkpoint, keys))
+  else if (line.checkpoint !== undefined) fault('A checkpoint is no text.')
   else if (line.event) takeEvent(line.event)
   else if (line.cylinder) takeCylinder(line.cylinder)
   else if (line.end) end = line.end

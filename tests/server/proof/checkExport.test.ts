@@ -46,6 +46,20 @@ const EDGES: Told[][] = [
   ],
   // 300 g above the tare tell nothing on a scale that is good to 500 g.
   [registered({ contents: 'evacuated' }), did('weighed', { gross: kg(12.3), scaleId: COARSE_SCALE })],
+  // Corrections that came before what they correct, so that nobody could say that they do not fit it: they do nothing.
+  ...([
+    ['drawn', { grossAfter: kg(15), purpose: 'other' }, { grossAfter: kg(14), purpose: 'other', phase: 'gas' }],
+    ['filled', { refrigerant: 'R-22', grossAfter: kg(18) }, { refrigerant: 'WATER', grossAfter: kg(17) }],
+    ['emptied', { grossAfter: kg(15) }, { grossAfter: kg(14), vacuum: { torr: 1 } }],
+    ['emptied', {}, { vacuum: { microns: -4 } }],
+    ['received', {}, { gross: kg(14), paper: 5 }],
+    ['weighed', { gross: kg(15) }, { gross: kg(14), scaleId: 'the one by the door' }],
+    ['checked', { method: 'pressure', pressureKPa: 500, temperatureC: 20 }, { method: 'laboratory' }],
+  ] as const).map(([kind, details, instead]): Told[] => [
+    registered({ contents: { refrigerant: 'R-22', condition: 'clean' }, gross: kg(16) }),
+    did('corrected', { eventId: idOf(2), reason: 'a slip', instead }),
+    { kind, details, more: { placeId: SHOP } },
+  ]),
 ]
 
 /** The same events with a good part of the weights moved to where a scale can hardly tell the cylinder from an empty one. */
@@ -137,7 +151,7 @@ describe('the checker of exports', { timeout: 120_000 }, () => {
     await makeCheckpoint(log.db, sealing, NOW, null)
     const { code, printed } = await check(await exportedLines(log.db, sealing), [sealing.signer.publicKey])
     log.close()
-    expect(printed).toEqual([`${seq - 1} events of 602 cylinders, 1 checkpoints: no fault found.`])
+    expect(printed).toEqual([`${seq - 1} events of ${600 + EDGES.length} cylinders, 1 checkpoints: no fault found.`])
     expect(code).toBe(0)
   })
 
@@ -148,6 +162,9 @@ describe('the checker of exports', { timeout: 120_000 }, () => {
     ['a checkpoint\'s figure was changed', () => changed(placeOf('checkpoint', 1), ({ checkpoint }: { checkpoint: string }) => ({ checkpoint: checkpoint.replace(/events \d+/, 'events 5') })), 'its text is not what was signed'],
     ['the first checkpoint is missing', () => changed(placeOf('checkpoint', 0), () => null), 'the one before it is missing'],
     ['the file breaks off', () => whole.slice(0, -1), 'breaks off'],
+    ['a line says nothing', () => whole.toSpliced(placeOf('event', 3), 0, 'null'), 'says nothing'],
+    ['a line of the log is none', () => whole.with(placeOf('event', 3), '{"event":[[]]}'), 'does not have its columns'],
+    ['a checkpoint is no text', () => whole.with(placeOf('checkpoint', 0), '{"checkpoint":5}'), 'is no text'],
     ['a line is half', () => whole.with(placeOf('event', 3), whole[placeOf('event', 3)]!.slice(0, 40)), 'no JSON'],
   ])('tells where %s', async (_, lines, words) => {
     const { code, printed } = await check(lines())
@@ -180,6 +197,8 @@ describe('the checker of exports', { timeout: 120_000 }, () => {
   it.each([
     ['no key', whole => whole, ['nonsense']],
     ['no export', () => ['{"format":"something else","version":1}'], []],
+    ['an export without its columns', (lines: string[]) => lines.with(0, lines[0]!.replace('"columns"', '"rows"')), []],
+    ['an export without its former keys', (lines: string[]) => lines.with(0, lines[0]!.replace('"formerKeys"', '"keys"')), []],
     ['an export of another version', (lines: string[]) => lines.with(0, lines[0]!.replace('"version":1', '"version":2')), []],
   ] as [string, (lines: string[]) => string[], string[]][])('cannot tell of %s, and says so', async (_, made, keys) => {
     expect((await check(made(whole), keys)).code).toBe(2)
