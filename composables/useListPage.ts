@@ -22,10 +22,21 @@ export function useListPage<L extends DraftList>(kind: 'shipments' | 'test-lots'
     return mayChange.value ? list.add(code) : navigateTo(`/c/${code.toLowerCase()}`)
   }
 
+  /** What both pages hand to `ListSheet`, besides their words. */
+  const sheet = computed(() => ({
+    title: name.value,
+    mayChange: mayChange.value,
+    busy: list.busy.value,
+    problem: list.actProblem.value,
+    changes: list.changes.value,
+    onAdd: list.add,
+    onGiveUp: list.cancel,
+  }))
+
   async function takeOff(ids: string[]) {
     if (!await list.takeOff(ids)) return
     notice.say(ids.length === 1 ? 'Taken off.' : `${ids.length} taken off.`, () => list.putBack(ids))
   }
 
-  return { list, notice, shown, name, frame, isDraft, mayChange, heldBack, takeOff }
+  return { list, notice, shown, name, frame, sheet, isDraft, mayChange, heldBack, takeOff }
 }

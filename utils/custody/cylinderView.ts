@@ -1,12 +1,13 @@
 import type { Month } from '../quantity/month'
 import type { LiquidFull } from '../capacity/liquidFull'
-import type { FillRule, FillTermInWords, Stamp } from '../capacity/types'
+import type { Condition, FillRule, FillTermInWords, Stamp } from '../capacity/types'
 import type { OwnerChoice } from '../requalification/ownerChoice'
 import type { EventKind } from './kinds'
 import type { Finding, FindingCode, Severity } from './finding'
+import type { ChangedLine } from './laterLines'
 import type { Signature } from './signatures'
 
-export type Condition = 'clean' | 'suspect' | 'burnt' | 'mixed' | 'unknown'
+export type { Condition }
 export type Lifecycle
   = 'in-service' | 'quarantined' | 'rejected' | 'at-reclaim' | 'at-test' | 'missing' | 'condemned' | 'retired'
 export type Hold = 'quarantined' | 'rejected' | 'damaged' | 'tare-loss' | 'wet'
@@ -155,6 +156,8 @@ export interface LogLine {
   netBeforeGrams: number | null
   netAfterGrams: number | null
   findings: Finding[]
+  /** What this line changed in lines that had been recorded before it, where it came late or mends one; left out where nothing. */
+  changes?: ChangedLine[]
   /** What a correction did to this event; null when it stands as recorded. */
   correction: { eventId: string, reason: string, takenOut: boolean } | null
   /** The supervisor's signature on a trainee's entry: by which event, null while it waits; null where it needs none. */

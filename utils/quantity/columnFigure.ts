@@ -4,6 +4,7 @@ const TO_DIVISION = { down: floorToDivision, up: ceilToDivision, nearest: neares
 
 const NO_BREAK_SPACE = '\u00A0'
 const MINUS = '\u2212'
+const UNKNOWN = '–'
 
 /** The unit as a column's head names it; pounds and ounces stand in the cells themselves. */
 export function columnUnit(unit: MassUnit): string {
@@ -11,11 +12,12 @@ export function columnUnit(unit: MassUnit): string {
 }
 
 /**
- * A mass as it stands under a head that names the unit. Rounding: as asked for.
+ * A mass as it stands under a head that names the unit; a dash for one that is not known. Rounding: as asked for.
  *
  * Shape: pounds and ounces stand under pounds and ounces: no pounds are written as 0, and ounces take two places.
  */
-export function columnFigure(grams: number, unit: MassUnit, rounding: MassRounding): string {
+export function columnFigure(grams: number | null, unit: MassUnit, rounding: MassRounding): string {
+  if (grams === null) return UNKNOWN
   const reading = TO_DIVISION[rounding](grams, unit)
   if (reading.unit !== 'lb-oz') return formatFigure(grams, unit, rounding).figure
   const sign = reading.lb < 0 || reading.oz < 0 ? MINUS : ''

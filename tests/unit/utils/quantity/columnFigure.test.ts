@@ -4,6 +4,11 @@ import { columnFigure, columnUnit, signedColumnFigure } from '../../../../utils/
 const plain = (text: string) => text.replaceAll('\u00A0', ' ')
 
 describe('a mass in a column', () => {
+  it('is a dash where it is not known, and a figure where it is nothing', () => {
+    expect(columnFigure(null, 'lb', 'nearest')).toBe('–')
+    expect(columnFigure(0, 'lb', 'nearest')).toBe('0.0')
+  })
+
   it('goes without its unit, which the head names', () => {
     expect(columnUnit('lb')).toBe('lb')
     expect(columnFigure(29_960, 'lb', 'down')).toBe('66.0')
