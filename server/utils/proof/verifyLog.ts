@@ -37,16 +37,17 @@ export async function* verifying(db: Database, { now, sealing, since = null }: V
   // In this order: what is made meanwhile reaches the log first, then the table, then the copies.
   const copies = sealing ? keptCopies(sealing.copies) : []
   const checkpoints = await allCheckpoints(db)
-  const { rows: [counted] } = await db.readClient.execute('SELECT coalesce(max(seq), 0), count(*) FROM custody_events')
-  const [reach, events] = [counted![0] as number, counted![1] as number]
   judgeChain(checkpoints, sealing, damage)
   judgeCopies(checkpoints, copies, damage)
-  if (reach !== events) await tellGaps(db, reach, damage)
   const from = checkpoints.find(({ number, says }) => number === since && says !== null) ?? null
   const judged = inReach(checkpoints).filter(({ says }) => from === null || says!.seq >= from.says!.seq)
   const walk = streamWalk(judged, damage)
-  const before = from ? await linesUpTo(db, from.says!.seq) : 0
+  let before = 0
   try {
+    const { rows: [counted] } = await db.readClient.execute('SELECT coalesce(max(seq), 0), count(*) FROM custody_events')
+    const [reach, events] = [counted![0] as number, counted![1] as number]
+    if (reach !== events) await tellGaps(db, reach, damage)
+    if (from) before = await linesUpTo(db, from.says!.seq)
     const steps = from ? walkSince(db, walk, from.says!.seq, reach) : walkAll(db, walk, reach)
     for await (const done of steps) yield { done, of: events - before }
   }
