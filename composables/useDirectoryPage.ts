@@ -12,7 +12,8 @@ interface TurnWords { on: string, off: string }
 /**
  * The page of people, firms, scales or places: the form that is open, what is sent, and turning one off and on again.
  *
- * Shape: `path` is where the API keeps them; `changed` is called once something was kept.
+ * Shape: `path` is where the API keeps them; `changed` is called once something was kept. `page` and `form` are handed
+ * whole to `DirectoryPage` and to the form in it.
  */
 export function useDirectoryPage<Editing extends object>(
   { title, path, manage, turned, changed }: { title: string, path: string, manage: Permission, turned: TurnWords, changed: () => Promise<unknown> },
@@ -55,5 +56,8 @@ export function useDirectoryPage<Editing extends object>(
     await changed()
   }
 
-  return { frame, busy, problem, toast, mayManage, editing, open, newId: () => id, tell, keep, turn }
+  const page = computed(() => ({ mayAdd: mayManage.value, problem: problem.value, editing: editing.value }))
+  const form = computed(() => ({ busy: busy.value, errors: problem.value?.errors, onClose: () => open(null) }))
+
+  return { frame, page, form, toast, mayManage, editing, open, newId: () => id, tell, keep, turn }
 }

@@ -9,7 +9,7 @@ afterEach(() => wrapper?.unmount())
 
 const editing = shallowRef<object | null>(null)
 const Page = defineComponent(() => () => h(DirectoryPage, {
-  title: 'Scales', sub: 'how far a weight may be off', add: 'Add a scale', problem: null, editing: editing.value, formTitle: 'Add a scale now',
+  title: 'Scales', sub: 'how far a weight may be off', add: 'Add a scale', mayAdd: true, problem: null, editing: editing.value, formTitle: 'Add a scale now',
   onAdd: () => {
     editing.value = {}
   },
