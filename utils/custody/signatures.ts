@@ -12,16 +12,18 @@ export function needsSignature(event: Pick<AnyRecordedEvent, 'kind' | 'trainee'>
 /**
  * The signatures on trainees' entries: by the id of the entry, the id of the event that signed it first.
  *
- * Only the supervisor that the entry names signs it, never its author nor a trainee, before or after it in effect. What
- * a trainee has since changed was not what was signed, and is signed anew, unless somebody else has corrected it after
- * that. Shape: `standings` in order of effect.
+ * Only the supervisor that the entry names signs it, never its author nor a trainee, before or after it in effect. A
+ * signature that was corrected is none: nobody puts another's name under what they did not sign. What a trainee has since
+ * changed was not what was signed, and is signed anew, unless somebody else has corrected it after that.
+ *
+ * Shape: `standings` in order of effect.
  */
 export function signaturesOf(standings: readonly Standing[]): ReadonlyMap<string, string> {
   const placeOf = new Map(standings.map(({ event }, index) => [event.id, index]))
   const changedAt = traineesChanges(standings, placeOf)
   const signedBy = new Map<string, string>()
-  standings.forEach(({ event: signature, isOut }, index) => {
-    if (isOut || !isSignature(signature)) return
+  standings.forEach(({ event: signature, isOut, correction }, index) => {
+    if (isOut || correction !== null || !isSignature(signature)) return
     const { eventId } = signature.details
     const signed = standings[placeOf.get(eventId) ?? -1]
     if (signed === undefined || signedBy.has(eventId) || !mayHaveSigned(signature, signed.event)) return

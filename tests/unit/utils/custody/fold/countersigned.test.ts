@@ -90,6 +90,14 @@ describe('a countersignature', () => {
     expect(codes(viewAfter([...story, signed(1), changed, corrected(idOf(3), undefined, { actorId: SUPERVISOR })]))).toEqual([])
   })
 
+  it('is not moved to another entry by a correction', () => {
+    const two = [...story, filled('R-22', 21, {}, trainee), signed(1)]
+    const moved = corrected(idOf(3), { eventId: idOf(2) }, { actorId: TECHNICIAN })
+    expect(signatureOf(2, ...two, moved)).toEqual({ by: null })
+    expect(signatureOf(1, ...two, moved)).toEqual({ by: null })
+    expect(signatureOf(2, ...two, moved, signed(2))).toEqual({ by: idOf(5) })
+  })
+
   it('leaves practice apart', () => {
     const practice = filled('R-22', 20, {}, { ...trainee, practice: true })
     expect(aparts(registered(), practice, signed(1))).toEqual([true])
