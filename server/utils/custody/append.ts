@@ -125,7 +125,12 @@ async function commitGroup(db: Database, part: Waiting[], commit: Database['writ
     const newestBefore = now.newest
     const judged = part.map(one => judgePosting(one, now))
     const written = judged.flatMap(one => one.rows)
-    if (written.length === 0) return judged.map(({ results }) => ({ results, standing: NOBODY }))
+    const relabelled = relabelledBy(part)
+    if (written.length === 0) {
+      // What was sent again may have been cut short after it was stored, before the cylinders beside it were told.
+      if (relabelled.length > 0) await commit(await sharedCodeRows(db, relabelled, newestOf(part)))
+      return judged.map(({ results }) => ({ results, standing: NOBODY }))
+    }
 
     const lines = insertLogRows(written, newestBefore?.id ?? null)
     const caches = await groupCaches(db, now)
@@ -134,11 +139,20 @@ async function commitGroup(db: Database, part: Waiting[], commit: Database['writ
     // The driver answers one row for each line that was written; another process that was first leaves none.
     const answered = answers.slice(0, lines.length).reduce((sum, { rows }) => sum + rows.length, 0)
     if (answered !== written.length) continue
-    const relabelled = written.filter(row => row.kind === 'labelled' || row.kind === 'corrected')
     if (relabelled.length === 0) return judged.map(({ results }) => ({ results, standing: caches.standing }))
-    await commit(await sharedCodeRows(db, [...new Set(relabelled.map(row => row.cylinder_id))], Math.max(...written.map(row => row.recorded_at))))
+    await commit(await sharedCodeRows(db, relabelled, newestOf(part)))
     // What others say of these cylinders may be another now.
     return judged.map(({ results }) => ({ results, standing: NOBODY }))
   }
   throw new StorageUnavailable('The custody log is written by others faster than this process can follow')
+}
+
+/** Cylinders whose codes these events may have changed, now or when they were sent before. */
+function relabelledBy(part: readonly Waiting[]): string[] {
+  const events = part.flatMap(one => one.parsed.flatMap(post => 'event' in post ? [post.event] : []))
+  return [...new Set(events.filter(({ kind }) => kind === 'labelled' || kind === 'corrected').map(({ cylinderId }) => cylinderId))]
+}
+
+function newestOf(part: readonly Waiting[]): number {
+  return Math.max(...part.map(({ posting }) => posting.now))
 }
