@@ -30,7 +30,9 @@ async function post(client: TestClient, events: object[]): Promise<EventResult[]
   return body.results
 }
 
-const weighing = (cylinderId: string, grossLb = 40) => ({ ...eventOf(cylinderId, 'weighed'), details: { gross: lb(grossLb) } })
+type SentEvent = ReturnType<typeof eventOf> & { details: object }
+
+const weighing = (cylinderId: string, grossLb = 40): SentEvent => ({ ...eventOf(cylinderId, 'weighed'), details: { gross: lb(grossLb) } })
 
 async function linesInFile(): Promise<StoredLine[]> {
   const readClient = createClient({ url: `file:${server.databaseFile}`, timeout: 5_000 })
@@ -112,9 +114,9 @@ describe('of twenty events in one request', () => {
   const PAIR = [7, 12]
 
   /** Eighteen weighings, with both halves of a transfer among them. */
-  function twenty(from: string, into: string): { id: string }[] {
+  function twenty(from: string, into: string): SentEvent[] {
     const pair = { transferId: randomUUID(), refrigerant: 'R-22', condition: 'clean' }
-    const events: { id: string }[] = Array.from({ length: 20 }, (_, index) => weighing(index % 2 ? from : into))
+    const events: SentEvent[] = Array.from({ length: 20 }, (_, index) => weighing(index % 2 ? from : into))
     events[PAIR[0]!] = { ...eventOf(from, 'transferred'), details: { ...pair, direction: 'out', counterpartId: into, grossAfter: lb(38) } }
     events[PAIR[1]!] = { ...eventOf(into, 'transferred'), details: { ...pair, direction: 'in', counterpartId: from, grossAfter: lb(42) } }
     return events

@@ -1,9 +1,10 @@
-import { randomUUID } from 'node:crypto'
+import { randomBytes, randomUUID } from 'node:crypto'
 import { setTimeout as wait } from 'node:timers/promises'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { rebuildCaches } from '../../server/utils/custody/rebuild'
 import { openDatabase } from '../../server/utils/database/database'
 import type { LogVerification } from '../../utils/contract/log'
+import { drawLabelCode } from '../../utils/label/code'
 import { cacheLines } from '../helpers/caches'
 import { eventOf, openShop, registered, type Shop } from '../helpers/fleet'
 import { IN_FULL, seeds } from '../helpers/inFull'
@@ -28,7 +29,10 @@ beforeAll(async () => {
 })
 afterAll(() => server?.stop())
 
-/** What a phone records next: a weighing, one told late, a fill, or both halves of a transfer. */
+/** Few, so that one code comes to stand on several cylinders. */
+const CODES = Array.from({ length: 4 }, () => drawLabelCode(randomBytes))
+
+/** What a phone records next: a weighing, one told late, a fill, a label, or both halves of a transfer. */
 function nextOf(cylinders: readonly string[], chance: Chance): () => Sent[] {
   const happened = (kind: string, id: string, details: object, agoMs = 0): Sent =>
     ({ ...eventOf(id, kind), occurredAt: new Date(Date.now() - agoMs).toISOString(), details })
@@ -36,7 +40,7 @@ function nextOf(cylinders: readonly string[], chance: Chance): () => Sent[] {
     const one = chance(cylinders.length)
     const [id, other] = [cylinders[one]!, cylinders[(one + 1) % cylinders.length]!]
     const gross = lb(36 + chance(40) / 10)
-    switch (chance(6)) {
+    switch (chance(8)) {
       case 0: return [happened('weighed', id, { gross }, chance(60_000))]
       case 1: return [happened('filled', id, { refrigerant: 'R-22', grossAfter: gross, looked: true }), happened('weighed', id, { gross })]
       case 2: {
@@ -46,6 +50,7 @@ function nextOf(cylinders: readonly string[], chance: Chance): () => Sent[] {
           happened('transferred', other, { ...pair, direction: 'in', counterpartId: id, grossAfter: gross }),
         ]
       }
+      case 3: return [happened('labelled', id, { code: CODES[chance(CODES.length)] })]
       default: return [happened('weighed', id, { gross })]
     }
   }

@@ -97,7 +97,7 @@ function serverSettings(env: Record<string, string>): NodeJS.ProcessEnv {
 
 function spawnServer(env: NodeJS.ProcessEnv, by: readonly string[] = []): ChildProcess {
   if (!existsSync(BUILT)) throw new Error('There is no built server in .output: run `npm run build` first.')
-  const [command, ...args] = [...by, process.execPath, BUILT] as [string, ...string[]]
+  const [command = process.execPath, ...args] = [...by, process.execPath, BUILT]
   return spawn(command, args, { env, stdio: ['ignore', 'pipe', 'pipe'] })
 }
 
