@@ -31,9 +31,11 @@ export function useCylinder(enabled: () => boolean = () => true) {
     const label = view.value?.labelCode ?? code.value
     return label ? formatLabelCode(label) : view.value?.stamp?.serial ?? 'Cylinder'
   })
+  /** The name in a heading: a code is not broken over two lines. */
+  const wholeName = computed(() => name.value.replaceAll(' ', '\u00A0'))
   const page = computed(() => `/c/${(view.value?.labelCode ?? view.value?.id ?? ref_.value).toLowerCase()}`)
   /** The code in the address, where it is one that was replaced. */
   const oldCode = computed(() => code.value && view.value && code.value !== view.value.labelCode && view.value.oldLabelCodes.includes(code.value) ? code.value : null)
 
-  return { ready: request as PromiseLike<unknown>, view, error, status, refresh, name, page, code, oldCode, asked }
+  return { ready: request as PromiseLike<unknown>, view, error, status, refresh, name, wholeName, page, code, oldCode, asked }
 }
