@@ -18,10 +18,10 @@ parentPort.on('message', ({ bytes, kind, limits }) => parentPort.postMessage(red
  * The picture drawn anew, and its thumbnail: upright, in sRGB, on white, without anything of the file but its pixels.
  * Its size is read from its head and judged before a pixel is decoded. A file that ends too early is no picture.
  */
-function redrawn(bytes, kind, { mostPixels, longestSide, thumbSide }) {
+function redrawn(bytes, kind, { mostPixels, longestSideTaken, longestSide, thumbSide }) {
   try {
     const head = vips.Image[DECODERS[kind]](bytes)
-    const isTooLarge = head.width * head.height > mostPixels
+    const isTooLarge = head.width * head.height > mostPixels || Math.max(head.width, head.height) > longestSideTaken
     head.delete()
     if (isTooLarge) return { fault: 'size' }
     const picture = within(bytes, longestSide, '[fail_on=truncated]')

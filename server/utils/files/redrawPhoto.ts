@@ -2,7 +2,7 @@ import { once } from 'node:events'
 import { existsSync } from 'node:fs'
 import { dirname, resolve } from 'node:path'
 import { Worker } from 'node:worker_threads'
-import { LONGEST_SIDE, MOST_PIXELS, THUMB_SIDE } from '../../../utils/photo/limits'
+import { LONGEST_SIDE, LONGEST_SIDE_TAKEN, MOST_PIXELS, THUMB_SIDE } from '../../../utils/photo/limits'
 import type { PictureKind } from '../../../utils/photo/pictureKind'
 import { problem } from '../http/problem'
 
@@ -41,7 +41,7 @@ export async function redrawPhoto(job: Job): Promise<RedrawnPhoto> {
     const answer = await turn
     if (!('fault' in answer)) return answer
     throw answer.fault === 'size'
-      ? problem(413, 'Too many pixels', `A photo may have at most ${MOST_PIXELS / 1_000_000} million pixels.`, undefined, { type: 'too-many-pixels' })
+      ? problem(413, 'Too many pixels', `A photo may have at most ${MOST_PIXELS / 1_000_000} million pixels, and ${LONGEST_SIDE_TAKEN.toLocaleString('en')} along a side.`, undefined, { type: 'too-many-pixels' })
       : problem(422, 'No whole picture', 'The file is damaged or ends too early. Take the photo again.', undefined, { type: 'broken-picture' })
   }
   finally {
@@ -55,7 +55,7 @@ async function askWorker({ bytes, kind }: Job): Promise<Answer> {
   const asked = worker
   asked.ref()
   try {
-    asked.postMessage({ bytes, kind, limits: { mostPixels: MOST_PIXELS, longestSide: LONGEST_SIDE, thumbSide: THUMB_SIDE } })
+    asked.postMessage({ bytes, kind, limits: { mostPixels: MOST_PIXELS, longestSideTaken: LONGEST_SIDE_TAKEN, longestSide: LONGEST_SIDE, thumbSide: THUMB_SIDE } })
     // Rejects where the decoder itself fails, and where it is busy beyond all patience.
     const [answer] = await once(asked, 'message', { signal: AbortSignal.timeout(PATIENCE_MS) }) as [Answer]
     return answer
