@@ -11,8 +11,8 @@ import type { PeopleAnswer } from '~~/utils/contract/people'
 import type { PlacesAnswer } from '~~/utils/contract/places'
 import type { VanAnswer } from '~~/utils/contract/vans'
 
-/** What a check-in came to. */
-export interface CheckedIn { shopName: string, toShop: number, aboard: number, missing: CylinderRow[] }
+/** What a check-in came to: by name what came off the van and what stays on it. What was at the shop already is neither. */
+export interface CheckedIn { shopName: string, toShop: string[], aboard: string[], missing: CylinderRow[] }
 
 /**
  * A van that returns, checked against what it should hold: what is scanned comes to the shop or stays aboard, and what
@@ -29,7 +29,8 @@ export function useCheckIn(vanId: string) {
   const done = shallowRef<CheckedIn | null>(null)
   // The same under one id however often it is sent; what is found after all makes it another.
   const checkInId = useEventIds()
-  const foundIds = new Set<string>()
+  /** Every cylinder that was scanned, by id; its name where it came with the van. */
+  const found = new Map<string, string | null>()
 
   // As it was when the check began: what comes off the van meanwhile was still expected.
   const loaded = useLoaded(`check-in ${vanId}`, async () => {
@@ -88,16 +89,18 @@ export function useCheckIn(vanId: string) {
 
   async function checkIn() {
     if (lacks.value !== null || busy.value) return
-    for (const { found } of batch.lines.value) if (found.is === 'known') foundIds.add(found.view.id)
+    for (const { found: at, name, verdict } of batch.lines.value) {
+      if (at.is === 'known') found.set(at.view.id, verdict?.standing === 'there' ? null : name)
+    }
     const notFound = missing.value
     await batch.record()
     if (batch.problem.value || batch.counted.value.length > 0) return
-    const said = { found: [...foundIds], missing: notFound.map(each => each.id) }
+    const said = { found: [...found.keys()], missing: notFound.map(each => each.id) }
     const kept = await attempt(() => api.post(`/api/vans/${vanId}/check-ins`, { id: checkInId(JSON.stringify(said)), ...said }))
     if (!kept) return
     batch.startOver()
-    const aboard = [...foundIds].filter(each => stayingIds.value.has(each)).length
-    done.value = { shopName: shop.value!.name, toShop: foundIds.size - aboard, aboard, missing: notFound }
+    const came = (stays: boolean) => [...found].flatMap(([each, name]) => name !== null && stayingIds.value.has(each) === stays ? [name] : [])
+    done.value = { shopName: shop.value!.name, toShop: came(false), aboard: came(true), missing: notFound }
   }
 
   return { loaded, batch, van, expected, shops, shop, shopId, supervisorId, stayingIds, stay, missing, lacks, busy, keepProblem, checkIn, done }

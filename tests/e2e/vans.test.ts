@@ -70,6 +70,10 @@ describe('a van that returns', () => {
     await page.getByRole('button', { name: 'Check in without 1' }).click()
     await page.getByText('Van 3 is checked in').waitFor()
     expect(await page.evaluate(() => document.activeElement!.id)).toBe('main')
+    // The stranger was at the shop already and did not come with the van.
+    await page.getByText('2 to North shop, 1 stays aboard, 1 not found.').waitFor()
+    const cameOff = page.locator('dl').getByText('To North shop').locator('xpath=following-sibling::dd')
+    expect((await cameOff.innerText()).split(', ').sort()).toEqual(back.map(view => formatLabelCode(view.labelCode!)).sort())
     expect(await page.getByRole('list', { name: 'Missing' }).innerText()).toContain('last held by Tina')
     expect(await atPlace(van)).toEqual([lost!.id, stays!.id].sort())
     expect(await atPlace(shop.shop)).toEqual(expect.arrayContaining(back.map(({ id }) => id)))
