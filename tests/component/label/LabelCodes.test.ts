@@ -2,6 +2,7 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { afterEach, describe, expect, it } from 'vitest'
 import LabelBare from '~~/components/label/LabelBare.vue'
 import LabelCodes from '~~/components/label/LabelCodes.vue'
+import { byRole } from '../../helpers/roles'
 
 let wrapper: Awaited<ReturnType<typeof mountSuspended>> | null = null
 afterEach(() => wrapper?.unmount())
@@ -25,7 +26,7 @@ describe('which labels are to be printed', () => {
     await card.setProps({ codes })
     expect(card.text()).toContain('One PDF takes 100. 1 more waits for the next: COD E00 100')
     expect(card.findAll('ul[aria-label="Codes to be printed"] li')).toHaveLength(100)
-    await card.findAll('button').find(button => button.text() === 'These are printed, go on with the last')!.trigger('click')
+    byRole(card.element, 'button', 'These are printed, go on with the last').click()
     expect(card.emitted('setAside')).toEqual([[codes.slice(0, 100)]])
   })
 
