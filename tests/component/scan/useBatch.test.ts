@@ -31,7 +31,7 @@ async function batch() {
   let made!: ReturnType<typeof useBatch>
   wrappers.push(await mountSuspended({
     setup() {
-      made = useBatch('move test', () => ({ act: 'move', target: { id: 'shop', name: 'North shop' }, expected: null, supervisorId: null }))
+      made = useBatch('move test', () => ({ act: 'move', target: { id: 'shop', name: 'North shop', technicianId: null }, expected: null, supervisorId: null }))
       return () => null
     },
   }))
