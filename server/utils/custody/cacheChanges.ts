@@ -1,4 +1,6 @@
-import type { InStatement, InValue } from '@libsql/client'
+import type { InStatement, InValue, Row } from '@libsql/client'
+import { getTableColumns } from 'drizzle-orm'
+import { cylinders } from '../../../drizzle/schema'
 import type { Guard } from './posting'
 
 /** The caches that hold lines for what events did, each with its `cylinder_id`. */
@@ -11,6 +13,8 @@ export type Columns = Record<string, InValue>
 export interface CacheChange {
   cylinderId: string
   row: Columns
+  /** The row as it stands before, where that was read; null where it was not, or there is none. */
+  before: Columns | null
   /** Out of which everything of the cylinder goes first. */
   cleared: readonly LineCache[]
   added: Partial<Record<LineCache, readonly Columns[]>>
@@ -26,9 +30,36 @@ const ROWS_A_STATEMENT = 200
 export function changeStatements(changes: readonly CacheChange[], guard: Guard): InStatement[] {
   return [
     ...LINE_CACHES.flatMap(table => clear(table, changes.filter(({ cleared }) => cleared.includes(table)), guard)),
-    ...insertRows('cylinders', changes.map(({ row }) => row), guard, { orReplaceBy: 'id' }),
+    ...putCylinders(changes, guard),
     ...LINE_CACHES.flatMap(table => insertRows(table, changes.flatMap(({ added }) => added[table] ?? []), guard)),
   ]
+}
+
+/**
+ * The rows of cylinders. The database makes an entry anew in every index of a column that is set, whether its value
+ * changes or not: so where the rows before are known, only columns in which one of them changes are set.
+ *
+ * What the row rests on is always among them: where another process makes it anew by other rules meanwhile, it says so.
+ */
+export function putCylinders(changes: readonly Pick<CacheChange, 'row' | 'before'>[], guard: Guard): InStatement[] {
+  const names = Object.keys(changes[0]?.row ?? {}).filter(name => name !== 'id')
+  const set = names.filter(name => ALWAYS_SET.includes(name) || changes.some(({ row, before }) => before === null || before[name] !== row[name]))
+  return insertRows('cylinders', changes.map(({ row }) => row), guard, `ON CONFLICT (id) DO UPDATE SET ${set.map(name => `${name} = excluded.${name}`).join(', ')}`)
+}
+
+const ALWAYS_SET: readonly string[] = ['version', 'state', 'ruled_by']
+
+const COMPARED = Object.values(getTableColumns(cylinders)).map(({ name }) => name).filter(name => name !== 'state')
+
+/** The rows of cylinders for comparison, one value to each; a list of their ids follows. */
+export const ROWS_BEFORE = `SELECT json_object(${COMPARED.map(name => `'${name}', ${name}`).join(', ')}) FROM cylinders WHERE id IN`
+
+/** The answer of {@link ROWS_BEFORE}, by cylinder. */
+export function rowsBefore(rows: readonly Row[]): Map<string, Columns> {
+  return new Map(rows.map((row) => {
+    const columns = JSON.parse(row[0] as string) as Columns & { id: string }
+    return [columns.id, columns]
+  }))
 }
 
 const LINE_CACHES: readonly LineCache[] = ['movements', 'stock_changes', 'label_claims', 'halves']
@@ -41,18 +72,11 @@ function clear(table: LineCache, changes: readonly CacheChange[], guard: Guard):
   }]
 }
 
-/**
- * Puts rows of the same columns into a table, under a condition.
- *
- * @param orReplaceBy a key: a row that has it already takes the new values.
- */
-export function insertRows(table: string, rows: readonly Columns[], guard: Guard, { orReplaceBy }: { orReplaceBy?: string } = {}): InStatement[] {
+/** Puts rows of the same columns into a table, under a condition. */
+function insertRows(table: string, rows: readonly Columns[], guard: Guard, onConflict = ''): InStatement[] {
   if (rows.length === 0) return []
   const names = Object.keys(rows[0]!)
   const one = `(${names.map(() => '?').join(', ')})`
-  const onConflict = orReplaceBy === undefined
-    ? ''
-    : `ON CONFLICT (${orReplaceBy}) DO UPDATE SET ${names.filter(name => name !== orReplaceBy).map(name => `${name} = excluded.${name}`).join(', ')}`
   return Array.from({ length: Math.ceil(rows.length / ROWS_A_STATEMENT) }, (_, part) => {
     const some = rows.slice(part * ROWS_A_STATEMENT, (part + 1) * ROWS_A_STATEMENT)
     return {

@@ -9,7 +9,7 @@ import type { CylinderState } from '../../../utils/custody/state'
 import type { StockChange } from '../../../utils/custody/stockChange'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
-import { changeStatements, insertRows, type CacheChange, type Columns } from './cacheChanges'
+import { changeStatements, putCylinders, type CacheChange, type Columns } from './cacheChanges'
 import { cylinderStates } from './cylinderViews'
 import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
@@ -42,7 +42,8 @@ export async function groupCaches(db: Database, group: Group): Promise<GroupCach
     const said = { codesOnTwo: group.codesOnTwo(cylinderId), otherHalves: withThoseOf(halvesNow, naming, cylinderId) }
     standing.set(cylinderId, { state: folded.state, said })
     const row = cylinderColumns(cylinderId, folded.state, rowContext(group.directory, added.at(-1)!.recorded_at, said))
-    return changeOf(cylinderId, row, [books(cylinderId, folded, added), claims(cylinderId, folded, added), ...(areSame(own, folded.state.halves) ? [] : [halfLines(cylinderId, folded)])])
+    const lines = [books(cylinderId, folded, added), claims(cylinderId, folded, added), ...(areSame(own, folded.state.halves) ? [] : [halfLines(cylinderId, folded)])]
+    return changeOf(cylinderId, row, lines, group.rowBefore(cylinderId))
   })
   const guard = wereWritten(touched.flatMap(({ added }) => added))
   return { statements: [...changeStatements(changes, guard), ...await otherRows(db, group, touched, halvesNow, guard)], standing }
@@ -109,10 +110,10 @@ export function pastCache(cylinderId: string, folded: FoldResult, from: Director
  * process has meanwhile made of a later event stays.
  */
 export function refreshedRow(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard = NO_GUARD): InStatement {
-  return insertRows('cylinders', [cylinderColumns(cylinderId, state, context)], {
+  return putCylinders([{ row: cylinderColumns(cylinderId, state, context), before: null }], {
     sql: `EXISTS (SELECT 1 FROM cylinders WHERE id = ? AND version = ?) AND ${guard.sql}`,
     args: [cylinderId, state.version, ...guard.args],
-  }, { orReplaceBy: 'id' })[0]!
+  })[0]!
 }
 
 /** The row of a cylinder by column. */
@@ -123,8 +124,8 @@ export function cylinderColumns(cylinderId: string, state: CylinderState, contex
 /** What one part of a cylinder's caches loses and gets. */
 type Lines = Pick<CacheChange, 'cleared' | 'added'>
 
-function changeOf(cylinderId: string, row: Columns, lines: readonly Lines[]): CacheChange {
-  return { cylinderId, row, cleared: lines.flatMap(({ cleared }) => cleared), added: Object.assign({}, ...lines.map(({ added }) => added)) as Lines['added'] }
+function changeOf(cylinderId: string, row: Columns, lines: readonly Lines[], before: Columns | null = null): CacheChange {
+  return { cylinderId, row, before, cleared: lines.flatMap(({ cleared }) => cleared), added: Object.assign({}, ...lines.map(({ added }) => added)) as Lines['added'] }
 }
 
 /**

@@ -3,10 +3,11 @@ import type { AnyCustodyEvent, AnyRecordedEvent } from '../../../utils/custody/e
 import type { Half } from '../../../utils/custody/half'
 import { directory, type Directory } from '../directory/directory'
 import type { Database } from '../database/database'
+import { ROWS_BEFORE, rowsBefore, type Columns } from './cacheChanges'
 import { SHARED_CODES, sharedCodes } from './findCylinder'
 import { halvesFrom, halvesOf } from './saidByOthers'
 import { unknownIds, type KnownIds } from './judge'
-import { logRow, recordedEvent, SELECT_LOG, type LogRow } from './logRow'
+import { eventLine, recordedEvent, SELECT_EVENT_LINES, type LogRow } from './logRow'
 import type { ChainHead } from './sealedRow'
 
 /** What a group of events is judged on: the log as it stands, growing by each event that is accepted. */
@@ -22,6 +23,8 @@ export interface Group {
   add: (row: LogRow, event: AnyRecordedEvent) => void
   /** Codes of a cylinder that another one claims too. */
   codesOnTwo: (cylinderId: string) => ReadonlySet<string>
+  /** The row of a cylinder as it stood before; null where there is none. */
+  rowBefore: (cylinderId: string) => Columns | null
   /** The halves of a cylinder, and those of others that name it, as they stood before. */
   halvesBefore: (cylinderId: string) => { own: Half[], naming: Half[] }
   /** Cylinders that an accepted event has touched, with the lines added to each. */
@@ -38,15 +41,16 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
   const ids = [...new Set(events.map(event => event.id))]
   const cylinderIds = [...new Set(events.map(event => event.cylinderId))]
   const named = idsIn(events)
-  const [newestRows, storedRows, logRows, shipmentRows, lotRows, sharedRows, ownHalves, namingHalves] = await db.readClient.batch([
+  const [newestRows, storedRows, logRows, shipmentRows, lotRows, sharedRows, ownHalves, namingHalves, cylinderRows] = await db.readClient.batch([
     'SELECT seq, id FROM custody_events ORDER BY seq DESC LIMIT 1',
     inList('SELECT id, content_hash, seq, version FROM custody_events WHERE id IN', ids),
-    inList(`${SELECT_LOG} WHERE cylinder_id IN`, cylinderIds, 'ORDER BY cylinder_id, version'),
+    inList(`${SELECT_EVENT_LINES} WHERE cylinder_id IN`, cylinderIds, 'ORDER BY cylinder_id, version'),
     inList('SELECT id FROM shipments WHERE id IN', named.shipments),
     inList('SELECT id FROM test_lots WHERE id IN', named.testLots),
     inList(SHARED_CODES, cylinderIds),
     halvesOf('cylinder_id', cylinderIds),
     halvesOf('other_id', cylinderIds),
+    inList(ROWS_BEFORE, cylinderIds),
   ], 'read')
 
   const newestRow = newestRows?.rows[0]
@@ -57,15 +61,18 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
   const heads = new Map<string, ChainHead>()
   const logs = new Map<string, AnyRecordedEvent[]>()
   for (const raw of logRows?.rows ?? []) {
-    const row = logRow(raw)
-    heads.set(row.cylinder_id, { version: row.version, hash: row.hash })
-    logs.set(row.cylinder_id, [...(logs.get(row.cylinder_id) ?? []), recordedEvent(row)])
+    const line = eventLine(raw)
+    heads.set(line.cylinder_id, { version: line.version, hash: line.hash })
+    const log = logs.get(line.cylinder_id)
+    if (log) log.push(recordedEvent(line))
+    else logs.set(line.cylinder_id, [recordedEvent(line)])
   }
   const shipments = new Set((shipmentRows?.rows ?? []).map(row => row[0] as string))
   const testLots = new Set((lotRows?.rows ?? []).map(row => row[0] as string))
   const shared = sharedCodes(sharedRows?.rows ?? [])
   const own = halvesFrom(ownHalves?.rows ?? [])
   const naming = halvesFrom(namingHalves?.rows ?? [])
+  const before = rowsBefore(cylinderRows?.rows ?? [])
   const { from, known } = await knownIds(db, events, shipments, testLots)
 
   const added: { row: LogRow, event: AnyRecordedEvent }[] = []
@@ -76,6 +83,7 @@ export async function group(db: Database, events: readonly AnyCustodyEvent[]): P
     directory: from,
     known,
     codesOnTwo: cylinderId => shared.get(cylinderId) ?? NONE,
+    rowBefore: cylinderId => before.get(cylinderId) ?? null,
     halvesBefore: cylinderId => ({
       own: own.filter(half => half.cylinderId === cylinderId), naming: naming.filter(half => half.otherId === cylinderId),
     }),

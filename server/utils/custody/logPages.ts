@@ -1,6 +1,6 @@
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import type { Database } from '../database/database'
-import { logRow, recordedEvent, SELECT_LOG } from './logRow'
+import { eventLine, recordedEvent, SELECT_EVENT_LINES } from './logRow'
 
 /** What is folded in one go at most. */
 const CYLINDERS_AT_ONCE = 200
@@ -23,9 +23,9 @@ export async function logsOf(db: Database, ids: readonly string[]): Promise<Map<
   const logs = new Map<string, AnyRecordedEvent[]>()
   if (ids.length === 0) return logs
   const { rows } = await db.readClient.execute({
-    sql: `${SELECT_LOG} WHERE cylinder_id IN (${ids.map(() => '?').join(', ')}) ORDER BY cylinder_id, version`, args: [...ids],
+    sql: `${SELECT_EVENT_LINES} WHERE cylinder_id IN (${ids.map(() => '?').join(', ')}) ORDER BY cylinder_id, version`, args: [...ids],
   })
-  for (const event of rows.map(row => recordedEvent(logRow(row)))) {
+  for (const event of rows.map(row => recordedEvent(eventLine(row)))) {
     const log = logs.get(event.cylinderId)
     if (log) log.push(event)
     else logs.set(event.cylinderId, [event])

@@ -41,12 +41,28 @@ export function logRow(row: Row): LogRow {
   return Object.fromEntries(LOG_COLUMNS.map((column, index) => [column, row[index]])) as LogRow
 }
 
+/** What of a line its event is read from. */
+export type EventLine = Omit<LogRow, 'content_hash' | 'prev_hash'>
+
+const EVENT_COLUMNS = LOG_COLUMNS.filter(column => column !== 'content_hash' && column !== 'prev_hash')
+
+/** Lines for their events, one value to each: the driver takes three times as long over a value to each column. */
+export const SELECT_EVENT_LINES = `SELECT json_array(${EVENT_COLUMNS.join(', ')}) FROM custody_events`
+
+/** A row of {@link SELECT_EVENT_LINES}, as the driver gives it. */
+export function eventLine(row: Row): EventLine {
+  const values = JSON.parse(row[0] as string) as EventLine[keyof EventLine][]
+  const line: Record<string, unknown> = {}
+  for (const [index, column] of EVENT_COLUMNS.entries()) line[column] = values[index]
+  return line as EventLine
+}
+
 /**
  * The event that a line holds.
  *
  * Errors: throws where the body is not JSON, which only tampering can cause.
  */
-export function recordedEvent(row: LogRow): AnyRecordedEvent {
+export function recordedEvent(row: EventLine): AnyRecordedEvent {
   const body = JSON.parse(row.body) as {
     note?: string
     practice?: boolean

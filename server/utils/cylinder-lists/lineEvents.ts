@@ -1,7 +1,7 @@
 import { applyCorrections } from '~~/utils/custody/corrections'
 import type { AnyRecordedEvent } from '~~/utils/custody/event'
 import type { EventKind } from '~~/utils/custody/kinds'
-import { logRow, recordedEvent, SELECT_LOG } from '../custody/logRow'
+import { eventLine, recordedEvent, SELECT_EVENT_LINES } from '../custody/logRow'
 import type { Database } from '../database/database'
 import { LISTS, type ListRef } from './lists'
 
@@ -9,12 +9,12 @@ import { LISTS, type ListRef } from './lists'
 export async function lineEvents(db: Database, list: ListRef, kinds: readonly EventKind[]): Promise<Map<string, AnyRecordedEvent[]>> {
   const { lines, key } = LISTS[list.kind]
   const { rows } = await db.readClient.execute({
-    sql: `${SELECT_LOG} WHERE cylinder_id IN (SELECT cylinder_id FROM ${lines} WHERE ${key} = ?)
+    sql: `${SELECT_EVENT_LINES} WHERE cylinder_id IN (SELECT cylinder_id FROM ${lines} WHERE ${key} = ?)
       AND kind IN (SELECT value FROM json_each(?)) ORDER BY seq`,
     args: [list.id, JSON.stringify([...kinds, 'corrected'])],
   })
   const byCylinder = new Map<string, AnyRecordedEvent[]>()
-  for (const event of rows.map(row => recordedEvent(logRow(row)))) {
+  for (const event of rows.map(row => recordedEvent(eventLine(row)))) {
     byCylinder.set(event.cylinderId, [...byCylinder.get(event.cylinderId) ?? [], event])
   }
   return new Map([...byCylinder].map(([cylinderId, events]) => [

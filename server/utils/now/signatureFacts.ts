@@ -1,7 +1,7 @@
 import { applyCorrections } from '../../../utils/custody/corrections'
 import { waitingEntries } from '../../../utils/custody/signatures'
 import type { UnsignedFacts } from '../../../utils/now/nowFacts'
-import { logRow, recordedEvent, SELECT_LOG } from '../custody/logRow'
+import { eventLine, recordedEvent, SELECT_EVENT_LINES } from '../custody/logRow'
 import type { Database } from '../database/database'
 import { namesOf, type Directory } from '../directory/directory'
 
@@ -34,9 +34,9 @@ async function waiting(db: Database): Promise<Waiting[]> {
   const [cylinders, log] = await db.readClient.batch([
     unsigned,
     // What a trainee has not recorded settles nothing about signatures, unless it signs or corrects.
-    `${SELECT_LOG} WHERE cylinder_id IN (SELECT id FROM (${unsigned})) AND (trainee = 1 OR kind IN ('countersigned', 'corrected')) ORDER BY cylinder_id, version`,
+    `${SELECT_EVENT_LINES} WHERE cylinder_id IN (SELECT id FROM (${unsigned})) AND (trainee = 1 OR kind IN ('countersigned', 'corrected')) ORDER BY cylinder_id, version`,
   ], 'read')
-  const events = log!.rows.map(row => recordedEvent(logRow(row)))
+  const events = log!.rows.map(row => recordedEvent(eventLine(row)))
   return cylinders!.rows.map((row): Waiting[] => {
     const cylinder = { id: row[0] as string, labelCode: row[1] as string | null, serial: row[2] as string | null }
     return waitingEntries(applyCorrections(events.filter(({ cylinderId }) => cylinderId === cylinder.id)))

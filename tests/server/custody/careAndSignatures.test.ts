@@ -26,7 +26,8 @@ describe('who may set a cylinder apart, release it and end its life', () => {
   it('lets a technician set it apart, look it over, miss and find it; only a manager releases and retires it', async () => {
     const id = await newCylinder(log)
     expect(await outcomes(log.technician,
-      sent(id, 'inspected', { result: 'sound' }), sent(id, 'missing', {}), sent(id, 'found', {}), sent(id, 'quarantined', { reason: 'no label' }),
+      sent(id, 'inspected', { result: 'sound' }), sent(id, 'missing', {}, { deviceSeq: 2 }), sent(id, 'found', {}, { deviceSeq: 3 }),
+      sent(id, 'quarantined', { reason: 'no label' }, { deviceSeq: 4 }),
       sent(id, 'released', { reason: 'labelled' }, { expects: 5 }), sent(id, 'retired', { reason: 'scrapped' }, { expects: 5 }),
     )).toEqual(['accepted', 'accepted', 'accepted', 'accepted', 403, 403])
     expect(await lifecycle(id)).toBe('quarantined')
