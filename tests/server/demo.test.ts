@@ -12,6 +12,8 @@ import { openDatabase, type Database } from '../../server/utils/database/databas
 import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
+import { lateFacts } from '../../server/utils/now/lateFacts'
+import { differingShipments } from '../../server/utils/shipments/paperDifferences'
 import { keepDemoPhotos } from '../../server/utils/demo/photos'
 import { massBalance } from '../../server/utils/records/massBalance'
 import { listVans } from '../../server/utils/vans/vans'
@@ -26,7 +28,7 @@ const RAISED: FindingCode[] = [
   'overfill', 'nearly-full', 'pressure-class', 'spec-not-for-gas', 'not-refillable', 'not-marked-flammable', 'toxic', 'second-refrigerant',
   'unknown-onto-known', 'retest-overdue', 'retest-soon', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'weight-not-known',
   'not-registered', 'registered-twice', 'old-tare-on-label', 'code-on-two', 'unsigned', 'unsupervised', 'not-seen', 'two-owners', 'weigh-again',
-  'half-transfer', 'transfer-unbalanced', 'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full', 'quarantined', 'found-by-use',
+  'half-transfer', 'transfer-unbalanced', 'clock-doubtful', 'late-change', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full', 'quarantined', 'found-by-use',
 ]
 
 let folder: string
@@ -77,6 +79,13 @@ describe('the demo firm', () => {
     expect(new Set(short[0]!.toLookFor.map(({ cylinder }) => cylinder.holder?.name))).toEqual(new Set([short[0]!.van.technicianName]))
     expect(short[0]!.aboard.length).toBeGreaterThan(short[0]!.toLookFor.length)
     expect(vans.filter(({ materials }) => materials !== null)).toHaveLength(2)
+  })
+
+  it('has one shipment whose papers differ from the log since something came late, and which waits for the manager', async () => {
+    const differing = await differingShipments(db, NOW)
+    expect(differing.map(({ lines }) => lines)).toEqual([1])
+    const late = await lateFacts(db, await directory(db), NOW)
+    expect(late.cylinders).toHaveLength(1)
   })
 
   it('shows every finding that these kinds of event can raise', async () => {

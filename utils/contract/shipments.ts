@@ -46,6 +46,9 @@ export type ShipmentReceipt = z.output<typeof receiptBody>
 export type ShipmentsQuery = z.output<typeof shipmentsQuery>
 export type ShipmentsAnswer = Page<Shipment>
 
+/** What the log says now of a cylinder as it left; null where it has not left at all, as a correction has it. */
+export interface PaperDifference { logged: { refrigerant: string | null, condition: string, netGrams: number | null } | null }
+
 export interface ShipmentLine {
   cylinder: CylinderRow
   version: number
@@ -53,6 +56,8 @@ export interface ShipmentLine {
   because: Finding[]
   /** As it left. */
   sent: { gross: MassReading, grossGrams: number, refrigerant: string | null, condition: string, netGrams: number | null } | null
+  /** What the log says now of the cylinder as it left, where late entries or corrections made it say something else than the papers; left out where it says the same. */
+  differs?: PaperDifference
   /** Of the `reclaimed` event. */
   received: { theirGrossGrams: number | null, acceptedNetGrams: number | null, grade: string | null, price: number | null } | null
 }

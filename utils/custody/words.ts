@@ -120,6 +120,7 @@ export const FINDING_WORDS: Record<FindingCode, string> = {
   'two-owners': 'two owners',
   'weigh-again': 'weigh again',
   'clock-doubtful': 'clock doubtful',
+  'late-change': 'came late',
   'look-before-fill': 'not looked at',
   'gas-excess': 'pressure too high',
   'system-dependent-limit': 'too much for its own compressor',

@@ -2,7 +2,7 @@ import { cylinderPath } from '../fleet/cylinderPath'
 import { daysBetween, formatNear } from '../quantity/instant'
 import { cylinderName } from '../shipment/changedLines'
 import { fleetPath } from './cylinderLines'
-import type { EntryFacts, LogCheckFacts, NowFacts, UnsignedFacts } from './nowFacts'
+import type { EntryFacts, LateFacts, LogCheckFacts, NowFacts, PaperFacts, UnsignedFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
 
@@ -10,10 +10,12 @@ import { counted, listed } from './phrase'
 const CHECKED_FOR_DAYS = 7
 
 /** The lines about the custody log itself: what waits for a signature, whether it was checked, and what of this week wants a second look. */
-export function logLines({ toCountersign, unsigned = [], logCheck, entries }: NowFacts, reader: NowReader): DraftLine[] {
+export function logLines({ toCountersign, unsigned = [], cameLate, papersDiffer = [], logCheck, entries }: NowFacts, reader: NowReader): DraftLine[] {
   return [
     toCountersign && toCountersignLine(toCountersign),
     unsignedLine(unsigned),
+    cameLate && cameLateLine(cameLate),
+    ...papersDiffer.map(papersLine),
     logCheck && checkLine(logCheck, reader),
     entries && entryLine('doubtful-times', entries.doubtful, ['entry came from a clock that was off', 'entries came from clocks that were off'], 'Both times are kept; compare them with the paper.'),
     entries && entryLine('late-entries', entries.late, ['entry was recorded', 'entries were recorded'], 'Compare with the paper of that day.', ' more than a day late'),
@@ -43,6 +45,26 @@ function unsignedLine(all: readonly UnsignedFacts[]): DraftLine | null {
     ...first && many === 1
       ? { verb: 'Read it', to: `${cylinderPath(first)}/log` }
       : { verb: `Show the ${many} cylinders`, to: fleetPath({ finding: 'unsigned' }) },
+  }
+}
+
+function cameLateLine({ count, lines, cylinders }: LateFacts): DraftLine | null {
+  const [first] = cylinders
+  if (!first) return null
+  return {
+    topic: 'came-late', kind: 'att', number: count,
+    sentence: `${counted(count, 'entry', 'entries')} came late or ${count === 1 ? 'was' : 'were'} corrected, and ${counted(lines, 'line says', 'lines say')} something else since.`,
+    reason: `${listed(cylinders.map(cylinderName))}, this week. Look whether what was done by the older figures was right.`,
+    verb: cylinders.length === 1 ? 'See what changed' : 'See the newest', to: `${cylinderPath(first)}/log`,
+  }
+}
+
+function papersLine({ id, number, lines }: PaperFacts): DraftLine {
+  return {
+    topic: 'papers-differ', which: id, kind: 'att', number: lines,
+    sentence: `The papers of shipment ${String(number).padStart(4, '0')} differ from the log.`,
+    reason: `${counted(lines, 'line was', 'lines were')} changed by what was recorded after it left. The papers stay as they were sent; tell the reclaimer.`,
+    verb: 'Compare them', to: `/shipments/${id}`,
   }
 }
 

@@ -42,6 +42,12 @@ export interface FewEmptyFacts { id: string, name: string, count: number }
 /** What trainees recorded that waits for the signature of one supervisor. */
 export interface UnsignedFacts { supervisor: string | null, count: number, cylinders: Pick<CylinderRow, 'id' | 'labelCode' | 'serial'>[] }
 
+/** What came late or mended another line this week, and how many lines recorded before say something else since. */
+export interface LateFacts { count: number, lines: number, cylinders: Pick<CylinderRow, 'id' | 'labelCode' | 'serial'>[] }
+
+/** A shipment of which the log now says something else than its papers; `lines` that differ. */
+export interface PaperFacts { id: string, number: number, lines: number }
+
 /** How the last check of the custody log went; `at` in UTC milliseconds. */
 export interface LogCheckFacts { last: { at: number, isOk: boolean } | null, newEvents: number }
 
@@ -69,6 +75,8 @@ export interface NowFacts {
   toCountersign?: UnsignedFacts
   /** What waits for anybody's, the most first. */
   unsigned?: UnsignedFacts[]
+  cameLate?: LateFacts
+  papersDiffer?: PaperFacts[]
   logCheck?: LogCheckFacts
   entries?: { doubtful: EntryFacts, late: EntryFacts, corrected: EntryFacts }
   mailFailed?: { count: number, recipient: string }

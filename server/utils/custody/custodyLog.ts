@@ -2,8 +2,10 @@ import type { CustodyLogAnswer, FoldInput } from '../../../utils/contract/custod
 import { foldAsItStood, type Past } from '../../../utils/custody/asItStood'
 import type { LogLine, Named } from '../../../utils/custody/cylinderView'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
-import { fold } from '../../../utils/custody/fold'
+import { lateChange } from '../../../utils/custody/findings/record'
+import { fold, type FoldContext } from '../../../utils/custody/fold'
 import { otherCylinderOf } from '../../../utils/custody/half'
+import { laterLines } from '../../../utils/custody/laterLines'
 import type { Database } from '../database/database'
 import { directory, namesOf } from '../directory/directory'
 import { foreignCursor } from '../http/cursor'
@@ -62,13 +64,24 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
   }).reverse()
   const start = page.cursor === undefined ? 0 : lines.findIndex(line => line.id === page.cursor) + 1
   if (page.cursor !== undefined && start === 0) throw foreignCursor()
-  const items = await withOtherCylinders(db, lines.slice(start, start + page.limit))
+  const items = withChanges(await withOtherCylinders(db, lines.slice(start, start + page.limit)), events, foldContext(from))
   return {
     items,
     nextCursor: start + page.limit < lines.length ? items.at(-1)?.id ?? null : null,
     total: lines.length,
     cylinder: { id: cylinderId, labelCode: state.labelCode, serial: state.stamp?.serial ?? null, version: state.version },
   }
+}
+
+/** The lines, those that came late or mend another with what they changed in lines recorded before them. */
+function withChanges(lines: LogLine[], events: readonly AnyRecordedEvent[], context: FoldContext): LogLine[] {
+  const changed = laterLines(events, context, new Set(lines.map(({ id }) => id)))
+  return lines.map((line) => {
+    const changes = changed.get(line.id)
+    if (!changes) return line
+    const isLate = line.kind !== 'corrected' && line.kind !== 'countersigned'
+    return { ...line, changes, findings: isLate ? [...line.findings, lateChange(changes.length)] : line.findings }
+  })
 }
 
 /** The lines, each with how the other cylinder is known where it has one. */

@@ -9,6 +9,8 @@ import { playChecks } from './checks'
 import { playCare, playSignatures } from './care'
 import { playIncidents } from './incidents'
 import { playPairs } from './pairs'
+import { paperStatements } from './papers'
+import { playLate } from './late'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { namePhotos } from './photos'
 import { seededRandom } from './random'
@@ -44,11 +46,13 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   playChecks(stage)
   playPairs(stage)
   playSignatures(stage)
+  playLate(stage)
   namePhotos(stage.script)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(listTables(db, stage))
   await directory(db, true)
   await recordScript(db, stage.script.events)
+  await db.write(await paperStatements(db))
   await followRules(db, () => now)
   await db.write(await vanTables(db, cast, now))
   await db.write(labelTables(db, stage, codesOf(stage), Array.from({ length: 10 }, () => drawLabelCode(random.bytes))))

@@ -10,7 +10,9 @@ import { dateBounds } from '../custody/dateBounds'
 import { logHead } from '../custody/logHead'
 import type { Database } from '../database/database'
 import { directory, type Directory } from '../directory/directory'
+import { differingShipments } from '../shipments/paperDifferences'
 import { cylinderFacts, fewEmptyFacts, fullFacts, unlabelledFacts, unseenFacts } from './cylinderFacts'
+import { lateFacts } from './lateFacts'
 import { listFacts, shortVanFacts, vanFacts } from './listFacts'
 import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts, scaleFacts } from './recordFacts'
 import { unsignedFacts } from './signatureFacts'
@@ -30,7 +32,7 @@ export async function nowAnswer(db: Database, access: Access, unit: MassUnit, no
 async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTopic>, personId: string, nowMs: number): Promise<NowFacts> {
   const bounds = dateBounds(from, nowMs)
   const when = <T>(topic: NowTopic, look: () => Promise<T>) => topics.has(topic) ? look() : undefined
-  const [cylinders, unseen, full, fewEmpty, unlabelled, vans, shortVans, lists, toCountersign, unsigned, logCheck, entries, mailFailed] = await Promise.all([
+  const [cylinders, unseen, full, fewEmpty, unlabelled, vans, shortVans, lists, toCountersign, unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed] = await Promise.all([
     cylinderFacts(db, fleetQuestions(topics, personId), bounds, nowMs),
     when('not-seen', () => unseenFacts(db, from, bounds, nowMs)),
     when('full', () => fullFacts(db, bounds)),
@@ -41,12 +43,14 @@ async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTo
     when('shipment-drafts', () => listFacts(db, nowMs)),
     when('to-countersign', () => unsignedFacts(db, from, personId)),
     when('unsigned', () => unsignedFacts(db, from)),
+    when('came-late', () => lateFacts(db, from, nowMs)),
+    when('papers-differ', () => differingShipments(db, nowMs)),
     when('log-broken', () => logCheckFacts(db)),
     when('corrections', () => entryFacts(db, nowMs)),
     when('mail-failed', () => mailFacts(db)),
   ])
   return {
-    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, fewEmpty, unlabelled, vans, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, logCheck, entries, mailFailed,
+    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, fewEmpty, unlabelled, vans, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed,
     rule: ruleFacts(from, nowMs), scaleChecks: scaleFacts(from, nowMs), ...peopleAndPlaces(from),
   }
 }

@@ -1,9 +1,10 @@
 import type { Access } from '~~/utils/access/roles'
-import type { ShipmentLine, ShipmentWithLines } from '~~/utils/contract/shipments'
+import type { PaperDifference, ShipmentLine, ShipmentWithLines } from '~~/utils/contract/shipments'
 import { mayShip } from '~~/utils/custody/plan'
 import { cylinderViews } from '../custody/cylinderViews'
 import { cylinderRows } from '../custody/fleet'
 import type { Database } from '../database/database'
+import { paperDifferences } from './paperDifferences'
 import { receiptsOf } from './receipts'
 import { shipmentLines } from './shipmentLines'
 import { theShipment } from './shipments'
@@ -17,6 +18,7 @@ export async function shipmentWithLines(db: Database, id: string, access: Access
     shipment.state === 'draft' ? cylinderViews(db, ids, { access, nowMs }) : [],
     receiptsOf(db, id),
   ])
+  const differing = shipment.state === 'dispatched' || shipment.state === 'received' ? await paperDifferences(db, id, stored) : new Map<string, PaperDifference>()
   const because = new Map(views.map(view => [view.id, mayShip(view).because]))
   const lines = stored.flatMap(({ cylinderId, sent }): ShipmentLine[] => {
     const found = rows.get(cylinderId)
@@ -26,6 +28,7 @@ export async function shipmentWithLines(db: Database, id: string, access: Access
       version: found.version,
       because: because.get(cylinderId) ?? [],
       sent,
+      ...differing.has(cylinderId) && { differs: differing.get(cylinderId) },
       received: receipts.get(cylinderId) ?? null,
     }]
   })

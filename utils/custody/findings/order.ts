@@ -6,7 +6,7 @@ const URGENCY: readonly FindingCode[] = [
   'second-refrigerant', 'unknown-onto-known', 'tested-full', 'early-test', 'rejected', 'quarantined', 'wet',
   'retest-overdue', 'retest-unknown', 'code-on-two', 'unsupervised', 'away', 'not-shippable',
   'not-registered', 'registered-twice', 'half-transfer', 'transfer-unbalanced', 'weigh-again', 'gas-excess', 'nearly-full', 'weight-not-known', 'toxic', 'two-owners', 'retest-soon',
-  'old-tare-on-label', 'not-seen', 'unsigned', 'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'found-by-use',
+  'old-tare-on-label', 'not-seen', 'unsigned', 'late-change', 'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'found-by-use',
 ]
 
 /** Which of two findings a person reads first: a stop before a caution, then what can hurt. */

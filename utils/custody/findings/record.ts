@@ -58,6 +58,14 @@ export function clockDoubtful(isClamped: boolean): Finding {
   }
 }
 
+/** It took its place before lines that had been recorded already, and they say something else since. */
+export function lateChange(lines: number): Finding {
+  return {
+    code: 'late-change', severity: 'caution', source: OWN_RULE, since: null,
+    text: `It came late, and ${lines === 1 ? 'a later line says' : `${lines} later lines say`} something else since. Look whether what was done then was right.`,
+  }
+}
+
 /** Nobody said that the outside was looked at. */
 export function lookBeforeFill(): Finding {
   return {

@@ -263,3 +263,20 @@ describe('what a trainee recorded and nobody has countersigned', () => {
     expect(linesFor('manager', { unsigned: [] })).toEqual([])
   })
 })
+
+describe('what came late', () => {
+  it('is said to the manager with what it changed, and leads to the newest log', () => {
+    const cylinder = cylinderRow()
+    expect(linesFor('manager', { cameLate: { count: 1, lines: 3, cylinders: [cylinder] } })).toMatchObject([{
+      topic: 'came-late', number: 1, sentence: '1 entry came late or was corrected, and 3 lines say something else since.', verb: 'See what changed', to: '/c/7k3m9q2tx/log',
+    }])
+    expect(linesFor('manager', { cameLate: { count: 0, lines: 0, cylinders: [] } })).toEqual([])
+    expect(linesFor('warehouse', { cameLate: { count: 1, lines: 1, cylinders: [cylinder] } })).toEqual([])
+  })
+
+  it('names each shipment whose papers differ', () => {
+    expect(linesFor('manager', { papersDiffer: [{ id: ID, number: 7, lines: 2 }] })).toMatchObject([{
+      key: `papers-differ ${ID}`, sentence: 'The papers of shipment 0007 differ from the log.', to: `/shipments/${ID}`,
+    }])
+  })
+})
