@@ -14,23 +14,24 @@ export function needsSignature(event: Pick<AnyRecordedEvent, 'kind' | 'trainee'>
  *
  * Only the supervisor that the entry names signs it, never its author nor a trainee, before or after it in effect. A
  * signature that was corrected is none: nobody puts another's name under what they did not sign. What a trainee has since
- * changed was not what was signed, and is signed anew, unless somebody else has corrected it after that.
+ * changed, by the time of the change or of its recording, was not what was signed, and is signed anew, unless somebody else
+ * has corrected it after that.
  *
  * Shape: `standings` in order of effect.
  */
 export function signaturesOf(standings: readonly Standing[]): ReadonlyMap<string, string> {
   const placeOf = new Map(standings.map(({ event }, index) => [event.id, index]))
-  const changedAt = traineesChanges(standings, placeOf)
+  const changes = traineesChanges(standings, placeOf)
   const signedBy = new Map<string, string>()
   standings.forEach(({ event: signature, isOut, correction }, index) => {
     if (isOut || correction !== null || !isSignature(signature)) return
     const { eventId } = signature.details
     const signed = standings[placeOf.get(eventId) ?? -1]
     if (signed === undefined || signedBy.has(eventId) || !mayHaveSigned(signature, signed.event)) return
-    const changed = changedAt.get(eventId) ?? -1
-    const mended = signed.correction === null ? -1 : placeOf.get(signed.correction.eventId) ?? -1
-    const isOthersWord = mended > changed && !standings[mended]!.event.trainee
-    if (changed > index && !isOthersWord) return
+    const unseen = (changes.get(eventId) ?? []).filter(place => place > index || standings[place]!.event.recordedAt > signature.recordedAt)
+    const mended = placeOf.get(signed.correction?.eventId ?? '')
+    const isOthersWord = mended !== undefined && mended > Math.max(...unseen) && !standings[mended]!.event.trainee
+    if (unseen.length > 0 && !isOthersWord) return
     signedBy.set(eventId, signature.id)
   })
   return signedBy
@@ -43,11 +44,11 @@ export function waitingEntries(standings: readonly Standing[]): AnyRecordedEvent
 }
 
 /**
- * Where a trainee last changed an entry, by the entry's id: by correcting it, or by correcting or taking out a correction
- * of it, however many there are in a row.
+ * The places at which trainees changed an entry, by the entry's id: by correcting it, or by correcting or taking out a
+ * correction of it, however many there are in a row.
  */
-function traineesChanges(standings: readonly Standing[], placeOf: ReadonlyMap<string, number>): ReadonlyMap<string, number> {
-  const changes = new Map<string, number>()
+function traineesChanges(standings: readonly Standing[], placeOf: ReadonlyMap<string, number>): ReadonlyMap<string, number[]> {
+  const changes = new Map<string, number[]>()
   standings.forEach(({ event, isOut }, index) => {
     if (isOut || !event.trainee || !isCorrection(event)) return
     const passed = new Set<string>()
@@ -57,7 +58,7 @@ function traineesChanges(standings: readonly Standing[], placeOf: ReadonlyMap<st
       const next = standings[placeOf.get(named) ?? -1]?.event
       if (next && isCorrection(next)) named = next.details.eventId
     }
-    changes.set(named, index)
+    changes.set(named, [...changes.get(named) ?? [], index])
   })
   return changes
 }

@@ -90,6 +90,15 @@ describe('a countersignature', () => {
     expect(codes(viewAfter([...story, signed(1), changed, corrected(idOf(3), undefined, { actorId: SUPERVISOR })]))).toEqual([])
   })
 
+  it('does not cover a correction of the trainee that was still on its way, though it is older', () => {
+    const onItsWay = (recordedAt: number) => corrected(idOf(1), { refrigerant: 'R-22', grossAfter: kg(25), looked: true }, {
+      trainee: true, occurredAt: START + 2 * HOUR, recordedAt,
+    })
+    const signedAt5 = signed(1, { occurredAt: START + 5 * HOUR, recordedAt: START + 5 * HOUR })
+    expect(codes(viewAfter([...story, onItsWay(START + 5 * HOUR), signedAt5]))).toEqual([])
+    expect(codes(viewAfter([...story, onItsWay(START + 5 * HOUR + 1), signedAt5]))).toEqual(['unsigned'])
+  })
+
   it('is not moved to another entry by a correction', () => {
     const two = [...story, filled('R-22', 21, {}, trainee), signed(1)]
     const moved = corrected(idOf(3), { eventId: idOf(2) }, { actorId: TECHNICIAN })
