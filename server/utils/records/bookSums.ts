@@ -10,38 +10,44 @@ const BOOKED = 'refrigerant, owner_id, sum(grams) AS grams, count(*) AS movement
 const HELD = `refrigerant, owner_id, sum(grams) AS grams, sum(not_known) AS not_known,
   sum(weighed_variance) AS weighed_variance, sum(found_variance) AS found_variance`
 
-/** The movements of the log, summed for a period: as `bookSums` sums them one by one. */
-export async function bookSumsOf(db: Database, { fromMs, untilMs }: Span, whose: Whose): Promise<BookSum[]> {
+/**
+ * The books of a period at one moment: its movements summed as `bookSums` sums them one by one, and the changes of stock
+ * as `stockSums` does. Both are read together, so that what is recorded meanwhile stands in both or in neither.
+ */
+export async function booksOf(db: Database, { fromMs, untilMs }: Span, whose: Whose): Promise<{ books: BookSum[], stock: StockSum[] }> {
   const where = conditions(whose)
-  const [before, within] = await db.readClient.batch([
+  const [bookedBefore, booked, heldBefore, held] = await db.readClient.batch([
     { sql: `SELECT ${BOOKED} FROM movements WHERE at < ?${where.sql} GROUP BY refrigerant, owner_id`, args: [fromMs, ...where.args] },
     {
       sql: `SELECT ${BOOKED}, cause, apart FROM movements WHERE at >= ? AND at < ?${where.sql}
         GROUP BY refrigerant, owner_id, cause, apart`,
       args: [fromMs, untilMs, ...where.args],
     },
-  ], 'read')
-  return [...before!.rows, ...within!.rows].map(row => ({
-    ...ownerOf(row),
-    isBefore: row.cause === undefined,
-    cause: (row.cause ?? null) as MovementCause | null,
-    apart: row.apart === 1,
-    grams: row.grams as number,
-    movements: row.movements as number,
-  }))
-}
-
-/** The changes of stock of the log, summed for a period: as `stockSums` sums them one by one. */
-export async function stockSumsOf(db: Database, { fromMs, untilMs }: Span, whose: Whose): Promise<StockSum[]> {
-  const where = conditions(whose)
-  const [before, within] = await db.readClient.batch([
     { sql: `SELECT ${HELD} FROM stock_changes WHERE at < ?${where.sql} GROUP BY refrigerant, owner_id`, args: [fromMs, ...where.args] },
     {
       sql: `SELECT ${HELD}, apart FROM stock_changes WHERE at >= ? AND at < ?${where.sql} GROUP BY refrigerant, owner_id, apart`,
       args: [fromMs, untilMs, ...where.args],
     },
   ], 'read')
-  return [...before!.rows, ...within!.rows].map(row => ({
+  return {
+    books: [...bookedBefore!.rows, ...booked!.rows].map(bookSumOf),
+    stock: [...heldBefore!.rows, ...held!.rows].map(stockSumOf),
+  }
+}
+
+function bookSumOf(row: Row): BookSum {
+  return {
+    ...ownerOf(row),
+    isBefore: row.cause === undefined,
+    cause: (row.cause ?? null) as MovementCause | null,
+    apart: row.apart === 1,
+    grams: row.grams as number,
+    movements: row.movements as number,
+  }
+}
+
+function stockSumOf(row: Row): StockSum {
+  return {
     ...ownerOf(row),
     isBefore: row.apart === undefined,
     apart: row.apart === 1,
@@ -49,7 +55,7 @@ export async function stockSumsOf(db: Database, { fromMs, untilMs }: Span, whose
     notKnown: row.not_known as number,
     weighedVariance: row.weighed_variance as number,
     foundVariance: row.found_variance as number,
-  }))
+  }
 }
 
 /** What of the books is asked for, to go behind another condition. */

@@ -8,7 +8,7 @@ import { askedDays, periodOf, spanOf, type Days } from '../../../utils/records/p
 import type { Database } from '../database/database'
 import { directory, namesOf, type Directory } from '../directory/directory'
 import { problem } from '../http/problem'
-import { bookSumsOf, stockSumsOf, type Whose } from './bookSums'
+import { booksOf, type Whose } from './bookSums'
 
 /** A question about the books, understood: which days, from when to when, of what. */
 export interface Asked { days: Days, span: Span, whose: Whose }
@@ -17,7 +17,7 @@ export interface Asked { days: Days, span: Span, whose: Whose }
 export async function massBalance(db: Database, query: MassBalanceQuery, nowMs: number): Promise<MassBalanceAnswer> {
   const from = await directory(db)
   const { days, span, whose } = askedOf(query, from, nowMs)
-  const [books, stock] = await Promise.all([bookSumsOf(db, span, whose), stockSumsOf(db, span, whose)])
+  const { books, stock } = await booksOf(db, span, whose)
   const names = namesOf(from)
   return {
     period: periodOf(days, span),
