@@ -165,7 +165,8 @@ const PRESSED: Record<string, Screen> = {
     await page.getByLabel('Name of the view').waitFor()
   } },
   'cylinders of the fleet that are chosen': { as: warehouse, at: () => '/fleet', after: async (page) => {
-    await page.getByLabel(/^Choose (?!all)/).first().check()
+    // On a phone as cards, at a desk as rows; the others are hidden.
+    await page.getByLabel(/^Choose (?!all)/).and(page.locator(':visible')).first().check()
     await page.getByText('1 chosen').waitFor()
   } },
   'the sum of a rule that does not govern': { as: technician, at: demo => `/c/${demo.codes.usual}/working`, after: async (page) => {

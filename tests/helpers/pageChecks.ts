@@ -37,8 +37,8 @@ export function targetsLowerThan(page: Page, height: number): Promise<string[]> 
     const words = (element: Element | null) => (element?.textContent ?? '').replaceAll(/\s+/g, ' ').trim()
     const isWithinText = (element: Element) =>
       getComputedStyle(element).display === 'inline' && words(element.parentElement).length > words(element).length
-    // What is pressed for a box is its label.
-    const pressed = (element: Element) => element.matches('input[type=checkbox], input[type=radio]') ? element.closest('label') ?? element : element
+    // What is pressed for a box, or to choose a file, is its label.
+    const pressed = (element: Element) => element.matches('input[type=checkbox], input[type=radio], input[type=file]') ? element.closest('label') ?? element : element
     return [...document.querySelectorAll('button, a[href], summary, select, input:not([type=hidden]), [role=button], [role=tab]')]
       .filter(element => element.checkVisibility({ visibilityProperty: true }) && !isWithinText(element))
       .map(element => ({ element, box: pressed(element).getBoundingClientRect() }))
