@@ -93,10 +93,10 @@ describe('a server whose storage breaks', () => {
   })
 
   it('answers each post 503 where its file has become read-only, and goes on when it may write again', async () => {
-    const lift = makeReadOnly(file)
     // A connection goes on with the file as it was opened: it meets the change when it is made anew, here because of a lock.
-    const locker = takeWriteLock(file, [400])
+    const locker = takeWriteLock(file, [2_000])
     await locker.isHolding
+    const lift = makeReadOnly(file)
     const refused = await expectUnavailable(site)
     await locker.ended
     lift()
