@@ -10,10 +10,12 @@ export interface NextStep {
 /**
  * The next thing to do with a cylinder; null where nothing of ours is to be done.
  *
- * A cylinder with something in it is never sent to its test: it is emptied or shipped first.
+ * A cylinder with something in it is never sent to its test: it is emptied or shipped first. What belongs to two owners
+ * only goes to reclaim.
  */
 export function nextStep(row: CylinderRow): NextStep | null {
   const has = (code: CylinderRow['findingCodes'][number]) => row.findingCodes.includes(code)
+  if (row.lifecycle === 'retired' && has('after-end')) return { word: 'See why', screen: 'cylinder' }
   if (row.lifecycle === 'retired' || row.lifecycle === 'condemned') return null
   if (row.lifecycle === 'at-reclaim' || row.lifecycle === 'at-test') return { word: 'Await it', screen: 'cylinder' }
   if (row.lifecycle === 'missing') return { word: 'Look for it', screen: 'cylinder' }
@@ -28,6 +30,7 @@ export function nextStep(row: CylinderRow): NextStep | null {
   if (row.worstFinding?.severity === 'stop') return { word: 'See why', screen: 'cylinder' }
   if (row.labelCode === null) return { word: 'Label it', screen: 'label' }
   if (!row.nothingInIt && row.netGrams === null) return { word: 'Weigh it', screen: 'cylinder' }
+  if (has('two-owners')) return { word: 'Ship it', screen: 'shipment' }
   if (has('nearly-full')) return isFull(row) ? { word: 'Ship it', screen: 'shipment' } : { word: 'Bring it back', screen: 'cylinder' }
   if (has('retest-soon') && row.nothingInIt) return { word: 'Plan its test', screen: 'test-lot' }
   if (row.fillLimitGrams !== null && row.stopWeightGrams === null) return { word: 'See why', screen: 'cylinder' }

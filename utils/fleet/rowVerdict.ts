@@ -51,9 +51,10 @@ const CAUTION_ORDER = Object.keys(CAUTION_WORDS) as FindingCode[]
 /**
  * The one line that the fleet says of a cylinder: the gravest thing known of it, in words.
  *
- * Order: an end of its life, a stop, what is not known, a caution, and only then that it may be used.
+ * Order: use after its end, an end of its life, a stop, what is not known, a caution, and only then that it may be used.
  */
 export function rowVerdict(row: CylinderRow): RowVerdict {
+  if (row.lifecycle === 'retired' && row.findingCodes.includes('after-end')) return { kind: 'stop', text: STOP_WORDS['after-end']! }
   const ended = LIFECYCLE_VERDICTS[row.lifecycle]
   if (ended) return ended
   const away = awayWord(row)

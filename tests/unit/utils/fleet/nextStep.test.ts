@@ -35,7 +35,13 @@ describe('what to do with a cylinder next', () => {
     expect(nextStep(cylinderRow({ nothingInIt: true, refrigerant: null, findingCodes: ['wet'], worstFinding: { code: 'wet', severity: 'stop' } }))?.word).toBe('Evacuate it')
   })
 
-  it('is nothing where its life has ended', () => {
+  it('is to ship what belongs to two owners, and never to fill it up', () => {
+    expect(nextStep(cylinderRow({ findingCodes: ['two-owners'] }))).toEqual({ word: 'Ship it', screen: 'shipment' })
+  })
+
+  it('is nothing where its life has ended, unless it was used after that', () => {
     expect(nextStep(cylinderRow({ lifecycle: 'condemned' }))).toBeNull()
+    expect(nextStep(cylinderRow({ lifecycle: 'retired' }))).toBeNull()
+    expect(nextStep(cylinderRow({ lifecycle: 'retired', findingCodes: ['after-end'] }))).toEqual({ word: 'See why', screen: 'cylinder' })
   })
 })

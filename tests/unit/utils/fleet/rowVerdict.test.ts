@@ -8,6 +8,12 @@ describe('the word that the fleet says of a cylinder', () => {
     expect(rowVerdict(cylinderRow({ nothingInIt: true, netGrams: null }))).toEqual({ kind: 'ok', text: 'Empty, usable' })
   })
 
+  it('is a stop where it was used after it was retired, and no more than retired otherwise', () => {
+    const used = cylinderRow({ lifecycle: 'retired', worstFinding: { code: 'after-end', severity: 'stop' }, findingCodes: ['after-end'] })
+    expect(rowVerdict(used)).toEqual({ kind: 'stop', text: 'Used after its end' })
+    expect(rowVerdict(cylinderRow({ lifecycle: 'retired' }))).toEqual({ kind: 'away', text: 'Retired' })
+  })
+
   it('is the stop, before any caution', () => {
     const row = cylinderRow({ worstFinding: { code: 'overfill', severity: 'stop' }, findingCodes: ['overfill', 'retest-soon'] })
     expect(rowVerdict(row)).toEqual({ kind: 'stop', text: 'Overfilled' })
