@@ -11,7 +11,7 @@ import type { FindingCode, Severity } from './finding'
 import { urgencyOrder } from './findings/order'
 import { retestUnknown } from './findings/retest'
 import type { EventKind } from './kinds'
-import { lifecycleOf } from './lifecycle'
+import { isGivenAway, lifecycleOf } from './lifecycle'
 import { retestOf } from './retestOf'
 import type { SaidByOthers } from './saidByOthers'
 import type { CylinderState } from './state'
@@ -75,7 +75,7 @@ export function cacheRow(state: CylinderState, context: RowContext): RowColumns 
   const capacity = capacityOf(state, undated, context)
   const findings = [
     ...stateFindings(state, capacity.fillLimitGrams, context),
-    ...(retest.state === 'unknown' && endOf(state) === null ? [retestUnknown()] : []),
+    ...(retest.state === 'unknown' && endOf(state) === null && !isGivenAway(state) ? [retestUnknown()] : []),
   ].sort(urgencyOrder)
   const codes = [...new Set(findings.map(({ code }) => code))]
   return {
@@ -98,7 +98,7 @@ export function cacheRow(state: CylinderState, context: RowContext): RowColumns 
     exactStopWeight: capacity.exactStopWeightGrams === null ? null : String(capacity.exactStopWeightGrams),
     tareWeightGrams: stamp === null || tare === null ? null : Math.round(tare.exactGrams),
     waterCapacityGrams: stamp?.waterCapacity ? readingGrams(stamp.waterCapacity) : null,
-    dueMonth: retest.dueMonth,
+    dueMonth: isGivenAway(state) ? null : retest.dueMonth,
     retestState: undated.state === 'in-date' ? 'dated' : undated.state === 'unknown' ? 'unknown' : 'not-required',
     lastEventAt: state.lastEventAt,
     lastEventKind: state.lastEventKind,

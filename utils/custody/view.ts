@@ -11,7 +11,7 @@ import { endOf } from './endOf'
 import { urgencyOrder } from './findings/order'
 import { retestUnknown } from './findings/retest'
 import type { FoldContext } from './fold'
-import { lifecycleOf } from './lifecycle'
+import { isGivenAway, lifecycleOf } from './lifecycle'
 import { mayOf } from './mayOf'
 import { retestOf } from './retestOf'
 import type { SaidByOthers } from './saidByOthers'
@@ -53,8 +53,8 @@ export function view(state: CylinderState, context: ViewContext): CylinderView {
   const { nothingInIt } = state.contents
   const findings = [
     ...stateFindings(state, capacity.fillLimitGrams, context),
-    ...(retest.state === 'unknown' && endOf(state) === null ? [retestUnknown()] : []),
-    ...dateFindings({ lifecycle, nothingInIt, dueMonth: retest.dueMonth, lastSeenAt: state.lastSeenAt }, context),
+    ...(retest.state === 'unknown' && endOf(state) === null && !isGivenAway(state) ? [retestUnknown()] : []),
+    ...dateFindings({ lifecycle, nothingInIt, dueMonth: isGivenAway(state) ? null : retest.dueMonth, lastSeenAt: state.lastSeenAt }, context),
   ].sort(urgencyOrder)
   const shown = {
     id: state.id,

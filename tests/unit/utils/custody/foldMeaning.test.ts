@@ -58,6 +58,7 @@ const MADE: Record<number, string> = {
   2: '0b97ed1ae71c9e11',
   3: '0b97ed1ae71c9e11',
   4: '0b97ed1ae71c9e11',
+  5: '0b97ed1ae71c9e11',
 }
 
 describe('the number of what the fold means', () => {

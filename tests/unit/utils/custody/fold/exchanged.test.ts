@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest'
 import {
-  codes, contentsAfter, CUSTOMER, DAY, did, filled, folded, kg, lastFindings, lastMovements, OTHER_CYLINDER, registered, SHIPMENT, SHOP, START, SUPPLIER, SUPPLIER_PLACE, TECHNICIAN, VAN,
-  viewAfter, weighed, type Told,
+  codes, contentsAfter, CUSTOMER, DAY, did, filled, folded, kg, lastFindings, lastMovements, OTHER_CYLINDER, registered, SHIPMENT, SHOP, STAMP, START, SUPPLIER, SUPPLIER_PLACE,
+  TECHNICIAN, VAN, viewAfter, VIEW_CONTEXT, weighed, type Told,
 } from '~~/tests/helpers/custody'
+import { cacheRow } from '~~/utils/custody/row'
 
 const EXCHANGE = '0198f000-0000-7000-8000-0000000000d2'
 const went = (more: Told['more'] = {}) => did('exchanged', { direction: 'out', otherCylinderId: OTHER_CYLINDER, exchangeId: EXCHANGE, firmId: SUPPLIER }, more)
@@ -31,6 +32,19 @@ describe('a cylinder that goes to a firm in exchange', () => {
     expect(codes(shown)).not.toContain('not-seen')
     expect(shown.capacity.refusals.map(({ code }) => code)).toEqual(['away'])
     expect(shown.mayNot.map(({ kind }) => kind)).toEqual(expect.arrayContaining(['moved', 'filled', 'drawn', 'transferred', 'exchanged']))
+  })
+
+  it('has no retest that is ours to see to, until it is here again', () => {
+    // Made in March 2024: due in March 2029, five years later.
+    const nowMs = Date.UTC(2029, 4, 1)
+    expect(codes(viewAfter(story.slice(0, -1), { nowMs }))).toContain('retest-overdue')
+    expect(codes(viewAfter(story, { nowMs }))).toEqual(['half-transfer'])
+    expect(cacheRow(folded(...story).state, VIEW_CONTEXT)).toMatchObject({ dueMonth: null, findingCodes: ' half-transfer ' })
+    const noDate = [registered({ stamp: { ...STAMP, madeMonth: null } }), went()]
+    expect(codes(viewAfter(noDate.slice(0, 1)))).toContain('retest-unknown')
+    expect(codes(viewAfter(noDate))).toEqual(['half-transfer'])
+    expect(cacheRow(folded(...noDate).state, VIEW_CONTEXT).findingCodes).toBe(' half-transfer ')
+    expect(codes(viewAfter([...story, weighed(15, { occurredAt: nowMs })], { nowMs }))).toContain('retest-overdue')
   })
 
   it('stays a rented one where it was rented', () => {
