@@ -33,6 +33,8 @@ export default defineConfig(async () => ({
           setupFiles: ['tests/helpers/nobodySignedIn.ts'],
           // The framework's own start belongs to the first file's set-up.
           hookTimeout: 60_000,
+          // The first page of a file is mounted along with all that it imports, which a busy machine takes its time over.
+          testTimeout: 30_000,
           environment: 'nuxt',
           environmentOptions: { nuxt: { domEnvironment: 'happy-dom' } },
         },

@@ -49,8 +49,10 @@ export function useBatch(key: string, plan: () => BatchPlan) {
   /** How many are recorded of how many, while they are. */
   const progress = ref<{ done: number, total: number } | null>(null)
   const recordedIds = ref<string[]>([])
-  // Nothing is drawn from it.
+  // Nothing is drawn from these.
   let last = { ref: '', at: 0 }
+  /** What the device keeps, as far as this tab knows: what came from another tab is not written once more over what that one has written since. */
+  let inStore = ''
 
   const expectedIds = computed(() => plan().expected && new Set(plan().expected!.map(({ id }) => id)))
   const lines = computed(() => scans.value.map(lineOf))
@@ -206,6 +208,7 @@ export function useBatch(key: string, plan: () => BatchPlan) {
   /** The list is one in all tabs; what went off it in another one after it was sent, was recorded there. */
   followOtherTabs(async (others) => {
     const list = others ?? []
+    inStore = JSON.stringify(list)
     const before = new Map(scans.value.map(scan => [scan.ref, scan]))
     const gone = scans.value.filter(scan => scan.sent !== null && !list.some(one => one.ref === scan.ref))
     recordedIds.value.push(...gone.flatMap(({ found }) => found.is === 'known' ? [found.view.id] : []))
@@ -215,11 +218,14 @@ export function useBatch(key: string, plan: () => BatchPlan) {
   })
 
   onMounted(async () => {
+    inStore = JSON.stringify(kept.value ?? [])
     scans.value = (kept.value ?? []).map(scan => ({ ...scan, found: { is: 'looking' }, problem: null }))
-    watch(scans, all => store(all.length === 0
-      ? null
-      : all.map(({ ref: reference, scannedAt, keepReason, isChosen, sent }) =>
-          ({ ref: reference, scannedAt, keepReason, isChosen, sent }))))
+    watch(scans, (all) => {
+      const list = all.map(({ ref: reference, scannedAt, keepReason, isChosen, sent }) => ({ ref: reference, scannedAt, keepReason, isChosen, sent }))
+      if (JSON.stringify(list) === inStore) return
+      inStore = JSON.stringify(list)
+      store(list.length === 0 ? null : list)
+    })
     for (const { ref: reference } of scans.value) await lookUp(reference)
   })
 

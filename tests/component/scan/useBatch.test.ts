@@ -64,9 +64,25 @@ describe('which of two cylinders with one code is meant in a batch', () => {
 })
 
 describe('a batch that is open in two tabs', () => {
+  it('never writes what it has from the other over what that one has written since', async () => {
+    fleet = [labelled('first', 'K48213', CODE), labelled('second', 'K48777', OTHER_CODE)]
+    const one = await batch()
+    const other = await batch()
+    await other.add(CODE)
+    await flushPromises()
+    toldToOthers()
+    const key = keptUnder()
+    localStorage.setItem(key, '"written since"')
+    await vi.waitFor(() => expect(one.lines.value.map(({ found }) => found.is)).toEqual(['known']))
+    await flushPromises()
+    expect(localStorage.getItem(key)).toBe('"written since"')
+  })
+
+  const keptUnder = () => Object.keys(localStorage).find(name => name.endsWith('batch move test'))!
+
   /** What the browser tells the other tabs once one has written. */
   function toldToOthers() {
-    const key = Object.keys(localStorage).find(name => name.endsWith('batch move test'))!
+    const key = keptUnder()
     window.dispatchEvent(new StorageEvent('storage', { key, newValue: localStorage.getItem(key), storageArea: localStorage }))
   }
 
