@@ -67,7 +67,8 @@ it(`has in the file what it acknowledged of ${POSTS} posts while another process
   const refused = answers.filter(answer => !answer.isAcknowledged)
   expect(new Set(refused.map(({ status, type }) => `${status} ${type}`))).toEqual(new Set(['503 database-unavailable']))
   expect(acknowledged.length).toBeGreaterThanOrEqual(POSTS - 2 * AT_ONCE)
-  expect(slowestHealth).toBeLessThan(2_000)
+  // A server that waited inside the driver would not answer for the whole of a hold.
+  expect(slowestHealth).toBeLessThan(3_000)
   console.log(`${acknowledged.length} of ${answers.length} posts acknowledged, ${refused.length} answered 503; another process sees ${seen.size}`)
   const { body } = await shop.manager.client.get<LogVerification>('/api/log/verify')
   expect(body).toMatchObject({ ok: true, checked: before.length + acknowledged.length })
