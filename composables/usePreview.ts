@@ -9,6 +9,7 @@ import type { PolicyAnswer } from '~~/utils/contract/policy'
 import type { AnyCustodyEvent } from '~~/utils/custody/event'
 import type { Finding, FindingCode } from '~~/utils/custody/finding'
 import type { EventKind } from '~~/utils/custody/kinds'
+import type { ChangedLine } from '~~/utils/custody/laterLines'
 import type { ViewContext } from '~~/utils/custody/view'
 import { DEFAULT_RETEST_SETTINGS } from '~~/utils/requalification/retestSettings'
 
@@ -37,6 +38,7 @@ export function usePreview(input: {
   const posting = usePostingStore()
   const load = useCatalogue()
   const findings = shallowRef<Finding[]>([])
+  const changes = shallowRef<ChangedLine[]>([])
   const known = new Map<string, { recorded: number, input: FoldInput }>()
   let timer: ReturnType<typeof setTimeout> | undefined
   let turn = 0
@@ -53,7 +55,7 @@ export function usePreview(input: {
     const mine = ++turn
     const content = input.content()
     if (!content) {
-      findings.value = []
+      show([], [])
       return
     }
     try {
@@ -63,11 +65,17 @@ export function usePreview(input: {
       ])
       if (mine !== turn) return
       const counter = other && otherKnown ? { events: otherKnown.events, draft: draftOf(other) } : undefined
-      findings.value = preview(mineKnown.events, draftOf(content), viewContext(policy, catalogue, session.access, mineKnown), counter).findings
+      const judged = preview(mineKnown.events, draftOf(content), viewContext(policy, catalogue, session.access, mineKnown), counter)
+      show(judged.findings, judged.changes)
     }
     catch {
-      if (mine === turn) findings.value = []
+      if (mine === turn) show([], [])
     }
+  }
+
+  function show(found: Finding[], changed: ChangedLine[]) {
+    findings.value = found
+    changes.value = changed
   }
 
   function draftOf(content: PreviewContent): AnyCustodyEvent {
@@ -86,7 +94,7 @@ export function usePreview(input: {
   onBeforeUnmount(() => clearTimeout(timer))
 
   const asks = computed(() => findings.value.some(finding => finding.severity === 'stop' || ASKED.includes(finding.code)))
-  return { findings, asks }
+  return { findings, asks, changes }
 }
 
 function viewContext(policy: PolicyAnswer, catalogue: ViewContext['catalogue'], access: ViewContext['access'], { codesOnTwo, otherHalves }: FoldInput): ViewContext {

@@ -15,7 +15,7 @@ export function useRecording(input: {
   tick: string
   send: (content: Omit<NewEvent, 'occurredAt'>) => Promise<Posted | null>
 }) {
-  const { findings, asks } = usePreview({ content: input.content, at: input.at })
+  const { findings, asks, changes } = usePreview({ content: input.content, at: input.at })
   const seen = ref(false)
   const tried = ref(false)
   const codes = computed(() => findings.value.map(finding => finding.code))
@@ -36,5 +36,5 @@ export function useRecording(input: {
     return posted
   }
 
-  return { findings, asks, seen, tried, blocked, refusal, record }
+  return { findings, asks, changes, seen, tried, blocked, refusal, record }
 }

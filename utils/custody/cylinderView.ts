@@ -149,6 +149,8 @@ export interface LogLine {
   practice: boolean
   confirmed: string[]
   details: unknown
+  /** The details that a correction gave in their place; left out where they stand as recorded. */
+  instead?: unknown
   /** Names of the ids inside details, by id. */
   names: Record<string, string>
   /** The other cylinder of what happened between two; null where there is none, or where the log knows none by that id. */

@@ -4,6 +4,7 @@ import type { Finding } from './finding'
 import type { Half } from './half'
 import { urgencyOrder } from './findings/order'
 import { fold } from './fold'
+import { laterLines, type ChangedLine } from './laterLines'
 import { view, type ViewContext } from './view'
 
 /** What would be said if an event were recorded now. */
@@ -11,6 +12,8 @@ export interface Preview {
   view: CylinderView
   /** What the event itself would be told, and what would stand after it that does not stand now. */
   findings: Finding[]
+  /** Lines in the log that would say something else, where it comes late or mends one. */
+  changes: ChangedLine[]
 }
 
 /**
@@ -25,11 +28,16 @@ export function preview(
 ): Preview {
   const context = counter ? { ...outside, otherHalves: halvesWith(counter, outside) } : outside
   const now = view(fold(events, context).state, context)
-  const { state, steps } = fold([...events, recordedNow(events, draft, context)], context)
+  const withDraft = [...events, recordedNow(events, draft, context)]
+  const { state, steps } = fold(withDraft, context)
   const then = view(state, context)
   const raised = then.findings.filter(finding => !now.findings.some(({ code, severity }) => code === finding.code && severity === finding.severity))
   const told = steps.find(({ eventId }) => eventId === draft.id)?.findings ?? []
-  return { view: then, findings: [...told, ...raised.filter(({ code }) => !told.some(other => other.code === code))].sort(urgencyOrder) }
+  return {
+    view: then,
+    findings: [...told, ...raised.filter(({ code }) => !told.some(other => other.code === code))].sort(urgencyOrder),
+    changes: laterLines(withDraft, context, new Set([draft.id])).get(draft.id) ?? [],
+  }
 }
 
 /** What other cylinders say, with the half that is recorded of one of them at the same time. */

@@ -22,6 +22,6 @@ export function gapBefore(lines: readonly LogLine[], index: number, timeZone: st
 
 /** How much later than it happened an event was recorded, in milliseconds; null below an hour. */
 export function lateBy(line: LogLine): number | null {
-  const late = Date.parse(line.recordedAt) - Date.parse(line.occurredAt)
+  const late = Date.parse(line.recordedAt) - Date.parse(line.effectiveAt)
   return late >= 3_600_000 ? late : null
 }

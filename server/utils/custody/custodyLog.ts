@@ -1,9 +1,11 @@
 import type { CustodyLogAnswer, FoldInput } from '../../../utils/contract/custody'
 import { foldAsItStood, type Past } from '../../../utils/custody/asItStood'
+import { asRecorded } from '../../../utils/custody/asRecorded'
+import { applyCorrections } from '../../../utils/custody/corrections'
 import type { LogLine, Named } from '../../../utils/custody/cylinderView'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { lateChange } from '../../../utils/custody/findings/record'
-import { fold, type FoldContext } from '../../../utils/custody/fold'
+import { fold, type FoldContext, type FoldStep } from '../../../utils/custody/fold'
 import { otherCylinderOf } from '../../../utils/custody/half'
 import { laterLines } from '../../../utils/custody/laterLines'
 import type { Database } from '../database/database'
@@ -24,13 +26,18 @@ export async function recordedEvents(db: Database, cylinderId: string): Promise<
  * A cylinder's custody log for people: in order of effect, newest first, each line numbered by recording; of a past
  * instant the lines that had happened, or were known, by then.
  *
+ * @param how `recorded` counts a correction from its own line on; else it counts in the place of what it mends.
+ *
  * Errors: 400 for a cursor that is none of ours; 404 where nothing had happened by then.
  */
-export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }, past: Past | null = null): Promise<CustodyLogAnswer> {
+export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }, past: Past | null = null, how: 'recorded' | 'stands' = 'stands'): Promise<CustodyLogAnswer> {
   const [events, from] = await Promise.all([recordedEvents(db, cylinderId), directory(db)])
   const folded = past === null ? fold(events, foldContext(from)) : foldAsItStood(events, foldContext(from), past)
   if (folded === null) throw notYetThere()
-  const { state, steps } = folded
+  const { state } = folded
+  const shown = new Set(folded.steps.map(({ eventId }) => eventId))
+  const steps = how === 'recorded' ? withCorrections(asRecorded(events.filter(({ id }) => shown.has(id)), foldContext(from)), folded.steps) : folded.steps
+  const standing = new Map(applyCorrections(events).flatMap(({ event, correction, isOut }) => correction && !isOut ? [[event.id, event.details as Record<string, unknown>]] : []))
   const byId = new Map(events.map(event => [event.id, event]))
   const names = namesOf(from)
   const lines = steps.flatMap((step): LogLine[] => {
@@ -53,7 +60,8 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
       practice: event.practice,
       confirmed: event.confirmed,
       details: event.details,
-      names: namesInside(event.details as Record<string, unknown>, names),
+      ...standing.has(event.id) && { instead: standing.get(event.id) },
+      names: { ...namesInside(event.details as Record<string, unknown>, names), ...namesInside(standing.get(event.id) ?? {}, names) },
       otherCylinder: null,
       netBeforeGrams: step.before.netGrams,
       netAfterGrams: step.after.netGrams,
@@ -71,6 +79,12 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
     total: lines.length,
     cylinder: { id: cylinderId, labelCode: state.labelCode, serial: state.stamp?.serial ?? null, version: state.version },
   }
+}
+
+/** Which line mends which is said in either view. */
+function withCorrections(steps: readonly FoldStep[], now: readonly FoldStep[]): FoldStep[] {
+  const of = new Map(now.map(step => [step.eventId, step]))
+  return steps.map(step => ({ ...step, correction: of.get(step.eventId)?.correction ?? null, signature: of.get(step.eventId)?.signature ?? null }))
 }
 
 /** The lines, those that came late or mend another with what they changed in lines recorded before them. */

@@ -5,6 +5,7 @@ import type { AnyCustodyEvent, AnyRecordedEvent, CustodyEvent } from '../../../u
 import { DECISION_KINDS, DISPATCH_KINDS, type EventKind } from '../../../utils/custody/kinds'
 import { mayPost } from '../../../utils/custody/posting'
 import { DETAILS } from '../../../utils/custody/schema'
+import { KIND_WORDS } from '../../../utils/custody/words'
 import { parseEvent } from '../../../utils/custody/schema/parseEvent'
 import type { ProblemDetails } from '../../../utils/contract/problem'
 import { sha256 } from './sha256'
@@ -146,8 +147,9 @@ function wrongVersion(event: AnyCustodyEvent, events: readonly AnyRecordedEvent[
   }
   const version = events.at(-1)?.version ?? 0
   if (event.expects === version) return null
+  const since = events.filter(other => other.version > (event.expects ?? 0)).map(({ kind }) => KIND_WORDS[kind].done.toLowerCase())
   return refuse(409, 'The cylinder has changed since you looked',
-    `You decided on version ${event.expects}; it is now at ${version}. Look again, then decide.`)
+    `You decided on version ${event.expects}; it is now at ${version}.${since.length > 0 ? ` Recorded meanwhile: ${[...new Set(since)].join(', ')}.` : ''} Look again, then decide.`)
 }
 
 /** A refusal as a problem (RFC 9457). */

@@ -95,3 +95,27 @@ describe('the custody log as a table', () => {
     expect(cells.slice(-2)).toEqual(['–', '–'])
   })
 })
+
+describe('a corrected line', () => {
+  const instead = { refrigerant: 'R-410A', grossAfter: { unit: 'lb', value: 44.9 } }
+  const [mend, fill, ...others] = LINES
+
+  it('reads as recorded with its old weight struck through, or as it now stands with the new one and why', async () => {
+    const lines = [{ ...fill!, instead }, ...others]
+    const recorded = await mount({ lines: [mend, ...lines] })
+    expect(recorded.find('s, .line-through').text()).toBe('47.9')
+    expect(recorded.text()).toContain('corrected by line 4')
+    const now = await mount({ lines, applied: true })
+    expect(now.find('tbody').text()).toContain('44.9')
+    expect(now.find('tbody').text()).not.toContain('47.9 ')
+    expect(now.text()).toContain('corrected: typed 47.9, the photo shows 44.9')
+    expect(now.find('.line-through').exists()).toBe(false)
+  })
+
+  it('tells which other lines say something else since', async () => {
+    const said = { netGrams: 6_000, refrigerant: 'R-22', condition: 'clean', findings: [] }
+    const table = await mount({ unit: 'kg', lines: [{ ...fill!, changes: [{ eventId: 'line-4', version: 4, kind: 'weighed', before: said, now: { ...said, netGrams: 5_500 } }] }] })
+    expect(table.get('details summary').text()).toBe('1 line says something else since')
+    expect(table.get('details li').text()).toContain('line 4, weighed: net 6.00\u00A0kg, now 5.50\u00A0kg')
+  })
+})

@@ -10,7 +10,7 @@ const MENDED_ELSEWHERE: readonly EventKind[] = DISPATCH_KINDS
 
 /** Whether a person may correct a line: whoever may correct any, and its author for a day from its recording. */
 export function mayCorrect(line: LogLine, access: Access | null, nowMs: number): boolean {
-  if (MENDED_ELSEWHERE.includes(line.kind) || line.kind === 'corrected') return false
+  if (MENDED_ELSEWHERE.includes(line.kind)) return false
   if (can(access, 'events:correct-any')) return true
   return can(access, 'events:post') && line.author.id === access?.personId && nowMs - Date.parse(line.recordedAt) < AUTHORS_TIME_MS
 }

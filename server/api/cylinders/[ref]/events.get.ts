@@ -7,10 +7,13 @@ import { cylinderParams, theCylinder } from '../../../utils/custody/theCylinder'
 import { useDatabase } from '../../../utils/database/currentDatabase'
 import { apiRoute } from '../../../utils/http/apiRoute'
 
-const query = z.strictObject({ ...page, ...pastQuery })
+const query = z.strictObject({ ...page, ...pastQuery, as: z.enum(['recorded', 'stands']).optional() })
 
-/** GET /api/cylinders/{ref}/events: its custody log, in order of effect, newest first; with `asOf` and `knownAt` as it stood and was known then. */
+/**
+ * GET /api/cylinders/{ref}/events: its custody log, in order of effect, newest first; with `asOf` and `knownAt` as it stood
+ * and was known then. `as=recorded` counts a correction from its own line on, else in the place of what it mends.
+ */
 export default apiRoute({ permission: 'fleet:read', params: cylinderParams, query }, async ({ params, query }) => {
   const db = useDatabase()
-  return custodyLog(db, await theCylinder(db, params.ref), query, askedPast(query, Date.now()))
+  return custodyLog(db, await theCylinder(db, params.ref), query, askedPast(query, Date.now()), query.as)
 })

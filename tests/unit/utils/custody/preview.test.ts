@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { CYLINDER, DAY, FOLD_CONTEXT, idOf, kg, recorded, registered, filled, STAMP, START, VIEW_CONTEXT } from '~~/tests/helpers/custody'
-import type { CustodyEvent } from '~~/utils/custody/event'
+import { CYLINDER, DAY, did, FOLD_CONTEXT, idOf, kg, recorded, registered, filled, STAMP, START, VAN, VIEW_CONTEXT } from '~~/tests/helpers/custody'
+import type { AnyCustodyEvent, CustodyEvent } from '~~/utils/custody/event'
 import { fold } from '~~/utils/custody/fold'
 import { preview } from '~~/utils/custody/preview'
 
@@ -35,5 +35,12 @@ describe('a draft', () => {
     preview(events, draft('R-22', 29), VIEW_CONTEXT)
     expect(JSON.stringify(fold(events, FOLD_CONTEXT))).toBe(before)
     expect(events).toHaveLength(2)
+  })
+
+  it('says which lines in the log a late event or a correction would change', () => {
+    const told = recorded(registered({ gross: kg(12) }), filled('R-22', 20), did('moved', { toPlaceId: VAN }))
+    const mend = { ...draft('R-22', 20), kind: 'corrected', details: { eventId: told[1]!.id, reason: 'misread', instead: { refrigerant: 'R-22', grossAfter: kg(19), looked: true } } }
+    expect(preview(told, mend as AnyCustodyEvent, VIEW_CONTEXT).changes.map(({ version, before, now }) => [version, before.netGrams, now.netGrams])).toEqual([[2, 8_000, 7_000], [3, 8_000, 7_000]])
+    expect(preview(told, draft('R-22', 21), VIEW_CONTEXT).changes).toEqual([])
   })
 })
