@@ -36,7 +36,7 @@ export function contentsTagDrawing({ tag, payload, day }: DrawnTag, stock: Label
   const symbol = isTall ? { x: 5 + side / 2, y: height - 5 - side / 2 } : { x: LOW_LEFT + side / 2, y: height / 2 - 3 }
   const box = isTall
     ? { x: 7, y: 15, width: width - 14, height: height - 15 - side - 7 }
-    : { x: LOW_LEFT + side + 0.5, y: 4, width: width - LOW_LEFT - side - 3.9, height: height - 8 }
+    : { x: LOW_LEFT + side + 0.5, y: 4, width: width - LOW_LEFT - side - 4.9, height: height - 8 }
   const { texts, rules } = tagText(tag, day, box)
   return {
     width, height,
@@ -92,7 +92,7 @@ function codeBeside(code: string, { x, y }: { x: number, y: number }, side: numb
 }
 
 function codeBelow(code: string, { x, y }: { x: number, y: number }, side: number): LabelText[] {
-  return [{ text: formatLabelCode(code), face: 'figures-bold', size: 3.6, x: x - side / 2 + 1, y: y + side / 2 + 3.4, align: 'left', maxWidth: side - 2 }]
+  return [{ text: formatLabelCode(code), face: 'figures-bold', size: 3.6, x: x - side / 2 - 1, y: y + side / 2 + 3.4, align: 'left', maxWidth: side + 0.6 }]
 }
 
 /** The tag's edge with two corners cut, and its eyelet between them. */

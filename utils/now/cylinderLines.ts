@@ -160,7 +160,7 @@ function lateReason(found: CylinderFacts, _: NowFacts, { unit }: NowReader): str
 
 function unseenReason(found: CylinderFacts, { unseen }: NowFacts): string {
   if (!unseen) return whatAndWhere(found)
-  const holders = unseen.holders.map(({ name, count }) => `${count} with ${name ?? 'nobody'}`)
+  const holders = unseen.holders.map(({ name, count }) => `${name ?? 'nobody'} (${count})`)
   const long = unseen.longCount > 0 ? ` ${unseen.longCount} for ${unseen.longDays} days or more: missing?` : ''
-  return `${found.count === 1 ? `${whatAndWhere(found)}, last ${unseen.holders[0]?.name ? `with ${unseen.holders[0].name}` : 'with nobody'}` : `Last ${listed(holders)}`}.${long}`
+  return `${found.count === 1 ? `${whatAndWhere(found)}, last ${unseen.holders[0]?.name ? `with ${unseen.holders[0].name}` : 'with nobody'}` : `Last with ${listed(holders)}`}.${long}`
 }

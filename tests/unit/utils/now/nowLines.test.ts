@@ -111,7 +111,7 @@ describe('what was not seen', () => {
   it('is named by who had it last, and what may be missing is counted apart', () => {
     const unseen = { days: 30, longDays: 90, longCount: 1, holders: [{ name: 'Tina', count: 2 }, { name: null, count: 1 }] }
     expect(linesFor('manager', { cylinders: { 'not-seen': found({ question: { finding: 'not-seen' }, count: 3 }) }, unseen })[0]).toMatchObject({
-      kind: 'unk', sentence: '3 cylinders were not seen for 30 days.', reason: 'Last 2 with Tina and 1 with nobody. 1 for 90 days or more: missing?', to: '/fleet?finding=not-seen',
+      kind: 'unk', sentence: '3 cylinders were not seen for 30 days.', reason: 'Last with Tina (2) and nobody (1). 1 for 90 days or more: missing?', to: '/fleet?finding=not-seen',
     })
   })
 })
