@@ -42,7 +42,7 @@ function words(key: FleetFilter, value: string, { places, people, firms }: Filte
     case 'q': return `found by “${value}”`
     case 'place': return `at ${nameOf(places) ?? 'that place'}`
     case 'holder': return `with ${nameOf(people) ?? 'that person'}`
-    case 'refrigerant': return `with ${value} in it`
+    case 'refrigerant': return `holding ${value}`
     case 'condition': return `of condition ${CONDITION_WORDS[value as keyof typeof CONDITION_WORDS]}`
     case 'lifecycle': return LIFECYCLE_WORDS[value as keyof typeof LIFECYCLE_WORDS]
     case 'dueBefore': return `due by the end of ${formatMonth(addMonths(value, -1))}`
