@@ -1,4 +1,3 @@
-import { randomUUID } from 'node:crypto'
 import { afterEach, expect, it } from 'vitest'
 import { people, places } from '../../drizzle/schema'
 import { cylinderViews } from '../../server/utils/custody/cylinderViews'
@@ -48,11 +47,17 @@ async function logOfTheFirm(): Promise<LogDatabase> {
   return log
 }
 
+/** An id of chance, the same for the same seed. */
+function newId(chance: Chance): string {
+  const hex = (digits: number) => Array.from({ length: digits }, () => chance(16).toString(16)).join('')
+  return `${hex(8)}-${hex(4)}-7${hex(3)}-8${hex(3)}-${hex(12)}`
+}
+
 /** What happens at a cylinder, facts of every sort; a decision stands on the version that was looked at, so it has no place here. */
 function happening(id: string, other: string, chance: Chance): Happening[] {
   const gross = lb(28 + chance(400) / 20)
   const refrigerant = ['R-22', 'R-22', 'R-22', 'R-410A'][chance(4)]!
-  const pair = { transferId: randomUUID(), refrigerant: 'R-22', condition: 'clean' }
+  const pair = { transferId: newId(chance), refrigerant: 'R-22', condition: 'clean' }
   const all: (() => Happening[])[] = [
     () => [{ cylinderId: id, kind: 'weighed', details: { gross } }],
     () => [{ cylinderId: id, kind: 'filled', details: { refrigerant, grossAfter: gross, looked: true } }],
@@ -77,7 +82,7 @@ function happening(id: string, other: string, chance: Chance): Happening[] {
 
 /** What the phones saw, in the order in which it truly happened. */
 function storyOf(count: number, chance: Chance): { phones: Seen[][], inOrder: Seen[] } {
-  const cylinders = Array.from({ length: count }, () => randomUUID())
+  const cylinders = Array.from({ length: count }, () => newId(chance))
   const skews = Array.from({ length: count }, () => (chance(3) ? Math.round((chance(2 * DAY) - DAY) / 1000) * 1000 : 0))
   const phones: Seen[][] = Array.from({ length: count }, () => [])
   const inOrder: Seen[] = []
@@ -85,7 +90,7 @@ function storyOf(count: number, chance: Chance): { phones: Seen[][], inOrder: Se
     const at = BEGIN + inOrder.length * MINUTE
     // As the phone's clock had it.
     const occurredAt = new Date(at + skews[phone]!).toISOString()
-    const event = { ...what, id: randomUUID(), occurredAt, deviceId: `phone-${phone}`, deviceSeq: phones[phone]!.length }
+    const event = { ...what, id: newId(chance), occurredAt, deviceId: `phone-${phone}`, deviceSeq: phones[phone]!.length }
     const seen = { at, skewMs: skews[phone]!, event }
     phones[phone]!.push(seen)
     inOrder.push(seen)
