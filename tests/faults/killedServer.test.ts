@@ -15,9 +15,10 @@ import { brokenPromises, storedLines } from '../helpers/storedLines'
 import { seededChance, type Chance } from '../helpers/tampering'
 
 const PHONES = 12
-const CYLINDERS = 6
 const KILLS = IN_FULL ? 200 : 20
-const MOST_BETWEEN_KILLS = 60
+const CYLINDERS = IN_FULL ? 60 : 6
+/** Events that are acknowledged from one kill to the next. */
+const MOST_BETWEEN_KILLS = 40
 /** A kill finds an answer on its way now and then; where so few do, nothing of sending again was tried. */
 const REPEATED_AT_LEAST = KILLS / 10
 
