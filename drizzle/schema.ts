@@ -213,6 +213,8 @@ export const cylinders = sqliteTable('cylinders', {
   refrigerant: text('refrigerant'),
   condition: text('condition').notNull(),
   lifecycle: text('lifecycle').notNull(),
+  /** A firm has it in exchange for another: it counts in the fleet no more. */
+  givenAway: integer('given_away', { mode: 'boolean' }).notNull().default(false),
   nothingInIt: integer('nothing_in_it', { mode: 'boolean' }).notNull(),
   netGrams: integer('net_grams'),
   fillLimitGrams: integer('fill_limit_grams'),
@@ -255,6 +257,8 @@ export const cylinders = sqliteTable('cylinders', {
   index('cylinders_last_seen').on(table.lastSeenAt, table.id),
   index('cylinders_severity').on(table.severity, table.id),
   index('cylinders_ruled_by').on(table.ruledBy),
+  // The total of the fleet is counted along it.
+  index('cylinders_given_away').on(table.givenAway),
 ])
 
 /** A cache of the fold: every change of net, signed. */

@@ -4,7 +4,7 @@ export const FLEET_TEXTS = { q: 80, refrigerant: 40, finding: 40, label: 20, cur
 /** What each part of it takes that is chosen from a list. */
 export const FLEET_CHOICES = {
   condition: ['clean', 'suspect', 'burnt', 'mixed', 'unknown'],
-  lifecycle: ['in-service', 'quarantined', 'rejected', 'at-reclaim', 'at-test', 'missing', 'condemned', 'retired'],
+  lifecycle: ['in-service', 'quarantined', 'rejected', 'at-reclaim', 'at-test', 'missing', 'condemned', 'retired', 'given-away'],
   sort: ['urgency', 'code', 'serial', 'refrigerant', 'condition', 'lifecycle', 'net', 'room', 'stop', 'due', 'place', 'last-event'],
   order: ['asc', 'desc'],
 } as const

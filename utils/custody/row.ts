@@ -39,6 +39,8 @@ export interface RowColumns {
   refrigerant: string | null
   condition: CylinderRow['condition']
   lifecycle: Lifecycle
+  /** A firm has it in exchange for another: lists leave it out unless they are asked for it. */
+  givenAway: boolean
   nothingInIt: boolean
   netGrams: number | null
   fillLimitGrams: number | null
@@ -89,6 +91,7 @@ export function cacheRow(state: CylinderState, context: RowContext): RowColumns 
     refrigerant: contents.refrigerant,
     condition: contents.condition,
     lifecycle: lifecycleOf(state),
+    givenAway: isGivenAway(state),
     nothingInIt: contents.nothingInIt,
     netGrams: contents.netGrams,
     fillLimitGrams: capacity.fillLimitGrams,

@@ -61,6 +61,9 @@ export const LIFECYCLE_WORDS: Record<Lifecycle, string> = {
   'retired': 'retired',
 }
 
+/** The stages of life that a list may be asked for; what was given away has one with the firm that has it. */
+export const STAGE_WORDS: Record<Lifecycle | 'given-away', string> = { ...LIFECYCLE_WORDS, 'given-away': 'given away in an exchange' }
+
 /** What keeps a cylinder from use. */
 export const HOLD_WORDS: Record<Hold, string> = {
   'quarantined': 'set apart',

@@ -1,6 +1,6 @@
 import type { FleetQuery } from '../contract/custody'
 import type { FindingCode } from '../custody/finding'
-import { CONDITION_WORDS, FINDING_WORDS, LIFECYCLE_WORDS } from '../custody/words'
+import { CONDITION_WORDS, FINDING_WORDS, STAGE_WORDS } from '../custody/words'
 import { addMonths, formatMonth } from '../quantity/month'
 import { FLEET_FILTERS, type FleetFilter } from './fleetAddress'
 
@@ -44,7 +44,7 @@ function words(key: FleetFilter, value: string, { places, people, firms }: Filte
     case 'holder': return `with ${nameOf(people) ?? 'that person'}`
     case 'refrigerant': return `holding ${value}`
     case 'condition': return `of condition ${CONDITION_WORDS[value as keyof typeof CONDITION_WORDS]}`
-    case 'lifecycle': return LIFECYCLE_WORDS[value as keyof typeof LIFECYCLE_WORDS]
+    case 'lifecycle': return STAGE_WORDS[value as keyof typeof STAGE_WORDS]
     case 'dueBefore': return `due by the end of ${formatMonth(addMonths(value, -1))}`
     case 'finding': return FINDING_FILTER_WORDS[value] ?? `marked “${FINDING_WORDS[value as FindingCode] ?? value}”`
     case 'owner': return `owned by ${nameOf(firms) ?? 'that owner'}`

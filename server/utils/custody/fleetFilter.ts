@@ -9,10 +9,18 @@ export interface FleetFilter { sql: string, args: InValue[] }
 /** A place and all that stands within it. */
 const WITHIN = 'WITH RECURSIVE inside (id) AS (VALUES (?) UNION SELECT p.id FROM places p JOIN inside ON p.parent_id = inside.id) SELECT id FROM inside'
 
+/** What is the fleet's: what was given away in an exchange is no more. The plus keeps a page from being read along that column's index. */
+export const IN_FLEET = '+c.given_away = 0'
+
 const ENDED = `('condemned', 'retired')`
 const AWAY_OR_ENDED = `('missing', 'at-reclaim', 'at-test', 'condemned', 'retired')`
 
-/** The filters of a fleet query as one condition. Dates are compared with cached columns, never computed in SQL. */
+/**
+ * The filters of a fleet query as one condition. Dates are compared with cached columns, never computed in SQL.
+ *
+ * What was given away in an exchange comes only where it is asked for: by that, by what is written on it, or by the firm
+ * or the place that has it.
+ */
 export function fleetFilter(query: Partial<FleetQuery>, bounds: DateBounds): FleetFilter {
   const all: FleetFilter[] = []
   const when = (sql: string, ...args: InValue[]) => all.push({ sql, args })
@@ -20,14 +28,20 @@ export function fleetFilter(query: Partial<FleetQuery>, bounds: DateBounds): Fle
   if (query.holder) when('c.holder_id = ?', query.holder)
   if (query.refrigerant) when('c.refrigerant = ?', query.refrigerant)
   if (query.condition) when('c.condition = ?', query.condition)
-  if (query.lifecycle) when('c.lifecycle = ?', query.lifecycle)
+  if (query.lifecycle === 'given-away') when('c.given_away = 1')
+  else if (query.lifecycle) when('c.lifecycle = ?', query.lifecycle)
   if (query.dueBefore) when(dueUntil('<'), query.dueBefore)
   if (query.owner) when('c.owner_id = ?', query.owner)
   if (query.label) when('c.label_code = ?', normaliseLabelCode(query.label) ?? query.label)
   if (query.finding) all.push(findingFilter(query.finding, bounds))
   if (query.q) all.push(searchFilter(query.q))
+  if (!isAskedForByName(query) && query.lifecycle !== 'given-away') when(IN_FLEET)
   if (all.length === 0) return { sql: '1', args: [] }
   return { sql: all.map(one => `(${one.sql})`).join(' AND '), args: all.flatMap(one => one.args) }
+}
+
+function isAskedForByName({ q, label, owner, place }: Partial<FleetQuery>): boolean {
+  return [q, label, owner, place].some(asked => asked !== undefined && asked !== '')
 }
 
 /** Cylinders on which a finding stands today; 'stop' and 'caution' stand for any of that severity. */

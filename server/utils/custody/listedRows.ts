@@ -12,7 +12,7 @@ import { saidByOthers } from './saidByOthers'
 export interface ListedRow { row: CylinderRow, version: number }
 
 const COLUMNS = [
-  'id', 'version', 'label_code', 'serial', 'spec', 'place_id', 'holder_id', 'owner_id', 'refrigerant', 'condition', 'lifecycle',
+  'id', 'version', 'label_code', 'serial', 'spec', 'place_id', 'holder_id', 'owner_id', 'refrigerant', 'condition', 'lifecycle', 'given_away',
   'nothing_in_it', 'net_grams', 'fill_limit_grams', 'governing_rule', 'room_grams', 'stop_weight_grams', 'exact_stop_weight',
   'tare_weight_grams', 'water_capacity_grams', 'due_month', 'retest_state', 'last_event_at', 'last_event_kind', 'last_seen_at',
   'finding_codes', 'severity',
@@ -62,6 +62,7 @@ function cachedRow(row: Row): CachedRow {
     refrigerant: row['refrigerant'] as string | null,
     condition: row['condition'] as CachedRow['condition'],
     lifecycle: row['lifecycle'] as CachedRow['lifecycle'],
+    givenAway: row['given_away'] === 1,
     nothingInIt: row['nothing_in_it'] === 1,
     netGrams: row['net_grams'] as number | null,
     fillLimitGrams: row['fill_limit_grams'] as number | null,

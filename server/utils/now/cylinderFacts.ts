@@ -3,7 +3,7 @@ import type { FleetQuestion, FleetTopic } from '../../../utils/now/fleetQuestion
 import { FEW_EMPTY, type CylinderFacts, type FewEmptyFacts, type FullFacts, type NowFacts } from '../../../utils/now/nowFacts'
 import type { DateBounds } from '../custody/dateBounds'
 import { cylinderRowsWhere } from '../custody/fleet'
-import { findingFilter, fleetFilter, isOverdue, type FleetFilter } from '../custody/fleetFilter'
+import { findingFilter, fleetFilter, IN_FLEET, isOverdue, type FleetFilter } from '../custody/fleetFilter'
 import type { Database } from '../database/database'
 import { retestAt } from '../directory/datedRules'
 import { namesOf, type Directory } from '../directory/directory'
@@ -94,7 +94,7 @@ export async function fewEmptyFacts(db: Database, bounds: DateBounds): Promise<F
 
 /** Cylinders in use that wear no label, and the first of them. */
 export async function unlabelledFacts(db: Database, nowMs: number): Promise<NowFacts['unlabelled']> {
-  const filter: FleetFilter = { sql: `c.label_code IS NULL AND c.lifecycle = 'in-service'`, args: [] }
+  const filter: FleetFilter = { sql: `c.label_code IS NULL AND c.lifecycle = 'in-service' AND ${IN_FLEET}`, args: [] }
   const [first, { rows }] = await Promise.all([
     cylinderRowsWhere(db, filter, MOST_LABELS, nowMs),
     db.readClient.execute(`SELECT count(*) FROM cylinders c WHERE ${filter.sql}`),

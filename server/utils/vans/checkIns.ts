@@ -2,6 +2,7 @@ import { desc, eq } from 'drizzle-orm'
 import { vanCheckIns } from '../../../drizzle/schema'
 import type { NewVanCheckIn, ToLookFor } from '../../../utils/contract/vans'
 import { cylinderRowsWhere } from '../custody/fleet'
+import { IN_FLEET } from '../custody/fleetFilter'
 import { statement, type Database } from '../database/database'
 import { namesOf, type Directory } from '../directory/directory'
 import { refuseOther } from './refuseOther'
@@ -30,7 +31,7 @@ export async function toLookFor(db: Database, checkIn: CheckIn | null, from: Dir
   if (!checkIn?.missing.length) return []
   const { missing, checkedAt, checkedBy } = checkIn
   const unseen = {
-    sql: `c.id IN (${missing.map(() => '?').join(', ')}) AND (c.last_seen_at IS NULL OR c.last_seen_at <= ?) AND c.lifecycle <> 'retired'`,
+    sql: `c.id IN (${missing.map(() => '?').join(', ')}) AND (c.last_seen_at IS NULL OR c.last_seen_at <= ?) AND c.lifecycle <> 'retired' AND ${IN_FLEET}`,
     args: [...missing, checkedAt],
   }
   const rows = await cylinderRowsWhere(db, unseen, missing.length, now)

@@ -56,7 +56,7 @@ describe('making the caches again', () => {
     const live = await caches()
     await log.db.write([
       `UPDATE cylinders SET net_grams = 1, state = '{}' WHERE id = '${first}'`,
-      `INSERT INTO cylinders SELECT '${randomUUID()}', ${'version, label_code, serial, spec, place_id, holder_id, owner_id, refrigerant, condition, lifecycle, nothing_in_it, net_grams, fill_limit_grams, governing_rule, room_grams, stop_weight_grams, exact_stop_weight, tare_weight_grams, water_capacity_grams, due_month, retest_state, last_event_at, last_event_kind, last_seen_at, finding_codes, severity, state, ruled_by'} FROM cylinders LIMIT 1`,
+      `INSERT INTO cylinders SELECT '${randomUUID()}', ${'version, label_code, serial, spec, place_id, holder_id, owner_id, refrigerant, condition, lifecycle, given_away, nothing_in_it, net_grams, fill_limit_grams, governing_rule, room_grams, stop_weight_grams, exact_stop_weight, tare_weight_grams, water_capacity_grams, due_month, retest_state, last_event_at, last_event_kind, last_seen_at, finding_codes, severity, state, ruled_by'} FROM cylinders LIMIT 1`,
       `INSERT INTO movements VALUES ('${randomUUID()}', '${randomUUID()}', 0, 'weighing', 'R-22', NULL, 5, 1, 0)`,
       `UPDATE movements SET grams = grams + 1`, 'DELETE FROM stock_changes',
       `UPDATE label_claims SET cylinder_id = '${first}'`, 'DELETE FROM halves',

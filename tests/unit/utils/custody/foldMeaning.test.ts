@@ -59,6 +59,7 @@ const MADE: Record<number, string> = {
   3: '0b97ed1ae71c9e11',
   4: '0b97ed1ae71c9e11',
   5: '0b97ed1ae71c9e11',
+  6: '064cb505b5f43d86',
 }
 
 describe('the number of what the fold means', () => {
