@@ -1,3 +1,4 @@
+export { bringCachesToShape } from '../../server/utils/custody/cacheShape'
 export { cylinderColumns, groupCaches } from '../../server/utils/custody/caches'
 export { cylinderViews } from '../../server/utils/custody/cylinderViews'
 export { foldContext, rowContext } from '../../server/utils/custody/foldContext'

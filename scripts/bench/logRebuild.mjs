@@ -1,5 +1,6 @@
 // What making the caches again costs over a plain loop that scans, parses, folds and writes the same rows.
 import process from 'node:process'
+import { setImmediate as nextTurn } from 'node:timers/promises'
 import { median } from './measured.mjs'
 
 const PAGE = 1_000
@@ -54,6 +55,8 @@ async function plainRebuild(db, { cylinderColumns, directory, fold, foldContext,
     if (statements.length < STATEMENTS_A_COMMIT) return
     await db.write(statements)
     statements = []
+    // The driver gives statements back only between turns of the loop.
+    await nextTurn()
   }
   for (;;) {
     const { rows } = await db.readClient.execute({ sql: `${SELECT_LOG} WHERE (cylinder_id, version) > (?, ?) ORDER BY cylinder_id, version LIMIT ${PAGE}`, args: after })

@@ -1,5 +1,6 @@
 // A custody log of any size: cylinders with a usual life, each line sealed by the server's own code.
 import { createHash } from 'node:crypto'
+import { setImmediate as nextTurn } from 'node:timers/promises'
 import { LOG_COLUMNS } from '../../server/utils/custody/logRow'
 import { parsePost } from '../../server/utils/custody/judge'
 import { rebuildCaches } from '../../server/utils/custody/rebuild'
@@ -84,6 +85,8 @@ export async function makeLog(db, cylinders, { shop, van, access, nowMs }, seali
       if (rows.length < ROWS_A_STATEMENT * STATEMENTS_A_COMMIT && number < cylinders - 1) continue
       await db.write(insertRows(rows))
       rows = []
+      // The driver gives statements back only between turns of the loop.
+      await nextTurn()
     }
     await makeCheckpoint(db, sealing, nowMs, null)
     tell(`${seq.toLocaleString('en-US')} events`)

@@ -1,8 +1,8 @@
 import type { InStatement } from '@libsql/client'
-import { and, eq, inArray } from 'drizzle-orm'
+import { and, eq, inArray, sql } from 'drizzle-orm'
 import { people, sessions } from '../../../drizzle/schema'
 import { useDatabase } from '../database/currentDatabase'
-import { statement } from '../database/database'
+import { statement, type Database } from '../database/database'
 import { SEEN_INTERVAL, sessionStands } from './lifetime'
 import { rolesOf, userOf } from './person'
 import { newSecret, secretHash } from './secret'
@@ -38,13 +38,26 @@ export function endSession(sid: string): InStatement {
 
 /** Who is signed in with a secret, or null: unknown, ended, too old, or the person is turned off. */
 export async function personOfSession(sid: string, now: number): Promise<User | null> {
-  const [row] = await useDatabase().read.select({ session: sessions, person: people }).from(sessions)
-    .innerJoin(people, eq(people.id, sessions.personId))
-    .where(eq(sessions.secretHash, secretHash(sid))).limit(1)
+  const [row] = await lookUp(useDatabase()).execute({ secretHash: secretHash(sid) })
   if (!row?.person.active) return null
   if (!sessionStands(row.session, rolesOf(row.person), now)) return null
   if (now - row.session.lastSeenAt >= SEEN_INTERVAL) markSeen(row.session.secretHash, now)
   return userOf(row.person)
+}
+
+// Every request asks this, and to put the question together would cost more than its answer.
+const lookUps = new WeakMap<Database, ReturnType<typeof preparedLookUp>>()
+
+function lookUp(db: Database): ReturnType<typeof preparedLookUp> {
+  const prepared = lookUps.get(db) ?? preparedLookUp(db)
+  lookUps.set(db, prepared)
+  return prepared
+}
+
+function preparedLookUp({ read }: Database) {
+  return read.select({ session: sessions, person: people }).from(sessions)
+    .innerJoin(people, eq(people.id, sessions.personId))
+    .where(eq(sessions.secretHash, sql.placeholder('secretHash'))).limit(1).prepare()
 }
 
 /** Not waited for: reading goes on where the disk is full. */
