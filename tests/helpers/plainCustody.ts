@@ -34,7 +34,7 @@ export function readPlainly(all: readonly Happening[]): Plain {
   const standing = inTime.flatMap(one => withCorrections(one, inTime))
   const first = standing.find(({ kind }) => kind === 'registered')
   const s = { net: null as number | null, name: null as string | null, condition: 'unknown', nothing: false, place: null as string | null, holder: null as string | null,
-    away: null as string | null, missing: false, quarantined: false, rejected: false, condemned: false, retired: false, back: false, lastKnown: null as string | null }
+    away: null as string | null, missing: false, quarantined: false, rejected: false, condemned: false, retired: false, back: false, known: [] as string[] }
   const worse = (a: string, b: string) => BAD_TO_GOOD[Math.min(BAD_TO_GOOD.indexOf(a), BAD_TO_GOOD.indexOf(b))]!
   const empty = () => Object.assign(s, { net: 0, name: null, condition: 'clean', nothing: true, back: false })
   const unknown = () => Object.assign(s, { name: null, condition: 'unknown', nothing: false })
@@ -65,18 +65,18 @@ export function readPlainly(all: readonly Happening[]): Plain {
         break
       case 'filled': {
         s.away = null
-        const other = s.lastKnown !== null && s.lastKnown !== one.name
+        const other = s.known.some(name => name !== one.name)
         if (s.nothing) Object.assign(s, { name: one.name, condition: other ? worse(one.condition ?? 'clean', 'suspect') : one.condition ?? 'clean' })
         else if (s.name === null) s.condition = worse(s.condition, 'unknown')
         else if (s.name === one.name) s.condition = worse(s.condition, one.condition ?? s.condition)
         else Object.assign(s, { name: null, condition: 'mixed' })
-        Object.assign(s, { nothing: false, net: first ? one.gross - TARE : null, lastKnown: one.name })
+        Object.assign(s, { nothing: false, back: false, net: first ? one.gross - TARE : null, known: [...s.known, one.name] })
         break
       }
       case 'emptied':
         if (one.deep) {
           empty()
-          s.lastKnown = null
+          s.known = []
           if (!first) s.net = null
         }
         else if (!s.nothing) s.net = null

@@ -10,7 +10,7 @@ import { view } from '~~/utils/custody/view'
 const MINUTE = 60_000
 /** Nothing is sent before all of it has happened, so that no time is held back. */
 const SENT_FROM = START + 2_000 * MINUTE
-const CYLINDERS = ['0198f000-0000-7000-8000-0000000000c1', '0198f000-0000-7000-8000-0000000000c2', '0198f000-0000-7000-8000-0000000000c3']
+const CYLINDERS = ['0198f000-0000-7000-8000-0000000000c1', '0198f000-0000-7000-8000-0000000000c2']
 
 /** A phone with a clock that runs ahead by so many seconds, and what it has not sent yet. */
 interface Phone { id: string, skewSeconds: number, unsent: Happening[] }
@@ -90,24 +90,24 @@ const what: fc.Arbitrary<object> = fc.oneof(
   { weight: 2, arbitrary: fc.record({ kind: fc.constant('registered'), minute }) },
   fc.record({ kind: fc.constant('moved'), minute, placeId: place, holderId: fc.constantFrom(undefined, TECHNICIAN) }),
   fc.record({ kind: fc.constant('handed-over'), minute, holderId: fc.constantFrom(TECHNICIAN, SUPERVISOR) }),
-  { weight: 2, arbitrary: fc.record({ kind: fc.constant('weighed'), minute, gross }) },
+  { weight: 5, arbitrary: fc.record({ kind: fc.constant('weighed'), minute, gross }) },
   fc.record({ kind: fc.constant('drawn'), minute, gross: full }),
   { weight: 3, arbitrary: fc.record({ kind: fc.constant('filled'), minute, name: fc.constantFrom('R-22', 'R-410A'), condition: fc.constantFrom(undefined, 'clean', 'suspect'), gross: full }) },
   fc.record({ kind: fc.constant('emptied'), minute, deep: fc.boolean() }),
   ...['lost', 'quarantined', 'released', 'missing', 'reclaimed', 'sent-for-test', 'retired'].map(kind => fc.record({ kind: fc.constant(kind), minute })),
   fc.record({ kind: fc.constant('found'), minute, placeId: fc.constantFrom(undefined, SHOP, VAN) }),
-  fc.record({ kind: fc.constant('received'), minute, gross: fc.option(gross, { nil: undefined }) }),
-  { weight: 2, arbitrary: fc.record({ kind: fc.constant('sent-for-reclaim'), minute, gross: full }) },
+  { weight: 4, arbitrary: fc.record({ kind: fc.constant('received'), minute, gross: fc.option(gross, { nil: undefined }) }) },
+  { weight: 4, arbitrary: fc.record({ kind: fc.constant('sent-for-reclaim'), minute, gross: full }) },
   fc.record({ kind: fc.constant('retested'), minute, result: fc.constantFrom('passed', 'passed', 'rejected', 'condemned'), wet: fc.boolean() }),
-  { weight: 3, arbitrary: fc.record({ kind: fc.constant('corrected'), minute, eventId: fc.constant(''), gross: fc.option(full, { nil: undefined }) }) },
+  { weight: 9, arbitrary: fc.record({ kind: fc.constant('corrected'), minute, eventId: fc.constant(''), gross: fc.option(full, { nil: undefined }) }) },
 )
-const happens = fc.tuple(what, fc.record({ cylinder: fc.nat(2), phone: fc.nat(2) }), fc.nat(50)).map(([one, where, target]) => new Happens(one, where, target))
+const happens = fc.tuple(what, fc.record({ cylinder: fc.nat(1), phone: fc.nat(2) }), fc.nat(50)).map(([one, where, target]) => new Happens(one, where, target))
 const sends = fc.tuple(fc.nat(2), fc.array(fc.integer({ min: 1, max: 96 }), { minLength: 1, maxLength: 8 }), fc.boolean()).map(([phone, keys, twice]) => new Sends(phone, keys, twice))
 
-describe('three phones with clocks of their own, three cylinders, late and doubled deliveries, and corrections', () => {
+describe('three phones with clocks of their own, two cylinders, late and doubled deliveries, and corrections', () => {
   it('leave every cylinder as a plain reading of what was delivered says, and in the end in any order of arrival', () => {
     fc.assert(fc.property(
-      fc.commands([happens, happens, happens, sends], { maxCommands: 60 }),
+      fc.commands([happens, happens, happens, sends], { maxCommands: 100, size: 'max' }),
       fc.array(fc.oneof(fc.constant(0), fc.integer({ min: 60, max: 200_000 }), fc.integer({ min: -200_000, max: -60 })), { minLength: 3, maxLength: 3 }),
       (commands, skews) => {
         const firm: Firm = { phones: skews.map((skewSeconds, index) => ({ id: `phone-${index}`, skewSeconds, unsent: [] })), log: [], deliveries: 0 }
@@ -121,6 +121,6 @@ describe('three phones with clocks of their own, three cylinders, late and doubl
           expect(mine(backwards)).toEqual(mine(firm.log))
         }
       },
-    ), { numRuns: 150 })
-  })
+    ), { numRuns: 80 })
+  }, 60_000)
 })
