@@ -291,11 +291,14 @@ export const stockChanges = sqliteTable('stock_changes', {
   /** Squared grams: of the weights that the known contents rest on, and of the differences found by weighing. */
   weighedVariance: integer('weighed_variance').notNull(),
   foundVariance: integer('found_variance').notNull(),
+  /** The same as they count for all owners together, whose parts of one weight err alike. */
+  weighedTogether: integer('weighed_together').notNull().default(0),
+  foundTogether: integer('found_together').notNull().default(0),
   at: integer('at').notNull(),
   apart: integer('apart', { mode: 'boolean' }).notNull(),
 }, table => [
   primaryKey({ columns: [table.cylinderId, table.eventId, table.ordinal] }),
-  index('stock_changes_balance').on(table.refrigerant, table.ownerId, table.apart, table.at, table.grams, table.notKnown, table.weighedVariance, table.foundVariance),
+  index('stock_changes_balance').on(table.refrigerant, table.ownerId, table.apart, table.at, table.grams, table.notKnown, table.weighedVariance, table.foundVariance, table.weighedTogether, table.foundTogether),
 ])
 
 /** A cache of the fold: each cylinder's halves of what happened between two. */

@@ -45,7 +45,8 @@ async function plainRebuild(db, { cylinderColumns, directory, fold, foldContext,
       })),
       ...folded.stockChanges.map(one => insert('stock_changes', {
         cylinder_id: cylinderId, event_id: one.eventId, ordinal: one.ordinal, refrigerant: one.refrigerant, owner_id: one.ownerId, grams: one.grams,
-        not_known: one.notKnown, weighed_variance: one.weighedVariance, found_variance: one.foundVariance, at: one.at, apart: Number(one.apart),
+        not_known: one.notKnown, weighed_variance: one.weighedVariance, found_variance: one.foundVariance,
+        weighed_together: one.weighedTogether, found_together: one.foundTogether, at: one.at, apart: Number(one.apart),
       })),
       ...folded.labelClaims.map(one => insert('label_claims', {
         event_id: one.eventId, code: one.code, cylinder_id: cylinderId, effective_at: one.effectiveAt, device_id: one.deviceId, device_seq: one.deviceSeq,

@@ -21,6 +21,12 @@ export interface StockChange {
   weighedVariance: number
   /** Squared uncertainty of the differences from the log that this event's weights found. Units: grams squared. */
   foundVariance: number
+  /**
+   * The same two as they count for all owners together: the parts of one weight err alike, so that they are added before
+   * they are squared. An owner's is the part times the whole. Units: grams squared.
+   */
+  weighedTogether: number
+  foundTogether: number
   /** When it counts, UTC milliseconds: as the movements of the same event. */
   at: number
   /** The event was practice, or a trainee's without a countersignature: apart in reports. */

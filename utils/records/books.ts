@@ -25,6 +25,8 @@ export interface StockSum {
   notKnown: number
   weighedVariance: number
   foundVariance: number
+  weighedTogether: number
+  foundTogether: number
 }
 
 /** A span of time: from an instant on, until before another. Units: UTC milliseconds. */
@@ -52,11 +54,13 @@ export function stockSums(changes: readonly StockChange[], { fromMs, untilMs }: 
     const { refrigerant, ownerId } = change
     const isBefore = change.at < fromMs
     const apart = change.apart && !isBefore
-    const sum = entry(sums, [refrigerant, ownerId, isBefore, apart], { refrigerant, ownerId, isBefore, apart, grams: 0, notKnown: 0, weighedVariance: 0, foundVariance: 0 })
+    const sum = entry(sums, [refrigerant, ownerId, isBefore, apart], { refrigerant, ownerId, isBefore, apart, grams: 0, notKnown: 0, weighedVariance: 0, foundVariance: 0, weighedTogether: 0, foundTogether: 0 })
     sum.grams += change.grams
     sum.notKnown += change.notKnown
     sum.weighedVariance += change.weighedVariance
     sum.foundVariance += change.foundVariance
+    sum.weighedTogether += change.weighedTogether
+    sum.foundTogether += change.foundTogether
   }
   return [...sums.values()]
 }

@@ -21,17 +21,24 @@ export function massBalances(books: readonly BookSum[], stock: readonly StockSum
   return names.flatMap((refrigerant) => {
     const mine = books.filter(sum => sum.refrigerant === refrigerant)
     const held = stock.filter(sum => sum.refrigerant === refrigerant)
-    const owners = distinct([...mine, ...held].map(({ ownerId }) => ownerId), 'first').map(ownerId => ({
+    const everybody = distinct([...mine, ...held].map(({ ownerId }) => ownerId), 'first')
+    const owners = everybody.map(ownerId => ({
       ownerId,
       account: accountOf(mine.filter(sum => sum.ownerId === ownerId), held.filter(sum => sum.ownerId === ownerId)),
     })).filter(({ account }) => hasAnything(account))
-    return owners.length === 0 ? [] : [{ refrigerant, account: accountOf(mine, held), owners }]
+    return owners.length === 0 ? [] : [{ refrigerant, account: accountOf(mine, everybody.length > 1 ? held.map(together) : held), owners }]
   })
+}
+
+/** A sum as it counts beside those of the other owners: what one weight tells of several of them errs alike. */
+function together(sum: StockSum): StockSum {
+  return { ...sum, weighedVariance: sum.weighedTogether, foundVariance: sum.foundTogether }
 }
 
 /**
  * One account. `unexplained` is what weighing and new tares found. Its uncertainty: each time a weight was set against
- * the log the uncertainties of both readings are added; over all of them the root of the sum of the squares.
+ * the log the uncertainties of both readings are added, of which a new tare has but one; over all of them the root of
+ * the sum of the squares.
  */
 export function accountOf(books: readonly BookSum[], stock: readonly StockSum[]): BalanceAccount {
   const within = books.filter(sum => !sum.isBefore)

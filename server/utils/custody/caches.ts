@@ -163,7 +163,8 @@ function movementLine(cylinderId: string, one: Movement): Columns {
 function stockLine(cylinderId: string, one: StockChange): Columns {
   return {
     cylinder_id: cylinderId, event_id: one.eventId, ordinal: one.ordinal, refrigerant: one.refrigerant, owner_id: one.ownerId, grams: one.grams,
-    not_known: one.notKnown, weighed_variance: one.weighedVariance, found_variance: one.foundVariance, at: one.at, apart: Number(one.apart),
+    not_known: one.notKnown, weighed_variance: one.weighedVariance, found_variance: one.foundVariance,
+    weighed_together: one.weighedTogether, found_together: one.foundTogether, at: one.at, apart: Number(one.apart),
   }
 }
 

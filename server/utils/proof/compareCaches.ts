@@ -16,7 +16,7 @@ import type { VerifySteps } from './verifyLog'
 const CYLINDERS_AT_ONCE = 50
 
 const MOVEMENT_COLUMNS = ['event_id', 'ordinal', 'cause', 'refrigerant', 'owner_id', 'grams', 'at', 'apart'] as const
-const STOCK_COLUMNS = ['event_id', 'ordinal', 'refrigerant', 'owner_id', 'grams', 'not_known', 'weighed_variance', 'found_variance', 'at', 'apart'] as const
+const STOCK_COLUMNS = ['event_id', 'ordinal', 'refrigerant', 'owner_id', 'grams', 'not_known', 'weighed_variance', 'found_variance', 'weighed_together', 'found_together', 'at', 'apart'] as const
 const CLAIM_COLUMNS = ['event_id', 'code', 'effective_at', 'device_id', 'device_seq'] as const
 
 /** What one cylinder has in the log and in everything that is made from it, read at one instant. */

@@ -8,7 +8,8 @@ export interface Whose { refrigerant?: string | null, ownerId?: string | null }
 
 const BOOKED = 'refrigerant, owner_id, sum(grams) AS grams, count(*) AS movements'
 const HELD = `refrigerant, owner_id, sum(grams) AS grams, sum(not_known) AS not_known,
-  sum(weighed_variance) AS weighed_variance, sum(found_variance) AS found_variance`
+  sum(weighed_variance) AS weighed_variance, sum(found_variance) AS found_variance,
+  sum(weighed_together) AS weighed_together, sum(found_together) AS found_together`
 
 /**
  * The books of a period at one moment: its movements summed as `bookSums` sums them one by one, and the changes of stock
@@ -55,6 +56,8 @@ function stockSumOf(row: Row): StockSum {
     notKnown: row.not_known as number,
     weighedVariance: row.weighed_variance as number,
     foundVariance: row.found_variance as number,
+    weighedTogether: row.weighed_together as number,
+    foundTogether: row.found_together as number,
   }
 }
 

@@ -8,7 +8,7 @@ import type { Turn } from './turn'
  * A net that was not known enters whole as `opening`; one that becomes unknown leaves under the event's cause. What is
  * out of stock is counted but not booked.
  *
- * @param accuracyGrams of the reading that tells the net, where one does.
+ * @param accuracyGrams of the reading that tells the net, where one does; 0 where it is the one that told it before.
  */
 export function changeNet(turn: Turn, net: number | null, cause: MovementCause, accuracyGrams?: number): void {
   const { contents } = turn.state
@@ -136,13 +136,15 @@ function findDifference({ state, found }: Turn, accuracyGrams: number): void {
   const { inStock, refrigerant, shares, uncertaintyGrams } = state.contents
   if (!inStock) return
   const both = (uncertaintyGrams ?? 0) + accuracyGrams
-  for (const { ownerId, grams } of shares) found.push({ refrigerant, ownerId, uncertaintyGrams: partOf(both, grams, shares) })
+  const { parts, whole } = partsOf(both, shares)
+  shares.forEach(({ ownerId }, index) => found.push({ refrigerant, ownerId, uncertaintyGrams: parts[index]!, wholeGrams: whole }))
 }
 
-/** One owner's part of a cylinder's uncertainty, by share. Rounding: up to the whole gram. */
-export function partOf(uncertaintyGrams: number, grams: number, shares: readonly Share[]): number {
+/** Each owner's part of a cylinder's uncertainty, by share, and what they make together. Rounding: up to the whole gram. */
+export function partsOf(uncertaintyGrams: number, shares: readonly Share[]): { parts: number[], whole: number } {
   const total = sum(shares)
-  return Math.ceil(total > 0 ? uncertaintyGrams * grams / total : uncertaintyGrams / shares.length)
+  const parts = shares.map(({ grams }) => Math.ceil(total > 0 ? uncertaintyGrams * grams / total : uncertaintyGrams / shares.length))
+  return { parts, whole: parts.reduce((all, part) => all + part, 0) }
 }
 
 function book(turn: Turn, cause: MovementCause, refrigerant: string | null, ownerId: string | null, grams: number): void {

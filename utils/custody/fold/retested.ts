@@ -77,7 +77,8 @@ function judgeGrossAnew(turn: Turn<'retested'>, tareGrams: number): void {
   const net = contents.grossGrams - Math.round(tareGrams)
   const accuracy = contents.uncertaintyGrams ?? scaleAccuracyGrams(contents.grossGrams)
   if (net < -accuracy) turn.findings.push(belowTare(-net, isConfirmed(turn, 'weigh-again')))
-  changeNet(turn, net < -accuracy ? null : Math.max(0, net), 'tare-change', accuracy)
+  // No other reading than the net rested on before: its uncertainty counts once.
+  changeNet(turn, net < -accuracy ? null : Math.max(0, net), 'tare-change', 0)
   if (contents.netGrams !== null) contents.lastKnownNetGrams = Math.max(0, contents.grossGrams - tareGrams)
   contents.basis = contents.netGrams === null ? 'unknown' : 'weighed'
   contents.uncertaintyGrams = contents.netGrams === null ? null : accuracy

@@ -1,6 +1,6 @@
 import type { CylinderState, Share } from '../state'
 import type { StockChange } from '../stockChange'
-import { ownerOfFound, partOf } from './ledger'
+import { ownerOfFound, partsOf } from './ledger'
 import type { Turn } from './turn'
 
 /** What a cylinder holds in stock of one owner. */
@@ -10,6 +10,7 @@ export interface Held {
   grams: number
   notKnown: number
   weighedVariance: number
+  weighedTogether: number
 }
 
 /**
@@ -20,9 +21,10 @@ export interface Held {
 export function heldIn(state: CylinderState): Held[] {
   const { inStock, nothingInIt, netGrams, refrigerant, shares, uncertaintyGrams } = state.contents
   if (!inStock || (nothingInIt && (netGrams === null || netGrams === 0))) return []
-  if (netGrams === null) return [{ refrigerant, ownerId: mainOwner(shares, ownerOfFound(state)), grams: 0, notKnown: 1, weighedVariance: 0 }]
-  return shares.map(({ ownerId, grams }) => ({
-    refrigerant, ownerId, grams, notKnown: 0, weighedVariance: partOf(uncertaintyGrams ?? 0, grams, shares) ** 2,
+  if (netGrams === null) return [{ refrigerant, ownerId: mainOwner(shares, ownerOfFound(state)), grams: 0, notKnown: 1, weighedVariance: 0, weighedTogether: 0 }]
+  const { parts, whole } = partsOf(uncertaintyGrams ?? 0, shares)
+  return shares.map(({ ownerId, grams }, index) => ({
+    refrigerant, ownerId, grams, notKnown: 0, weighedVariance: parts[index]! ** 2, weighedTogether: parts[index]! * whole,
   }))
 }
 
@@ -33,7 +35,7 @@ export function stockChanges(before: readonly Held[], after: readonly Held[], { 
     const key = JSON.stringify([refrigerant, ownerId])
     const known = changes.get(key)
     if (known) return known
-    const change = { eventId: event.id, ordinal: 0, refrigerant, ownerId, grams: 0, notKnown: 0, weighedVariance: 0, foundVariance: 0, at, apart }
+    const change = { eventId: event.id, ordinal: 0, refrigerant, ownerId, grams: 0, notKnown: 0, weighedVariance: 0, foundVariance: 0, weighedTogether: 0, foundTogether: 0, at, apart }
     changes.set(key, change)
     return change
   }
@@ -42,12 +44,17 @@ export function stockChanges(before: readonly Held[], after: readonly Held[], { 
     change.grams += sign * held.grams
     change.notKnown += sign * held.notKnown
     change.weighedVariance += sign * held.weighedVariance
+    change.weighedTogether += sign * held.weighedTogether
   }
   for (const held of before) count(held, -1)
   for (const held of after) count(held, 1)
-  for (const difference of found) changeOf(difference).foundVariance += difference.uncertaintyGrams ** 2
+  for (const { uncertaintyGrams, wholeGrams, ...of } of found) {
+    const change = changeOf(of)
+    change.foundVariance += uncertaintyGrams ** 2
+    change.foundTogether += uncertaintyGrams * wholeGrams
+  }
   return [...changes.values()]
-    .filter(({ grams, notKnown, weighedVariance, foundVariance }) => grams !== 0 || notKnown !== 0 || weighedVariance !== 0 || foundVariance !== 0)
+    .filter(one => [one.grams, one.notKnown, one.weighedVariance, one.foundVariance, one.weighedTogether, one.foundTogether].some(figure => figure !== 0))
     .map((change, ordinal) => ({ ...change, ordinal }))
 }
 

@@ -23,8 +23,8 @@ export interface FoldContext {
   placeOfFirm: (firmId: string) => string | null
 }
 
-/** A weight that differs from the log, or agrees with it, without a cause: how far its two readings may be off together. */
-export interface Difference { refrigerant: string | null, ownerId: string | null, uncertaintyGrams: number }
+/** A weight that differs from the log, or agrees with it, without a cause: how far its two readings may be off together. `wholeGrams`: for all owners, of whom this one has a part. */
+export interface Difference { refrigerant: string | null, ownerId: string | null, uncertaintyGrams: number, wholeGrams: number }
 
 /** One event's turn: the state it finds and changes, and what it leaves in the books. */
 export interface Turn<K extends EventKind = EventKind> {

@@ -192,7 +192,26 @@ describe('what no cause explains', () => {
     const retest = did('retested', { month: '2026-07', requalifierId: idOf(61), method: 'visual', result: 'passed', newTare: kg(11.9) })
     const { account } = balanceOf(folded(registered(), filled('R-22', 20), retest), ALWAYS)[0]!
     expect(line(account)).toBe('0, recovered 8000, tare-change 100, 8100')
-    expect(account.unexplained).toEqual({ grams: 100, uncertaintyGrams: 200, isMore: false })
+    expect(account.unexplained).toEqual({ grams: 100, uncertaintyGrams: 100, isMore: false })
+  })
+
+  it('is no surer where two own it: the parts of one reading err alike', () => {
+    // Ours 2 kg, the customer's 6 kg of what 20 kg gross told; at 18 kg (100 + 90) g: 47.5, up to 48, and 142.5, up to 143 g.
+    const two = [registered(), filled('R-22', 14), filled('R-22', 20, { ownerOfRefrigerantId: CUSTOMER }), weighed(18)]
+    const [balance] = balanceOf(folded(...two), ALWAYS)
+    expect(balance!.owners.map(({ account }) => account.unexplained.uncertaintyGrams)).toEqual([48, 143])
+    expect(balance!.account.unexplained).toEqual({ grams: -2000, uncertaintyGrams: 191, isMore: true })
+    // The net rests on 90 g: 22.5, up to 23, and 67.5, up to 68 g.
+    expect(balance!.owners.map(({ account }) => account.stock.closing.uncertaintyGrams)).toEqual([23, 68])
+    expect(balance!.account.stock.closing.uncertaintyGrams).toBe(91)
+    // Two such cylinders err each by itself: root(2 x 191 x 191) = 270.1.
+    expect(balanceOf(together(two, two), ALWAYS)[0]!.account.unexplained.uncertaintyGrams).toBe(271)
+  })
+
+  it('asked for one owner is that owner\'s alone', () => {
+    const two = folded(registered(), filled('R-22', 14), filled('R-22', 20, { ownerOfRefrigerantId: CUSTOMER }), weighed(18))
+    const theirs = { movements: two.movements.filter(({ ownerId }) => ownerId === CUSTOMER), stockChanges: two.stockChanges.filter(({ ownerId }) => ownerId === CUSTOMER) }
+    expect(balanceOf(theirs, ALWAYS)[0]!.account.unexplained.uncertaintyGrams).toBe(143)
   })
 })
 
