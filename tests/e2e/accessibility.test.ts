@@ -169,6 +169,12 @@ const PRESSED: Record<string, Screen> = {
     await page.getByLabel(/^Choose (?!all)/).and(page.locator(':visible')).first().check()
     await page.getByText('1 chosen').waitFor()
   } },
+  'a van of which nothing was scanned': { as: warehouse, at: demo => `/vans/${demo.van}/check-in`, after: async (page) => {
+    const shops = page.getByLabel('They come to')
+    if (await shops.isVisible()) await shops.selectOption({ index: 1 })
+    await page.getByRole('button', { name: /^Check in without/ }).click()
+    await page.getByRole('dialog').waitFor()
+  } },
   'the sum of a rule that does not govern': { as: technician, at: demo => `/c/${demo.codes.usual}/working`, after: async (page) => {
     const sums = page.getByRole('button', { name: /^Show its sum/ })
     if (await sums.first().isVisible()) await sums.first().click()
