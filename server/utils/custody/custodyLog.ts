@@ -37,7 +37,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
   const { state } = folded
   const shown = new Set(folded.steps.map(({ eventId }) => eventId))
   const steps = how === 'recorded' ? withCorrections(asRecorded(events.filter(({ id }) => shown.has(id)), foldContext(from)), folded.steps) : folded.steps
-  const standing = new Map(applyCorrections(events).flatMap(({ event, correction, isOut }) => correction && !isOut ? [[event.id, event.details as Record<string, unknown>]] : []))
+  const standing = new Map(applyCorrections(events).flatMap(({ event, correction, isOut }): [string, Record<string, unknown>][] => correction && !isOut ? [[event.id, event.details as Record<string, unknown>]] : []))
   const byId = new Map(events.map(event => [event.id, event]))
   const names = namesOf(from)
   const lines = steps.flatMap((step): LogLine[] => {
