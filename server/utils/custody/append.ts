@@ -58,8 +58,11 @@ export async function append(db: Database, posting: Posting): Promise<EventResul
 
 /** Takes what is waiting now; what comes meanwhile asks for a turn of its own. */
 async function drain(db: Database, waiting: Waiting[], commit: Database['write']): Promise<void> {
-  // Requests that are being read in this turn of the event loop share the commit.
-  await nextTurn()
+  // Requests that are being read share the commit: it waits for as long as a turn of the event loop brings another.
+  for (let known = 0; known < waiting.length && known < GROUP_EVENTS;) {
+    known = waiting.length
+    await nextTurn()
+  }
   const taken = waiting.splice(0)
   for (const part of groupsOf(taken)) await commitOrSplit(db, part, commit)
 }
