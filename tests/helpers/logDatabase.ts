@@ -33,7 +33,7 @@ export async function openLogDatabase(): Promise<LogDatabase> {
   await db.write([
     statement(db.read.insert(firm).values({ id: randomUUID(), name: 'Testing firm', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb', createdAt: 0 })),
     ...[warehouse, technician, manager].map((access, index) => statement(db.read.insert(people).values({
-      id: access.personId, email: `person${index}@firm.example`, name: `Person ${index}`, roles: [...access.roles], units: 'lb', createdAt: 0,
+      id: access.personId, email: `person${index}@firm.example`, name: `Person ${index}`, roles: [...access.roles], certificationType: 'universal', units: 'lb', createdAt: 0,
     }))),
     statement(db.read.insert(places).values({ id: placeId, name: 'Shop', kind: 'shop', createdAt: 0 })),
   ])

@@ -14,6 +14,7 @@ let cylinder: CylinderView
 beforeAll(async () => {
   server = await startServer()
   firm = await openShop(server)
+  await firm.admin.client.patch(`/api/people/${firm.technician.id}`, { certificationType: 'II' })
   trainee = await addMember(firm.admin, 'Perry', ['technician'], { trainee: true })
   cylinder = await registered(firm)
 })

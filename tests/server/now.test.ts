@@ -117,6 +117,7 @@ describe('what needs each person now', () => {
   })
 
   it('is for the supervisor what a trainee recorded, for the manager who has it to sign, until it is taken back', async () => {
+    await firm.admin.client.patch(`/api/people/${firm.technician.id}`, { certificationType: 'II' })
     const trainee = await addMember(firm.admin, 'Tom', ['technician'], { trainee: true })
     const weighed = await registered(firm)
     const weighing = { ...eventOf(weighed.id, 'weighed'), supervisorId: firm.technician.id, details: { gross: lb(40) } }
@@ -130,6 +131,7 @@ describe('what needs each person now', () => {
   })
 
   it('waits for the supervisor again once the signature was taken back', async () => {
+    await firm.admin.client.patch(`/api/people/${other.id}`, { certificationType: 'II' })
     const trainee = await addMember(firm.admin, 'Tess', ['technician'], { trainee: true })
     const { id } = await registered(firm)
     const weighing = { ...eventOf(id, 'weighed'), supervisorId: other.id, details: { gross: lb(40) } }

@@ -1,4 +1,6 @@
-import type { AnyRecordedEvent } from '../../../utils/custody/event'
+import type { Access } from '../../../utils/access/roles'
+import type { AnyCustodyEvent, AnyRecordedEvent } from '../../../utils/custody/event'
+import { maySupervise } from '../people/maySupervise'
 import type { Group } from './group'
 import { refuse, refusalOf, type ParsedPost, type Refusal } from './judge'
 import { recordedEvent, type LogRow } from './logRow'
@@ -57,7 +59,7 @@ function judgeOnce(one: ReadPosting, now: Group, heldBack: ReadonlySet<number>):
       results.push(resultOf(raw, refusal ?? OTHER_HALF_REFUSED))
       continue
     }
-    const row = sealedRow(post, one.posting, now.headOf(event.cylinderId), now.nextSeq())
+    const row = sealedRow(post, one.posting, now.headOf(event.cylinderId), now.nextSeq(), supervisorOf(event, one.posting.access, now))
     now.add(row, recordedEvent(row) as AnyRecordedEvent)
     rows.push(row)
     results.push({ id: event.id, outcome: 'accepted', seq: row.seq, version: row.version })
@@ -68,6 +70,11 @@ function judgeOnce(one: ReadPosting, now: Group, heldBack: ReadonlySet<number>):
     return { results: results.map(result => result.outcome === 'accepted' ? { id: result.id, outcome: 'refused', problem: HELD_BACK } : result), rows: [] }
   }
   return { results, rows }
+}
+
+/** Whom the line names as supervisor: of a trainee's entry only one who may be it. What was done is kept either way. */
+function supervisorOf({ supervisorId = null }: AnyCustodyEvent, { personId, trainee }: Access, { directory }: Group): string | null {
+  return supervisorId === null || !trainee || maySupervise(directory, supervisorId, personId) ? supervisorId : null
 }
 
 const OTHER_HALF_REFUSED = refuse(409, 'Its other half was refused', 'Half of what happened between two cylinders is not recorded alone. Mend the other half and send both again.')

@@ -10,8 +10,12 @@ const SKEW_IGNORED_MS = 60_000
 /** The last line of a cylinder's chain. */
 export interface ChainHead { version: number, hash: string }
 
-/** An accepted event as the line that the log will hold: its times settled, its chain closed. */
-export function sealedRow(post: ParsedPost, posting: Posting, head: ChainHead, seq: number): LogRow {
+/**
+ * An accepted event as the line that the log will hold: its times settled, its chain closed.
+ *
+ * @param supervisorId of a trainee's entry, by what the firm knew when it was recorded; the body keeps whom it named.
+ */
+export function sealedRow(post: ParsedPost, posting: Posting, head: ChainHead, seq: number, supervisorId: string | null): LogRow {
   const { event } = post
   const occurredAt = Date.parse(event.occurredAt)
   const clockSkewSeconds = skewSeconds(posting)
@@ -30,7 +34,7 @@ export function sealedRow(post: ParsedPost, posting: Posting, head: ChainHead, s
     recorded_at: posting.now,
     actor_id: posting.access.personId,
     posted_by: posting.access.personId,
-    supervisor_id: event.supervisorId ?? null,
+    supervisor_id: supervisorId,
     trainee: posting.access.trainee ? 1 : 0,
     place_id: event.placeId ?? null,
     body: post.body,

@@ -1,9 +1,8 @@
 import type { people } from '../../../drizzle/schema'
-import { supervisorsFor } from '../../../utils/access/supervisors'
 import type { ProblemError } from '../../../utils/contract/problem'
 import type { Directory } from '../directory/directory'
 import { problem } from '../http/problem'
-import { rolesOf } from '../session/person'
+import { maySupervise } from './maySupervise'
 
 type PersonRow = typeof people.$inferSelect
 type Told = Pick<PersonRow, 'id' | 'roles' | 'trainee' | 'certificationType' | 'certificationNumber'>
@@ -30,8 +29,7 @@ export function refuseMisfit(from: Directory, person: Told, given: { supervisorI
 
 function supervisorFaults(from: Directory, person: Told, supervisorId: string): ProblemError[] {
   if (!isTrainee(person)) return [{ path: 'supervisorId', message: 'only a trainee has a supervisor' }]
-  const everybody = [...from.people.values()].map(row => ({ ...row, roles: rolesOf(row) }))
-  if (supervisorsFor(everybody, person.id).some(({ id }) => id === supervisorId)) return []
+  if (maySupervise(from, supervisorId, person.id)) return []
   return [{ path: 'supervisorId', message: 'must be a certified technician or manager in service, and no trainee' }]
 }
 

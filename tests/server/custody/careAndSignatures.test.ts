@@ -80,6 +80,24 @@ describe('who may countersign', () => {
     for (const access of [log.technician, log.manager]) expect(await outcomes(access, sent(id, 'countersigned', { eventId: alone.id }))).toEqual([403])
   })
 
+  it('is nobody where the one named may not supervise: not certified, turned off, a trainee, or none who works on systems; the entry is kept and stops the cylinder', async () => {
+    const named = { roles: ['technician'], certificationType: 'II' as const, units: 'lb' as const, createdAt: 0 }
+    const unfit = [
+      { ...named, certificationType: null }, { ...named, active: false }, { ...named, trainee: true }, { ...named, roles: ['auditor'] },
+    ].map((one, index) => ({ id: randomUUID(), email: `unfit${index}@firm.example`, name: `Unfit ${index}`, ...one }))
+    await log.db.write(unfit.map(one => statement(log.db.read.insert(people).values(one))))
+    for (const supervisorId of [...unfit.map(({ id }) => id), trainee.personId]) {
+      const id = await newCylinder(log)
+      const entry = sent(id, 'weighed', { gross: lb(27.5) }, { supervisorId })
+      expect(await outcomes(trainee, entry)).toEqual(['accepted'])
+      expect((await cylinderView(log.db, id, { access: null, nowMs: Date.now() }))!.findings.map(({ code }) => code)).toEqual(expect.arrayContaining(['unsupervised', 'unsigned']))
+      expect((await log.db.readClient.execute({ sql: `SELECT supervisor_id, json_extract(body, '$.supervisorId') FROM custody_events WHERE id = ?`, args: [entry.id] })).rows.map(row => [row[0], row[1]]))
+        .toEqual([[null, supervisorId]])
+    }
+    const { id } = await filledByTrainee()
+    expect((await cylinderView(log.db, id, { access: null, nowMs: Date.now() }))!.findings.map(({ code }) => code)).not.toContain('unsupervised')
+  })
+
   it('may sign before the entry has arrived; it counts once that does', async () => {
     const id = await newCylinder(log)
     const entry = sent(id, 'filled', { refrigerant: 'R-22', grossBefore: lb(27.5), grossAfter: lb(37.5), looked: true }, { supervisorId: log.technician.personId })

@@ -32,7 +32,7 @@ describe('two writers on one log', () => {
     if (!('event' in losing)) throw new Error('not parsed')
     // The loser has read the log and computed everything; then another process records.
     const read = await group(log.db, [losing.event])
-    const row = sealedRow(losing, { events: [], access: log.technician, now: Date.now(), deviceNow: null }, read.headOf(id), read.nextSeq())
+    const row = sealedRow(losing, { events: [], access: log.technician, now: Date.now(), deviceNow: null }, read.headOf(id), read.nextSeq(), null)
     read.add(row, recordedEvent(row))
     const other = await log.openAgain()
     await record(other, log.technician, [sent(id, 'filled', { refrigerant: 'R-22', condition: 'clean', grossBefore: lb(27.5), grossAfter: lb(33), looked: true })])

@@ -39,7 +39,7 @@ export function unsigned(since: number): Finding {
 export function unsupervised(since: number): Finding {
   return {
     code: 'unsupervised', severity: 'stop', source: '40 CFR 82.161', since: sinceText(since),
-    text: 'A trainee\'s entry names no supervisor. A certified technician must look at this cylinder and answer for it.',
+    text: 'A trainee\'s entry names nobody who may supervise. A certified technician must look at this cylinder and answer for it.',
   }
 }
 
