@@ -50,7 +50,7 @@ export interface ActForm {
 }
 
 /** The form of each kind of event. */
-export const ACT_FORMS = {
+const ACT_FORMS = {
   'filled': { component: FilledForm, draft: FILLED, title: 'A recovery', verb: 'Record the recovery', cautions: ['filling'] },
   'weighed': { component: WeighedForm, draft: WEIGHED, title: 'A weighing', verb: 'Record the weight', cautions: [] },
   'moved': { component: MovedForm, draft: MOVED, title: 'A move', verb: 'Record the move', cautions: ['moving'] },

@@ -13,6 +13,7 @@ export type SecurityEvent
     | 'person-changed' | 'person-turned-off' | 'person-turned-on'
     | 'set-up' | 'firm-changed'
 
+/** What a line of the security log says, but for its time. */
 export interface SecurityEntry {
   what: SecurityEvent
   /** Who acted; null where nobody is signed in. */

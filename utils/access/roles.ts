@@ -1,3 +1,4 @@
+/** What a person may be to the firm; one may be several. */
 export const ROLES = ['warehouse', 'technician', 'manager', 'auditor', 'admin'] as const
 
 export type Role = (typeof ROLES)[number]

@@ -15,6 +15,7 @@ export const eventsBody = z.strictObject({
   deviceNow: z.iso.datetime({ offset: true }).optional(),
 })
 
+/** What became of one event that was posted. */
 export interface EventResult {
   id: string
   outcome: 'accepted' | 'duplicate' | 'refused'

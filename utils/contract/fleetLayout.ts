@@ -7,6 +7,7 @@ export type FleetColumn = (typeof FLEET_COLUMNS)[number]
 /** Always shown, and first: what names a cylinder and how it stands. */
 export const FIXED_COLUMNS = ['code', 'verdict'] as const satisfies readonly FleetColumn[]
 
+/** How close the lines of the fleet stand. */
 export const DENSITIES = ['compact', 'comfortable'] as const
 export type Density = (typeof DENSITIES)[number]
 

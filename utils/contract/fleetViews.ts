@@ -22,5 +22,7 @@ export const fleetViewBody = z.strictObject({
 /** PATCH /api/fleet/views/{id}. */
 export const fleetViewChange = z.strictObject({ name: line(60) })
 
+/** Filters and an order that a person keeps under a name. */
 export interface FleetView { id: string, name: string, query: Record<string, string> }
+/** What GET /api/fleet/views answers. */
 export interface FleetViewsAnswer { items: FleetView[] }

@@ -8,6 +8,7 @@ import { MOST_LABELS } from './printing'
 
 /** POST /api/labels. */
 export const mintBody = z.strictObject({ count: z.number().int().min(1).max(100) })
+/** What POST /api/labels answers. */
 export interface MintAnswer { codes: string[] }
 
 /** GET /api/labels/address: what the symbols of labels lead to, and what its length makes of them. */

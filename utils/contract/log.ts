@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { page, type Page } from './parts'
 
 /** What is verified: everything, what has come since the last verified checkpoint, or what is made from the log. */
-export const VERIFY_SCOPES = ['all', 'since', 'caches'] as const
+const VERIFY_SCOPES = ['all', 'since', 'caches'] as const
 export type VerifyScope = (typeof VERIFY_SCOPES)[number]
 
 /** GET /api/log/verify. */
@@ -29,6 +29,7 @@ export interface CheckpointLine {
   askedBy: { id: string, name: string } | null
 }
 
+/** What GET /api/log/checkpoints answers. */
 export interface CheckpointsAnswer extends Page<CheckpointLine> {
   /** The key that signs them, as C2SP signed-note writes it. */
   publicKey: string

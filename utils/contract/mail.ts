@@ -4,6 +4,7 @@ import { page, type Page } from './parts'
 /** GET /api/mail: what was written, newest first. */
 export const mailQuery = z.strictObject(page)
 
+/** A letter that was kept, and whether it was sent. */
 export interface MailLine {
   id: string
   recipient: string
@@ -16,4 +17,5 @@ export interface MailLine {
   error: string | null
 }
 
+/** What GET /api/mail answers. */
 export type MailAnswer = Page<MailLine>

@@ -61,6 +61,7 @@ export interface PersonLine extends Certification {
 
 /** GET /api/people?active=true|false. */
 export const peopleQuery = z.strictObject({ active: z.enum(['true', 'false']).optional() })
+/** What GET /api/people answers. */
 export interface PeopleAnswer { items: PersonLine[] }
 
 /** What POST /api/people (201), PATCH /api/people/{id} and POST /api/people/{id}/invitation answer. */

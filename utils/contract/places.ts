@@ -2,7 +2,9 @@ import { z } from 'zod'
 import { RIN } from '../requalification/struckMark'
 import { id, line, printedLine, type Page } from './parts'
 
+/** The sorts of place where a cylinder stands. */
 export const PLACE_KINDS = ['shop', 'rack', 'van', 'site', 'firm'] as const
+/** What a firm is to the contractor. */
 export const FIRM_KINDS = ['reclaimer', 'requalifier', 'supplier', 'customer', 'carrier'] as const
 
 /** POST /api/places. A firm's own place is made with the firm. */
@@ -43,6 +45,7 @@ export interface Standing {
 export interface StandingAnswer { items: Standing[] }
 export type FirmsAnswer = Page<Firm>
 
+/** A place as it is read. */
 export interface Place {
   id: string
   name: string
@@ -71,6 +74,7 @@ export const firmChange = firmBody.omit({ id: true, kind: true }).partial().exte
 export type NewFirm = z.output<typeof firmBody>
 export type FirmChange = z.output<typeof firmChange>
 
+/** A firm as it is read. */
 export interface Firm {
   id: string
   name: string

@@ -34,6 +34,7 @@ export type ScaleChange = z.output<typeof scaleChange>
 /** GET /api/scales?active=true|false: the whole list, by name. */
 export const scalesQuery = z.strictObject({ active: z.enum(['true', 'false']).optional() })
 
+/** One line of GET /api/scales. */
 export interface ScaleLine {
   id: string
   name: string
@@ -43,4 +44,5 @@ export interface ScaleLine {
   lastCheckOn: Day | null
   active: boolean
 }
+/** What GET /api/scales answers. */
 export type ScalesAnswer = Page<ScaleLine>

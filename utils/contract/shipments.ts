@@ -34,7 +34,7 @@ export const receiptBody = z.strictObject({
   })).min(1).max(200).refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
-export const SHIPMENT_STATES = ['draft', 'dispatched', 'received', 'cancelled'] as const
+const SHIPMENT_STATES = ['draft', 'dispatched', 'received', 'cancelled'] as const
 export type ShipmentState = (typeof SHIPMENT_STATES)[number]
 
 /** GET /api/shipments: the newest first. */

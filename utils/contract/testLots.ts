@@ -38,7 +38,7 @@ export const testLotReturnBody = z.strictObject({
   })).min(1).max(200).refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
-export const TEST_LOT_STATES = ['draft', 'sent', 'back', 'cancelled'] as const
+const TEST_LOT_STATES = ['draft', 'sent', 'back', 'cancelled'] as const
 export type TestLotState = (typeof TEST_LOT_STATES)[number]
 
 /** GET /api/test-lots: the newest first. */

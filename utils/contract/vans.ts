@@ -48,4 +48,5 @@ export interface VanSummary {
   materials: VanMaterials | null
   toLookFor: ToLookFor[]
 }
+/** What GET /api/vans answers. */
 export interface VansAnswer { items: VanSummary[] }

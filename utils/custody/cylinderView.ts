@@ -8,10 +8,18 @@ import type { ChangedLine } from './laterLines'
 import type { Signature } from './signatures'
 
 export type { Condition }
+
+/** Where a cylinder is in its life. */
 export type Lifecycle
   = 'in-service' | 'quarantined' | 'rejected' | 'at-reclaim' | 'at-test' | 'missing' | 'condemned' | 'retired'
+
+/** Why nothing may go into a cylinder until that is settled. */
 export type Hold = 'quarantined' | 'rejected' | 'damaged' | 'tare-loss' | 'wet'
+
+/** Whose the steel is. */
 export type Ownership = 'own' | 'rental' | 'deposit' | 'customer'
+
+/** What must be known before a stop weight can be given. */
 export type Missing = 'tareWeight' | 'waterCapacity' | 'servicePressure' | 'refrigerant' | 'weight' | 'testDate'
 
 /** A place, person or firm by its id and the name people know it by. */
@@ -25,6 +33,7 @@ export interface RetestMark {
   suffix?: string
 }
 
+/** What a cylinder may hold, as it is shown. */
 export interface CapacityView {
   forRefrigerant: string | null
   governingRule: FillRule | null
@@ -44,6 +53,7 @@ export interface CapacityView {
   refusals: Finding[]
 }
 
+/** The retest of a cylinder, as it is shown. */
 export interface RequalificationView {
   lastMonth: Month | null
   intervalMonths: number | null

@@ -1,5 +1,7 @@
+/** How much a finding weighs. */
 export type Severity = 'caution' | 'stop'
 
+/** What a rule found, as a code; its words are in `findings/words.ts`. */
 export type FindingCode
   = 'overfill' | 'nearly-full' | 'pressure-class' | 'spec-not-for-gas' | 'not-refillable' | 'not-marked-flammable' | 'toxic'
     | 'second-refrigerant' | 'unknown-onto-known' | 'retest-overdue' | 'retest-soon' | 'retest-unknown'

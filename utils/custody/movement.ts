@@ -8,7 +8,7 @@ export const MOVEMENT_CAUSES = [
 export type MovementCause = (typeof MOVEMENT_CAUSES)[number]
 
 /** Causes that say only that a weight or a tare differed: nobody knows why. */
-export const UNEXPLAINED_CAUSES = ['tare-change', 'weighing'] as const satisfies readonly MovementCause[]
+const UNEXPLAINED_CAUSES = ['tare-change', 'weighing'] as const satisfies readonly MovementCause[]
 
 /** Whether a cause explains nothing. */
 export function isUnexplained(cause: MovementCause): boolean {

@@ -7,7 +7,7 @@ const TECHNICIAN = [
 ] as const satisfies readonly EventKind[]
 
 /** Which kinds each role may record. The kinds of a dispatch are a manager's, and come with its papers only. */
-export const MAY_POST: Record<Role, readonly EventKind[]> = {
+const MAY_POST: Record<Role, readonly EventKind[]> = {
   technician: TECHNICIAN,
   warehouse: [...TECHNICIAN, 'registered'],
   manager: EVENT_KINDS,

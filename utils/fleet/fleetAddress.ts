@@ -4,7 +4,7 @@ import { readInstant } from '../address/queryInstant'
 import { isMonth } from '../quantity/month'
 
 /** Cylinders on one page of the fleet. */
-export const FLEET_PAGE = 100
+const FLEET_PAGE = 100
 
 /** What stands in the fleet's address, as a router hands it over. */
 export type AddressQuery = Record<string, string | null | undefined | (string | null)[]>
@@ -14,7 +14,7 @@ export const FLEET_FILTERS = ['q', 'place', 'holder', 'refrigerant', 'condition'
 export type FleetFilter = (typeof FLEET_FILTERS)[number]
 
 /** The parts that ask for the fleet of a past instant. */
-export const PAST_PARTS = ['asOf', 'knownAt'] as const
+const PAST_PARTS = ['asOf', 'knownAt'] as const
 
 const ID = /^[\da-f]{8}-[\da-f]{4}-[1-8][\da-f]{3}-[89ab][\da-f]{3}-[\da-f]{12}$/
 

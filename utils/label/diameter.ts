@@ -1,11 +1,11 @@
+import { MM_PER_INCH } from './stock'
+
 /** No cylinder that is labelled is narrower or wider. Units: millimetres. */
 export const LEAST_DIAMETER_MM = 50
 export const MOST_DIAMETER_MM = 2000
 
 /** Below it a label is stuck on with its long edge along the cylinder, and vinyl follows the curve better than polyester. */
 export const NARROW_MM = 150
-
-const MM_PER_INCH = 25.4
 
 /** How wide cylinders commonly are, by their water capacity. Source: from memory; measure yours. */
 export const COMMON_DIAMETERS: readonly { inches: number, waterCapacity: string }[] = [

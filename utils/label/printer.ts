@@ -11,7 +11,7 @@ export interface LabelPrinter {
 export const FREE_EDGE_MM = 2
 
 /** Offsets are set in these steps. */
-export const OFFSET_STEP_MM = 0.5
+const OFFSET_STEP_MM = 0.5
 
 /** The printer that a stock is usually printed on, its print not moved. */
 export function usualPrinter(stock: LabelStock): LabelPrinter {

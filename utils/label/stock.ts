@@ -21,6 +21,7 @@ export interface LabelStock {
   source: string
 }
 
+/** Millimetres to the inch, by definition. */
 export const MM_PER_INCH = 25.4
 
 /** Eight dots to the millimetre, sold as "203 dpi", and the finer of the usual label printers: from memory. */

@@ -6,8 +6,8 @@ export const SUBJECT_WORDS: Record<PhotoSubject, string> = { stamp: 'Stamp', dam
 
 const OF: Record<PhotoSubject, string> = { stamp: 'Photo of the stamp', damage: 'Photo of the damage', scale: 'Photo of the scale', other: 'Photo' }
 
-/** What to do with a picture of HEIF or AVIF. Source: the setting's name on iPhones from memory. */
-export const HEIC_ADVICE = 'This picture is HEIC or AVIF. Set the camera to save JPEG (on an iPhone: Settings, Camera, Formats, Most Compatible) and take it again, or send it as JPEG.'
+/** What to do with a picture of HEIF or AVIF. Source: where phones have the setting, from memory. */
+export const HEIC_ADVICE = 'This picture is HEIC or AVIF. Set the camera to save JPEG (on many phones in the settings, under Camera and Formats) and take it again, or send it as JPEG.'
 
 /**
  * A photo in words, for who does not see it.

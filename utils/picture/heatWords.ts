@@ -30,7 +30,7 @@ export function hotSentence(capacity: Behaviour, nothingInIt: boolean): string |
 }
 
 /** Whether there is no liquid at 131 F, so that no ceiling below liquid-full can be given. */
-export function isGasWhenHot({ terms }: Pick<Behaviour, 'terms'>): boolean {
+function isGasWhenHot({ terms }: Pick<Behaviour, 'terms'>): boolean {
   return terms.some(term => term.rule === 'hot-ceiling' && term.limitGrams === null && term.standing !== 'unsafe')
 }
 

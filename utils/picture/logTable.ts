@@ -2,7 +2,7 @@ import type { LogLine } from '../custody/cylinderView'
 import { daysBetween } from '../quantity/instant'
 
 /** Days without an event that are drawn as a gap. */
-export const GAP_DAYS = 30
+const GAP_DAYS = 30
 
 /** A stretch of time in which nothing was heard of a cylinder. */
 export interface LogGap { days: number, fromMs: number, toMs: number }

@@ -52,7 +52,7 @@ export function layOutRules(terms: readonly FillTerm[], governingRule: FillRule 
 }
 
 /** The weight that leaves no vapor at 131 F: what the hot ceiling takes its share of; null where there is none. Units: net grams. */
-export function liquidFullWhenHotGrams(terms: readonly FillTerm[]): number | null {
+function liquidFullWhenHotGrams(terms: readonly FillTerm[]): number | null {
   const ceiling = terms.find(term => term.rule === 'hot-ceiling' && term.factors.length > 0)
   return ceiling ? productGrams(ceiling.factors.filter(factor => factor.name !== 'share')) : null
 }

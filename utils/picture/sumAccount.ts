@@ -51,6 +51,6 @@ function whyNoReading({ contents }: CylinderView): string {
 }
 
 /** When and by whom, as people near it say it. */
-export function byWhom({ atMs, by }: Deed, { nowMs, timeZone }: Clock): string {
+function byWhom({ atMs, by }: Deed, { nowMs, timeZone }: Clock): string {
   return `${formatNear(atMs, timeZone, nowMs)} by ${by}`
 }

@@ -22,7 +22,7 @@ export function formatDay(ms: number, timeZone: string): string {
 }
 
 /** A time of day. @example formatTime(ms, 'America/Phoenix') // '09:41' */
-export function formatTime(ms: number, timeZone: string): string {
+function formatTime(ms: number, timeZone: string): string {
   const { hour, minute } = wallClock(ms, timeZone)
   return `${two(hour)}:${two(minute)}`
 }

@@ -1,5 +1,5 @@
 /** Fifteen pounds, as whole grams read them. Source: 40 CFR 82.156(e). */
-export const SYSTEM_DEPENDENT_LIMIT_GRAMS = 6_804
+const SYSTEM_DEPENDENT_LIMIT_GRAMS = 6_804
 
 /** What speaks against recovering with the appliance's own compressor. */
 export interface SystemDependentCaution { text: string, source: string }

@@ -11,7 +11,7 @@ export type IdealMixture = { fluid: LiquidTable } | { because: string }
  *
  * Source: ours. Of 36 blends whose own density is computed the plain sum of volumes is at most 4.0 % above it, R-500 at 131 F.
  */
-export const MIXING_DERATE = 0.95
+const MIXING_DERATE = 0.95
 
 // The components' volumes do not add up exactly; the derate covers what was seen on the unsafe side.
 const MIXING_ERROR = 0.05

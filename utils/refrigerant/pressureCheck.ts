@@ -4,6 +4,7 @@ import { absolutePressureKPa, type PressureReading } from './pressureReading'
 import { hasLiquidAt, saturationAt } from './saturation'
 import type { Refrigerant } from './types'
 
+/** What a reading says beside the saturation pressure. */
 export type PressureVerdict = 'agrees' | 'excess' | 'below'
 
 /** A pressure beside what a refrigerant can have at that temperature while liquid is left. Units: kPa, C. */

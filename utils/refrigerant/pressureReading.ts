@@ -14,10 +14,10 @@ export interface PressureReading {
 export type PressureReadingField = keyof PressureReading
 
 /** How far a gauge may be off that nobody has said more of: 1 psi (US Army TM 5-3810-307-24-1-2 asks for a gauge to 1 psi). */
-export const DEFAULT_GAUGE_ERROR_KPA = KPA_PER_PSI
+const DEFAULT_GAUGE_ERROR_KPA = KPA_PER_PSI
 
 /** How far a thermometer may be off that nobody has said more of: 2 F (from memory). */
-export const DEFAULT_THERMOMETER_ERROR_C = 2 * 5 / 9
+const DEFAULT_THERMOMETER_ERROR_C = 2 * 5 / 9
 
 /**
  * Between what a reading lies that can be a reading; beyond it a finger slipped or a unit was taken for another.

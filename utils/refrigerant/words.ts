@@ -2,6 +2,7 @@ import type { GwpBasis } from './gwp'
 import type { PressureClass } from './pressureClass'
 import type { Refrigerant } from './types'
 
+/** The pressure classes of 40 CFR 82.152 by name. */
 export const PRESSURE_CLASS_NAMES: Record<PressureClass, string> = {
   'very-high': 'very high', 'high': 'high', 'medium': 'medium', 'low': 'low',
 }

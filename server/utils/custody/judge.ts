@@ -16,6 +16,7 @@ const AUTHOR_CORRECTS_WITHIN_MS = 24 * 60 * 60 * 1000
 /** An event that was understood, with the hash by which a repetition is known. */
 export interface ParsedPost { event: AnyCustodyEvent, body: string, contentHash: string }
 
+/** Why an event was not taken, as the problem that is answered. */
 export type Refusal = { refused: ProblemDetails }
 
 /**

@@ -34,6 +34,7 @@ export type LogRow = {
   hash: string
 }
 
+/** Lines whole, with what chains them. */
 export const SELECT_LOG = `SELECT ${LOG_COLUMNS.join(', ')} FROM custody_events`
 
 /** A row of {@link SELECT_LOG}, as the driver gives it. */

@@ -68,7 +68,7 @@ export async function fillPastFleet(db: Database, into: PastDatabase, past: Past
 }
 
 /** Once its cylinders are in it, the rows that rest on what other cylinders' logs said. */
-export async function joinBothSides({ db, atMs }: PastDatabase): Promise<void> {
+async function joinBothSides({ db, atMs }: PastDatabase): Promise<void> {
   const ids = (await db.readClient.execute(SAID_OF)).rows.map(row => row[0] as string)
   for (let at = 0; at < ids.length; at += ROWS_AT_ONCE) {
     await db.write(await refreshedRows(db, ids.slice(at, at + ROWS_AT_ONCE), atMs))

@@ -15,6 +15,7 @@ export interface Posting {
   dispatch?: Dispatch
 }
 
+/** What is written in one commit with the events of a dispatch. */
 export interface Dispatch {
   /**
    * Further statements of the same commit. Each must carry the guard's condition, which holds only when every

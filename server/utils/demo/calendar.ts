@@ -1,5 +1,6 @@
 import type { Random } from './random'
 
+/** Lengths of time. Units: milliseconds. */
 export const MINUTE = 60_000
 export const HOUR = 60 * MINUTE
 export const DAY = 24 * HOUR

@@ -1,6 +1,7 @@
 import { crc32, deflateSync } from 'node:zlib'
 import { DOT_FONT } from './dotFont'
 
+/** A colour of a pixel, 0 to 255 each. */
 export type Colour = readonly [red: number, green: number, blue: number]
 
 const LETTER_WIDTH = 6

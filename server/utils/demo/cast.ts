@@ -7,12 +7,16 @@ import { seededRandom, type Random } from './random'
 
 // Everybody and every firm here is invented.
 
+/** The password of everybody in the demo. */
 export const DEMO_PASSWORD = 'demo-cylinders-2026'
+/** Where the demo firm is. */
 export const DEMO_TIME_ZONE = 'America/Chicago'
+/** The demo firm itself. */
 export const DEMO_FIRM = { name: 'Ferrowick Refrigeration', telephone: '(555) 010-0142', timeZone: DEMO_TIME_ZONE, units: 'lb' as MassUnit }
 
 const SCALES_SEED = 20_261_202
 
+/** Somebody of the demo firm. */
 export interface DemoPerson extends Certification {
   id: string
   email: string
@@ -24,11 +28,15 @@ export interface DemoPerson extends Certification {
   reads: MassUnit
 }
 
+/** A place of the demo firm, or the one that stands for another firm. */
 export interface DemoPlace { id: string, name: string, kind: 'shop' | 'rack' | 'van' | 'site' | 'firm', parentId?: string, firmId?: string, technicianId?: string }
+/** A firm that the demo firm deals with. */
 export interface DemoFirm { id: string, name: string, kind: 'reclaimer' | 'requalifier' | 'supplier' | 'customer' | 'carrier', telephone: string, email: string, address: string, rin?: string }
 
+/** A scale of the demo firm. */
 export interface DemoScale { id: string, name: string, accuracyEntered: ScaleStep, accuracyPercent: number, lastCheckOn: string | null }
 
+/** Everybody and everything that the story of the demo firm names. */
 export interface Cast {
   people: Record<'warehouse' | 'technician' | 'second' | 'third' | 'manager' | 'auditor' | 'admin' | 'trainee', DemoPerson>
   shops: [DemoPlace, DemoPlace]

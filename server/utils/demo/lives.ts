@@ -10,6 +10,7 @@ export interface DemoLine { steel: Steel, gross: ReturnType<typeof weigh>, refri
 
 /** A dispatch that the demo's lives come together in. */
 export interface DemoShipment { id: string, at: number, backAt: number, to: 'reclaimer' | 'otherReclaimer', cylinders: DemoLine[] }
+/** A test lot that the demo's lives come together in. */
 export interface DemoLot { id: string, at: number, backAt: number, cylinders: Steel[] }
 
 /** What the lives of cylinders are written with. */

@@ -19,6 +19,7 @@ export interface ScriptedEvent {
   body: Record<string, unknown>
 }
 
+/** What of an event is not the everyday. */
 export interface EventOptions {
   placeId?: string
   supervisorId?: string

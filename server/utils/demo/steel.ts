@@ -28,6 +28,7 @@ const SIZES = {
   large: { spec: 'DOT-4BW', psig: 400, wcLb: 123, twLb: 58.4 },
 } as const
 
+/** The name of a size. */
 export type SteelSize = keyof typeof SIZES
 
 /** A cylinder with its stamp; its test falls due within the coming five years of its month, as the fleet's do. */

@@ -14,6 +14,7 @@ import { queryOf, validate } from './validate'
 /** Who may call a route: anybody, anybody signed in, or who holds a permission. */
 export type RoutePermission = Permission | 'public' | 'signed-in'
 
+/** Who may call a route, what it takes, and the status of its answer. */
 export interface RouteOptions<Who extends RoutePermission, P, Q, B, F = undefined> {
   permission: Who
   /** Strict schemas. A route without one takes no parameters of that sort: a query is then refused. */

@@ -12,6 +12,7 @@ import { foreignCursor } from '../http/cursor'
 const PATIENCE_MS = 10_000
 const LONGEST_ERROR = 300
 
+/** A letter as it is written. */
 export interface Letter { recipient: string, subject: string, body: string }
 
 /**

@@ -9,7 +9,7 @@ const FIGURES = ofWeight(500)
 const FIGURES_BOLD = ofWeight(700)
 
 /** The files in server/assets/fonts, under the SIL Open Font License beside them. Barlow has Latin letters alone: the Greek and the Cyrillic of its words are Roboto Mono's. */
-export const LABEL_FONT_FILES: Record<LabelFace, FontFiles> = {
+const LABEL_FONT_FILES: Record<LabelFace, FontFiles> = {
   'figures': FIGURES,
   'figures-bold': FIGURES_BOLD,
   'words': ['barlow-600.woff', 'barlow-latin-ext-600.woff', 'barlow-vietnamese-600.woff', ...FIGURES],

@@ -16,6 +16,7 @@ const GAPS_TOLD = 20
 /** A verification on its way: how far it has come, in the end what it found. */
 export type VerifySteps = AsyncGenerator<VerifyProgress, LogVerification>
 
+/** What a verification goes by. */
 export interface VerifyOptions {
   /** UTC milliseconds. */
   now: number

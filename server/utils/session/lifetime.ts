@@ -10,9 +10,6 @@ export interface SessionLimits { idle: number, absolute: number }
 const FIELD: SessionLimits = { idle: 7 * DAY, absolute: 30 * DAY }
 const OFFICE: SessionLimits = { idle: 12 * HOUR, absolute: 7 * DAY }
 
-/** The longest that any session lives: how long its cookie is good. Units: seconds. */
-export const LONGEST_SESSION_SECONDS = FIELD.absolute / 1000
-
 /** lastSeenAt is written at most this often. Units: milliseconds. */
 export const SEEN_INTERVAL = 60_000
 

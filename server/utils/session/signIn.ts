@@ -10,6 +10,7 @@ import { hashNewPassword, isOutdated, passwordMatches } from './password'
 import { userOf } from './person'
 import { endSession, newSession } from './sessions'
 
+/** One try at signing in. */
 export interface SignInTry {
   email: string
   password: string

@@ -21,7 +21,7 @@ export function workingText({ factors, limitGrams }: FillTerm, waterCapacity: Ma
 }
 
 /** The result of a sum in pounds, or in kilograms where the stamp is metric. Rounding: down to two decimals. */
-export function resultText(grams: number, waterCapacity: MassReading): string {
+function resultText(grams: number, waterCapacity: MassReading): string {
   const symbol = waterCapacity.unit === 'kg' ? 'kg' : 'lb'
   const hundredths = Math.floor(grams / exactGrams({ unit: symbol, value: 1 }) * 100 + FLOAT_NOISE)
   return `${(hundredths / 100).toFixed(2)} ${symbol}`

@@ -6,8 +6,8 @@ import type { Condition } from '../cylinderView'
 import { typedText, type DraftKind } from './draft'
 import { NOT_KNOWN } from './filled'
 
-export const CHECK_METHODS = ['pressure', 'identifier', 'laboratory'] as const
-export type CheckMethod = (typeof CHECK_METHODS)[number]
+/** How the contents were checked. */
+export type CheckMethod = 'pressure' | 'identifier' | 'laboratory'
 
 /** A line of an analysis as it is typed. */
 export interface ComponentRow { component: string, percent: string }

@@ -1,5 +1,6 @@
 import type { DraftKind } from './draft'
 
+/** What the form of a hand-over holds. */
 export interface HandedOverDraft { toHolderId: string }
 
 /** The form of a cylinder that went from hand to hand. */

@@ -1,6 +1,7 @@
 import { DAMAGE_REASONS, type DamageReason } from '../damage'
 import type { DraftKind } from './draft'
 
+/** What the form of an outside look holds; '' while nothing was chosen. */
 export interface InspectedDraft { result: 'sound' | 'damaged' | '', reasons: DamageReason[] }
 
 /** The form of an outside look. */

@@ -1,6 +1,8 @@
 import { typedText, type DraftKind } from './draft'
 
+/** What the form of a missing cylinder holds. */
 export interface MissingDraft { lastSeen: string }
+/** What the form of a found cylinder holds. */
 export interface FoundDraft { placeId: string }
 
 /** The form of a cylinder that nobody finds. */

@@ -1,5 +1,6 @@
 import type { DraftKind } from './draft'
 
+/** What the form of a move holds. */
 export interface MovedDraft { toPlaceId: string }
 
 /** The form of a move; who holds the cylinder follows from the van. */

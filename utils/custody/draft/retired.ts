@@ -1,5 +1,6 @@
 import { typedText, type DraftKind } from './draft'
 
+/** What the form of a retirement holds. */
 export interface RetiredDraft { reason: string, text: string, certificate: string, photoIds: string[] }
 
 /** The form of a cylinder whose life ends, with the proof of what was done with it where there is one. */

@@ -1,5 +1,6 @@
 import { typedText, type DraftKind } from './draft'
 
+/** What a form that only asks why holds. */
 export interface ReasonDraft { reason: string }
 
 /** The form of a cylinder that is set apart. */

@@ -1,6 +1,7 @@
 import type { MassReading } from '../../quantity/mass'
 import type { DraftKind } from './draft'
 
+/** What the form of a weighing holds. */
 export interface WeighedDraft { gross: MassReading | null, scaleId: string }
 
 /** The form of a weighing. */
