@@ -119,6 +119,37 @@ describe('a trainee\'s usual supervisor', () => {
     expect((await change(tom.id, { trainee: false })).body.person.supervisor).toBeNull()
     expect((await change(tom.id, { trainee: true })).body.person.supervisor).toBeNull()
   })
+
+  it('is nobody any more once that person may not supervise', async () => {
+    for (const end of [{ active: false }, { trainee: true }, { roles: ['warehouse'] }, { certificationType: null }]) {
+      const name = Object.keys(end)[0]!
+      const eve = await addMember(admin, `Eve-${name}`, ['technician'])
+      const kim = await addMember(admin, `Kim-${name}`, ['technician'], { trainee: true })
+      await change(eve.id, { certificationType: 'II' })
+      await change(kim.id, { supervisorId: eve.id })
+      await change(eve.id, { name: `Eva ${name}` })
+      expect((await change(kim.id, { name: 'Kim' })).body.person.supervisor?.id, name).toBe(eve.id)
+      await change(eve.id, end)
+      expect((await change(kim.id, { name: 'Kim' })).body.person.supervisor, name).toBeNull()
+    }
+  })
+})
+
+describe('a trainee', () => {
+  const change = (id: string, body: object) => admin.client.patch<PersonAnswer & ProblemDetails>(`/api/people/${id}`, body)
+
+  it('is a technician and nobody else', async () => {
+    const may = await addMember(admin, 'May', ['manager'])
+    const refused = await change(may.id, { trainee: true })
+    expect([refused.status, refused.body.errors?.map(({ path }) => path)]).toEqual([422, ['trainee']])
+    const invited = await admin.client.post<ProblemDetails>('/api/people', { name: 'Moe', email: 'moe@harbor.example', roles: ['warehouse'], trainee: true })
+    expect([invited.status, invited.body.errors?.map(({ path }) => path)]).toEqual([422, ['trainee']])
+  })
+
+  it('is none any more with another role', async () => {
+    const ned = await addMember(admin, 'Ned', ['technician'], { trainee: true })
+    expect((await change(ned.id, { roles: ['manager'] })).body.person.trainee).toBe(false)
+  })
 })
 
 describe('a technician\'s van', () => {
@@ -160,6 +191,18 @@ describe('a technician\'s van', () => {
     const refused = await change(admin.id, { roles: ['technician'], vanId: kept.id })
     expect([refused.status, refused.body.type]).toEqual([409, 'last-admin'])
     expect(await holderOf(kept.id)).toBeNull()
+  })
+
+  it('is free again once its technician is none any more, or is turned off', async () => {
+    for (const end of [{ roles: ['warehouse'] }, { active: false }]) {
+      const name = Object.keys(end)[0]!
+      const left = await van(`Van ${name}`)
+      const gil = await addMember(admin, `Gil-${name}`, ['technician'])
+      await change(gil.id, { vanId: left.id })
+      expect((await change(gil.id, { name: `Gill ${name}` })).body.person.vans, name).toHaveLength(1)
+      expect((await change(gil.id, end)).body.person.vans, name).toEqual([])
+      expect(await holderOf(left.id), name).toBeNull()
+    }
   })
 
   it('can be given with the invitation', async () => {

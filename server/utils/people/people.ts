@@ -1,16 +1,17 @@
-import { and, asc, eq, inArray, sql } from 'drizzle-orm'
+import { and, asc, eq, exists, inArray, sql } from 'drizzle-orm'
 import type { z } from 'zod'
 import { people, sessions } from '../../../drizzle/schema'
 import { can } from '../../../utils/access/permissions'
 import type { Access } from '../../../utils/access/roles'
+import { supervisorsFor } from '../../../utils/access/supervisors'
 import type { PeopleAnswer, PersonLine, personChange } from '../../../utils/contract/people'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
 import { directory } from '../directory/directory'
 import { problem } from '../http/problem'
 import { securityEntry, type SecurityEvent } from '../securityLog'
-import { rolesOf } from '../session/person'
-import { isTrainee, refuseMisfit } from './personFaults'
+import { isTrainee, rolesOf } from '../session/person'
+import { refuseMisfit } from './personFaults'
 import { personLine } from './personLine'
 import { giveVan } from './personVan'
 
@@ -39,7 +40,8 @@ export async function personById(id: string): Promise<PersonRow> {
 }
 
 /**
- * Changes a person, and the van of theirs. Another role or turning off ends that person's sessions in the same commit.
+ * Changes a person, and the van of theirs. Another role or turning off ends that person's sessions in the same commit;
+ * who drives no more has no van, and who may supervise no more is nobody's usual supervisor.
  *
  * Errors: 404; 409 where nobody would be left who can manage people; 422 for what does not fit together.
  */
@@ -47,10 +49,11 @@ export async function changePerson(id: string, { vanId, ...told }: PersonChange,
   const before = await personById(id)
   const db = useDatabase()
   const { read, write } = db
-  refuseMisfit(await directory(db, true), { ...before, ...told, roles: told.roles ?? rolesOf(before) }, { supervisorId: told.supervisorId, vanId })
-  const change = isTrainee({ ...before, ...told }) ? told : { ...told, supervisorId: null }
+  refuseMisfit(await directory(db, true), { ...before, ...told, roles: told.roles ?? rolesOf(before) }, { ...told, vanId })
+  const change = isTrainee({ ...before, ...told }) ? told : { ...told, trainee: false, supervisorId: null }
   const after = { ...before, ...change, roles: change.roles ?? rolesOf(before) }
   const rights = !sameRoles(rolesOf(before), after.roles) || before.active !== after.active
+  const van = drives(before) && !drives(after) ? null : vanId
   const stays = change.active !== false && (change.roles?.includes('admin') ?? true)
   // Only what is given: the rest may have been changed by somebody else meanwhile.
   const update = read.update(people).set(change)
@@ -62,13 +65,18 @@ export async function changePerson(id: string, { vanId, ...told }: PersonChange,
   const [updated] = await write([
     statement(update),
     ...(rights ? [statement(read.delete(sessions).where(inArray(sessions.personId, changed)))] : []),
-    ...(vanId === undefined ? [] : giveVan(db, id, vanId, changed)),
+    ...(van === undefined ? [] : giveVan(db, id, van, changed)),
+    ...(supervisorsFor([after], '').length > 0 ? [] : [statement(read.update(people).set({ supervisorId: null }).where(and(eq(people.supervisorId, id), exists(changed))))]),
   ])
   if (updated?.rows.length === 0) {
     throw problem(409, 'The last administrator', 'Nobody would be left to manage people. Make another person administrator first.', undefined, { type: 'last-admin' })
   }
   await write([securityEntry({ what: happened(before, after), personId: by.personId, subject: id }, now)])
   return personLine(await personById(id), await directory(db, true), true)
+}
+
+function drives({ active, roles }: Pick<PersonRow, 'active' | 'roles'>): boolean {
+  return active && roles.includes('technician')
 }
 
 /** Holds where the person is no admin, or another admin can sign in. */

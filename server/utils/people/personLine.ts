@@ -1,7 +1,7 @@
 import type { people } from '../../../drizzle/schema'
 import type { PersonLine } from '../../../utils/contract/people'
 import type { Directory } from '../directory/directory'
-import { rolesOf } from '../session/person'
+import { isTrainee, rolesOf } from '../session/person'
 
 /** A stored person as others see it; the address only where they may. */
 export function personLine(row: typeof people.$inferSelect, from: Directory, mayReadContact: boolean): PersonLine {
@@ -11,7 +11,7 @@ export function personLine(row: typeof people.$inferSelect, from: Directory, may
     name: row.name,
     email: mayReadContact ? row.email : null,
     roles: rolesOf(row),
-    trainee: row.trainee,
+    trainee: isTrainee(row),
     certification: row.certification,
     certificationType: row.certificationType,
     certificationNumber: row.certificationNumber,

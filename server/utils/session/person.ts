@@ -9,6 +9,11 @@ export function rolesOf(row: Pick<PersonRow, 'roles'>): Role[] {
   return ROLES.filter(role => row.roles.includes(role))
 }
 
+/** Whether somebody's events wait for a supervisor's signature: only a technician is trained. */
+export function isTrainee({ roles, trainee }: Pick<PersonRow, 'roles' | 'trainee'>): boolean {
+  return trainee && roles.includes('technician')
+}
+
 /** A stored person as the screens know who is signed in. */
 export function userOf(row: PersonRow): User {
   return {
@@ -16,7 +21,7 @@ export function userOf(row: PersonRow): User {
     name: row.name,
     email: row.email,
     roles: rolesOf(row),
-    trainee: row.trainee,
+    trainee: isTrainee(row),
     certification: row.certification,
     certificationType: row.certificationType,
     certificationNumber: row.certificationNumber,
