@@ -16,7 +16,8 @@ export interface NextStep {
 export function nextStep(row: CylinderRow): NextStep | null {
   const has = (code: CylinderRow['findingCodes'][number]) => row.findingCodes.includes(code)
   if (row.lifecycle === 'retired' && has('after-end')) return { word: 'See why', screen: 'cylinder' }
-  if (row.lifecycle === 'retired' || row.lifecycle === 'condemned') return null
+  if (row.lifecycle === 'retired') return null
+  if (row.lifecycle === 'condemned') return { word: row.nothingInIt ? 'Take it out of use' : 'Empty it', screen: 'cylinder' }
   if (row.lifecycle === 'at-reclaim' || row.lifecycle === 'at-test') return { word: 'Await it', screen: 'cylinder' }
   if (row.lifecycle === 'missing') return { word: 'Look for it', screen: 'cylinder' }
   if (has('overfill')) return { word: 'Draw it down', screen: 'cylinder' }

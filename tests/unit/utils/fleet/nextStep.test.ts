@@ -39,8 +39,12 @@ describe('what to do with a cylinder next', () => {
     expect(nextStep(cylinderRow({ findingCodes: ['two-owners'] }))).toEqual({ word: 'Ship it', screen: 'shipment' })
   })
 
+  it('is to empty what is condemned and then to take it out of use: as it is, it cannot be shipped', () => {
+    expect(nextStep(cylinderRow({ lifecycle: 'condemned' }))?.word).toBe('Empty it')
+    expect(nextStep(cylinderRow({ lifecycle: 'condemned', nothingInIt: true, refrigerant: null }))).toEqual({ word: 'Take it out of use', screen: 'cylinder' })
+  })
+
   it('is nothing where its life has ended, unless it was used after that', () => {
-    expect(nextStep(cylinderRow({ lifecycle: 'condemned' }))).toBeNull()
     expect(nextStep(cylinderRow({ lifecycle: 'retired' }))).toBeNull()
     expect(nextStep(cylinderRow({ lifecycle: 'retired', findingCodes: ['after-end'] }))).toEqual({ word: 'See why', screen: 'cylinder' })
   })
