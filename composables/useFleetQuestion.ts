@@ -55,7 +55,7 @@ export function useFleetQuestion() {
     void summary.refresh()
   }
 
-  onMounted(() => past.value !== null && fleet.data.value === null && refresh())
+  onMounted(() => past.value !== null && !fleet.data.value && refresh())
   // The past does not change while one looks away.
   useRefreshOnFocus(() => past.value === null && refresh())
 
