@@ -1,4 +1,4 @@
-/** The types of technician certification. Source: 40 CFR 82.161(a). */
+/** The types of technician certification. Source: 40 CFR 82.161(a), from memory. */
 export const CERTIFICATION_TYPES = ['I', 'II', 'III', 'universal'] as const
 
 export type CertificationType = (typeof CERTIFICATION_TYPES)[number]
@@ -12,7 +12,7 @@ export interface Certification {
   certification: string | null
 }
 
-/** Each type as people read it, and what its holder may open. Source: 40 CFR 82.161(a). */
+/** Each type as people read it, and what its holder may open. Source: 40 CFR 82.161(a), from memory. */
 export const CERTIFICATION_WORDS: Record<CertificationType, { name: string, covers: string }> = {
   I: { name: 'Type I', covers: 'small appliances' },
   II: { name: 'Type II', covers: 'medium, high and very high pressure' },

@@ -15,6 +15,9 @@ const MAY_POST: Record<Role, readonly EventKind[]> = {
   admin: [],
 }
 
+/** How long an author may correct their own event, from its recording. Units: milliseconds. */
+export const AUTHOR_CORRECTS_WITHIN_MS = 24 * 3_600_000
+
 /**
  * Whether a role of this person may record events of a kind.
  *

@@ -3,15 +3,12 @@ import type { Access } from '../../../utils/access/roles'
 import { can } from '../../../utils/access/permissions'
 import type { AnyCustodyEvent, AnyRecordedEvent, CustodyEvent } from '../../../utils/custody/event'
 import { DECISION_KINDS, DISPATCH_KINDS, type EventKind } from '../../../utils/custody/kinds'
-import { mayPost } from '../../../utils/custody/posting'
+import { AUTHOR_CORRECTS_WITHIN_MS, mayPost } from '../../../utils/custody/posting'
 import { DETAILS } from '../../../utils/custody/schema'
 import { KIND_WORDS } from '../../../utils/custody/words'
 import { parseEvent } from '../../../utils/custody/schema/parseEvent'
 import type { ProblemDetails } from '../../../utils/contract/problem'
 import { sha256 } from './sha256'
-
-/** How long an author may correct their own event, from its recording. */
-const AUTHOR_CORRECTS_WITHIN_MS = 24 * 60 * 60 * 1000
 
 /** An event that was understood, with the hash by which a repetition is known. */
 export interface ParsedPost { event: AnyCustodyEvent, body: string, contentHash: string }
