@@ -10,7 +10,7 @@ export type EventParse
   = | { ok: true, event: AnyCustodyEvent }
     | { ok: false, id: string | null, errors: { path: string, message: string }[] }
 
-/** Kinds that only make sense at a place of ours. */
+/** Kinds that only make sense at a place of ours; so does an exchange, of the cylinder that comes in. */
 const NEEDS_PLACE: readonly EventKind[] = ['received', 'returned']
 
 const envelope = z.strictObject({
@@ -45,7 +45,8 @@ export function parseEvent(raw: unknown): EventParse {
     ...problems(outer.error?.issues ?? [], raw, []),
     ...(details === undefined ? [] : problems(inner?.error?.issues ?? [], details, ['details'])),
   ]
-  if (kind !== null && NEEDS_PLACE.includes(kind) && outer.data?.placeId === undefined && !errors.some(error => error.path === 'placeId')) {
+  const comesIn = kind === 'exchanged' && fieldOf(details, 'direction') === 'in'
+  if (kind !== null && (NEEDS_PLACE.includes(kind) || comesIn) && outer.data?.placeId === undefined && !errors.some(error => error.path === 'placeId')) {
     errors.push({ path: 'placeId', message: 'is missing: say where the cylinder is now' })
   }
   const other = inner?.success && kind !== null ? otherCylinderOf(kind, inner.data) : null

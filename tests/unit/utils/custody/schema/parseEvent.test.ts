@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { parseEvent } from '~~/utils/custody/schema/parseEvent'
-import { CYLINDER, idOf, kg, SHOP, STAMP, SUPPLIER } from '~~/tests/helpers/custody'
+import { CYLINDER, idOf, kg, OTHER_CYLINDER, SHIPMENT, SHOP, STAMP, SUPPLIER } from '~~/tests/helpers/custody'
 
 const sound = { id: idOf(1), cylinderId: CYLINDER, kind: 'weighed', occurredAt: '2026-07-01T12:00:00-05:00', details: { gross: { unit: 'lb', value: 41.8 } } }
 
@@ -134,6 +134,13 @@ describe('the other kinds', () => {
     expect(faults({ kind: 'received', details: {} })).toEqual(['placeId: is missing: say where the cylinder is now'])
     expect(faults({ kind: 'received', placeId: SHOP, details: {} })).toEqual([])
     expect(faults({ kind: 'returned', details: { fromFirmId: SUPPLIER } })).toHaveLength(1)
+  })
+
+  it('exchange the one that comes at a place, the one that goes wherever it was', () => {
+    const exchange = (direction: string) => ({ kind: 'exchanged', details: { direction, otherCylinderId: OTHER_CYLINDER, exchangeId: SHIPMENT, firmId: SUPPLIER } })
+    expect(faults(exchange('in'))).toEqual(['placeId: is missing: say where the cylinder is now'])
+    expect(faults({ ...exchange('in'), placeId: SHOP })).toEqual([])
+    expect(faults(exchange('out'))).toEqual([])
   })
 
   it('label with a code whose check character is right', () => {
