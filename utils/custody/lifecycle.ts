@@ -6,7 +6,7 @@ export function lifecycleOf(state: CylinderState): Lifecycle {
   if (state.retired) return 'retired'
   if (state.condemnedAt !== null) return 'condemned'
   if (state.missing) return 'missing'
-  if (state.away && !isGivenAway(state)) return state.away.at
+  if (state.away && state.away.at !== 'given-away') return state.away.at
   return (['rejected', 'quarantined'] as const).find(hold => state.holds.some(one => one.hold === hold)) ?? 'in-service'
 }
 
