@@ -109,7 +109,8 @@ function posted(server, path, text) {
         else failed(new Error(`${path} answered ${response.statusCode}: ${answer.slice(0, 500)}`))
       })
     })
-    sending.on('error', failed)
+    // A server may close a connection that was idle for some seconds just as it is taken up again.
+    sending.on('error', error => sending.reusedSocket && error.code === 'ECONNRESET' ? posted(server, path, text).then(done, failed) : failed(error))
     sending.end(text)
   })
 }
