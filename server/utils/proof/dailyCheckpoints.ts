@@ -1,6 +1,8 @@
 import type { Database } from '../database/database'
+import { Problem } from '../http/problem'
 import { checkpointNow } from './checkpointNow'
 import { newestCheckpoint } from './checkpoints'
+import { sealing, type SealingSettings } from './sealing'
 
 const DAY_MS = 86_400_000
 /** How often it is looked whether one is due: a server that slept or was down makes the missing one soon after. */
@@ -12,6 +14,16 @@ export async function isCheckpointDue(db: Database, now: number): Promise<boolea
   if (newest?.says && now - newest.says.at < DAY_MS) return false
   const { rows } = await db.readClient.execute('SELECT 1 FROM custody_events LIMIT 1')
   return rows.length > 0
+}
+
+/** Says at the start what keeps the log from being signed, not only on the day on which a checkpoint is due. */
+export async function tellWhetherSigned(db: Database, settings?: SealingSettings): Promise<void> {
+  try {
+    await sealing(db, settings)
+  }
+  catch (error) {
+    console.error('The log cannot be signed:', error instanceof Problem ? error.details.detail : String(error))
+  }
 }
 
 /** Makes a checkpoint each day for as long as the process lives, the first at once where it is due; answers how to end it. */
@@ -29,7 +41,7 @@ export function keepCheckpointing(db: Database): () => void {
     timer = setTimeout(() => void turn(), LOOK_EVERY_MS)
     timer.unref()
   }
-  void turn()
+  void tellWhetherSigned(db).then(() => hasEnded ? undefined : turn())
   return () => {
     hasEnded = true
     clearTimeout(timer)

@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto'
 import { mkdirSync, readFileSync, writeFileSync } from 'node:fs'
-import { dirname } from 'node:path'
+import { basename, dirname } from 'node:path'
 import { firm } from '../../../drizzle/schema'
 import { originOf } from '../../../utils/proof/checkpoint'
 import type { Database } from '../database/database'
@@ -45,10 +45,13 @@ export async function sealingNow(db: Database): Promise<Sealing> {
   return seal
 }
 
-/** Errors: throws where the file holds no key. */
+/** Errors: 500 where the file holds no key. */
 function keyFromFile(file: string): Buffer {
   const seed = Buffer.from(readOrMake(file), 'base64')
-  if (seed.length !== 32) throw new Error(`${file} does not hold a key: 32 bytes in base64. Put the right file back, or set CHECKPOINT_KEY`)
+  if (seed.length !== 32) {
+    throw problem(500, 'The key that signs the log cannot be read',
+      `The file ${basename(file)} does not hold a key: 32 bytes in base64. Put the right file back, or set CHECKPOINT_KEY.`)
+  }
   return seed
 }
 

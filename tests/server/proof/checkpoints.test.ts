@@ -1,7 +1,7 @@
-import { existsSync, readFileSync, statSync } from 'node:fs'
-import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { existsSync, readFileSync, statSync, writeFileSync } from 'node:fs'
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest'
 import { allCheckpoints, listCheckpoints, makeCheckpoint } from '../../../server/utils/proof/checkpoints'
-import { isCheckpointDue } from '../../../server/utils/proof/dailyCheckpoints'
+import { isCheckpointDue, tellWhetherSigned } from '../../../server/utils/proof/dailyCheckpoints'
 import { sealing, type Sealing } from '../../../server/utils/proof/sealing'
 import { judgeSignature } from '../../../server/utils/proof/signingKey'
 import { verifyLog } from '../../../server/utils/proof/verifyLog'
@@ -114,6 +114,26 @@ describe('the key', () => {
     expect(again!.signer.publicKey).toBe(first!.signer.publicKey)
     const secret = readFileSync(file, 'utf8').trim()
     expect(readFileSync(log.file).includes(secret)).toBe(false)
+  })
+
+  it('that is no key is named at the start, and to who asks for what it signs', async () => {
+    const file = `${log.file}.key`
+    const settings = { checkpointKey: undefined, formerCheckpointKeys: [] }
+    const good = readFileSync(file)
+    const said = vi.spyOn(console, 'error').mockImplementation(() => undefined)
+    try {
+      await tellWhetherSigned(log.db, settings)
+      expect(said).not.toHaveBeenCalled()
+      writeFileSync(file, 'a photograph of the key')
+      const detail = expect.stringMatching(/^The file collarbook\.db\.key does not hold a key/)
+      await expect(sealing(log.db, settings)).rejects.toMatchObject({ details: { status: 500, detail } })
+      await tellWhetherSigned(log.db, settings)
+      expect(said).toHaveBeenCalledExactlyOnceWith('The log cannot be signed:', detail)
+    }
+    finally {
+      writeFileSync(file, good)
+      said.mockRestore()
+    }
   })
 
   it('may be exchanged where the former one is named, and not in silence', async () => {
