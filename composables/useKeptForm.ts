@@ -1,0 +1,86 @@
+import { useKept } from '~~/composables/useKept'
+import { deviceNow, usePostingStore, type NewEvent } from '~~/stores/posting'
+import type { ProblemDetails } from '~~/utils/contract/problem'
+import type { CustodyEvent } from '~~/utils/custody/event'
+
+/** What every form asks beside the details of its kind. */
+export interface Envelope {
+  /** '' = now, else the local time as the browser's field has it. */
+  at: string
+  supervisorId: string
+  note: string
+}
+
+interface Kept<Draft> {
+  draft: Draft
+  envelope: Envelope
+  /** What was sent and may have arrived: the same content goes out again as the same events. */
+  sent: { content: string, events: CustodyEvent[] } | null
+}
+
+/**
+ * The content of a form, kept until it is recorded: a lost network, a refusal or a closed page loses nothing.
+ *
+ * Shape: `key` names the form, by cylinder and kind; `supervisorId` is whom a trainee's form begins with, '' for nobody;
+ * `sealedOnce` makes the events to send, `recorded` forgets what was kept.
+ */
+export function useKeptForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string) {
+  const posting = usePostingStore()
+  const { restored: kept, keep: store } = useKept<Kept<Draft>>(key)
+  const draft = ref(empty()) as Ref<Draft>
+  const envelope = ref(emptyEnvelope())
+  const sent = shallowRef<Kept<Draft>['sent']>(null)
+  const restored = ref(false)
+  const busy = ref(false)
+  const problem = ref<ProblemDetails | null>(null)
+
+  onMounted(() => {
+    if (kept.value) {
+      draft.value = { ...empty(), ...kept.value.draft }
+      envelope.value = kept.value.envelope
+      sent.value = kept.value.sent
+      restored.value = true
+    }
+    watch([draft, envelope], keep, { deep: true })
+  })
+
+  function emptyEnvelope(): Envelope {
+    return { at: '', supervisorId: supervisorId(), note: '' }
+  }
+
+  function keep() {
+    store({ draft: draft.value, envelope: envelope.value, sent: sent.value })
+  }
+
+  function startOver() {
+    draft.value = empty()
+    envelope.value = emptyEnvelope()
+    sent.value = null
+    restored.value = false
+    problem.value = null
+    nextTick(() => store(null))
+  }
+
+  function recorded() {
+    store(null)
+  }
+
+  function sealedOnce(contents: readonly Omit<NewEvent, 'occurredAt'>[]): CustodyEvent[] {
+    const { at } = envelope.value
+    const content = JSON.stringify([contents, at])
+    if (sent.value?.content === content) return sent.value.events
+    const occurredAt = at === '' ? deviceNow() : deviceNow(new Date(at).getTime())
+    const before = sent.value?.events
+    const events = contents.map((each, index) => {
+      const same = before?.[index]
+      return same
+        ? { ...each, occurredAt, id: same.id, deviceId: same.deviceId, deviceSeq: same.deviceSeq } as CustodyEvent
+        : posting.seal({ ...each, occurredAt })
+    })
+    sent.value = { content, events }
+    keep()
+    return events
+  }
+
+  return { draft, envelope, restored, busy, problem, startOver, recorded, sealedOnce }
+}
