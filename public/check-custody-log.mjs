@@ -40,7 +40,7 @@ function sha256(...parts) {
   return hash.digest()
 }
 
-// ---- What the command line says
+// What the command line says
 
 function argumentsOf(given) {
   const keys = []
@@ -53,7 +53,7 @@ function argumentsOf(given) {
   return { file: files[0], keys }
 }
 
-// ---- Checkpoints: C2SP signed-note, Ed25519 (RFC 8032), Merkle trees (RFC 6962)
+// Checkpoints: C2SP signed-note, Ed25519 (RFC 8032), Merkle trees (RFC 6962)
 
 /** A public key: name, its id in hexadecimal, base64 of the byte 1 and the key; null where the text is none. */
 function publicKey(text) {
@@ -118,7 +118,7 @@ function rootOf(tree) {
   return tree.map(([, root]) => root).reduceRight((right, left) => sha256(Buffer.of(1), left, right))
 }
 
-// ---- The lines of one cylinder
+// The lines of one cylinder
 
 function checkChain(rows) {
   let before = null
@@ -146,7 +146,7 @@ function addToTrees(rows, checkpoints) {
   }
 }
 
-// ---- How much is in a cylinder, by its events alone
+// How much is in a cylinder, by its events alone
 
 const GRAMS_PER_POUND = 453.59237
 
@@ -505,7 +505,7 @@ function checkNet(rows, told) {
   }
 }
 
-// ---- The file
+// The file
 
 const { file, keys: given } = argumentsOf(process.argv.slice(2))
 let header = null
