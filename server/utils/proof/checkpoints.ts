@@ -5,6 +5,7 @@ import { checkpointText, leafText, readCheckpoint, type Checkpoint } from '../..
 import { leafHash, merkleTree } from '../../../utils/proof/merkle'
 import { readNote } from '../../../utils/proof/note'
 import { sha256 } from '../custody/sha256'
+import { logLength } from '../custody/logLength'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { foreignCursor } from '../http/cursor'
@@ -40,8 +41,7 @@ export function makeCheckpoint(db: Database, sealing: Sealing, now: number, aske
 async function make(db: Database, sealing: Sealing, now: number, askedBy: string | null): Promise<StoredCheckpoint> {
   for (let attempt = 0; attempt < RACE_RETRIES; attempt++) {
     const before = await newestCheckpoint(db)
-    const { rows: [counted] } = await db.readClient.execute('SELECT coalesce(max(seq), 0), count(*) FROM custody_events')
-    const [seq, events] = [counted![0] as number, counted![1] as number]
+    const { seq, events } = await logLength(db)
     const tree = merkleTree(sha256OfBytes)
     for await (const heads of headsAt(db, seq)) for (const head of heads) tree.add(leafHash(Buffer.from(leafText(head)), sha256OfBytes))
     const number = (before?.number ?? 0) + 1

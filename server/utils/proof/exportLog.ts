@@ -1,5 +1,6 @@
 import { fold } from '../../../utils/custody/fold'
 import { foldContext } from '../custody/foldContext'
+import { logLength } from '../custody/logLength'
 import { LOG_COLUMNS, recordedEvent, type LogRow } from '../custody/logRow'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
@@ -21,8 +22,7 @@ const FORMAT = { format: 'custody-log', version: 1 }
  */
 export async function* exportedLog(db: Database, { origin, trusted }: Sealing, from: Directory, now: number): AsyncGenerator<string> {
   const checkpoints = await allCheckpoints(db)
-  const { rows: [counted] } = await db.readClient.execute('SELECT coalesce(max(seq), 0), count(*) FROM custody_events')
-  const [seq, events] = [counted![0] as number, counted![1] as number]
+  const { seq, events } = await logLength(db)
   const [publicKey, ...formerKeys] = trusted
   yield textOf([
     { ...FORMAT, origin, publicKey, formerKeys, exportedAt: new Date(now).toISOString(), seq, events, columns: LOG_COLUMNS },

@@ -1,4 +1,5 @@
 import type { LogVerification, VerifyProgress } from '../../../utils/contract/log'
+import { logLength } from '../custody/logLength'
 import type { LogRow } from '../custody/logRow'
 import type { Database } from '../database/database'
 import { allCheckpoints, type StoredCheckpoint } from './checkpoints'
@@ -45,8 +46,7 @@ export async function* verifying(db: Database, { now, sealing, since = null }: V
   const walk = streamWalk(judged, damage)
   let before = 0
   try {
-    const { rows: [counted] } = await db.readClient.execute('SELECT coalesce(max(seq), 0), count(*) FROM custody_events')
-    const [reach, events] = [counted![0] as number, counted![1] as number]
+    const { seq: reach, events } = await logLength(db)
     if (reach !== events) await tellGaps(db, reach, damage)
     if (from) before = await linesUpTo(db, from.says!.seq)
     const steps = from ? walkSince(db, walk, from.says!.seq, reach) : walkAll(db, walk, reach)
