@@ -18,7 +18,7 @@ export function readingAtDivision(fromPounds: number, toPounds: number): fc.Arbi
 /** From a bottle for samples to a ton tank. */
 export const anyWaterCapacity = readingAtDivision(1, 1600)
 /** A stamp never says that its steel weighs nothing. */
-export const anyTareWeight = readingAtDivision(1, 1500)
+const anyTareWeight = readingAtDivision(1, 1500)
 
 export const anyCondition: fc.Arbitrary<Condition> = fc.constantFrom('clean', 'suspect', 'burnt', 'mixed', 'unknown')
 

@@ -23,7 +23,7 @@ export function byRole(root: Element, role: string, name?: string | RegExp): HTM
 }
 
 /** The name by which an element is read out. */
-export function nameOf(element: HTMLElement): string {
+function nameOf(element: HTMLElement): string {
   const labelled = element.getAttribute('aria-labelledby')
   if (labelled) return words(element.ownerDocument.getElementById(labelled))
   const label = element.getAttribute('aria-label')

@@ -2,10 +2,8 @@ import { z } from 'zod'
 import { RIN } from '../requalification/struckMark'
 import { id, line, printedLine, type Page } from './parts'
 
-/** The sorts of place where a cylinder stands. */
-export const PLACE_KINDS = ['shop', 'rack', 'van', 'site', 'firm'] as const
 /** What a firm is to the contractor. */
-export const FIRM_KINDS = ['reclaimer', 'requalifier', 'supplier', 'customer', 'carrier'] as const
+const FIRM_KINDS = ['reclaimer', 'requalifier', 'supplier', 'customer', 'carrier'] as const
 
 /** POST /api/places. A firm's own place is made with the firm. */
 export const placeBody = z.strictObject({
@@ -49,7 +47,7 @@ export type FirmsAnswer = Page<Firm>
 export interface Place {
   id: string
   name: string
-  kind: (typeof PLACE_KINDS)[number]
+  kind: 'shop' | 'rack' | 'van' | 'site' | 'firm'
   parentId: string | null
   firmId: string | null
   technicianId: string | null

@@ -108,7 +108,7 @@ export function nameOwner(turn: Turn, ownerId: string | null): void {
  *
  * @example splitByShare(-5, [{ ownerId: 'a', grams: 2 }, { ownerId: 'b', grams: 1 }]) // a: -4, b: -1
  */
-export function splitByShare(grams: number, shares: readonly Share[]): Share[] {
+function splitByShare(grams: number, shares: readonly Share[]): Share[] {
   const total = sum(shares)
   const sign = grams < 0 ? -1 : 1
   const amount = Math.abs(grams)
