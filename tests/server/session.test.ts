@@ -55,7 +55,7 @@ describe('signing in', () => {
   it('answers who one is, and nothing of the password', async () => {
     const answer = await new TestClient(server.baseUrl).signIn(' Tess@Harbor.example ', PASSWORD)
     expect(answer.body).toEqual({
-      user: { id: tech.id, name: 'Tess', email: 'tess@harbor.example', roles: ['technician'], trainee: false, certification: null, units: 'lb' },
+      user: { id: tech.id, name: 'Tess', email: 'tess@harbor.example', roles: ['technician'], trainee: false, certification: null, certificationType: null, certificationNumber: null, units: 'lb' },
     })
   })
 
