@@ -73,8 +73,9 @@ function judgeOnce(one: ReadPosting, now: Group, heldBack: ReadonlySet<number>):
 }
 
 /** Whom the line names as supervisor: of a trainee's entry only one who may be it. What was done is kept either way. */
-function supervisorOf({ supervisorId = null }: AnyCustodyEvent, { personId, trainee }: Access, { directory }: Group): string | null {
-  return supervisorId === null || !trainee || maySupervise(directory, supervisorId, personId) ? supervisorId : null
+function supervisorOf({ supervisorId }: AnyCustodyEvent, { personId, trainee }: Access, { directory }: Group): string | null {
+  if (supervisorId === undefined) return null
+  return !trainee || maySupervise(directory, supervisorId, personId) ? supervisorId : null
 }
 
 const OTHER_HALF_REFUSED = refuse(409, 'Its other half was refused', 'Half of what happened between two cylinders is not recorded alone. Mend the other half and send both again.')
