@@ -16,7 +16,11 @@ export function instantOf({ asOf, knownAt }: Past): number {
 
 /** A cylinder as it stood, or as it was known; null where nothing had happened to it by then. */
 export function foldAsItStood(events: readonly AnyRecordedEvent[], context: FoldContext, { asOf, knownAt }: Past): FoldResult | null {
-  const known = knownAt === null ? events : events.filter(({ recordedAt }) => recordedAt <= knownAt)
-  const folded = fold(known, context, asOf ?? Infinity)
+  const folded = fold(knownBy(events, knownAt), context, asOf ?? Infinity)
   return folded.steps.length === 0 ? null : folded
+}
+
+/** The events that had been recorded by an instant; all of them where none is asked for. */
+export function knownBy(events: readonly AnyRecordedEvent[], knownAt: number | null): readonly AnyRecordedEvent[] {
+  return knownAt === null ? events : events.filter(({ recordedAt }) => recordedAt <= knownAt)
 }

@@ -1,5 +1,5 @@
 import type { CustodyLogAnswer, FoldInput } from '../../../utils/contract/custody'
-import { foldAsItStood, type Past } from '../../../utils/custody/asItStood'
+import { foldAsItStood, knownBy, type Past } from '../../../utils/custody/asItStood'
 import { asRecorded } from '../../../utils/custody/asRecorded'
 import { applyCorrections } from '../../../utils/custody/corrections'
 import type { LogLine, Named } from '../../../utils/custody/cylinderView'
@@ -31,7 +31,8 @@ export async function recordedEvents(db: Database, cylinderId: string): Promise<
  * Errors: 400 for a cursor that is none of ours; 404 where nothing had happened by then.
  */
 export async function custodyLog(db: Database, cylinderId: string, page: { limit: number, cursor?: string }, past: Past | null = null, how: 'recorded' | 'stands' = 'stands'): Promise<CustodyLogAnswer> {
-  const [events, from] = await Promise.all([recordedEvents(db, cylinderId), directory(db)])
+  const [recorded, from] = await Promise.all([recordedEvents(db, cylinderId), directory(db)])
+  const events = knownBy(recorded, past?.knownAt ?? null)
   const folded = past === null ? fold(events, foldContext(from)) : foldAsItStood(events, foldContext(from), past)
   if (folded === null) throw notYetThere()
   const { state } = folded

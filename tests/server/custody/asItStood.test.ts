@@ -124,6 +124,21 @@ describe('the fleet as it stood', () => {
   })
 })
 
+describe('the log as it was known', () => {
+  it('has no other details in the place of a line that nobody had corrected yet', async () => {
+    const corrected = await newCylinder(log)
+    const weighed = sent(corrected, 'weighed', { gross: lb(30) }, happened(3))
+    await take([weighed], 3)
+    const [answer] = await record(log.db, log.manager, [sent(corrected, 'corrected', { eventId: weighed.id, reason: 'Misread', instead: { gross: lb(33) } }, { expects: 2 })], { now: hoursAgo(1) })
+    expect(answer?.outcome).toBe('accepted')
+    const insteadAt = async (past: Past) => (await custodyLog(log.db, corrected, { limit: 10 }, past)).items.find(({ id }) => id === weighed.id)!.instead
+    expect(await insteadAt({ asOf: null, knownAt: hoursAgo(2) })).toBeUndefined()
+    expect(await insteadAt({ asOf: null, knownAt: hoursAgo(1) })).toEqual({ gross: lb(33) })
+    // What had happened two hours ago, with all that is known of it now.
+    expect(await insteadAt(asOf(2))).toEqual({ gross: lb(33) })
+  })
+})
+
 describe('a question about the past', () => {
   it('asks for no instant that is still to come', () => {
     expect(() => askedPast({ asOf: new Date(NOW + 1).toISOString() }, NOW)).toThrow('422')
