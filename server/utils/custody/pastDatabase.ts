@@ -17,32 +17,45 @@ const ROWS_AT_ONCE = 200
 /** A database that holds the fleet as it stood at a past instant; it is read like that of the present. */
 export interface PastDatabase { db: Database, atMs: number, remove: () => void }
 
-/** An empty database for a past instant, in a file of its own that {@link PastDatabase.remove} takes away. */
+/**
+ * Databases of a past that nobody reads any more. The driver keeps the descriptors of a closed file, and with them its
+ * place on the disk: so none is closed, and the next past is made in the same file.
+ */
+const spare = new WeakMap<Database, Database[]>()
+
+/** An empty database for a past instant, in a file that no other past uses until {@link PastDatabase.remove} gives it up. */
 export async function openPastDatabase(db: Database, past: Past): Promise<PastDatabase> {
-  const from = await directory(db)
-  const { rows } = await db.readClient.execute({
+  const [from, { rows }] = await Promise.all([directory(db), db.readClient.execute({
     sql: `SELECT sql FROM sqlite_master WHERE type IN ('table', 'index') AND sql IS NOT NULL AND tbl_name IN (${TABLES.map(() => '?').join(', ')}) ORDER BY type DESC`,
     args: TABLES,
-  })
-  const folder = mkdtempSync(join(tmpdir(), 'collarbook-past-'))
-  const drop = () => rmSync(folder, { recursive: true, force: true })
-  process.once('exit', drop)
-  const own = await openDatabase(`file:${join(folder, 'past.db')}`)
+  })])
+  const spares = spare.get(db) ?? []
+  spare.set(db, spares)
+  const own = spares.pop() ?? await openDatabase(`file:${join(ownFolder(), 'past.db')}`)
   lendDirectory(own, from)
-  await own.write([
-    ...rows.map(row => row[0] as string),
-    'CREATE TABLE places (id TEXT PRIMARY KEY, name TEXT NOT NULL, parent_id TEXT)',
-    ...[...from.places.values()].map(({ id, name, parentId }) => ({ sql: 'INSERT INTO places VALUES (?, ?, ?)', args: [id, name, parentId] })),
-  ])
-  return {
-    db: own,
-    atMs: instantOf(past),
-    remove() {
-      process.removeListener('exit', drop)
-      own.close()
-      drop()
-    },
+  try {
+    await own.write([
+      ...[...TABLES, 'places'].map(table => `DROP TABLE IF EXISTS ${table}`),
+      ...rows.map(row => row[0] as string),
+      'CREATE TABLE places (id TEXT PRIMARY KEY, name TEXT NOT NULL, parent_id TEXT)',
+      ...[...from.places.values()].map(({ id, name, parentId }) => ({ sql: 'INSERT INTO places VALUES (?, ?, ?)', args: [id, name, parentId] })),
+    ])
   }
+  catch (error) {
+    spares.push(own)
+    throw error
+  }
+  return { db: own, atMs: instantOf(past), remove: () => void spares.push(own) }
+}
+
+const folders: string[] = []
+
+/** A new folder that goes with the process. */
+function ownFolder(): string {
+  const folder = mkdtempSync(join(tmpdir(), 'collarbook-past-'))
+  if (folders.length === 0) process.once('exit', () => folders.forEach(one => rmSync(one, { recursive: true, force: true })))
+  folders.push(folder)
+  return folder
 }
 
 /** Fills a past database with cylinders as their logs, read from the present one, had them. */

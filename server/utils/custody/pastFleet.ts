@@ -54,7 +54,8 @@ export async function pastFleet(db: Database, past: Past, isNextPage: boolean, c
   }
   catch (error) {
     one.readers--
-    all.splice(all.indexOf(one), 1)
+    // Of several who waited for it the first takes it off the list.
+    if (all.includes(one)) all.splice(all.indexOf(one), 1)
     throw error
   }
 }

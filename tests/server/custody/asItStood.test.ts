@@ -70,6 +70,20 @@ describe('one cylinder as it stood', () => {
     expect(await pastCylinder(log.db, filled, { asOf: NOW + 60_000, knownAt: null })).toEqual(present)
   })
 
+  it('leaves no file open behind it, however often it is asked for', async () => {
+    const look = () => pastCylinder(log.db, filled, asOf(29))
+    await look()
+    const before = readdirSync('/proc/self/fd').length
+    for (let times = 0; times < 10; times++) await look()
+    // A reader's connection or two may be opened only now.
+    expect(readdirSync('/proc/self/fd').length).toBeLessThan(before + 10)
+  })
+
+  it('is another one at the same time', async () => {
+    const both = await Promise.all([46, 44, 46, 44].map(hours => pastCylinder(log.db, filled, asOf(hours))))
+    expect(both.map(({ contents }) => contents.netGrams)).toEqual([5_670, 3_855, 5_670, 3_855])
+  })
+
   it('was not there before its first event', async () => {
     await expect(pastCylinder(log.db, filled, asOf(51))).rejects.toThrow('404')
     await expect(custodyLog(log.db, filled, { limit: 10 }, asOf(51))).rejects.toThrow('404')
@@ -121,6 +135,20 @@ describe('the fleet as it stood', () => {
     for (let hours = 1; hours < 9; hours++) await listed(asOf(hours))
     // The one that was asked for last, and the two before it.
     expect(pastFiles()).toBeLessThanOrEqual(before + 3)
+  })
+
+  it('that cannot be made takes no other off the list', async () => {
+    const ownLog = await openLogDatabase()
+    await newCylinder(ownLog)
+    const inUse = await pastFleet(ownLog.db, asOf(2), false)
+    const folder = process.env.TMPDIR
+    process.env.TMPDIR = '/there/is/no/such/folder'
+    const both = await Promise.allSettled([1, 2].map(() => pastFleet(ownLog.db, asOf(1), false)))
+    if (folder === undefined) delete process.env.TMPDIR
+    else process.env.TMPDIR = folder
+    expect(both.map(({ status }) => status)).toEqual(['rejected', 'rejected'])
+    expect((await pastFleet(ownLog.db, asOf(2), false)).db).toBe(inUse.db)
+    ownLog.close()
   })
 })
 
