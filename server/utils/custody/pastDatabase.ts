@@ -1,4 +1,4 @@
-import { mkdtempSync, rmSync } from 'node:fs'
+import { existsSync, mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { setImmediate as nextTurn } from 'node:timers/promises'
@@ -31,7 +31,7 @@ export async function openPastDatabase(db: Database, past: Past): Promise<PastDa
   })])
   const spares = spare.get(db) ?? []
   spare.set(db, spares)
-  const own = spares.pop() ?? await openDatabase(`file:${join(ownFolder(), 'past.db')}`)
+  const own = takeOne(spares) ?? await openDatabase(`file:${join(ownFolder(), 'past.db')}`)
   lendDirectory(own, from)
   try {
     await own.write([
@@ -46,6 +46,14 @@ export async function openPastDatabase(db: Database, past: Past): Promise<PastDa
     throw error
   }
   return { db: own, atMs: instantOf(past), remove: () => void spares.push(own) }
+}
+
+/** One of these; not one whose file was swept away meanwhile, as systems do with what lies long among their temporary files. */
+function takeOne(spares: Database[]): Database | undefined {
+  const own = spares.pop()
+  if (own === undefined || (own.file !== null && existsSync(own.file))) return own
+  own.close()
+  return takeOne(spares)
 }
 
 const folders: string[] = []

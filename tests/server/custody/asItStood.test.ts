@@ -1,12 +1,14 @@
 import { randomBytes, randomUUID } from 'node:crypto'
-import { readdirSync } from 'node:fs'
+import { existsSync, readdirSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
+import { dirname } from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { askedPast } from '../../../server/utils/custody/askedPast'
 import { custodyLog } from '../../../server/utils/custody/custodyLog'
 import { cylinderView } from '../../../server/utils/custody/cylinderViews'
 import { fleet } from '../../../server/utils/custody/fleet'
 import { pastCylinder } from '../../../server/utils/custody/pastCylinder'
+import { openPastDatabase } from '../../../server/utils/custody/pastDatabase'
 import { pastFleet, pastProgress } from '../../../server/utils/custody/pastFleet'
 import { fleetQuery, type FleetAnswer } from '../../../utils/contract/custody'
 import type { Past } from '../../../utils/custody/asItStood'
@@ -70,13 +72,20 @@ describe('one cylinder as it stood', () => {
     expect(await pastCylinder(log.db, filled, { asOf: NOW + 60_000, knownAt: null })).toEqual(present)
   })
 
-  it('leaves no file open behind it, however often it is asked for', async () => {
+  it.runIf(existsSync('/proc/self/fd'))('leaves no file open behind it, however often it is asked for', async () => {
     const look = () => pastCylinder(log.db, filled, asOf(29))
     await look()
     const before = readdirSync('/proc/self/fd').length
     for (let times = 0; times < 10; times++) await look()
     // A reader's connection or two may be opened only now.
     expect(readdirSync('/proc/self/fd').length).toBeLessThan(before + 10)
+  })
+
+  it('is made also where the file of an earlier one was swept away', async () => {
+    const { db, remove } = await openPastDatabase(log.db, asOf(29))
+    remove()
+    rmSync(dirname(db.file!), { recursive: true })
+    expect((await pastCylinder(log.db, filled, asOf(46))).contents.netGrams).toBe(5_670)
   })
 
   it('is another one at the same time', async () => {
