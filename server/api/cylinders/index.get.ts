@@ -1,5 +1,6 @@
 import { getRequestHeader, setResponseHeader, setResponseHeaders } from 'h3'
 import { fleetListQuery } from '../../../utils/contract/custody'
+import { endWithAnswer } from '../../utils/csv/endWithAnswer'
 import { askedPast } from '../../utils/custody/askedPast'
 import { fleet } from '../../utils/custody/fleet'
 import { fleetCsv } from '../../utils/custody/fleetCsv'
@@ -24,6 +25,7 @@ export default apiRoute({ permission: 'fleet:read', query: fleetListQuery }, asy
     const csv = await fleetCsv(db, query, atMs)
     isStreaming = true
     csv.once('close', giveBack)
+    endWithAnswer(event, csv)
     setResponseHeaders(event, { 'Content-Type': 'text/csv; charset=utf-8; header=present', 'Content-Disposition': 'attachment; filename="fleet.csv"' })
     return csv
   }
