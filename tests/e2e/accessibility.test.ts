@@ -70,7 +70,6 @@ const SCREENS: Record<string, Screen[]> = {
   'c/[ref]/act/transferred.vue': [{ as: technician, at: demo => `/c/${demo.codes.usual}/act/transferred` }],
   'c/[ref]/act/exchanged.vue': [{ as: warehouse, at: demo => `/c/${demo.codes.usual}/act/exchanged` }],
   'c/[ref]/act/corrected.vue': [{ as: manager, at: demo => `/c/${demo.codes.usual}/act/corrected?event=${demo.event}` }],
-  'c/[ref]/act/countersigned.vue': [{ as: technician, at: demo => `/c/${demo.codes.usual}/act/countersigned` }],
   'countersign.vue': [
     { as: technician, at: () => '/countersign' },
     { as: manager, at: () => '/countersign' },
@@ -260,6 +259,7 @@ async function typed(page: Page, code: string): Promise<void> {
 
 /** Pages that show nothing, and why. */
 const WITHOUT_SCREEN: Record<string, string> = {
+  'c/[ref]/act/countersigned.vue': 'leads on to what waits for a signature on the cylinder',
   'index.vue': 'leads on to the first screen of whoever opens it',
 }
 
