@@ -18,6 +18,8 @@ const served = { testTimeout: 120_000, hookTimeout: 180_000, fileParallelism: fa
 
 export default defineConfig(async () => ({
   test: {
+    // Screens looked at side by side: more than this only wait for the processor.
+    maxConcurrency: 3,
     projects: [
       nodeProject('architecture'),
       nodeProject('unit'),

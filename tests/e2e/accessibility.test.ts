@@ -316,7 +316,7 @@ describe('every page', () => {
     expect([...Object.keys(SCREENS), ...Object.keys(WITHOUT_SCREEN)].sort()).toEqual(pages.sort())
   })
 
-  it.each(Object.entries(SCREENS).flatMap(([file, screens]) => screens.map((screen, index) => ({ file, screen, who: screen.as, nth: index + 1 }))))(
+  it.concurrent.each(Object.entries(SCREENS).flatMap(([file, screens]) => screens.map((screen, index) => ({ file, screen, who: screen.as, nth: index + 1 }))))(
     'can be read and pressed by everybody on a phone and at a desk, in light and in dark, and says nothing of errors: $file $nth, for $who',
     async ({ screen }) => {
       const [phone, desk] = await Promise.all([wrongWith(screen, PHONE), wrongWith(screen, DESK)])
@@ -325,7 +325,7 @@ describe('every page', () => {
 })
 
 describe('what a page shows once something is pressed', () => {
-  it.each(Object.entries(PRESSED))('is as good to read and to press: %s', async (_, screen) => {
+  it.concurrent.each(Object.entries(PRESSED))('is as good to read and to press: %s', async (_, screen) => {
     const [phone, desk] = await Promise.all([wrongWith(screen, PHONE), wrongWith(screen, DESK)])
     expect({ phone, desk }).toEqual({ phone: [], desk: [] })
   })
