@@ -56,6 +56,7 @@ async function keptLog() {
 /** What an older version made beside the log is made again once, and not by each server that is measured. */
 async function broughtToShape(file) {
   const db = await openDatabase(`file:${file}`)
+  await db.migrate('drizzle/migrations')
   await bringCachesToShape(db)
   await db.readClient.execute('PRAGMA wal_checkpoint(TRUNCATE)')
   db.close()

@@ -79,7 +79,7 @@ export async function makeLog(db, cylinders, { shop, van, access, nowMs }, seali
         ...happening(number, step, { shop, van }),
       })
       if ('refused' in post) throw new Error(JSON.stringify(post.refused))
-      const row = sealedRow(post, { access, now: at + 2_000, deviceNow: null }, head, seq)
+      const row = sealedRow(post, { access, now: at + 2_000, deviceNow: null }, head, seq, null)
       Object.assign(head, { version: row.version, hash: row.hash })
       rows.push(row)
       if (rows.length < ROWS_A_STATEMENT * STATEMENTS_A_COMMIT && number < cylinders - 1) continue
