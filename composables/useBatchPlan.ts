@@ -60,11 +60,17 @@ export function useBatchPlan() {
   })
 
   const listedFrom = computed(() => act.value === 'unload' ? van.value : from.value)
-  const expectedRequest = useLoaded<ExpectedCylinder[] | null>(`batch-expected ${act.value} ${van.value}`, async () => {
+  // Which van it is, where the address does not say, is known with the places: the server asks for what stands there too,
+  // and the browser begins with the same.
+  const expectedRequest = useLoaded<ExpectedCylinder[] | null>(`batch-expected ${act.value} ${text('van')}`, async () => {
+    await lists.ready
     if (text('expect')) return Promise.all(text('expect').split(',').map(askedFor))
     return listedFrom.value ? standingAt(listedFrom.value) : null
   }, [listedFrom, () => route.query.expect])
-  const vanRequest = useLoaded(`batch-van ${van.value}`, async () => act.value === 'load' && van.value ? api.get<VanAnswer>(`/api/vans/${van.value}`) : null, [van])
+  const vanRequest = useLoaded(`batch-van ${act.value} ${text('van')}`, async () => {
+    await lists.ready
+    return act.value === 'load' && van.value ? api.get<VanAnswer>(`/api/vans/${van.value}`) : null
+  }, [van])
 
   const plan = computed<BatchPlan>(() => ({
     act: act.value,

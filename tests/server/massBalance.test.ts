@@ -108,9 +108,9 @@ describe('GET /api/reports/mass-balance', () => {
       { ...eventOf(view.id, 'filled'), details: { refrigerant: 'R-22', grossAfter: lb(36.5), looked: true, ownerOfRefrigerantId: customerId } },
       { ...eventOf(view.id, 'weighed'), details: { gross: lb(35.5) } },
     ]
-    // All within a moment: the device's count keeps them in order.
-    const { occurredAt } = happened[2]!
-    await posted(shop.technician.client, happened.map((event, index) => ({ ...event, occurredAt, deviceId: 'phone-1', deviceSeq: index + 1 })))
+    // All within a moment, one after the other.
+    const begunAt = Date.parse(happened[2]!.occurredAt)
+    await posted(shop.technician.client, happened.map((event, index) => ({ ...event, occurredAt: new Date(begunAt - 2 + index).toISOString() })))
     await registered(shop, { contents: { refrigerant: 'R-410A', condition: 'clean' }, gross: lb(30) })
   }, 120_000)
   afterAll(() => server.stop())
