@@ -186,6 +186,8 @@ export const custodyEvents = sqliteTable('custody_events', {
 }, table => [
   uniqueIndex('custody_events_cylinder_version').on(table.cylinderId, table.version),
   index('custody_events_supervised').on(table.supervisorId).where(sql`trainee = 1`),
+  // What was said once and is not said any more is found along it.
+  index('custody_events_corrected').on(table.cylinderId).where(sql`kind = 'corrected'`),
 ])
 
 /**

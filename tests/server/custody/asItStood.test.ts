@@ -176,6 +176,22 @@ describe('the log as it was known', () => {
   })
 })
 
+describe('a cylinder as it was known beside others', () => {
+  const known = async (id: string, hours: number) =>
+    (await pastCylinder(log.db, id, { asOf: null, knownAt: hoursAgo(hours) })).findings.map(({ code: word }) => word)
+
+  it('shared a code with the one whose label was corrected since', async () => {
+    const [first, second, shared] = [await newCylinder(log), await newCylinder(log), drawLabelCode(randomBytes)]
+    await take([sent(first, 'labelled', { code: shared }, happened(6))], 6)
+    const wrong = sent(second, 'labelled', { code: shared }, happened(5))
+    await take([wrong], 5)
+    const answers = await record(log.db, log.manager, [sent(second, 'corrected', { eventId: wrong.id, reason: 'Wrong cylinder', instead: { code: drawLabelCode(randomBytes) } }, { expects: 2 })], { now: hoursAgo(1) })
+    expect(answers[0]?.outcome).toBe('accepted')
+    expect([await known(first, 2), await known(second, 2)].map(codes => codes.includes('code-on-two'))).toEqual([true, true])
+    expect(await known(first, 0)).not.toContain('code-on-two')
+  })
+})
+
 describe('a question about the past', () => {
   it('asks for no instant that is still to come', () => {
     expect(() => askedPast({ asOf: new Date(NOW + 1).toISOString() }, NOW)).toThrow('422')

@@ -1,0 +1,1 @@
+CREATE INDEX `custody_events_corrected` ON `custody_events` (`cylinder_id`) WHERE kind = 'corrected';
