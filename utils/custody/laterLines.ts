@@ -20,9 +20,15 @@ export interface ChangedLine { eventId: string, version: number, kind: EventKind
 /** Kinds that change what other lines say on purpose. */
 const MENDING: readonly EventKind[] = ['corrected', 'countersigned']
 
-/** Whether an event took its place before others that had been recorded already. */
+/**
+ * Whether an event took its place before others that had been recorded already; the registration that a cylinder begins
+ * with before all of them, whatever time it claims.
+ */
 export function cameLate(event: AnyRecordedEvent, events: readonly AnyRecordedEvent[]): boolean {
-  return !MENDING.includes(event.kind) && events.some(other => other.version < event.version && !MENDING.includes(other.kind) && effectOrder(event, other) < 0)
+  if (MENDING.includes(event.kind)) return false
+  const earlier = events.filter(other => other.version < event.version && !MENDING.includes(other.kind))
+  const isBeginning = event.kind === 'registered' && !earlier.some(other => other.kind === 'registered' && effectOrder(other, event) < 0)
+  return isBeginning ? earlier.length > 0 : earlier.some(other => effectOrder(event, other) < 0)
 }
 
 /**

@@ -16,7 +16,7 @@ export async function lateFacts(db: Database, from: Directory, nowMs: number): P
     sql: `SELECT e.id, e.cylinder_id, c.label_code, c.serial FROM custody_events e JOIN cylinders c ON c.id = e.cylinder_id
       WHERE e.seq > coalesce((SELECT seq FROM custody_events WHERE recorded_at <= ? ORDER BY seq DESC LIMIT 1), 0)
         AND (e.kind = 'corrected' OR e.kind <> 'countersigned' AND EXISTS (SELECT 1 FROM custody_events o
-          WHERE o.cylinder_id = e.cylinder_id AND o.version < e.version AND o.effective_at >= e.effective_at))
+          WHERE o.cylinder_id = e.cylinder_id AND o.version < e.version AND (e.kind = 'registered' OR o.effective_at >= e.effective_at)))
       ORDER BY e.seq DESC`,
     args: [nowMs - WEEK_MS],
   })

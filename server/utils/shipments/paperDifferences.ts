@@ -27,23 +27,36 @@ export async function paperDifferences(db: Database, shipmentId: string, lines: 
   }))
 }
 
-/** Shipments of the last year whose papers differ, the newest first: only those are looked at of which something was recorded after they left. */
+/**
+ * The newest shipments of the last year whose papers differ: only those are looked at of which something was recorded
+ * after they left, and as many as it takes.
+ */
 export async function differingShipments(db: Database, nowMs: number): Promise<DifferingShipment[]> {
+  const found: DifferingShipment[] = []
+  let below = Number.MAX_SAFE_INTEGER
+  while (found.length < MOST_SHIPMENTS) {
+    const page = await touchedShipments(db, nowMs, below)
+    for (const { id, number } of page) {
+      const { size } = await paperDifferences(db, id, await shipmentLines(db, id))
+      if (size > 0) found.push({ id, number, lines: size })
+    }
+    if (page.length < MOST_SHIPMENTS) break
+    below = page.at(-1)!.number
+  }
+  return found.slice(0, MOST_SHIPMENTS)
+}
+
+/** Some shipments below a number, the newest first, of whose cylinders something was recorded that may contradict the papers. */
+async function touchedShipments(db: Database, nowMs: number, below: number): Promise<{ id: string, number: number }[]> {
   const { rows } = await db.readClient.execute({
-    sql: `SELECT s.id, s.number FROM shipments s WHERE s.state IN ('dispatched', 'received') AND s.dispatched_at >= ? AND EXISTS (
+    sql: `SELECT s.id, s.number FROM shipments s WHERE s.state IN ('dispatched', 'received') AND s.dispatched_at >= ? AND s.number < ? AND EXISTS (
         SELECT 1 FROM shipment_lines l JOIN custody_events e ON e.cylinder_id = l.cylinder_id
         WHERE l.shipment_id = s.id AND e.recorded_at > s.dispatched_at AND (e.kind IN ('corrected', 'registered')
           OR e.effective_at <= s.dispatched_at AND NOT (e.kind = 'sent-for-reclaim' AND e.effective_at = s.dispatched_at)))
       ORDER BY s.number DESC LIMIT ?`,
-    args: [nowMs - LOOKED_BACK_DAYS * 86_400_000, MOST_SHIPMENTS],
+    args: [nowMs - LOOKED_BACK_DAYS * 86_400_000, below, MOST_SHIPMENTS],
   })
-  const found: DifferingShipment[] = []
-  for (const row of rows) {
-    const id = row[0] as string
-    const { size } = await paperDifferences(db, id, await shipmentLines(db, id))
-    if (size > 0) found.push({ id, number: row[1] as number, lines: size })
-  }
-  return found
+  return rows.map(row => ({ id: row[0] as string, number: row[1] as number }))
 }
 
 function loggedAsItLeft(events: readonly AnyRecordedEvent[], shipmentId: string, context: FoldContext): PaperDifference['logged'] {

@@ -10,7 +10,7 @@ import { differingShipments } from '../../../server/utils/shipments/paperDiffere
 import { shipmentWithLines } from '../../../server/utils/shipments/shipmentWithLines'
 import { drawLabelCode } from '../../../utils/label/code'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../../helpers/logDatabase'
-import { lb } from '../../helpers/stamps'
+import { lb, stampOf } from '../../helpers/stamps'
 
 const HOUR = 3_600_000
 const ago = (hours: number) => ({ occurredAt: new Date(Date.now() - hours * HOUR).toISOString() })
@@ -75,6 +75,16 @@ describe('an event that comes late', () => {
     expect((await linesOf(id)).find(one => one.id === late)!.changes).toBeUndefined()
   })
 
+  it('waits for the manager also where it is the registration, which the cylinder begins with whatever its time', async () => {
+    const before = await lateFacts(log.db, await directory(log.db), Date.now())
+    const id = randomUUID()
+    await take([sent(id, 'weighed', { gross: lb(40) }, ago(2))])
+    const [beginning] = await take([sent(id, 'registered', { stamp: stampOf({ serial: 'LATE1' }), ownership: 'own' }, { ...ago(1), placeId: log.placeId })], log.warehouse)
+    const line = (await linesOf(id)).find(one => one.id === beginning)!
+    expect(line.changes!.map(({ kind, before: then, now }) => [kind, then.netGrams, now.netGrams])).toEqual([['weighed', null, 5_670]])
+    expect((await lateFacts(log.db, await directory(log.db), Date.now())).count - before.count).toBe(1)
+  })
+
   it('shows of a correction what it changed, and raises no finding for that', async () => {
     const id = await newCylinder(log)
     const [fill] = await take([filled(id, 40, 1)])
@@ -109,4 +119,13 @@ describe('the papers of a shipment', () => {
     await take([sent(id, 'corrected', { eventId: left.id, reason: 'it stayed here' }, { expects: 5 })], log.manager)
     expect(await differing(shipmentId)).toEqual({ logged: null })
   })
+  it('are looked through also behind twenty newer ones that only have a harmless line', async () => {
+    const { id, shipmentId } = await dispatched()
+    await take([sent(id, 'filled', { refrigerant: 'R-410A', grossBefore: lb(36), grossAfter: lb(38), looked: true }, ago(3))])
+    for (let newer = 0; newer < 20; newer++) {
+      const { id: other } = await dispatched()
+      await take([sent(other, 'moved', { toPlaceId: log.placeId }, ago(2))])
+    }
+    expect((await differingShipments(log.db, Date.now())).map(one => one.id)).toContain(shipmentId)
+  }, 30_000)
 })

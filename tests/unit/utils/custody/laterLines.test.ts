@@ -34,6 +34,14 @@ describe('an event that comes late', () => {
     expect(events.map(event => cameLate(event, events))).toEqual([false, false, true, false])
   })
 
+  it('is late where it is the registration that the cylinder begins with, though it claims a later time than the rest', () => {
+    // 18 kg on the scale says nothing before the tare of 12 kg is known.
+    expect(changedBy(weighed(18), registered({ gross: kg(12) }, at(5)))).toEqual([[1, null, 6_000, []]])
+    // A second registration of a later time begins nothing.
+    const events = recorded(registered(), weighed(18), registered({}, at(5)), registered({}, at(-1)))
+    expect(events.map(event => cameLate(event, events))).toEqual([false, false, false, true])
+  })
+
   it('takes no heed of corrections and signatures, which have a time of their own', () => {
     const events = recorded(registered(), filled('R-22', 18), corrected(idOf(1), { refrigerant: 'R-22', grossAfter: kg(19), looked: true }), weighed(19, at(1.5)))
     expect(cameLate(events[3]!, events)).toBe(false)
