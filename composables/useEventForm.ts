@@ -1,11 +1,12 @@
 import { problemOf } from '~~/composables/useApi'
+import type { KeptOn } from '~~/composables/useKept'
 import { useKeptForm } from '~~/composables/useKeptForm'
 import { usePostingStore, type NewEvent, type Posted } from '~~/stores/posting'
 
 /** The form of one event, kept until it is recorded; its parts are those of {@link useKeptForm}. */
-export function useEventForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string = () => '') {
+export function useEventForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string = () => '', keptOn: KeptOn = 'tab') {
   const posting = usePostingStore()
-  const { draft, envelope, restored, busy, problem, startOver, recorded, sealedOnce } = useKeptForm(key, empty, supervisorId)
+  const { draft, envelope, restored, endedElsewhere, busy, problem, startOver, recorded, sealedOnce } = useKeptForm(key, empty, supervisorId, keptOn)
   const posted = shallowRef<Posted | null>(null)
 
   /** Records what the form says; whatever goes wrong, the form stays as it is and says so. */
@@ -28,5 +29,5 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
     }
   }
 
-  return { draft, envelope, restored, busy, problem, posted, send, startOver }
+  return { draft, envelope, restored, endedElsewhere, busy, problem, posted, send, startOver }
 }

@@ -1,7 +1,7 @@
 import { useSessionStore } from '~~/stores/session'
 
 /** Where something is kept: until the tab is closed, or on the device until it is forgotten. */
-type Kept = 'tab' | 'device'
+export type KeptOn = 'tab' | 'device'
 
 /**
  * What is typed into a form and not recorded yet, kept in this tab for its author: a lost session or a reloaded page
@@ -9,7 +9,7 @@ type Kept = 'tab' | 'device'
  *
  * Shape: `key` names the form; `restored` is what was kept from before, once the page stands in the browser.
  */
-export function useKept<T extends object>(key: string, where: Kept = 'tab') {
+export function useKept<T extends object>(key: string, where: KeptOn = 'tab') {
   const storageKey = keptPrefix(useSessionStore().user?.id) + key
   const restored = shallowRef<T | null>(null)
 
@@ -44,11 +44,11 @@ export function keptPrefix(personId: string | undefined): string {
   return `collarbook-form ${personId ?? ''} `
 }
 
-function storageOf(where: Kept): Storage {
+function storageOf(where: KeptOn): Storage {
   return where === 'tab' ? sessionStorage : localStorage
 }
 
-function read<T>(where: Kept, key: string): T | null {
+function read<T>(where: KeptOn, key: string): T | null {
   try {
     const text = storageOf(where).getItem(key)
     return text === null ? null : JSON.parse(text) as T
@@ -58,7 +58,7 @@ function read<T>(where: Kept, key: string): T | null {
   }
 }
 
-function write(where: Kept, key: string, value: object | null) {
+function write(where: KeptOn, key: string, value: object | null) {
   try {
     if (value === null) storageOf(where).removeItem(key)
     else storageOf(where).setItem(key, JSON.stringify(value))

@@ -1,4 +1,4 @@
-import { useKept } from '~~/composables/useKept'
+import { useKept, type KeptOn } from '~~/composables/useKept'
 import { deviceNow, usePostingStore, type NewEvent } from '~~/stores/posting'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
@@ -22,11 +22,12 @@ interface Kept<Draft> {
  * The content of a form, kept until it is recorded: a lost network, a refusal or a closed page loses nothing.
  *
  * Shape: `key` names the form, by cylinder and kind; `supervisorId` is whom a trainee's form begins with, '' for nobody;
+ * a form that is kept on the device is the same in all its tabs, and `endedElsewhere` once one of them has ended it;
  * `sealedOnce` makes the events to send, `recorded` forgets what was kept.
  */
-export function useKeptForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string) {
+export function useKeptForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string, keptOn: KeptOn = 'tab') {
   const posting = usePostingStore()
-  const { restored: kept, keep: store } = useKept<Kept<Draft>>(key)
+  const { restored: kept, keep: store, followOtherTabs } = useKept<Kept<Draft>>(key, keptOn)
   const draft = ref(empty()) as Ref<Draft>
   const envelope = ref(emptyEnvelope())
   const sent = shallowRef<Kept<Draft>['sent']>(null)
@@ -34,15 +35,26 @@ export function useKeptForm<Draft extends object>(key: string, empty: () => Draf
   const busy = ref(false)
   const problem = ref<ProblemDetails | null>(null)
 
+  /** Kept on the device, it was recorded or put away in another tab. */
+  const endedElsewhere = ref(false)
+
   onMounted(() => {
-    if (kept.value) {
-      draft.value = { ...empty(), ...kept.value.draft }
-      envelope.value = kept.value.envelope
-      sent.value = kept.value.sent
-      restored.value = true
-    }
+    if (kept.value) takeUp(kept.value)
     watch([draft, envelope], keep, { deep: true })
   })
+  if (keptOn === 'device') {
+    followOtherTabs((entry) => {
+      endedElsewhere.value = entry === null
+      if (entry) takeUp(entry)
+    })
+  }
+
+  function takeUp(entry: Kept<Draft>) {
+    draft.value = { ...empty(), ...entry.draft }
+    envelope.value = entry.envelope
+    sent.value = entry.sent
+    restored.value = true
+  }
 
   function emptyEnvelope(): Envelope {
     return { at: '', supervisorId: supervisorId(), note: '' }
@@ -82,5 +94,5 @@ export function useKeptForm<Draft extends object>(key: string, empty: () => Draf
     return events
   }
 
-  return { draft, envelope, restored, busy, problem, startOver, recorded, sealedOnce }
+  return { draft, envelope, restored, endedElsewhere, busy, problem, startOver, recorded, sealedOnce }
 }

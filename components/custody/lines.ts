@@ -45,13 +45,16 @@ const LINES: { [K in EventKind]: Say<K> } = {
   }),
   'handed-over': ({ toHolderId }, names) => ({ what: `to ${named(toHolderId, names)}` }),
   'weighed': ({ gross }) => ({ what: 'the change is weighing', gross }),
-  'filled': ({ refrigerant, condition, grossBefore, grossAfter, method, ownerOfRefrigerantId }, names) => ({
+  'filled': ({ refrigerant, condition, grossBefore, grossAfter, method, ownerOfRefrigerantId, purged, readings, reached }, names) => ({
     what: [
       `${refrigerant ?? 'refrigerant not known,'} recovered`,
       condition && CONDITION_WORDS[condition],
       ownerOfRefrigerantId && `of ${named(ownerOfRefrigerantId, names)}`,
       grossBefore && `from ${formatReading(grossBefore)}`,
       method && `by ${methodWords(method)}`,
+      purged && 'hoses purged',
+      readings?.length && `${readings.length} ${readings.length === 1 ? 'reading' : 'readings'} on the way`,
+      reached && `system down to ${vacuumWords(reached.vacuum)}${reached.heldMinutes === undefined ? '' : `, held ${reached.heldMinutes} min`}`,
     ].filter(Boolean).join(', '),
     gross: grossAfter,
   }),
@@ -138,7 +141,11 @@ function contentsInWords(contents: NonNullable<DetailsOf<'registered'>['contents
 }
 
 function vacuumInWords(vacuum: NonNullable<DetailsOf<'emptied'>['vacuum']>): string {
-  return 'microns' in vacuum ? `down to ${vacuum.microns} microns` : `down to ${vacuum.inHg} inHg`
+  return `down to ${vacuumWords(vacuum)}`
+}
+
+function vacuumWords(vacuum: { microns: number } | { inHg: number }): string {
+  return 'microns' in vacuum ? `${vacuum.microns} microns` : `${vacuum.inHg} inHg`
 }
 
 function checkInWords(details: DetailsOf<'checked'>): string {

@@ -1,6 +1,7 @@
 import type { MassReading } from '../../quantity/mass'
 import { isRecoveryMethod, type RecoveryMethod } from '../../recovery/methods'
 import type { Condition, CylinderView } from '../cylinderView'
+import type { DetailsOf } from '../schema'
 import { typedText, type DraftKind } from './draft'
 
 /** The choice of a refrigerant that nobody knows the name of. */
@@ -23,7 +24,12 @@ export interface FilledDraft {
   ownerId: string
   looked: boolean
   scaleId: string
+  /** What was noted while it was filled; a correction of the weights leaves it as it is. */
+  onTheWay: OnTheWay
 }
+
+/** What only whoever stood by while it was filled can say. */
+export type OnTheWay = Pick<DetailsOf<'filled'>, 'readings' | 'purged' | 'reached'>
 
 /** The form of a recovery. */
 export const FILLED: DraftKind<'filled', FilledDraft> = {
@@ -37,6 +43,7 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     ownerId: '',
     looked: false,
     scaleId,
+    onTheWay: {},
   }),
   read: (draft) => {
     if (draft.refrigerant === '') return { reason: 'Choose the refrigerant that went in.' }
@@ -53,6 +60,7 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
         ...(draft.ownerId && { ownerOfRefrigerantId: draft.ownerId }),
         ...(draft.scaleId && { scaleId: draft.scaleId }),
         ...(draft.looked && { looked: true as const }),
+        ...draft.onTheWay,
       },
     }
   },
@@ -65,7 +73,12 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     ownerId: details.ownerOfRefrigerantId ?? '',
     looked: details.looked === true,
     scaleId: details.scaleId ?? '',
+    onTheWay: onTheWayOf(details),
   }),
+}
+
+function onTheWayOf({ readings, purged, reached }: OnTheWay): OnTheWay {
+  return { ...(readings && { readings }), ...(purged && { purged }), ...(reached && { reached }) }
 }
 
 function methodOf(line: string | undefined): Pick<FilledDraft, 'method' | 'otherMethod'> {

@@ -46,6 +46,18 @@ describe('the form of a recovery', () => {
   })
 })
 
+describe('what was noted while a cylinder was filled', () => {
+  const context = contextOf([registered()])
+  const onTheWay = { readings: [{ at: '2026-07-01T10:00:00-05:00', gross: kg(18) }], purged: true as const, reached: { vacuum: { inHg: 0 }, heldMinutes: 0 } }
+  const details = { refrigerant: 'R-22', grossAfter: kg(20), ...onTheWay }
+
+  it('goes into the log with the weights, and a correction of the weights leaves it as it was', () => {
+    expect(FILLED.read({ ...FILLED.empty(context), refrigerant: 'R-22', grossAfter: kg(20), onTheWay }, context)).toEqual({ details })
+    expect(FILLED.read({ ...FILLED.of(details, null, 'kg'), grossAfter: kg(21) }, context)).toEqual({ details: { ...details, grossAfter: kg(21) } })
+    expect(FILLED.of({ refrigerant: 'R-22', grossAfter: kg(20) }, null, 'kg').onTheWay).toEqual({})
+  })
+})
+
 describe('the method of a recovery', () => {
   const context = contextOf([registered()])
   const draft = { ...FILLED.empty(context), refrigerant: 'R-22', grossAfter: kg(20) }

@@ -154,6 +154,18 @@ describe('the other kinds', () => {
     expect(faults({ kind: 'filled', details: { refrigerant: 'R-22', grossAfter: kg(20), looked: false } })).toHaveLength(1)
   })
 
+  it('tell of the fill at most 200 readings, the purge, and the vacuum of the system with the minutes it held', () => {
+    const filledWith = (more: object) => faults({ kind: 'filled', details: { refrigerant: 'R-22', grossAfter: kg(20), ...more } })
+    const reading = { at: '2026-03-02T14:05:00-05:00', gross: kg(19) }
+    expect(filledWith({ readings: Array(200).fill(reading), purged: true, reached: { vacuum: { inHg: 10 }, heldMinutes: 5 } })).toEqual([])
+    expect(filledWith({ readings: Array(201).fill(reading) })).toEqual(['details.readings: must be at most 200 readings'])
+    expect(filledWith({ readings: [{ ...reading, hoses: 'on' }] })).toHaveLength(1)
+    expect(filledWith({ purged: false })).toHaveLength(1)
+    expect(filledWith({ reached: { vacuum: { microns: 900 }, heldMinutes: 10_000 } })).toEqual([])
+    expect(filledWith({ reached: { vacuum: { microns: 900 }, heldMinutes: 10_001 } })).toHaveLength(1)
+    expect(filledWith({ reached: { heldMinutes: 5 } })).toHaveLength(1)
+  })
+
   it('measure a vacuum in one way', () => {
     expect(faults({ kind: 'emptied', details: { vacuum: { inHg: 29.5, barometerInHg: 29.9 } } })).toEqual([])
     expect(faults({ kind: 'emptied', details: { vacuum: { microns: 500, inHg: 29 } } })).not.toEqual([])
