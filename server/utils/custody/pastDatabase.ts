@@ -1,5 +1,4 @@
-import { existsSync, mkdtempSync, rmSync } from 'node:fs'
-import { tmpdir } from 'node:os'
+import { existsSync } from 'node:fs'
 import { join } from 'node:path'
 import { setImmediate as nextTurn } from 'node:timers/promises'
 import { foldAsItStood, instantOf, type Past } from '../../../utils/custody/asItStood'
@@ -8,6 +7,7 @@ import { directory, lendDirectory, type Directory } from '../directory/directory
 import { pastCache } from './caches'
 import { foldContext } from './foldContext'
 import { cylindersAfter, logsOf } from './logPages'
+import { pastFolder } from './pastFolder'
 import { SAID_OF } from './rebuild'
 import { refreshedRows } from './refreshedRows'
 
@@ -31,7 +31,7 @@ export async function openPastDatabase(db: Database, past: Past): Promise<PastDa
   })])
   const spares = spare.get(db) ?? []
   spare.set(db, spares)
-  const own = takeOne(spares) ?? await openDatabase(`file:${join(ownFolder(), 'past.db')}`)
+  const own = takeOne(spares) ?? await openDatabase(`file:${join(pastFolder(), 'past.db')}`)
   lendDirectory(own, from)
   try {
     await own.write([
@@ -54,16 +54,6 @@ function takeOne(spares: Database[]): Database | undefined {
   if (own === undefined || (own.file !== null && existsSync(own.file))) return own
   own.close()
   return takeOne(spares)
-}
-
-const folders: string[] = []
-
-/** A new folder that goes with the process. */
-function ownFolder(): string {
-  const folder = mkdtempSync(join(tmpdir(), 'collarbook-past-'))
-  if (folders.length === 0) process.once('exit', () => folders.forEach(one => rmSync(one, { recursive: true, force: true })))
-  folders.push(folder)
-  return folder
 }
 
 /** Fills a past database with cylinders as their logs, read from the present one, had them. */

@@ -1,7 +1,9 @@
 import type { PastProgress } from '../../../utils/contract/past'
 import type { Past } from '../../../utils/custody/asItStood'
 import type { Database } from '../database/database'
+import { directory, type Directory } from '../directory/directory'
 import { fillPastFleet, openPastDatabase, type PastDatabase } from './pastDatabase'
+import { sha256 } from './sha256'
 
 /** Past fleets that are kept at once, and for how long without a reader. */
 const MOST_KEPT = 2
@@ -13,6 +15,8 @@ interface Kept {
   key: string
   /** The last line of the log that it was made of. */
   head: number
+  /** What it was made by beside the log. */
+  outside: string
   madeAt: number
   usedAt: number
   readers: number
@@ -38,12 +42,12 @@ export async function pastFleet(db: Database, past: Past, isNextPage: boolean, c
     sql: `SELECT coalesce(max(seq), 0), count(*) FROM custody_events ${past.knownAt === null ? '' : 'WHERE recorded_at <= ?'}`,
     args: past.knownAt === null ? [] : [past.knownAt],
   })
-  const [head, events] = [rows[0]![0] as number, rows[0]![1] as number]
+  const [head, events, outside] = [rows[0]![0] as number, rows[0]![1] as number, outsideOf(await directory(db))]
   const all = kept.get(db) ?? []
   kept.set(db, all)
   const key = keyOf(past)
-  const isGood = (one: Kept) => one.key === key && (one.head === head || (isNextPage && clock() - one.madeAt < PAGES_MS))
-  const one = all.find(isGood) ?? begin(db, past, { key, head, events, now: clock() })
+  const isGood = (one: Kept) => one.key === key && ((one.head === head && one.outside === outside) || (isNextPage && clock() - one.madeAt < PAGES_MS))
+  const one = all.find(isGood) ?? begin(db, past, { key, head, outside, events, now: clock() })
   if (!all.includes(one)) all.push(one)
   one.usedAt = clock()
   one.readers++
@@ -65,11 +69,11 @@ export function pastProgress(db: Database, past: Past): PastProgress {
   return kept.get(db)?.findLast(({ key }) => key === keyOf(past))?.progress ?? { done: 0, of: 0, isReady: false }
 }
 
-function begin(db: Database, past: Past, { key, head, events, now }: { key: string, head: number, events: number, now: number }): Kept {
+function begin(db: Database, past: Past, { events, now, ...of }: Pick<Kept, 'key' | 'head' | 'outside'> & { events: number, now: number }): Kept {
   const progress: PastProgress = { done: 0, of: events, isReady: false }
   const made = (lasts.get(db) ?? Promise.resolve()).catch(() => undefined).then(() => make(db, past, progress))
   lasts.set(db, made)
-  return { key, head, madeAt: now, usedAt: now, readers: 0, progress, made }
+  return { ...of, madeAt: now, usedAt: now, readers: 0, progress, made }
 }
 
 async function make(db: Database, past: Past, progress: PastProgress): Promise<PastDatabase> {
@@ -96,6 +100,12 @@ function tidy(all: Kept[], now: number): void {
     all.splice(all.indexOf(one), 1)
     void one.made.then(({ remove }) => remove())
   }
+}
+
+/** The firm's rules and names as a past is made by them: a fleet that was made by others is made anew. */
+function outsideOf({ timeZone, settings, places, firms, people, scales }: Directory): string {
+  const named = [...places.values(), ...firms.values(), ...people.values()].map(row => [row.id, row.name, 'parentId' in row ? row.parentId : null])
+  return sha256(JSON.stringify([timeZone, settings, [...scales.values()], named]))
 }
 
 function keyOf({ asOf, knownAt }: Past): string {

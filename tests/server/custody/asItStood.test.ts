@@ -10,6 +10,7 @@ import { fleet } from '../../../server/utils/custody/fleet'
 import { pastCylinder } from '../../../server/utils/custody/pastCylinder'
 import { openPastDatabase } from '../../../server/utils/custody/pastDatabase'
 import { pastFleet, pastProgress } from '../../../server/utils/custody/pastFleet'
+import { directory } from '../../../server/utils/directory/directory'
 import { fleetQuery, type FleetAnswer } from '../../../utils/contract/custody'
 import type { Past } from '../../../utils/custody/asItStood'
 import { drawLabelCode } from '../../../utils/label/code'
@@ -136,6 +137,21 @@ describe('the fleet as it stood', () => {
     expect((await listed(past, { limit: 1, sort: 'serial', cursor: before.nextCursor }, true)).total).toBe(2)
     expect((await listed(past)).total).toBe(3)
     expect((await listed({ asOf: hoursAgo(10), knownAt: hoursAgo(5) })).total).toBe(2)
+  })
+
+  it('is made anew where a place has another name since, but not between two pages', async () => {
+    const past = { ...asOf(10), knownAt: hoursAgo(4) }
+    const made = async (isNextPage: boolean) => {
+      const { db, giveBack } = await pastFleet(log.db, past, isNextPage)
+      giveBack()
+      return db
+    }
+    const first = await made(false)
+    expect(await made(false)).toBe(first)
+    await log.db.write([{ sql: 'UPDATE places SET name = \'Yard\' WHERE id = ?', args: [log.placeId] }])
+    await directory(log.db, true)
+    expect(await made(true)).toBe(first)
+    expect(await made(false)).not.toBe(first)
   })
 
   it('leaves at most two of its files behind, whatever was asked', async () => {
