@@ -87,6 +87,10 @@ export interface CylinderState {
   lastEventAt: number | null
   lastEventKind: EventKind | null
   lastSeenAt: number | null
+  /** Of the last line in effect, whether it counts or was taken out: what comes later than this comes last. */
+  latestAt: number | null
+  /** Ids that corrections and signatures name and that no event has yet. */
+  namedEarly: string[]
 }
 
 /** A cylinder of which nothing is known yet. */
@@ -138,5 +142,7 @@ export function initialState(id: string): CylinderState {
     lastEventAt: null,
     lastEventKind: null,
     lastSeenAt: null,
+    latestAt: null,
+    namedEarly: [],
   }
 }

@@ -61,6 +61,7 @@ const MADE: Record<number, string> = {
   5: '0b97ed1ae71c9e11',
   6: '064cb505b5f43d86',
   7: 'c85ef4a0d707aad8',
+  8: '53d56540c26915e5',
 }
 
 describe('the number of what the fold means', () => {
