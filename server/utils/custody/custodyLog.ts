@@ -73,7 +73,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
   }).reverse()
   const start = page.cursor === undefined ? 0 : lines.findIndex(line => line.id === page.cursor) + 1
   if (page.cursor !== undefined && start === 0) throw foreignCursor()
-  const items = withChanges(await withOtherCylinders(db, lines.slice(start, start + page.limit)), events, foldContext(from))
+  const items = withChanges(await withOtherCylinders(db, lines.slice(start, start + page.limit)), events, foldContext(from), shown)
   return {
     items,
     nextCursor: start + page.limit < lines.length ? items.at(-1)?.id ?? null : null,
@@ -88,12 +88,12 @@ function withCorrections(steps: readonly FoldStep[], now: readonly FoldStep[]): 
   return steps.map(step => ({ ...step, correction: of.get(step.eventId)?.correction ?? null, signature: of.get(step.eventId)?.signature ?? null }))
 }
 
-/** The lines, those that came late or mend another with what they changed in lines recorded before them. */
-function withChanges(lines: LogLine[], events: readonly AnyRecordedEvent[], context: FoldContext): LogLine[] {
+/** The lines, those that came late or mend another with what they changed in lines recorded before them that are shown. */
+function withChanges(lines: LogLine[], events: readonly AnyRecordedEvent[], context: FoldContext, shown: ReadonlySet<string>): LogLine[] {
   const changed = laterLines(events, context, new Set(lines.map(({ id }) => id)))
   return lines.map((line) => {
-    const changes = changed.get(line.id)
-    if (!changes) return line
+    const changes = changed.get(line.id)?.filter(({ eventId }) => shown.has(eventId)) ?? []
+    if (changes.length === 0) return line
     const isLate = line.kind !== 'corrected' && line.kind !== 'countersigned'
     return { ...line, changes, findings: isLate ? [...line.findings, lateChange(changes.length)] : line.findings }
   })

@@ -192,6 +192,17 @@ describe('the log as it was known', () => {
   })
 })
 
+describe('the log as of an instant', () => {
+  it('says of a late line only what it changed in lines that had happened by then', async () => {
+    const id = await newCylinder(log)
+    await take([sent(id, 'weighed', { gross: lb(40) }, happened(6)), sent(id, 'moved', { toPlaceId: log.placeId }, happened(2))], 2)
+    const late = sent(id, 'filled', { refrigerant: 'R-22', grossAfter: lb(40), looked: true }, happened(7))
+    await take([late], 1)
+    const changedAt = async (hours: number) => (await custodyLog(log.db, id, { limit: 10 }, asOf(hours))).items.find(line => line.id === late.id)!.changes?.map(({ kind }) => kind)
+    expect([await changedAt(6.5), await changedAt(4), await changedAt(1)]).toEqual([undefined, ['weighed'], ['weighed', 'moved']])
+  })
+})
+
 describe('a cylinder as it was known beside others', () => {
   const known = async (id: string, hours: number) =>
     (await pastCylinder(log.db, id, { asOf: null, knownAt: hoursAgo(hours) })).findings.map(({ code: word }) => word)
