@@ -1,4 +1,5 @@
 import { fitFindings } from '../capacity/fit'
+import { NEARLY_FULL_RATIO } from '../capacity/nearlyFull'
 import type { FillPolicy } from '../capacity/types'
 import type { Catalogue } from '../refrigerant/types'
 import { endOf } from './endOf'
@@ -22,9 +23,6 @@ export interface FindingContext extends SaidByOthers {
 }
 
 const OF_CONTENTS: readonly StandingCode[] = ['second-refrigerant', 'unknown-onto-known', 'after-end']
-
-// From this part of the limit on a cylinder is nearly full: common practice, no source.
-const NEARLY_FULL_RATIO = 0.9
 
 /** Every finding of a state that stands whatever the date. A cylinder that has ended keeps only those of its contents. */
 export function stateFindings(state: CylinderState, fillLimitGrams: number | null, context: FindingContext): Finding[] {
