@@ -1,10 +1,12 @@
+import { createHash } from 'node:crypto'
 import { cpSync } from 'node:fs'
 import { join } from 'node:path'
+import { WEB_MANIFEST } from './service-worker/webManifest'
 
 export default defineNuxtConfig({
   modules: [
     '@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', 'nuxt-security',
-    '@nuxt/eslint', '@nuxtjs/color-mode',
+    '@nuxt/eslint', '@nuxtjs/color-mode', '@vite-pwa/nuxt',
   ],
   // Our own code is imported by path, so that the import table can be checked; components stay registered.
   imports: { scan: false },
@@ -14,8 +16,17 @@ export default defineNuxtConfig({
       htmlAttrs: { lang: 'en' },
       titleTemplate: '%s · Collarbook',
       title: 'Collarbook',
-      meta: [{ name: 'viewport', content: 'width=device-width, initial-scale=1, viewport-fit=cover' }],
-      link: [{ rel: 'icon', type: 'image/svg+xml', href: '/logo.svg' }],
+      meta: [
+        { name: 'viewport', content: 'width=device-width, initial-scale=1, viewport-fit=cover' },
+        // The bands of light and dark, which the phone's own bar goes on from.
+        { name: 'theme-color', content: '#f6c500', media: '(prefers-color-scheme: light)' },
+        { name: 'theme-color', content: '#1a1f22', media: '(prefers-color-scheme: dark)' },
+      ],
+      link: [
+        { rel: 'icon', type: 'image/svg+xml', href: '/logo.svg' },
+        { rel: 'manifest', href: '/manifest.webmanifest' },
+        { rel: 'apple-touch-icon', href: '/icons/apple-180.png' },
+      ],
     },
   },
   css: [
@@ -31,11 +42,15 @@ export default defineNuxtConfig({
     },
   },
   srcDir: '.',
+  // Drawn in the browser alone, so that it is the same for everybody and may lie on the device.
+  routeRules: { '/shell': { ssr: false } },
   // A page is fetched ahead when a hand goes to its link, not because the link is in sight: phones in a plant room.
   experimental: {
     defaults: { nuxtLink: { prefetchOn: { interaction: true, visibility: false } } },
     // A page that cannot be fetched must not take this one away: composables/useUnreachedPage.ts.
     emitRouteChunkError: 'manual',
+    // Newer versions are looked for by plugins/serviceWorker.client.ts.
+    appManifest: false,
   },
   // Without a shared/ folder, and with utils/ imported by path on both sides.
   compatibilityDate: '2026-01-01',
@@ -56,7 +71,8 @@ export default defineNuxtConfig({
     },
   },
   vite: { optimizeDeps: { include: ['vue-qrcode-reader', 'qrcode'] } },
-  typescript: { strict: true, typeCheck: false },
+  // The worker is checked apart, with a worker's globals: tsconfig.worker.json.
+  typescript: { strict: true, typeCheck: false, tsConfig: { exclude: ['../service-worker/sw.ts'] } },
   telemetry: false,
   hooks: {
     // A part that a page loads when it is asked for is fetched then, not ahead: phones in a plant room.
@@ -80,6 +96,23 @@ export default defineNuxtConfig({
     hash: { scrypt: { cost: 131_072, maxMemory: 268_435_456 } },
   },
   eslint: { config: { stylistic: true } },
+  pwa: {
+    strategies: 'injectManifest',
+    srcDir: 'service-worker',
+    filename: 'sw.ts',
+    registerType: 'prompt',
+    manifest: WEB_MANIFEST,
+    registerWebManifestInRouteRules: true,
+    // Registered by plugins/serviceWorker.client.ts.
+    client: { registerPlugin: false },
+    injectManifest: {
+      globPatterns: ['**/*.{js,css,wasm,woff2,svg,png,webmanifest}'],
+      // The shell names the scripts by their content, so it is another one whenever any file is.
+      manifestTransforms: [entries => ({
+        manifest: [...entries, { url: '/shell', revision: createHash('sha256').update(JSON.stringify(entries)).digest('hex'), size: 0 }],
+      })],
+    },
+  },
   security: {
     removeLoggers: false,
     corsHandler: false,

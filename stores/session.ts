@@ -1,13 +1,19 @@
 import { defineStore } from 'pinia'
+import { keptPerson } from '~~/composables/keptPerson'
 import { useApi, problemOf } from '~~/composables/useApi'
 import type { SessionAnswer, User } from '~~/utils/contract/session'
 import { can, type Permission } from '~~/utils/access/permissions'
 
-/** Who is signed in. Asked for once, on the server where the page is drawn there. */
+/**
+ * Who is signed in. Asked for once, on the server where the page is drawn there; a page that is opened without the server
+ * goes by who was last signed in on this device (kept there by plugins/keptSession.client.ts).
+ */
 export const useSessionStore = defineStore('session', () => {
   const api = useApi()
   const user = ref<User | null>(null)
   const known = ref(false)
+  /** Whether that is what the device remembers, and the server has not been asked yet or was not reached. */
+  const isKept = ref(false)
 
   const access = computed(() => user.value && { personId: user.value.id, roles: user.value.roles, trainee: user.value.trainee })
 
@@ -18,17 +24,37 @@ export const useSessionStore = defineStore('session', () => {
   function set(next: User | null) {
     user.value = next
     known.value = true
+    isKept.value = false
   }
 
-  /** Errors: any but "not signed in", which is an answer. */
+  /** Errors: any but "not signed in" and, in the browser, "not reached", which are answers. */
   async function load() {
     if (known.value) return
+    const kept = import.meta.client ? keptPerson() : null
+    if (kept) {
+      set(kept)
+      isKept.value = true
+      return
+    }
     try {
       set((await api.get<SessionAnswer>('/api/session')).user)
     }
     catch (error) {
-      if (problemOf(error).status !== 401) throw error
-      set(null)
+      const { status } = problemOf(error)
+      if (status === 401) set(null)
+      else if (status !== 0 || import.meta.server) throw error
+    }
+  }
+
+  /** Asks the server who is signed in, where so far only the device said so. Answers whether it knows of nobody any more. */
+  async function confirm(): Promise<'same' | 'ended' | 'unreached'> {
+    if (!isKept.value) return 'same'
+    try {
+      set((await api.get<SessionAnswer>('/api/session')).user)
+      return 'same'
+    }
+    catch (error) {
+      return problemOf(error).status === 401 ? 'ended' : 'unreached'
     }
   }
 
@@ -37,5 +63,5 @@ export const useSessionStore = defineStore('session', () => {
     set(null)
   }
 
-  return { user, known, access, mayI, set, load, signOut }
+  return { user, known, isKept, access, mayI, set, load, confirm, signOut }
 })

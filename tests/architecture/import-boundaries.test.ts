@@ -28,6 +28,7 @@ const SCREEN = ['components', 'composables', 'stores', 'layouts', 'pages', 'midd
 /** Top folders and the top folders that each may import. */
 const TOP: Record<string, readonly string[]> = {
   'types': [],
+  'service-worker': [],
   'drizzle': ['utils'],
   'server/api': ['server/utils', 'utils'],
   'server/routes': ['server/utils', 'utils'],

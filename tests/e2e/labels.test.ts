@@ -24,7 +24,7 @@ afterAll(async () => {
 })
 
 async function signedIn(member: Member): Promise<Page> {
-  const context = await browser.newContext({ viewport: { width: 1440, height: 900 }, timezoneId: 'America/Chicago' })
+  const context = await browser.newContext({ viewport: { width: 1440, height: 900 }, timezoneId: 'America/Chicago', serviceWorkers: 'block' })
   errors.push(listenForErrors(context))
   const page = await context.newPage()
   await page.goto(`${server.baseUrl}/sign-in`, { waitUntil: 'networkidle' })

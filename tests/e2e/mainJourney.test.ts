@@ -41,7 +41,7 @@ afterAll(async () => {
 })
 
 async function signedIn(on: Browser, member: Member, viewport: typeof PHONE): Promise<{ page: Page, context: BrowserContext }> {
-  const context = await on.newContext({ viewport, permissions: ['camera'], timezoneId: 'America/Chicago' })
+  const context = await on.newContext({ viewport, permissions: ['camera'], timezoneId: 'America/Chicago', serviceWorkers: 'block' })
   errors.push(listenForErrors(context))
   context.on('request', request => asked.add(new URL(request.url()).origin))
   const page = await context.newPage()

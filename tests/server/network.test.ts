@@ -27,6 +27,7 @@ const NAMED_ONLY: Record<string, string> = {
   'json-schema.org': 'names of schema versions',
   'vuejs.org': 'where an error of the framework is explained',
   'github.com': 'where a library is at home',
+  'bit.ly': 'where a warning of the worker is explained',
   'fastly.jsdelivr.net': 'where the decoder would be fetched; the scanner says to take the one of this server',
 }
 
