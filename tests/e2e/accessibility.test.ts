@@ -84,6 +84,19 @@ const SCREENS: Record<string, Screen[]> = {
     { as: technician, at: demo => `/c/${demo.codes.empty}/tag` },
     { as: warehouse, at: demo => `/c/${demo.codes.usual}/tag` },
   ],
+  'c/[ref]/recover.vue': [
+    { as: technician, at: demo => `/c/${demo.codes.usual}/recover` },
+    { as: technician, at: demo => `/c/${demo.codes.empty}/recover` },
+    { as: technician, at: demo => `/c/${demo.codes.overfilled}/recover` },
+    { as: technician, at: demo => `/c/${demo.codes.usual}/recover`, after: async (page) => {
+      await page.getByRole('button', { name: /^As last weighed/ }).click()
+      await page.getByRole('button', { name: 'Start filling' }).click()
+      await page.keyboard.type('6000')
+      await page.keyboard.press('Enter')
+      await page.getByRole('button', { name: /^Yes, note/ }).click()
+      await page.getByRole('button', { name: /^It is stopped/ }).waitFor()
+    } },
+  ],
   'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
   'evacuation-level.vue': [
     { as: technician, at: () => '/evacuation-level' },

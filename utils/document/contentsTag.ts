@@ -1,8 +1,10 @@
 import type { CylinderView, LogLine } from '../custody/cylinderView'
+import type { EventKind } from '../custody/kinds'
 import { volumeLitres } from '../capacity/rules/ruleInput'
 import { formatLabelCode } from '../label/code'
 import { formatMass } from '../quantity/mass'
 import type { MassReading } from '../quantity/mass'
+import { formatDay, wallClock } from '../quantity/instant'
 
 /** How a refrigerant is named for transport, as the tag and its page say it; null numbers are left to the shipper. */
 export interface TagEntry {
@@ -65,22 +67,37 @@ const PUTS_IN: ReadonlySet<string> = new Set(['filled', 'transferred', 'received
  * Errors: RangeError where `noTagBecause` has a reason.
  */
 export function contentsTag(view: CylinderView, log: readonly LogLine[], entry: TagEntry): ContentsTag {
-  const { contents, labelCode, stamp } = view
   const stands = log.filter(line => line.correction?.takenOut !== true)
   const putIn = stands.find(line => PUTS_IN.has(line.kind) && line.netAfterGrams !== null && line.netAfterGrams > (line.netBeforeGrams ?? 0))
     ?? stands.find(line => PUTS_IN.has(line.kind))
-  if (noTagBecause(view) !== null || contents.refrigerant === null || labelCode === null || putIn === undefined) throw new RangeError('This cylinder gets no contents tag')
+  if (putIn === undefined) throw new RangeError('This cylinder gets no contents tag')
+  return tagOfFill(view, { kind: putIn.kind, on: putIn.effectiveAt, technician: putIn.author.name }, entry)
+}
+
+/**
+ * What the contents tag says after what last went in: its kind, when (ISO 8601), and by whom.
+ *
+ * Errors: RangeError where `noTagBecause` has a reason.
+ */
+export function tagOfFill(view: CylinderView, putIn: { kind: EventKind, on: string, technician: string }, entry: TagEntry): ContentsTag {
+  const { contents, labelCode, stamp } = view
+  if (noTagBecause(view) !== null || contents.refrigerant === null || labelCode === null) throw new RangeError('This cylinder gets no contents tag')
   const condition = contents.burnt ? 'burnt' : contents.condition
   return {
     code: labelCode,
     refrigerant: contents.refrigerant,
     kind: [BY_RECOVERY.has(putIn.kind) ? 'Recovered' : '', ['clean', 'unknown'].includes(condition) ? '' : condition].filter(Boolean).join(', '),
     net: contents.netGrams === null ? null : `${formatMass(contents.netGrams, 'lb', 'nearest')} (${formatMass(contents.netGrams, 'kg', 'nearest')})`,
-    on: putIn.effectiveAt,
-    technician: putIn.author.name,
+    on: putIn.on,
+    technician: putIn.technician,
     entry,
     numberHeightMm: numberHeightMm(stamp?.waterCapacity ?? null, contents.netGrams),
   }
+}
+
+/** The day of a fill as the tag bears it. @example tagDay(ms, 'America/Phoenix') // '1 Dec 2026' */
+export function tagDay(ms: number, timeZone: string): string {
+  return `${formatDay(ms, timeZone)} ${wallClock(ms, timeZone).year}`
 }
 
 /** GET /api/cylinders/{ref}/contents-tag: what its tag says, or in words why it gets none. */

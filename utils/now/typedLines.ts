@@ -18,6 +18,7 @@ export function typedLines(names: readonly string[]): NowLine[] {
     if (first === 'return' && UUID.test(second)) return typed(name, 'the results of a test lot', `/retests/${second}`)
     if (first === 'batch' && /^[a-z]+$/.test(second)) return typed(name, 'a list of scanned cylinders', `/batch?act=${second}${UUID.test(third) ? `&van=${third}` : ''}`)
     if (first === 'batch' && second === 'check-in' && UUID.test(third)) return typed(name, 'the check-in of a van', `/vans/${third}/check-in`)
+    if (UUID.test(first) && second === 'recovery') return typed(name, 'a recovery beside the scale', `/c/${first}/recover`)
     return UUID.test(first) && isFormKind(second) ? typed(name, KIND_WORDS[second].done.toLowerCase(), `/c/${first}/act/${second}`) : []
   })
 }

@@ -33,7 +33,7 @@ export function readPad(text: PadText, unit: MassUnit): MassEntry {
 export function padKeyOf(key: string): PadKey | null {
   if (/^\d$/.test(key)) return key as PadKey
   if (key === 'Backspace') return 'rub-out'
-  return ['.', ',', ' '].includes(key) ? 'point' : null
+  return key === '.' || key === ',' ? 'point' : null
 }
 
 /** What stands on the key of the point: the symbol that it writes. */

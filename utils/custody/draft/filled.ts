@@ -2,7 +2,7 @@ import type { MassReading } from '../../quantity/mass'
 import { isRecoveryMethod, type RecoveryMethod } from '../../recovery/methods'
 import type { Condition, CylinderView } from '../cylinderView'
 import type { DetailsOf } from '../schema'
-import { typedText, type DraftKind } from './draft'
+import { typedText, type DraftKind, type ReadDraft } from './draft'
 
 /** The choice of a refrigerant that nobody knows the name of. */
 export const NOT_KNOWN = 'not-known'
@@ -33,37 +33,8 @@ export type OnTheWay = Pick<DetailsOf<'filled'>, 'readings' | 'purged' | 'reache
 
 /** The form of a recovery. */
 export const FILLED: DraftKind<'filled', FilledDraft> = {
-  empty: ({ view, asked, scaleId = '' }) => ({
-    refrigerant: refrigerantToBegin(view, asked),
-    condition: '',
-    grossBefore: null,
-    grossAfter: null,
-    method: '',
-    otherMethod: '',
-    ownerId: '',
-    looked: false,
-    scaleId,
-    onTheWay: {},
-  }),
-  read: (draft) => {
-    if (draft.refrigerant === '') return { reason: 'Choose the refrigerant that went in.' }
-    if (!draft.grossAfter) return { reason: 'Type what the scale shows, hoses off.' }
-    const method = draft.method === OTHER_METHOD ? typedText(draft.otherMethod) : draft.method
-    if (draft.method === OTHER_METHOD && !method) return { reason: 'Write how it was brought out, or leave the method open.' }
-    return {
-      details: {
-        refrigerant: draft.refrigerant === NOT_KNOWN ? null : draft.refrigerant,
-        ...(draft.condition && { condition: draft.condition }),
-        ...(draft.grossBefore && { grossBefore: draft.grossBefore }),
-        grossAfter: draft.grossAfter,
-        ...(method && { method }),
-        ...(draft.ownerId && { ownerOfRefrigerantId: draft.ownerId }),
-        ...(draft.scaleId && { scaleId: draft.scaleId }),
-        ...(draft.looked && { looked: true as const }),
-        ...draft.onTheWay,
-      },
-    }
-  },
+  empty: ({ view, asked, scaleId }) => emptyFill(refrigerantToBegin(view, asked), scaleId),
+  read: draft => readFill(draft),
   of: details => ({
     refrigerant: details.refrigerant ?? NOT_KNOWN,
     condition: details.condition ?? '',
@@ -75,6 +46,34 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     scaleId: details.scaleId ?? '',
     onTheWay: onTheWayOf(details),
   }),
+}
+
+/** A recovery of which nothing is said yet. */
+export function emptyFill(refrigerant = '', scaleId = ''): FilledDraft {
+  return {
+    refrigerant, condition: '', grossBefore: null, grossAfter: null, method: '', otherMethod: '', ownerId: '', looked: false, scaleId, onTheWay: {},
+  }
+}
+
+/** The details of a recovery, or what is still missing; nothing of it depends on the cylinder. */
+export function readFill(draft: FilledDraft): ReadDraft<'filled'> {
+  if (draft.refrigerant === '') return { reason: 'Choose the refrigerant that went in.' }
+  if (!draft.grossAfter) return { reason: 'Type what the scale shows, hoses off.' }
+  const method = draft.method === OTHER_METHOD ? typedText(draft.otherMethod) : draft.method
+  if (draft.method === OTHER_METHOD && !method) return { reason: 'Write how it was brought out, or leave the method open.' }
+  return {
+    details: {
+      refrigerant: draft.refrigerant === NOT_KNOWN ? null : draft.refrigerant,
+      ...(draft.condition && { condition: draft.condition }),
+      ...(draft.grossBefore && { grossBefore: draft.grossBefore }),
+      grossAfter: draft.grossAfter,
+      ...(method && { method }),
+      ...(draft.ownerId && { ownerOfRefrigerantId: draft.ownerId }),
+      ...(draft.scaleId && { scaleId: draft.scaleId }),
+      ...(draft.looked && { looked: true as const }),
+      ...draft.onTheWay,
+    },
+  }
 }
 
 function onTheWayOf({ readings, purged, reached }: OnTheWay): OnTheWay {

@@ -5,8 +5,8 @@ import { whatWaits } from '../../../../utils/now/whatWaits'
 const ID = '01900000-0000-7000-8000-000000000001'
 
 it('leads back to each form that was typed and not recorded', () => {
-  expect(typedLines([`${ID} weighed`, 'registration', `dispatch ${ID}`, `return ${ID}`, `batch load ${ID}`, 'batch receive '].sort()).map(({ to }) => to)).toEqual([
-    `/c/${ID}/act/weighed`, '/batch?act=load&van=' + ID, '/batch?act=receive', `/shipments/${ID}`, '/fleet/register', `/retests/${ID}`,
+  expect(typedLines([`${ID} recovery`, `${ID} weighed`, 'registration', `dispatch ${ID}`, `return ${ID}`, `batch load ${ID}`, 'batch receive '].sort()).map(({ to }) => to)).toEqual([
+    `/c/${ID}/recover`, `/c/${ID}/act/weighed`, '/batch?act=load&van=' + ID, '/batch?act=receive', `/shipments/${ID}`, '/fleet/register', `/retests/${ID}`,
   ])
 })
 
