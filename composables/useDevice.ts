@@ -6,9 +6,10 @@ const COUNT_KEY = 'collarbook-device-seq'
 interface Storage { getItem(key: string): string | null, setItem(key: string, value: string): void }
 
 /**
- * This browser as a device: an id of its own and a count that goes up by one with each event.
+ * This browser as a device: an id of its own, and how far its count of events is known to have come.
  *
- * Where nothing may be stored it is another device at each visit, which the log can bear.
+ * The count itself is kept with the events (`outboxBox.ts`); what is noted here is what it begins with where that store
+ * was lost. Where nothing may be stored it is another device at each visit, which the log can bear.
  */
 export function useDevice(storage: Storage = localStorage) {
   return {
@@ -19,10 +20,12 @@ export function useDevice(storage: Storage = localStorage) {
       write(storage, ID_KEY, id)
       return id
     },
-    nextSeq(): number {
-      const next = Number(read(storage, COUNT_KEY) ?? 0) + 1
-      write(storage, COUNT_KEY, String(next))
-      return next
+    counted(): number {
+      return Number(read(storage, COUNT_KEY) ?? 0)
+    },
+    /** Notes that the count has come so far. */
+    note(count: number) {
+      if (count > this.counted()) write(storage, COUNT_KEY, String(count))
     },
   }
 }

@@ -1,6 +1,6 @@
 import { problemOf, useApi } from '~~/composables/useApi'
 import { deviceNow, usePostingStore } from '~~/stores/posting'
-import type { CylinderView, EventsAnswer } from '~~/utils/contract/custody'
+import type { CylinderView } from '~~/utils/contract/custody'
 import type { MintAnswer } from '~~/utils/contract/labels'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
@@ -38,10 +38,10 @@ export function useLabelling() {
         details: { code: codes[index]!, ...(labelCode && { replaces: labelCode, ...(reason && { reason }) }) },
         ...(placeId ? { placeId } : {}),
       }) as CustodyEvent)
-      const { results } = await api.post<EventsAnswer>('/api/events', { events, deviceNow: deviceNow() })
-      const refused = results.find(result => result.outcome === 'refused')
+      const settled = await posting.postAll(events)
+      const refused = settled.find(one => one.problem !== null)
       if (refused?.problem) problem.value = refused.problem
-      return these.map((one, index) => results[index]?.outcome === 'refused' ? one : { ...one, labelCode: codes[index]! })
+      return these.map((one, index) => settled[index]?.problem ? one : { ...one, labelCode: codes[index]! })
     })
   }
 

@@ -2,14 +2,13 @@ import { v7 as uuidv7 } from 'uuid'
 import { ApiError, problemOf, useApi } from '~~/composables/useApi'
 import { deviceNow, usePostingStore } from '~~/stores/posting'
 import type { Stamp } from '~~/utils/capacity/types'
-import type { EventsAnswer } from '~~/utils/contract/custody'
 import type { MintAnswer } from '~~/utils/contract/labels'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
 import type { RegistrationDetails } from '~~/utils/registration/draft'
 
-/** A cylinder that was registered; `labelProblem` says why its label was not recorded with it. */
-export interface Registered { id: string, code: string | null, stamp: Stamp, labelProblem: ProblemDetails | null }
+/** A cylinder that was registered; `labelProblem` says why its label was not recorded with it, `isQueued` that both wait to be sent. */
+export interface Registered { isQueued: boolean, id: string, code: string | null, stamp: Stamp, labelProblem: ProblemDetails | null }
 
 type Label = { choice: 'new' } | { choice: 'blank', code: string } | { choice: 'later' }
 
@@ -38,11 +37,11 @@ export function useRegistration() {
       const key = JSON.stringify([details, placeId, label, photoIds])
       if (sealed?.key !== key) sealed = await seal(details, placeId, label, photoIds)
       const { events, code } = sealed
-      const { results } = await api.post<EventsAnswer>('/api/events', { events, deviceNow: deviceNow() })
-      if (results[0]?.outcome === 'refused') throw new ApiError(results[0].problem ?? problemOf(undefined))
+      const [registration, labelling] = await posting.postAll(events)
+      if (registration!.problem) throw new ApiError(registration!.problem)
       sealed = null
-      const labelProblem = results[1]?.outcome === 'refused' ? results[1].problem ?? problemOf(undefined) : null
-      return { id: events[0]!.cylinderId, code: labelProblem ? null : code, stamp: details.stamp, labelProblem }
+      const labelProblem = labelling?.problem ?? null
+      return { isQueued: registration!.posted?.isQueued === true, id: events[0]!.cylinderId, code: labelProblem ? null : code, stamp: details.stamp, labelProblem }
     }
     catch (error) {
       problem.value = problemOf(error)

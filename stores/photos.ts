@@ -1,8 +1,9 @@
 import { defineStore } from 'pinia'
 import { v7 as uuidv7 } from 'uuid'
+import { deviceNow } from '~~/composables/deviceNow'
 import { problemOf } from '~~/composables/useApi'
 import type { HeldPhoto } from '~~/composables/photoBox'
-import { deviceNow } from '~~/stores/posting'
+import { useOutboxStore } from '~~/stores/outbox'
 import { useSessionStore } from '~~/stores/session'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { PhotoSubject } from '~~/utils/photo/subject'
@@ -16,6 +17,7 @@ const FINAL = new Set([400, 403, 404, 409, 413, 415, 422])
 /** The photos of this device on their way to the server. Events do not wait for them. */
 export const usePhotosStore = defineStore('photos', () => {
   const session = useSessionStore()
+  const outbox = useOutboxStore()
   const all = shallowRef<HeldPhoto[]>([])
   // Whoever signs in next on this device neither sees nor sends them.
   const held = computed(() => all.value.filter(({ personId }) => personId === session.user?.id))
@@ -26,7 +28,9 @@ export const usePhotosStore = defineStore('photos', () => {
   const unkept = ref(false)
   /** Goes up with each photo that has arrived. */
   const arrived = ref(0)
-  const waiting = computed(() => held.value.filter(({ form, refusal }) => form === null && refusal === null))
+  /** Those of events that are not recorded yet: the server takes no photo of what it does not know. */
+  const awaited = computed(() => new Set(outbox.entries.flatMap(({ event }) => event.photoIds ?? [])))
+  const waiting = computed(() => held.value.filter(({ id, form, refusal }) => form === null && refusal === null && !awaited.value.has(id)))
   const refused = computed(() => held.value.filter(({ refusal }) => refusal !== null))
   let loaded: { personId: string, done: Promise<void> } | null = null
   let timer: ReturnType<typeof setTimeout> | undefined
@@ -96,6 +100,7 @@ export const usePhotosStore = defineStore('photos', () => {
     busy.value = true
     clearTimeout(timer)
     try {
+      await outbox.read()
       for (let next = waiting.value[0]; next; next = waiting.value[0]) {
         const problem = await post(next)
         if (problem === null) {
@@ -117,6 +122,8 @@ export const usePhotosStore = defineStore('photos', () => {
       busy.value = false
     }
   }
+
+  watch(() => outbox.arrived, () => void send())
 
   function later() {
     unreached.value = true

@@ -1,52 +1,59 @@
 import { defineStore } from 'pinia'
 import { v7 as uuidv7 } from 'uuid'
+import { deviceNow } from '~~/composables/deviceNow'
 import { ApiError, problemOf, useApi } from '~~/composables/useApi'
 import { useDevice } from '~~/composables/useDevice'
+import { useOutboxStore, type Verdict } from '~~/stores/outbox'
 import type { CylinderView, EventResult, EventsAnswer } from '~~/utils/contract/custody'
 import { MOST_EVENTS } from '~~/utils/contract/mostEvents'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
 import type { EventKind } from '~~/utils/custody/kinds'
 import { KIND_WORDS } from '~~/utils/custody/words'
-import { isoWithOffset } from '~~/utils/quantity/instant'
+import { NEEDS_SERVER, needsServer } from '~~/utils/outbox/needsServer'
+import { savedWords } from '~~/utils/outbox/words'
 
-/** An event as a form has it, before it is given its id and its place in the device's count. */
+export { deviceNow }
+
+/** An event as a form has it, before it is given its id. */
 export type NewEvent<K extends EventKind = EventKind> = Omit<CustodyEvent<K>, 'id' | 'deviceId' | 'deviceSeq'>
 
-/** What was recorded, and the cylinder as it now stands. */
-export interface Posted { event: CustodyEvent, version: number, cylinder: CylinderView | null }
+/**
+ * What was recorded, and the cylinder as it now stands; `isQueued` where it is saved on this device and waits to be sent,
+ * and has no version yet.
+ */
+export interface Posted { event: CustodyEvent, version: number | null, cylinder: CylinderView | null, isQueued?: true }
 
-/** What became of an event that was sent: recorded, or refused with a problem. */
+/** What became of an event that was sent: recorded or waiting to be, or refused with a problem. */
 export type Settled = { event: CustodyEvent } & ({ posted: Posted, problem: null } | { posted: null, problem: ProblemDetails })
 
 const NOTICE_MS = 10_000
 const NOT_TAKEN_BACK: readonly EventKind[] = ['registered', 'corrected']
 
-/** The present instant as this device's clock has it, with its offset. */
-export function deviceNow(ms = Date.now()): string {
-  return isoWithOffset(ms, -new Date(ms).getTimezoneOffset())
-}
-
 /** The one way from the screens to the custody log. */
 export const usePostingStore = defineStore('posting', () => {
   const api = useApi()
+  const outbox = useOutboxStore()
   const notice = ref('')
   /** What was recorded last and may still be taken back; null where nothing is. */
   const last = shallowRef<Posted[] | null>(null)
   /** The events that were last taken back. */
   const takenBackIds = ref<string[]>([])
   const busy = ref(false)
-  /** Goes up with each event recorded here; a page that shows a cylinder asks for it again. */
+  /** Goes up with what is recorded or saved here; a page that shows a cylinder asks for it again. */
   const recorded = ref(0)
   let timer: ReturnType<typeof setTimeout> | undefined
+  /** What was sent without being kept, by id: sent again it has the same number. */
+  const numbers = new Map<string, number>()
 
-  /** Gives an event its id and its number on this device; from then on sending it twice records it once. */
+  watch(() => outbox.arrived, () => recorded.value++, { flush: 'sync' })
+
+  /** Gives an event its id; from then on sending it twice records it once. It is numbered when it is kept or sent. */
   function seal<K extends EventKind>(event: NewEvent<K>): CustodyEvent<K> {
-    const device = useDevice()
-    return { ...event, id: uuidv7(), deviceId: device.id(), deviceSeq: device.nextSeq() }
+    return { ...event, id: uuidv7(), deviceId: useDevice().id(), deviceSeq: 0 }
   }
 
-  /** Errors: ApiError where the server was not reached or refused the event; it is then still its author's. */
+  /** Errors: ApiError where the event was refused, or neither recorded nor saved; it is then still its author's. */
   async function post(event: CustodyEvent): Promise<Posted> {
     const [settled] = await postAll([event])
     if (settled!.problem) throw new ApiError(settled!.problem)
@@ -54,28 +61,81 @@ export const usePostingStore = defineStore('posting', () => {
   }
 
   /**
-   * Records several events, all in one request as far as one takes them.
+   * Records several events: each is on this device before it is sent, and stays there until the server has said what
+   * became of it.
    *
    * Shape: what became of each, in their order; `each` is told of every request's as soon as it is answered.
-   * Errors: ApiError where the server was not reached; what `each` was told of before that is recorded.
+   * Errors: ApiError where they could not be saved, or need a server that was not reached; what `each` was told of
+   * before that is recorded.
    */
   async function postAll(events: readonly CustodyEvent[], each: (settled: Settled[]) => void = () => {}): Promise<Settled[]> {
     busy.value = true
     try {
-      const all: Settled[] = []
-      for (let from = 0; from < events.length; from += MOST_EVENTS) {
-        const some = events.slice(from, from + MOST_EVENTS)
-        const answer = await api.post<EventsAnswer>('/api/events', { events: some, deviceNow: deviceNow() })
-        const settled = some.map(event => settledBy(answer, event))
-        if (settled.some(({ posted }) => posted !== null)) recorded.value++
-        all.push(...settled)
-        each(settled)
-      }
-      return all
+      return events.some(needsServer) ? await postAtOnce(events, each) : await postByOutbox(events, each)
     }
     finally {
       busy.value = false
     }
+  }
+
+  async function postByOutbox(events: readonly CustodyEvent[], each: (settled: Settled[]) => void): Promise<Settled[]> {
+    let kept: CustodyEvent[]
+    try {
+      kept = await outbox.put(events)
+    }
+    catch (error) {
+      if (!navigator.onLine) throw error
+      // What was not kept here may still be recorded, where there is a server.
+      return postAtOnce(events, each).catch((unsent) => {
+        throw problemOf(unsent).status === 0 ? error : unsent
+      })
+    }
+    const all = new Map<string, Settled>()
+    const take = async (verdicts: ReadonlyMap<string, Verdict>) => {
+      const some = await Promise.all(kept.filter(({ id }) => verdicts.has(id)).map(event => settledBy(event, verdicts.get(event.id)!)))
+      for (const settled of some) all.set(settled.event.id, settled)
+      each(some)
+    }
+    const heard: Promise<void>[] = []
+    await outbox.sendNow(kept.map(({ id }) => id), verdicts => heard.push(take(verdicts)))
+    await Promise.all(heard)
+    if ([...all.values()].some(({ posted }) => posted?.isQueued)) recorded.value++
+    return kept.map(({ id }) => all.get(id)!)
+  }
+
+  async function settledBy(event: CustodyEvent, verdict: Verdict): Promise<Settled> {
+    if (verdict.is === 'refused') return { event, posted: null, problem: verdict.problem }
+    if (verdict.is === 'recorded') return { event, posted: { event, version: verdict.version, cylinder: verdict.cylinder }, problem: null }
+    return { event, posted: { event, version: null, cylinder: await asItWillStand(event.cylinderId), isQueued: true }, problem: null }
+  }
+
+  /** The cylinder by this device's copy with what waits on top of it; null where the device has none. */
+  async function asItWillStand(cylinderId: string): Promise<CylinderView | null> {
+    try {
+      const { offlineAnswer } = await import('~~/composables/offlineAnswers')
+      return await offlineAnswer(`/api/cylinders/${cylinderId}`) as CylinderView | undefined ?? null
+    }
+    catch {
+      return null
+    }
+  }
+
+  /** Sends without keeping: what decides on a cylinder as it stands now does not wait. What waits goes before it. */
+  async function postAtOnce(events: readonly CustodyEvent[], each: (settled: Settled[]) => void): Promise<Settled[]> {
+    if (!navigator.onLine && events.some(needsServer)) throw new ApiError(NEEDS_SERVER)
+    if (outbox.waiting.length > 0) await outbox.flush()
+    const numbered = await outbox.number(events.map(event => ({ ...event, deviceSeq: numbers.get(event.id) ?? event.deviceSeq })))
+    for (const { id, deviceSeq } of numbered) numbers.set(id, deviceSeq)
+    const all: Settled[] = []
+    for (let from = 0; from < numbered.length; from += MOST_EVENTS) {
+      const some = numbered.slice(from, from + MOST_EVENTS)
+      const answer = await api.post<EventsAnswer>('/api/events', { events: some, deviceNow: deviceNow() })
+      const settled = some.map(event => settledAtOnce(answer, event))
+      if (settled.some(({ posted }) => posted !== null)) recorded.value++
+      all.push(...settled)
+      each(settled)
+    }
+    return all
   }
 
   /** Says on every screen what was recorded, and offers for ten seconds to take it back. */
@@ -85,25 +145,40 @@ export const usePostingStore = defineStore('posting', () => {
 
   /** The same for what was recorded together, in one text. */
   function announceAll(posted: Posted[], text: string) {
-    say(text)
+    const queued = posted.filter(({ isQueued }) => isQueued)
+    say(queued.length > 0 ? savedWords(queued.map(({ event }) => event)) : text)
     if (posted.length === 0 || posted.some(({ event }) => NOT_TAKEN_BACK.includes(event.kind))) return
     last.value = posted
   }
 
-  /** Takes back what was just recorded, each by an event of its own: the log loses nothing. */
+  /**
+   * Takes back what was just recorded, each by an event of its own: the log loses nothing. What was never sent is taken
+   * out of the outbox.
+   */
   async function takeBack(): Promise<void> {
     const taken = last.value
     if (!taken) return
     clear()
     try {
-      const settled = await postAll(taken.map(({ event, version }) => seal<'corrected'>({
+      if (taken.every(({ isQueued }) => isQueued) && await outbox.takeOut(taken.map(({ event }) => event.id))) {
+        takenBackIds.value = taken.map(({ event }) => event.id)
+        recorded.value++
+        say(taken.length === 1 ? 'Taken back before it was sent.' : `All ${taken.length} taken back before they were sent.`)
+        return
+      }
+      const arrived = await arrivedOf(taken)
+      if (arrived === null) {
+        say('Not taken back: it may have been sent, and the server was not reached. Correct it in the custody log later.')
+        return
+      }
+      const settled = await postAll(arrived.map(({ event, version }) => seal<'corrected'>({
         cylinderId: event.cylinderId,
         kind: 'corrected',
         occurredAt: deviceNow(),
-        expects: version,
+        expects: version!,
         details: { eventId: event.id, reason: 'taken back at once' },
       }) as CustodyEvent))
-      takenBackIds.value = taken.filter((_, at) => settled[at]!.posted !== null).map(({ event }) => event.id)
+      takenBackIds.value = arrived.filter((_, at) => settled[at]!.posted !== null).map(({ event }) => event.id)
       const refusal = settled.find(({ problem }) => problem !== null)?.problem
       say(refusal
         ? notTakenBack(refusal, takenBackIds.value.length, taken.length)
@@ -114,6 +189,18 @@ export const usePostingStore = defineStore('posting', () => {
     catch (error) {
       say(notTakenBack(problemOf(error), 0, taken.length))
     }
+  }
+
+  /** These as the log has them; null where that is not known of one. */
+  async function arrivedOf(taken: readonly Posted[]): Promise<Posted[] | null> {
+    const queued = taken.filter(({ isQueued }) => isQueued).map(({ event }) => event.id)
+    if (queued.length === 0) return [...taken]
+    const verdicts = await outbox.sendNow(queued)
+    const known = taken.map((one) => {
+      const verdict = verdicts.get(one.event.id)
+      return verdict?.is === 'recorded' ? { ...one, version: verdict.version } : one
+    })
+    return known.every(({ version }) => version !== null) ? known : null
   }
 
   function say(text: string) {
@@ -131,7 +218,7 @@ export const usePostingStore = defineStore('posting', () => {
   return { notice, last, takenBackIds, busy, recorded, seal, post, postAll, announce, announceAll, takeBack, say, clear }
 })
 
-function settledBy(answer: EventsAnswer, event: CustodyEvent): Settled {
+function settledAtOnce(answer: EventsAnswer, event: CustodyEvent): Settled {
   const result: EventResult | undefined = answer.results.find(each => each.id === event.id)
   if (result?.outcome === 'refused' && result.problem) return { event, posted: null, problem: result.problem }
   if (result?.version === undefined) return { event, posted: null, problem: problemOf(undefined) }

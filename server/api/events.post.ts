@@ -1,15 +1,20 @@
 import { eventsBody, type EventsAnswer } from '../../utils/contract/custody'
+import { NOT_ITS_AUTHOR } from '../../utils/outbox/notItsAuthor'
 import { appendTelling } from '../utils/custody/append'
 import { cylinderViews } from '../utils/custody/cylinderViews'
 import { cylindersOf } from '../utils/custody/cylindersOf'
 import { useDatabase } from '../utils/database/currentDatabase'
 import { apiRoute } from '../utils/http/apiRoute'
+import { problem } from '../utils/http/problem'
 
 /**
  * POST /api/events: the one way into the custody log. Each event is answered on its own.
  * Sending a request again is safe: what is recorded is answered `duplicate`.
  */
 export default apiRoute({ permission: 'events:post', body: eventsBody }, async ({ access, body }): Promise<EventsAnswer> => {
+  if (body.author !== undefined && body.author !== access.personId) {
+    throw problem(403, 'Somebody else is signed in', 'These entries wait until their author signs in.', undefined, { type: NOT_ITS_AUTHOR })
+  }
   const db = useDatabase()
   const now = Date.now()
   const deviceNow = body.deviceNow ? Date.parse(body.deviceNow) : null

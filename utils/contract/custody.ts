@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
 import type { Half } from '../custody/half'
+import type { CylinderState } from '../custody/state'
 import type { ProblemDetails } from './problem'
 import { FLEET_CHOICES, FLEET_TEXTS } from './fleetQuestion'
 import { fleetColumns } from './fleetViews'
@@ -13,6 +14,8 @@ import { pastQuery } from './past'
 export const eventsBody = z.strictObject({
   events: z.array(z.looseObject({ id: z.string().min(1).max(100) })).min(1).max(MOST_EVENTS),
   deviceNow: z.iso.datetime({ offset: true }).optional(),
+  /** The person whose events these are: in anybody else's session nothing of them is recorded. */
+  author: id.optional(),
 })
 
 /** What became of one event that was posted. */
@@ -74,6 +77,8 @@ export interface FleetSummary {
 /** What GET /api/cylinders/{ref}/events answers. Newest in effect first. */
 export interface CustodyLogAnswer extends Page<LogLine> {
   cylinder: { id: string, labelCode: string | null, serial: string | null, version: number }
+  /** From a device's copy, which has no lines: they are with the server. */
+  isWithServer?: true
 }
 
 /** What GET /api/cylinders/{ref}/fold answers: what a browser needs to judge a draft event by the same rules. */
@@ -81,6 +86,8 @@ export interface FoldInput {
   events: AnyRecordedEvent[]
   codesOnTwo: string[]
   otherHalves: Half[]
+  /** From a device's copy, in place of the events. */
+  state?: CylinderState
 }
 
 export type { CylinderRow, CylinderView, LogLine }
