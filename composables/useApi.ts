@@ -1,3 +1,4 @@
+import { useCopyOf } from '~~/composables/useCopyOf'
 import type { ProblemDetails, ProblemError } from '~~/utils/contract/problem'
 
 type Query = Record<string, string | number | boolean | null | undefined>
@@ -42,7 +43,8 @@ export function errorAt(problem: { errors?: ProblemError[] } | null, path: strin
 }
 
 /**
- * The server's routes, with the person's cookies on both sides. Call it in the set-up of a component or a store.
+ * The server's routes, with the person's cookies on both sides. Call it in the set-up of a component or a store. What is
+ * only read comes from this device's copy where the server is not reached and the copy can tell.
  *
  * Errors: every failure is an {@link ApiError}; a session that ended leads to the sign-in page and back.
  */
@@ -50,6 +52,38 @@ export function useApi() {
   const request = useRequestFetch()
   const nuxt = useNuxtApp()
   const router = useRouter()
+  const copyOf = useCopyOf()
+
+  async function get<T>(path: string, query?: Query): Promise<T> {
+    if (import.meta.server) return call<T>('GET', path, { query })
+    if (!navigator.onLine) {
+      const kept = await fromCopy<T>(path, query)
+      if (kept) return kept.answer
+    }
+    try {
+      const answer = await call<T>('GET', path, { query })
+      copyOf.value = null
+      return answer
+    }
+    catch (error) {
+      const kept = problemOf(error).status === 0 ? await fromCopy<T>(path, query) : null
+      if (kept) return kept.answer
+      throw error
+    }
+  }
+
+  async function fromCopy<T>(path: string, query?: Query): Promise<{ answer: T } | null> {
+    // What answers is fetched when it is first needed; where not even that is on the device, there is no copy either.
+    const answers = await import('~~/composables/offlineAnswers').catch(() => null)
+    try {
+      const kept = await answers?.answerFromCopy(path, query) ?? null
+      if (kept) copyOf.value = kept.of
+      return kept && { answer: kept.answer as T }
+    }
+    catch (error) {
+      throw new ApiError(problemOf(error))
+    }
+  }
 
   async function call<T>(method: Method, path: string, options: { query?: Query, body?: unknown } = {}): Promise<T> {
     try {
@@ -72,7 +106,9 @@ export function useApi() {
   }
 
   return {
-    get: <T>(path: string, query?: Query) => call<T>('GET', path, { query }),
+    get,
+    /** From the server or not at all. */
+    getFresh: <T>(path: string, query?: Query) => call<T>('GET', path, { query }),
     post: <T>(path: string, body: unknown) => call<T>('POST', path, { body }),
     put: <T>(path: string, body: unknown) => call<T>('PUT', path, { body }),
     patch: <T>(path: string, body: unknown) => call<T>('PATCH', path, { body }),

@@ -64,8 +64,8 @@ export function usePreview(input: {
         load(), rules.load(), foldInput(content.cylinderId), other && foldInput(other.cylinderId),
       ])
       if (mine !== turn) return
-      const counter = other && otherKnown ? { events: otherKnown.events, draft: draftOf(other) } : undefined
-      const judged = preview(mineKnown.events, draftOf(content), viewContext(policy, catalogue, session.access, mineKnown), counter)
+      const counter = other && otherKnown ? { known: otherKnown.state ?? otherKnown.events, draft: draftOf(other) } : undefined
+      const judged = preview(mineKnown.state ?? mineKnown.events, draftOf(content), viewContext(policy, catalogue, session.access, mineKnown), counter)
       show(judged.findings, judged.changes)
     }
     catch {

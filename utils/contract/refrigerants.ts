@@ -1,30 +1,15 @@
 import { z } from 'zod'
 import type { CapacityView } from '../custody/cylinderView'
-import type { Gwp, GwpBasis } from '../refrigerant/gwp'
-import type { PressureClass, PressureClassing } from '../refrigerant/pressureClass'
+import type { Gwp } from '../refrigerant/gwp'
+import type { CompositionLine, RefrigerantLine } from '../refrigerant/lines'
+import type { PressureClassing } from '../refrigerant/pressureClass'
 import type { Saturation } from '../refrigerant/saturation'
 import type { Refrigerant, SaturationRow } from '../refrigerant/types'
 import type { UnEntry } from '../refrigerant/unEntry'
 import { splitSpec } from '../requalification/specs'
 import { massInQuery, stampedMassInQuery, type Page } from './parts'
 
-/** A GWP that stands for a refrigerant where there is room for one, with the list it is from. */
-export type HeadlineGwp = { basis: GwpBasis, value: number } | null
-
-/** GET /api/refrigerants, one line. */
-export interface RefrigerantLine {
-  designation: string
-  kind: string
-  safetyClass: string | null
-  accuracyGroup: string
-  flammable: boolean
-  toxic: boolean
-  pressureClass: PressureClass
-  gwp: HeadlineGwp
-}
-
-/** A blend of which the composition is published and no property is held. */
-export interface CompositionLine { designation: string, composition: Refrigerant['composition'], gwp: HeadlineGwp }
+export type { CompositionLine, RefrigerantLine }
 
 export type RefrigerantsAnswer = Page<RefrigerantLine> & { compositions: CompositionLine[] }
 

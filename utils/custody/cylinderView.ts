@@ -105,6 +105,8 @@ export interface CylinderView {
   findings: Finding[]
   /** Persons whose signature something here waits for, by id. */
   waitsForSignatureOf: string[]
+  /** On a device without the server: so many events that wait there are not in this, for it takes the whole log to know. */
+  waitingNotIn?: number
   may: EventKind[]
   mayNot: { kind: EventKind, because: string }[]
   lastEventAt: string | null

@@ -3,8 +3,11 @@ import type { CylinderView } from './cylinderView'
 import type { Finding } from './finding'
 import type { Half } from './half'
 import { urgencyOrder } from './findings/order'
-import { fold } from './fold'
+import { continueFold } from './continueFold'
+import { fold, type FoldResult } from './fold'
 import { laterLines, type ChangedLine } from './laterLines'
+import { recordedNow } from './recordedNow'
+import type { CylinderState } from './state'
 import { view, type ViewContext } from './view'
 
 /** What would be said if an event were recorded now. */
@@ -16,60 +19,52 @@ export interface Preview {
   changes: ChangedLine[]
 }
 
+/** What is known of a cylinder: its events, or where these are not at hand the state that they made. */
+export type KnownCylinder = readonly AnyRecordedEvent[] | CylinderState
+
 /**
  * Judges a draft as it would be judged once recorded, by the same rules, here or on the server.
  *
- * The author's clock is taken as right, for it is only measured when the event is sent.
+ * The author's clock is taken as right, for it is only measured when the event is sent. From a state alone nothing is found
+ * where it takes the whole log to know; it is judged once it is recorded.
  *
- * @param counter the other cylinder's events and its half, where the draft is one half of what happens between two.
+ * @param counter the other cylinder and its half, where the draft is one half of what happens between two.
  */
-export function preview(
-  events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, outside: ViewContext, counter?: { events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent },
-): Preview {
+export function preview(known: KnownCylinder, draft: AnyCustodyEvent, outside: ViewContext, counter?: { known: KnownCylinder, draft: AnyCustodyEvent }): Preview {
   const context = counter ? { ...outside, otherHalves: halvesWith(counter, outside) } : outside
-  const now = view(fold(events, context).state, context)
-  const withDraft = [...events, recordedNow(events, draft, context)]
-  const { state, steps } = fold(withDraft, context)
-  const then = view(state, context)
+  const now = view(isEvents(known) ? fold(known, context).state : known, context)
+  const folded = withDraft(known, draft, context)
+  if (folded === null) return { view: now, findings: [], changes: [] }
+  const then = view(folded.state, context)
   const raised = then.findings.filter(finding => !now.findings.some(({ code, severity }) => code === finding.code && severity === finding.severity))
-  const told = steps.find(({ eventId }) => eventId === draft.id)?.findings ?? []
+  const told = folded.steps.find(({ eventId }) => eventId === draft.id)?.findings ?? []
   return {
     view: then,
     findings: [...told, ...raised.filter(({ code }) => !told.some(other => other.code === code))].sort(urgencyOrder),
-    changes: laterLines(withDraft, context, new Set([draft.id])).get(draft.id) ?? [],
+    // A state is only gone on from by what comes last: nothing recorded before it changes.
+    changes: isEvents(known) ? laterLines([...known, recordedAfter(known, draft, context)], context, new Set([draft.id])).get(draft.id) ?? [] : [],
   }
 }
 
 /** What other cylinders say, with the half that is recorded of one of them at the same time. */
-function halvesWith({ events, draft }: { events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent }, context: ViewContext): Half[] {
-  const { halves } = fold([...events, recordedNow(events, draft, context)], context).state
-  return [...context.otherHalves.filter(({ cylinderId }) => cylinderId !== draft.cylinderId), ...halves]
+function halvesWith({ known, draft }: { known: KnownCylinder, draft: AnyCustodyEvent }, context: ViewContext): readonly Half[] {
+  const folded = withDraft(known, draft, context)
+  if (folded === null) return context.otherHalves
+  return [...context.otherHalves.filter(({ cylinderId }) => cylinderId !== draft.cylinderId), ...folded.state.halves]
 }
 
-function recordedNow(events: readonly AnyRecordedEvent[], draft: AnyCustodyEvent, { access, nowMs }: ViewContext): AnyRecordedEvent {
-  const occurredAt = Date.parse(draft.occurredAt)
-  const authorId = access?.personId ?? ''
-  return {
-    seq: Math.max(0, ...events.map(({ seq }) => seq)) + 1,
-    id: draft.id,
-    cylinderId: draft.cylinderId,
-    version: Math.max(0, ...events.map(({ version }) => version)) + 1,
-    kind: draft.kind,
-    occurredAt,
-    occurredOffsetMinutes: 0,
-    clockSkewSeconds: 0,
-    effectiveAt: Math.min(occurredAt, nowMs),
-    recordedAt: nowMs,
-    deviceId: draft.deviceId,
-    deviceSeq: draft.deviceSeq,
-    actorId: authorId,
-    postedBy: authorId,
-    supervisorId: draft.supervisorId ?? null,
-    trainee: access?.trainee ?? false,
-    placeId: draft.placeId ?? null,
-    note: draft.note ?? null,
-    practice: draft.practice ?? false,
-    confirmed: draft.confirmed ?? [],
-    details: draft.details,
-  } as AnyRecordedEvent
+function withDraft(known: KnownCylinder, draft: AnyCustodyEvent, context: ViewContext): FoldResult | null {
+  const last = recordedAfter(known, draft, context)
+  return isEvents(known) ? fold([...known, last], context) : continueFold(known, [last], context)
+}
+
+function recordedAfter(known: KnownCylinder, draft: AnyCustodyEvent, context: ViewContext): AnyRecordedEvent {
+  const last = isEvents(known)
+    ? { seq: Math.max(0, ...known.map(({ seq }) => seq)), version: Math.max(0, ...known.map(({ version }) => version)) }
+    : { seq: 0, version: known.version }
+  return recordedNow(draft, last, context)
+}
+
+function isEvents(known: KnownCylinder): known is readonly AnyRecordedEvent[] {
+  return Array.isArray(known)
 }

@@ -37,6 +37,7 @@ export function moreInWords({ more, isMoreUnread }: Pick<StampFound, 'more' | 'i
   return `${more}${isMoreUnread ? ' or more' : ''} ${more === 1 && !isMoreUnread ? 'other has' : 'others have'} these characters too.`
 }
 
-function squeezed(text: string): string {
+/** Characters as a stamp is searched by: upper and lower case, spaces and hyphens are alike. */
+export function squeezed(text: string): string {
   return text.toUpperCase().replace(/[\s-]/g, '')
 }

@@ -1,10 +1,9 @@
-import type {
-  CompositionLine, CompositionRecordAnswer, RefrigerantLine, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer,
-} from '~~/utils/contract/refrigerants'
+import type { CompositionRecordAnswer, RefrigerantRecordAnswer, RefrigerantsAnswer, SaturationAnswer } from '~~/utils/contract/refrigerants'
 import { celsiusFromFahrenheit } from '~~/utils/quantity/temperature'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
 import { asListed } from '~~/utils/refrigerant/designation'
-import { GWP_BASES, gwpOf, headlineGwp } from '~~/utils/refrigerant/gwp'
+import { GWP_BASES, gwpOf } from '~~/utils/refrigerant/gwp'
+import { catalogueLines } from '~~/utils/refrigerant/lines'
 import { pressureClassOf } from '~~/utils/refrigerant/pressureClass'
 import { isFlammable, isToxic } from '~~/utils/refrigerant/safety'
 import { hasLiquidAt, saturationAt } from '~~/utils/refrigerant/saturation'
@@ -20,8 +19,7 @@ const SAME_TEMPERATURE_K = 0.05
 
 /** Every refrigerant of the catalogue in its order, and the blends of which only the composition is known. */
 export function refrigerantList(): RefrigerantsAnswer {
-  const items = [...CATALOGUE.refrigerants.values()].map(line)
-  const compositions = [...CATALOGUE.compositions.values()].map(compositionLine)
+  const { items, compositions } = catalogueLines(CATALOGUE)
   return { items, nextCursor: null, total: items.length, compositions }
 }
 
@@ -41,18 +39,6 @@ export function saturationOf(designation: string, temperatureC: number): Saturat
     ])
   }
   return saturationAt(refrigerant, temperatureC)
-}
-
-function line(refrigerant: Refrigerant): RefrigerantLine {
-  const { designation, kind, safetyClass, accuracyGroup } = refrigerant
-  return {
-    designation, kind, safetyClass, accuracyGroup, flammable: isFlammable(safetyClass), toxic: isToxic(safetyClass),
-    pressureClass: pressureClassOf(refrigerant).pressureClass, gwp: headlineGwp(refrigerant),
-  }
-}
-
-function compositionLine({ designation, components }: Composition): CompositionLine {
-  return { designation, composition: [...components], gwp: headlineGwp({ composition: [...components] }) }
 }
 
 function propertiesRecord(refrigerant: Refrigerant): RefrigerantRecordAnswer {

@@ -1,0 +1,96 @@
+import type { Answering, Asked } from '~~/composables/offlineAnswers'
+import type { PeopleAnswer } from '~~/utils/contract/people'
+import type { Firm, FirmsAnswer, Place, PlacesAnswer } from '~~/utils/contract/places'
+import type { PolicyAnswer } from '~~/utils/contract/policy'
+import type { RefrigerantsAnswer } from '~~/utils/contract/refrigerants'
+import type { ScalesAnswer } from '~~/utils/contract/scales'
+import type { VanAnswer } from '~~/utils/contract/vans'
+import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
+import { isGivenAway } from '~~/utils/custody/lifecycle'
+import { kitNames } from '~~/utils/kit/kitContext'
+import { DEFAULT_RETEST_SETTINGS } from '~~/utils/requalification/retestSettings'
+
+type Answer = (answering: Answering, asked: Asked) => Promise<unknown | undefined>
+
+/** How the copy answers for a list of the firm, or for one of a list by its id; null where it does not. */
+export function offlineLists(list: string, id: string | null): Answer | null {
+  if (id !== null) return list === 'vans' ? answering => theVan(answering, id) : null
+  return LISTS[list] ?? null
+}
+
+const LISTS: Record<string, Answer | undefined> = { places, firms, people, policy, scales, refrigerants }
+
+async function places(answering: Answering, asked: Asked): Promise<PlacesAnswer> {
+  const items = await counted(answering, answering.firm.places.filter(used(asked)), ({ id }) => id)
+  return { items, nextCursor: null, total: items.length }
+}
+
+async function firms(answering: Answering, asked: Asked): Promise<FirmsAnswer> {
+  const found = answering.firm.firms.filter(used(asked)).filter(({ kind }) => asked['kind'] === undefined || kind === asked['kind'])
+  const items = await counted(answering, found, ({ placeId }) => placeId)
+  return { items, nextCursor: null, total: items.length }
+}
+
+async function people({ firm }: Answering, asked: Asked): Promise<PeopleAnswer> {
+  return { items: firm.people.filter(used(asked)) }
+}
+
+async function scales({ firm }: Answering, asked: Asked): Promise<ScalesAnswer> {
+  const items = firm.scales.filter(used(asked))
+  return { items, nextCursor: null, total: items.length }
+}
+
+async function policy({ firm: { policy: told }, nowMs }: Answering): Promise<PolicyAnswer> {
+  return {
+    asOf: nowMs,
+    ...told,
+    fillPolicy: told.fillPolicies.findLast(({ fromAt }) => fromAt <= nowMs)?.policy ?? DEFAULT_FILL_POLICY,
+    retest: told.retests.findLast(({ fromAt }) => fromAt <= nowMs)?.retest ?? DEFAULT_RETEST_SETTINGS,
+    rowsBehind: 0,
+  }
+}
+
+async function refrigerants(): Promise<RefrigerantsAnswer> {
+  const [{ CATALOGUE }, { catalogueLines }] = await Promise.all([import('~~/utils/refrigerant/allRefrigerants'), import('~~/utils/refrigerant/lines')])
+  const { items, compositions } = catalogueLines(CATALOGUE)
+  return { items, nextCursor: null, total: items.length, compositions }
+}
+
+async function theVan(answering: Answering, id: string): Promise<VanAnswer | undefined> {
+  const { reader, firm, isWhole } = answering
+  const place = firm.places.find(one => one.id === id && one.kind === 'van')
+  if (!place || !isWhole) return undefined
+  const said = firm.vans.find(({ vanId }) => vanId === id)
+  const checkIn = said?.checkIn ?? null
+  const checked = checkIn && { checkedBy: kitNames(firm).person(checkIn.checkedBy), checkedAt: checkIn.checkedAt }
+  const [[van], aboard, held, missed] = await Promise.all([
+    counted(answering, [place], one => one.id),
+    reader.at(id),
+    place.technicianId === null ? [] : reader.heldBy(place.technicianId),
+    reader.byIds(checkIn?.missing ?? []),
+  ])
+  const unseen = missed.filter(state => state.retired === null && !isGivenAway(state)
+    && (state.lastSeenAt === null || state.lastSeenAt <= Date.parse(checkIn!.checkedAt)))
+  const [aboardRows, heldRows, unseenRows] = await Promise.all([
+    reader.rowsOf(aboard), reader.rowsOf(held.filter(({ placeId }) => placeId !== id)), reader.rowsOf(unseen),
+  ])
+  return {
+    van: van!,
+    aboard: aboardRows,
+    heldElsewhere: heldRows,
+    materials: said?.materials ?? null,
+    toLookFor: unseenRows.map(cylinder => ({ cylinder, ...checked! })),
+    lastCheckIn: checked,
+  }
+}
+
+function used({ active }: Asked): (one: { active: boolean }) => boolean {
+  return one => active === undefined || one.active === (active === 'true')
+}
+
+async function counted<T extends Omit<Place, 'cylinders'> | Omit<Firm, 'cylinders'>>(
+  { count }: Answering, items: readonly T[], placeOf: (item: T) => string,
+): Promise<(T & { cylinders: number })[]> {
+  const counts = await count(items.map(placeOf))
+  return items.map((item, index) => ({ ...item, cylinders: counts[index] ?? 0 }))
+}

@@ -1,0 +1,192 @@
+import 'fake-indexeddb/auto'
+import { registerEndpoint } from '@nuxt/test-utils/runtime'
+import { getQuery, setResponseStatus } from 'h3'
+import { createPinia, setActivePinia } from 'pinia'
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
+import { kitBox } from '~~/composables/kitBox'
+import { offlineAnswer } from '~~/composables/offlineAnswers'
+import { useKitStore } from '~~/stores/kit'
+import { useSessionStore } from '~~/stores/session'
+import type { KitAnswer } from '~~/utils/contract/kit'
+import type { CylinderView, FleetAnswer, FoldInput } from '~~/utils/contract/custody'
+import type { PlacesAnswer } from '~~/utils/contract/places'
+import type { VanAnswer } from '~~/utils/contract/vans'
+import { did, filled, kg, registered, SHOP, TECHNICIAN, VAN } from '../../helpers/custody'
+import { kitAnswerOf, stateOf } from '../../helpers/kitAnswers'
+
+const [ONE, TWO, THREE] = ['0198f000-0000-7000-8000-000000000101', '0198f000-0000-7000-8000-000000000102', '0198f000-0000-7000-8000-000000000103']
+const inShop = stateOf(ONE, registered(), did('labelled', { code: '7K3M9Q2TX' }), filled('R-22', 22))
+const inVan = stateOf(TWO, registered({ stamp: { serial: 'B-77 31', spec: 'DOT-4BA', servicePressurePsig: 400, tareWeight: kg(12), waterCapacity: kg(20), madeMonth: '2024-03', flammableMarked: true } }), did('moved', { toPlaceId: VAN, toHolderId: TECHNICIAN }))
+
+/** What the server answers, one after another; the status of a refusal in place of one. */
+let answers: (KitAnswer | number)[] = []
+let asked: Record<string, unknown>[] = []
+registerEndpoint('/api/kit', (event) => {
+  asked.push(getQuery(event))
+  const next = answers.shift() ?? kitAnswerOf([], { seq: 9, firm: undefined })
+  if (typeof next !== 'number') return next
+  setResponseStatus(event, next)
+  return { type: 'about:blank', title: 'No', status: next, detail: '' }
+})
+
+/** A visit of a person: a fresh page on the same device. */
+function visit(id = TECHNICIAN) {
+  setActivePinia(createPinia())
+  useSessionStore().set({ id, name: 'Tina', email: 'tina@firm.example', roles: ['technician'], trainee: false } as never)
+  return useKitStore()
+}
+
+beforeEach(() => {
+  answers = []
+  asked = []
+  vi.useFakeTimers({ toFake: ['setInterval', 'clearInterval'] })
+})
+afterEach(async () => {
+  vi.useRealTimers()
+  const box = kitBox()
+  await box.clear()
+  await box.close()
+})
+
+describe('the copy of the firm on a phone', () => {
+  it('is fetched in parts, and then only what has changed since', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5, next: ONE }), kitAnswerOf([inVan], { seq: 5, firm: undefined })]
+    const kit = visit()
+    await kit.start()
+    expect(asked).toEqual([{}, { since: '5', mark: '0123456789abcdef', firm: 'fedcba9876543210', after: ONE }])
+    expect([kit.count, kit.seq]).toEqual([2, 5])
+    answers = [kitAnswerOf([stateOf(THREE, registered())], { seq: 6, firm: undefined })]
+    await kit.follow()
+    expect(asked.at(-1)).toEqual({ since: '5', mark: '0123456789abcdef', firm: 'fedcba9876543210' })
+    expect([kit.count, kit.seq]).toEqual([3, 6])
+  })
+
+  it('goes on where it was when the phone dies in the midst of the first walk', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5, next: ONE }), 503]
+    await visit().start()
+    answers = [kitAnswerOf([inVan], { seq: 5, firm: undefined })]
+    const kit = visit()
+    await kit.start()
+    expect(asked.at(-1)).toMatchObject({ since: '5', after: ONE })
+    expect(kit.count).toBe(2)
+  })
+
+  it('lists nothing before it is whole, for half a van looks like a whole one', async () => {
+    answers = [kitAnswerOf([inVan], { anew: true, next: TWO }), 503]
+    await visit().start()
+    expect(await offlineAnswer('/api/cylinders', { holder: TECHNICIAN })).toBeUndefined()
+    expect(await offlineAnswer(`/api/vans/${VAN}`)).toBeUndefined()
+    expect(await offlineAnswer(`/api/cylinders/${ONE}`)).toBeUndefined()
+    expect(await offlineAnswer(`/api/cylinders/${TWO}`)).toMatchObject({ id: TWO })
+  })
+
+  it('stays as it is where the server is not reached or the session has ended', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5 })]
+    const kit = visit()
+    await kit.start()
+    const followedAt = kit.followedAt
+    answers = [401]
+    await kit.follow()
+    expect([kit.count, kit.seq, kit.followedAt]).toEqual([1, 5, followedAt])
+  })
+
+  it('is thrown away where the server says that its log is another one', async () => {
+    answers = [kitAnswerOf([inShop, inVan], { anew: true, seq: 5 })]
+    const kit = visit()
+    await kit.start()
+    answers = [kitAnswerOf([stateOf(THREE, registered())], { anew: true, seq: 2 })]
+    await kit.follow()
+    expect([kit.count, kit.seq]).toEqual([1, 2])
+    expect(await offlineAnswer(`/api/cylinders/${THREE}`)).toMatchObject({ id: THREE })
+  })
+
+  it('leaves an answer of another form alone', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5 }), kitAnswerOf([], { anew: true, seq: 9, form: 2 })]
+    const kit = visit()
+    await kit.start()
+    await kit.follow()
+    expect([kit.count, kit.seq]).toEqual([1, 5])
+  })
+
+  it('is no other person\'s, and gone after signing out', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true })]
+    await visit().start()
+    answers = [503]
+    const other = visit('0198f000-0000-7000-8000-0000000000b9')
+    await other.start()
+    expect(other.count).toBe(0)
+    expect(await offlineAnswer(`/api/cylinders/${ONE}`)).toBeUndefined()
+    answers = [kitAnswerOf([inShop], { anew: true })]
+    const kit = visit()
+    await kit.start()
+    await kit.wipe()
+    expect(await kitBox().count()).toBe(0)
+  })
+
+  it('is opened again where the browser has closed it in the background', async () => {
+    const box = kitBox()
+    await box.clear()
+    await box.close()
+    expect(await box.count()).toBe(0)
+  })
+})
+
+describe('an answer from the copy', () => {
+  beforeEach(async () => {
+    answers = [kitAnswerOf([inShop, inVan], { anew: true })]
+    await visit().start()
+  })
+
+  it('is the cylinder with its limit, by its label however typed, its id or its serial', async () => {
+    const view = await offlineAnswer('/api/cylinders/7k3m9q2tx') as CylinderView
+    // Water capacity 20 kg, R-22: 16,000 g; tare 12 kg; 10 kg are in it.
+    expect(view.capacity).toMatchObject({ fillLimitGrams: 16_000, stopWeightGrams: 28_000, roomGrams: 6_000 })
+    expect(view.place).toEqual({ id: SHOP, name: 'North shop', kind: 'shop' })
+    expect((await offlineAnswer(`/api/cylinders/${ONE}`) as CylinderView).id).toBe(ONE)
+    expect((await offlineAnswer('/api/cylinders/B-77%2031') as CylinderView).id).toBe(TWO)
+  })
+
+  it('asks about a refrigerant to come', async () => {
+    const view = await offlineAnswer(`/api/cylinders/${TWO}`, { refrigerant: 'r-22' }) as CylinderView
+    expect(view.capacity).toMatchObject({ forRefrigerant: 'R-22', stopWeightGrams: 28_000 })
+  })
+
+  it('says of what is not in it that it is not in the copy', async () => {
+    await expect(offlineAnswer('/api/cylinders/000000000')).rejects.toMatchObject({ data: { status: 404, type: 'not-in-copy' } })
+  })
+
+  it('tells what is held, what stands in a van, and what ends with typed characters', async () => {
+    const ids = async (path: string, query: object) => (await offlineAnswer(path, { ...query }) as FleetAnswer).items.map(({ id }) => id)
+    expect(await ids('/api/cylinders', { holder: TECHNICIAN, limit: 200 })).toEqual([TWO])
+    expect(await ids('/api/cylinders', { place: SHOP })).toEqual([ONE])
+    expect(await ids('/api/cylinders', { q: '77-31' })).toEqual([TWO])
+    expect(await ids('/api/cylinders', { q: '7732' })).toEqual([])
+    expect(await ids('/api/cylinders', { label: '7K3M9Q2TX', limit: 1 })).toEqual([ONE])
+    const van = await offlineAnswer(`/api/vans/${VAN}`) as VanAnswer
+    expect(van.aboard.map(({ id }) => id)).toEqual([TWO])
+    expect(van.van).toMatchObject({ name: 'Van 7', cylinders: 1 })
+  })
+
+  it('gives a form what it judges a draft by, and says of the log that it is with the server', async () => {
+    const fold = await offlineAnswer(`/api/cylinders/${ONE}/fold`) as FoldInput
+    expect([fold.events, fold.state?.contents.netGrams]).toEqual([[], 10_000])
+    expect(await offlineAnswer(`/api/cylinders/${ONE}/events`)).toMatchObject({ items: [], isWithServer: true })
+  })
+
+  it('knows the places with what stands in each, and leaves what it does not know to the server', async () => {
+    const { items } = await offlineAnswer('/api/places', { active: true }) as PlacesAnswer
+    expect(items.map(({ name, cylinders }) => [name, cylinders])).toEqual([['North shop', 1], ['Van 7', 1]])
+    for (const path of ['/api/reports/mass-balance', '/api/session', '/api/now']) expect(await offlineAnswer(path)).toBeUndefined()
+    expect(await offlineAnswer('/api/cylinders', { holder: TECHNICIAN, asOf: '2026-07-01T00:00:00Z' })).toBeUndefined()
+  })
+
+  it('says which cylinders share a code', async () => {
+    const shared = stateOf(THREE, registered(), did('labelled', { code: '7K3M9Q2TX' }, { occurredAt: Date.UTC(2026, 8, 1) }))
+    answers = [kitAnswerOf([shared], { seq: 2, firm: undefined })]
+    await useKitStore().follow()
+    const { items } = await offlineAnswer('/api/cylinders', { finding: 'code-on-two', limit: 200 }) as FleetAnswer
+    expect(items.map(({ id }) => id)).toEqual([ONE, THREE])
+    const view = await offlineAnswer('/api/cylinders/7K3M9Q2TX') as CylinderView
+    expect([view.id, view.findings.map(({ code }) => code)]).toEqual([ONE, expect.arrayContaining(['code-on-two'])])
+  })
+})
