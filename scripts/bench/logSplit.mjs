@@ -42,7 +42,7 @@ async function stepsOfOne(texts, { db, parts, access }) {
   if (rows.length !== texts.length) throw new Error(JSON.stringify(judged))
   await timed('seal', () => parsed.forEach(([post], index) => sealedRow(post, postings[index], { version: rows[index].version - 1, hash: rows[index].prev_hash }, rows[index].seq)))
   const caches = await timed('fold', () => groupCaches(db, state))
-  await timed('commit', () => db.write([...insertLogRows(rows, state.newest?.id ?? null), ...caches.statements]))
+  await timed('commit', () => db.write([...insertLogRows(rows, state), ...caches.statements]))
   await timed('answer', () => Promise.all(rows.map(async row => JSON.stringify(await cylinderViews(db, [row.cylinder_id], { access, nowMs: now }, caches.standing)))))
   costs.set('judge', costs.get('judge') - costs.get('seal'))
   return costs

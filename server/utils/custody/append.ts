@@ -125,7 +125,6 @@ async function commitEachAlone(db: Database, one: Waiting, commit: Database['wri
 async function commitGroup(db: Database, part: Waiting[], commit: Database['write']): Promise<Appended[]> {
   for (let attempt = 0; attempt < RACE_RETRIES; attempt++) {
     const now = await group(db, part.flatMap(one => one.parsed.flatMap(post => 'event' in post ? [post.event] : [])))
-    const newestBefore = now.newest
     const judged = part.map(one => judgePosting(one, now))
     const written = judged.flatMap(one => one.rows)
     const relabelled = relabelledBy(part)
@@ -135,7 +134,7 @@ async function commitGroup(db: Database, part: Waiting[], commit: Database['writ
       return judged.map(({ results }) => ({ results, standing: NOBODY }))
     }
 
-    const lines = insertLogRows(written, newestBefore?.id ?? null)
+    const lines = insertLogRows(written, now)
     const caches = await groupCaches(db, now)
     const along = part[0]?.posting.dispatch?.alongside(wereWritten(written)) ?? []
     const answers = await commit([...lines, ...caches.statements, ...along])

@@ -1,6 +1,4 @@
-import type { InStatement, InValue, Row } from '@libsql/client'
-import { getTableColumns } from 'drizzle-orm'
-import { cylinders } from '../../../drizzle/schema'
+import type { InStatement, InValue } from '@libsql/client'
 import type { Guard } from './posting'
 
 /** The caches that hold lines for what events did, each with its `cylinder_id`. */
@@ -41,26 +39,13 @@ export function changeStatements(changes: readonly CacheChange[], guard: Guard):
  *
  * What the row rests on is always among them: where another process makes it anew by other rules meanwhile, it says so.
  */
-export function putCylinders(changes: readonly Pick<CacheChange, 'row' | 'before'>[], guard: Guard): InStatement[] {
+function putCylinders(changes: readonly Pick<CacheChange, 'row' | 'before'>[], guard: Guard): InStatement[] {
   const names = Object.keys(changes[0]?.row ?? {}).filter(name => name !== 'id')
   const set = names.filter(name => ALWAYS_SET.includes(name) || changes.some(({ row, before }) => before === null || before[name] !== row[name]))
   return insertRows('cylinders', changes.map(({ row }) => row), guard, `ON CONFLICT (id) DO UPDATE SET ${set.map(name => `${name} = excluded.${name}`).join(', ')}`)
 }
 
 const ALWAYS_SET: readonly string[] = ['version', 'state', 'ruled_by']
-
-const COMPARED = Object.values(getTableColumns(cylinders)).map(({ name }) => name).filter(name => name !== 'state')
-
-/** The rows of cylinders for comparison, one value to each; a list of their ids follows. */
-export const ROWS_BEFORE = `SELECT json_object(${COMPARED.map(name => `'${name}', ${name}`).join(', ')}) FROM cylinders WHERE id IN`
-
-/** The answer of {@link ROWS_BEFORE}, by cylinder. */
-export function rowsBefore(rows: readonly Row[]): Map<string, Columns> {
-  return new Map(rows.map((row) => {
-    const columns = JSON.parse(row[0] as string) as Columns & { id: string }
-    return [columns.id, columns]
-  }))
-}
 
 const LINE_CACHES: readonly LineCache[] = ['movements', 'stock_changes', 'label_claims', 'halves']
 

@@ -3,6 +3,7 @@ import { cylinders, halves, labelClaims, meta, movements, stockChanges } from '.
 import { FOLD_MEANING } from '../../../utils/custody/foldMeaning'
 import { initialState } from '../../../utils/custody/state'
 import { statement, type Database } from '../database/database'
+import { NEXT_CACHE_TURN } from './cacheTurn'
 import { rebuildCaches } from './rebuild'
 import { sha256 } from './sha256'
 
@@ -39,7 +40,7 @@ export async function bringCachesToShape(db: Database, clock: () => number = Dat
   if (events > 0) {
     console.log(`What is kept beside the custody log was made by another version. It is made again: ${all} cylinders from ${events} events.`)
     // What an older version wrote of pairs and labels may not be readable: nobody asks before it is there again.
-    await db.write(['DELETE FROM halves', 'DELETE FROM label_claims'])
+    await db.write([NEXT_CACHE_TURN, 'DELETE FROM halves', 'DELETE FROM label_claims'])
     let toldAt = clock()
     const done = await rebuildCaches(db, clock(), ({ cylinders: so }) => {
       if (clock() - toldAt < TELL_EVERY_MS) return

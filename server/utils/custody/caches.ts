@@ -1,4 +1,5 @@
 import type { InStatement, InValue } from '@libsql/client'
+import { continueFold } from '../../../utils/custody/continueFold'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold, type FoldResult } from '../../../utils/custody/fold'
 import type { Half } from '../../../utils/custody/half'
@@ -9,10 +10,11 @@ import type { CylinderState } from '../../../utils/custody/state'
 import type { StockChange } from '../../../utils/custody/stockChange'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
-import { changeStatements, putCylinders, type CacheChange, type Columns } from './cacheChanges'
+import { changeStatements, type CacheChange, type Columns } from './cacheChanges'
 import { cylinderStates } from './cylinderViews'
 import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
+import { logsOf } from './logPages'
 import type { LogRow } from './logRow'
 import type { Guard } from './posting'
 import { saidByOthers } from './saidByOthers'
@@ -20,7 +22,13 @@ import { saidByOthers } from './saidByOthers'
 const NO_GUARD: Guard = { sql: '1', args: [] }
 
 /** A cylinder that a group of events touched, as its log makes it now. */
-interface Touched { cylinderId: string, added: readonly LogRow[], folded: FoldResult }
+interface Touched {
+  cylinderId: string
+  added: readonly LogRow[]
+  folded: FoldResult
+  /** Only what the new events did was folded: all before them stays as it is. */
+  isContinued: boolean
+}
 
 /** A cylinder as it stands, and what other cylinders' logs say of it. */
 export interface Standing { state: CylinderState, said: SaidByOthers }
@@ -33,20 +41,34 @@ export interface GroupCaches { statements: InStatement[], standing: ReadonlyMap<
  * the group was written, and so all of them: the loser of a race changes no cache.
  */
 export async function groupCaches(db: Database, group: Group): Promise<GroupCaches> {
-  const context = foldContext(group.directory)
-  const touched = group.touched().map(({ cylinderId, events, added }): Touched => ({ cylinderId, added, folded: fold(events, context) }))
+  const touched = await foldTouched(db, group)
   const halvesNow = new Map(touched.map(({ cylinderId, folded }) => [cylinderId, folded.state.halves]))
   const standing = new Map<string, Standing>()
-  const changes = touched.map(({ cylinderId, added, folded }): CacheChange => {
+  const changes = touched.map((one): CacheChange => {
+    const { cylinderId, added, folded } = one
     const { own, naming } = group.halvesBefore(cylinderId)
     const said = { codesOnTwo: group.codesOnTwo(cylinderId), otherHalves: withThoseOf(halvesNow, naming, cylinderId) }
     standing.set(cylinderId, { state: folded.state, said })
     const row = cylinderColumns(cylinderId, folded.state, rowContext(group.directory, added.at(-1)!.recorded_at, said))
-    const lines = [books(cylinderId, folded, added), claims(cylinderId, folded, added), ...(areSame(own, folded.state.halves) ? [] : [halfLines(cylinderId, folded)])]
-    return changeOf(cylinderId, row, lines, group.rowBefore(cylinderId))
+    const lines = [books(cylinderId, folded, one.isContinued), ...claimsAfter(one), ...(areSame(own, folded.state.halves) ? [] : [halfLines(cylinderId, folded)])]
+    return changeOf(cylinderId, row, lines, group.keptOf(cylinderId).row)
   })
   const guard = wereWritten(touched.flatMap(({ added }) => added))
   return { statements: [...changeStatements(changes, guard), ...await otherRows(db, group, touched, halvesNow, guard)], standing }
+}
+
+/** Goes on from what is kept of each cylinder; where that does not tell, reads its log and begins anew. */
+async function foldTouched(db: Database, group: Group): Promise<Touched[]> {
+  const context = foldContext(group.directory)
+  const touched = group.touched().map(({ cylinderId, added }) => {
+    const { head, state } = group.keptOf(cylinderId)
+    const events = added.map(({ event }) => event)
+    return { cylinderId, hasLog: head.version > 0, events, added: added.map(({ row }) => row), continued: state && continueFold(state, events, context) }
+  })
+  const logs = await logsOf(db, touched.filter(({ hasLog, continued }) => hasLog && !continued).map(({ cylinderId }) => cylinderId))
+  return touched.map(({ cylinderId, added, events, continued }) => ({
+    cylinderId, added, isContinued: continued !== null, folded: continued ?? fold([...logs.get(cylinderId) ?? [], ...events], context),
+  }))
 }
 
 /** The rows of cylinders outside the group that a changed half names, or named before: what it says shows on both. */
@@ -96,24 +118,25 @@ export function rebuiltCache(cylinderId: string, events: readonly AnyRecordedEve
     args: [cylinderId, events.at(-1)?.version ?? 0],
   }
   const row = cylinderColumns(cylinderId, folded.state, rowContext(from, nowMs, said))
-  return changeStatements([changeOf(cylinderId, row, [books(cylinderId, folded, null), claims(cylinderId, folded, null), halfLines(cylinderId, folded)])], guard)
+  return changeStatements([changeOf(cylinderId, row, [books(cylinderId, folded), claims(cylinderId, folded), halfLines(cylinderId, folded)])], guard)
 }
 
 /** What the fleet of a past instant holds of one cylinder: its row, its labels and its halves; no books. */
 export function pastCache(cylinderId: string, folded: FoldResult, from: Directory, atMs: number): InStatement[] {
   const row = cylinderColumns(cylinderId, folded.state, rowContext(from, atMs))
-  return changeStatements([changeOf(cylinderId, row, [claims(cylinderId, folded, null), halfLines(cylinderId, folded)])], NO_GUARD)
+  return changeStatements([changeOf(cylinderId, row, [claims(cylinderId, folded), halfLines(cylinderId, folded)])], NO_GUARD)
 }
 
 /**
  * The row of a cylinder from its cached state, where something outside its events has changed. A row that another
- * process has meanwhile made of a later event stays.
+ * process has meanwhile made of a later event stays, and so does the state itself.
  */
 export function refreshedRow(cylinderId: string, state: CylinderState, context: RuledRowContext, guard: Guard = NO_GUARD): InStatement {
-  return putCylinders([{ row: cylinderColumns(cylinderId, state, context), before: null }], {
-    sql: `EXISTS (SELECT 1 FROM cylinders WHERE id = ? AND version = ?) AND ${guard.sql}`,
-    args: [cylinderId, state.version, ...guard.args],
-  })[0]!
+  const columns = Object.entries(cylinderColumns(cylinderId, state, context)).filter(([name]) => !['id', 'version', 'state'].includes(name))
+  return {
+    sql: `UPDATE cylinders SET ${columns.map(([name]) => `${name} = ?`).join(', ')} WHERE id = ? AND version = ? AND ${guard.sql}`,
+    args: [...columns.map(([, value]) => value), cylinderId, state.version, ...guard.args],
+  }
 }
 
 /** The row of a cylinder by column. */
@@ -128,29 +151,15 @@ function changeOf(cylinderId: string, row: Columns, lines: readonly Lines[], bef
   return { cylinderId, row, before, cleared: lines.flatMap(({ cleared }) => cleared), added: Object.assign({}, ...lines.map(({ added }) => added)) as Lines['added'] }
 }
 
-/**
- * The books: movements, and changes of stock. Only the new events' where these came last in effect; all of the
- * cylinder's where they changed what came after.
- */
-function books(cylinderId: string, folded: FoldResult, added: readonly LogRow[] | null): Lines {
-  const areLast = added !== null && cameLast(folded, added)
-  const ids = areLast ? new Set(added.map(row => row.id)) : null
+/** The books: movements, and changes of stock. All of the cylinder's anew, unless only the new events' were folded. */
+function books(cylinderId: string, { movements, stockChanges }: FoldResult, isContinued = false): Lines {
   return {
-    cleared: areLast ? [] : ['movements', 'stock_changes'],
+    cleared: isContinued ? [] : ['movements', 'stock_changes'],
     added: {
-      movements: folded.movements.filter(one => ids?.has(one.eventId) ?? true).map(one => movementLine(cylinderId, one)),
-      stock_changes: folded.stockChanges.filter(one => ids?.has(one.eventId) ?? true).map(one => stockLine(cylinderId, one)),
+      movements: movements.map(one => movementLine(cylinderId, one)),
+      stock_changes: stockChanges.map(one => stockLine(cylinderId, one)),
     },
   }
-}
-
-/** Kinds that change what other events put into the books: what they say, where they stand, or that they count. */
-const CHANGES_EARLIER: readonly string[] = ['corrected', 'registered', 'countersigned']
-
-function cameLast(folded: FoldResult, added: readonly LogRow[]): boolean {
-  if (added.some(row => CHANGES_EARLIER.includes(row.kind))) return false
-  const ids = new Set(added.map(row => row.id))
-  return folded.steps.slice(-added.length).every(step => ids.has(step.eventId))
 }
 
 function movementLine(cylinderId: string, one: Movement): Columns {
@@ -168,17 +177,21 @@ function stockLine(cylinderId: string, one: StockChange): Columns {
   }
 }
 
-/** The codes that the cylinder's `labelled` events claim, where a new event can have changed them. */
-function claims(cylinderId: string, { labelClaims }: FoldResult, added: readonly LogRow[] | null): Lines {
-  if (added && !added.some(row => row.kind === 'labelled' || row.kind === 'corrected')) return { cleared: [], added: {} }
+/** The codes that the cylinder's `labelled` events claim. */
+function claims(cylinderId: string, { labelClaims }: FoldResult, isContinued = false): Lines {
   return {
-    cleared: ['label_claims'],
+    cleared: isContinued ? [] : ['label_claims'],
     added: {
       label_claims: labelClaims.map(claim => ({
         event_id: claim.eventId, code: claim.code, cylinder_id: cylinderId, effective_at: claim.effectiveAt, device_id: claim.deviceId, device_seq: claim.deviceSeq,
       })),
     },
   }
+}
+
+/** The codes, where a new event can have changed them. */
+function claimsAfter({ cylinderId, added, folded, isContinued }: Touched): Lines[] {
+  return added.some(row => row.kind === 'labelled' || row.kind === 'corrected') ? [claims(cylinderId, folded, isContinued)] : []
 }
 
 function halfLines(cylinderId: string, { state }: FoldResult): Lines {

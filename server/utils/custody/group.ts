@@ -3,116 +3,120 @@ import type { AnyCustodyEvent, AnyRecordedEvent } from '../../../utils/custody/e
 import type { Half } from '../../../utils/custody/half'
 import { directory, type Directory } from '../directory/directory'
 import type { Database } from '../database/database'
-import { ROWS_BEFORE, rowsBefore, type Columns } from './cacheChanges'
 import { SHARED_CODES, sharedCodes } from './findCylinder'
+import { looksBack, unknownIds, type KnownIds } from './judge'
+import { keptCylinders, keptFrom, type KeptCylinder } from './keptCylinders'
+import { logsOf } from './logPages'
+import { LOG_POINT, logPoint, type LogPoint, type LogRow } from './logRow'
 import { halvesFrom, halvesOf } from './saidByOthers'
-import { unknownIds, type KnownIds } from './judge'
-import { eventLine, recordedEvent, SELECT_EVENT_LINES, type LogRow } from './logRow'
 import type { ChainHead } from './sealedRow'
 
 /** What a group of events is judged on: the log as it stands, growing by each event that is accepted. */
-export interface Group {
-  /** The last line of the whole log; null while it is empty. */
-  newest: { seq: number, id: string } | null
+export interface Group extends LogPoint {
   directory: Directory
   known: KnownIds
   stored: (eventId: string) => { contentHash: string, seq: number, version: number } | undefined
+  /** The events of a cylinder, those added included. Errors: throws where no event of the group {@link looksBack} at them. */
   eventsOf: (cylinderId: string) => readonly AnyRecordedEvent[]
   headOf: (cylinderId: string) => ChainHead
   nextSeq: () => number
   add: (row: LogRow, event: AnyRecordedEvent) => void
   /** Codes of a cylinder that another one claims too. */
   codesOnTwo: (cylinderId: string) => ReadonlySet<string>
-  /** The row of a cylinder as it stood before; null where there is none. */
-  rowBefore: (cylinderId: string) => Columns | null
+  /** What was kept of a cylinder before. */
+  keptOf: (cylinderId: string) => KeptCylinder
   /** The halves of a cylinder, and those of others that name it, as they stood before. */
   halvesBefore: (cylinderId: string) => { own: Half[], naming: Half[] }
-  /** Cylinders that an accepted event has touched, with the lines added to each. */
-  touched: () => { cylinderId: string, events: readonly AnyRecordedEvent[], added: readonly LogRow[] }[]
+  /** Cylinders that an accepted event has touched, with what was added to each. */
+  touched: () => { cylinderId: string, added: readonly AddedLine[] }[]
   mark: () => number
   /** Forgets what was added since the mark. */
   backTo: (mark: number) => void
 }
 
-const NONE: ReadonlySet<string> = new Set()
+/** An accepted event, and the line that the log will hold of it. */
+export interface AddedLine { row: LogRow, event: AnyRecordedEvent }
 
-/** Reads what these events are to be judged on, at one instant. */
+const NONE: ReadonlySet<string> = new Set()
+const NOTHING_KEPT: KeptCylinder = { head: { version: 0, hash: '' }, row: null, state: null, isSaidOf: false }
+
+/** Reads what these events are to be judged on. What is read later than the rest is no danger: whoever wrote meanwhile was first. */
 export async function group(db: Database, events: readonly AnyCustodyEvent[]): Promise<Group> {
   const ids = [...new Set(events.map(event => event.id))]
   const cylinderIds = [...new Set(events.map(event => event.cylinderId))]
-  const named = idsIn(events)
-  const [newestRows, storedRows, logRows, shipmentRows, lotRows, sharedRows, ownHalves, namingHalves, cylinderRows] = await db.readClient.batch([
-    'SELECT seq, id FROM custody_events ORDER BY seq DESC LIMIT 1',
+  const [pointRows, storedRows, keptRows] = await db.readClient.batch([
+    LOG_POINT,
     inList('SELECT id, content_hash, seq, version FROM custody_events WHERE id IN', ids),
-    inList(`${SELECT_EVENT_LINES} WHERE cylinder_id IN`, cylinderIds, 'ORDER BY cylinder_id, version'),
-    inList('SELECT id FROM shipments WHERE id IN', named.shipments),
-    inList('SELECT id FROM test_lots WHERE id IN', named.testLots),
-    inList(SHARED_CODES, cylinderIds),
-    halvesOf('cylinder_id', cylinderIds),
-    halvesOf('other_id', cylinderIds),
-    inList(ROWS_BEFORE, cylinderIds),
+    keptCylinders(cylinderIds),
   ], 'read')
-
-  const newestRow = newestRows?.rows[0]
-  const newest = newestRow ? { seq: newestRow[0] as number, id: newestRow[1] as string } : null
-  const stored = new Map((storedRows?.rows ?? []).map(row => [row[0] as string, {
+  const { newest, turn } = logPoint(pointRows!.rows[0]!)
+  const stored = new Map(storedRows!.rows.map(row => [row[0] as string, {
     contentHash: row[1] as string, seq: row[2] as number, version: row[3] as number,
   }]))
-  const heads = new Map<string, ChainHead>()
-  const logs = new Map<string, AnyRecordedEvent[]>()
-  for (const raw of logRows?.rows ?? []) {
-    const line = eventLine(raw)
-    heads.set(line.cylinder_id, { version: line.version, hash: line.hash })
-    const log = logs.get(line.cylinder_id)
-    if (log) log.push(recordedEvent(line))
-    else logs.set(line.cylinder_id, [recordedEvent(line)])
-  }
-  const shipments = new Set((shipmentRows?.rows ?? []).map(row => row[0] as string))
-  const testLots = new Set((lotRows?.rows ?? []).map(row => row[0] as string))
-  const shared = sharedCodes(sharedRows?.rows ?? [])
-  const own = halvesFrom(ownHalves?.rows ?? [])
-  const naming = halvesFrom(namingHalves?.rows ?? [])
-  const before = rowsBefore(cylinderRows?.rows ?? [])
-  const { from, known } = await knownIds(db, events, shipments, testLots)
+  const kept = keptFrom(keptRows!.rows)
+  const lookedBackAt = [...new Set(events.filter(looksBack).map(event => event.cylinderId))]
+  const [lists, beside, logs] = await Promise.all([
+    listsNamed(db, events), saidBetween(db, cylinderIds.filter(id => kept.get(id)?.isSaidOf)), logsOf(db, lookedBackAt),
+  ])
+  const { from, known } = await knownIds(db, events, lists)
 
-  const added: { row: LogRow, event: AnyRecordedEvent }[] = []
+  const added: AddedLine[] = []
   const addedTo = (cylinderId: string) => added.filter(one => one.row.cylinder_id === cylinderId)
-  const eventsOf = (cylinderId: string) => [...(logs.get(cylinderId) ?? []), ...addedTo(cylinderId).map(one => one.event)]
+  const keptOf = (cylinderId: string) => kept.get(cylinderId) ?? NOTHING_KEPT
   return {
     newest,
+    turn,
     directory: from,
     known,
-    codesOnTwo: cylinderId => shared.get(cylinderId) ?? NONE,
-    rowBefore: cylinderId => before.get(cylinderId) ?? null,
+    codesOnTwo: cylinderId => beside.shared.get(cylinderId) ?? NONE,
+    keptOf,
     halvesBefore: cylinderId => ({
-      own: own.filter(half => half.cylinderId === cylinderId), naming: naming.filter(half => half.otherId === cylinderId),
+      own: beside.own.filter(half => half.cylinderId === cylinderId), naming: beside.naming.filter(half => half.otherId === cylinderId),
     }),
     stored(eventId) {
       const now = added.find(one => one.row.id === eventId)
       return now ? { contentHash: now.row.content_hash, seq: now.row.seq, version: now.row.version } : stored.get(eventId)
     },
-    eventsOf,
+    eventsOf(cylinderId) {
+      if (!lookedBackAt.includes(cylinderId)) throw new Error(`The log of ${cylinderId} was not read`)
+      return [...(logs.get(cylinderId) ?? []), ...addedTo(cylinderId).map(({ event }) => event)]
+    },
     headOf(cylinderId) {
       const last = addedTo(cylinderId).at(-1)
-      return last ? { version: last.row.version, hash: last.row.hash } : heads.get(cylinderId) ?? { version: 0, hash: '' }
+      return last ? { version: last.row.version, hash: last.row.hash } : keptOf(cylinderId).head
     },
     nextSeq: () => (added.at(-1)?.row.seq ?? newest?.seq ?? 0) + 1,
     add: (row, event) => void added.push({ row, event }),
     touched() {
       const touched = [...new Set(added.map(one => one.row.cylinder_id))]
-      return touched.map(cylinderId => ({
-        cylinderId,
-        events: eventsOf(cylinderId),
-        added: addedTo(cylinderId).map(one => one.row),
-      }))
+      return touched.map(cylinderId => ({ cylinderId, added: addedTo(cylinderId) }))
     },
     mark: () => added.length,
     backTo: mark => void added.splice(mark),
   }
 }
 
+/** What the logs of cylinders and those of others say of each other. */
+async function saidBetween({ readClient }: Database, cylinderIds: string[]): Promise<{ shared: Map<string, Set<string>>, own: Half[], naming: Half[] }> {
+  if (cylinderIds.length === 0) return { shared: new Map(), own: [], naming: [] }
+  const [shared, own, naming] = await readClient.batch([
+    inList(SHARED_CODES, cylinderIds), halvesOf('cylinder_id', cylinderIds), halvesOf('other_id', cylinderIds),
+  ], 'read')
+  return { shared: sharedCodes(shared!.rows), own: halvesFrom(own!.rows), naming: halvesFrom(naming!.rows) }
+}
+
+/** The shipments and test lots that events name, as far as there are any. */
+async function listsNamed({ readClient }: Database, events: readonly AnyCustodyEvent[]): Promise<{ shipments: Set<string>, testLots: Set<string> }> {
+  const named = idsIn(events)
+  if (named.shipments.length + named.testLots.length === 0) return { shipments: new Set(), testLots: new Set() }
+  const [shipments, testLots] = await readClient.batch([
+    inList('SELECT id FROM shipments WHERE id IN', named.shipments), inList('SELECT id FROM test_lots WHERE id IN', named.testLots),
+  ], 'read')
+  return { shipments: new Set(shipments!.rows.map(row => row[0] as string)), testLots: new Set(testLots!.rows.map(row => row[0] as string)) }
+}
+
 /** The directory, read again when an event names an id that the kept one does not have. */
-async function knownIds(db: Database, events: readonly AnyCustodyEvent[], shipments: ReadonlySet<string>, testLots: ReadonlySet<string>) {
+async function knownIds(db: Database, events: readonly AnyCustodyEvent[], { shipments, testLots }: Awaited<ReturnType<typeof listsNamed>>) {
   let from = await directory(db)
   const known: KnownIds = {
     place: id => from.places.has(id),

@@ -69,16 +69,21 @@ export function unknownIds(event: AnyCustodyEvent, known: KnownIds): { path: str
   return errors
 }
 
+/** Whether an event is judged by the cylinder's earlier ones: what it mends or signs, or the version it was decided on. */
+export function looksBack({ kind, expects }: Pick<AnyCustodyEvent, 'kind' | 'expects'>): boolean {
+  return expects !== undefined || (JUDGED_BY_EVENT as readonly EventKind[]).includes(kind)
+}
+
 /**
  * Whether this person may post this event on a cylinder as it stands now; null when so.
  *
  * A fact is never refused for its time nor for breaking a rule. What is refused: a kind outside the role, an id that
  * nobody knows, a decision made on another state of the cylinder, a correction that is not its author's to make.
  *
- * @param events the cylinder's events so far, the earlier ones of this request included.
+ * @param events the cylinder's events so far, the earlier ones of this request included; asked for where the event {@link looksBack}.
  */
 export function refusalOf(
-  event: AnyCustodyEvent, access: Access, events: readonly AnyRecordedEvent[], known: KnownIds, now: number, isDispatch: boolean,
+  event: AnyCustodyEvent, access: Access, events: () => readonly AnyRecordedEvent[], known: KnownIds, now: number, isDispatch: boolean,
 ): Refusal | null {
   if (!isDispatch && (DISPATCH_KINDS as readonly EventKind[]).includes(event.kind)) {
     return refuse(403, 'Only a dispatch writes this', 'Send the cylinder off with its shipment or its test lot.')
@@ -88,8 +93,8 @@ export function refusalOf(
   }
   const unknown = unknownIds(event, known)
   if (unknown.length > 0) return refuse(422, 'It names what nobody knows', 'Choose again from the list.', unknown)
-  if (event.kind === 'corrected') return refusalOfCorrection(event, access, events, now)
-  return (event.kind === 'countersigned' ? refusalOfSignature(event, access, events) : null) ?? wrongVersion(event, events)
+  if (event.kind === 'corrected') return refusalOfCorrection(event, access, events(), now)
+  return (event.kind === 'countersigned' ? refusalOfSignature(event, access, events()) : null) ?? wrongVersion(event, events)
 }
 
 // An entry that has not arrived yet may still prove to name this person.
@@ -128,7 +133,7 @@ function refusalOfCorrection(
   }
   // The author's own correction may come from a phone that does not know the newest version.
   if (event.expects === undefined && isAuthor) return null
-  return wrongVersion(event, events)
+  return wrongVersion(event, () => events)
 }
 
 // Else a correction of one's own entry would open the way to anybody's.
@@ -137,12 +142,13 @@ function namesAnother(instead: Record<string, unknown> | undefined, eventId: str
   return typeof named === 'string' && named.toLowerCase() !== eventId
 }
 
-function wrongVersion(event: AnyCustodyEvent, events: readonly AnyRecordedEvent[]): Refusal | null {
+function wrongVersion(event: AnyCustodyEvent, eventsOf: () => readonly AnyRecordedEvent[]): Refusal | null {
   const isDecision = (DECISION_KINDS as readonly EventKind[]).includes(event.kind)
   if (event.expects === undefined) {
     if (!isDecision) return null
     return refuse(400, 'A decision needs the version it was made on', 'Look at the cylinder again.', [{ path: 'expects', message: 'is missing' }])
   }
+  const events = eventsOf()
   const version = events.at(-1)?.version ?? 0
   if (event.expects === version) return null
   const since = events.filter(other => other.version > (event.expects ?? 0)).map(({ kind }) => KIND_WORDS[kind].done.toLowerCase())

@@ -53,8 +53,7 @@ function judgeOnce(one: ReadPosting, now: Group, heldBack: ReadonlySet<number>):
         : resultOf(raw, refuse(409, 'Another event has this id', 'The log keeps what was recorded first. Record this as a new event.')))
       continue
     }
-    const events = now.eventsOf(event.cylinderId)
-    const refusal = refusalOf(event, one.posting.access, events, now.known, one.posting.now, one.posting.dispatch !== undefined)
+    const refusal = refusalOf(event, one.posting.access, () => now.eventsOf(event.cylinderId), now.known, one.posting.now, one.posting.dispatch !== undefined)
     if (refusal ?? heldBack.has(index)) {
       results.push(resultOf(raw, refusal ?? OTHER_HALF_REFUSED))
       continue

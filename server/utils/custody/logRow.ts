@@ -1,5 +1,6 @@
 import type { InStatement, Row } from '@libsql/client'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
+import { CACHE_TURN, sinceTurn } from './cacheTurn'
 
 /** The columns of the custody log, in the order in which they are written and hashed. */
 export const LOG_COLUMNS = [
@@ -98,19 +99,38 @@ export function recordedEvent(row: EventLine): AnyRecordedEvent {
 /** Many to a statement, for the driver prepares each anew; few enough for the arguments that one may have. */
 const LINES_A_STATEMENT = 200
 
+/** How far the log and its caches had gone when something was read of them. */
+export interface LogPoint {
+  /** The last line of the whole log; null while it is empty. */
+  newest: { seq: number, id: string } | null
+  turn: string | null
+}
+
+/** Asks for it. */
+export const LOG_POINT = `SELECT ${CACHE_TURN}, (SELECT seq FROM custody_events ORDER BY seq DESC LIMIT 1), (SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1)`
+
+/** The answer of {@link LOG_POINT}. */
+export function logPoint(row: Row): LogPoint {
+  return { turn: row[0] as string | null, newest: row[1] === null ? null : { seq: row[1] as number, id: row[2] as string } }
+}
+
 /**
- * Writes lines, in their order, if, and only if, the log still ends with the line that they were computed after.
+ * Writes lines, in their order, if, and only if, the log still ends with the line that they were computed after, and
+ * nobody has made the caches anew that they were computed from.
+ *
  * Each statement answers a row for each of its lines when they were written, and none when another process was first.
  */
-export function insertLogRows(rows: readonly LogRow[], newestId: string | null): InStatement[] {
+export function insertLogRows(rows: readonly LogRow[], { newest, turn }: LogPoint): InStatement[] {
   const one = `(${LOG_COLUMNS.map(() => '?').join(', ')})`
+  const guard = sinceTurn(turn)
   return Array.from({ length: Math.ceil(rows.length / LINES_A_STATEMENT) }, (_, part) => {
     const some = rows.slice(part * LINES_A_STATEMENT, (part + 1) * LINES_A_STATEMENT)
+    const lineBefore = part === 0 ? newest?.id ?? null : rows[part * LINES_A_STATEMENT - 1]!.id
     return {
       sql: `INSERT INTO custody_events (${LOG_COLUMNS.join(', ')}) SELECT * FROM (VALUES ${some.map(() => one).join(', ')})
-        WHERE (SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1) IS ?
+        WHERE (SELECT id FROM custody_events ORDER BY seq DESC LIMIT 1) IS ? AND ${guard.sql}
         ON CONFLICT DO NOTHING RETURNING seq`,
-      args: [...some.flatMap(row => LOG_COLUMNS.map(column => row[column])), part === 0 ? newestId : rows[part * LINES_A_STATEMENT - 1]!.id],
+      args: [...some.flatMap(row => LOG_COLUMNS.map(column => row[column])), lineBefore, ...guard.args],
     }
   })
 }

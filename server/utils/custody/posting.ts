@@ -25,6 +25,6 @@ export interface Dispatch {
 }
 
 /** A condition for a WHERE clause, with its arguments. */
-export interface Guard { sql: string, args: (string | number)[] }
+export interface Guard { sql: string, args: (string | number | null)[] }
 
 export type { EventResult }

@@ -3,6 +3,7 @@ import type { InStatement } from '@libsql/client'
 import type { Database } from '../database/database'
 import { StorageUnavailable } from '../database/storageFailure'
 import { directory } from '../directory/directory'
+import { NEXT_CACHE_TURN } from './cacheTurn'
 import { CYLINDER_CACHES, rebuiltCache } from './caches'
 import { cylindersAfter, logsOf } from './logPages'
 import type { Guard } from './posting'
@@ -33,14 +34,14 @@ export interface RebuildProgress { cylinders: number, events: number }
 export async function rebuildCaches(db: Database, nowMs: number, tell: (progress: RebuildProgress) => void = () => undefined): Promise<RebuildProgress> {
   await directory(db, true)
   // A claim or a half goes by its event: one that stands under another cylinder would be in the way of the right one.
-  await db.write(['label_claims', 'halves'].map(table => `DELETE FROM ${table} WHERE NOT EXISTS
-    (SELECT 1 FROM custody_events e WHERE e.id = ${table}.event_id AND e.cylinder_id = ${table}.cylinder_id)`))
+  await db.write([NEXT_CACHE_TURN, ...['label_claims', 'halves'].map(table => `DELETE FROM ${table} WHERE NOT EXISTS
+    (SELECT 1 FROM custody_events e WHERE e.id = ${table}.event_id AND e.cylinder_id = ${table}.cylinder_id)`)])
   const done: RebuildProgress = { cylinders: 0, events: 0 }
   for (let after: string | null = ''; after !== null;) {
     const before: string = after
     after = await db.exclusive(async (commit) => {
       const page = await cylindersAfter(db, before)
-      await commit(CYLINDER_CACHES.map(table => strangers(table, before, page.last)))
+      await commit([NEXT_CACHE_TURN, ...CYLINDER_CACHES.map(table => strangers(table, before, page.last))])
       done.events += await rebuildSome(db, page.ids, nowMs, commit)
       done.cylinders += page.ids.length
       return page.last
@@ -71,6 +72,7 @@ async function rebuildSome(db: Database, ids: readonly string[], nowMs: number, 
     const statements = [...logs].flatMap(([id, log]) => rebuiltCache(id, log, from, nowMs, said(id)))
     const [versions] = await commit([
       { sql: `SELECT cylinder_id, max(version) FROM custody_events WHERE cylinder_id IN (${left.map(() => '?').join(', ')}) GROUP BY cylinder_id`, args: [...left] },
+      NEXT_CACHE_TURN,
       ...statements,
     ])
     // Another process has recorded meanwhile: what it wrote rests on caches that were not made again yet.
@@ -94,7 +96,7 @@ async function refreshSome(db: Database, ids: readonly string[], nowMs: number, 
   for (let attempt = 0; attempt <= RACE_RETRIES; attempt++) {
     const newest = (await db.readClient.execute(NEWEST)).rows[0]?.[0] as string
     const isNewest: Guard = { sql: `(${NEWEST}) IS ?`, args: [newest] }
-    const [now] = await commit([NEWEST, ...await refreshedRows(db, ids, nowMs, isNewest)])
+    const [now] = await commit([NEWEST, NEXT_CACHE_TURN, ...await refreshedRows(db, ids, nowMs, isNewest)])
     if (now!.rows[0]?.[0] === newest) return
   }
   throw new StorageUnavailable('The custody log is written by others faster than its caches can follow')

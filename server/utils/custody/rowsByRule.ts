@@ -4,6 +4,7 @@ import type { CylinderState } from '../../../utils/custody/state'
 import type { Database } from '../database/database'
 import { nextBeginning, rulesInForceKey } from '../directory/datedRules'
 import { directory } from '../directory/directory'
+import { NEXT_CACHE_TURN } from './cacheTurn'
 import { refreshedRow } from './caches'
 import { rowContext } from './foldContext'
 import { saidByOthers } from './saidByOthers'
@@ -74,11 +75,12 @@ async function followAll(db: Database, clock: () => number): Promise<number> {
 async function followSome(db: Database, commit: Database['write'], nowMs: number): Promise<number> {
   const from = await directory(db)
   const found = await db.readClient.execute(behind('id, state', rulesInForceKey(from, nowMs), ROWS_AT_ONCE))
+  if (found.rows.length === 0) return 0
   const said = await saidByOthers(db, found.rows.map(row => row[0] as string))
-  await commit(found.rows.map((row) => {
+  await commit([NEXT_CACHE_TURN, ...found.rows.map((row) => {
     const state = JSON.parse(row[1] as string) as CylinderState
     return refreshedRow(state.id, state, rowContext(from, nowMs, said(state.id)))
-  }))
+  })])
   return found.rows.length
 }
 

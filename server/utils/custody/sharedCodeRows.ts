@@ -1,5 +1,6 @@
 import type { InStatement } from '@libsql/client'
 import type { Database } from '../database/database'
+import { NEXT_CACHE_TURN } from './cacheTurn'
 import { refreshedRows } from './refreshedRows'
 
 /**
@@ -13,5 +14,6 @@ export async function sharedCodeRows(db: Database, cylinderIds: readonly string[
       UNION SELECT id FROM cylinders WHERE finding_codes LIKE '% code-on-two %'`,
     args: [...cylinderIds],
   })
-  return refreshedRows(db, others.rows.map(row => row[0] as string), nowMs)
+  const rows = await refreshedRows(db, others.rows.map(row => row[0] as string), nowMs)
+  return rows.length > 0 ? [NEXT_CACHE_TURN, ...rows] : []
 }

@@ -37,7 +37,7 @@ describe('two writers on one log', () => {
     const other = await log.openAgain()
     await record(other, log.technician, [sent(id, 'filled', { refrigerant: 'R-22', condition: 'clean', grossBefore: lb(27.5), grossAfter: lb(33), looked: true })])
     const before = await caches()
-    const answers = await log.db.write([...insertLogRows([row], read.newest!.id), ...(await groupCaches(log.db, read)).statements])
+    const answers = await log.db.write([...insertLogRows([row], read), ...(await groupCaches(log.db, read)).statements])
     expect(answers[0]!.rows).toHaveLength(0)
     expect(await caches()).toBe(before)
     expect(await verifyLog(log.db, { now: 0, sealing: null })).toMatchObject({ ok: true })
