@@ -4,6 +4,7 @@ import { FORM_KINDS } from '../../utils/custody/draft/formKinds'
 import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser, listenForErrors } from '../helpers/browser'
 import { demoFleet, type DemoFleet } from '../helpers/demoFleet'
+import { fillOutbox } from '../helpers/outboxEntries'
 import { seriousOn, sidewaysScroll, targetsLowerThan } from '../helpers/pageChecks'
 import { startServer, type TestServer } from '../helpers/server'
 import { projectFiles } from '../helpers/sources'
@@ -111,6 +112,11 @@ const SCREENS: Record<string, Screen[]> = {
   ],
   'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }, { as: manager, at: () => `/fleet?asOf=${LAST_MONTH}` }],
   'fleet/register.vue': [{ as: warehouse, at: () => '/fleet/register' }],
+  'hand-over.vue': [
+    { as: technician, at: () => '/hand-over' },
+    { as: warehouse, at: demo => `/hand-over?with=${demo.offer}` },
+    { as: technician, at: () => '/hand-over?with=CYLINDERS2/O' },
+  ],
   'invitation/[token].vue': [
     { as: 'nobody', at: demo => `/invitation/${demo.invitation}` },
     { as: 'nobody', at: () => `/invitation/${'x'.repeat(43)}` },
@@ -145,6 +151,10 @@ const SCREENS: Record<string, Screen[]> = {
   'shipments/[id].vue': [...(['draft', 'dispatched', 'received'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
   'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
+  'unsent.vue': [
+    { as: technician, at: () => '/unsent', after: page => page.getByText('Everything from this device is recorded.').waitFor() },
+    { as: technician, at: () => '/unsent', after: (page, demo) => fillOutbox(page, demo.event) },
+  ],
   'van.vue': [{ as: technician, at: () => '/van' }, { as: warehouse, at: () => '/van' }],
   'vans/[id]/check-in.vue': [{ as: warehouse, at: demo => `/vans/${demo.van}/check-in` }],
   'vans/[id]/index.vue': [{ as: manager, at: demo => `/vans/${demo.van}` }, { as: technician, at: demo => `/vans/${demo.van}` }],

@@ -4,6 +4,8 @@ import type { MintAnswer } from '../../utils/contract/labels'
 import type { FirmsAnswer, PlacesAnswer } from '../../utils/contract/places'
 import type { ShipmentsAnswer, ShipmentState } from '../../utils/contract/shipments'
 import type { TestLotsAnswer, TestLotState, TestLotWithLines } from '../../utils/contract/testLots'
+import type { SessionAnswer } from '../../utils/contract/session'
+import { handoverText } from '../../utils/handover/handoverText'
 import { DEMO_PASSWORD } from '../../server/utils/demo/cast'
 import { TestClient } from './client'
 import { invitationToken } from './firm'
@@ -25,6 +27,8 @@ export interface DemoFleet {
   /** The technician's van. */
   van: string
   invitation: string
+  /** What the technician's phone shows to hand cylinders over. */
+  offer: string
   setUpToken: string
 }
 
@@ -36,7 +40,7 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
     if (answer.status !== 200) throw new Error(`${name} could not sign in: ${JSON.stringify(answer.body)}`)
     return [name, client]
   }))) as DemoFleet['people']
-  const { manager, admin } = people
+  const { manager, admin, technician } = people
   const codeOf = async (query: string, fits: (row: CylinderRow) => boolean = () => true) => {
     const { items } = (await manager.get<FleetAnswer>(`/api/cylinders?limit=200${query}`)).body
     const found = items.find(row => row.labelCode !== null && fits(row))
@@ -67,6 +71,10 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
       sent: await sentLot(manager),
       ...await firstOfEach<TestLotsAnswer, 'back'>(manager, '/api/test-lots', ['back']),
     },
+    offer: handoverText({
+      is: 'offer', id: '7K3M9Q2T', atMs: Date.now(), cylinders: [usual.toUpperCase(), onNone!],
+      personId: (await technician.get<SessionAnswer>('/api/session')).body.user!.id,
+    }),
     invitation: await invitationToken({ client: admin }, INVITED.email),
     setUpToken,
   }
