@@ -1,6 +1,6 @@
 import type { KitBox } from '~~/composables/kitBox'
 import type { KitFirm } from '~~/utils/contract/kit'
-import { continueFold } from '~~/utils/custody/continueFold'
+import type { continueFold } from '~~/utils/custody/continueFold'
 import type { CylinderRow, CylinderView } from '~~/utils/custody/cylinderView'
 import type { CustodyEvent } from '~~/utils/custody/event'
 import { isGivenAway } from '~~/utils/custody/lifecycle'
@@ -40,14 +40,18 @@ export async function kitReader({ box, firm, names, catalogue, waiting, asking }
   const touched = await withWaiting()
 
   async function withWaiting(): Promise<Map<string, OnDevice>> {
+    if (waiting.length === 0) return new Map()
+    // The fold brings the schemas of the events with it: only who has something waiting fetches it.
+    const { continueFold } = await import('~~/utils/custody/continueFold')
     const ids = [...new Set(waiting.map(({ cylinderId }) => cylinderId))]
     const kept = new Map((await box.byIds(ids)).map(({ id, packed }) => [id, unpackCylinder(packed)]))
-    return new Map(ids.map((id): [string, OnDevice] => [id, goneOn(kept.get(id) ?? initialState(id), waiting.filter(({ cylinderId }) => cylinderId === id))]))
+    return new Map(ids.map((id): [string, OnDevice] => [id, goneOn(kept.get(id) ?? initialState(id), continueFold)]))
   }
 
-  function goneOn(before: CylinderState, events: readonly CustodyEvent[]): OnDevice {
+  function goneOn(before: CylinderState, goOn: typeof continueFold): OnDevice {
+    const events = waiting.filter(({ cylinderId }) => cylinderId === before.id)
     const recorded = events.map((event, index) => recordedNow(event, { seq: index, version: before.version + index }, asking))
-    const folded = continueFold(before, recorded, context(NOTHING_SAID))
+    const folded = goOn(before, recorded, context(NOTHING_SAID))
     return folded ? { state: folded.state, waitingNotIn: 0 } : { state: before, waitingNotIn: events.length }
   }
 

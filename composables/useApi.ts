@@ -73,10 +73,8 @@ export function useApi() {
   }
 
   async function fromCopy<T>(path: string, query?: Query): Promise<{ answer: T } | null> {
-    // What answers is fetched when it is first needed; where not even that is on the device, there is no copy either.
-    const answers = await import('~~/composables/offlineAnswers').catch(() => null)
     try {
-      const kept = await answers?.answerFromCopy(path, query) ?? null
+      const kept = await nuxt.$answerFromCopy(path, query)
       if (kept) copyOf.value = kept.of
       return kept && { answer: kept.answer as T }
     }

@@ -3,7 +3,9 @@ import { useSessionStore } from '~~/stores/session'
 /** The first visit's own page comes first: the copy is looked after once it stands. Units: milliseconds. */
 const AFTER_PAGE_MS = 2_000
 
-/** Whoever is signed in has a copy of the firm on this device, which follows the server. */
+type Answers = typeof import('~~/composables/offlineAnswers')
+
+/** Whoever is signed in has a copy of the firm on this device, which follows the server and answers in its place. */
 export default defineNuxtPlugin((nuxt) => {
   nuxt.hook('app:mounted', () => {
     const session = useSessionStore()
@@ -14,8 +16,23 @@ export default defineNuxtPlugin((nuxt) => {
     }, { immediate: true })
   })
 
+  let isWatching = false
+
   async function begin() {
-    const { useKitStore } = await import('~~/stores/kit')
-    await nuxt.runWithContext(() => useKitStore().start())
+    const [{ useKitStore }, { usePostingStore }] = await Promise.all([import('~~/stores/kit'), import('~~/stores/posting')])
+    await nuxt.runWithContext(async () => {
+      const [kit, posting] = [useKitStore(), usePostingStore()]
+      if (!isWatching) watch(() => posting.recorded, () => void kit.follow())
+      isWatching = true
+      await kit.start()
+    })
   }
+
+  /** What answers is fetched when it is first needed; where not even that is on the device, there is no copy either. */
+  async function answerFromCopy(...question: Parameters<Answers['answerFromCopy']>): ReturnType<Answers['answerFromCopy']> {
+    const answers = await import('~~/composables/offlineAnswers').catch(() => null)
+    return answers && await answers.answerFromCopy(...question)
+  }
+
+  return { provide: { answerFromCopy } }
 })

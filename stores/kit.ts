@@ -1,6 +1,5 @@
 import { defineStore } from 'pinia'
 import { kitBox, type KitAbout } from '~~/composables/kitBox'
-import { usePostingStore } from '~~/stores/posting'
 import { useSessionStore } from '~~/stores/session'
 import type { KitAnswer, KitFirm } from '~~/utils/contract/kit'
 import type { Names } from '~~/utils/custody/view'
@@ -14,7 +13,6 @@ const LOCK = 'collarbook-kit'
 /** The copy of the firm on this device: the whole fleet and what is needed to judge it, following the server. */
 export const useKitStore = defineStore('kit', () => {
   const session = useSessionStore()
-  const posting = usePostingStore()
   const box = kitBox()
   const about = shallowRef<KitAbout | null>(null)
   const count = ref(0)
@@ -41,7 +39,6 @@ export const useKitStore = defineStore('kit', () => {
       if (document.visibilityState === 'visible') void follow()
     })
     setInterval(() => void follow(), FOLLOW_EVERY_MS)
-    watch(() => posting.recorded, () => void follow())
     watch(() => session.user?.id, id => void (id === undefined ? undefined : find().then(follow)))
   }
 
