@@ -1,10 +1,12 @@
 import { defineNitroPlugin } from '#imports'
 import { startDatabase } from '../utils/database/start'
 import { DEMO_PASSWORD } from '../utils/demo/cast'
+import { sealHistory } from '../utils/demo/checkpoints'
 import { fillDemo } from '../utils/demo/fillDemo'
 import { keepDemoPhotos } from '../utils/demo/photos'
 import { useEnvironment } from '../utils/environment'
 import { useFiles } from '../utils/files/photoFiles'
+import { sealingNow } from '../utils/proof/sealing'
 import { hashNewPassword } from '../utils/session/password'
 import { isEmpty, offerSetUp } from '../utils/setUp/setUp'
 
@@ -15,7 +17,11 @@ async function prepare(): Promise<void> {
   const database = await startDatabase(environment)
   if (environment.demo) {
     if (await isEmpty()) console.log('Making the demo firm: eighteen months of its history. This takes some seconds.')
-    if (await fillDemo(database, await hashNewPassword(DEMO_PASSWORD), Date.now())) await keepDemoPhotos(database, useFiles())
+    const now = Date.now()
+    if (await fillDemo(database, await hashNewPassword(DEMO_PASSWORD), now)) {
+      await keepDemoPhotos(database, useFiles())
+      await sealHistory(database, await sealingNow(database), now)
+    }
     console.log(`\nThe demo firm is at ${environment.publicUrl}\nSign in as ${DEMO_ACCOUNTS.map(name => `${name}@demo.example`).join(', ')}\nPassword of each: ${DEMO_PASSWORD}\n`)
   }
   else if (await isEmpty()) {

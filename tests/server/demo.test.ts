@@ -7,10 +7,13 @@ import { custodyLog } from '../../server/utils/custody/custodyLog'
 import { fleet } from '../../server/utils/custody/fleet'
 import { rebuildCaches } from '../../server/utils/custody/rebuild'
 import { rowsBehind } from '../../server/utils/custody/rowsByRule'
+import { allCheckpoints } from '../../server/utils/proof/checkpoints'
+import { keptCopies } from '../../server/utils/proof/copies'
 import { verifyLog } from '../../server/utils/proof/verifyLog'
 import { openDatabase, type Database } from '../../server/utils/database/database'
 import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
+import { sealHistory } from '../../server/utils/demo/checkpoints'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
 import { lateFacts } from '../../server/utils/now/lateFacts'
 import { differingShipments } from '../../server/utils/shipments/paperDifferences'
@@ -20,6 +23,7 @@ import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
 import type { FindingCode } from '../../utils/custody/finding'
+import { testSealing } from '../helpers/sealing'
 
 const NOW = Date.parse('2026-12-01T17:00:00Z')
 
@@ -166,6 +170,23 @@ describe('the demo firm', () => {
     const live = await db.readClient.execute('SELECT * FROM cylinders ORDER BY id')
     await rebuildCaches(db, NOW)
     expect((await db.readClient.execute('SELECT * FROM cylinders ORDER BY id')).rows).toEqual(live.rows)
+  })
+
+  it('was signed once a day by the clock of each, and verifies against every checkpoint', async () => {
+    const sealing = await testSealing(db)
+    await sealHistory(db, sealing, NOW)
+    const made = await allCheckpoints(db)
+    const first = Number((await column('SELECT min(recorded_at) FROM custody_events'))[0])
+    expect(made.length).toBe(Math.floor((NOW - first) / 86_400_000) + 1)
+    expect(made.map(({ says }) => NOW - says!.at)).toEqual(made.map((_, index) => (made.length - 1 - index) * 86_400_000))
+    // Each knows what had been recorded by its day, and no more.
+    for (const { says } of made) {
+      expect([says!.events, says!.cylinders]).toEqual(Object.values((await db.readClient.execute({
+        sql: 'SELECT count(*) AS events, count(DISTINCT cylinder_id) AS cylinders FROM custody_events WHERE recorded_at <= ?', args: [says!.at],
+      })).rows[0]!))
+    }
+    expect(await verifyLog(db, { now: NOW, sealing })).toMatchObject({ ok: true })
+    expect(keptCopies(sealing.copies)).toEqual(made.map(({ note }) => note))
   })
 
   it('verifies, and is filled once', async () => {
