@@ -21,7 +21,7 @@ export function useHandoverTaking(offer: HandoverOffer, supervisorId: () => stri
 
   const lines = computed(() => (found.value ?? []).map((each) => {
     const end = settled.value.find(({ event }) => event.cylinderId === each.view?.id)
-    const outcome = end ? { isTaken: end.posted !== null, text: end.posted ? 'You have it now' : `Refused: ${end.problem?.detail || end.problem?.title}` } : null
+    const outcome = end ? { isTaken: end.posted !== null, text: end.posted ? (end.posted.isQueued ? 'You have it now, saved on this phone' : 'You have it now') : `Refused: ${end.problem?.detail || end.problem?.title}` } : null
     return { ...each, ...takenLine(each, offer.personId, session.user?.id ?? ''), outcome }
   }))
   const takes = computed(() => lines.value.filter(({ canTake }) => canTake))

@@ -73,7 +73,7 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
     },
     offer: handoverText({
       is: 'offer', id: '7K3M9Q2T', atMs: Date.now(), cylinders: [usual.toUpperCase(), onNone!],
-      personId: (await technician.get<SessionAnswer>('/api/session')).body.user!.id,
+      personId: (await technician.get<SessionAnswer>('/api/session')).body.user.id,
     }),
     invitation: await invitationToken({ client: admin }, INVITED.email),
     setUpToken,
