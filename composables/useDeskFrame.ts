@@ -1,4 +1,5 @@
 import { openCylinder, useScanToOpen } from '~~/composables/useScanToOpen'
+import { useSignOut } from '~~/composables/useSignOut'
 import { useWedge } from '~~/composables/useWedge'
 import { usePreferencesStore } from '~~/stores/preferences'
 import { useSessionStore } from '~~/stores/session'
@@ -16,6 +17,7 @@ const LONGEST_BURST_GAP_MS = 60
 export function useDeskFrame(title: string | (() => string), onScan?: (code: string) => unknown) {
   const session = useSessionStore()
   const preferences = usePreferencesStore()
+  const { signOut } = useSignOut()
   let lastKeyAt = -Infinity
   useHead({ title })
   if (onScan) useWedge(code => void onScan(code))
@@ -24,12 +26,6 @@ export function useDeskFrame(title: string | (() => string), onScan?: (code: str
   function openCode(typed: string) {
     const found = readScannedText(typed)
     return found ? openCylinder(found.code) : navigateTo({ path: '/fleet', query: { q: typed } })
-  }
-
-  async function signOut() {
-    await session.signOut()
-    // By a fresh page, which holds nothing of what this person has read.
-    await navigateTo('/sign-in', { external: true })
   }
 
   function key(event: KeyboardEvent) {

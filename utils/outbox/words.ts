@@ -2,6 +2,7 @@ import type { ProblemDetails } from '../contract/problem'
 import type { CustodyEvent } from '../custody/event'
 import { KIND_WORDS } from '../custody/words'
 import { formatSpan } from '../quantity/instant'
+import type { MassReading } from '../quantity/mass'
 import type { OutboxEntry } from './entry'
 import type { Pause } from './settlement'
 
@@ -33,6 +34,12 @@ export const STATE_WORDS: Record<OutboxEntry['state'], string> = { queued: 'Wait
 export function savedWords(events: readonly Pick<CustodyEvent, 'kind'>[]): string {
   const what = events.length === 1 ? KIND_WORDS[events[0]!.kind].done.toLowerCase() : `${events.length} entries`
   return `Saved on this phone, waiting to send: ${what}`
+}
+
+/** The reading of the scale that an event ends with, where it has one. */
+export function readingOf({ details }: Pick<CustodyEvent, 'details'>): MassReading | null {
+  const { grossAfter, gross } = details as { grossAfter?: MassReading, gross?: MassReading }
+  return grossAfter ?? gross ?? null
 }
 
 /** A problem in one line. */
