@@ -9,8 +9,8 @@ export function namedEarly(events: readonly AnyRecordedEvent[]): string[] {
 }
 
 // A correction may be corrected into one of another event, and that again.
-function namedIn(details: { eventId?: unknown, instead?: unknown }): string[] {
-  const { eventId, instead } = details
+function namedIn(details: object): string[] {
+  const { eventId, instead } = details as { eventId?: unknown, instead?: unknown }
   return [
     ...(typeof eventId === 'string' ? [eventId.toLowerCase()] : []),
     ...(typeof instead === 'object' && instead !== null ? namedIn(instead) : []),
