@@ -99,7 +99,8 @@ export const usePostingStore = defineStore('posting', () => {
     const heard: Promise<void>[] = []
     await outbox.sendNow(kept.map(({ id }) => id), verdicts => heard.push(take(verdicts)))
     await Promise.all(heard)
-    if ([...all.values()].some(({ posted }) => posted?.isQueued)) recorded.value++
+    // Where the session has ended, asking for the cylinder again would lead away from what was just said.
+    if (outbox.pause !== 'sign-in' && [...all.values()].some(({ posted }) => posted?.isQueued)) recorded.value++
     return kept.map(({ id }) => all.get(id)!)
   }
 

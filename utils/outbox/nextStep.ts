@@ -10,7 +10,7 @@ export type Step = { is: 'send', entries: OutboxEntry[] } | { is: 'wait', untilM
 /**
  * The next step of the one sender of a device.
  *
- * What was saved together and last is held for a while, unless it is sent by hand or another follows it.
+ * What was saved together and last is held for a while, unless it is sent by hand, was sent before, or another follows it.
  *
  * Shape: `most` is how many events go in one request; the halves of a pair go together even where that is one too many.
  */
@@ -21,7 +21,7 @@ export function nextStep(entries: readonly OutboxEntry[], given: { personId: str
   const age = given.nowMs - last.queuedAt
   // A clock that was set back since then must hold nothing for ever.
   const isHeld = !given.byHand && age >= 0 && age < HOLD_MS
-  const free = isHeld ? waiting.filter(({ queuedAt, firstSentAt }) => queuedAt !== last.queuedAt || firstSentAt !== null) : waiting
+  const free = isHeld ? waiting.filter(({ queuedAt, tries }) => queuedAt !== last.queuedAt || tries > 0) : waiting
   return free.length === 0 ? { is: 'wait', untilMs: last.queuedAt + HOLD_MS } : { is: 'send', entries: firstOf(free, given.most) }
 }
 
