@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto'
+import { setImmediate as nextTurn } from 'node:timers/promises'
 import type { MassReading } from '../../utils/quantity/mass'
 import type { AnyRecordedEvent } from '../../utils/custody/event'
 import { fold } from '../../utils/custody/fold'
@@ -21,6 +22,8 @@ export async function fillKitFleet(databaseFile: string, count: number, setting:
   try {
     const { rows } = await db.readClient.execute('SELECT id FROM cylinders WHERE state = \'{}\' ORDER BY id')
     for (let from = 0; from < rows.length; from += 500) {
+      // Connections that the server closes meanwhile are to be noticed.
+      await nextTurn()
       await db.write(rows.slice(from, from + 500).map((row, index) => {
         const id = randomId(`${from + index} cylinder`)
         return { sql: 'UPDATE cylinders SET id = ?, state = ? WHERE id = ?', args: [id, JSON.stringify(lifeOf(id, from + index, setting)), row[0] as string] }
