@@ -17,13 +17,17 @@ export function isTooLarge(contentLength: string | undefined, largest: number): 
   return contentLength !== undefined && Number(contentLength) > largest
 }
 
-/** The refusal of a body above a limit in bytes. */
+/**
+ * The refusal of a body above a limit in bytes.
+ *
+ * It does not end the connection: what is still being sent is let run off unread, until the server's time for a request
+ * is over. Were it ended, its sender would learn that it broke, and not why.
+ */
 export function tooLarge(largest: number) {
   const most = largest < 1024 * 1024 ? `${largest / 1024} KiB` : `${Math.floor(largest / 1024 / 1024)} MiB`
-  return problem(413, 'Too large', `A body may have at most ${most}.`, undefined, { headers: { Connection: 'close' } })
+  return problem(413, 'Too large', `A body may have at most ${most}.`)
 }
 
-/** What is too large is let run off unread, so that the refusal still reaches its sender. */
 function readBytes(request: Readable, largest: number): Promise<Buffer> {
   return new Promise((done, failed) => {
     const chunks: Buffer[] = []
@@ -31,10 +35,12 @@ function readBytes(request: Readable, largest: number): Promise<Buffer> {
     request.on('data', (chunk: Buffer) => {
       size += chunk.length
       if (size <= largest) chunks.push(chunk)
-      else failed(tooLarge(largest))
+      else if (size - chunk.length <= largest) failed(tooLarge(largest))
     })
     request.once('end', () => done(Buffer.concat(chunks)))
     request.once('error', failed)
-    request.once('close', () => failed(problem(400, 'Malformed', 'The body broke off.')))
+    request.once('close', () => {
+      if (!request.complete) failed(problem(400, 'Malformed', 'The body broke off.'))
+    })
   })
 }
