@@ -25,6 +25,9 @@ export function compareMonths(a: Month, b: Month): number {
 
 /** The month it is at an instant in a time zone. */
 export function monthOfInstant(ms: number, timeZone: string): Month {
+  // No zone is a day off UTC, so mostly it is the same month everywhere; to ask for the zone's calendar takes ten times as long.
+  const earliest = utcMonthCount(ms - MS_PER_DAY)
+  if (earliest === utcMonthCount(ms + MS_PER_DAY)) return monthOfCount(earliest)
   const { year, month } = dateIn(dateFormat(timeZone), ms)
   return monthOfCount(year * 12 + month - 1)
 }
@@ -65,6 +68,11 @@ function monthCount(month: Month): number {
   const parts = MONTH_TEXT.exec(month)
   if (!parts) throw new RangeError(`Not a month: ${month}`)
   return Number(parts[1]) * 12 + Number(parts[2]) - 1
+}
+
+function utcMonthCount(ms: number): number {
+  const date = new Date(ms)
+  return date.getUTCFullYear() * 12 + date.getUTCMonth()
 }
 
 function monthOfCount(count: number): Month {

@@ -1,3 +1,4 @@
+import { setImmediate as nextTurn } from 'node:timers/promises'
 import type { InStatement } from '@libsql/client'
 import { and, eq, inArray, sql } from 'drizzle-orm'
 import { people, sessions } from '../../../drizzle/schema'
@@ -38,26 +39,51 @@ export function endSession(sid: string): InStatement {
 
 /** Who is signed in with a secret, or null: unknown, ended, too old, or the person is turned off. */
 export async function personOfSession(sid: string, now: number): Promise<User | null> {
-  const [row] = await lookUp(useDatabase()).execute({ secretHash: secretHash(sid) })
+  const row = await lookUp(useDatabase(), secretHash(sid))
   if (!row?.person.active) return null
   if (!sessionStands(row.session, rolesOf(row.person), now)) return null
   if (now - row.session.lastSeenAt >= SEEN_INTERVAL) markSeen(row.session.secretHash, now)
   return userOf(row.person)
 }
 
-// Every request asks this, and to put the question together would cost more than its answer.
-const lookUps = new WeakMap<Database, ReturnType<typeof preparedLookUp>>()
+/** A session as it is stored, and its person. */
+interface SignedIn { session: typeof sessions.$inferSelect, person: typeof people.$inferSelect }
 
-function lookUp(db: Database): ReturnType<typeof preparedLookUp> {
-  const prepared = lookUps.get(db) ?? preparedLookUp(db)
-  lookUps.set(db, prepared)
-  return prepared
+interface Gathering { hashes: Set<string>, found: Promise<Map<string, SignedIn>> }
+
+const gatherings = new WeakMap<Database, Gathering>()
+
+/** A session by its hash. Every request asks this anew: those that come in one turn of the loop share one question. */
+async function lookUp(db: Database, hash: string): Promise<SignedIn | null> {
+  const gathering = gatherings.get(db) ?? gather(db)
+  gathering.hashes.add(hash)
+  return (await gathering.found).get(hash) ?? null
+}
+
+function gather(db: Database): Gathering {
+  const hashes = new Set<string>()
+  const found = nextTurn().then(async () => {
+    gatherings.delete(db)
+    const rows = await lookUps(db).execute({ hashes: JSON.stringify([...hashes]) })
+    return new Map(rows.map(row => [row.session.secretHash, row]))
+  })
+  gatherings.set(db, { hashes, found })
+  return { hashes, found }
+}
+
+// To put the question together would cost more than its answer.
+const prepared = new WeakMap<Database, ReturnType<typeof preparedLookUp>>()
+
+function lookUps(db: Database): ReturnType<typeof preparedLookUp> {
+  const known = prepared.get(db) ?? preparedLookUp(db)
+  prepared.set(db, known)
+  return known
 }
 
 function preparedLookUp({ read }: Database) {
   return read.select({ session: sessions, person: people }).from(sessions)
     .innerJoin(people, eq(people.id, sessions.personId))
-    .where(eq(sessions.secretHash, sql.placeholder('secretHash'))).limit(1).prepare()
+    .where(sql`${sessions.secretHash} in (select value from json_each(${sql.placeholder('hashes')}))`).prepare()
 }
 
 /** Not waited for: reading goes on where the disk is full. */
