@@ -2,7 +2,7 @@ import type { AnyRecordedEvent } from '../event'
 
 /** Ids that corrections and signatures name and that no event has yet: what comes under one of them may not count as it came. */
 export function namedEarly(events: readonly AnyRecordedEvent[]): string[] {
-  const named = new Set(events.filter(({ kind }) => kind === 'corrected' || kind === 'countersigned').flatMap(({ details }) => namedIn(details)))
+  const named = new Set(events.flatMap(event => event.kind === 'corrected' || event.kind === 'countersigned' ? namedIn(event.details) : []))
   if (named.size === 0) return []
   for (const { id } of events) named.delete(id)
   return [...named].sort()
