@@ -121,9 +121,11 @@ export const vacuum = z.union([
   }),
 ], 'must be { "microns": 500 } or { "inHg": 29.2 }')
 
+const dateTime = z.iso.datetime({ offset: true })
+
 /** An instant: ISO 8601 with its offset, and a time that exists. */
 export const instant = z.string('must be a time with its offset, such as "2026-03-02T14:05:00-05:00"').refine(
-  text => z.iso.datetime({ offset: true }).safeParse(withSeconds(text)).success && Number.isFinite(Date.parse(text)),
+  text => dateTime.safeParse(withSeconds(text)).success && Number.isFinite(Date.parse(text)),
   'must be a time with its offset, such as "2026-03-02T14:05:00-05:00"',
 )
 
