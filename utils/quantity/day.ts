@@ -1,9 +1,7 @@
-import { formatDay, wallClock } from './instant'
+import { formatDay, MS_PER_DAY, wallClock } from './instant'
 
 /** A calendar day as 'YYYY-MM-DD'. */
 export type Day = string
-
-const MS_PER_DAY = 86_400_000
 
 /** Whether a text is a day that the calendar has. */
 export function isDay(text: string): boolean {

@@ -1,6 +1,7 @@
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'] as const
 const MS_PER_MINUTE = 60_000
-const MS_PER_DAY = 86_400_000
+/** A day of the clock; a day of the calendar may be an hour shorter or longer. */
+export const MS_PER_DAY = 86_400_000
 
 /** A day and a time of day as a clock on the wall of a time zone shows them. */
 export interface WallClock { year: number, month: number, day: number, hour: number, minute: number }

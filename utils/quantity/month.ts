@@ -1,3 +1,5 @@
+import { MS_PER_DAY } from './instant'
+
 /** A calendar month as 'YYYY-MM', the way a test date is stamped. */
 export type Month = string
 
@@ -6,7 +8,6 @@ const MONTH_NAMES = [
   'January', 'February', 'March', 'April', 'May', 'June',
   'July', 'August', 'September', 'October', 'November', 'December',
 ] as const
-const MS_PER_DAY = 86_400_000
 
 /** Whether a text is a month. */
 export function isMonth(text: string): text is Month {

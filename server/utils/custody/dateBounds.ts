@@ -1,9 +1,8 @@
 import { dayOfInstant, firstInstantOfDay } from '../../../utils/quantity/day'
+import { MS_PER_DAY } from '../../../utils/quantity/instant'
 import { addMonths, daysUntilEndOfMonth, monthOfInstant, type Month } from '../../../utils/quantity/month'
 import { retestAt } from '../directory/datedRules'
 import type { Directory } from '../directory/directory'
-
-const MS_PER_DAY = 86_400_000
 
 /** Today as bounds for cached columns: the one rule about dates that SQL is allowed. */
 export interface DateBounds {

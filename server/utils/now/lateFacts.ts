@@ -1,11 +1,12 @@
 import type { LateFacts } from '../../../utils/now/nowFacts'
 import { laterLines } from '../../../utils/custody/laterLines'
+import { MS_PER_DAY } from '../../../utils/quantity/instant'
 import { foldContext } from '../custody/foldContext'
 import { logsOf } from '../custody/logPages'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
 
-const WEEK_MS = 7 * 86_400_000
+const WEEK_MS = 7 * MS_PER_DAY
 /** Beyond these the line says no more than that there are many. */
 const MOST_CYLINDERS = 50
 

@@ -1,5 +1,6 @@
 import type { InStatement } from '@libsql/client'
 import type { ListFacts, NowFacts, ShortVanFacts, VanFacts } from '../../../utils/now/nowFacts'
+import { MS_PER_DAY } from '../../../utils/quantity/instant'
 import { cylinderName } from '../../../utils/shipment/changedLines'
 import { vanLoad } from '../../../utils/transport/vanLoad'
 import type { Database } from '../database/database'
@@ -9,7 +10,6 @@ import { materialsOf } from '../vans/materials'
 import { ownVans } from '../vans/ownVans'
 import { standingIn } from '../vans/standingIn'
 
-const DAY_MS = 86_400_000
 /** A shipment without a receipt is asked about after so many days: common practice, no source. */
 const SHIPMENT_WAITS_DAYS = 7
 /** A test lot that is not back is asked about after so many days: common practice, no source. */
@@ -20,8 +20,8 @@ type Lists = Pick<NowFacts, 'shipmentsAway' | 'lotsAway' | 'shipmentDrafts' | 'l
 /** Shipments and test lots that are drafts, or that have been away for long. */
 export async function listFacts(db: Database, nowMs: number): Promise<Lists> {
   const answers = await db.readClient.batch([
-    listed('shipments', 'dispatched_at', `state = 'dispatched' AND dispatched_at <= ?`, nowMs - SHIPMENT_WAITS_DAYS * DAY_MS),
-    listed('test_lots', 'sent_at', `state = 'sent' AND sent_at <= ?`, nowMs - LOT_WAITS_DAYS * DAY_MS),
+    listed('shipments', 'dispatched_at', `state = 'dispatched' AND dispatched_at <= ?`, nowMs - SHIPMENT_WAITS_DAYS * MS_PER_DAY),
+    listed('test_lots', 'sent_at', `state = 'sent' AND sent_at <= ?`, nowMs - LOT_WAITS_DAYS * MS_PER_DAY),
     listed('shipments', 'created_at', `state = 'draft' AND created_at <= ?`, nowMs),
     listed('test_lots', 'created_at', `state = 'draft' AND created_at <= ?`, nowMs),
   ], 'read')

@@ -2,13 +2,13 @@ import { isCertified } from '../../../utils/access/certification'
 import { DOUBTFUL_CLAMP_MS, DOUBTFUL_SKEW_S } from '../../../utils/custody/fold/raiseCommon'
 import type { EntryFacts, NowFacts, ScaleFacts } from '../../../utils/now/nowFacts'
 import { dayOfInstant } from '../../../utils/quantity/day'
+import { MS_PER_DAY } from '../../../utils/quantity/instant'
 import { scaleCheck } from '../../../utils/quantity/scaleCheck'
 import { lastVerification } from '../custody/lastVerification'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
 
-const DAY_MS = 86_400_000
-const WEEK_MS = 7 * DAY_MS
+const WEEK_MS = 7 * MS_PER_DAY
 /** A rule is told of so long before it begins: common practice, no source. */
 const RULE_TOLD_DAYS = 14
 
@@ -27,7 +27,7 @@ export async function logCheckFacts(db: Database): Promise<NowFacts['logCheck']>
 export async function entryFacts(db: Database, nowMs: number): Promise<NowFacts['entries']> {
   const [doubtful, late, corrected] = await Promise.all([
     entries(db, nowMs, 'abs(e.clock_skew_seconds) > ? OR e.occurred_at - e.clock_skew_seconds * 1000 - e.effective_at >= ?', [DOUBTFUL_SKEW_S, DOUBTFUL_CLAMP_MS]),
-    entries(db, nowMs, 'e.recorded_at - e.effective_at > ?', [DAY_MS]),
+    entries(db, nowMs, 'e.recorded_at - e.effective_at > ?', [MS_PER_DAY]),
     entries(db, nowMs, `e.kind = 'corrected'`, []),
   ])
   return { doubtful, late, corrected }
@@ -58,7 +58,7 @@ export async function mailFacts(db: Database): Promise<NowFacts['mailFailed']> {
 /** The firm's next rule, where it begins soon. */
 export function ruleFacts(from: Directory, nowMs: number): NowFacts['rule'] {
   const coming = [...from.fillPolicies.map(({ fromAt }) => ({ fromAt, isFillRule: true })), ...from.retests.map(({ fromAt }) => ({ fromAt, isFillRule: false }))]
-    .filter(({ fromAt }) => fromAt > nowMs && fromAt <= nowMs + RULE_TOLD_DAYS * DAY_MS)
+    .filter(({ fromAt }) => fromAt > nowMs && fromAt <= nowMs + RULE_TOLD_DAYS * MS_PER_DAY)
     .sort((a, b) => a.fromAt - b.fromAt)
   return coming[0] && { ...coming[0], count: coming.length }
 }

@@ -1,6 +1,7 @@
 import type { InStatement } from '@libsql/client'
 import { and, eq, gt, isNull } from 'drizzle-orm'
 import { oneTimeLinks } from '../../../drizzle/schema'
+import { MS_PER_DAY } from '../../../utils/quantity/instant'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
 import { problem } from '../http/problem'
@@ -8,11 +9,10 @@ import { newSecret, secretHash } from '../session/secret'
 
 type Purpose = (typeof oneTimeLinks.$inferSelect)['purpose']
 
-const DAY = 86_400_000
 /** How long an invitation is good. Units: days. */
 export const INVITATION_DAYS = 7
 /** A set-up link is made anew at each start. */
-const LIFETIME: Record<Purpose, number> = { 'invitation': INVITATION_DAYS * DAY, 'set-up': INVITATION_DAYS * DAY }
+const LIFETIME: Record<Purpose, number> = { 'invitation': INVITATION_DAYS * MS_PER_DAY, 'set-up': INVITATION_DAYS * MS_PER_DAY }
 
 /** A new link, and the statements that store its hash and end the ones before it. */
 export function newLink(purpose: Purpose, personId: string | null, now: number): { token: string, store: InStatement[] } {

@@ -1,17 +1,17 @@
+import { MS_PER_DAY } from '../../../utils/quantity/instant'
 import type { Database } from '../database/database'
 import { Problem } from '../http/problem'
 import { checkpointNow } from './checkpointNow'
 import { newestCheckpoint } from './checkpoints'
 import { sealing, type SealingSettings } from './sealing'
 
-const DAY_MS = 86_400_000
 /** How often it is looked whether one is due: a server that slept or was down makes the missing one soon after. */
 const LOOK_EVERY_MS = 10 * 60_000
 
 /** Whether a day has gone by since the newest checkpoint. An empty log has nothing to sign. */
 export async function isCheckpointDue(db: Database, now: number): Promise<boolean> {
   const newest = await newestCheckpoint(db)
-  if (newest?.says && now - newest.says.at < DAY_MS) return false
+  if (newest?.says && now - newest.says.at < MS_PER_DAY) return false
   const { rows } = await db.readClient.execute('SELECT 1 FROM custody_events LIMIT 1')
   return rows.length > 0
 }

@@ -1,6 +1,7 @@
 import type { PaperDifference, ShipmentLine } from '~~/utils/contract/shipments'
 import type { AnyRecordedEvent } from '~~/utils/custody/event'
 import { fold, type FoldContext } from '~~/utils/custody/fold'
+import { MS_PER_DAY } from '~~/utils/quantity/instant'
 import { foldContext } from '../custody/foldContext'
 import { logsOf } from '../custody/logPages'
 import type { Database } from '../database/database'
@@ -54,7 +55,7 @@ async function touchedShipments(db: Database, nowMs: number, below: number): Pro
         WHERE l.shipment_id = s.id AND e.recorded_at > s.dispatched_at AND (e.kind IN ('corrected', 'registered')
           OR e.effective_at <= s.dispatched_at AND NOT (e.kind = 'sent-for-reclaim' AND e.effective_at = s.dispatched_at)))
       ORDER BY s.number DESC LIMIT ?`,
-    args: [nowMs - LOOKED_BACK_DAYS * 86_400_000, below, MOST_SHIPMENTS],
+    args: [nowMs - LOOKED_BACK_DAYS * MS_PER_DAY, below, MOST_SHIPMENTS],
   })
   return rows.map(row => ({ id: row[0] as string, number: row[1] as number }))
 }
