@@ -5,6 +5,7 @@ import type { Access } from '../../../utils/access/roles'
 import { can } from '../../../utils/access/permissions'
 import type { Upload, UploadAnswer } from '../../../utils/contract/uploads'
 import { pictureKind, type PictureKind } from '../../../utils/photo/pictureKind'
+import { takenAtOf } from '../../../utils/photo/takenAt'
 import { HEIC_ADVICE } from '../../../utils/photo/words'
 import { statement, type Database } from '../database/database'
 import { problem } from '../http/problem'
@@ -77,7 +78,7 @@ async function draw(files: PhotoFiles, upload: Upload, kind: PictureKind, source
   await files.keep(pictureName(contentHash), picture)
   return {
     id: upload.id, subject: upload.subject,
-    takenAt: upload.takenAt === undefined ? null : Date.parse(upload.takenAt),
+    takenAt: takenAtOf(upload.takenAt, now),
     sentBy: access.personId, arrivedAt: now, sourceHash, contentHash, bytes: picture.length, width, height,
   }
 }
