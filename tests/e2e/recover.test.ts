@@ -55,7 +55,7 @@ describe('a recovery beside the scale', () => {
     await before.getByRole('status').filter({ hasText: '15.0 lb to go' }).waitFor()
     await before.keyboard.type('62.3')
     await before.keyboard.press('Enter')
-    await before.getByText(/^Past 90 % of 38\.0 lb/).waitFor()
+    await before.getByText(/^Past 90 % of 38\.0\s*lb/).waitFor()
     await before.close()
 
     const page = await context.newPage()

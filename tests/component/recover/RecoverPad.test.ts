@@ -54,7 +54,6 @@ describe('filling beside the scale', () => {
   it('puts the stop in the place of the keys until somebody answers it', async () => {
     const filling = await mountSuspended(RecoverFilling, { props })
     expect(filling.text()).toContain('Past the stop weight: shut the valve now.')
-    expect(filling.text()).toContain('The screen may go dark by itself')
     expect(filling.findComponent(RecoverPad).exists()).toBe(false)
     const [hoses, seen, undo] = allByRole(filling.element, 'button')
     for (const answer of [hoses, seen, undo]) (answer as HTMLElement).click()
@@ -62,6 +61,7 @@ describe('filling beside the scale', () => {
     await filling.setProps({ mustStop: false })
     expect(filling.findComponent(RecoverPad).exists()).toBe(true)
     expect(filling.text()).toContain('3 readings, kept')
+    expect(filling.text()).toContain('This phone may turn its screen off by itself.')
   })
 
   it('asks about a doubtful reading, with the way back first', async () => {
