@@ -26,7 +26,7 @@ export async function changePlace(db: Database, id: string, change: PlaceChange)
     const inside = change.active === false && [...from.places.values()].find(each => each.parentId === id && each.active)
     if (inside) throw problem(409, 'Another place is inside it', `Move or close ${inside.name} first; then it can be closed.`)
     const { name = place.name, parentId = place.parentId, technicianId = place.technicianId, active = place.active } = change
-    const errors = placeErrors(from, { id, kind: place.kind, parentId, technicianId })
+    const errors = placeErrors(from, { id, kind: place.kind, parentId, technicianId }, place)
     if (errors.length > 0) throw problem(422, 'This place cannot be', 'Mend what is named.', errors)
     await commit([statement(db.read.update(places).set({ name, parentId, technicianId, active }).where(eq(places.id, id)))])
   })
