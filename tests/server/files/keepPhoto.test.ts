@@ -99,9 +99,9 @@ describe('the photos of an event', () => {
     const [one, two] = [photo(), photo({ file: redAndBlue(80, 40) })]
     const eventId = await weighed({ photoIds: [one.id, two.id] })
     expect(await photos()).toEqual([{ eventId, photos: [], onTheWay: 2 }])
-    const answer = await keep({ ...one, takenAt: '2026-05-14T09:00:00-05:00' })
+    const answer = await keep({ ...one, takenAt: '2026-05-14T09:00:00-05:00' }, log.technician, Date.parse('2026-05-14T14:00:01Z'))
     expect(await photos()).toEqual([{ eventId, onTheWay: 1, photos: [{
-      id: one.id, subject: 'scale', takenAt: '2026-05-14T14:00:00.000Z', arrivedAt: '1970-01-01T00:00:01.000Z',
+      id: one.id, subject: 'scale', takenAt: '2026-05-14T14:00:00.000Z', arrivedAt: '2026-05-14T14:00:01.000Z',
       by: { id: log.technician.personId, name: 'Person 1' }, putAt: null, width: 64, height: 32, contentHash: answer.contentHash,
     }] }])
   })
