@@ -19,6 +19,8 @@ export interface Answering {
   count: ReturnType<typeof useKitStore>['countHaving']
   /** Every cylinder is in the copy: only then can it list them, or say that there is none. */
   isWhole: boolean
+  /** Of when the copy is (UTC milliseconds). */
+  of: number
   nowMs: number
 }
 
@@ -28,6 +30,11 @@ export class NotInCopy extends Error {
   readonly data: ProblemDetails = {
     type: 'not-in-copy', title: 'Not in this phone\'s copy', status: 404,
     detail: 'No cylinder in this phone\'s copy of the fleet has this code, serial or id. It may have come since.',
+  }
+
+  /** @param of of when the copy is (UTC milliseconds). */
+  constructor(readonly of: number) {
+    super('Not in this phone\'s copy')
   }
 }
 
@@ -47,6 +54,12 @@ export async function answerFromCopy(path: string, query: Readonly<Record<string
   return answer === undefined ? null : { answer, of: found.about.followedAt }
 }
 
+/** Fetches and reads beforehand what every answer takes, so that the next one does not wait for it. */
+export async function readyCopy(): Promise<void> {
+  const found = await useKitStore().reading()
+  if (found) await answeringFrom(found)
+}
+
 /** The answer of {@link answerFromCopy} alone; undefined where the copy cannot tell. */
 export async function offlineAnswer(path: string, query?: Readonly<Record<string, unknown>>): Promise<unknown | undefined> {
   return (await answerFromCopy(path, query))?.answer
@@ -57,7 +70,7 @@ async function answeringFrom(found: NonNullable<Awaited<ReturnType<ReturnType<ty
   const nowMs = Date.now()
   const waiting = useOutboxStore().entries.filter(isWaiting).map(({ event }) => event)
   const reader = await kitReader({ ...found, catalogue: CATALOGUE, waiting, asking: { nowMs, access: useSessionStore().access } })
-  return { reader, firm: found.firm, count: useKitStore().countHaving, isWhole: found.about.next === null, nowMs }
+  return { reader, firm: found.firm, count: useKitStore().countHaving, isWhole: found.about.next === null, of: found.about.followedAt, nowMs }
 }
 
 type Route = (answering: Answering, asked: Asked) => Promise<unknown | undefined>
@@ -76,9 +89,9 @@ function routeOf(path: string): Route | null {
 
 type OnDevice = NonNullable<Awaited<ReturnType<KitReader['find']>>>
 
-async function theCylinder({ reader, isWhole }: Answering, reference: string): Promise<OnDevice | null> {
+async function theCylinder({ reader, isWhole, of }: Answering, reference: string): Promise<OnDevice | null> {
   const found = await reader.find(reference)
-  if (found === null && isWhole) throw new NotInCopy()
+  if (found === null && isWhole) throw new NotInCopy(of)
   return found
 }
 

@@ -29,10 +29,13 @@ export default defineNuxtPlugin((nuxt) => {
   }
 
   /** What answers is fetched when it is first needed; where not even that is on the device, there is no copy either. */
-  async function answerFromCopy(...question: Parameters<Answers['answerFromCopy']>): ReturnType<Answers['answerFromCopy']> {
-    const answers = await import('~~/composables/offlineAnswers').catch(() => null)
-    return answers && await answers.answerFromCopy(...question)
-  }
+  const answers = (): Promise<Answers | null> => import('~~/composables/offlineAnswers').catch(() => null)
 
-  return { provide: { answerFromCopy } }
+  return {
+    provide: {
+      answerFromCopy: async (...question: Parameters<Answers['answerFromCopy']>): ReturnType<Answers['answerFromCopy']> => await (await answers())?.answerFromCopy(...question) ?? null,
+      /** Has everything at hand that the next answer takes. */
+      readyCopy: async (): Promise<void> => (await answers())?.readyCopy(),
+    },
+  }
 })
