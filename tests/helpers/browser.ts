@@ -6,7 +6,7 @@ import { dirname, join } from 'node:path'
 import { pipeline } from 'node:stream/promises'
 import { createBrotliDecompress } from 'node:zlib'
 import chromium from '@sparticuz/chromium'
-import { chromium as driver, type Browser, type BrowserContext } from 'playwright-core'
+import { chromium as driver, type Browser, type BrowserContext, type BrowserContextOptions } from 'playwright-core'
 
 /** What a browser for a test needs to be told. */
 export interface BrowserOptions {
@@ -27,6 +27,20 @@ export async function launchBrowser({ cameraFilm }: BrowserOptions = {}): Promis
     ? ['--use-fake-device-for-media-stream', '--use-fake-ui-for-media-stream', `--use-file-for-fake-video-capture=${cameraFilm}`]
     : []
   return driver.launch({ executablePath, args: [...QUIET, ...camera], env: await environmentFor(executablePath) })
+}
+
+/** A browser whose profile lies in a folder and outlives it, as a phone's does. */
+export async function launchProfile(folder: string, options: BrowserContextOptions = {}): Promise<BrowserContext> {
+  const executablePath = process.env.CHROMIUM_PATH || await chromium.executablePath()
+  return driver.launchPersistentContext(folder, { executablePath, args: QUIET, env: await environmentFor(executablePath), ...options })
+}
+
+/** Ends a browser as a phone does that runs out of power: it gets to do nothing more. */
+export async function crash(context: BrowserContext): Promise<void> {
+  const ended = new Promise(done => context.once('close', done))
+  const session = await context.newCDPSession(await context.newPage())
+  session.send('Browser.crash').catch(() => undefined)
+  await ended
 }
 
 /** A page's console must stay quiet: what it says of errors is gathered here. */
