@@ -9,9 +9,9 @@ const TESTED: RequalificationView = {
   basis: 'Tested March 2022; due 60 months later by 49 CFR 180.209(a), Table 1, for DOT-4BA.',
 }
 
-async function mount(changes: Partial<RequalificationView> = {}, marks: RetestMark[] = [], nowMs = Date.UTC(2025, 5, 1)) {
+async function mount(changes: Partial<RequalificationView> = {}, marks: RetestMark[] = [], nowMs = Date.UTC(2025, 5, 1), rejected = false) {
   return await mountSuspended(CylinderRetest, {
-    props: { requalification: { ...TESTED, ...changes }, marks, nowMs, timeZone: 'America/Chicago', soonDays: 120 },
+    props: { requalification: { ...TESTED, ...changes }, marks, nowMs, timeZone: 'America/Chicago', soonDays: 120, rejected },
   })
 }
 
@@ -37,6 +37,15 @@ describe('the retest of a cylinder', () => {
     const wrapper = await mount({ state: 'not-required', dueMonth: null, intervalMonths: null, basis: 'No test is asked of a DOT-4L (49 CFR 180.209(a), Table 1).' })
     expect(wrapper.text()).toContain('No retest is asked of it')
     expect(wrapper.text()).toContain('DOT-4L')
+  })
+
+  it('gives no date and no tick to one that was rejected at its test', async () => {
+    const ticks = (html: string) => html.split('var(--ok)').length - 1
+    expect(ticks((await mount()).html())).toBe(1)
+    const wrapper = await mount({}, [], undefined, true)
+    expect(wrapper.text()).toContain('Rejected at its last test')
+    expect(wrapper.text()).not.toMatch(/end of|\d months$/m)
+    expect(ticks(wrapper.html())).toBe(0)
   })
 
   it('shows what the paragraph of the owner\'s choice asks', async () => {
