@@ -16,6 +16,13 @@ describe('the load of a van on the screen', () => {
     expect((await card([60_000], 20_000)).textContent).toContain('176.4\u00A0lb of 440.0\u00A0lb')
   })
 
+  it('gives figures that subtract, the load rounded up like what is too much of it', async () => {
+    // 210,253 g are 463.53 lb.
+    const said = (await card([90_000, 90_000], 30_253)).textContent
+    expect(said).toContain('463.6\u00A0lb of 440.0\u00A0lb')
+    expect(said).toContain('23.6\u00A0lb above')
+  })
+
   it('says what is not known, and does not call the load fine then', async () => {
     const said = (await card([60_000, null], null)).textContent
     expect(said).toContain('1 cylinder is not weighed and not counted here.')
