@@ -2,6 +2,7 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
 import FleetFilters from '~~/components/fleet/FleetFilters.vue'
 import { fleetQuery } from '~~/utils/contract/custody'
+import { byRole } from '../../helpers/roles'
 
 const NAMES = { places: [{ id: 'p1', name: 'Van 12' }], people: [{ id: 'h1', name: 'Mara' }], firms: [{ id: 'f1', name: 'Halden' }] }
 
@@ -38,6 +39,17 @@ describe('the filters of the fleet', () => {
     await label!.find('input').setValue('7k3 m9q 2tx')
     await label!.trigger('submit')
     expect(wrapper.emitted('change')).toEqual([[{ q: 'K48' }], [{ label: '7k3 m9q 2tx' }]])
+  })
+
+  it('show all of the fleet as chosen only where none is set, and clear every one at once', async () => {
+    const all = (wrapper: Awaited<ReturnType<typeof mount>>) => byRole(wrapper.element, 'button', 'All')
+    expect(all(await mount()).getAttribute('aria-pressed')).toBe('true')
+    const wrapper = await mount({ place: 'p1', refrigerant: 'R-22' })
+    expect(all(wrapper).getAttribute('aria-pressed')).toBe('false')
+    all(wrapper).click()
+    expect(wrapper.emitted('change')).toEqual([[{
+      q: null, place: null, holder: null, refrigerant: null, condition: null, lifecycle: null, dueBefore: null, finding: null, owner: null, label: null,
+    }]])
   })
 
   it('name a month by the end of which the retest is due', async () => {
