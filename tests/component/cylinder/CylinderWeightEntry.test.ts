@@ -1,5 +1,6 @@
 import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { describe, expect, it } from 'vitest'
+import { defineComponent, h } from 'vue'
 import CylinderWeightEntry from '~~/components/cylinder/CylinderWeightEntry.vue'
 import { byRole } from '../../helpers/roles'
 
@@ -30,6 +31,24 @@ describe('the weight field', () => {
     await wrapper.find('fieldset').trigger('focusout')
     expect(wrapper.find('input').attributes('aria-invalid')).toBeUndefined()
     expect(wrapper.emitted('reason')!.at(-1)).toEqual(['The weight is not typed yet.'])
+  })
+
+  it('says that it is missing once its form is sent off without it, where nothing is recorded without it', async () => {
+    const inForm = async (required: boolean) => {
+      const wrapper = await mountSuspended(defineComponent({
+        setup: () => () => h('form', { onSubmit: (event: Event) => event.preventDefault() }, h(CylinderWeightEntry, { ...props, required })),
+      }), { attachTo: document.body })
+      const said = () => [wrapper.find('input').attributes('aria-invalid'), wrapper.text().includes('The weight is not typed yet.')]
+      const before = said()
+      await wrapper.find('form').trigger('submit')
+      const after = said()
+      await wrapper.find('input').setValue('30')
+      const typed = said()
+      wrapper.unmount()
+      return { before, after, typed }
+    }
+    expect(await inForm(true)).toEqual({ before: [undefined, false], after: ['true', true], typed: [undefined, false] })
+    expect((await inForm(false)).after).toEqual([undefined, false])
   })
 
   it('takes pounds and ounces in two boxes', async () => {
