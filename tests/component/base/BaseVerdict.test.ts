@@ -20,10 +20,10 @@ it('has a shape of its own for each status, so that colour is never alone', asyn
 it('keeps its word as a chip', async () => {
   const wrapper = await mountSuspended(BaseVerdict, { props: { kind: 'att', text: '120 days', chip: true } })
   expect(wrapper.text()).toBe('120 days')
+})
 
-  it('keeps a designation whole on a narrow screen, and leaves the words as they are', async () => {
-    const { element } = await mountSuspended(BaseVerdict, { props: { kind: 'ok', text: 'Room for 3.2 lb of R-410A' } })
-    expect(element.textContent!.trim()).toBe('Room for 3.2 lb of R-410A')
-    expect([...element.querySelectorAll('.whitespace-nowrap')].map(part => part.textContent)).toEqual(['R-410A'])
-  })
+it('keeps a designation whole on a narrow screen, and leaves the words as they are', async () => {
+  const { element } = await mountSuspended(BaseVerdict, { props: { kind: 'ok', text: 'Room for 3.2 lb of R-410A' } })
+  expect(element.textContent!.trim()).toBe('Room for 3.2 lb of R-410A')
+  expect([...element.querySelectorAll('.whitespace-nowrap')].map(part => part.textContent)).toEqual(['R-410A'])
 })
