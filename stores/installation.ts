@@ -27,6 +27,9 @@ export const useInstallationStore = defineStore('installation', () => {
   const isInstalled = ref(false)
   const storage = ref<KeptStorage | null>(null)
 
+  /** Safari on a phone lets nobody ask: its own menu does it. */
+  const isByShareSheet = ref(false)
+
   const isUpdateReady = computed(() => waiting.value !== null)
   /** Whether the browser lets us ask. */
   const canInstall = computed(() => prompt.value !== null && !isInstalled.value)
@@ -62,6 +65,7 @@ export const useInstallationStore = defineStore('installation', () => {
 
   function listen() {
     isInstalled.value = navigator.standalone === true || matchMedia('(display-mode: standalone)').matches
+    isByShareSheet.value = !isInstalled.value && navigator.standalone === false
     window.addEventListener('beforeinstallprompt', (event) => {
       // Asked in our own words, where it is of use.
       event.preventDefault()
@@ -91,5 +95,5 @@ export const useInstallationStore = defineStore('installation', () => {
     storage.value = { isPersisted, usedBytes: estimate.usage ?? null, quotaBytes: estimate.quota ?? null }
   }
 
-  return { isUpdateReady, opensOffline, isInstalled, canInstall, storage, register, takeUpdate, listen, install, askToPersist, lookAtStorage }
+  return { isUpdateReady, opensOffline, isInstalled, isByShareSheet, canInstall, storage, register, takeUpdate, listen, install, askToPersist, lookAtStorage }
 })

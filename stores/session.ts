@@ -61,6 +61,9 @@ export const useSessionStore = defineStore('session', () => {
   async function signOut() {
     await api.del('/api/session')
     set(null)
+    // What this person could read goes with them; what is not sent yet stays, for nobody else to see.
+    const { kitBox } = await import('~~/composables/kitBox')
+    await kitBox().clear().catch(() => undefined)
   }
 
   return { user, known, isKept, access, mayI, set, load, confirm, signOut }

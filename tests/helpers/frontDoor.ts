@@ -30,8 +30,9 @@ export async function openFrontDoor(to: string): Promise<FrontDoor> {
   function pass(asked: IncomingMessage, answer: ServerResponse) {
     const change = door.changed.get(asked.url ?? '')
     if (change === null) return void answer.writeHead(404).end()
-    // A text that is to be changed must come as it is.
-    const headers = change ? { ...asked.headers, 'accept-encoding': 'identity' } : asked.headers
+    const { 'if-none-match': _match, 'if-modified-since': _since, ...anew } = asked.headers
+    // A text that is to be changed must come whole and as it is.
+    const headers = change ? { ...anew, 'accept-encoding': 'identity' } : asked.headers
     const onward = request(`${to}${asked.url}`, { method: asked.method, headers }, (response) => {
       if (!change) {
         answer.writeHead(response.statusCode ?? 502, response.headers)
