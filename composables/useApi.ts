@@ -54,14 +54,14 @@ export function useApi() {
   const router = useRouter()
   const copyOf = useCopyOf()
 
-  async function get<T>(path: string, query?: Query): Promise<T> {
+  async function get<T>(path: string, query?: Query, staysHere = false): Promise<T> {
     if (import.meta.server) return call<T>('GET', path, { query })
     if (!navigator.onLine) {
       const kept = await fromCopy<T>(path, query)
       if (kept) return kept.answer
     }
     try {
-      const answer = await call<T>('GET', path, { query })
+      const answer = await call<T>('GET', path, { query, staysHere })
       copyOf.value = null
       return answer
     }
@@ -83,7 +83,7 @@ export function useApi() {
     }
   }
 
-  async function call<T>(method: Method, path: string, options: { query?: Query, body?: unknown } = {}): Promise<T> {
+  async function call<T>(method: Method, path: string, options: { query?: Query, body?: unknown, staysHere?: boolean } = {}): Promise<T> {
     try {
       return await request<T>(path, {
         method,
@@ -95,7 +95,7 @@ export function useApi() {
     }
     catch (error) {
       const problem = problemOf(error)
-      if (problem.status === 401 && import.meta.client && !path.startsWith('/api/session')) {
+      if (problem.status === 401 && import.meta.client && !options.staysHere && !path.startsWith('/api/session')) {
         // By a fresh page: this one still believes that its person is signed in, and holds what they read.
         await nuxt.runWithContext(() => navigateTo({ path: '/sign-in', query: { next: router.currentRoute.value.fullPath } }, { external: true }))
       }
@@ -104,7 +104,9 @@ export function useApi() {
   }
 
   return {
-    get,
+    get: <T>(path: string, query?: Query) => get<T>(path, query),
+    /** The same beside what a person does: where the session has ended it fails, and leads nowhere. */
+    getAside: <T>(path: string, query?: Query) => get<T>(path, query, true),
     /** From the server or not at all. */
     getFresh: <T>(path: string, query?: Query) => call<T>('GET', path, { query }),
     post: <T>(path: string, body: unknown) => call<T>('POST', path, { body }),

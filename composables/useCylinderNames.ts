@@ -12,7 +12,7 @@ export function useCylinderNames(ids: () => readonly string[]) {
     for (const id of ids()) {
       if (asked.has(id)) continue
       asked.add(id)
-      const view = await api.get<CylinderView>(`/api/cylinders/${id}`).catch(() => null)
+      const view = await api.getAside<CylinderView>(`/api/cylinders/${id}`).catch(() => null)
       const name = view?.labelCode ? formatLabelCode(view.labelCode) : view?.stamp?.serial
       if (name) names.value = new Map(names.value).set(id, name)
     }

@@ -46,7 +46,7 @@ export function usePreview(input: {
   async function foldInput(cylinderId: string): Promise<FoldInput> {
     const before = known.get(cylinderId)
     if (before?.recorded === posting.recorded) return before.input
-    const asked = { recorded: posting.recorded, input: await api.get<FoldInput>(`/api/cylinders/${cylinderId}/fold`) }
+    const asked = { recorded: posting.recorded, input: await api.getAside<FoldInput>(`/api/cylinders/${cylinderId}/fold`) }
     known.set(cylinderId, asked)
     return asked.input
   }
