@@ -78,6 +78,8 @@ export function useRecover(input: {
   function go(step: RecoveryStep, more: Partial<RecoveryCourse> = {}) {
     course.value = { ...course.value, ...more, step }
     window.scrollTo({ top: 0 })
+    // What was pressed is gone: the keyboard goes on from the top of the step.
+    document.getElementById('main')?.focus({ preventScroll: true })
   }
 
   /** Notes what the scale shows; what may be a slip of the finger is asked about once. */

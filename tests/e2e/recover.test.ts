@@ -79,6 +79,11 @@ describe('a recovery beside the scale', () => {
     await press(page, '65.4')
     await page.getByRole('button', { name: 'Take 65.4 lb' }).click()
     await page.getByText('+25.4 lb').waitFor()
+    // 40 CFR 82.156 Table 1: R-22 in a system of unknown charge, by a machine of unknown date, 10 inHg at most.
+    await page.getByText('Vacuum of the system, and how long it held').click()
+    await page.getByLabel('Gauge shows').fill('10')
+    await page.getByLabel('Held for').fill('5')
+    await page.getByRole('status').filter({ hasText: 'It held for 5 minutes.' }).getByText('Reached', { exact: true }).waitFor()
     await page.getByRole('button', { name: 'Record the recovery' }).click()
     await page.getByRole('list', { name: 'Lines of the tag' }).getByText('Net 37.9 lb (17.19 kg)').waitFor()
 
@@ -87,7 +92,7 @@ describe('a recovery beside the scale', () => {
     const [line] = (await shop.manager.client.get<CustodyLogAnswer>(`/api/cylinders/${cylinder.id}/events`)).body.items
     expect(line).toMatchObject({ kind: 'filled', details: {
       grossBefore: { unit: 'lb', value: 40 }, grossAfter: { unit: 'lb', value: 65.4 }, method: 'push-pull', looked: true, purged: true,
-      readings: [{ gross: { unit: 'lb', value: 50.5 } }, { gross: { unit: 'lb', value: 65.5 } }],
+      readings: [{ gross: { unit: 'lb', value: 50.5 } }, { gross: { unit: 'lb', value: 65.5 } }], reached: { vacuum: { inHg: 10 }, heldMinutes: 5 },
     } })
     await page.goto(`${server.baseUrl}/now`, { waitUntil: 'networkidle' })
     expect(await page.getByText('a recovery beside the scale').count(), 'what is recorded is kept no longer').toBe(0)

@@ -1,4 +1,4 @@
-import { ruleWithShare } from '../capacity/words'
+import { RULE_WORDS } from '../capacity/words'
 import type { CylinderView } from '../custody/cylinderView'
 import { mayFill } from '../custody/plan'
 
@@ -19,7 +19,7 @@ export interface RecoveryPlan {
 
 /** Settles where filling stops; null where nothing may go in, or something is not known. */
 export function recoveryPlan(view: CylinderView, at: string): RecoveryPlan | null {
-  const { forRefrigerant, exactStopWeightGrams, fillLimitGrams, governingRule, share } = view.capacity
+  const { forRefrigerant, exactStopWeightGrams, fillLimitGrams, governingRule } = view.capacity
   const { tareWeightGrams = null, waterCapacityGrams = null } = view.stamp ?? {}
   if (!mayFill(view).allowed || forRefrigerant === null || governingRule === null) return null
   if (exactStopWeightGrams === null || fillLimitGrams === null || tareWeightGrams === null || waterCapacityGrams === null) return null
@@ -29,7 +29,7 @@ export function recoveryPlan(view: CylinderView, at: string): RecoveryPlan | nul
     tareGrams: tareWeightGrams,
     limitGrams: fillLimitGrams,
     waterFullGrams: tareWeightGrams + waterCapacityGrams,
-    rule: ruleWithShare(governingRule, share),
+    rule: RULE_WORDS[governingRule],
     at,
   }
 }

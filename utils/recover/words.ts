@@ -11,7 +11,7 @@ export const STAGE_STATUS: Record<FillStage, StatusKind> = { below: 'ok', near: 
  *
  * Rounding: what may still go in down, an excess up.
  *
- * @example { head: '3.7 lb to go, about 6 min', line: 'Past 90 % of 38.1 lb, the limit by water weight, 0.80 × WC' }
+ * @example { head: '3.7 lb to go, about 6 min', line: 'Past 90 % of 38.1 lb, the limit by water weight' }
  */
 export function wayWords(plan: RecoveryPlan, gross: MassReading, stage: FillStage, minutes: number | null, unit: MassUnit): { head: string, line: string } {
   const toGo = plan.stopGrams - exactGrams(gross)

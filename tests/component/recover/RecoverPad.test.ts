@@ -61,7 +61,7 @@ describe('filling beside the scale', () => {
     await filling.setProps({ mustStop: false })
     expect(filling.findComponent(RecoverPad).exists()).toBe(true)
     expect(filling.text()).toContain('3 readings, kept')
-    expect(filling.text()).toContain('This phone may turn its screen off by itself.')
+    expect(filling.text()).toContain('The screen may turn off by itself.')
   })
 
   it('asks about a doubtful reading, with the way back first', async () => {

@@ -1,3 +1,4 @@
+import { DENSEST_OVER_WATER } from '../../capacity/densestOverWater'
 import { volumeLitres } from '../../capacity/rules/ruleInput'
 import { exactGrams, readingGrams, type MassReading } from '../../quantity/mass'
 import { scaleAccuracyGrams } from '../../quantity/scale'
@@ -76,9 +77,8 @@ export function doubtReading(turn: Turn, reading: ScaleReading): void {
   }
 }
 
-// Common practice, from memory: hardly any liquid is loaded colder than -40 C, nor denser than one and a half times water.
+// Common practice, from memory: hardly any liquid is loaded colder.
 const COLDEST_LOADED_C = -40
-const DENSEST_OVER_WATER = 1.5
 
 function mostItCouldHold({ state, context }: Turn): number | null {
   const waterCapacity = state.stamp?.waterCapacity

@@ -17,7 +17,7 @@ const ms = (minutes: number, seconds = 0) => Date.parse(at(minutes, seconds))
  */
 const PLAN: RecoveryPlan = {
   refrigerant: 'R-410A', stopGrams: 66.06 * 453.59237, tareGrams: 12655, limitGrams: 17309, waterFullGrams: 12655 + 21636,
-  rule: 'water weight, 0.80 × WC', at: '2026-07-01T10:00:00.000-05:00',
+  rule: 'water weight', at: '2026-07-01T10:00:00.000-05:00',
 }
 
 describe('the stage of a filling', () => {
@@ -126,7 +126,7 @@ describe('the minutes to the stop', () => {
 describe('the words of the way', () => {
   it('round what may still go in down, and an excess up', () => {
     expect(wayWords(PLAN, lb(62.3), 'near', 6, 'lb')).toEqual({
-      head: '3.7\u00A0lb to go, about 6 min', line: 'Past 90 % of 38.1\u00A0lb, the limit by water weight, 0.80 × WC',
+      head: '3.7\u00A0lb to go, about 6 min', line: 'Past 90 % of 38.1\u00A0lb, the limit by water weight',
     })
     expect(wayWords(PLAN, lb(50.5), 'below', null, 'lb').head).toBe('15.5\u00A0lb to go')
     // 66.5 - 66.06 = 0.44 lb.
