@@ -14,6 +14,7 @@ import { kitContext, type KitAsking } from '~~/utils/kit/kitContext'
 import { codesOnTwo, ownerOfCode, tailOf, type KitEntry } from '~~/utils/kit/kitEntry'
 import { unpackCylinder } from '~~/utils/kit/packCylinder'
 import { normaliseLabelCode } from '~~/utils/label/code'
+import type { RecordedEntry } from '~~/utils/outbox/entry'
 import type { Catalogue } from '~~/utils/refrigerant/types'
 
 /** A cylinder as this device has it, and how many of its waiting events it could not be gone on with. */
@@ -27,6 +28,8 @@ export interface KitSources {
   catalogue: Catalogue
   /** Events of this person that wait on the device, in their order. */
   waiting: readonly CustodyEvent[]
+  /** Events of this person that were recorded from the device, and that the copy need not have yet. */
+  recorded: readonly RecordedEntry[]
   asking: KitAsking
 }
 
@@ -35,24 +38,34 @@ const UUID = /^[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}$/
 const MOST_ALIKE = 200
 
 /** Reads cylinders out of this device's copy, each with what waits on the device on top of it. */
-export async function kitReader({ box, firm, names, catalogue, waiting, asking }: KitSources) {
+export async function kitReader({ box, firm, names, catalogue, waiting, recorded, asking }: KitSources) {
   const context = (said: SaidByOthers, more: Partial<KitAsking> = {}) => kitContext(firm, names, catalogue, said, { ...asking, ...more })
   const touched = await withWaiting()
 
   async function withWaiting(): Promise<Map<string, OnDevice>> {
-    if (waiting.length === 0) return new Map()
+    const ids = [...new Set([...recorded.map(({ event }) => event), ...waiting].map(({ cylinderId }) => cylinderId))]
+    if (ids.length === 0) return new Map()
     // The fold brings the schemas of the events with it: only who has something waiting fetches it.
     const { continueFold } = await import('~~/utils/custody/continueFold')
-    const ids = [...new Set(waiting.map(({ cylinderId }) => cylinderId))]
     const kept = new Map((await box.byIds(ids)).map(({ id, packed }) => [id, unpackCylinder(packed)]))
-    return new Map(ids.map((id): [string, OnDevice] => [id, goneOn(kept.get(id) ?? initialState(id), continueFold)]))
+    return new Map(ids.flatMap((id): [string, OnDevice][] => {
+      const before = kept.get(id) ?? initialState(id)
+      const events = [...recordedAfter(before), ...waiting.filter(({ cylinderId }) => cylinderId === id)]
+      return events.length === 0 ? [] : [[id, goneOn(before, events, continueFold)]]
+    }))
   }
 
-  function goneOn(before: CylinderState, goOn: typeof continueFold): OnDevice {
-    const events = waiting.filter(({ cylinderId }) => cylinderId === before.id)
-    const recorded = events.map((event, index) => recordedNow(event, { seq: index, version: before.version + index }, asking))
-    const folded = goOn(before, recorded, context(NOTHING_SAID))
+  function goneOn(before: CylinderState, events: readonly CustodyEvent[], goOn: typeof continueFold): OnDevice {
+    const asRecorded = events.map((event, index) => recordedNow(event, { seq: index, version: before.version + index }, asking))
+    const folded = goOn(before, asRecorded, context(NOTHING_SAID))
     return folded ? { state: folded.state, waitingNotIn: 0 } : { state: before, waitingNotIn: events.length }
+  }
+
+  /** What was recorded from here straight after the copy's last event of a cylinder. */
+  function recordedAfter({ id, version }: CylinderState): CustodyEvent[] {
+    const later = recorded.filter(entry => entry.event.cylinderId === id && entry.version > version).sort((a, b) => a.version - b.version)
+    // Where another's came between them, it takes that one to know what then holds.
+    return later.filter((entry, index) => entry.version === version + 1 + index).map(({ event }) => event)
   }
 
   const stateOf = ({ id, packed }: KitEntry) => touched.get(id)?.state ?? unpackCylinder(packed)

@@ -7,7 +7,9 @@ import type { CustodyLogAnswer, CylinderView, FleetAnswer, FoldInput } from '~~/
 import type { KitFirm } from '~~/utils/contract/kit'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CylinderState } from '~~/utils/custody/state'
-import { isWaiting } from '~~/utils/outbox/entry'
+
+/** What was recorded so long before the copy last followed may have come too late for its question. */
+const MAY_HAVE_MISSED_MS = 60_000
 
 /** What is asked of a route, each value as its text. */
 export type Asked = Readonly<Record<string, string>>
@@ -67,9 +69,12 @@ export async function offlineAnswer(path: string, query?: Readonly<Record<string
 
 async function answeringFrom(found: NonNullable<Awaited<ReturnType<ReturnType<typeof useKitStore>['reading']>>>): Promise<Answering> {
   const [{ CATALOGUE }, { kitReader }] = await Promise.all([import('~~/utils/refrigerant/allRefrigerants'), import('~~/composables/kitReader')])
+  const outbox = useOutboxStore()
+  await outbox.read()
   const nowMs = Date.now()
-  const waiting = useOutboxStore().entries.filter(isWaiting).map(({ event }) => event)
-  const reader = await kitReader({ ...found, catalogue: CATALOGUE, waiting, asking: { nowMs, access: useSessionStore().access } })
+  const waiting = outbox.waiting.map(({ event }) => event)
+  const recorded = (await outbox.recordedLately()).filter(({ recordedAt }) => recordedAt > found.about.followedAt - MAY_HAVE_MISSED_MS)
+  const reader = await kitReader({ ...found, catalogue: CATALOGUE, waiting, recorded, asking: { nowMs, access: useSessionStore().access } })
   return { reader, firm: found.firm, count: useKitStore().countHaving, isWhole: found.about.next === null, of: found.about.followedAt, nowMs }
 }
 

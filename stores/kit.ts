@@ -8,6 +8,8 @@ import { kitEntry } from '~~/utils/kit/kitEntry'
 import { KIT_FORM } from '~~/utils/kit/packCylinder'
 
 const FOLLOW_EVERY_MS = 3 * 60_000
+/** Where the network takes an answer and brings none, it is asked again later. */
+const PATIENCE_MS = 60_000
 const LOCK = 'collarbook-kit'
 
 /** The copy of the firm on this device: the whole fleet and what is needed to judge it, following the server. */
@@ -129,7 +131,7 @@ export const useKitStore = defineStore('kit', () => {
 async function ask(before: KitAbout | null): Promise<KitAnswer | null> {
   const query = before === null ? {} : { since: before.seq, mark: before.mark, firm: before.firmTag, ...before.next === null ? {} : { after: before.next } }
   try {
-    return await $fetch<KitAnswer>('/api/kit', { query, retry: false })
+    return await $fetch<KitAnswer>('/api/kit', { query, retry: false, timeout: PATIENCE_MS })
   }
   catch {
     return null

@@ -8,7 +8,7 @@ import type { CylinderView, EventsAnswer } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
 import { waitAfter } from '~~/utils/outbox/backOff'
-import { inOrder, isWaiting, type DroppedEntry, type OutboxEntry } from '~~/utils/outbox/entry'
+import { inOrder, isWaiting, type DroppedEntry, type OutboxEntry, type RecordedEntry } from '~~/utils/outbox/entry'
 import type { Pause } from '~~/utils/outbox/settlement'
 import { OUTBOX_WAITS_KEY } from '~~/utils/outbox/waitKey'
 
@@ -248,6 +248,12 @@ export const useOutboxStore = defineStore('outbox', () => {
     return new Blob([JSON.stringify(content, null, 2)], { type: 'application/json' })
   }
 
+  /** What of this person's events was recorded last from this device. */
+  async function recordedLately(): Promise<RecordedEntry[]> {
+    const recorded = await machine().then(({ box }) => box.recorded()).catch(() => [])
+    return recorded.filter(entry => entry.personId === personId.value)
+  }
+
   /** The events on a cylinder that wait, in order. */
   function pendingOf(cylinderId: string): CustodyEvent[] {
     return waiting.value.filter(({ event }) => event.cylinderId === cylinderId).map(({ event }) => event)
@@ -255,7 +261,7 @@ export const useOutboxStore = defineStore('outbox', () => {
 
   return {
     entries, waiting, refused, dropped, oldestAt, sealed, pause, busy, arrived,
-    start, attend, read, put, number, sendNow, flush, takeOut, drop, replaced, loadDropped, exportFile, pendingOf,
+    start, attend, read, put, number, sendNow, flush, takeOut, drop, replaced, loadDropped, exportFile, recordedLately, pendingOf,
   }
 })
 

@@ -10,25 +10,29 @@ import { did, filled, FOLD_CONTEXT, recorded, registered, type Told } from './cu
 import { fillFleet, type FleetSetting } from './fleetRows'
 
 const MINUTE = 60_000
+const ROWS_AT_ONCE = 500
 const REFRIGERANTS = ['R-410A', 'R-22', 'R-134a', 'R-404A', 'R-407C', 'R-32'] as const
 const STEEL = [
   { spec: 'DOT-4BA', psig: 400, tares: 27, capacity: 47.7 }, { spec: 'DOT-4BA', psig: 260, tares: 17, capacity: 26.2 }, { spec: 'DOT-4BW', psig: 400, tares: 55, capacity: 123 },
 ] as const
 
-/** A fleet in the cache of a server that runs, each cylinder with a state that the fold has made of its life. */
-export async function fillKitFleet(databaseFile: string, count: number, setting: Omit<FleetSetting, 'ruledBy' | 'nowMs'>): Promise<void> {
+/** Puts a fleet into the cache of a server that runs, each cylinder with a state that the fold has made of its life; answers the states. */
+export async function fillKitFleet(databaseFile: string, count: number, setting: Omit<FleetSetting, 'ruledBy' | 'nowMs'>): Promise<CylinderState[]> {
   await fillFleet(databaseFile, count, setting)
   const db = await openDatabase(`file:${databaseFile}`)
   try {
     const { rows } = await db.readClient.execute('SELECT id FROM cylinders WHERE state = \'{}\' ORDER BY id')
-    for (let from = 0; from < rows.length; from += 500) {
+    const states: CylinderState[] = []
+    for (let from = 0; from < rows.length; from += ROWS_AT_ONCE) {
       // Connections that the server closes meanwhile are to be noticed.
       await nextTurn()
-      await db.write(rows.slice(from, from + 500).map((row, index) => {
-        const id = randomId(`${from + index} cylinder`)
-        return { sql: 'UPDATE cylinders SET id = ?, state = ? WHERE id = ?', args: [id, JSON.stringify(lifeOf(id, from + index, setting)), row[0] as string] }
-      }))
+      const some = rows.slice(from, from + ROWS_AT_ONCE).map((row, index) => ({ before: row[0] as string, state: lifeOf(randomId(`${from + index} cylinder`), from + index, setting) }))
+      await db.write(some.map(({ before, state }) => ({
+        sql: 'UPDATE cylinders SET id = ?, state = ? WHERE id = ?', args: [state.id, JSON.stringify(state), before],
+      })))
+      states.push(...some.map(({ state }) => state))
     }
+    return states
   }
   finally {
     db.close()
@@ -50,7 +54,7 @@ function lifeOf(id: string, index: number, { places, holders, owner }: Omit<Flee
         serial: `${'ABCDEFGHKMT'[dice(11, 4)]}${10_000_000 + dice(89_999_999, 5)}`, maker: ['QZT', 'VHX', 'ORL'][dice(3, 6)]!, spec: steel.spec, servicePressurePsig: steel.psig,
         tareWeight: tare, waterCapacity: lb(steel.capacity), madeMonth: `${2014 + dice(11, 7)}-${String(1 + dice(12, 8)).padStart(2, '0')}`, flammableMarked: dice(5, 9) === 0,
       },
-      marks: dice(3, 10) === 0 ? [{ month: `${2020 + dice(5, 11)}-0${1 + dice(9, 12)}`, method: 'volumetric', rin: ['Z987', 'A123'][dice(2, 13)]! }] : [],
+      marks: dice(3, 10) === 0 ? [{ month: `${2020 + dice(5, 11)}-0${1 + dice(9, 12)}`, rin: ['Z987', 'A123'][dice(2, 13)]! }] : [],
       contents: 'evacuated', gross: tare,
     }, { placeId: places[0]!, ...at(dice(200, 14), 15) }),
     did('labelled', { code: labelCode(index) }, at(201, 16)),

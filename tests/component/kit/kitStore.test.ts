@@ -5,7 +5,9 @@ import { createPinia, setActivePinia } from 'pinia'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { kitBox } from '~~/composables/kitBox'
 import { offlineAnswer } from '~~/composables/offlineAnswers'
+import { outboxBox } from '~~/composables/outboxBox'
 import { useKitStore } from '~~/stores/kit'
+import { useOutboxStore } from '~~/stores/outbox'
 import { useSessionStore } from '~~/stores/session'
 import type { KitAnswer } from '~~/utils/contract/kit'
 import type { CylinderView, FleetAnswer, FoldInput } from '~~/utils/contract/custody'
@@ -188,5 +190,59 @@ describe('an answer from the copy', () => {
     expect(items.map(({ id }) => id)).toEqual([ONE, THREE])
     const view = await offlineAnswer('/api/cylinders/7K3M9Q2TX') as CylinderView
     expect([view.id, view.findings.map(({ code }) => code)]).toEqual([ONE, expect.arrayContaining(['code-on-two'])])
+  })
+})
+
+describe('what waits on the phone', () => {
+  const at = (minutes: number) => new Date(Date.UTC(2026, 6, 2) + minutes * 60_000).toISOString()
+  const toVan = (cylinderId: string, id: string) => ({
+    id, cylinderId, kind: 'moved' as const, occurredAt: at(1), deviceId: 'phone-1', deviceSeq: 0, details: { toPlaceId: VAN, toHolderId: TECHNICIAN },
+  })
+  const EVENT = '0198f000-0000-7000-8000-0000000000e5'
+
+  beforeEach(async () => {
+    answers = [kitAnswerOf([inShop, inVan], { anew: true })]
+    await visit().start()
+    vi.stubGlobal('navigator', Object.create(navigator, { onLine: { value: false } }))
+  })
+  afterEach(async () => {
+    vi.unstubAllGlobals()
+    const box = outboxBox()
+    await box.giveBack((await box.all()).map(({ id }) => id))
+    await box.close()
+  })
+
+  it('is in every answer of the copy: the cylinder itself, what is held, what stands in the van', async () => {
+    await useOutboxStore().put([toVan(ONE, EVENT)])
+    expect(await offlineAnswer(`/api/cylinders/${ONE}`)).toMatchObject({ version: inShop.version + 1, place: { name: 'Van 7' }, holder: { name: 'Tina' } })
+    const held = await offlineAnswer('/api/cylinders', { holder: TECHNICIAN, limit: 200 }) as FleetAnswer
+    expect(held.items.map(({ id }) => id)).toEqual([ONE, TWO])
+    expect((await offlineAnswer('/api/cylinders', { place: SHOP }) as FleetAnswer).items).toEqual([])
+    expect((await offlineAnswer(`/api/vans/${VAN}`) as VanAnswer).aboard.map(({ id }) => id)).toEqual([ONE, TWO])
+  })
+
+  it('is said not to be in it where it takes the whole log to know', async () => {
+    await useOutboxStore().put([{ ...toVan(ONE, EVENT), kind: 'corrected', details: { eventId: EVENT, reason: 'a slip' } } as never])
+    expect(await offlineAnswer(`/api/cylinders/${ONE}`)).toMatchObject({ version: inShop.version, place: { name: 'North shop' }, waitingNotIn: 1 })
+  })
+
+  it('is a cylinder of its own where it was registered without the server', async () => {
+    await useOutboxStore().put([
+      { ...toVan(THREE, EVENT), kind: 'registered', placeId: VAN, details: { ...registered().details } } as never,
+    ])
+    expect(await offlineAnswer(`/api/cylinders/${THREE}`)).toMatchObject({ id: THREE, place: { name: 'Van 7' }, stamp: { serial: 'A1001' } })
+    expect((await offlineAnswer('/api/cylinders', { q: '1001' }) as FleetAnswer).items.map(({ id }) => id)).toContain(THREE)
+  })
+
+  it('stays in the answer once it is recorded, until the copy has followed', async () => {
+    const outbox = useOutboxStore()
+    const [kept] = await outbox.put([toVan(ONE, EVENT)])
+    const box = outboxBox()
+    const sent = await box.all()
+    await box.settle(sent, { recorded: [{ id: kept!.id, version: inShop.version + 1, cylinderId: ONE }], refused: [], kept: [], pause: null, split: false }, Date.now())
+    await box.close()
+    await outbox.attend()
+    expect(outbox.waiting).toEqual([])
+    expect(await offlineAnswer(`/api/cylinders/${ONE}`)).toMatchObject({ version: inShop.version + 1, place: { name: 'Van 7' } })
   })
 })
