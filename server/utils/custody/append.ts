@@ -1,4 +1,4 @@
-import { setImmediate as nextTurn } from 'node:timers/promises'
+import { setImmediate as nextTurn, setTimeout as sleep } from 'node:timers/promises'
 import { requestUnits } from '../../../utils/custody/requestUnits'
 import type { EventResult } from '../../../utils/contract/custody'
 import type { Database } from '../database/database'
@@ -13,6 +13,8 @@ import { sharedCodeRows } from './sharedCodeRows'
 
 /** Most events in one commit. */
 const GROUP_EVENTS = 200
+/** How long is waited for as many requests as usually come together. Units: ms. */
+const LONGEST_GATHER_MS = 4
 /** How often a group is computed again after another process wrote first. */
 const RACE_RETRIES = 20
 
@@ -31,7 +33,13 @@ interface Waiting extends ReadPosting {
 
 const NOBODY: Appended['standing'] = new Map()
 
-const queues = new WeakMap<Database, Waiting[]>()
+interface Queue {
+  waiting: Waiting[]
+  /** How many requests came together of late. */
+  usual: number
+}
+
+const queues = new WeakMap<Database, Queue>()
 
 /**
  * The only writer of the custody log.
@@ -43,11 +51,12 @@ const queues = new WeakMap<Database, Waiting[]>()
  * nothing of the posting is stored, or it was stored and sending it again answers `duplicate`.
  */
 export function appendTelling(db: Database, posting: Posting): Promise<Appended> {
-  const waiting = queues.get(db) ?? []
-  queues.set(db, waiting)
+  const queue = queues.get(db) ?? { waiting: [], usual: 1 }
+  queues.set(db, queue)
+  const { waiting } = queue
   return new Promise((done, failed) => {
     waiting.push({ posting, parsed: posting.events.map(parsePost), units: requestUnits(posting.events), done, failed })
-    if (waiting.length === 1) void db.exclusive(commit => drain(db, waiting, commit))
+    if (waiting.length === 1) void db.exclusive(commit => drain(db, queue, commit))
   })
 }
 
@@ -57,14 +66,25 @@ export async function append(db: Database, posting: Posting): Promise<EventResul
 }
 
 /** Takes what is waiting now; what comes meanwhile asks for a turn of its own. */
-async function drain(db: Database, waiting: Waiting[], commit: Database['write']): Promise<void> {
-  // Requests that are being read share the commit: it waits for as long as a turn of the event loop brings another.
+async function drain(db: Database, queue: Queue, commit: Database['write']): Promise<void> {
+  await gather(queue)
+  const taken = queue.waiting.splice(0)
+  for (const part of groupsOf(taken)) await commitOrSplit(db, part, commit)
+}
+
+/**
+ * Requests that come together share the commit. Those that are being read do: it waits for as long as a turn of the
+ * event loop brings another. So do those of everybody who was answered by the last commit and posts again at once.
+ */
+async function gather(queue: Queue): Promise<void> {
+  const { waiting } = queue
   for (let known = 0; known < waiting.length && known < GROUP_EVENTS;) {
     known = waiting.length
     await nextTurn()
   }
-  const taken = waiting.splice(0)
-  for (const part of groupsOf(taken)) await commitOrSplit(db, part, commit)
+  for (let waited = 0; waited < LONGEST_GATHER_MS && waiting.length < queue.usual; waited++) await sleep(1)
+  // Where fewer come by and by, a lone one soon waits for nobody.
+  queue.usual = Math.max(waiting.length, Math.floor(queue.usual * 0.9))
 }
 
 function groupsOf(taken: Waiting[]): Waiting[][] {
