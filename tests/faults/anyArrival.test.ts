@@ -9,9 +9,8 @@ import { openLogDatabase, record, type LogDatabase } from '../helpers/logDatabas
 import { lb, stampOf } from '../helpers/stamps'
 import { seededChance, type Chance } from '../helpers/tampering'
 
-const PHONES = 50
-/** In full a yard of many phones as well. */
-const SIZES = [...seeds(IN_FULL ? 20 : 3).map(seed => [PHONES, seed] as const), ...(IN_FULL ? [[500, 21] as const] : [])]
+const PHONES = IN_FULL ? 500 : 80
+const SIZES = seeds(IN_FULL ? 20 : 3).map(seed => [PHONES, seed] as const)
 
 const EVENTS_OF_A_PHONE = 20
 /** Of a hundred events so many are sent a second time. */
