@@ -11,6 +11,7 @@ import { LABELLED } from '~~/utils/custody/draft/labelled'
 import { LOST } from '~~/utils/custody/draft/lost'
 import { FOUND, MISSING } from '~~/utils/custody/draft/missing'
 import { MOVED } from '~~/utils/custody/draft/moved'
+import { EXCHANGE_HALF, TRANSFER_HALF } from '~~/utils/custody/draft/pairHalf'
 import { REGISTERED } from '~~/utils/custody/draft/registered'
 import { RECEIVED, RETURNED } from '~~/utils/custody/draft/received'
 import { RETIRED } from '~~/utils/custody/draft/retired'
@@ -21,6 +22,7 @@ import type { CautionTopic } from '~~/utils/document/cautions'
 import CheckedForm from './CheckedForm.vue'
 import DrawnForm from './DrawnForm.vue'
 import EmptiedForm from './EmptiedForm.vue'
+import ExchangeHalfForm from './ExchangeHalfForm.vue'
 import FilledForm from './FilledForm.vue'
 import FoundForm from './FoundForm.vue'
 import HandedOverForm from './HandedOverForm.vue'
@@ -35,6 +37,7 @@ import RegisteredForm from './RegisteredForm.vue'
 import ReleasedForm from './ReleasedForm.vue'
 import RetiredForm from './RetiredForm.vue'
 import ReturnedForm from './ReturnedForm.vue'
+import TransferHalfForm from './TransferHalfForm.vue'
 import WeighedForm from './WeighedForm.vue'
 
 export interface ActForm {
@@ -70,9 +73,16 @@ const ACT_FORMS = {
   'retired': { component: RetiredForm, draft: RETIRED, title: 'Retired', verb: 'Retire it', cautions: ['handling'] },
 } satisfies Record<FormKind, ActForm>
 
+/** Forms that only mend: what they write is recorded elsewhere. */
+const MENDING_FORMS: Partial<Record<EventKind, Pick<ActForm, 'component' | 'draft'>>> = {
+  registered: { component: RegisteredForm, draft: REGISTERED },
+  transferred: { component: TransferHalfForm, draft: TRANSFER_HALF },
+  exchanged: { component: ExchangeHalfForm, draft: EXCHANGE_HALF },
+}
+
 /** The form that mends a recorded event of a kind, or null where it can only be taken out and recorded anew. */
 export function correctionFormOf(kind: EventKind): Pick<ActForm, 'component' | 'draft'> | null {
-  return kind === 'registered' ? { component: RegisteredForm, draft: REGISTERED } : formOf(kind)
+  return MENDING_FORMS[kind] ?? formOf(kind)
 }
 
 /** The form of a kind, or null where it has none of this sort. */
