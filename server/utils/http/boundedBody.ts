@@ -1,4 +1,4 @@
-import type { Readable } from 'node:stream'
+import type { IncomingMessage } from 'node:http'
 import { getRequestHeader, type H3Event } from 'h3'
 import { problem } from './problem'
 
@@ -28,7 +28,7 @@ export function tooLarge(largest: number) {
   return problem(413, 'Too large', `A body may have at most ${most}.`)
 }
 
-function readBytes(request: Readable, largest: number): Promise<Buffer> {
+function readBytes(request: IncomingMessage, largest: number): Promise<Buffer> {
   return new Promise((done, failed) => {
     const chunks: Buffer[] = []
     let size = 0
