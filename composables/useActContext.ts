@@ -9,7 +9,7 @@ import type { PeopleAnswer } from '~~/utils/contract/people'
 import type { FirmsAnswer, PlacesAnswer } from '~~/utils/contract/places'
 import type { RefrigerantsAnswer } from '~~/utils/contract/refrigerants'
 import type { DraftContext } from '~~/utils/custody/draft/draft'
-import { lastGross } from '~~/utils/custody/draft/lastGross'
+import { lastGross, lastGrossByNet } from '~~/utils/custody/draft/lastGross'
 import { monthOfInstant } from '~~/utils/quantity/month'
 
 const LINES_LOOKED_AT = 20
@@ -34,7 +34,7 @@ export function useActContext(view: () => CylinderView | null | undefined, asked
       rules.load(),
     ])
     return {
-      log: log.items,
+      log: log.isWithServer ? null : log.items,
       lists: {
         places: places.items.map(({ id, name, kind, firmId, technicianId }) => ({ id, name, kind, firmId, technicianId })),
         firms: firms.items,
@@ -57,7 +57,7 @@ export function useActContext(view: () => CylinderView | null | undefined, asked
       thisMonth: monthOfInstant(now.value, rules.timeZone),
       places: request.data.value.lists.places,
       asked: asked(),
-      lastGross: lastGross(cylinder, request.data.value.log),
+      lastGross: request.data.value.log ? lastGross(cylinder, request.data.value.log) : lastGrossByNet(cylinder, preferences.unit),
       scaleId: request.data.value.lists.scales.find(scale => scale.active && scale.id === preferences.lastScaleId)?.id,
     }
   })
