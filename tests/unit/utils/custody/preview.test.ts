@@ -43,4 +43,19 @@ describe('a draft', () => {
     expect(preview(told, mend as AnyCustodyEvent, VIEW_CONTEXT).changes.map(({ version, before, now }) => [version, before.netGrams, now.netGrams])).toEqual([[2, 8_000, 7_000], [3, 8_000, 7_000]])
     expect(preview(told, draft('R-22', 21), VIEW_CONTEXT).changes).toEqual([])
   })
+
+  it('is judged from the state alone as from the events that made it', () => {
+    const { state } = fold(events, FOLD_CONTEXT)
+    for (const each of [draft('R-22', 29), draft('R-22', 27), draft('R-134a', 22)]) {
+      const [byState, byEvents] = [preview(state, each, VIEW_CONTEXT), preview(events, each, VIEW_CONTEXT)]
+      expect(byState.findings).toEqual(byEvents.findings)
+      expect(byState.view).toEqual(byEvents.view)
+    }
+  })
+
+  it('is left to the server from the state alone where it takes the whole log to know', () => {
+    const { state } = fold(events, FOLD_CONTEXT)
+    const mend = { id: idOf(50), cylinderId: CYLINDER, kind: 'corrected', occurredAt: new Date(START + DAY).toISOString(), deviceId: 'phone-1', deviceSeq: 9, details: { eventId: idOf(1), reason: 'a slip' } }
+    expect(preview(state, mend as AnyCustodyEvent, VIEW_CONTEXT)).toMatchObject({ findings: [], changes: [], view: { version: 2 } })
+  })
 })
