@@ -8,9 +8,11 @@ import { launchBrowser, listenForErrors } from '../helpers/browser'
 import { filmOfCode } from '../helpers/fakeCamera'
 import { addMember, type Member } from '../helpers/firm'
 import { cylinderNow, eventOf, openShop, posted, registered, type Shop } from '../helpers/fleet'
+import { firstVisit } from '../helpers/firstVisit'
+import { openFrontDoor } from '../helpers/frontDoor'
 import { lb } from '../helpers/stamps'
 import { startServer, type TestServer } from '../helpers/server'
-import { visit } from '../helpers/visit'
+import { PHONE, visit } from '../helpers/visit'
 
 let server: TestServer
 let shop: Shop
@@ -32,13 +34,14 @@ afterAll(async () => {
   rmSync(folder, { recursive: true, force: true })
 })
 
-it('two cylinders go from phone to phone by a scan, nothing that is found is hidden, and the first phone reads the answer', async () => {
+it('two cylinders go from phone to phone by a scan, the second without signal; nothing that is found is hidden, and the first reads the answer', async () => {
   const sound = await registered(shop)
   // TW 27.5 and a limit of 38.08 lb: at 70 lb it is overfilled.
   const overfilled = await registered(shop, { gross: lb(70) })
   await posted(shop.warehouse.client, [sound, overfilled].map(({ id }) => ({ ...eventOf(id, 'handed-over'), details: { toHolderId: shop.technician.id } })))
 
   const first = await visit(browser, shop.technician.client)
+  const said = listenForErrors(first)
   const giver = await first.newPage()
   await giver.goto(`${server.baseUrl}/hand-over`, { waitUntil: 'networkidle' })
   for (const { labelCode } of [sound, overfilled]) await giver.getByLabel(formatLabelCode(labelCode!)).check()
@@ -47,10 +50,13 @@ it('two cylinders go from phone to phone by a scan, nothing that is found is hid
   filmOfCode(await giver.getByText(/^CYLINDERS1\/O\//).innerText(), join(folder, 'offer.y4m'))
 
   camera = await launchBrowser({ cameraFilm: join(folder, 'offer.y4m') })
-  const context = await visit(camera, second.client, { permissions: ['camera'] })
-  const said = listenForErrors(context)
+  const door = await openFrontDoor(server.baseUrl)
+  const context = await camera.newContext({ viewport: PHONE, permissions: ['camera'] })
+  await context.addCookies([...second.client.cookies].map(([name, value]) => ({ name, value, url: door.baseUrl })))
+  await firstVisit(context, door.baseUrl)
+  door.state = 'cut'
   const taker = await context.newPage()
-  await taker.goto(`${server.baseUrl}/scan`)
+  await taker.goto(`${door.baseUrl}/scan`)
   await taker.getByRole('status').filter({ hasText: 'Tina hands over 2 cylinders.' }).waitFor({ timeout: 30_000 })
   const offered = taker.getByRole('list', { name: 'Cylinders' }).getByRole('listitem')
   await offered.filter({ hasText: formatLabelCode(overfilled.labelCode!) }).getByText(/^Stop: /).first().waitFor()
@@ -58,7 +64,7 @@ it('two cylinders go from phone to phone by a scan, nothing that is found is hid
   await taker.getByRole('status').filter({ hasText: 'You have what Tina handed over.' }).waitFor()
   await taker.getByText('As letters, for a phone without a camera').click()
   const answer = await taker.getByText(/^CYLINDERS1\/A\//).innerText()
-  for (const { id } of [sound, overfilled]) expect((await cylinderNow(shop.manager.client, id)).holder).toMatchObject({ id: second.id })
+  await taker.getByText('You have it now, saved on this phone').nth(1).waitFor()
 
   await giver.getByText('Type or paste the other phone’s letters').click()
   await giver.getByLabel('Its letters').fill(answer)
@@ -67,8 +73,16 @@ it('two cylinders go from phone to phone by a scan, nothing that is found is hid
   await giver.getByRole('list', { name: 'Offered' }).getByText('gone from you').nth(1).waitFor()
 
   // Scanned once more it is not recorded once more.
-  await taker.goto(`${server.baseUrl}/scan`)
+  await taker.goto(`${door.baseUrl}/scan`)
   await taker.getByText('You hold it already.').nth(1).waitFor({ timeout: 30_000 })
   expect(await taker.getByRole('button', { name: /now$/ }).count()).toBe(0)
+  expect((await cylinderNow(shop.manager.client, sound.id)).holder).toMatchObject({ id: shop.technician.id })
+  door.state = 'open'
+  await taker.goto(`${door.baseUrl}/van`)
+  for (const { id } of [sound, overfilled]) {
+    await expect.poll(async () => (await cylinderNow(shop.manager.client, id)).holder?.id, { timeout: 25_000 }).toBe(second.id)
+  }
   expect(said).toEqual([])
+  await Promise.all([context.close(), first.close()])
+  await door.close()
 })

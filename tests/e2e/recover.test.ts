@@ -3,9 +3,11 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { CustodyLogAnswer } from '../../utils/contract/custody'
 import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser, listenForErrors } from '../helpers/browser'
+import { firstVisit } from '../helpers/firstVisit'
 import { cylinderNow, openShop, registered, type Shop } from '../helpers/fleet'
+import { openFrontDoor } from '../helpers/frontDoor'
 import { startServer, type TestServer } from '../helpers/server'
-import { visit } from '../helpers/visit'
+import { PHONE, visit } from '../helpers/visit'
 
 let server: TestServer
 let shop: Shop
@@ -134,5 +136,42 @@ describe('a recovery beside the scale', () => {
     await other.goto(`${server.baseUrl}/scan`, { waitUntil: 'networkidle' })
     expect(await other.getByText('Go on with the recovery').count()).toBe(0)
     await context.close()
+  })
+  it('begins, opens again and ends without signal, with the tag\'s text, and is recorded once there is signal', async () => {
+    const cylinder = await registered(shop)
+    const door = await openFrontDoor(server.baseUrl)
+    const context = await browser.newContext({ viewport: PHONE })
+    await context.addCookies([...shop.manager.client.cookies].map(([name, value]) => ({ name, value, url: door.baseUrl })))
+    await firstVisit(context, door.baseUrl)
+    door.state = 'cut'
+
+    const address = `${door.baseUrl}/c/${cylinder.labelCode!.toLowerCase()}/recover`
+    const before = await context.newPage()
+    await before.goto(address)
+    await before.getByRole('button', { name: 'As last weighed: 40.0 lb' }).click()
+    await before.getByRole('button', { name: 'Start filling' }).click()
+    await press(before, '50')
+    await before.getByRole('button', { name: 'Note 50.0 lb' }).click()
+    await before.getByText('1 reading, kept').waitFor()
+    await before.close()
+
+    const page = await context.newPage()
+    await page.goto(address)
+    await page.getByRole('button', { name: 'Take back 50.0 lb' }).waitFor()
+    await page.getByRole('button', { name: 'Stopped? Hoses off' }).click()
+    await page.getByRole('button', { name: 'Hoses are off: weigh it' }).click()
+    await press(page, '49.9')
+    await page.getByRole('button', { name: 'Take 49.9 lb' }).click()
+    await page.getByRole('button', { name: 'Record the recovery' }).click()
+    await page.getByText('Saved on this phone', { exact: true }).first().waitFor()
+    await page.getByRole('list', { name: 'Lines of the tag' }).getByText('Net 22.4 lb (10.16 kg)').waitFor()
+    expect((await cylinderNow(shop.manager.client, cylinder.id)).contents.netGrams).toBe(5670)
+
+    door.state = 'open'
+    await page.goto(`${door.baseUrl}/scan`)
+    // 49.9 lb and 27.5 lb in whole grams: 22,634 less 12,474.
+    await expect.poll(async () => (await cylinderNow(shop.manager.client, cylinder.id)).contents.netGrams, { timeout: 25_000 }).toBe(10160)
+    await context.close()
+    await door.close()
   })
 })
