@@ -1,5 +1,5 @@
 import type { KitReader } from '~~/composables/kitReader'
-import { offlineLists } from '~~/composables/offlineLists'
+import { offlineLists, saturation } from '~~/composables/offlineLists'
 import { useKitStore } from '~~/stores/kit'
 import { useOutboxStore } from '~~/stores/outbox'
 import { useSessionStore } from '~~/stores/session'
@@ -87,6 +87,7 @@ function routeOf(path: string): Route | null {
     const answer = OF_CYLINDER[part ?? '']
     return answer ? async (answering, asked) => answer(await theCylinder(answering, decodeURIComponent(reference)), answering, asked) : null
   }
+  if (collection === 'refrigerants' && reference !== undefined && part === 'saturation') return (_, asked) => saturation(decodeURIComponent(reference), asked)
   if (part !== undefined) return null
   if (collection === 'cylinders') return someCylinders
   return offlineLists(collection ?? '', reference ?? null)

@@ -2,12 +2,13 @@ import type { Answering, Asked } from '~~/composables/offlineAnswers'
 import type { PeopleAnswer } from '~~/utils/contract/people'
 import type { Firm, FirmsAnswer, Place, PlacesAnswer } from '~~/utils/contract/places'
 import type { PolicyAnswer } from '~~/utils/contract/policy'
-import type { RefrigerantsAnswer } from '~~/utils/contract/refrigerants'
+import type { RefrigerantsAnswer, SaturationAnswer } from '~~/utils/contract/refrigerants'
 import type { ScalesAnswer } from '~~/utils/contract/scales'
 import type { VanAnswer } from '~~/utils/contract/vans'
 import { DEFAULT_FILL_POLICY } from '~~/utils/capacity/types'
 import { isGivenAway } from '~~/utils/custody/lifecycle'
 import { kitNames } from '~~/utils/kit/kitContext'
+import { asListed } from '~~/utils/refrigerant/designation'
 import { DEFAULT_RETEST_SETTINGS } from '~~/utils/requalification/retestSettings'
 
 type Answer = (answering: Answering, asked: Asked) => Promise<unknown | undefined>
@@ -54,6 +55,14 @@ async function refrigerants(): Promise<RefrigerantsAnswer> {
   const [{ CATALOGUE }, { catalogueLines }] = await Promise.all([import('~~/utils/refrigerant/allRefrigerants'), import('~~/utils/refrigerant/lines')])
   const { items, compositions } = catalogueLines(CATALOGUE)
   return { items, nextCursor: null, total: items.length, compositions }
+}
+
+/** Saturation of a refrigerant; where it is not in the catalogue, or outside of its table, the server says so. */
+export async function saturation(designation: string, { temperatureC }: Asked): Promise<SaturationAnswer | undefined> {
+  const [{ CATALOGUE }, { hasLiquidAt, saturationAt }] = await Promise.all([import('~~/utils/refrigerant/allRefrigerants'), import('~~/utils/refrigerant/saturation')])
+  const refrigerant = CATALOGUE.refrigerants.get(asListed(designation, CATALOGUE.refrigerants.keys()))
+  const celsius = Number(temperatureC ?? NaN)
+  return refrigerant && hasLiquidAt(refrigerant, celsius) ? saturationAt(refrigerant, celsius) : undefined
 }
 
 async function theVan(answering: Answering, id: string): Promise<VanAnswer | undefined> {

@@ -182,6 +182,14 @@ describe('an answer from the copy', () => {
     expect(await offlineAnswer('/api/cylinders', { holder: TECHNICIAN, asOf: '2026-07-01T00:00:00Z' })).toBeUndefined()
   })
 
+  it('gives the saturation that a check by pressure is judged by', async () => {
+    const { bubblePressureKPa } = await offlineAnswer('/api/refrigerants/r-22/saturation', { temperatureC: 25 }) as { bubblePressureKPa: number }
+    // 1,044 kPa absolute at 25 °C, from memory.
+    expect(Math.abs(bubblePressureKPa - 1_044)).toBeLessThan(5)
+    expect(await offlineAnswer('/api/refrigerants/R-22/saturation', { temperatureC: 150 })).toBeUndefined()
+    expect(await offlineAnswer('/api/refrigerants/none/saturation', { temperatureC: 25 })).toBeUndefined()
+  })
+
   it('says which cylinders share a code', async () => {
     const shared = stateOf(THREE, registered(), did('labelled', { code: '7K3M9Q2TX' }, { occurredAt: Date.UTC(2026, 8, 1) }))
     answers = [kitAnswerOf([shared], { seq: 2, firm: undefined })]
