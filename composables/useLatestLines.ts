@@ -20,7 +20,7 @@ export function useLatestLines() {
       api.get<CustodyLogAnswer>(`/api/cylinders/${encodeURIComponent(String(route.params.ref))}/events`, { limit: LINES_SHOWN }).catch(() => null),
       rules.load(),
     ])
-    return { lines: log?.items ?? [], total: log?.total ?? 0 }
+    return { lines: log?.items ?? [], total: log?.total ?? 0, isWithServer: log === null || log.isWithServer === true }
   }, { watch: [() => posting.recorded] })
 
   return { ready: request as PromiseLike<unknown>, latest: request.data }

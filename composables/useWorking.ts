@@ -20,7 +20,7 @@ export function useWorking(view: Ref<CylinderView | null | undefined>) {
     const lines: LogLine[] = []
     let cursor: string | null = null
     do {
-      const page: CustodyLogAnswer = await api.get<CustodyLogAnswer>(`/api/cylinders/${id}/events`, { limit: LINES_AT_ONCE, ...cursor === null ? {} : { cursor } })
+      const page: CustodyLogAnswer = await api.getFresh<CustodyLogAnswer>(`/api/cylinders/${id}/events`, { limit: LINES_AT_ONCE, ...cursor === null ? {} : { cursor } })
       lines.push(...page.items)
       cursor = page.nextCursor
     } while (cursor !== null)
