@@ -5,6 +5,7 @@ import type { ReadReached } from '../recovery/reachedDraft'
 import { micronsFromMmHg } from '../quantity/vacuum'
 import type { RecoveryPlan } from './plan'
 import type { WayReading } from './readings'
+import { fillStage, isStop } from './stage'
 
 /** The steps of a recovery beside the scale, in their order. */
 export const RECOVERY_STEPS = ['before', 'filling', 'hoses', 'weigh'] as const
@@ -45,9 +46,10 @@ export function lastGrossOf(course: Pick<RecoveryCourse, 'onTheWay' | 'grossBefo
 }
 
 /** What keeps filling from beginning, in a sentence; null where it may begin. */
-export function notReadyBecause(course: RecoveryCourse, plan: RecoveryPlan | null): string | null {
+export function notReadyBecause(course: Pick<RecoveryCourse, 'grossBefore'>, plan: RecoveryPlan | null): string | null {
   if (!plan) return 'Nothing may go into it as it stands.'
-  return course.grossBefore ? null : 'Weigh it before the hoses go on: take the last weight, or type what the scale shows.'
+  if (!course.grossBefore) return 'Weigh it before the hoses go on: take the last weight, or type what the scale shows.'
+  return isStop(fillStage(plan, course.grossBefore)) ? 'By the weight before it is full already: nothing may go in.' : null
 }
 
 /** What the system came down to, as it is recorded; undefined where nothing was read on a gauge. */
