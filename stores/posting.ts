@@ -163,6 +163,7 @@ export const usePostingStore = defineStore('posting', () => {
     try {
       if (taken.every(({ isQueued }) => isQueued) && await outbox.takeOut(taken.map(({ event }) => event.id))) {
         takenBackIds.value = taken.map(({ event }) => event.id)
+        await forgetPhotosOf(taken)
         recorded.value++
         say(taken.length === 1 ? 'Taken back before it was sent.' : `All ${taken.length} taken back before they were sent.`)
         return
@@ -190,6 +191,15 @@ export const usePostingStore = defineStore('posting', () => {
     catch (error) {
       say(notTakenBack(problemOf(error), 0, taken.length))
     }
+  }
+
+  /** No event names them any more. */
+  async function forgetPhotosOf(taken: readonly Posted[]) {
+    const ids = taken.flatMap(({ event }) => event.photoIds ?? [])
+    if (ids.length === 0) return
+    const { usePhotosStore } = await import('~~/stores/photos')
+    const photos = usePhotosStore()
+    for (const id of ids) await photos.remove(id)
   }
 
   /** These as the log has them; null where that is not known of one. */
