@@ -51,6 +51,21 @@ describe('a transfer by two scans', () => {
     expect(log.items[0]).toMatchObject({ kind: 'transferred', otherCylinder: { labelCode: from.labelCode } })
     await page.goto(`${server.baseUrl}/c/${into.labelCode!.toLowerCase()}/log`, { waitUntil: 'networkidle' })
     await page.getByRole('link', { name: `out of ${formatLabelCode(from.labelCode!)}` }).first().waitFor()
+
+    // What both halves say wrong is mended in both at once, each keeping its weights.
+    await page.goto(`${server.baseUrl}/c/${into.labelCode!.toLowerCase()}/act/corrected?event=${log.items[0]!.id}`, { waitUntil: 'networkidle' })
+    const both = page.getByRole('checkbox', { name: 'Correct the other half as well' })
+    expect(await both.count()).toBe(0)
+    await page.getByRole('combobox', { name: 'Refrigerant that went over' }).selectOption('R-407C')
+    await both.waitFor()
+    expect(await both.isChecked()).toBe(true)
+    await page.getByRole('textbox', { name: 'Why' }).fill('The tag says R-407C')
+    await page.getByRole('button', { name: 'Record the correction' }).click()
+    await page.getByText('Recorded: corrected, on both cylinders').first().waitFor()
+    for (const [{ id }, after] of [[from, 30], [into, 37.4]] as const) {
+      const { items } = (await shop.manager.client.get<CustodyLogAnswer>(`/api/cylinders/${id}/events`)).body
+      expect(items.find(({ kind }) => kind === 'transferred')!.instead).toMatchObject({ refrigerant: 'R-407C', grossAfter: { value: after } })
+    }
     expect(said).toEqual([])
     await context.close()
   })
