@@ -40,7 +40,7 @@ function readBytes(request: IncomingMessage, largest: number): Promise<Buffer> {
     request.once('end', () => done(Buffer.concat(chunks)))
     request.once('error', failed)
     request.once('close', () => {
-      if (!request.complete) failed(problem(400, 'Malformed', 'The body broke off.'))
+      if (!request.readableEnded) failed(problem(400, 'Malformed', 'The body broke off.'))
     })
   })
 }
