@@ -11,11 +11,11 @@ export const STAGE_STATUS: Record<FillStage, StatusKind> = { below: 'ok', near: 
  *
  * Rounding: what may still go in down, an excess up.
  *
- * @example { head: '3.7 lb to go, about 6 min', line: 'Past 90 % of 38.1 lb, the limit by water weight' }
+ * @example { head: '3.7 lb to go, about 6 min', line: 'Past 90 % of 38.1 lb, limit by water weight' }
  */
 export function wayWords(plan: RecoveryPlan, gross: MassReading, stage: FillStage, minutes: number | null, unit: MassUnit): { head: string, line: string } {
   const toGo = plan.stopGrams - exactGrams(gross)
-  const limit = `${formatMass(plan.limitGrams, unit, 'down')}, the limit by ${plan.rule}`
+  const limit = `${formatMass(plan.limitGrams, unit, 'down')}, limit by ${plan.rule}`
   if (stage === 'past') {
     return {
       head: `${formatMass(-toGo, unit, 'up')} past the stop`,

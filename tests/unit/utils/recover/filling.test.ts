@@ -126,7 +126,7 @@ describe('the minutes to the stop', () => {
 describe('the words of the way', () => {
   it('round what may still go in down, and an excess up', () => {
     expect(wayWords(PLAN, lb(62.3), 'near', 6, 'lb')).toEqual({
-      head: '3.7\u00A0lb to go, about 6 min', line: 'Past 90 % of 38.1\u00A0lb, the limit by water weight',
+      head: '3.7\u00A0lb to go, about 6 min', line: 'Past 90 % of 38.1\u00A0lb, limit by water weight',
     })
     expect(wayWords(PLAN, lb(50.5), 'below', null, 'lb').head).toBe('15.5\u00A0lb to go')
     // 66.5 - 66.06 = 0.44 lb.
