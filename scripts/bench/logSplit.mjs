@@ -40,7 +40,7 @@ async function stepsOfOne(texts, { db, parts, access }) {
   const judged = await timed('judge', () => postings.map((posting, index) => judgePosting({ posting, parsed: parsed[index], units: requestUnits(posting.events) }, state)))
   const rows = judged.flatMap(one => one.rows)
   if (rows.length !== texts.length) throw new Error(JSON.stringify(judged))
-  await timed('seal', () => parsed.forEach(([post], index) => sealedRow(post, postings[index], { version: rows[index].version - 1, hash: rows[index].prev_hash }, rows[index].seq)))
+  await timed('seal', () => parsed.forEach(([post], index) => sealedRow(post, postings[index], { version: rows[index].version - 1, hash: rows[index].prev_hash }, rows[index].seq, rows[index].supervisor_id)))
   const caches = await timed('fold', () => groupCaches(db, state))
   await timed('commit', () => db.write([...insertLogRows(rows, state), ...caches.statements]))
   await timed('answer', () => Promise.all(rows.map(async row => JSON.stringify(await cylinderViews(db, [row.cylinder_id], { access, nowMs: now }, caches.standing)))))
