@@ -14,7 +14,7 @@ import type { Refrigerant } from '~~/utils/refrigerant/types'
  */
 export function useSystemLevel(course: Ref<RecoveryCourse>) {
   const load = useCatalogue()
-  const isAsked = ref(course.value.onTheWay.reached !== undefined)
+  const isAsked = ref(false)
   const known = shallowRef<ReadonlyMap<string, Refrigerant>>(new Map())
 
   const answer = computed<EvacuationLevelAnswer | null>(() => {
@@ -35,12 +35,15 @@ export function useSystemLevel(course: Ref<RecoveryCourse>) {
   const verdict = computed(() => answer.value && read.value && judgeLevel(answer.value, read.value.reached, read.value.heldMinutes))
 
   async function ask() {
-    isAsked.value = true
     // Without the catalogue the refrigerant counts as not known, and the level as what asks for most.
     const loaded = await load().catch(() => null)
     if (loaded) known.value = loaded.catalogue.refrigerants
+    isAsked.value = true
   }
 
+  onMounted(() => {
+    if (course.value.onTheWay.reached) void ask()
+  })
   watch(() => JSON.stringify(read.value), () => {
     if (!read.value) return
     const { reached: _, ...others } = course.value.onTheWay
