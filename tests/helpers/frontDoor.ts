@@ -4,7 +4,7 @@ import type { AddressInfo } from 'node:net'
 /** What stands between a browser and the server, and what it does there. */
 export interface FrontDoor {
   baseUrl: string
-  /** `open` passes everything on, `silent` takes requests and never answers, `cut` ends the connection. */
+  /** `open` passes everything on, `silent` takes requests and does not answer, `cut` ends the connection; of those that wait too. */
   state: 'open' | 'silent' | 'cut'
   /** Texts that are handed out changed, by their path: what another build would serve. Null is not found. */
   changed: Map<string, ((text: string) => string) | null>
@@ -13,13 +13,23 @@ export interface FrontDoor {
 
 /** Opens a way to a server that can be blocked, and behind which another build may seem to stand. */
 export async function openFrontDoor(to: string): Promise<FrontDoor> {
+  let state: FrontDoor['state'] = 'open'
+  const unanswered = new Set<IncomingMessage>()
   const server: Server = createServer((asked, answer) => {
-    if (door.state === 'cut') asked.socket.destroy()
-    else if (door.state === 'open') pass(asked, answer)
+    if (state === 'cut') asked.socket.destroy()
+    else if (state === 'open') pass(asked, answer)
+    else unanswered.add(asked)
   })
   const door: FrontDoor = {
     baseUrl: '',
-    state: 'open',
+    get state() {
+      return state
+    },
+    set state(next) {
+      state = next
+      for (const asked of unanswered) asked.socket.destroy()
+      unanswered.clear()
+    },
     changed: new Map(),
     close: () => new Promise((done) => {
       server.close(() => done())
