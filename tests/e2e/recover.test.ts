@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { CustodyLogAnswer } from '../../utils/contract/custody'
 import { formatLabelCode } from '../../utils/label/code'
 import { launchBrowser, listenForErrors } from '../helpers/browser'
+import type { Member } from '../helpers/firm'
 import { firstVisit } from '../helpers/firstVisit'
 import { cylinderNow, openShop, registered, type Shop } from '../helpers/fleet'
 import { openFrontDoor } from '../helpers/frontDoor'
@@ -129,14 +130,26 @@ describe('a recovery beside the scale', () => {
     await other.getByRole('button', { name: 'Wrong figure: take back 66 lb 0 oz' }).click()
     await page.getByText('No reading yet').waitFor()
 
-    await context.clearCookies()
-    await context.addCookies([...shop.warehouse.client.cookies].map(([name, value]) => ({ name, value, url: server.baseUrl })))
+    const signIn = async ({ client }: Member) => {
+      await context.clearCookies()
+      await context.addCookies([...client.cookies].map(([name, value]) => ({ name, value, url: server.baseUrl })))
+    }
+    await signIn(shop.warehouse)
     await other.goto(address, { waitUntil: 'networkidle' })
     await other.getByRole('button', { name: 'Start filling' }).waitFor()
     await other.goto(`${server.baseUrl}/scan`, { waitUntil: 'networkidle' })
     expect(await other.getByText('Go on with the recovery').count()).toBe(0)
+
+    await signIn(shop.technician)
+    await other.goto(address, { waitUntil: 'networkidle' })
+    await other.getByRole('button', { name: 'Stopped? Hoses off' }).click()
+    await other.getByRole('button', { name: 'Put this recovery away' }).click()
+    await other.getByRole('button', { name: 'Nothing went in: put it away' }).click()
+    await other.getByRole('button', { name: 'Start filling' }).waitFor()
+    await page.getByText('This recovery was recorded or put away in another tab.').waitFor()
     await context.close()
   })
+
   it('begins, opens again and ends without signal, with the tag\'s text, and is recorded once there is signal', async () => {
     const cylinder = await registered(shop)
     const door = await openFrontDoor(server.baseUrl)
