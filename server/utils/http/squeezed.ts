@@ -19,7 +19,7 @@ export async function squeezed(event: H3Event, answer: unknown): Promise<Buffer 
 }
 
 /** Whether gzip is among what is accepted and is not refused by a weight of 0 (RFC 9110, 12.5.3). */
-export function takesGzip(accepted: string): boolean {
+function takesGzip(accepted: string): boolean {
   return accepted.split(',').some((part) => {
     const [name = '', ...rest] = part.split(';').map(each => each.trim().toLowerCase())
     return name === 'gzip' && !rest.some(each => /^q=0(\.0*)?$/.test(each))
