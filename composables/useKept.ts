@@ -1,3 +1,4 @@
+import { keptPrefix } from '~~/composables/keptPrefix'
 import { useSessionStore } from '~~/stores/session'
 
 /** Where something is kept: until the tab is closed, or on the device until it is forgotten. */
@@ -37,11 +38,6 @@ export function useKept<T extends object>(key: string, where: KeptOn = 'tab') {
   }
 
   return { restored, keep, forget, followOtherTabs }
-}
-
-/** What the names of all that is kept for a person begin with. */
-export function keptPrefix(personId: string | undefined): string {
-  return `collarbook-form ${personId ?? ''} `
 }
 
 function storageOf(where: KeptOn): Storage {

@@ -1,5 +1,5 @@
 import { deviceNow } from '~~/stores/posting'
-import { openRecoveries, RECOVERY } from '~~/composables/openRecoveries'
+import { openRecoveries, RECOVERY } from '~~/composables/useOpenRecoveries'
 import { useEventForm } from '~~/composables/useEventForm'
 import { useRecording } from '~~/composables/useRecording'
 import { useScanSignal } from '~~/composables/useScanSignal'

@@ -1,4 +1,4 @@
-import { keptPrefix } from '~~/composables/useKept'
+import { keptPrefix } from '~~/composables/keptPrefix'
 import { useSessionStore } from '~~/stores/session'
 import type { NowLine } from '~~/utils/contract/now'
 import { typedLines } from '~~/utils/now/typedLines'
