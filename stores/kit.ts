@@ -67,6 +67,8 @@ export const useKitStore = defineStore('kit', () => {
   async function fetchAll(): Promise<void> {
     await find()
     for (let goesOn = true; goesOn;) goesOn = await fetchPart()
+    // Counting takes its time in a large fleet: not after each part.
+    await tell(about.value)
   }
 
   /** Answers whether there is more to fetch at once. */
@@ -81,7 +83,7 @@ export const useKitStore = defineStore('kit', () => {
     const { tag, ...firm } = told ?? { tag: before?.firmTag ?? '' }
     const now = { personId, form: KIT_FORM, seq: answer.seq, mark: answer.mark, next, firmTag: tag, followedAt: Date.now() }
     const taken = await inBox(() => box.take({ anew, about: now, entries: cylinders.map(kitEntry), firm: told ? firm as KitFirm : null }).then(() => true))
-    if (taken) await tell(now)
+    if (taken) about.value = now
     return taken === true && (next !== null || more)
   }
 
@@ -95,7 +97,8 @@ export const useKitStore = defineStore('kit', () => {
 
   /** What an answer from the copy is made of; null where there is no copy of this person's. */
   async function reading(): Promise<{ box: typeof box, about: KitAbout, firm: KitFirm, names: Names } | null> {
-    if (about.value === null) await find()
+    // Another tab may have brought it further.
+    if (about.value === null || about.value.next !== null) await find()
     const at = about.value
     if (at === null || at.personId !== session.user?.id) return null
     if (firmRead?.tag !== at.firmTag) {

@@ -7,10 +7,10 @@ import type { Database } from '../database/database'
 import { kitFirm } from './kitFirm'
 import { kitMark } from './kitMark'
 
-/** Cylinders in an answer. */
-const CYLINDERS_AT_ONCE = 1_000
+/** Cylinders in an answer: a phone takes them in one go, and its person waits for no more than these. */
+const CYLINDERS_AT_ONCE = 500
 /** Lines of the log looked through for an answer. */
-const LINES_AT_ONCE = 4_000
+const LINES_AT_ONCE = 2_000
 /** Cylinders packed without a pause: what else is asked of the server waits for no more than these. */
 const PACKED_IN_A_TURN = 100
 
