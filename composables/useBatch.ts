@@ -150,7 +150,8 @@ export function useBatch(key: string, plan: () => BatchPlan) {
     const { act, target, supervisorId } = plan()
     if (!target || counted.value.length === 0 || progress.value) return
     problem.value = null
-    const going = counted.value.map(line => ({ line, event: sealed(line, act, target, supervisorId) }))
+    // In the order in which they were scanned.
+    const going = [...counted.value].reverse().map(line => ({ line, event: sealed(line, act, target, supervisorId) }))
     const posted: Posted[] = []
     progress.value = { done: 0, total: going.length }
     try {
