@@ -43,6 +43,10 @@ export function useHandoverTaking(offer: HandoverOffer, supervisorId: () => stri
   }
 
   async function take() {
+    if (session.user?.trainee && !supervisorId()) {
+      problem.value = { type: 'about:blank', title: 'Choose who supervises.', status: 400, detail: 'They countersign it; until then it waits for their name.' }
+      return
+    }
     busy.value = true
     problem.value = null
     if (events.length === 0) {
