@@ -8,7 +8,7 @@ const INSTALL = 'Keep Collarbook on the home screen: it opens without signal, an
 /**
  * What the application has to offer for itself: a new version, and once, after the first recorded event, to be installed.
  *
- * It comes with a change of page, so that nothing moves under a finger.
+ * It comes with a change of page, so that nothing moves under a finger: call it when one was changed to. In the browser only.
  */
 export function useDeviceOffer() {
   const installation = useInstallationStore()
@@ -42,9 +42,10 @@ export function useDeviceOffer() {
     shown.value = null
   }
 
-  if (import.meta.client) onBeforeUnmount(router.afterEach(choose))
+  choose()
+  const end = router.afterEach(choose)
 
-  return { offer, take, close }
+  return { offer, take, close, end }
 }
 
 function wasAsked(): boolean {

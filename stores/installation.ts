@@ -63,7 +63,9 @@ export const useInstallationStore = defineStore('installation', () => {
     waiting.value?.postMessage('take over')
   }
 
-  function listen() {
+  /** Hears what becomes of installing; `offered` is what the browser has offered already. */
+  function listen(offered: InstallPrompt | null) {
+    prompt.value = offered
     isInstalled.value = navigator.standalone === true || matchMedia('(display-mode: standalone)').matches
     isByShareSheet.value = !isInstalled.value && navigator.standalone === false
     window.addEventListener('beforeinstallprompt', (event) => {

@@ -17,17 +17,26 @@ async function offering() {
       return () => h('p')
     },
   }))
-  return { ...offered!, end: () => wrapper.unmount() }
+  return {
+    ...offered!,
+    end() {
+      offered.end()
+      wrapper.unmount()
+    },
+  }
 }
 
 afterEach(() => {
   localStorage.clear()
+  Reflect.deleteProperty(navigator, 'standalone')
   useInstallationStore().isByShareSheet = false
   usePostingStore().recorded = 0
 })
 
 describe('to be installed', () => {
   it('is asked after the first recorded event, with the next page, and once', async () => {
+    // As Safari on a phone says it of a page that is not on the home screen; heard already, or within these two seconds.
+    Object.defineProperty(navigator, 'standalone', { value: false, configurable: true })
     useInstallationStore().isByShareSheet = true
     const { offer, close, end } = await offering()
     await toAnotherPage()
