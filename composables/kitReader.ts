@@ -2,7 +2,7 @@ import type { KitBox } from '~~/composables/kitBox'
 import type { KitFirm } from '~~/utils/contract/kit'
 import type { continueFold } from '~~/utils/custody/continueFold'
 import type { CylinderRow, CylinderView } from '~~/utils/custody/cylinderView'
-import type { CustodyEvent } from '~~/utils/custody/event'
+import type { AnyCustodyEvent, CustodyEvent } from '~~/utils/custody/event'
 import { isGivenAway } from '~~/utils/custody/lifecycle'
 import { recordedNow } from '~~/utils/custody/recordedNow'
 import { cacheRow, rowToday } from '~~/utils/custody/row'
@@ -56,7 +56,7 @@ export async function kitReader({ box, firm, names, catalogue, waiting, recorded
   }
 
   function goneOn(before: CylinderState, events: readonly CustodyEvent[], goOn: typeof continueFold): OnDevice {
-    const asRecorded = events.map((event, index) => recordedNow(event, { seq: index, version: before.version + index }, asking))
+    const asRecorded = events.map((event, index) => recordedNow(event as AnyCustodyEvent, { seq: index, version: before.version + index }, asking))
     const folded = goOn(before, asRecorded, context(NOTHING_SAID))
     return folded ? { state: folded.state, waitingNotIn: 0 } : { state: before, waitingNotIn: events.length }
   }
