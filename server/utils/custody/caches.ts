@@ -3,14 +3,13 @@ import { continueFold } from '../../../utils/custody/continueFold'
 import type { AnyRecordedEvent } from '../../../utils/custody/event'
 import { fold, type FoldResult } from '../../../utils/custody/fold'
 import type { Half } from '../../../utils/custody/half'
-import type { Movement } from '../../../utils/custody/movement'
 import { cacheRow } from '../../../utils/custody/row'
 import type { SaidByOthers } from '../../../utils/custody/saidByOthers'
 import type { CylinderState } from '../../../utils/custody/state'
-import type { StockChange } from '../../../utils/custody/stockChange'
 import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
 import { changeStatements, type CacheChange, type Columns } from './cacheChanges'
+import { books, claims, halfLines, type Lines } from './cacheLines'
 import { cylinderStates } from './cylinderViews'
 import { foldContext, rowContext, type RuledRowContext } from './foldContext'
 import type { Group } from './group'
@@ -144,61 +143,13 @@ export function cylinderColumns(cylinderId: string, state: CylinderState, contex
   return { id: cylinderId, ...snakeCase(cacheRow(state, context)), state: JSON.stringify(state), ruled_by: context.ruledBy }
 }
 
-/** What one part of a cylinder's caches loses and gets. */
-type Lines = Pick<CacheChange, 'cleared' | 'added'>
-
 function changeOf(cylinderId: string, row: Columns, lines: readonly Lines[], before: Columns | null = null): CacheChange {
   return { cylinderId, row, before, cleared: lines.flatMap(({ cleared }) => cleared), added: Object.assign({}, ...lines.map(({ added }) => added)) as Lines['added'] }
-}
-
-/** The books: movements, and changes of stock. All of the cylinder's anew, unless only the new events' were folded. */
-function books(cylinderId: string, { movements, stockChanges }: FoldResult, isContinued = false): Lines {
-  return {
-    cleared: isContinued ? [] : ['movements', 'stock_changes'],
-    added: {
-      movements: movements.map(one => movementLine(cylinderId, one)),
-      stock_changes: stockChanges.map(one => stockLine(cylinderId, one)),
-    },
-  }
-}
-
-function movementLine(cylinderId: string, one: Movement): Columns {
-  return {
-    cylinder_id: cylinderId, event_id: one.eventId, ordinal: one.ordinal, cause: one.cause, refrigerant: one.refrigerant, owner_id: one.ownerId,
-    grams: one.grams, at: one.at, apart: Number(one.apart),
-  }
-}
-
-function stockLine(cylinderId: string, one: StockChange): Columns {
-  return {
-    cylinder_id: cylinderId, event_id: one.eventId, ordinal: one.ordinal, refrigerant: one.refrigerant, owner_id: one.ownerId, grams: one.grams,
-    not_known: one.notKnown, weighed_variance: one.weighedVariance, found_variance: one.foundVariance,
-    weighed_together: one.weighedTogether, found_together: one.foundTogether, at: one.at, apart: Number(one.apart),
-  }
-}
-
-/** The codes that the cylinder's `labelled` events claim. */
-function claims(cylinderId: string, { labelClaims }: FoldResult, isContinued = false): Lines {
-  return {
-    cleared: isContinued ? [] : ['label_claims'],
-    added: {
-      label_claims: labelClaims.map(claim => ({
-        event_id: claim.eventId, code: claim.code, cylinder_id: cylinderId, effective_at: claim.effectiveAt, device_id: claim.deviceId, device_seq: claim.deviceSeq,
-      })),
-    },
-  }
 }
 
 /** The codes, where a new event can have changed them. */
 function claimsAfter({ cylinderId, added, folded, isContinued }: Touched): Lines[] {
   return added.some(row => row.kind === 'labelled' || row.kind === 'corrected') ? [claims(cylinderId, folded, isContinued)] : []
-}
-
-function halfLines(cylinderId: string, { state }: FoldResult): Lines {
-  return {
-    cleared: ['halves'],
-    added: { halves: state.halves.map((half, position) => ({ event_id: half.eventId, cylinder_id: cylinderId, other_id: half.otherId, position, half: JSON.stringify(half) })) },
-  }
 }
 
 const COLUMN_NAMES = new Map<string, string>()
