@@ -153,7 +153,7 @@ const SCREENS: Record<string, Screen[]> = {
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
   'unsent.vue': [
     { as: technician, at: () => '/unsent', after: page => page.getByText('Everything from this device is recorded.').waitFor() },
-    { as: technician, at: () => '/unsent', after: (page, demo) => fillOutbox(page, demo.event) },
+    { as: technician, at: () => '/unsent', after: (page, demo) => fillOutbox(page, demo.codes.usual) },
   ],
   'van.vue': [{ as: technician, at: () => '/van' }, { as: warehouse, at: () => '/van' }],
   'vans/[id]/check-in.vue': [{ as: warehouse, at: demo => `/vans/${demo.van}/check-in` }],

@@ -1,8 +1,8 @@
 import type { Page } from 'playwright-core'
 
 /** Puts into a page's outbox one refused entry of its person that is a day old, one of somebody else, and one that was dropped. */
-export async function fillOutbox(page: Page, cylinderId: string): Promise<void> {
-  await page.evaluate(async (cylinder) => {
+export async function fillOutbox(page: Page, cylinder: string): Promise<void> {
+  await page.evaluate(async (reference) => {
     const { user } = await (await fetch('/api/session')).json() as { user: { id: string } }
     const database = await new Promise<IDBDatabase>((done, failed) => {
       const opening = indexedDB.open('collarbook-outbox', 1)
@@ -18,7 +18,7 @@ export async function fillOutbox(page: Page, cylinderId: string): Promise<void> 
     const entry = (id: string, personId: string, deviceSeq: number) => ({
       id, personId, queuedAt: aDayAgo, state: 'refused', tries: 1, firstSentAt: null, shape: 1,
       problem: { type: 'about:blank', title: 'It names what nobody knows', status: 422, detail: 'Choose again from the list.', errors: [{ path: 'placeId', message: 'no such place' }] },
-      event: { id, cylinderId: cylinder, kind: 'weighed', occurredAt: new Date(aDayAgo).toISOString(), deviceId: 'd', deviceSeq, details: { gross: { value: 40, unit: 'lb' } } },
+      event: { id, cylinderId: reference, kind: 'weighed', occurredAt: new Date(aDayAgo).toISOString(), deviceId: 'd', deviceSeq, details: { gross: { value: 40, unit: 'lb' } } },
     })
     const writing = database.transaction(['entries', 'dropped'], 'readwrite')
     writing.objectStore('entries').put(entry('mine', user.id, 1))
@@ -29,7 +29,7 @@ export async function fillOutbox(page: Page, cylinderId: string): Promise<void> 
     })
     database.close()
     localStorage.setItem('collarbook-outbox-waits', '1')
-  }, cylinderId)
+  }, cylinder)
   await page.reload({ waitUntil: 'networkidle' })
   await page.getByRole('heading', { name: '1 refused' }).waitFor()
 }
