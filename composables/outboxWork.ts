@@ -75,7 +75,7 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     // What a form holds is drawn from; the store takes it as it is sent.
     const kept = await box.put(JSON.parse(JSON.stringify(events)) as CustodyEvent[], author, Date.now(), device.counted())
     device.note(Math.max(...kept.map(({ deviceSeq }) => deviceSeq)))
-    await changed()
+    // Shown once it is known whether it waits: what is recorded at once is not announced as waiting before.
     schedule({ is: 'wait', untilMs: Date.now() })
     return kept
   }
@@ -135,6 +135,7 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     if (author === null) return
     if (!navigator.onLine) {
       state.pause.value = 'offline'
+      await changed()
       return
     }
     if (state.busy.value && !byHand) return
