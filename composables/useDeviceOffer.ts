@@ -25,7 +25,7 @@ export function useDeviceOffer() {
   }
 
   const offer = computed(() => {
-    if (shown.value === 'update') return { text: 'A new version is ready. What is not sent yet stays as it is.', action: 'Take it now' }
+    if (shown.value === 'update') return { text: 'A new version is ready.', action: 'Take it now' }
     if (shown.value === null) return null
     return installation.canInstall ? { text: INSTALL, action: 'Install' } : { text: `${INSTALL} In the browser: Share, then Add to Home Screen.`, action: null }
   })
