@@ -37,15 +37,24 @@ export function useKeptForm<Draft extends object>(key: string, empty: () => Draf
 
   /** Kept on the device, it was recorded or put away in another tab. */
   const endedElsewhere = ref(false)
+  let isFollowing = false
 
   onMounted(() => {
     if (kept.value) takeUp(kept.value)
-    watch([draft, envelope], keep, { deep: true })
+    watch([draft, envelope], () => {
+      if (!isFollowing) keep()
+    }, { deep: true })
   })
   if (keptOn === 'device') {
     followOtherTabs((entry) => {
       endedElsewhere.value = entry === null
-      if (entry) takeUp(entry)
+      if (!entry) return
+      // What another tab keeps is kept: written back it would outlive its end there.
+      isFollowing = true
+      takeUp(entry)
+      void nextTick(() => {
+        isFollowing = false
+      })
     })
   }
 
