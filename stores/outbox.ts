@@ -42,12 +42,9 @@ export const useOutboxStore = defineStore('outbox', () => {
     }
   }
 
-  /** The same act, done by what is fetched for it. */
-  function by<Act extends keyof OutboxWork>(act: Act): (...given: Parameters<OutboxWork[Act]>) => Promise<Awaited<ReturnType<OutboxWork[Act]>>> {
-    return async (...given) => {
-      const acts = await work() as unknown as Record<Act, (...given: unknown[]) => Promise<unknown>>
-      return await acts[act](...given) as Awaited<ReturnType<OutboxWork[Act]>>
-    }
+  /** An act as what is fetched for it does it. */
+  function by<Given extends unknown[], Got>(act: (acts: OutboxWork) => (...given: Given) => Promise<Got>) {
+    return async (...given: Given): Promise<Got> => act(await work())(...given)
   }
 
   /** Begins to look after what waits on this device; to be called once a page stands in the browser. */
@@ -88,7 +85,15 @@ export const useOutboxStore = defineStore('outbox', () => {
 
   return {
     entries, waiting, refused, dropped, oldestAt, sealed, pause, busy, arrived, start, attend, read, pendingOf,
-    put: by('put'), number: by('number'), sendNow: by('sendNow'), flush: by('flush'), takeOut: by('takeOut'), drop: by('drop'), replaced: by('replaced'),
-    loadDropped: by('loadDropped'), recordedLately: by('recordedLately'), exportFile: by('exportFile'),
+    put: by(acts => acts.put),
+    number: by(acts => acts.number),
+    sendNow: by(acts => acts.sendNow),
+    flush: by(acts => acts.flush),
+    takeOut: by(acts => acts.takeOut),
+    drop: by(acts => acts.drop),
+    replaced: by(acts => acts.replaced),
+    loadDropped: by(acts => acts.loadDropped),
+    recordedLately: by(acts => acts.recordedLately),
+    exportFile: by(acts => acts.exportFile),
   }
 })
