@@ -47,7 +47,7 @@ async function recordedOf(cylinders: readonly CylinderView[]): Promise<Line[]> {
 
 /** What the scale showed at each weighing of a cylinder, and who wrote it down, in the order of arrival. */
 async function weighings(cylinder: CylinderView): Promise<[pounds: number, author: string][]> {
-  return (await recordedOf([cylinder])).map(({ details, author }) => [(details as { gross: MassReading }).gross.value, author.name])
+  return (await recordedOf([cylinder])).map(({ details, author }) => [(details as { gross: Extract<MassReading, { unit: 'lb' }> }).gross.value, author.name])
 }
 
 async function several(count: number): Promise<CylinderView[]> {

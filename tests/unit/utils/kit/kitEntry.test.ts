@@ -37,7 +37,7 @@ describe('a cylinder kept on a phone', () => {
     const { state } = folded(
       registered(), did('labelled', { code: '7K3M9Q2TX' }), did('labelled', { code: '000000000', replaces: '7K3M9Q2TX' }),
       did('moved', { toPlaceId: VAN, toHolderId: TECHNICIAN }),
-      did('transferred', { counterpartId: OTHER_CYLINDER, direction: 'out', refrigerant: 'R-22', grossAfter: kg(13), transferId: SHOP }),
+      did('transferred', { counterpartId: OTHER_CYLINDER, direction: 'out', refrigerant: 'R-22', condition: 'clean', grossAfter: kg(13), transferId: SHOP }),
     )
     expect(kitEntry(packCylinder(state))).toMatchObject({ codes: ['7K3M9Q2TX', '000000000'], placeId: VAN, holderId: TECHNICIAN, tail: '1001A', names: [OTHER_CYLINDER] })
   })
