@@ -13,11 +13,16 @@ function nodeProject(name: string, more: Record<string, unknown> = {}) {
   }
 }
 
-// The built server is started once for these; each file brings its own database.
-const served = { testTimeout: 120_000, hookTimeout: 180_000, fileParallelism: false }
+// Each file starts the built server on a database of its own. Mostly one of a test and its server waits for the other, so that two go side by side.
+const patience = { testTimeout: 120_000, hookTimeout: 180_000 }
+const served = { ...patience, maxWorkers: 2, sequence: { groupOrder: 1 } }
+// These want the machine to themselves: browsers, and processes that are killed in the midst of work.
+const alone = { ...patience, fileParallelism: false }
 
 export default defineConfig(async () => ({
   test: {
+    // Vitest would leave one core out, of two.
+    maxWorkers: '100%',
     // Screens looked at side by side: more than this only wait for the processor.
     maxConcurrency: 3,
     projects: [
@@ -25,8 +30,8 @@ export default defineConfig(async () => ({
       nodeProject('unit'),
       nodeProject('reference'),
       nodeProject('server', served),
-      nodeProject('e2e', served),
-      nodeProject('faults', served),
+      nodeProject('e2e', alone),
+      nodeProject('faults', alone),
       await defineVitestProject({
         resolve: { alias },
         test: {
