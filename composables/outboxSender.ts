@@ -1,5 +1,6 @@
+import { answerWithin } from '~~/composables/answerWithin'
 import type { OutboxBox } from '~~/composables/outboxBox'
-import { problemOf } from '~~/composables/useApi'
+import { isProblem, problemOf } from '~~/composables/useApi'
 import { MOST_EVENTS } from '~~/utils/contract/mostEvents'
 import type { CustodyEvent } from '~~/utils/custody/event'
 import type { OutboxEntry } from '~~/utils/outbox/entry'
@@ -49,10 +50,13 @@ export function sendOutbox(
 async function post(entries: readonly OutboxEntry[], author: string, deviceNow: string): Promise<Answer> {
   const events: CustodyEvent[] = entries.map(({ event }) => event)
   try {
-    return { body: await $fetch<unknown>('/api/events', { method: 'POST', body: { events, deviceNow, author }, retry: false, timeout: ANSWER_WITHIN_MS }) }
+    return {
+      body: await answerWithin(ANSWER_WITHIN_MS, signal =>
+        $fetch<unknown>('/api/events', { method: 'POST', body: { events, deviceNow, author }, retry: false, signal })),
+    }
   }
   catch (error) {
-    return { problem: problemOf(error) }
+    return { problem: problemOf(error), isOfBetween: !isProblem(Object(error).data) }
   }
 }
 

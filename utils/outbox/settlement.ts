@@ -7,8 +7,11 @@ import { NOT_ITS_AUTHOR } from './notItsAuthor'
 /** Why nothing is sent at present: no network, nobody signed in as the author, a server that cannot, or a device that keeps nothing. */
 export type Pause = 'offline' | 'sign-in' | 'server' | 'storage'
 
-/** What came back: a body, or the problem of a request that failed as a whole (status 0: not reached). */
-export type Answer = { body: unknown } | { problem: ProblemDetails }
+/**
+ * What came back: a body, or the problem of a request that failed as a whole (status 0: not reached); `isOfBetween` where
+ * the server did not say it itself, but something on the way to it.
+ */
+export type Answer = { body: unknown } | { problem: ProblemDetails, isOfBetween?: boolean }
 
 /** What becomes of the entries that were sent. */
 export interface Settlement {
@@ -24,6 +27,8 @@ export interface Settlement {
 
 /** Answers to a whole request that lie in what it holds. */
 const FOR_ITS_CONTENT: readonly number[] = [400, 413, 422]
+/** Of these, what lies in the content whoever says it: a proxy looks at nothing but its size. */
+const FOR_ITS_SIZE = 413
 /** Answers before anything is recorded. */
 const BEFORE_RECORDING: readonly number[] = [...FOR_ITS_CONTENT, 401, 403, 429]
 
@@ -33,11 +38,11 @@ const BEFORE_RECORDING: readonly number[] = [...FOR_ITS_CONTENT, 401, 403, 429]
  * Only a verdict on an entry itself takes it out of the outbox; whatever else comes back, it is kept.
  */
 export function settlementOf(sent: readonly OutboxEntry[], answer: Answer): Settlement {
-  return 'problem' in answer ? ofFailure(sent, answer.problem) : ofVerdicts(sent, verdictsIn(answer.body))
+  return 'problem' in answer ? ofFailure(sent, answer.problem, answer.isOfBetween ?? false) : ofVerdicts(sent, verdictsIn(answer.body))
 }
 
-function ofFailure(sent: readonly OutboxEntry[], problem: ProblemDetails): Settlement {
-  const isItsContent = FOR_ITS_CONTENT.includes(problem.status)
+function ofFailure(sent: readonly OutboxEntry[], problem: ProblemDetails, isOfBetween: boolean): Settlement {
+  const isItsContent = problem.status === FOR_ITS_SIZE || (!isOfBetween && FOR_ITS_CONTENT.includes(problem.status))
   if (isItsContent && unitsOf(sent) === 1) {
     return { recorded: [], refused: sent.map(({ id }) => ({ id, problem })), kept: [], pause: null, split: false }
   }

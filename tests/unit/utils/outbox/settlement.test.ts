@@ -53,6 +53,11 @@ describe('a request that failed', () => {
     expect(kept.map(each => [each.id, each.problem?.status, each.mayHaveArrived])).toEqual([['one', status, mayHaveArrived], ['two', status, mayHaveArrived]])
   })
 
+  it.each([[400, 'server'], [422, 'server'], [413, null]] as const)('with %i, said by something on the way, waits for: %s', (status, pause) => {
+    const settled = settlementOf([ONE, TWO], { problem: { type: 'about:blank', title: 'No', status, detail: '' }, isOfBetween: true })
+    expect([settled.refused, settled.kept.length, settled.pause, settled.split]).toEqual([[], 2, pause, pause === null])
+  })
+
   it('because somebody else is signed in waits for its author', () => {
     expect(failure(403, 'not-its-author').pause).toBe('sign-in')
   })
