@@ -72,8 +72,10 @@ async function answeringFrom(found: NonNullable<Awaited<ReturnType<ReturnType<ty
   const outbox = useOutboxStore()
   await outbox.read()
   const nowMs = Date.now()
-  const waiting = outbox.waiting.map(({ event }) => event)
-  const recorded = (await outbox.recordedLately()).filter(({ recordedAt }) => recordedAt > found.about.followedAt - MAY_HAVE_MISSED_MS)
+  const lately = await outbox.recordedLately()
+  // What was recorded a moment ago may still be shown as waiting: it counts once.
+  const waiting = outbox.waiting.filter(({ id }) => !lately.some(done => done.id === id)).map(({ event }) => event)
+  const recorded = lately.filter(({ recordedAt }) => recordedAt > found.about.followedAt - MAY_HAVE_MISSED_MS)
   const reader = await kitReader({ ...found, catalogue: CATALOGUE, waiting, recorded, asking: { nowMs, access: useSessionStore().access } })
   return { reader, firm: found.firm, count: useKitStore().countHaving, isWhole: found.about.next === null, of: found.about.followedAt, nowMs }
 }

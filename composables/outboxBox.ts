@@ -50,18 +50,24 @@ export function outboxBox() {
     opened = null
   }
 
-  /** Done once the transaction is complete and on the disk; a connection that was closed is opened once more. */
+  /** Done once the transaction is complete and on the disk; tried once more where the connection was closed or the device is full. */
   async function within<Names extends Stores[], T>(stores: [...Names], work: (transaction: Writing<Names>) => Promise<T>): Promise<T> {
     try {
       return await once(stores, work)
     }
     catch (error) {
-      if (!CLOSED.includes(nameOf(error))) throw told(error)
-      forget()
+      if (isFull(error)) await makeRoom()
+      else if (CLOSED.includes(nameOf(error))) forget()
+      else throw told(error)
       return await once(stores, work).catch((again) => {
         throw told(again)
       })
     }
+  }
+
+  /** On a full device what is recorded makes room for what is not: it is only remembered. */
+  async function makeRoom(): Promise<void> {
+    await once(['recorded'], transaction => transaction.objectStore('recorded').clear()).catch(() => {})
   }
 
   async function once<Names extends Stores[], T>(stores: [...Names], work: (transaction: Writing<Names>) => Promise<T>): Promise<T> {
@@ -158,8 +164,10 @@ export function outboxBox() {
         const entry = tried.get(id)!
         await entries.put({ ...entry, state: 'queued', problem, firstSentAt: mayHaveArrived ? entry.firstSentAt ?? nowMs : entry.firstSentAt })
       }
-      const remembered = (await recorded.getAll()).sort((a, b) => b.recordedAt - a.recordedAt)
-      for (const { id } of remembered.slice(REMEMBERED)) await recorded.delete(id)
+      // Those of this answer stay: by a clock that was set back they are the oldest.
+      const now = new Set(settlement.recorded.map(({ id }) => id))
+      const before = (await recorded.getAll()).filter(({ id }) => !now.has(id)).sort((a, b) => b.recordedAt - a.recordedAt)
+      for (const { id } of before.slice(Math.max(0, REMEMBERED - now.size))) await recorded.delete(id)
     }),
 
     /** Takes entries out that cannot have arrived: all of them, or none. */
@@ -180,10 +188,10 @@ export function outboxBox() {
       }
     }),
 
-    /** Gives an entry up. False where it is on its way or no longer here. */
+    /** Gives a refused entry up. False where it is no longer here, or goes once more. */
     drop: (id: string, reason: string, nowMs: number) => within(['entries', 'dropped'], async (transaction) => {
       const entry = await transaction.objectStore('entries').get(id)
-      if (!entry || entry.state === 'sending') return false
+      if (!entry || !isRefused(entry)) return false
       await transaction.objectStore('dropped').put({ ...entry, droppedAt: nowMs, reason })
       await transaction.objectStore('entries').delete(id)
       return true
@@ -216,13 +224,17 @@ function nameOf(error: unknown): string {
   return String(Object(error).name)
 }
 
+function isFull(error: unknown): boolean {
+  return nameOf(error) === 'QuotaExceededError'
+}
+
 function told(error: unknown): unknown {
   if (error instanceof ApiError) return error
-  const isFull = nameOf(error) === 'QuotaExceededError'
+  const lacksRoom = isFull(error)
   return new ApiError({
     type: 'storage', status: 507,
-    title: isFull ? 'This phone is full' : 'This phone could not save it',
-    detail: isFull
+    title: lacksRoom ? 'This phone is full' : 'This phone could not save it',
+    detail: lacksRoom
       ? 'Nothing was saved. Make room on the phone, then record it again; what you typed is still here.'
       : 'Nothing was saved: the browser’s storage did not answer. What you typed is still here; try again.',
   })

@@ -100,22 +100,19 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     await run(true)
   }
 
-  /** Sends these and what waits before them; gives what became of each. `each` hears of them request by request. */
+  /**
+   * Sends these and what waits before them; gives what became of each. `each` hears of them request by request. Where no
+   * answer comes in time, the rest waits like any other entry while the sending goes on.
+   */
   async function sendNow(ids: readonly string[], each: (verdicts: ReadonlyMap<string, Verdict>) => void = () => {}): Promise<Map<string, Verdict>> {
     const verdicts = new Map<string, Verdict>()
-    await run(true, (told) => {
-      const mine = new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))
-      for (const [id, verdict] of mine) verdicts.set(id, verdict)
-      if (mine.size > 0) each(mine)
-    })
-    const rest = ids.filter(id => !verdicts.has(id))
-    if (rest.length > 0) {
-      const found = await elsewhere(rest)
-      for (const [id, verdict] of found) verdicts.set(id, verdict)
-      each(found)
+    const hear = (some: ReadonlyMap<string, Verdict>) => {
+      for (const [id, verdict] of some) verdicts.set(id, verdict)
+      if (some.size > 0) each(some)
     }
-    const back = [...verdicts].filter(([, verdict]) => verdict.is === 'refused').map(([id]) => id)
-    if (back.length > 0) await box.giveBack(back).then(() => changed(), () => {})
+    const isDone = await whileAnswered(told => run(true, told), told => hear(new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))))
+    if (!isDone) await changed()
+    hear(await elsewhere(ids.filter(id => !verdicts.has(id))))
     return verdicts
   }
 
@@ -183,11 +180,12 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     return isOut
   }
 
-  /** Gives an entry up; the reason stays with it on this device. */
-  async function drop(id: string, reason: string): Promise<void> {
-    await box.drop(id, reason, Date.now())
+  /** Gives a refused entry up; the reason stays with it on this device. False where another tab has done with it meanwhile. */
+  async function drop(id: string, reason: string): Promise<boolean> {
+    const isDropped = await box.drop(id, reason, Date.now())
     await changed()
     await loadDropped()
+    return isDropped
   }
 
   /** Takes a refused entry away that its author has recorded anew. */
@@ -217,7 +215,7 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
 }
 
 function verdictsOf({ settlement, answer }: Told): Map<string, Verdict> {
-  const cylinders = 'body' in answer ? (answer.body as EventsAnswer).cylinders ?? [] : []
+  const cylinders = 'body' in answer ? (Object(answer.body) as Partial<EventsAnswer>).cylinders ?? [] : []
   return new Map<string, Verdict>([
     ...settlement.recorded.map(({ id, version, cylinderId }): [string, Verdict] =>
       [id, { is: 'recorded', version, cylinder: cylinders.find(each => each.id === cylinderId) ?? null }]),

@@ -46,7 +46,7 @@ export function useRegistration() {
     catch (error) {
       problem.value = problemOf(error)
       // A refused event is mended and sent as a new one; a lost answer is asked for again with the same.
-      if (problem.value.status !== 0) sealed = null
+      if (problem.value.status !== 0 && problem.value.status < 500) sealed = null
       return null
     }
     finally {

@@ -5,6 +5,7 @@ import type { Verdict } from '~~/composables/outboxWork'
 import { ApiError, problemOf, useApi } from '~~/composables/useApi'
 import { useDevice } from '~~/composables/useDevice'
 import { useOutboxStore } from '~~/stores/outbox'
+import { useSessionStore } from '~~/stores/session'
 import type { CylinderView, EventResult, EventsAnswer } from '~~/utils/contract/custody'
 import { MOST_EVENTS } from '~~/utils/contract/mostEvents'
 import type { ProblemDetails } from '~~/utils/contract/problem'
@@ -35,6 +36,7 @@ const NOT_TAKEN_BACK: readonly EventKind[] = ['registered', 'corrected']
 export const usePostingStore = defineStore('posting', () => {
   const api = useApi()
   const outbox = useOutboxStore()
+  const session = useSessionStore()
   const notice = ref('')
   /** What was recorded last and may still be taken back; null where nothing is. */
   const last = shallowRef<Posted[] | null>(null)
@@ -85,7 +87,7 @@ export const usePostingStore = defineStore('posting', () => {
       kept = await outbox.put(events)
     }
     catch (error) {
-      if (!navigator.onLine) throw error
+      if (!navigator.onLine || problemOf(error).type !== 'storage') throw error
       // What was not kept here may still be recorded, where there is a server.
       return postAtOnce(events, each).catch((unsent) => {
         throw problemOf(unsent).status === 0 ? error : unsent
@@ -126,12 +128,14 @@ export const usePostingStore = defineStore('posting', () => {
   async function postAtOnce(events: readonly CustodyEvent[], each: (settled: Settled[]) => void): Promise<Settled[]> {
     if (!navigator.onLine && events.some(needsServer)) throw new ApiError(NEEDS_SERVER)
     if (outbox.waiting.length > 0) await outbox.flush()
+    // Whoever has signed in in another tab meanwhile records nothing of this person's.
+    const author = session.user?.id
     const numbered = await outbox.number(events.map(event => ({ ...event, deviceSeq: numbers.get(event.id) ?? event.deviceSeq })))
     for (const { id, deviceSeq } of numbered) numbers.set(id, deviceSeq)
     const all: Settled[] = []
     for (let from = 0; from < numbered.length; from += MOST_EVENTS) {
       const some = numbered.slice(from, from + MOST_EVENTS)
-      const answer = await api.post<EventsAnswer>('/api/events', { events: some, deviceNow: deviceNow() })
+      const answer = await api.post<EventsAnswer>('/api/events', { events: some, deviceNow: deviceNow(), author })
       const settled = some.map(event => settledAtOnce(answer, event))
       if (settled.some(({ posted }) => posted !== null)) recorded.value++
       all.push(...settled)

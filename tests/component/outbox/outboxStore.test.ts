@@ -16,8 +16,8 @@ interface Request { events: CustodyEvent[], author?: string }
 /** What the server has, by id, and each request it was sent. */
 let log: Map<string, CustodyEvent>
 let requests: Request[]
-/** How the next requests fail before anything is recorded; 'lost' records and then fails. */
-let faults: (number | 'lost')[]
+/** How the next requests fail: by a status before anything is recorded, after it ('lost'), or by what stands between. */
+let faults: (number | 'lost' | 'empty' | 'proxy')[]
 /** What the server refuses on its own. */
 let refuses: (event: CustodyEvent) => boolean
 
@@ -28,6 +28,11 @@ registerEndpoint('/api/events', {
     requests.push(body)
     const fault = faults.shift()
     if (typeof fault === 'number') return fail(event, fault)
+    if (fault === 'empty') return null
+    if (fault === 'proxy') {
+      setResponseStatus(event, 400)
+      return '<html>Request header too large</html>'
+    }
     const results = body.events.map((one) => {
       if (refuses(one)) return { id: one.id, outcome: 'refused', problem: { type: 'about:blank', title: 'No', status: 422, detail: 'Choose again.' } }
       const outcome = log.has(one.id) ? 'duplicate' : 'accepted'
@@ -139,6 +144,32 @@ describe('an event where it is not reached', () => {
     expect([[...log.values()].map(({ note }) => note), outbox.waiting.length, outbox.pause]).toEqual([['one', 'two'], 0, null])
   })
 
+  it.each(['empty', 'proxy'] as const)('is kept over an answer that is none of the server\'s: %s', async (fault) => {
+    faults = [fault]
+    const { outbox, posting } = visit('tina')
+    expect(await posting.post(weighed(posting))).toMatchObject({ isQueued: true })
+    expect([outbox.waiting.length, outbox.refused.length, outbox.pause]).toEqual([1, 0, 'server'])
+    await outbox.flush()
+    expect([log.size, outbox.entries.length]).toEqual([1, 0])
+  })
+
+  it('is kept where the answer begins and never ends, and holds nothing up', async () => {
+    const { outbox, posting } = visit('tina')
+    const stalled = vi.fn((_path: string, { signal }: { signal?: AbortSignal }) => new Promise((_, failed) => {
+      signal?.addEventListener('abort', () => failed(signal.reason))
+    }))
+    const reached = globalThis.$fetch
+    vi.stubGlobal('$fetch', stalled)
+    const posted = posting.post(weighed(posting))
+    await vi.waitFor(() => expect(stalled).toHaveBeenCalled())
+    await vi.advanceTimersByTimeAsync(15_000)
+    expect(await posted).toMatchObject({ isQueued: true })
+    expect(outbox.pause).toBe('offline')
+    vi.stubGlobal('$fetch', reached)
+    await outbox.flush()
+    expect([log.size, outbox.entries.length]).toEqual([1, 0])
+  })
+
   it('stays sealed for whoever else signs in, and only its author sends it', async () => {
     online = false
     const tina = visit('tina')
@@ -199,8 +230,22 @@ describe('what the server refuses later', () => {
     expect(requests).toHaveLength(1)
     const file = JSON.parse(await (await outbox.exportFile()).text())
     expect(file.entries.map(({ event }: { event: CustodyEvent }) => event.note)).toEqual(['bad'])
-    await outbox.drop(outbox.refused[0]!.id, 'weighed twice')
+    expect(await outbox.drop(outbox.refused[0]!.id, 'weighed twice')).toBe(true)
     expect([outbox.entries.length, outbox.dropped.map(({ event, reason }) => [event.note, reason])]).toEqual([0, [['bad', 'weighed twice']]])
+  })
+
+  it('is not dropped once it was mended in another tab and goes again', async () => {
+    online = false
+    const { outbox, posting } = visit('tina')
+    const event = weighed(posting, 'bad')
+    await posting.post(event)
+    online = true
+    refuses = () => true
+    await outbox.flush()
+    online = false
+    await visit('tina').posting.post({ ...event, note: 'mended' })
+    expect(await outbox.drop(event.id, 'weighed twice')).toBe(false)
+    expect((await inBox()).map(({ state, event: { note } }) => [state, note])).toEqual([['queued', 'mended']])
   })
 
   it('is found out of many by sending fewer at a time, and the others are recorded', async () => {
@@ -213,6 +258,17 @@ describe('what the server refuses later', () => {
     await outbox.flush()
     expect(requests.map(({ events }) => events.map(({ note }) => note).join(''))).toEqual(['abcde', 'ab', 'a', 'bcde'])
     expect([outbox.refused.map(({ event }) => event.note), [...log.values()].map(({ note }) => note).join('')]).toEqual([['a'], 'bcde'])
+  })
+})
+
+describe('what was recorded', () => {
+  it('is remembered although the clock was set back and much else is remembered', async () => {
+    const { posting, outbox } = visit('tina')
+    await posting.postAll(Array.from({ length: 200 }, (_, at) => weighed(posting, String(at))))
+    vi.setSystemTime(Date.now() - 24 * 3_600_000)
+    await posting.post(weighed(posting, 'last'))
+    const notes = (await outbox.recordedLately()).map(({ event }) => event.note)
+    expect([notes.length, notes.includes('last')]).toEqual([200, true])
   })
 })
 
@@ -249,11 +305,33 @@ describe('a device that keeps nothing', () => {
     expect([outbox.entries.length, posting.recorded]).toEqual([0, 0])
   })
 
-  it('still records where the server is reached', async () => {
+  it('still records where the server is reached, under its author', async () => {
     full()
     const { posting } = visit('tina')
     expect(await posting.post(weighed(posting))).toMatchObject({ version: 1 })
     expect(log.size).toBe(1)
+    expect(requests.map(({ author }) => author)).toEqual(['tina'])
+  })
+
+  it('makes room for what is new by forgetting what is recorded', async () => {
+    const { posting, outbox } = visit('tina')
+    await posting.post(weighed(posting, 'recorded'))
+    expect(await outbox.recordedLately()).toHaveLength(1)
+    online = false
+    // Full for as long as anything is remembered.
+    const [put, clear] = [IDBObjectStore.prototype.put, IDBObjectStore.prototype.clear]
+    let isFull = true
+    vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementation(function (this: IDBObjectStore, ...given) {
+      if (isFull) throw new DOMException('no room', 'QuotaExceededError')
+      return put.apply(this, given)
+    })
+    vi.spyOn(IDBObjectStore.prototype, 'clear').mockImplementation(function (this: IDBObjectStore) {
+      isFull = false
+      return clear.apply(this)
+    })
+    expect(await posting.post(weighed(posting, 'new'))).toMatchObject({ isQueued: true })
+    expect((await inBox()).map(({ event }) => event.note)).toEqual(['new'])
+    expect(await outbox.recordedLately()).toEqual([])
   })
 
   it('is tried once more where the system had closed the connection', async () => {
