@@ -100,19 +100,22 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     await run(true)
   }
 
-  /**
-   * Sends these and what waits before them; gives what became of each. `each` hears of them request by request. Where no
-   * answer comes in time, the rest waits like any other entry while the sending goes on.
-   */
+  /** Sends these and what waits before them; gives what became of each. `each` hears of them request by request. */
   async function sendNow(ids: readonly string[], each: (verdicts: ReadonlyMap<string, Verdict>) => void = () => {}): Promise<Map<string, Verdict>> {
     const verdicts = new Map<string, Verdict>()
-    const hear = (some: ReadonlyMap<string, Verdict>) => {
-      for (const [id, verdict] of some) verdicts.set(id, verdict)
-      if (some.size > 0) each(some)
+    await run(true, (told) => {
+      const mine = new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))
+      for (const [id, verdict] of mine) verdicts.set(id, verdict)
+      if (mine.size > 0) each(mine)
+    })
+    const rest = ids.filter(id => !verdicts.has(id))
+    if (rest.length > 0) {
+      const found = await elsewhere(rest)
+      for (const [id, verdict] of found) verdicts.set(id, verdict)
+      each(found)
     }
-    const isDone = await whileAnswered(told => run(true, told), told => hear(new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))))
-    if (!isDone) await changed()
-    hear(await elsewhere(ids.filter(id => !verdicts.has(id))))
+    const back = [...verdicts].filter(([, verdict]) => verdict.is === 'refused').map(([id]) => id)
+    if (back.length > 0) await box.giveBack(back).then(() => changed(), () => {})
     return verdicts
   }
 
