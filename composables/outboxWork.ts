@@ -5,6 +5,7 @@ import { sendOutbox, type Ended, type Told } from '~~/composables/outboxSender'
 import { mayWait, noteWaiting } from '~~/composables/outboxWaits'
 import { ApiError } from '~~/composables/useApi'
 import { useDevice } from '~~/composables/useDevice'
+import { whileAnswered } from '~~/composables/whileAnswered'
 import type { CylinderView, EventsAnswer } from '~~/utils/contract/custody'
 import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { CustodyEvent } from '~~/utils/custody/event'
@@ -100,22 +101,20 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     await run(true)
   }
 
-  /** Sends these and what waits before them; gives what became of each. `each` hears of them request by request. */
+  /**
+   * Sends these and what waits before them; gives what became of each. `each` hears of them request by request. Where no
+   * answer comes in time, the rest waits like any other entry while the sending goes on.
+   */
   async function sendNow(ids: readonly string[], each: (verdicts: ReadonlyMap<string, Verdict>) => void = () => {}): Promise<Map<string, Verdict>> {
     const verdicts = new Map<string, Verdict>()
-    await run(true, (told) => {
-      const mine = new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))
-      for (const [id, verdict] of mine) verdicts.set(id, verdict)
-      if (mine.size > 0) each(mine)
-    })
-    const rest = ids.filter(id => !verdicts.has(id))
-    if (rest.length > 0) {
-      const found = await elsewhere(rest)
-      for (const [id, verdict] of found) verdicts.set(id, verdict)
-      each(found)
+    const hear = (some: ReadonlyMap<string, Verdict>) => {
+      for (const [id, verdict] of some) verdicts.set(id, verdict)
+      if (some.size > 0) each(some)
     }
-    const back = [...verdicts].filter(([, verdict]) => verdict.is === 'refused').map(([id]) => id)
-    if (back.length > 0) await box.giveBack(back).then(() => changed(), () => {})
+    const isDone = await whileAnswered<Told>(told => run(true, told), told => hear(new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))))
+    if (!isDone) await changed()
+    const rest = ids.filter(id => !verdicts.has(id))
+    if (rest.length > 0) hear(await elsewhere(rest))
     return verdicts
   }
 
@@ -191,9 +190,9 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     return isDropped
   }
 
-  /** Takes a refused entry away that its author has recorded anew. */
-  async function replaced(id: string): Promise<void> {
-    await box.giveBack([id])
+  /** Takes refused entries away: the form that shows them has them again, or they were recorded anew. */
+  async function giveBack(ids: readonly string[]): Promise<void> {
+    await box.giveBack(ids)
     await changed()
   }
 
@@ -214,7 +213,7 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
     return recorded.filter(entry => entry.personId === state.personId.value)
   }
 
-  return { attend, reread, put, number, sendNow, flush, takeOut, drop, replaced, loadDropped, recordedLately, exportFile }
+  return { attend, reread, put, number, sendNow, flush, takeOut, drop, giveBack, loadDropped, recordedLately, exportFile }
 }
 
 function verdictsOf({ settlement, answer }: Told): Map<string, Verdict> {

@@ -1,4 +1,5 @@
 import { useApi } from '~~/composables/useApi'
+import { useOutboxStore } from '~~/stores/outbox'
 import { usePostingStore } from '~~/stores/posting'
 import type { CylinderView } from '~~/utils/contract/custody'
 import { formatLabelCode, normaliseLabelCode } from '~~/utils/label/code'
@@ -13,18 +14,33 @@ export function useCylinder(enabled: () => boolean = () => true) {
   const api = useApi()
   const route = useRoute('c-ref')
   const posting = usePostingStore()
+  const outbox = useOutboxStore()
 
   const ref_ = computed(() => String(route.params.ref))
   const asked = computed(() => typeof route.query.refrigerant === 'string' ? route.query.refrigerant : null)
   const code = computed(() => normaliseLabelCode(ref_.value))
 
+  let turn = 0
+
   const request = useAsyncData(
     () => `cylinder-${ref_.value}-${asked.value ?? ''}`,
-    async () => enabled()
-      ? await api.get<CylinderView>(`/api/cylinders/${encodeURIComponent(ref_.value)}`, asked.value ? { refrigerant: asked.value } : undefined)
-      : null,
+    async () => {
+      if (!enabled()) return null
+      const mine = ++turn
+      return await api.get<CylinderView>(
+        `/api/cylinders/${encodeURIComponent(ref_.value)}`,
+        asked.value ? { refrigerant: asked.value } : undefined,
+        // What waits here is in the copy's answer, and not in the server's.
+        later => mine === turn && outbox.pendingOf(later.id).length === 0 && show(later),
+      )
+    },
     { watch: [() => posting.recorded] },
   )
+
+  function show(later: CylinderView): true {
+    request.data.value = later
+    return true
+  }
 
   const { data: view, error, status, refresh } = request
   const name = computed(() => {

@@ -14,14 +14,28 @@ export function useLatestLines() {
   const rules = useFirmRulesStore()
   const posting = usePostingStore()
 
+  let turn = 0
+
   const request = useAsyncData(() => `around-${String(route.params.ref)}`, async () => {
     if (!session.user) return null
+    const mine = ++turn
     const [log] = await Promise.all([
-      api.get<CustodyLogAnswer>(`/api/cylinders/${encodeURIComponent(String(route.params.ref))}/events`, { limit: LINES_SHOWN }).catch(() => null),
+      api.get<CustodyLogAnswer>(
+        `/api/cylinders/${encodeURIComponent(String(route.params.ref))}/events`, { limit: LINES_SHOWN }, later => mine === turn && show(later),
+      ).catch(() => null),
       rules.load(),
     ])
-    return { lines: log?.items ?? [], total: log?.total ?? 0, isWithServer: log === null || log.isWithServer === true }
+    return linesOf(log)
   }, { watch: [() => posting.recorded] })
 
+  function show(later: CustodyLogAnswer): true {
+    request.data.value = linesOf(later)
+    return true
+  }
+
   return { ready: request as PromiseLike<unknown>, latest: request.data }
+}
+
+function linesOf(log: CustodyLogAnswer | null) {
+  return { lines: log?.items ?? [], total: log?.total ?? 0, isWithServer: log === null || log.isWithServer === true }
 }

@@ -24,7 +24,7 @@ export function useMending(restored: () => boolean, begin: (entry: OutboxEntry, 
     if (!restored()) begin(entry, { at: deviceNow(Date.parse(occurredAt)).slice(0, 19), supervisorId, note })
   })
 
-  return { id, photoIds, done: async () => id === null ? undefined : outbox.replaced(id) }
+  return { id, photoIds, done: async () => id === null ? undefined : outbox.giveBack([id]) }
 }
 
 /** The entry that the page's address asks to mend. */

@@ -91,7 +91,7 @@ export const useOutboxStore = defineStore('outbox', () => {
     flush: by(acts => acts.flush),
     takeOut: by(acts => acts.takeOut),
     drop: by(acts => acts.drop),
-    replaced: by(acts => acts.replaced),
+    giveBack: by(acts => acts.giveBack),
     loadDropped: by(acts => acts.loadDropped),
     recordedLately: by(acts => acts.recordedLately),
     exportFile: by(acts => acts.exportFile),

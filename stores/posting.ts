@@ -100,8 +100,10 @@ export const usePostingStore = defineStore('posting', () => {
       each(some)
     }
     const heard: Promise<void>[] = []
-    await outbox.sendNow(kept.map(({ id }) => id), verdicts => heard.push(take(verdicts)))
+    const verdicts = await outbox.sendNow(kept.map(({ id }) => id), some => heard.push(take(some)))
     await Promise.all(heard)
+    const refused = [...verdicts].filter(([, { is }]) => is === 'refused').map(([id]) => id)
+    if (refused.length > 0) await outbox.giveBack(refused).catch(() => {})
     // Where the session has ended, asking for the cylinder again would lead away from what was just said.
     if (outbox.pause !== 'sign-in' && [...all.values()].some(({ posted }) => posted?.isQueued)) recorded.value++
     return kept.map(({ id }) => all.get(id)!)
@@ -175,7 +177,9 @@ export const usePostingStore = defineStore('posting', () => {
       }
       const arrived = await arrivedOf(taken)
       if (arrived === null) {
-        say('Not taken back: it may have been sent, and the server was not reached. Correct it in the custody log later.')
+        say(taken.some(({ event }) => outbox.refused.some(({ id }) => id === event.id))
+          ? 'It was refused, so it is not recorded. Mend it or drop it where it waits.'
+          : 'Not taken back: it may have been sent, and the server was not reached. Correct it in the custody log later.')
         return
       }
       const settled = await postAll(arrived.map(({ event, version }) => seal<'corrected'>({
