@@ -32,10 +32,10 @@ export async function openPhotoBox() {
     },
   })
   return {
-    /** A person's photos in the order in which they were taken. */
-    async of(personId: string, nowMs: number): Promise<HeldPhoto[]> {
+    /** A person's photos in the order in which they were taken; `named` are those that an event of this device speaks of. */
+    async of(personId: string, nowMs: number, named: ReadonlySet<string> = new Set()): Promise<HeldPhoto[]> {
       const all = await box.getAllFromIndex('photos', 'person', personId)
-      const forgotten = all.filter(({ form, takenAt }) => form !== null && nowMs - Date.parse(takenAt) > FORM_WAITS_MS)
+      const forgotten = all.filter(({ id, form, takenAt }) => form !== null && !named.has(id) && nowMs - Date.parse(takenAt) > FORM_WAITS_MS)
       await Promise.all(forgotten.map(({ id }) => box.delete('photos', id)))
       return all.filter(photo => !forgotten.includes(photo)).sort((a, b) => a.id.localeCompare(b.id))
     },

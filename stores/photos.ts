@@ -1,5 +1,6 @@
 import { defineStore } from 'pinia'
 import { v7 as uuidv7 } from 'uuid'
+import { answerWithin } from '~~/composables/answerWithin'
 import { deviceNow } from '~~/composables/deviceNow'
 import { problemOf } from '~~/composables/useApi'
 import type { HeldPhoto } from '~~/composables/photoBox'
@@ -11,6 +12,8 @@ import { PHOTOS_WAIT_KEY } from '~~/utils/photo/waitKey'
 
 /** How long it is waited before photos are tried again, longer each time. */
 const TRY_AGAIN_MS = [5_000, 15_000, 60_000]
+/** A photo that takes longer to arrive is tried again later. Units: milliseconds. Our choice. */
+const ANSWER_WITHIN_MS = 120_000
 /** Answers that another try would only repeat. */
 const FINAL = new Set([400, 403, 404, 409, 413, 415, 422])
 
@@ -45,8 +48,16 @@ export const usePhotosStore = defineStore('photos', () => {
     await loaded.done
   }
 
+  /** Those of events that were recorded from here of late. */
+  async function namedLately(): Promise<ReadonlySet<string>> {
+    await outbox.read()
+    return new Set((await outbox.recordedLately().catch(() => [])).flatMap(({ event }) => event.photoIds ?? []))
+  }
+
   async function find(personId: string) {
-    const found = await inBox(box => box.of(personId, Date.now())) ?? []
+    const lately = await namedLately()
+    const named = new Set([...lately, ...awaited.value])
+    const found = await inBox(box => box.of(personId, Date.now(), named)) ?? []
     all.value = [...found, ...all.value.filter(({ id }) => !found.some(each => each.id === id))]
     note()
     void send()
@@ -89,6 +100,13 @@ export const usePhotosStore = defineStore('photos', () => {
     void send()
   }
 
+  /** Where the page was closed after its event was saved and before its photos were let go, these go once it is recorded. */
+  async function releaseNamed(): Promise<void> {
+    if (held.value.every(({ form }) => form === null)) return
+    const named = await namedLately()
+    for (const photo of held.value) if (photo.form !== null && named.has(photo.id)) await keep({ ...photo, form: null })
+  }
+
   /** The form was given up, and its photos with it. */
   async function drop(form: string): Promise<void> {
     for (const { id } of ofForm(form)) await remove(id)
@@ -101,6 +119,7 @@ export const usePhotosStore = defineStore('photos', () => {
     clearTimeout(timer)
     try {
       await outbox.read()
+      await releaseNamed()
       for (let next = waiting.value[0]; next; next = waiting.value[0]) {
         const problem = await post(next)
         if (problem === null) {
@@ -162,7 +181,7 @@ async function post({ id, subject, takenAt, eventId, bytes }: HeldPhoto): Promis
   for (const [name, value] of Object.entries({ id, subject, takenAt, ...(eventId && { eventId }) })) form.append(name, value)
   form.append('file', new Blob([bytes]), 'photo')
   try {
-    await $fetch<unknown>('/api/uploads', { method: 'POST', body: form, retry: false })
+    await answerWithin(ANSWER_WITHIN_MS, signal => $fetch<unknown>('/api/uploads', { method: 'POST', body: form, retry: false, signal }))
     return null
   }
   catch (error) {

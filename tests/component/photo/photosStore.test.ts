@@ -1,17 +1,24 @@
 import 'fake-indexeddb/auto'
 import { registerEndpoint } from '@nuxt/test-utils/runtime'
 import { flushPromises } from '@vue/test-utils'
-import { setResponseStatus } from 'h3'
+import { readBody, setResponseStatus } from 'h3'
 import { createPinia, setActivePinia } from 'pinia'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { openPhotoBox } from '~~/composables/photoBox'
+import { useOutboxStore } from '~~/stores/outbox'
 import { usePhotosStore } from '~~/stores/photos'
+import { usePostingStore } from '~~/stores/posting'
 import { useSessionStore } from '~~/stores/session'
+import type { CustodyEvent } from '~~/utils/custody/event'
 import { PHOTOS_WAIT_KEY } from '~~/utils/photo/waitKey'
 
 /** The status and the detail of what the server refuses with; null where it takes the photo. */
 let refusal: (() => [status: number, detail: string] | null)
 let asked = 0
+registerEndpoint('/api/events', {
+  method: 'POST',
+  handler: async event => ({ results: (await readBody<{ events: CustodyEvent[] }>(event)).events.map(({ id }) => ({ id, outcome: 'accepted', version: 1 })), cylinders: [] }),
+})
 registerEndpoint('/api/uploads', {
   method: 'POST',
   handler: (event) => {
@@ -84,6 +91,41 @@ describe('a photo of a form', () => {
     await store.drop('form')
     expect(store.held.map(({ form }) => form)).toEqual(['other'])
     expect((await inBox('tina')).map(({ form }) => form)).toEqual(['other'])
+  })
+})
+
+describe('a photo of an event that was saved before the page was killed', () => {
+  const twoDaysAgo = new Date(Date.now() - 48 * 3_600_000).toISOString()
+
+  async function saveAndKill(online: boolean) {
+    const store = visit('tina')
+    await store.take('form', BYTES, 'scale')
+    const photo = store.ofForm('form')[0]!
+    await store.keep({ ...photo, takenAt: twoDaysAgo })
+    vi.spyOn(navigator, 'onLine', 'get').mockReturnValue(online)
+    const posting = usePostingStore()
+    await posting.post(posting.seal<'weighed'>({
+      cylinderId: 'c1', kind: 'weighed', occurredAt: twoDaysAgo, photoIds: [photo.id], details: { gross: { value: 40, unit: 'lb' } } as never,
+    }) as CustodyEvent)
+  }
+  afterEach(() => vi.restoreAllMocks())
+
+  it('is kept for as long as the event waits, and is sent once that is recorded', async () => {
+    await saveAndKill(false)
+    const store = visit('tina')
+    await store.load()
+    await flushPromises()
+    expect([store.held.length, asked]).toEqual([1, 0])
+    vi.restoreAllMocks()
+    await useOutboxStore().flush()
+    await vi.waitFor(() => expect([store.arrived, store.held.length]).toEqual([1, 0]))
+  })
+
+  it('is sent where the event was recorded', async () => {
+    await saveAndKill(true)
+    const store = visit('tina')
+    await store.load()
+    await vi.waitFor(() => expect([store.arrived, store.held.length]).toEqual([1, 0]))
   })
 })
 
