@@ -18,8 +18,10 @@ export interface KitAbout {
 
 /** What a part of the server's answer changes in the copy. */
 export interface KitChange {
-  /** What was there before goes. */
+  /** The cylinders that were there before go; the firm is known by a tag of its own. */
   anew: boolean
+  /** How far the copy had come when the answer was asked for. */
+  before: KitAbout | null
   about: KitAbout
   entries: readonly KitEntry[]
   firm: KitFirm | null
@@ -70,18 +72,22 @@ export function kitBox() {
     firm: () => using(async box => await box.get('firm', 'firm') ?? null),
     count: () => using(box => box.count('cylinders')),
 
-    /** Takes a part of the server's answer whole or not at all. */
-    take: ({ anew, about, entries, firm }: KitChange) => using(async (box) => {
+    /** Takes a part of the server's answer whole or not at all: not where the copy is no longer what was asked from, for another tab has cleared it or brought it further. */
+    take: ({ anew, before, about, entries, firm }: KitChange) => using(async (box) => {
       const all = box.transaction(['cylinders', 'about', 'firm'], 'readwrite')
       const [cylinders, abouts, firms] = [all.objectStore('cylinders'), all.objectStore('about'), all.objectStore('firm')]
+      const isAsAsked = JSON.stringify(await abouts.get('kit') ?? null) === JSON.stringify(before)
       // A request that fails ends the transaction, and `done` tells of it: nobody waits for each.
-      const put = [
-        ...anew ? [cylinders.clear(), abouts.clear(), firms.clear()] : [],
-        ...entries.map(entry => cylinders.put(entry)),
-        ...firm === null ? [] : [firms.put(firm, 'firm')],
-        abouts.put(about, 'kit'),
-      ]
+      const put = isAsAsked
+        ? [
+            ...anew ? [cylinders.clear()] : [],
+            ...entries.map(entry => cylinders.put(entry)),
+            ...firm === null ? [] : [firms.put(firm, 'firm')],
+            abouts.put(about, 'kit'),
+          ]
+        : []
       await Promise.all([...put, all.done])
+      return isAsAsked
     }),
 
     clear: () => using(async (box) => {

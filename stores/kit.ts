@@ -82,8 +82,9 @@ export const useKitStore = defineStore('kit', () => {
     const { anew, firm: told, cylinders, next, more } = answer
     const { tag, ...firm } = told ?? { tag: before?.firmTag ?? '' }
     const now = { personId, form: KIT_FORM, seq: answer.seq, mark: answer.mark, next, firmTag: tag, followedAt: Date.now() }
-    const taken = await inBox(() => box.take({ anew, about: now, entries: cylinders.map(kitEntry), firm: told ? firm as KitFirm : null }).then(() => true))
+    const taken = await inBox(() => box.take({ anew, before, about: now, entries: cylinders.map(kitEntry), firm: told ? firm as KitFirm : null }))
     if (taken) about.value = now
+    if (taken === false) await find()
     return taken === true && (next !== null || more)
   }
 

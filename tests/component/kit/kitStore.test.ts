@@ -20,12 +20,13 @@ const [ONE, TWO, THREE] = ['0198f000-0000-7000-8000-000000000101', '0198f000-000
 const inShop = stateOf(ONE, registered(), did('labelled', { code: '7K3M9Q2TX' }), filled('R-22', 22))
 const inVan = stateOf(TWO, registered({ stamp: { serial: 'B-77 31', spec: 'DOT-4BA', servicePressurePsig: 400, tareWeight: kg(12), waterCapacity: kg(20), madeMonth: '2024-03', flammableMarked: true } }), did('moved', { toPlaceId: VAN, toHolderId: TECHNICIAN }))
 
-/** What the server answers, one after another; the status of a refusal in place of one. */
-let answers: (KitAnswer | number)[] = []
+/** What the server answers, one after another; the status of a refusal in place of one, or what happens before it answers. */
+let answers: (KitAnswer | number | (() => Promise<KitAnswer>))[] = []
 let asked: Record<string, unknown>[] = []
 registerEndpoint('/api/kit', (event) => {
   asked.push(getQuery(event))
   const next = answers.shift() ?? kitAnswerOf([], { seq: 9, firm: undefined })
+  if (typeof next === 'function') return next()
   if (typeof next !== 'number') return next
   setResponseStatus(event, next)
   return { type: 'about:blank', title: 'No', status: next, detail: '' }
@@ -100,6 +101,35 @@ describe('the copy of the firm on a phone', () => {
     await kit.follow()
     expect([kit.count, kit.seq]).toEqual([1, 2])
     expect(await offlineAnswer(`/api/cylinders/${THREE}`)).toMatchObject({ id: THREE })
+  })
+
+  it('keeps the firm where only its cylinders come anew, for the server does not send again what the phone has of it', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5 }), kitAnswerOf([inVan], { anew: true, seq: 5, mark: 'aaaaaaaaaaaaaaaa', firm: undefined })]
+    await visit().start()
+    await visit().start()
+    expect(asked).toHaveLength(2)
+    visit()
+    expect(await offlineAnswer(`/api/cylinders/${TWO}`)).toMatchObject({ id: TWO, place: { name: 'Van 7' } })
+  })
+
+  it.each([
+    ['the first walk', kitAnswerOf([inVan], { seq: 5, firm: undefined })],
+    ['what has changed since', kitAnswerOf([inVan], { seq: 6, firm: undefined })],
+  ])('begins anew, and not in the middle, where another tab signs out while a part of %s is on its way', async (walk, part) => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5, next: walk === 'the first walk' ? ONE : null }), async () => {
+      const otherTab = kitBox()
+      await otherTab.clear()
+      await otherTab.close()
+      return part
+    }]
+    const kit = visit()
+    await kit.start()
+    if (asked.length === 1) await kit.follow()
+    expect(await kitBox().about()).toBeNull()
+    answers = [kitAnswerOf([inShop, inVan], { anew: true, seq: 6 })]
+    await visit().start()
+    expect(asked.at(-1)).toEqual({})
+    expect(await offlineAnswer(`/api/cylinders/${ONE}`)).toMatchObject({ id: ONE })
   })
 
   it('leaves an answer of another form alone', async () => {

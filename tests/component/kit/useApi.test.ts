@@ -42,7 +42,7 @@ beforeEach(async () => {
   asked = 0
   useSessionStore().set({ id: TECHNICIAN, name: 'Tina', email: 'tina@firm.example', roles: ['technician'], trainee: false } as never)
   await kitBox().take({
-    anew: true, entries: [kitEntry(packCylinder(stateOf(ID, registered())))], firm: KIT_FIRM,
+    anew: true, before: null, entries: [kitEntry(packCylinder(stateOf(ID, registered())))], firm: KIT_FIRM,
     about: { personId: TECHNICIAN, form: KIT_FORM, seq: 1, mark: '0123456789abcdef', next: null, firmTag: 'fedcba9876543210', followedAt: COPIED_AT },
   })
 })
@@ -86,5 +86,61 @@ describe('what is asked of the server', () => {
     const { api } = await theApi()
     await expect(api.get('/api/reports/mass-balance')).rejects.toMatchObject({ statusCode: 0 })
     await expect(api.getFresh(`/api/cylinders/${ID}`)).rejects.toMatchObject({ statusCode: 0 })
+  })
+})
+
+describe('what the server is long in answering', () => {
+  let answer: (body: unknown) => void
+  let fail: (error: Error) => void
+
+  beforeEach(() => {
+    vi.useFakeTimers({ toFake: ['setTimeout', 'clearTimeout'], shouldAdvanceTime: true })
+    vi.stubGlobal('$fetch', () => new Promise((done, failed) => {
+      [answer, fail] = [done, failed]
+    }))
+  })
+  afterEach(() => vi.useRealTimers())
+
+  const BY_THE_SERVER = { id: ID, labelCode: 'by the server' }
+
+  it('comes from the server where it answers just before three seconds are over', async () => {
+    const { cylinder, copyOf } = await theApi()
+    const found = cylinder()
+    await vi.advanceTimersByTimeAsync(2_800)
+    answer(BY_THE_SERVER)
+    expect([(await found).labelCode, copyOf()]).toEqual(['by the server', null])
+  })
+
+  it('comes from the phone\'s copy after three seconds, and from the server as soon as it has answered', async () => {
+    const { api, copyOf } = await theApi()
+    const later = vi.fn(() => true)
+    const found = api.get<CylinderView>(`/api/cylinders/${ID}`, undefined, later)
+    await vi.advanceTimersByTimeAsync(3_000)
+    expect((await found).stamp?.serial).toBe('A1001')
+    expect([copyOf(), later.mock.calls]).toEqual([COPIED_AT, []])
+    answer(BY_THE_SERVER)
+    await vi.waitFor(() => expect(later.mock.calls).toEqual([[BY_THE_SERVER]]))
+    expect(copyOf()).toBeNull()
+  })
+
+  it.each([
+    ['nobody shows what comes later', () => answer(BY_THE_SERVER)],
+    ['it fails in the end', () => fail(new TypeError('Failed to fetch'))],
+  ])('is marked as the copy\'s for as long as the copy\'s is shown: %s', async (_, end) => {
+    const { cylinder, copyOf } = await theApi()
+    const found = cylinder()
+    await vi.advanceTimersByTimeAsync(3_000)
+    await found
+    end()
+    await vi.advanceTimersByTimeAsync(10)
+    expect(copyOf()).toBe(COPIED_AT)
+  })
+
+  it('is waited for where the copy has no answer to it', async () => {
+    const { api, copyOf } = await theApi()
+    const found = api.get('/api/reports/mass-balance')
+    await vi.advanceTimersByTimeAsync(30_000)
+    answer('the report')
+    expect([await found, copyOf()]).toEqual(['the report', null])
   })
 })

@@ -53,7 +53,7 @@ beforeEach(async () => {
   })
   useSessionStore().set({ id: TECHNICIAN, name: 'Tina', email: 'tina@firm.example', roles: ['technician'], trainee: false } as never)
   await kitBox().take({
-    anew: true, entries: [kitEntry(packCylinder(stateOf(ID, ...STORY)))], firm: KIT_FIRM,
+    anew: true, before: null, entries: [kitEntry(packCylinder(stateOf(ID, ...STORY)))], firm: KIT_FIRM,
     about: { personId: TECHNICIAN, form: KIT_FORM, seq: 1, mark: '0123456789abcdef', next: null, firmTag: 'fedcba9876543210', followedAt: COPIED_AT },
   })
 })
@@ -100,7 +100,8 @@ describe('a scanned code', () => {
   })
 
   it('is left to the server where the copy does not have it, and is on no cylinder of the copy where the server fails', async () => {
-    await kitBox().take({ anew: true, entries: [], firm: KIT_FIRM, about: { personId: TECHNICIAN, form: KIT_FORM, seq: 1, mark: '0123456789abcdef', next: null, firmTag: 'fedcba9876543210', followedAt: COPIED_AT } })
+    await kitBox().clear()
+    await kitBox().take({ anew: true, before: null, entries: [], firm: KIT_FIRM, about: { personId: TECHNICIAN, form: KIT_FORM, seq: 1, mark: '0123456789abcdef', next: null, firmTag: 'fedcba9876543210', followedAt: COPIED_AT } })
     const { lookup, wrapper } = await scanner()
     void lookup.look(CODE)
     tell(503)
