@@ -100,12 +100,11 @@ describe('signing in', () => {
 
   it('has to wait after five failures from one address, told in seconds', async () => {
     const email = 'guessed@harbor.example'
-    for (let n = 0; n < 5; n++) expect((await from('203.0.113.2', email, `guess-${n}`)).status).toBe(401)
-    const sixth = await from('203.0.113.2', email, 'guess-5')
-    expect(sixth.status).toBe(429)
-    expect(sixth.headers.get('retry-after')).toBe('1')
+    // All at once: a try counts from its beginning, and the wait of a second would pass while a busy machine answers one by one.
     // What a caller writes before our proxy's word does not make it another caller.
-    expect((await from('198.51.100.7, 203.0.113.2', email, 'guess-6')).status).toBe(429)
+    const tries = await Promise.all(Array.from({ length: 7 }, (_, n) => from(n % 2 === 0 ? '203.0.113.2' : '198.51.100.7, 203.0.113.2', email, `guess-${n}`)))
+    expect(tries.map(one => one.status).sort()).toEqual([401, 401, 401, 401, 401, 429, 429])
+    for (const refused of tries.filter(one => one.status === 429)) expect(refused.headers.get('retry-after')).toBe('1')
     expect((await from('203.0.113.3', email, 'guess-7')).status).toBe(401)
   })
 
@@ -264,8 +263,8 @@ describe('guessing with a borrowed session', () => {
   it('has to wait after five wrong present passwords', async () => {
     const rita = await addMember(admin, 'Rita', ['technician'])
     const guess = (n: number) => rita.client.post('/api/session/password', { current: `guess-${n}`, next: 'green-hose-on-left' })
-    for (let n = 0; n < 5; n++) expect((await guess(n)).status).toBe(403)
-    expect((await guess(5)).status).toBe(429)
+    const tries = await Promise.all(Array.from({ length: 6 }, (_, n) => guess(n)))
+    expect(tries.map(one => one.status).sort()).toEqual([403, 403, 403, 403, 403, 429])
   })
 })
 
