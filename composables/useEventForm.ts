@@ -6,7 +6,7 @@ import { usePostingStore, type NewEvent, type Posted } from '~~/stores/posting'
 /** The form of one event, kept until it is recorded; its parts are those of {@link useKeptForm}. */
 export function useEventForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string = () => '', keptOn: KeptOn = 'tab') {
   const posting = usePostingStore()
-  const { draft, envelope, restored, endedElsewhere, busy, problem, startOver, recorded, sealedOnce } = useKeptForm(key, empty, supervisorId, keptOn)
+  const { draft, envelope, restored, endedElsewhere, busy, problem, startOver, recorded, sealedOnce, takePlaceOf, takesRefusal } = useKeptForm(key, empty, supervisorId, keptOn)
   const posted = shallowRef<Posted | null>(null)
 
   /** Records what the form says; whatever goes wrong, the form stays as it is and says so. */
@@ -15,7 +15,7 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
     problem.value = null
     const [event] = sealedOnce([content])
     try {
-      posted.value = await posting.post(event!)
+      posted.value = await posting.post(event!, takesRefusal)
       posting.announce(posted.value)
       recorded()
       return posted.value
@@ -29,5 +29,5 @@ export function useEventForm<Draft extends object>(key: string, empty: () => Dra
     }
   }
 
-  return { draft, envelope, restored, endedElsewhere, busy, problem, posted, send, startOver }
+  return { draft, envelope, restored, endedElsewhere, busy, problem, posted, send, startOver, takePlaceOf }
 }

@@ -23,7 +23,7 @@ interface Kept<Draft> {
  *
  * Shape: `key` names the form, by cylinder and kind; `supervisorId` is whom a trainee's form begins with, '' for nobody;
  * a form that is kept on the device is the same in all its tabs, and `endedElsewhere` once one of them has ended it;
- * `sealedOnce` makes the events to send, `recorded` forgets what was kept.
+ * `sealedOnce` makes the events to send, `takesRefusal` is asked once they are refused, `recorded` forgets what was kept.
  */
 export function useKeptForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string, keptOn: KeptOn = 'tab') {
   const posting = usePostingStore()
@@ -38,7 +38,12 @@ export function useKeptForm<Draft extends object>(key: string, empty: () => Draf
   /** Kept on the device, it was recorded or put away in another tab. */
   const endedElsewhere = ref(false)
   let isFollowing = false
+  let isHere = true
+  let takesPlace = false
 
+  onBeforeUnmount(() => {
+    isHere = false
+  })
   onMounted(() => {
     if (kept.value) takeUp(kept.value)
     watch([draft, envelope], () => {
@@ -103,5 +108,14 @@ export function useKeptForm<Draft extends object>(key: string, empty: () => Draf
     return events
   }
 
-  return { draft, envelope, restored, endedElsewhere, busy, problem, startOver, recorded, sealedOnce }
+  /** What is recorded takes the place of a refused event of this device, as the same one: both never stand. */
+  function takePlaceOf(event: CustodyEvent) {
+    takesPlace = true
+    sent.value ??= { content: '', events: [event] }
+  }
+
+  /** Whether a refusal is shown here alone; else it stands where what is not sent does. */
+  const takesRefusal = () => isHere && !takesPlace
+
+  return { draft, envelope, restored, endedElsewhere, busy, problem, startOver, recorded, sealedOnce, takePlaceOf, takesRefusal }
 }

@@ -11,7 +11,7 @@ export type NewHalf = Omit<NewEvent, 'occurredAt'>
  */
 export function usePairForm<Draft extends object>(key: string, empty: () => Draft, supervisorId: () => string) {
   const posting = usePostingStore()
-  const { draft, envelope, restored, busy, problem, startOver, recorded, sealedOnce } = useKeptForm(key, empty, supervisorId)
+  const { draft, envelope, restored, busy, problem, startOver, recorded, sealedOnce, takesRefusal } = useKeptForm(key, empty, supervisorId)
   const posted = shallowRef<Posted[] | null>(null)
 
   /** Records both halves; whatever goes wrong, the form stays as it is and says so. */
@@ -19,7 +19,7 @@ export function usePairForm<Draft extends object>(key: string, empty: () => Draf
     busy.value = true
     problem.value = null
     try {
-      const settled = await posting.postAll(sealedOnce(halves))
+      const settled = await posting.postAll(sealedOnce(halves), undefined, takesRefusal)
       // The half that is at fault says why; the other was only held back.
       const refusals = settled.flatMap(each => each.problem ? [each.problem] : [])
       if (refusals.length > 0) problem.value = refusals.find(({ status }) => status !== 409) ?? refusals[0]!

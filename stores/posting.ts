@@ -57,8 +57,8 @@ export const usePostingStore = defineStore('posting', () => {
   }
 
   /** Errors: ApiError where the event was refused, or neither recorded nor saved; it is then still its author's. */
-  async function post(event: CustodyEvent): Promise<Posted> {
-    const [settled] = await postAll([event])
+  async function post(event: CustodyEvent, takesRefusals?: () => boolean): Promise<Posted> {
+    const [settled] = await postAll([event], undefined, takesRefusals)
     if (settled!.problem) throw new ApiError(settled!.problem)
     return settled!.posted!
   }
@@ -67,21 +67,24 @@ export const usePostingStore = defineStore('posting', () => {
    * Records several events: each is on this device before it is sent, and stays there until the server has said what
    * became of it.
    *
-   * Shape: what became of each, in their order; `each` is told of every request's as soon as it is answered.
+   * Shape: what became of each, in their order; `each` is told of every request's as soon as it is answered;
+   * `takesRefusals` whether the caller has what was refused: else it stays on the device as such.
    * Errors: ApiError where they could not be saved, or need a server that was not reached; what `each` was told of
    * before that is recorded.
    */
-  async function postAll(events: readonly CustodyEvent[], each: (settled: Settled[]) => void = () => {}): Promise<Settled[]> {
+  async function postAll(
+    events: readonly CustodyEvent[], each: (settled: Settled[]) => void = () => {}, takesRefusals: () => boolean = () => true,
+  ): Promise<Settled[]> {
     busy.value = true
     try {
-      return events.some(needsServer) ? await postAtOnce(events, each) : await postByOutbox(events, each)
+      return events.some(needsServer) ? await postAtOnce(events, each) : await postByOutbox(events, each, takesRefusals)
     }
     finally {
       busy.value = false
     }
   }
 
-  async function postByOutbox(events: readonly CustodyEvent[], each: (settled: Settled[]) => void): Promise<Settled[]> {
+  async function postByOutbox(events: readonly CustodyEvent[], each: (settled: Settled[]) => void, takesRefusals: () => boolean): Promise<Settled[]> {
     let kept: CustodyEvent[]
     try {
       kept = await outbox.put(events)
@@ -103,7 +106,7 @@ export const usePostingStore = defineStore('posting', () => {
     const verdicts = await outbox.sendNow(kept.map(({ id }) => id), some => heard.push(take(some)))
     await Promise.all(heard)
     const refused = [...verdicts].filter(([, { is }]) => is === 'refused').map(([id]) => id)
-    if (refused.length > 0) await outbox.giveBack(refused).catch(() => {})
+    if (refused.length > 0 && takesRefusals()) await outbox.giveBack(refused).catch(() => {})
     // Where the session has ended, asking for the cylinder again would lead away from what was just said.
     if (outbox.pause !== 'sign-in' && [...all.values()].some(({ posted }) => posted?.isQueued)) recorded.value++
     return kept.map(({ id }) => all.get(id)!)
