@@ -216,6 +216,81 @@ describe('an event where it is not reached', () => {
   })
 })
 
+describe('an event whose answer does not come', () => {
+  /** The requests that wait for their answer; each is let through by a call. */
+  let hanging: (() => void)[]
+
+  beforeEach(() => {
+    hanging = []
+    const reached = globalThis.$fetch
+    vi.stubGlobal('$fetch', (path: string, options: Parameters<typeof $fetch>[1]) => new Promise((done, failed) => {
+      options?.signal?.addEventListener('abort', () => failed(new Error('aborted')))
+      hanging.push(() => done(reached(path, { ...options, signal: undefined })))
+    }))
+  })
+
+  /** Posts an event, and lets time pass until its form is free. */
+  async function posted(posting: ReturnType<typeof usePostingStore>, event: CustodyEvent) {
+    const posted = posting.post(event)
+    await vi.waitFor(() => expect(hanging).toHaveLength(1))
+    await vi.advanceTimersByTimeAsync(3_000)
+    return await posted
+  }
+
+  it('is recorded as ever where the answer comes just before three seconds are over', async () => {
+    const { posting } = visit('tina')
+    const posted = posting.post(weighed(posting))
+    await vi.waitFor(() => expect(hanging).toHaveLength(1))
+    await vi.advanceTimersByTimeAsync(2_700)
+    hanging[0]!()
+    expect(await posted).toMatchObject({ version: 1 })
+  })
+
+  it('frees its form after three seconds, and is known to be recorded once the answer comes', async () => {
+    const { outbox, posting } = visit('tina')
+    expect(await posted(posting, weighed(posting))).toMatchObject({ isQueued: true, version: null })
+    expect([posting.busy, outbox.waiting.map(({ state }) => state)]).toEqual([false, ['sending']])
+    const before = posting.recorded
+    hanging[0]!()
+    await vi.waitFor(() => expect([outbox.entries.length, posting.recorded]).toEqual([0, before + 1]))
+    expect(log.size).toBe(1)
+  })
+
+  it('stays where it is refused after its form is gone', async () => {
+    refuses = () => true
+    const { outbox, posting } = visit('tina')
+    await posted(posting, weighed(posting))
+    hanging[0]!()
+    await vi.waitFor(() => expect(outbox.refused.map(({ problem }) => problem?.detail)).toEqual(['Choose again.']))
+    expect((await inBox()).map(({ state }) => state)).toEqual(['refused'])
+  })
+
+  it('may have arrived: after fifteen seconds it waits, is not taken out, and goes again', async () => {
+    const { outbox, posting } = visit('tina')
+    const { event } = await posted(posting, weighed(posting))
+    await vi.advanceTimersByTimeAsync(12_000)
+    await vi.waitFor(() => expect(outbox.pause).toBe('offline'))
+    expect((await inBox()).map(({ state, firstSentAt }) => [state, firstSentAt === null])).toEqual([['queued', false]])
+    expect(await outbox.takeOut([event.id])).toBe(false)
+    void outbox.flush()
+    await vi.waitFor(() => expect(hanging).toHaveLength(2))
+    hanging[1]!()
+    await vi.waitFor(() => expect([log.size, outbox.entries.length]).toEqual([1, 0]))
+  })
+
+  it('does not hold up one that follows it: both wait, and go in their order', async () => {
+    const { outbox, posting } = visit('tina')
+    await posted(posting, weighed(posting, 'one'))
+    expect(await posted(posting, weighed(posting, 'two'))).toMatchObject({ isQueued: true })
+    expect(outbox.waiting.map(({ event }) => event.note)).toEqual(['one', 'two'])
+    hanging[0]!()
+    await vi.waitFor(() => expect(hanging).toHaveLength(2))
+    hanging[1]!()
+    await vi.waitFor(() => expect(outbox.entries).toEqual([]))
+    expect([...log.values()].map(({ note }) => note)).toEqual(['one', 'two'])
+  })
+})
+
 describe('what the server refuses later', () => {
   it('stays with its problem and holds nothing up, until it is dropped with a reason that is kept', async () => {
     online = false
