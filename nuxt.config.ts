@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto'
 import { cpSync } from 'node:fs'
 import { join } from 'node:path'
+import { sharedParts } from './build/sharedParts'
 import { WEB_MANIFEST } from './service-worker/webManifest'
 
 export default defineNuxtConfig({
@@ -70,7 +71,10 @@ export default defineNuxtConfig({
       },
     },
   },
-  vite: { optimizeDeps: { include: ['vue-qrcode-reader', 'qrcode'] } },
+  vite: {
+    optimizeDeps: { include: ['vue-qrcode-reader', 'qrcode'] },
+    $client: { build: { rollupOptions: { output: { manualChunks: sharedParts(), onlyExplicitManualChunks: true } } } },
+  },
   // The worker is checked apart, with a worker's globals: tsconfig.worker.json.
   typescript: { strict: true, typeCheck: false, tsConfig: { exclude: ['../service-worker/sw.ts'] } },
   telemetry: false,

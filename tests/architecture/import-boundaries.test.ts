@@ -27,6 +27,7 @@ const SCREEN = ['components', 'composables', 'stores', 'layouts', 'pages', 'midd
 
 /** Top folders and the top folders that each may import. */
 const TOP: Record<string, readonly string[]> = {
+  'build': [],
   'types': [],
   'service-worker': [],
   'drizzle': ['utils'],
