@@ -1,4 +1,5 @@
 import { defineStore } from 'pinia'
+import { answerWithin } from '~~/composables/answerWithin'
 import { kitBox, type KitAbout } from '~~/composables/kitBox'
 import { useSessionStore } from '~~/stores/session'
 import type { KitAnswer, KitFirm } from '~~/utils/contract/kit'
@@ -135,7 +136,7 @@ export const useKitStore = defineStore('kit', () => {
 async function ask(before: KitAbout | null): Promise<KitAnswer | null> {
   const query = before === null ? {} : { since: before.seq, mark: before.mark, firm: before.firmTag, ...before.next === null ? {} : { after: before.next } }
   try {
-    return await $fetch<KitAnswer>('/api/kit', { query, retry: false, timeout: PATIENCE_MS })
+    return await answerWithin(PATIENCE_MS, signal => $fetch<KitAnswer>('/api/kit', { query, retry: false, signal }))
   }
   catch {
     return null

@@ -93,6 +93,24 @@ describe('the copy of the firm on a phone', () => {
     expect([kit.count, kit.seq, kit.followedAt]).toEqual([1, 5, followedAt])
   })
 
+  it('follows again after an answer that began and never ended', async () => {
+    answers = [kitAnswerOf([inShop], { anew: true, seq: 5 })]
+    const kit = visit()
+    await kit.start()
+    vi.useFakeTimers({ toFake: ['setTimeout', 'clearTimeout'] })
+    vi.stubGlobal('$fetch', (_path: string, { signal }: { signal?: AbortSignal }) => new Promise((_, failed) => {
+      signal?.addEventListener('abort', () => failed(new Error('aborted')))
+    }))
+    const following = kit.follow()
+    for (let second = 0; second < 61; second++) await vi.advanceTimersByTimeAsync(1_000)
+    vi.useRealTimers()
+    await following
+    vi.unstubAllGlobals()
+    answers = [kitAnswerOf([inVan], { seq: 6, firm: undefined })]
+    await kit.follow()
+    expect([kit.count, kit.seq]).toEqual([2, 6])
+  })
+
   it('is thrown away where the server says that its log is another one', async () => {
     answers = [kitAnswerOf([inShop, inVan], { anew: true, seq: 5 })]
     const kit = visit()
