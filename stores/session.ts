@@ -1,5 +1,5 @@
 import { defineStore } from 'pinia'
-import { keptPerson } from '~~/composables/keptPerson'
+import { keepPerson, keptPerson } from '~~/composables/keptPerson'
 import { useApi, problemOf } from '~~/composables/useApi'
 import type { SessionAnswer, User } from '~~/utils/contract/session'
 import { can, type Permission } from '~~/utils/access/permissions'
@@ -46,11 +46,21 @@ export const useSessionStore = defineStore('session', () => {
     }
   }
 
-  /** Asks the server who is signed in, where so far only the device said so. Answers whether it knows of nobody any more. */
+  /**
+   * Asks the server who is signed in, where so far only the device said so. Answers whether that session has ended: then
+   * this page stays as it is, for what was typed into it is nobody else's who has signed in meanwhile.
+   */
   async function confirm(): Promise<'same' | 'ended' | 'unreached'> {
     if (!isKept.value) return 'same'
     try {
-      set((await api.get<SessionAnswer>('/api/session')).user)
+      const { user: found } = Object(await api.get<unknown>('/api/session')) as Partial<SessionAnswer>
+      // A page of a network that wants its guests to sign in.
+      if (!found) return 'unreached'
+      if (found.id !== user.value?.id) {
+        keepPerson(found)
+        return 'ended'
+      }
+      set(found)
       return 'same'
     }
     catch (error) {

@@ -10,11 +10,12 @@ const TINA: User = { id: 'tina', name: 'Tina', email: 'tina@firm.example', roles
 
 /** What the server answers to the question who is signed in. */
 let status = 200
+let signedIn: User | null = TINA
 let asked = 0
 registerEndpoint('/api/session', () => {
   asked++
   if (status !== 200) throw createError({ statusCode: status })
-  return { user: { ...TINA, units: 'kg' } }
+  return signedIn ? { user: { ...signedIn, units: 'kg' } } : '<html>Welcome</html>'
 })
 
 /** A page opened from the device. */
@@ -26,6 +27,7 @@ function opened() {
 beforeEach(() => {
   asked = 0
   status = 200
+  signedIn = TINA
 })
 afterEach(() => localStorage.clear())
 
@@ -57,6 +59,27 @@ describe('who is signed in, on a page that was opened from the device', () => {
     expect(await session.confirm()).toBe(found)
     expect(session.user).toEqual(TINA)
     expect(session.isKept).toBe(true)
+  })
+
+  it('does not become another person in the midst of a page, who is the one of the next', async () => {
+    keepPerson(TINA)
+    const session = opened()
+    await session.load()
+    signedIn = { ...TINA, id: 'wes', name: 'Wes' }
+    expect(await session.confirm()).toBe('ended')
+    expect(session.user).toEqual(TINA)
+    const next = opened()
+    await next.load()
+    expect(next.user?.name).toBe('Wes')
+  })
+
+  it('stays so where a network answers with a page of its own', async () => {
+    keepPerson(TINA)
+    const session = opened()
+    await session.load()
+    signedIn = null
+    expect(await session.confirm()).toBe('unreached')
+    expect([session.user, keptPerson()]).toEqual([TINA, TINA])
   })
 
   it('is nobody where the device remembers nobody and the server knows nobody', async () => {
