@@ -111,7 +111,7 @@ describe('a recovery beside the scale', () => {
     await page.goto(`${address}?refrigerant=R-22`, { waitUntil: 'networkidle' })
     await page.getByLabel('Weights in').selectOption('lb-oz')
     await press(page, '27')
-    await page.getByRole('button', { name: 'Pounds, now the ounces' }).click()
+    await page.getByRole('button', { name: 'lb, now the ounces' }).click()
     await press(page, '8')
     await page.getByRole('button', { name: 'Take 27 lb 8 oz' }).click()
     await page.getByRole('button', { name: 'Start filling' }).click()
