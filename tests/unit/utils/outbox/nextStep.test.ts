@@ -33,6 +33,18 @@ describe('what is sent next', () => {
   })
 })
 
+describe('long entries', () => {
+  const long = (seq: number) => entry(seq, {}, { note: 'n'.repeat(60_000) })
+
+  it('go in as many requests as the server takes them in', () => {
+    expect(step([long(1), long(2), long(3), entry(4)])).toEqual(['e1', 'e2'])
+  })
+
+  it('go alone where they are longer than that, for only the server can refuse them', () => {
+    expect(step([entry(1, {}, { note: 'n'.repeat(200_000) }), entry(2)])).toEqual(['e1'])
+  })
+})
+
 describe('what was saved last', () => {
   const young = (ageMs: number) => entry(2, { queuedAt: NOON - ageMs })
 
