@@ -1,5 +1,6 @@
 import type { ProblemDetails } from '../contract/problem'
 import type { CustodyEvent } from '../custody/event'
+import { PAIRED_KINDS, type EventKind } from '../custody/kinds'
 
 /**
  * An event on this device that is not known to stand in the custody log.
@@ -37,6 +38,15 @@ export function newEntry(event: CustodyEvent, personId: string, queuedAt: number
 /** Entries in the order in which they were recorded on this device, which is that of sending. */
 export function inOrder<Entry extends Pick<OutboxEntry, 'event'>>(entries: readonly Entry[]): Entry[] {
   return [...entries].sort((a, b) => a.event.deviceSeq - b.event.deviceSeq)
+}
+
+/**
+ * What goes out of the outbox with an entry that is taken back, itself included: the other half of its pair, and what was
+ * saved with it of its cylinder, such as the label with the registration.
+ */
+export function savedTogether(entries: readonly OutboxEntry[], { queuedAt, event: { kind, cylinderId } }: OutboxEntry): OutboxEntry[] {
+  const isHalf = (PAIRED_KINDS as readonly EventKind[]).includes(kind)
+  return entries.filter(other => other.queuedAt === queuedAt && (isHalf || other.event.cylinderId === cylinderId))
 }
 
 /** Whether an entry still goes by itself. A refused one waits for its author. */
