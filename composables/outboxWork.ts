@@ -14,6 +14,9 @@ import type { DroppedEntry, OutboxEntry, RecordedEntry } from '~~/utils/outbox/e
 import { exportedOutbox } from '~~/utils/outbox/exported'
 import type { Pause } from '~~/utils/outbox/settlement'
 
+/** How long a form waits for an answer on one event, and how much longer for each that is sent with it. Units: milliseconds. Our choice. */
+const [FORM_WAITS_MS, MORE_FOR_EACH_MS] = [3_000, 50]
+
 /** What became of an event that was to be sent at once. */
 export type Verdict = { is: 'recorded', version: number, cylinder: CylinderView | null } | { is: 'refused', problem: ProblemDetails } | { is: 'waiting' }
 
@@ -111,7 +114,11 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
       for (const [id, verdict] of some) verdicts.set(id, verdict)
       if (some.size > 0) each(some)
     }
-    const isDone = await whileAnswered<Told>(told => run(true, told), told => hear(new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))))
+    const isDone = await whileAnswered<Told>(
+      FORM_WAITS_MS + (ids.length - 1) * MORE_FOR_EACH_MS,
+      told => run(true, told),
+      told => hear(new Map([...verdictsOf(told)].filter(([id]) => ids.includes(id)))),
+    )
     if (!isDone) await changed()
     const rest = ids.filter(id => !verdicts.has(id))
     if (rest.length > 0) hear(await elsewhere(rest))

@@ -1,11 +1,10 @@
-/** How long a person waits for the next answer before the work goes on without them. Units: milliseconds. Our choice. */
-export const WAITS_MS = 3_000
-
 /**
- * Follows work that answers step by step, as long as its answers come in time; afterwards `heard` is called no more and the
- * work goes on by itself. Gives whether it came to its end.
+ * Follows work that answers step by step, as long as each answer comes within a time; afterwards `heard` is called no more
+ * and the work goes on by itself. Gives whether it came to its end.
  */
-export async function whileAnswered<Step>(work: (told: (step: Step) => void) => Promise<unknown>, heard: (step: Step) => void): Promise<boolean> {
+export async function whileAnswered<Step>(
+  ms: number, work: (told: (step: Step) => void) => Promise<unknown>, heard: (step: Step) => void,
+): Promise<boolean> {
   let timer: ReturnType<typeof setTimeout> | undefined
   let isOver = false
   try {
@@ -15,7 +14,7 @@ export async function whileAnswered<Step>(work: (told: (step: Step) => void) => 
         timer = setTimeout(() => {
           isOver = true
           done(false)
-        }, WAITS_MS)
+        }, ms)
       }
       wait()
       work((step) => {

@@ -256,6 +256,20 @@ describe('an event whose answer does not come', () => {
     expect(log.size).toBe(1)
   })
 
+  it('is waited for longer where many are sent with it', async () => {
+    const { outbox, posting } = visit('tina')
+    const settled = vi.fn()
+    const posted = posting.postAll(Array.from({ length: 61 }, (_, at) => weighed(posting, String(at)))).then(settled)
+    await vi.waitFor(() => expect(hanging).toHaveLength(1))
+    await vi.advanceTimersByTimeAsync(5_500)
+    expect(settled).not.toHaveBeenCalled()
+    await vi.advanceTimersByTimeAsync(500)
+    await posted
+    expect(outbox.waiting).toHaveLength(61)
+    hanging[0]!()
+    await vi.waitFor(() => expect(outbox.entries).toEqual([]))
+  })
+
   it('stays where it is refused after its form is gone', async () => {
     refuses = () => true
     const { outbox, posting } = visit('tina')
