@@ -55,7 +55,8 @@ export function useFleetQuestion() {
     void summary.refresh()
   }
 
-  onMounted(() => past.value !== null && !fleet.data.value && refresh())
+  // While the page is taken over from the server nothing is asked anew.
+  onMounted(() => onNuxtReady(() => past.value !== null && !fleet.data.value && refresh()))
   // The past does not change while one looks away.
   useRefreshOnFocus(() => past.value === null && refresh())
 

@@ -97,6 +97,23 @@ const SCREENS: Record<string, Screen[]> = {
       await page.getByRole('button', { name: /^Yes, note/ }).click()
       await page.getByRole('button', { name: /^It is stopped/ }).waitFor()
     } },
+    { as: technician, at: demo => `/c/${demo.codes.usual}/recover`, after: beginsToFill },
+    { as: technician, at: demo => `/c/${demo.codes.usual}/recover`, after: async (page) => {
+      await beginsToFill(page)
+      await page.getByRole('button', { name: 'Stopped? Hoses off' }).click()
+      await page.getByRole('button', { name: 'Put this recovery away' }).click()
+      await page.getByRole('button', { name: 'Keep it' }).waitFor()
+    } },
+    { as: technician, at: demo => `/c/${demo.codes.usual}/recover`, after: async (page) => {
+      await beginsToFill(page)
+      await page.getByRole('button', { name: 'Stopped? Hoses off' }).click()
+      await page.getByRole('button', { name: 'Hoses are off: weigh it' }).click()
+      await page.keyboard.type('600.0')
+      await page.keyboard.press('Enter')
+      await page.getByText('Vacuum of the system, and how long it held').click()
+      await page.getByLabel('Gauge shows').waitFor()
+      await page.getByLabel(/^Record it anyway/).waitFor()
+    } },
   ],
   'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
   'evacuation-level.vue': [
@@ -110,7 +127,7 @@ const SCREENS: Record<string, Screen[]> = {
     { as: manager, at: () => '/fill-limit?composition=R-32:50&waterCapacity=fortyseven&spec=DOT-9X' },
     { as: manager, at: () => '/fill-limit?refrigerant=R-744&waterCapacity=47.7lb&tareWeight=97.9lb&spec=DOT-3AA1800' },
   ],
-  'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }, { as: manager, at: () => `/fleet?asOf=${LAST_MONTH}` }],
+  'fleet/index.vue': [{ as: manager, at: () => '/fleet' }, { as: auditor, at: () => '/fleet?finding=stop' }, { as: manager, at: () => `/fleet?asOf=${LAST_MONTH}`, after: page => page.getByText('Fetching the fleet').waitFor({ state: 'detached', timeout: 20_000 }) }],
   'fleet/register.vue': [{ as: warehouse, at: () => '/fleet/register' }],
   'hand-over.vue': [
     { as: technician, at: () => '/hand-over' },
@@ -272,6 +289,13 @@ const PRESSED: Record<string, Screen> = {
     await page.getByRole('button', { name: 'Verify all' }).click()
     await page.getByText('Unbroken').waitFor()
   } },
+}
+
+/** Goes on to the step of a recovery at which the scale is read. */
+async function beginsToFill(page: Page): Promise<void> {
+  await page.getByRole('button', { name: /^As last weighed/ }).click()
+  await page.getByRole('button', { name: 'Start filling' }).click()
+  await page.getByText('No reading yet').waitFor()
 }
 
 /** Without a camera the scan screen asks for the code by keys. */
