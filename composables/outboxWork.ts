@@ -209,7 +209,8 @@ export function outboxWork(state: ShownOutbox, tell: (recorded: boolean) => void
 
   /** The person's own entries as a file. */
   async function exportFile(): Promise<Blob> {
-    await loadDropped()
+    // Where the storage answers no more, what is shown can still be saved.
+    await loadDropped().catch(() => {})
     const content = exportedOutbox(state.personId.value ?? '', state.entries.value, state.dropped.value, deviceNow())
     return new Blob([JSON.stringify(content, null, 2)], { type: 'application/json' })
   }

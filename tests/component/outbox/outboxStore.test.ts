@@ -423,6 +423,17 @@ describe('a device that keeps nothing', () => {
     expect(await outbox.recordedLately()).toEqual([])
   })
 
+  it('still gives what is shown as a file', async () => {
+    online = false
+    const { posting, outbox } = visit('tina')
+    await posting.post(weighed(posting))
+    vi.spyOn(IDBDatabase.prototype, 'transaction').mockImplementation(() => {
+      throw new DOMException('gone', 'UnknownError')
+    })
+    const file = JSON.parse(await (await outbox.exportFile()).text())
+    expect(file.entries.map(({ event }: { event: CustodyEvent }) => event.note)).toEqual(['once'])
+  })
+
   it('is tried once more where the system had closed the connection', async () => {
     online = false
     const { posting, outbox } = visit('tina')
