@@ -222,9 +222,9 @@ describe('an event whose answer does not come', () => {
 
   beforeEach(() => {
     hanging = []
-    const reached = globalThis.$fetch
-    vi.stubGlobal('$fetch', (path: string, options: Parameters<typeof $fetch>[1]) => new Promise((done, failed) => {
-      options?.signal?.addEventListener('abort', () => failed(new Error('aborted')))
+    const reached = globalThis.$fetch as unknown as (path: string, options: object) => Promise<unknown>
+    vi.stubGlobal('$fetch', (path: string, options: { signal?: AbortSignal }) => new Promise((done, failed) => {
+      options.signal?.addEventListener('abort', () => failed(new Error('aborted')))
       hanging.push(() => done(reached(path, { ...options, signal: undefined })))
     }))
   })
