@@ -22,7 +22,7 @@ export function usePairForm<Draft extends object>(key: string, empty: () => Draf
       const settled = await posting.postAll(sealedOnce(halves), undefined, takesRefusal)
       // The half that is at fault says why; the other was only held back.
       const refusals = settled.flatMap(each => each.problem ? [each.problem] : [])
-      if (refusals.length > 0) problem.value = refusals.find(({ status }) => status !== 409) ?? refusals[0]!
+      if (refusals.length > 0) problem.value = refusals.find(({ type }) => type !== 'other-half-refused') ?? refusals[0]!
       else {
         posted.value = settled.flatMap(each => each.posted ? [each.posted] : [])
         posting.announceAll(posted.value, announcement)

@@ -35,6 +35,12 @@ export function otherCylinderOf(kind: EventKind, details: unknown): string | nul
   return kind === 'exchanged' ? (details as DetailsOf<'exchanged'>).otherCylinderId : null
 }
 
+/** What both halves of a pair carry, of an event of these details; null where its kind has none. */
+export function pairIdOf(kind: EventKind, details: unknown): string | null {
+  if (kind === 'transferred') return (details as DetailsOf<'transferred'>).transferId
+  return kind === 'exchanged' ? (details as DetailsOf<'exchanged'>).exchangeId : null
+}
+
 /**
  * The other cylinder's half for each of a cylinder's own; null where it is not recorded.
  *

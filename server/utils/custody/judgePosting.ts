@@ -1,5 +1,6 @@
 import type { Access } from '../../../utils/access/roles'
 import type { AnyCustodyEvent, AnyRecordedEvent } from '../../../utils/custody/event'
+import { pairIdOf } from '../../../utils/custody/half'
 import { maySupervise } from '../people/maySupervise'
 import type { Group } from './group'
 import { refuse, refusalOf, type ParsedPost, type Refusal } from './judge'
@@ -20,18 +21,31 @@ export interface Judged { results: EventResult[], rows: LogRow[] }
 
 /**
  * Judges the events of one posting in their order, each on what the ones before it have made of the cylinder. Where half
- * of a pair is refused, all are judged again without its other half, and so on.
+ * of a pair is refused, or the correction of a half, all are judged again without the other's, and so on.
  */
 export function judgePosting(one: ReadPosting, now: Group): Judged {
   const before = now.mark()
   const heldBack = new Set<number>()
   for (;;) {
     const judged = judgeOnce(one, now, heldBack)
-    const torn = one.units.filter(unit => ['accepted', 'refused'].every(outcome => unit.some(at => judged.results[at]?.outcome === outcome)))
+    const torn = [...one.units, ...mendedPairs(one, now)].filter(unit => ['accepted', 'refused'].every(outcome => unit.some(at => judged.results[at]?.outcome === outcome)))
     if (torn.length === 0) return judged
     torn.flat().forEach(at => heldBack.add(at))
     now.backTo(before)
   }
+}
+
+/** The corrections of both halves of a pair, by position: the log names the pair, they need not. */
+function mendedPairs({ parsed }: ReadPosting, now: Group): number[][] {
+  const byPair = new Map<string, { at: number, cylinderId: string }[]>()
+  parsed.forEach((post, at) => {
+    if (!('event' in post) || post.event.kind !== 'corrected') return
+    const { cylinderId, details: { eventId } } = post.event
+    const mended = now.eventsOf(cylinderId).find(({ id }) => id === eventId)
+    const pairId = mended ? pairIdOf(mended.kind, mended.details) : null
+    if (pairId !== null) byPair.set(pairId, [...byPair.get(pairId) ?? [], { at, cylinderId }])
+  })
+  return [...byPair.values()].filter(all => new Set(all.map(({ cylinderId }) => cylinderId)).size > 1).map(all => all.map(({ at }) => at))
 }
 
 /** @param heldBack positions of events that are not to be stored, for the other half of their pair is refused. */
@@ -77,7 +91,12 @@ function supervisorOf({ supervisorId }: AnyCustodyEvent, { personId, trainee }: 
   return !trainee || maySupervise(directory, supervisorId, personId) ? supervisorId : null
 }
 
-const OTHER_HALF_REFUSED = refuse(409, 'Its other half was refused', 'Half of what happened between two cylinders is not recorded alone. Mend the other half and send both again.')
+const OTHER_HALF_REFUSED: Refusal = {
+  refused: {
+    ...refuse(409, 'Its other half was refused', 'Half of what happened between two cylinders is not recorded alone. Mend the other half and send both again.').refused,
+    type: 'other-half-refused',
+  },
+}
 const HELD_BACK = refuse(409, 'Held back', 'Another line of the same dispatch was refused, so none was recorded.').refused
 
 /** The answer to a refused event. */

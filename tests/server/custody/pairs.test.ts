@@ -105,6 +105,21 @@ describe('both halves of a transfer in one request', () => {
     expect(rows[1]![0]).toBe((rows[0]![0] as number) + 1)
   })
 
+  it('are corrected both or neither, with other details or taken out, where one has changed since it was looked at', async () => {
+    const one = await pair()
+    await record(log.db, log.technician, [one.out, one.in, sent(one.into, 'weighed', { gross: lb(31) })])
+    const mended = ({ cylinderId, id }: { cylinderId: string, id: string }, expects: number, instead?: object) =>
+      sent(cylinderId, 'corrected', { eventId: id, reason: 'it was R-410A', ...instead && { instead } }, { expects })
+    const other = (half: Record<string, unknown>) => ({ ...half.details as object, refrigerant: 'R-410A' })
+    const by = log.manager
+    expect(await outcomes([mended(one.out, 3, other(one.out)), mended(one.in, 2, other(one.in))], by)).toEqual(['refused 409', 'refused 409'])
+    expect(await outcomes([mended(one.out, 3), sent(one.from, 'weighed', { gross: lb(29.5) }), mended(one.in, 2)], by)).toEqual(['refused 409', 'accepted', 'refused 409'])
+    expect(await kindsOf(one.from)).not.toContain('corrected')
+    expect(await outcomes([mended(one.out, 4, other(one.out)), mended(one.in, 3, other(one.in))], by)).toEqual(['accepted', 'accepted'])
+    // One half alone may be corrected, and two corrections of one half stand each for itself.
+    expect(await outcomes([mended(one.out, 5, other(one.out)), mended(one.out, 5, other(one.out))], by)).toEqual(['accepted', 'refused 409'])
+  })
+
   it('are for who works with cylinders, and never from one into itself', async () => {
     const one = await pair()
     const auditor = { personId: randomUUID(), roles: ['auditor' as const], trainee: false }
