@@ -18,7 +18,7 @@ export default defineNuxtPlugin((nuxt) => {
   async function begin() {
     const found = await import('~~/stores/installation').catch(() => null)
     if (!found) return
-    const installation = nuxt.runWithContext(() => found.useInstallationStore())
+    const installation = await nuxt.runWithContext(() => found.useInstallationStore())
     window.removeEventListener('beforeinstallprompt', hold)
     installation.listen(offered)
     await installation.register()
