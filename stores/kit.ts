@@ -1,5 +1,6 @@
 import { defineStore } from 'pinia'
 import { answerWithin } from '~~/composables/answerWithin'
+import { keptPerson } from '~~/composables/keptPerson'
 import { kitBox, type KitAbout } from '~~/composables/kitBox'
 import { useSessionStore } from '~~/stores/session'
 import type { KitAnswer, KitFirm } from '~~/utils/contract/kit'
@@ -47,18 +48,25 @@ export const useKitStore = defineStore('kit', () => {
 
   async function find(): Promise<void> {
     const kept = await inBox(() => box.about()) ?? null
+    if (isLeftOver()) return tell(null)
     if (kept && (kept.personId !== session.user?.id || kept.form !== KIT_FORM)) return wipe()
     await tell(kept)
   }
 
+  /** Whether somebody else has signed in on this device since, in another tab: the copy is theirs now. */
+  function isLeftOver(): boolean {
+    const person = keptPerson()
+    return person !== null && person.id !== session.user?.id
+  }
+
   async function tell(next: KitAbout | null) {
-    count.value = next === null ? 0 : await inBox(() => box.count()) ?? 0
     about.value = next
+    count.value = next === null ? 0 : await inBox(() => box.count()) ?? 0
   }
 
   /** Fetches what has changed; without the server the copy stays as it is. One tab does it for all. */
   async function follow(): Promise<void> {
-    if (session.user === null || !navigator.onLine) return
+    if (session.user === null || isLeftOver() || !navigator.onLine) return
     following ??= alone(fetchAll, find).finally(() => {
       following = null
     })
@@ -75,8 +83,8 @@ export const useKitStore = defineStore('kit', () => {
   /** Answers whether there is more to fetch at once. */
   async function fetchPart(): Promise<boolean> {
     const personId = session.user?.id
-    const before = about.value
-    if (personId === undefined) return false
+    const before = await inBox(() => box.about()) ?? null
+    if (personId === undefined || (before && before.personId !== personId)) return false
     const answer = await ask(before)
     // A newer server than this page: what is here serves until the page is the newer one too.
     if (answer === null || answer.form !== KIT_FORM || session.user?.id !== personId) return false

@@ -3,6 +3,7 @@ import { registerEndpoint } from '@nuxt/test-utils/runtime'
 import { getQuery, setResponseStatus } from 'h3'
 import { createPinia, setActivePinia } from 'pinia'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
+import { keepPerson } from '~~/composables/keptPerson'
 import { kitBox } from '~~/composables/kitBox'
 import { offlineAnswer } from '~~/composables/offlineAnswers'
 import { outboxBox } from '~~/composables/outboxBox'
@@ -171,6 +172,18 @@ describe('the copy of the firm on a phone', () => {
     await kit.start()
     await kit.wipe()
     expect(await kitBox().count()).toBe(0)
+  })
+
+  it('is left alone by the tab of whoever was signed in before: it takes nothing of it away and puts nothing in', async () => {
+    const other = { id: '0198f000-0000-7000-8000-0000000000b9', roles: ['technician'] }
+    answers = [kitAnswerOf([inShop, inVan], { anew: true })]
+    await visit(other.id).start()
+    keepPerson(other as never)
+    const leftOver = visit()
+    await leftOver.start()
+    await leftOver.follow()
+    keepPerson(null)
+    expect([leftOver.count, asked.length, (await kitBox().about())?.personId, await kitBox().count()]).toEqual([0, 1, other.id, 2])
   })
 
   it('is opened again where the browser has closed it in the background', async () => {
