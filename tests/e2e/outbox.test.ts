@@ -266,12 +266,15 @@ describe('a phone that is away from the network', () => {
     await page.getByRole('heading', { name: 'Your account' }).waitFor()
     for (const view of cylinders.slice(0, FILLED)) {
       await scanner.scan(addressOf(view), { enter: true })
-      // From the decoded code on: three taps and one number.
-      await page.getByRole('link', { name: 'Record a recovery' }).click()
+      const link = page.getByRole('link', { name: 'Record a recovery' })
+      await link.waitFor()
+      const hand = await watchHand(page)
+      await link.click()
       await page.getByRole('button', { name: 'As last weighed: 40.0 lb' }).click()
       await page.keyboard.type('45')
       await page.getByRole('button', { name: 'Record the recovery' }).click()
       await saved(page)
+      expect(await hand.done(), 'from the decoded code on').toEqual({ taps: 3, numbers: 1 })
     }
     await waits(page, SCANNED + FILLED).waitFor()
     await crash(before)
@@ -298,6 +301,17 @@ describe('a phone that is away from the network', () => {
     expect(lines.map(({ cylinderId }) => cylinderId)).toEqual([...cylinders, ...cylinders.slice(0, FILLED)].map(({ id }) => id))
     await after.close()
   })
+
+  /** Counts what a hand does on a page from now on: its taps, and the fields that it types into. */
+  async function watchHand(page: Page) {
+    const counted = await page.evaluateHandle(() => {
+      const hand = { taps: 0, fields: new Set<EventTarget | null>() }
+      addEventListener('click', event => hand.taps += event.isTrusted ? 1 : 0, true)
+      addEventListener('input', event => event.isTrusted && hand.fields.add(event.target), true)
+      return hand
+    })
+    return { done: () => counted.evaluate(({ taps, fields }) => ({ taps, numbers: fields.size })) }
+  }
 
   /** Fetches the new worker and lets it take over, as the button does. */
   async function takeNewVersion(): Promise<void> {
