@@ -4,6 +4,7 @@ import { join } from 'node:path'
 import type { BrowserContext, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { crash, launchProfile, listenForErrors } from '../helpers/browser'
+import { cylindersOnPhone } from '../helpers/copyOnPhone'
 import { openShop, registered, type Shop } from '../helpers/fleet'
 import { openFrontDoor, type FrontDoor } from '../helpers/frontDoor'
 import { startServer, type TestServer } from '../helpers/server'
@@ -61,25 +62,8 @@ async function open(path: string): Promise<Page> {
 async function firstVisit() {
   const page = await open('/scan')
   await page.evaluate(() => navigator.serviceWorker.ready.then(() => undefined))
-  await expect.poll(() => page.evaluate(cylindersKept), { timeout: WITH_PATIENCE_MS }).toBe(1)
+  await expect.poll(() => cylindersOnPhone(page), { timeout: WITH_PATIENCE_MS }).toBe(1)
   await page.close()
-}
-
-/** How many cylinders the copy on the device has. */
-function cylindersKept(): Promise<number> {
-  return new Promise((done, failed) => {
-    const opening = indexedDB.open('collarbook-kit')
-    opening.onerror = () => failed(opening.error)
-    opening.onsuccess = () => {
-      const box = opening.result
-      if (!box.objectStoreNames.contains('cylinders')) return done(0)
-      const counting = box.transaction('cylinders').objectStore('cylinders').count()
-      counting.onsuccess = () => {
-        box.close()
-        done(counting.result)
-      }
-    }
-  })
 }
 
 /** Every address that any cache of the worker holds, and the shell's text. */
@@ -217,7 +201,7 @@ describe('a session', () => {
     await page.getByRole('button', { name: 'Sign out' }).click()
     await page.waitForURL('**/sign-in')
     expect(await page.evaluate(() => localStorage.getItem('collarbook-person'))).toBeNull()
-    expect(await page.evaluate(cylindersKept)).toBe(0)
+    expect(await cylindersOnPhone(page)).toBe(0)
     await phone.setOffline(true)
     const later = await open('/scan')
     await later.getByRole('heading', { name: 'Sign in' }).waitFor()

@@ -9,6 +9,7 @@ import type { CylinderView } from '../../utils/custody/cylinderView'
 import { formatLabelCode } from '../../utils/label/code'
 import type { MassReading } from '../../utils/quantity/mass'
 import { crash, launchBrowser, launchProfile } from '../helpers/browser'
+import { cylindersOnPhone } from '../helpers/copyOnPhone'
 import { PASSWORD, type Member } from '../helpers/firm'
 import { cylinderNow, made, openShop, registered, type Shop } from '../helpers/fleet'
 import { openFrontDoor, type FrontDoor } from '../helpers/frontDoor'
@@ -71,24 +72,7 @@ async function weigh(page: Page, pounds: string): Promise<void> {
 
 /** Waits until a phone's copy of the fleet has these cylinders. */
 async function hasCopyOf(page: Page, cylinders: readonly CylinderView[]): Promise<void> {
-  for (const { id } of cylinders) await expect.poll(() => page.evaluate(isInCopy, id), { timeout: 20_000 }).toBe(true)
-}
-
-async function isInCopy(id: string): Promise<boolean> {
-  // Opened before the page does, it would be made without its parts.
-  if (!(await indexedDB.databases()).some(({ name }) => name === 'collarbook-kit')) return false
-  return new Promise((done) => {
-    const opening = indexedDB.open('collarbook-kit')
-    opening.onsuccess = () => {
-      const box = opening.result
-      if (!box.objectStoreNames.contains('cylinders')) return done(false)
-      const counting = box.transaction('cylinders').objectStore('cylinders').count(id)
-      counting.onsuccess = () => {
-        box.close()
-        done(counting.result === 1)
-      }
-    }
-  })
+  for (const { id } of cylinders) await expect.poll(() => cylindersOnPhone(page, id), { timeout: 20_000 }).toBe(1)
 }
 
 const saved = (page: Page) => page.getByText('Saved on this phone', { exact: true }).waitFor()
