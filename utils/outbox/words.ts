@@ -42,7 +42,13 @@ export function readingOf({ details }: Pick<CustodyEvent, 'details'>): MassReadi
   return grossAfter ?? gross ?? null
 }
 
-/** A problem in one line. */
+/** A problem in one line, its fields by what a person calls them. */
 export function problemWords({ title, detail, errors }: ProblemDetails): string {
-  return [detail || title, ...errors?.map(({ path, message }) => path ? `${path}: ${message}` : message) ?? []].join(' ')
+  return [detail || title, ...errors?.map(({ path, message }) => path ? `${fieldWords(path)}: ${message}` : message) ?? []].join(' ')
+}
+
+/** A field's name as words. @example fieldWords('details.grossAfter.value') // 'gross after' */
+function fieldWords(path: string): string {
+  const name = path.split('.').filter(part => part !== 'value').at(-1) ?? ''
+  return name.replace(/Id$/, '').replaceAll(/[A-Z]/g, letter => ` ${letter.toLowerCase()}`)
 }

@@ -18,9 +18,10 @@ describe('what waits, in words', () => {
     expect(savedWords([event, event])).toBe('Saved on this phone, waiting to send: 2 entries')
   })
 
-  it('says every part of a problem', () => {
-    expect(problemWords({ type: 'about:blank', title: 'No', status: 422, detail: 'Choose again.', errors: [{ path: 'placeId', message: 'no such place' }] }))
-      .toBe('Choose again. placeId: no such place')
+  it('says every part of a problem, the fields by what a person calls them', () => {
+    const errors = [{ path: 'placeId', message: 'no such place' }, { path: 'details.grossAfter.value', message: 'below zero' }, { path: '', message: 'too long' }]
+    expect(problemWords({ type: 'about:blank', title: 'No', status: 422, detail: 'Choose again.', errors }))
+      .toBe('Choose again. place: no such place gross after: below zero too long')
   })
 })
 
