@@ -32,7 +32,7 @@ it('a manager begins at what waits, and sees what another records without a touc
   // 68.0 lb gross less 27.5 lb tare is 40.5 lb; 38.08 lb is the limit: 2.42 lb too much, rounded up.
   await page.getByText('1 cylinder is overfilled, by 2.5 lb.').first().waitFor({ timeout: 15_000 })
   expect(await ship.evaluate(link => link === document.activeElement)).toBe(true)
-  expect(await page.getByRole('status').first().textContent()).toContain('First: 1 cylinder is overfilled')
+  await page.getByRole('status').filter({ hasText: 'First: 1 cylinder is overfilled' }).waitFor()
 
   await page.getByRole('link', { name: /^Draw it down: / }).click()
   await page.waitForURL(/\/act\/drawn$/)
