@@ -1,14 +1,15 @@
 import { exactGrams } from '../quantity/mass'
 import type { WayReading } from './readings'
 
+// How many readings tell a rate, over what span, and for how long: our choice.
 const MOST_LOOKED_AT = 6
 const LEAST_READINGS = 3
 const LEAST_SPAN_MS = 60_000
 const OLDEST_MS = 15 * 60_000
-/** Two divisions of a scale that shows 0.1 lb: less may be its flicker. */
+/** Two divisions of a scale that shows 0.1 lb: less may be its flicker. Our choice. */
 const LEAST_GAIN_GRAMS = exactGrams({ unit: 'lb', value: 0.2 })
 const MS_PER_MINUTE = 60_000
-/** Longer than a working day nobody plans by. */
+/** Longer than a working day nobody plans by. Our choice. */
 const MOST_MINUTES = 600
 
 /**
