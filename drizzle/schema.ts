@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm'
-import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { blob, index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import type { MassReading } from '../utils/quantity/mass'
 import type { ScaleStep } from '../utils/quantity/scale'
 
@@ -12,6 +12,11 @@ export const firm = sqliteTable('firm', {
   telephone: text('telephone').notNull(),
   timeZone: text('time_zone').notNull(),
   units: text('units', { enum: ['lb', 'lb-oz', 'kg'] }).notNull(),
+  /** As papers name the shipper. */
+  address: text('address'),
+  /** Who answers in an emergency while a load is on its way; a service's contract where one answers. Source: 49 CFR 172.604. */
+  emergencyTelephone: text('emergency_telephone'),
+  emergencyContract: text('emergency_contract'),
   createdAt: integer('created_at').notNull(),
 })
 
@@ -78,6 +83,15 @@ export const mail = sqliteTable('mail', {
   error: text('error'),
 })
 
+/** The papers that go with a letter. */
+export const mailAttachments = sqliteTable('mail_attachments', {
+  mailId: text('mail_id').notNull().references(() => mail.id),
+  position: integer('position').notNull(),
+  name: text('name').notNull(),
+  mediaType: text('media_type').notNull(),
+  content: blob('content', { mode: 'buffer' }).notNull(),
+}, table => [primaryKey({ columns: [table.mailId, table.position] })])
+
 /** Sign-ins, refusals and changes of people: who, when, what; never a password. Apart from the custody log. */
 export const securityLog = sqliteTable('security_log', {
   id: text('id').primaryKey(),
@@ -99,6 +113,41 @@ export const firms = sqliteTable('firms', {
   active: integer('active', { mode: 'boolean' }).notNull().default(true),
   createdAt: integer('created_at').notNull(),
 })
+
+/**
+ * What a reclaimer takes, from a day on, and at what minimum; the row that counts on a day is the latest that has begun
+ * and was not withdrawn. Rows are only added and withdrawn.
+ */
+export const firmTerms = sqliteTable('firm_terms', {
+  id: text('id').primaryKey(),
+  firmId: text('firm_id').notNull().references(() => firms.id),
+  /** 'YYYY-MM-DD', in the firm's time zone. */
+  fromDay: text('from_day').notNull(),
+  terms: text('terms', { mode: 'json' }).notNull(),
+  recordedBy: text('recorded_by').notNull(),
+  recordedAt: integer('recorded_at').notNull(),
+  withdrawnBy: text('withdrawn_by'),
+  withdrawnAt: integer('withdrawn_at'),
+}, table => [index('firm_terms_firm').on(table.firmId, table.fromDay)])
+
+/** What a reclaimer pays for a refrigerant in a condition, or charges, from a day to another. Rows are only added and withdrawn. */
+export const firmPrices = sqliteTable('firm_prices', {
+  id: text('id').primaryKey(),
+  firmId: text('firm_id').notNull().references(() => firms.id),
+  /** A designation; null for contents whose refrigerant is not known or mixed. */
+  refrigerant: text('refrigerant'),
+  condition: text('condition').notNull(),
+  fromDay: text('from_day').notNull(),
+  /** The last day it holds; null where no end was said. */
+  untilDay: text('until_day'),
+  /** Thousandths of the currency for each unit of mass; negative is charged. */
+  mills: integer('mills').notNull(),
+  per: text('per', { enum: ['lb', 'kg'] }).notNull(),
+  recordedBy: text('recorded_by').notNull(),
+  recordedAt: integer('recorded_at').notNull(),
+  withdrawnBy: text('withdrawn_by'),
+  withdrawnAt: integer('withdrawn_at'),
+}, table => [index('firm_prices_firm').on(table.firmId, table.refrigerant, table.condition)])
 
 export const places = sqliteTable('places', {
   id: text('id').primaryKey(),
@@ -375,6 +424,14 @@ export const shipments = sqliteTable('shipments', {
   dispatchedAt: integer('dispatched_at'),
   dispatchedBy: text('dispatched_by'),
   receivedAt: integer('received_at'),
+  readyAt: integer('ready_at'),
+  arrivedAt: integer('arrived_at'),
+  closedAt: integer('closed_at'),
+  cancelledAt: integer('cancelled_at'),
+  /** Who carries it: a carrier, or null for the firm's own vehicle. */
+  carrierId: text('carrier_id').references(() => firms.id),
+  /** What the papers said as it left, for good; null before. */
+  papers: text('papers', { mode: 'json' }),
 })
 
 export const shipmentLines = sqliteTable('shipment_lines', {
@@ -383,7 +440,151 @@ export const shipmentLines = sqliteTable('shipment_lines', {
   position: integer('position').notNull(),
   /** As it left: gross reading, refrigerant, condition, net. null while a draft. */
   sent: text('sent', { mode: 'json' }),
+  /** As it was scanned and weighed for the papers: reading, when, by whom. null until then. */
+  weighed: text('weighed', { mode: 'json' }),
+  /** What the shipper classified otherwise than worked out, with the reason. */
+  classification: text('classification', { mode: 'json' }),
 }, table => [primaryKey({ columns: [table.shipmentId, table.cylinderId] })])
+
+/**
+ * What was done to a shipment, by our people and over its dock link: who, when, what. Append-only, held by triggers; the
+ * same id sent again is the same act.
+ */
+export const shipmentActs = sqliteTable('shipment_acts', {
+  seq: integer('seq').primaryKey({ autoIncrement: true }),
+  id: text('id').notNull().unique(),
+  shipmentId: text('shipment_id').notNull().references(() => shipments.id),
+  kind: text('kind').notNull(),
+  cylinderId: text('cylinder_id'),
+  details: text('details', { mode: 'json' }).notNull(),
+  /** One of ours, or null for the dock. */
+  personId: text('person_id'),
+  /** The dock link it came over, and the name typed there; null for ours. */
+  linkId: text('link_id'),
+  linkName: text('link_name'),
+  /** As the device claimed. */
+  occurredAt: integer('occurred_at').notNull(),
+  recordedAt: integer('recorded_at').notNull(),
+}, table => [index('shipment_acts_shipment').on(table.shipmentId, table.seq)])
+
+/** Links that open one shipment to the reclaimer's dock. The token is signed; here is what ends it. */
+export const dockLinks = sqliteTable('dock_links', {
+  id: text('id').primaryKey(),
+  shipmentId: text('shipment_id').notNull().references(() => shipments.id),
+  /** Whom it was made for. */
+  forWhom: text('for_whom').notNull(),
+  createdBy: text('created_by').notNull(),
+  createdAt: integer('created_at').notNull(),
+  expiresAt: integer('expires_at').notNull(),
+  revokedBy: text('revoked_by'),
+  revokedAt: integer('revoked_at'),
+  firstUsedAt: integer('first_used_at'),
+}, table => [index('dock_links_shipment').on(table.shipmentId)])
+
+/** The reclaimer's figures of a line as they stand for the settlement; every change of them is an act of the shipment. */
+export const settlementLines = sqliteTable('settlement_lines', {
+  shipmentId: text('shipment_id').notNull().references(() => shipments.id),
+  cylinderId: text('cylinder_id').notNull(),
+  theirGross: text('their_gross', { mode: 'json' }).$type<MassReading>(),
+  acceptedNet: text('accepted_net', { mode: 'json' }).$type<MassReading>(),
+  grade: text('grade'),
+  /** Thousandths of the currency for each unit of mass; negative is charged. */
+  mills: integer('mills'),
+  per: text('per', { enum: ['lb', 'kg'] }),
+  /** Hundredths of the currency; what the statement credits for this line, null where it does not say. */
+  statedCents: integer('stated_cents'),
+  /** What became of the cylinder. */
+  outcome: text('outcome', { enum: ['taken-over', 'sent-back', 'not-arrived'] }),
+}, table => [primaryKey({ columns: [table.shipmentId, table.cylinderId] })])
+
+/** What a statement says of a whole shipment. */
+export const settlements = sqliteTable('settlements', {
+  shipmentId: text('shipment_id').primaryKey().references(() => shipments.id),
+  statementNumber: text('statement_number'),
+  statementDay: text('statement_day'),
+  /** Fees and other amounts beside the lines: [{ what, cents }], negative is charged. */
+  others: text('others', { mode: 'json' }).$type<{ what: string, cents: number }[]>().notNull(),
+  statedTotalCents: integer('stated_total_cents'),
+})
+
+/** A difference that is argued with the reclaimer; its messages are acts of the shipment. */
+export const disputes = sqliteTable('disputes', {
+  id: text('id').primaryKey(),
+  shipmentId: text('shipment_id').notNull().references(() => shipments.id),
+  /** null where it is about the whole statement. */
+  cylinderId: text('cylinder_id'),
+  about: text('about', { enum: ['gross', 'net', 'grade', 'credit', 'missing', 'unexpected', 'total'] }).notNull(),
+  /** null where the figures opened it by themselves. */
+  openedBy: text('opened_by'),
+  openedAt: integer('opened_at').notNull(),
+  outcome: text('outcome', { enum: ['theirs-accepted', 'ours-accepted', 'agreed', 'no-difference'] }),
+  reason: text('reason'),
+  endedBy: text('ended_by'),
+  endedAt: integer('ended_at'),
+}, table => [index('disputes_shipment').on(table.shipmentId)])
+
+/** Statements and certificates that were uploaded to a shipment; the files lie under the hash, apart from the photos. */
+export const shipmentFiles = sqliteTable('shipment_files', {
+  id: text('id').primaryKey(),
+  shipmentId: text('shipment_id').notNull().references(() => shipments.id),
+  kind: text('kind', { enum: ['statement', 'certificate', 'other'] }).notNull(),
+  name: text('name').notNull(),
+  mediaType: text('media_type').notNull(),
+  bytes: integer('bytes').notNull(),
+  contentHash: text('content_hash').notNull(),
+  /** The lines it belongs to; empty for the whole shipment. */
+  cylinderIds: text('cylinder_ids', { mode: 'json' }).$type<string[]>().notNull(),
+  uploadedBy: text('uploaded_by').notNull(),
+  uploadedAt: integer('uploaded_at').notNull(),
+}, table => [index('shipment_files_shipment').on(table.shipmentId)])
+
+/** A visit to a customer's equipment: what was recovered there is told in one note. */
+export const jobs = sqliteTable('jobs', {
+  id: text('id').primaryKey(),
+  number: integer('number').notNull().unique(),
+  /** The customer among the firms; null where only a name is known. */
+  customerId: text('customer_id').references(() => firms.id),
+  customerName: text('customer_name').notNull(),
+  email: text('email'),
+  /** Where the equipment stands. */
+  site: text('site').notNull(),
+  equipment: text('equipment').notNull(),
+  refrigerant: text('refrigerant'),
+  charge: text('charge', { mode: 'json' }).$type<MassReading>(),
+  /** Whose the recovered refrigerant stays: the customer's, or ours. */
+  keeps: text('keeps', { enum: ['customer', 'firm'] }).notNull(),
+  note: text('note'),
+  createdBy: text('created_by').notNull(),
+  createdAt: integer('created_at').notNull(),
+}, table => [index('jobs_customer').on(table.customerId)])
+
+/** A plan that was made: the question, the answer, and whether it is still followed. */
+export const plans = sqliteTable('plans', {
+  id: text('id').primaryKey(),
+  number: integer('number').notNull().unique(),
+  kind: text('kind', { enum: ['consolidation', 'shipping'] }).notNull(),
+  question: text('question', { mode: 'json' }).notNull(),
+  answer: text('answer', { mode: 'json' }).notNull(),
+  state: text('state', { enum: ['open', 'done', 'dropped'] }).notNull(),
+  madeBy: text('made_by').notNull(),
+  madeAt: integer('made_at').notNull(),
+  endedAt: integer('ended_at'),
+})
+
+/** One step of a plan, ticked off by what the log says afterwards. */
+export const planTasks = sqliteTable('plan_tasks', {
+  planId: text('plan_id').notNull().references(() => plans.id),
+  position: integer('position').notNull(),
+  kind: text('kind', { enum: ['transfer', 'ship'] }).notNull(),
+  fromCylinderId: text('from_cylinder_id').notNull(),
+  /** null where it is shipped. */
+  toCylinderId: text('to_cylinder_id'),
+  /** As planned; null where all of it goes, whatever it weighs. */
+  netGrams: integer('net_grams'),
+  /** The event that did it; null while it is to be done. */
+  doneEventId: text('done_event_id'),
+  doneAt: integer('done_at'),
+}, table => [primaryKey({ columns: [table.planId, table.position] }), index('plan_tasks_from').on(table.fromCylinderId)])
 
 export const testLots = sqliteTable('test_lots', {
   id: text('id').primaryKey(),

@@ -10,6 +10,9 @@ export type Permission
     | 'lots:read' | 'lots:prepare' | 'lots:dispatch' | 'lots:receive'
     | 'places:read' | 'places:manage'
     | 'firms:read' | 'firms:manage'
+    /** What reclaimers take and pay. */
+    | 'terms:read' | 'terms:set'
+    | 'jobs:read' | 'jobs:record'
     | 'scales:read' | 'scales:manage'
     | 'people:read' | 'people:read-contact' | 'people:manage'
     /** A checkpoint is no event: who only reads may ask for one. */
@@ -23,24 +26,24 @@ export type Permission
     | 'account:own'
 
 const EVERYONE = [
-  'account:own', 'fleet:read', 'firms:read', 'people:read', 'places:read', 'refrigerants:read',
+  'account:own', 'fleet:read', 'firms:read', 'jobs:read', 'people:read', 'places:read', 'refrigerants:read',
   'scales:read', 'settings:read',
 ] as const satisfies readonly Permission[]
 
 const WAREHOUSE = [
   ...EVERYONE, 'events:post', 'cylinders:register', 'labels:mint',
-  'shipments:read', 'shipments:prepare', 'lots:read', 'lots:prepare', 'reports:read',
+  'jobs:record', 'shipments:read', 'shipments:prepare', 'lots:read', 'lots:prepare', 'reports:read', 'terms:read',
 ] as const satisfies readonly Permission[]
 
 /** What each role may do. A person with several roles may do what any of them may. */
 export const PERMISSIONS = {
   warehouse: WAREHOUSE,
-  technician: [...EVERYONE, 'events:post'],
+  technician: [...EVERYONE, 'events:post', 'jobs:record'],
   manager: [
     ...WAREHOUSE, 'events:correct-any', 'shipments:dispatch', 'shipments:receive', 'lots:dispatch', 'lots:receive',
-    'rules:set', 'fill-rule:set', 'log:verify', 'log:export', 'log:checkpoint', 'scales:manage',
+    'rules:set', 'fill-rule:set', 'log:verify', 'log:export', 'log:checkpoint', 'scales:manage', 'terms:set',
   ],
-  auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'reports:read', 'people:read-contact', 'log:verify', 'log:export', 'log:checkpoint'],
+  auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'reports:read', 'terms:read', 'people:read-contact', 'log:verify', 'log:export', 'log:checkpoint'],
   admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'scales:manage', 'settings:manage', 'rules:set', 'mail:read', 'log:checkpoint'],
 } as const satisfies Record<Role, readonly Permission[]>
 

@@ -12,6 +12,8 @@ const MATRIX: Record<Permission, string> = {
   'firms:manage': 'D',
   'firms:read': 'W T M A D',
   'fleet:read': 'W T M A D',
+  'jobs:read': 'W T M A D',
+  'jobs:record': 'W T M',
   'labels:mint': 'W M',
   'log:checkpoint': 'M A D',
   'log:export': 'M A',
@@ -37,6 +39,8 @@ const MATRIX: Record<Permission, string> = {
   'shipments:prepare': 'W M',
   'shipments:read': 'W M A',
   'shipments:receive': 'M',
+  'terms:read': 'W M A',
+  'terms:set': 'M',
 }
 const LETTER: Record<Role, string> = { warehouse: 'W', technician: 'T', manager: 'M', auditor: 'A', admin: 'D' }
 const ALL = Object.keys(MATRIX) as Permission[]
