@@ -30,8 +30,8 @@ async function chooseSubjects(baseUrl) {
   const logs = await Promise.all(halfFull.slice(0, CANDIDATES).map(async row => ({ row, lines: await items(`/api/cylinders/${row.id}/events?limit=200`) })))
   const longest = logs.sort((a, b) => kindsIn(b.lines) - kindsIn(a.lines) || b.lines.length - a.lines.length)[0]
   const overfilled = fleet.find(({ findingCodes }) => findingCodes.includes('overfill'))
-  const received = shipments.find(({ state, cylinders }) => state === 'received' && cylinders > 2)
-  if (!longest || !overfilled || !received) throw new Error('The demo firm lacks a half full cylinder, an overfilled one or a received shipment')
+  const received = shipments.find(({ state, cylinders }) => state === 'settled' && cylinders > 2)
+  if (!longest || !overfilled || !received) throw new Error('The demo firm lacks a half full cylinder, an overfilled one or a settled shipment')
   return { cylinder: refOf(longest.row), overfilled: refOf(overfilled), shipment: received.id }
 }
 

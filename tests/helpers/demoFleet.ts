@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto'
 import type { CustodyLogAnswer, CylinderRow, FleetAnswer } from '../../utils/contract/custody'
 import type { MintAnswer } from '../../utils/contract/labels'
 import type { FirmsAnswer, PlacesAnswer } from '../../utils/contract/places'
-import type { ShipmentsAnswer, ShipmentState } from '../../utils/contract/shipments'
+import type { ShipmentsAnswer } from '../../utils/contract/shipments'
 import type { TestLotsAnswer, TestLotState, TestLotWithLines } from '../../utils/contract/testLots'
 import type { SessionAnswer } from '../../utils/contract/session'
 import { handoverText } from '../../utils/handover/handoverText'
@@ -22,7 +22,7 @@ export interface DemoFleet {
   codes: Record<'usual' | 'empty' | 'overfilled' | 'onTwo' | 'onNone', string>
   /** The newest line of the usual cylinder. */
   event: string
-  shipments: Record<Exclude<ShipmentState, 'cancelled'>, string>
+  shipments: Record<'draft' | 'dispatched' | 'settled', string>
   lots: Record<Exclude<TestLotState, 'cancelled'>, string>
   /** The technician's van. */
   van: string
@@ -64,7 +64,7 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
     event: events[0]!.id,
     shipments: {
       draft: await draft(manager, '/api/shipments', 'reclaimer'),
-      ...await firstOfEach<ShipmentsAnswer, 'dispatched' | 'received'>(manager, '/api/shipments', ['dispatched', 'received']),
+      ...await firstOfEach<ShipmentsAnswer, 'dispatched' | 'settled'>(manager, '/api/shipments', ['dispatched', 'settled']),
     },
     lots: {
       draft: await draft(manager, '/api/test-lots', 'requalifier'),

@@ -56,7 +56,7 @@ describe('a shipment to a reclaimer', () => {
     }
     const received = await firm.manager.client.post<ShipmentWithLines>(`/api/shipments/${shipment.id}/receipt`, receipt)
     expect(received.status).toBe(200)
-    expect(received.body.state).toBe('received')
+    expect(received.body.state).toBe('settled')
     // 38.9 lb = 17644.7 g; 11 lb = 4989.5 g.
     expect(received.body.lines[1]!.received).toEqual({ theirGrossGrams: 17_645, acceptedNetGrams: 4_990, grade: 'A', price: 12.5 })
     expect(received.body.lines[1]!.sent!.netGrams).toBe(5_216)

@@ -34,7 +34,7 @@ export const receiptBody = z.strictObject({
   })).min(1).max(200).refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
-const SHIPMENT_STATES = ['draft', 'dispatched', 'received', 'cancelled'] as const
+const SHIPMENT_STATES = ['draft', 'ready', 'dispatched', 'arrived', 'settled', 'closed', 'cancelled'] as const
 export type ShipmentState = (typeof SHIPMENT_STATES)[number]
 
 /** GET /api/shipments: the newest first. */
@@ -71,7 +71,11 @@ export interface Shipment {
   createdAt: string
   dispatchedAt: string | null
   dispatchedBy: string | null
-  receivedAt: string | null
+  readyAt: string | null
+  arrivedAt: string | null
+  settledAt: string | null
+  closedAt: string | null
+  cancelledAt: string | null
   cylinders: number
   /** Of known nets; null when none is known. */
   netGrams: number | null

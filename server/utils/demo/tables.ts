@@ -48,8 +48,8 @@ function shipmentRows(read: Database['read'], { cast, endAt }: Stage, one: DemoS
   const isBack = one.backAt <= endAt
   return [
     statement(read.insert(shipments).values({
-      id: one.id, number, toFirmId: cast.firms[one.to].id, state: isBack ? 'received' : 'dispatched', createdAt: one.at, createdBy: cast.people.warehouse.id,
-      dispatchedAt: one.at, dispatchedBy: cast.people.manager.id, receivedAt: isBack ? one.backAt : null,
+      id: one.id, number, toFirmId: cast.firms[one.to].id, state: isBack ? 'settled' : 'dispatched', createdAt: one.at, createdBy: cast.people.warehouse.id,
+      dispatchedAt: one.at, dispatchedBy: cast.people.manager.id, settledAt: isBack ? one.backAt : null,
     })),
     ...one.cylinders.flatMap(({ steel, gross, refrigerant, netGrams }, position) => [
       statement(read.insert(shipmentLines).values({

@@ -50,7 +50,7 @@ export async function differingShipments(db: Database, nowMs: number): Promise<D
 /** Some shipments below a number, the newest first, of whose cylinders something was recorded that may contradict the papers. */
 async function touchedShipments(db: Database, nowMs: number, below: number): Promise<{ id: string, number: number }[]> {
   const { rows } = await db.readClient.execute({
-    sql: `SELECT s.id, s.number FROM shipments s WHERE s.state IN ('dispatched', 'received') AND s.dispatched_at >= ? AND s.number < ? AND EXISTS (
+    sql: `SELECT s.id, s.number FROM shipments s WHERE s.state IN ('dispatched', 'arrived', 'settled', 'closed') AND s.dispatched_at >= ? AND s.number < ? AND EXISTS (
         SELECT 1 FROM shipment_lines l JOIN custody_events e ON e.cylinder_id = l.cylinder_id
         WHERE l.shipment_id = s.id AND e.recorded_at > s.dispatched_at AND (e.kind IN ('corrected', 'registered')
           OR e.effective_at <= s.dispatched_at AND NOT (e.kind = 'sent-for-reclaim' AND e.effective_at = s.dispatched_at)))

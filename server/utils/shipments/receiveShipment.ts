@@ -40,7 +40,7 @@ function arrival(id: string, eventIds: readonly string[], guard: Guard) {
   return [
     {
       // A shipment that is not on its way any more gets no state, which its column refuses: all is undone.
-      sql: `UPDATE shipments SET state = CASE state WHEN 'dispatched' THEN 'received' END, received_at = ${effect.sql} WHERE id = ? AND ${guard.sql}`,
+      sql: `UPDATE shipments SET state = CASE WHEN state IN ('dispatched', 'arrived') THEN 'settled' END, settled_at = ${effect.sql} WHERE id = ? AND ${guard.sql}`,
       args: [...effect.args, id, ...guard.args],
     },
     { sql: `DELETE FROM open_lines WHERE list_id = ? AND ${guard.sql}`, args: [id, ...guard.args] },
@@ -49,5 +49,5 @@ function arrival(id: string, eventIds: readonly string[], guard: Guard) {
 
 async function refuseUnlessDispatched(db: Database, id: string): Promise<void> {
   const { state } = await theShipment(db, id)
-  if (state !== 'dispatched') throw problem(409, 'This shipment is not on its way', `It is ${state}.`)
+  if (state !== 'dispatched' && state !== 'arrived') throw problem(409, 'This shipment is not on its way', `It is ${state}.`)
 }

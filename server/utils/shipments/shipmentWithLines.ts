@@ -15,10 +15,10 @@ export async function shipmentWithLines(db: Database, id: string, access: Access
   const ids = stored.map(line => line.cylinderId)
   const [rows, views, receipts] = await Promise.all([
     cylinderRows(db, ids, nowMs),
-    shipment.state === 'draft' ? cylinderViews(db, ids, { access, nowMs }) : [],
+    shipment.dispatchedAt === null ? cylinderViews(db, ids, { access, nowMs }) : [],
     receiptsOf(db, id),
   ])
-  const differing = shipment.state === 'dispatched' || shipment.state === 'received' ? await paperDifferences(db, id, stored) : new Map<string, PaperDifference>()
+  const differing = shipment.dispatchedAt !== null ? await paperDifferences(db, id, stored) : new Map<string, PaperDifference>()
   const because = new Map(views.map(view => [view.id, mayShip(view).because]))
   const lines = stored.flatMap(({ cylinderId, sent }): ShipmentLine[] => {
     const found = rows.get(cylinderId)

@@ -4,11 +4,11 @@ import { instantText, pageByNumber, pageFilter } from '../cylinder-lists/paging'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
 
-const NET = `CASE shipments.state WHEN 'draft' THEN cylinders.net_grams ELSE json_extract(line.sent, '$.netGrams') END`
+const NET = `CASE WHEN shipments.state IN ('draft', 'ready') THEN cylinders.net_grams ELSE json_extract(line.sent, '$.netGrams') END`
 
-/** A shipment with the count of its lines and the sum of their known nets: as they are while a draft, as they left afterwards. */
+/** A shipment with the count of its lines and the sum of their known nets: as they are until it leaves, as they left afterwards. */
 const SELECT_SHIPMENTS = `SELECT shipments.id, shipments.number, shipments.to_firm_id, firms.name AS to_name, shipments.state, shipments.note,
-    shipments.created_at, shipments.dispatched_at, people.name AS dispatched_by_name, shipments.received_at,
+    shipments.created_at, shipments.dispatched_at, people.name AS dispatched_by_name, shipments.ready_at, shipments.arrived_at, shipments.settled_at, shipments.closed_at, shipments.cancelled_at,
     count(line.cylinder_id) AS line_count, sum(${NET}) AS net_grams
   FROM shipments
   JOIN firms ON firms.id = shipments.to_firm_id
@@ -43,7 +43,11 @@ function shipmentOf(row: Row): Shipment {
     createdAt: instantText(row['created_at'])!,
     dispatchedAt: instantText(row['dispatched_at']),
     dispatchedBy: row['dispatched_by_name'] as string | null,
-    receivedAt: instantText(row['received_at']),
+    readyAt: instantText(row['ready_at']),
+    arrivedAt: instantText(row['arrived_at']),
+    settledAt: instantText(row['settled_at']),
+    closedAt: instantText(row['closed_at']),
+    cancelledAt: instantText(row['cancelled_at']),
     cylinders: row['line_count'] as number,
     netGrams: row['net_grams'] as number | null,
   }

@@ -17,7 +17,7 @@ const MANAGER: User = { id: 'p', name: 'M. Sorrel', email: 'sorrel@firm.example'
 function draft(lines: ShipmentLine[]) {
   return {
     id: ID, number: 4, state: 'draft', to: { id: 'f', name: 'Reclaimer One' }, note: null, cylinders: lines.length, netGrams: null,
-    createdAt: '2026-05-01T10:00:00.000Z', createdBy: null, dispatchedAt: null, dispatchedBy: null, receivedAt: null, lines,
+    createdAt: '2026-05-01T10:00:00.000Z', createdBy: null, dispatchedAt: null, dispatchedBy: null, readyAt: null, arrivedAt: null, settledAt: null, closedAt: null, cancelledAt: null, lines,
   }
 }
 

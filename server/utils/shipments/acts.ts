@@ -1,0 +1,53 @@
+import type { InStatement } from '@libsql/client'
+import type { ActBy, ActKind, ShipmentAct } from '~~/utils/shipment/acts'
+import { instantText } from '../cylinder-lists/paging'
+import type { Guard } from '../custody/posting'
+import type { Database } from '../database/database'
+
+/** Something done to a shipment that is about to be kept. Units: instants in UTC milliseconds. */
+export interface NewAct {
+  /** The sender's; the same id sent again is the same act. */
+  id: string
+  shipmentId: string
+  kind: ActKind
+  cylinderId?: string | null
+  details?: Record<string, unknown>
+  by: ActBy
+  /** As the device claimed. */
+  occurredAt: number
+  recordedAt: number
+}
+
+const ALWAYS: Guard = { sql: '1', args: [] }
+
+/** Keeps an act where a condition holds; it answers a row only where the act is new. */
+export function actStatement(act: NewAct, where: Guard = ALWAYS): InStatement {
+  const [personId, linkId, linkName] = 'personId' in act.by ? [act.by.personId, null, null] : [null, act.by.linkId, act.by.linkName]
+  return {
+    sql: `INSERT INTO shipment_acts (id, shipment_id, kind, cylinder_id, details, person_id, link_id, link_name, occurred_at, recorded_at)
+      SELECT ?, ?, ?, ?, ?, ?, ?, ?, ?, ? WHERE ${where.sql} ON CONFLICT DO NOTHING RETURNING id`,
+    args: [
+      act.id, act.shipmentId, act.kind, act.cylinderId ?? null, JSON.stringify(act.details ?? {}), personId, linkId, linkName, act.occurredAt, act.recordedAt,
+      ...where.args,
+    ],
+  }
+}
+
+/** What was done to a shipment, in the order it was recorded. */
+export async function actsOf(db: Database, shipmentId: string): Promise<ShipmentAct[]> {
+  const { rows } = await db.readClient.execute({
+    sql: `SELECT act.id, act.kind, act.cylinder_id, act.details, coalesce(act.link_name, people.name) AS by_name, act.link_id, act.occurred_at, act.recorded_at
+      FROM shipment_acts AS act LEFT JOIN people ON people.id = act.person_id WHERE act.shipment_id = ? ORDER BY act.seq`,
+    args: [shipmentId],
+  })
+  return rows.map(row => ({
+    id: row['id'] as string,
+    kind: row['kind'] as ActKind,
+    cylinderId: row['cylinder_id'] as string | null,
+    details: JSON.parse(row['details'] as string) as Record<string, unknown>,
+    by: row['by_name'] as string | null,
+    isTheirs: row['link_id'] !== null,
+    occurredAt: instantText(row['occurred_at'])!,
+    recordedAt: instantText(row['recorded_at'])!,
+  }))
+}
