@@ -2,6 +2,7 @@ import { sql } from 'drizzle-orm'
 import { blob, index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import type { MassReading } from '../utils/quantity/mass'
 import type { ScaleStep } from '../utils/quantity/scale'
+import type { Appliance, Circumstances, MachineMade } from '../utils/recovery/types'
 
 // Instants are UTC milliseconds, masses whole grams, flags 0 or 1, months 'YYYY-MM', ids UUIDv7 in lower case.
 
@@ -200,6 +201,9 @@ export const scales = sqliteTable('scales', {
   active: integer('active', { mode: 'boolean' }).notNull().default(true),
 })
 
+/** The job that a line of the log names, or that a correction names in its place, in SQL: in the words of the index that finds it. A line that was tampered with may be no JSON. */
+export const JOB_NAMED = `CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN body ->> '$.details.instead.jobId' ELSE body ->> '$.details.jobId' END END`
+
 /**
  * The custody log. Append-only: triggers refuse UPDATE and DELETE, and an INSERT that would replace a row is ignored.
  * Nothing references it with a cascade.
@@ -237,6 +241,7 @@ export const custodyEvents = sqliteTable('custody_events', {
   index('custody_events_supervised').on(table.supervisorId).where(sql`trainee = 1`),
   // What was said once and is not said any more is found along it.
   index('custody_events_corrected').on(table.cylinderId).where(sql`kind = 'corrected'`),
+  index('custody_events_job').on(sql`(${sql.raw(JOB_NAMED)})`).where(sql`(${sql.raw(JOB_NAMED)}) IS NOT NULL`),
 ])
 
 /**
@@ -553,10 +558,26 @@ export const jobs = sqliteTable('jobs', {
   charge: text('charge', { mode: 'json' }).$type<MassReading>(),
   /** Whose the recovered refrigerant stays: the customer's, or ours. */
   keeps: text('keeps', { enum: ['customer', 'firm'] }).notNull(),
+  /** What is opened, why, and since when its recovery machine is made, as far as they were said: the required vacuum goes by them. */
+  opened: text('opened', { mode: 'json' }).$type<{ appliance?: Appliance, circumstances?: Circumstances, machineMade?: MachineMade }>(),
   note: text('note'),
   createdBy: text('created_by').notNull(),
   createdAt: integer('created_at').notNull(),
+  /** How often what it says was changed since. */
+  changes: integer('changes').notNull().default(0),
 }, table => [index('jobs_customer').on(table.customerId)])
+
+/** Recovery notes that went to a customer: which issue, to whom, by which letter. The id is the sender's, so that one asked for twice goes once. */
+export const jobNotes = sqliteTable('job_notes', {
+  id: text('id').primaryKey(),
+  jobId: text('job_id').notNull().references(() => jobs.id),
+  issue: integer('issue').notNull(),
+  recipient: text('recipient').notNull(),
+  /** null until its letter was written. */
+  mailId: text('mail_id').references(() => mail.id),
+  sentBy: text('sent_by').notNull(),
+  sentAt: integer('sent_at').notNull(),
+}, table => [index('job_notes_job').on(table.jobId)])
 
 /** A plan that was made: the question, the answer, and whether it is still followed. */
 export const plans = sqliteTable('plans', {
