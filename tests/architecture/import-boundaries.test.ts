@@ -13,8 +13,10 @@ const PURE: Record<string, readonly string[]> = {
   recovery: ['quantity', 'refrigerant', 'address'],
   custody: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'access', 'label', 'registration'],
   photo: ['quantity'],
+  dock: ['quantity', 'label'],
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
-  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label'],
+  reclaim: ['quantity', 'capacity', 'custody'],
+  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim'],
 }
 
 /** What else in utils/ draws, prints and plans: all of the above. */
