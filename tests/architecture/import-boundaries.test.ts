@@ -16,7 +16,7 @@ const PURE: Record<string, readonly string[]> = {
   dock: ['quantity', 'label'],
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
   reclaim: ['quantity', 'capacity', 'custody'],
-  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim'],
+  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim', 'dock'],
 }
 
 /** What else in utils/ draws, prints and plans: all of the above. */
