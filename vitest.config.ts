@@ -37,7 +37,7 @@ export default defineConfig(async () => ({
         test: {
           name: 'component',
           include: ['tests/component/**/*.test.ts'],
-          setupFiles: ['tests/helpers/nobodySignedIn.ts'],
+          setupFiles: ['tests/helpers/nothingPutOff.ts', 'tests/helpers/nobodySignedIn.ts'],
           // The framework's own start belongs to the first file's set-up.
           hookTimeout: 60_000,
           // The first page of a file is mounted along with all that it imports, which a busy machine takes its time over.
