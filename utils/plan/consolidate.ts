@@ -1,0 +1,86 @@
+import { isChosen, programText, type Program, type Solution, type Solve } from './linearProgram'
+import { alongWays, poured, type Choice } from './poured'
+import { faultOf, freedBy, type Transfer, type TransferProblem } from './transferProblem'
+import { eachWhole, emptied, fewestEmptied, fewestGrams, fewestTransfers, goes, mostFreed, opened, waysOf } from './transferPrograms'
+
+/**
+ * The transfers by which the most cylinders come free, of those the fewest, of those the ones that move the fewest grams.
+ *
+ * Shape: `mostFreed` and `fewestTransfers` are what no plan can pass. Where the plan reaches both it is the best there is.
+ */
+export interface Consolidation {
+  transfers: Transfer[]
+  freed: number
+  mostFreed: number
+  fewestTransfers: number
+}
+
+export const NOTHING_TO_FREE: Consolidation = { transfers: [], freed: 0, mostFreed: 0, fewestTransfers: 0 }
+
+/** How the seconds for one plan are shared among its steps, the last of which has what is left. */
+const SHARES = { freed: 0.2, emptied: 0.15, whole: 0.3, parted: 0.25, grams: 0.1 }
+
+/**
+ * Searches the best transfers within a time. Each source is emptied whole, into several cylinders where that frees more;
+ * what is only moved between two that stay frees nothing.
+ *
+ * Rounding: whole grams throughout. Errors: where a solver's answer does not hold against the problem.
+ */
+export async function consolidate(problem: TransferProblem, solve: Solve, seconds: number): Promise<Consolidation> {
+  if (waysOf(problem).length === 0) return NOTHING_TO_FREE
+  const ask = (program: Program, share: keyof typeof SHARES) => solve(programText(program), { seconds: seconds * SHARES[share] })
+
+  const most = await ask(mostFreed(problem), 'freed')
+  const first = bestOf(problem, [pouredBy(problem, choiceOf(problem, most))])
+  const bound = most.status === 'optimal' ? first.freed : problem.gives.length
+  if (first.freed === 0) return { ...NOTHING_TO_FREE, mostFreed: most.status === 'optimal' ? 0 : bound }
+
+  const fewest = await ask(fewestEmptied(problem, first.freed), 'emptied')
+  const atLeast = fewest.status === 'optimal' ? choiceOf(problem, fewest).emptied.length : first.freed
+  const found = [first.transfers, pouredBy(problem, choiceOf(problem, fewest))]
+  const answer = (): Consolidation => ({ ...bestOf(problem, found), mostFreed: bound, fewestTransfers: atLeast })
+
+  const whole = await ask(eachWhole(problem, first.freed, atLeast), 'whole')
+  found.push(byWays(problem, whole))
+  if (answer().transfers.length === atLeast) return answer()
+
+  // No plan brings each whole into another one: then it takes one transfer more at least.
+  const needed = whole.status === 'infeasible' ? atLeast + 1 : atLeast
+  const parted = await ask(fewestTransfers(problem, first.freed, needed), 'parted')
+  found.push(byWays(problem, parted))
+  const few = answer().transfers.length
+  const proven = parted.status === 'optimal' ? few : needed
+  if (parted.status === 'optimal') found.push(byWays(problem, await ask(fewestGrams(problem, first.freed, few), 'grams')))
+  return { ...answer(), fewestTransfers: proven }
+}
+
+function choiceOf({ gives, takes }: TransferProblem, solution: Solution): Choice {
+  return {
+    emptied: gives.filter((_, give) => isChosen(solution, emptied(give))),
+    opened: takes.filter((take, index) => take.isEmpty && isChosen(solution, opened(index))),
+  }
+}
+
+function pouredBy(problem: TransferProblem, choice: Choice): Transfer[] {
+  return poured(problem, choice) ?? []
+}
+
+// The solver reckons with fractions; of its answer only the choices are taken, and the grams are reckoned anew.
+function byWays(problem: TransferProblem, solution: Solution): Transfer[] {
+  const choice = choiceOf(problem, solution)
+  const ways = waysOf(problem).filter(({ give, take }) => isChosen(solution, goes(give, take)))
+    .map(({ give, take }) => ({ fromId: problem.gives[give]!.id, toId: problem.takes[take]!.id }))
+  const staying = problem.takes.filter(({ id, isEmpty }) => !isEmpty && !choice.emptied.some(give => give.id === id))
+  const rooms = new Map([...staying, ...choice.opened].map(({ id, roomGrams }) => [id, roomGrams]))
+  return alongWays(choice.emptied, rooms, ways) ?? []
+}
+
+/** The best of several, leaving out what does not hold against the problem. */
+function bestOf(problem: TransferProblem, found: readonly Transfer[][]): { transfers: Transfer[], freed: number } {
+  const grams = (transfers: readonly Transfer[]) => transfers.reduce((sum, one) => sum + one.grams, 0)
+  const [best] = found
+    .filter(transfers => faultOf(problem, transfers) === null)
+    .map(transfers => ({ transfers, freed: freedBy(problem, transfers) }))
+    .sort((a, b) => b.freed - a.freed || a.transfers.length - b.transfers.length || grams(a.transfers) - grams(b.transfers))
+  return best ?? { transfers: [], freed: 0 }
+}
