@@ -202,7 +202,7 @@ export const scales = sqliteTable('scales', {
 })
 
 /** The job that a line of the log names, or that a correction names in its place, in SQL: in the words of the index that finds it. A line that was tampered with may be no JSON. */
-export const JOB_NAMED = `CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN body ->> '$.details.instead.jobId' ELSE body ->> '$.details.jobId' END END`
+export const JOB_NAMED = `CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN lower(body ->> '$.details.instead.jobId') ELSE body ->> '$.details.jobId' END END`
 
 /**
  * The custody log. Append-only: triggers refuse UPDATE and DELETE, and an INSERT that would replace a row is ignored.

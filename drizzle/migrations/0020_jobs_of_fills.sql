@@ -13,4 +13,4 @@ CREATE TABLE `job_notes` (
 CREATE INDEX `job_notes_job` ON `job_notes` (`job_id`);--> statement-breakpoint
 ALTER TABLE `jobs` ADD `opened` text;--> statement-breakpoint
 ALTER TABLE `jobs` ADD `changes` integer DEFAULT 0 NOT NULL;--> statement-breakpoint
-CREATE INDEX `custody_events_job` ON `custody_events` ((CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN body ->> '$.details.instead.jobId' ELSE body ->> '$.details.jobId' END END)) WHERE (CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN body ->> '$.details.instead.jobId' ELSE body ->> '$.details.jobId' END END) IS NOT NULL;
+CREATE INDEX `custody_events_job` ON `custody_events` ((CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN lower(body ->> '$.details.instead.jobId') ELSE body ->> '$.details.jobId' END END)) WHERE (CASE WHEN json_valid(body) THEN CASE WHEN kind = 'corrected' THEN lower(body ->> '$.details.instead.jobId') ELSE body ->> '$.details.jobId' END END) IS NOT NULL;

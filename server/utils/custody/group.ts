@@ -105,18 +105,24 @@ async function saidBetween({ readClient }: Database, cylinderIds: string[]): Pro
   return { shared: sharedCodes(shared!.rows), own: halvesFrom(own!.rows), naming: halvesFrom(naming!.rows) }
 }
 
-/** The shipments and test lots that events name, as far as there are any. */
-async function listsNamed({ readClient }: Database, events: readonly AnyCustodyEvent[]): Promise<{ shipments: Set<string>, testLots: Set<string> }> {
+/** Ids of what events name beside what the directory holds. */
+interface Listed { shipments: Set<string>, testLots: Set<string>, jobs: Set<string> }
+
+/** The shipments, test lots and jobs that events name, as far as there are any. */
+async function listsNamed({ readClient }: Database, events: readonly AnyCustodyEvent[]): Promise<Listed> {
   const named = idsIn(events)
-  if (named.shipments.length + named.testLots.length === 0) return { shipments: new Set(), testLots: new Set() }
-  const [shipments, testLots] = await readClient.batch([
-    inList('SELECT id FROM shipments WHERE id IN', named.shipments), inList('SELECT id FROM test_lots WHERE id IN', named.testLots),
+  if (named.shipments.size + named.testLots.size + named.jobs.size === 0) return named
+  const [shipments, testLots, jobs] = await readClient.batch([
+    inList('SELECT id FROM shipments WHERE id IN', [...named.shipments]),
+    inList('SELECT id FROM test_lots WHERE id IN', [...named.testLots]),
+    inList('SELECT id FROM jobs WHERE id IN', [...named.jobs]),
   ], 'read')
-  return { shipments: new Set(shipments!.rows.map(row => row[0] as string)), testLots: new Set(testLots!.rows.map(row => row[0] as string)) }
+  const found = (answer: typeof jobs) => new Set(answer!.rows.map(row => row[0] as string))
+  return { shipments: found(shipments), testLots: found(testLots), jobs: found(jobs) }
 }
 
 /** The directory, read again when an event names an id that the kept one does not have. */
-async function knownIds(db: Database, events: readonly AnyCustodyEvent[], { shipments, testLots }: Awaited<ReturnType<typeof listsNamed>>) {
+async function knownIds(db: Database, events: readonly AnyCustodyEvent[], { shipments, testLots, jobs }: Listed) {
   let from = await directory(db)
   const known: KnownIds = {
     place: id => from.places.has(id),
@@ -125,23 +131,26 @@ async function knownIds(db: Database, events: readonly AnyCustodyEvent[], { ship
     scale: id => from.scales.has(id),
     shipment: id => shipments.has(id),
     testLot: id => testLots.has(id),
+    job: id => jobs.has(id),
   }
   if (events.some(event => unknownIds(event, known).length > 0)) from = await directory(db, true)
   return { from, known }
 }
 
-function idsIn(events: readonly AnyCustodyEvent[]): { shipments: string[], testLots: string[] } {
-  const shipments = new Set<string>()
-  const testLots = new Set<string>()
+function idsIn(events: readonly AnyCustodyEvent[]): Listed {
+  const named: Listed = { shipments: new Set(), testLots: new Set(), jobs: new Set() }
   for (const event of events) {
-    const details = event.details as { shipmentId?: string, lotId?: string, instead?: { shipmentId?: string, lotId?: string } }
+    const details = event.details as NamingIds & { instead?: NamingIds }
     for (const holder of [details, details.instead]) {
-      if (holder?.shipmentId) shipments.add(holder.shipmentId.toLowerCase())
-      if (holder?.lotId) testLots.add(holder.lotId.toLowerCase())
+      if (holder?.shipmentId) named.shipments.add(holder.shipmentId.toLowerCase())
+      if (holder?.lotId) named.testLots.add(holder.lotId.toLowerCase())
+      if (holder?.jobId) named.jobs.add(holder.jobId.toLowerCase())
     }
   }
-  return { shipments: [...shipments], testLots: [...testLots] }
+  return named
 }
+
+interface NamingIds { shipmentId?: string, lotId?: string, jobId?: string }
 
 function inList(sql: string, values: string[], end = ''): InStatement {
   return { sql: `${sql} (${values.map(() => '?').join(', ')}) ${end}`, args: values }

@@ -37,12 +37,13 @@ export interface KnownIds {
   scale: (id: string) => boolean
   shipment: (id: string) => boolean
   testLot: (id: string) => boolean
+  job: (id: string) => boolean
 }
 
 type Known = keyof KnownIds
 
 /** What each id inside an event or its details names. */
-const ID_FIELDS: Record<string, Known | 'job'> = {
+const ID_FIELDS: Record<string, Known> = {
   placeId: 'place', toPlaceId: 'place',
   supervisorId: 'person', toHolderId: 'person',
   fromFirmId: 'firm', ownerId: 'firm', ownerOfRefrigerantId: 'firm', requalifierId: 'firm', firmId: 'firm',
@@ -59,8 +60,7 @@ export function unknownIds(event: AnyCustodyEvent, known: KnownIds): { path: str
     for (const [field, names] of Object.entries(ID_FIELDS)) {
       const value = holder[field]
       if (typeof value !== 'string') continue
-      // Jobs have no list of their own yet, so none is known.
-      if (names === 'job' || !known[names](value)) errors.push({ path: `${path}${field}`, message: `no such ${names === 'testLot' ? 'test lot' : names}` })
+      if (!known[names](value)) errors.push({ path: `${path}${field}`, message: `no such ${names === 'testLot' ? 'test lot' : names}` })
     }
   }
   look('', event as unknown as Record<string, unknown>)

@@ -12,6 +12,7 @@ export function refuseTakenName(others: Iterable<{ id: string, name: string, act
   throw problem(409, 'The name is taken', detail, [{ path: 'name', message: other.active ? 'is taken' : 'is taken by one that is turned off' }], { type: 'name-taken' })
 }
 
-function nameKey(name: string): string {
+/** A name as it is told from another. */
+export function nameKey(name: string): string {
   return name.normalize('NFKC').trim().replace(/\s+/g, ' ').toLowerCase()
 }
