@@ -31,7 +31,7 @@ describe('the contents tag of a cylinder', () => {
     // 41.5 lb less the tare of 27.5 lb.
     expect(body.tag).toMatchObject({
       refrigerant: 'R-22', kind: 'Recovered', net: '14.0\u00A0lb (6.35\u00A0kg)', technician: 'Tina', numberHeightMm: 6,
-      entry: { un: 'UN1018', properShippingName: 'Chlorodifluoromethane or Refrigerant gas R 22', judgement: null },
+      entry: { un: 'UN1018', properShippingName: 'Refrigerant gas R 22', judgement: null },
     })
   })
 
