@@ -15,8 +15,9 @@ const PURE: Record<string, readonly string[]> = {
   photo: ['quantity'],
   dock: ['quantity', 'label'],
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
-  reclaim: ['quantity', 'capacity', 'custody'],
-  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim', 'dock'],
+  reclaim: ['quantity', 'requalification', 'capacity', 'custody'],
+  settlement: ['quantity', 'photo', 'reclaim', 'dock'],
+  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim', 'dock', 'settlement'],
 }
 
 /** What else in utils/ draws, prints and plans: all of the above. */

@@ -27,6 +27,8 @@ export interface DisputeState {
   /** Nobody opened it: the figures did. */
   isByFigures: boolean
   isOpen: boolean
+  /** By how much the figures differed as it ended last; null where it never has, or they did not. */
+  endedMeasure: string | null
 }
 
 /** What a change of the figures does to the disputes of a shipment. */
@@ -66,26 +68,20 @@ export function differencesOf(settlement: SettlementFigures): Difference[] {
 }
 
 /**
- * What new figures do to the disputes: a new difference opens one; an ended one is opened again where its difference is
- * not the one that was settled; one that nobody but the figures opened ends with its difference.
+ * What the figures do to the disputes: a difference that nobody argues about opens one; an ended one is opened again where
+ * its difference is not the one that was settled; one that nobody but the figures opened ends with its difference.
  */
-export function disputeChanges(disputes: readonly DisputeState[], before: readonly Difference[], after: readonly Difference[]): DisputeChanges {
-  const [past, present] = [byKey(before), byKey(after)]
-  const known = new Map<string, DisputeState>()
-  // Of several about the same, the one that is open speaks for them, else the latest.
-  for (const dispute of disputes) if (!known.get(keyOf(dispute))?.isOpen) known.set(keyOf(dispute), dispute)
+export function disputeChanges(disputes: readonly DisputeState[], differences: readonly Difference[]): DisputeChanges {
+  const shown = new Set(differences.map(keyOf))
   const changes: DisputeChanges = { open: [], reopen: [], end: [] }
-  for (const [key, difference] of present) {
-    const dispute = known.get(key)
-    if (!dispute) changes.open.push(difference)
-    else if (!dispute.isOpen && past.get(key)?.measure !== difference.measure) changes.reopen.push({ id: dispute.id, difference })
+  for (const difference of differences) {
+    const about = disputes.filter(dispute => keyOf(dispute) === keyOf(difference))
+    const latest = about.at(-1)
+    if (!latest) changes.open.push(difference)
+    else if (about.every(({ isOpen }) => !isOpen) && about.every(({ endedMeasure }) => endedMeasure !== difference.measure)) changes.reopen.push({ id: latest.id, difference })
   }
-  changes.end = disputes.filter(dispute => dispute.isOpen && dispute.isByFigures && !present.has(keyOf(dispute))).map(({ id }) => id)
+  changes.end = disputes.filter(dispute => dispute.isOpen && dispute.isByFigures && !shown.has(keyOf(dispute))).map(({ id }) => id)
   return changes
-}
-
-function byKey(differences: readonly Difference[]): Map<string, Difference> {
-  return new Map(differences.map(difference => [keyOf(difference), difference]))
 }
 
 function keyOf({ about, cylinderId }: Pick<Difference, 'about' | 'cylinderId'>): string {

@@ -1,16 +1,9 @@
-import type { MassReading } from '../quantity/mass'
+import type { DockLine } from '../dock/dockLines'
 import type { Rate } from '../reclaim/price'
 import type { LineFigures } from './figures'
 
 /** What the dock said of a line over its link. */
-export interface DockSaid {
-  here: boolean
-  theirGross: MassReading | null
-  missing: boolean
-  grade: string | null
-  acceptedNet: MassReading | null
-  sentBack: boolean
-}
+export type DockSaid = Pick<DockLine, 'theirGross' | 'missing' | 'grade' | 'acceptedNet' | 'sentBack'>
 
 /** A line's figures where nobody has typed any: what the dock said, and the price that held on the day it left. */
 export function prefilled(dock: DockSaid | undefined, rate: Rate | null): LineFigures {

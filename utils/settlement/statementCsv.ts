@@ -15,12 +15,15 @@ export interface StatementReading {
   columns?: Partial<Record<StatementColumn, string>>
 }
 
+/** A row of a file as its cells, with the line of the file that it stands on, from 1. */
+export interface TableRow { row: number, cells: readonly string[] }
+
 /** One figure that taking over would put in the place of another. */
 export interface FigureChange<K extends keyof LineFigures = keyof LineFigures> { field: K, from: LineFigures[K], to: LineFigures[K] }
 
 /** A row of the file beside the line that it belongs to. */
 export interface PreviewRow {
-  /** The row of the file, counted from 1 with the header. */
+  /** The line of the file that it stands on, from 1. */
   row: number
   serial: string
   cylinderId: string | null
@@ -46,11 +49,11 @@ export function comparedSerial(serial: string): string {
  * Puts the rows of a statement beside the lines of the shipment, by serial, and says row by row what would change and
  * what is wrong. Where the header cannot be read there are no rows.
  */
-export function statementPreview(table: readonly (readonly string[])[], lines: readonly KnownLine[], reading: StatementReading): StatementPreview {
-  const header = readHeader(table[0] ?? [], reading.columns)
+export function statementPreview(table: readonly TableRow[], lines: readonly KnownLine[], reading: StatementReading): StatementPreview {
+  const header = readHeader(table[0]?.cells ?? [], reading.columns)
   if (header.problems.length > 0) return { header, rows: [], notNamed: [] }
   const linesOf = bySerials(lines)
-  const named = table.slice(1).map((cells, index) => ({ row: index + 2, ...readRow(cells, header.mapping, reading.decimal, reading.unit) }))
+  const named = table.slice(1).map(({ row, cells }) => ({ row, ...readRow(cells, header.mapping, reading.decimal, reading.unit) }))
   const rowsOf = bySerials(named)
 
   const rows = named.map(({ row, serial, figures, problems }): PreviewRow => {

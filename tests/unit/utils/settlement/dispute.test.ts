@@ -37,30 +37,30 @@ describe('what opens a dispute by itself', () => {
   })
 })
 
-describe('what new figures do to the disputes', () => {
+describe('what the figures do to the disputes', () => {
   const gross = (measure: string) => ({ about: 'gross' as const, cylinderId: 'a', measure })
-  const dispute = (more: Partial<DisputeState>): DisputeState => ({ id: '1', about: 'gross', cylinderId: 'a', isByFigures: true, isOpen: true, ...more })
+  const dispute = (more: Partial<DisputeState>): DisputeState => ({ id: '1', about: 'gross', cylinderId: 'a', isByFigures: true, isOpen: true, endedMeasure: null, ...more })
 
   it('opens a new one once', () => {
-    expect(disputeChanges([], [], [gross('-200')]).open).toEqual([gross('-200')])
-    expect(disputeChanges([dispute({})], [gross('-200')], [gross('-300')])).toEqual({ open: [], reopen: [], end: [] })
+    expect(disputeChanges([], [gross('-200')]).open).toEqual([gross('-200')])
+    expect(disputeChanges([dispute({})], [gross('-300')])).toEqual({ open: [], reopen: [], end: [] })
   })
 
   it('opens an ended one again where the difference is another, and lets it rest where it is the same', () => {
-    const ended = dispute({ isOpen: false })
-    expect(disputeChanges([ended], [gross('-200')], [gross('-200')])).toEqual({ open: [], reopen: [], end: [] })
-    expect(disputeChanges([ended], [gross('-200')], [gross('-201')]).reopen).toEqual([{ id: '1', difference: gross('-201') }])
-    expect(disputeChanges([ended], [], [gross('-200')]).reopen).toHaveLength(1)
+    const ended = dispute({ isOpen: false, endedMeasure: '-200' })
+    expect(disputeChanges([ended], [gross('-200')])).toEqual({ open: [], reopen: [], end: [] })
+    expect(disputeChanges([ended], [gross('-201')]).reopen).toEqual([{ id: '1', difference: gross('-201') }])
+    expect(disputeChanges([dispute({ isOpen: false })], [gross('-200')]).reopen).toHaveLength(1)
   })
 
   it('ends with its difference, unless a person opened it', () => {
-    expect(disputeChanges([dispute({})], [gross('-200')], []).end).toEqual(['1'])
-    expect(disputeChanges([dispute({ isByFigures: false })], [gross('-200')], []).end).toEqual([])
-    expect(disputeChanges([dispute({ isOpen: false })], [gross('-200')], []).end).toEqual([])
+    expect(disputeChanges([dispute({})], []).end).toEqual(['1'])
+    expect(disputeChanges([dispute({ isByFigures: false })], []).end).toEqual([])
+    expect(disputeChanges([dispute({ isOpen: false })], []).end).toEqual([])
   })
 
   it('does not open a second one beside an open one about the same', () => {
-    const both = [dispute({ id: '1' }), dispute({ id: '2', isOpen: false })]
-    expect(disputeChanges(both, [], [gross('-200')])).toEqual({ open: [], reopen: [], end: [] })
+    const both = [dispute({ id: '1' }), dispute({ id: '2', isOpen: false, endedMeasure: '-100' })]
+    expect(disputeChanges(both, [gross('-200')])).toEqual({ open: [], reopen: [], end: [] })
   })
 })

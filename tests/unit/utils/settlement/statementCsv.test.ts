@@ -9,7 +9,8 @@ const POINT: StatementReading = { decimal: 'point', unit: null }
 const known = (cylinderId: string, serial: string | null): KnownLine => ({ cylinderId, serial, figures: NOTHING_SAID })
 const LINES = [known('a', 'K 4471-02'), known('b', 'K447103'), known('c', null)]
 
-const preview = (rows: string[][], reading = POINT, lines = LINES) => statementPreview([HEADER, ...rows], lines, reading)
+const table = (rows: string[][]) => rows.map((cells, index) => ({ row: index + 1, cells }))
+const preview = (rows: string[][], reading = POINT, lines = LINES) => statementPreview(table([HEADER, ...rows]), lines, reading)
 const problems = (row: string[], reading = POINT) => preview([row], reading).rows[0]!.problems.map(({ column, text }) => `${column}: ${text}`)
 
 describe('a figure of a file', () => {
@@ -92,7 +93,7 @@ describe('a statement beside the lines of a shipment', () => {
   })
 
   it('reads no row under a header that it cannot read', () => {
-    expect(statementPreview([['number', 'weight'], ['K447103', '3']], LINES, POINT)).toMatchObject({ rows: [], header: { notOurs: ['number', 'weight'] } })
+    expect(statementPreview(table([['number', 'weight'], ['K447103', '3']]), LINES, POINT)).toMatchObject({ rows: [], header: { notOurs: ['number', 'weight'] } })
     expect(statementPreview([], LINES, POINT).header.problems).not.toEqual([])
   })
 })
