@@ -4,6 +4,9 @@ import { join } from 'node:path'
 import { sharedParts } from './build/sharedParts'
 import { WEB_MANIFEST } from './service-worker/webManifest'
 
+/** What lies in an address that opens something by itself: named to nobody else, and in no index. */
+const OPENS_BY_ITSELF = { headers: { 'X-Robots-Tag': 'noindex, nofollow' }, security: { headers: { referrerPolicy: 'no-referrer' as const } } }
+
 export default defineNuxtConfig({
   modules: [
     '@pinia/nuxt', '@nuxtjs/tailwindcss', 'nuxt-auth-utils', 'nuxt-security',
@@ -44,7 +47,11 @@ export default defineNuxtConfig({
   },
   srcDir: '.',
   // Drawn in the browser alone, so that it is the same for everybody and may lie on the device.
-  routeRules: { '/shell': { ssr: false } },
+  routeRules: {
+    '/shell': { ssr: false },
+    '/d/**': { ...OPENS_BY_ITSELF, ssr: false },
+    '/api/dock/**': OPENS_BY_ITSELF,
+  },
   // A page is fetched ahead when a hand goes to its link, not because the link is in sight: phones in a plant room.
   experimental: {
     defaults: { nuxtLink: { prefetchOn: { interaction: true, visibility: false } } },

@@ -57,6 +57,8 @@ export interface Environment {
   /** Whether passwords go over a network in clear. */
   unprotected: boolean
   proxyHops: number
+  /** What seals the session cookie, and what other keys are derived from. */
+  secret: string
   /** Signs the checkpoints of the log; undefined where the key is kept in a file. */
   checkpointKey: string | undefined
   /** Public keys that signed checkpoints before. */
@@ -89,6 +91,7 @@ export function readEnvironment(variables: Record<string, string | undefined>): 
     secure: values.PUBLIC_URL.startsWith('https:'),
     unprotected: values.PUBLIC_URL.startsWith('http:') && !isLoopback(values.PUBLIC_URL),
     proxyHops: values.PROXY_HOPS,
+    secret: values.NUXT_SESSION_PASSWORD,
     checkpointKey: values.CHECKPOINT_KEY,
     formerCheckpointKeys: values.CHECKPOINT_FORMER_KEYS,
     demo: values.COLLARBOOK_DEMO === '1',

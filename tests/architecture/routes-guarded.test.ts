@@ -9,6 +9,10 @@ const KNOWN = new Set<string>(['public', 'signed-in', ...Object.values(PERMISSIO
 /** The routes that anybody may call. A new one is written down here on purpose, or not at all. */
 const OPEN = [
   'server/api/[...].ts',
+  'server/api/dock/[token]/index.get.ts',
+  'server/api/dock/[token]/photos/[id].get.ts',
+  'server/api/dock/[token]/photos/index.post.ts',
+  'server/api/dock/[token]/shipments/[id]/entries.post.ts',
   'server/api/firm/card.get.ts',
   'server/api/health.get.ts',
   'server/api/invitations/[token]/index.get.ts',

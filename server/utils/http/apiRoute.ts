@@ -8,6 +8,7 @@ import { asProblem } from './asProblem'
 import { readFormBody } from './formBody'
 import { insistOn } from './insistOn'
 import { readJsonBody } from './jsonBody'
+import { loggedPath } from './loggedPath'
 import { problem, sendProblem } from './problem'
 import { queryOf, validate } from './validate'
 
@@ -77,7 +78,7 @@ export function apiRoute<
     }
     catch (error) {
       const told = asProblem(error)
-      if (told.details.status >= 500) console.error(`${event.method} ${event.path.split('?')[0]} failed:`, error)
+      if (told.details.status >= 500) console.error(`${event.method} ${loggedPath(event.path)} failed:`, error)
       await sendProblem(event, told)
       return undefined as R
     }

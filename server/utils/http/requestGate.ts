@@ -5,8 +5,8 @@ import { problem, type Problem } from './problem'
 
 const SAFE_METHODS = new Set(['GET', 'HEAD', 'OPTIONS'])
 
-/** The one route that takes a file, and so a form in place of JSON. */
-const TAKES_FORM = /^\/api\/uploads(\?|$)/
+/** The routes that take a photo, and so a form in place of JSON. */
+const TAKES_FORM = /^\/api\/(uploads|dock\/[^/?]+\/photos)(\?|$)/
 
 /** What the gate looks at; header names in lower case. */
 export interface GateRequest {
