@@ -7,7 +7,7 @@ export type FindingCode
     | 'second-refrigerant' | 'unknown-onto-known' | 'retest-overdue' | 'retest-soon' | 'retest-unknown'
     | 'early-test' | 'wet' | 'rejected' | 'condemned' | 'quarantined'
     | 'weight-not-known' | 'not-registered' | 'registered-twice' | 'old-tare-on-label'
-    | 'code-on-two' | 'half-transfer' | 'transfer-unbalanced' | 'unsigned' | 'unsupervised' | 'not-seen' | 'two-owners'
+    | 'code-on-two' | 'half-transfer' | 'transfer-unbalanced' | 'unsigned' | 'unsupervised' | 'not-seen' | 'two-owners' | 'owner-change' | 'owner-consent'
     | 'weigh-again' | 'clock-doubtful' | 'late-change' | 'look-before-fill' | 'system-dependent-limit' | 'gas-excess' | 'found-by-use' | 'away' | 'after-end' | 'tested-full' | 'not-shippable'
 
 /** A rule's word on an event, a state or a plan. */

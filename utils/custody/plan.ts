@@ -1,5 +1,6 @@
 import type { CylinderView, Missing } from './cylinderView'
 import type { Finding, FindingCode } from './finding'
+import { newOwnerBecause, ownerChange } from './findings/owner'
 import { notShippable } from './findings/record'
 import { hasContents } from './findings/retest'
 
@@ -28,9 +29,19 @@ export function mayFill(view: Planned): PlanAnswer {
   return { ...answered, allowed: answered.allowed && stopWeightGrams !== null }
 }
 
-/** Whether refrigerant may be drawn from it. */
-export function mayDraw(view: Planned): PlanAnswer {
-  return answer(gone(view))
+/**
+ * Whether refrigerant may be drawn from it.
+ *
+ * @param use what for and, where that is known, into whose equipment; left out, whether anything may be drawn at all.
+ */
+export function mayDraw(view: Planned, use?: Parameters<typeof newOwnerBecause>[1]): PlanAnswer {
+  const because = use && !view.contents.nothingInIt ? newOwnerBecause(view.contents.owners.map(({ ownerId }) => ownerId), use) : null
+  return answer([...gone(view), ...(because ? [ownerChange(because)] : [])])
+}
+
+/** Whether it may be given to a firm in an exchange, with what is in it. */
+export function mayGiveAway(view: Planned, firm: { isReclaimer: boolean }): PlanAnswer {
+  return answer([...mayTake(view).because, ...(firm.isReclaimer || isEmptyByScale(view) ? [] : [ownerChange('given-away')])])
 }
 
 /** Whether what is in it may be checked. */

@@ -121,6 +121,8 @@ export const FINDING_WORDS: Record<FindingCode, string> = {
   'unsupervised': 'no supervisor',
   'not-seen': 'not seen',
   'two-owners': 'two owners',
+  'owner-change': 'to a new owner',
+  'owner-consent': 'owner not asked',
   'weigh-again': 'weigh again',
   'clock-doubtful': 'clock doubtful',
   'late-change': 'came late',

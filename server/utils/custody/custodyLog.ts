@@ -127,7 +127,7 @@ function instantWithOffset(ms: number, offsetMinutes: number): string {
 /** Names of the places, people and firms that an event's details name. */
 function namesInside(details: Record<string, unknown>, names: ReturnType<typeof namesOf>): Record<string, string> {
   const readers: [RegExp, (id: string) => Named][] = [
-    [/^placeId$|PlaceId$/, names.place], [/HolderId$/, names.person], [/(FirmId|ownerId|OfRefrigerantId|requalifierId)$/, names.firm],
+    [/^placeId$|PlaceId$/, names.place], [/HolderId$/, names.person], [/(FirmId|[oO]wnerId|OfRefrigerantId|requalifierId)$/, names.firm],
   ]
   return Object.fromEntries(Object.entries(details).flatMap(([key, value]) => {
     const reader = readers.find(([pattern]) => pattern.test(key))

@@ -46,7 +46,7 @@ type Known = keyof KnownIds
 const ID_FIELDS: Record<string, Known> = {
   placeId: 'place', toPlaceId: 'place',
   supervisorId: 'person', toHolderId: 'person',
-  fromFirmId: 'firm', ownerId: 'firm', ownerOfRefrigerantId: 'firm', requalifierId: 'firm', firmId: 'firm',
+  fromFirmId: 'firm', ownerId: 'firm', ownerOfRefrigerantId: 'firm', toOwnerId: 'firm', requalifierId: 'firm', firmId: 'firm',
   scaleId: 'scale', shipmentId: 'shipment', lotId: 'testLot', jobId: 'job',
 }
 

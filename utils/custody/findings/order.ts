@@ -4,8 +4,8 @@ import type { Finding, FindingCode } from '../finding'
 const URGENCY: readonly FindingCode[] = [
   'overfill', 'condemned', 'after-end', 'pressure-class', 'not-refillable', 'spec-not-for-gas', 'not-marked-flammable',
   'second-refrigerant', 'unknown-onto-known', 'tested-full', 'early-test', 'rejected', 'quarantined', 'wet',
-  'retest-overdue', 'retest-unknown', 'code-on-two', 'unsupervised', 'away', 'not-shippable',
-  'not-registered', 'registered-twice', 'half-transfer', 'transfer-unbalanced', 'weigh-again', 'gas-excess', 'nearly-full', 'weight-not-known', 'toxic', 'two-owners', 'retest-soon',
+  'retest-overdue', 'retest-unknown', 'code-on-two', 'unsupervised', 'away', 'owner-change', 'not-shippable',
+  'not-registered', 'registered-twice', 'half-transfer', 'transfer-unbalanced', 'weigh-again', 'gas-excess', 'nearly-full', 'weight-not-known', 'toxic', 'two-owners', 'owner-consent', 'retest-soon',
   'old-tare-on-label', 'not-seen', 'unsigned', 'late-change', 'clock-doubtful', 'look-before-fill', 'system-dependent-limit', 'found-by-use',
 ]
 

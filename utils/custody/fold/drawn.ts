@@ -1,7 +1,9 @@
 import { worse } from '../condition'
+import { newOwnerBecause, ownerChange } from '../findings/owner'
 import { amountNotKnown } from '../findings/weight'
 import type { MovementCause } from '../movement'
 import { weighAfterOutflow } from './contents'
+import type { CylinderState } from '../state'
 import type { Turn } from './turn'
 import { backByUse } from './whereabouts'
 
@@ -20,9 +22,20 @@ export function drawn(turn: Turn<'drawn'>): void {
   const { contents } = turn.state
   const { grossAfter, purpose, phase } = turn.event.details
   if (turn.state.away) backByUse(turn)
+  raiseNewOwner(turn)
   if (contents.netGrams === null) turn.findings.push(amountNotKnown('drawn'))
   weighAfterOutflow(turn, grossAfter, CAUSES[purpose])
   if (phase === 'vapour' && !contents.nothingInIt && hasGlide(turn)) contents.condition = worse(contents.condition, 'suspect')
+}
+
+function raiseNewOwner({ state, event, findings }: Turn<'drawn'>): void {
+  const because = newOwnerBecause(ownersOf(state.contents), event.details)
+  if (because && !state.contents.nothingInIt) findings.push(ownerChange(because))
+}
+
+function ownersOf({ shares }: CylinderState['contents']): (string | null)[] {
+  const held = shares.filter(({ grams }) => grams > 0)
+  return (held.length > 0 ? held : shares).map(({ ownerId }) => ownerId)
 }
 
 function hasGlide({ state, context }: Turn): boolean {

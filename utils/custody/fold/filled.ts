@@ -7,10 +7,10 @@ import { backByUse } from './whereabouts'
 /** Refrigerant is recovered into the cylinder. */
 export function filled(turn: Turn<'filled'>): void {
   const { state, event, findings } = turn
-  const { refrigerant, condition, grossBefore, grossAfter, scaleId, method, looked, ownerOfRefrigerantId = null } = event.details
+  const { refrigerant, condition, grossBefore, grossAfter, scaleId, method, looked, ownerOfRefrigerantId = null, ownerConsents } = event.details
   if (state.away) backByUse(turn)
   if (looked !== true) findings.push(lookBeforeFill())
-  const recoveredGrams = takeIn(turn, { cause: 'recovered', refrigerant, condition, grossBefore, grossAfter, scaleId, ownerId: ownerOfRefrigerantId })
+  const recoveredGrams = takeIn(turn, { cause: 'recovered', refrigerant, condition, grossBefore, grossAfter, scaleId, ownerId: ownerOfRefrigerantId, ownerConsents })
   if (method === 'own-compressor' && recoveredGrams !== null && recoveredGrams >= 0) raiseOwnCompressor(turn, recoveredGrams)
 }
 

@@ -1,6 +1,7 @@
 import type { MassReading } from '../../quantity/mass'
 import { worse } from '../condition'
 import type { Condition } from '../cylinderView'
+import { ownerConsent } from '../findings/owner'
 import { amountNotKnown, wrongWay } from '../findings/weight'
 import { againstFill } from './againstFill'
 import { becomeUnknown } from './contents'
@@ -20,6 +21,8 @@ export interface Intake {
   scaleId?: string
   /** null = the contractor itself. */
   ownerId: string | null
+  /** Whose cylinder it is agrees. */
+  ownerConsents?: true
 }
 
 /** What a fill leaves the contents called. */
@@ -35,6 +38,7 @@ interface Outcome {
 export function takeIn(turn: Turn, intake: Intake): number | null {
   const { state, findings } = turn
   findings.push(...againstFill(turn, intake.refrigerant))
+  if (state.ownership !== 'own' && intake.ownerConsents !== true) findings.push(ownerConsent(state.ownership))
   const before = intake.grossBefore ? readScale(turn, intake.grossBefore, intake.scaleId) : null
   if (state.contents.nothingInIt && before?.isAboveTare) becomeUnknown(turn)
   const outcome = outcomeOf(turn, intake, before)

@@ -2,6 +2,7 @@ import { readingGrams } from '../../quantity/mass'
 import { scaleAccuracyGrams } from '../../quantity/scale'
 import type { HalfTransfer } from '../half'
 import type { CylinderState } from '../state'
+import { ownerChange } from '../findings/owner'
 import { amountNotKnown } from '../findings/weight'
 import { weigh, weighAfterOutflow } from './contents'
 import { takeIn } from './takeIn'
@@ -26,8 +27,16 @@ export function transferred(turn: Turn<'transferred'>): void {
 function goOut(turn: Turn<'transferred'>): void {
   const { grossBefore, grossAfter } = turn.event.details
   if (grossBefore) weigh(turn, grossBefore, 'weighing')
+  raiseAnotherOwner(turn)
   if (turn.state.contents.netGrams === null) turn.findings.push(amountNotKnown('transferred'))
   weighAfterOutflow(turn, grossAfter, 'transferred-out')
+}
+
+// Of two owners' refrigerant both halves name one: that it is two owners' stands already.
+function raiseAnotherOwner({ state, event, findings }: Turn<'transferred'>): void {
+  const [only, ...others] = state.contents.shares
+  if (!only || others.length > 0 || state.contents.nothingInIt) return
+  if (only.ownerId !== (event.details.ownerOfRefrigerantId ?? null)) findings.push(ownerChange('said-of-another'))
 }
 
 /**

@@ -17,6 +17,8 @@ export const details = z.strictObject({
   looked: z.literal(true, 'is either true or left out').optional(),
   /** What the scale showed on the way, hoses on. */
   readings: z.array(z.strictObject({ at: instant, gross: mass })).max(MOST_READINGS, `must be at most ${MOST_READINGS} readings`).optional(),
+  /** Whose cylinder it is agrees that it is filled. */
+  ownerConsents: z.literal(true, 'is either true or left out').optional(),
   /** Air was let out of hoses and lines before. */
   purged: z.literal(true, 'is either true or left out').optional(),
   /** What the system was brought down to, and how long it held there. */

@@ -11,6 +11,8 @@ export const details = z.strictObject({
   refrigerant: refrigerant.nullable(),
   condition,
   ownerOfRefrigerantId: uuid.optional(),
+  /** Whose cylinder it goes into agrees that it is filled. */
+  ownerConsents: z.literal(true, 'is either true or left out').optional(),
   grossBefore: mass.optional(),
   grossAfter: mass,
 })
