@@ -5,10 +5,11 @@ import type { Letter } from '../mail/mail'
 
 interface DockLetter { recipient: string, firm: OwnFirm, shipment: { number: number }, link: Pick<DockLink, 'forWhom' | 'expiresAt'>, url: string }
 
-/** The letter that brings a dock its link to one shipment. */
+/** The letter that brings a dock its link to one shipment; it is kept without the link. */
 export function dockLetter({ recipient, firm, shipment, link, url }: DockLetter): Letter {
   return {
     recipient,
+    unkept: url,
     subject: `${firm.name}: shipment ${shipment.number}, to tick off and weigh at your dock`,
     body: [
       `For ${link.forWhom}:`, '',

@@ -13,7 +13,15 @@ const PATIENCE_MS = 10_000
 const LONGEST_ERROR = 300
 
 /** A letter as it is written. */
-export interface Letter { recipient: string, subject: string, body: string }
+export interface Letter {
+  recipient: string
+  subject: string
+  body: string
+  /** A text of the body that goes to the reader alone: the letter is kept without it. */
+  unkept?: string
+}
+
+const NOT_KEPT = '(told to the reader alone)'
 
 /**
  * Keeps a letter and, where a mail server is set, sends it. A failure is recorded on the letter and told, never thrown:
@@ -22,7 +30,9 @@ export interface Letter { recipient: string, subject: string, body: string }
 export async function sendMail(letter: Letter, now: number): Promise<MailOutcome> {
   const { read, write } = useDatabase()
   const id = uuid()
-  await write([statement(read.insert(mail).values({ id, ...letter, createdAt: now }))])
+  const { recipient, subject, body, unkept } = letter
+  const keptBody = unkept === undefined ? body : body.replaceAll(unkept, NOT_KEPT)
+  await write([statement(read.insert(mail).values({ id, recipient, subject, body: keptBody, createdAt: now }))])
   const { smtpUrl, mailFrom } = useEnvironment()
   if (!smtpUrl) return 'kept'
   const error = await deliver(letter, smtpUrl, mailFrom)
