@@ -75,6 +75,9 @@ export default defineNuxtConfig({
         for (const file of ['package.json', 'THIRD-PARTY-NOTICES.md', 'lib/vips-node.mjs', 'lib/vips.wasm']) {
           cpSync(`node_modules/wasm-vips/${file}`, output(`node_modules/wasm-vips/${file}`))
         }
+        for (const file of ['package.json', 'LICENSE', 'build/highs.mjs', 'build/highs.wasm']) {
+          cpSync(`node_modules/highs/${file}`, output(`node_modules/highs/${file}`))
+        }
       },
     },
   },
