@@ -1,4 +1,5 @@
 import type { LabelDrawing, LabelRule, LabelText } from '../label/drawing'
+import { tableRows, type PaperTable } from './paperTable'
 import { fittedLines } from './wrappedText'
 
 /** A part of a paper, from top to bottom. */
@@ -7,9 +8,10 @@ export type PaperBlock
     | { kind: 'facts', rows: { term: string, value: string }[] }
     /** Lines to write on, each with what is to be written. */
     | { kind: 'signatures', lines: string[] }
+    | PaperTable
 
-/** A paper as plain data: who sends it, what it says, and what each page repeats at its foot. */
-export interface Paper { sender: string[], blocks: PaperBlock[], foot: string }
+/** A paper as plain data: who sends it, what it says, and what each page repeats at its foot; `mark` stands large at the head of each. */
+export interface Paper { sender: string[], blocks: PaperBlock[], foot: string, mark?: string }
 
 /** US Letter, in millimetres. */
 export const PAPER_MM = { width: 215.9, height: 279.4 } as const
@@ -27,12 +29,15 @@ const GAP = 2.6
 const TERM_WIDTH = 48
 const INDENT = 5
 const LINE_TO_WRITE_ON = 14
+const MARK_SIZE = 7
 
-/** A strip of a page that stays in one piece. */
-interface Row {
+/** A strip of a page that stays in one piece. Units: millimetres. */
+export interface PaperRow {
   height: number
   /** Stands on the page of the row after it. */
   keepsNext: boolean
+  /** Stands above it where it begins a page. */
+  repeats?: PaperRow
   draw: (y: number) => { texts: LabelText[], rules?: LabelRule[] }
 }
 
@@ -41,16 +46,16 @@ interface Row {
  *
  * Units: millimetres. A heading never stands last on a page, and no line is parted.
  */
-export function paperPages({ sender, blocks, foot }: Paper): LabelDrawing[] {
+export function paperPages({ sender, blocks, foot, mark }: Paper): LabelDrawing[] {
   const pages = paginated([...sender.map((text, index) => textRow(text, { size: SIZES.text, bold: index === 0 })), gap(GAP * 2), ...blocks.flatMap(rowsOf)])
   return pages.map((rows, index) => {
     const drawn = stacked(rows)
     const page = footOf(foot, `Page ${index + 1} of ${pages.length}`)
-    return { ...PAPER_MM, qr: null, strokes: [], texts: [...drawn.texts, ...page.texts], rules: [...drawn.rules, ...page.rules] }
+    return { ...PAPER_MM, qr: null, strokes: [], texts: [...markOf(mark), ...drawn.texts, ...page.texts], rules: [...drawn.rules, ...page.rules] }
   })
 }
 
-function rowsOf(block: PaperBlock): Row[] {
+function rowsOf(block: PaperBlock): PaperRow[] {
   switch (block.kind) {
     case 'title': return [gap(GAP * 2, true), ...wrapped(block.text, { size: SIZES.title, bold: true }), gap(GAP)]
     case 'heading': return [gap(GAP, true), ...wrapped(block.text, { size: SIZES.heading, bold: true }).map(row => ({ ...row, keepsNext: true }))]
@@ -58,17 +63,18 @@ function rowsOf(block: PaperBlock): Row[] {
     case 'item': return [...wrapped(block.text, { size: SIZES.item, mark: '\u2013' }), gap(GAP / 2)]
     case 'facts': return [...block.rows.flatMap(factRows), gap(GAP)]
     case 'signatures': return block.lines.map(signatureRow)
+    case 'table': return [...tableRows(block, { x: MARGIN, width: WIDTH }), gap(GAP)]
   }
 }
 
 interface Type { size: number, bold?: boolean, mark?: string }
 
-function wrapped(text: string, type: Type): Row[] {
+function wrapped(text: string, type: Type): PaperRow[] {
   const indent = type.mark === undefined ? 0 : INDENT
   return linesOf(text, WIDTH - indent, type.size).map((line, index) => textRow(line, { ...type, mark: index === 0 ? type.mark : undefined }, indent))
 }
 
-function textRow(text: string, { size, bold, mark }: Type, indent = 0): Row {
+function textRow(text: string, { size, bold, mark }: Type, indent = 0): PaperRow {
   const face = bold ? 'words-bold' as const : 'words' as const
   return {
     height: size * LEADING,
@@ -83,7 +89,7 @@ function textRow(text: string, { size, bold, mark }: Type, indent = 0): Row {
   }
 }
 
-function factRows({ term, value }: { term: string, value: string }): Row[] {
+function factRows({ term, value }: { term: string, value: string }): PaperRow[] {
   const size = SIZES.facts
   return linesOf(value, WIDTH - TERM_WIDTH, size).map((line, index) => ({
     height: size * LEADING,
@@ -98,7 +104,7 @@ function factRows({ term, value }: { term: string, value: string }): Row[] {
   }))
 }
 
-function signatureRow(text: string): Row {
+function signatureRow(text: string): PaperRow {
   return {
     height: LINE_TO_WRITE_ON,
     keepsNext: false,
@@ -112,7 +118,7 @@ function signatureRow(text: string): Row {
   }
 }
 
-function gap(height: number, keepsNext = false): Row {
+function gap(height: number, keepsNext = false): PaperRow {
   return { height, keepsNext, draw: () => ({ texts: [] }) }
 }
 
@@ -120,14 +126,15 @@ function linesOf(text: string, width: number, size: number): string[] {
   return text.split('\n').flatMap(line => fittedLines(line, { width, height: Infinity }, [size]).lines)
 }
 
-function paginated(rows: readonly Row[]): Row[][] {
-  const pages: Row[][] = [[]]
+function paginated(rows: readonly PaperRow[]): PaperRow[][] {
+  const pages: PaperRow[][] = [[]]
   let used = 0
   for (const piece of pieces(rows)) {
     const height = heightOf(piece)
     if (used > 0 && MARGIN + used + height > BOTTOM) {
-      pages.push([])
-      used = 0
+      const repeated = piece[0]?.repeats
+      pages.push(repeated ? [repeated] : [])
+      used = repeated?.height ?? 0
     }
     pages.at(-1)!.push(...piece)
     used += height
@@ -136,20 +143,25 @@ function paginated(rows: readonly Row[]): Row[][] {
 }
 
 /** Rows that stay together, from one that keeps the next to the first that does not. */
-function pieces(rows: readonly Row[]): Row[][] {
-  return rows.reduce<Row[][]>((all, row) => {
+function pieces(rows: readonly PaperRow[]): PaperRow[][] {
+  return rows.reduce<PaperRow[][]>((all, row) => {
     const last = all.at(-1)
     return last?.at(-1)?.keepsNext ? [...all.slice(0, -1), [...last, row]] : [...all, [row]]
   }, [])
 }
 
-function stacked(rows: readonly Row[]): { texts: LabelText[], rules: LabelRule[] } {
+function stacked(rows: readonly PaperRow[]): { texts: LabelText[], rules: LabelRule[] } {
   const drawn = rows.map((row, index) => row.draw(MARGIN + heightOf(rows.slice(0, index))))
   return { texts: drawn.flatMap(({ texts }) => texts), rules: drawn.flatMap(({ rules = [] }) => rules) }
 }
 
-function heightOf(rows: readonly Row[]): number {
+function heightOf(rows: readonly PaperRow[]): number {
   return rows.reduce((sum, { height }) => sum + height, 0)
+}
+
+function markOf(mark: string | undefined): LabelText[] {
+  if (mark === undefined) return []
+  return [{ text: mark, face: 'words-bold', size: MARK_SIZE, x: MARGIN + WIDTH, y: MARGIN - GAP, align: 'right', maxWidth: WIDTH }]
 }
 
 function footOf(foot: string, number: string): { texts: LabelText[], rules: LabelRule[] } {

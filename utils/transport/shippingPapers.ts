@@ -27,7 +27,7 @@ export interface PapersLine {
   /** As read on the scale; null where it is not weighed yet. */
   gross: MassReading | null
   netGrams: number | null
-  /** Of the retest: in words, as 'in date until Mar 2027'. */
+  /** The month by which it is retested, in words. */
   retest: string
   /** What the dock has to know: 'mixed', 'retest overdue'. */
   notes: string[]

@@ -108,6 +108,5 @@ function paperedLine({ view, state, sent, classification }: ToBePapered): Papers
 
 function retestInWords({ state, dueMonth }: CylinderView['requalification']): string {
   if (state === 'not-required') return 'not required'
-  if (dueMonth === null) return 'not known'
-  return `${state === 'overdue' ? 'was due' : 'due'} ${formatMonth(dueMonth)}`
+  return dueMonth === null ? 'not known' : formatMonth(dueMonth)
 }
