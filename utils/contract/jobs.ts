@@ -99,31 +99,3 @@ export interface JobAnswer extends JobLine {
 
 /** What POST /api/jobs/{id}/recovery-note/mail answers. */
 export interface RecoveryNoteMailAnswer { outcome: MailOutcome, recipient: string, issue: number }
-
-/** GET /api/firms/{id}/banked: the refrigerant that is a customer's and not the contractor's. */
-export interface BankedAnswer {
-  /** In stock now, by refrigerant and condition. */
-  held: {
-    refrigerant: string | null
-    condition: string
-    /** Of what is known; null where nothing is. */
-    grams: number | null
-    /** Of the known, as far as it is known by weighing. */
-    uncertaintyGrams: number | null
-    cylinders: { id: string, labelCode: string | null, serial: string | null, grams: number | null, uncertaintyGrams: number | null, shared: boolean, since: string | null }[]
-  }[]
-  /** Every change of what is theirs, the newest first; at most 200. */
-  movements: { eventId: string, cylinder: { id: string, labelCode: string | null, serial: string | null }, at: string, kind: string, cause: string, refrigerant: string | null, grams: number, apart: boolean }[]
-  moreMovements: boolean
-  /** What of theirs left for a reclaimer, and what was credited for it. */
-  shipped: {
-    shipment: { id: string, number: number }
-    to: string
-    cylinder: { id: string, labelCode: string | null, serial: string | null }
-    refrigerant: string | null
-    dispatchedAt: string
-    grams: number
-    /** Hundredths of the currency, by their share of the contents; null until it is settled. */
-    creditCents: number | null
-  }[]
-}

@@ -1,0 +1,43 @@
+import type { Named } from '../custody/cylinderView'
+import type { EventKind } from '../custody/kinds'
+import type { MovementCause } from '../custody/movement'
+import type { BankedIn } from '../jobs/banked'
+import type { NamedCylinder } from '../jobs/jobFills'
+
+/** A change of what is a customer's. */
+export interface BankedMovement {
+  eventId: string
+  ordinal: number
+  cylinder: NamedCylinder
+  at: string
+  kind: EventKind
+  cause: MovementCause
+  refrigerant: string | null
+  grams: number
+  /** Practice, or not countersigned. */
+  apart: boolean
+}
+
+/** What of a customer's left for a reclaimer in one cylinder, and what was credited for it. */
+export interface BankedShipped {
+  eventId: string
+  shipment: { id: string, number: number }
+  to: Named
+  cylinder: NamedCylinder
+  refrigerant: string | null
+  at: string
+  grams: number
+  /** Of all owners' in that cylinder. */
+  wholeGrams: number
+  /** Hundredths of the currency, theirs by their share of the weight that left; null while it is not settled, or nobody said. */
+  creditCents: number | null
+}
+
+/** GET /api/firms/{id}/banked: the refrigerant that is a customer's, in the contractor's hands. */
+export interface BankedAnswer {
+  held: BankedIn[]
+  /** The newest first, at most 200 of them. */
+  movements: BankedMovement[]
+  movementsInAll: number
+  shipped: BankedShipped[]
+}
