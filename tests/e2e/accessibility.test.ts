@@ -146,7 +146,12 @@ const SCREENS: Record<string, Screen[]> = {
   'mail.vue': [{ as: admin, at: () => '/mail' }],
   'now.vue': [...([technician, warehouse, manager, auditor, admin] as const).map(as => ({ as, at: () => '/now' }))],
   'people.vue': [{ as: admin, at: () => '/people' }],
-  'firms.vue': [{ as: admin, at: () => '/firms' }, { as: warehouse, at: () => '/firms?kind=carrier' }],
+  'firms/index.vue': [{ as: admin, at: () => '/firms' }, { as: warehouse, at: () => '/firms?kind=carrier' }],
+  'firms/[id].vue': [
+    { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record what it takes' }).click() },
+    { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record a price' }).click() },
+    { as: technician, at: demo => `/firms/${demo.reclaimer}` },
+  ],
   'scales.vue': [{ as: manager, at: () => '/scales' }, { as: technician, at: () => '/scales' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
   'pressure-check.vue': [

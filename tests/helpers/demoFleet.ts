@@ -26,6 +26,7 @@ export interface DemoFleet {
   lots: Record<Exclude<TestLotState, 'cancelled'>, string>
   /** The technician's van. */
   van: string
+  reclaimer: string
   invitation: string
   /** What the technician's phone shows to hand cylinders over. */
   offer: string
@@ -52,9 +53,10 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
   const { items: events } = (await manager.get<CustodyLogAnswer>(`/api/cylinders/${usual}/events?limit=1`)).body
   const { items: places } = (await manager.get<PlacesAnswer>('/api/places')).body
   const van = places.find(({ technicianName }) => technicianName === 'Dayo Okafor')!.id
+  const { items: [reclaimer] } = (await manager.get<FirmsAnswer>('/api/firms?kind=reclaimer')).body
   await made(admin, '/api/people', INVITED)
   return {
-    people, van,
+    people, van, reclaimer: reclaimer!.id,
     codes: {
       usual, onNone: onNone!.toLowerCase(),
       empty: await codeOf('&lifecycle=in-service', row => row.nothingInIt && row.worstFinding === null),

@@ -61,8 +61,8 @@ export const firmRowParams = z.strictObject({ id, rowId: id })
 export type NewTerms = z.output<typeof termsBody>
 export type NewPrice = z.output<typeof priceBody>
 
-/** Who recorded a row and when (ISO 8601), and who withdrew it. */
-export interface RecordedRow { recordedBy: Named, recordedAt: string, withdrawn: { by: Named, at: string } | null, mayWithdraw: boolean }
+/** Who recorded a row and when (ISO 8601, and the day in the firm's time zone), and who withdrew it. */
+export interface RecordedRow { recordedBy: Named, recordedAt: string, recordedOn: Day, withdrawn: { by: Named, on: Day } | null, mayWithdraw: boolean }
 
 /** Terms as they were recorded. */
 export interface TermsRow extends RecordedRow { id: string, fromDay: Day, terms: ReclaimerTerms }

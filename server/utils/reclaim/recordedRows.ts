@@ -98,13 +98,15 @@ async function withdrawn<Row extends RecordedRow>(
 
 function asRecorded(row: Kept, from: Directory, now: number): RecordedRow {
   const { person } = namesOf(from)
-  const today = dayOfInstant(now, from.timeZone)
-  const isWithdrawn = row.withdrawnAt !== null
+  const { timeZone } = from
+  const recordedOn = dayOfInstant(row.recordedAt, timeZone)
+  const withdrawn = row.withdrawnAt === null || row.withdrawnBy === null ? null : { by: person(row.withdrawnBy), on: dayOfInstant(row.withdrawnAt, timeZone) }
   return {
     recordedBy: person(row.recordedBy),
     recordedAt: new Date(row.recordedAt).toISOString(),
-    withdrawn: row.withdrawnAt === null || row.withdrawnBy === null ? null : { by: person(row.withdrawnBy), at: new Date(row.withdrawnAt).toISOString() },
-    mayWithdraw: mayBeWithdrawn({ fromDay: row.fromDay, isWithdrawn }, dayOfInstant(row.recordedAt, from.timeZone), today),
+    recordedOn,
+    withdrawn,
+    mayWithdraw: mayBeWithdrawn({ fromDay: row.fromDay, isWithdrawn: withdrawn !== null }, recordedOn, dayOfInstant(now, timeZone)),
   }
 }
 
