@@ -21,7 +21,7 @@ export type Permission
     | 'settings:read' | 'settings:manage'
     /** Reminders and test choices; the fill rule asks for its own besides. */
     | 'rules:set' | 'fill-rule:set'
-    | 'mail:read'
+    | 'mail:read' | 'mail:send'
     | 'refrigerants:read'
     | 'account:own'
 
@@ -44,7 +44,7 @@ export const PERMISSIONS = {
     'rules:set', 'fill-rule:set', 'log:verify', 'log:export', 'log:checkpoint', 'scales:manage', 'terms:set',
   ],
   auditor: [...EVERYONE, 'shipments:read', 'lots:read', 'reports:read', 'terms:read', 'people:read-contact', 'log:verify', 'log:export', 'log:checkpoint'],
-  admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'scales:manage', 'settings:manage', 'rules:set', 'mail:read', 'log:checkpoint'],
+  admin: [...EVERYONE, 'people:read-contact', 'people:manage', 'places:manage', 'firms:manage', 'scales:manage', 'settings:manage', 'rules:set', 'mail:read', 'mail:send', 'log:checkpoint'],
 } as const satisfies Record<Role, readonly Permission[]>
 
 /** What a permission is asked about, where it depends on that. */

@@ -1,16 +1,15 @@
-import { and, desc, eq, lt, or } from 'drizzle-orm'
-import { createTransport } from 'nodemailer'
+import type { InStatement } from '@libsql/client'
+import { eq } from 'drizzle-orm'
 import { v7 as uuid } from 'uuid'
-import { mail } from '../../../drizzle/schema'
-import type { MailAnswer, MailLine } from '../../../utils/contract/mail'
+import { mail, mailAttachments } from '../../../drizzle/schema'
 import type { MailOutcome } from '../../../utils/contract/people'
 import { useDatabase } from '../database/currentDatabase'
 import { statement } from '../database/database'
 import { useEnvironment } from '../environment'
-import { foreignCursor } from '../http/cursor'
+import { deliver } from './deliver'
 
-const PATIENCE_MS = 10_000
-const LONGEST_ERROR = 300
+/** A paper that goes with a letter. */
+export interface Attachment { name: string, mediaType: string, content: Buffer }
 
 /** A letter as it is written. */
 export interface Letter {
@@ -19,72 +18,57 @@ export interface Letter {
   body: string
   /** A text of the body that goes to the reader alone: the letter is kept without it. */
   unkept?: string
+  attachments?: readonly Attachment[]
 }
 
-const NOT_KEPT = '(told to the reader alone)'
+/** A letter under an id is sent once, however often it is asked for; `alongside` is written in the commit that keeps it. */
+export interface Keeping { id?: string, alongside?: readonly InStatement[] }
+
+/** What stands in a kept letter where its reader alone was told something. */
+export const NOT_KEPT = '(told to the reader alone)'
+
+const underWay = new Set<string>()
 
 /**
  * Keeps a letter and, where a mail server is set, sends it. A failure is recorded on the letter and told, never thrown:
  * what was to be said is not lost.
  */
-export async function sendMail(letter: Letter, now: number): Promise<MailOutcome> {
+export async function sendMail(letter: Letter, now: number, { id = uuid(), alongside = [] }: Keeping = {}): Promise<MailOutcome> {
   const { read, write } = useDatabase()
-  const id = uuid()
-  const { recipient, subject, body, unkept } = letter
+  const { recipient, subject, body, unkept, attachments = [] } = letter
   const keptBody = unkept === undefined ? body : body.replaceAll(unkept, NOT_KEPT)
-  await write([statement(read.insert(mail).values({ id, recipient, subject, body: keptBody, createdAt: now }))])
+  const [kept] = await write([
+    statement(read.insert(mail).values({ id, recipient, subject, body: keptBody, createdAt: now }).onConflictDoNothing().returning({ id: mail.id })),
+    ...attachments.map((attachment, position) => statement(read.insert(mailAttachments).values({ mailId: id, position, ...attachment }).onConflictDoNothing())),
+    ...alongside,
+  ])
+  if (kept?.rows.length !== 1) return outcomeOf(id)
+  return handOver(id, letter)
+}
+
+/** Hands a kept letter to the mail server, where one is set, and records what became of it. */
+export async function handOver(id: string, letter: Letter): Promise<MailOutcome> {
   const { smtpUrl, mailFrom } = useEnvironment()
   if (!smtpUrl) return 'kept'
-  const error = await deliver(letter, smtpUrl, mailFrom)
-  const outcome = error ? { error } : { sentAt: Date.now() }
-  await write([statement(read.update(mail).set(outcome).where(eq(mail.id, id)))])
-  return error ? 'failed' : 'sent'
-}
-
-/** The letters kept, newest first, a page at a time. Errors: 400 for a cursor that is none of ours. */
-export async function listMail({ limit, cursor }: { limit: number, cursor?: string }): Promise<MailAnswer> {
-  const [at, id] = cursorOf(cursor) ?? []
-  const before = at !== undefined && id !== undefined ? or(lt(mail.createdAt, at), and(eq(mail.createdAt, at), lt(mail.id, id))) : undefined
-  const rows = await useDatabase().read.select().from(mail).where(before).orderBy(desc(mail.createdAt), desc(mail.id)).limit(limit + 1)
-  const shown = rows.slice(0, limit)
-  const last = shown.at(-1)
-  return {
-    items: shown.map(lineOf),
-    nextCursor: rows.length > limit && last ? `${last.createdAt}_${last.id}` : null,
-  }
-}
-
-function cursorOf(text: string | undefined): [at: number, id: string] | null {
-  if (text === undefined) return null
-  const [, at, id] = /^(\d{1,15})_([0-9a-f-]{36})$/.exec(text) ?? []
-  if (at === undefined || id === undefined) throw foreignCursor()
-  return [Number(at), id]
-}
-
-/** What the mail server said against it, or null when it took the letter. */
-async function deliver({ recipient, subject, body }: Letter, url: string, from: string | undefined): Promise<string | null> {
-  const transport = createTransport({ url, connectionTimeout: PATIENCE_MS, greetingTimeout: PATIENCE_MS, socketTimeout: PATIENCE_MS })
+  underWay.add(id)
   try {
-    await transport.sendMail({ from, to: { name: '', address: recipient }, subject, text: body, disableFileAccess: true, disableUrlAccess: true })
-    return null
-  }
-  catch (error) {
-    return (error instanceof Error ? error.message : 'unknown').slice(0, LONGEST_ERROR)
+    const error = await deliver(letter, smtpUrl, mailFrom)
+    const { read, write } = useDatabase()
+    await write([statement(read.update(mail).set(error === null ? { sentAt: Date.now(), error: null } : { error }).where(eq(mail.id, id)))])
+    return error === null ? 'sent' : 'failed'
   }
   finally {
-    transport.close()
+    underWay.delete(id)
   }
 }
 
-function lineOf(row: typeof mail.$inferSelect): MailLine {
-  return {
-    id: row.id,
-    recipient: row.recipient,
-    subject: row.subject,
-    // A letter that reached its reader holds a link that is the reader's alone.
-    body: row.sentAt === null ? row.body : null,
-    createdAt: new Date(row.createdAt).toISOString(),
-    sentAt: row.sentAt === null ? null : new Date(row.sentAt).toISOString(),
-    error: row.error,
-  }
+/** Whether the mail server has a letter before it just now, so that it is not handed over twice. */
+export function isUnderWay(id: string): boolean {
+  return underWay.has(id)
+}
+
+async function outcomeOf(id: string): Promise<MailOutcome> {
+  const [row] = await useDatabase().read.select({ sentAt: mail.sentAt, error: mail.error }).from(mail).where(eq(mail.id, id))
+  if (row?.sentAt) return 'sent'
+  return row?.error ? 'failed' : 'kept'
 }

@@ -23,6 +23,7 @@ const MATRIX: Record<Permission, string> = {
   'lots:read': 'W M A',
   'lots:receive': 'M',
   'mail:read': 'D',
+  'mail:send': 'D',
   'people:manage': 'D',
   'people:read': 'W T M A D',
   'people:read-contact': 'A D',
