@@ -12,9 +12,13 @@ export const DEMO_PASSWORD = 'demo-cylinders-2026'
 /** Where the demo firm is. */
 export const DEMO_TIME_ZONE = 'America/Chicago'
 /** The demo firm itself. */
-export const DEMO_FIRM = { name: 'Ferrowick Refrigeration', telephone: '(555) 010-0142', timeZone: DEMO_TIME_ZONE, units: 'lb' as MassUnit }
+export const DEMO_FIRM = {
+  name: 'Ferrowick Refrigeration', telephone: '(555) 010-0142', timeZone: DEMO_TIME_ZONE, units: 'lb' as MassUnit,
+  address: '200 Millrace Street', emergencyTelephone: '(555) 010-0199', emergencyContract: 'Ferrowick Refrigeration, contract 555-7741',
+}
 
 const SCALES_SEED = 20_261_202
+const LATER_FIRMS_SEED = 20_261_212
 
 /** Somebody of the demo firm. */
 export interface DemoPerson extends Certification {
@@ -44,7 +48,7 @@ export interface Cast {
   vans: DemoPlace[]
   sites: DemoPlace[]
   scales: Record<'shop' | 'south' | 'dock', DemoScale>
-  firms: Record<'reclaimer' | 'otherReclaimer' | 'requalifier' | 'supplier' | 'dairy' | 'store', DemoFirm>
+  firms: Record<'reclaimer' | 'otherReclaimer' | 'thirdReclaimer' | 'requalifier' | 'supplier' | 'carrier' | 'dairy' | 'store', DemoFirm>
   placeOf: (firm: DemoFirm) => DemoPlace
   firmPlaces: DemoPlace[]
 }
@@ -68,17 +72,24 @@ export function castOf(random: Random, startAt: number): Cast {
     admin: person('admin', 'Kit Osgood', ['admin'], 'lb'),
     trainee: person('trainee', 'Pia Lindmark', ['technician'], 'lb', { trainee: true, supervisorId: technician.id }),
   }
-  const firm = (name: string, kind: DemoFirm['kind'], address: string, rin?: string): DemoFirm => {
+  // Of their own, so that the story stays as it is whatever firms there are besides.
+  const later = seededRandom(LATER_FIRMS_SEED)
+  const firm = (name: string, kind: DemoFirm['kind'], address: string, rin?: string, from: Random = random): DemoFirm => {
     const mailbox = name.toLowerCase().replace(/[^a-z]+/g, '-')
-    return { id: id(), name, kind, address, telephone: `(555) 010-0${random.whole(200, 899)}`, email: `dock@${mailbox}.example`, rin }
+    return { id: from.uuid(startAt), name, kind, address, telephone: `(555) 010-0${from.whole(200, 899)}`, email: `dock@${mailbox}.example`, rin }
   }
-  const firms: Cast['firms'] = {
+  const first = {
     reclaimer: firm('Halvern Reclaim', 'reclaimer', '4 Foundry Row'),
     otherReclaimer: firm('Brindmoor Gas Recovery', 'reclaimer', '118 Canal Street'),
     requalifier: firm('Oxbow Cylinder Testing', 'requalifier', '27 Kiln Lane', 'Z987'),
     supplier: firm('Pellworth Supply', 'supplier', '9 Market Yard'),
     dairy: firm('Dunmarrow Dairy', 'customer', '1 Creamery Road'),
     store: firm('Wexley Cold Store', 'customer', '60 Harbour Way'),
+  }
+  const firms: Cast['firms'] = {
+    ...first,
+    thirdReclaimer: firm('Tressick Reclaim', 'reclaimer', '31 Tannery Road', undefined, later),
+    carrier: firm('Morrowby Haulage', 'carrier', '12 Depot Lane', undefined, later),
   }
   const place = (name: string, kind: DemoPlace['kind'], more: Partial<DemoPlace> = {}): DemoPlace => ({ id: id(), name, kind, ...more })
   const shops: Cast['shops'] = [place('North shop', 'shop'), place('South shop', 'shop')]
@@ -88,7 +99,8 @@ export function castOf(random: Random, startAt: number): Cast {
   ]
   const drivers = [people.technician, people.second, people.third, people.trainee]
   const vans = Array.from({ length: 6 }, (_, index) => place(`Van ${String(index * 3 + 2).padStart(2, '0')}`, 'van', { technicianId: drivers[index]?.id }))
-  const firmPlaces = Object.values(firms).map(one => place(one.name, 'firm', { firmId: one.id }))
+  const firmPlaces = Object.values(firms).map((one): DemoPlace =>
+    ({ id: (Object.values(first).includes(one) ? random : later).uuid(startAt), name: one.name, kind: 'firm', firmId: one.id }))
   return {
     people, shops, racks, vans, firms, firmPlaces, scales: scalesOf(startAt),
     sites: [place('Creamery plant room', 'site'), place('Harbour cold store, roof', 'site')],

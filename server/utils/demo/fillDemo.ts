@@ -17,6 +17,7 @@ import { seededRandom } from './random'
 import { recordScript } from './record'
 import { newScript } from './script'
 import { castTables, labelTables, listTables } from './tables'
+import { termsTables } from './terms'
 import { vanTables } from './vans'
 
 const SEED = 20_261_201
@@ -49,6 +50,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   playLate(stage)
   namePhotos(stage.script)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
+  await db.write(termsTables(db, cast, now))
   await db.write(listTables(db, stage))
   await directory(db, true)
   await recordScript(db, stage.script.events)
