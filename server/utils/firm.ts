@@ -1,5 +1,5 @@
 import { firm } from '../../drizzle/schema'
-import type { FirmCard, OwnFirm } from '../../utils/contract/firm'
+import type { FirmCard, OwnFirm, OwnFirmChange } from '../../utils/contract/firm'
 import type { Access } from '../../utils/access/roles'
 import { useDatabase } from './database/currentDatabase'
 import { statement } from './database/database'
@@ -15,6 +15,7 @@ import { securityEntry } from './securityLog'
 export async function ownFirm(): Promise<OwnFirm> {
   const [row] = await useDatabase().read.select({
     name: firm.name, telephone: firm.telephone, timeZone: firm.timeZone, units: firm.units,
+    address: firm.address, emergencyTelephone: firm.emergencyTelephone, emergencyContract: firm.emergencyContract,
   }).from(firm).limit(1)
   if (!row) throw problem(404, 'Not set up', 'This Collarbook has not been set up yet.', undefined, { type: 'not-set-up' })
   return row
@@ -27,7 +28,7 @@ export async function firmCard(): Promise<FirmCard> {
 }
 
 /** Changes the firm's own particulars. */
-export async function changeOwnFirm(change: Partial<OwnFirm>, by: Access, now: number): Promise<OwnFirm> {
+export async function changeOwnFirm(change: OwnFirmChange, by: Access, now: number): Promise<OwnFirm> {
   const db = useDatabase()
   const { read, write } = db
   const entry = securityEntry({ what: 'firm-changed', personId: by.personId, subject: Object.keys(change).join(' ') }, now)

@@ -152,6 +152,7 @@ const SCREENS: Record<string, Screen[]> = {
     { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record a price' }).click() },
     { as: technician, at: demo => `/firms/${demo.reclaimer}` },
   ],
+  'our-firm.vue': [{ as: admin, at: () => '/our-firm' }, { as: technician, at: () => '/our-firm' }],
   'scales.vue': [{ as: manager, at: () => '/scales' }, { as: technician, at: () => '/scales' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
   'pressure-check.vue': [
@@ -170,7 +171,7 @@ const SCREENS: Record<string, Screen[]> = {
   'rules.vue': [{ as: manager, at: () => '/rules' }, { as: technician, at: () => '/rules' }],
   'scan.vue': [{ as: technician, at: () => '/scan' }],
   'setup.vue': [{ as: 'nobody', at: demo => `/setup?token=${demo.setUpToken}`, empty: true }, { as: 'nobody', at: () => '/setup' }],
-  'shipments/[id].vue': [...(['draft', 'dispatched', 'settled'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
+  'shipments/[id]/index.vue': [...(['draft', 'dispatched', 'settled'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
   'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
   'unsent.vue': [

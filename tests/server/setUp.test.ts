@@ -64,7 +64,9 @@ describe('setting up', () => {
     expect((await client.get('/api/firm/card')).body).toEqual({ name: 'Quillfen Cooling', telephone: '555-0100' })
     expect((await client.get('/api/firm')).status).toBe(401)
     await client.signIn(ADMIN.email, ADMIN.password)
-    expect((await client.get('/api/firm')).body).toEqual({ name: 'Quillfen Cooling', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb' })
+    expect((await client.get('/api/firm')).body).toEqual({
+      name: 'Quillfen Cooling', telephone: '555-0100', timeZone: 'America/Chicago', units: 'lb', address: null, emergencyTelephone: null, emergencyContract: null,
+    })
     expect((await client.patch('/api/firm', { telephone: '555-0101' })).body).toMatchObject({ telephone: '555-0101' })
   })
 

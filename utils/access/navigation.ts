@@ -25,6 +25,7 @@ const SETTINGS: readonly Screen[] = [
   { label: 'Scales', to: '/scales', permission: 'scales:read' },
   { label: 'People', to: '/people', permission: 'people:read' },
   { label: 'Firms', to: '/firms', permission: 'firms:read' },
+  { label: 'Our firm', to: '/our-firm', permission: 'settings:read' },
   { label: 'Mail', to: '/mail', permission: 'mail:read' },
 ]
 

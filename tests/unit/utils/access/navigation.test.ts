@@ -21,9 +21,9 @@ describe('where a person can go', () => {
   })
 
   it.each<[Role, string[]]>([
-    ['technician', ['Rules', 'Scales', 'People', 'Firms']],
-    ['manager', ['Rules', 'Scales', 'People', 'Firms']],
-    ['admin', ['Rules', 'Scales', 'People', 'Firms', 'Mail']],
+    ['technician', ['Rules', 'Scales', 'People', 'Firms', 'Our firm']],
+    ['manager', ['Rules', 'Scales', 'People', 'Firms', 'Our firm']],
+    ['admin', ['Rules', 'Scales', 'People', 'Firms', 'Our firm', 'Mail']],
   ])('among the settings as %s', (role, labels) => {
     const settings = navigationFor(access(role)).at(-1)
     expect(settings).toMatchObject({ label: 'Settings', to: '/rules' })
