@@ -23,7 +23,7 @@ export function formatDay(ms: number, timeZone: string): string {
 }
 
 /** A time of day. @example formatTime(ms, 'America/Phoenix') // '09:41' */
-function formatTime(ms: number, timeZone: string): string {
+export function formatTime(ms: number, timeZone: string): string {
   const { hour, minute } = wallClock(ms, timeZone)
   return `${two(hour)}:${two(minute)}`
 }

@@ -1,0 +1,28 @@
+import { firm } from '~~/drizzle/schema'
+import type { JobAnswer } from '~~/utils/contract/jobs'
+import { PAPER_MM, paperPages } from '~~/utils/document/paper'
+import { recoveryNote } from '~~/utils/document/recoveryNote'
+import type { Database } from '../database/database'
+import { directory, namesOf } from '../directory/directory'
+import { ownFirm } from '../firm'
+import { labelFonts } from '../pdf/fonts'
+import { labelSheetPdf } from '../pdf/labelSheetPdf'
+
+/** The recovery note of a job as it now stands, as a PDF on letter paper. */
+export async function printedRecoveryNote(db: Database, job: JobAnswer, nowMs: number): Promise<Buffer> {
+  const [from, { name, telephone }, [own]] = await Promise.all([directory(db), ownFirm(), db.read.select({ address: firm.address }).from(firm).limit(1)])
+  const names = namesOf(from)
+  const paper = recoveryNote(job, {
+    sender: { name, telephone, address: own?.address ?? null },
+    ownerName: ownerId => ownerId === null ? name : names.firm(ownerId).name,
+    timeZone: from.timeZone,
+    printedMs: nowMs,
+  })
+  const pages = paperPages(paper).map(label => [{ position: 1, x: 0, y: 0, symbol: null, label }])
+  return labelSheetPdf({ page: PAPER_MM, pages }, await labelFonts(), { title: `Recovery note ${job.number}` })
+}
+
+/** What the file of a note is called. */
+export function noteFileName({ number, issue }: Pick<JobAnswer, 'number' | 'issue'>): string {
+  return `recovery-note-${number}${issue > 1 ? `-issue-${issue}` : ''}.pdf`
+}
