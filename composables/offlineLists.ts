@@ -1,4 +1,5 @@
 import type { Answering, Asked } from '~~/composables/offlineAnswers'
+import type { JobsAnswer } from '~~/utils/contract/jobs'
 import type { PeopleAnswer } from '~~/utils/contract/people'
 import type { Firm, FirmsAnswer, Place, PlacesAnswer } from '~~/utils/contract/places'
 import type { PolicyAnswer } from '~~/utils/contract/policy'
@@ -19,7 +20,7 @@ export function offlineLists(list: string, id: string | null): Answer | null {
   return LISTS[list] ?? null
 }
 
-const LISTS: Record<string, Answer | undefined> = { places, firms, people, policy, scales, refrigerants }
+const LISTS: Record<string, Answer | undefined> = { places, firms, people, policy, scales, refrigerants, jobs }
 
 async function places(answering: Answering, asked: Asked): Promise<PlacesAnswer> {
   const items = await counted(answering, answering.firm.places.filter(used(asked)), ({ id }) => id)
@@ -30,6 +31,12 @@ async function firms(answering: Answering, asked: Asked): Promise<FirmsAnswer> {
   const found = answering.firm.firms.filter(used(asked)).filter(({ kind }) => asked['kind'] === undefined || kind === asked['kind'])
   const items = await counted(answering, found, ({ placeId }) => placeId)
   return { items, nextCursor: null, total: items.length }
+}
+
+// What came out is with the server; which job it was is enough to record a fill. A copy of before has no jobs.
+async function jobs({ firm }: Answering, { limit: _, ...asked }: Asked): Promise<JobsAnswer | undefined> {
+  if (Object.keys(asked).length > 0) return undefined
+  return { items: (firm.jobs ?? []).map(job => ({ ...job, cylinders: null, recoveredGrams: null, notKnown: 0 })), nextCursor: null }
 }
 
 async function people({ firm }: Answering, asked: Asked): Promise<PeopleAnswer> {

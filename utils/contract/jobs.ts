@@ -74,7 +74,8 @@ export interface Job {
 
 /** A job as a list and a form have it, with what the log says came out. */
 export interface JobLine extends Job {
-  cylinders: number
+  /** null in a phone's copy, which does not know what came out. */
+  cylinders: number | null
   /** Of the fills whose amount is known, those that do not count left out; null where none is known. */
   recoveredGrams: number | null
   /** Fills of which nobody knows how much went in. */

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import type { Job } from './jobs'
 import { id } from './parts'
 import type { PersonLine } from './people'
 import type { Firm, Place } from './places'
@@ -30,6 +31,8 @@ export interface KitFirm {
   firms: Omit<Firm, 'cylinders'>[]
   people: PersonLine[]
   vans: KitVan[]
+  /** The newest ones, for a fill to be tied to. */
+  jobs: Job[]
 }
 
 /** What a van carries beside cylinders, and what its last check-in came to; null where nobody has said, or checked. */

@@ -4,6 +4,7 @@ import type { Database } from '../database/database'
 import { directory, type Directory } from '../directory/directory'
 import { policyAnswer } from '../directory/policyAnswer'
 import { listFirms } from '../firms/firms'
+import { jobRows } from '../jobs/jobRows'
 import { personLine } from '../people/personLine'
 import { listPlaces } from '../places/places'
 import { listScales } from '../scales/scales'
@@ -12,6 +13,9 @@ import { materialsByVan } from '../vans/materials'
 
 /** The firm as phones keep it, and the tag by which they know it again. */
 export type TaggedFirm = KitFirm & { tag: string }
+
+/** A fill that happens without the server is of one of these, or tied to its job later. */
+const JOBS_KEPT = 30
 
 const made = new WeakMap<Directory, Promise<TaggedFirm>>()
 
@@ -27,7 +31,7 @@ export async function kitFirm(db: Database): Promise<TaggedFirm> {
 }
 
 async function makeFirm(db: Database, from: Directory): Promise<TaggedFirm> {
-  const [places, firms, scales, materials] = await Promise.all([listPlaces(db), listFirms(db), listScales(db), materialsByVan(db, from)])
+  const [places, firms, scales, materials, jobs] = await Promise.all([listPlaces(db), listFirms(db), listScales(db), materialsByVan(db, from), jobRows(db, undefined, JOBS_KEPT)])
   const { timeZone, fillPolicies, retests, rules, scales: ruleScales } = policyAnswer(from, 0, 0)
   const vans = await Promise.all(places.filter(({ kind, active }) => kind === 'van' && active).map(async ({ id: vanId }): Promise<KitVan> => {
     const checkIn = await lastCheckIn(db, vanId)
@@ -45,6 +49,7 @@ async function makeFirm(db: Database, from: Directory): Promise<TaggedFirm> {
     firms: firms.map(({ cylinders: _, ...other }) => other),
     people: [...from.people.values()].sort(byName).map(row => personLine(row, from, false)),
     vans,
+    jobs: jobs.map(({ changes: _, ...job }) => job),
   }
   return { tag: sha256(JSON.stringify(firm)).slice(0, 16), ...firm }
 }

@@ -4,15 +4,23 @@ import type { DraftKind } from './draft'
 export const PURPOSES = ['same-system', 'same-owner', 'sampling', 'other'] as const
 export const PHASES = ['liquid', 'vapour'] as const
 
-export interface DrawnDraft { grossAfter: MassReading | null, purpose: (typeof PURPOSES)[number] | '', phase: (typeof PHASES)[number] | '' }
+export interface DrawnDraft {
+  grossAfter: MassReading | null
+  purpose: (typeof PURPOSES)[number] | ''
+  phase: (typeof PHASES)[number] | ''
+  /** '' = of no job. */
+  jobId: string
+  /** Whose equipment it goes into, a firm; '' = not said. */
+  toOwnerId: string
+}
 
 /** The form of refrigerant taken out for use. */
 export const DRAWN: DraftKind<'drawn', DrawnDraft> = {
-  empty: () => ({ grossAfter: null, purpose: '', phase: '' }),
-  read: ({ grossAfter, purpose, phase }) => {
+  empty: () => ({ grossAfter: null, purpose: '', phase: '', jobId: '', toOwnerId: '' }),
+  read: ({ grossAfter, purpose, phase, jobId, toOwnerId }) => {
     if (purpose === '') return { reason: 'Choose what it was drawn for.' }
     if (!grossAfter) return { reason: 'Type what the scale shows, hoses off.' }
-    return { details: { grossAfter, purpose, ...(phase && { phase }) } }
+    return { details: { grossAfter, purpose, ...(phase && { phase }), ...(jobId && { jobId }), ...(toOwnerId && { toOwnerId }) } }
   },
-  of: ({ grossAfter, purpose, phase }) => ({ grossAfter, purpose, phase: phase ?? '' }),
+  of: ({ grossAfter, purpose, phase, jobId, toOwnerId }) => ({ grossAfter, purpose, phase: phase ?? '', jobId: jobId ?? '', toOwnerId: toOwnerId ?? '' }),
 }

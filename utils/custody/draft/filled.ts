@@ -22,6 +22,10 @@ export interface FilledDraft {
   otherMethod: string
   /** '' = the firm's own. */
   ownerId: string
+  /** '' = of no job. */
+  jobId: string
+  /** Whose cylinder it is agrees. */
+  ownerConsents: boolean
   looked: boolean
   scaleId: string
   /** What was noted while it was filled; a correction of the weights leaves it as it is. */
@@ -42,6 +46,8 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
     grossAfter: details.grossAfter,
     ...methodOf(details.method),
     ownerId: details.ownerOfRefrigerantId ?? '',
+    jobId: details.jobId ?? '',
+    ownerConsents: details.ownerConsents === true,
     looked: details.looked === true,
     scaleId: details.scaleId ?? '',
     onTheWay: onTheWayOf(details),
@@ -51,7 +57,7 @@ export const FILLED: DraftKind<'filled', FilledDraft> = {
 /** A recovery of which nothing is said yet. */
 export function emptyFill(refrigerant = '', scaleId = ''): FilledDraft {
   return {
-    refrigerant, condition: '', grossBefore: null, grossAfter: null, method: '', otherMethod: '', ownerId: '', looked: false, scaleId, onTheWay: {},
+    refrigerant, condition: '', grossBefore: null, grossAfter: null, method: '', otherMethod: '', ownerId: '', jobId: '', ownerConsents: false, looked: false, scaleId, onTheWay: {},
   }
 }
 
@@ -69,6 +75,8 @@ export function readFill(draft: FilledDraft): ReadDraft<'filled'> {
       grossAfter: draft.grossAfter,
       ...(method && { method }),
       ...(draft.ownerId && { ownerOfRefrigerantId: draft.ownerId }),
+      ...(draft.jobId && { jobId: draft.jobId }),
+      ...(draft.ownerConsents && { ownerConsents: true as const }),
       ...(draft.scaleId && { scaleId: draft.scaleId }),
       ...(draft.looked && { looked: true as const }),
       ...draft.onTheWay,

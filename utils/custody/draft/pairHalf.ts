@@ -13,7 +13,7 @@ export interface TransferHalfDraft {
   grossBefore: MassReading | null
   grossAfter: MassReading | null
   /** What stays as it was said. */
-  stays: Pick<DetailsOf<'transferred'>, 'direction' | 'counterpartId' | 'transferId' | 'ownerOfRefrigerantId'> | null
+  stays: Pick<DetailsOf<'transferred'>, 'direction' | 'counterpartId' | 'transferId' | 'ownerOfRefrigerantId' | 'ownerConsents'> | null
 }
 
 /** The form that mends one half of a transfer. */

@@ -15,12 +15,14 @@ export interface TransferDraft {
   outAfter: MassReading | null
   inBefore: MassReading | null
   inAfter: MassReading | null
+  /** Whose cylinder it goes into agrees. */
+  ownerConsents: boolean
 }
 
 /** A transfer in which nothing was said yet: out of a cylinder that holds something, into one that holds nothing. */
 export function emptyTransfer(view: CylinderView | null, transferId: string): TransferDraft {
   return {
-    gives: view === null || !view.contents.nothingInIt, otherId: '', transferId, outBefore: null, outAfter: null, inBefore: null, inAfter: null,
+    gives: view === null || !view.contents.nothingInIt, otherId: '', transferId, outBefore: null, outAfter: null, inBefore: null, inAfter: null, ownerConsents: false,
   }
 }
 
@@ -31,13 +33,13 @@ export type TransferHalves = { out: DetailsOf<'transferred'>, in: DetailsOf<'tra
 export function readTransfer(draft: TransferDraft, from: CylinderView | null, into: CylinderView | null): TransferHalves {
   if (!from || !into) return { reason: 'Scan or choose the other cylinder.' }
   if (from.id === into.id) return { reason: 'Choose another cylinder: it cannot go into itself.' }
-  const { outBefore, outAfter, inBefore, inAfter } = draft
+  const { outBefore, outAfter, inBefore, inAfter, ownerConsents } = draft
   if (!outAfter) return { reason: 'Type what the scale shows of the one it came out of, hoses off.' }
   if (!inAfter) return { reason: 'Type what the scale shows of the one it went into, hoses off.' }
   const both = { transferId: draft.transferId, ...saidOf(from) }
   return {
     out: { ...both, direction: 'out', counterpartId: into.id, ...(outBefore && { grossBefore: outBefore }), grossAfter: outAfter },
-    in: { ...both, direction: 'in', counterpartId: from.id, ...(inBefore && { grossBefore: inBefore }), grossAfter: inAfter },
+    in: { ...both, direction: 'in', counterpartId: from.id, ...(ownerConsents && { ownerConsents: true as const }), ...(inBefore && { grossBefore: inBefore }), grossAfter: inAfter },
   }
 }
 
