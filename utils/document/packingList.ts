@@ -45,7 +45,7 @@ export function packingList(papers: ShippingPapers, isDraft: boolean): Paper {
 }
 
 function lineRow(line: DescribedLine, number: number, unit: MassUnit): string[] {
-  const { serial, labelCode, refrigerant, condition, tareWeight, gross, netGrams, retest, notes, isResidue } = line
+  const { serial, labelCode, contents: { refrigerant, condition }, tareWeight, gross, netGrams, retest, notes, isResidue } = line
   return [
     String(number),
     serial ?? 'not known',

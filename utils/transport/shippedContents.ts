@@ -13,3 +13,8 @@ export function shippedContents({ refrigerant, condition, nothingInIt, knownSinc
     nothingInIt,
   }
 }
+
+/** What a shipper's word was given for: it counts only as long as the contents are the same. */
+export function contentsKey({ refrigerant, condition, knownParts }: ShippedContents): string {
+  return JSON.stringify([refrigerant, condition, knownParts])
+}

@@ -30,6 +30,9 @@ export interface Classification {
   reason: string | null
 }
 
+/** A classification as it is kept: with the contents that it was given for. */
+export interface KeptClassification extends Classification { of: string }
+
 /** An entry by its number; undefined where none of this number is open. */
 export function shipperEntry(identification: string): ShipperEntry | undefined {
   return SHIPPER_ENTRIES.find(entry => entry.identification === identification)

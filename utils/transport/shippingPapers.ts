@@ -49,9 +49,7 @@ export interface PapersInput {
 }
 
 /** A line with how it is described. */
-export interface DescribedLine extends Omit<PapersLine, 'contents' | 'classification'> {
-  refrigerant: string | null
-  condition: string
+export interface DescribedLine extends Omit<PapersLine, 'classification'> {
   description: ShippingDescription
 }
 
@@ -94,8 +92,8 @@ export function shippingPapers({ lines: given, ...head }: PapersInput, catalogue
   }
 }
 
-function describedLine({ contents, classification, ...line }: PapersLine, catalogue: NamingCatalogue): DescribedLine {
-  return { ...line, refrigerant: contents.refrigerant, condition: contents.condition, description: shippingDescription(contents, catalogue, classification) }
+function describedLine({ classification, ...line }: PapersLine, catalogue: NamingCatalogue): DescribedLine {
+  return { ...line, description: shippingDescription(line.contents, catalogue, classification) }
 }
 
 function groupsOf(lines: readonly DescribedLine[]): DescribedGroup[] {

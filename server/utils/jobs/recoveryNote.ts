@@ -1,12 +1,10 @@
 import { firm } from '~~/drizzle/schema'
 import type { JobAnswer } from '~~/utils/contract/jobs'
-import { PAPER_MM, paperPages } from '~~/utils/document/paper'
 import { recoveryNote } from '~~/utils/document/recoveryNote'
 import type { Database } from '../database/database'
 import { directory, namesOf } from '../directory/directory'
 import { ownFirm } from '../firm'
-import { labelFonts } from '../pdf/fonts'
-import { labelSheetPdf } from '../pdf/labelSheetPdf'
+import { paperPdf } from '../pdf/paperPdf'
 
 /** The recovery note of a job as it now stands, as a PDF on letter paper. */
 export async function printedRecoveryNote(db: Database, job: JobAnswer, nowMs: number): Promise<Buffer> {
@@ -18,8 +16,7 @@ export async function printedRecoveryNote(db: Database, job: JobAnswer, nowMs: n
     timeZone: from.timeZone,
     printedMs: nowMs,
   })
-  const pages = paperPages(paper).map(label => [{ position: 1, x: 0, y: 0, symbol: null, label }])
-  return labelSheetPdf({ page: PAPER_MM, pages }, await labelFonts(), { title: `Recovery note ${job.number}` })
+  return paperPdf(paper, `Recovery note ${job.number}`)
 }
 
 /** What the file of a note is called. */

@@ -3,7 +3,6 @@ import type { AnyRecordedEvent, RecordedEvent } from '~~/utils/custody/event'
 import type { Access } from '~~/utils/access/roles'
 import { failedResultOf, type FailedResult } from '~~/utils/document/failedResult'
 import { ownerNotice } from '~~/utils/document/ownerNotice'
-import { PAPER_MM, paperPages } from '~~/utils/document/paper'
 import { formatDay, wallClock } from '~~/utils/quantity/instant'
 import { recordedEvents } from '../custody/custodyLog'
 import { cylinderView } from '../custody/cylinderViews'
@@ -12,8 +11,7 @@ import { directory } from '../directory/directory'
 import { ownFirm } from '../firm'
 import { firmById } from '../firms/firms'
 import { problem } from '../http/problem'
-import { labelFonts } from '../pdf/fonts'
-import { labelSheetPdf } from '../pdf/labelSheetPdf'
+import { paperPdf } from '../pdf/paperPdf'
 
 /**
  * The notice to the owner of a rejected or condemned cylinder, as a PDF on letter paper.
@@ -33,8 +31,7 @@ export async function printedOwnerNotice(db: Database, id: string, { access, now
     test: { month: test.month, method: test.method, requalifier: requalifier?.name ?? 'not known', rin: test.rin ?? requalifier?.rin ?? null },
     day: `${formatDay(nowMs, timeZone)} ${wallClock(nowMs, timeZone).year}`,
   })
-  const pages = paperPages(paper).map(label => [{ position: 1, x: 0, y: 0, symbol: null, label }])
-  return labelSheetPdf({ page: PAPER_MM, pages }, await labelFonts(), { title: 'Notice to the owner' })
+  return paperPdf(paper, 'Notice to the owner')
 }
 
 /** The test that a cylinder stands rejected or condemned by, as it now counts: the first that condemned it, the last that rejected it. */

@@ -8,8 +8,8 @@ import { tagDay } from '~~/utils/document/contentsTag'
 import { exactGrams, type MassReading } from '~~/utils/quantity/mass'
 import { formatMonth } from '~~/utils/quantity/month'
 import { CATALOGUE } from '~~/utils/refrigerant/allRefrigerants'
-import { shippedContents } from '~~/utils/transport/shippedContents'
-import type { Classification } from '~~/utils/transport/shipperEntries'
+import { contentsKey, shippedContents } from '~~/utils/transport/shippedContents'
+import type { KeptClassification } from '~~/utils/transport/shipperEntries'
 import { shippingPapers, type Carriage, type PapersLine, type Party, type ShippingPapers } from '~~/utils/transport/shippingPapers'
 import { cylinderStates, cylinderViews } from '../custody/cylinderViews'
 import type { Database } from '../database/database'
@@ -67,10 +67,10 @@ async function headOf(db: Database, shipmentId: string): Promise<Head> {
   return { ...row, isCarrierSaid: said.length > 0 }
 }
 
-async function classificationsOf(db: Database, shipmentId: string): Promise<Map<string, Classification>> {
+async function classificationsOf(db: Database, shipmentId: string): Promise<Map<string, KeptClassification>> {
   const rows = await db.read.select({ cylinderId: shipmentLines.cylinderId, said: shipmentLines.classification }).from(shipmentLines)
     .where(eq(shipmentLines.shipmentId, shipmentId))
-  return new Map(rows.flatMap(({ cylinderId, said }) => said === null ? [] : [[cylinderId, said as Classification]]))
+  return new Map(rows.flatMap(({ cylinderId, said }) => said === null ? [] : [[cylinderId, said as KeptClassification]]))
 }
 
 function carriageOf({ carrierId, isCarrierSaid }: Head, carrier: Parameters<typeof partyOf>[0]): Carriage {
@@ -82,7 +82,7 @@ function partyOf(row: { name: string, address: string | null, telephone: string 
   return { name: row?.name ?? '', address: row?.address ?? null, telephone: row?.telephone ?? null }
 }
 
-interface ToBePapered { view: CylinderView, state: CylinderState, sent: PaperedLine['sent'], classification: Classification | null }
+interface ToBePapered { view: CylinderView, state: CylinderState, sent: PaperedLine['sent'], classification: KeptClassification | null }
 
 function paperedLine({ view, state, sent, classification }: ToBePapered): PapersLine {
   const tareWeight = state.stamp && tareReading(state.stamp, state.tare)
@@ -102,7 +102,8 @@ function paperedLine({ view, state, sent, classification }: ToBePapered): Papers
       ...view.contents.burnt ? ['burnt'] : [],
       ...view.requalification.state === 'overdue' ? ['retest overdue'] : [],
     ],
-    classification,
+    // Of other contents the shipper has said nothing.
+    classification: classification?.of === contentsKey(contents) ? classification : null,
   }
 }
 
