@@ -18,6 +18,7 @@ export const KIT_FIRM: KitFirm = {
     supervisor: null, vans: [{ id: VAN, name: 'Van 7' }], active: true, invited: false,
   }],
   vans: [{ vanId: VAN, materials: null, checkIn: null }],
+  jobs: [],
 }
 
 /** A cylinder after a story, under an id of its own. */

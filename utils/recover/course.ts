@@ -1,4 +1,6 @@
 import type { FilledDraft, OnTheWay } from '../custody/draft/filled'
+import type { Job } from '../contract/jobs'
+import { ownerOfJob } from '../jobs/jobDraft'
 import type { MassReading } from '../quantity/mass'
 import { levelDraft, type LevelDraft } from '../recovery/levelDraft'
 import type { ReadReached } from '../recovery/reachedDraft'
@@ -33,6 +35,27 @@ export interface RecoveryCourse extends FilledDraft {
 /** A recovery that has not begun. */
 export function newCourse(draft: FilledDraft, cylinder: RecoveryCourse['cylinder']): RecoveryCourse {
   return { ...draft, step: 'before', cylinder, plan: null, stopSeen: false, machineOff: false, valvesShut: false, hosesOff: false, level: levelDraft({}) }
+}
+
+/**
+ * A recovery that is of a job: whose it is comes from there, and what was said of the equipment where nothing else was said
+ * here. null: of none; what was taken over stays.
+ */
+export function courseOfJob(course: RecoveryCourse, job: Pick<Job, 'id' | 'keeps' | 'customer' | 'charge' | 'opened'> | null): RecoveryCourse {
+  if (job === null) return { ...course, jobId: '' }
+  const { charge, machineMade, circumstances, appliance } = course.level
+  return {
+    ...course,
+    jobId: job.id,
+    ownerId: ownerOfJob(job),
+    level: {
+      ...course.level,
+      charge: charge ?? job.charge,
+      machineMade: machineMade || (job.opened?.machineMade ?? ''),
+      circumstances: circumstances || (job.opened?.circumstances ?? ''),
+      appliance: appliance === 'other' ? job.opened?.appliance ?? 'other' : appliance,
+    },
+  }
 }
 
 /** The readings noted so far, the oldest first. */

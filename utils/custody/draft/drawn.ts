@@ -2,6 +2,13 @@ import type { MassReading } from '../../quantity/mass'
 import type { DraftKind } from './draft'
 
 export const PURPOSES = ['same-system', 'same-owner', 'sampling', 'other'] as const
+/** What it was drawn for, as people say it. */
+export const PURPOSE_WORDS: Record<(typeof PURPOSES)[number], string> = {
+  'same-system': 'Back into the system it came from',
+  'same-owner': 'Into other equipment of its owner',
+  'sampling': 'A sample',
+  'other': 'Something else',
+}
 export const PHASES = ['liquid', 'vapour'] as const
 
 export interface DrawnDraft {
