@@ -1,70 +1,19 @@
-import { ApiError, problemOf, useApi } from '~~/composables/useApi'
-import { useLoaded } from '~~/composables/useLoaded'
+import { useActedList, type CylinderList } from '~~/composables/useActedList'
+import { useApi } from '~~/composables/useApi'
 import { deviceNow } from '~~/stores/posting'
-import type { CylinderRow, CylinderView } from '~~/utils/contract/custody'
-import type { ProblemDetails } from '~~/utils/contract/problem'
-import type { Finding } from '~~/utils/custody/finding'
-import { readScannedText } from '~~/utils/label/code'
-import { changedLines, cylinderName } from '~~/utils/shipment/changedLines'
 
-/** What a shipment and a test lot have in common. */
-export interface DraftList { id: string, state: string, lines: { cylinder: CylinderRow, version: number, because: Finding[] }[] }
-
-/** A shipment or a test lot with its lines, and what may be done to it while it is a draft. */
-export function useDraftList<L extends DraftList>(kind: 'shipments' | 'test-lots', id: string) {
+/** A test lot with its lines, and what may be done to it. */
+export function useDraftList<L extends CylinderList>(kind: 'test-lots', id: string) {
   const api = useApi()
   const path = `/api/${kind}/${id}`
-  const loaded = useLoaded(`${kind}-${id}`, () => api.get<L>(path))
-  const busy = ref(false)
-  const problem = ref<ProblemDetails | null>(null)
-  /** What happened to its cylinders since they were looked at. */
-  const changes = ref<string[]>([])
-
-  /** Does something that answers with the list as it then is; a conflict shows what changed meanwhile. */
-  async function act(work: () => Promise<L>): Promise<boolean> {
-    busy.value = true
-    problem.value = null
-    changes.value = []
-    try {
-      loaded.data.value = await work()
-      return true
-    }
-    catch (error) {
-      problem.value = withNames(problemOf(error))
-      if (problem.value.status === 409) await lookAgain()
-      return false
-    }
-    finally {
-      busy.value = false
-    }
-  }
-
-  // The server counts the lines of a request; a person knows cylinders.
-  function withNames(found: ProblemDetails): ProblemDetails {
-    const errors = found.errors?.map((one) => {
-      const line = loaded.data.value?.lines[Number(/^lines\.(\d+)/.exec(one.path)?.[1] ?? -1)]
-      return line ? { ...one, path: cylinderName(line.cylinder) } : one
-    })
-    return errors ? { ...found, errors } : found
-  }
-
-  async function lookAgain() {
-    const before = loaded.data.value?.lines ?? []
-    await loaded.refresh()
-    changes.value = changedLines(before, loaded.data.value?.lines ?? [])
-  }
-
-  function ids(): string[] {
-    return loaded.data.value?.lines.map(line => line.cylinder.id) ?? []
-  }
+  const list = useActedList<L>(path)
+  const { act, ids } = list
 
   /** Adds the cylinder with a code, or a serial, to the draft. */
   function add(typed: string): Promise<boolean> {
     return act(async () => {
-      const ref = readScannedText(typed)?.code ?? typed.trim()
-      const view = await api.get<CylinderView>(`/api/cylinders/${encodeURIComponent(ref)}`)
-      if (ids().includes(view.id)) throw new ApiError({ type: 'about:blank', title: 'It is on the list already', status: 422, detail: '' })
-      return api.put<L>(`${path}/lines`, { cylinderIds: [...ids(), view.id] })
+      const added = await list.newOne(typed)
+      return api.put<L>(`${path}/lines`, { cylinderIds: [...ids(), added] })
     })
   }
 
@@ -81,10 +30,10 @@ export function useDraftList<L extends DraftList>(kind: 'shipments' | 'test-lots
   }
 
   /** Records for all of its lines at once what happens now. */
-  function record(what: 'dispatch' | 'receipt' | 'return', body: object): Promise<boolean> {
+  function record(what: 'dispatch' | 'return', body: object): Promise<boolean> {
     const now = deviceNow()
     return act(() => api.post<L>(`${path}/${what}`, { occurredAt: now, deviceNow: now, ...body }))
   }
 
-  return { ...loaded, busy, actProblem: problem, changes, add, takeOff, putBack, cancel, record }
+  return { ...list, add, takeOff, putBack, cancel, record }
 }

@@ -1,11 +1,12 @@
 import { useDeskFrame } from '~~/composables/useDeskFrame'
-import { useDraftList, type DraftList } from '~~/composables/useDraftList'
+import type { CylinderList } from '~~/composables/useActedList'
+import { useDraftList } from '~~/composables/useDraftList'
 import { useNotice } from '~~/composables/useNotice'
 import { useSessionStore } from '~~/stores/session'
 import type { Permission } from '~~/utils/access/permissions'
 
-/** What the page of a shipment does as that of a test lot: it takes scans onto the draft, and cylinders off and back. */
-export function useListPage<L extends DraftList>(kind: 'shipments' | 'test-lots', id: string, nameOf: (shown: L | null) => string, prepare: Permission) {
+/** What the page of a test lot does: it takes scans onto the draft, and cylinders off and back. */
+export function useListPage<L extends CylinderList>(kind: 'test-lots', id: string, nameOf: (shown: L | null) => string, prepare: Permission) {
   const session = useSessionStore()
   const list = useDraftList<L>(kind, id)
   const notice = useNotice()

@@ -172,6 +172,7 @@ const SCREENS: Record<string, Screen[]> = {
   'scan.vue': [{ as: technician, at: () => '/scan' }],
   'setup.vue': [{ as: 'nobody', at: demo => `/setup?token=${demo.setUpToken}`, empty: true }, { as: 'nobody', at: () => '/setup' }],
   'shipments/[id]/index.vue': [...(['draft', 'dispatched', 'settled'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
+  'shipments/[id]/weigh.vue': [{ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments.draft}/weigh` }],
   'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
   'unsent.vue': [
@@ -282,14 +283,16 @@ const PRESSED: Record<string, Screen> = {
     await page.getByRole('button', { name: 'Invite a person' }).click()
     await page.getByRole('heading', { name: 'Invite a person' }).waitFor()
   } },
-  'a dispatch without weights': { as: manager, at: demo => `/shipments/${demo.shipments.draft}`, after: async (page) => {
-    await page.getByRole('button', { name: /^Dispatch/ }).first().click()
-    await page.getByText(/not weighed yet/).first().waitFor()
+  'a line taken off without a reason': { as: manager, at: demo => `/shipments/${demo.shipments.draft}`, after: async (page) => {
+    await page.getByRole('button', { name: /^Take off/ }).locator('visible=true').first().click()
+    await page.getByRole('dialog').getByRole('button', { name: 'Take off' }).click()
+    await page.getByText('Say why: it stays in the history.').waitFor()
   } },
-  'a dispatch to be confirmed': { as: manager, at: demo => `/shipments/${demo.shipments.draft}`, after: async (page) => {
-    for (const box of await page.getByLabel(/^Gross of .*, pounds/).all()) await box.fill('32')
-    await page.getByRole('button', { name: /^Dispatch/ }).first().click()
-    await page.getByRole('dialog').waitFor()
+  'cylinders that came back': { as: manager, at: demo => `/shipments/${demo.shipments.dispatched}`, after: async (page) => {
+    await page.getByRole('button', { name: 'Take cylinders back' }).click()
+    await page.getByRole('checkbox').first().check()
+    await page.getByRole('button', { name: 'Take 1 back' }).click()
+    await page.getByText('1 of them is not weighed yet.').waitFor()
   } },
   'a log that was verified': { as: auditor, at: () => '/log', after: async (page) => {
     await page.getByRole('button', { name: 'Verify all' }).click()

@@ -89,12 +89,22 @@ async function draft(client: TestClient, path: '/api/shipments' | '/api/test-lot
   const { id } = await made<{ id: string }>(client, path, { [kind === 'reclaimer' ? 'toFirmId' : 'requalifierId']: firm?.id })
   const onIt: string[] = []
   for (const row of items) {
-    const answer = await client.put<TestLotWithLines>(`${path}/${id}/lines`, { cylinderIds: [...onIt, row.id] })
+    const answer = await withLines(client, `${path}/${id}/lines`, onIt, [row.id])
     if (answer.status === 200 && answer.body.lines.at(-1)?.because.length === 0) onIt.push(row.id)
+    else if (answer.status === 200) await withLines(client, `${path}/${id}/lines`, onIt, [], [row.id])
     if (onIt.length === LINES_OF_A_DRAFT) break
   }
-  await client.put(`${path}/${id}/lines`, { cylinderIds: onIt })
   return id
+}
+
+/** Another cylinder onto a list, or one off it. */
+function withLines(client: TestClient, path: string, standing: readonly string[], add: string[], takeOff: string[] = []) {
+  if (path.startsWith('/api/test-lots')) return client.put<TestLotWithLines>(path, { cylinderIds: [...standing, ...add] })
+  return client.patch<TestLotWithLines>(path, {
+    occurredAt: new Date().toISOString(),
+    add: add.map(cylinderId => ({ id: randomUUID(), cylinderId })),
+    takeOff: takeOff.map(cylinderId => ({ id: randomUUID(), cylinderId, reason: 'It may not leave' })),
+  })
 }
 
 /** A test lot that has just left. */

@@ -32,6 +32,7 @@ export async function openShop(server: TestServer): Promise<Shop> {
   const shop = await made<Place>(admin.client, '/api/places', { name: 'North shop', kind: 'shop' })
   const reclaimer = await made<Firm>(admin.client, '/api/firms', { name: 'Tarnvale Reclaim', kind: 'reclaimer' })
   const requalifier = await made<Firm>(admin.client, '/api/firms', { name: 'Ostwick Cylinder Tests', kind: 'requalifier', rin: 'A123' })
+  await admin.client.patch('/api/firm', { emergencyTelephone: '+1 555 0142' })
   return { admin, warehouse, technician, manager, auditor, shop, reclaimer, requalifier }
 }
 

@@ -4,10 +4,12 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { append } from '../../server/utils/custody/append'
-import { cancelDraft, createDraft, replaceLines } from '../../server/utils/cylinder-lists/drafts'
+import { cancelDraft, createDraft } from '../../server/utils/cylinder-lists/drafts'
 import { openDatabase, type Database } from '../../server/utils/database/database'
 import { createFirm } from '../../server/utils/firms/createFirm'
 import { createPlace } from '../../server/utils/places/createPlace'
+import { cancelShipment } from '../../server/utils/shipments/cancelShipment'
+import { changeLines } from '../../server/utils/shipments/changeLines'
 import { dispatchShipment } from '../../server/utils/shipments/dispatchShipment'
 import { theShipment } from '../../server/utils/shipments/shipments'
 import { dispatchTestLot } from '../../server/utils/test-lots/dispatchTestLot'
@@ -16,6 +18,7 @@ import { theTestLot } from '../../server/utils/test-lots/testLots'
 import type { Access } from '../../utils/access/roles'
 import { drawLabelCode } from '../../utils/label/code'
 import { eventOf } from '../helpers/fleet'
+import { madeReady } from '../helpers/readyShipment'
 import { lb, stampOf } from '../helpers/stamps'
 
 const NOW = Date.UTC(2026, 4, 4, 15)
@@ -29,6 +32,7 @@ beforeEach(async () => {
   folder = mkdtempSync(join(tmpdir(), 'collarbook-'))
   db = await openDatabase(`file:${join(folder, 'collarbook.db')}`)
   await db.migrate('drizzle/migrations')
+  await db.write([{ sql: `INSERT INTO firm (id, name, telephone, time_zone, units, created_at) VALUES (?, 'Testing firm', '555-0100', 'America/Chicago', 'lb', 0)`, args: [randomUUID()] }])
   shopId = (await createPlace(db, { name: 'North shop', kind: 'shop' }, NOW)).id
 })
 afterEach(() => {
@@ -81,7 +85,10 @@ describe('a shipment that is changed while it is sent off', () => {
     first = await registered(R22)
     second = await registered(R22)
     await createDraft(db, draft, { firmId, note: null, cylinderIds: [first], createdBy: MONA.personId, now: NOW })
+    await madeReady(db, draft.id, [{ cylinderId: first, gross: lb(40) }], MONA, NOW)
   })
+
+  const act = () => ({ id: randomUUID(), occurredAt: new Date(NOW).toISOString() })
 
   function dispatch(through: Database, when: { occurredAt: string, deviceNow?: string } = { occurredAt: new Date(NOW).toISOString() }) {
     const lines = [{ cylinderId: first, eventId: randomUUID(), expects: 2, gross: lb(40) }]
@@ -89,13 +96,14 @@ describe('a shipment that is changed while it is sent off', () => {
   }
 
   it('leaves nothing behind where a line was added meanwhile', async () => {
-    await expect(dispatch(overtaken(() => replaceLines(db, draft, [first, second])))).rejects.toMatchObject({ details: { status: 409, title: 'The lines have changed' } })
+    await expect(dispatch(overtaken(() => changeLines(db, draft.id, { occurredAt: act().occurredAt, add: [{ id: randomUUID(), cylinderId: second }], takeOff: [] }, MONA.personId, NOW)))).rejects.toMatchObject({ details: { status: 409, title: 'The lines have changed' } })
     expect(await kindsInLog(first)).toEqual(['registered', 'labelled'])
     expect((await theShipment(db, draft.id)).state).toBe('draft')
   })
 
   it('leaves nothing behind where it was cancelled meanwhile', async () => {
-    await expect(dispatch(overtaken(() => cancelDraft(db, draft)))).rejects.toMatchObject({ details: { status: 409, title: 'This shipment is no draft' } })
+    await expect(dispatch(overtaken(() => cancelShipment(db, draft.id, { ...act(), reason: 'not wanted' }, MONA.personId, NOW))))
+      .rejects.toMatchObject({ details: { status: 409, title: 'Nothing has left', detail: 'It was given up.' } })
     expect(await kindsInLog(first)).toEqual(['registered', 'labelled'])
     expect((await theShipment(db, draft.id)).state).toBe('cancelled')
   })

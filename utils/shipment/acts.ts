@@ -27,9 +27,12 @@ export const ACT_WORDS = {
   'figures-set': 'Figures entered',
   'statement-taken': 'Statement taken over',
   'file-added': 'File added',
+  'file-tied': 'File tied to lines',
+  'file-withdrawn': 'File withdrawn',
   'dispute-opened': 'Dispute opened',
   'dispute-message': 'Said in a dispute',
   'dispute-ended': 'Dispute ended',
+  'dispute-reopened': 'Dispute opened again',
   'settled': 'Settled',
   'closed': 'Closed',
 } as const
@@ -45,6 +48,8 @@ export interface ShipmentAct {
   kind: ActKind
   /** The line it was about; null for the whole shipment. */
   cylinderId: string | null
+  /** The same cylinder by its names. */
+  cylinder: { id: string, labelCode: string | null, serial: string | null } | null
   details: Record<string, unknown>
   /** The name to show; null where it is not known any more. */
   by: string | null
@@ -53,3 +58,6 @@ export interface ShipmentAct {
   occurredAt: string
   recordedAt: string
 }
+
+/** GET /api/shipments/{id}/acts: as they were recorded. */
+export interface ShipmentActsAnswer { items: ShipmentAct[] }

@@ -1,6 +1,6 @@
 import { excessGrams } from '../capacity/stopWeight'
 import type { ShipmentLine } from '../contract/shipments'
-import { exactGrams, readingGrams, type MassReading } from '../quantity/mass'
+import { exactGrams, formatMass, readingGrams, type MassReading, type MassUnit } from '../quantity/mass'
 import { scaleAccuracyGrams } from '../quantity/scale'
 
 /** One line as it is about to leave: what the scale showed, and what follows from it. */
@@ -19,19 +19,23 @@ export interface WeighedLine {
 /** What all lines come to. */
 export interface DispatchSum { weighed: number, grossGrams: number, netGrams: number | null, nets: number }
 
-/** Puts what the scale showed beside each line of a shipment. */
-export function weighedLines(lines: readonly ShipmentLine[], grossOf: Readonly<Record<string, MassReading | null | undefined>>): WeighedLine[] {
-  return lines.map((line) => {
-    const { cylinder } = line
-    const gross = grossOf[cylinder.id] ?? null
-    const grossGrams = gross === null ? null : readingGrams(gross)
-    const netGrams = grossGrams === null || cylinder.tareWeightGrams === null ? null : grossGrams - cylinder.tareWeightGrams
-    return {
-      line, gross, grossGrams, netGrams,
-      changedGrams: changed(netGrams, grossGrams, cylinder.netGrams, cylinder.tareWeightGrams),
-      over: gross !== null && isOver(gross, netGrams, cylinder),
-    }
-  })
+/** Puts what the scale shows beside a line of a shipment; by default what was kept of it. */
+export function weighedLine(line: ShipmentLine, gross: MassReading | null = line.weighed?.gross ?? null): WeighedLine {
+  const { cylinder } = line
+  const grossGrams = gross === null ? null : readingGrams(gross)
+  const netGrams = grossGrams === null || cylinder.tareWeightGrams === null ? null : grossGrams - cylinder.tareWeightGrams
+  return {
+    line, gross, grossGrams, netGrams,
+    changedGrams: changed(netGrams, grossGrams, cylinder.netGrams, cylinder.tareWeightGrams),
+    over: gross !== null && isOver(gross, netGrams, cylinder),
+  }
+}
+
+/** What is to be looked at again of a weight; null where nothing. */
+export function weighingWord({ over, changedGrams }: WeighedLine, unit: MassUnit): { kind: 'stop' | 'att', text: string } | null {
+  if (over) return { kind: 'stop', text: 'Above its fill limit: it may not leave.' }
+  if (changedGrams === null) return null
+  return { kind: 'att', text: `${formatMass(Math.abs(changedGrams), unit, 'nearest')} ${changedGrams < 0 ? 'less' : 'more'} than last known. Weigh it again.` }
 }
 
 /** Adds up a shipment: what is weighed, and of it what has a net. */

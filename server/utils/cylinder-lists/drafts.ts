@@ -6,7 +6,15 @@ import { freeFor, refuseUnfree } from './freeCylinders'
 import { LISTS, type ListRef } from './lists'
 
 /** What a new list says beside its cylinders. */
-export interface NewList { firmId: string, note: string | null, cylinderIds: readonly string[], createdBy: string, now: number }
+export interface NewList {
+  firmId: string
+  note: string | null
+  cylinderIds: readonly string[]
+  createdBy: string
+  now: number
+  /** Further statements of the same commit, under a condition that holds where the list is made in it. */
+  along?: (isMade: Guard) => InStatement[]
+}
 
 /**
  * Makes a draft with its lines.
@@ -32,6 +40,7 @@ export async function createDraft(db: Database, list: ListRef, draft: NewList): 
       args: [list.id, draft.firmId, draft.note, draft.now, draft.createdBy, ...free.args],
     },
     ...newLines(list, draft.cylinderIds, made),
+    ...draft.along?.(made) ?? [],
   ])
   if (head?.rows.length === 1 || await isDraftedAlready(db, list, draft)) return
   await refuseUnfree(db, list, draft.cylinderIds)

@@ -5,13 +5,14 @@ import { LISTS, type ListKind } from './lists'
 /**
  * The condition for the lists of a state that come after the page before; they count down by their numbers.
  *
+ * @param stateSql what a list's state is, where its column does not say it alone.
  * Errors: 400 for a cursor that is none of ours.
  */
-export function pageFilter(kind: ListKind, { state, cursor }: { state?: string, cursor?: string }): { sql: string, args: InValue[] } {
+export function pageFilter(kind: ListKind, { state, cursor }: { state?: string, cursor?: string }, stateSql?: string): { sql: string, args: InValue[] } {
   const { heads } = LISTS[kind]
   if (cursor !== undefined && !/^[1-9]\d{0,14}$/.test(cursor)) throw foreignCursor()
   return {
-    sql: `(? IS NULL OR ${heads}.state = ?) AND (? IS NULL OR ${heads}.number < ?)`,
+    sql: `(? IS NULL OR ${stateSql ?? `${heads}.state`} = ?) AND (? IS NULL OR ${heads}.number < ?)`,
     args: [state ?? null, state ?? null, cursor ? Number(cursor) : null, cursor ? Number(cursor) : null],
   }
 }

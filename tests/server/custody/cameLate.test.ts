@@ -10,6 +10,7 @@ import { differingShipments } from '../../../server/utils/shipments/paperDiffere
 import { shipmentWithLines } from '../../../server/utils/shipments/shipmentWithLines'
 import { drawLabelCode } from '../../../utils/label/code'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../../helpers/logDatabase'
+import { madeReady } from '../../helpers/readyShipment'
 import { lb, stampOf } from '../../helpers/stamps'
 
 const HOUR = 3_600_000
@@ -45,6 +46,7 @@ async function dispatched(): Promise<{ id: string, shipmentId: string }> {
     statement(log.db.read.insert(shipments).values({ id: shipmentId, number: (rows[0]![0] as number) + 1, toFirmId: reclaimer, state: 'draft', createdAt: 0, createdBy: log.manager.personId })),
     statement(log.db.read.insert(shipmentLines).values({ shipmentId, cylinderId: id, position: 0 })),
   ])
+  await madeReady(log.db, shipmentId, [{ cylinderId: id, gross: lb(40) }], log.manager, Date.now())
   await dispatchShipment(log.db, shipmentId, {
     occurredAt: ago(1).occurredAt, lines: [{ cylinderId: id, eventId: randomUUID(), expects: 3, gross: lb(40) }],
   }, log.manager, Date.now())

@@ -1,12 +1,12 @@
-import { replaceLines } from '~~/server/utils/cylinder-lists/drafts'
 import { useDatabase } from '~~/server/utils/database/currentDatabase'
 import { apiRoute } from '~~/server/utils/http/apiRoute'
+import { changeLines } from '~~/server/utils/shipments/changeLines'
 import { shipmentWithLines } from '~~/server/utils/shipments/shipmentWithLines'
 import { idParams } from '~~/utils/contract/parts'
 import { shipmentLinesBody } from '~~/utils/contract/shipments'
 
-/** PUT /api/shipments/{id}/lines: the whole list of a draft. Safe to send twice. */
+/** PATCH /api/shipments/{id}/lines: cylinders onto and off the list of one that has not left. Safe to send twice. */
 export default apiRoute({ permission: 'shipments:prepare', params: idParams, body: shipmentLinesBody }, async ({ access, params, body }) => {
-  await replaceLines(useDatabase(), { kind: 'shipment', id: params.id }, body.cylinderIds)
+  await changeLines(useDatabase(), params.id, body, access.personId, Date.now())
   return shipmentWithLines(useDatabase(), params.id, access, Date.now())
 })
