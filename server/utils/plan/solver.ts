@@ -35,11 +35,12 @@ async function askWorker(program: string, seconds: number): Promise<Solution> {
   worker ??= new Worker(workerFile())
   const asked = worker
   asked.ref()
-  const given = AbortSignal.timeout(seconds * 1000 + PATIENCE_MS)
+  const answered = new AbortController()
+  const signal = AbortSignal.any([AbortSignal.timeout(seconds * 1000 + PATIENCE_MS), answered.signal])
   try {
     asked.postMessage({ program, seconds })
     // Rejects where the solver itself fails, or is busy beyond all patience; a thread that is ended says no more.
-    const [answer] = await Promise.race([once(asked, 'message', { signal: given }), once(asked, 'exit', { signal: given }).then(ended)]) as [Solution]
+    const [answer] = await Promise.race([once(asked, 'message', { signal }), once(asked, 'exit', { signal }).then(ended)]) as [Solution]
     return answer
   }
   catch (error) {
@@ -48,6 +49,7 @@ async function askWorker(program: string, seconds: number): Promise<Solution> {
     throw problem(503, 'No plan was worked out', 'The solver failed or took too long. Try again, or with fewer cylinders.', undefined, { type: 'solver-failed' })
   }
   finally {
+    answered.abort()
     asked.unref()
     idle = setTimeout(() => endWorker(asked), KEPT_IDLE_MS)
     idle.unref()

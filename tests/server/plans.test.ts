@@ -1,0 +1,127 @@
+import { randomUUID } from 'node:crypto'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { stopSolver } from '~~/server/utils/plan/solver'
+import { makePlan } from '~~/server/utils/plan/makePlan'
+import { cylinderTasks, dropPlan, listPlans, planDetails } from '~~/server/utils/plan/plans'
+import type { PlanQuestion } from '~~/utils/contract/plans'
+import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../helpers/logDatabase'
+import { lb } from '../helpers/stamps'
+
+let log: LogDatabase
+beforeAll(async () => {
+  log = await openLogDatabase()
+})
+afterAll(async () => {
+  await stopSolver()
+  log.close()
+})
+
+/** A cylinder that holds so many pounds of R-22, suspect. Its limit is 38.0 lb, its tare 27.5 lb. */
+async function holding(netLb: number): Promise<string> {
+  const id = await newCylinder(log)
+  await record(log.db, log.warehouse, [sent(id, 'filled', { refrigerant: 'R-22', condition: 'suspect', grossBefore: lb(27.5), grossAfter: lb(27.5 + netLb), looked: true })])
+  return id
+}
+
+function consolidation(cylinderIds: string[], more: Partial<PlanQuestion> = {}): PlanQuestion {
+  return { kind: 'consolidation', cylinderIds, useEmpty: false, worseTogether: false, ...more } as PlanQuestion
+}
+
+function made(question: PlanQuestion) {
+  return makePlan(log.db, question, log.warehouse, Date.now())
+}
+
+function details(id: string) {
+  return planDetails(log.db, id, log.technician, Date.now())
+}
+
+/** Both halves of a transfer, by gross weights in pounds before and after. */
+async function transferred(fromId: string, toId: string, out: [number, number], into: [number, number]) {
+  const pair = { transferId: randomUUID(), refrigerant: 'R-22', condition: 'suspect' }
+  const events = [
+    sent(fromId, 'transferred', { ...pair, direction: 'out', counterpartId: toId, grossBefore: lb(out[0]), grossAfter: lb(out[1]) }),
+    sent(toId, 'transferred', { ...pair, direction: 'in', counterpartId: fromId, grossBefore: lb(into[0]), grossAfter: lb(into[1]) }),
+  ]
+  await record(log.db, log.technician, events)
+  return events
+}
+
+describe('a plan of what to bring together', () => {
+  it('is kept as steps, is ticked off by the pair that the log holds, and takes the tick back with it', async () => {
+    const [small, middle, large] = [await holding(5), await holding(10), await holding(20)]
+    const { id, answer } = await made(consolidation([small, middle, large]))
+    // 5 and 10 lb fit into the one that holds 20 of 38 lb; 20 lb would not fit into the others.
+    expect(answer).toMatchObject({ freed: 2, mostFreed: 2, fewestTransfers: 2 })
+    expect(answer.transfers.map(({ fromId, toId }) => [fromId, toId]).sort()).toEqual([[small, large], [middle, large]].sort())
+    expect(answer.summary.slice(0, 2)).toEqual([
+      '2 cylinders come free by 2 transfers, which move 15.0\u00A0lb (6.80\u00A0kg).', 'No plan frees more, and none that frees as many has fewer transfers.',
+    ])
+    // 35 lb are 15,876 g.
+    expect(answer.cylinders.find(one => one.id === large)).toMatchObject({ part: 'takes', beforeGrams: 9_072, afterGrams: 15_876 })
+
+    const [out] = await transferred(small, large, [32.5, 27.5], [47.5, 52.5])
+    const after = await details(id!)
+    expect(after).toMatchObject({ state: 'open', tasks: 2, tasksDone: 1, noLongerFits: [] })
+    expect(after.steps.find(({ fromId }) => fromId === small)!.done).toMatchObject({ eventId: out!.id, grams: 2_268, balance: 'balanced' })
+
+    await record(log.db, log.technician, [sent(small, 'corrected', { eventId: out!.id, reason: 'another cylinder' })])
+    expect((await details(id!)).tasksDone).toBe(0)
+  })
+
+  it('says of each pair whether it balances, and is done when its last step is', async () => {
+    const [small, large] = [await holding(5), await holding(20)]
+    const { id } = await made(consolidation([small, large]))
+    // Out 5.0 lb and in 4.0 lb: the four readings explain well under a pound.
+    await transferred(small, large, [32.5, 27.5], [47.5, 51.5])
+    const done = await details(id!)
+    expect(done.state).toBe('done')
+    expect(done.steps[0]!.done!.balance).toBe('unbalanced')
+    await expect(dropPlan(log.db, id!, Date.now())).rejects.toMatchObject({ details: { status: 409 } })
+  })
+
+  it('says what no longer fits where a cylinder changed otherwise', async () => {
+    const [small, large] = [await holding(5), await holding(20)]
+    const { id } = await made(consolidation([small, large]))
+    expect((await details(id!)).noLongerFits).toEqual([])
+    await record(log.db, log.warehouse, [sent(large, 'filled', { refrigerant: 'R-22', condition: 'suspect', grossBefore: lb(47.5), grossAfter: lb(63), looked: true })])
+    expect((await details(id!)).noLongerFits).toEqual([{ cylinderId: large, why: expect.stringMatching(/^It has room for .* only; 5\.0\u00A0lb \(2\.27\u00A0kg\) was to come into it\.$/) }])
+    await record(log.db, log.warehouse, [sent(small, 'quarantined', { reason: 'an oily valve' })])
+    expect((await details(id!)).noLongerFits.map(({ cylinderId }) => cylinderId)).toEqual([small, large])
+  })
+
+  it('keeps its cylinders to itself until it is dropped', async () => {
+    const [small, large] = [await holding(5), await holding(20)]
+    const { id } = await made(consolidation([small, large]))
+    const { number } = await details(id!)
+    const second = await made(consolidation([small, large]))
+    expect(second.id).toBeNull()
+    expect(second.answer.cylinders.map(({ why }) => why)).toEqual([[`It stands on plan ${number}.`], [`It stands on plan ${number}.`]])
+    expect((await cylinderTasks(log.db, large, Date.now())).items).toMatchObject([{ planId: id, planNumber: number, step: { fromId: small, toId: large }, other: { id: small } }])
+    await dropPlan(log.db, id!, Date.now())
+    await dropPlan(log.db, id!, Date.now())
+    expect((await cylinderTasks(log.db, large, Date.now())).items).toEqual([])
+    expect((await made(consolidation([small, large]))).id).not.toBeNull()
+  })
+
+  it('is made once where it is sent twice, and refuses what nobody knows', async () => {
+    const cylinders = [await holding(5), await holding(20)]
+    const question = consolidation(cylinders, { id: randomUUID() })
+    const first = await made(question)
+    expect(await made(question)).toEqual(first)
+    await expect(made({ ...question, useEmpty: true } as PlanQuestion)).rejects.toMatchObject({ details: { status: 409 } })
+    await expect(made(consolidation([randomUUID()]))).rejects.toMatchObject({ details: { status: 422 } })
+    await expect(details(randomUUID())).rejects.toMatchObject({ details: { status: 404 } })
+    const { items } = await listPlans(log.db, Date.now())
+    expect(items.map(({ number }) => number)).toEqual(items.map((_, index) => items.length - index))
+  })
+
+  it('answers within ten seconds for sixty cylinders, with what no plan can pass', async () => {
+    const ids = await Promise.all(Array.from({ length: 60 }, (_, index) => holding(1 + index * 37 % 36)))
+    const begun = performance.now()
+    const { answer } = await made(consolidation(ids))
+    expect(performance.now() - begun).toBeLessThan(10_000)
+    expect(answer.freed).toBeGreaterThan(20)
+    expect(answer.mostFreed).toBeGreaterThanOrEqual(answer.freed)
+    expect(answer.transfers.length).toBeGreaterThanOrEqual(answer.fewestTransfers)
+  }, 30_000)
+})
