@@ -45,13 +45,15 @@ const LINES: { [K in EventKind]: Say<K> } = {
   }),
   'handed-over': ({ toHolderId }, names) => ({ what: `to ${named(toHolderId, names)}` }),
   'weighed': ({ gross }) => ({ what: 'the change is weighing', gross }),
-  'filled': ({ refrigerant, condition, grossBefore, grossAfter, method, ownerOfRefrigerantId, purged, readings, reached }, names) => ({
+  'filled': ({ refrigerant, condition, grossBefore, grossAfter, method, ownerOfRefrigerantId, jobId, ownerConsents, purged, readings, reached }, names) => ({
     what: [
       `${refrigerant ?? 'refrigerant not known,'} recovered`,
       condition && CONDITION_WORDS[condition],
       ownerOfRefrigerantId && `of ${named(ownerOfRefrigerantId, names)}`,
       grossBefore && `from ${formatReading(grossBefore)}`,
       method && `by ${methodWords(method)}`,
+      jobId && 'for a job',
+      ownerConsents && 'its owner agrees to the fill',
       purged && 'hoses purged',
       readings?.length && `${readings.length} ${readings.length === 1 ? 'reading' : 'readings'} on the way`,
       reached && `system down to ${vacuumWords(reached.vacuum)}${reached.heldMinutes === undefined ? '' : `, held ${reached.heldMinutes} min`}`,

@@ -10,6 +10,7 @@ const SCREENS: readonly Screen[] = [
   { label: 'Now', to: '/now', permission: 'fleet:read' },
   { label: 'Scan', to: '/scan', permission: 'events:post' },
   { label: 'Fleet', to: '/fleet', permission: 'fleet:read' },
+  { label: 'Jobs', to: '/jobs', permission: 'jobs:read' },
   { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
   { label: 'Retests', to: '/retests', permission: 'lots:read' },
   { label: 'Balance', to: '/balance', permission: 'reports:read' },

@@ -7,11 +7,11 @@ const words = (...roles: Role[]) => navigationFor(access(...roles)).map(item => 
 
 describe('where a person can go', () => {
   it.each<[Role, string[]]>([
-    ['technician', ['Now', 'Scan', 'Fleet', 'Refrigerants', 'Places', 'Settings']],
-    ['warehouse', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Settings']],
-    ['manager', ['Now', 'Scan', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Log', 'Settings']],
-    ['auditor', ['Now', 'Fleet', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Places', 'Log', 'Settings']],
-    ['admin', ['Now', 'Fleet', 'Refrigerants', 'Places', 'Log', 'Settings']],
+    ['technician', ['Now', 'Scan', 'Fleet', 'Jobs', 'Refrigerants', 'Places', 'Settings']],
+    ['warehouse', ['Now', 'Scan', 'Fleet', 'Jobs', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Settings']],
+    ['manager', ['Now', 'Scan', 'Fleet', 'Jobs', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Labels', 'Places', 'Log', 'Settings']],
+    ['auditor', ['Now', 'Fleet', 'Jobs', 'Shipments', 'Retests', 'Balance', 'Refrigerants', 'Places', 'Log', 'Settings']],
+    ['admin', ['Now', 'Fleet', 'Jobs', 'Refrigerants', 'Places', 'Log', 'Settings']],
   ])('as %s', (role, labels) => {
     expect(words(role)).toEqual(labels)
   })
