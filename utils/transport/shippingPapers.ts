@@ -51,6 +51,8 @@ export interface PapersInput {
 /** A line with how it is described. */
 export interface DescribedLine extends Omit<PapersLine, 'classification'> {
   description: ShippingDescription
+  /** Described by what the shipper has said, and not by what would be worked out. */
+  isShippersWord: boolean
 }
 
 /** Cylinders that travel under one description, residue apart. */
@@ -93,7 +95,7 @@ export function shippingPapers({ lines: given, ...head }: PapersInput, catalogue
 }
 
 function describedLine({ classification, ...line }: PapersLine, catalogue: NamingCatalogue): DescribedLine {
-  return { ...line, description: shippingDescription(line.contents, catalogue, classification) }
+  return { ...line, description: shippingDescription(line.contents, catalogue, classification), isShippersWord: classification !== null }
 }
 
 function groupsOf(lines: readonly DescribedLine[]): DescribedGroup[] {
