@@ -145,7 +145,7 @@ describe('a cylinder from its label to the auditor', () => {
     await page.getByRole('button', { name: 'It is ready' }).click()
     await page.getByRole('button', { name: 'Dispatch 1 cylinder' }).click()
     await page.getByRole('dialog').getByRole('button', { name: 'Ship 1 cylinder' }).click()
-    await page.getByText('Print the packing list').waitFor()
+    await page.getByText('Print this list').waitFor()
     await context.close()
   })
 

@@ -235,7 +235,7 @@ describe('a desk whose session ended', () => {
     await page.getByText('It is ready to leave.').waitFor()
     expect(await kindsOf(id)).toEqual(BEFORE)
     await send()
-    await page.getByText('Print the packing list').waitFor()
+    await page.getByText('Print this list').waitFor()
     expect(await kindsOf(id)).toEqual(['sent-for-reclaim', ...BEFORE])
     expect(await page.getByText('Kept from before:').count()).toBe(0)
     await context.close()

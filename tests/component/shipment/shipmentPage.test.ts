@@ -1,5 +1,5 @@
 import { mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
-import { readBody } from 'h3'
+import { createError, readBody } from 'h3'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import ShipmentPage from '~~/pages/shipments/[id]/index.vue'
 import { useSessionStore } from '~~/stores/session'
@@ -33,6 +33,7 @@ registerEndpoint(`${PATH}/lines`, {
     return stands = { ...stands, state: 'draft', lines: stands.lines.filter(line => !off.includes(line.cylinder.id)) }
   },
 })
+registerEndpoint(`${PATH}/papers`, () => createError({ statusCode: 409 }))
 registerEndpoint('/api/firms', () => ({ items: [] }))
 registerEndpoint('/api/places', () => ({ items: [] }))
 registerEndpoint('/api/policy', () => ({ timeZone: 'America/Chicago', fillPolicies: [], retests: [], scales: [], retest: { soonDays: 120 } }))
