@@ -17,7 +17,8 @@ const PURE: Record<string, readonly string[]> = {
   registration: ['quantity', 'refrigerant', 'requalification', 'capacity', 'custody', 'label'],
   reclaim: ['quantity', 'requalification', 'capacity', 'custody'],
   settlement: ['quantity', 'photo', 'reclaim', 'dock'],
-  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim', 'dock', 'settlement'],
+  transport: ['quantity', 'refrigerant', 'custody', 'picture'],
+  contract: ['quantity', 'refrigerant', 'requalification', 'capacity', 'recovery', 'photo', 'custody', 'access', 'label', 'reclaim', 'dock', 'settlement', 'transport'],
 }
 
 /** What else in utils/ draws, prints and plans: all of the above. */

@@ -1,5 +1,5 @@
 /** A kind of work or thing that a caution belongs to. */
-export type CautionTopic = 'filling' | 'handling' | 'moving' | 'storing' | 'checking' | 'unknown-contents' | 'flammable' | 'not-refillable'
+export type CautionTopic = 'filling' | 'handling' | 'moving' | 'storing' | 'checking' | 'transferring' | 'unknown-contents' | 'flammable' | 'not-refillable'
 
 const CAUTIONS: Record<CautionTopic, readonly string[]> = {
   'filling': [
@@ -26,6 +26,13 @@ const CAUTIONS: Record<CautionTopic, readonly string[]> = {
     'Bleed vapor into recovery equipment only, never to the air.',
     'Never warm a cylinder above 125 °F, and never with a flame.',
     'Do not open a cylinder whose contents nobody can name; leave it to an analysis.',
+  ],
+  'transferring': [
+    'Only certified persons transfer refrigerant.',
+    'Weigh both cylinders with the hoses off, before and after.',
+    'The stop weight governs: stop there, whatever a plan says.',
+    'Once both stand at one pressure nothing flows by itself any more: use a recovery machine made for the refrigerant.',
+    'Never warm a cylinder above 125 °F, and never with a flame.',
   ],
   'unknown-contents': [
     'Do not open the valve. What is in it may burn, poison or stand at high pressure.',

@@ -45,10 +45,14 @@ export function numberHeightMm(waterCapacity: MassReading | null, netGrams: numb
   return isSmall ? 6 : 12
 }
 
-/** Why a cylinder gets no contents tag, in words; null where it may have one. */
-export function noTagBecause({ contents, labelCode }: Pick<CylinderView, 'contents' | 'labelCode'>): string | null {
+/**
+ * Why a cylinder gets no contents tag, in words; null where it may have one.
+ *
+ * @param isClassified whether its shipper has said how it travels: then the tag says that, whatever is mixed in it.
+ */
+export function noTagBecause({ contents, labelCode }: Pick<CylinderView, 'contents' | 'labelCode'>, isClassified = false): string | null {
   if (contents.nothingInIt) return 'Nothing is in it. Take the tag of its last contents off.'
-  if (contents.refrigerant === null) {
+  if (contents.refrigerant === null && !isClassified) {
     return contents.condition === 'mixed'
       ? 'Different refrigerants are mixed in it: a tag that names one would be wrong (49 CFR 172.303(a)). Write “mixed refrigerants” by hand, and have the reclaimer say how it travels.'
       : 'What is in it is not known: a tag may not name what nobody has found out (49 CFR 172.303(a)). Check it first.'
@@ -66,12 +70,12 @@ const PUTS_IN: ReadonlySet<string> = new Set(['filled', 'transferred', 'received
  * Shape: `log` is its custody log, newest first; the tag bears the day and the author of what last went in.
  * Errors: RangeError where `noTagBecause` has a reason.
  */
-export function contentsTag(view: CylinderView, log: readonly LogLine[], entry: TagEntry): ContentsTag {
+export function contentsTag(view: CylinderView, log: readonly LogLine[], entry: TagEntry, isClassified = false): ContentsTag {
   const stands = log.filter(line => line.correction?.takenOut !== true)
   const putIn = stands.find(line => PUTS_IN.has(line.kind) && line.netAfterGrams !== null && line.netAfterGrams > (line.netBeforeGrams ?? 0))
     ?? stands.find(line => PUTS_IN.has(line.kind))
   if (putIn === undefined) throw new RangeError('This cylinder gets no contents tag')
-  return tagOfFill(view, { kind: putIn.kind, on: putIn.effectiveAt, technician: putIn.author.name }, entry)
+  return tagOfFill(view, { kind: putIn.kind, on: putIn.effectiveAt, technician: putIn.author.name }, entry, isClassified)
 }
 
 /**
@@ -79,14 +83,14 @@ export function contentsTag(view: CylinderView, log: readonly LogLine[], entry: 
  *
  * Errors: RangeError where `noTagBecause` has a reason.
  */
-export function tagOfFill(view: CylinderView, putIn: { kind: EventKind, on: string, technician: string }, entry: TagEntry): ContentsTag {
+export function tagOfFill(view: CylinderView, putIn: { kind: EventKind, on: string, technician: string }, entry: TagEntry, isClassified = false): ContentsTag {
   const { contents, labelCode, stamp } = view
-  if (noTagBecause(view) !== null || contents.refrigerant === null || labelCode === null) throw new RangeError('This cylinder gets no contents tag')
+  if (noTagBecause(view, isClassified) !== null || labelCode === null) throw new RangeError('This cylinder gets no contents tag')
   const condition = contents.burnt ? 'burnt' : contents.condition
   return {
     code: labelCode,
-    refrigerant: contents.refrigerant,
-    kind: [BY_RECOVERY.has(putIn.kind) ? 'Recovered' : '', ['clean', 'unknown'].includes(condition) ? '' : condition].filter(Boolean).join(', '),
+    refrigerant: contents.refrigerant ?? (contents.condition === 'mixed' ? 'Mixed' : 'Unnamed'),
+    kind: [BY_RECOVERY.has(putIn.kind) ? 'Recovered' : '', ['clean', 'unknown', ...contents.refrigerant === null ? ['mixed'] : []].includes(condition) ? '' : condition].filter(Boolean).join(', '),
     net: contents.netGrams === null ? null : `${formatMass(contents.netGrams, 'lb', 'nearest')} (${formatMass(contents.netGrams, 'kg', 'nearest')})`,
     on: putIn.on,
     technician: putIn.technician,

@@ -1,8 +1,9 @@
 import type { Paper } from './paper'
+import { shipmentName } from '../shipment/shipmentName'
 
-/** A shipment as people call it. @example shipmentWord({ number: 4 }) // 'shipment 0004' */
-export function shipmentWord({ number }: { number: number }): string {
-  return `shipment ${String(number).padStart(4, '0')}`
+/** A shipment as it is called within a line. @example shipmentWord({ number: 4 }) // 'shipment 0004' */
+export function shipmentWord(shipment: { number: number }): string {
+  return shipmentName(shipment).toLowerCase()
 }
 
 /** What stands large on each page of a paper that is no paper yet. */
