@@ -116,6 +116,25 @@ const SCREENS: Record<string, Screen[]> = {
     } },
   ],
   'c/[ref]/log.vue': [{ as: auditor, at: demo => `/c/${demo.codes.usual}/log` }],
+  'd/[token].vue': [
+    { as: 'nobody', at: demo => `/d/${demo.docks.dispatched}` },
+    { as: 'nobody', at: demo => `/d/${demo.docks.dispatched}`, after: async (page) => {
+      await page.getByLabel('Your name').fill('Dana')
+      await page.getByRole('button', { name: 'Begin' }).click()
+    } },
+    { as: 'nobody', at: demo => `/d/${demo.docks.dispatched}`, after: async (page) => {
+      await page.getByLabel('Your name').fill('Dana')
+      await page.getByRole('button', { name: 'Begin' }).click()
+      await page.getByRole('list').getByRole('button').first().click()
+      await page.getByRole('button', { name: 'It is here' }).click()
+      for (const key of ['4', '9']) await page.getByRole('button', { name: key, exact: true }).click()
+      await page.getByRole('button', { name: 'Enter 49' }).click()
+      await page.getByText('Gross as it left').waitFor()
+      await page.getByRole('button', { name: 'Damaged' }).click()
+    } },
+    { as: manager, at: demo => `/d/${demo.docks.settled}`, after: page => page.getByText('This shipment is settled').waitFor() },
+    { as: 'nobody', at: () => `/d/${'x'.repeat(60)}`, answers: 404, after: page => page.getByText('This link opens nothing').waitFor() },
+  ],
   'evacuation-level.vue': [
     { as: technician, at: () => '/evacuation-level' },
     { as: technician, at: () => '/evacuation-level?refrigerant=R-32&charge=250lb&machineMade=1990&circumstances=leaking' },
@@ -161,6 +180,7 @@ const SCREENS: Record<string, Screen[]> = {
     { as: technician, at: () => '/pressure-check?refrigerant=R-744&pressureKPa=9000&temperatureC=40' },
     { as: manager, at: () => '/pressure-check?refrigerant=R-409A&pressureKPa=690&temperatureC=26.667&barometerKPa=84.3' },
   ],
+  'reclaim.vue': [{ as: manager, at: () => '/reclaim', after: page => page.getByText(/would be refused/).first().click() }, { as: technician, at: () => '/reclaim' }],
   'refrigerants/[designation].vue': [
     { as: manager, at: () => '/refrigerants/R-454B' }, { as: technician, at: () => '/refrigerants/R-407B' },
     { as: technician, at: () => '/refrigerants/R-9999', answers: 404 },

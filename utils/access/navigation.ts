@@ -4,14 +4,20 @@ import type { Access, Role } from './roles'
 /** One word of the main navigation and where it leads; `within` are the screens it stands for, where it is several. */
 export interface NavigationItem { label: string, to: string, within?: readonly NavigationItem[] }
 
-interface Screen { label: string, to: string, permission: Permission }
+interface Screen { label: string, to: string, permission: Permission, within?: readonly Screen[] }
+
+/** What leaves for a reclaimer: the shipments themselves, and what is thought over before. */
+const SHIPPING: readonly Screen[] = [
+  { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
+  { label: 'Worth shipping', to: '/reclaim', permission: 'terms:read' },
+]
 
 const SCREENS: readonly Screen[] = [
   { label: 'Now', to: '/now', permission: 'fleet:read' },
   { label: 'Scan', to: '/scan', permission: 'events:post' },
   { label: 'Fleet', to: '/fleet', permission: 'fleet:read' },
   { label: 'Jobs', to: '/jobs', permission: 'jobs:read' },
-  { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
+  { label: 'Shipments', to: '/shipments', permission: 'shipments:read', within: SHIPPING },
   { label: 'Retests', to: '/retests', permission: 'lots:read' },
   { label: 'Balance', to: '/balance', permission: 'reports:read' },
   { label: 'Refrigerants', to: '/refrigerants', permission: 'refrigerants:read' },
@@ -39,7 +45,8 @@ export function navigationFor(access: Access | null): NavigationItem[] {
 }
 
 function openTo(access: Access | null, screens: readonly Screen[]): NavigationItem[] {
-  return screens.filter(({ permission }) => can(access, permission)).map(({ label, to }) => ({ label, to }))
+  return screens.filter(({ permission }) => can(access, permission))
+    .map(({ label, to, within }) => within ? { label, to, within: openTo(access, within) } : { label, to })
 }
 
 /** Which of several items a path belongs to: the one whose own path is the longest beginning of it. */

@@ -4,6 +4,7 @@ import { condition, refrigerant } from '../custody/schema/parts'
 import { isDay, type Day } from '../quantity/day'
 import type { DatedPrice } from '../reclaim/price'
 import type { ReclaimerTerms } from '../reclaim/terms'
+import type { WorthOffer } from '../reclaim/worth'
 import { SPECS } from '../requalification/specs'
 import { eachOnce, id, line, massReading } from './parts'
 
@@ -75,3 +76,23 @@ export interface TermsAnswer { today: Day, items: TermsRow[] }
 
 /** GET /api/firms/{id}/prices: every row, by refrigerant and condition, the latest first. */
 export interface PricesAnswer { today: Day, items: PriceRow[] }
+
+/** Stock that stands where no truck fetches it: on a van, at a site, or nobody knows where. */
+export interface StockElsewhere { place: Named | null, cylinders: number, netGrams: number }
+
+/** GET /api/reclaim/worth: what each reclaimer would take today of what is in stock and on no list. */
+export interface WorthAnswer {
+  today: Day
+  /** Those in use; null terms where what one takes today is not recorded. */
+  reclaimers: { id: string, name: string, terms: ReclaimerTerms | null }[]
+  /** Shops, each with its racks. */
+  places: Named[]
+  /** Customers whose refrigerant is among it. */
+  owners: Named[]
+  offers: WorthOffer[]
+  elsewhere: StockElsewhere[]
+  /** Cylinders with contents in stock and on no list. */
+  stock: number
+  /** How many of them were looked at, the heaviest first: fewer only in a very large fleet. */
+  lookedAt: number
+}

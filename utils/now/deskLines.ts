@@ -1,18 +1,20 @@
 import { daysBetween, formatNear } from '../quantity/instant'
 import { formatMass } from '../quantity/mass'
+import { formatMoney } from '../reclaim/price'
 import { MATERIALS_OF_TRADE } from '../transport/vanLoad'
 import { cylinderName } from '../shipment/changedLines'
-import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type ShortVanFacts, type VanFacts } from './nowFacts'
+import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type ShortVanFacts, type VanFacts, type WorthFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
 
 /** The lines about what is aboard, full or lacking in the shop, on lists, and without a label. */
 export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
-  const { vans = [], shortVans = [], full = [], fewEmpty = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
+  const { vans = [], shortVans = [], full = [], worthPickUp, fewEmpty = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
   return [
     ...vans.map(van => vanLine(van, vans.length === 1, reader)),
     shortVansLine(shortVans, reader),
     ...full.map(one => fullLine(one, reader)),
+    worthPickUp && worthLine(worthPickUp, reader),
     fewEmptyLine(fewEmpty),
     shipmentsAway && awayLine('shipments-away', shipmentsAway, reader),
     lotsAway && awayLine('lots-away', lotsAway, reader),
@@ -69,6 +71,16 @@ function fullLine({ refrigerant, netGrams, ids, places }: FullFacts, { unit }: N
     sentence: `${ids.length} full, ready to ship.`,
     reason: `${formatMass(netGrams, unit, 'nearest')} of ${refrigerant} in ${listed(places)}.`,
     verb: 'Start a shipment', to: `/shipments?with=${ids.join(',')}`,
+  }
+}
+
+function worthLine({ firm, place, refrigerant, cylinders, netGrams, comesToCents }: WorthFacts, { unit }: NowReader): DraftLine {
+  const what = refrigerant === null ? `${formatMass(netGrams, unit, 'nearest')} in ${counted(cylinders, 'cylinder', 'cylinders')} are` : `${formatMass(netGrams, unit, 'nearest')} of ${refrigerant} are`
+  return {
+    topic: 'worth-pick-up', kind: 'att', number: cylinders,
+    sentence: `${what} worth a pick-up.`,
+    reason: `${firm} would take ${counted(cylinders, 'cylinder', 'cylinders')} from ${place}${comesToCents === null ? '' : `, for ${formatMoney(comesToCents)} after the pick-up`}.`,
+    verb: 'See what is worth it', to: '/reclaim',
   }
 }
 

@@ -18,6 +18,9 @@ export interface CylinderFacts {
 /** Full cylinders of one refrigerant that stand in a shop, on no list yet. */
 export interface FullFacts { refrigerant: string, netGrams: number, ids: string[], places: string[] }
 
+/** What stands in a shop and is worth a pick-up by a reclaimer; `comesToCents` is null where a price or a cost is not recorded. */
+export interface WorthFacts { firm: string, place: string, refrigerant: string | null, cylinders: number, netGrams: number, comesToCents: number | null }
+
 /** Shipments or test lots in one state. `since` is the earliest instant (UTC milliseconds) among them. */
 export interface ListFacts { count: number, id: string, number: number, since: number }
 
@@ -60,6 +63,8 @@ export interface NowFacts {
   lastSoonMonth: Month
   vans?: VanFacts[]
   full?: FullFacts[]
+  /** The best of them. */
+  worthPickUp?: WorthFacts
   /** Cylinders in use that wear no label. */
   unlabelled?: { count: number, first: CylinderRow[] }
   shipmentsAway?: ListFacts

@@ -16,6 +16,7 @@ import { lateFacts } from './lateFacts'
 import { listFacts, shortVanFacts, vanFacts } from './listFacts'
 import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts, scaleFacts } from './recordFacts'
 import { unsignedFacts } from './signatureFacts'
+import { worthFacts } from './worthFacts'
 
 /** What waits for a person, by their roles: nothing of another's is looked up. */
 export async function nowAnswer(db: Database, access: Access, unit: MassUnit, nowMs: number): Promise<NowAnswer> {
@@ -32,10 +33,11 @@ export async function nowAnswer(db: Database, access: Access, unit: MassUnit, no
 async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTopic>, personId: string, nowMs: number): Promise<NowFacts> {
   const bounds = dateBounds(from, nowMs)
   const when = <T>(topic: NowTopic, look: () => Promise<T>) => topics.has(topic) ? look() : undefined
-  const [cylinders, unseen, full, fewEmpty, unlabelled, vans, shortVans, lists, toCountersign, unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed] = await Promise.all([
+  const [cylinders, unseen, full, worthPickUp, fewEmpty, unlabelled, vans, shortVans, lists, toCountersign, unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed] = await Promise.all([
     cylinderFacts(db, fleetQuestions(topics, personId), bounds, nowMs),
     when('not-seen', () => unseenFacts(db, from, bounds, nowMs)),
     when('full', () => fullFacts(db, bounds)),
+    when('worth-pick-up', () => worthFacts(db, nowMs)),
     when('few-empty', () => fewEmptyFacts(db, bounds)),
     when('unlabelled', () => unlabelledFacts(db, nowMs)),
     when('van-load', () => vanFacts(db, from, personId, nowMs)),
@@ -50,7 +52,7 @@ async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTo
     when('mail-failed', () => mailFacts(db)),
   ])
   return {
-    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, fewEmpty, unlabelled, vans, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed,
+    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, worthPickUp, fewEmpty, unlabelled, vans, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed,
     rule: ruleFacts(from, nowMs), scaleChecks: scaleFacts(from, nowMs), ...peopleAndPlaces(from),
   }
 }

@@ -31,6 +31,14 @@ describe('where a person can go', () => {
   })
 })
 
+describe('among the shipments', () => {
+  it.each<Role>(['warehouse', 'manager', 'auditor'])('%s finds what is worth shipping as well', (role) => {
+    const shipments = navigationFor(access(role)).find(({ label }) => label === 'Shipments')
+    expect(shipments?.within?.map(({ label }) => label)).toContain('Worth shipping')
+    expect(itemAt(navigationFor(access(role)), '/reclaim')).toMatchObject({ label: 'Shipments' })
+  })
+})
+
 describe('where a person is', () => {
   const items = [{ label: 'Start', to: '/' }, { label: 'Fleet', to: '/fleet' }, { label: 'Settings', to: '/rules', within: [{ label: 'Rules', to: '/rules' }, { label: 'People', to: '/people' }] }]
 

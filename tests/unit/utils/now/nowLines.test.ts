@@ -95,6 +95,24 @@ describe('what a technician holds', () => {
   })
 })
 
+describe('what is worth a pick-up', () => {
+  const worthPickUp = { firm: 'Halvern', place: 'North shop', refrigerant: 'R-22', cylinders: 2, netGrams: 61_734, comesToCents: 62_945 }
+
+  it('says how much of what, whom it goes to and what it comes to, to who ships', () => {
+    expect(linesFor('warehouse', { worthPickUp })).toMatchObject([{
+      topic: 'worth-pick-up', number: 2, sentence: '136.1\u00A0lb of R-22 are worth a pick-up.',
+      reason: 'Halvern would take 2 cylinders from North shop, for $629.45 after the pick-up.', to: '/reclaim',
+    }])
+    expect(linesFor('technician', { worthPickUp })).toEqual([])
+  })
+
+  it('says no amount where one is not known', () => {
+    expect(linesFor('manager', { worthPickUp: { ...worthPickUp, refrigerant: null, comesToCents: null } })[0]).toMatchObject({
+      sentence: '136.1\u00A0lb in 2 cylinders are worth a pick-up.', reason: 'Halvern would take 2 cylinders from North shop.',
+    })
+  })
+})
+
 describe('what is full in the shop', () => {
   it('is a line for each refrigerant, with its pounds and places, and begins a shipment of just these', () => {
     // 61,734 g = 136.1 lb.

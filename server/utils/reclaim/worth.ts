@@ -1,0 +1,84 @@
+import type { Named } from '~~/utils/custody/cylinderView'
+import type { StockElsewhere, WorthAnswer } from '~~/utils/contract/reclaim'
+import { dayOfInstant } from '~~/utils/quantity/day'
+import { worthOffers, type Candidate, type Taker } from '~~/utils/reclaim/worth'
+import type { Database } from '../database/database'
+import { directory, namesOf, type Directory } from '../directory/directory'
+import { stockLines, type StockLine } from './candidates'
+import { contaminationOf } from './contamination'
+import { pricesOf, termsOn } from './terms'
+
+/** Another process on the same database server may have written: how long an answer may lag. */
+const LONGEST_AGE_MS = 15_000
+/** An answer stands for so many times as long as it took to make: a very large fleet is not reckoned through after every write. */
+const STANDS_FOR = 20
+
+const kept = new WeakMap<Database, { writes: number, at: number, tookMs: number, answer: Promise<WorthAnswer> }>()
+
+/** What each reclaimer would take today of the stock. After something was written it is made anew, in a large fleet some seconds later. */
+export function worthToday(db: Database, nowMs: number): Promise<WorthAnswer> {
+  const known = kept.get(db)
+  const age = nowMs - (known?.at ?? -Infinity)
+  if (known && age >= 0 && age < (known.writes === db.writes() ? LONGEST_AGE_MS : known.tookMs * STANDS_FOR)) return known.answer
+  const begun = performance.now()
+  const made = { writes: db.writes(), at: nowMs, tookMs: 0, answer: worthAnswer(db, nowMs) }
+  kept.set(db, made)
+  made.answer.then(() => {
+    made.tookMs = performance.now() - begun
+  }, () => kept.delete(db))
+  return made.answer
+}
+
+async function worthAnswer(db: Database, nowMs: number): Promise<WorthAnswer> {
+  const from = await directory(db)
+  const today = dayOfInstant(nowMs, from.timeZone)
+  const { lines, stock } = await stockLines(db, from, nowMs)
+  const { firm: firmName, place: placeName } = namesOf(from)
+  const reclaimers = await Promise.all([...from.firms.values()].filter(({ kind, active }) => kind === 'reclaimer' && active)
+    .sort((a, b) => a.name.localeCompare(b.name, 'en'))
+    .map(async ({ id, name }) => ({ id, name, terms: await termsOn(db, id, today) })))
+  const takers = await Promise.all(reclaimers.flatMap(({ id, terms }) => terms ? [takerOf(db, id, terms)] : []))
+  const candidates = await withContamination(db, inShops(lines, from), takers)
+  return {
+    today, stock, lookedAt: lines.length, reclaimers,
+    places: named(candidates.map(({ placeId }) => placeId), placeName),
+    owners: named(candidates.flatMap(({ ownerIds }) => ownerIds.filter(id => id !== null)), firmName),
+    offers: worthOffers(candidates, takers, today),
+    elsewhere: elsewhereOf(lines, from, placeName),
+  }
+}
+
+async function takerOf(db: Database, id: string, terms: Taker['terms']): Promise<Taker> {
+  return { id, terms, prices: await pricesOf(db, id) }
+}
+
+function inShops(lines: readonly StockLine[], from: Directory): Candidate[] {
+  return lines.flatMap(({ candidate, placeId }) => placeId !== null && isShop(placeId, from) ? [{ ...candidate, placeId }] : [])
+}
+
+function isShop(placeId: string, from: Directory): boolean {
+  const kind = from.places.get(placeId)?.kind
+  // A rack within nothing is a shop of its own.
+  return kind === 'shop' || kind === 'rack'
+}
+
+/** Looked up only where a limit asks for it, and of what is not called clean: a clean verdict is taken at its word. */
+async function withContamination(db: Database, candidates: readonly Candidate[], takers: readonly Taker[]): Promise<Candidate[]> {
+  if (takers.every(({ terms }) => terms.mostContaminationPercent === null)) return [...candidates]
+  const shares = await contaminationOf(db, candidates.filter(({ condition }) => condition !== 'clean').map(({ id }) => id))
+  return candidates.map(candidate => ({ ...candidate, contaminationPercent: shares.get(candidate.id) }))
+}
+
+function elsewhereOf(lines: readonly StockLine[], from: Directory, placeName: (id: string) => Named): StockElsewhere[] {
+  const sums = new Map<string | null, StockElsewhere>()
+  for (const { placeId, candidate } of lines) {
+    if (placeId !== null && isShop(placeId, from)) continue
+    const sum = sums.get(placeId) ?? { place: placeId === null ? null : placeName(placeId), cylinders: 0, netGrams: 0 }
+    sums.set(placeId, { ...sum, cylinders: sum.cylinders + 1, netGrams: sum.netGrams + (candidate.netGrams ?? 0) })
+  }
+  return [...sums.values()].sort((a, b) => b.netGrams - a.netGrams)
+}
+
+function named(ids: readonly string[], name: (id: string) => Named): Named[] {
+  return [...new Set(ids)].map(name).sort((a, b) => a.name.localeCompare(b.name, 'en'))
+}
