@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import type { CustodyLogAnswer, CylinderRow, FleetAnswer } from '../../utils/contract/custody'
+import type { NewDockLinkAnswer } from '../../utils/contract/dock'
 import type { MintAnswer } from '../../utils/contract/labels'
 import type { FirmsAnswer, PlacesAnswer } from '../../utils/contract/places'
 import type { ShipmentsAnswer } from '../../utils/contract/shipments'
@@ -24,6 +25,8 @@ export interface DemoFleet {
   event: string
   shipments: Record<'draft' | 'dispatched' | 'settled', string>
   lots: Record<Exclude<TestLotState, 'cancelled'>, string>
+  /** Tokens of links to the dock: of a shipment on its way, and of one that is settled. */
+  docks: Record<'dispatched' | 'settled', string>
   /** The technician's van. */
   van: string
   reclaimer: string
@@ -55,6 +58,7 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
   const van = places.find(({ technicianName }) => technicianName === 'Dayo Okafor')!.id
   const { items: [reclaimer] } = (await manager.get<FirmsAnswer>('/api/firms?kind=reclaimer')).body
   await made(admin, '/api/people', INVITED)
+  const left = await firstOfEach<ShipmentsAnswer, 'dispatched' | 'settled'>(manager, '/api/shipments', ['dispatched', 'settled'])
   return {
     people, van, reclaimer: reclaimer!.id,
     codes: {
@@ -66,8 +70,9 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
     event: events[0]!.id,
     shipments: {
       draft: await draft(manager, '/api/shipments', 'reclaimer'),
-      ...await firstOfEach<ShipmentsAnswer, 'dispatched' | 'settled'>(manager, '/api/shipments', ['dispatched', 'settled']),
+      ...left,
     },
+    docks: { dispatched: await dockToken(manager, left.dispatched), settled: await dockToken(manager, left.settled) },
     lots: {
       draft: await draft(manager, '/api/test-lots', 'requalifier'),
       sent: await sentLot(manager),
@@ -80,6 +85,12 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
     invitation: await invitationToken({ client: admin }, INVITED.email),
     setUpToken,
   }
+}
+
+/** What opens a shipment to its dock. */
+async function dockToken(client: TestClient, shipmentId: string): Promise<string> {
+  const { url } = await made<NewDockLinkAnswer>(client, `/api/shipments/${shipmentId}/dock-links`, { id: randomUUID(), forWhom: 'Dock 2' })
+  return new URL(url).pathname.slice('/d/'.length)
 }
 
 /** A new draft with the first cylinders of the fleet that may leave with it. */

@@ -86,8 +86,8 @@ export interface DockCylinder {
   specification: string | null
   refrigerant: string | null
   condition: string
-  /** Our gross weight, and by how much theirs differs beyond the accuracy of both scales; null until theirs is entered. */
-  ours: { gross: MassReading, differenceGrams: number | null } | null
+  /** Our gross weight as it left; null until theirs is entered. */
+  ourGross: MassReading | null
 }
 
 /** GET /api/dock/{token}: the one shipment that the link opens. */

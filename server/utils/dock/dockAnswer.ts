@@ -1,8 +1,6 @@
 import type { DockAnswer, DockCylinder } from '../../../utils/contract/dock'
-import type { ShipmentLine, ShipmentState } from '../../../utils/contract/shipments'
-import { dockLines, type DockLine } from '../../../utils/dock/dockLines'
-import { readingGrams } from '../../../utils/quantity/mass'
-import { settlementDifferenceGrams } from '../../../utils/shipment/settlementDifference'
+import type { ShipmentState } from '../../../utils/contract/shipments'
+import { dockLines } from '../../../utils/dock/dockLines'
 import { cylinderRows } from '../custody/fleet'
 import type { Database } from '../database/database'
 import { ownFirm } from '../firm'
@@ -45,14 +43,10 @@ export async function dockAnswer(db: Database, link: DockLinkRow, now: number): 
       if (!row || !sent) return []
       return [{
         cylinderId, serial: row.serial, labelCode: row.labelCode, specification: row.spec,
-        refrigerant: sent.refrigerant, condition: sent.condition, ours: oursBeside(sent, said.get(cylinderId)),
+        refrigerant: sent.refrigerant, condition: sent.condition,
+        ourGross: said.get(cylinderId)?.theirGross ? sent.gross : null,
       }]
     }),
     entries,
   }
-}
-
-function oursBeside(sent: NonNullable<ShipmentLine['sent']>, line: DockLine | undefined): DockCylinder['ours'] {
-  if (!line?.theirGross) return null
-  return { gross: sent.gross, differenceGrams: settlementDifferenceGrams(sent.grossGrams, readingGrams(line.theirGross), sent.grossGrams) }
 }

@@ -1,0 +1,170 @@
+import { useOnline } from '@vueuse/core'
+import { v7 as uuidv7 } from 'uuid'
+import { answerWithin } from '~~/composables/answerWithin'
+import { deviceNow } from '~~/composables/deviceNow'
+import { dockBox, type KeptDockEntry, type KeptDockPhoto } from '~~/composables/dockBox'
+import { sendDock, type DockSent } from '~~/composables/dockSending'
+import { problemOf, useApi } from '~~/composables/useApi'
+import { useRefreshOnFocus } from '~~/composables/useRefreshOnFocus'
+import type { DockAnswer, DockEntriesAnswer } from '~~/utils/contract/dock'
+import { dockLines } from '~~/utils/dock/dockLines'
+import type { DockEntry, DockKind, DockSaid, LinkedDockEntry } from '~~/utils/dock/entry'
+import { readToken } from '~~/utils/dock/linkToken'
+import { waitAfter } from '~~/utils/outbox/backOff'
+
+/** A photo that takes longer to arrive is tried again later. Units: milliseconds. Our choice. */
+const PHOTO_WITHIN_MS = 120_000
+
+/** Whether the link shows its shipment, shows nothing, or could not be asked yet. */
+export type DockPhase = 'loading' | 'open' | 'nothing' | 'unreached'
+
+/**
+ * One shipment over its dock link: what is said of it is kept on this phone first and sent when the server is reached.
+ *
+ * Shape: `say` answers an entry's id once it is kept here. Errors of `say`: where the phone keeps nothing, an error in words.
+ */
+export function useDock(token: string) {
+  const api = useApi()
+  const online = useOnline()
+  const path = `/api/dock/${encodeURIComponent(token)}`
+  const linkId = readToken(token)?.linkId ?? ''
+
+  const phase = ref<DockPhase>('loading')
+  const dock = shallowRef<DockAnswer | null>(null)
+  const kept = shallowRef<KeptDockEntry[]>([])
+  const photos = shallowRef<KeptDockPhoto[]>([])
+  const unreached = ref(false)
+
+  const waiting = computed(() => kept.value.filter(({ problem }) => problem === null))
+  const refused = computed(() => kept.value.filter(({ problem }) => problem !== null))
+  const entries = computed<LinkedDockEntry[]>(() => {
+    const recorded = dock.value?.entries ?? []
+    const known = new Set(recorded.map(({ id }) => id))
+    return [...recorded, ...waiting.value.filter(({ id }) => !known.has(id)).map(({ entry }) => ({ ...entry, linkId }))]
+  })
+  const lines = computed(() => dockLines(entries.value))
+  const photosToGo = computed(() => photos.value.filter(({ problem }) => problem === null))
+  const isOwn = (entry: LinkedDockEntry) => entry.linkId === linkId
+
+  const box = dockBox()
+  let sending: Promise<void> | null = null
+  let isAskedAgain = false
+  let isLeft = false
+  let timer: ReturnType<typeof setTimeout> | undefined
+  let failures = 0
+
+  async function load(): Promise<void> {
+    const copy = await box.copy(linkId).catch(() => undefined)
+    if (copy && dock.value === null) show(copy.answer)
+    await reread()
+    await refresh()
+    void send()
+  }
+
+  async function refresh(): Promise<void> {
+    try {
+      await took(await api.getFresh<DockAnswer>(path))
+      unreached.value = false
+    }
+    catch (error) {
+      if (problemOf(error).status === 404) return end()
+      unreached.value = true
+      if (dock.value === null) phase.value = 'unreached'
+    }
+  }
+
+  function show(answer: DockAnswer) {
+    dock.value = answer
+    phase.value = 'open'
+  }
+
+  async function took(answer: DockAnswer): Promise<void> {
+    // A network that wants its guests to sign in answers with a page of its own.
+    if (!Array.isArray(Object(answer).cylinders)) throw new Error('No answer of ours')
+    show(answer)
+    await box.keepCopy({ linkId, shipmentId: answer.shipment.id, answer }).catch(() => {})
+    await reread()
+  }
+
+  /** The link opens nothing any more: the shipment goes from this phone, what was not sent stays. */
+  async function end(): Promise<void> {
+    phase.value = 'nothing'
+    await reread()
+    dock.value = null
+    await box.forgetCopy(linkId).catch(() => {})
+  }
+
+  async function reread(): Promise<void> {
+    const shipmentId = dock.value?.shipment.id
+    if (shipmentId === undefined) return
+    ;[kept.value, photos.value] = await Promise.all([box.entries(shipmentId), box.photos(shipmentId)]).catch(() => [[], []])
+  }
+
+  /** Keeps an entry, with photos that it names, and sends it. */
+  async function say<Kind extends DockKind>(kind: Kind, said: DockSaid[Kind], by: { name: string, photos: KeptDockPhoto['bytes'][] }): Promise<string> {
+    const shipmentId = dock.value!.shipment.id
+    const [id, at] = [uuidv7(), deviceNow()]
+    const taken = ('photoIds' in said ? by.photos : []).map(bytes => ({ id: uuidv7(), shipmentId, entryId: id, takenAt: at, bytes, problem: null }))
+    // As plain data: a store takes nothing that a screen still watches.
+    const plain = JSON.parse(JSON.stringify(said)) as DockSaid[Kind]
+    const entry = { id, kind, name: by.name, at, said: 'photoIds' in plain ? { ...plain, photoIds: taken.map(photo => photo.id) } : plain } as DockEntry
+    try {
+      await box.put({ id, shipmentId, entry, problem: null }, taken)
+    }
+    catch {
+      throw new Error('This phone could not keep it: its storage did not answer. Nothing was said; try again.')
+    }
+    await reread()
+    void send()
+    return id
+  }
+
+  async function drop(id: string): Promise<void> {
+    await box.drop(id)
+    await reread()
+  }
+
+  /** Sends what waits, one sending at a time; what is not reached is tried again by itself. */
+  function send(): Promise<void> {
+    isAskedAgain = sending !== null
+    sending ??= sendNow().finally(() => {
+      sending = null
+      if (isAskedAgain && !isLeft) void send()
+    })
+    return sending
+  }
+
+  async function sendNow(): Promise<void> {
+    clearTimeout(timer)
+    const shipmentId = dock.value?.shipment.id
+    if (shipmentId === undefined) return
+    // Where the phone's storage fails there is nothing that could be sent.
+    const ended: DockSent = await sendDock(box, shipmentId, { post, postPhoto, answered: took }).catch(() => 'done')
+    await reread()
+    unreached.value = ended === 'unreached'
+    if (ended === 'ended') return end()
+    failures = ended === 'done' ? 0 : failures + 1
+    if (ended === 'unreached' && !isLeft) timer = setTimeout(() => void send(), waitAfter(failures))
+  }
+
+  const post = (going: DockEntry[]) =>
+    api.post<DockEntriesAnswer>(`${path}/shipments/${dock.value!.shipment.id}/entries`, { deviceNow: deviceNow(), entries: going })
+
+  function postPhoto({ id, takenAt, bytes }: KeptDockPhoto): Promise<unknown> {
+    const form = new FormData()
+    for (const [name, value] of Object.entries({ id, takenAt, subject: 'damage' })) form.append(name, value)
+    form.append('file', new Blob([bytes]), 'photo')
+    return answerWithin(PHOTO_WITHIN_MS, signal => $fetch<unknown>(`${path}/photos`, { method: 'POST', body: form, retry: false, signal }))
+  }
+
+  onMounted(() => void load())
+  watch(online, isOnline => isOnline && void load())
+  useRefreshOnFocus(() => void refresh().then(send))
+  onBeforeUnmount(() => {
+    clearTimeout(timer)
+    isLeft = true
+    void Promise.resolve(sending).finally(() => box.close())
+  })
+
+  return { phase, dock, entries, lines, waiting, refused, photosToGo, unreached, isOwn, say, drop, send, load }
+}
