@@ -4,8 +4,10 @@ import type { DockLine, UnexpectedCylinder } from '../dock/dockLines'
 import type { SettlementCredit } from '../settlement/credit'
 import { DISPUTE_OUTCOMES, DISPUTE_SUBJECTS, type DisputeOutcome, type DisputeSubject } from '../settlement/dispute'
 import { LINE_OUTCOMES, type LineFigures, type SentFigures, type StatementFigures } from '../settlement/figures'
+import { LARGEST_STATEMENT } from '../settlement/fileKinds'
 import type { FourWeights } from '../settlement/fourWeights'
 import type { StillMissing } from '../settlement/missing'
+import type { LineMixingCost, MixingCost } from '../settlement/mixingCost'
 import { STATEMENT_COLUMNS } from '../settlement/statementColumns'
 import type { StatementPreview } from '../settlement/statementCsv'
 import { eachOnce, id, line, massReading } from './parts'
@@ -61,9 +63,6 @@ export type Settling = z.output<typeof settleBody>
 export const closeBody = z.strictObject(act)
 export type Closing = z.output<typeof closeBody>
 
-/** A statement as a file is small: two hundred lines of text. */
-export const LARGEST_STATEMENT = 512 * 1024
-
 const statementFile = z.custom<Uint8Array>(value => value instanceof Uint8Array && value.length > 0 && value.length <= LARGEST_STATEMENT, `must be a file of at most ${LARGEST_STATEMENT / 1024} KiB`)
   .meta({ type: 'string', contentEncoding: 'binary' })
 const columnChoice = z.string().max(2_000).transform((text, context) => {
@@ -91,6 +90,10 @@ export const csvTakeOverForm = csvPreviewForm.extend({
   previewHash: z.string().regex(/^[0-9a-f]{64}$/, 'must be the hash of a preview'),
 })
 export type CsvTakeOver = z.output<typeof csvTakeOverForm>
+
+/** The query of GET /api/shipments/{id}/settlement/csv: `empty` gives the table that a reclaimer fills in. */
+export const settlementCsvQuery = z.strictObject({ unit: z.enum(['lb', 'kg']).default('lb'), empty: z.enum(['yes', 'no']).default('no') })
+export type SettlementCsvQuery = z.output<typeof settlementCsvQuery>
 
 /** What a statement would change; `hash` stands for all that is shown. */
 export interface CsvPreviewAnswer extends StatementPreview { hash: string, delimiter: 'comma' | 'semicolon' | 'tab' }
@@ -151,6 +154,15 @@ export interface SettlementLine {
   photoIds: string[]
   /** When it came back; null where it did not. */
   returnedAt: string | null
+}
+
+/** The query of GET /api/reclaim/mixing-cost. */
+export const mixingCostQuery = z.strictObject({ year: z.coerce.number().int().min(2000).max(2199) })
+
+/** GET /api/reclaim/mixing-cost: the mixed contents that were settled in a year. */
+export interface MixingCostAnswer extends Omit<MixingCost, 'lines'> {
+  year: number
+  lines: (LineMixingCost & { shipmentNumber: number, serial: string | null })[]
 }
 
 /** GET /api/shipments/{id}/settlement. */

@@ -3,6 +3,9 @@ import { pictureKind } from '../photo/pictureKind'
 /** The largest statement or certificate that is taken, in bytes. */
 export const LARGEST_FILE = 10 * 1024 * 1024
 
+/** The largest table of values that is read, in bytes: two hundred lines of text are far less. */
+export const LARGEST_STATEMENT = 512 * 1024
+
 /** The kinds of file that a statement or certificate comes as. */
 export type FileKind = 'pdf' | 'jpeg' | 'png' | 'csv'
 

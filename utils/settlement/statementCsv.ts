@@ -77,12 +77,16 @@ export function withChanges(figures: LineFigures, changes: readonly FigureChange
   return { ...figures, ...Object.fromEntries(changes.map(({ field, to }) => [field, to])) }
 }
 
-/** What a row says otherwise than the line has it. A line of which the statement accepts a net was taken over, unless a person said something else. */
-function changesOf(before: LineFigures, row: RowFigures): FigureChange[] {
-  const after: LineFigures = { ...before, ...row, outcome: before.outcome ?? (row.acceptedNet ? 'taken-over' : null) }
+/** The figures in which a line differs from what it was. */
+export function changesOfLine(before: LineFigures, after: LineFigures): FigureChange[] {
   return (Object.keys(after) as (keyof LineFigures)[])
     .filter(field => !isSame(before[field], after[field]))
     .map(field => ({ field, from: before[field], to: after[field] }))
+}
+
+/** A line of which the statement accepts a net was taken over, unless a person said something else. */
+function changesOf(before: LineFigures, row: RowFigures): FigureChange[] {
+  return changesOfLine(before, { ...before, ...row, outcome: before.outcome ?? (row.acceptedNet ? 'taken-over' : null) })
 }
 
 // Readings and rates are plain records with their keys in one order only by chance.

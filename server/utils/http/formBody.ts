@@ -1,10 +1,7 @@
 import { getRequestHeader, type H3Event } from 'h3'
-import { LARGEST_PHOTO } from '../../../utils/photo/limits'
 import { boundedBody } from './boundedBody'
+import { largestForm } from './formLimits'
 import { problem } from './problem'
-
-/** The largest form that is read, in bytes: one photo, and some room for the fields beside it. */
-export const LARGEST_FORM = LARGEST_PHOTO + 64 * 1024
 
 /** Whether a content type is a form that can hold a file. */
 export function isForm(contentType: string | undefined): boolean {
@@ -19,8 +16,9 @@ export function isForm(contentType: string | undefined): boolean {
  */
 export async function readFormBody(event: H3Event): Promise<Record<string, string | Uint8Array>> {
   const type = getRequestHeader(event, 'content-type')
-  if (!isForm(type)) throw problem(415, 'Not a form', 'A photo must be sent as multipart/form-data.')
-  const form = await parsed(await boundedBody(event, LARGEST_FORM), type!)
+  const largest = largestForm(event.path)
+  if (largest === null || !isForm(type)) throw problem(415, 'Not a form', 'A file must be sent as multipart/form-data.')
+  const form = await parsed(await boundedBody(event, largest), type!)
   const fields = new Map<string, string | Uint8Array>()
   for (const [name, value] of form) {
     if (fields.has(name)) throw problem(400, 'Malformed', 'The body does not fit.', [{ path: name, message: 'stands more than once' }])

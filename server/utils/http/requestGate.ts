@@ -1,12 +1,10 @@
 import { isTooLarge, tooLarge } from './boundedBody'
-import { isForm, LARGEST_FORM } from './formBody'
+import { isForm } from './formBody'
+import { largestForm } from './formLimits'
 import { isJson, LARGEST_BODY } from './jsonBody'
 import { problem, type Problem } from './problem'
 
 const SAFE_METHODS = new Set(['GET', 'HEAD', 'OPTIONS'])
-
-/** The routes that take a photo, and so a form in place of JSON. */
-const TAKES_FORM = /^\/api\/(uploads|dock\/[^/?]+\/photos)(\?|$)/
 
 /** What the gate looks at; header names in lower case. */
 export interface GateRequest {
@@ -27,9 +25,10 @@ export function refusalAtGate({ method, path, headers }: GateRequest): Problem |
   if (!path.startsWith('/api/')) return problem(404, 'Not known', 'There is nothing here.')
   if (!hasBody(headers)) return null
   const [length, type] = [one(headers['content-length']), one(headers['content-type'])]
-  if (TAKES_FORM.test(path)) {
-    if (isTooLarge(length, LARGEST_FORM)) return tooLarge(LARGEST_FORM)
-    return isForm(type) ? null : problem(415, 'Not a form', 'A photo must be sent as multipart/form-data.')
+  const largest = largestForm(path)
+  if (largest !== null) {
+    if (isTooLarge(length, largest)) return tooLarge(largest)
+    return isForm(type) ? null : problem(415, 'Not a form', 'A file must be sent as multipart/form-data.')
   }
   if (isTooLarge(length, LARGEST_BODY)) return tooLarge(LARGEST_BODY)
   if (!isJson(type)) return problem(415, 'Not JSON', 'The body must be sent as application/json.')

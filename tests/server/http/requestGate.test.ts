@@ -60,6 +60,15 @@ describe('the gate', () => {
     expect(status('POST', { ...form, 'content-length': '20' }, '/api/uploadsx')).toBe(415)
   })
 
+  it('takes a form where a statement is sent, each of its own size', () => {
+    const form = { ...OWN, 'content-type': 'multipart/form-data; boundary=x' }
+    const at = (path: string, length: number) => status('POST', { ...form, 'content-length': String(length) }, `/api/shipments/1/${path}`)
+    // 10 MiB, and 512 KiB, each with 64 KiB for what stands beside it.
+    expect([at('files', 10_551_296), at('files', 10_551_297)]).toEqual([null, 413])
+    expect([at('settlement/csv-preview', 589_824), at('settlement/csv-preview', 589_825)]).toEqual([null, 413])
+    expect([at('settlement/csv-take-over', 589_824), at('settlement/lines', 20), at('files/2/lines', 20)]).toEqual([null, 415, 415])
+  })
+
   it('lets no page be posted to', () => {
     expect(status('POST', { ...OWN, ...JSON_BODY }, '/sign-in')).toBe(404)
   })
