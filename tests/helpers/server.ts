@@ -8,6 +8,8 @@ import { getPort } from 'get-port-please'
 const BUILT = resolve('.output/server/index.mjs')
 const START_PATIENCE_MS = 60_000
 const SESSION_PASSWORD = 'b7e1c94a5d20f3886a4e0c17d95f2b63'
+/** In use one password takes most of a second of a core, which every person of every test would pay. */
+const CHEAP_PASSWORDS = { NUXT_HASH_SCRYPT_COST: '1024' }
 
 /** A built server that runs for a test, with a database of its own. */
 export interface TestServer {
@@ -33,14 +35,16 @@ export interface StartOptions {
   folder?: string
   /** A command that it is started by, with its arguments: one that takes rights away. */
   by?: readonly string[]
+  /** Passwords cost what they cost in use: for tests of that cost, and of the time that it takes. */
+  dearPasswords?: boolean
 }
 
 /** Starts the built server on a free port and waits until it answers. */
-export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir(), 'collarbook-')), by = [] }: StartOptions = {}): Promise<TestServer> {
+export async function startServer({ env = {}, folder = mkdtempSync(join(tmpdir(), 'collarbook-')), by = [], dearPasswords = false }: StartOptions = {}): Promise<TestServer> {
   const port = await getPort({ host: '127.0.0.1', random: true })
   const baseUrl = `http://localhost:${port}`
   const databaseFile = join(folder, 'collarbook.db')
-  const settings = serverSettings({ PORT: String(port), HOST: 'localhost', DATABASE_URL: `file:${databaseFile}`, PUBLIC_URL: baseUrl, ...env })
+  const settings = serverSettings({ PORT: String(port), HOST: 'localhost', DATABASE_URL: `file:${databaseFile}`, PUBLIC_URL: baseUrl, ...(!dearPasswords && CHEAP_PASSWORDS), ...env })
   let printed = ''
   let child: ChildProcess
 

@@ -12,7 +12,7 @@ let tech: Member
 
 beforeAll(async () => {
   // Callers are told apart by what our proxy says of them, so that one test does not slow the next.
-  server = await startServer({ env: { PROXY_HOPS: '1' } })
+  server = await startServer({ env: { PROXY_HOPS: '1' }, dearPasswords: true })
   admin = await setUpFirm(server)
   tech = await addMember(admin, 'Tess', ['technician'])
 })

@@ -8,7 +8,7 @@ import { refusedStart, startServer, type TestServer } from '../helpers/server'
 let server: TestServer
 
 beforeAll(async () => {
-  server = await startServer()
+  server = await startServer({ dearPasswords: true })
 })
 afterAll(() => server?.stop())
 
