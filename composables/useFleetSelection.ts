@@ -5,7 +5,7 @@ import type { Place } from '~~/utils/contract/places'
 import { selectionOffer, selectionPath, SELECTION_ACTS, stepPath, type SelectionAct } from '~~/utils/fleet/selectionAct'
 import { selectionSum } from '~~/utils/fleet/selectionSum'
 
-const PERMISSION: Record<SelectionAct, Permission> = { test: 'lots:prepare', ship: 'shipments:prepare', label: 'labels:mint', move: 'events:post' }
+const PERMISSION: Record<SelectionAct, Permission> = { test: 'lots:prepare', ship: 'shipments:prepare', label: 'labels:mint', move: 'events:post', plan: 'shipments:prepare' }
 
 /** The cylinders chosen in the fleet, over several pages of it: what they come to, and what to do with them. */
 export function useFleetSelection(rows: () => readonly CylinderRow[], places: () => readonly Place[]) {

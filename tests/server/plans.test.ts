@@ -111,7 +111,7 @@ describe('a plan of what to bring together', () => {
     await expect(made({ ...question, useEmpty: true } as PlanQuestion)).rejects.toMatchObject({ details: { status: 409 } })
     await expect(made(consolidation([randomUUID()]))).rejects.toMatchObject({ details: { status: 422 } })
     await expect(details(randomUUID())).rejects.toMatchObject({ details: { status: 404 } })
-    const { items } = await listPlans(log.db, Date.now())
+    const { items } = await listPlans(log.db, log.technician, Date.now())
     expect(items.map(({ number }) => number)).toEqual(items.map((_, index) => items.length - index))
   })
 

@@ -87,7 +87,10 @@ export interface PlanTask {
   kind: 'transfer' | 'ship'
   fromId: string
   toId: string | null
+  /** By the log when the plan was made; null where it is shipped as it is. */
   netGrams: number | null
+  /** Whatever it weighs then: only of what is parted the grams count. */
+  isAll: boolean
   done: { eventId: string, at: string, grams: number | null, balance: PairBalance | null } | null
 }
 

@@ -3,12 +3,12 @@ import { cylinderPath } from './cylinderPath'
 import { nextStep } from './nextStep'
 
 /** What is done with several chosen cylinders at once; of two that as many ask for, the earlier one comes first. */
-export const SELECTION_ACTS = ['test', 'ship', 'label', 'move'] as const
+export const SELECTION_ACTS = ['test', 'ship', 'label', 'move', 'plan'] as const
 export type SelectionAct = (typeof SELECTION_ACTS)[number]
 
 /** What each is called on its button. */
 export const SELECTION_WORDS: Record<SelectionAct, string> = {
-  test: 'Prepare a test lot with these', ship: 'Prepare a shipment with these', label: 'Print labels', move: 'Move these',
+  test: 'Prepare a test lot with these', ship: 'Prepare a shipment with these', label: 'Print labels', move: 'Move these', plan: 'Plan with these',
 }
 
 const ACT_OF_SCREEN = { 'test-lot': 'test', 'shipment': 'ship', 'label': 'label', 'cylinder': null } as const
@@ -40,6 +40,7 @@ export function selectionPath(act: SelectionAct, ids: readonly string[]): string
     case 'ship': return `/shipments?with=${list}`
     case 'label': return `/labels?cylinders=${list}`
     case 'move': return `/batch?act=move&expect=${list}`
+    case 'plan': return `/plans?with=${list}`
   }
 }
 

@@ -17,6 +17,9 @@ export interface Consolidation {
 
 export const NOTHING_TO_FREE: Consolidation = { transfers: [], freed: 0, mostFreed: 0, fewestTransfers: 0 }
 
+/** With more ways than these (70 cylinders of one lot) a solver is still reading its program when its time is over. */
+const MOST_WAYS = 5_000
+
 /** How the seconds for one plan are shared among its steps, the last of which has what is left. */
 const SHARES = { freed: 0.2, emptied: 0.15, whole: 0.3, parted: 0.25, grams: 0.1 }
 
@@ -27,7 +30,8 @@ const SHARES = { freed: 0.2, emptied: 0.15, whole: 0.3, parted: 0.25, grams: 0.1
  * Rounding: whole grams throughout. Errors: where a solver's answer does not hold against the problem.
  */
 export async function consolidate(problem: TransferProblem, solve: Solve, seconds: number): Promise<Consolidation> {
-  if (waysOf(problem).length === 0) return NOTHING_TO_FREE
+  const ways = waysOf(problem).length
+  if (ways === 0) return NOTHING_TO_FREE
   const ask = (program: Program, share: keyof typeof SHARES) => solve(programText(program), { seconds: seconds * SHARES[share] })
 
   const most = await ask(mostFreed(problem), 'freed')
@@ -39,6 +43,8 @@ export async function consolidate(problem: TransferProblem, solve: Solve, second
   const atLeast = fewest.status === 'optimal' ? choiceOf(problem, fewest).emptied.length : first.freed
   const found = [first.transfers, pouredBy(problem, choiceOf(problem, fewest))]
   const answer = (): Consolidation => ({ ...bestOf(problem, found), mostFreed: bound, fewestTransfers: atLeast })
+
+  if (ways > MOST_WAYS) return answer()
 
   const whole = await ask(eachWhole(problem, first.freed, atLeast), 'whole')
   found.push(byWays(problem, whole))

@@ -1,5 +1,6 @@
 import type { InStatement } from '@libsql/client'
 import { v7 as uuid } from 'uuid'
+import { can } from '../../../utils/access/permissions'
 import type { Access } from '../../../utils/access/roles'
 import type { PlanAnswer, PlanMade, PlanQuestion } from '../../../utils/contract/plans'
 import { consolidate } from '../../../utils/plan/consolidate'
@@ -28,9 +29,10 @@ let atWork = 0
  * Works a plan out and keeps it as steps to do; where there is nothing to do it only says why. With an id of the sender's
  * own it may be sent twice.
  *
- * Errors: 422 as {@link chosenIds}; 409 where a cylinder of it came onto another plan meanwhile; 503 where others are being worked out.
+ * Errors: 403; 422 as {@link chosenIds}; 409 where a cylinder of it came onto another plan meanwhile; 503 where others are being worked out.
  */
 export async function makePlan(db: Database, question: PlanQuestion, access: Access, nowMs: number): Promise<PlanMade> {
+  if (question.kind === 'shipping' && !can(access, 'terms:read')) throw problem(403, 'Not yours to plan', 'It takes what reclaimers pay, which is not for this role.')
   const known = question.id === undefined ? null : await sameAs(db, question, question.id, access)
   if (known) return known
   if (atWork >= MOST_AT_ONCE) throw problem(503, 'Other plans are being worked out', 'Try again in some seconds.', undefined, { headers: { 'Retry-After': '10' } })

@@ -1,4 +1,5 @@
 import type { InValue, Row } from '@libsql/client'
+import { can } from '../../../utils/access/permissions'
 import type { Access } from '../../../utils/access/roles'
 import type { CylinderTasksAnswer, PlanAnswer, PlanDetails, PlanLine, PlanQuestion, PlansAnswer, PlanTask } from '../../../utils/contract/plans'
 import type { Half } from '../../../utils/custody/half'
@@ -21,14 +22,17 @@ const SELECT_PLANS = `SELECT p.id, p.number, p.kind, p.state, p.made_at, people.
     (SELECT count(*) FROM plan_tasks t WHERE t.plan_id = p.id) AS tasks, (SELECT count(*) FROM plan_tasks t WHERE t.plan_id = p.id AND t.done_event_id IS NOT NULL) AS tasks_done
   FROM plans p LEFT JOIN people ON people.id = p.made_by`
 
-/** The plans, the newest first, each with how far it has come. */
-export async function listPlans(db: Database, nowMs: number): Promise<PlansAnswer> {
+/** The plans, the newest first, each with how far it has come. What to ship is for those who may know what reclaimers pay. */
+export async function listPlans(db: Database, access: Access, nowMs: number): Promise<PlansAnswer> {
   await followPlans(db, nowMs)
-  const { rows } = await db.readClient.execute({ sql: `${SELECT_PLANS} ORDER BY p.number DESC LIMIT ?`, args: [MOST_LISTED] })
+  const kinds = can(access, 'terms:read') ? ['consolidation', 'shipping'] : ['consolidation']
+  const { rows } = await db.readClient.execute({
+    sql: `${SELECT_PLANS} WHERE p.kind IN (SELECT value FROM json_each(?)) ORDER BY p.number DESC LIMIT ?`, args: [JSON.stringify(kinds), MOST_LISTED],
+  })
   return { items: rows.map(lineOf) }
 }
 
-/** One plan with its steps, what the log says of each, and why what is left may not fit any more. Errors: 404. */
+/** One plan with its steps, what the log says of each, and why what is left may not fit any more. Errors: 403, 404. */
 export async function planDetails(db: Database, id: string, access: Access, nowMs: number): Promise<PlanDetails> {
   await followPlans(db, nowMs)
   const [plans, kept] = await db.readClient.batch([
@@ -38,6 +42,7 @@ export async function planDetails(db: Database, id: string, access: Access, nowM
   const [row] = plans!.rows
   if (!row) throw problem(404, 'No such plan', 'It may have been written wrongly.')
   const line = lineOf(row)
+  if (line.kind === 'shipping' && !can(access, 'terms:read')) throw problem(403, 'Not yours to read', 'What reclaimers pay is read by the warehouse, the manager and the auditor.')
   const question = JSON.parse(kept!.rows[0]![0] as string) as PlanQuestion
   const answer = JSON.parse(kept!.rows[0]![1] as string) as PlanAnswer
   const steps = await stepsWhere(db, 't.plan_id = ?', [id])
@@ -86,7 +91,10 @@ async function faultsOf(
 
 async function stepsWhere(db: Database, where: string, args: InValue[]): Promise<(PlanTask & { planId: string })[]> {
   const { rows } = await db.readClient.execute({
-    sql: `SELECT t.plan_id, t.position, t.kind, t.from_cylinder_id, t.to_cylinder_id, t.net_grams, t.done_event_id, t.done_at FROM plan_tasks t WHERE ${where} ORDER BY t.plan_id, t.position`,
+    sql: `SELECT t.plan_id, t.position, t.kind, t.from_cylinder_id, t.to_cylinder_id, t.net_grams, t.done_event_id, t.done_at,
+        (SELECT json_extract(one.value, '$.grams') FROM plans p JOIN json_each(p.answer, '$.transfers') one
+          WHERE p.id = t.plan_id AND json_extract(one.value, '$.fromId') = t.from_cylinder_id AND json_extract(one.value, '$.toId') = t.to_cylinder_id)
+      FROM plan_tasks t WHERE ${where} ORDER BY t.plan_id, t.position`,
     args,
   })
   const done = rows.filter(row => row[6] !== null && row[2] === 'transfer').flatMap(row => [row[3] as string, row[4] as string])
@@ -96,7 +104,8 @@ async function stepsWhere(db: Database, where: string, args: InValue[]): Promise
     const [fromId, toId] = [row[3] as string, row[4] as string | null]
     const pair = row[6] === null ? null : pairBalance(row[6] as string, halvesOf(fromId), halvesOf(toId))
     return {
-      planId: row[0] as string, position: row[1] as number, kind: row[2] as PlanTask['kind'], fromId, toId, netGrams: row[5] as number | null,
+      planId: row[0] as string, position: row[1] as number, kind: row[2] as PlanTask['kind'], fromId, toId,
+      netGrams: (row[5] ?? row[8]) as number | null, isAll: row[5] === null,
       done: row[6] === null ? null : { eventId: row[6] as string, at: instantText(row[7])!, grams: pair?.grams ?? null, balance: pair?.balance ?? null },
     }
   })

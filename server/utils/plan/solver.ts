@@ -6,7 +6,7 @@ import type { Solution, Solve } from '../../../utils/plan/linearProgram'
 import { problem } from '../http/problem'
 
 /** Beyond its own limit a solver is only busy with its last step; what takes longer hangs. */
-const PATIENCE_MS = 2_000
+const PATIENCE_MS = 3_000
 /** Its memory grows with the largest program and is given back only with the thread. */
 const KEPT_IDLE_MS = 60_000
 

@@ -35,7 +35,7 @@ describe('what is offered first for chosen cylinders', () => {
   })
 
   it('is to move them where none needs anything of these', () => {
-    expect(selectionOffer([usual], ALL, VANS)).toEqual({ primary: 'move', others: ['label', 'ship', 'test'] })
+    expect(selectionOffer([usual], ALL, VANS)).toEqual({ primary: 'move', others: ['plan', 'label', 'ship', 'test'] })
   })
 
   it('is nothing that the person may not do', () => {
@@ -47,7 +47,7 @@ describe('what is offered first for chosen cylinders', () => {
 
 it('takes the chosen cylinders along to the screen that does it', () => {
   expect(SELECTION_ACTS.map(act => selectionPath(act, ['a', 'b']))).toEqual([
-    '/retests?with=a,b', '/shipments?with=a,b', '/labels?cylinders=a,b', '/batch?act=move&expect=a,b',
+    '/retests?with=a,b', '/shipments?with=a,b', '/labels?cylinders=a,b', '/batch?act=move&expect=a,b', '/plans?with=a,b',
   ])
 })
 
