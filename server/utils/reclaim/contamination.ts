@@ -10,7 +10,8 @@ export async function contaminationOf(db: Database, ids: readonly string[]): Pro
   const found = new Map<string, number | null>(ids.map(id => [id, null]))
   if (ids.length === 0) return found
   const { rows } = await db.readClient.execute({
-    sql: `SELECT asked.value FROM json_each(?) asked WHERE EXISTS (SELECT 1 FROM custody_events e WHERE e.cylinder_id = asked.value AND e.kind = 'checked')`,
+    sql: `SELECT asked.value FROM json_each(?) asked
+      WHERE EXISTS (SELECT 1 FROM custody_events e WHERE e.cylinder_id = asked.value AND e.kind = 'checked' AND e.body LIKE '%"composition"%')`,
     args: [JSON.stringify(ids)],
   })
   const analysed = rows.map(row => row[0] as string)

@@ -62,10 +62,10 @@ function isShop(placeId: string, from: Directory): boolean {
   return kind === 'shop' || kind === 'rack'
 }
 
-/** Looked up only where a limit asks for it, and of what is not called clean: a clean verdict is taken at its word. */
+/** Looked up only where a limit asks for it. */
 async function withContamination(db: Database, candidates: readonly Candidate[], takers: readonly Taker[]): Promise<Candidate[]> {
   if (takers.every(({ terms }) => terms.mostContaminationPercent === null)) return [...candidates]
-  const shares = await contaminationOf(db, candidates.filter(({ condition }) => condition !== 'clean').map(({ id }) => id))
+  const shares = await contaminationOf(db, candidates.map(({ id }) => id))
   return candidates.map(candidate => ({ ...candidate, contaminationPercent: shares.get(candidate.id) }))
 }
 

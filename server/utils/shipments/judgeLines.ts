@@ -7,6 +7,7 @@ import { preview } from '~~/utils/custody/preview'
 import { view } from '~~/utils/custody/view'
 import { dayOfInstant } from '~~/utils/quantity/day'
 import type { MassReading } from '~~/utils/quantity/mass'
+import { contaminationPercent } from '~~/utils/reclaim/contamination'
 import { refusedBy } from '~~/utils/reclaim/terms'
 import { viewContext } from '../custody/foldContext'
 import { logsOf } from '../custody/logPages'
@@ -45,7 +46,7 @@ export async function judgeLines(db: Database, lines: readonly LineToJudge[], { 
     const away = gross === null ? [] : mayShip(before).because.filter(({ code }) => code === 'away')
     return {
       cylinderId,
-      because: [...away, ...mayShip(then).because, ...(terms === null ? [] : refusedBy(terms, then))],
+      because: [...away, ...mayShip(then).because, ...(terms === null ? [] : refusedBy(terms, then, contaminationPercent(events)))],
       figures: { gross, refrigerant: then.contents.refrigerant, condition: then.contents.condition, netGrams: then.contents.netGrams },
     }
   })
