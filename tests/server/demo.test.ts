@@ -17,12 +17,16 @@ import { sealHistory } from '../../server/utils/demo/checkpoints'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
 import { lateFacts } from '../../server/utils/now/lateFacts'
 import { differingShipments } from '../../server/utils/shipments/paperDifferences'
+import { listShipments } from '../../server/utils/shipments/shipments'
+import { judgedShipment } from '../../server/utils/shipments/shipmentWithLines'
 import { keepDemoPhotos } from '../../server/utils/demo/photos'
 import { massBalance } from '../../server/utils/records/massBalance'
 import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
+import { SHIPMENT_STATES, shipmentsQuery } from '../../utils/contract/shipments'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
 import type { FindingCode } from '../../utils/custody/finding'
+import { stepFacts, whyNot } from '../../utils/shipment/steps'
 import { testSealing } from '../helpers/sealing'
 
 const NOW = Date.parse('2026-12-01T17:00:00Z')
@@ -90,6 +94,16 @@ describe('the demo firm', () => {
     expect(differing.map(({ lines }) => lines)).toEqual([1])
     const late = await lateFacts(db, await directory(db), NOW)
     expect(late.cylinders).toHaveLength(1)
+  })
+
+  it('has a shipment in each state, the one that is ready with every line weighed and its papers complete', async () => {
+    expect((await column('SELECT DISTINCT state FROM shipments')).sort()).toEqual([...SHIPMENT_STATES].sort())
+    const [ready] = (await listShipments(db, shipmentsQuery.parse({ state: 'ready' }))).items
+    const { shipment, judged } = await judgedShipment(db, ready!.id, { personId: 'nobody', roles: ['manager'], trainee: false }, NOW)
+    expect(whyNot('dispatch', stepFacts(shipment))).toEqual([])
+    expect(judged!.papers.carriage).toMatchObject({ by: 'carrier' })
+    expect(await column(`SELECT count(*) FROM shipments WHERE state IN ('dispatched', 'arrived', 'settled') AND papers IS NULL`)).toEqual([0])
+    expect(await column('SELECT count(*) FROM shipments WHERE NOT EXISTS (SELECT 1 FROM shipment_acts WHERE shipment_id = shipments.id)')).toEqual([0])
   })
 
   it('shows every finding that these kinds of event can raise', async () => {

@@ -14,7 +14,9 @@ import { playLate } from './late'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { namePhotos } from './photos'
 import { seededRandom } from './random'
+import { prepareShipments } from './preparedShipments'
 import { recordScript } from './record'
+import { sentShipmentActs, sentShipmentPapers } from './sentShipments'
 import { newScript } from './script'
 import { castTables, labelTables, listTables } from './tables'
 import { termsTables } from './terms'
@@ -56,6 +58,9 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   await recordScript(db, stage.script.events)
   await db.write(await paperStatements(db))
   await followRules(db, () => now)
+  await db.write(sentShipmentActs(stage))
+  await db.write(await sentShipmentPapers(db, stage))
+  await prepareShipments(db, cast, now)
   await db.write(await vanTables(db, cast, now))
   await db.write(labelTables(db, stage, codesOf(stage), Array.from({ length: 10 }, () => drawLabelCode(random.bytes))))
   await db.write([statement(db.read.insert(meta).values({ key: 'demo', value: new Date(now).toISOString() }))])

@@ -7,6 +7,7 @@ import { statement, type Database } from '../database/database'
 import { DAY, workingMorning } from './calendar'
 import { DEMO_FIRM, type Cast } from './cast'
 import type { DemoLot, DemoShipment, Stage } from './lives'
+import { sentStates, type SentState } from './sentShipments'
 
 const CAREFUL_DAYS = 150
 
@@ -34,29 +35,30 @@ function firmRules({ people: { manager } }: Cast, at: number): (Pick<typeof sett
   ]
 }
 
-/** The shipments and test lots as they stand at the story's end; none is a draft. */
+/** The shipments and test lots that have left, as they stand at the story's end. */
 export function listTables({ read }: Database, stage: Stage): InStatement[] {
   const sent = stage.shipments.filter(one => one.cylinders.length > 0)
   const lots = stage.lots.filter(one => one.cylinders.length > 0)
+  const states = sentStates(sent, stage.endAt)
   return [
-    ...sent.flatMap((one, index) => shipmentRows(read, stage, one, index + 1)),
+    ...sent.flatMap((one, index) => shipmentRows(read, stage, { ...one, ...states[index]! }, index + 1)),
     ...lots.flatMap((one, index) => lotRows(read, stage, one, index + 1)),
   ]
 }
 
-function shipmentRows(read: Database['read'], { cast, endAt }: Stage, one: DemoShipment, number: number): InStatement[] {
-  const isBack = one.backAt <= endAt
+function shipmentRows(read: Database['read'], { cast }: Stage, one: DemoShipment & SentState, number: number): InStatement[] {
+  const { state, arrivedAt, settledAt, closedAt } = one
   return [
     statement(read.insert(shipments).values({
-      id: one.id, number, toFirmId: cast.firms[one.to].id, state: isBack ? 'settled' : 'dispatched', createdAt: one.at, createdBy: cast.people.warehouse.id,
-      dispatchedAt: one.at, dispatchedBy: cast.people.manager.id, settledAt: isBack ? one.backAt : null,
+      id: one.id, number, toFirmId: cast.firms[one.to].id, state, createdAt: one.at, createdBy: cast.people.warehouse.id,
+      dispatchedAt: one.at, dispatchedBy: cast.people.manager.id, arrivedAt, settledAt, closedAt,
     })),
     ...one.cylinders.flatMap(({ steel, gross, refrigerant, netGrams }, position) => [
       statement(read.insert(shipmentLines).values({
         shipmentId: one.id, cylinderId: steel.id, position,
         sent: { gross, grossGrams: readingGrams(gross), refrigerant, condition: 'clean', netGrams },
       })),
-      ...(isBack ? [] : [statement(read.insert(openLines).values({ cylinderId: steel.id, listKind: 'shipment', listId: one.id }))]),
+      ...(settledAt !== null ? [] : [statement(read.insert(openLines).values({ cylinderId: steel.id, listKind: 'shipment', listId: one.id }))]),
     ]),
   ]
 }
