@@ -191,7 +191,7 @@ const SCREENS: Record<string, Screen[]> = {
   'rules.vue': [{ as: manager, at: () => '/rules' }, { as: technician, at: () => '/rules' }],
   'scan.vue': [{ as: technician, at: () => '/scan' }],
   'setup.vue': [{ as: 'nobody', at: demo => `/setup?token=${demo.setUpToken}`, empty: true }, { as: 'nobody', at: () => '/setup' }],
-  'shipments/[id]/index.vue': [...(['draft', 'dispatched', 'settled'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
+  'shipments/[id]/index.vue': [...(['draft', 'ready', 'dispatched', 'settled', 'cancelled'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
   'shipments/[id]/weigh.vue': [{ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments.draft}/weigh` }],
   'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],

@@ -3,7 +3,7 @@ import type { CustodyLogAnswer, CylinderRow, FleetAnswer } from '../../utils/con
 import type { NewDockLinkAnswer } from '../../utils/contract/dock'
 import type { MintAnswer } from '../../utils/contract/labels'
 import type { FirmsAnswer, PlacesAnswer } from '../../utils/contract/places'
-import type { ShipmentsAnswer } from '../../utils/contract/shipments'
+import type { ShipmentsAnswer, ShipmentState } from '../../utils/contract/shipments'
 import type { TestLotsAnswer, TestLotState, TestLotWithLines } from '../../utils/contract/testLots'
 import type { SessionAnswer } from '../../utils/contract/session'
 import { handoverText } from '../../utils/handover/handoverText'
@@ -23,7 +23,7 @@ export interface DemoFleet {
   codes: Record<'usual' | 'empty' | 'overfilled' | 'onTwo' | 'onNone', string>
   /** The newest line of the usual cylinder. */
   event: string
-  shipments: Record<'draft' | 'dispatched' | 'settled', string>
+  shipments: Record<ShipmentState, string>
   lots: Record<Exclude<TestLotState, 'cancelled'>, string>
   /** Tokens of links to the dock: of a shipment on its way, and of one that is settled. */
   docks: Record<'dispatched' | 'settled', string>
@@ -58,7 +58,7 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
   const van = places.find(({ technicianName }) => technicianName === 'Dayo Okafor')!.id
   const { items: [reclaimer] } = (await manager.get<FirmsAnswer>('/api/firms?kind=reclaimer')).body
   await made(admin, '/api/people', INVITED)
-  const left = await firstOfEach<ShipmentsAnswer, 'dispatched' | 'settled'>(manager, '/api/shipments', ['dispatched', 'settled'])
+  const left = await firstOfEach<ShipmentsAnswer, Exclude<ShipmentState, 'draft'>>(manager, '/api/shipments', ['ready', 'dispatched', 'arrived', 'settled', 'closed', 'cancelled'])
   return {
     people, van, reclaimer: reclaimer!.id,
     codes: {
