@@ -13,6 +13,8 @@ function nodeProject(name: string, more: Record<string, unknown> = {}) {
   }
 }
 
+// What is pure leaves nothing behind, so that the next file may find its modules read already.
+const pure = { isolate: false }
 // Each file starts the built server on a database of its own. Mostly one of a test and its server waits for the other, so that two go side by side.
 const patience = { testTimeout: 120_000, hookTimeout: 180_000 }
 const served = { ...patience, maxWorkers: 2, sequence: { groupOrder: 1 } }
@@ -27,8 +29,8 @@ export default defineConfig(async () => ({
     maxConcurrency: 3,
     projects: [
       nodeProject('architecture'),
-      nodeProject('unit'),
-      nodeProject('reference'),
+      nodeProject('unit', pure),
+      nodeProject('reference', pure),
       nodeProject('server', served),
       nodeProject('e2e', alone),
       nodeProject('faults', alone),

@@ -21,6 +21,9 @@ function strays(files: string[], projects: string[]): string[] {
   })
 }
 
+/** Whether a test puts something else in the place of a module, a global or the clock, and could leave it there. */
+const replaces = (source: string) => /\bvi\.(mock|doMock|stub\w+|spyOn|useFakeTimers|setSystemTime|resetModules)\b|\bglobalThis\.\w+ = |\bprocess\.(env\.\w+ = |chdir\b)/.test(source)
+
 const projects = projectsOf(readFileSync('vitest.config.ts', 'utf8'))
 
 describe('every test', () => {
@@ -41,12 +44,23 @@ describe('every test', () => {
     const marked = files.filter(file => file !== 'tests/architecture/test-projects.test.ts' && /\b(it|test|describe)\.(only|skip|todo)\b/.test(readFileSync(file, 'utf8')))
     expect(marked).toEqual([])
   })
+
+  it('of what is pure leaves everything as it was, for the next one in its process', () => {
+    const pure = files.filter(file => /^tests\/(unit|reference)\//.test(file))
+    expect(pure.length).toBeGreaterThan(100)
+    expect(pure.filter(file => replaces(readFileSync(file, 'utf8')))).toEqual([])
+  })
 })
 
 describe('the guard itself', () => {
   it('finds a test that nobody runs', () => {
     const files = ['utils/mass.test.ts', 'tests/mass.test.ts', 'tests/helpers/a.test.ts', 'tests/unit/a.spec.ts', 'tests/unit/a.test.mjs', 'tests/unit/deep/a.test.ts']
     expect(strays(files, ['unit'])).toEqual(files.slice(0, -1))
+  })
+
+  it('finds what a test puts in the place of something else', () => {
+    expect(['vi.mock(\'./a\')', 'vi.doMock(\'./a\')', 'vi.stubGlobal(\'fetch\', no)', 'vi.useFakeTimers()', 'globalThis.fetch = no', 'process.env.TZ = \'UTC\''].filter(line => !replaces(line))).toEqual([])
+    expect(['const told = vi.fn()', 'const { TZ } = process.env', 'globalThis.crypto.randomUUID()'].filter(replaces)).toEqual([])
   })
 
   it('does not take a project out of a comment', () => {
