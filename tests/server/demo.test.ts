@@ -15,6 +15,8 @@ import { directory } from '../../server/utils/directory/directory'
 import { firmRules } from '../../server/utils/directory/firmRules'
 import { sealHistory } from '../../server/utils/demo/checkpoints'
 import { fillDemo } from '../../server/utils/demo/fillDemo'
+import { bankedOf } from '../../server/utils/jobs/banked'
+import { listJobs, theJob } from '../../server/utils/jobs/jobs'
 import { lateFacts } from '../../server/utils/now/lateFacts'
 import { differingShipments } from '../../server/utils/shipments/paperDifferences'
 import { listShipments } from '../../server/utils/shipments/shipments'
@@ -23,6 +25,7 @@ import { keepDemoPhotos } from '../../server/utils/demo/photos'
 import { massBalance } from '../../server/utils/records/massBalance'
 import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
+import { jobsQuery } from '../../utils/contract/jobs'
 import { SHIPMENT_STATES, shipmentsQuery } from '../../utils/contract/shipments'
 import { EVENT_KINDS } from '../../utils/custody/kinds'
 import type { FindingCode } from '../../utils/custody/finding'
@@ -35,7 +38,7 @@ const NOW = Date.parse('2026-12-01T17:00:00Z')
 const RAISED: FindingCode[] = [
   'overfill', 'nearly-full', 'pressure-class', 'spec-not-for-gas', 'not-refillable', 'not-marked-flammable', 'toxic', 'second-refrigerant',
   'unknown-onto-known', 'retest-overdue', 'retest-soon', 'retest-unknown', 'early-test', 'wet', 'rejected', 'condemned', 'weight-not-known',
-  'not-registered', 'registered-twice', 'old-tare-on-label', 'code-on-two', 'unsigned', 'unsupervised', 'not-seen', 'two-owners', 'weigh-again',
+  'not-registered', 'registered-twice', 'old-tare-on-label', 'code-on-two', 'unsigned', 'unsupervised', 'not-seen', 'two-owners', 'owner-change', 'owner-consent', 'weigh-again',
   'half-transfer', 'transfer-unbalanced', 'clock-doubtful', 'late-change', 'look-before-fill', 'system-dependent-limit', 'gas-excess', 'away', 'after-end', 'tested-full', 'quarantined', 'found-by-use',
 ]
 
@@ -104,6 +107,16 @@ describe('the demo firm', () => {
     expect(judged!.papers.carriage).toMatchObject({ by: 'carrier' })
     expect(await column(`SELECT count(*) FROM shipments WHERE state IN ('dispatched', 'arrived', 'settled') AND papers IS NULL`)).toEqual([0])
     expect(await column('SELECT count(*) FROM shipments WHERE NOT EXISTS (SELECT 1 FROM shipment_acts WHERE shipment_id = shipments.id)')).toEqual([0])
+  })
+
+  it('has jobs with what was recovered on them, a note in its second issue, and refrigerant banked for a customer', async () => {
+    const { items } = await listJobs(db, jobsQuery.parse({ limit: 200 }), 'nobody')
+    expect(items.filter(({ recoveredGrams }) => recoveredGrams !== null).length).toBeGreaterThanOrEqual(15)
+    const issues = await Promise.all(items.map(async ({ id }) => (await theJob(db, id)).issue))
+    expect(issues.filter(issue => issue === 2)).toHaveLength(1)
+    const store = [...(await directory(db)).firms.values()].find(({ name }) => name === 'Wexley Cold Store')!
+    const { held } = await bankedOf(db, store.id)
+    expect(held.find(({ refrigerant }) => refrigerant === 'R-22')!.cylinders).toHaveLength(2)
   })
 
   it('shows every finding that these kinds of event can raise', async () => {

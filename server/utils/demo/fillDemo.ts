@@ -8,11 +8,13 @@ import { castOf } from './cast'
 import { playChecks } from './checks'
 import { playCare, playSignatures } from './care'
 import { playIncidents } from './incidents'
+import { jobTables, playJobs } from './jobs'
 import { playPairs } from './pairs'
 import { paperStatements } from './papers'
 import { playLate } from './late'
 import { playLives, type DemoLot, type DemoShipment, type Stage } from './lives'
 import { namePhotos } from './photos'
+import { planTogether } from './plan'
 import { seededRandom } from './random'
 import { prepareShipments } from './preparedShipments'
 import { recordScript } from './record'
@@ -51,9 +53,11 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   playSignatures(stage)
   playLate(stage)
   namePhotos(stage.script)
+  const jobs = playJobs(stage)
   await db.write(castTables(db, cast, passwordHash, startAt, random.uuid))
   await db.write(termsTables(db, cast, now))
   await db.write(listTables(db, stage))
+  await db.write(jobTables(db, jobs))
   await directory(db, true)
   await recordScript(db, stage.script.events)
   await db.write(await paperStatements(db))
@@ -61,6 +65,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   await db.write(sentShipmentActs(stage))
   await db.write(await sentShipmentPapers(db, stage))
   await prepareShipments(db, cast, now)
+  await planTogether(db, cast, now)
   await db.write(await vanTables(db, cast, now))
   await db.write(labelTables(db, stage, codesOf(stage), Array.from({ length: 10 }, () => drawLabelCode(random.bytes))))
   await db.write([statement(db.read.insert(meta).values({ key: 'demo', value: new Date(now).toISOString() }))])
