@@ -55,8 +55,7 @@ export function useDock(token: string) {
 
   async function load(): Promise<void> {
     const copy = await box.copy(linkId).catch(() => undefined)
-    if (copy && dock.value === null) show(copy.answer)
-    await reread()
+    if (copy && dock.value === null) await show(copy.answer)
     await refresh()
     void send()
   }
@@ -73,24 +72,24 @@ export function useDock(token: string) {
     }
   }
 
-  function show(answer: DockAnswer) {
+  /** Not before what waits on this phone is there too: without it the shipment would look untouched. */
+  async function show(answer: DockAnswer): Promise<void> {
     dock.value = answer
+    await reread()
     phase.value = 'open'
   }
 
   async function took(answer: DockAnswer): Promise<void> {
     // A network that wants its guests to sign in answers with a page of its own.
     if (!Array.isArray(Object(answer).cylinders)) throw new Error('No answer of ours')
-    show(answer)
     await box.keepCopy({ linkId, shipmentId: answer.shipment.id, answer }).catch(() => {})
-    await reread()
+    await show(answer)
   }
 
   /** The link opens nothing any more: the shipment goes from this phone, what was not sent stays. */
   async function end(): Promise<void> {
-    phase.value = 'nothing'
     await reread()
-    dock.value = null
+    ;[phase.value, dock.value] = ['nothing', null]
     await box.forgetCopy(linkId).catch(() => {})
   }
 
