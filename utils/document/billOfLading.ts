@@ -36,6 +36,10 @@ export function billOfLading(papers: ShippingPapers, isDraft: boolean): Paper {
         totals: ['', `${totals.cylinders} cyl.`, 'All together', massText(totals.grossGrams, unit), massText(totals.netGrams, unit)],
       },
       ...isDraft && papers.missing.length > 0 ? [heading('Missing before it may leave'), ...items(papers.missing.map(({ text, source }) => `${text} (${source})`))] : [],
+      heading('Shipper’s certification'),
+      { kind: 'text', text: papers.certification.text },
+      { kind: 'text', text: `${papers.certification.because} Wording: ${papers.certification.source}. The shipper keeps a copy for 2 years after the first carrier has accepted it (49 CFR 172.201(e)).` },
+      { kind: 'signatures', lines: [`For ${shipper.name}`, 'Day', 'Accepted by the carrier', 'Day of acceptance'] },
       heading('Placards of this load'),
       { kind: 'text', text: placardText(papers) },
       ...items(papers.placards.notes),
@@ -44,11 +48,6 @@ export function billOfLading(papers: ShippingPapers, isDraft: boolean): Paper {
       ...papers.tradeException.state === 'may' ? [heading('Materials of trade'), ...items(papers.tradeException.because)] : [],
       heading('Take care'),
       ...items([...cautionsFor(['moving', 'handling']), STANDING_CAUTION]),
-      heading('Shipper’s certification'),
-      { kind: 'text', text: papers.certification.text },
-      { kind: 'text', text: `${papers.certification.because} Wording: ${papers.certification.source}.` },
-      { kind: 'signatures', lines: [`For ${shipper.name}`, 'Day', 'Accepted by the carrier', 'Day of acceptance'] },
-      { kind: 'text', text: 'The shipper keeps a copy for 2 years after the first carrier has accepted it (49 CFR 172.201(e)).' },
     ],
   }
 }

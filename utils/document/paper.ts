@@ -6,7 +6,7 @@ import { fittedLines } from './wrappedText'
 export type PaperBlock
   = | { kind: 'title' | 'heading' | 'text' | 'item', text: string }
     | { kind: 'facts', rows: { term: string, value: string }[] }
-    /** Lines to write on, each with what is to be written. */
+    /** Lines to write on, each with what is to be written; all on one page. */
     | { kind: 'signatures', lines: string[] }
     | PaperTable
 
@@ -62,7 +62,7 @@ function rowsOf(block: PaperBlock): PaperRow[] {
     case 'text': return [...wrapped(block.text, { size: SIZES.text }), gap(GAP)]
     case 'item': return [...wrapped(block.text, { size: SIZES.item, mark: '\u2013' }), gap(GAP / 2)]
     case 'facts': return [...block.rows.flatMap(factRows), gap(GAP)]
-    case 'signatures': return block.lines.map(signatureRow)
+    case 'signatures': return [...block.lines.map((line, index) => signatureRow(line, index < block.lines.length - 1)), gap(GAP)]
     case 'table': return [...tableRows(block, { x: MARGIN, width: WIDTH }), gap(GAP)]
   }
 }
@@ -104,10 +104,10 @@ function factRows({ term, value }: { term: string, value: string }): PaperRow[] 
   }))
 }
 
-function signatureRow(text: string): PaperRow {
+function signatureRow(text: string, keepsNext: boolean): PaperRow {
   return {
     height: LINE_TO_WRITE_ON,
-    keepsNext: false,
+    keepsNext,
     draw: (y) => {
       const baseline = y + LINE_TO_WRITE_ON - 2
       return {

@@ -28,7 +28,7 @@ describe('a bill of lading', () => {
       'X', '2 cyl.', 'UN1018, Refrigerant gas R 22, 2.2', '88.6 lb', '40.0 lb',
       'X', '1 cyl.', 'UN3252, Refrigerant gas R 32, 2.1', '61.2 lb', '36.9 lb',
       '1 cyl.', 'Nothing in it', '24.3 lb', '0.0 lb',
-      '4 cyl.', 'All together', '174.1 lb', '76.9 lb', 'Placards of this load',
+      '4 cyl.', 'All together', '174.1 lb', '76.9 lb', 'Shipper’s certification',
     ])
     expect(text).toContain('None is needed for this load by itself.')
   })

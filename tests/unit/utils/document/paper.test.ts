@@ -41,6 +41,33 @@ describe('a paper', () => {
     }
   })
 
+  it('repeats the head of a table on each page that goes on with it, and keeps its totals with its last line', () => {
+    const columns = [{ head: 'No.', share: 1, align: 'right' as const }, { head: 'What', share: 5 }]
+    for (let lines = 40; lines < 60; lines++) {
+      const rows = Array.from({ length: lines }, (_, index) => [`${index + 1}`, `Line ${index + 1}`])
+      const pages = textsOf(paper({ kind: 'table', columns, rows, totals: [`${lines}`, 'All of them'] }))
+      expect(pages.flat().filter(text => text.startsWith('Line '))).toEqual(rows.map(row => row[1]))
+      for (const page of pages) expect(page.filter(text => text === 'What'), `${lines} lines`).toHaveLength(1)
+      expect(pages.find(texts => texts.includes('All of them')), `${lines} lines`).toContain(`Line ${lines}`)
+    }
+  })
+
+  it('wraps what is longer than its column, and right-aligns figures at the column’s edge', () => {
+    const long = 'Refrigerant gases, n.o.s. (difluoromethane, pentafluoroethane), 2.2'
+    const [page] = paperPages(paper({ kind: 'table', columns: [{ head: 'Description', share: 1 }, { head: 'Gross', share: 1, align: 'right' }], rows: [[long.repeat(2), '9.0 lb'], ['x', '100.0 lb']] }))
+    const [nine, hundred] = ['9.0 lb', '100.0 lb'].map(text => page!.texts.find(one => one.text === text)!)
+    expect(nine!.x).toBe(hundred!.x)
+    expect([nine!.align, hundred!.align]).toEqual(['right', 'right'])
+    expect(page!.texts.filter(({ text, x }) => x === 20 && long.repeat(2).includes(text) && text.length > 3).length).toBeGreaterThan(1)
+  })
+
+  it('keeps the lines to sign together on one page', () => {
+    for (let before = 20; before < 60; before++) {
+      const pages = textsOf(paper(...items(before), { kind: 'signatures', lines: ['Loaded by', 'Day of it', 'Received by'] }))
+      expect(pages.find(texts => texts.includes('Loaded by')), `${before} points before them`).toEqual(expect.arrayContaining(['Day of it', 'Received by']))
+    }
+  })
+
   it('keeps the breaks of an address', () => {
     expect(textsOf(paper({ kind: 'text', text: 'Dunmarrow Dairy\n1 Creamery Road' }))[0]).toEqual(expect.arrayContaining(['Dunmarrow Dairy', '1 Creamery Road']))
   })
