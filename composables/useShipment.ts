@@ -78,10 +78,5 @@ export function useShipment(id: string) {
     }))
   }
 
-  /** Records what the reclaimer reported of each line. */
-  function record(what: 'receipt', body: object): Promise<boolean> {
-    return send(() => api.post(`${path}/${what}`, body))
-  }
-
-  return { ...list, acts, record, act, putOn, takeOff, add, weigh, dispatch, takeBack }
+  return { ...list, acts, act, putOn, takeOff, add, weigh, dispatch, takeBack }
 }

@@ -85,7 +85,7 @@ export function useShipmentPage(id: string) {
   }
 
   return {
-    list, papers, notice, name, isOpen, isAway, mayChange, mayTakeBack, next, heldBack, carriers, mailTo, ourPlaces,
+    list, papers, notice, name, isOpen, mayChange, mayTakeBack, next, heldBack, carriers, mailTo, ourPlaces,
     takingOff, isTakingOff, isGivingUp, isReturning, scan, takeOff, giveUp, takeBack, classify, mail,
   }
 }

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import type { CustodyLogAnswer, FleetAnswer, OpenListAnswer } from '../../utils/contract/custody'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import type { ShipmentsAnswer, ShipmentWithLines } from '../../utils/contract/shipments'
 import type { CylinderView } from '../../utils/custody/cylinderView'
@@ -8,6 +9,7 @@ import type { ShipmentActsAnswer } from '../../utils/shipment/acts'
 import { cylinderNow, eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
 import { readied } from '../helpers/readyShipment'
 import { startServer, type TestServer } from '../helpers/server'
+import { settledWith } from '../helpers/settledShipment'
 import { lb } from '../helpers/stamps'
 
 let server: TestServer
@@ -93,25 +95,29 @@ describe('a shipment to a reclaimer', () => {
     expect((await firm.manager.client.post(`/api/shipments/${shipment.id}/arrival`, act())).status).toBe(409)
     expect((await actsOf(shipment.id)).filter(one => one.startsWith('arrived'))).toEqual(['arrived by Mona'])
 
-    const receipt = {
-      occurredAt: new Date().toISOString(),
-      lines: sent.body.lines.map(line => ({
-        cylinderId: line.cylinder.id, eventId: randomUUID(), expects: line.version, theirGross: lb(38.9), acceptedNet: lb(11), grade: 'A', price: 12.5,
-      })),
-    }
-    const received = await firm.manager.client.post<ShipmentWithLines>(`/api/shipments/${shipment.id}/receipt`, receipt)
-    expect(received.status).toBe(200)
-    expect(received.body.state).toBe('settled')
+    await settledWith(firm.manager.client, shipment.id, { theirGross: lb(38.9), acceptedNet: lb(11), grade: 'A', rate: { mills: 12_500, per: 'lb' } })
+    const received = await shown(shipment.id)
+    expect(received.state).toBe('settled')
     // 38.9 lb = 17644.7 g; 11 lb = 4989.5 g.
-    expect(received.body.lines[1]!.received).toEqual({ theirGrossGrams: 17_645, acceptedNetGrams: 4_990, grade: 'A', price: 12.5 })
-    expect(received.body.lines[1]!.sent!.netGrams).toBe(5_216)
+    expect(received.lines[1]!.received).toEqual({ theirGrossGrams: 17_645, acceptedNetGrams: 4_990, grade: 'A', price: 12.5, pricePer: 'lb' })
+    expect(received.lines[1]!.sent!.netGrams).toBe(5_216)
     expect((await cylinderNow(firm.auditor.client, cylinders[1]!.id)).contents).toMatchObject({ nothingInIt: true, netGrams: 0 })
-
-    const again = await firm.manager.client.post<ShipmentWithLines>(`/api/shipments/${shipment.id}/receipt`, receipt)
-    expect(again.status).toBe(200)
-    expect(again.body).toEqual(received.body)
     const next = await draft(cylinders)
     expect(next.number).toBe(shipment.number + 1)
+  })
+
+  it('is named on the cylinder, in the fleet and in the log', async () => {
+    const cylinder = await registered(firm)
+    const listed = async () => (await firm.technician.client.get<FleetAnswer>(`/api/cylinders?label=${cylinder.labelCode}`)).body.items[0]!
+    const stands = async () => (await firm.technician.client.get<OpenListAnswer>(`/api/cylinders/${cylinder.labelCode}/open-list`)).body.list
+    expect([(await listed()).openList, await stands()]).toEqual([undefined, null])
+    const { id, number } = await readyWith([cylinder])
+    const on = { kind: 'shipment', id, number }
+    expect([(await listed()).openList, await stands()]).toEqual([on, on])
+    await dispatched(id, weighedOut([cylinder]))
+    const { items } = (await firm.auditor.client.get<CustodyLogAnswer>(`/api/cylinders/${cylinder.id}/events`)).body
+    expect(items[0]!.names[id]).toBe(`shipment ${String(number).padStart(4, '0')}`)
+    expect(await stands()).toEqual(on)
   })
 
   it('is given up with a reason only before it leaves, and frees its cylinders', async () => {
@@ -363,7 +369,6 @@ describe('who may do what with a shipment', () => {
     const path = `/api/shipments/${shipment.id}`
     const { warehouse, technician, auditor, admin } = firm
     expect((await warehouse.client.post(`${path}/dispatch`, weighedOut([cylinder]))).status).toBe(403)
-    expect((await warehouse.client.post(`${path}/receipt`, weighedOut([cylinder]))).status).toBe(403)
     for (const person of [technician, admin]) {
       expect((await person.client.get(path)).status).toBe(403)
       expect((await person.client.get('/api/shipments')).status).toBe(403)

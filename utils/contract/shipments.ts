@@ -51,21 +51,6 @@ export const dispatchBody = z.strictObject({
     .refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
-/** POST /api/shipments/{id}/receipt: the reclaimer has taken it over; its figures stand beside ours. */
-export const receiptBody = z.strictObject({
-  occurredAt: z.iso.datetime({ offset: true }),
-  deviceNow: z.iso.datetime({ offset: true }).optional(),
-  lines: z.array(z.strictObject({
-    cylinderId: id,
-    eventId: id,
-    expects: z.number().int().nonnegative(),
-    theirGross: massReading.optional(),
-    acceptedNet: massReading.optional(),
-    grade: line(80).optional(),
-    price: z.number().nonnegative().finite().optional(),
-  })).min(1).max(200).refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
-})
-
 export const SHIPMENT_STATES = ['draft', 'ready', 'dispatched', 'arrived', 'settled', 'closed', 'cancelled'] as const
 export type ShipmentState = (typeof SHIPMENT_STATES)[number]
 
@@ -80,7 +65,6 @@ export type OwnAct = z.output<typeof actBody>
 export type Cancelling = z.output<typeof cancelBody>
 export type ShipmentReturns = z.output<typeof returnsBody>
 export type ShipmentDispatch = z.output<typeof dispatchBody>
-export type ShipmentReceipt = z.output<typeof receiptBody>
 export type ShipmentsQuery = z.output<typeof shipmentsQuery>
 export type ShipmentsAnswer = Page<Shipment>
 
@@ -111,7 +95,7 @@ export interface ShipmentLine {
   /** What the log says now of the cylinder as it left, where late entries or corrections made it say something else than the papers; left out where it says the same. */
   differs?: PaperDifference
   /** Of the `reclaimed` event. */
-  received: { theirGrossGrams: number | null, acceptedNetGrams: number | null, grade: string | null, price: number | null } | null
+  received: { theirGrossGrams: number | null, acceptedNetGrams: number | null, grade: string | null, price: number | null, pricePer: 'lb' | 'kg' | null } | null
   /** When it came back before it was settled; null where it did not. */
   returnedAt: string | null
 }

@@ -90,10 +90,10 @@ function awayLine(topic: 'shipments-away' | 'lots-away', { count, id, number, si
   const mayClear = mayI(isShipment ? 'shipments:receive' : 'lots:receive')
   return {
     topic, kind: 'att', number: count,
-    sentence: isShipment ? `${thing} no receipt yet.` : `${thing} not back yet.`,
+    sentence: isShipment ? `${thing} no settlement yet.` : `${thing} not back yet.`,
     reason: `${isShipment ? 'Shipment' : 'Test lot'} ${number} left ${daysBetween(since, now, timeZone)} days ago. Ask where it is${mayClear ? ', or record what came back' : ''}.`,
     ...(count === 1
-      ? { verb: mayClear ? (isShipment ? 'Record the receipt' : 'Record the results') : 'Open it', to: `/${isShipment ? 'shipments' : 'retests'}/${id}` }
+      ? { verb: mayClear ? (isShipment ? 'Settle it' : 'Record the results') : 'Open it', to: isShipment ? `/shipments/${id}${mayClear ? '/settlement' : ''}` : `/retests/${id}` }
       : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=dispatched' : '/retests' }),
   }
 }

@@ -25,23 +25,28 @@ export interface FourWeights {
 /**
  * The four weights of a line and how far theirs lie from ours.
  *
- * A net comes from one gross weighing less the stamped tare, so it is as accurate as the gross under it. The accuracy of
- * their scale is not known to us: it counts as that of a scale that nobody named.
- *
  * Units: grams. Rounding: their readings to the nearest gram, each accuracy up to the whole gram.
  */
-export function fourWeights(sent: SentFigures | null, theirs: Pick<LineFigures, 'theirGross' | 'acceptedNet'>, ourScale?: Scale): FourWeights {
-  const weights = {
-    ourGrossGrams: sent?.grossGrams ?? null,
-    ourNetGrams: sent?.netGrams ?? null,
-    theirGrossGrams: theirs.theirGross && readingGrams(theirs.theirGross),
-    acceptedNetGrams: theirs.acceptedNet && readingGrams(theirs.acceptedNet),
-  }
-  const accuracyGrams = bothScales(weights.ourGrossGrams, weights.theirGrossGrams, ourScale)
+export function fourWeights(sent: SentFigures | null, { theirGross, acceptedNet }: Pick<LineFigures, 'theirGross' | 'acceptedNet'>, ourScale?: Scale): FourWeights {
+  return weightsInGrams(sent, { theirGrossGrams: theirGross && readingGrams(theirGross), acceptedNetGrams: acceptedNet && readingGrams(acceptedNet) }, ourScale)
+}
+
+/**
+ * The same of their weights in whole grams.
+ *
+ * A net comes from one gross weighing less the stamped tare, so it is as accurate as the gross under it. The accuracy of
+ * their scale is not known to us: it counts as that of a scale that nobody named.
+ */
+export function weightsInGrams(
+  sent: Pick<SentFigures, 'grossGrams' | 'netGrams'> | null, theirs: { theirGrossGrams: number | null, acceptedNetGrams: number | null }, ourScale?: Scale,
+): FourWeights {
+  const { theirGrossGrams, acceptedNetGrams } = theirs
+  const [ourGrossGrams, ourNetGrams] = [sent?.grossGrams ?? null, sent?.netGrams ?? null]
+  const accuracyGrams = bothScales(ourGrossGrams, theirGrossGrams, ourScale)
   return {
-    ...weights,
-    gross: difference(weights.ourGrossGrams, weights.theirGrossGrams, accuracyGrams),
-    net: difference(weights.ourNetGrams, weights.acceptedNetGrams, accuracyGrams),
+    ourGrossGrams, ourNetGrams, theirGrossGrams, acceptedNetGrams,
+    gross: difference(ourGrossGrams, theirGrossGrams, accuracyGrams),
+    net: difference(ourNetGrams, acceptedNetGrams, accuracyGrams),
   }
 }
 

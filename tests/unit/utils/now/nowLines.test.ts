@@ -187,7 +187,7 @@ describe('lists and records', () => {
 
   it('let the manager receive what the warehouse can only ask about', () => {
     const facts = { shipmentsAway: { count: 1, id: ID, number: 409, since: NOON - 8 * DAY } }
-    expect(linesFor('manager', facts)[0]).toMatchObject({ verb: 'Record the receipt', reason: expect.stringContaining('left 8 days ago') })
+    expect(linesFor('manager', facts)[0]).toMatchObject({ verb: 'Settle it', reason: expect.stringContaining('left 8 days ago') })
     expect(linesFor('warehouse', facts)[0]).toMatchObject({ verb: 'Open it' })
   })
 

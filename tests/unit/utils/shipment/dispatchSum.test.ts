@@ -1,8 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import type { ShipmentLine } from '../../../../utils/contract/shipments'
 import { dispatchSum, weighedLine } from '../../../../utils/shipment/dispatchSum'
-import { settlementWord } from '../../../../utils/shipment/settlementWord'
-import { settlementDifferenceGrams } from '../../../../utils/shipment/settlementDifference'
 import { cylinderRow } from '../../../helpers/cylinderRow'
 
 function line(id: string, change = {}): ShipmentLine {
@@ -48,28 +46,5 @@ describe('a shipment being weighed', () => {
     const overdue = line('a', { exactStopWeightGrams: null })
     expect(weighedLine(overdue, { unit: 'kg', value: 29.747 }).over).toBe(true)
     expect(weighedLine(overdue, { unit: 'kg', value: 29.746 }).over).toBe(false)
-  })
-})
-
-describe('their weight beside ours', () => {
-  // Half a percent of 30 kg is 150 g; both scales together 300 g.
-  it('differs only beyond what both scales may be off', () => {
-    expect(settlementDifferenceGrams(17_000, 17_300, 30_000)).toBeNull()
-    expect(settlementDifferenceGrams(17_000, 16_699, 30_000)).toBe(-301)
-    expect(settlementDifferenceGrams(null, 16_000, 30_000)).toBeNull()
-  })
-})
-
-describe('what is said of a reclaimer’s weights', () => {
-  const sent = { gross: { unit: 'kg' as const, value: 30 }, grossGrams: 30_000, refrigerant: 'R-22', condition: 'clean', netGrams: 17_000 }
-
-  it('is nothing where it reported no weight: that is not agreement', () => {
-    expect(settlementWord(sent, { theirGrossGrams: null, acceptedNetGrams: null }, 'kg')).toBeNull()
-    expect(settlementWord({ ...sent, netGrams: null }, { theirGrossGrams: null, acceptedNetGrams: 17_000 }, 'kg')).toBeNull()
-  })
-
-  it('is that they agree within both scales, or by how much they do not', () => {
-    expect(settlementWord(sent, { theirGrossGrams: 30_300, acceptedNetGrams: null }, 'kg')).toEqual({ agrees: true, text: 'within both scales' })
-    expect(settlementWord(sent, { theirGrossGrams: 30_000, acceptedNetGrams: 16_600 }, 'kg')).toEqual({ agrees: false, text: 'net \u22120.40\u00A0kg' })
   })
 })
