@@ -29,6 +29,6 @@ export type DockEntry<Kind extends DockKind = DockKind> = {
 export type LinkedDockEntry<Kind extends DockKind = DockKind> = DockEntry<Kind> & { linkId: string }
 
 /** Whether an entry is of a kind. */
-export function isOfKind<Kind extends DockKind>(entry: LinkedDockEntry, kind: Kind): entry is LinkedDockEntry<Kind> {
+export function isOfKind<Kind extends DockKind>(entry: LinkedDockEntry, kind: Kind): entry is Extract<LinkedDockEntry, { kind: Kind }> {
   return entry.kind === kind
 }

@@ -7,6 +7,7 @@ import { DAY, workingMorning } from './calendar'
 import { castOf } from './cast'
 import { playChecks } from './checks'
 import { playCare, playSignatures } from './care'
+import { dockStatements } from './dock'
 import { playIncidents } from './incidents'
 import { jobTables, playJobs } from './jobs'
 import { playPairs } from './pairs'
@@ -64,6 +65,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   await followRules(db, () => now)
   await db.write(sentShipmentActs(stage))
   await db.write(await sentShipmentPapers(db, stage))
+  await db.write(await dockStatements(db, cast, now))
   await prepareShipments(db, cast, now)
   await planTogether(db, cast, now)
   await db.write(await vanTables(db, cast, now))
