@@ -89,7 +89,7 @@ const LINES: { [K in EventKind]: Say<K> } = {
   'retired': ({ reason, proof }) => ({
     what: [reason, proof?.text, proof?.certificate && `certificate ${proof.certificate}`, proof?.photoIds && photosInWords(proof.photoIds.length)].filter(Boolean).join('; '),
   }),
-  'sent-for-reclaim': ({ gross }) => ({ what: 'left with a shipment', gross }),
+  'sent-for-reclaim': ({ shipmentId, gross }, names) => ({ what: `left with ${names[shipmentId] ?? 'a shipment'}`, gross }),
   'reclaimed': ({ theirGross, acceptedNet, grade }) => ({
     what: ['taken over by the reclaimer', acceptedNet && `accepted ${formatReading(acceptedNet)} net`, grade].filter(Boolean).join(', '),
     gross: theirGross ?? null,
@@ -99,7 +99,7 @@ const LINES: { [K in EventKind]: Say<K> } = {
     what: direction === 'out' ? `went to ${named(firmId, names)}` : `came from ${named(firmId, names)}`,
     to: direction === 'out' ? named(firmId, names) : null,
   }),
-  'sent-for-test': () => ({ what: 'left with a test lot' }),
+  'sent-for-test': ({ lotId }, names) => ({ what: `left with ${names[lotId] ?? 'a test lot'}` }),
   'retested': ({ month, method, result, requalifierId, suffix, newTare }, names) => ({
     what: `${result}, ${method}, ${formatMonth(month)}${suffix ? `, marked ${suffix}` : ''}, by ${named(requalifierId, names)}${newTare ? `, new tare ${formatReading(newTare)}` : ''}`,
   }),

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import type { CylinderRow, CylinderView, LogLine } from '../custody/cylinderView'
+import type { CylinderRow, CylinderView, LogLine, OpenList } from '../custody/cylinderView'
 import type { AnyRecordedEvent } from '../custody/event'
 import type { Half } from '../custody/half'
 import type { CylinderState } from '../custody/state'
@@ -90,4 +90,7 @@ export interface FoldInput {
   state?: CylinderState
 }
 
-export type { CylinderRow, CylinderView, LogLine }
+export type { CylinderRow, CylinderView, LogLine, OpenList }
+
+/** GET /api/cylinders/{ref}/open-list: null where it stands on none. */
+export interface OpenListAnswer { list: OpenList | null }

@@ -112,6 +112,9 @@ export interface CylinderView {
   lastEventAt: string | null
 }
 
+/** An open shipment or test lot on which a cylinder stands. */
+export interface OpenList { kind: 'shipment' | 'test-lot', id: string, number: number }
+
 /** One line of the fleet, from cached columns and today's date. */
 export interface CylinderRow {
   id: string
@@ -141,6 +144,8 @@ export interface CylinderRow {
   unseen: { days: number, isLong: boolean } | null
   worstFinding: { code: FindingCode, severity: Severity } | null
   findingCodes: FindingCode[]
+  /** Left out where it stands on none, and where nobody asked. */
+  openList?: OpenList
 }
 
 /** One line of a cylinder's custody log. */

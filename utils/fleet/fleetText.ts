@@ -5,6 +5,7 @@ import { columnFigure } from '../quantity/columnFigure'
 import { formatDay, wallClock } from '../quantity/instant'
 import { formatMass, type MassUnit } from '../quantity/mass'
 import { formatMonth } from '../quantity/month'
+import { openListName } from '../shipment/openListName'
 import { rowVerdict, type RowVerdict } from './rowVerdict'
 
 /** One cylinder of the fleet in words and figures, as a table and a card show it. */
@@ -39,7 +40,7 @@ export function fleetText(row: CylinderRow, reader: Reader): FleetText {
     stop: row.exactStopWeightGrams === null ? null : columnFigure(row.exactStopWeightGrams, unit, 'down'),
     retest: row.dueMonth === null ? '–' : shortMonth(row.dueMonth),
     retestState: row.findingCodes.includes('retest-overdue') ? 'overdue' : row.findingCodes.includes('retest-soon') ? 'soon' : 'fine',
-    place: [row.place?.name, row.holder?.name].filter(Boolean).join(', ') || 'not known',
+    place: [row.place?.name, row.holder?.name, row.openList && openListName(row.openList)].filter(Boolean).join(', ') || 'not known',
     lastEvent: row.lastEventKind ? KIND_WORDS[row.lastEventKind].done : 'no event',
     lastDay: row.lastEventAt ? `, ${dayOf(row.lastEventAt, timeZone, now)}` : '',
   }

@@ -3,6 +3,7 @@ import { fleetListQuery } from '../../../utils/contract/custody'
 import { endWithAnswer } from '../../utils/csv/endWithAnswer'
 import { askedPast } from '../../utils/custody/askedPast'
 import { fleet } from '../../utils/custody/fleet'
+import { onTheirLists } from '../../utils/cylinder-lists/openLists'
 import { fleetCsv } from '../../utils/custody/fleetCsv'
 import { pastFleet } from '../../utils/custody/pastFleet'
 import { useDatabase } from '../../utils/database/currentDatabase'
@@ -21,7 +22,10 @@ export default apiRoute({ permission: 'fleet:read', query: fleetListQuery }, asy
     : await pastFleet(useDatabase(), past, query.cursor !== undefined)
   let isStreaming = false
   try {
-    if (!getRequestHeader(event, 'accept')?.includes('text/csv')) return await fleet(db, query, atMs)
+    if (!getRequestHeader(event, 'accept')?.includes('text/csv')) {
+      const answer = await fleet(db, query, atMs)
+      return past === null ? { ...answer, items: await onTheirLists(db, answer.items) } : answer
+    }
     const csv = await fleetCsv(db, query, atMs)
     isStreaming = true
     csv.once('close', giveBack)

@@ -9,6 +9,7 @@ import { fold, type FoldContext, type FoldStep } from '../../../utils/custody/fo
 import { otherCylinderOf } from '../../../utils/custody/half'
 import { laterLines } from '../../../utils/custody/laterLines'
 import type { Database } from '../database/database'
+import { listNames } from '../cylinder-lists/openLists'
 import { directory, namesOf } from '../directory/directory'
 import { foreignCursor } from '../http/cursor'
 import { foldContext } from './foldContext'
@@ -73,7 +74,7 @@ export async function custodyLog(db: Database, cylinderId: string, page: { limit
   }).reverse()
   const start = page.cursor === undefined ? 0 : lines.findIndex(line => line.id === page.cursor) + 1
   if (page.cursor !== undefined && start === 0) throw foreignCursor()
-  const items = withChanges(await withOtherCylinders(db, lines.slice(start, start + page.limit)), events, foldContext(from), shown)
+  const items = withChanges(await withLists(db, await withOtherCylinders(db, lines.slice(start, start + page.limit))), events, foldContext(from), shown)
   return {
     items,
     nextCursor: start + page.limit < lines.length ? items.at(-1)?.id ?? null : null,
@@ -122,6 +123,18 @@ function instantWithOffset(ms: number, offsetMinutes: number): string {
   const size = Math.abs(offsetMinutes)
   const offset = offsetMinutes === 0 ? 'Z' : `${sign}${String(Math.floor(size / 60)).padStart(2, '0')}:${String(size % 60).padStart(2, '0')}`
   return new Date(ms + offsetMinutes * 60_000).toISOString().replace('Z', offset)
+}
+
+/** Lines that also name the shipments and test lots of their details. */
+async function withLists(db: Database, lines: LogLine[]): Promise<LogLine[]> {
+  const idsOf = ({ details, instead }: LogLine) => [details, instead].flatMap((said) => {
+    const { shipmentId, lotId } = Object(said) as { shipmentId?: string, lotId?: string }
+    return [shipmentId, lotId].filter(id => id !== undefined)
+  })
+  const ids = lines.flatMap(idsOf)
+  if (ids.length === 0) return lines
+  const names = await listNames(db, ids)
+  return lines.map(line => ({ ...line, names: { ...line.names, ...Object.fromEntries(idsOf(line).flatMap(id => names.has(id) ? [[id, names.get(id)!]] : [])) } }))
 }
 
 /** Names of the places, people and firms that an event's details name. */
