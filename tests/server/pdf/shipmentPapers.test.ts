@@ -32,42 +32,6 @@ describe('a bill of lading', () => {
     ])
     expect(text).toContain('None is needed for this load by itself.')
   })
-
-  it('carries the certification of the regulation, to be signed, and says when it need not be', async () => {
-    const text = readOn(await pagesOf(billOfLading(madePapers([R22]), false)))
-    // 49 CFR 172.204(a)(1).
-    expect(text).toContain('This is to certify that the above-named materials are properly classified, described, packaged, marked and labeled, and are in proper condition for transportation according to the applicable regulations of the Department of Transportation.')
-    expect(text).toContain('Accepted by the carrier')
-    expect(text).toContain('2 years')
-    const own = readOn(await pagesOf(billOfLading(madePapers([R22], { carriage: { by: 'own-vehicle' } }), false)))
-    expect(own).toContain('172.204(b)(1)')
-    expect(own).toContain('hazardous waste')
-  })
-
-  it('calls residue what it is, and tells its reliefs with their conditions', async () => {
-    const text = readOn(await pagesOf(billOfLading(madePapers([R22, papersLine({ cylinderId: 'e', isResidue: true, gross: { unit: 'lb', value: 24.3 }, netGrams: 0 })]), false)))
-    expect(text).toContain('UN1018, Refrigerant gas R 22, 2.2. RESIDUE: Last Contained')
-    expect(text).toContain('49 CFR 173.29(c)(2)')
-    expect(text).toContain('200 kPa (29.0 psig)')
-  })
-
-  it('says whose judgement a description is and what is from memory', async () => {
-    const blend = papersLine({ contents: { refrigerant: 'R-410A', condition: 'clean', knownParts: ['R-410A'], nothingInIt: false } })
-    const mixed = papersLine({ cylinderId: 'f', contents: { refrigerant: null, condition: 'mixed', knownParts: ['R-22', 'R-290'], nothingInIt: false }, classification: { identification: 'UN3161', technicalNames: ['chlorodifluoromethane', 'propane'], reason: null } })
-    const text = readOn(await pagesOf(billOfLading(madePapers([blend, mixed]), false)))
-    expect(text).toContain('What is judgement, or from memory')
-    expect(text).toMatch(/UN1078, Refrigerant gases, n\.o\.s\. \(difluoromethane, pentafluoroethane\), 2\.2: .*from memory/)
-    expect(text).toContain('UN3161, Liquefied gas, flammable, n.o.s. (chlorodifluoromethane, propane), 2.1: The shipper has confirmed what was proposed.')
-  })
-
-  it('is marked as a draft on every page, with what is missing, until the shipment leaves', async () => {
-    const papers = madePapers([...Array.from({ length: 30 }, (_, index) => papersLine({ cylinderId: String(index), contents: { refrigerant: null, condition: 'unknown', knownParts: [], nothingInIt: false } }))], { emergency: { telephone: null, contract: null } })
-    const draft = await pagesOf(billOfLading(papers, true))
-    expect(draft.length).toBeGreaterThan(1)
-    for (const page of draft) expect(page[0]).toBe('DRAFT, not for the road')
-    expect(readOn(draft)).toContain('No emergency telephone is set.')
-    expect(readOn(await pagesOf(billOfLading(papers, false)))).not.toContain('DRAFT')
-  })
 })
 
 describe('a packing list', () => {
@@ -81,21 +45,6 @@ describe('a packing list', () => {
     pages.forEach((page, index) => expect(page).toContain(`Page ${index + 1} of ${pages.length}`))
     // 200 of 44.3 lb; 200 times 9,072 g = 1,814.4 kg = 4,000.1 lb.
     expect(pages.flat()).toEqual(expect.arrayContaining(['200 cyl.', '8860.0 lb', '4000.1 lb']))
-  })
-
-  it.each([
-    ['lb', { unit: 'lb', value: 44.3 }, '44.3 lb', '20.0 lb'],
-    ['lb-oz', { unit: 'lb-oz', lb: 44, oz: 5 }, '44 lb 5 oz', '20 lb 0 oz'],
-    ['kg', { unit: 'kg', value: 20.09 }, '20.09 kg', '9.07 kg'],
-  ] as const)('gives gross as it was read, and nets in %s', async (unit, gross, grossText, netText) => {
-    const texts = (await pagesOf(packingList(madePapers([papersLine({ gross })], { unit }), false))).flat()
-    expect(texts).toEqual(expect.arrayContaining(['24.3 lb', grossText, netText]))
-  })
-
-  it('says what the dock has to know, and what nobody knows', async () => {
-    const line = papersLine({ contents: { refrigerant: null, condition: 'mixed', knownParts: [], nothingInIt: false }, notes: ['mixed', 'retest overdue'], netGrams: null, gross: null, serial: null })
-    const text = readOn(await pagesOf(packingList(madePapers([line]), true)))
-    for (const said of ['mixed, retest overdue', 'not weighed', 'not known', 'March 2027', 'DRAFT, not for the road', 'Loaded by', 'Received by']) expect(text).toContain(said)
   })
 
   it('prints long names and names in other letters whole, never as empty boxes', async () => {
