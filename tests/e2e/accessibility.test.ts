@@ -170,10 +170,18 @@ const SCREENS: Record<string, Screen[]> = {
     { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record what it takes' }).click() },
     { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record a price' }).click() },
     { as: technician, at: demo => `/firms/${demo.reclaimer}` },
+    { as: manager, at: demo => `/firms/${demo.customer}`, after: page => page.getByText('Every change of what is theirs').click() },
   ],
+  'jobs/index.vue': [
+    { as: technician, at: () => '/jobs', after: page => page.getByRole('button', { name: 'New job' }).click() },
+    { as: manager, at: () => '/jobs?refrigerant=R-14' },
+  ],
+  'jobs/[id].vue': [{ as: technician, at: demo => `/jobs/${demo.job}` }, { as: auditor, at: demo => `/jobs/${demo.job}` }],
   'our-firm.vue': [{ as: admin, at: () => '/our-firm' }, { as: technician, at: () => '/our-firm' }],
   'scales.vue': [{ as: manager, at: () => '/scales' }, { as: technician, at: () => '/scales' }],
   'places.vue': [{ as: admin, at: () => '/places' }, { as: technician, at: () => '/places' }],
+  'plans/index.vue': [{ as: warehouse, at: () => '/plans' }, { as: technician, at: () => '/plans' }],
+  'plans/[id].vue': [{ as: warehouse, at: demo => `/plans/${demo.plan}` }, { as: technician, at: demo => `/plans/${demo.plan}` }],
   'pressure-check.vue': [
     { as: technician, at: () => '/pressure-check' },
     { as: technician, at: () => '/pressure-check?refrigerant=R-410A&pressureKPa=1869.8&temperatureC=26.667' },

@@ -1,8 +1,10 @@
 import { randomUUID } from 'node:crypto'
 import type { CustodyLogAnswer, CylinderRow, FleetAnswer } from '../../utils/contract/custody'
 import type { NewDockLinkAnswer } from '../../utils/contract/dock'
+import type { JobsAnswer } from '../../utils/contract/jobs'
 import type { MintAnswer } from '../../utils/contract/labels'
 import type { FirmsAnswer, PlacesAnswer } from '../../utils/contract/places'
+import type { PlansAnswer } from '../../utils/contract/plans'
 import type { ShipmentsAnswer, ShipmentState } from '../../utils/contract/shipments'
 import type { TestLotsAnswer, TestLotState, TestLotWithLines } from '../../utils/contract/testLots'
 import type { SessionAnswer } from '../../utils/contract/session'
@@ -27,9 +29,14 @@ export interface DemoFleet {
   lots: Record<Exclude<TestLotState, 'cancelled'>, string>
   /** Tokens of links to the dock: of a shipment on its way, and of one that is settled. */
   docks: Record<'dispatched' | 'settled', string>
+  /** The open plan. */
+  plan: string
   /** The technician's van. */
   van: string
   reclaimer: string
+  /** A customer with refrigerant banked, and a job of theirs whose note is in its second issue. */
+  customer: string
+  job: string
   invitation: string
   /** What the technician's phone shows to hand cylinders over. */
   offer: string
@@ -56,11 +63,14 @@ export async function demoFleet(server: TestServer, setUpToken: string): Promise
   const { items: events } = (await manager.get<CustodyLogAnswer>(`/api/cylinders/${usual}/events?limit=1`)).body
   const { items: places } = (await manager.get<PlacesAnswer>('/api/places')).body
   const van = places.find(({ technicianName }) => technicianName === 'Dayo Okafor')!.id
+  const { items: jobs } = (await manager.get<JobsAnswer>('/api/jobs?limit=200')).body
+  const job = jobs.find(({ equipment }) => equipment === 'Blast freezer')!
   const { items: [reclaimer] } = (await manager.get<FirmsAnswer>('/api/firms?kind=reclaimer')).body
+  const { items: [plan] } = (await manager.get<PlansAnswer>('/api/plans')).body
   await made(admin, '/api/people', INVITED)
   const left = await firstOfEach<ShipmentsAnswer, Exclude<ShipmentState, 'draft'>>(manager, '/api/shipments', ['ready', 'dispatched', 'arrived', 'settled', 'closed', 'cancelled'])
   return {
-    people, van, reclaimer: reclaimer!.id,
+    people, van, reclaimer: reclaimer!.id, plan: plan!.id, customer: job.customer.id!, job: job.id,
     codes: {
       usual, onNone: onNone!.toLowerCase(),
       empty: await codeOf('&lifecycle=in-service', row => row.nothingInIt && row.worstFinding === null),

@@ -20,7 +20,7 @@ export function logOf(index: number, story: readonly Told[]): AnyRecordedEvent[]
 export function planCylinder(log: readonly AnyRecordedEvent[], refrigerants: readonly string[], changes: Partial<ViewContext> = {}): PlanCylinder {
   const { state } = fold(log, VIEW_CONTEXT)
   const asked = (askedRefrigerant: string | null) => view(state, { ...VIEW_CONTEXT, ...changes, askedRefrigerant })
-  return { view: asked(null), asked: state.contents.nothingInIt ? new Map(refrigerants.map(name => [name, asked(name)])) : new Map(), standsOn: null }
+  return { view: asked(null), asked: state.contents.nothingInIt ? new Map(refrigerants.map(name => [name, asked(name)])) : new Map(), siteId: state.placeId, standsOn: null }
 }
 
 /** The first of several far more often than any other, so that many can be brought together. */

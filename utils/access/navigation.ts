@@ -10,6 +10,7 @@ interface Screen { label: string, to: string, permission: Permission, within?: r
 const SHIPPING: readonly Screen[] = [
   { label: 'Shipments', to: '/shipments', permission: 'shipments:read' },
   { label: 'Worth shipping', to: '/reclaim', permission: 'terms:read' },
+  { label: 'Plans', to: '/plans', permission: 'shipments:read' },
 ]
 
 const SCREENS: readonly Screen[] = [

@@ -8,6 +8,8 @@ export interface PlanCylinder {
   view: Planned
   /** Of one with nothing in it: the same, asked about each refrigerant that could go in. */
   asked: ReadonlyMap<string, Planned>
+  /** The place that it stands at, racks and shelves counted with the shop that they are in; null where nobody knows. */
+  siteId: string | null
   /** The open list or plan on which it stands, within a sentence; null where on none. */
   standsOn: string | null
 }

@@ -95,7 +95,8 @@ function whyItStays({ sorted: { problem, bars, lots }, found }: ConsolidationFou
   const others = problem.takes.filter(take => take.id !== id && mayGoOnto(problem, bar.lot!, take.lot) && !found.transfers.some(({ fromId }) => fromId === take.id))
   if (others.length === 0) return [alone(lots.get(bar.lot!)!)]
   const room = others.filter(({ isEmpty }) => !isEmpty).reduce((sum, take) => sum + take.roomGrams - found.transfers.filter(({ toId }) => toId === take.id).reduce((into, { grams }) => into + grams, 0), 0)
-  return [`To empty it frees none more: the others have room for ${massWords(Math.max(0, room), 'down')}.`]
+  const { netGrams } = problem.gives.find(give => give.id === id)!
+  return [`To empty it frees none more: it holds ${massWords(netGrams, 'nearest')}, and the others have room left for ${massWords(Math.max(0, room), 'down')}.`]
 }
 
 function alone({ refrigerant, condition }: Lot): string {

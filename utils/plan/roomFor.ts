@@ -1,14 +1,14 @@
-import { isEmptyByScale, type Planned } from '../custody/plan'
+import { isEmptyByScale } from '../custody/plan'
 import { scaleAccuracyGrams } from '../quantity/scale'
 import { whyNotFilled, type PlanCylinder } from './bars'
 import { limitGramsFor, type LimitContext } from './limitFor'
 import { lotKey, type Lot } from './lot'
 
 /** What a cylinder would be brought together with; null where its contents have no one name and owner, or it has no place. */
-export function lotOf({ contents, place }: Planned): Lot | null {
+export function lotOf({ view: { contents }, siteId }: PlanCylinder): Lot | null {
   const { refrigerant, condition, burnt, owners } = contents
-  if (place === null || refrigerant === null || owners.length > 1) return null
-  return { placeId: place.id, refrigerant, condition, burnt, ownerId: owners[0]?.ownerId ?? null }
+  if (siteId === null || refrigerant === null || owners.length > 1) return null
+  return { placeId: siteId, refrigerant, condition, burnt, ownerId: owners[0]?.ownerId ?? null }
 }
 
 /**
@@ -18,7 +18,7 @@ export function lotOf({ contents, place }: Planned): Lot | null {
  */
 export function roomFor(cylinder: PlanCylinder, lot: Lot, context: LimitContext): { grams: number } | { because: string } {
   const view = cylinder.view.contents.nothingInIt ? cylinder.asked.get(lot.refrigerant) ?? cylinder.view : cylinder.view
-  if (isEmptyByScale(view) && !view.contents.nothingInIt && !isOwnLot(view, lot)) return { because: `What is left in it is ${view.contents.refrigerant ?? 'not known'}. Draw a deep vacuum first.` }
+  if (isEmptyByScale(view) && !view.contents.nothingInIt && !isOwnLot(cylinder, lot)) return { because: `What is left in it is ${view.contents.refrigerant ?? 'not known'}. Draw a deep vacuum first.` }
   const because = whyNotFilled({ ...cylinder, view }, lot)
   if (because !== null) return { because }
   const { roomGrams, stopWeightGrams } = view.capacity
@@ -29,7 +29,7 @@ export function roomFor(cylinder: PlanCylinder, lot: Lot, context: LimitContext)
   return grams > 0 ? { grams } : { because: 'It has no room beyond what a scale may be off.' }
 }
 
-function isOwnLot(view: Planned, lot: Lot): boolean {
-  const own = lotOf(view)
+function isOwnLot(cylinder: PlanCylinder, lot: Lot): boolean {
+  const own = lotOf(cylinder)
   return own !== null && lotKey(own) === lotKey(lot)
 }

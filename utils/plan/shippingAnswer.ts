@@ -58,7 +58,7 @@ function judge({ reclaimers, day, nameOfFirm }: ShippingQuestion, cylinder: Plan
     const refused = refusedBy(terms, view)
     const price = priceOn(prices, { refrigerant: contents.refrigerant, condition: contents.condition, day })
     if (refused[0]) bars.push(`${firm.name}: ${refused[0].text}`)
-    else if (price === null) bars.push(`${firm.name}: no price of it is recorded for this.`)
+    else if (price === null) bars.push(`${firm.name}: no price is recorded for it.`)
     else worthCents.set(firm.id, creditCents(price.rate, contents.netGrams!))
   }
   return { cylinder, bars, offer: { id: view.id, netGrams: contents.netGrams!, worthCents } }

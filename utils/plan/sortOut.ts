@@ -29,7 +29,7 @@ export function sortOut(cylinders: readonly PlanCylinder[], rules: Consolidation
   const bars = new Map<string, { isEmpty: boolean, gives: string | null, takes: string | null, lot: string | null }>()
   for (const cylinder of holding) {
     const { view } = cylinder
-    const lot = lotOf(view)
+    const lot = lotOf(cylinder)
     const why = whyNotEmptied(cylinder)
     const room = lot === null ? { because: why ?? '' } : roomFor(cylinder, lot, context)
     if (lot !== null && why === null) {
@@ -45,7 +45,7 @@ export function sortOut(cylinders: readonly PlanCylinder[], rules: Consolidation
   const given = [...new Set(gives.map(({ lot }) => lot))].map(key => lots.get(key)!)
   for (const cylinder of cylinders.filter(({ view }) => isEmptyByScale(view))) {
     const { view } = cylinder
-    const here = given.filter(lot => view.place === null || lot.placeId === view.place.id)
+    const here = given.filter(lot => cylinder.siteId === null || lot.placeId === cylinder.siteId)
     const rooms = rules.useEmpty ? here.map(lot => ({ lot, room: roomFor(cylinder, lot, context) })) : []
     for (const { lot, room } of rooms) {
       if ('grams' in room) takes.push({ id: view.id, roomGrams: room.grams, isEmpty: true, lot: lotKey(lot) })

@@ -37,7 +37,6 @@ function sourceChanged(left: LeftToDo, id: string): string | null {
   const then = left.then.find(one => one.id === id)
   const { refrigerant, condition, netGrams } = view.contents
   if (then && (then.refrigerant !== refrigerant || then.condition !== condition)) return 'It holds something else than when the plan was made.'
-  if (then?.place && view.place?.id !== then.place.id) return `It is at ${view.place?.name ?? 'another place'} now.`
   const planned = left.transfers.filter(({ fromId }) => fromId === id).reduce((sum, { grams }) => sum + grams, 0)
   const mayBeOff = scaleAccuracyGrams((view.stamp?.tareWeightGrams ?? 0) + netGrams!)
   return Math.abs(netGrams! - planned) <= mayBeOff ? null : `It holds ${massWords(netGrams!, 'nearest')} now; ${massWords(planned, 'nearest')} of it was left to move.`
@@ -49,13 +48,13 @@ function targetChanged(left: LeftToDo, id: string): string | null {
   const mine = left.transfers.filter(({ toId }) => toId === id)
   const lots = mine.flatMap(({ fromId }) => {
     const source = left.now.get(fromId)
-    return (source && lotOf(source.view)) ?? []
+    return (source && lotOf(source)) ?? []
   })
-  const into = isEmptyByScale(cylinder.view) ? worst(lots) : lotOf(cylinder.view)
+  const into = isEmptyByScale(cylinder.view) ? worst(lots) : lotOf(cylinder)
   // Without a source that holds something there is nothing to judge: that is said of the source.
   if (lots.length === 0) return null
+  if (into !== null && [...lots, { placeId: cylinder.siteId }].some(({ placeId }) => placeId !== into.placeId)) return 'It no longer stands at one place with what was to come into it.'
   if (into === null || lots.some(lot => !mayJoin(lot, into, left.worseTogether))) return 'What was to come into it may not be brought together with what is in it now.'
-  if (cylinder.view.place?.id !== into.placeId) return `It is at ${cylinder.view.place?.name ?? 'another place'} now.`
   const room = roomFor(cylinder, into, left.limits)
   if ('because' in room) return room.because
   const planned = mine.reduce((sum, { grams }) => sum + grams, 0)

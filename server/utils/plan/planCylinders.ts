@@ -9,7 +9,7 @@ import { fleetFilter } from '../custody/fleetFilter'
 import { viewContext } from '../custody/foldContext'
 import { saidByOthers } from '../custody/saidByOthers'
 import type { Database } from '../database/database'
-import { directory } from '../directory/directory'
+import { directory, type Directory } from '../directory/directory'
 import { problem } from '../http/problem'
 
 /**
@@ -53,9 +53,21 @@ export async function planCylinders(db: Database, ids: readonly string[], asking
     return [{
       view: askedFor(null),
       asked: new Map(state.contents.nothingInIt ? refrigerants.map(refrigerant => [refrigerant, askedFor(refrigerant)]) : []),
+      siteId: siteOf(from, state.placeId),
       standsOn: standing.get(id) ?? null,
     }]
   })
+}
+
+/** The outermost place that a place stands in. */
+function siteOf({ places }: Directory, placeId: string | null): string | null {
+  const seen = new Set<string>()
+  let at = placeId
+  for (let parent = at; parent !== null && !seen.has(parent); parent = places.get(parent)?.parentId ?? null) {
+    seen.add(parent)
+    at = parent
+  }
+  return at
 }
 
 /** The open list or plan on which each cylinder stands, in words. */

@@ -3,6 +3,7 @@ import { expect, it } from 'vitest'
 import { solveHere } from '~~/tests/helpers/highs'
 import { anyFleet, planCylinder } from '~~/tests/helpers/planFleet'
 import { HOUR, START, TECHNICIAN, VIEW_CONTEXT } from '~~/tests/helpers/custody'
+import type { CylinderView } from '~~/utils/custody/cylinderView'
 import { readTransfer } from '~~/utils/custody/draft/transferred'
 import type { AnyRecordedEvent } from '~~/utils/custody/event'
 import { fold } from '~~/utils/custody/fold'
@@ -17,8 +18,8 @@ function viewOf(log: readonly AnyRecordedEvent[]) {
   return view(fold(log, VIEW_CONTEXT).state, { ...VIEW_CONTEXT, ...LATER })
 }
 
-function stops(log: readonly AnyRecordedEvent[]): string[] {
-  return viewOf(log).findings.filter(({ severity }) => severity === 'stop').map(({ code }) => code)
+function stopsOf(view: CylinderView): string[] {
+  return view.findings.filter(({ severity }) => severity === 'stop').map(({ code }) => code)
 }
 
 /** Both halves as the form would record them, each scale showing exactly what the plan says. */
@@ -49,18 +50,20 @@ it('no plan breaks a rule of filling, mixing, condition or owner: carried out to
     const logs = new Map(fleet.map(log => [log[0]!.cylinderId, log]))
     const { problem } = sortOut(fleet.map(log => planCylinder(log, ['R-22', 'R-410A'], LATER)), { useEmpty, worseTogether }, CONTEXT)
     const { transfers } = await consolidate(problem, solveHere, 20)
-    const before = new Map([...logs].map(([id, log]) => [id, { view: viewOf(log), stops: stops(log) }]))
+    const touched = [...new Set(transfers.flatMap(({ fromId, toId }) => [fromId, toId]))]
+    const before = new Map(touched.map(id => [id, viewOf(logs.get(id)!)]))
     carriedOut(logs, transfers)
     planned += transfers.length
+    const after = new Map(touched.map(id => [id, viewOf(logs.get(id)!)]))
+    for (const id of touched) {
+      const stood = stopsOf(before.get(id)!)
+      expect(stopsOf(after.get(id)!).filter(code => !stood.includes(code))).toEqual([])
+    }
     for (const { fromId, toId } of transfers) {
-      const [from, into] = [logs.get(fromId)!, logs.get(toId)!]
-      const told = fold(into, VIEW_CONTEXT).steps.slice(-1)[0]!.findings.filter(({ severity }) => severity === 'stop')
+      const told = fold(logs.get(toId)!, VIEW_CONTEXT).steps.at(-1)!.findings.filter(({ severity }) => severity === 'stop')
       expect(told).toEqual([])
-      expect(stops(into).filter(code => !before.get(toId)!.stops.includes(code))).toEqual([])
-      expect(stops(from).filter(code => !before.get(fromId)!.stops.includes(code))).toEqual([])
-      const [gave, took] = [before.get(fromId)!.view, viewOf(into)]
-      const had = before.get(toId)!.view
-      expect(viewOf(from).contents.netGrams).toBe(0)
+      const [gave, had, took] = [before.get(fromId)!, before.get(toId)!, after.get(toId)!]
+      expect(after.get(fromId)!.contents.netGrams).toBe(0)
       expect(took.contents.netGrams).toBeLessThanOrEqual(took.capacity.fillLimitGrams!)
       expect(took.contents.refrigerant).toBe(gave.contents.refrigerant)
       expect(took.contents.owners.map(({ ownerId }) => ownerId)).toEqual([gave.contents.owners[0]!.ownerId])
@@ -69,6 +72,6 @@ it('no plan breaks a rule of filling, mixing, condition or owner: carried out to
       expect(took.contents.condition === gave.contents.condition || worse).toBe(true)
       if (!had.contents.nothingInIt && had.contents.netGrams! > 200) expect(took.contents.condition).toBe(had.contents.condition)
     }
-  }), { numRuns: 100 })
-  expect(planned).toBeGreaterThan(100)
+  }), { numRuns: 60 })
+  expect(planned).toBeGreaterThan(60)
 }, 60_000)

@@ -1,0 +1,14 @@
+import type { Database } from '../database/database'
+import { makePlan } from '../plan/makePlan'
+import { HOUR } from './calendar'
+import { demoAccess, type Cast } from './cast'
+import { seededRandom } from './random'
+
+const SEED = 20_261_220
+
+/** A plan of this morning that nobody has begun: what to bring together in the second shop. */
+export async function planTogether(db: Database, { people, shops }: Cast, now: number): Promise<void> {
+  const { uuid } = seededRandom(SEED)
+  const question = { kind: 'consolidation', id: uuid(now), placeId: shops[1].id, useEmpty: false, worseTogether: false } as const
+  await makePlan(db, question, demoAccess(people.warehouse), now - 3 * HOUR)
+}
