@@ -137,7 +137,7 @@ describe('what is worth shipping', () => {
     await posted(firm.warehouse.client, [{ ...eventOf(aboard.id, 'moved'), placeId: van.id, details: {} }])
 
     const answer = await worth()
-    expect(answer).toMatchObject({ stock: 6, lookedAt: 6, places: [{ name: 'North shop' }], elsewhere: [{ place: { name: 'Van 02' }, cylinders: 1, netGrams: 5_670 }] })
+    expect(answer).toMatchObject({ stock: 6, isAll: true, places: [{ name: 'North shop' }], elsewhere: [{ place: { name: 'Van 02' }, cylinders: 1, netGrams: 5_670 }] })
     expect(answer.offers).toHaveLength(1)
     const [offer] = answer.offers
     expect(offer!.lines).toEqual([{

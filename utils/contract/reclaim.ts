@@ -91,8 +91,8 @@ export interface WorthAnswer {
   owners: Named[]
   offers: WorthOffer[]
   elsewhere: StockElsewhere[]
-  /** Cylinders with contents in stock and on no list. */
+  /** Cylinders with contents in stock and on no list that were looked at. */
   stock: number
-  /** How many of them were looked at, the heaviest first: fewer only in a very large fleet. */
-  lookedAt: number
+  /** Whether these are all of them; in a very large fleet only the heaviest are looked at. */
+  isAll: boolean
 }

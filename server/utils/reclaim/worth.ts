@@ -32,7 +32,7 @@ export function worthToday(db: Database, nowMs: number): Promise<WorthAnswer> {
 async function worthAnswer(db: Database, nowMs: number): Promise<WorthAnswer> {
   const from = await directory(db)
   const today = dayOfInstant(nowMs, from.timeZone)
-  const { lines, stock } = await stockLines(db, from, nowMs)
+  const { lines, isAll } = await stockLines(db, from, nowMs)
   const { firm: firmName, place: placeName } = namesOf(from)
   const reclaimers = await Promise.all([...from.firms.values()].filter(({ kind, active }) => kind === 'reclaimer' && active)
     .sort((a, b) => a.name.localeCompare(b.name, 'en'))
@@ -40,7 +40,7 @@ async function worthAnswer(db: Database, nowMs: number): Promise<WorthAnswer> {
   const takers = await Promise.all(reclaimers.flatMap(({ id, terms }) => terms ? [takerOf(db, id, terms)] : []))
   const candidates = await withContamination(db, inShops(lines, from), takers)
   return {
-    today, stock, lookedAt: lines.length, reclaimers,
+    today, stock: lines.length, isAll, reclaimers,
     places: named(candidates.map(({ placeId }) => placeId), placeName),
     owners: named(candidates.flatMap(({ ownerIds }) => ownerIds.filter(id => id !== null)), firmName),
     offers: worthOffers(candidates, takers, today),
