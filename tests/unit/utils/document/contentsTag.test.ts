@@ -52,6 +52,18 @@ describe('a cylinder without a contents tag', () => {
   })
 })
 
+describe('a contents tag of mixed refrigerants', () => {
+  // 49 CFR 172.301(b): the technical names on the package too.
+  it('says how its shipper has it travel, once the shipper has said so, and not before', () => {
+    const mixed = viewOf({ refrigerant: null, condition: 'mixed' })
+    const entry = { ...ENTRY, un: 'UN1078', properShippingName: 'Refrigerant gases, n.o.s. (chlorodifluoromethane, propane)' }
+    expect(noTagBecause(mixed, true)).toBeNull()
+    expect(contentsTag(mixed, LOG, entry, true)).toMatchObject({ refrigerant: 'Mixed', kind: 'Recovered', entry })
+    expect(() => contentsTag(mixed, LOG, entry)).toThrow(RangeError)
+    expect(noTagBecause(viewOf({ nothingInIt: true, refrigerant: null }), true)).toContain('Nothing is in it')
+  })
+})
+
 describe('a contents tag', () => {
   it('names what is in it, how much, and who recovered it on which day', () => {
     const tag = contentsTag(viewOf(), LOG, ENTRY)

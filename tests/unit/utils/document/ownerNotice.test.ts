@@ -9,7 +9,7 @@ const facts = (changes: Partial<NoticeFacts> = {}): NoticeFacts => ({
   result: 'condemned', sender: { name: 'Quillfen Cooling', telephone: '555-0100' }, owner: { name: 'Dunmarrow Dairy', address: '1 Creamery Road' },
   test: { month: '2026-07', method: 'visual', requalifier: 'Ostwick Cylinder Tests', rin: 'A123' }, day: '30 Jul 2026', ...changes,
 })
-const saidIn = (block: PaperBlock): string[] => block.kind === 'facts' ? block.rows.map(({ term, value }) => `${term}: ${value}`) : block.kind === 'signatures' ? block.lines : [block.text]
+const saidIn = (block: PaperBlock): string[] => block.kind === 'facts' ? block.rows.map(({ term, value }) => `${term}: ${value}`) : block.kind === 'signatures' ? block.lines : 'text' in block ? [block.text] : []
 const said = (...args: Parameters<typeof ownerNotice>) => ownerNotice(...args).blocks.flatMap(saidIn).join('\n').replaceAll('\u00A0', ' ')
 
 describe('whether an owner is to be told', () => {
