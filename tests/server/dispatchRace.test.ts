@@ -8,10 +8,14 @@ import { cancelDraft, createDraft } from '../../server/utils/cylinder-lists/draf
 import { openDatabase, type Database } from '../../server/utils/database/database'
 import { createFirm } from '../../server/utils/firms/createFirm'
 import { createPlace } from '../../server/utils/places/createPlace'
+import { actsOf } from '../../server/utils/shipments/acts'
 import { cancelShipment } from '../../server/utils/shipments/cancelShipment'
 import { changeLines } from '../../server/utils/shipments/changeLines'
 import { dispatchShipment } from '../../server/utils/shipments/dispatchShipment'
+import { readyShipment } from '../../server/utils/shipments/readyShipment'
+import { returnLines } from '../../server/utils/shipments/returnLines'
 import { theShipment } from '../../server/utils/shipments/shipments'
+import { weighLine } from '../../server/utils/shipments/weighLine'
 import { dispatchTestLot } from '../../server/utils/test-lots/dispatchTestLot'
 import { returnTestLot } from '../../server/utils/test-lots/returnTestLot'
 import { theTestLot } from '../../server/utils/test-lots/testLots'
@@ -112,6 +116,31 @@ describe('a shipment that is changed while it is sent off', () => {
     await dispatch(overtaken(async () => undefined))
     expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim'])
     expect(await theShipment(db, draft.id)).toMatchObject({ state: 'dispatched', dispatchedAt: '2026-05-04T15:00:00.000Z' })
+  })
+
+  it('is told who sent it off where somebody else was first', async () => {
+    await expect(dispatch(overtaken(() => dispatch(db)))).rejects.toMatchObject({ details: { status: 409, title: 'It has left already', type: 'already-left' } })
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim'])
+  })
+
+  it('leaves nothing behind where a line was weighed anew meanwhile, though it was made ready again', async () => {
+    const again = async () => {
+      await weighLine(db, draft.id, { ...act(), ref: first, gross: lb(39) }, MONA.personId, NOW + 1)
+      await readyShipment(db, draft.id, { id: randomUUID(), occurredAt: new Date(NOW + 1).toISOString() }, MONA, NOW + 1)
+    }
+    await expect(dispatch(overtaken(again))).rejects.toMatchObject({ details: { status: 409, title: 'The lines have changed' } })
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled'])
+  })
+
+  it('takes what came back once where two people do it at the same moment, and closes with the last of it', async () => {
+    await dispatch(db)
+    const takeBack = (through: Database) => returnLines(through, draft.id, {
+      occurredAt: new Date(NOW + 1).toISOString(), placeId: shopId, reason: 'Refused', lines: [{ cylinderId: first, eventId: randomUUID(), gross: lb(40) }],
+    }, MONA, NOW + 1)
+    await expect(takeBack(overtaken(() => takeBack(db)))).rejects.toMatchObject({ details: { status: 409 } })
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim', 'returned'])
+    expect((await theShipment(db, draft.id)).state).toBe('closed')
+    expect((await actsOf(db, draft.id)).map(({ kind }) => kind)).toEqual(['weighed', 'carrier-chosen', 'ready', 'dispatched', 'returned', 'closed'])
   })
 
   it('is dated as its events are where the sender\'s clock runs two days fast', async () => {

@@ -1,4 +1,5 @@
 import type { InStatement } from '@libsql/client'
+import { v7 as uuid } from 'uuid'
 import type { Access } from '~~/utils/access/roles'
 import type { ShipmentReturns } from '~~/utils/contract/shipments'
 import { areRecorded, refuseRefused } from '../cylinder-lists/lineCommands'
@@ -56,8 +57,8 @@ function comingBack(shipmentId: string, body: ShipmentReturns, { access: { perso
     id: line.eventId, shipmentId, cylinderId: line.cylinderId, kind: 'returned', details: { gross: line.gross, placeId: body.placeId, reason: body.reason },
     by: { personId }, occurredAt: at, recordedAt: now,
   })
-  const isOut = `(SELECT count(*) FROM shipment_lines WHERE shipment_id = shipments.id)
-    > (SELECT count(DISTINCT cylinder_id) FROM shipment_acts WHERE shipment_id = shipments.id AND kind = 'returned')`
+  const isAllBack = `(SELECT count(*) FROM shipment_lines WHERE shipment_id = shipments.id)
+    = (SELECT count(DISTINCT cylinder_id) FROM shipment_acts WHERE shipment_id = shipments.id AND kind = 'returned')`
   const ids = JSON.stringify(body.lines.map(line => line.cylinderId))
   return [
     {
@@ -72,8 +73,11 @@ function comingBack(shipmentId: string, body: ShipmentReturns, { access: { perso
       sql: `DELETE FROM open_lines WHERE list_id = ? AND cylinder_id IN (SELECT value FROM json_each(?)) AND ${guard.sql}`,
       args: [shipmentId, ids, ...guard.args],
     },
+    actStatement({
+      id: uuid(), shipmentId, kind: 'closed', details: { why: 'All of it came back.' }, by: { personId }, occurredAt: at, recordedAt: now,
+    }, { sql: `EXISTS (SELECT 1 FROM shipments WHERE id = ? AND ${isAllBack}) AND ${guard.sql}`, args: [shipmentId, ...guard.args] }),
     {
-      sql: `UPDATE shipments SET state = 'closed', closed_at = ? WHERE id = ? AND NOT (${isOut}) AND ${guard.sql}`,
+      sql: `UPDATE shipments SET state = 'closed', closed_at = ? WHERE id = ? AND ${isAllBack} AND ${guard.sql}`,
       args: [at, shipmentId, ...guard.args],
     },
   ]
