@@ -3,13 +3,13 @@ import { formatMass } from '../quantity/mass'
 import { formatMoney } from '../reclaim/price'
 import { MATERIALS_OF_TRADE } from '../transport/vanLoad'
 import { cylinderName } from '../shipment/changedLines'
-import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type ShortVanFacts, type VanFacts, type WorthFacts } from './nowFacts'
+import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type PlanFacts, type ShortVanFacts, type VanFacts, type WorthFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
 
 /** The lines about what is aboard, full or lacking in the shop, on lists, and without a label. */
 export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
-  const { vans = [], shortVans = [], full = [], worthPickUp, fewEmpty = [], unlabelled, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts } = facts
+  const { vans = [], shortVans = [], full = [], worthPickUp, fewEmpty = [], unlabelled, shipmentsAway, lotsAway, plansOpen, shipmentDrafts, lotDrafts } = facts
   return [
     ...vans.map(van => vanLine(van, vans.length === 1, reader)),
     shortVansLine(shortVans, reader),
@@ -18,6 +18,7 @@ export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
     fewEmptyLine(fewEmpty),
     shipmentsAway && awayLine('shipments-away', shipmentsAway, reader),
     lotsAway && awayLine('lots-away', lotsAway, reader),
+    plansOpen && planLine(plansOpen),
     shipmentDrafts && draftLine('shipment-drafts', shipmentDrafts, reader),
     lotDrafts && draftLine('lot-drafts', lotDrafts, reader),
     unlabelled && unlabelledLine(unlabelled),
@@ -95,6 +96,15 @@ function awayLine(topic: 'shipments-away' | 'lots-away', { count, id, number, si
     ...(count === 1
       ? { verb: mayClear ? (isShipment ? 'Settle it' : 'Record the results') : 'Open it', to: isShipment ? `/shipments/${id}${mayClear ? '/settlement' : ''}` : `/retests/${id}` }
       : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=dispatched' : '/retests' }),
+  }
+}
+
+function planLine({ id, number, plans, steps }: PlanFacts): DraftLine {
+  return {
+    topic: 'plan-steps', kind: 'att', number: steps,
+    sentence: `${counted(steps, 'transfer is', 'transfers are')} planned that ${steps === 1 ? 'frees a cylinder' : 'free cylinders'}.`,
+    reason: plans === 1 ? `Plan ${number} is open. Its cylinders are on no other plan meanwhile.` : `${plans} plans are open, the oldest is plan ${number}.`,
+    ...plans === 1 ? { verb: 'Open the plan', to: `/plans/${id}` } : { verb: 'Show the plans', to: '/plans' },
   }
 }
 

@@ -24,6 +24,9 @@ export interface WorthFacts { firm: string, place: string, refrigerant: string |
 /** Shipments or test lots in one state. `since` is the earliest instant (UTC milliseconds) among them. */
 export interface ListFacts { count: number, id: string, number: number, since: number }
 
+/** Plans of what to bring together that are not done: the oldest of them, and the steps that all have left. */
+export interface PlanFacts { id: string, number: number, plans: number, steps: number }
+
 /** Lines of the custody log of the last days that an auditor looks at. */
 export interface EntryFacts { count: number, cylinders: number, newest: Pick<CylinderRow, 'id' | 'labelCode' | 'serial'> | null }
 
@@ -69,6 +72,7 @@ export interface NowFacts {
   unlabelled?: { count: number, first: CylinderRow[] }
   shipmentsAway?: ListFacts
   lotsAway?: ListFacts
+  plansOpen?: PlanFacts
   shipmentDrafts?: ListFacts
   lotDrafts?: ListFacts
   /** The next rule of the firm that begins soon. */

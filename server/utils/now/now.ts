@@ -15,6 +15,7 @@ import { cylinderFacts, fewEmptyFacts, fullFacts, unlabelledFacts, unseenFacts }
 import { lateFacts } from './lateFacts'
 import { listFacts, shortVanFacts, vanFacts } from './listFacts'
 import { entryFacts, logCheckFacts, mailFacts, peopleAndPlaces, ruleFacts, scaleFacts } from './recordFacts'
+import { planFacts } from './planFacts'
 import { unsignedFacts } from './signatureFacts'
 import { worthFacts } from './worthFacts'
 
@@ -33,7 +34,7 @@ export async function nowAnswer(db: Database, access: Access, unit: MassUnit, no
 async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTopic>, personId: string, nowMs: number): Promise<NowFacts> {
   const bounds = dateBounds(from, nowMs)
   const when = <T>(topic: NowTopic, look: () => Promise<T>) => topics.has(topic) ? look() : undefined
-  const [cylinders, unseen, full, worthPickUp, fewEmpty, unlabelled, vans, shortVans, lists, toCountersign, unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed] = await Promise.all([
+  const [cylinders, unseen, full, worthPickUp, fewEmpty, unlabelled, vans, shortVans, lists, plansOpen, toCountersign, unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed] = await Promise.all([
     cylinderFacts(db, fleetQuestions(topics, personId), bounds, nowMs),
     when('not-seen', () => unseenFacts(db, from, bounds, nowMs)),
     when('full', () => fullFacts(db, bounds)),
@@ -43,6 +44,7 @@ async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTo
     when('van-load', () => vanFacts(db, from, personId, nowMs)),
     when('vans-short', () => shortVanFacts(db, from, nowMs)),
     when('shipment-drafts', () => listFacts(db, nowMs)),
+    when('plan-steps', () => planFacts(db, nowMs)),
     when('to-countersign', () => unsignedFacts(db, from, personId)),
     when('unsigned', () => unsignedFacts(db, from)),
     when('came-late', () => lateFacts(db, from, nowMs)),
@@ -52,7 +54,7 @@ async function factsFor(db: Database, from: Directory, topics: ReadonlySet<NowTo
     when('mail-failed', () => mailFacts(db)),
   ])
   return {
-    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, worthPickUp, fewEmpty, unlabelled, vans, shortVans, ...lists, toCountersign: toCountersign?.[0], unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed,
+    cylinders, lastSoonMonth: bounds.lastSoonMonth, unseen, full, worthPickUp, fewEmpty, unlabelled, vans, shortVans, ...lists, plansOpen, toCountersign: toCountersign?.[0], unsigned, cameLate, papersDiffer, logCheck, entries, mailFailed,
     rule: ruleFacts(from, nowMs), scaleChecks: scaleFacts(from, nowMs), ...peopleAndPlaces(from),
   }
 }

@@ -95,6 +95,18 @@ describe('what a technician holds', () => {
   })
 })
 
+describe('what is planned', () => {
+  it('leads to the plan that is open, and to all where several are, also who carries it out', () => {
+    expect(linesFor('technician', { plansOpen: { id: ID, number: 3, plans: 1, steps: 1 } })).toMatchObject([{
+      topic: 'plan-steps', number: 1, sentence: '1 transfer is planned that frees a cylinder.', reason: 'Plan 3 is open. Its cylinders are on no other plan meanwhile.', to: `/plans/${ID}`,
+    }])
+    expect(linesFor('warehouse', { plansOpen: { id: ID, number: 3, plans: 2, steps: 9 } })[0]).toMatchObject({
+      sentence: '9 transfers are planned that free cylinders.', reason: '2 plans are open, the oldest is plan 3.', to: '/plans',
+    })
+    expect(linesFor('auditor', { plansOpen: { id: ID, number: 3, plans: 1, steps: 1 } })).toEqual([])
+  })
+})
+
 describe('what is worth a pick-up', () => {
   const worthPickUp = { firm: 'Halvern', place: 'North shop', refrigerant: 'R-22', cylinders: 2, netGrams: 61_734, comesToCents: 62_945 }
 

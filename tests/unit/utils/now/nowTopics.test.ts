@@ -3,8 +3,8 @@ import { fleetQuestions } from '../../../../utils/now/fleetQuestions'
 import { NOW_TOPICS, topicOrder, topicsFor } from '../../../../utils/now/nowTopics'
 
 describe('what may wait for whom', () => {
-  it('is for a technician only what concerns what that person holds, drives and has to sign', () => {
-    expect([...topicsFor(['technician'])].filter(topic => !topic.startsWith('held-'))).toEqual(['van-load', 'to-countersign'])
+  it('is for a technician only what that person holds, drives, has to sign and may carry out', () => {
+    expect([...topicsFor(['technician'])].filter(topic => !topic.startsWith('held-'))).toEqual(['van-load', 'to-countersign', 'plan-steps'])
   })
 
   it('is for the auditor the log alone, and for the administrator neither the log nor cylinders', () => {
