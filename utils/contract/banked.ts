@@ -1,8 +1,31 @@
-import type { Named } from '../custody/cylinderView'
+import type { Condition, Named } from '../custody/cylinderView'
 import type { EventKind } from '../custody/kinds'
 import type { MovementCause } from '../custody/movement'
-import type { BankedIn } from '../jobs/banked'
-import type { NamedCylinder } from '../jobs/jobFills'
+import type { NamedCylinder } from './jobs'
+
+/** A cylinder that holds refrigerant of a customer. */
+export interface BankedCylinder extends NamedCylinder {
+  /** Theirs by share; null where it is not weighed. */
+  grams: number | null
+  /** Of that, by the weight it rests on; null where it rests on none. */
+  uncertaintyGrams: number | null
+  /** Another's refrigerant is in it too: it may go to a reclaimer only. */
+  isShared: boolean
+  /** Since when something of theirs has been in it without a break, ISO 8601; null where no weight told it. */
+  since: string | null
+}
+
+/** What is banked of one refrigerant in one condition. */
+export interface BankedIn {
+  refrigerant: string | null
+  condition: Condition
+  /** Of the cylinders that are weighed; null where none is. */
+  grams: number | null
+  uncertaintyGrams: number | null
+  /** Cylinders that are not weighed. */
+  notKnown: number
+  cylinders: BankedCylinder[]
+}
 
 /** A change of what is a customer's. */
 export interface BankedMovement {

@@ -1,10 +1,8 @@
 import { z } from 'zod'
-import type { JobFill, JobDraw } from '../jobs/jobFills'
-import type { JobCaution } from '../jobs/jobCautions'
-import type { JobCorrection } from '../jobs/jobCorrections'
-import type { Named } from '../custody/cylinderView'
+import type { Condition, Named } from '../custody/cylinderView'
+import type { DetailsOf } from '../custody/schema'
 import type { MassReading } from '../quantity/mass'
-import { APPLIANCES, CIRCUMSTANCES, MACHINE_MADE, type RequiredLevel } from '../recovery/types'
+import { APPLIANCES, CIRCUMSTANCES, MACHINE_MADE, type LevelVerdict, type RequiredLevel } from '../recovery/types'
 import type { MailOutcome } from './people'
 import { id, massReading, page, printedLine, type Page } from './parts'
 
@@ -81,6 +79,47 @@ export interface JobLine extends Job {
   /** Fills of which nobody knows how much went in. */
   notKnown: number
 }
+
+/** A cylinder as people know it. */
+export interface NamedCylinder { id: string, labelCode: string | null, serial: string | null }
+
+/** Who did it: the name, and what is on record of the certification; null where nothing is. */
+export interface Doer { id: string, name: string, certification: string | null }
+
+/** What was recovered into one cylinder. Instants are ISO 8601. */
+export interface JobFill {
+  eventId: string
+  cylinder: NamedCylinder
+  at: string
+  refrigerant: string | null
+  condition: Condition | null
+  grossBefore: MassReading | null
+  grossAfter: MassReading
+  /** By weighing; null where the weights do not tell. */
+  netGrams: number | null
+  /** Of that, from both readings; null where one of them is not on the event. */
+  uncertaintyGrams: number | null
+  method: string | null
+  /** null where nothing was read of the system. */
+  reached: LevelVerdict | null
+  by: Doer
+  supervisor: Doer | null
+  /** Whose the refrigerant is; null = the contractor's. */
+  ownerId: string | null
+  /** Why it does not count in the firm's totals; null where it does. */
+  apart: 'practice' | 'unsigned' | null
+  /** A correction gave it other details. */
+  corrected: boolean
+}
+
+/** Refrigerant drawn for a job. */
+export interface JobDraw { eventId: string, cylinder: NamedCylinder, at: string, purpose: DetailsOf<'drawn'>['purpose'], netGrams: number | null, apart: JobFill['apart'], by: Doer }
+
+/** A correction that changed what a job's note says. */
+export interface JobCorrection { eventId: string, at: string, reason: string }
+
+/** What wants doing about a job, with its source. */
+export interface JobCaution { code: 'vacuum-level' | 'disposal-record' | 'system-dependent-limit' | 'weigh-again' | 'not-certified' | 'two-refrigerants', text: string, source: string }
 
 /** A note that went to the customer. */
 export interface SentNote { issue: number, recipient: string, sentAt: string, sentBy: string, outcome: MailOutcome }

@@ -1,5 +1,4 @@
-import type { JobAnswer } from '../contract/jobs'
-import type { JobDraw, JobFill, NamedCylinder } from '../jobs/jobFills'
+import type { JobAnswer, JobDraw, JobFill, NamedCylinder } from '../contract/jobs'
 import { massWords } from '../custody/findings/words'
 import { formatLabelCode } from '../label/code'
 import { formatDay, formatTime, wallClock } from '../quantity/instant'

@@ -1,31 +1,6 @@
-import type { Condition } from '../custody/cylinderView'
+import type { BankedCylinder, BankedIn } from '../contract/banked'
 import { partsOf } from '../custody/fold/ledger'
 import type { CylinderState } from '../custody/state'
-import type { NamedCylinder } from './jobFills'
-
-/** A cylinder that holds refrigerant of a customer. */
-export interface BankedCylinder extends NamedCylinder {
-  /** Theirs by share; null where it is not weighed. */
-  grams: number | null
-  /** Of that, by the weight it rests on; null where it rests on none. */
-  uncertaintyGrams: number | null
-  /** Another's refrigerant is in it too: it may go to a reclaimer only. */
-  isShared: boolean
-  /** Since when something of theirs has been in it without a break, ISO 8601; null where no weight told it. */
-  since: string | null
-}
-
-/** What is banked of one refrigerant in one condition. */
-export interface BankedIn {
-  refrigerant: string | null
-  condition: Condition
-  /** Of the cylinders that are weighed; null where none is. */
-  grams: number | null
-  uncertaintyGrams: number | null
-  /** Cylinders that are not weighed. */
-  notKnown: number
-  cylinders: BankedCylinder[]
-}
 
 /** One change of what is theirs in a cylinder. */
 export interface OwnerMovement { cylinderId: string, at: number, grams: number }

@@ -1,10 +1,8 @@
+import type { JobCaution, JobFill } from '../contract/jobs'
 import { massWords } from '../custody/findings/words'
 import { readingGrams, type MassReading } from '../quantity/mass'
 import { systemDependentLimit } from '../recovery/systemDependentLimit'
-import { recoveredGrams, type JobFill } from './jobFills'
-
-/** What wants doing about a job, with its source. */
-export interface JobCaution { code: 'vacuum-level' | 'disposal-record' | 'system-dependent-limit' | 'weigh-again' | 'not-certified' | 'two-refrigerants', text: string, source: string }
+import { recoveredGrams } from './jobFills'
 
 /** What of a job its cautions rest on. */
 export interface JudgedJob { refrigerant: string | null, charge: MassReading | null }

@@ -1,7 +1,5 @@
+import type { JobCorrection } from '../contract/jobs'
 import type { AnyRecordedEvent, RecordedEvent } from '../custody/event'
-
-/** A correction that changed what a job's note says. */
-export interface JobCorrection { eventId: string, at: string, reason: string }
 
 /**
  * The corrections of a job's fills and draws, of those that came to it and of those that left it, in order of recording. A

@@ -1,46 +1,11 @@
+import type { Doer, JobDraw, JobFill, NamedCylinder } from '../contract/jobs'
 import { applyCorrections, type Standing } from '../custody/corrections'
 import type { AnyRecordedEvent, RecordedEvent } from '../custody/event'
 import { signaturesOf, needsSignature } from '../custody/signatures'
-import type { Condition } from '../custody/cylinderView'
 import { readingGrams, type MassReading } from '../quantity/mass'
 import { scaleAccuracyGrams, type Scale } from '../quantity/scale'
 import { judgeLevel } from '../recovery/judgeLevel'
-import type { LevelVerdict, RequiredLevel } from '../recovery/types'
-
-/** A cylinder as people know it. */
-export interface NamedCylinder { id: string, labelCode: string | null, serial: string | null }
-
-/** Who did it: the name, and what is on record of the certification; null where nothing is. */
-export interface Doer { id: string, name: string, certification: string | null }
-
-/** What was recovered into one cylinder. Instants are ISO 8601. */
-export interface JobFill {
-  eventId: string
-  cylinder: NamedCylinder
-  at: string
-  refrigerant: string | null
-  condition: Condition | null
-  grossBefore: MassReading | null
-  grossAfter: MassReading
-  /** By weighing; null where the weights do not tell. */
-  netGrams: number | null
-  /** Of that, from both readings; null where one of them is not on the event. */
-  uncertaintyGrams: number | null
-  method: string | null
-  /** null where nothing was read of the system. */
-  reached: LevelVerdict | null
-  by: Doer
-  supervisor: Doer | null
-  /** Whose the refrigerant is; null = the contractor's. */
-  ownerId: string | null
-  /** Why it does not count in the firm's totals; null where it does. */
-  apart: 'practice' | 'unsigned' | null
-  /** A correction gave it other details. */
-  corrected: boolean
-}
-
-/** Refrigerant drawn for a job. */
-export interface JobDraw { eventId: string, cylinder: NamedCylinder, at: string, purpose: RecordedEvent<'drawn'>['details']['purpose'], netGrams: number | null, apart: JobFill['apart'], by: Doer }
+import type { RequiredLevel } from '../recovery/types'
 
 /** What the lines of a job are read from, beside the log. */
 export interface JobContext {

@@ -28,10 +28,10 @@ const MAJOR = { appliance: 'other', circumstances: 'major', machineMade: 'since-
 export function playJobs(stage: Stage): DemoJob[] {
   const random = seededRandom(SEED)
   const own: Stage = { ...stage, random, script: newScript(random, stage.endAt) }
-  const made = [...everyday(own, stage.script.events), ...banked(own), ...consent(own), ...corrected(own)]
+  const list = [...everyday(own, stage.script.events), ...banked(own), ...consent(own), ...corrected(own)]
   elsewhere(own)
   stage.script.events.push(...own.script.events)
-  return made.sort((a, b) => a.createdAt - b.createdAt)
+  return list.sort((a, b) => a.createdAt - b.createdAt)
 }
 
 /** The jobs as rows, numbered in their order. */

@@ -16,7 +16,7 @@ export interface TransferDraft {
   inBefore: MassReading | null
   inAfter: MassReading | null
   /** Whose cylinder it goes into agrees. */
-  ownerConsents: boolean
+  ownerConsents?: boolean
 }
 
 /** A transfer in which nothing was said yet: out of a cylinder that holds something, into one that holds nothing. */

@@ -1,9 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import type { JobAnswer } from '../../../../utils/contract/jobs'
+import type { JobAnswer, JobFill } from '../../../../utils/contract/jobs'
 import type { PaperBlock } from '../../../../utils/document/paper'
 import { paperPages } from '../../../../utils/document/paper'
 import { recoveryNote } from '../../../../utils/document/recoveryNote'
-import type { JobFill } from '../../../../utils/jobs/jobFills'
 
 const fill: JobFill = {
   eventId: 'e1', cylinder: { id: 'c1', labelCode: '7K3M9Q2TX', serial: 'A1001' }, at: '2026-07-01T18:00:00.000Z', refrigerant: 'R-22', condition: null,

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import type { MassReading } from '~~/utils/quantity/mass'
 import { jobCautions, type JudgedJob } from '~~/utils/jobs/jobCautions'
-import type { JobFill } from '~~/utils/jobs/jobFills'
+import type { JobFill } from '~~/utils/contract/jobs'
 
 const REACHED = { verdict: 'reached', because: 'deep enough', shortBy: null, absoluteMmHg: 100, heldMinutes: 5 } as const
 const SHORT = { ...REACHED, verdict: 'not-reached', because: '2 inHg short', shortBy: 2 } as const
