@@ -23,8 +23,8 @@ export interface KeptDockPhoto {
   problem: ProblemDetails | null
 }
 
-/** The shipment as a link last showed it, so that its page opens without a network. */
-export interface KeptDockCopy { linkId: string, shipmentId: string, answer: DockAnswer }
+/** The shipment as a link last showed it, so that its page opens without a network; without it once the link opens nothing. */
+export interface KeptDockCopy { linkId: string, shipmentId: string, answer: DockAnswer | null }
 
 interface Box extends DBSchema {
   copies: { key: string, value: KeptDockCopy }
@@ -87,7 +87,6 @@ export function dockBox() {
   return {
     copy: (linkId: string) => within(database => database.get('copies', linkId)),
     keepCopy: (copy: KeptDockCopy) => within(database => database.put('copies', copy)),
-    forgetCopy: (linkId: string) => within(database => database.delete('copies', linkId)),
     /** In the order in which they were made: their ids count up. */
     entries: (shipmentId: string) => within(database => database.getAllFromIndex('entries', 'shipment', shipmentId)),
     photos: (shipmentId: string) => within(database => database.getAllFromIndex('photos', 'shipment', shipmentId)),

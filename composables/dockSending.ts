@@ -1,6 +1,7 @@
 import type { DockBox, KeptDockPhoto } from '~~/composables/dockBox'
 import { problemOf } from '~~/composables/useApi'
 import type { DockAnswer, DockEntriesAnswer } from '~~/utils/contract/dock'
+import type { ProblemDetails } from '~~/utils/contract/problem'
 import type { DockEntry } from '~~/utils/dock/entry'
 
 /** How a sending ended: nothing waits, the server was not reached, or the link opens nothing any more. */
@@ -26,6 +27,11 @@ export async function sendDock(box: DockBox, shipmentId: string, way: DockWay): 
   return entries === 'done' ? sendPhotos(box, shipmentId, way) : entries
 }
 
+/** Whether the server says of a link that it opens nothing; another's page, or a page of another, says nothing of it. */
+export function opensNothing({ type, status }: ProblemDetails): boolean {
+  return status === 404 && type === 'link-unknown'
+}
+
 async function sendEntries(box: DockBox, shipmentId: string, { post, answered }: DockWay): Promise<DockSent> {
   let atOnce = AT_ONCE
   for (;;) {
@@ -40,7 +46,7 @@ async function sendEntries(box: DockBox, shipmentId: string, { post, answered }:
     }
     catch (error) {
       const problem = problemOf(error)
-      if (problem.status === 404) return 'ended'
+      if (opensNothing(problem)) return 'ended'
       if (!FINAL.has(problem.status)) return 'unreached'
       // One of them does not fit: alone, the others go through.
       if (going.length === 1) await box.settle([{ id: going[0]!.id, outcome: 'refused', problem }])
@@ -59,7 +65,7 @@ async function sendPhotos(box: DockBox, shipmentId: string, { postPhoto }: DockW
     }
     catch (error) {
       const problem = problemOf(error)
-      if (problem.status === 404) return 'ended'
+      if (opensNothing(problem)) return 'ended'
       if (!FINAL.has(problem.status)) return 'unreached'
       await box.putPhoto({ ...photo, problem })
     }

@@ -3,8 +3,8 @@ import { v7 as uuidv7 } from 'uuid'
 import { answerWithin } from '~~/composables/answerWithin'
 import { deviceNow } from '~~/composables/deviceNow'
 import { dockBox, type KeptDockEntry, type KeptDockPhoto } from '~~/composables/dockBox'
-import { sendDock, type DockSent } from '~~/composables/dockSending'
-import { problemOf, useApi } from '~~/composables/useApi'
+import { opensNothing, sendDock, type DockSent } from '~~/composables/dockSending'
+import { problemOf } from '~~/composables/useApi'
 import { useRefreshOnFocus } from '~~/composables/useRefreshOnFocus'
 import type { DockAnswer, DockEntriesAnswer } from '~~/utils/contract/dock'
 import { dockLines } from '~~/utils/dock/dockLines'
@@ -12,8 +12,10 @@ import type { DockEntry, DockKind, DockSaid, LinkedDockEntry } from '~~/utils/do
 import { readToken } from '~~/utils/dock/linkToken'
 import { waitAfter } from '~~/utils/outbox/backOff'
 
-/** A photo that takes longer to arrive is tried again later. Units: milliseconds. Our choice. */
-const PHOTO_WITHIN_MS = 120_000
+/** What takes longer to be answered is asked again later; a photo is given more. Units: milliseconds. Our choice. */
+const [ANSWER_WITHIN_MS, PHOTO_WITHIN_MS] = [20_000, 120_000]
+/** Another phone at the same dock has its entries shown here after as long. Units: milliseconds. Our choice. */
+const LOOK_AGAIN_MS = 60_000
 
 /** Whether the link shows its shipment, shows nothing, or could not be asked yet. */
 export type DockPhase = 'loading' | 'open' | 'nothing' | 'unreached'
@@ -24,7 +26,6 @@ export type DockPhase = 'loading' | 'open' | 'nothing' | 'unreached'
  * Shape: `say` answers an entry's id once it is kept here. Errors of `say`: where the phone keeps nothing, an error in words.
  */
 export function useDock(token: string) {
-  const api = useApi()
   const online = useOnline()
   const path = `/api/dock/${encodeURIComponent(token)}`
   const linkId = readToken(token)?.linkId ?? ''
@@ -51,22 +52,29 @@ export function useDock(token: string) {
   let isAskedAgain = false
   let isLeft = false
   let timer: ReturnType<typeof setTimeout> | undefined
+  let looking: ReturnType<typeof setInterval> | undefined
   let failures = 0
+  let shipmentId: string | null = null
+  let answers = 0
 
   async function load(): Promise<void> {
     const copy = await box.copy(linkId).catch(() => undefined)
-    if (copy && dock.value === null) await show(copy.answer)
+    if (copy) shipmentId = copy.shipmentId
+    if (copy?.answer && dock.value === null) await show(copy.answer)
     await refresh()
     void send()
   }
 
   async function refresh(): Promise<void> {
+    const before = answers
     try {
-      await took(await api.getFresh<DockAnswer>(path))
+      const answer = await ask<DockAnswer>(path)
+      // What was sent meanwhile is in the answer to it, and not in this one.
+      if (answers === before) await took(answer)
       unreached.value = false
     }
     catch (error) {
-      if (problemOf(error).status === 404) return end()
+      if (opensNothing(problemOf(error))) return end()
       unreached.value = true
       if (dock.value === null) phase.value = 'unreached'
     }
@@ -74,7 +82,7 @@ export function useDock(token: string) {
 
   /** Not before what waits on this phone is there too: without it the shipment would look untouched. */
   async function show(answer: DockAnswer): Promise<void> {
-    dock.value = answer
+    ;[dock.value, shipmentId] = [answer, answer.shipment.id]
     await reread()
     phase.value = 'open'
   }
@@ -82,6 +90,7 @@ export function useDock(token: string) {
   async function took(answer: DockAnswer): Promise<void> {
     // A network that wants its guests to sign in answers with a page of its own.
     if (!Array.isArray(Object(answer).cylinders)) throw new Error('No answer of ours')
+    answers++
     await box.keepCopy({ linkId, shipmentId: answer.shipment.id, answer }).catch(() => {})
     await show(answer)
   }
@@ -90,25 +99,25 @@ export function useDock(token: string) {
   async function end(): Promise<void> {
     await reread()
     ;[phase.value, dock.value] = ['nothing', null]
-    await box.forgetCopy(linkId).catch(() => {})
+    if (shipmentId !== null) await box.keepCopy({ linkId, shipmentId, answer: null }).catch(() => {})
   }
 
   async function reread(): Promise<void> {
-    const shipmentId = dock.value?.shipment.id
-    if (shipmentId === undefined) return
+    if (shipmentId === null) return
     ;[kept.value, photos.value] = await Promise.all([box.entries(shipmentId), box.photos(shipmentId)]).catch(() => [[], []])
   }
 
   /** Keeps an entry, with photos that it names, and sends it. */
   async function say<Kind extends DockKind>(kind: Kind, said: DockSaid[Kind], by: { name: string, photos: KeptDockPhoto['bytes'][] }): Promise<string> {
-    const shipmentId = dock.value!.shipment.id
+    if (shipmentId === null) throw new Error('No shipment is open.')
+    const of = shipmentId
     const [id, at] = [uuidv7(), deviceNow()]
-    const taken = ('photoIds' in said ? by.photos : []).map(bytes => ({ id: uuidv7(), shipmentId, entryId: id, takenAt: at, bytes, problem: null }))
+    const taken = ('photoIds' in said ? by.photos : []).map(bytes => ({ id: uuidv7(), shipmentId: of, entryId: id, takenAt: at, bytes, problem: null }))
     // As plain data: a store takes nothing that a screen still watches.
     const plain = JSON.parse(JSON.stringify(said)) as DockSaid[Kind]
     const entry = { id, kind, name: by.name, at, said: 'photoIds' in plain ? { ...plain, photoIds: taken.map(photo => photo.id) } : plain } as DockEntry
     try {
-      await box.put({ id, shipmentId, entry, problem: null }, taken)
+      await box.put({ id, shipmentId: of, entry, problem: null }, taken)
     }
     catch {
       throw new Error('This phone could not keep it: its storage did not answer. Nothing was said; try again.')
@@ -135,8 +144,7 @@ export function useDock(token: string) {
 
   async function sendNow(): Promise<void> {
     clearTimeout(timer)
-    const shipmentId = dock.value?.shipment.id
-    if (shipmentId === undefined) return
+    if (shipmentId === null || phase.value === 'nothing') return
     // Where the phone's storage fails there is nothing that could be sent.
     const ended: DockSent = await sendDock(box, shipmentId, { post, postPhoto, answered: took }).catch(() => 'done')
     await reread()
@@ -146,21 +154,33 @@ export function useDock(token: string) {
     if (ended === 'unreached' && !isLeft) timer = setTimeout(() => void send(), waitAfter(failures))
   }
 
+  function ask<T>(url: string, sent?: object, within = ANSWER_WITHIN_MS): Promise<T> {
+    return answerWithin(within, signal => $fetch<unknown>(url, { retry: false, signal, ...(sent && { method: 'POST', body: sent as Record<string, unknown> }) })) as Promise<T>
+  }
+
   const post = (going: DockEntry[]) =>
-    api.post<DockEntriesAnswer>(`${path}/shipments/${dock.value!.shipment.id}/entries`, { deviceNow: deviceNow(), entries: going })
+    ask<DockEntriesAnswer>(`${path}/shipments/${shipmentId}/entries`, { deviceNow: deviceNow(), entries: going })
 
   function postPhoto({ id, takenAt, bytes }: KeptDockPhoto): Promise<unknown> {
     const form = new FormData()
     for (const [name, value] of Object.entries({ id, takenAt, subject: 'damage' })) form.append(name, value)
     form.append('file', new Blob([bytes]), 'photo')
-    return answerWithin(PHOTO_WITHIN_MS, signal => $fetch<unknown>(`${path}/photos`, { method: 'POST', body: form, retry: false, signal }))
+    return ask(`${path}/photos`, form, PHOTO_WITHIN_MS)
   }
 
-  onMounted(() => void load())
+  function lookAgain() {
+    if (phase.value === 'open' && online.value && document.visibilityState === 'visible') void refresh()
+  }
+
+  onMounted(() => {
+    void load()
+    looking = setInterval(lookAgain, LOOK_AGAIN_MS)
+  })
   watch(online, isOnline => isOnline && void load())
   useRefreshOnFocus(() => void refresh().then(send))
   onBeforeUnmount(() => {
     clearTimeout(timer)
+    clearInterval(looking)
     isLeft = true
     void Promise.resolve(sending).finally(() => box.close())
   })

@@ -3,8 +3,12 @@ import { MASS_UNITS } from '~~/utils/quantity/massUnits'
 
 const KEY = 'collarbook-dock-person'
 
-/** Who is at the dock with this phone and how the scale there reads: asked once, and kept on the phone where it keeps anything. */
-export function useDockPerson() {
+/**
+ * Who is at the dock with this phone and how the scale there reads: asked once, and kept on the phone where it keeps anything.
+ *
+ * @param usual the unit to begin with; null while it is not known.
+ */
+export function useDockPerson(usual: () => MassUnit | null) {
   const name = ref('')
   const unit = ref<MassUnit>('lb')
   const isKnown = ref(false)
@@ -15,6 +19,10 @@ export function useDockPerson() {
     unit.value = MASS_UNITS.find(({ value }) => value === kept.unit)?.value ?? 'lb'
     isKnown.value = name.value !== ''
   })
+
+  watch(usual, (found) => {
+    if (found && !isKnown.value) unit.value = found
+  }, { once: true })
 
   function keep() {
     isKnown.value = true

@@ -54,7 +54,7 @@ for (const [at, token] of [TOKEN, NEXT_TOKEN].entries()) {
 
 function fail(event: Parameters<typeof setResponseStatus>[0], status: number) {
   setResponseStatus(event, status)
-  return { type: 'about:blank', title: 'No', status, detail: 'Not now.' }
+  return { type: status === 404 ? 'link-unknown' : 'about:blank', title: 'No', status, detail: 'Not now.' }
 }
 
 function answer(linkId: string): DockAnswer {
@@ -188,6 +188,7 @@ describe('a dock without a network', () => {
     here = await opened()
     expect(here.text()).toContain('1 of 2 here, 1 weighed')
     expect(status(here)).toBe('2 not sent')
+    await eventually(() => expect(here.text()).toContain('Send 2'))
     expect(recorded).toEqual([])
     fault = null
     await pressed(here, 'Send 2')
@@ -220,8 +221,11 @@ describe('a dock without a network', () => {
     expect(here.text()).toContain('1 not sent.')
     expect(here.text()).not.toContain('K-4821')
     const box = dockBox()
-    expect(await box.copy(LINKS[0])).toBeUndefined()
+    expect(await box.copy(LINKS[0])).toMatchObject({ answer: null })
     box.close()
+    here.unmount()
+    here = await opened()
+    await eventually(() => expect(here.text()).toContain('1 not sent.'))
     here.unmount()
 
     here = await begun(NEXT_TOKEN)
