@@ -10,7 +10,8 @@ export interface Relief { cylinders: number, text: string, conditions: string, s
  */
 export function residueReliefs(lines: readonly LoadedLine[]): Relief[] {
   const residue = lines.filter(line => line.isResidue && line.description.identification !== null && !isPoisonous(line))
-  const unburning = residue.filter(({ description }) => description.division === '2.2' && description.identification !== 'UN1005')
+  // Ammonia, which 173.29(b) leaves out, is among what poisons.
+  const unburning = residue.filter(({ description }) => description.division === '2.2')
   return [
     ...residue.length > 0
       ? [{

@@ -48,6 +48,18 @@ describe('what the papers say', () => {
     expect(card.emitted('classify')?.[0]).toEqual(['m', expect.objectContaining({ identification: 'UN3161', reason: 'an analysis found R-32' })])
   })
 
+  it('lets the shipper describe a cylinder otherwise than the table names it, for a reason', async () => {
+    const card = await shown([papersLine()])
+    await card.get('select').setValue(papersLine().cylinderId)
+    const form = card.get('form')
+    expect(form.get('button').text()).toBe('Say it travels so')
+    await form.get('select').setValue('UN1078')
+    await form.findAll('input')[0]!.setValue('chlorodifluoromethane, air')
+    await form.get('input[maxlength="200"]').setValue('air in it')
+    await form.trigger('submit')
+    expect(card.emitted('classify')).toEqual([[papersLine().cylinderId, { identification: 'UN1078', technicalNames: ['chlorodifluoromethane', 'air'], reason: 'air in it' }]])
+  })
+
   it('shows what the shipper said, to be taken back until it leaves', async () => {
     const line = mixed({ classification: { identification: 'UN1078', technicalNames: ['chlorodifluoromethane'], reason: 'as analysed' } })
     const card = await shown([line])
