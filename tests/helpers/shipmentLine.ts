@@ -17,6 +17,6 @@ export function shipmentOf(lines: ShipmentLine[], change: Partial<ShipmentWithLi
     id: '01900000-0000-7000-8000-0000000000f1', number: 4, state: 'draft', to: { id: 'f', name: 'Reclaimer One' }, note: null,
     carrier: { id: null, name: 'our own vehicle' }, cylinders: lines.length, netGrams: null,
     createdAt: '2026-05-01T10:00:00.000Z', readyAt: null, dispatchedAt: null, dispatchedBy: null, arrivedAt: null, settledAt: null, closedAt: null, cancelledAt: null,
-    lines, papersLack: [], ...change,
+    lines, papersLack: [], isUnasked: false, ...change,
   }
 }

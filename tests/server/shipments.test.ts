@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { CustodyLogAnswer, FleetAnswer, OpenListAnswer } from '../../utils/contract/custody'
+import type { Firm } from '../../utils/contract/places'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import type { ShipmentsAnswer, ShipmentWithLines } from '../../utils/contract/shipments'
 import type { CylinderView } from '../../utils/custody/cylinderView'
@@ -233,6 +234,20 @@ describe('a shipment that is made ready', () => {
     expect((await ready(shipment.id, [now])).state).toBe('ready')
     expect((await dispatched(shipment.id, weighedOut([now, second]))).status).toBe(200)
     expect(await actsOf(shipment.id)).toContain('unready by Wes')
+  })
+
+  it('is held back by what its reclaimer does not take, once that is recorded', async () => {
+    const reclaimer = await made<Firm>(firm.admin.client, '/api/firms', { name: 'Ellerby Reclaim', kind: 'reclaimer' })
+    const cylinder = await registered(firm)
+    const { id } = await draft([cylinder], { toFirmId: reclaimer.id })
+    expect(await shown(id)).toMatchObject({ isUnasked: true, lines: [{ because: [] }] })
+    const terms = {
+      refrigerants: [{ designation: 'R-134a', conditions: ['clean'] }], takesMixed: false, takesUnknown: false, takesOverdue: true, specs: null, pressuresPsig: null,
+      mostContaminationPercent: null, minimum: null, minimumCylinders: null, pickUpCents: null, note: null,
+    }
+    await made(firm.manager.client, `/api/firms/${reclaimer.id}/terms`, { fromDay: '2026-01-01', terms })
+    expect(await shown(id)).toMatchObject({ isUnasked: false, lines: [{ because: [{ code: 'not-shippable', text: 'The reclaimer does not take R-22.' }] }] })
+    await expect(ready(id, [cylinder])).rejects.toThrow('The reclaimer does not take R-22.')
   })
 
   it('is not where the weight just read shows an overfill', async () => {

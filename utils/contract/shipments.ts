@@ -125,4 +125,6 @@ export interface ShipmentWithLines extends Shipment {
   lines: ShipmentLine[]
   /** What its papers still lack before it may leave, a sentence each. */
   papersLack: string[]
+  /** What its reclaimer takes is not recorded, so that nothing tells whether it would refuse a line. */
+  isUnasked: boolean
 }

@@ -33,11 +33,11 @@ export interface Judging { toFirmId: string, access: Access, nowMs: number }
  * Each line judged as its cylinder stands once the weight read is known: by the rules of the trade, and by what the
  * reclaimer takes where that is recorded.
  */
-export async function judgeLines(db: Database, lines: readonly LineToJudge[], { toFirmId, access, nowMs }: Judging): Promise<JudgedLine[]> {
+export async function judgeLines(db: Database, lines: readonly LineToJudge[], { toFirmId, access, nowMs }: Judging): Promise<{ lines: JudgedLine[], hasTerms: boolean }> {
   const ids = lines.map(line => line.cylinderId)
   const from = await directory(db)
   const [said, logs, terms] = await Promise.all([saidByOthers(db, ids), logsOf(db, ids), termsOn(db, toFirmId, dayOfInstant(nowMs, from.timeZone))])
-  return lines.map(({ cylinderId, gross }) => {
+  const judged = lines.map(({ cylinderId, gross }): JudgedLine => {
     const context = viewContext(from, { access, nowMs, saidByOthers: said(cylinderId) })
     const events = logs.get(cylinderId) ?? []
     const before = view(fold(events, context).state, context)
@@ -50,6 +50,7 @@ export async function judgeLines(db: Database, lines: readonly LineToJudge[], { 
       figures: { gross, refrigerant: then.contents.refrigerant, condition: then.contents.condition, netGrams: then.contents.netGrams },
     }
   })
+  return { lines: judged, hasTerms: terms !== null }
 }
 
 function weighing(cylinderId: string, gross: MassReading, nowMs: number): CustodyEvent<'weighed'> {

@@ -14,7 +14,7 @@ import { shipmentLines, type StoredLine } from './shipmentLines'
 import { theShipment } from './shipments'
 
 /** A shipment that has not left, judged as it stands: each line, and what its papers would say. */
-export interface ShipmentJudged { lines: ReadonlyMap<string, JudgedLine>, papers: ShippingPapers }
+export interface ShipmentJudged { lines: ReadonlyMap<string, JudgedLine>, papers: ShippingPapers, hasTerms: boolean }
 
 /** A shipment with its lines: until it leaves each with why it may not, afterwards each as it left. Errors: 404. */
 export async function shipmentWithLines(db: Database, id: string, access: Access, nowMs: number): Promise<ShipmentWithLines> {
@@ -48,16 +48,16 @@ export async function judgedShipment(db: Database, id: string, access: Access, n
     }]
   })
   const papersLack = judged?.papers.missing.flatMap(({ cylinderId, text }) => cylinderId === null ? [text] : []) ?? []
-  return { shipment: { ...shipment, lines, papersLack }, judged }
+  return { shipment: { ...shipment, lines, papersLack, isUnasked: judged?.hasTerms === false }, judged }
 }
 
 /** What its papers cannot say of a line holds that line back. */
 async function judge(db: Database, shipment: Shipment, stored: readonly StoredLine[], { access, nowMs }: { access: Access, nowMs: number }): Promise<ShipmentJudged> {
   const toJudge = stored.map(({ cylinderId, weighed }) => ({ cylinderId, gross: weighed?.gross ?? null }))
-  const lines = await judgeLines(db, toJudge, { toFirmId: shipment.to.id, access, nowMs })
+  const { lines, hasTerms } = await judgeLines(db, toJudge, { toFirmId: shipment.to.id, access, nowMs })
   const papers = await makePapers(db, shipment.id, lines.map(({ cylinderId, figures }) => ({ cylinderId, sent: figures })), { access, nowMs })
   return {
-    papers,
+    papers, hasTerms,
     lines: new Map(lines.map(line => [line.cylinderId, {
       ...line,
       because: [...line.because, ...papers.missing.flatMap(({ cylinderId, text, source }) => cylinderId === line.cylinderId ? [notShippable(text, source)] : [])],
