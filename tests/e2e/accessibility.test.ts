@@ -200,6 +200,14 @@ const SCREENS: Record<string, Screen[]> = {
   'scan.vue': [{ as: technician, at: () => '/scan' }],
   'setup.vue': [{ as: 'nobody', at: demo => `/setup?token=${demo.setUpToken}`, empty: true }, { as: 'nobody', at: () => '/setup' }],
   'shipments/[id]/index.vue': [...(['draft', 'ready', 'dispatched', 'settled', 'cancelled'] as const).map(state => ({ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments[state]}` }))],
+  'shipments/[id]/settlement.vue': [
+    { as: manager, at: demo => `/shipments/${demo.shipments.settled}/settlement` },
+    { as: manager, at: demo => `/shipments/${demo.shipments.dispatched}/settlement`, after: async (page) => {
+      await page.getByRole('button', { name: 'Enter figures' }).click()
+      await page.getByRole('button', { name: 'Read a statement’s file' }).click()
+    } },
+    { as: auditor, at: demo => `/shipments/${demo.shipments.settled}/settlement` },
+  ],
   'shipments/[id]/weigh.vue': [{ as: manager, at: (demo: DemoFleet) => `/shipments/${demo.shipments.draft}/weigh` }],
   'shipments/index.vue': [{ as: manager, at: () => '/shipments' }],
   'sign-in.vue': [{ as: 'nobody', at: () => '/sign-in' }],
