@@ -52,7 +52,7 @@ const SHIPPER = '49 CFR 173.22'
  */
 export function shippingDescription(contents: ShippedContents, catalogue: NamingCatalogue, choice: Classification | null = null): ShippingDescription {
   if (contents.nothingInIt && contents.knownParts.length === 0) return nothingDescribed(contents)
-  const named = contents.refrigerant === null ? null : unEntryNamed(contents.refrigerant, catalogue)
+  const named = contents.refrigerant === null || contents.condition === 'mixed' ? null : unEntryNamed(contents.refrigerant, catalogue)
   const proposal = named?.entry ? proposalOf(named.entry) : named === null ? proposedFor(contents, catalogue) : null
   if (choice) return chosen(choice, proposal)
   if (named?.entry) return fromEntry(named.entry, proposal)

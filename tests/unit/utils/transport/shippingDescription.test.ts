@@ -19,6 +19,10 @@ describe('what a cylinder is described as', () => {
     expect(told.because).toContain('NA1954')
   })
 
+  it('takes mixed refrigerants for mixed, whichever of them is named', () => {
+    expect(described({ refrigerant: 'R-22', condition: 'mixed', knownParts: ['R-134a', 'R-22'] })).toMatchObject({ needsChoice: true, proposal: { identification: 'UN1078' } })
+  })
+
   it('counts a part whose safety class is not held as one that burns', () => {
     expect(described({ condition: 'mixed', knownParts: ['R-22', 'R-406A'] }).proposal?.identification).toBe('UN3161')
   })
