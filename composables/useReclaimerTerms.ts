@@ -3,10 +3,11 @@ import { useApi } from '~~/composables/useApi'
 import { useAttempt } from '~~/composables/useAttempt'
 import { useKept } from '~~/composables/useKept'
 import { useLoaded } from '~~/composables/useLoaded'
-import type { NewTerms, PriceRow, PricesAnswer, TermsAnswer, TermsRow } from '~~/utils/contract/reclaim'
+import type { PriceRow, PricesAnswer, TermsAnswer, TermsRow } from '~~/utils/contract/reclaim'
 import type { RefrigerantsAnswer } from '~~/utils/contract/refrigerants'
 import type { PriceDraft, PriceTyped } from '~~/utils/reclaim/priceTyped'
 import { rowStandings } from '~~/utils/reclaim/recordedWords'
+import type { ReclaimerTerms } from '~~/utils/reclaim/terms'
 import { typedTerms, type TermsTyped } from '~~/utils/reclaim/termsTyped'
 
 /**
@@ -59,7 +60,7 @@ export function useReclaimerTerms(firmId: string, wanted: Ref<boolean>, done: (s
     problem.value = null
   }
 
-  async function saveTerms(draft: Pick<NewTerms, 'fromDay' | 'terms'>) {
+  async function saveTerms(draft: { fromDay: string, terms: ReclaimerTerms }) {
     if (!await attempt(() => api.post(`${path}/terms`, { id: idFor(draft), ...draft }))) return
     close()
     await terms.refresh()
@@ -75,12 +76,12 @@ export function useReclaimerTerms(firmId: string, wanted: Ref<boolean>, done: (s
   }
 
   async function withdrawTerms({ id }: TermsRow) {
-    if (await attempt(() => api.post(`${path}/terms/${id}/withdraw`))) done('Taken back. The history keeps it.')
+    if (await attempt(() => api.post(`${path}/terms/${id}/withdraw`, {}))) done('Taken back. The history keeps it.')
     await terms.refresh()
   }
 
   async function withdrawPrice({ price }: PriceRow) {
-    if (await attempt(() => api.post(`${path}/prices/${price.id}/withdraw`))) done('Taken back. The history keeps it.')
+    if (await attempt(() => api.post(`${path}/prices/${price.id}/withdraw`, {}))) done('Taken back. The history keeps it.')
     await prices.refresh()
   }
 
