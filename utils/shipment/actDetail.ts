@@ -5,7 +5,7 @@ import type { ShipmentAct } from './acts'
 export function actDetail({ details }: Pick<ShipmentAct, 'details'>): string | null {
   const said = [
     ...['gross', 'theirGross', 'acceptedNet'].flatMap(key => isReading(details[key]) ? [formatReading(details[key])] : []),
-    ...['grade', 'reason', 'why', 'what', 'because', 'text', 'serial', 'name'].flatMap(key => isText(details[key]) ? [details[key]] : []),
+    ...['grade', 'reason', 'why', 'what', 'because', 'text', 'serial', 'name', 'forWhom'].flatMap(key => isText(details[key]) ? [details[key]] : []),
     ...(typeof details['cylinders'] === 'number' ? [details['cylinders'] === 1 ? '1 cylinder' : `${details['cylinders']} cylinders`] : []),
   ]
   return said.length === 0 ? null : said.join(', ')
