@@ -22,6 +22,13 @@ const SCALES = [
   { id: '0190a3c4-0000-7000-8000-000000000002', name: 'Dock', accuracyGrams: 90, accuracyPercent: 0, lastCheck: null, active: true },
 ]
 
+const CUSTOMER_FIRM = '0190a3c4-0000-7000-8000-0000000000f1'
+const MADE_JOB = '0190a3c4-0000-7000-8000-0000000000d2'
+const JOB = {
+  id: '0190a3c4-0000-7000-8000-0000000000d1', number: 7, customer: { id: CUSTOMER_FIRM, name: 'Ossory Foods' }, email: null, site: '4 Quay Street', equipment: 'Chiller 2',
+  refrigerant: 'R-22', charge: null, keeps: 'customer', opened: null, note: null, createdAt: '2026-07-01T15:00:00.000Z', createdBy: { id: 'p', name: 'Tina' }, cylinders: 0, recoveredGrams: null, notKnown: 0,
+}
+const madeJobs: unknown[] = []
 const sent: CustodyEvent[] = []
 let isDown = false
 
@@ -32,13 +39,21 @@ for (const ref of [CODE.toLowerCase(), CYLINDER]) {
   registerEndpoint(`/api/cylinders/${ref}/events`, list([]))
 }
 registerEndpoint('/api/places', list([]))
-registerEndpoint('/api/firms', list([]))
+registerEndpoint('/api/firms', list([{ id: CUSTOMER_FIRM, name: 'Ossory Foods', kind: 'customer' }]))
 registerEndpoint('/api/people', list([]))
 registerEndpoint('/api/refrigerants', list([{ designation: 'R-22' }, { designation: 'R-410A' }]))
 registerEndpoint('/api/policy', () => ({
   timeZone: 'America/Chicago', fillPolicies: [{ fromAt: 0, policy: DEFAULT_FILL_POLICY }], retests: [], scales: SCALES,
   retest: { soonDays: 120, notSeenDays: 30, missingDays: 90, intervalMonths: null, ownerChoices: [] },
 }))
+registerEndpoint('/api/jobs', { method: 'GET', handler: () => ({ items: [JOB], nextCursor: null }) })
+registerEndpoint('/api/jobs', {
+  method: 'POST',
+  handler: async (event) => {
+    madeJobs.push(await readBody(event))
+    return { ...JOB, id: MADE_JOB, number: 8, keeps: 'firm' }
+  },
+})
 registerEndpoint('/api/events', {
   method: 'POST',
   handler: async (event) => {
@@ -128,6 +143,43 @@ describe('the form of a recovery', () => {
     expect(sent[0]!.details).toMatchObject({ scaleId: SCALES[1]!.id })
     await vi.waitFor(() => expect(usePreferencesStore().lastScaleId).toBe(SCALES[1]!.id))
     usePreferencesStore().lastScaleId = ''
+  })
+
+  async function choose(page: Page, name: string, value: string) {
+    const box = byRole(page.element.parentElement!, 'combobox', name) as HTMLSelectElement
+    box.value = value
+    box.dispatchEvent(new Event('change'))
+    await flushPromises()
+  }
+
+  it('of a job is that customer\'s refrigerant, and leads to the job once it is recorded', async () => {
+    const page = await openForm()
+    await vi.waitFor(() => expect(page.text()).toContain('7: Ossory Foods, Chiller 2'), { timeout: 5000 })
+    await choose(page, 'Job', JOB.id)
+    await type(page, 'Scale after, kilograms', '24')
+    await pressRecord(page)
+    await vi.waitFor(() => expect(sent).toHaveLength(1))
+    expect(sent[0]!.details).toMatchObject({ jobId: JOB.id, ownerOfRefrigerantId: CUSTOMER_FIRM })
+    await shows(page, 'The job and its recovery note')
+  })
+
+  it('makes a job in place, and is of it', async () => {
+    const page = await openForm()
+    await vi.waitFor(() => expect(page.text()).toContain('A new job'), { timeout: 5000 })
+    byRole(page.element.parentElement!, 'button', 'A new job').click()
+    await flushPromises()
+    await choose(page, 'Customer', CUSTOMER_FIRM)
+    await type(page, 'Site', '5 Quay Street')
+    await type(page, 'Equipment', 'Ice machine')
+    byRole(page.element.parentElement!, 'button', 'Left to us').click()
+    await flushPromises()
+    await page.find('form[aria-label="A new job"]').trigger('submit')
+    await vi.waitFor(() => expect(madeJobs).toMatchObject([{ customerId: CUSTOMER_FIRM, site: '5 Quay Street', equipment: 'Ice machine', keeps: 'firm' }]))
+    await type(page, 'Scale after, kilograms', '24')
+    await pressRecord(page)
+    await vi.waitFor(() => expect(sent).toHaveLength(1))
+    expect(sent[0]!.details).toMatchObject({ jobId: MADE_JOB })
+    expect(sent[0]!.details).not.toHaveProperty('ownerOfRefrigerantId')
   })
 
   it('asks for nothing where nothing is found', async () => {
