@@ -9,13 +9,14 @@ import { counted, listed } from './phrase'
 
 /** The lines about what is aboard, full or lacking in the shop, on lists, and without a label. */
 export function deskLines(facts: NowFacts, reader: NowReader): DraftLine[] {
-  const { vans = [], shortVans = [], full = [], worthPickUp, fewEmpty = [], unlabelled, shipmentsAway, lotsAway, plansOpen, shipmentDrafts, lotDrafts } = facts
+  const { vans = [], shortVans = [], full = [], worthPickUp, fewEmpty = [], unlabelled, shipmentsReady, shipmentsAway, lotsAway, plansOpen, shipmentDrafts, lotDrafts } = facts
   return [
     ...vans.map(van => vanLine(van, vans.length === 1, reader)),
     shortVansLine(shortVans, reader),
     ...full.map(one => fullLine(one, reader)),
     worthPickUp && worthLine(worthPickUp, reader),
     fewEmptyLine(fewEmpty),
+    shipmentsReady && readyLine(shipmentsReady, reader),
     shipmentsAway && awayLine('shipments-away', shipmentsAway, reader),
     lotsAway && awayLine('lots-away', lotsAway, reader),
     plansOpen && planLine(plansOpen),
@@ -82,6 +83,15 @@ function worthLine({ firm, place, refrigerant, cylinders, netGrams, comesToCents
     sentence: `${what} worth a pick-up.`,
     reason: `${firm} would take ${counted(cylinders, 'cylinder', 'cylinders')} from ${place}${comesToCents === null ? '' : `, for ${formatMoney(comesToCents)} after the pick-up`}.`,
     verb: 'See what is worth it', to: '/reclaim',
+  }
+}
+
+function readyLine({ count, id, number, since }: ListFacts, { now, timeZone }: NowReader): DraftLine {
+  return {
+    topic: 'shipments-ready', kind: 'att', number: count,
+    sentence: `${counted(count, 'shipment is', 'shipments are')} ready to leave.`,
+    reason: `Shipment ${number} was made ready ${formatNear(since, timeZone, now)}. It is sent off by a manager.`,
+    ...(count === 1 ? { verb: 'Send it off', to: `/shipments/${id}` } : { verb: `Show the ${count}`, to: '/shipments?state=ready' }),
   }
 }
 

@@ -70,6 +70,7 @@ export interface NowFacts {
   worthPickUp?: WorthFacts
   /** Cylinders in use that wear no label. */
   unlabelled?: { count: number, first: CylinderRow[] }
+  shipmentsReady?: ListFacts
   shipmentsAway?: ListFacts
   lotsAway?: ListFacts
   plansOpen?: PlanFacts

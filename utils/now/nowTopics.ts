@@ -4,7 +4,7 @@ import type { Role } from '../access/roles'
 export const NOW_TOPICS = [
   'held-overfilled', 'overfilled', 'van-load', 'held-stop', 'two-refrigerants', 'unknown-mixed', 'code-on-two', 'log-broken',
   'held-late', 'late', 'no-test-date', 'rejected', 'condemned', 'vans-short', 'not-seen', 'held-unweighed', 'unweighed', 'held-full', 'full', 'worth-pick-up', 'few-empty',
-  'shipments-away', 'lots-away', 'papers-differ', 'came-late', 'to-countersign', 'unsigned', 'plan-steps', 'shipment-drafts', 'lot-drafts', 'wet', 'soon', 'held-soon', 'unlabelled', 'old-tare',
+  'shipments-ready', 'shipments-away', 'lots-away', 'papers-differ', 'came-late', 'to-countersign', 'unsigned', 'plan-steps', 'shipment-drafts', 'lot-drafts', 'wet', 'soon', 'held-soon', 'unlabelled', 'old-tare',
   'scale-checks', 'rule-begins', 'log-unchecked', 'doubtful-times', 'late-entries', 'corrections', 'mail-failed', 'uncertified', 'not-taken-up',
   'no-shop', 'no-reclaimer', 'no-test-station', 'vans-without-technician',
 ] as const
@@ -20,7 +20,7 @@ const TOPICS_OF: Record<Role, readonly NowTopic[]> = {
   ],
   manager: [
     'overfilled', 'two-refrigerants', 'unknown-mixed', 'code-on-two', 'log-broken', 'late', 'no-test-date', 'rejected', 'condemned',
-    'vans-short', 'not-seen', 'unweighed', 'full', 'worth-pick-up', 'few-empty', 'shipments-away', 'lots-away', 'papers-differ', 'came-late', 'unsigned', 'plan-steps', 'shipment-drafts', 'lot-drafts',
+    'vans-short', 'not-seen', 'unweighed', 'full', 'worth-pick-up', 'few-empty', 'shipments-ready', 'shipments-away', 'lots-away', 'papers-differ', 'came-late', 'unsigned', 'plan-steps', 'shipment-drafts', 'lot-drafts',
     'scale-checks', 'rule-begins', 'not-taken-up',
   ],
   auditor: ['log-broken', 'log-unchecked', 'doubtful-times', 'late-entries', 'corrections'],

@@ -7,6 +7,7 @@ import type { Database } from '../database/database'
 import type { Directory } from '../directory/directory'
 import { lastCheckIn, toLookFor } from '../vans/checkIns'
 import { materialsOf } from '../vans/materials'
+import { HAS_UNWEIGHED } from '../shipments/shipments'
 import { ownVans } from '../vans/ownVans'
 import { standingIn } from '../vans/standingIn'
 
@@ -15,20 +16,21 @@ const SHIPMENT_WAITS_DAYS = 7
 /** A test lot that is not back is asked about after so many days: common practice, no source. */
 const LOT_WAITS_DAYS = 30
 
-type Lists = Pick<NowFacts, 'shipmentsAway' | 'lotsAway' | 'shipmentDrafts' | 'lotDrafts'>
+type Lists = Pick<NowFacts, 'shipmentsReady' | 'shipmentsAway' | 'lotsAway' | 'shipmentDrafts' | 'lotDrafts'>
 
-/** Shipments and test lots that are drafts, or that have been away for long. */
+/** Shipments and test lots that are drafts, that are ready, or that have been away for long. */
 export async function listFacts(db: Database, nowMs: number): Promise<Lists> {
   const answers = await db.readClient.batch([
-    listed('shipments', 'dispatched_at', `state = 'dispatched' AND dispatched_at <= ?`, nowMs - SHIPMENT_WAITS_DAYS * MS_PER_DAY),
+    listed('shipments', 'ready_at', `state = 'ready' AND NOT ${HAS_UNWEIGHED} AND ready_at <= ?`, nowMs),
+    listed('shipments', 'dispatched_at', `state IN ('dispatched', 'arrived') AND dispatched_at <= ?`, nowMs - SHIPMENT_WAITS_DAYS * MS_PER_DAY),
     listed('test_lots', 'sent_at', `state = 'sent' AND sent_at <= ?`, nowMs - LOT_WAITS_DAYS * MS_PER_DAY),
-    listed('shipments', 'created_at', `state = 'draft' AND created_at <= ?`, nowMs),
+    listed('shipments', 'created_at', `(state = 'draft' OR state = 'ready' AND ${HAS_UNWEIGHED}) AND created_at <= ?`, nowMs),
     listed('test_lots', 'created_at', `state = 'draft' AND created_at <= ?`, nowMs),
   ], 'read')
-  const [shipmentsAway, lotsAway, shipmentDrafts, lotDrafts] = answers.map(({ rows: [row] }): ListFacts | undefined => row && {
+  const [shipmentsReady, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts] = answers.map(({ rows: [row] }): ListFacts | undefined => row && {
     id: row[0] as string, number: row[1] as number, since: row[2] as number, count: row[3] as number,
   })
-  return { shipmentsAway, lotsAway, shipmentDrafts, lotDrafts }
+  return { shipmentsReady, shipmentsAway, lotsAway, shipmentDrafts, lotDrafts }
 }
 
 /** The longest waiting one, and how many there are. */

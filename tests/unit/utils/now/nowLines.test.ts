@@ -197,6 +197,13 @@ describe('lists and records', () => {
     expect(draft(2)).toMatchObject({ sentence: '2 shipments are drafts still.', to: '/shipments?state=draft' })
   })
 
+  it('tell the manager of a shipment that is ready to leave, and nobody else', () => {
+    const facts = { shipmentsReady: { count: 1, id: ID, number: 409, since: NOON - DAY } }
+    expect(linesFor('manager', facts)[0]).toMatchObject({ sentence: '1 shipment is ready to leave.', verb: 'Send it off', to: `/shipments/${ID}` })
+    expect(linesFor('manager', { shipmentsReady: { ...facts.shipmentsReady, count: 2 } })[0]).toMatchObject({ sentence: '2 shipments are ready to leave.', to: '/shipments?state=ready' })
+    expect(linesFor('warehouse', facts)).toEqual([])
+  })
+
   it('let the manager receive what the warehouse can only ask about', () => {
     const facts = { shipmentsAway: { count: 1, id: ID, number: 409, since: NOON - 8 * DAY } }
     expect(linesFor('manager', facts)[0]).toMatchObject({ verb: 'Settle it', reason: expect.stringContaining('left 8 days ago') })
