@@ -104,7 +104,7 @@ export function useDock(token: string) {
 
   async function reread(): Promise<void> {
     if (shipmentId === null) return
-    ;[kept.value, photos.value] = await Promise.all([box.entries(shipmentId), box.photos(shipmentId)]).catch(() => [[], []])
+    ;[kept.value, photos.value] = await Promise.all([box.entries(shipmentId), box.photos(shipmentId)]).catch((): [KeptDockEntry[], KeptDockPhoto[]] => [kept.value, photos.value])
   }
 
   /** Keeps an entry, with photos that it names, and sends it. */
@@ -146,7 +146,7 @@ export function useDock(token: string) {
     clearTimeout(timer)
     if (shipmentId === null || phase.value === 'nothing') return
     // Where the phone's storage fails there is nothing that could be sent.
-    const ended: DockSent = await sendDock(box, shipmentId, { post, postPhoto, answered: took }).catch(() => 'done')
+    const ended = await sendDock(box, shipmentId, { post, postPhoto, answered: took }).catch((): DockSent => 'done')
     await reread()
     unreached.value = ended === 'unreached'
     if (ended === 'ended') return end()

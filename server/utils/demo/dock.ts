@@ -1,6 +1,6 @@
 import type { InStatement } from '@libsql/client'
 import { dockLinks } from '../../../drizzle/schema'
-import type { DockKind, DockSaid } from '../../../utils/dock/entry'
+import type { DockKind } from '../../../utils/dock/entry'
 import { nearestToDivision } from '../../../utils/quantity/mass'
 import { statement, type Database } from '../database/database'
 import { actStatement } from '../shipments/acts'
@@ -24,7 +24,7 @@ export async function dockStatements(db: Database, { people, firms }: Cast, now:
     expiresAt: Math.floor((Math.max(now, leftAt) + 30 * DAY) / 1000) * 1000, firstUsedAt: arrived['arrived_at'] as number,
   }
   let at = link.firstUsedAt
-  function said<Kind extends DockKind>(kind: Kind, { cylinderId, ...details }: DockSaid[Kind] & { cylinderId: string }): InStatement {
+  function said(kind: DockKind, cylinderId: string, details: Record<string, unknown> = {}): InStatement {
     at = Math.min(at + 2 * MINUTE, now)
     return actStatement({ id: uuid(at), shipmentId, kind: `dock-${kind}`, cylinderId, details, by: { linkId: link.id, linkName: NAME }, occurredAt: at, recordedAt: at })
   }
@@ -36,11 +36,11 @@ export async function dockStatements(db: Database, { people, firms }: Cast, now:
       occurredAt: leftAt, recordedAt: leftAt,
     }),
     ...lines.flatMap(({ cylinderId, grams }, index): InStatement[] => {
-      if (index === 0) return [said('here', { cylinderId }), said('gross', { cylinderId, gross: nearestToDivision(grams - 40, 'lb') })]
-      if (index !== 1) return [said('here', { cylinderId })]
+      if (index === 0) return [said('here', cylinderId), said('gross', cylinderId, { gross: nearestToDivision(grams - 40, 'lb') })]
+      if (index !== 1) return [said('here', cylinderId)]
       return [
-        said('gross', { cylinderId, gross: nearestToDivision(grams * 0.96, 'lb') }),
-        said('damaged', { cylinderId, what: 'Collar bent, valve hard to turn', photoIds: [] }),
+        said('gross', cylinderId, { gross: nearestToDivision(grams * 0.96, 'lb') }),
+        said('damaged', cylinderId, { what: 'Collar bent, valve hard to turn', photoIds: [] }),
       ]
     }),
   ]
