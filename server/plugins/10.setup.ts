@@ -4,6 +4,7 @@ import { DEMO_PASSWORD } from '../utils/demo/cast'
 import { sealHistory } from '../utils/demo/checkpoints'
 import { fillDemo } from '../utils/demo/fillDemo'
 import { keepDemoPhotos } from '../utils/demo/photos'
+import { keepDemoStatement } from '../utils/demo/statementFile'
 import { useEnvironment } from '../utils/environment'
 import { useFiles } from '../utils/files/photoFiles'
 import { sealingNow } from '../utils/proof/sealing'
@@ -20,6 +21,7 @@ async function prepare(): Promise<void> {
     const now = Date.now()
     if (await fillDemo(database, await hashNewPassword(DEMO_PASSWORD), now)) {
       await keepDemoPhotos(database, useFiles())
+      await keepDemoStatement(database, useFiles())
       await sealHistory(database, await sealingNow(database), now)
     }
     console.log(`\nThe demo firm is at ${environment.publicUrl}\nSign in as ${DEMO_ACCOUNTS.map(name => `${name}@demo.example`).join(', ')}\nPassword of each: ${DEMO_PASSWORD}\n`)

@@ -22,6 +22,7 @@ import { differingShipments } from '../../server/utils/shipments/paperDifference
 import { listShipments } from '../../server/utils/shipments/shipments'
 import { judgedShipment } from '../../server/utils/shipments/shipmentWithLines'
 import { keepDemoPhotos } from '../../server/utils/demo/photos'
+import { keepDemoStatement } from '../../server/utils/demo/statementFile'
 import { massBalance } from '../../server/utils/records/massBalance'
 import { listVans } from '../../server/utils/vans/vans'
 import { fleetQuery } from '../../utils/contract/custody'
@@ -107,6 +108,17 @@ describe('the demo firm', () => {
     expect(judged!.papers.carriage).toMatchObject({ by: 'carrier' })
     expect(await column(`SELECT count(*) FROM shipments WHERE state IN ('dispatched', 'arrived', 'settled') AND papers IS NULL`)).toEqual([0])
     expect(await column('SELECT count(*) FROM shipments WHERE NOT EXISTS (SELECT 1 FROM shipment_acts WHERE shipment_id = shipments.id)')).toEqual([0])
+  })
+
+  it('has a settled shipment with an open dispute about its newest statement, and a closed one with the statement itself', async () => {
+    const open = await column(`SELECT d.about FROM disputes d JOIN shipments s ON s.id = d.shipment_id WHERE d.ended_at IS NULL AND s.state = 'settled'`)
+    expect(open).toEqual(expect.arrayContaining(['credit']))
+    expect(await column(`SELECT count(*) FROM disputes d JOIN shipments s ON s.id = d.shipment_id WHERE d.ended_at IS NULL AND s.state <> 'settled'`)).toEqual([0])
+    expect(await column('SELECT count(*) FROM shipment_lines l JOIN shipments s ON s.id = l.shipment_id LEFT JOIN settlement_lines f USING (shipment_id, cylinder_id) WHERE s.settled_at IS NOT NULL AND f.outcome IS NULL')).toEqual([0])
+    const files = new Map<string, Uint8Array>()
+    await keepDemoStatement(db, { keep: async (name, bytes) => void files.set(name, bytes), read: async () => null, probe: async () => undefined }, async (_, title) => Buffer.from(`%PDF-1.7 ${title}`))
+    expect(await column(`SELECT f.media_type FROM shipment_files f JOIN shipments s ON s.id = f.shipment_id WHERE s.state = 'closed'`)).toEqual(['application/pdf'])
+    expect([...files.values()].map(file => Buffer.from(file).toString())).toEqual([expect.stringMatching(/^%PDF-1.7 Statement ST-\d+\.pdf$/)])
   })
 
   it('has jobs with what was recovered on them, a note in its second issue, and refrigerant banked for a customer', async () => {

@@ -21,6 +21,7 @@ import { prepareShipments } from './preparedShipments'
 import { recordScript } from './record'
 import { sentShipmentActs, sentShipmentPapers } from './sentShipments'
 import { newScript } from './script'
+import { settlementStatements } from './settlements'
 import { castTables, labelTables, listTables } from './tables'
 import { termsTables } from './terms'
 import { vanTables } from './vans'
@@ -66,6 +67,7 @@ export async function fillDemo(db: Database, passwordHash: string, now: number):
   await db.write(sentShipmentActs(stage))
   await db.write(await sentShipmentPapers(db, stage))
   await db.write(await dockStatements(db, cast, now))
+  await db.write(await settlementStatements(db, cast, now))
   await prepareShipments(db, cast, now)
   await planTogether(db, cast, now)
   await db.write(await vanTables(db, cast, now))

@@ -156,7 +156,7 @@ function ship(stage: Stage, steel: Steel, from: number, shopId: string): number 
   if (shipment.backAt > endAt) return null
   script.add(manager, shipment.backAt, steel.id, 'reclaimed', {
     shipmentId: shipment.id, theirGross: weigh(steel, 'lb'), grade: random.chance(0.9) ? 'clean' : 'mixed',
-    acceptedNet: { unit: 'lb', value: Math.round(steel.netGrams / pounds(1) * 10 - random.between(0, 4)) / 10 }, price: 2.4,
+    acceptedNet: { unit: 'lb', value: Math.round(steel.netGrams / pounds(1) * 10 - random.between(0, 4)) / 10 }, price: 2.4, pricePer: 'lb',
   }, { decides: true, lateMs: 20 * MINUTE })
   steel.netGrams = 0
   steel.refrigerant = null
