@@ -11,9 +11,9 @@ const JOBS_SHOWN = 30
  * The jobs that something may be of: the newest, one's own first, and one that is made here.
  *
  * @param chosen told of a job once it is chosen or made, with null where it is of none.
- * @param isAsked whether anything here may be of a job.
+ * @param asked whether anything here may be of a job, and the one that was chosen before, which may be older than the newest.
  */
-export function useJobChoice(chosen: (job: JobLine | null) => unknown, isAsked = true) {
+export function useJobChoice(chosen: (job: JobLine | null) => unknown, asked: { isAsked?: () => boolean, chosenId?: () => string } = {}) {
   const api = useApi()
   const session = useSessionStore()
   const jobs = shallowRef<JobLine[]>([])
@@ -23,9 +23,13 @@ export function useJobChoice(chosen: (job: JobLine | null) => unknown, isAsked =
   let id = uuidv7()
 
   async function load() {
+    if (asked.isAsked?.() === false) return
     // Without them it is recorded without a job.
     const answer = await api.get<JobsAnswer>('/api/jobs', { limit: JOBS_SHOWN }).catch(() => null)
-    if (answer) jobs.value = inOrderFor(answer.items, session.user?.id ?? '')
+    if (!answer) return
+    const chosenId = asked.chosenId?.() ?? ''
+    const older = chosenId && !answer.items.some(({ id }) => id === chosenId) ? await api.get<JobLine>(`/api/jobs/${chosenId}`).catch(() => null) : null
+    jobs.value = [...inOrderFor(answer.items, session.user?.id ?? ''), ...older ? [older] : []]
   }
 
   function choose(jobId: string) {
@@ -49,6 +53,6 @@ export function useJobChoice(chosen: (job: JobLine | null) => unknown, isAsked =
     }
   }
 
-  if (isAsked) onMounted(load)
+  onMounted(load)
   return { jobs, busy, problem, choose, make, mayMake: computed(() => session.mayI('jobs:record')) }
 }
