@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import type { CylinderRow } from '../custody/cylinderView'
+import { prose } from '../custody/schema/parts'
 import type { DockLine, UnexpectedCylinder } from '../dock/dockLines'
 import type { SettlementCredit } from '../settlement/credit'
 import { DISPUTE_OUTCOMES, DISPUTE_SUBJECTS, type DisputeOutcome, type DisputeSubject } from '../settlement/dispute'
@@ -99,18 +100,18 @@ export type SettlementCsvQuery = z.output<typeof settlementCsvQuery>
 export interface CsvPreviewAnswer extends StatementPreview { hash: string, delimiter: 'comma' | 'semicolon' | 'tab' }
 
 /** POST /api/shipments/{id}/disputes: a person opens one. */
-export const disputeBody = z.strictObject({ ...act, disputeId: id, about: z.enum(DISPUTE_SUBJECTS), cylinderId: id.nullable(), text: line(1_000), photoIds })
+export const disputeBody = z.strictObject({ ...act, disputeId: id, about: z.enum(DISPUTE_SUBJECTS), cylinderId: id.nullable(), text: prose(1_000), photoIds })
 export type NewDispute = z.output<typeof disputeBody>
 
 /** The path of one dispute of a shipment. */
 export const disputeParams = z.strictObject({ id, dispute: id })
 
 /** POST /api/shipments/{id}/disputes/{dispute}/messages. */
-export const disputeMessageBody = z.strictObject({ ...act, text: line(1_000), photoIds })
+export const disputeMessageBody = z.strictObject({ ...act, text: prose(1_000), photoIds })
 export type DisputeMessage = z.output<typeof disputeMessageBody>
 
 /** POST /api/shipments/{id}/disputes/{dispute}/end. */
-export const disputeEndBody = z.strictObject({ ...act, outcome: z.enum(DISPUTE_OUTCOMES), reason: line(500) })
+export const disputeEndBody = z.strictObject({ ...act, outcome: z.enum(DISPUTE_OUTCOMES), reason: prose(500) })
 export type DisputeEnd = z.output<typeof disputeEndBody>
 
 /** POST /api/shipments/{id}/disputes/{dispute}/reopen. */
@@ -150,7 +151,7 @@ export interface SettlementLine {
   isEntered: boolean
   weights: FourWeights
   dock: DockLine | null
-  /** Photos of the cylinder since it was prepared, by the events that have them. */
+  /** Photos of the cylinder since the shipment was made, ours and the dock's. */
   photoIds: string[]
   /** When it came back; null where it did not. */
   returnedAt: string | null

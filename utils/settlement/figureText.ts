@@ -10,6 +10,13 @@ export function changeText({ field, from, to }: FigureChange): string {
   return `${FIGURE_WORDS[field]} ${figureText(field, to) ?? 'left out'}${before === null ? '' : `, before ${before}`}`
 }
 
+/** What an act changed: the figures of one line, or of how many lines. */
+export function changesText(changes: readonly ({ cylinderId: string } & FigureChange)[]): string | null {
+  const lines = new Set(changes.map(({ cylinderId }) => cylinderId)).size
+  if (lines === 0) return null
+  return lines === 1 ? changes.map(changeText).join(', ') : `${changes.length} figures of ${lines} lines`
+}
+
 function figureText(field: FigureChange['field'], value: FigureChange['to']): string | null {
   if (value === null) return null
   switch (field) {

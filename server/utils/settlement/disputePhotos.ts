@@ -2,8 +2,8 @@ import type { Database } from '../database/database'
 import { problem } from '../http/problem'
 
 /**
- * Photos of a shipment's cylinders since it was made, by cylinder: those that an event names and those put to one later.
- * One that is named counts only where the event's own author sent it.
+ * Photos of a shipment's cylinders since it was made, by cylinder: those that an event names, those put to one later, and
+ * the dock's. One that is named counts only where the one who names it sent it.
  */
 export async function shipmentPhotos(db: Database, shipmentId: string): Promise<Map<string, string[]>> {
   const { rows } = await db.readClient.execute({
@@ -14,8 +14,10 @@ export async function shipmentPhotos(db: Database, shipmentId: string): Promise<
       )
       SELECT event.cylinder_id, a.id, event.seq FROM event, json_each(event.body, '$.photoIds') named JOIN attachments a ON a.id = named.value AND a.sent_by = event.actor_id
       UNION SELECT event.cylinder_id, a.id, event.seq FROM event JOIN attachment_events put ON put.event_id = event.id JOIN attachments a ON a.id = put.attachment_id
+      UNION SELECT act.cylinder_id, a.id, act.seq FROM shipment_acts act, json_each(act.details, '$.photoIds') named JOIN attachments a ON a.id = named.value AND a.sent_by = act.link_id
+      WHERE act.shipment_id = ? AND act.cylinder_id IS NOT NULL
       ORDER BY 3`,
-    args: [shipmentId],
+    args: [shipmentId, shipmentId],
   })
   const photos = new Map<string, string[]>()
   for (const row of rows) {

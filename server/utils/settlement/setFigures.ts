@@ -35,7 +35,8 @@ const STATES = ['dispatched', 'arrived', 'settled']
  * settled in another way than the log has it; 422 for a line that is none of it.
  */
 export async function setFigures(db: Database, shipmentId: string, change: FigureChange, access: Access, now: number): Promise<void> {
-  const act: NewAct = { ...change.act, shipmentId, by: { personId: access.personId }, occurredAt: Date.parse(change.act.occurredAt), recordedAt: now }
+  const [only, ...more] = change.act.kind === 'figures-set' ? change.lines.keys() : []
+  const act: NewAct = { ...change.act, shipmentId, cylinderId: more.length === 0 ? only ?? null : null, by: { personId: access.personId }, occurredAt: Date.parse(change.act.occurredAt), recordedAt: now }
   if (await isKept(db, act)) return
   const before = await readSettlement(db, shipmentId)
   refuseUnlessAt(before, change.revision)
