@@ -122,10 +122,11 @@ describe('a link to the dock', () => {
       const put = (other: string) => token.slice(0, index) + other + token.slice(index + 1)
       return [put(character === 'A' ? 'B' : 'A'), put(''), put(`${character}A`), put('=')]
     })
-    for (const other of [...others, `${token}=`, `${token}%00`, `${token}%20`, token.toLowerCase(), token.split('').reverse().join('')]) {
+    const odd = [`${token}=`, `${token}%00`, `${token}%20`, token.toLowerCase(), token.split('').reverse().join('')]
+    await Promise.all([...others, ...odd].map(async (other) => {
       const { status, body } = await opens(other)
       expect([status, body], other).toEqual([404, same])
-    }
+    }))
     expect((await opens(token)).status).toBe(200)
   })
 
@@ -226,7 +227,7 @@ describe('what is said at the dock', () => {
     expect((await history(id)).slice(-3).map(act => [act.kind, act.by, act.isTheirs])).toEqual([
       ['dock-missing', 'Dana', true], ['arrived', 'Dana', true], ['dock-gross', 'Dana', true],
     ])
-    expect((await firm.auditor.client.get<DockLinksAnswer>(`/api/shipments/${id}/dock-links`)).body.items[0]).toMatchObject({ id: link.id, entries: 3, lastEntryAt: expect.any(String) as string, firstUsedAt: expect.any(String) as string })
+    expect((await firm.auditor.client.get<DockLinksAnswer>(`/api/shipments/${id}/dock-links`)).body.items[0]).toMatchObject({ id: link.id, entries: 2, lastEntryAt: expect.any(String) as string, firstUsedAt: expect.any(String) as string })
   })
 
   it('is kept once, however often it is sent, and otherwise refused under the same id', async () => {

@@ -13,6 +13,7 @@ import { sendMail } from '../mail/mail'
 import { actStatement } from '../shipments/acts'
 import { theShipment } from '../shipments/shipments'
 import { dockLetter } from './dockLetter'
+import { DOCK_ACT } from './linkEntries'
 import { sealedToken } from './sealedToken'
 
 const SELECT_LINKS = `SELECT link.id, link.for_whom, link.created_at, maker.name AS created_by_name, link.expires_at, link.revoked_at,
@@ -20,7 +21,7 @@ const SELECT_LINKS = `SELECT link.id, link.for_whom, link.created_at, maker.name
   FROM dock_links AS link
   LEFT JOIN people AS maker ON maker.id = link.created_by
   LEFT JOIN people AS revoker ON revoker.id = link.revoked_by
-  LEFT JOIN shipment_acts AS act ON act.link_id = link.id`
+  LEFT JOIN shipment_acts AS act ON act.link_id = link.id AND act.kind LIKE '${DOCK_ACT}%'`
 
 /** The links of a shipment, the newest first. Errors: 404 for a shipment that nobody knows. */
 export async function linksOf(db: Database, shipmentId: string, now: number): Promise<DockLink[]> {
