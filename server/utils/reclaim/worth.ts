@@ -10,16 +10,29 @@ import { pricesOf, termsOn } from './terms'
 
 /** Another process on the same database server may have written: how long an answer may lag. */
 const LONGEST_AGE_MS = 15_000
-/** An answer stands for so many times as long as it took to make: a very large fleet is not reckoned through after every write. */
+/** What took longer is not reckoned through after every write, for a line among others: it stands for so many times as long. */
+const QUICK_MS = 250
 const STANDS_FOR = 20
 
 const kept = new WeakMap<Database, { writes: number, at: number, tookMs: number, answer: Promise<WorthAnswer> }>()
 
-/** What each reclaimer would take today of the stock. After something was written it is made anew, in a large fleet some seconds later. */
+/** What each reclaimer would take today of the stock, with all that was written here. */
 export function worthToday(db: Database, nowMs: number): Promise<WorthAnswer> {
   const known = kept.get(db)
-  const age = nowMs - (known?.at ?? -Infinity)
-  if (known && age >= 0 && age < (known.writes === db.writes() ? LONGEST_AGE_MS : known.tookMs * STANDS_FOR)) return known.answer
+  return known?.writes === db.writes() && isYounger(known, LONGEST_AGE_MS, nowMs) ? known.answer : madeAnew(db, nowMs)
+}
+
+/** The same as it was some seconds ago, where the fleet is so large that making it takes long. */
+export function worthLately(db: Database, nowMs: number): Promise<WorthAnswer> {
+  const known = kept.get(db)
+  return known && known.tookMs > QUICK_MS && isYounger(known, known.tookMs * STANDS_FOR, nowMs) ? known.answer : worthToday(db, nowMs)
+}
+
+function isYounger({ at }: { at: number }, ageMs: number, nowMs: number): boolean {
+  return nowMs >= at && nowMs - at < ageMs
+}
+
+function madeAnew(db: Database, nowMs: number): Promise<WorthAnswer> {
   const begun = performance.now()
   const made = { writes: db.writes(), at: nowMs, tookMs: 0, answer: worthAnswer(db, nowMs) }
   kept.set(db, made)
