@@ -33,7 +33,8 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
     case 'found': return view.lifecycle === 'missing' ? null : 'It is not missing.'
     case 'retired': return whyNotRetired(view)
     case 'filled': return reason(mayFill(view))
-    case 'drawn':
+    // Most that is drawn goes back into equipment of its owner. What is overfilled is drawn down, whosever it is.
+    case 'drawn': return reason(mayDraw(view, isOverfilled(view) ? undefined : { purpose: 'same-owner' }))
     case 'transferred': return reason(mayDraw(view))
     case 'checked': return view.contents.nothingInIt ? 'By the log nothing is in it.' : reason(mayCheck(view))
     case 'moved':
@@ -41,6 +42,10 @@ function whyNot(view: Planned, access: Access, kind: EventKind): string | null {
     case 'handed-over': return reason(mayTake(view))
     default: return null
   }
+}
+
+function isOverfilled({ findings }: Planned): boolean {
+  return findings.some(({ code }) => code === 'overfill')
 }
 
 function whyNotRetired(view: Planned): string | null {

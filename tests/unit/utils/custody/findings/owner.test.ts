@@ -48,6 +48,13 @@ describe('used refrigerant that is drawn', () => {
     expect(mayDraw(viewAfter(ofTwo), { purpose: 'same-system' }).allowed).toBe(false)
     expect(mayDraw(viewAfter(ofTwo)).allowed).toBe(true)
   })
+
+  it('is no plan at the cylinder where it is two owners\', but what is overfilled is drawn down all the same', () => {
+    expect(viewAfter(ofTwo).mayNot).toContainEqual({ kind: 'drawn', because: expect.stringContaining('reclaimer only') })
+    expect(viewAfter(theirs).may).toContain('drawn')
+    // The limit of R-22 is 16 kg: a gross of 28 kg.
+    expect(viewAfter([...ofTwo, filled('R-22', 29)]).may).toContain('drawn')
+  })
 })
 
 describe('used refrigerant in another cylinder', () => {
