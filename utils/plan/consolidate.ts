@@ -1,7 +1,7 @@
 import { isChosen, programText, type Program, type Solution, type Solve } from './linearProgram'
 import { alongWays, poured, type Choice } from './poured'
 import { faultOf, freedBy, type Transfer, type TransferProblem } from './transferProblem'
-import { eachWhole, emptied, fewestEmptied, fewestGrams, fewestTransfers, goes, mostFreed, opened, waysOf } from './transferPrograms'
+import { eachWhole, emptied, fewestGrams, fewestNeeded, fewestTransfers, goes, leastParts, mostFreed, opened, waysOf } from './transferPrograms'
 
 /**
  * The transfers by which the most cylinders come free, of those the fewest, of those the ones that move the fewest grams.
@@ -20,7 +20,10 @@ export const NOTHING_TO_FREE: Consolidation = { transfers: [], freed: 0, mostFre
 /** With more ways than these (70 cylinders of one lot) a solver is still reading its program when its time is over. */
 const MOST_WAYS = 5_000
 
-/** How the seconds for one plan are shared among its steps, the last of which has what is left. */
+/** So few are worked out to the end: each step may take all of the time, of which it takes a fraction of a second. */
+const EXACT_UP_TO = 12
+
+/** How the seconds for a larger plan are shared among its steps, the last of which has what is left. */
 const SHARES = { freed: 0.2, emptied: 0.15, whole: 0.3, parted: 0.25, grams: 0.1 }
 
 /**
@@ -32,15 +35,17 @@ const SHARES = { freed: 0.2, emptied: 0.15, whole: 0.3, parted: 0.25, grams: 0.1
 export async function consolidate(problem: TransferProblem, solve: Solve, seconds: number): Promise<Consolidation> {
   const ways = waysOf(problem).length
   if (ways === 0) return NOTHING_TO_FREE
-  const ask = (program: Program, share: keyof typeof SHARES) => solve(programText(program), { seconds: seconds * SHARES[share] })
+  const isSmall = new Set([...problem.gives, ...problem.takes].map(({ id }) => id)).size <= EXACT_UP_TO
+  const ask = (program: Program, step: keyof typeof SHARES) => solve(programText(program), { seconds: isSmall ? seconds : seconds * SHARES[step] })
 
   const most = await ask(mostFreed(problem), 'freed')
   const first = bestOf(problem, [pouredBy(problem, choiceOf(problem, most))])
   const bound = most.status === 'optimal' ? first.freed : problem.gives.length
   if (first.freed === 0) return { ...NOTHING_TO_FREE, mostFreed: most.status === 'optimal' ? 0 : bound }
 
-  const fewest = await ask(fewestEmptied(problem, first.freed), 'emptied')
-  const atLeast = fewest.status === 'optimal' ? choiceOf(problem, fewest).emptied.length : first.freed
+  const parts = leastParts(problem)
+  const fewest = await ask(fewestNeeded(problem, first.freed), 'emptied')
+  const atLeast = fewest.status === 'optimal' ? problem.gives.reduce((sum, _, give) => isChosen(fewest, emptied(give)) ? sum + parts[give]! : sum, 0) : first.freed
   const found = [first.transfers, pouredBy(problem, choiceOf(problem, fewest))]
   const answer = (): Consolidation => ({ ...bestOf(problem, found), mostFreed: bound, fewestTransfers: atLeast })
 
@@ -50,8 +55,8 @@ export async function consolidate(problem: TransferProblem, solve: Solve, second
   found.push(byWays(problem, whole))
   if (answer().transfers.length === atLeast) return answer()
 
-  // No plan brings each whole into another one: then it takes one transfer more at least.
-  const needed = whole.status === 'infeasible' ? atLeast + 1 : atLeast
+  // Where each has room for all of it somewhere and yet no plan brings each whole into another, it takes one transfer more.
+  const needed = whole.status === 'infeasible' && parts.every(least => least === 1) ? atLeast + 1 : atLeast
   const parted = await ask(fewestTransfers(problem, first.freed, needed), 'parted')
   found.push(byWays(problem, parted))
   const few = answer().transfers.length

@@ -18,11 +18,12 @@ export function mostFreed(problem: TransferProblem): Program {
   return { goal: 'Maximize', aim: freed(problem), rows: [...bySums(problem), ...once(problem)], binaries: choices(problem) }
 }
 
-/** The program by which so many come free out of the fewest: no plan has fewer transfers than cylinders it empties. */
-export function fewestEmptied(problem: TransferProblem, count: number): Program {
+/** The program by which so many come free with the fewest transfers that each by itself needs: no plan has fewer. */
+export function fewestNeeded(problem: TransferProblem, count: number): Program {
+  const parts = leastParts(problem)
   return {
     goal: 'Minimize',
-    aim: problem.gives.map((_, give) => [1, emptied(give)] as const),
+    aim: parts.map((least, give) => [least, emptied(give)] as const),
     rows: [...bySums(problem), ...once(problem), { terms: freed(problem), is: '>=', figure: count }],
     binaries: choices(problem),
   }
@@ -72,6 +73,7 @@ function parted(problem: TransferProblem, count: number, more: readonly Row[]): 
       ...gives.map(({ netGrams }, give): Row => ({ terms: [...ways.filter(way => way.give === give).map(way => [1, amount(give, way.take)] as const), [-netGrams, emptied(give)]], is: '=', figure: 0 })),
       ...takes.map((_, take) => withinRoom(problem, take, ways.filter(way => way.take === take).map(({ give }) => [1, amount(give, take)] as const))),
       ...ways.map(({ give, take }): Row => ({ terms: [[1, amount(give, take)], [-most(give, take), goes(give, take)]], is: '<=', figure: 0 })),
+      ...leastParts(problem).map((least, give): Row => ({ terms: [...ways.filter(way => way.give === give).map(way => [1, goes(give, way.take)] as const), [-least, emptied(give)]], is: '>=', figure: 0 })),
       ...ways.flatMap(({ give, take }): Row[] => [
         onlyIntoKept(problem, give, take),
         { terms: [[1, goes(give, take)], [-1, emptied(give)]], is: '<=', figure: 0 },
@@ -82,6 +84,17 @@ function parted(problem: TransferProblem, count: number, more: readonly Row[]): 
     ],
     binaries: [...choices(problem), ...ways.map(({ give, take }) => goes(give, take))],
   }
+}
+
+/** Into how many others each give must go at least: as many of the largest rooms that it could have as hold all of it. */
+export function leastParts(problem: TransferProblem): number[] {
+  const ways = waysOf(problem)
+  return problem.gives.map(({ netGrams }, give) => {
+    const rooms = ways.filter(way => way.give === give).map(({ take }) => problem.takes[take]!.roomGrams).sort((a, b) => b - a)
+    let parts = 0
+    for (let left = netGrams; left > 0 && parts <= rooms.length; parts++) left -= rooms[parts] ?? 0
+    return parts
+  })
 }
 
 /** Which cylinder could be emptied into which, by their places in the lists. */
