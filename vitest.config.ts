@@ -13,8 +13,8 @@ function nodeProject(name: string, more: Record<string, unknown> = {}) {
   }
 }
 
-// What is pure leaves nothing behind, so that the next file may find its modules read already.
-const pure = { isolate: false }
+// What is pure leaves nothing behind, so that the next file may find its modules read already. The patience is for many cases on a busy machine.
+const pure = { isolate: false, testTimeout: 30_000 }
 // Each file starts the built server on a database of its own. Mostly one of a test and its server waits for the other, so that two go side by side.
 const patience = { testTimeout: 120_000, hookTimeout: 180_000 }
 const served = { ...patience, maxWorkers: 2, sequence: { groupOrder: 1 } }
