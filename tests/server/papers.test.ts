@@ -151,8 +151,9 @@ describe('the papers by mail', () => {
       expect((await admin.post<MailSentAnswer>(`/api/mail/${letter.id}/send`)).status).toBe(409)
       expect((await manager.post<PapersMailAnswer>(path, letter)).body.mail).toBe('sent')
 
-      expect(post.received).toHaveLength(1)
-      const [got] = post.received
+      // A server that starts signs a checkpoint, and mails it to the auditor.
+      const [got, ...more] = post.received.filter(({ to }) => to.includes('dock@tarnbeck.example'))
+      expect(more).toEqual([])
       expect(got).toMatchObject({ to: ['dock@tarnbeck.example'], from: 'cylinders@harbor.example', subject: `Quillfen Cooling: papers of shipment ${number}, 1 cylinder` })
       expect(got!.text).toContain('Gate 4, before noon')
       expect(got!.papers.map(({ name, type }) => [name, type])).toEqual(names.map(name => [name, 'application/pdf']))
