@@ -42,13 +42,19 @@ const path = (id: string) => `/api/shipments/${id}`
 
 interface Sent { id: string, cylinderIds: string[] }
 
-/** A shipment that has left with so many cylinders at 40 lb gross, 12.5 lb net each. */
-async function sentOff(count: number, change?: (cylinderIds: string[]) => Promise<unknown>): Promise<Sent> {
+/** A shipment that has left with so many cylinders at 40 lb gross, 12.5 lb net each, of R-22 or of that mixed with another. */
+async function sentOff(count: number, mixedWith?: string): Promise<Sent> {
   const cylinders = []
   for (let made = 0; made < count; made++) cylinders.push(await registered(firm))
   const cylinderIds = cylinders.map(cylinder => cylinder.id)
-  await change?.(cylinderIds)
+  if (mixedWith !== undefined) {
+    await posted(firm.technician.client, cylinderIds.map(cylinderId => ({ ...eventOf(cylinderId, 'filled'), details: { refrigerant: mixedWith, grossBefore: lb(40), grossAfter: lb(41) } })))
+  }
   const { id } = await made<ShipmentWithLines>(firm.warehouse.client, '/api/shipments', { toFirmId: firm.reclaimer.id, cylinderIds })
+  if (mixedWith !== undefined) {
+    const classification = { identification: 'UN1078', technicalNames: ['chlorodifluoromethane', 'difluoromethane'], reason: 'as analysed' }
+    for (const cylinderId of cylinderIds) expect((await firm.warehouse.client.put(`${path(id)}/lines/${cylinderId}/classification`, { ...act(), classification })).status).toBe(200)
+  }
   const { lines } = await readied(firm.warehouse.client, id, cylinderIds.map(cylinderId => ({ cylinderId, gross: lb(40) })))
   const { status, body } = await firm.manager.client.post<ShipmentWithLines & ProblemDetails>(`${path(id)}/dispatch`, {
     occurredAt: new Date().toISOString(), lines: lines.map(line => ({ cylinderId: line.cylinder.id, eventId: randomUUID(), expects: line.version, gross: lb(40) })),
@@ -381,10 +387,7 @@ describe('a file of a shipment', () => {
 
 describe('what mixing cost', () => {
   it('is what the best of it would have been credited clean, and the charge besides', async () => {
-    const { id, cylinderIds: [first] } = await sentOff(1, async ([cylinderId]) => {
-      const fill = { ...eventOf(cylinderId!, 'filled'), details: { refrigerant: 'R-410A', grossBefore: lb(40), grossAfter: lb(41) } }
-      await posted(firm.technician.client, [fill])
-    })
+    const { id, cylinderIds: [first] } = await sentOff(1, 'R-410A')
     expect((await shown(id)).lines[0]).toMatchObject({ sent: { condition: 'mixed', refrigerant: null }, figures: { rate: { mills: -1_500, per: 'lb' } } })
     await entered(id, { [first!]: TAKEN(lb(10), { rate: { mills: -1_500, per: 'lb' } }) })
     await settled(id, [first!])
