@@ -43,7 +43,7 @@ async function open() {
   const page = await mountSuspended(WeighPage, {
     route: `/shipments/${ID}/weigh`, attachTo: document.body, global: { stubs: { ScanViewfinder: true } },
   })
-  await vi.waitFor(() => expect(page.text()).toContain('0 of 1 weighed, for Reclaimer One'))
+  await vi.waitFor(() => expect(page.text()).toContain('0 of 1 weighed, for Reclaimer One'), { timeout: 5_000 })
   return {
     page,
     scan: (code: string) => page.findComponent(ScanEntry).vm.$emit('code', code),
@@ -58,6 +58,7 @@ describe('scanning and weighing a shipment', () => {
     const { page, scan } = await open()
     scan('0YHP9KRRT')
     await vi.waitFor(() => expect(page.text()).toContain('The scale shows'))
+    expect(page.findAll('button').find(button => button.text() === 'Type the code or the serial')!.element.parentElement!.style.display).toBe('none')
     await page.find('form input[inputmode=decimal]').setValue('50.1')
     await page.find('form').trigger('submit')
     await vi.waitFor(() => expect(page.text()).toContain('1 of 1 weighed'))
