@@ -56,6 +56,18 @@ export function readTyped(typed: TypedLine, unit: Unit): ReadTyped {
   }
 }
 
+/** What was typed for one unit of the screen, as it says the same under another; what cannot be read stays as it is. */
+export function retyped(typed: TypedLine, from: Unit, to: Unit): TypedLine {
+  if (from === to) return typed
+  const [gross, net, price] = [readMass(typed.gross, from), readMass(typed.net, from), readRate(typed.price, from)]
+  return {
+    ...typed,
+    gross: 'wrong' in gross ? typed.gross : massText(gross.value, to),
+    net: 'wrong' in net ? typed.net : massText(net.value, to),
+    price: 'wrong' in price ? typed.price : rateText(price.value, to),
+  }
+}
+
 /** A weight, in the screen's unit unless it says another. @example readMass('41 lb 13 oz', 'kg') // { value: { unit: 'lb-oz', lb: 41, oz: 13 } } */
 export function readMass(text: string, unit: Unit): Typed<MassReading> {
   const typed = text.trim()

@@ -63,6 +63,15 @@ describe('entering a settlement', () => {
     expect([box('Grade of serial S-a').element.value, box('Grade of serial S-b').element.value]).toEqual(['A', 'B'])
   })
 
+  it('keeps what a typed weight says where the unit of the screen is changed', async () => {
+    const { form, box, save } = await entry()
+    await box('Accepted net of serial S-a').setValue('12')
+    await form.setProps({ unit: 'kg' })
+    expect(box('Accepted net of serial S-a').element.value).toBe('12 lb')
+    await save()
+    expect(form.emitted('save')).toMatchObject([[[{ cylinderId: 'a', acceptedNet: { unit: 'lb', value: 12 } }]]])
+  })
+
   it('asks no more what became of a line that is back, or of any once it is settled', async () => {
     const { form, box } = await entry([settlementLine('a', { outcome: 'sent-back' }, { returnedAt: '2026-03-02T10:00:00Z' }), settlementLine('b')])
     expect(box('What became of serial S-a').exists()).toBe(false)

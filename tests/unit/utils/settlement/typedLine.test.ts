@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { NOTHING_SAID, type LineFigures } from '../../../../utils/settlement/figures'
-import { pastedBlock, readMass, readMoney, readRate, readTyped, typedOf } from '../../../../utils/settlement/typedLine'
+import { pastedBlock, readMass, readMoney, readRate, readTyped, retyped, typedOf } from '../../../../utils/settlement/typedLine'
 
 describe('what is typed of a line', () => {
   it('reads as it was shown, whatever the unit of the screen', () => {
@@ -30,6 +30,11 @@ describe('what is typed of a line', () => {
     expect(readRate('2.1255', 'lb')).toHaveProperty('wrong')
     expect(readMoney('26.40')).toEqual({ value: 2_640 })
     expect(readMoney('26.405')).toHaveProperty('wrong')
+  })
+
+  it('says the same where the screen changes its unit, also beside a box that cannot be read', () => {
+    expect(retyped({ gross: '39.9', net: 'x', grade: 'A', price: '2.4', stated: '1', outcome: '' }, 'lb', 'kg')).toEqual({ gross: '39.9 lb', net: 'x', grade: 'A', price: '2.40/lb', stated: '1', outcome: '' })
+    expect(retyped({ gross: '39.9 lb', net: '', grade: '', price: '2.40/lb', stated: '', outcome: '' }, 'kg', 'lb')).toMatchObject({ gross: '39.9', net: '', price: '2.40' })
   })
 
   it('tells of every box that is wrong', () => {
