@@ -83,9 +83,9 @@ describe('which job a fill is of', () => {
 
 describe('a list of jobs', () => {
   it('says what is not known as that, and what a phone\'s copy does not have', async () => {
-    const table = await mountSuspended(JobTable, { props: { jobs: [line, { ...line, id: 'j2', recoveredGrams: null, notKnown: 1 }, { ...line, id: 'j3', recoveredGrams: null }, { ...line, id: 'j4', recoveredGrams: null, cylinders: null }], unit: 'kg', now: NOW, timeZone: 'UTC' } })
+    const table = await mountSuspended(JobTable, { props: { jobs: [line, { ...line, id: 'j2', recoveredGrams: null, notKnown: 1 }, { ...line, id: 'j3', recoveredGrams: null, cylinders: 0 }, { ...line, id: 'j5', recoveredGrams: null }, { ...line, id: 'j4', recoveredGrams: null, cylinders: null }], unit: 'kg', now: NOW, timeZone: 'UTC' } })
     const text = words(table.element)
-    for (const part of ['5.67 kg', '– not known', '– nothing yet', '– with the server']) expect(text).toContain(part)
+    for (const part of ['5.67 kg', '– not known', '– nothing yet', '– nothing that counts', '– with the server']) expect(text).toContain(part)
   })
 })
 
