@@ -1,4 +1,4 @@
-import { isChosen, programText, type Program, type Solution, type Solve } from './linearProgram'
+import { isChosen, programText, reached, type Program, type Solution, type Solve } from './linearProgram'
 import { alongWays, poured, type Choice } from './poured'
 import { faultOf, freedBy, type Transfer, type TransferProblem } from './transferProblem'
 import { eachWhole, emptied, fewestGrams, fewestNeeded, fewestTransfers, goes, leastParts, mostFreed, opened, waysOf } from './transferPrograms'
@@ -23,14 +23,14 @@ const MOST_WAYS = 5_000
 /** So few are worked out to the end: each step may take all of the time, of which it takes a fraction of a second. */
 const EXACT_UP_TO = 12
 
-/** How the seconds for a larger plan are shared among its steps, the last of which has what is left. */
+/** How the seconds for a larger plan are shared among its steps. */
 const SHARES = { freed: 0.2, emptied: 0.15, whole: 0.3, parted: 0.25, grams: 0.1 }
 
 /**
  * Searches the best transfers within a time. Each source is emptied whole, into several cylinders where that frees more;
  * what is only moved between two that stay frees nothing.
  *
- * Rounding: whole grams throughout. Errors: where a solver's answer does not hold against the problem.
+ * Rounding: whole grams throughout.
  */
 export async function consolidate(problem: TransferProblem, solve: Solve, seconds: number): Promise<Consolidation> {
   const ways = waysOf(problem).length
@@ -40,8 +40,8 @@ export async function consolidate(problem: TransferProblem, solve: Solve, second
 
   const most = await ask(mostFreed(problem), 'freed')
   const first = bestOf(problem, [pouredBy(problem, choiceOf(problem, most))])
-  const bound = most.status === 'optimal' ? first.freed : problem.gives.length
-  if (first.freed === 0) return { ...NOTHING_TO_FREE, mostFreed: most.status === 'optimal' ? 0 : bound }
+  const bound = most.status === 'optimal' ? first.freed : await boundOf(mostFreed(problem), problem.gives.length, program => ask(program, 'grams'))
+  if (first.freed === 0) return { ...NOTHING_TO_FREE, mostFreed: bound }
 
   const parts = leastParts(problem)
   const fewest = await ask(fewestNeeded(problem, first.freed), 'emptied')
@@ -64,6 +64,16 @@ export async function consolidate(problem: TransferProblem, solve: Solve, second
   if (parted.status === 'optimal') found.push(byWays(problem, await ask(fewestGrams(problem, first.freed, few), 'grams')))
   return { ...answer(), fewestTransfers: proven }
 }
+
+/** What no plan can pass, by the program with parts of cylinders allowed; else the most there are. */
+async function boundOf(program: Program, most: number, ask: (program: Program) => Promise<Solution>): Promise<number> {
+  const relaxed = { ...program, isRelaxed: true }
+  const solution = await ask(relaxed)
+  return solution.status === 'optimal' ? Math.min(most, Math.floor(reached(relaxed, solution) + NOISE)) : most
+}
+
+// Keeps 26.9999999 from becoming 26.
+const NOISE = 1e-6
 
 function choiceOf({ gives, takes }: TransferProblem, solution: Solution): Choice {
   return {

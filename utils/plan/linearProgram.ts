@@ -13,15 +13,15 @@ export type Terms = readonly (readonly [factor: number, variable: string])[]
 /** One condition of a program: its sum against a figure. */
 export interface Row { terms: Terms, is: '<=' | '=' | '>=', figure: number }
 
-/** A program before it is written out; variables that are no `binaries` are at least 0. */
-export interface Program { goal: 'Minimize' | 'Maximize', aim: Terms, rows: readonly Row[], binaries: readonly string[] }
+/** A program before it is written out; variables that are no `binaries` are at least 0. Relaxed, a binary may lie between 0 and 1. */
+export interface Program { goal: 'Minimize' | 'Maximize', aim: Terms, rows: readonly Row[], binaries: readonly string[], isRelaxed?: boolean }
 
 /** The program as text in the LP format that solvers read. A sum without a term is left out of the rows, as it says nothing. */
-export function programText({ goal, aim, rows, binaries }: Program): string {
+export function programText({ goal, aim, rows, binaries, isRelaxed = false }: Program): string {
   return [
     goal, ` aim: ${sumText(aim)}`, 'Subject To',
     ...rows.filter(({ terms }) => terms.length > 0).map(({ terms, is, figure }, index) => ` r${index}: ${sumText(terms)} ${is} ${figure}`),
-    ...(binaries.length > 0 ? ['Binary', ...binaries.map(name => ` ${name}`)] : []),
+    ...(binaries.length > 0 ? [isRelaxed ? 'Bounds' : 'Binary', ...binaries.map(name => isRelaxed ? ` 0 <= ${name} <= 1` : ` ${name}`)] : []),
     'End', '',
   ].join('\n')
 }
@@ -32,6 +32,11 @@ const TERMS_ON_A_LINE = 12
 function sumText(terms: Terms): string {
   const words = terms.map(([factor, variable]) => `${factor < 0 ? '-' : '+'} ${Math.abs(factor)} ${variable}`)
   return words.map((word, index) => index > 0 && index % TERMS_ON_A_LINE === 0 ? `\n  ${word}` : word).join(' ')
+}
+
+/** What a program's aim comes to by an answer. */
+export function reached({ aim }: Program, { values }: Solution): number {
+  return aim.reduce((sum, [factor, variable]) => sum + factor * (values[variable] ?? 0), 0)
 }
 
 /** Whether a variable of yes and no was chosen. */

@@ -117,7 +117,7 @@ function whyNothing({ firm, terms }: PlanReclaimer, judged: readonly Judged[], {
   if (netGrams < leastGrams) return [`${firm.name} fetches from ${massWords(leastGrams, 'nearest')} on; what it takes comes to ${massWords(netGrams, 'nearest')}. Its minimum is not met.`]
   if (offers.length < leastCylinders) return [`${firm.name} fetches from ${counted(leastCylinders, 'cylinder', 'cylinders')} on; it takes ${offers.length} of these. Its minimum is not met.`]
   const credit = offers.reduce((sum, offer) => sum + Math.max(0, offer.worthCents.get(firm.id)!), 0)
-  return [`${firm.name} would pay ${formatMoney(credit)} at most; a pick-up costs ${formatMoney(pickUpCents)}. It is not worth more than what is planned.`]
+  return [`${firm.name} would pay ${formatMoney(credit)} at most for what it takes${pickUpCents > 0 ? `, and a pick-up costs ${formatMoney(pickUpCents)}` : ''}. What is planned brings more.`]
 }
 
 function keptBecause({ reclaimers }: ShippingQuestion, { worthCents }: Offer): string {

@@ -5,6 +5,7 @@ import type { Access } from '../../../utils/access/roles'
 import type { PlanAnswer, PlanMade, PlanQuestion } from '../../../utils/contract/plans'
 import { consolidate } from '../../../utils/plan/consolidate'
 import { consolidationAnswer } from '../../../utils/plan/consolidationAnswer'
+import type { Solve } from '../../../utils/plan/linearProgram'
 import { shippingAnswer } from '../../../utils/plan/shippingAnswer'
 import { sortOut } from '../../../utils/plan/sortOut'
 import { dayOfInstant } from '../../../utils/quantity/day'
@@ -18,8 +19,10 @@ import { followPlans } from './followPlans'
 import { chosenIds, planCylinders } from './planCylinders'
 import { solveApart } from './solver'
 
-/** What the search may take, so that the answer comes within ten seconds. */
-const SEARCH_SECONDS = 7
+/** What the search may take, so that the answer comes within ten seconds; a solver is a little longer at its last step. */
+const SEARCH_SECONDS = 6.5
+/** With less time than this nothing is begun any more. */
+const LEAST_SECONDS = 0.1
 /** Each keeps the solver busy for as long. */
 const MOST_AT_ONCE = 2
 
@@ -50,20 +53,29 @@ export async function makePlan(db: Database, question: PlanQuestion, access: Acc
   }
 }
 
+/** The solver for one plan: whatever its steps ask for, all of them together take no longer than the search may. */
+function solverUntil(endsAtMs: number): Solve {
+  return async (program, { seconds }) => {
+    const left = (endsAtMs - performance.now()) / 1000
+    return left < LEAST_SECONDS ? { status: 'stopped', values: {} } : solveApart(program, { seconds: Math.min(seconds, left) })
+  }
+}
+
 async function workOut(db: Database, question: PlanQuestion, access: Access, nowMs: number): Promise<PlanAnswer> {
   const ids = await chosenIds(db, question, nowMs)
   const [from, cylinders] = await Promise.all([directory(db), planCylinders(db, ids, { access, nowMs })])
   const names = namesOf(from)
+  const solve = solverUntil(performance.now() + SEARCH_SECONDS * 1000)
   const nameOfFirm = (id: string) => names.firm(id).name
   if (question.kind === 'shipping') {
     const day = dayOfInstant(nowMs, from.timeZone)
     const firms = [...from.firms.values()].filter(({ kind, active }) => kind === 'reclaimer' && active)
     const reclaimers = await Promise.all(firms.map(async ({ id, name }) => ({ firm: { id, name }, terms: await termsOn(db, id, day), prices: await pricesOf(db, id) })))
-    return shippingAnswer({ cylinders, reclaimers, day, nameOfFirm }, solveApart, SEARCH_SECONDS)
+    return shippingAnswer({ cylinders, reclaimers, day, nameOfFirm }, solve, SEARCH_SECONDS)
   }
   const limits = { policy: fillPolicyAt(from.fillPolicies, nowMs), catalogue: CATALOGUE }
   const sorted = sortOut(cylinders, question, limits)
-  const found = await consolidate(sorted.problem, solveApart, SEARCH_SECONDS)
+  const found = await consolidate(sorted.problem, solve, SEARCH_SECONDS)
   return consolidationAnswer({ cylinders, sorted, found, limits, nameOfFirm })
 }
 
