@@ -90,8 +90,11 @@ const LINES: { [K in EventKind]: Say<K> } = {
     what: [reason, proof?.text, proof?.certificate && `certificate ${proof.certificate}`, proof?.photoIds && photosInWords(proof.photoIds.length)].filter(Boolean).join('; '),
   }),
   'sent-for-reclaim': ({ shipmentId, gross }, names) => ({ what: `left with ${names[shipmentId] ?? 'a shipment'}`, gross }),
-  'reclaimed': ({ theirGross, acceptedNet, grade }) => ({
-    what: ['taken over by the reclaimer', acceptedNet && `accepted ${formatReading(acceptedNet)} net`, grade].filter(Boolean).join(', '),
+  'reclaimed': ({ theirGross, acceptedNet, grade, reported }) => ({
+    what: [
+      'taken over by the reclaimer', acceptedNet && `accepted ${formatReading(acceptedNet)} net`, grade && `grade ${grade}`,
+      reported?.name && `reported at the dock by ${reported.name}`,
+    ].filter(Boolean).join(', '),
     gross: theirGross ?? null,
   }),
   'returned': ({ fromFirmId, gross }, names) => ({ what: `from ${named(fromFirmId, names)}`, gross: gross ?? null }),
