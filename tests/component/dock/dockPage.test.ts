@@ -139,6 +139,8 @@ describe('a shipment at the dock', () => {
     await eventually(() => expect(plain(here.text())).toContain('Yours is 2.5 lb less than the sender’s'))
     expect(recorded[1]).toMatchObject({ kind: 'gross', said: { gross: { unit: 'lb', value: 49.9 } } })
     await eventually(() => expect(status(here)).toBe('all sent'))
+    await pressed(here, 'All cylinders')
+    expect(here.findAll('main li').map(row => plain(row.text()))).toEqual(['SN K-9377R-22not looked at', 'SN K-4821R-2249.9 lb, weight differs'])
   })
 
   it('takes no weight of nothing', async () => {
