@@ -1,5 +1,6 @@
 import { exactGrams, formatMass, type MassUnit } from '../quantity/mass'
 import { FLOAT_NOISE_GRAMS, grossSum, isPoisonous, type LoadedLine } from './placards'
+import { unclassified } from './shippingDescription'
 import { MATERIALS_OF_TRADE } from './vanLoad'
 
 /** Whether a load may go without papers as materials of trade; in words why not, and what stays the firm's to judge. */
@@ -26,6 +27,7 @@ export function tradeException(lines: readonly LoadedLine[], { carriedBy, unit }
   const notWeighed = hazardous.filter(({ gross }) => gross === null).length
   const open = [
     notWeighed > 0 && `${notWeighed === 1 ? '1 cylinder is' : `${notWeighed} cylinders are`} not weighed.`,
+    unclassified(lines).length > 0 && 'Not all are classified.',
     carriedBy === 'not-said' && 'Nobody has said yet who carries it.',
   ].filter(line => line !== false)
   if (open.length > 0) return { state: 'not-known', because: open }

@@ -1,10 +1,10 @@
 import { exactGrams, formatMass, type MassReading, type MassUnit } from '../quantity/mass'
-import type { ShippingDescription } from './shippingDescription'
+import { unclassified, type ShippingDescription } from './shippingDescription'
 import { PLACARD_FROM_GRAMS } from './vanLoad'
 
 /** What a line of the papers adds to a vehicle. */
 export interface LoadedLine {
-  description: Pick<ShippingDescription, 'identification' | 'division' | 'words'>
+  description: Pick<ShippingDescription, 'identification' | 'division' | 'words' | 'needsChoice'>
   /** Only what is left of what was in it. */
   isResidue: boolean
   gross: MassReading | null
@@ -50,6 +50,7 @@ export function placards(lines: readonly LoadedLine[], unit: MassUnit): Placards
   const tableTwo = counted.filter(({ description }) => description.division !== '2.3')
   const countedGrams = grossSum(tableTwo)
   const notWeighed = tableTwo.filter(({ gross }) => gross === null).length
+  const notClassified = unclassified(lines).length
   const isHeavy = countedGrams + FLOAT_NOISE_GRAMS >= placardFromGrams(unit)
   const poison = counted.some(({ description }) => description.division === '2.3')
   const burning = isHeavy && tableTwo.some(({ description }) => description.division === '2.1')
@@ -57,11 +58,12 @@ export function placards(lines: readonly LoadedLine[], unit: MassUnit): Placards
   const names: PlacardName[] = [...poison ? ['POISON GAS' as const] : [], ...burning ? ['FLAMMABLE GAS' as const] : [], ...other ? ['NON-FLAMMABLE GAS' as const] : []]
   const threshold = unit === 'kg' ? '454 kg' : '1,001 lb'
   return {
-    state: names.length > 0 ? 'needed' : notWeighed > 0 ? 'not-known' : 'not-needed',
+    state: names.length > 0 ? 'needed' : notWeighed + notClassified > 0 ? 'not-known' : 'not-needed',
     names, countedGrams, notWeighed,
     notes: [
       ...tableTwo.length > 0 ? [`${formatMass(countedGrams, unit, 'nearest')} gross of divisions 2.1 and 2.2 are counted; from ${threshold} on one vehicle they are placarded (${SECTION}(c)).`] : [],
       ...notWeighed > 0 ? [`${notWeighed === 1 ? '1 cylinder is' : `${notWeighed} cylinders are`} not weighed and not counted.`] : [],
+      ...notClassified > 0 ? [`${notClassified === 1 ? '1 cylinder is' : `${notClassified} cylinders are`} not classified and not counted.`] : [],
       ...counted.length < hazardous.length ? [`${hazardous.length - counted.length} with only a residue need not be counted (${SECTION}(d)).`] : [],
       ...poison ? [`POISON GAS is shown for any quantity (${SECTION}(e), table 1).`] : [],
       ...burning && other ? [`NON-FLAMMABLE GAS may be left off where FLAMMABLE GAS is shown (${SECTION}(f)(3)).`, dangerous(tableTwo, unit)] : [],

@@ -99,7 +99,9 @@ function describedLine({ classification, ...line }: PapersLine, catalogue: Namin
 }
 
 function groupsOf(lines: readonly DescribedLine[]): DescribedGroup[] {
-  const keyOf = ({ description, isResidue }: DescribedLine) => `${description.text}\n${isHazardous(description) && isResidue}`
+  // Of what nobody has classified the reasons stand apart.
+  const keyOf = ({ description, isResidue }: DescribedLine) =>
+    [description.text, isHazardous(description) && isResidue, description.needsChoice ? description.because : ''].join('\n')
   const firsts = new Map([...lines].reverse().map(line => [keyOf(line), line]))
   return [...firsts].map(([key, { description, isResidue }]): DescribedGroup => {
     const alike = lines.filter(line => keyOf(line) === key)

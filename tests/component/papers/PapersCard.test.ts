@@ -27,7 +27,7 @@ describe('what the papers say', () => {
   })
 
   it('says of a blend without a row that the choice of its entry is from memory', async () => {
-    expect(textOf(await shown([papersLine({ contents: { refrigerant: 'R-410A', condition: 'clean', knownParts: ['R-410A'], nothingInIt: false } })]))).toContain('choice of entry from memory')
+    expect(textOf(await shown([papersLine({ contents: { refrigerant: 'R-410A', condition: 'clean', knownParts: ['R-410A'], nothingInIt: false } })]))).toContain('Choice of entry from memory')
   })
 
   it('asks the shipper how mixed refrigerants travel, and takes the confirmation of what is proposed', async () => {

@@ -28,7 +28,8 @@ describe('materials of trade', () => {
     expect(tradeException([gas(50)], { ...OWN, carriedBy: 'carrier' })).toMatchObject({ state: 'may-not', because: [expect.stringContaining('carrier')] })
   })
 
-  it('are not known while a cylinder is not weighed or nobody has said who carries it', () => {
+  it('are not known while a cylinder is not weighed or not classified, or nobody has said who carries it', () => {
+    expect(tradeException([{ ...gas(50), description: { identification: null, division: null, words: [], needsChoice: true } }], OWN).state).toBe('not-known')
     expect(tradeException([{ ...gas(0), gross: null }], OWN).state).toBe('not-known')
     expect(tradeException([gas(50)], { ...OWN, carriedBy: 'not-said' }).state).toBe('not-known')
   })
@@ -42,5 +43,5 @@ describe('materials of trade', () => {
 })
 
 function gas(pounds: number, division: Division = '2.2'): LoadedLine {
-  return { description: { identification: 'UN1018', division, words: [] }, isResidue: false, gross: { unit: 'lb', value: pounds } }
+  return { description: { identification: 'UN1018', division, words: [], needsChoice: false }, isResidue: false, gross: { unit: 'lb', value: pounds } }
 }

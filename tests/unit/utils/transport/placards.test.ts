@@ -46,21 +46,26 @@ describe('placards', () => {
     expect(placards([gas('2.2', 1001), { ...gas('2.2', 0), gross: null }], 'lb').state).toBe('needed')
   })
 
+  it('are not known where nobody has said how a cylinder travels', () => {
+    const open = { description: { identification: null, division: null, words: [], needsChoice: true }, isResidue: false, gross: { unit: 'lb', value: 100 } } as const
+    expect(placards([gas('2.2', 500), open], 'lb')).toMatchObject({ state: 'not-known', notes: expect.arrayContaining(['1 cylinder is not classified and not counted.']) })
+  })
+
   it('are not asked for what is no hazardous material', () => {
-    expect(placards([{ description: { identification: null, division: null, words: [] }, isResidue: false, gross: { unit: 'lb', value: 5000 } }], 'lb')).toMatchObject({ state: 'not-needed', notes: [] })
+    expect(placards([{ description: { identification: null, division: null, words: [], needsChoice: false }, isResidue: false, gross: { unit: 'lb', value: 5000 } }], 'lb')).toMatchObject({ state: 'not-needed', notes: [] })
   })
 })
 
 function gas(division: '2.1' | '2.2' | '2.3', pounds: number): LoadedLine {
-  return line({ unit: 'lb', value: pounds }, { identification: 'UN0000', division, words: [] })
+  return line({ unit: 'lb', value: pounds }, { identification: 'UN0000', division, words: [], needsChoice: false })
 }
 
 function ammonia(pounds: number): LoadedLine {
-  return line({ unit: 'lb', value: pounds }, { identification: 'UN1005', division: '2.2', words: ['Inhalation Hazard'] })
+  return line({ unit: 'lb', value: pounds }, { identification: 'UN1005', division: '2.2', words: ['Inhalation Hazard'], needsChoice: false })
 }
 
 function kilograms(value: number): LoadedLine {
-  return line({ unit: 'kg', value }, { identification: 'UN1018', division: '2.2', words: [] })
+  return line({ unit: 'kg', value }, { identification: 'UN1018', division: '2.2', words: [], needsChoice: false })
 }
 
 function line(gross: MassReading, description: LoadedLine['description']): LoadedLine {
