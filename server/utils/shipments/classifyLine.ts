@@ -1,6 +1,7 @@
 import type { Access } from '~~/utils/access/roles'
 import type { LineClassification } from '~~/utils/contract/papers'
-import type { KeptClassification } from '~~/utils/transport/shipperEntries'
+import { withTechnicalNames } from '~~/utils/refrigerant/unEntry'
+import { NOT_A_GAS, type KeptClassification } from '~~/utils/transport/shipperEntries'
 import { contentsKey } from '~~/utils/transport/shippedContents'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
@@ -29,7 +30,7 @@ export async function classifyLine(db: Database, shipmentId: string, cylinderId:
   const kept: KeptClassification | null = classification && { ...classification, of: contentsKey(line.contents) }
   await db.write([
     actStatement({
-      id, shipmentId, kind: 'classified', cylinderId, details: { classification }, by: { personId: access.personId }, occurredAt: Date.parse(occurredAt), recordedAt: nowMs,
+      id, shipmentId, kind: 'classified', cylinderId, details: { classification, what: saidInWords(classification) }, by: { personId: access.personId }, occurredAt: Date.parse(occurredAt), recordedAt: nowMs,
     }, { sql: OPEN_LINE, args: [shipmentId, cylinderId] }),
     {
       // Under an act that was recorded just now, so that a late repeat does not bring an earlier choice back.
@@ -39,4 +40,12 @@ export async function classifyLine(db: Database, shipmentId: string, cylinderId:
     },
     ...backToDraft(shipmentId, { why: 'A line was classified otherwise.', personId: access.personId, now: nowMs }, isKeptNow({ id, recordedAt: nowMs })),
   ])
+}
+
+/** What stands of it in the shipment's history. */
+function saidInWords(classification: LineClassification['classification']): string {
+  if (!classification) return 'taken back'
+  const { identification, technicalNames, reason } = classification
+  const travels = identification === NOT_A_GAS ? 'no gas of Class 2' : withTechnicalNames(identification, technicalNames)
+  return reason === null ? `${travels}, as proposed` : `${travels}: ${reason}`
 }

@@ -30,7 +30,7 @@ export async function mailPapers(db: Database, shipmentId: string, { id, occurre
   const mail = await sendMail({ ...papersLetter(papers, note ?? null), recipient, attachments }, nowMs, {
     id,
     alongside: [actStatement({
-      id, shipmentId, kind: 'papers-mailed', details: { to: recipient, papers: attachments.map(({ name }) => name), ...note !== undefined && { note } },
+      id, shipmentId, kind: 'papers-mailed', details: { to: recipient, papers: attachments.map(({ name }) => name), what: `to ${recipient}`, ...note !== undefined && { text: note } },
       by: { personId: access.personId }, occurredAt: Date.parse(occurredAt), recordedAt: nowMs,
     })],
   })
