@@ -36,7 +36,7 @@ async function askWorker(program: string, seconds: number): Promise<Solution> {
   const asked = worker
   asked.ref()
   const answered = new AbortController()
-  const signal = AbortSignal.any([AbortSignal.timeout(seconds * 1000 + PATIENCE_MS), answered.signal])
+  const signal = AbortSignal.any([AbortSignal.timeout(Math.ceil(seconds * 1000) + PATIENCE_MS), answered.signal])
   try {
     asked.postMessage({ program, seconds })
     // Rejects where the solver itself fails, or is busy beyond all patience; a thread that is ended says no more.
