@@ -73,7 +73,7 @@ export interface WorthSum {
 export const MOST_ON_A_SHIPMENT = 200
 const MOST_NAMED = 10
 
-/** What each reclaimer would take on a day, place by place; nothing where it would neither take nor refuse anything. */
+/** What each reclaimer would take on a day and what it would refuse, place by place. */
 export function worthOffers(candidates: readonly Candidate[], takers: readonly Taker[], day: Day): WorthOffer[] {
   const places = [...grouped(candidates, ({ placeId }) => placeId)]
   return takers.flatMap(taker => places.map(([placeId, there]) => offerOf(taker, placeId, there, day)))
