@@ -37,8 +37,11 @@ export function billOfLading(papers: ShippingPapers, isDraft: boolean): Paper {
       },
       ...isDraft && papers.missing.length > 0 ? [heading('Missing before it may leave'), ...items(papers.missing.map(({ text, source }) => `${text} (${source})`))] : [],
       heading('Shipper’s certification'),
-      { kind: 'text', text: papers.certification.text },
-      { kind: 'text', text: `${papers.certification.because} Wording: ${papers.certification.source}. The shipper keeps a copy for 2 years after the first carrier has accepted it (49 CFR 172.201(e)).` },
+      { kind: 'text', text: papers.certification.text, keepsNext: true },
+      {
+        kind: 'text', keepsNext: true,
+        text: `${papers.certification.because} Wording: ${papers.certification.source}. The shipper keeps a copy for 2 years after the first carrier has accepted it (49 CFR 172.201(e)).`,
+      },
       { kind: 'signatures', lines: [`For ${shipper.name}`, 'Day', 'Accepted by the carrier', 'Day of acceptance'] },
       heading('Placards of this load'),
       { kind: 'text', text: placardText(papers) },

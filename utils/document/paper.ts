@@ -4,7 +4,9 @@ import { fittedLines } from './wrappedText'
 
 /** A part of a paper, from top to bottom. */
 export type PaperBlock
-  = | { kind: 'title' | 'heading' | 'text' | 'item', text: string }
+  = | { kind: 'title' | 'heading' | 'item', text: string }
+    /** `keepsNext`: stands on the page of the block after it. */
+    | { kind: 'text', text: string, keepsNext?: boolean }
     | { kind: 'facts', rows: { term: string, value: string }[] }
     /** Lines to write on, each with what is to be written; all on one page. */
     | { kind: 'signatures', lines: string[] }
@@ -59,7 +61,7 @@ function rowsOf(block: PaperBlock): PaperRow[] {
   switch (block.kind) {
     case 'title': return [gap(GAP * 2, true), ...wrapped(block.text, { size: SIZES.title, bold: true }), gap(GAP)]
     case 'heading': return [gap(GAP, true), ...wrapped(block.text, { size: SIZES.heading, bold: true }).map(row => ({ ...row, keepsNext: true }))]
-    case 'text': return [...wrapped(block.text, { size: SIZES.text }), gap(GAP)]
+    case 'text': return [...wrapped(block.text, { size: SIZES.text }), gap(GAP)].map(row => ({ ...row, keepsNext: block.keepsNext ?? false }))
     case 'item': return [...wrapped(block.text, { size: SIZES.item, mark: '\u2013' }), gap(GAP / 2)]
     case 'facts': return [...block.rows.flatMap(factRows), gap(GAP)]
     case 'signatures': return [...block.lines.map((line, index) => signatureRow(line, index < block.lines.length - 1)), gap(GAP)]

@@ -45,4 +45,15 @@ describe('a bill of lading', () => {
     expect(readOn(draft)).toContain('No emergency telephone is set.')
     expect(readOn(pagesOf(billOfLading(papers, false)))).not.toContain('DRAFT')
   })
+
+  it('keeps the certification on the page on which it is signed, however long the list above it is', () => {
+    for (let descriptions = 1; descriptions < 30; descriptions++) {
+      const lines = Array.from({ length: descriptions }, (_, index) => papersLine({
+        cylinderId: String(index), contents: { refrigerant: null, condition: 'mixed', knownParts: [], nothingInIt: false },
+        classification: { identification: 'UN1078', technicalNames: [`part ${index}`, 'difluoromethane'], reason: 'as analysed' },
+      }))
+      const page = pagesOf(billOfLading(madePapers(lines), false)).find(texts => texts.includes('For Quillfen Cooling'))!
+      expect(page, `${descriptions} descriptions`).toEqual(expect.arrayContaining(['Shipper’s certification', 'Accepted by the carrier', 'Day of acceptance']))
+    }
+  })
 })
