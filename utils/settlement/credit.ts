@@ -14,8 +14,8 @@ export interface LineCredit {
 /** What a whole settlement comes to. */
 export interface SettlementCredit {
   lines: LineCredit[]
-  /** Of the lines whose credit is known. */
-  linesCents: number
+  /** Of the lines whose credit is known; null where there are lines, and none is. */
+  linesCents: number | null
   /** Lines that were taken over, or of which nothing is said yet, and whose credit is not known. */
   unknownLines: number
   othersCents: number
@@ -39,9 +39,10 @@ export function settlementCredit({ lines, statement }: SettlementFigures): Settl
     return { cylinderId, cents, statedCents: figures.statedCents, differenceCents: apart(figures.statedCents, cents ?? ofOneThatIsOut(figures)) }
   })
   const unknownLines = lines.filter(({ figures }) => !isOut(figures.outcome) && lineCreditCents(figures) === null).length
-  const linesCents = sum(credits.map(({ cents }) => cents ?? 0))
+  const known = credits.flatMap(({ cents }) => cents ?? [])
+  const linesCents = known.length === 0 && unknownLines > 0 ? null : sum(known)
   const othersCents = sum(statement.others.map(({ cents }) => cents))
-  const totalCents = unknownLines > 0 ? null : linesCents + othersCents
+  const totalCents = unknownLines > 0 ? null : sum(known) + othersCents
   return {
     lines: credits, linesCents, unknownLines, othersCents, totalCents,
     statedTotalCents: statement.totalCents,

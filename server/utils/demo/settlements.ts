@@ -2,14 +2,13 @@ import type { InStatement } from '@libsql/client'
 import { dayOfInstant } from '../../../utils/quantity/day'
 import { lineCreditCents, settlementCredit } from '../../../utils/settlement/credit'
 import { differencesOf, type Difference } from '../../../utils/settlement/dispute'
-import { NOTHING_SAID, type SettledLine, type SettlementFigures } from '../../../utils/settlement/figures'
+import type { SettledLine, SettlementFigures } from '../../../utils/settlement/figures'
 import type { ActKind } from '../../../utils/shipment/acts'
 import type { Database } from '../database/database'
 import { actStatement } from '../shipments/acts'
 import type { DisputeDetails } from '../settlement/disputes'
 import { headStatement, lineStatement } from '../settlement/figureStatements'
 import { readSettlement } from '../settlement/readSettlement'
-import { reclaimedEvents } from '../settlement/reclaimedEvents'
 import { DAY, HOUR, MINUTE } from './calendar'
 import { DEMO_TIME_ZONE, type Cast } from './cast'
 import { seededRandom } from './random'
@@ -56,17 +55,15 @@ export async function settlementStatements(db: Database, { people: { manager } }
 }
 
 async function settledFigures(db: Database, shipmentId: string, isShort: boolean): Promise<{ figures: SettlementFigures, settledAt: number }> {
-  const [{ shipment, lines }, logged] = await Promise.all([readSettlement(db, shipmentId), reclaimedEvents(db, shipmentId)])
+  const { shipment, lines } = await readSettlement(db, shipmentId)
   const settledAt = Date.parse(shipment.settledAt!)
-  const settled = lines.map(({ cylinderId, sent }, index): SettledLine => {
-    const { theirGross = null, acceptedNet = null, grade = null, price, pricePer } = logged.get(cylinderId)?.details ?? {}
-    const rate = price === undefined ? null : { mills: Math.round(price * 1000), per: pricePer ?? 'lb' }
-    const figures = { ...NOTHING_SAID, theirGross, acceptedNet, grade, rate, outcome: 'taken-over' as const }
+  const settled = lines.map(({ cylinderId, sent, figures: logged }, index): SettledLine => {
+    const figures = { ...logged, outcome: 'taken-over' as const }
     const cents = lineCreditCents(figures)
     return { cylinderId, sent, figures: { ...figures, statedCents: cents === null ? null : cents + (isShort && index === 0 ? SHORT_CENTS : 0) } }
   })
   const others = [{ what: 'Pick-up', cents: PICK_UP_CENTS }]
   const { linesCents } = settlementCredit({ lines: settled, statement: { number: null, day: null, others: [], totalCents: null }, unexpected: [] })
-  const statement = { number: `ST-${1_000 + shipment.number}`, day: dayOfInstant(settledAt, DEMO_TIME_ZONE), others, totalCents: linesCents + PICK_UP_CENTS + (isShort ? SHORT_CENTS : 0) }
+  const statement = { number: `ST-${1_000 + shipment.number}`, day: dayOfInstant(settledAt, DEMO_TIME_ZONE), others, totalCents: (linesCents ?? 0) + PICK_UP_CENTS + (isShort ? SHORT_CENTS : 0) }
   return { figures: { lines: settled, statement, unexpected: [] }, settledAt }
 }

@@ -11,11 +11,12 @@ import { problem } from '../http/problem'
 import { pricesOf } from '../reclaim/terms'
 import { shipmentLines, type StoredLine } from '../shipments/shipmentLines'
 import { theShipment } from '../shipments/shipments'
+import { reclaimedEvents, reclaimedFigures } from './reclaimedEvents'
 
 /** Acts that change a settlement's figures: the newest of them is its revision. */
 export const FIGURE_ACTS = ['figures-set', 'statement-taken', 'settled'] as const
 
-/** A line with its figures: those entered, else what the dock said and the price of the day it left. */
+/** A line with its figures: those entered, else what its log says where it was taken over, else what the dock said and the price of the day it left. */
 export interface ReadLine extends Pick<StoredLine, 'cylinderId' | 'sent' | 'returnedAt'> {
   figures: LineFigures
   isEntered: boolean
@@ -35,8 +36,8 @@ export interface ReadSettlement {
 export async function readSettlement(db: Database, shipmentId: string): Promise<ReadSettlement> {
   const shipment = await theShipment(db, shipmentId)
   if (shipment.dispatchedAt === null) throw problem(409, 'There is nothing to settle', `Shipment ${shipment.number} has not left.`)
-  const [stored, entries, prices, { timeZone }, [lineRows, heads, revisions]] = await Promise.all([
-    shipmentLines(db, shipmentId), dockEntries(db, shipmentId), pricesOf(db, shipment.to.id), directory(db),
+  const [stored, entries, prices, { timeZone }, logged, [lineRows, heads, revisions]] = await Promise.all([
+    shipmentLines(db, shipmentId), dockEntries(db, shipmentId), pricesOf(db, shipment.to.id), directory(db), reclaimedEvents(db, shipmentId),
     db.readClient.batch([
       { sql: 'SELECT cylinder_id, their_gross, accepted_net, grade, mills, per, stated_cents, outcome FROM settlement_lines WHERE shipment_id = ?', args: [shipmentId] },
       { sql: 'SELECT statement_number, statement_day, others, stated_total_cents FROM settlements WHERE shipment_id = ?', args: [shipmentId] },
@@ -53,7 +54,8 @@ export async function readSettlement(db: Database, shipmentId: string): Promise<
     lines: stored.map(({ cylinderId, sent, returnedAt }) => {
       const dock = said.get(cylinderId) ?? null
       const price = sent && priceOn(prices, { refrigerant: sent.refrigerant, condition: sent.condition, day })
-      const figures = entered.get(cylinderId) ?? prefilled(dock ?? undefined, price?.rate ?? null)
+      const event = logged.get(cylinderId)
+      const figures = entered.get(cylinderId) ?? (event ? reclaimedFigures(event.details) : null) ?? prefilled(dock ?? undefined, price?.rate ?? null)
       // One that has come back was not taken over, whatever was typed before.
       return { cylinderId, sent, returnedAt, dock, isEntered: entered.has(cylinderId), figures: returnedAt === null ? figures : { ...figures, outcome: 'sent-back' } }
     }),

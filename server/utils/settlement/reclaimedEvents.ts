@@ -18,6 +18,15 @@ export function reclaimedDetails(shipmentId: string, { theirGross, acceptedNet, 
   }
 }
 
+/** The same back as figures: a shipment may have been taken over before settlements were kept. A price without its unit is no rate. */
+export function reclaimedFigures({ theirGross, acceptedNet, grade, price, pricePer }: DetailsOf<'reclaimed'>): LineFigures {
+  return {
+    theirGross: theirGross ?? null, acceptedNet: acceptedNet ?? null, grade: grade ?? null,
+    rate: price === undefined || pricePer === undefined ? null : { mills: Math.round(price * MILLS_PER_WHOLE), per: pricePer },
+    statedCents: null, outcome: 'taken-over',
+  }
+}
+
 /** The `reclaimed` event of each line of a shipment, by cylinder, as corrections have left it. */
 export async function reclaimedEvents(db: Database, shipmentId: string): Promise<Map<string, { id: string, details: DetailsOf<'reclaimed'> }>> {
   const events = await lineEvents(db, { kind: 'shipment', id: shipmentId }, ['reclaimed'])

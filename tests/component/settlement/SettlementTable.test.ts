@@ -27,7 +27,7 @@ describe('the table of a settlement', () => {
   it('shows what is not known as a dash, and never as nothing', async () => {
     const [, second, foot] = await rows()
     expect(second!.slice(2)).toEqual(['R-22, clean', '40.0', '–', '12.5', '–', '–', '–', '–', '–', 'not said'])
-    expect(foot).toEqual(['All 2 cylinders', '80.0', '40.0', '25.0', '12.0', '1 without a credit yet', '$28.80', ''])
+    expect(foot).toEqual(['All 2 cylinders', '80.0', '40.0of 1', '25.0', '12.0of 1', '1 without a credit yet', '$28.80', ''])
   })
 
   it('tells of a difference by a shape and a word', async () => {

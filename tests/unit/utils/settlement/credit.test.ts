@@ -62,6 +62,11 @@ describe('the credit of a settlement', () => {
     expect(settlementCredit({ lines: [line('a', TAKEN)], statement: { ...NO_STATEMENT, totalCents: 2_641 }, unexpected: [] }).differenceCents).toBe(1)
   })
 
+  it('is not nothing while no line is known, and nothing where none was taken over', () => {
+    expect(settlementCredit({ lines: [line('a', NOTHING_SAID)], statement: NO_STATEMENT, unexpected: [] })).toMatchObject({ linesCents: null, totalCents: null, unknownLines: 1 })
+    expect(settlementCredit({ lines: [line('a', { ...NOTHING_SAID, outcome: 'sent-back' })], statement: NO_STATEMENT, unexpected: [] })).toMatchObject({ linesCents: 0, totalCents: 0, unknownLines: 0 })
+  })
+
   it('leaves out what was sent back or never arrived, and tells a credit that is stated for it', () => {
     const credit = settlementCredit({ lines: [line('a', TAKEN), line('b', { ...NOTHING_SAID, outcome: 'sent-back', statedCents: 900 })], statement: NO_STATEMENT, unexpected: [] })
     expect(credit).toMatchObject({ totalCents: 2_640, unknownLines: 0 })
