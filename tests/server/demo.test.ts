@@ -61,6 +61,12 @@ async function column(sql: string): Promise<unknown[]> {
 }
 
 describe('the demo firm', () => {
+  it('has one plan that is open, of which nothing was done yet', async () => {
+    expect(await column('SELECT state FROM plans')).toEqual(['open'])
+    expect((await column('SELECT done_event_id FROM plan_tasks')).length).toBeGreaterThan(1)
+    expect(await column('SELECT done_event_id FROM plan_tasks WHERE done_event_id IS NOT NULL')).toEqual([])
+  })
+
   it('has about 180 cylinders and a year and a half of history with every kind of event', async () => {
     const [cylinders] = await column('SELECT count(*) FROM cylinders')
     expect(cylinders).toBeGreaterThanOrEqual(170)
@@ -231,5 +237,23 @@ describe('the demo firm', () => {
   it('verifies, and is filled once', async () => {
     expect(await verifyLog(db, { now: NOW, sealing: null })).toMatchObject({ ok: true })
     expect(await fillDemo(db, 'no password', NOW)).toBe(false)
+  })
+
+  it('credits a customer with their part of what a settled line came to, and with nothing while it is not settled', async () => {
+    const dairy = [...(await directory(db)).firms.values()].find(({ name }) => name === 'Dunmarrow Dairy')!
+    const shippedNow = async () => (await bankedOf(db, dairy.id)).shipped
+    const before = await shippedNow()
+    expect(before.filter(({ isSettled }) => !isSettled).every(({ creditCents }) => creditCents === null)).toBe(true)
+    const line = before.find(({ isSettled, grams, wholeGrams }) => isSettled && grams < wholeGrams)!
+    const settled = async (statedCents: number | null) => {
+      // At 10.00 a kilogram each gram of the whole is a cent.
+      await db.write([{
+        sql: 'INSERT OR REPLACE INTO settlement_lines (shipment_id, cylinder_id, accepted_net, mills, per, stated_cents) VALUES (?, ?, ?, 10000, ?, ?)',
+        args: [line.shipment.id, line.cylinder.id, JSON.stringify({ unit: 'kg', value: line.wholeGrams / 1_000 }), 'kg', statedCents],
+      }])
+      return (await shippedNow()).find(({ eventId }) => eventId === line.eventId)!.creditCents
+    }
+    expect(await settled(null)).toBe(line.grams)
+    expect(await settled(-2 * line.wholeGrams)).toBe(-2 * line.grams)
   })
 })

@@ -52,6 +52,7 @@ export interface BankedShipped {
   grams: number
   /** Of all owners' in that cylinder. */
   wholeGrams: number
+  isSettled: boolean
   /** Hundredths of the currency, theirs by their share of the weight that left; null while it is not settled, or nobody said. */
   creditCents: number | null
 }

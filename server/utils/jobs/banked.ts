@@ -65,13 +65,18 @@ async function shippedOf({ readClient }: Database, firmId: string): Promise<Bank
     at: new Date(row['at'] as number).toISOString(),
     grams: row['grams'] as number,
     wholeGrams: row['whole_grams'] as number,
+    isSettled: isSettled(row),
     creditCents: creditFor(row),
   }))
 }
 
+function isSettled(row: Row): boolean {
+  return row['state'] === 'settled' || row['state'] === 'closed'
+}
+
 // Only what is settled is credited; what the statement says goes before what weight and price come to.
 function creditFor(row: Row): number | null {
-  if (row['state'] !== 'settled' && row['state'] !== 'closed') return null
+  if (!isSettled(row)) return null
   const lineCents = (row['stated_cents'] as number | null) ?? reckonedCents(row)
   return lineCents === null ? null : creditOf(lineCents, { grams: row['grams'] as number, wholeGrams: row['whole_grams'] as number })
 }

@@ -155,8 +155,8 @@ describe('what a customer has banked', () => {
         movements: [{ eventId: 'e1', ordinal: 0, cylinder, at: '2026-07-01T18:00:00.000Z', kind: 'filled', cause: 'recovered', refrigerant: 'R-22', grams: 6_000, apart: false }],
         movementsInAll: 1,
         shipped: [
-          { eventId: 'e3', shipment: { id: 's1', number: 4 }, to: { id: 'r', name: 'Tarnvale Reclaim' }, cylinder, refrigerant: 'R-22', at: '2026-06-01T18:00:00.000Z', grams: 3_000, wholeGrams: 4_000, creditCents: 12_345 },
-          { eventId: 'e4', shipment: { id: 's2', number: 5 }, to: { id: 'r', name: 'Tarnvale Reclaim' }, cylinder, refrigerant: 'R-22', at: '2026-06-01T18:00:00.000Z', grams: 1_000, wholeGrams: 1_000, creditCents: null },
+          { eventId: 'e3', shipment: { id: 's1', number: 4 }, to: { id: 'r', name: 'Tarnvale Reclaim' }, cylinder, refrigerant: 'R-22', at: '2026-06-01T18:00:00.000Z', grams: 3_000, wholeGrams: 4_000, isSettled: true, creditCents: 12_345 },
+          { eventId: 'e4', shipment: { id: 's2', number: 5 }, to: { id: 'r', name: 'Tarnvale Reclaim' }, cylinder, refrigerant: 'R-22', at: '2026-06-01T18:00:00.000Z', grams: 1_000, wholeGrams: 1_000, isSettled: false, creditCents: null },
         ],
       },
     } })
