@@ -1,9 +1,14 @@
-import { randomUUID } from 'node:crypto'
+import { randomBytes, randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { firmPrices, firms, firmTerms, labels, places, shipments } from '~~/drizzle/schema'
+import { append } from '~~/server/utils/custody/append'
+import { statement } from '~~/server/utils/database/database'
+import { directory } from '~~/server/utils/directory/directory'
 import { stopSolver } from '~~/server/utils/plan/solver'
 import { makePlan } from '~~/server/utils/plan/makePlan'
 import { cylinderTasks, dropPlan, listPlans, planDetails } from '~~/server/utils/plan/plans'
 import type { PlanQuestion } from '~~/utils/contract/plans'
+import { drawLabelCode } from '~~/utils/label/code'
 import { newCylinder, openLogDatabase, record, sent, type LogDatabase } from '../helpers/logDatabase'
 import { lb } from '../helpers/stamps'
 
@@ -35,6 +40,13 @@ function details(id: string) {
   return planDetails(log.db, id, log.technician, Date.now())
 }
 
+/** Gives each cylinder a label, without which none may leave. */
+async function labelled(ids: string[]): Promise<void> {
+  const codes = ids.map(() => drawLabelCode(randomBytes))
+  await log.db.write(codes.map(code => statement(log.db.read.insert(labels).values({ code, mintedAt: 0, mintedBy: log.warehouse.personId }))))
+  await record(log.db, log.warehouse, ids.map((id, index) => sent(id, 'labelled', { code: codes[index] })))
+}
+
 /** Both halves of a transfer, by gross weights in pounds before and after. */
 async function transferred(fromId: string, toId: string, out: [number, number], into: [number, number]) {
   const pair = { transferId: randomUUID(), refrigerant: 'R-22', condition: 'suspect' }
@@ -45,6 +57,51 @@ async function transferred(fromId: string, toId: string, out: [number, number], 
   await record(log.db, log.technician, events)
   return events
 }
+
+describe('a plan of what to ship', () => {
+  it('chooses by what the reclaimer takes and pays, and is ticked off by what has left', async () => {
+    const { db, warehouse, manager } = log
+    const [firmId, shipmentId, firmPlaceId] = [randomUUID(), randomUUID(), randomUUID()]
+    const terms = {
+      refrigerants: [{ designation: 'R-22', conditions: ['suspect'] }], takesMixed: false, takesUnknown: false, takesOverdue: true, specs: null, pressuresPsig: null,
+      mostContaminationPercent: null, minimum: lb(25), minimumCylinders: null, pickUpCents: 2_000, note: null,
+    }
+    await db.write([
+      statement(db.read.insert(firms).values({ id: firmId, name: 'Tarnvale Reclaim', kind: 'reclaimer', createdAt: 0 })),
+      statement(db.read.insert(places).values({ id: firmPlaceId, name: 'Tarnvale Reclaim', kind: 'firm', firmId, createdAt: 0 })),
+      statement(db.read.insert(firmTerms).values({ id: randomUUID(), firmId, fromDay: '2026-01-01', terms, recordedBy: manager.personId, recordedAt: 0 })),
+      statement(db.read.insert(firmPrices).values({ id: randomUUID(), firmId, refrigerant: 'R-22', condition: 'suspect', fromDay: '2026-01-01', mills: 2_000, per: 'lb', recordedBy: manager.personId, recordedAt: 0 })),
+    ])
+    await db.write([statement(db.read.insert(shipments).values({ id: shipmentId, number: 1, toFirmId: firmId, state: 'ready', createdAt: 0, createdBy: manager.personId }))])
+    await directory(db, true)
+    const [first, second] = [await holding(20), await holding(10)]
+    await labelled([first, second])
+
+    // 20 lb alone are less than its minimum of 25 lb.
+    const alone = await makePlan(db, { kind: 'shipping', cylinderIds: [first] }, warehouse, Date.now())
+    expect(alone).toMatchObject({ id: null, answer: { summary: ['Nothing is worth shipping as it stands.', expect.stringMatching(/Its minimum is not met\.$/)] } })
+
+    // 30 lb at $2.00 a lb, less $20.00 for the pick-up.
+    const { id, answer } = await makePlan(db, { kind: 'shipping', cylinderIds: [first, second] }, warehouse, Date.now())
+    expect(answer.shipments).toMatchObject([{ firm: { name: 'Tarnvale Reclaim' }, netGrams: 13_608, creditCents: 6_000, pickUpCents: 2_000 }])
+    expect(answer.summary[0]).toBe('2 cylinders to ship for $40.00, pick-ups paid.')
+    await expect(makePlan(db, { kind: 'shipping' }, log.technician, Date.now())).rejects.toMatchObject({ details: { status: 403 } })
+    await expect(planDetails(db, id!, log.technician, Date.now())).rejects.toMatchObject({ details: { status: 403 } })
+    expect((await listPlans(db, log.technician, Date.now())).items.map(({ kind }) => kind)).not.toContain('shipping')
+
+    const [left] = await append(db, {
+      events: [sent(first, 'sent-for-reclaim', { shipmentId, gross: lb(47.5) }, { placeId: firmPlaceId })], access: manager, now: Date.now(), deviceNow: null,
+      dispatch: { alongside: guard => [{
+        sql: `UPDATE shipments SET state = 'dispatched', dispatched_at = 1, dispatched_by = ? WHERE id = ? AND ${guard.sql}`,
+        args: [manager.personId, shipmentId, ...guard.args],
+      }] },
+    })
+    expect(left).toMatchObject({ outcome: 'accepted' })
+    const after = await planDetails(db, id!, warehouse, Date.now())
+    expect(after.steps.flatMap(({ fromId, done }) => done ? [fromId] : [])).toEqual([first])
+    await dropPlan(db, id!, Date.now())
+  })
+})
 
 describe('a plan of what to bring together', () => {
   it('is kept as steps, is ticked off by the pair that the log holds, and takes the tick back with it', async () => {
@@ -111,7 +168,7 @@ describe('a plan of what to bring together', () => {
     await expect(made({ ...question, useEmpty: true } as PlanQuestion)).rejects.toMatchObject({ details: { status: 409 } })
     await expect(made(consolidation([randomUUID()]))).rejects.toMatchObject({ details: { status: 422 } })
     await expect(details(randomUUID())).rejects.toMatchObject({ details: { status: 404 } })
-    const { items } = await listPlans(log.db, log.technician, Date.now())
+    const { items } = await listPlans(log.db, log.warehouse, Date.now())
     expect(items.map(({ number }) => number)).toEqual(items.map((_, index) => items.length - index))
   })
 
