@@ -42,7 +42,7 @@ export async function sendMail(letter: Letter, now: number, { id = uuid(), along
     ...attachments.map((attachment, position) => statement(read.insert(mailAttachments).values({ mailId: id, position, ...attachment }).onConflictDoNothing())),
     ...alongside,
   ])
-  if (kept?.rows.length !== 1) return outcomeOf(id)
+  if (kept?.rows.length !== 1) return (await outcomeOf(id)) ?? 'kept'
   return handOver(id, letter)
 }
 
@@ -67,8 +67,10 @@ export function isUnderWay(id: string): boolean {
   return underWay.has(id)
 }
 
-async function outcomeOf(id: string): Promise<MailOutcome> {
+/** What became of a letter; null where none is kept under this id. */
+export async function outcomeOf(id: string): Promise<MailOutcome | null> {
   const [row] = await useDatabase().read.select({ sentAt: mail.sentAt, error: mail.error }).from(mail).where(eq(mail.id, id))
-  if (row?.sentAt) return 'sent'
-  return row?.error ? 'failed' : 'kept'
+  if (!row) return null
+  if (row.sentAt !== null) return 'sent'
+  return row.error === null ? 'kept' : 'failed'
 }

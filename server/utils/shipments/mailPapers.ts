@@ -5,7 +5,7 @@ import type { ShippingPapers } from '~~/utils/transport/shippingPapers'
 import type { Database } from '../database/database'
 import { firmById } from '../firms/firms'
 import { problem } from '../http/problem'
-import { sendMail, type Letter } from '../mail/mail'
+import { outcomeOf, sendMail, type Letter } from '../mail/mail'
 import { actStatement } from './acts'
 import { papersOf } from './papersOf'
 import { paperName, paperPdfOf, type PaperKind } from './printedPapers'
@@ -24,6 +24,8 @@ export async function mailPapers(db: Database, shipmentId: string, { id, occurre
   if (isDraft) throw problem(409, 'It has not left yet', 'Its papers are a draft until it leaves. Send them then.')
   const recipient = to ?? (await firmById(db, shipment.to.id))?.email
   if (!recipient) throw problem(422, 'No address', `No email address of ${shipment.to.name} is known. Type one.`, [{ path: 'to', message: 'is needed' }])
+  const before = await outcomeOf(id)
+  if (before !== null) return { mail: before, recipient }
   const attachments = await Promise.all(KINDS.map(async kind => ({
     name: paperName(kind, papers), mediaType: 'application/pdf', content: await paperPdfOf(kind, papers, false),
   })))
