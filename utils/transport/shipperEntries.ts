@@ -1,6 +1,6 @@
 import type { Division } from '../refrigerant/data/unEntries'
 
-/** An entry that a shipper may choose for what no row names; `null` where the shipper finds that it is no gas of Class 2. */
+/** An entry that a shipper may choose for what no row names. */
 export interface ShipperEntry {
   identification: string
   name: string
