@@ -18,7 +18,7 @@ export function whatNext(shipment: ShipmentWithLines, mayI: (permission: Permiss
     case 'draft': return preparing(shipment, mayI('shipments:prepare'), whyNot('ready', facts))
     case 'ready': return leaving(mayI('shipments:dispatch'), whyNot('dispatch', facts))
     case 'dispatched': return done(
-      `On its way to ${shipment.to.name}. It has arrived with the dock’s first entry, or when you are told so.`, mayI('shipments:receive') ? 'arrive' : null)
+      `On its way to ${shipment.to.name}. It counts as arrived from the dock’s first entry on, or once you say so.`, mayI('shipments:receive') ? 'arrive' : null)
     case 'arrived': return done(`${shipment.to.name} has it. Its weights and grades settle it.`, mayI('shipments:receive') ? 'settle' : null)
     case 'settled': return done('It is settled. Once no dispute is open it is closed.', mayI('shipments:receive') ? 'close' : null)
     case 'closed': return done(shipment.settledAt === null ? 'All of it came back: there is nothing to settle.' : 'Settled and closed.', null)
