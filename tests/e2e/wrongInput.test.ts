@@ -195,12 +195,12 @@ describe('a desk whose session ended', () => {
     return { page, context }
   }
 
-  async function signInAgain(page: Page, member: Member): Promise<void> {
+  async function signInAgain(page: Page, member: Member, thenShown: string): Promise<void> {
     await page.waitForURL(url => url.pathname === '/sign-in', { waitUntil: 'networkidle' })
     await page.getByLabel('Email address').fill(member.email)
     await page.getByLabel('Password', { exact: true }).fill(PASSWORD)
     await page.getByRole('button', { name: 'Sign in' }).click()
-    await page.getByText('Kept from before:').waitFor()
+    await page.getByText(thenShown).waitFor()
   }
 
   it('still has the stamp that was copied, and lets go of it when told to', async () => {
@@ -210,7 +210,7 @@ describe('a desk whose session ended', () => {
     await page.getByLabel('Tare weight, TW, pounds').fill('27.5')
     await context.clearCookies({ name: 'collarbook' })
     await page.goto(`${server.baseUrl}/fleet/register`)
-    await signInAgain(page, shop.warehouse)
+    await signInAgain(page, shop.warehouse, 'Kept from before:')
     await expect.poll(() => serial.inputValue()).toBe('KX5521')
     expect(await page.getByLabel('Tare weight, TW, pounds').inputValue()).toBe('27.5')
     await page.getByRole('button', { name: 'Start over' }).click()
@@ -231,13 +231,11 @@ describe('a desk whose session ended', () => {
       await page.getByRole('dialog').getByRole('button', { name: 'Ship 1 cylinder' }).click()
     }
     await send()
-    await signInAgain(page, shop.manager)
-    await page.getByText('It is ready to leave.').waitFor()
+    await signInAgain(page, shop.manager, 'It is ready to leave.')
     expect(await kindsOf(id)).toEqual(BEFORE)
     await send()
     await page.getByText('Print this list').waitFor()
     expect(await kindsOf(id)).toEqual(['sent-for-reclaim', ...BEFORE])
-    expect(await page.getByText('Kept from before:').count()).toBe(0)
     await context.close()
   })
 })
