@@ -170,7 +170,7 @@ const SCREENS: Record<string, Screen[]> = {
     { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record what it takes' }).click() },
     { as: manager, at: demo => `/firms/${demo.reclaimer}`, after: page => page.getByRole('button', { name: 'Record a price' }).click() },
     { as: technician, at: demo => `/firms/${demo.reclaimer}` },
-    { as: manager, at: demo => `/firms/${demo.customer}`, after: page => page.getByText('Every change of what is theirs').click() },
+    { as: manager, at: demo => `/firms/${demo.customer}`, after: page => page.getByText('Every change of what is theirs', { exact: true }).click() },
   ],
   'jobs/index.vue': [
     { as: technician, at: () => '/jobs', after: page => page.getByRole('button', { name: 'New job' }).click() },
