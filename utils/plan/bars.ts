@@ -27,8 +27,7 @@ export function whyNotFilled({ view, standsOn }: PlanCylinder, lot: Pick<Lot, 'r
   return standingBar(view, standsOn) ?? fillBar(view) ?? doubtBar(view) ?? lotBar(view, lot) ?? (view.contents.nothingInIt ? null : contentsBar(view))
 }
 
-/** Why what is in a cylinder is brought together with nothing; null where it is of one name, one condition and one owner. */
-export function contentsBar({ contents }: Planned): string | null {
+function contentsBar({ contents }: Planned): string | null {
   const { refrigerant, condition, burnt, netGrams, owners } = contents
   if (condition === 'mixed' || condition === 'unknown' || refrigerant === null) return 'What is in it is mixed or not known: it never moves onto anything, and nothing onto it.'
   if (netGrams === null) return 'What is in it is not known by weight. Weigh it first.'

@@ -15,7 +15,7 @@ export interface Consolidation {
   fewestTransfers: number
 }
 
-export const NOTHING_TO_FREE: Consolidation = { transfers: [], freed: 0, mostFreed: 0, fewestTransfers: 0 }
+const NOTHING_TO_FREE: Consolidation = { transfers: [], freed: 0, mostFreed: 0, fewestTransfers: 0 }
 
 /** With more ways than these (70 cylinders of one lot) a solver is still reading its program when its time is over. */
 const MOST_WAYS = 5_000

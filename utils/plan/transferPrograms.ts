@@ -1,12 +1,16 @@
 import type { Program, Row, Terms } from './linearProgram'
 import { mayGoOnto, type TransferProblem } from './transferProblem'
 
-/** A cylinder is emptied: `e` and its place among the gives. An empty one is used for a lot: `u` and its place among the takes. */
+/** The variable by which a give is emptied, by its place among the gives. */
 export const emptied = (give: number) => `e${give}`
+
+/** The variable by which an empty cylinder is used for a lot, by its place among the takes. */
 export const opened = (take: number) => `u${take}`
-/** Something goes from a give into a take, and how much. */
+
+/** The variable by which something goes from a give into a take. */
 export const goes = (give: number, take: number) => `y${give}_${take}`
-export const amount = (give: number, take: number) => `x${give}_${take}`
+
+const amount = (give: number, take: number) => `x${give}_${take}`
 
 /**
  * The program by which the most cylinders come free. Only sums of lots count here: since contents may be parted, a choice
