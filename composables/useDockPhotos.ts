@@ -1,7 +1,5 @@
 import { NotAPhoto, shrinkPhoto } from '~~/composables/shrinkPhoto'
-
-/** What one entry may name. */
-export const MOST_DOCK_PHOTOS = 6
+import { MOST_ENTRY_PHOTOS } from '~~/utils/dock/entry'
 
 /** Photos that are taken for one entry, until it is kept. */
 export function useDockPhotos() {
@@ -14,7 +12,7 @@ export function useDockPhotos() {
     working.value = true
     problem.value = null
     try {
-      for (const file of files.slice(0, MOST_DOCK_PHOTOS - photos.value.length)) {
+      for (const file of files.slice(0, MOST_ENTRY_PHOTOS - photos.value.length)) {
         photos.value = [...photos.value, { id: `photo ${++taken}`, bytes: await shrinkPhoto(file) }]
       }
     }

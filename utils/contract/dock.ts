@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import type { DockEntry, LinkedDockEntry } from '../dock/entry'
+import { MOST_ENTRY_PHOTOS, type DockEntry, type LinkedDockEntry } from '../dock/entry'
 import { LINK_DAYS, USUAL_LINK_DAYS } from '../dock/linkDays'
 import type { MassReading, MassUnit } from '../quantity/mass'
 import type { MailOutcome } from './people'
@@ -7,8 +7,6 @@ import type { ProblemDetails } from './problem'
 import { eachOnce, id, line, massReading } from './parts'
 import type { ShipmentState } from './shipments'
 import { uploadForm } from './uploads'
-
-const MOST_PHOTOS = 6
 
 /** POST /api/shipments/{id}/dock-links: a link for the reclaimer's dock; mailed where an address is given. */
 export const dockLinkBody = z.strictObject({
@@ -47,7 +45,7 @@ export const dockParams = z.strictObject({ token: z.string() })
 export const dockShipmentParams = z.strictObject({ token: z.string(), id })
 export const dockPhotoParams = z.strictObject({ token: z.string(), id })
 
-const photoIds = z.array(id).max(MOST_PHOTOS).refine(ids => eachOnce(ids), 'must name each photo once').default([])
+const photoIds = z.array(id).max(MOST_ENTRY_PHOTOS).refine(ids => eachOnce(ids), 'must name each photo once').default([])
 const cylinderId = id
 const made = { id, name: line(80), at: z.iso.datetime({ offset: true, error: 'must be an instant with its offset' }) }
 const heavy = massReading.refine(reading => reading.unit === 'lb-oz' ? reading.lb > 0 || reading.oz > 0 : reading.value > 0, 'must be more than nothing')

@@ -5,6 +5,9 @@ export const DOCK_KINDS = ['here', 'gross', 'damaged', 'overdue', 'missing', 'un
 
 export type DockKind = (typeof DOCK_KINDS)[number]
 
+/** How many photos one entry names at most. Our choice. */
+export const MOST_ENTRY_PHOTOS = 6
+
 /** What an entry of each kind says; a kind of one line names its cylinder. */
 export interface DockSaid {
   'here': { cylinderId: string }
