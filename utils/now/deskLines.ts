@@ -3,6 +3,7 @@ import { formatMass } from '../quantity/mass'
 import { formatMoney } from '../reclaim/price'
 import { MATERIALS_OF_TRADE } from '../transport/vanLoad'
 import { cylinderName } from '../shipment/changedLines'
+import { shipmentName } from '../shipment/shipmentName'
 import { FEW_EMPTY, type FewEmptyFacts, type FullFacts, type ListFacts, type NowFacts, type PlanFacts, type ShortVanFacts, type VanFacts, type WorthFacts } from './nowFacts'
 import type { DraftLine, NowReader } from './nowLines'
 import { counted, listed } from './phrase'
@@ -90,7 +91,7 @@ function readyLine({ count, id, number, since }: ListFacts, { now, timeZone }: N
   return {
     topic: 'shipments-ready', kind: 'att', number: count,
     sentence: `${counted(count, 'shipment is', 'shipments are')} ready to leave.`,
-    reason: `Shipment ${number} was made ready ${formatNear(since, timeZone, now)}. It is sent off by a manager.`,
+    reason: `${shipmentName({ number })} was made ready ${formatNear(since, timeZone, now)}. It is sent off by a manager.`,
     ...(count === 1 ? { verb: 'Send it off', to: `/shipments/${id}` } : { verb: `Show the ${count}`, to: '/shipments?state=ready' }),
   }
 }
@@ -102,7 +103,7 @@ function awayLine(topic: 'shipments-away' | 'lots-away', { count, id, number, si
   return {
     topic, kind: 'att', number: count,
     sentence: isShipment ? `${thing} no settlement yet.` : `${thing} not back yet.`,
-    reason: `${isShipment ? 'Shipment' : 'Test lot'} ${number} left ${daysBetween(since, now, timeZone)} days ago. Ask where it is${mayClear ? ', or record what came back' : ''}.`,
+    reason: `${isShipment ? shipmentName({ number }) : `Test lot ${number}`} left ${daysBetween(since, now, timeZone)} days ago. Ask where it is${mayClear ? ', or record what came back' : ''}.`,
     ...(count === 1
       ? { verb: mayClear ? (isShipment ? 'Settle it' : 'Record the results') : 'Open it', to: isShipment ? `/shipments/${id}${mayClear ? '/settlement' : ''}` : `/retests/${id}` }
       : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=dispatched' : '/retests' }),
@@ -123,7 +124,7 @@ function draftLine(topic: 'shipment-drafts' | 'lot-drafts', { count, id, number,
   return {
     topic, kind: 'att', number: count,
     sentence: isShipment ? `${counted(count, 'shipment is a draft', 'shipments are drafts')} still.` : `${counted(count, 'test lot is a draft', 'test lots are drafts')} still.`,
-    reason: `${isShipment ? 'Shipment' : 'Test lot'} ${number} was begun ${formatNear(since, timeZone, now)}. Its cylinders can go on no other list.`,
+    reason: `${isShipment ? shipmentName({ number }) : `Test lot ${number}`} was begun ${formatNear(since, timeZone, now)}. Its cylinders can go on no other list.`,
     ...(count === 1
       ? { verb: 'Go on with it', to: `/${isShipment ? 'shipments' : 'retests'}/${id}` }
       : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=draft' : '/retests' }),
