@@ -10,15 +10,15 @@ import { draftMark, shipmentWord } from './shipmentPaper'
 
 const COLUMNS: readonly TableColumn[] = [
   { head: 'No.', share: 6, align: 'right', face: 'figures' },
-  { head: 'Serial', share: 18, face: 'figures' },
-  { head: 'Code', share: 19, face: 'figures' },
+  { head: 'Serial', share: 17, face: 'figures' },
+  { head: 'Code', share: 18, face: 'figures' },
   { head: 'Refrigerant', share: 16 },
-  { head: 'Condition', share: 13 },
+  { head: 'Condition', share: 12 },
   { head: 'TW', share: 14, align: 'right', face: 'figures' },
   { head: 'Gross', share: 14, align: 'right', face: 'figures' },
   { head: 'Net', share: 14, align: 'right', face: 'figures' },
-  { head: 'Retest due', share: 17 },
-  { head: 'Notes', share: 14 },
+  { head: 'Retest due', share: 22 },
+  { head: 'Notes', share: 12 },
 ]
 
 /** The packing list of a shipment: each cylinder by its serial with tare, gross and net, for both ends to tick off and sign. */
