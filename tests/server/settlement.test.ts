@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import type { DockEntriesAnswer, NewDockLinkAnswer } from '../../utils/contract/dock'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import type { CsvPreviewAnswer, MixingCostAnswer, SettlementAnswer } from '../../utils/contract/settlement'
 import type { ShipmentFilesAnswer } from '../../utils/contract/shipmentFiles'
@@ -8,7 +9,7 @@ import type { CustodyLogAnswer } from '../../utils/contract/custody'
 import type { MassReading } from '../../utils/quantity/mass'
 import { NOTHING_SAID, type LineFigures } from '../../utils/settlement/figures'
 import type { ShipmentActsAnswer } from '../../utils/shipment/acts'
-import type { Answer } from '../helpers/client'
+import { TestClient, type Answer } from '../helpers/client'
 import { cylinderNow, eventOf, made, openShop, posted, registered, type Shop } from '../helpers/fleet'
 import { redAndBlue, redAndBlueJpeg } from '../helpers/pictures'
 import { readied } from '../helpers/readyShipment'
@@ -253,6 +254,25 @@ describe('settling', () => {
     expect(body.lines[0]!.received).toMatchObject({ acceptedNetGrams: 5_579 })
     expect((await cylinderNow(firm.auditor.client, first!)).version).toBe(before + 1)
     expect((await entered(id, { [first!]: { ...TAKEN(lb(12.3)), outcome: 'sent-back' } })).status).toBe(409)
+  })
+
+  it('is refused where the dock said something else since it was looked at, and takes the figures that were', async () => {
+    const { id, cylinderIds: [first] } = await sentOff(1)
+    const link = await made<NewDockLinkAnswer>(firm.manager.client, `${path(id)}/dock-links`, { id: randomUUID(), forWhom: 'Dock 2' })
+    const graded = async (value: number) => {
+      const entry = { id: randomUUID(), kind: 'graded', name: 'Dana', at: new Date().toISOString(), said: { cylinderId: first, grade: 'A', acceptedNet: lb(value) } }
+      const { body } = await new TestClient(server.baseUrl).post<DockEntriesAnswer>(`/api/dock/${new URL(link.url).pathname.slice('/d/'.length)}/shipments/${id}/entries`, { deviceNow: entry.at, entries: [entry] })
+      expect(body.results[0]!.outcome).toBe('accepted')
+    }
+    await graded(12.5)
+    const looked = await shown(id)
+    await graded(2)
+    const settle = (seen: SettlementAnswer) => firm.manager.client.post<SettlementAnswer & ProblemDetails>(`${path(id)}/settlement/settle`, settling(seen, [first!]))
+    expect(await settle(looked)).toMatchObject({ status: 409, body: { type: 'figures-changed' } })
+    // What the dock says takes nothing away from what is entered by hand.
+    const byHand = { ...act(), revision: looked.revision, lines: [{ cylinderId: first, ...TAKEN(lb(12.4)) }] }
+    expect((await firm.manager.client.put(`${path(id)}/settlement/lines`, byHand)).status).toBe(200)
+    expect(await settle(await shown(id))).toMatchObject({ status: 200, body: { lines: [{ figures: { acceptedNet: lb(12.4) } }] } })
   })
 
   it('settles what came back before as sent back, whatever was entered', async () => {

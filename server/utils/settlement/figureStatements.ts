@@ -1,7 +1,7 @@
 import type { InStatement } from '@libsql/client'
 import type { LineFigures, StatementFigures } from '~~/utils/settlement/figures'
 import type { Guard } from '../custody/posting'
-import { REVISION } from './readSettlement'
+import type { ActKind } from '~~/utils/shipment/acts'
 
 /** Keeps the figures of a line in place of those it had, where a condition holds. */
 export function lineStatement(shipmentId: string, cylinderId: string, figures: LineFigures, where: Guard): InStatement {
@@ -28,10 +28,11 @@ export function headStatement(shipmentId: string, { number, day, others, totalCe
   }
 }
 
-/** Holds while a shipment is in one of these states and its figures are those that were looked at. */
-export function isAt(shipmentId: string, states: readonly string[], revision: number): Guard {
+/** Holds while a shipment is in one of these states and none of these acts came after the settlement was looked at. */
+export function isAt(shipmentId: string, states: readonly string[], seen: { revision: number, acts: readonly ActKind[] }): Guard {
   return {
-    sql: `EXISTS (SELECT 1 FROM shipments WHERE id = ? AND state IN (${states.map(() => '?').join(', ')})) AND ${REVISION} = ?`,
-    args: [shipmentId, ...states, shipmentId, revision],
+    sql: `EXISTS (SELECT 1 FROM shipments WHERE id = ? AND state IN (${states.map(() => '?').join(', ')}))
+      AND NOT EXISTS (SELECT 1 FROM shipment_acts WHERE shipment_id = ? AND seq > ? AND kind IN (SELECT value FROM json_each(?)))`,
+    args: [shipmentId, ...states, shipmentId, seen.revision, JSON.stringify(seen.acts)],
   }
 }

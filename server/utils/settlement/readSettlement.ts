@@ -1,9 +1,11 @@
 import type { Shipment } from '~~/utils/contract/shipments'
 import { dockLines, unexpectedCylinders, type DockLine, type UnexpectedCylinder } from '~~/utils/dock/dockLines'
+import { DOCK_KINDS } from '~~/utils/dock/entry'
 import { dayOfInstant } from '~~/utils/quantity/day'
 import { priceOn } from '~~/utils/reclaim/price'
 import type { LineFigures, LineOutcome, OtherAmount, SettlementFigures, StatementFigures } from '~~/utils/settlement/figures'
 import { prefilled } from '~~/utils/settlement/prefilled'
+import type { ActKind } from '~~/utils/shipment/acts'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { dockEntries } from '../dock/linkEntries'
@@ -13,8 +15,11 @@ import { shipmentLines, type StoredLine } from '../shipments/shipmentLines'
 import { theShipment } from '../shipments/shipments'
 import { reclaimedEvents, reclaimedFigures } from './reclaimedEvents'
 
-/** Acts that change a settlement's figures: the newest of them is its revision. */
-export const FIGURE_ACTS = ['figures-set', 'statement-taken', 'settled'] as const
+/** Acts by which our people change a settlement's figures. */
+export const FIGURE_ACTS: readonly ActKind[] = ['figures-set', 'statement-taken', 'settled']
+
+/** These, and what the dock says: whatever changes a settlement as it is shown. */
+export const SHOWN_ACTS: readonly ActKind[] = [...FIGURE_ACTS, ...DOCK_KINDS.map((kind): ActKind => `dock-${kind}`)]
 
 /** A line with its figures: those entered, else what its log says where it was taken over, else what the dock said and the price of the day it left. */
 export interface ReadLine extends Pick<StoredLine, 'cylinderId' | 'sent' | 'returnedAt'> {
@@ -26,7 +31,10 @@ export interface ReadLine extends Pick<StoredLine, 'cylinderId' | 'sent' | 'retu
 /** A settlement as it is stored and prefilled. */
 export interface ReadSettlement {
   shipment: Shipment
+  /** The newest act that changes what is shown. */
   revision: number
+  /** The newest of our own changes of its figures. */
+  figuresRevision: number
   lines: ReadLine[]
   statement: StatementFigures
   unexpected: UnexpectedCylinder[]
@@ -36,12 +44,13 @@ export interface ReadSettlement {
 export async function readSettlement(db: Database, shipmentId: string): Promise<ReadSettlement> {
   const shipment = await theShipment(db, shipmentId)
   if (shipment.dispatchedAt === null) throw problem(409, 'There is nothing to settle', `Shipment ${shipment.number} has not left.`)
-  const [stored, entries, prices, { timeZone }, logged, [lineRows, heads, revisions]] = await Promise.all([
+  // Read first: what changes while the rest is read is not taken for looked at.
+  const revisions = await revisionsOf(db, shipmentId)
+  const [stored, entries, prices, { timeZone }, logged, [lineRows, heads]] = await Promise.all([
     shipmentLines(db, shipmentId), dockEntries(db, shipmentId), pricesOf(db, shipment.to.id), directory(db), reclaimedEvents(db, shipmentId),
     db.readClient.batch([
       { sql: 'SELECT cylinder_id, their_gross, accepted_net, grade, mills, per, stated_cents, outcome FROM settlement_lines WHERE shipment_id = ?', args: [shipmentId] },
       { sql: 'SELECT statement_number, statement_day, others, stated_total_cents FROM settlements WHERE shipment_id = ?', args: [shipmentId] },
-      { sql: `SELECT ${REVISION}`, args: [shipmentId] },
     ], 'read'),
   ])
   const entered = new Map(lineRows!.rows.map(row => [row['cylinder_id'] as string, figuresOf(row)]))
@@ -50,7 +59,7 @@ export async function readSettlement(db: Database, shipmentId: string): Promise<
   const head = heads!.rows[0]
   return {
     shipment,
-    revision: revisions!.rows[0]![0] as number,
+    ...revisions,
     lines: stored.map(({ cylinderId, sent, returnedAt }) => {
       const dock = said.get(cylinderId) ?? null
       const price = sent && priceOn(prices, { refrigerant: sent.refrigerant, condition: sent.condition, day })
@@ -69,8 +78,13 @@ export async function readSettlement(db: Database, shipmentId: string): Promise<
   }
 }
 
-/** The newest change of a shipment's figures; takes its id. */
-export const REVISION = `(SELECT coalesce(max(seq), 0) FROM shipment_acts WHERE shipment_id = ? AND kind IN (${FIGURE_ACTS.map(kind => `'${kind}'`).join(', ')}))`
+async function revisionsOf(db: Database, shipmentId: string): Promise<Pick<ReadSettlement, 'revision' | 'figuresRevision'>> {
+  const newest = (kinds: readonly ActKind[]) => ({
+    sql: 'SELECT coalesce(max(seq), 0) FROM shipment_acts WHERE shipment_id = ? AND kind IN (SELECT value FROM json_each(?))', args: [shipmentId, JSON.stringify(kinds)],
+  })
+  const [shown, ours] = await db.readClient.batch([newest(SHOWN_ACTS), newest(FIGURE_ACTS)], 'read')
+  return { revision: shown!.rows[0]![0] as number, figuresRevision: ours!.rows[0]![0] as number }
+}
 
 /** The same as its figures alone, to reckon with. */
 export function figuresIn({ lines, statement, unexpected }: ReadSettlement): SettlementFigures {

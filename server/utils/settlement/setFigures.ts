@@ -13,7 +13,7 @@ import { actStatement, isKept, isKeptNow, type NewAct } from '../shipments/acts'
 import { disputesOf } from './disputes'
 import { disputeStatements } from './disputeStatements'
 import { headStatement, isAt, lineStatement } from './figureStatements'
-import { figuresIn, readSettlement, type ReadSettlement } from './readSettlement'
+import { FIGURE_ACTS, figuresIn, readSettlement, type ReadSettlement } from './readSettlement'
 import { reclaimedDetails, reclaimedEvents } from './reclaimedEvents'
 
 /** New figures of a settlement, and the act that they come with. */
@@ -54,7 +54,7 @@ export async function setFigures(db: Database, shipmentId: string, change: Figur
       ...disputeStatements(disputes, figuresIn(after), act, isOurs),
     ]
   }
-  const isAsSeen = isAt(shipmentId, STATES, change.revision)
+  const isAsSeen = isAt(shipmentId, STATES, { revision: change.revision, acts: FIGURE_ACTS })
   const corrections = before.shipment.state === 'settled' ? await correctionsOf(db, before, change, now) : []
   try {
     if (corrections.length === 0) {
@@ -80,9 +80,9 @@ export function holds(shipmentId: string, condition: Guard, guard: Guard): InSta
 }
 
 /** Errors: 409 where a settlement is closed, or is not the one that was looked at. */
-export function refuseUnlessAt({ shipment, revision }: ReadSettlement, seen: number): void {
+export function refuseUnlessAt({ shipment, figuresRevision }: ReadSettlement, seen: number): void {
   if (!STATES.includes(shipment.state)) throw problem(409, 'This settlement does not change any more', `Shipment ${shipment.number} is ${shipment.state}.`)
-  if (revision !== seen) throw changedMeanwhile()
+  if (figuresRevision > seen) throw changedMeanwhile()
 }
 
 function changedMeanwhile() {

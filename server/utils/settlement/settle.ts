@@ -10,7 +10,7 @@ import { actStatement, isKept, type NewAct } from '../shipments/acts'
 import { disputesOf } from './disputes'
 import { disputeStatements } from './disputeStatements'
 import { headStatement, isAt, lineStatement } from './figureStatements'
-import { figuresIn, readSettlement, type ReadLine, type ReadSettlement } from './readSettlement'
+import { figuresIn, readSettlement, SHOWN_ACTS, type ReadLine, type ReadSettlement } from './readSettlement'
 import { reclaimedDetails } from './reclaimedEvents'
 
 const STATES = ['dispatched', 'arrived']
@@ -55,7 +55,7 @@ export async function settle(db: Database, shipmentId: string, body: Settling, a
 /** Errors: 409 with what stands in the way of settling. */
 function refuseUnsettled({ shipment, revision, lines }: ReadSettlement, body: Settling): void {
   if (!STATES.includes(shipment.state)) throw problem(409, 'There is nothing to settle', `Shipment ${shipment.number} is ${shipment.state}.`)
-  if (revision !== body.revision) throw problem(409, 'The figures changed meanwhile', 'Somebody else entered figures. Look at them, then settle.', undefined, { type: 'figures-changed' })
+  if (revision !== body.revision) throw problem(409, 'The figures changed meanwhile', 'Somebody else entered figures, or the dock did. Look at them, then settle.', undefined, { type: 'figures-changed' })
   const known = new Map(lines.map(line => [line.cylinderId, line]))
   const open = lines.filter(({ figures }) => figures.outcome === null)
   if (open.length > 0) {
@@ -86,7 +86,7 @@ function eventsOf({ shipment, lines }: ReadSettlement, body: Settling) {
 
 /** A shipment that is not on its way any more, or has other figures, gets no state, which its column refuses: all is undone. */
 function settledStatement(shipmentId: string, eventIds: string[], act: NewAct, revision: number, guard: Guard): InStatement {
-  const asSeen = isAt(shipmentId, STATES, revision)
+  const asSeen = isAt(shipmentId, STATES, { revision, acts: SHOWN_ACTS })
   const effect = effectOf(eventIds)
   return {
     sql: `UPDATE shipments SET state = CASE WHEN ${asSeen.sql} THEN 'settled' END, arrived_at = coalesce(arrived_at, ?), settled_at = coalesce(${effect.sql}, ?)
