@@ -106,7 +106,7 @@ function awayLine(topic: 'shipments-away' | 'lots-away', { count, id, number, si
     reason: `${isShipment ? shipmentName({ number }) : `Test lot ${number}`} left ${daysBetween(since, now, timeZone)} days ago. Ask where it is${mayClear ? ', or record what came back' : ''}.`,
     ...(count === 1
       ? { verb: mayClear ? (isShipment ? 'Settle it' : 'Record the results') : 'Open it', to: isShipment ? `/shipments/${id}${mayClear ? '/settlement' : ''}` : `/retests/${id}` }
-      : { verb: `Show the ${count}`, to: isShipment ? '/shipments?state=dispatched' : '/retests' }),
+      : { verb: `Show the ${count}`, to: isShipment ? '/shipments' : '/retests' }),
   }
 }
 
