@@ -341,6 +341,7 @@ describe('a statement as a file', () => {
     const { id } = await sentOff(1)
     expect((await read(id, Buffer.from('\uFEFFserial,net\nA,1\n', 'utf16le'))).body.type).toBe('other-encoding')
     expect((await read(id, 'serial,net\n"A,1\n')).body.type).toBe('not-a-table')
+    expect((await read(id, 'serial,net,grade\nA,1,6" dia.\n')).body).toMatchObject({ status: 422, type: 'not-a-table', detail: expect.stringContaining('line 2') })
     expect((await read(id, `serial,net\n${'A,1\n'.repeat(1_001)}`)).body.type).toBe('too-many-rows')
     expect((await read(id, 'x'.repeat(512 * 1024 + 1))).status).toBe(400)
     expect((await read(id, 'x'.repeat(600 * 1024))).status).toBe(413)

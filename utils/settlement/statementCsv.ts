@@ -40,9 +40,12 @@ export interface StatementPreview {
   notNamed: string[]
 }
 
-/** A serial as it is compared: stamps are written with and without spaces and dashes, in either case. */
+/**
+ * A serial as it is compared: stamps are written with and without spaces and dashes, in either case; an apostrophe before
+ * it only keeps a spreadsheet from working it out as a formula.
+ */
 export function comparedSerial(serial: string): string {
-  return serial.toUpperCase().replace(/[\s\-–.]/g, '')
+  return serial.toUpperCase().replace(/^'/, '').replace(/[\s\-–.]/g, '')
 }
 
 /**

@@ -1,4 +1,4 @@
-import { parse } from 'csv-parse/sync'
+import { CsvError, parse } from 'csv-parse/sync'
 import type { CsvReading } from '~~/utils/contract/settlement'
 import type { TableRow } from '~~/utils/settlement/statementCsv'
 import { problem } from '../http/problem'
@@ -29,10 +29,10 @@ export function readTable({ file, encoding, delimiter: chosen }: Pick<CsvReading
     return { delimiter, rows: records.map(({ record, info }) => ({ row: info.lines, cells: record })) }
   }
   catch (error) {
-    const { code, lines } = error as { code?: string, lines?: number }
-    if (!code?.startsWith('CSV_')) throw error
+    if (!(error instanceof CsvError)) throw error
+    const { lines } = error as { lines?: number }
     const where = lines === undefined ? '' : ` in line ${lines}`
-    throw problem(422, 'Not a table of values', code.includes('QUOTE') ? `A quotation mark stands where it should not, or is never closed${where}.` : `A row cannot be read${where}.`, undefined, { type: 'not-a-table' })
+    throw problem(422, 'Not a table of values', error.code.includes('QUOTE') ? `A quotation mark stands where it should not, or is never closed${where}.` : `A row cannot be read${where}.`, undefined, { type: 'not-a-table' })
   }
 }
 
