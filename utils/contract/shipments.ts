@@ -20,6 +20,8 @@ export const shipmentLinesBody = z.strictObject({
   add: z.array(z.strictObject({ id, cylinderId: id })).max(200).default([]),
   takeOff: z.array(z.strictObject({ id, cylinderId: id, reason })).max(200).default([]),
 }).refine(({ add, takeOff }) => eachOnce([...add, ...takeOff].map(one => one.cylinderId)), 'must name each cylinder once')
+  // Two under one id would be kept as one, and the second cylinder come onto the list without a word in its history.
+  .refine(({ add, takeOff }) => eachOnce([...add, ...takeOff].map(one => one.id)), 'must have an id for each')
 
 /** POST /api/shipments/{id}/weighings: one of its cylinders as it was scanned, or its serial as it was read, and what the scale shows. */
 export const weighingBody = z.strictObject({ ...act, ref: line(80), gross: massReading })
