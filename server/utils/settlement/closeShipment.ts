@@ -2,7 +2,7 @@ import type { Closing } from '~~/utils/contract/settlement'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from '../shipments/acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from '../shipments/acts'
 import { theShipment } from '../shipments/shipments'
 
 /**
@@ -11,7 +11,7 @@ import { theShipment } from '../shipments/shipments'
  * Errors: 404; 409 where it is not settled, and while a dispute is open.
  */
 export async function closeShipment(db: Database, shipmentId: string, { id, occurredAt }: Closing, personId: string, now: number): Promise<void> {
-  const act: NewAct = { id, shipmentId, kind: 'closed', by: { personId }, occurredAt: Date.parse(occurredAt), recordedAt: now }
+  const act: NewAct = { id, shipmentId, kind: 'closed', by: { personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   const mayClose: Guard = {
     sql: `EXISTS (SELECT 1 FROM shipments WHERE id = ? AND state = 'settled') AND NOT EXISTS (SELECT 1 FROM disputes WHERE shipment_id = ? AND ended_at IS NULL)`,

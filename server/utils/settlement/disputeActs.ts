@@ -4,7 +4,7 @@ import { differencesOf } from '~~/utils/settlement/dispute'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from '../shipments/acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from '../shipments/acts'
 import { theShipment } from '../shipments/shipments'
 import type { DisputeDetails } from './disputes'
 import { endStatement, reopenStatement } from './disputeStatements'
@@ -86,7 +86,7 @@ async function theDispute(db: Database, disputeId: string, shipmentId: string): 
 }
 
 function actOf(sent: { id: string, occurredAt: string }, { shipmentId, personId, now }: Acting, kind: NewAct['kind'], cylinderId: string | null): NewAct {
-  return { id: sent.id, shipmentId, kind, cylinderId, by: { personId }, occurredAt: Date.parse(sent.occurredAt), recordedAt: now }
+  return { id: sent.id, shipmentId, kind, cylinderId, by: { personId }, occurredAt: claimedAt(sent.occurredAt, now), recordedAt: now }
 }
 
 function isOpen(disputeId: string): Guard {

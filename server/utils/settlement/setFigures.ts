@@ -9,7 +9,7 @@ import { cylinderRows } from '../custody/fleet'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from '../shipments/acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from '../shipments/acts'
 import { disputesOf } from './disputes'
 import { disputeStatements } from './disputeStatements'
 import { headStatement, isAt, lineStatement } from './figureStatements'
@@ -36,7 +36,7 @@ const STATES = ['dispatched', 'arrived', 'settled']
  */
 export async function setFigures(db: Database, shipmentId: string, change: FigureChange, access: Access, now: number): Promise<void> {
   const [only, ...more] = change.act.kind === 'figures-set' ? change.lines.keys() : []
-  const act: NewAct = { ...change.act, shipmentId, cylinderId: more.length === 0 ? only ?? null : null, by: { personId: access.personId }, occurredAt: Date.parse(change.act.occurredAt), recordedAt: now }
+  const act: NewAct = { ...change.act, shipmentId, cylinderId: more.length === 0 ? only ?? null : null, by: { personId: access.personId }, occurredAt: claimedAt(change.act.occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   const before = await readSettlement(db, shipmentId)
   refuseUnlessAt(before, change.revision)

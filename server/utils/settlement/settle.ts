@@ -6,7 +6,7 @@ import { append } from '../custody/append'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, type NewAct } from '../shipments/acts'
+import { actStatement, claimedAt, isKept, type NewAct } from '../shipments/acts'
 import { disputesOf } from './disputes'
 import { disputeStatements } from './disputeStatements'
 import { headStatement, isAt, lineStatement } from './figureStatements'
@@ -25,7 +25,7 @@ const ALWAYS: Guard = { sql: '1', args: [] }
  * was looked at, and where a cylinder has changed.
  */
 export async function settle(db: Database, shipmentId: string, body: Settling, access: Access, now: number): Promise<void> {
-  const act: NewAct = { id: body.id, shipmentId, kind: 'settled', by: { personId: access.personId }, occurredAt: Date.parse(body.occurredAt), recordedAt: now }
+  const act: NewAct = { id: body.id, shipmentId, kind: 'settled', by: { personId: access.personId }, occurredAt: claimedAt(body.occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   const settlement = await readSettlement(db, shipmentId)
   refuseUnsettled(settlement, body)

@@ -6,7 +6,7 @@ import { hashOf } from '../files/names'
 import type { PhotoFiles } from '../files/photoFiles'
 import { redrawPhoto } from '../files/redrawPhoto'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from '../shipments/acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from '../shipments/acts'
 import { shipmentLines } from '../shipments/shipmentLines'
 import { theShipment } from '../shipments/shipments'
 import type { Acting } from './disputeActs'
@@ -68,7 +68,7 @@ export async function addFile(db: Database, files: PhotoFiles, upload: NewShipme
 
 /** Ties a file to lines, or to the whole shipment. Sent again it changes nothing. Errors: 404; 422 for a line that is none of it. */
 export async function tieFile(db: Database, fileId: string, { id, occurredAt, cylinderIds }: FileLines, { shipmentId, personId, now }: Acting): Promise<void> {
-  const act: NewAct = { id, shipmentId, kind: 'file-tied', by: { personId }, occurredAt: Date.parse(occurredAt), recordedAt: now }
+  const act: NewAct = { id, shipmentId, kind: 'file-tied', by: { personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   const { name } = await theFile(db, shipmentId, fileId)
   await refuseStrangeLines(db, shipmentId, cylinderIds)
@@ -81,7 +81,7 @@ export async function tieFile(db: Database, fileId: string, { id, occurredAt, cy
 
 /** Withdraws a file from a shipment; that it was there stays in the history. Sent again it changes nothing. Errors: 404. */
 export async function withdrawFile(db: Database, fileId: string, { id, occurredAt }: FileWithdrawal, { shipmentId, personId, now }: Acting): Promise<void> {
-  const act: NewAct = { id, shipmentId, kind: 'file-withdrawn', by: { personId }, occurredAt: Date.parse(occurredAt), recordedAt: now }
+  const act: NewAct = { id, shipmentId, kind: 'file-withdrawn', by: { personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   const { name, contentHash } = await theFile(db, shipmentId, fileId)
   const isOurs = isKeptNow(act)

@@ -5,7 +5,7 @@ import { cylinderRows } from '../custody/fleet'
 import type { Database } from '../database/database'
 import { hashOf } from '../files/names'
 import { problem } from '../http/problem'
-import { isKept } from '../shipments/acts'
+import { claimedAt, isKept } from '../shipments/acts'
 import { readSettlement, type ReadSettlement } from './readSettlement'
 import { readTable } from './readTable'
 import { setFigures } from './setFigures'
@@ -24,7 +24,7 @@ export async function previewStatement(db: Database, shipmentId: string, reading
  */
 export async function takeStatementOver(db: Database, shipmentId: string, form: CsvTakeOver, access: Access, now: number): Promise<void> {
   const { id, occurredAt, previewHash, ...reading } = form
-  if (await isKept(db, { id, shipmentId, kind: 'statement-taken', by: { personId: access.personId }, occurredAt: Date.parse(occurredAt), recordedAt: now })) return
+  if (await isKept(db, { id, shipmentId, kind: 'statement-taken', by: { personId: access.personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now })) return
   const settlement = await readSettlement(db, shipmentId)
   const preview = await previewOf(db, settlement, reading, now)
   if (preview.hash !== previewHash) {

@@ -14,9 +14,14 @@ export interface NewAct {
   cylinderId?: string | null
   details?: Record<string, unknown>
   by: ActBy
-  /** As the device claimed. */
+  /** As the device claimed, and not after it was recorded. */
   occurredAt: number
   recordedAt: number
+}
+
+/** When something was done, as its device claimed: a clock that runs ahead does not put it after it was recorded. Units: UTC milliseconds. */
+export function claimedAt(occurredAt: string, now: number): number {
+  return Math.min(Date.parse(occurredAt), now)
 }
 
 const ALWAYS: Guard = { sql: '1', args: [] }

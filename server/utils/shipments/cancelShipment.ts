@@ -1,6 +1,6 @@
 import type { Cancelling } from '~~/utils/contract/shipments'
 import type { Database } from '../database/database'
-import { actStatement, isKept, isKeptNow, type NewAct } from './acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from './acts'
 import { isOpen, shipmentFor } from './openShipment'
 
 /**
@@ -10,7 +10,7 @@ import { isOpen, shipmentFor } from './openShipment'
  * Errors: 404; 409 where it has left, for that has happened: what left can only come back.
  */
 export async function cancelShipment(db: Database, shipmentId: string, { id, occurredAt, reason }: Cancelling, personId: string, now: number): Promise<void> {
-  const act: NewAct = { id, shipmentId, kind: 'cancelled', details: { reason }, by: { personId }, occurredAt: Date.parse(occurredAt), recordedAt: now }
+  const act: NewAct = { id, shipmentId, kind: 'cancelled', details: { reason }, by: { personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   await shipmentFor(db, shipmentId, 'cancel')
   const isNew = isKeptNow(act)

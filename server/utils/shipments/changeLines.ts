@@ -4,7 +4,7 @@ import { freeFor, refuseUnfree } from '../cylinder-lists/freeCylinders'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from './acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from './acts'
 import { backToDraft } from './backToDraft'
 import { refuseUnlessOpen } from './openShipment'
 
@@ -18,7 +18,7 @@ const MOST_LINES = 200
  * Errors: 404; 409 where it has left, where it would be too long; 422 and 409 as {@link refuseUnfree}.
  */
 export async function changeLines(db: Database, shipmentId: string, body: LineChanges, personId: string, now: number): Promise<void> {
-  const common = { shipmentId, by: { personId }, occurredAt: Date.parse(body.occurredAt), recordedAt: now }
+  const common = { shipmentId, by: { personId }, occurredAt: claimedAt(body.occurredAt, now), recordedAt: now }
   const added = body.add.map(({ id, cylinderId }): NewAct & { cylinderId: string } => ({ ...common, id, cylinderId, kind: 'line-added' }))
   const off = body.takeOff.map(({ id, cylinderId, reason }): NewAct & { cylinderId: string } => ({ ...common, id, cylinderId, kind: 'line-removed', details: { reason } }))
   const kept = await Promise.all([...added, ...off].map(act => isKept(db, act)))

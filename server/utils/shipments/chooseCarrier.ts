@@ -2,7 +2,7 @@ import type { CarrierChoice } from '~~/utils/contract/shipments'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from './acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from './acts'
 import { backToDraft } from './backToDraft'
 import { isOpen, refuseUnlessOpen } from './openShipment'
 
@@ -13,7 +13,7 @@ import { isOpen, refuseUnlessOpen } from './openShipment'
  * Errors: 404; 409 where it has left; 422 for another sort of firm.
  */
 export async function chooseCarrier(db: Database, shipmentId: string, { id, occurredAt, carrierId }: CarrierChoice, personId: string, now: number): Promise<void> {
-  const act: NewAct = { id, shipmentId, kind: 'carrier-chosen', details: { carrierId }, by: { personId }, occurredAt: Date.parse(occurredAt), recordedAt: now }
+  const act: NewAct = { id, shipmentId, kind: 'carrier-chosen', details: { carrierId }, by: { personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   await refuseUnlessOpen(db, shipmentId)
   const carrier = carrierId === null ? null : (await directory(db, true)).firms.get(carrierId)

@@ -5,7 +5,7 @@ import { NOT_A_GAS, type KeptClassification } from '~~/utils/transport/shipperEn
 import { contentsKey } from '~~/utils/transport/shippedContents'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKeptNow } from './acts'
+import { actStatement, claimedAt, isKeptNow } from './acts'
 import { backToDraft } from './backToDraft'
 import { papersOf } from './papersOf'
 
@@ -30,7 +30,7 @@ export async function classifyLine(db: Database, shipmentId: string, cylinderId:
   const kept: KeptClassification | null = classification && { ...classification, of: contentsKey(line.contents) }
   await db.write([
     actStatement({
-      id, shipmentId, kind: 'classified', cylinderId, details: { classification, what: saidInWords(classification) }, by: { personId: access.personId }, occurredAt: Date.parse(occurredAt), recordedAt: nowMs,
+      id, shipmentId, kind: 'classified', cylinderId, details: { classification, what: saidInWords(classification) }, by: { personId: access.personId }, occurredAt: claimedAt(occurredAt, nowMs), recordedAt: nowMs,
     }, { sql: OPEN_LINE, args: [shipmentId, cylinderId] }),
     {
       // Under an act that was recorded just now, so that a late repeat does not bring an earlier choice back.

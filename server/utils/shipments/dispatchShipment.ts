@@ -9,7 +9,7 @@ import type { Guard, Posting } from '../custody/posting'
 import type { Database } from '../database/database'
 import { directory } from '../directory/directory'
 import { problem } from '../http/problem'
-import { actStatement } from './acts'
+import { actStatement, claimedAt } from './acts'
 import { refuseStep } from './refuseStep'
 import { judgedShipment, shipmentWithLines, type ShipmentJudged } from './shipmentWithLines'
 
@@ -78,7 +78,7 @@ function departure({ id, readyAt }: ShipmentWithLines, { lines, papers }: Shipme
       args: [JSON.stringify({ ...lines.get(cylinderId)!.figures, gross, grossGrams: readingGrams(gross) }), id, cylinderId, ...guard.args],
     })),
     actStatement({
-      id: eventIds[0]!, shipmentId: id, kind: 'dispatched', details: { cylinders: body.lines.length }, by: { personId }, occurredAt: Date.parse(body.occurredAt), recordedAt: now,
+      id: eventIds[0]!, shipmentId: id, kind: 'dispatched', details: { cylinders: body.lines.length }, by: { personId }, occurredAt: claimedAt(body.occurredAt, now), recordedAt: now,
     }, guard),
   ]
 }

@@ -3,7 +3,7 @@ import type { OwnAct } from '~~/utils/contract/shipments'
 import { hasLines } from '../cylinder-lists/lineCommands'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from './acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from './acts'
 import { stepFacts } from '~~/utils/shipment/steps'
 import { refuseStep } from './refuseStep'
 import { HAS_UNWEIGHED } from './shipments'
@@ -16,7 +16,7 @@ import { shipmentWithLines } from './shipmentWithLines'
  * Errors: 404; 409 with what is still wanting.
  */
 export async function readyShipment(db: Database, shipmentId: string, { id, occurredAt }: OwnAct, access: Access, now: number): Promise<void> {
-  const act: NewAct = { id, shipmentId, kind: 'ready', by: { personId: access.personId }, occurredAt: Date.parse(occurredAt), recordedAt: now }
+  const act: NewAct = { id, shipmentId, kind: 'ready', by: { personId: access.personId }, occurredAt: claimedAt(occurredAt, now), recordedAt: now }
   if (await isKept(db, act)) return
   const shipment = await shipmentWithLines(db, shipmentId, access, now)
   refuseStep('ready', stepFacts(shipment))

@@ -7,7 +7,7 @@ import { append } from '../custody/append'
 import type { Guard } from '../custody/posting'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement } from './acts'
+import { actStatement, claimedAt } from './acts'
 import { shipmentFor } from './openShipment'
 import { shipmentLines } from './shipmentLines'
 import { theShipment } from './shipments'
@@ -52,7 +52,7 @@ async function refuseUnlessAway(db: Database, shipmentId: string, { lines }: Shi
 }
 
 function comingBack(shipmentId: string, body: ShipmentReturns, { access: { personId }, now }: { access: Access, now: number }, guard: Guard): InStatement[] {
-  const at = Date.parse(body.occurredAt)
+  const at = claimedAt(body.occurredAt, now)
   const act = (line: ShipmentReturns['lines'][number]): Parameters<typeof actStatement>[0] => ({
     id: line.eventId, shipmentId, cylinderId: line.cylinderId, kind: 'returned', details: { gross: line.gross, placeId: body.placeId, reason: body.reason },
     by: { personId }, occurredAt: at, recordedAt: now,

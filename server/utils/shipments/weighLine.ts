@@ -2,7 +2,7 @@ import type { Weighing } from '~~/utils/contract/shipments'
 import { theCylinder } from '../custody/theCylinder'
 import type { Database } from '../database/database'
 import { problem } from '../http/problem'
-import { actStatement, isKept, isKeptNow, type NewAct } from './acts'
+import { actStatement, claimedAt, isKept, isKeptNow, type NewAct } from './acts'
 import { backToDraft } from './backToDraft'
 import { isOpen, refuseUnlessOpen } from './openShipment'
 import { shipmentLines } from './shipmentLines'
@@ -16,7 +16,7 @@ import { shipmentLines } from './shipmentLines'
  */
 export async function weighLine(db: Database, shipmentId: string, body: Weighing, personId: string, now: number): Promise<void> {
   const cylinderId = await theCylinder(db, body.ref)
-  const at = Date.parse(body.occurredAt)
+  const at = claimedAt(body.occurredAt, now)
   const act: NewAct = { id: body.id, shipmentId, kind: 'weighed', cylinderId, details: { gross: body.gross, ref: body.ref }, by: { personId }, occurredAt: at, recordedAt: now }
   if (await isKept(db, act)) return
   await refuseUnlessOpen(db, shipmentId)
