@@ -6,6 +6,7 @@ import type { BankedAnswer } from '../../utils/contract/banked'
 import type { EventsAnswer } from '../../utils/contract/custody'
 import type { JobAnswer, JobsAnswer, RecoveryNoteMailAnswer } from '../../utils/contract/jobs'
 import type { KitAnswer } from '../../utils/contract/kit'
+import type { MailAnswer } from '../../utils/contract/mail'
 import type { FirmsAnswer } from '../../utils/contract/places'
 import type { ProblemDetails } from '../../utils/contract/problem'
 import { addMember, type Member } from '../helpers/firm'
@@ -210,6 +211,10 @@ describe('the recovery note', () => {
     expect((await send({ id: randomUUID(), recipient: 'nobody' })).status).toBe(400)
     const another = await newJob()
     expect((await firm.technician.client.post(`/api/jobs/${another.id}/recovery-note/mail`, { id })).status).toBe(409)
+    const letters = async () => (await firm.admin.client.get<MailAnswer>('/api/mail')).body.items
+    const invitation = (await letters()).find(({ recipient }) => recipient === firm.auditor.email)!
+    expect((await send({ id: invitation.id })).status).toBe(409)
+    expect((await letters()).find(letter => letter.id === invitation.id)!.attachments).toEqual([])
     const nameOnly = await newJob({ customerId: undefined, customerName: 'Larkhill Dairy', keeps: 'firm' })
     expect((await firm.technician.client.post<ProblemDetails>(`/api/jobs/${nameOnly.id}/recovery-note/mail`, { id: randomUUID() })).body).toMatchObject({ status: 422, errors: [{ path: 'recipient' }] })
   })

@@ -128,6 +128,11 @@ describe('the papers by mail', () => {
     expect([kept.status, kept.body]).toEqual([200, { mail: 'kept', recipient: 'dock@tarnbeck.example' }])
     expect((await firm.warehouse.client.post(path, { ...act() })).status).toBe(403)
     expect((await firm.manager.client.post(path, letter)).body).toEqual(kept.body)
+    expect((await firm.manager.client.post(path, { ...letter, to: 'other@tarnbeck.example' })).body).toEqual(kept.body)
+    const another = await sent([await registered(firm)])
+    expect((await firm.manager.client.post(`/api/shipments/${another.id}/papers/mail`, letter)).status).toBe(409)
+    const invitation = (await firm.admin.client.get<MailAnswer>('/api/mail')).body.items.find(({ recipient }) => recipient === firm.auditor.email)!
+    expect((await firm.manager.client.post(path, { ...letter, id: invitation.id })).status).toBe(409)
     const inside = (await firm.admin.client.get<MailAnswer>('/api/mail')).body
     expect(inside.hasServer).toBe(false)
     const [mine, ...others] = inside.items.filter(({ recipient }) => recipient === 'dock@tarnbeck.example')

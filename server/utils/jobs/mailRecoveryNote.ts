@@ -5,7 +5,7 @@ import { statement, type Database } from '../database/database'
 import { ownFirm } from '../firm'
 import { problem } from '../http/problem'
 import { impossible } from '../http/impossible'
-import { sendMail } from '../mail/mail'
+import { keptAs, sendMail } from '../mail/mail'
 import { theJob } from './jobs'
 import { noteFileName, printedRecoveryNote } from './recoveryNote'
 
@@ -15,11 +15,13 @@ export interface NoteToSend { id: string, recipient?: string, sentBy: string }
 /**
  * Sends the recovery note of a job, as it now stands, to the customer. Asked for twice under one id it goes once.
  *
- * Errors: 404; 409 where a note of another job has this id; 422 where nobody has said to which address.
+ * Errors: 404; 409 where another letter has this id; 422 where nobody has said to which address.
  */
 export async function mailRecoveryNote(db: Database, jobId: string, { id, recipient: asked, sentBy }: NoteToSend, now: number): Promise<RecoveryNoteMailAnswer> {
+  // The letter first: it is kept in one commit with its note.
+  const kept = await keptAs(id)
   const [job, sender, [before]] = await Promise.all([theJob(db, jobId), ownFirm(), db.read.select().from(jobNotes).where(eq(jobNotes.id, id)).limit(1)])
-  if (before && before.jobId !== jobId) throw problem(409, 'Another note has this id', 'Send it again under a new id.')
+  if (before ? before.jobId !== jobId : kept) throw problem(409, 'Another letter has this id', 'Send it again under a new id.')
   const recipient = before?.recipient ?? asked ?? job.email
   if (recipient === null) throw impossible('recipient', 'is not known of this customer; write the address')
   const { issue } = before ?? job

@@ -42,7 +42,7 @@ export async function sendMail(letter: Letter, now: number, { id = uuid(), along
     ...attachments.map((attachment, position) => statement(read.insert(mailAttachments).values({ mailId: id, position, ...attachment }).onConflictDoNothing())),
     ...alongside,
   ])
-  if (kept?.rows.length !== 1) return (await outcomeOf(id)) ?? 'kept'
+  if (kept?.rows.length !== 1) return (await keptAs(id))?.outcome ?? 'kept'
   return handOver(id, letter)
 }
 
@@ -67,10 +67,11 @@ export function isUnderWay(id: string): boolean {
   return underWay.has(id)
 }
 
-/** What became of a letter; null where none is kept under this id. */
-export async function outcomeOf(id: string): Promise<MailOutcome | null> {
-  const [row] = await useDatabase().read.select({ sentAt: mail.sentAt, error: mail.error }).from(mail).where(eq(mail.id, id))
+/** To whom a letter went and what became of it; null where none is kept under this id. */
+export async function keptAs(id: string): Promise<{ recipient: string, outcome: MailOutcome } | null> {
+  const [row] = await useDatabase().read.select({ recipient: mail.recipient, sentAt: mail.sentAt, error: mail.error }).from(mail).where(eq(mail.id, id))
   if (!row) return null
-  if (row.sentAt !== null) return 'sent'
-  return row.error === null ? 'kept' : 'failed'
+  const { recipient, sentAt, error } = row
+  if (sentAt !== null) return { recipient, outcome: 'sent' }
+  return { recipient, outcome: error === null ? 'kept' : 'failed' }
 }
