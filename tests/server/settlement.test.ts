@@ -225,6 +225,11 @@ describe('settling', () => {
     expect((await cylinderNow(firm.auditor.client, back!)).lifecycle).toBe('at-reclaim')
     const log = (await firm.auditor.client.get<CustodyLogAnswer>(`/api/cylinders/${taken}/events`)).body
     expect(log.items.find(line => line.kind === 'reclaimed')!.details).toEqual({ shipmentId: id, theirGross: lb(40), acceptedNet: lb(11), grade: 'A', price: -1.255, pricePer: 'lb' })
+    // What a reclaimer paid is not for who works in the field.
+    for (const which of ['events', 'fold']) {
+      const { status, body } = await firm.technician.client.get(`/api/cylinders/${taken}/${which}`)
+      expect([status, JSON.stringify(body).includes('"acceptedNet"'), /"price(Per)?"/.test(JSON.stringify(body))]).toEqual([200, true, false])
+    }
 
     // 12.5 - 11 lb is beyond both scales, and one did not arrive.
     expect(done.body.disputes.map(dispute => [dispute.about, dispute.isOpen])).toEqual(expect.arrayContaining([['net', true], ['missing', true]]))
@@ -253,6 +258,7 @@ describe('settling', () => {
     // 12.3 lb = 5579.2 g.
     expect(body.lines[0]!.received).toMatchObject({ acceptedNetGrams: 5_579 })
     expect((await cylinderNow(firm.auditor.client, first!)).version).toBe(before + 1)
+    expect(JSON.stringify((await firm.technician.client.get(`/api/cylinders/${first}/events`)).body)).not.toMatch(/"price(Per)?"/)
     expect((await entered(id, { [first!]: { ...TAKEN(lb(12.3)), outcome: 'sent-back' } })).status).toBe(409)
   })
 
