@@ -8,6 +8,10 @@ import { cancelDraft, createDraft } from '../../server/utils/cylinder-lists/draf
 import { openDatabase, type Database } from '../../server/utils/database/database'
 import { createFirm } from '../../server/utils/firms/createFirm'
 import { createPlace } from '../../server/utils/places/createPlace'
+import { closeShipment } from '../../server/utils/settlement/closeShipment'
+import { endDispute, openDispute } from '../../server/utils/settlement/disputeActs'
+import { readSettlement } from '../../server/utils/settlement/readSettlement'
+import { settle } from '../../server/utils/settlement/settle'
 import { actsOf } from '../../server/utils/shipments/acts'
 import { cancelShipment } from '../../server/utils/shipments/cancelShipment'
 import { changeLines } from '../../server/utils/shipments/changeLines'
@@ -141,6 +145,20 @@ describe('a shipment that is changed while it is sent off', () => {
     expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim', 'returned'])
     expect((await theShipment(db, draft.id)).state).toBe('closed')
     expect((await actsOf(db, draft.id)).map(({ kind }) => kind)).toEqual(['weighed', 'carrier-chosen', 'ready', 'dispatched', 'returned', 'closed'])
+  })
+
+  it('stays open with all of it back while a dispute is, and is settled and closed after it', async () => {
+    await dispatch(db)
+    const disputeId = randomUUID()
+    const later = { shipmentId: draft.id, personId: MONA.personId, now: NOW + 1 }
+    await openDispute(db, { ...act(), disputeId, about: 'gross', cylinderId: first, text: 'They weighed it with its cap.', photoIds: [] }, later)
+    await returnLines(db, draft.id, { occurredAt: new Date(NOW + 1).toISOString(), placeId: shopId, reason: 'Refused', lines: [{ cylinderId: first, eventId: randomUUID(), gross: lb(40) }] }, MONA, NOW + 1)
+    expect((await theShipment(db, draft.id)).state).toBe('dispatched')
+    await endDispute(db, disputeId, { ...act(), outcome: 'agreed', reason: 'It is back.' }, later)
+    await settle(db, draft.id, { ...act(), revision: (await readSettlement(db, draft.id)).revision, lines: [] }, MONA, NOW + 2)
+    await closeShipment(db, draft.id, act(), MONA.personId, NOW + 3)
+    expect(await theShipment(db, draft.id)).toMatchObject({ state: 'closed' })
+    expect(await kindsInLog(first)).toEqual(['registered', 'labelled', 'sent-for-reclaim', 'returned'])
   })
 
   it('is dated as its events are where the sender\'s clock runs two days fast', async () => {

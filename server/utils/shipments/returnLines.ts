@@ -14,8 +14,8 @@ import { theShipment } from './shipments'
 
 /**
  * Takes cylinders back that a shipment had sent off: each is weighed in and free for other lists; the shipment goes on
- * with the rest. With its last line back there is nothing to settle, and it is closed. The same request sent again
- * changes nothing.
+ * with the rest. With its last line back there is nothing to settle, and it is closed unless a dispute is open, which is
+ * ended first. The same request sent again changes nothing.
  *
  * Errors: 404; 409 where it has not left or is settled, and where a line is none of it or came back already.
  */
@@ -57,8 +57,9 @@ function comingBack(shipmentId: string, body: ShipmentReturns, { access: { perso
     id: line.eventId, shipmentId, cylinderId: line.cylinderId, kind: 'returned', details: { gross: line.gross, placeId: body.placeId, reason: body.reason },
     by: { personId }, occurredAt: at, recordedAt: now,
   })
-  const isAllBack = `(SELECT count(*) FROM shipment_lines WHERE shipment_id = shipments.id)
-    = (SELECT count(DISTINCT cylinder_id) FROM shipment_acts WHERE shipment_id = shipments.id AND kind = 'returned')`
+  const isDone = `(SELECT count(*) FROM shipment_lines WHERE shipment_id = shipments.id)
+      = (SELECT count(DISTINCT cylinder_id) FROM shipment_acts WHERE shipment_id = shipments.id AND kind = 'returned')
+    AND NOT EXISTS (SELECT 1 FROM disputes WHERE shipment_id = shipments.id AND ended_at IS NULL)`
   const ids = JSON.stringify(body.lines.map(line => line.cylinderId))
   return [
     {
@@ -75,9 +76,9 @@ function comingBack(shipmentId: string, body: ShipmentReturns, { access: { perso
     },
     actStatement({
       id: uuid(), shipmentId, kind: 'closed', details: { why: 'All of it came back.' }, by: { personId }, occurredAt: at, recordedAt: now,
-    }, { sql: `EXISTS (SELECT 1 FROM shipments WHERE id = ? AND ${isAllBack}) AND ${guard.sql}`, args: [shipmentId, ...guard.args] }),
+    }, { sql: `EXISTS (SELECT 1 FROM shipments WHERE id = ? AND ${isDone}) AND ${guard.sql}`, args: [shipmentId, ...guard.args] }),
     {
-      sql: `UPDATE shipments SET state = 'closed', closed_at = ? WHERE id = ? AND ${isAllBack} AND ${guard.sql}`,
+      sql: `UPDATE shipments SET state = 'closed', closed_at = ? WHERE id = ? AND ${isDone} AND ${guard.sql}`,
       args: [at, shipmentId, ...guard.args],
     },
   ]
