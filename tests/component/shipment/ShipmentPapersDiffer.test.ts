@@ -5,7 +5,7 @@ import { cylinderRow } from '~~/tests/helpers/cylinderRow'
 import type { PaperDifference } from '~~/utils/contract/shipments'
 
 const sent = { gross: { unit: 'kg' as const, value: 20 }, grossGrams: 20_000, refrigerant: 'R-22', condition: 'clean', netGrams: 8_000 }
-const line = (id: string, differs?: PaperDifference) => ({ cylinder: cylinderRow({ id }), version: 4, because: [], sent, received: null, ...differs && { differs } })
+const line = (id: string, differs?: PaperDifference) => ({ cylinder: cylinderRow({ id }), version: 4, because: [], weighed: null, sent, received: null, returnedAt: null, ...differs && { differs } })
 
 describe('papers that differ from the log', () => {
   it('stand beside what the log says now, line by line, and only where they differ', async () => {

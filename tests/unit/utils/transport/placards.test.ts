@@ -47,7 +47,7 @@ describe('placards', () => {
   })
 
   it('are not known where nobody has said how a cylinder travels', () => {
-    const open = { description: { identification: null, division: null, words: [], needsChoice: true }, isResidue: false, gross: { unit: 'lb', value: 100 } } as const
+    const open = line({ unit: 'lb', value: 100 }, { identification: null, division: null, words: [], needsChoice: true })
     expect(placards([gas('2.2', 500), open], 'lb')).toMatchObject({ state: 'not-known', notes: expect.arrayContaining(['1 cylinder is not classified and not counted.']) })
   })
 
