@@ -70,6 +70,10 @@ describe('a statement beside the lines of a shipment', () => {
     expect(problems(['', '', '1', 'lb', '', '', '', ''])).toEqual(['serial: No serial stands in this row'])
   })
 
+  it('meets its line by a serial that a table keeps from being a formula', () => {
+    expect(preview([['\'-K447103', '', '11', 'lb', '', '', '', '']], POINT, [known('b', '-K447103')]).rows[0]).toMatchObject({ cylinderId: 'b', problems: [] })
+  })
+
   it('tells a weight that is no number, is below zero, has no unit or one that is not ours, or is beyond any scale', () => {
     expect(problems(['K447103', 'heavy', '', 'lb', '', '', '', ''])).toEqual(['gross: “heavy” is no number'])
     expect(problems(['K447103', '', '-1', 'lb', '', '', '', ''])).toEqual(['net: “-1” is below zero: a weight is not'])
