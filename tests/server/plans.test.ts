@@ -64,7 +64,7 @@ describe('a plan of what to ship', () => {
     const [firmId, shipmentId, firmPlaceId] = [randomUUID(), randomUUID(), randomUUID()]
     const terms = {
       refrigerants: [{ designation: 'R-22', conditions: ['suspect'] }], takesMixed: false, takesUnknown: false, takesOverdue: true, specs: null, pressuresPsig: null,
-      mostContaminationPercent: null, minimum: lb(25), minimumCylinders: null, pickUpCents: 2_000, note: null,
+      mostContaminationPercent: 2, minimum: lb(25), minimumCylinders: null, pickUpCents: 2_000, note: null,
     }
     await db.write([
       statement(db.read.insert(firms).values({ id: firmId, name: 'Tarnvale Reclaim', kind: 'reclaimer', createdAt: 0 })),
@@ -74,15 +74,18 @@ describe('a plan of what to ship', () => {
     ])
     await db.write([statement(db.read.insert(shipments).values({ id: shipmentId, number: 1, toFirmId: firmId, state: 'ready', createdAt: 0, createdBy: manager.personId }))])
     await directory(db, true)
-    const [first, second] = [await holding(20), await holding(10)]
-    await labelled([first, second])
+    const [first, second, contaminated] = [await holding(20), await holding(10), await holding(30)]
+    await labelled([first, second, contaminated])
+    const composition = [{ component: 'R-22', massPercent: 97.9 }, { component: 'R-32', massPercent: 2.1 }]
+    await record(db, log.technician, [sent(contaminated, 'checked', { method: 'laboratory', composition, verdict: { refrigerant: 'R-22', condition: 'suspect' } })])
 
     // 20 lb alone are less than its minimum of 25 lb.
     const alone = await makePlan(db, { kind: 'shipping', cylinderIds: [first] }, warehouse, Date.now())
     expect(alone).toMatchObject({ id: null, answer: { summary: ['Nothing is worth shipping as it stands.', expect.stringMatching(/Its minimum is not met\.$/)] } })
 
     // 30 lb at $2.00 a lb, less $20.00 for the pick-up.
-    const { id, answer } = await makePlan(db, { kind: 'shipping', cylinderIds: [first, second] }, warehouse, Date.now())
+    const { id, answer } = await makePlan(db, { kind: 'shipping', cylinderIds: [first, second, contaminated] }, warehouse, Date.now())
+    expect(answer.cylinders.find(one => one.id === contaminated)).toMatchObject({ part: 'stays', why: [expect.stringContaining('by its last analysis this holds 2.1 %')] })
     expect(answer.shipments).toMatchObject([{ firm: { name: 'Tarnvale Reclaim' }, netGrams: 13_608, creditCents: 6_000, pickUpCents: 2_000 }])
     expect(answer.summary[0]).toBe('2 cylinders to ship for $40.00, pick-ups paid.')
     await expect(makePlan(db, { kind: 'shipping' }, log.technician, Date.now())).rejects.toMatchObject({ details: { status: 403 } })

@@ -17,7 +17,14 @@ import { ship, type Buyer, type Offer, type ShippingFound } from './ship'
 export interface PlanReclaimer { firm: Named, terms: ReclaimerTerms | null, prices: readonly DatedPrice[] }
 
 /** What to ship to whom is asked with this. */
-export interface ShippingQuestion { cylinders: readonly PlanCylinder[], reclaimers: readonly PlanReclaimer[], day: Day, nameOfFirm: (id: string) => string }
+export interface ShippingQuestion {
+  cylinders: readonly PlanCylinder[]
+  /** Of other refrigerants by the last analysis, in percent, by cylinder; null where none tells. */
+  contamination: ReadonlyMap<string, number | null>
+  reclaimers: readonly PlanReclaimer[]
+  day: Day
+  nameOfFirm: (id: string) => string
+}
 
 /** Works out what to ship to whom, and says it as it is kept and shown. */
 export async function shippingAnswer(question: ShippingQuestion, solve: Solve, seconds: number): Promise<PlanAnswer> {
@@ -41,7 +48,7 @@ export async function shippingAnswer(question: ShippingQuestion, solve: Solve, s
 /** A cylinder with what speaks against shipping it, to anybody or to one firm, and what the others would pay. */
 interface Judged { cylinder: PlanCylinder, bars: string[], offer: Offer | null }
 
-function judge({ reclaimers, day, nameOfFirm }: ShippingQuestion, cylinder: PlanCylinder): Judged {
+function judge({ contamination, reclaimers, day, nameOfFirm }: ShippingQuestion, cylinder: PlanCylinder): Judged {
   const { view, standsOn } = cylinder
   const { contents } = view
   const own = contents.owners.filter(({ ownerId }) => ownerId !== null)
@@ -55,7 +62,7 @@ function judge({ reclaimers, day, nameOfFirm }: ShippingQuestion, cylinder: Plan
   if (bars.length > 0) return { cylinder, bars, offer: null }
   const worthCents = new Map<string, number>()
   for (const { firm, terms, prices } of reclaimers) {
-    const refused = refusedBy(terms, view)
+    const refused = refusedBy(terms, view, contamination.get(view.id) ?? null)
     const price = priceOn(prices, { refrigerant: contents.refrigerant, condition: contents.condition, day })
     if (refused[0]) bars.push(`${firm.name}: ${refused[0].text}`)
     else if (price === null) bars.push(`${firm.name}: no price is recorded for it.`)

@@ -14,6 +14,7 @@ import type { Database } from '../database/database'
 import { fillPolicyAt } from '../directory/datedRules'
 import { directory, namesOf } from '../directory/directory'
 import { problem } from '../http/problem'
+import { contaminationOf } from '../reclaim/contamination'
 import { pricesOf, termsOn } from '../reclaim/terms'
 import { followPlans } from './followPlans'
 import { chosenIds, planCylinders } from './planCylinders'
@@ -71,7 +72,7 @@ async function workOut(db: Database, question: PlanQuestion, access: Access, now
     const day = dayOfInstant(nowMs, from.timeZone)
     const firms = [...from.firms.values()].filter(({ kind, active }) => kind === 'reclaimer' && active)
     const reclaimers = await Promise.all(firms.map(async ({ id, name }) => ({ firm: { id, name }, terms: await termsOn(db, id, day), prices: await pricesOf(db, id) })))
-    return shippingAnswer({ cylinders, reclaimers, day, nameOfFirm }, solve, SEARCH_SECONDS)
+    return shippingAnswer({ cylinders, contamination: await contaminationOf(db, ids), reclaimers, day, nameOfFirm }, solve, SEARCH_SECONDS)
   }
   const limits = { policy: fillPolicyAt(from.fillPolicies, nowMs), catalogue: CATALOGUE }
   const sorted = sortOut(cylinders, question, limits)
