@@ -4,7 +4,7 @@ import { LINK_DAYS, USUAL_LINK_DAYS } from '../dock/linkDays'
 import type { MassReading, MassUnit } from '../quantity/mass'
 import type { MailOutcome } from './people'
 import type { ProblemDetails } from './problem'
-import { eachOnce, id, line, massReading } from './parts'
+import { eachOnce, grossReading, id, line, massReading } from './parts'
 import type { ShipmentState } from './shipments'
 import { uploadForm } from './uploads'
 
@@ -48,11 +48,10 @@ export const dockPhotoParams = z.strictObject({ token: z.string(), id })
 const photoIds = z.array(id).max(MOST_ENTRY_PHOTOS).refine(ids => eachOnce(ids), 'must name each photo once').default([])
 const cylinderId = id
 const made = { id, name: line(80), at: z.iso.datetime({ offset: true, error: 'must be an instant with its offset' }) }
-const heavy = massReading.refine(reading => reading.unit === 'lb-oz' ? reading.lb > 0 || reading.oz > 0 : reading.value > 0, 'must be more than nothing')
 
 const dockEntry = z.discriminatedUnion('kind', [
   z.strictObject({ ...made, kind: z.literal('here'), said: z.strictObject({ cylinderId }) }),
-  z.strictObject({ ...made, kind: z.literal('gross'), said: z.strictObject({ cylinderId, gross: heavy }) }),
+  z.strictObject({ ...made, kind: z.literal('gross'), said: z.strictObject({ cylinderId, gross: grossReading }) }),
   z.strictObject({ ...made, kind: z.literal('damaged'), said: z.strictObject({ cylinderId, what: line(300), photoIds }) }),
   z.strictObject({ ...made, kind: z.literal('overdue'), said: z.strictObject({ cylinderId }) }),
   z.strictObject({ ...made, kind: z.literal('missing'), said: z.strictObject({ cylinderId }) }),

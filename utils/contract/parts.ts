@@ -42,6 +42,9 @@ export const massReading = z.discriminatedUnion('unit', [
   z.strictObject({ unit: z.literal('kg'), value: z.number().nonnegative().finite().max(50_000) }),
 ])
 
+/** What a scale shows with a cylinder on it. */
+export const grossReading = massReading.refine(reading => readingGrams(reading) > 0, 'must be more than nothing')
+
 /** A mass as it is written in a query; no more than in an event. */
 export const massInQuery = z.string().max(20).transform((text, context) => {
   const reading = parseMassText(text)

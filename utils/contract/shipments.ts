@@ -2,7 +2,7 @@ import { z } from 'zod'
 import type { CylinderRow } from '../custody/cylinderView'
 import type { Finding } from '../custody/finding'
 import type { MassReading } from '../quantity/mass'
-import { eachOnce, id, line, massReading, page, type Page } from './parts'
+import { eachOnce, grossReading, id, line, page, type Page } from './parts'
 
 const cylinderIds = z.array(id).max(200).refine(ids => eachOnce(ids), 'must name each cylinder once')
 
@@ -24,7 +24,7 @@ export const shipmentLinesBody = z.strictObject({
   .refine(({ add, takeOff }) => eachOnce([...add, ...takeOff].map(one => one.id)), 'must have an id for each')
 
 /** POST /api/shipments/{id}/weighings: one of its cylinders as it was scanned, or its serial as it was read, and what the scale shows. */
-export const weighingBody = z.strictObject({ ...act, ref: line(80), gross: massReading })
+export const weighingBody = z.strictObject({ ...act, ref: line(80), gross: grossReading })
 
 /** POST /api/shipments/{id}/carrier: who carries it; null for our own vehicle. */
 export const carrierBody = z.strictObject({ ...act, carrierId: id.nullable() })
@@ -41,7 +41,7 @@ export const returnsBody = z.strictObject({
   deviceNow: z.iso.datetime({ offset: true }).optional(),
   placeId: id,
   reason,
-  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, gross: massReading })).min(1).max(200)
+  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, gross: grossReading })).min(1).max(200)
     .refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
@@ -49,7 +49,7 @@ export const returnsBody = z.strictObject({
 export const dispatchBody = z.strictObject({
   occurredAt: z.iso.datetime({ offset: true }),
   deviceNow: z.iso.datetime({ offset: true }).optional(),
-  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, expects: z.number().int().nonnegative(), gross: massReading })).min(1).max(200)
+  lines: z.array(z.strictObject({ cylinderId: id, eventId: id, expects: z.number().int().nonnegative(), gross: grossReading })).min(1).max(200)
     .refine(lines => eachOnce(lines.map(one => one.cylinderId)), 'must name each cylinder once'),
 })
 
