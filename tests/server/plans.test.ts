@@ -102,6 +102,8 @@ describe('a plan of what to ship', () => {
     expect(left).toMatchObject({ outcome: 'accepted' })
     const after = await planDetails(db, id!, warehouse, Date.now())
     expect(after.steps.flatMap(({ fromId, done }) => done ? [fromId] : [])).toEqual([first])
+    await record(db, manager, [sent(first, 'corrected', { eventId: left!.id, reason: 'it never left' }, { expects: left!.version })])
+    expect((await planDetails(db, id!, warehouse, Date.now())).tasksDone).toBe(0)
     await dropPlan(db, id!, Date.now())
   })
 })

@@ -10,12 +10,12 @@ const TRANSFERS = `SELECT t.plan_id, t.position, e.id, e.effective_at, e.seq FRO
   WHERE p.state = 'open' AND json_extract(h.value, '$.kind') = 'transferred' AND json_extract(h.value, '$.direction') = 'out'
     AND json_extract(h.value, '$.otherId') = t.to_cylinder_id`
 
-/** A cylinder to be shipped ticks its step off once it has left on a shipment. */
+/** A cylinder to be shipped ticks its step off once it has left on a shipment, and as long as the books have it so. */
 const SHIPMENTS = `SELECT t.plan_id, t.position, e.id, e.effective_at, e.seq FROM plans p
   JOIN plan_tasks t ON t.plan_id = p.id AND t.kind = 'ship'
   JOIN custody_events e ON e.cylinder_id = t.from_cylinder_id AND e.kind = 'sent-for-reclaim' AND e.recorded_at >= p.made_at
   JOIN shipments s ON s.id = json_extract(e.body, '$.details.shipmentId') AND s.dispatched_at IS NOT NULL AND s.state <> 'cancelled'
-  WHERE p.state = 'open'`
+  WHERE p.state = 'open' AND EXISTS (SELECT 1 FROM movements m WHERE m.cylinder_id = e.cylinder_id AND m.event_id = e.id AND m.cause = 'shipped')`
 
 /**
  * Ticks off what the log says was done of the open plans, takes a tick back whose event was taken out, and ends the plans
