@@ -165,7 +165,7 @@ describe('a shipment at the dock', () => {
     const here = await begun()
     await found(here, '821')
     await pressed(here, 'All cylinders')
-    await pressed(here, 'Not here: 1')
+    await pressed(here, 'The last one is not here')
     await pressed(here, 'It is not here')
     await eventually(() => expect(recorded.map(({ kind }) => kind)).toEqual(['here', 'missing']))
     await pressed(here, 'One not on the papers')
