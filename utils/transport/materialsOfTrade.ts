@@ -21,7 +21,7 @@ export function tradeException(lines: readonly LoadedLine[], { carriedBy, unit }
     carriedBy === 'carrier' && 'It is given to a carrier: materials of trade go on the firm’s own vehicle (49 CFR 171.8).',
     hazardous.some(isPoisonous) && `What poisons by inhalation never goes as material of trade (${source}(a)(5)).`,
     heavy.length > 0 && `${heavy.length === 1 ? '1 cylinder is' : `${heavy.length} cylinders are`} above ${formatMass(eachGrams, unit, 'down')} gross (${source}(a)(2)).`,
-    together > togetherGrams + FLOAT_NOISE_GRAMS && `${formatMass(together, unit, 'nearest')} gross together; ${formatMass(togetherGrams, unit, 'down')} is the most for all materials of trade on the vehicle (${source}(d)).`,
+    together > togetherGrams + FLOAT_NOISE_GRAMS && `${formatMass(together, unit, 'up')} gross together; ${formatMass(togetherGrams, unit, 'down')} is the most for all materials of trade on the vehicle (${source}(d)).`,
   ].filter(line => line !== false)
   if (against.length > 0) return { state: 'may-not', because: against }
   const notWeighed = hazardous.filter(({ gross }) => gross === null).length

@@ -61,7 +61,7 @@ export function placards(lines: readonly LoadedLine[], unit: MassUnit): Placards
     state: names.length > 0 ? 'needed' : notWeighed + notClassified > 0 ? 'not-known' : 'not-needed',
     names, countedGrams, notWeighed,
     notes: [
-      ...tableTwo.length > 0 ? [`${formatMass(countedGrams, unit, 'nearest')} gross of divisions 2.1 and 2.2 are counted; from ${threshold} on one vehicle they are placarded (${SECTION}(c)).`] : [],
+      ...tableTwo.length > 0 ? [`${formatMass(countedGrams, unit, isHeavy ? 'nearest' : 'down')} gross of divisions 2.1 and 2.2 are counted; from ${threshold} on one vehicle they are placarded (${SECTION}(c)).`] : [],
       ...notWeighed > 0 ? [`${notWeighed === 1 ? '1 cylinder is' : `${notWeighed} cylinders are`} not weighed and not counted.`] : [],
       ...notClassified > 0 ? [`${notClassified === 1 ? '1 cylinder is' : `${notClassified} cylinders are`} not classified and not counted.`] : [],
       ...counted.length < hazardous.length ? [`${hazardous.length - counted.length} with only a residue need not be counted (${SECTION}(d)).`] : [],

@@ -21,6 +21,8 @@ describe('materials of trade', () => {
   it('may be 440 lb together, not 440.1 lb', () => {
     expect(tradeException([gas(220), gas(220)], OWN).state).toBe('may')
     expect(tradeException([gas(220), gas(219.9), gas(0.2)], OWN)).toMatchObject({ state: 'may-not', because: [expect.stringContaining('173.6(d)')] })
+    // To the nearest tenth it would read as the limit itself.
+    expect(tradeException([gas(220), gas(220.04)], OWN).because.at(-1)).toMatch(/^440\.1.lb gross together/)
   })
 
   it('never are what poisons by inhalation, nor what a carrier takes', () => {

@@ -20,6 +20,13 @@ describe('placards', () => {
     expect(placards([...Array.from({ length: 9 }, () => gas('2.2', 100.1)), gas('2.2', 100)], 'lb').state).toBe('not-needed')
   })
 
+  it('never say of a load below it that it weighs as much', () => {
+    // 15.9 oz above 1,000 lb: to the nearest ounce it would read 1001 lb 0 oz.
+    const { state, notes } = placards([line({ unit: 'lb-oz', lb: 1000, oz: 15.9 }, gas('2.2', 0).description)], 'lb-oz')
+    expect(state).toBe('not-needed')
+    expect(notes[0]).toMatch(/^1000.lb.15.oz gross/)
+  })
+
   // 49 CFR 172.504(d).
   it('do not count residue, unless it poisons by inhalation', () => {
     const residue = { ...gas('2.2', 600), isResidue: true }
