@@ -102,6 +102,8 @@ describe('the papers of a shipment', () => {
     expect(said.body.papers.missing).toEqual([])
     expect(said.body.papers.groups[0]!.description.text).toBe('UN1078, Refrigerant gases, n.o.s. (chlorodifluoromethane, 1,1,1,2-tetrafluoroethane), 2.2')
     expect((await firm.warehouse.client.put(path, body)).body).toEqual(said.body)
+    const other = (await firm.auditor.client.get<ShipmentActsAnswer>(`/api/shipments/${shipment.id}/acts`)).body.items.find(({ kind }) => kind === 'weighed')!
+    expect((await firm.warehouse.client.put(path, { ...act(), id: other.id, classification: null })).status).toBe(409)
     const tag = await printed(firm.auditor, shipment.id, 'contents-tags.pdf')
     expect(readOn(tag.pdf)).toContain('UN1078')
     expect(readOn(tag.pdf)).toContain('tetrafluoroethane')
