@@ -14,7 +14,7 @@ describe('the list of firms', () => {
     const wrapper = await mountSuspended(FirmTable, { props: { firms: [OXBOW, QUIET], mayManage: false } })
     const table = byRole(wrapper.element, 'table', 'Firms')
     const links = allByRole(table, 'link').map(link => link.getAttribute('href'))
-    expect(links).toEqual(['tel:5550100327', 'mailto:dock@oxbow.example', '/fleet?place=p1'])
+    expect(links).toEqual(['/firms/f1', 'tel:5550100327', 'mailto:dock@oxbow.example', '/fleet?place=p1', '/firms/f2'])
     const [oxbow, quiet] = [...table.querySelectorAll('tbody tr')].map(row => row.textContent)
     expect(oxbow).toContain('Z987')
     expect(quiet).toContain('not known')
