@@ -4,11 +4,14 @@ import type { AnyRecordedEvent } from '../custody/event'
 /** How a refrigerant is named in an analysis; air, moisture and oil are none. */
 const REFRIGERANT = /^R-?\d/i
 
+// Keeps 2.0000000000000004 from becoming 2.1.
+const FLOAT_NOISE = 1e-6
+
 /**
  * How much of other refrigerants a cylinder holds by its last analysis, in percent by mass; null where nothing was
  * analysed since something was last put in, or where the analysis does not list the refrigerant that it came to.
  *
- * Rounding: to a tenth. Source: our choice; components that are no refrigerant are not counted.
+ * Rounding: up to a tenth, so that what is above a limit never reads as at it. Source: our choice; components that are no refrigerant are not counted.
  */
 export function contaminationPercent(events: readonly AnyRecordedEvent[]): number | null {
   let percent: number | null = null
@@ -28,5 +31,5 @@ function othersIn(composition: readonly { component: string, massPercent: number
     ?? (named === null ? [...refrigerants].sort((a, b) => b.massPercent - a.massPercent)[0] : undefined)
   if (!own) return null
   const others = refrigerants.filter(one => one !== own).reduce((sum, { massPercent }) => sum + massPercent, 0)
-  return Math.round(others * 10) / 10
+  return Math.ceil(others * 10 - FLOAT_NOISE) / 10
 }

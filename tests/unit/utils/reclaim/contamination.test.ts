@@ -14,6 +14,14 @@ describe('how much of other refrigerants a cylinder holds', () => {
     expect(contaminationPercent(recorded(...start, found, analysed([{ component: 'R-22', massPercent: 99 }, { component: 'R-12', massPercent: 1 }])))).toBe(1)
   })
 
+  it('goes up to a tenth, and no further for how the parts add up', () => {
+    const others = (...massPercents: number[]) => contaminationPercent(recorded(...start, analysed([{ component: 'R-22', massPercent: 97 }, ...massPercents.map((massPercent, index) => ({ component: `R-1${index}`, massPercent }))])))
+    expect(others(2.04)).toBe(2.1)
+    expect(others(2)).toBe(2)
+    // 0.1 + 0.2 is a little more than 0.3 in binary.
+    expect(others(0.1, 0.2)).toBe(0.3)
+  })
+
   it('is not known without an analysis, nor once something was put in after it', () => {
     expect(contaminationPercent(recorded(...start))).toBeNull()
     expect(contaminationPercent(recorded(...start, did('checked', { method: 'identifier', verdict: { refrigerant: 'R-22', condition: 'clean' } })))).toBeNull()
