@@ -89,7 +89,7 @@ describe('the fleet without a mouse', () => {
     await page.keyboard.type('K00012')
     await page.keyboard.press('Enter')
     await asks(/q=K00012/)
-    expect(await page.locator('tbody tr').count()).toBe(10)
+    await expect.poll(() => page.locator('tbody tr').count()).toBe(10)
     await open()
     await tabTo(/^Stop \d+$/)
     await page.keyboard.press('Enter')
