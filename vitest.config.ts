@@ -26,7 +26,7 @@ export default defineConfig(async () => ({
     // Vitest would leave one core out, of two.
     maxWorkers: '100%',
     // Screens looked at side by side: more than this only wait for the processor.
-    maxConcurrency: 5,
+    maxConcurrency: 3,
     projects: [
       nodeProject('architecture'),
       nodeProject('unit', pure),
